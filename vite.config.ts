@@ -1,0 +1,31 @@
+import tailwindcss from '@tailwindcss/vite';
+import react from '@vitejs/plugin-react';
+import { defineConfig } from 'vitest/config';
+
+const server = `http://127.0.0.1:${process.env.PORT ?? '4180'}`;
+
+export default defineConfig({
+  plugins: [react(), tailwindcss()],
+  build: { outDir: 'dist/client', manifest: true, sourcemap: false, chunkSizeWarningLimit: 700 },
+  server: {
+    proxy: { '/api': server, '/socket.io': { target: server, ws: true } },
+  },
+  test: {
+    projects: [
+      {
+        extends: true,
+        test: { name: 'unit', include: ['tests/shared/**/*.test.ts', 'tests/guards/**/*.test.ts'] },
+      },
+      {
+        extends: true,
+        test: {
+          name: 'api',
+          include: ['tests/api/**/*.test.ts', 'tests/live/**/*.test.ts', 'tests/blind/**/*.test.ts'],
+          testTimeout: 30_000,
+          hookTimeout: 60_000,
+          maxWorkers: 2,
+        },
+      },
+    ],
+  },
+});
