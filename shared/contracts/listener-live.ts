@@ -1,0 +1,92 @@
+import * as z from 'zod/mini';
+
+const hex = (bytes: number) => z.string().check(z.regex(new RegExp(`^[0-9a-f]{${bytes * 2}}$`)));
+const time = z.int();
+
+export const confidences = ['guessing', 'fairly', 'certain'] as const;
+export type Confidence = (typeof confidences)[number];
+
+/** What a listener's phone may send. Every command is acknowledged with a receipt or a problem. */
+export const listenerCommand = z.discriminatedUnion('kind', [
+  z.strictObject({ kind: z.literal('reveal'), value: hex(32) }),
+  z.strictObject({
+    kind: z.literal('answer'),
+    trial: z.int().check(z.positive(), z.maximum(1000)),
+    choice: z.string().check(z.minLength(1), z.maxLength(16)),
+    confidence: z.nullable(z.enum(confidences)),
+    /** Counts the changes of this answer on this phone, from 1: a repeat is harmless, an older one is ignored. */
+    revision: z.int().check(z.positive(), z.maximum(10_000)),
+    salt: hex(16),
+  }),
+  z.strictObject({ kind: z.literal('too-loud') }),
+  z.strictObject({ kind: z.literal('leave') }),
+]);
+export type ListenerCommand = z.output<typeof listenerCommand>;
+
+/** What the server says to a stored answer: its leaf and when it was held (milliseconds since 1970). */
+export const heldAnswer = z.strictObject({
+  trial: z.int(),
+  choice: z.string(),
+  confidence: z.nullable(z.enum(confidences)),
+  revision: z.int(),
+  leaf: z.string(),
+  heldAt: time,
+});
+export type HeldAnswer = z.output<typeof heldAnswer>;
+
+export const courseRing = z.strictObject({
+  number: z.int(),
+  state: z.enum(['locked', 'void', 'open', 'now']),
+});
+export type CourseRing = z.output<typeof courseRing>;
+
+/** The digest of the entry that locked a trial, and its place in the record: with the phone's own leaf, a receipt. */
+export const lockReceipt = z.strictObject({ trial: z.int(), leaf: z.string(), sequence: z.int(), digest: z.string() });
+export type LockReceipt = z.output<typeof lockReceipt>;
+
+/**
+ * Everything a listener's phone shows, whole. Built field by field: it has no field for a code, a cable,
+ * the draw, a score or another listener's answer.
+ */
+export const listenerView = z.strictObject({
+  audience: z.literal('listener'),
+  title: z.string(),
+  session: z.int(),
+  /** The session's id, part of what an answer's leaf is made of. */
+  sessionId: z.string(),
+  seat: z.string(),
+  now: time,
+  phase: z.enum(['seating', 'revealing', 'running', 'finished', 'abandoned']),
+  /** Whether this phone's randomness counts in the draw. */
+  contributes: z.boolean(),
+  revealWanted: z.boolean(),
+  left: z.boolean(),
+  paused: z.nullable(z.enum(['break', 'too-loud', 'trouble'])),
+  course: z.array(courseRing),
+  trial: z.nullable(
+    z.strictObject({
+      number: z.int(),
+      of: z.int(),
+      familiarisation: z.boolean(),
+      takesPart: z.boolean(),
+      stage: z.enum(['change', 'listening', 'answering']),
+      /** What is heard now (A, B, X ...), or comes next during a change. */
+      presentation: z.string(),
+      presentationNumber: z.int(),
+      presentations: z.int(),
+      endsAt: z.nullable(time),
+      held: z.nullable(heldAnswer),
+    }),
+  ),
+  question: z.strictObject({
+    text: z.string(),
+    options: z.array(z.strictObject({ value: z.string(), letter: z.string(), sentence: z.string() })),
+    confidence: z.boolean(),
+  }),
+  lastLock: z.nullable(lockReceipt),
+  /** The last trial's end as this listener needs to know it. */
+  lastOutcome: z.nullable(
+    z.strictObject({ trial: z.int(), outcome: z.enum(['locked', 'void']), counted: z.boolean() }),
+  ),
+});
+export type ListenerView = z.output<typeof listenerView>;

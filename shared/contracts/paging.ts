@@ -1,0 +1,14 @@
+import { z } from 'zod';
+
+/** What every growing list takes: search words, a page from 1, and the fixed page size. */
+export const pageSize = 25;
+export const listQuery = z.strictObject({
+  q: z.string().trim().max(80, 'At most 80 characters').default(''),
+  page: z.coerce.number<string>().int().min(1).max(10_000).default(1),
+});
+export type ListQuery = z.output<typeof listQuery>;
+
+/** One page of a list. */
+export function pageOf<T extends z.ZodType>(row: T) {
+  return z.strictObject({ rows: z.array(row), total: z.int(), page: z.int(), pages: z.int() });
+}

@@ -1,0 +1,102 @@
+import { z } from 'zod';
+import { sessionPhases } from './sessions.ts';
+
+const time = z.int();
+const version = { expectVersion: z.int().min(0) };
+const say = (most: number) => z.string().trim().max(most, `At most ${most} characters`);
+
+export const changeSteps = ['mute', 'unplug', 'fit', 'check', 'unmute'] as const;
+export type ChangeStep = (typeof changeSteps)[number];
+
+export const cautions = ['amplifier', 'shorts', 'mains', 'hearing', 'local-rules'] as const;
+export type Caution = (typeof cautions)[number];
+
+export const voidReasons = ['wrong-cable', 'noise', 'drop-out', 'listener-request', 'tool-failure', 'safety'] as const;
+export type VoidReason = (typeof voidReasons)[number];
+
+export const pauseReasons = ['break', 'trouble'] as const;
+
+/** What the console may send. `expectVersion` is the version of the view that the proctor acted on. */
+export const proctorCommand = z.discriminatedUnion('kind', [
+  z.strictObject({ kind: z.literal('confirm-cautions'), ...version, items: z.array(z.enum(cautions)).max(10) }),
+  z.strictObject({ kind: z.literal('open-seating'), ...version }),
+  z.strictObject({ kind: z.literal('close-seating'), ...version }),
+  z.strictObject({ kind: z.literal('begin-familiarisation'), ...version }),
+  z.strictObject({ kind: z.literal('begin-trial'), ...version }),
+  z.strictObject({ kind: z.literal('confirm-step'), ...version, step: z.enum(changeSteps) }),
+  z.strictObject({ kind: z.literal('lock-trial'), ...version }),
+  z.strictObject({
+    kind: z.literal('void-trial'),
+    ...version,
+    reason: z.enum(voidReasons, 'Choose a reason'),
+    note: say(300),
+  }),
+  z.strictObject({ kind: z.literal('pause'), ...version, reason: z.enum(pauseReasons) }),
+  z.strictObject({ kind: z.literal('resume'), ...version }),
+  z.strictObject({ kind: z.literal('excuse-seat'), ...version, seat: z.string().max(8) }),
+  z.strictObject({
+    kind: z.literal('record-deviation'),
+    ...version,
+    text: say(1000).min(3, 'Say what differed and why'),
+  }),
+  z.strictObject({ kind: z.literal('finish'), ...version }),
+  z.strictObject({ kind: z.literal('abandon'), ...version, reason: say(500).min(3, 'Say why the session ends here') }),
+]);
+export type ProctorCommand = z.output<typeof proctorCommand>;
+
+/** Everything the console shows, whole. The blind code now to be fitted is the one field that bears on a secret. */
+export const proctorView = z.strictObject({
+  audience: z.literal('proctor'),
+  version: z.int(),
+  now: time,
+  title: z.string(),
+  session: z.int(),
+  room: z.string(),
+  method: z.string(),
+  rig: z.enum(['loudspeaker', 'line', 'headphone']),
+  phase: z.enum(sessionPhases),
+  cautionsConfirmed: z.boolean(),
+  paused: z
+    .strictObject({ reason: z.enum(['break', 'too-loud', 'trouble']), seat: z.string().nullable(), since: time })
+    .nullable(),
+  join: z.strictObject({ code: z.string(), address: z.string(), qrSvg: z.string().nullable() }).nullable(),
+  /** Where an automatic step happens (randomness collected, answers closed), if one is due. */
+  dueAt: time.nullable(),
+  revealed: z.strictObject({ done: z.int(), of: z.int() }).nullable(),
+  familiarised: z.boolean(),
+  trial: z
+    .strictObject({
+      number: z.int(),
+      of: z.int(),
+      familiarisation: z.boolean(),
+      stage: z.enum(['change', 'listening', 'answering']),
+      presentationNumber: z.int(),
+      presentations: z.int(),
+      /** The blind code to be fitted, during a change and while it is heard. */
+      code: z.string().nullable(),
+      excerpt: z.string(),
+      stepsDone: z.array(z.enum(changeSteps)),
+      /** The next step, or null when none is to be confirmed. */
+      step: z.enum(changeSteps).nullable(),
+      /** Change: when listening may start. Listening: when it ends. Answering: when the window ends. */
+      endsAt: time.nullable(),
+      longChange: z.boolean(),
+      answered: z.int(),
+      expected: z.int(),
+    })
+    .nullable(),
+  nextTrial: z.int().nullable(),
+  course: z.array(z.strictObject({ number: z.int(), state: z.enum(['locked', 'void', 'open', 'now']) })),
+  seats: z.array(
+    z.strictObject({
+      seat: z.string(),
+      place: z.string(),
+      state: z.enum(['ready', 'answered', 'away', 'left']),
+      awaySince: time.nullable(),
+      late: z.boolean(),
+    }),
+  ),
+  record: z.strictObject({ entries: z.int(), sessionEntries: z.int() }),
+  demo: z.boolean(),
+});
+export type ProctorView = z.output<typeof proctorView>;

@@ -1,0 +1,105 @@
+import { z } from 'zod';
+import { finding } from '../findings/finding.ts';
+import { registeredResult } from '../findings/registered-result.ts';
+import { endpoint } from './endpoint.ts';
+import { organisationParams, thingParams } from './organisation-params.ts';
+import { listQuery, pageOf } from './paging.ts';
+
+export const reportRow = z.strictObject({
+  studyId: z.uuid(),
+  title: z.string(),
+  closedAt: z.iso.datetime(),
+  headline: z.string(),
+});
+export type ReportRow = z.output<typeof reportRow>;
+
+const chanceBar = z.strictObject({ count: z.int(), chance: z.number() });
+
+/** The report of a closed study. Everything in it is computed from the record and what the closing revealed. */
+export const report = z.strictObject({
+  studyId: z.uuid(),
+  title: z.string(),
+  question: z.string(),
+  cables: z.tuple([z.string(), z.string()]),
+  method: z.string(),
+  closedAt: z.iso.datetime(),
+  endedEarly: z.string().nullable(),
+  finding,
+  result: registeredResult,
+  nullDistribution: z.array(chanceBar),
+  rung: z.strictObject({ name: z.string(), why: z.string() }),
+  flow: z.strictObject({
+    sessionsPlanned: z.int(),
+    sessionsOpened: z.int(),
+    sessionsFinished: z.int(),
+    sessionsAbandoned: z.int(),
+    sessionsNeverStarted: z.int(),
+    trialsOpened: z.int(),
+    trialsVoid: z.int(),
+    trialsCounted: z.int(),
+    answersExpected: z.int(),
+    answersMissing: z.int(),
+    listeners: z.int(),
+    listenersLeft: z.int(),
+  }),
+  sessions: z.array(
+    z.strictObject({
+      number: z.int(),
+      phase: z.string(),
+      room: z.string(),
+      startedAt: z.iso.datetime().nullable(),
+      endedAt: z.iso.datetime().nullable(),
+      listeners: z.int(),
+      labelA: z.string().nullable(),
+      reason: z.string().nullable(),
+      trials: z.array(
+        z.strictObject({
+          trial: z.int(),
+          outcome: z.enum(['locked', 'void', 'open']),
+          excerpt: z.string(),
+          truth: z.string(),
+          answers: z.array(z.strictObject({ listener: z.string(), choice: z.string().nullable() })),
+          longChanges: z.int(),
+        }),
+      ),
+    }),
+  ),
+  voids: z.array(
+    z.strictObject({ session: z.int(), trial: z.int(), reason: z.string(), note: z.string(), answersHeld: z.int() }),
+  ),
+  missing: z.array(z.strictObject({ session: z.int(), trial: z.int(), listener: z.string(), why: z.string() })),
+  deviations: z.array(z.strictObject({ at: z.iso.datetime(), session: z.int().nullable(), text: z.string() })),
+  protocol: z.strictObject({
+    digest: z.string(),
+    sealedAt: z.iso.datetime(),
+    facts: z.array(z.strictObject({ label: z.string(), value: z.string() })),
+  }),
+  record: z.strictObject({
+    entries: z.int(),
+    head: z.string(),
+    checks: z.array(
+      z.strictObject({ name: z.string(), outcome: z.enum(['pass', 'fail', 'not checkable']), reason: z.string() }),
+    ),
+  }),
+});
+export type Report = z.output<typeof report>;
+
+export const reportsApi = {
+  list: endpoint({
+    method: 'GET',
+    path: '/organisations/:organisationId/reports',
+    summary: 'Reports of closed studies',
+    access: ['owner', 'manager', 'reviewer'],
+    params: organisationParams,
+    query: listQuery,
+    reply: pageOf(reportRow),
+  }),
+  get: endpoint({
+    method: 'GET',
+    path: '/organisations/:organisationId/studies/:id/report',
+    summary: 'The report of a closed study',
+    access: ['owner', 'manager', 'reviewer'],
+    params: thingParams,
+    reply: report,
+  }),
+};

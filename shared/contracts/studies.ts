@@ -1,0 +1,180 @@
+import { z } from 'zod';
+import { endpoint, managers } from './endpoint.ts';
+import { organisationParams, thingParams } from './organisation-params.ts';
+import { listQuery, pageOf } from './paging.ts';
+
+export const studyStates = ['draft', 'sealed', 'collecting', 'closed'] as const;
+export type StudyState = (typeof studyStates)[number];
+
+export const rigs = ['loudspeaker', 'line', 'headphone'] as const;
+export type Rig = (typeof rigs)[number];
+
+const line = (most: number) =>
+  z
+    .string()
+    .trim()
+    .max(most, `At most ${most.toLocaleString('en')} characters`);
+const whole = (least: number, most: number, what: string) =>
+  z.int(`Enter ${what} as a whole number`).min(least, `At least ${least}`).max(most, `At most ${most}`);
+
+const chosenCable = z.strictObject({
+  cableId: z.uuid('Choose a cable'),
+  specimenIds: z.array(z.uuid()).min(1, 'Choose at least one specimen').max(6, 'At most 6 specimens'),
+});
+
+const excerptDraft = z.strictObject({
+  title: line(80).min(2, 'Name the excerpt'),
+  lengthS: whole(2, 120, 'seconds'),
+  start: line(40),
+});
+
+/**
+ * Everything that a study fixes before data, as the manager types it.
+ * Lengths in whole seconds; the significance level in tenths of a per cent (50 is 5 %).
+ */
+export const studyDraft = z
+  .strictObject({
+    title: line(80).min(3, 'At least 3 characters'),
+    question: line(400).min(3, 'Write the question in a sentence'),
+    method: z.enum(['abx']),
+    cables: z.tuple([chosenCable, chosenCable]),
+    sessions: whole(1, 20, 'sessions'),
+    listenersPerSession: whole(1, 24, 'listeners'),
+    trials: whole(5, 60, 'trials'),
+    spares: whole(0, 10, 'spares'),
+    alphaPerMille: whole(1, 200, 'tenths of a per cent'),
+    programme: z.array(excerptDraft).min(1, 'Add at least one excerpt').max(12, 'At most 12 excerpts'),
+    rig: z.enum(rigs, 'Choose a rig'),
+    chain: line(1000).min(3, 'Describe source, amplifier and transducers'),
+    changeS: whole(3, 300, 'seconds'),
+    answerS: whole(5, 300, 'seconds'),
+    confidence: z.boolean(),
+    codeHolderId: z.uuid('Choose the code holder'),
+  })
+  .check((check) => {
+    const [first, second] = check.value.cables;
+    if (first.cableId === second.cableId)
+      check.issues.push({
+        code: 'custom',
+        input: second.cableId,
+        path: ['cables', 1, 'cableId'],
+        message: 'Choose two different cables',
+      });
+  });
+export type StudyDraft = z.output<typeof studyDraft>;
+
+export const studyProgress = z.strictObject({
+  sessionsPlanned: z.int(),
+  sessionsOpened: z.int(),
+  sessionsEnded: z.int(),
+  trialsLocked: z.int(),
+  trialsRegistered: z.int(),
+});
+
+export const sealedProtocol = z.strictObject({
+  version: z.int(),
+  digest: z.string(),
+  sealedAt: z.iso.datetime(),
+  sealedBy: z.string(),
+});
+
+const rowShape = {
+  id: z.uuid(),
+  title: z.string(),
+  method: z.enum(['abx']),
+  state: z.enum(studyStates),
+  updatedAt: z.iso.datetime(),
+};
+export const studyRow = z.strictObject({ ...rowShape, progress: studyProgress });
+export type StudyRow = z.output<typeof studyRow>;
+
+/** A study as its manager sees it before closing: the protocol and its progress, no score, code key or draw. */
+export const study = z.strictObject({
+  ...rowShape,
+  draft: studyDraft,
+  cableNames: z.tuple([z.string(), z.string()]),
+  manager: z.string(),
+  codeHolder: z.string(),
+  sealed: sealedProtocol.nullable(),
+  codes: z.enum(['none', 'drawn', 'confirmed']),
+  progress: studyProgress,
+  record: z.strictObject({ entries: z.int(), head: z.string().nullable() }),
+  closing: z.strictObject({ allowed: z.boolean(), complete: z.boolean(), why: z.string() }),
+  deviations: z.array(z.strictObject({ at: z.iso.datetime(), text: z.string() })),
+});
+export type Study = z.output<typeof study>;
+
+const base = '/organisations/:organisationId/studies';
+
+export const studiesApi = {
+  list: endpoint({
+    method: 'GET',
+    path: base,
+    summary: 'Studies, newest change first',
+    access: managers,
+    params: organisationParams,
+    query: listQuery.extend({ state: z.enum(['any', ...studyStates]).default('any') }),
+    reply: pageOf(studyRow),
+  }),
+  get: endpoint({
+    method: 'GET',
+    path: `${base}/:id`,
+    summary: 'One study: protocol and progress',
+    access: managers,
+    params: thingParams,
+    reply: study,
+  }),
+  create: endpoint({
+    method: 'POST',
+    path: base,
+    summary: 'Begin a study',
+    access: managers,
+    params: organisationParams,
+    body: studyDraft,
+    reply: study,
+  }),
+  update: endpoint({
+    method: 'PUT',
+    path: `${base}/:id`,
+    summary: 'Change a draft',
+    access: managers,
+    params: thingParams,
+    body: studyDraft,
+    reply: study,
+  }),
+  discard: endpoint({
+    method: 'DELETE',
+    path: `${base}/:id`,
+    summary: 'Discard a draft',
+    access: managers,
+    params: thingParams,
+    reply: z.strictObject({ ok: z.literal(true) }),
+  }),
+  seal: endpoint({
+    method: 'POST',
+    path: `${base}/:id/seal`,
+    summary: 'Seal the protocol; its digest becomes the first entry of the record',
+    access: managers,
+    params: thingParams,
+    body: z.strictObject({}),
+    reply: study,
+  }),
+  deviate: endpoint({
+    method: 'POST',
+    path: `${base}/:id/deviations`,
+    summary: 'Record a deviation from the sealed protocol',
+    access: managers,
+    params: thingParams,
+    body: z.strictObject({ text: line(1000).min(3, 'Say what differed and why') }),
+    reply: study,
+  }),
+  close: endpoint({
+    method: 'POST',
+    path: `${base}/:id/close`,
+    summary: 'Close the study: open both secrets and run the registered analysis once',
+    access: managers,
+    params: thingParams,
+    body: z.strictObject({ reason: line(500) }),
+    reply: study,
+  }),
+};

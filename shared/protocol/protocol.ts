@@ -1,0 +1,119 @@
+import { z } from 'zod';
+import { cableKinds } from '../contracts/cables.ts';
+import { rigs, type StudyDraft } from '../contracts/studies.ts';
+import { canonicalJson } from '../ledger/canonical-json.ts';
+import { digest } from '../ledger/digest.ts';
+import { methodOf } from '../methods/methods.ts';
+import type { SessionPlan } from '../session/events.ts';
+
+const protocolCable = z.strictObject({
+  id: z.uuid(),
+  name: z.string(),
+  kind: z.enum(cableKinds),
+  lengthMm: z.int(),
+  description: z.string(),
+  specimens: z.array(z.strictObject({ id: z.uuid(), serial: z.string(), note: z.string() })),
+});
+export type ProtocolCable = z.output<typeof protocolCable>;
+
+/** Everything fixed before data, as it is sealed. Times in seconds, lengths in millimetres, decimals as text. */
+export const protocol = z.strictObject({
+  format: z.literal('fairlead-protocol'),
+  version: z.int(),
+  study: z.uuid(),
+  /** 32 random bytes, so that nobody can confirm a guessed cable from the digest. */
+  salt: z.string().regex(/^[0-9a-f]{64}$/),
+  title: z.string(),
+  question: z.string(),
+  method: z.string(),
+  cables: z.tuple([protocolCable, protocolCable]),
+  design: z.strictObject({
+    sessions: z.int(),
+    listenersPerSession: z.int(),
+    trials: z.int(),
+    spares: z.int(),
+    confidence: z.boolean(),
+    codeHolder: z.uuid(),
+  }),
+  conduct: z.strictObject({
+    rig: z.enum(rigs),
+    chain: z.string(),
+    changeS: z.int(),
+    answerS: z.int(),
+    programme: z.array(z.strictObject({ title: z.string(), start: z.string(), lengthS: z.int() })),
+  }),
+  /** The registered analysis, as data: what is run once at closing. */
+  analysis: z.strictObject({
+    name: z.string(),
+    alpha: z.string(),
+    alternative: z.literal('greater'),
+    missing: z.literal('counted as wrong'),
+    stopping: z.literal('fixed number of trials'),
+    exclusions: z.literal('none'),
+  }),
+});
+export type Protocol = z.output<typeof protocol>;
+
+/** The significance level as decimal text: 50 per mille is '0.05'. */
+export function alphaText(perMille: number): string {
+  return (perMille / 1000).toString();
+}
+
+/** The protocol that a draft comes to, with its cables spelt out as they are now. */
+export function protocolFromDraft(
+  draft: StudyDraft,
+  fixed: { study: string; version: number; salt: string; cables: readonly [ProtocolCable, ProtocolCable] },
+): Protocol {
+  return {
+    format: 'fairlead-protocol',
+    version: fixed.version,
+    study: fixed.study,
+    salt: fixed.salt,
+    title: draft.title,
+    question: draft.question,
+    method: draft.method,
+    cables: [fixed.cables[0], fixed.cables[1]],
+    design: {
+      sessions: draft.sessions,
+      listenersPerSession: draft.listenersPerSession,
+      trials: draft.trials,
+      spares: draft.spares,
+      confidence: draft.confidence,
+      codeHolder: draft.codeHolderId,
+    },
+    conduct: {
+      rig: draft.rig,
+      chain: draft.chain,
+      changeS: draft.changeS,
+      answerS: draft.answerS,
+      programme: draft.programme.map(({ title, start, lengthS }) => ({ title, start, lengthS })),
+    },
+    analysis: {
+      name: `${methodOf(draft.method).id}/1`,
+      alpha: alphaText(draft.alphaPerMille),
+      alternative: 'greater',
+      missing: 'counted as wrong',
+      stopping: 'fixed number of trials',
+      exclusions: 'none',
+    },
+  };
+}
+
+/** SHA-256 over the canonical protocol; the salt is part of it. */
+export function protocolDigest(value: Protocol): string {
+  return digest('protocol', canonicalJson(value));
+}
+
+/** What a session takes from its study's protocol. Nothing in it names a cable. */
+export function sessionPlanOf({ method, design, conduct }: Protocol): SessionPlan {
+  return {
+    method,
+    trials: design.trials,
+    spares: design.spares,
+    rig: conduct.rig,
+    changeMs: conduct.changeS * 1000,
+    answerMs: conduct.answerS * 1000,
+    confidence: design.confidence,
+    programme: conduct.programme.map(({ title, start, lengthS }) => ({ title, start, lengthMs: lengthS * 1000 })),
+  };
+}

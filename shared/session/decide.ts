@@ -1,0 +1,220 @@
+import type { ProctorCommand } from '../contracts/proctor-live.ts';
+import { cautions, changeSteps } from '../contracts/proctor-live.ts';
+import { Problem } from '../problem.ts';
+import { contributionCommitment } from './answer-leaf.ts';
+import type { PayloadOf, SessionEvent, SessionEventKind } from './events.ts';
+import { activeSeats, excerptOf, listeningMayStartAt, nextStep, nextTrial, openAnswers } from './progress.ts';
+import type { OpenTrial, SessionState } from './state.ts';
+
+type Plain<C> = C extends unknown ? Omit<C, 'expectVersion'> : never;
+
+/** Everything that can be asked of a session: the proctor's commands, the phones', and the clock's. */
+export type SessionCommand =
+  | Plain<Exclude<ProctorCommand, { kind: 'open-seating' }>>
+  | { kind: 'open-seating'; commitment: string }
+  | { kind: 'take-seat'; seat: string; commitment: string; consentVersion: number }
+  | { kind: 'reveal'; seat: string; value: string }
+  | { kind: 'too-loud'; seat: string }
+  | { kind: 'leave'; seat: string }
+  | { kind: 'note-late-answer'; seat: string; trial: number; leaf: string }
+  | { kind: 'note-restart' }
+  | { kind: 'tick' };
+
+type Emit = <K extends SessionEventKind>(kind: K, payload: Omit<PayloadOf<K>, 'session'>) => SessionEvent;
+
+function refuseUnless(holds: boolean, code: ConstructorParameters<typeof Problem>[0], detail: string): void {
+  if (!holds) throw new Problem(code, detail);
+}
+
+function requirePhase(state: SessionState, phases: readonly SessionState['phase'][], detail: string): void {
+  refuseUnless(phases.includes(state.phase), 'wrong-phase', detail);
+}
+
+function requireOpenTrial(state: SessionState): OpenTrial {
+  if (state.phase !== 'running' || state.trial === null) throw new Problem('wrong-phase', 'No trial is open.');
+  return state.trial;
+}
+
+function openTrial(state: SessionState, trial: number, emit: Emit): SessionEvent[] {
+  requirePhase(state, ['running'], 'Trials start once the draw is fixed.');
+  refuseUnless(state.trial === null, 'wrong-phase', 'A trial is open already.');
+  refuseUnless(state.paused === null, 'wrong-phase', 'The session is paused. Resume it first.');
+  const seats = activeSeats(state).map((seat) => seat.seat);
+  refuseUnless(seats.length > 0, 'wrong-phase', 'Nobody is seated.');
+  return [emit('trial-opened', { trial, excerpt: excerptOf(state, trial), seats })];
+}
+
+function confirmStep(state: SessionState, step: string, now: number, emit: Emit): SessionEvent[] {
+  const trial = requireOpenTrial(state);
+  refuseUnless(state.paused === null, 'wrong-phase', 'The session is paused. Resume it first.');
+  const expected = nextStep(trial);
+  if (expected === null || expected !== step) throw new Problem('stale-view', 'That step is done already.');
+  const { trial: number, presentation } = trial;
+  if (expected !== changeSteps.at(-1)) return [emit('step-confirmed', { trial: number, presentation, step: expected })];
+  const startsAt = listeningMayStartAt(trial, state.plan.changeMs, now);
+  refuseUnless(
+    now >= startsAt,
+    'too-early',
+    'Every change lasts its registered time. Listening starts when it is over.',
+  );
+  const lengths = Math.round((startsAt - trial.changeStartedAt) / state.plan.changeMs);
+  return [emit('listening-started', { trial: number, presentation, lengths })];
+}
+
+function lockTrial(trial: OpenTrial, reason: 'all-in' | 'window-ended', emit: Emit): SessionEvent {
+  const leaves = [...trial.answers].sort((a, b) => (a.seat < b.seat ? -1 : 1));
+  const held = new Set(leaves.map((answer) => answer.seat));
+  const missing = trial.seats.filter((seat) => !held.has(seat));
+  return emit('trial-locked', { trial: trial.trial, reason, leaves, missing });
+}
+
+function fixDraw(state: SessionState, emit: Emit, lastRevealed?: string): SessionEvent {
+  const contributors = contributorsOf(state).filter((seat) => seat.revealed !== null || seat.seat === lastRevealed);
+  return emit('draw-fixed', { contributors: contributors.map((seat) => seat.seat) });
+}
+
+const contributorsOf = (state: SessionState) => state.seats.filter((seat) => seat.contributes);
+
+function reveal(state: SessionState, seatLabel: string, value: string, emit: Emit): SessionEvent[] {
+  requirePhase(state, ['revealing'], 'Randomness is not being collected now.');
+  const seat = contributorsOf(state).find((candidate) => candidate.seat === seatLabel);
+  if (seat === undefined) throw new Problem('wrong-phase', 'This phone joined too late to contribute to the draw.');
+  if (seat.revealed !== null) return [];
+  refuseUnless(
+    contributionCommitment(value) === seat.commitment,
+    'invalid-input',
+    'This is not what the phone committed to.',
+  );
+  const waiting = contributorsOf(state).filter((other) => other.revealed === null && other.seat !== seatLabel);
+  const revealed = emit('contribution-revealed', { seat: seatLabel, value });
+  return waiting.length > 0 ? [revealed] : [revealed, fixDraw(state, emit, seatLabel)];
+}
+
+function tick(state: SessionState, now: number, emit: Emit): SessionEvent[] {
+  if (state.phase === 'revealing' && state.revealEndsAt !== null && now >= state.revealEndsAt) {
+    const silent = contributorsOf(state).filter((seat) => seat.revealed === null);
+    return [...silent.map(({ seat }) => emit('contribution-dropped', { seat })), fixDraw(state, emit)];
+  }
+  const { trial } = state;
+  if (trial === null || state.paused !== null || trial.endsAt === null || now < trial.endsAt) return [];
+  if (trial.stage === 'listening')
+    return [emit('listening-ended', { trial: trial.trial, presentation: trial.presentation })];
+  return [lockTrial(trial, openAnswers(state, trial).length === 0 ? 'all-in' : 'window-ended', emit)];
+}
+
+function requireSeat(state: SessionState, label: string): void {
+  const seat = state.seats.find((candidate) => candidate.seat === label);
+  if (seat === undefined) throw new Problem('not-found', 'There is no such seat in this session.');
+  refuseUnless(!seat.left, 'wrong-phase', 'This listener has left the session.');
+}
+
+/**
+ * What a command does to a session: the events to record, possibly none.
+ *
+ * @param state the session as it stands, with the open trial's held answers
+ * @param now   milliseconds since 1970
+ * @throws Problem when the command is refused; nothing is then recorded
+ */
+export function decide(state: SessionState, command: SessionCommand, now: number): SessionEvent[] {
+  const emit: Emit = (kind, payload) =>
+    ({ kind, at: now, payload: { session: state.session, ...payload } }) as unknown as SessionEvent;
+  const live = ['seating', 'revealing', 'running'] as const;
+  switch (command.kind) {
+    case 'confirm-cautions': {
+      requirePhase(state, ['planned'], 'The cautions are confirmed before seating opens.');
+      const missing = cautions.filter((caution) => !command.items.includes(caution));
+      refuseUnless(missing.length === 0, 'invalid-input', 'Read and tick every caution before you go on.');
+      return state.cautionsConfirmed ? [] : [emit('cautions-confirmed', { items: [...cautions] })];
+    }
+    case 'open-seating':
+      requirePhase(state, ['planned'], 'Seating is open already.');
+      refuseUnless(state.cautionsConfirmed, 'wrong-phase', 'Confirm the cautions first.');
+      return [emit('seating-opened', { commitment: command.commitment })];
+    case 'take-seat': {
+      requirePhase(state, live, 'This session takes no listeners now.');
+      const { seat, commitment, consentVersion } = command;
+      return [emit('listener-joined', { seat, commitment, consentVersion, contributes: state.phase === 'seating' })];
+    }
+    case 'close-seating': {
+      requirePhase(state, ['seating'], 'Seating is closed already.');
+      refuseUnless(activeSeats(state).length > 0, 'wrong-phase', 'Nobody is seated yet.');
+      const contributors = activeSeats(state).filter((seat) => seat.contributes);
+      return [
+        emit('contributions-fixed', {
+          contributors: contributors.map(({ seat, commitment }) => ({ seat, commitment })),
+        }),
+      ];
+    }
+    case 'reveal':
+      return reveal(state, command.seat, command.value, emit);
+    case 'begin-familiarisation':
+      refuseUnless(!state.familiarised, 'wrong-phase', 'The familiarisation trial is over.');
+      return openTrial(state, 0, emit);
+    case 'begin-trial': {
+      refuseUnless(state.familiarised, 'wrong-phase', 'The familiarisation trial comes first.');
+      const next = nextTrial(state);
+      if (next === null) throw new Problem('wrong-phase', 'Every trial of this session has ended.');
+      return openTrial(state, next, emit);
+    }
+    case 'confirm-step':
+      return confirmStep(state, command.step, now, emit);
+    case 'lock-trial': {
+      const trial = requireOpenTrial(state);
+      refuseUnless(trial.stage === 'answering', 'wrong-phase', 'A trial locks after its answers.');
+      refuseUnless(state.paused === null, 'wrong-phase', 'The session is paused. Resume it first.');
+      const open = openAnswers(state, trial);
+      refuseUnless(open.length === 0, 'too-early', `The trial waits for ${open.join(', ')} until its window ends.`);
+      return [lockTrial(trial, 'all-in', emit)];
+    }
+    case 'void-trial': {
+      const { trial, answers } = requireOpenTrial(state);
+      const { reason, note } = command;
+      return [emit('trial-voided', { trial, reason, note, answersHeld: answers.length })];
+    }
+    case 'pause':
+      requirePhase(state, ['running'], 'Only a running session can be paused.');
+      refuseUnless(state.paused === null, 'wrong-phase', 'The session is paused already.');
+      return [emit('paused', { reason: command.reason, seat: null })];
+    case 'too-loud':
+      requireSeat(state, command.seat);
+      requirePhase(state, live, 'The session is over.');
+      if (state.paused?.reason === 'too-loud') return [];
+      return [emit('paused', { reason: 'too-loud', seat: command.seat })];
+    case 'resume':
+      refuseUnless(state.paused !== null, 'wrong-phase', 'The session is not paused.');
+      return [emit('resumed', {})];
+    case 'leave':
+    case 'excuse-seat':
+      requirePhase(state, live, 'The session is over.');
+      requireSeat(state, command.seat);
+      return [emit('listener-left', { seat: command.seat, by: command.kind === 'leave' ? 'listener' : 'proctor' })];
+    case 'note-late-answer': {
+      const { trial, seat, leaf } = command;
+      const noted = state.late.some((late) => late.trial === trial && late.seat === seat);
+      return noted ? [] : [emit('answer-late', { trial, seat, leaf })];
+    }
+    case 'note-restart':
+      return (live as readonly string[]).includes(state.phase) ? [emit('server-restarted', {})] : [];
+    case 'record-deviation':
+      return [emit('deviation-recorded', { text: command.text })];
+    case 'finish':
+      requirePhase(state, ['running'], 'Only a running session can be finished.');
+      refuseUnless(
+        state.trial === null && state.familiarised && nextTrial(state) === null,
+        'wrong-phase',
+        'Trials are still to come. To end here, abandon the session with a reason.',
+      );
+      return [emit('session-finished', {})];
+    case 'abandon':
+      requirePhase(state, ['planned', ...live], 'The session is over already.');
+      return [
+        emit('session-abandoned', {
+          reason: command.reason,
+          openTrial: state.trial?.trial ?? null,
+          answersHeld: state.trial?.answers.length ?? 0,
+        }),
+      ];
+    case 'tick':
+      return tick(state, now, emit);
+  }
+}

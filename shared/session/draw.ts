@@ -1,0 +1,73 @@
+import { concatBytes, digest, hexToBytes, keyedDigest, utf8ToBytes } from '../ledger/digest.ts';
+import type { Method } from '../methods/method.ts';
+
+// docs/spec/blind.md describes this construction with test vectors, so that anyone can recompute a draw.
+
+/**
+ * The seed of a session's draw: the server's committed secret and the phones' revealed contributions, in listed order.
+ *
+ * @param secret 32 bytes as hex
+ * @param contributions 32 bytes each, as hex, in the order in which the record lists them
+ * @returns 32 bytes as hex
+ */
+export function drawSeed(secret: string, contributions: readonly string[]): string {
+  return digest('drawSeed', hexToBytes(secret), ...contributions.map((value) => hexToBytes(value)));
+}
+
+/**
+ * A whole number from 0 to `below` - 1, each equally likely, from the seed and a label.
+ *
+ * HMAC-SHA-256(seed, label, counter) in counter mode gives bytes; those at or above the largest multiple of `below`
+ * are passed over, so that no value is favoured.
+ *
+ * @param below 1 to 256
+ * @throws RangeError outside that range
+ */
+export function fairNumber(seed: string, label: string, below: number): number {
+  if (!Number.isInteger(below) || below < 1 || below > 256)
+    throw new RangeError('below must be a whole number, 1 to 256');
+  const key = hexToBytes(seed);
+  const limit = 256 - (256 % below);
+  for (let counter = 0; ; counter += 1) {
+    const block = keyedDigest(
+      key,
+      concatBytes(utf8ToBytes(label), new Uint8Array([counter >>> 24, counter >>> 16, counter >>> 8, counter])),
+    );
+    for (const byte of block) if (byte < limit) return byte % below;
+  }
+}
+
+/** What a session's draw fixes: which cable bears the first side's label, which specimens are used, what every trial's truth is. */
+export type Draw = {
+  /** 0: the protocol's first cable bears the method's first label; 1: its second cable does. */
+  readonly firstSide: 0 | 1;
+  /** For each of the protocol's two cables the place of the specimen used, from 0. */
+  readonly specimens: readonly [number, number];
+  /** One truth per trial, spares included; trial 1 comes first. */
+  readonly truths: readonly string[];
+};
+
+export type DrawShape = { readonly specimenCounts: readonly [number, number]; readonly trials: number };
+
+/** The whole draw of a session: a pure function of its seed, the method and the protocol's shape. */
+export function drawSession(seed: string, method: Pick<Method, 'truths'>, shape: DrawShape): Draw {
+  const truths = Array.from({ length: shape.trials }, (_, index) => {
+    const truth = method.truths[fairNumber(seed, `trial/${index + 1}`, method.truths.length)];
+    if (truth === undefined) throw new RangeError('a method needs at least one truth');
+    return truth;
+  });
+  return {
+    firstSide: fairNumber(seed, 'side', 2) === 0 ? 0 : 1,
+    specimens: [
+      fairNumber(seed, 'specimen/1', shape.specimenCounts[0]),
+      fairNumber(seed, 'specimen/2', shape.specimenCounts[1]),
+    ],
+    truths,
+  };
+}
+
+/** Which of the protocol's two cables, 0 or 1, bears a side's label in this session. */
+export function cableOfSide(draw: Draw, method: Pick<Method, 'sides'>, side: string): 0 | 1 {
+  const isFirst = side === method.sides[0];
+  return isFirst === (draw.firstSide === 0) ? 0 : 1;
+}

@@ -1,0 +1,93 @@
+import { z } from 'zod';
+import { cautions, changeSteps, voidReasons } from '../contracts/proctor-live.ts';
+
+// What a session puts on its study's record. Payload shapes are permanent: a change means a new version.
+
+const session = z.int().min(1);
+const seat = z.string();
+const hex32 = z.string().regex(/^[0-9a-f]{64}$/);
+const trial = z.int().min(0);
+
+/** What a session takes from the sealed protocol; times in milliseconds. Trial 0 is the familiarisation trial. */
+export const sessionPlan = z.strictObject({
+  method: z.string(),
+  trials: z.int(),
+  spares: z.int(),
+  rig: z.enum(['loudspeaker', 'line', 'headphone']),
+  changeMs: z.int(),
+  answerMs: z.int(),
+  confidence: z.boolean(),
+  programme: z.array(z.strictObject({ title: z.string(), start: z.string(), lengthMs: z.int() })),
+});
+export type SessionPlan = z.output<typeof sessionPlan>;
+
+export const sessionEvents = {
+  'session-planned': z.strictObject({ session, sessionId: z.uuid(), proctor: z.uuid(), plan: sessionPlan }),
+  'cautions-confirmed': z.strictObject({ session, items: z.array(z.enum(cautions)) }),
+  'seating-opened': z.strictObject({ session, commitment: hex32 }),
+  'listener-joined': z.strictObject({
+    session,
+    seat,
+    commitment: hex32,
+    contributes: z.boolean(),
+    consentVersion: z.int(),
+  }),
+  'contributions-fixed': z.strictObject({
+    session,
+    contributors: z.array(z.strictObject({ seat, commitment: hex32 })),
+  }),
+  'contribution-revealed': z.strictObject({ session, seat, value: hex32 }),
+  'contribution-dropped': z.strictObject({ session, seat }),
+  'draw-fixed': z.strictObject({ session, contributors: z.array(seat) }),
+  'trial-opened': z.strictObject({ session, trial, excerpt: z.int(), seats: z.array(seat) }),
+  'step-confirmed': z.strictObject({ session, trial, presentation: z.int(), step: z.enum(changeSteps) }),
+  'listening-started': z.strictObject({
+    session,
+    trial,
+    presentation: z.int(),
+    /** How many registered lengths the change took; 1 is as registered. */
+    lengths: z.int().min(1),
+  }),
+  'listening-ended': z.strictObject({ session, trial, presentation: z.int() }),
+  'trial-locked': z.strictObject({
+    session,
+    trial,
+    reason: z.enum(['all-in', 'window-ended']),
+    leaves: z.array(z.strictObject({ seat, leaf: hex32 })),
+    missing: z.array(seat),
+  }),
+  'trial-voided': z.strictObject({
+    session,
+    trial,
+    reason: z.enum(voidReasons),
+    note: z.string(),
+    answersHeld: z.int(),
+  }),
+  'answer-late': z.strictObject({ session, trial, seat, leaf: hex32 }),
+  paused: z.strictObject({ session, reason: z.enum(['break', 'too-loud', 'trouble']), seat: seat.nullable() }),
+  resumed: z.strictObject({ session }),
+  'server-restarted': z.strictObject({ session }),
+  'listener-left': z.strictObject({ session, seat, by: z.enum(['listener', 'proctor']) }),
+  'deviation-recorded': z.strictObject({ session: session.nullable(), text: z.string() }),
+  'session-finished': z.strictObject({ session }),
+  'session-abandoned': z.strictObject({
+    session,
+    reason: z.string(),
+    openTrial: trial.nullable(),
+    answersHeld: z.int(),
+  }),
+} as const;
+
+export type SessionEventKind = keyof typeof sessionEvents;
+export type PayloadOf<K extends SessionEventKind> = z.output<(typeof sessionEvents)[K]>;
+/** An event with the time at which it was decided, in milliseconds since 1970. */
+export type SessionEvent = {
+  [K in SessionEventKind]: { kind: K; at: number; payload: PayloadOf<K> };
+}[SessionEventKind];
+
+/** Reads an entry's kind and payload back as a session's event; null when it belongs to the study and to no session. */
+export function readSessionEvent(kind: string, at: string, payload: unknown): SessionEvent | null {
+  if (!Object.hasOwn(sessionEvents, kind)) return null;
+  const known = kind as SessionEventKind;
+  return { kind: known, at: Date.parse(at), payload: sessionEvents[known].parse(payload) } as SessionEvent;
+}

@@ -1,0 +1,173 @@
+import { changeSteps } from '../contracts/proctor-live.ts';
+import type { Method } from '../methods/method.ts';
+import type { SessionEvent } from './events.ts';
+import { presentationsOf } from './progress.ts';
+import type { EndedTrial, OpenTrial, SessionState } from './state.ts';
+import { revealMs } from './state.ts';
+
+type Folded = Omit<SessionState, 'version'>;
+
+function startChange(trial: OpenTrial, presentation: number, at: number): OpenTrial {
+  return { ...trial, presentation, stage: 'change', changeStartedAt: at, stepsDone: [], readyAt: at, endsAt: null };
+}
+
+function openTrialOf(state: SessionState, event: SessionEvent): OpenTrial {
+  if (state.trial === null) throw new RangeError(`${event.kind} without an open trial`);
+  return state.trial;
+}
+
+function endTrial(state: SessionState, ended: Omit<EndedTrial, 'excerpt' | 'seats' | 'longChanges'>): Folded {
+  const { excerpt, seats, longChanges } = state.trial ?? { excerpt: 0, seats: [], longChanges: 0 };
+  return { ...state, trial: null, paused: null, ended: [...state.ended, { ...ended, excerpt, seats, longChanges }] };
+}
+
+function afterListening(state: SessionState, trial: OpenTrial, at: number, method: Method): Folded {
+  const isLast = trial.presentation + 1 >= presentationsOf(method, trial.trial).length;
+  if (!isLast) return { ...state, trial: startChange(trial, trial.presentation + 1, at) };
+  if (trial.trial === 0) return { ...state, trial: null, familiarised: true };
+  return { ...state, trial: { ...trial, stage: 'answering', endsAt: at + state.plan.answerMs } };
+}
+
+function pauseTrial(state: SessionState, at: number): number | null {
+  return state.trial?.stage === 'answering' && state.trial.endsAt !== null
+    ? Math.max(0, state.trial.endsAt - at)
+    : null;
+}
+
+function resumeTrial(state: SessionState, at: number): OpenTrial | null {
+  const { trial, paused } = state;
+  if (trial === null) return null;
+  if (trial.stage === 'answering') return { ...trial, endsAt: at + (paused?.remainingMs ?? state.plan.answerMs) };
+  return startChange(trial, trial.presentation, at);
+}
+
+function fold(state: SessionState, event: SessionEvent, method: Method): Folded {
+  switch (event.kind) {
+    case 'session-planned':
+      throw new RangeError('a session is planned once');
+    case 'cautions-confirmed':
+      return { ...state, cautionsConfirmed: true };
+    case 'seating-opened':
+      return { ...state, phase: 'seating' };
+    case 'listener-joined': {
+      const { seat, commitment, contributes } = event.payload;
+      return { ...state, seats: [...state.seats, { seat, commitment, contributes, revealed: null, left: false }] };
+    }
+    case 'contributions-fixed':
+      return { ...state, phase: 'revealing', revealEndsAt: event.at + revealMs };
+    case 'contribution-revealed': {
+      const { seat, value } = event.payload;
+      return { ...state, seats: state.seats.map((s) => (s.seat === seat ? { ...s, revealed: value } : s)) };
+    }
+    case 'contribution-dropped':
+      return {
+        ...state,
+        seats: state.seats.map((s) => (s.seat === event.payload.seat ? { ...s, contributes: false } : s)),
+      };
+    case 'draw-fixed':
+      return { ...state, phase: 'running', revealEndsAt: null };
+    case 'trial-opened': {
+      const { trial, excerpt, seats } = event.payload;
+      const opened = { trial, excerpt, seats, longChanges: 0, answers: [] };
+      return {
+        ...state,
+        trial: {
+          ...opened,
+          presentation: 0,
+          stage: 'change',
+          changeStartedAt: event.at,
+          stepsDone: [],
+          readyAt: event.at,
+          endsAt: null,
+        },
+      };
+    }
+    case 'step-confirmed': {
+      const trial = openTrialOf(state, event);
+      return {
+        ...state,
+        trial: { ...trial, stepsDone: [...trial.stepsDone, event.payload.step], readyAt: event.at },
+      };
+    }
+    case 'listening-started': {
+      const trial = openTrialOf(state, event);
+      const lengthMs = state.plan.programme[trial.excerpt]?.lengthMs;
+      if (lengthMs === undefined) throw new RangeError(`excerpt ${trial.excerpt} is not in the programme`);
+      const longChanges = trial.longChanges + (event.payload.lengths > 1 ? 1 : 0);
+      const endsAt = event.at + lengthMs;
+      return { ...state, trial: { ...trial, stage: 'listening', stepsDone: changeSteps, endsAt, longChanges } };
+    }
+    case 'listening-ended':
+      return afterListening(state, openTrialOf(state, event), event.at, method);
+    case 'trial-locked': {
+      const { trial, missing } = event.payload;
+      return endTrial(state, { trial, outcome: 'locked', missing, voidReason: null });
+    }
+    case 'trial-voided': {
+      const { trial, reason } = event.payload;
+      if (trial === 0) return { ...state, trial: null, paused: null };
+      return endTrial(state, { trial, outcome: 'void', missing: [], voidReason: reason });
+    }
+    case 'answer-late': {
+      const { trial, seat } = event.payload;
+      return { ...state, late: [...state.late, { trial, seat }] };
+    }
+    case 'paused': {
+      const { reason, seat } = event.payload;
+      return { ...state, paused: { reason, seat, since: event.at, remainingMs: pauseTrial(state, event.at) } };
+    }
+    case 'resumed':
+      return { ...state, paused: null, trial: resumeTrial(state, event.at) };
+    case 'server-restarted': {
+      const { trial } = state;
+      if (trial?.stage !== 'answering' || state.paused !== null) return state;
+      return { ...state, trial: { ...trial, endsAt: event.at + state.plan.answerMs } };
+    }
+    case 'listener-left':
+      return { ...state, seats: state.seats.map((s) => (s.seat === event.payload.seat ? { ...s, left: true } : s)) };
+    case 'deviation-recorded':
+      return state;
+    case 'session-finished':
+      return { ...state, phase: 'finished' };
+    case 'session-abandoned':
+      return { ...state, phase: 'abandoned', trial: null, paused: null };
+  }
+}
+
+/** The state after one more event. Pure; the same events give the same state on the server and in a browser. */
+export function evolve(state: SessionState | null, event: SessionEvent, method: Method): SessionState {
+  if (state === null) {
+    if (event.kind !== 'session-planned')
+      throw new RangeError(`a session begins with its plan, not with ${event.kind}`);
+    const { session, sessionId, proctor, plan } = event.payload;
+    return {
+      session,
+      sessionId,
+      proctor,
+      plan,
+      version: 1,
+      phase: 'planned',
+      cautionsConfirmed: false,
+      seats: [],
+      revealEndsAt: null,
+      familiarised: false,
+      paused: null,
+      trial: null,
+      ended: [],
+      late: [],
+    };
+  }
+  return { ...fold(state, event, method), version: state.version + 1 };
+}
+
+/** The state after all of a session's events, in order; null when there are none. */
+export function replay(events: readonly SessionEvent[], method: Method): SessionState | null {
+  return events.reduce<SessionState | null>((state, event) => evolve(state, event, method), null);
+}
+
+/** The state with an answer held for the open trial (a row beside the record, not an event). */
+export function holdAnswer(state: SessionState, seat: string, leaf: string): SessionState {
+  if (state.trial === null) throw new RangeError('no trial is open');
+  const others = state.trial.answers.filter((answer) => answer.seat !== seat);
+  return { ...state, trial: { ...state.trial, answers: [...others, { seat, leaf }] } };
+}

@@ -1,0 +1,65 @@
+import { changeSteps } from '../contracts/proctor-live.ts';
+import type { Method } from '../methods/method.ts';
+import type { OpenTrial, SessionState } from './state.ts';
+import { startGraceMs } from './state.ts';
+
+// Questions that decide and the views both ask of a state.
+
+export const voidsOf = (state: SessionState) => state.ended.filter((trial) => trial.outcome === 'void');
+
+/** How many trials the session comes to: those registered, and one spare for each void while spares last. */
+export function trialsInAll(state: SessionState): number {
+  return state.plan.trials + Math.min(voidsOf(state).length, state.plan.spares);
+}
+
+/** The number of the trial to open next, or null when every one has ended. */
+export function nextTrial(state: SessionState): number | null {
+  const next = state.ended.length + 1;
+  return next <= trialsInAll(state) ? next : null;
+}
+
+/** The excerpt of a trial, from 0: balanced over trial numbers; a spare uses the excerpt of the void it stands for. */
+export function excerptOf(state: SessionState, trial: number): number {
+  if (trial <= state.plan.trials) return Math.max(0, trial - 1) % state.plan.programme.length;
+  const replaced = voidsOf(state)[trial - state.plan.trials - 1];
+  if (replaced === undefined) throw new RangeError(`trial ${trial} stands for no void`);
+  return replaced.excerpt;
+}
+
+export const activeSeats = (state: SessionState) => state.seats.filter((seat) => !seat.left);
+
+/** Seats whose answer the open trial still waits for. */
+export function openAnswers(state: SessionState, trial: OpenTrial): string[] {
+  const here = new Set(activeSeats(state).map((seat) => seat.seat));
+  const held = new Set(trial.answers.map((answer) => answer.seat));
+  return trial.seats.filter((seat) => here.has(seat) && !held.has(seat));
+}
+
+export const presentationsOf = (method: Method, trial: number): readonly string[] =>
+  trial === 0 ? method.familiarisation : method.presentations;
+
+/** The step to be confirmed now, or null outside a change. */
+export function nextStep(trial: OpenTrial) {
+  return trial.stage === 'change' ? (changeSteps[trial.stepsDone.length] ?? null) : null;
+}
+
+/**
+ * When listening may start: at the registered end of the change, or, when the cable was not ready by then or the start
+ * was missed, at the end of the next whole length. Real and sham changes therefore last alike.
+ */
+export function listeningMayStartAt(trial: OpenTrial, changeMs: number, now: number): number {
+  const allButLast = trial.stepsDone.length >= changeSteps.length - 1;
+  const readyAt = allButLast ? trial.readyAt : now;
+  const lengths = Math.max(1, Math.ceil((readyAt - trial.changeStartedAt) / changeMs));
+  let at = trial.changeStartedAt + lengths * changeMs;
+  while (allButLast && now > at + startGraceMs(changeMs)) at += changeMs;
+  return at;
+}
+
+/** When something is due without anybody acting: a window ends, an excerpt is over, a start was missed. Null when nothing is. */
+export function dueAt(state: SessionState, now: number): number | null {
+  if (state.phase === 'revealing') return state.revealEndsAt;
+  if (state.paused !== null || state.trial === null) return null;
+  if (state.trial.stage !== 'change') return state.trial.endsAt;
+  return listeningMayStartAt(state.trial, state.plan.changeMs, now) + startGraceMs(state.plan.changeMs) + 1;
+}

@@ -1,0 +1,72 @@
+import type { ChangeStep, VoidReason } from '../contracts/proctor-live.ts';
+import type { SessionPlan } from './events.ts';
+
+// The state of a session has no code, no cable, no draw and no correctness: nothing in it needs stripping.
+
+export type SeatState = {
+  readonly seat: string;
+  readonly commitment: string;
+  readonly contributes: boolean;
+  /** The phone's revealed 32 bytes, once they are in. */
+  readonly revealed: string | null;
+  readonly left: boolean;
+};
+
+export type OpenTrial = {
+  /** From 1; 0 is the familiarisation trial. */
+  readonly trial: number;
+  readonly excerpt: number;
+  /** The listeners who take part: those seated when it opened. */
+  readonly seats: readonly string[];
+  /** From 0. */
+  readonly presentation: number;
+  readonly stage: 'change' | 'listening' | 'answering';
+  readonly changeStartedAt: number;
+  readonly stepsDone: readonly ChangeStep[];
+  /** When the latest step was confirmed. */
+  readonly readyAt: number;
+  /** When listening or answering ends; null during a change. */
+  readonly endsAt: number | null;
+  readonly longChanges: number;
+  /** Leaves of the answers held so far; rows beside the record until the trial locks. */
+  readonly answers: readonly { readonly seat: string; readonly leaf: string }[];
+};
+
+export type EndedTrial = {
+  readonly trial: number;
+  readonly outcome: 'locked' | 'void';
+  readonly excerpt: number;
+  readonly seats: readonly string[];
+  readonly missing: readonly string[];
+  readonly longChanges: number;
+  readonly voidReason: VoidReason | null;
+};
+
+export type SessionState = {
+  readonly session: number;
+  readonly sessionId: string;
+  readonly proctor: string;
+  readonly plan: SessionPlan;
+  /** The number of this session's events so far. */
+  readonly version: number;
+  readonly phase: 'planned' | 'seating' | 'revealing' | 'running' | 'finished' | 'abandoned';
+  readonly cautionsConfirmed: boolean;
+  readonly seats: readonly SeatState[];
+  readonly revealEndsAt: number | null;
+  readonly familiarised: boolean;
+  readonly paused: {
+    readonly reason: 'break' | 'too-loud' | 'trouble';
+    readonly seat: string | null;
+    readonly since: number;
+    readonly remainingMs: number | null;
+  } | null;
+  readonly trial: OpenTrial | null;
+  readonly ended: readonly EndedTrial[];
+  readonly late: readonly { readonly trial: number; readonly seat: string }[];
+};
+
+/** How long a phone may take to reveal its contribution before it is dropped. */
+export const revealMs = 30_000;
+
+/** How long after a change's registered end listening may still start; later it waits for the next whole length. */
+export const startGraceMs = (changeMs: number): number => Math.min(4_000, Math.floor(changeMs / 2));

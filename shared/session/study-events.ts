@@ -1,0 +1,25 @@
+import { z } from 'zod';
+import { registeredResult } from '../findings/registered-result.ts';
+
+// What the study itself puts on its record. The payload of `key-revealed` has a file of its own: revealed-key.ts.
+
+const hex32 = z.string().regex(/^[0-9a-f]{64}$/);
+
+export const studyEvents = {
+  'protocol-sealed': z.strictObject({ protocolVersion: z.int(), digest: hex32, sealedBy: z.uuid() }),
+  'code-key-committed': z.strictObject({ commitment: hex32, specimens: z.int(), by: z.uuid() }),
+  'code-key-opened': z.strictObject({ by: z.uuid(), purpose: z.enum(['labels', 'check']) }),
+  'code-key-confirmed': z.strictObject({ by: z.uuid() }),
+  'study-closed': z.strictObject({
+    by: z.uuid(),
+    complete: z.boolean(),
+    reason: z.string(),
+    /** The duties as they stood, from which the blinding rung is derived. */
+    manager: z.uuid(),
+    owners: z.array(z.uuid()),
+    codeHolder: z.uuid(),
+  }),
+  'result-recorded': z.strictObject({ analysis: z.string(), result: registeredResult }),
+} as const;
+export type StudyEventKind = keyof typeof studyEvents;
+export type StudyPayloadOf<K extends StudyEventKind> = z.output<(typeof studyEvents)[K]>;

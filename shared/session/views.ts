@@ -1,0 +1,176 @@
+import type { CourseRing, HeldAnswer, ListenerView, LockReceipt } from '../contracts/listener-live.ts';
+import type { ProctorView } from '../contracts/proctor-live.ts';
+import type { Method } from '../methods/method.ts';
+import {
+  activeSeats,
+  dueAt,
+  listeningMayStartAt,
+  nextStep,
+  nextTrial,
+  openAnswers,
+  presentationsOf,
+  trialsInAll,
+} from './progress.ts';
+import type { OpenTrial, SessionState } from './state.ts';
+
+// A view is built field by field from nothing; it is never "the state without the secret".
+
+/** The trials of a session as rings on the course line. */
+export function courseOf(state: SessionState): CourseRing[] {
+  const now = state.trial?.trial ?? nextTrial(state);
+  return Array.from({ length: trialsInAll(state) }, (_, index) => {
+    const number = index + 1;
+    const ended = state.ended.find((trial) => trial.trial === number);
+    if (ended !== undefined) return { number, state: ended.outcome };
+    return { number, state: number === now && state.phase === 'running' ? 'now' : 'open' };
+  });
+}
+
+function presentationAt(trial: OpenTrial, method: Method): string {
+  return presentationsOf(method, trial.trial)[trial.presentation] ?? '';
+}
+
+export type ListenerContext = {
+  readonly title: string;
+  readonly seat: string;
+  readonly now: number;
+  readonly held: HeldAnswer | null;
+  readonly lastLock: LockReceipt | null;
+};
+
+/** What one listener's phone shows. */
+export function listenerViewOf(state: SessionState, method: Method, context: ListenerContext): ListenerView {
+  const { title, seat, now, held, lastLock } = context;
+  const own = state.seats.find((candidate) => candidate.seat === seat);
+  const { trial } = state;
+  const last = state.ended.at(-1);
+  return {
+    audience: 'listener',
+    title,
+    session: state.session,
+    sessionId: state.sessionId,
+    seat,
+    now,
+    phase: state.phase === 'planned' ? 'seating' : state.phase,
+    contributes: own?.contributes ?? false,
+    revealWanted: state.phase === 'revealing' && own?.contributes === true && own.revealed === null,
+    left: own?.left ?? true,
+    paused: state.paused?.reason ?? null,
+    course: courseOf(state),
+    trial:
+      trial === null
+        ? null
+        : {
+            number: trial.trial,
+            of: trialsInAll(state),
+            familiarisation: trial.trial === 0,
+            takesPart: trial.seats.includes(seat),
+            stage: trial.stage,
+            presentation: presentationAt(trial, method),
+            presentationNumber: trial.presentation + 1,
+            presentations: presentationsOf(method, trial.trial).length,
+            endsAt: state.paused === null ? trial.endsAt : null,
+            held,
+          },
+    question: {
+      text: method.question,
+      options: method.options.map(({ value, letter, sentence }) => ({ value, letter, sentence })),
+      confidence: state.plan.confidence,
+    },
+    lastLock,
+    lastOutcome:
+      last === undefined
+        ? null
+        : {
+            trial: last.trial,
+            outcome: last.outcome,
+            counted: last.outcome === 'locked' && last.seats.includes(seat) && !last.missing.includes(seat),
+          },
+  };
+}
+
+export type Presence = { readonly seat: string; readonly place: string; readonly awaySince: number | null };
+
+export type ProctorContext = {
+  readonly title: string;
+  readonly room: string;
+  readonly now: number;
+  /** The blind code of the current presentation, or null when none is to be fitted. */
+  readonly code: string | null;
+  readonly join: ProctorView['join'];
+  readonly presence: readonly Presence[];
+  readonly entries: number;
+  readonly demo: boolean;
+};
+
+function seatsFor(state: SessionState, presence: readonly Presence[]): ProctorView['seats'] {
+  const answered = new Set(state.trial?.answers.map((answer) => answer.seat));
+  return state.seats.map(({ seat, left }) => {
+    const here = presence.find((candidate) => candidate.seat === seat);
+    const awaySince = left ? null : (here?.awaySince ?? null);
+    const present = answered.has(seat) ? 'answered' : awaySince === null ? 'ready' : 'away';
+    return {
+      seat,
+      place: here?.place ?? '',
+      state: left ? 'left' : present,
+      awaySince,
+      late: state.late.some((late) => late.seat === seat),
+    };
+  });
+}
+
+function trialFor(state: SessionState, method: Method, context: ProctorContext): ProctorView['trial'] {
+  const { trial, plan } = state;
+  if (trial === null) return null;
+  const mayStartAt = listeningMayStartAt(trial, plan.changeMs, context.now);
+  const endsAt = trial.stage === 'change' ? mayStartAt : trial.endsAt;
+  return {
+    number: trial.trial,
+    of: trialsInAll(state),
+    familiarisation: trial.trial === 0,
+    stage: trial.stage,
+    presentationNumber: trial.presentation + 1,
+    presentations: presentationsOf(method, trial.trial).length,
+    code: context.code,
+    excerpt: plan.programme[trial.excerpt]?.title ?? '',
+    stepsDone: [...trial.stepsDone],
+    step: state.paused === null ? nextStep(trial) : null,
+    endsAt: state.paused === null ? endsAt : null,
+    longChange: trial.stage === 'change' && mayStartAt > trial.changeStartedAt + plan.changeMs,
+    answered: trial.answers.length,
+    expected: trial.answers.length + openAnswers(state, trial).length,
+  };
+}
+
+/** What the console shows. */
+export function proctorViewOf(state: SessionState, method: Method, context: ProctorContext): ProctorView {
+  const contributors = state.seats.filter((seat) => seat.contributes);
+  const { paused } = state;
+  return {
+    audience: 'proctor',
+    version: state.version,
+    now: context.now,
+    title: context.title,
+    session: state.session,
+    room: context.room,
+    method: method.name,
+    rig: state.plan.rig,
+    phase: state.phase,
+    cautionsConfirmed: state.cautionsConfirmed,
+    paused: paused === null ? null : { reason: paused.reason, seat: paused.seat, since: paused.since },
+    join: context.join,
+    dueAt: dueAt(state, context.now),
+    revealed:
+      state.phase === 'revealing'
+        ? { done: contributors.filter((seat) => seat.revealed !== null).length, of: contributors.length }
+        : null,
+    familiarised: state.familiarised,
+    trial: trialFor(state, method, context),
+    nextTrial:
+      state.phase === 'running' && state.trial === null && activeSeats(state).length > 0 ? nextTrial(state) : null,
+    course: courseOf(state),
+    seats: seatsFor(state, context.presence),
+    record: { entries: context.entries, sessionEntries: state.version },
+    demo: context.demo,
+  };
+}
