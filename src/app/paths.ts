@@ -1,0 +1,31 @@
+/** Every address of the signed-in application. The route table is built from the same functions. */
+export const paths = {
+  start: () => '/',
+  /** With a way back to where one was. */
+  signIn: (next?: string) => (next === undefined ? '/sign-in' : `/sign-in?${new URLSearchParams({ next })}`),
+  help: () => '/help',
+  kit: () => '/kit',
+
+  home: (organisationId: string) => organisation(organisationId),
+
+  cables: (organisationId: string) => `${organisation(organisationId)}/cables`,
+  newCable: (organisationId: string) => `${organisation(organisationId)}/cables/new`,
+  cable: (organisationId: string, id: string) => `${organisation(organisationId)}/cables/${id}`,
+  editCable: (organisationId: string, id: string) => `${organisation(organisationId)}/cables/${id}/edit`,
+
+  studies: (organisationId: string) => `${organisation(organisationId)}/studies`,
+  newStudy: (organisationId: string) => `${organisation(organisationId)}/studies/new`,
+  study: (organisationId: string, id: string) => `${organisation(organisationId)}/studies/${id}`,
+  editStudy: (organisationId: string, id: string) => `${organisation(organisationId)}/studies/${id}/edit`,
+  codes: (organisationId: string, studyId: string) => `${organisation(organisationId)}/studies/${studyId}/codes`,
+  labels: (organisationId: string, studyId: string) => `${organisation(organisationId)}/studies/${studyId}/labels`,
+  report: (organisationId: string, studyId: string) => `${organisation(organisationId)}/studies/${studyId}/report`,
+  reports: (organisationId: string) => `${organisation(organisationId)}/reports`,
+
+  sessions: (organisationId: string) => `${organisation(organisationId)}/sessions`,
+  planSession: (organisationId: string, studyId: string) =>
+    `${organisation(organisationId)}/studies/${studyId}/sessions/new`,
+  console: (organisationId: string, id: string) => `${organisation(organisationId)}/sessions/${id}/console`,
+};
+
+const organisation = (organisationId: string) => `/organisations/${organisationId}`;

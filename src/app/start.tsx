@@ -1,0 +1,23 @@
+import { QueryClientProvider } from '@tanstack/react-query';
+import { StrictMode } from 'react';
+import { createRoot } from 'react-dom/client';
+import { createBrowserRouter, RouterProvider } from 'react-router-dom';
+import { onSignedOut, queryClient } from '../lib/query-client.ts';
+import { paths } from './paths.ts';
+import { routes } from './routes.tsx';
+
+/** The signed-in application. */
+export function start(root: HTMLElement): void {
+  const router = createBrowserRouter(routes);
+  onSignedOut(() => {
+    const { pathname, search } = router.state.location;
+    if (pathname !== paths.signIn()) void router.navigate(paths.signIn(pathname + search));
+  });
+  createRoot(root).render(
+    <StrictMode>
+      <QueryClientProvider client={queryClient}>
+        <RouterProvider router={router} />
+      </QueryClientProvider>
+    </StrictMode>,
+  );
+}

@@ -1,0 +1,28 @@
+import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
+import type { QueryOf } from '#shared/contracts/endpoint.ts';
+import { type SessionDraft, sessionsApi } from '#shared/contracts/sessions.ts';
+import { call } from '../../lib/call.ts';
+
+export type SessionListQuery = QueryOf<typeof sessionsApi.list>;
+
+export const sessionQueries = {
+  all: () => ['sessions'] as const,
+  list: (organisationId: string, query: SessionListQuery) =>
+    queryOptions({
+      queryKey: [...sessionQueries.all(), 'list', organisationId, query],
+      queryFn: ({ signal }) => call(sessionsApi.list, { params: { organisationId }, query }, signal),
+    }),
+  detail: (organisationId: string, id: string) =>
+    queryOptions({
+      queryKey: [...sessionQueries.all(), 'detail', organisationId, id],
+      queryFn: ({ signal }) => call(sessionsApi.get, { params: { organisationId, id } }, signal),
+    }),
+};
+
+export function usePlanSession(organisationId: string, studyId: string) {
+  const client = useQueryClient();
+  return useMutation({
+    mutationFn: (body: SessionDraft) => call(sessionsApi.plan, { params: { organisationId, id: studyId }, body }),
+    onSuccess: () => client.invalidateQueries({ queryKey: sessionQueries.all() }),
+  });
+}
