@@ -1,14 +1,17 @@
 import { useSearchParams } from 'react-router-dom';
 import type { z } from 'zod';
 
+type ListContract<Shape extends z.core.$ZodShape> = { query?: z.ZodObject<Shape, z.core.$strict> };
+
 /**
  * What a list shows, read from the address. What is not understood there counts as not said, so that an old or
  * mistyped address still shows the list.
  */
 export function readListQuery<Shape extends z.core.$ZodShape>(
-  query: z.ZodObject<Shape, z.core.$strict>,
+  { query }: ListContract<Shape>,
   search: URLSearchParams,
 ): z.output<z.ZodObject<Shape, z.core.$strict>> {
+  if (query === undefined) throw new Error('this contract takes no query');
   const understood = Object.entries(query.shape).flatMap(([key, schema]) => {
     const said = search.get(key);
     return said !== null && (schema as z.ZodType).safeParse(said).success ? [[key, said]] : [];

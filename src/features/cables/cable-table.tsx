@@ -1,0 +1,42 @@
+import type { ReactNode } from 'react';
+import { Link } from 'react-router-dom';
+import type { CableRow } from '#shared/contracts/cables.ts';
+import { formatDate, formatLength } from '../../lib/format.ts';
+import { DataTable } from '../../ui/data-table.tsx';
+import type { Column } from '../../ui/table-column.ts';
+import { kindWords } from './cable-words.ts';
+
+type CableTableProps = {
+  rows: readonly CableRow[];
+  page: number;
+  pageCount: number;
+  onPage: (page: number) => void;
+  empty: ReactNode;
+  hrefOf: (id: string) => string;
+};
+
+export function CableTable({ hrefOf, ...table }: CableTableProps) {
+  return (
+    <DataTable caption="Cables, newest change first" columns={columnsFor(hrefOf)} rowKey={({ id }) => id} {...table} />
+  );
+}
+
+function columnsFor(hrefOf: (id: string) => string): Column<CableRow>[] {
+  return [
+    {
+      key: 'name',
+      header: 'Cable',
+      isRowHeader: true,
+      cell: ({ id, name, archived }) => (
+        <>
+          <Link to={hrefOf(id)}>{name}</Link>
+          {archived ? <span className="font-normal text-soft"> (archived)</span> : null}
+        </>
+      ),
+    },
+    { key: 'kind', header: 'Kind', cell: ({ kind }) => kindWords[kind] },
+    { key: 'length', header: 'Length', isFigure: true, cell: ({ lengthMm }) => formatLength(lengthMm) },
+    { key: 'specimens', header: 'Specimens', isFigure: true, cell: ({ specimenCount }) => specimenCount },
+    { key: 'updatedAt', header: 'Last change', cell: ({ updatedAt }) => formatDate(updatedAt) },
+  ];
+}

@@ -1,0 +1,51 @@
+import type { ReactNode } from 'react';
+import type { SessionRow } from '#shared/contracts/sessions.ts';
+import type { WhoAmI } from '#shared/contracts/sign-in.ts';
+import type { Member } from '#shared/contracts/users.ts';
+import type { HomePlaces } from './home-places.ts';
+import { type DemoActor, ThreeMinutePath } from './three-minute-path.tsx';
+
+export type DemoPerson = WhoAmI['demoPeople'][number];
+
+type DemoPathProps = {
+  people: readonly DemoPerson[];
+  members: readonly Member[];
+  /** Latest first; empty for whoever may not see them. */
+  sessions: readonly SessionRow[];
+  /** Who is signed in now. */
+  personId: string;
+  places: HomePlaces;
+  renderSignIn: (person: DemoPerson, goTo: string) => ReactNode;
+};
+
+/** Finds the people and the session that the path needs; without them there is no path. */
+export function DemoPath({ people, members, sessions, personId, places, renderSignIn }: DemoPathProps) {
+  const session = sessions.find(isOpen) ?? sessions[0] ?? null;
+
+  function actorWith(isFit: (member: Member) => boolean): DemoActor | null {
+    const member = members.find((candidate) => isFit(candidate) && people.some(({ name }) => name === candidate.name));
+    const person = people.find(({ name }) => name === member?.name);
+    if (member === undefined || person === undefined) return null;
+    return {
+      name: member.name,
+      isHere: member.id === personId,
+      signInButton: (goTo) => renderSignIn(person, goTo),
+    };
+  }
+
+  const proctor = actorWith(({ id, role }) => (session === null ? role === 'proctor' : id === session.proctorId));
+  const manager = actorWith(({ role }) => role === 'manager');
+  if (proctor === null || manager === null) return null;
+  return (
+    <ThreeMinutePath
+      session={session === null ? null : { ...session, isOpen: isOpen(session) }}
+      proctor={proctor}
+      manager={manager}
+      places={places}
+    />
+  );
+}
+
+function isOpen({ phase }: SessionRow): boolean {
+  return phase !== 'finished' && phase !== 'abandoned';
+}

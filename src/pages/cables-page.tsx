@@ -1,0 +1,74 @@
+import { useSuspenseQuery } from '@tanstack/react-query';
+import { type LoaderFunctionArgs, redirect, useSearchParams } from 'react-router-dom';
+import { cablesApi } from '#shared/contracts/cables.ts';
+import { paths } from '../app/paths.ts';
+import { CableFilter } from '../features/cables/cable-filter.tsx';
+import { CableTable } from '../features/cables/cable-table.tsx';
+import { cableQueries } from '../features/cables/cables.queries.ts';
+import { usePresence } from '../features/sign-in/membership.ts';
+import { lastPageAddress, readListQuery, useListAddress } from '../lib/list-address.ts';
+import { queryClient } from '../lib/query-client.ts';
+import { param } from '../lib/route-params.ts';
+import { EmptyState } from '../ui/empty-state.tsx';
+import { LinkButton } from '../ui/link-button.tsx';
+import { PageHeader } from '../ui/page-header.tsx';
+
+const queryIn = (search: URLSearchParams) => readListQuery(cablesApi.list, search);
+
+export async function loader({ params, request }: LoaderFunctionArgs) {
+  const url = new URL(request.url);
+  const list = cableQueries.list(param(params, 'organisationId'), queryIn(url.searchParams));
+  const beyond = lastPageAddress(url, await queryClient.ensureQueryData(list));
+  return beyond === null ? null : redirect(beyond);
+}
+
+export function Component() {
+  const { organisationId } = usePresence().membership;
+  const [search] = useSearchParams();
+  const change = useListAddress();
+  const query = queryIn(search);
+  const { data: cables } = useSuspenseQuery(cableQueries.list(organisationId, query));
+  const hasNone = cables.total === 0 && query.q === '';
+
+  return (
+    <>
+      <PageHeader
+        title="Cables"
+        lede="Designs, and the physical pieces of them that are sleeved and listened to."
+        actions={
+          <LinkButton variant="primary" to={paths.newCable(organisationId)}>
+            Add a cable
+          </LinkButton>
+        }
+      />
+      {hasNone && query.archived === 'no' ? null : <CableFilter query={query} onChange={change} />}
+      <CableTable
+        rows={cables.rows}
+        page={cables.page}
+        pageCount={cables.pages}
+        onPage={(page) => change({ page })}
+        hrefOf={(id) => paths.cable(organisationId, id)}
+        empty={hasNone ? <FirstCable addTo={paths.newCable(organisationId)} /> : <NoneFound words={query.q} />}
+      />
+    </>
+  );
+}
+
+function FirstCable({ addTo }: { addTo: string }) {
+  return (
+    <EmptyState
+      title="Your cables will be listed here"
+      action={<LinkButton to={addTo}>Add the first cable</LinkButton>}
+    >
+      A study compares two of them. Add both, each with at least one specimen: the piece that is fitted.
+    </EmptyState>
+  );
+}
+
+function NoneFound({ words }: { words: string }) {
+  return (
+    <EmptyState title={`Nothing found for “${words}”`} action={<LinkButton to="?">Show all cables</LinkButton>}>
+      Names, descriptions and kinds were searched.
+    </EmptyState>
+  );
+}

@@ -1,0 +1,67 @@
+import type { ReactNode } from 'react';
+import { paths } from '../app/paths.ts';
+import { LinkButton } from '../ui/link-button.tsx';
+import { PageHeader } from '../ui/page-header.tsx';
+
+export function Component() {
+  return (
+    <div className="max-w-3xl">
+      <PageHeader
+        title="How Fairlead works"
+        lede="Whether people can hear a cable, found out blind, with an answer that anybody can check."
+      />
+      <div className="flex flex-col gap-10">
+        <Section title="A study, step by step">
+          <ol className="list-decimal space-y-2 pl-6">
+            <li>The manager adds two cables, each with a specimen: the piece that will be fitted.</li>
+            <li>The manager plans the study and seals its protocol. From then on nothing in it changes.</li>
+            <li>The code holder puts a sleeve with a three-digit blind code on every specimen.</li>
+            <li>The manager plans sessions; listeners join the proctor’s session with their phones.</li>
+            <li>The proctor fits the code that the screen names. Nobody sees a score, not even a count.</li>
+            <li>The manager closes the study. The secrets are opened and the registered analysis runs once.</li>
+          </ol>
+        </Section>
+        <Section title="Who does what">
+          <dl className="space-y-3">
+            <Term word="Product manager">plans, seals, follows progress, closes and reads the report.</Term>
+            <Term word="Proctor">prepares the room and runs the session, knowing codes but no cables.</Term>
+            <Term word="Code holder">is named in a study; alone knows which code is on which cable until closing.</Term>
+            <Term word="Reviewer">checks a result without having to trust whoever publishes it.</Term>
+            <Term word="Listener">needs no account: a session code or a personal link.</Term>
+          </dl>
+        </Section>
+        <Section title="Words you will meet">
+          <dl className="space-y-3">
+            <Term word="Neutral title">names a study without telling maker, model, material or price.</Term>
+            <Term word="Blind code">three figures on a specimen’s sleeve, drawn for one study.</Term>
+            <Term word="Trial">one question to every listener present; in ABX: was X the same as A or as B?</Term>
+            <Term word="Void">a trial set aside for a stated fault before it locks; a spare takes its place.</Term>
+            <Term word="Record">
+              every step of a study, each entry bound to the one before, so that no one can be changed unseen.
+            </Term>
+          </dl>
+        </Section>
+        <div>
+          <LinkButton to={paths.start()}>Go to the start</LinkButton>
+        </div>
+      </div>
+    </div>
+  );
+}
+
+function Section({ title, children }: { title: string; children: ReactNode }) {
+  return (
+    <section className="border-t-2 border-ink pt-4">
+      <h2 className="pb-3 text-xl">{title}</h2>
+      {children}
+    </section>
+  );
+}
+
+function Term({ word, children }: { word: string; children: ReactNode }) {
+  return (
+    <div>
+      <dt className="inline font-semibold">{word}</dt> <dd className="inline">{children}</dd>
+    </div>
+  );
+}
