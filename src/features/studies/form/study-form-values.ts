@@ -1,0 +1,28 @@
+import type { z } from 'zod';
+import type { studyDraft } from '#shared/contracts/studies.ts';
+
+/** What the form holds while it is being typed; numbers that are not there yet are NaN. */
+export type StudyFormValues = z.input<typeof studyDraft>;
+
+/** Sixteen trials of 30 s changes and 20 s excerpts take some three quarters of an hour: one block without a break. */
+export const newStudyValues: StudyFormValues = {
+  title: '',
+  question: '',
+  method: 'abx',
+  cables: [
+    { cableId: '', specimenIds: [] },
+    { cableId: '', specimenIds: [] },
+  ],
+  sessions: 1,
+  listenersPerSession: 1,
+  trials: 16,
+  spares: 2,
+  alphaPerMille: 50,
+  programme: [{ title: '', start: '0:00', lengthS: 20 }],
+  rig: 'loudspeaker',
+  chain: '',
+  changeS: 30,
+  answerS: 15,
+  confidence: true,
+  codeHolderId: '',
+};

@@ -1,0 +1,29 @@
+/** Words that say nothing about which cable it is, however often they are part of a name. */
+const silent = new Set([
+  ...['cable', 'cables', 'lead', 'leads', 'wire', 'wires', 'pair', 'set', 'the', 'and', 'for', 'with', 'from', 'our'],
+  ...['new', 'old', 'one', 'two', 'test', 'study', 'listening', 'blind', 'comparison', 'prototype', 'reference'],
+  ...['loudspeaker', 'speaker', 'interconnect', 'headphone', 'sample', 'type', 'version', 'model'],
+]);
+
+/**
+ * The words of the chosen cables' names that a title gives away, in the order of the title. A warning, not a verdict:
+ * whether a title is neutral is for a person to say.
+ *
+ * @example tellingWords('Silver against copper', ['Harbour silver 3 m', 'Harbour copper 3 m']) // ['silver', 'copper']
+ */
+export function tellingWords(title: string, cableNames: readonly string[]): string[] {
+  const told = new Set(cableNames.flatMap(wordsOf).filter((word) => !silent.has(word) && isTelling(word)));
+  return [...new Set(wordsOf(title).filter((word) => told.has(word)))];
+}
+
+function wordsOf(text: string): string[] {
+  return text
+    .toLocaleLowerCase('en')
+    .split(/[^\p{L}\p{N}]+/u)
+    .filter((word) => word !== '');
+}
+
+/** "3 m" tells nothing; "12a" and "silver" do. */
+function isTelling(word: string): boolean {
+  return word.length >= 3 || (word.length === 2 && /\p{N}/u.test(word));
+}

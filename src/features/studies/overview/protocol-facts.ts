@@ -1,0 +1,41 @@
+import type { Study, StudyDraft } from '#shared/contracts/studies.ts';
+import { methodOf } from '#shared/methods/methods.ts';
+import { formatCount } from '../../../lib/format.ts';
+import { percentOfPerMille, rigWords } from '../study-words.ts';
+
+type ProtocolFact = { label: string; value: string };
+
+/** Everything that a seal fixes, in the order in which a reader asks for it. */
+export function protocolFacts({ draft, cableNames, codeHolder }: Study): ProtocolFact[] {
+  const words = (label: string, value: string): ProtocolFact => ({ label, value });
+  return [
+    words('Question', draft.question),
+    words('Method', methodOf(draft.method).name),
+    ...draft.cables.map(({ specimenIds }, index) =>
+      words(
+        index === 0 ? 'One cable' : 'The other cable',
+        `${cableNames[index === 0 ? 0 : 1]}, ${formatCount(specimenIds.length, 'specimen')}`,
+      ),
+    ),
+    words('Listening', listeningWords(draft)),
+    words('Spares', `${draft.spares} in each session`),
+    words('Test', `one-sided, exact, at ${percentOfPerMille(draft.alphaPerMille)}`),
+    words('Missing answers', 'count as wrong'),
+    words('Stopping', 'fixed number of trials'),
+    words('Exclusions', 'none'),
+    ...draft.programme.map(({ title, start, lengthS }, index) =>
+      words(`Excerpt ${index + 1}`, `${title}, ${lengthS} s${start === '' ? '' : ` from ${start}`}`),
+    ),
+    words('Rig', rigWords[draft.rig]),
+    words('Chain', draft.chain),
+    words('Every change', `${draft.changeS} s, real or not`),
+    words('Answer window', `${draft.answerS} s`),
+    words('Confidence', draft.confidence ? 'asked with every answer' : 'not asked'),
+    words('Code holder', codeHolder),
+  ];
+}
+
+function listeningWords({ sessions, trials, listenersPerSession }: StudyDraft): string {
+  const each = `${formatCount(sessions, 'session')} of ${formatCount(trials, 'trial')}`;
+  return `${each}, ${formatCount(listenersPerSession, 'listener')} ${listenersPerSession === 1 ? 'at a time' : 'together'}`;
+}

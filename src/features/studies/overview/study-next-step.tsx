@@ -1,0 +1,134 @@
+import type { Study } from '#shared/contracts/studies.ts';
+import { formatCount } from '../../../lib/format.ts';
+import { LinkButton } from '../../../ui/link-button.tsx';
+import { CloseStudy } from './close-study.tsx';
+import { DiscardDraft } from './discard-draft.tsx';
+import { NextStep } from './next-step.tsx';
+import { RecordDeviation } from './record-deviation.tsx';
+import { SealStudy } from './seal-study.tsx';
+
+export type StudyPlaces = { edit: string; codes: string; planSession: string; report: string };
+
+type StudyNextStepProps = {
+  organisationId: string;
+  study: Study;
+  places: StudyPlaces;
+  onDiscarded: () => void;
+  onClosed: () => void;
+};
+
+/** The one thing to do now, by the study's state. */
+export function StudyNextStep(props: StudyNextStepProps) {
+  switch (props.study.state) {
+    case 'draft':
+      return <DraftStep {...props} />;
+    case 'sealed':
+      return <SealedStep {...props} />;
+    case 'collecting':
+      return <CollectingStep {...props} />;
+    case 'closed':
+      return <ClosedStep {...props} />;
+  }
+}
+
+function DraftStep({ organisationId, study, places, onDiscarded }: StudyNextStepProps) {
+  return (
+    <NextStep
+      title="Read it once more, then seal it"
+      actions={
+        <>
+          <SealStudy organisationId={organisationId} study={study} />
+          <LinkButton to={places.edit}>Edit the draft</LinkButton>
+        </>
+      }
+      stop={
+        <DiscardDraft
+          organisationId={organisationId}
+          studyId={study.id}
+          title={study.title}
+          onDiscarded={onDiscarded}
+        />
+      }
+    >
+      <p>Sealing fixes everything below before a single answer is given. That is what makes the result count.</p>
+    </NextStep>
+  );
+}
+
+const codesWords: Record<Study['codes'], { title: string; say: (holder: string) => string }> = {
+  none: {
+    title: 'The specimens are to be coded',
+    say: (holder) => `${holder} draws the blind codes next. Sessions can be planned meanwhile; none can open before.`,
+  },
+  drawn: {
+    title: 'The specimens are being sleeved',
+    say: (holder) =>
+      `${holder} has drawn the codes and labels the specimens. No session can open before that is confirmed.`,
+  },
+  confirmed: {
+    title: 'Plan a session',
+    say: (holder) => `${holder} has confirmed that every specimen is sleeved and coded at both ends.`,
+  },
+};
+
+function SealedStep({ organisationId, study, places, onClosed }: StudyNextStepProps) {
+  const { title, say } = codesWords[study.codes];
+  return (
+    <NextStep
+      title={title}
+      actions={
+        <>
+          <LinkButton variant="primary" to={places.planSession}>
+            Plan a session
+          </LinkButton>
+          <LinkButton to={places.codes}>See where the codes stand</LinkButton>
+          <RecordDeviation organisationId={organisationId} studyId={study.id} />
+        </>
+      }
+      stop={
+        study.closing.allowed ? <CloseStudy organisationId={organisationId} study={study} onClosed={onClosed} /> : null
+      }
+    >
+      <p>{say(study.codeHolder)}</p>
+    </NextStep>
+  );
+}
+
+function CollectingStep({ organisationId, study, places, onClosed }: StudyNextStepProps) {
+  const { closing, progress } = study;
+  const close = <CloseStudy organisationId={organisationId} study={study} onClosed={onClosed} />;
+  const isReady = closing.allowed && closing.complete;
+  const trialsLeft = progress.trialsRegistered - progress.trialsLocked;
+  return (
+    <NextStep
+      title={isReady ? 'All is in: close the study' : `${formatCount(trialsLeft, 'trial')} to go`}
+      actions={
+        <>
+          {isReady ? close : null}
+          <LinkButton variant={isReady ? 'plain' : 'primary'} to={places.planSession}>
+            Plan a session
+          </LinkButton>
+          <RecordDeviation organisationId={organisationId} studyId={study.id} />
+        </>
+      }
+      stop={closing.allowed && !closing.complete ? close : null}
+    >
+      <p>{closing.why}</p>
+    </NextStep>
+  );
+}
+
+function ClosedStep({ places }: StudyNextStepProps) {
+  return (
+    <NextStep
+      title="The result is in"
+      actions={
+        <LinkButton variant="primary" to={places.report}>
+          Read the report
+        </LinkButton>
+      }
+    >
+      <p>Both secrets are open, the registered analysis has run, and its result is on the record.</p>
+    </NextStep>
+  );
+}

@@ -1,0 +1,31 @@
+import type { Study } from '#shared/contracts/studies.ts';
+import { Progress } from '../../../ui/progress.tsx';
+
+/** How far the study has come: sessions and locked trials, never answers. */
+export function StudyProgress({ progress }: Pick<Study, 'progress'>) {
+  const { sessionsPlanned, sessionsOpened, sessionsEnded, trialsLocked, trialsRegistered } = progress;
+  return (
+    <section aria-label="Progress" className="flex flex-col gap-5">
+      <div className="grid gap-x-12 gap-y-5 md:grid-cols-2">
+        <Progress
+          label="Trials locked"
+          value={trialsLocked}
+          max={trialsRegistered}
+          valueText={`${trialsLocked} of ${trialsRegistered}`}
+        />
+        <Progress
+          label="Sessions ended"
+          value={sessionsEnded}
+          max={Math.max(sessionsPlanned, sessionsEnded)}
+          valueText={`${sessionsEnded} of ${sessionsPlanned}`}
+        />
+      </div>
+      <p className="text-soft">
+        {sessionsOpened === 0
+          ? 'No session has opened yet.'
+          : `${sessionsOpened} opened so far; every opened session counts, abandoned ones too.`}{' '}
+        Scores stay hidden from everybody until the study is closed.
+      </p>
+    </section>
+  );
+}

@@ -1,0 +1,61 @@
+import type { ReactNode } from 'react';
+import { Link } from 'react-router-dom';
+import type { StudyRow } from '#shared/contracts/studies.ts';
+import { methodOf } from '#shared/methods/methods.ts';
+import { formatDate } from '../../../lib/format.ts';
+import { DataTable } from '../../../ui/data-table.tsx';
+import { StatusWord } from '../../../ui/status-word.tsx';
+import type { Column } from '../../../ui/table-column.ts';
+import { stateWords } from '../study-words.ts';
+
+type StudyTableProps = {
+  rows: readonly StudyRow[];
+  page: number;
+  pageCount: number;
+  onPage: (page: number) => void;
+  empty: ReactNode;
+  hrefOf: (id: string) => string;
+};
+
+export function StudyTable({ rows, page, pageCount, onPage, empty, hrefOf }: StudyTableProps) {
+  return (
+    <DataTable
+      caption="Studies, newest change first"
+      columns={columnsFor(hrefOf)}
+      rows={rows}
+      rowKey={({ id }) => id}
+      page={page}
+      pageCount={pageCount}
+      onPage={onPage}
+      empty={empty}
+    />
+  );
+}
+
+function columnsFor(hrefOf: (id: string) => string): Column<StudyRow>[] {
+  return [
+    {
+      key: 'title',
+      header: 'Neutral title',
+      isRowHeader: true,
+      cell: ({ id, title }) => <Link to={hrefOf(id)}>{title}</Link>,
+    },
+    {
+      key: 'state',
+      header: 'State',
+      cell: ({ state }) => <StatusWord tone={stateWords[state].tone}>{stateWords[state].word}</StatusWord>,
+    },
+    { key: 'method', header: 'Method', cell: ({ method }) => methodOf(method).name },
+    { key: 'sessions', header: 'Sessions ended', isFigure: true, cell: sessionsOf },
+    { key: 'trials', header: 'Trials locked', isFigure: true, cell: trialsOf },
+    { key: 'updatedAt', header: 'Last change', cell: ({ updatedAt }) => formatDate(updatedAt) },
+  ];
+}
+
+function sessionsOf({ progress }: StudyRow): string {
+  return `${progress.sessionsEnded}\u00a0of\u00a0${progress.sessionsPlanned}`;
+}
+
+function trialsOf({ progress }: StudyRow): string {
+  return `${progress.trialsLocked}\u00a0of\u00a0${progress.trialsRegistered}`;
+}

@@ -1,0 +1,37 @@
+import { formatDuration } from '../../../lib/format.ts';
+import { Figure, FigureRow } from '../../../ui/figure.tsx';
+import { breaks, type Plan } from './plan-of.ts';
+import { percent } from './plan-words.ts';
+
+/** What the plan asks of people and of the clock, and the level that it really has. */
+export function PlanFigures({ plan }: { plan: Plan }) {
+  const isSeveral = plan.sessions > 1;
+  return (
+    <div className="flex flex-col gap-4">
+      <FigureRow>
+        <Figure value={plan.sessions} label={isSeveral ? 'sessions' : 'session'} />
+        <Figure value={plan.fittings} label="changes of cable" />
+        <Figure value={clockWords(plan.minutes)} label={`${isSeveral ? 'in all, ' : ''}with changes and breaks`} />
+        {isSeveral ? <Figure value={clockWords(plan.minutesPerSession)} label="each session" /> : null}
+      </FigureRow>
+      <p className="text-soft">
+        {levelWords(plan)} {breakWords(plan)} Familiarisation is counted in.
+      </p>
+    </div>
+  );
+}
+
+const clockWords = (minutes: number) => formatDuration(minutes * 60_000);
+
+/** A group's test has no fixed limit, so its true level cannot be told beforehand either; it holds the one asked for. */
+function levelWords({ listeners, alpha, figures }: Plan): string {
+  const guessing = `Guessing is right ${percent(figures.chance)} of the time.`;
+  if (listeners > 1 || figures.critical === null) return `${guessing} The level asked for is ${percent(alpha)}.`;
+  return `${guessing} The level asked for is ${percent(alpha)}; counts being whole, the test really has ${percent(figures.critical.attainedSize)}.`;
+}
+
+function breakWords({ trialsPerSession }: Plan): string {
+  const { everyTrials, lengthMs } = breaks;
+  if (trialsPerSession <= everyTrials) return 'One block, without a break.';
+  return `A break of ${formatDuration(lengthMs)} after every ${everyTrials} trials.`;
+}

@@ -1,0 +1,71 @@
+import type { ReactNode } from 'react';
+import { formatProbability } from '#shared/findings/format-probability.ts';
+import { formatCount, formatNumber } from '../../../lib/format.ts';
+import type { Plan } from './plan-of.ts';
+import { percent } from './plan-words.ts';
+
+/** The plan in one or two sentences. */
+export function PlanHeadline({ plan }: { plan: Plan }) {
+  if (!plan.figures.canReachAlpha) return <OutOfReach plan={plan} />;
+  return plan.listeners === 1 ? <OwnDraws plan={plan} /> : <SharedDraws plan={plan} />;
+}
+
+function OwnDraws({ plan }: { plan: Plan }) {
+  const { critical } = plan.figures;
+  if (critical === null) return <OutOfReach plan={plan} />;
+  return (
+    <Headline>
+      Plan <Planned>{plan.trials} trials</Planned>. <Planned>{critical.count} right</Planned> are needed. If nobody
+      hears a difference, <Planned>{percent(critical.attainedSize)}</Planned> of such tests find one.
+    </Headline>
+  );
+}
+
+function SharedDraws({ plan }: { plan: Plan }) {
+  const { leastAttainableP } = plan.figures;
+  return (
+    <div className="flex flex-col gap-3">
+      <Headline>
+        Plan <Planned>{plan.trials} trials</Planned>, each heard by {plan.listeners}. No fixed number of right answers
+        can be promised.
+      </Headline>
+      <p>
+        All listeners of a session hear the same presentations: there is one coin per trial, not one per answer. How
+        many right answers are needed depends on how alike the listeners answer; the registered test works it out at
+        closing, exactly.
+      </p>
+      <p>
+        The least p that {formatCount(plan.trials, 'trial')} can give is{' '}
+        <span className="font-mono">{formatProbability(leastAttainableP)}</span> (1 in {drawsOf(plan.trials)}), however
+        many listen. <strong>Plan trials, not heads.</strong>
+      </p>
+    </div>
+  );
+}
+
+/** How many draws there are: written out as long as somebody reads it. */
+function drawsOf(trials: number): ReactNode {
+  if (trials <= 30) return formatNumber(2 ** trials);
+  return (
+    <>
+      2<sup>{trials}</sup>
+    </>
+  );
+}
+
+function OutOfReach({ plan }: { plan: Plan }) {
+  return (
+    <Headline>
+      {formatCount(plan.trials, 'trial')} can never find a difference at {percent(plan.alpha)}: even with every answer
+      right, guessing does as well in {percent(plan.figures.leastAttainableP)} of tests. Plan more trials.
+    </Headline>
+  );
+}
+
+function Headline({ children }: { children: ReactNode }) {
+  return <h2 className="text-[clamp(1.5rem,1.2rem+1.3vw,2rem)] leading-[1.25] text-pretty">{children}</h2>;
+}
+
+function Planned({ children }: { children: ReactNode }) {
+  return <span className="whitespace-nowrap text-copper">{children}</span>;
+}

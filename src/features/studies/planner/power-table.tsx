@@ -1,0 +1,43 @@
+import type { AbxPlanFigures } from '#shared/statistics/abx-plan.ts';
+import { percent, powerPercent } from './plan-words.ts';
+
+/** Three rates of right answers side by side, each with the chance that the test finds it. */
+export function PowerTable({ power }: Pick<AbxPlanFigures, 'power'>) {
+  return (
+    <table className="w-full border-collapse">
+      <caption className="sr-only">Chance of finding a difference, by how often a listener is right</caption>
+      <thead>
+        <tr className="border-b border-rule">
+          <td />
+          {power.map(({ correctRate }) => (
+            <th key={correctRate} scope="col" className="py-1.5 pl-3 text-right font-normal whitespace-nowrap">
+              {percent(correctRate)} right
+            </th>
+          ))}
+        </tr>
+      </thead>
+      <tbody>
+        <tr className="border-b border-rule">
+          <th scope="row" className="py-1.5 text-left font-normal whitespace-nowrap text-soft">
+            found in
+          </th>
+          {power.map(({ correctRate, power: found }) => (
+            <td key={correctRate} className="py-1.5 pl-3 text-right font-mono font-semibold whitespace-nowrap">
+              {powerPercent(found)}
+            </td>
+          ))}
+        </tr>
+        <tr className="border-b border-rule">
+          <th scope="row" className="py-1.5 text-left font-normal whitespace-nowrap text-soft">
+            missed in
+          </th>
+          {power.map(({ correctRate, power: found }) => (
+            <td key={correctRate} className="py-1.5 pl-3 text-right font-mono whitespace-nowrap">
+              {powerPercent(1 - found)}
+            </td>
+          ))}
+        </tr>
+      </tbody>
+    </table>
+  );
+}
