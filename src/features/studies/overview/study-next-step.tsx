@@ -71,7 +71,7 @@ const codesWords: Record<Study['codes'], { title: string; say: (holder: string) 
   },
 };
 
-function SealedStep({ organisationId, study, places, onClosed }: StudyNextStepProps) {
+function SealedStep({ organisationId, study, places }: StudyNextStepProps) {
   const { title, say } = codesWords[study.codes];
   return (
     <NextStep
@@ -85,9 +85,6 @@ function SealedStep({ organisationId, study, places, onClosed }: StudyNextStepPr
           <RecordDeviation organisationId={organisationId} studyId={study.id} />
         </>
       }
-      stop={
-        study.closing.allowed ? <CloseStudy organisationId={organisationId} study={study} onClosed={onClosed} /> : null
-      }
     >
       <p>{say(study.codeHolder)}</p>
     </NextStep>
@@ -98,10 +95,9 @@ function CollectingStep({ organisationId, study, places, onClosed }: StudyNextSt
   const { closing, progress } = study;
   const close = <CloseStudy organisationId={organisationId} study={study} onClosed={onClosed} />;
   const isReady = closing.allowed && closing.complete;
-  const trialsLeft = progress.trialsRegistered - progress.trialsLocked;
   return (
     <NextStep
-      title={isReady ? 'All is in: close the study' : `${formatCount(trialsLeft, 'trial')} to go`}
+      title={titleOf(isReady, progress)}
       actions={
         <>
           {isReady ? close : null}
@@ -116,6 +112,12 @@ function CollectingStep({ organisationId, study, places, onClosed }: StudyNextSt
       <p>{closing.why}</p>
     </NextStep>
   );
+}
+
+function titleOf(isReady: boolean, { trialsRegistered, trialsLocked }: Study['progress']): string {
+  if (isReady) return 'All is in: close the study';
+  const trialsLeft = trialsRegistered - trialsLocked;
+  return trialsLeft > 0 ? `${formatCount(trialsLeft, 'trial')} to go` : 'All registered trials are locked';
 }
 
 function ClosedStep({ places }: StudyNextStepProps) {

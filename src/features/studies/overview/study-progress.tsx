@@ -2,8 +2,8 @@ import type { Study } from '#shared/contracts/studies.ts';
 import { Progress } from '../../../ui/progress.tsx';
 
 /** How far the study has come: sessions and locked trials, never answers. */
-export function StudyProgress({ progress }: Pick<Study, 'progress'>) {
-  const { sessionsPlanned, sessionsOpened, sessionsEnded, trialsLocked, trialsRegistered } = progress;
+export function StudyProgress({ draft, progress }: Pick<Study, 'draft' | 'progress'>) {
+  const { sessionsOpened, sessionsEnded, trialsLocked, trialsRegistered } = progress;
   return (
     <section aria-label="Progress" className="flex flex-col gap-5">
       <div className="grid gap-x-12 gap-y-5 md:grid-cols-2">
@@ -16,8 +16,8 @@ export function StudyProgress({ progress }: Pick<Study, 'progress'>) {
         <Progress
           label="Sessions ended"
           value={sessionsEnded}
-          max={Math.max(sessionsPlanned, sessionsEnded)}
-          valueText={`${sessionsEnded} of ${sessionsPlanned}`}
+          max={Math.max(draft.sessions, sessionsEnded)}
+          valueText={`${sessionsEnded} of ${draft.sessions}`}
         />
       </div>
       <p className="text-soft">

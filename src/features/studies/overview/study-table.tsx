@@ -46,14 +46,17 @@ function columnsFor(hrefOf: (id: string) => string): Column<StudyRow>[] {
       cell: ({ state }) => <StatusWord tone={stateWords[state].tone}>{stateWords[state].word}</StatusWord>,
     },
     { key: 'method', header: 'Method', cell: ({ method }) => methodOf(method).name },
-    { key: 'sessions', header: 'Sessions ended', isFigure: true, cell: sessionsOf },
+    { key: 'sessions', header: 'Sessions', cell: sessionsOf },
     { key: 'trials', header: 'Trials locked', isFigure: true, cell: trialsOf },
     { key: 'updatedAt', header: 'Last change', cell: ({ updatedAt }) => formatDate(updatedAt) },
   ];
 }
 
 function sessionsOf({ progress }: StudyRow): string {
-  return `${progress.sessionsEnded}\u00a0of\u00a0${progress.sessionsPlanned}`;
+  const { sessionsPlanned, sessionsEnded } = progress;
+  if (sessionsPlanned === 0) return 'none yet';
+  const toCome = sessionsPlanned - sessionsEnded;
+  return toCome === 0 ? `${sessionsEnded} ended` : `${sessionsEnded} ended, ${toCome} to come`;
 }
 
 function trialsOf({ progress }: StudyRow): string {
