@@ -1,0 +1,17 @@
+import type { ObjectLiteral, SelectQueryBuilder } from 'typeorm';
+import { pageSize } from '#shared/contracts/paging.ts';
+
+/** What a person typed, for `like`: its own wildcards count as plain characters. */
+export const likePattern = (words: string) => `%${words.replace(/[\\%_]/g, '\\$&')}%`;
+
+/** One page of a query's rows, with the total; a page beyond the last is the last. */
+export async function pageOfRows<T extends ObjectLiteral>(query: SelectQueryBuilder<T>, wanted: number) {
+  const total = await query.getCount();
+  const pages = Math.max(1, Math.ceil(total / pageSize));
+  const page = Math.min(wanted, pages);
+  const rows = await query
+    .skip((page - 1) * pageSize)
+    .take(pageSize)
+    .getMany();
+  return { rows, total, page, pages };
+}

@@ -1,0 +1,37 @@
+import type { Logger } from 'pino';
+import type { DataSource } from 'typeorm';
+import type { Config } from './config.ts';
+
+/** What randomness is for. Production draws all of it from the operating system; tests give each purpose a source of its own. */
+export type RandomPurpose =
+  | 'id'
+  | 'entry-nonce'
+  | 'protocol-salt'
+  | 'code-key'
+  | 'code-key-salt'
+  | 'draw-secret'
+  | 'draw-salt'
+  | 'seat-token'
+  | 'session-code'
+  | 'password-salt';
+
+export type Random = {
+  bytes(purpose: RandomPurpose, count: number): Buffer;
+  id(): string;
+};
+
+/** Milliseconds since 1970, and a call at a later time. Tests give one that they move by hand. */
+export type Clock = {
+  now(): number;
+  /** Calls back once at or after `atMs`; returns what cancels it. */
+  at(atMs: number, callback: () => void): () => void;
+};
+
+/** Everything that the application is given from outside. */
+export type Deps = {
+  readonly config: Config;
+  readonly db: DataSource;
+  readonly clock: Clock;
+  readonly random: Random;
+  readonly log: Logger;
+};

@@ -1,0 +1,30 @@
+import { CodeKey } from './blind/code-key.entity.ts';
+import { DrawSecret } from './blind/draw-secret.entity.ts';
+import { Cable } from './features/cables/cable.entity.ts';
+import { Specimen } from './features/cables/specimen.entity.ts';
+import { Membership } from './features/organisations/membership.entity.ts';
+import { Organisation } from './features/organisations/organisation.entity.ts';
+import { Answer } from './features/sessions/answer.entity.ts';
+import { Seat } from './features/sessions/seat.entity.ts';
+import { Session } from './features/sessions/session.entity.ts';
+import { WebSession } from './features/sign-in/web-session.entity.ts';
+import { Study } from './features/studies/study.entity.ts';
+import { User } from './features/users/user.entity.ts';
+import { RecordEntry } from './ledger/entry.entity.ts';
+
+/** Every table. */
+export const entities = [
+  Organisation,
+  User,
+  Membership,
+  WebSession,
+  Cable,
+  Specimen,
+  Study,
+  RecordEntry,
+  Session,
+  Seat,
+  Answer,
+  CodeKey,
+  DrawSecret,
+];

@@ -1,0 +1,64 @@
+import { In } from 'typeorm';
+import type { CableDraft, SpecimenDraft } from '#shared/contracts/cables.ts';
+import { likePattern, pageOfRows } from '../../db/paging.ts';
+import type { Tx } from '../../db/transaction.ts';
+import { Cable } from './cable.entity.ts';
+import { Specimen } from './specimen.entity.ts';
+
+export function listCables(tx: Tx, organisationId: string, query: { q: string; page: number; archived: boolean }) {
+  const rows = tx
+    .createQueryBuilder(Cable, 'cable')
+    .leftJoinAndSelect('cable.specimens', 'specimen', 'specimen.archived = false')
+    .where('cable.organisationId = :organisationId', { organisationId })
+    .orderBy('cable.updatedAt', 'DESC')
+    .addOrderBy('cable.id');
+  if (!query.archived) rows.andWhere('cable.archived = false');
+  if (query.q !== '')
+    rows.andWhere('(cable.name like :q or cable.description like :q or cable.kind like :q)', {
+      q: likePattern(query.q),
+    });
+  return pageOfRows(rows, query.page);
+}
+
+const inOrder = { specimens: { position: 'ASC' } } as const;
+
+export function cablesInUse(tx: Tx, organisationId: string): Promise<Cable[]> {
+  return tx.find(Cable, {
+    where: { organisationId, archived: false },
+    relations: { specimens: true },
+    order: { name: 'ASC', ...inOrder },
+  });
+}
+
+export function cablesById(tx: Tx, organisationId: string, ids: readonly string[]): Promise<Cable[]> {
+  return tx.find(Cable, {
+    where: { organisationId, id: In([...ids]) },
+    relations: { specimens: true },
+    order: inOrder,
+  });
+}
+
+export function findCable(tx: Tx, organisationId: string, id: string): Promise<Cable | null> {
+  return tx.findOne(Cable, { where: { organisationId, id }, relations: { specimens: true }, order: inOrder });
+}
+
+export async function insertCable(tx: Tx, cable: { id: string; organisationId: string; draft: CableDraft; now: Date }) {
+  const { id, organisationId, draft, now } = cable;
+  await tx.insert(Cable, { id, organisationId, ...draft, archived: false, updatedAt: now });
+}
+
+export async function updateCable(tx: Tx, id: string, change: Partial<CableDraft & { archived: boolean }>, now: Date) {
+  await tx.update(Cable, { id }, { ...change, updatedAt: now });
+}
+
+export async function insertSpecimen(
+  tx: Tx,
+  specimen: { id: string; cableId: string; draft: SpecimenDraft; position: number },
+) {
+  const { id, cableId, draft, position } = specimen;
+  await tx.insert(Specimen, { id, cableId, ...draft, archived: false, position });
+}
+
+export async function updateSpecimen(tx: Tx, id: string, change: Partial<SpecimenDraft & { archived: boolean }>) {
+  await tx.update(Specimen, { id }, change);
+}

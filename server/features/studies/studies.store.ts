@@ -1,0 +1,74 @@
+import type { StudyDraft, StudyState } from '#shared/contracts/studies.ts';
+import { likePattern, pageOfRows } from '../../db/paging.ts';
+import type { Tx } from '../../db/transaction.ts';
+import { Study } from './study.entity.ts';
+
+export function listStudies(
+  tx: Tx,
+  organisationId: string,
+  query: { q: string; page: number; state: StudyState | 'any' },
+) {
+  const rows = tx
+    .createQueryBuilder(Study, 'study')
+    .where('study.organisationId = :organisationId', { organisationId })
+    .orderBy('study.updatedAt', 'DESC')
+    .addOrderBy('study.id');
+  if (query.state !== 'any') rows.andWhere('study.state = :state', { state: query.state });
+  if (query.q !== '') rows.andWhere('study.title like :q', { q: likePattern(query.q) });
+  return pageOfRows(rows, query.page);
+}
+
+export function findStudy(tx: Tx, organisationId: string, id: string): Promise<Study | null> {
+  return tx.findOneBy(Study, { organisationId, id });
+}
+
+/** The study with its row locked, so that state changes come one after the other. */
+export function lockStudy(tx: Tx, organisationId: string, id: string): Promise<Study | null> {
+  return tx.findOne(Study, { where: { organisationId, id }, lock: { mode: 'pessimistic_write' } });
+}
+
+export function studyById(tx: Tx, id: string): Promise<Study> {
+  return tx.findOneByOrFail(Study, { id });
+}
+
+export function studiesOf(tx: Tx, organisationId: string): Promise<Study[]> {
+  return tx.find(Study, { where: { organisationId }, order: { updatedAt: 'DESC' } });
+}
+
+const columnsOf = (draft: StudyDraft) => ({ title: draft.title, codeHolderId: draft.codeHolderId, draft });
+
+export async function insertStudy(
+  tx: Tx,
+  study: { id: string; organisationId: string; managerId: string; draft: StudyDraft; now: Date },
+) {
+  const { id, organisationId, managerId, draft, now } = study;
+  await tx.insert(Study, {
+    id,
+    organisationId,
+    managerId,
+    ...columnsOf(draft),
+    state: 'draft',
+    protocol: null,
+    headSequence: 0,
+    headDigest: null,
+    codesState: 'none',
+    updatedAt: now,
+  });
+}
+
+export async function updateDraft(tx: Tx, id: string, draft: StudyDraft, now: Date) {
+  await tx.update(Study, { id }, { ...columnsOf(draft), updatedAt: now });
+}
+
+export async function updateStudy(
+  tx: Tx,
+  id: string,
+  change: Partial<Pick<Study, 'state' | 'protocol' | 'codesState'>>,
+  now: Date,
+) {
+  await tx.update(Study, { id }, { ...change, updatedAt: now });
+}
+
+export async function deleteDraft(tx: Tx, id: string) {
+  await tx.delete(Study, { id, state: 'draft' });
+}

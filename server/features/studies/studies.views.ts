@@ -1,0 +1,81 @@
+import type { Study as StudyReply, StudyRow } from '#shared/contracts/studies.ts';
+import type { Entry } from '#shared/ledger/chain.ts';
+import { studyEvents } from '#shared/session/study-events.ts';
+import type { Session } from '../sessions/session.entity.ts';
+import type { Study } from './study.entity.ts';
+
+/** How far a study has come: sessions and locked trials, never scores. */
+export function progressOf(study: Study, sessions: readonly Session[]): StudyRow['progress'] {
+  const opened = sessions.filter(
+    (session) => session.code !== null || session.listeners > 0 || session.phase === 'finished',
+  );
+  return {
+    sessionsPlanned: sessions.length,
+    sessionsOpened: opened.length,
+    sessionsEnded: sessions.filter(({ phase }) => phase === 'finished' || phase === 'abandoned').length,
+    trialsLocked: sessions.reduce((sum, session) => sum + session.trialsLocked, 0),
+    trialsRegistered: study.draft.sessions * study.draft.trials,
+  };
+}
+
+const shape = ({ id, title, draft, state, updatedAt }: Study) => ({
+  id,
+  title,
+  method: draft.method,
+  state,
+  updatedAt: updatedAt.toISOString(),
+});
+
+export function studyRowView(study: Study, sessions: readonly Session[]): StudyRow {
+  return { ...shape(study), progress: progressOf(study, sessions) };
+}
+
+/** Whether the study can be closed now, and what stands in the way. */
+export function closingOf(study: Study, sessions: readonly Session[]): StudyReply['closing'] {
+  const { trialsLocked, trialsRegistered, sessionsOpened } = progressOf(study, sessions);
+  const complete = trialsLocked >= trialsRegistered;
+  const isOpen = sessions.some(({ phase }) => phase === 'seating' || phase === 'revealing' || phase === 'running');
+  if (study.state !== 'collecting' || sessionsOpened === 0)
+    return { allowed: false, complete, why: 'No session has been opened yet.' };
+  if (isOpen) return { allowed: false, complete, why: 'A session is still open. Finish or abandon it first.' };
+  const why = complete
+    ? `All ${trialsRegistered} registered trials are locked.`
+    : `${trialsLocked} of ${trialsRegistered} registered trials are locked. Closing now ends the study early.`;
+  return { allowed: true, complete, why };
+}
+
+export type StudyContext = {
+  readonly sessions: readonly Session[];
+  readonly names: ReadonlyMap<string, string>;
+  readonly cableNames: readonly [string, string];
+  readonly sealing: Entry | null;
+  readonly deviations: readonly Entry[];
+};
+
+/** A study as its manager sees it before closing. */
+export function studyView(study: Study, context: StudyContext): StudyReply {
+  const { sessions, names, cableNames, sealing, deviations } = context;
+  const nameOf = (id: string) => names.get(id) ?? 'unknown';
+  const sealed = sealing === null ? null : studyEvents['protocol-sealed'].parse(sealing.payload);
+  return {
+    ...shape(study),
+    draft: study.draft,
+    cableNames: [cableNames[0], cableNames[1]],
+    manager: nameOf(study.managerId),
+    codeHolder: nameOf(study.codeHolderId),
+    sealed:
+      sealed === null || sealing === null
+        ? null
+        : {
+            version: sealed.protocolVersion,
+            digest: sealed.digest,
+            sealedAt: sealing.at,
+            sealedBy: nameOf(sealed.sealedBy),
+          },
+    codes: study.codesState,
+    progress: progressOf(study, sessions),
+    record: { entries: study.headSequence, head: study.headDigest },
+    closing: closingOf(study, sessions),
+    deviations: deviations.map(({ at, payload }) => ({ at, text: String(payload.text) })),
+  };
+}

@@ -1,0 +1,115 @@
+import { createHash } from 'node:crypto';
+import type { Request, RequestHandler } from 'express';
+import session, { type SessionData } from 'express-session';
+import { type DataSource, LessThan } from 'typeorm';
+import type { Config } from '../config.ts';
+import { WebSession } from '../features/sign-in/web-session.entity.ts';
+
+// The one file that reads or writes the web framework's session. People sign in; only rooms have sessions.
+
+declare module 'express-session' {
+  interface SessionData {
+    userId?: string;
+  }
+}
+
+const lifetimeMs = 14 * 24 * 60 * 60 * 1000;
+const digestOf = (sid: string) => createHash('sha256').update(sid).digest('hex');
+
+/** express-session's store over a TypeORM entity. */
+class DatabaseStore extends session.Store {
+  readonly #db: DataSource;
+  readonly #now: () => number;
+
+  constructor(db: DataSource, now: () => number) {
+    super();
+    this.#db = db;
+    this.#now = now;
+  }
+
+  override get(sid: string, callback: (error: unknown, data?: SessionData | null) => void): void {
+    this.#read(sid).then(
+      (data) => callback(null, data),
+      (error) => callback(error),
+    );
+  }
+
+  override set(sid: string, data: SessionData, callback?: (error?: unknown) => void): void {
+    const expires = data.cookie.expires ?? new Date(this.#now() + lifetimeMs);
+    this.#db.manager
+      .upsert(
+        WebSession,
+        {
+          idDigest: digestOf(sid),
+          userId: data.userId ?? null,
+          data: JSON.stringify(data),
+          expiresAt: new Date(expires),
+        },
+        ['idDigest'],
+      )
+      .then(
+        () => callback?.(),
+        (error) => callback?.(error),
+      );
+  }
+
+  override destroy(sid: string, callback?: (error?: unknown) => void): void {
+    this.#db.manager.delete(WebSession, { idDigest: digestOf(sid) }).then(
+      () => callback?.(),
+      (error) => callback?.(error),
+    );
+  }
+
+  override touch(sid: string, data: SessionData, callback?: (error?: unknown) => void): void {
+    this.set(sid, data, callback);
+  }
+
+  async #read(sid: string): Promise<SessionData | null> {
+    const row = await this.#db.manager.findOneBy(WebSession, { idDigest: digestOf(sid) });
+    if (row === null || row.expiresAt.getTime() <= this.#now()) return null;
+    return JSON.parse(row.data) as SessionData;
+  }
+}
+
+/** Keeps people signed in: a cookie that scripts cannot read, and a row in MariaDB. */
+export function signInMiddleware(db: DataSource, config: Config, now: () => number): RequestHandler {
+  return session({
+    name: 'fairlead',
+    secret: config.sessionSecret,
+    store: new DatabaseStore(db, now),
+    resave: false,
+    saveUninitialized: false,
+    rolling: false,
+    proxy: config.trustProxy,
+    cookie: { httpOnly: true, sameSite: 'lax', secure: 'auto', path: '/', maxAge: lifetimeMs },
+  });
+}
+
+export function signedInUserId(request: { session?: Partial<SessionData> }): string | null {
+  return request.session?.userId ?? null;
+}
+
+const asPromise = (run: (done: (error?: unknown) => void) => void) =>
+  new Promise<void>((resolve, reject) => run((error) => (error ? reject(error) : resolve())));
+
+/** Signs a person in under a fresh session id. */
+export async function signIn(request: Request, userId: string): Promise<void> {
+  await asPromise((done) => request.session.regenerate(done));
+  request.session.userId = userId;
+  await asPromise((done) => request.session.save(done));
+}
+
+export async function signOut(request: Request): Promise<void> {
+  await asPromise((done) => request.session.destroy(done));
+}
+
+/** Ends every signed-in browser of a person, this one included. */
+export async function signOutEverywhere(db: DataSource, request: Request, userId: string): Promise<void> {
+  await signOut(request);
+  await db.manager.delete(WebSession, { userId });
+}
+
+/** Removes what has expired. */
+export async function forgetExpired(db: DataSource, now: number): Promise<void> {
+  await db.manager.delete(WebSession, { expiresAt: LessThan(new Date(now)) });
+}

@@ -1,0 +1,28 @@
+import { binomialLogProbability } from '../statistics/binomial-log-probability.ts';
+import { evenChance } from '../statistics/chance.ts';
+import { sharedPresentationTest } from '../statistics/shared-presentation-test.ts';
+import { type AbxTrial, hasOwnDraws, sharedTrialsOf } from './abx-trials.ts';
+
+/**
+ * Where the number of right answers falls if nobody hears a difference: the distribution behind the registered p, for
+ * a chart.
+ *
+ * @param trials all locked trials
+ * @returns every possible count with its chance; the chances add up to 1
+ * @throws RangeError when a trial is outside its domain
+ * @example for one listener and two trials: 0, 1 and 2 with chances 1/4, 1/2 and 1/4 ; R: dbinom(0:2, 2, 0.5)
+ * @see analyseAbx for which test applies
+ */
+export function abxNullDistribution(trials: readonly AbxTrial[]): { count: number; chance: number }[] {
+  if (hasOwnDraws(trials)) {
+    const answers = trials.filter((trial) => trial.answers.length === 1).length;
+    return Array.from({ length: answers + 1 }, (_, count) => ({
+      count,
+      chance: Math.exp(binomialLogProbability(count, answers, evenChance)),
+    }));
+  }
+  return sharedPresentationTest(sharedTrialsOf(trials), 'greater').nullDistribution.map(({ matching, probability }) => ({
+    count: matching,
+    chance: probability,
+  }));
+}

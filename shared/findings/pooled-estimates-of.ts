@@ -1,0 +1,62 @@
+import { aboveGuessingRate, intervalAboveGuessing } from '../statistics/above-guessing.ts';
+import { evenChance } from '../statistics/chance.ts';
+import { clopperPearsonLower, clopperPearsonUpper, type Interval } from '../statistics/clopper-pearson.ts';
+import { type AbxModel, abxDPrime, abxDPrimeInterval } from '../statistics/d-prime.ts';
+import { limitsWithMissing, recordInterval } from './interval-with-missing.ts';
+import { recordDecimal, recordLimit } from './record-decimal.ts';
+import type { PooledEstimates } from './registered-result.ts';
+
+/** What the registered test leaves open is stated with this confidence, whatever its level. */
+const upperConfidence = 0.95;
+
+/**
+ * Rate of right answers, share above guessing and d′ of a study in which every answer has a draw of its own.
+ *
+ * Missing answers stand against whatever a limit could be used to claim: wrong for lower limits, right for upper ones.
+ * The one-sided lower limit has confidence 1 - alpha, so that it exceeds guessing exactly when the test reaches its level.
+ *
+ * @param counts right answers, missing ones and all that were due, at least 1
+ * @param alpha  the registered level as a decimal
+ * @returns the estimates in the form that goes on the record
+ * @throws RangeError when a count is outside its domain
+ * @example 12 of 16, alpha "0.05": rate 0.75, above guessing 0.5 (one-sided lower limit 0.0312), d′ 2.02 and 1.79
+ * @see aboveGuessing, clopperPearson and abxDPrime for the sources
+ */
+export function pooledEstimatesOf(
+  { matching, missing, answers }: { matching: number; missing: number; answers: number },
+  alpha: string,
+): PooledEstimates {
+  const rate = matching / answers;
+  const limits = limitsWithMissing(matching, missing, answers);
+  const rawRate = aboveGuessingRate(rate, evenChance);
+  const { raw, clipped } = intervalAboveGuessing(limits, evenChance);
+  const lowerConfidence = 1 - Number(alpha);
+  return {
+    correctRate: recordDecimal(rate),
+    interval: recordInterval(limits),
+    aboveGuessing: {
+      rawRate: recordDecimal(rawRate),
+      rate: recordDecimal(Math.max(0, rawRate)),
+      rawInterval: recordInterval(raw),
+      interval: recordInterval(clipped),
+      oneSidedLower: oneSided(lowerConfidence, clopperPearsonLower(matching, answers, lowerConfidence)),
+      oneSidedUpper: oneSided(upperConfidence, clopperPearsonUpper(matching + missing, answers, upperConfidence)),
+    },
+    dPrime: {
+      differencing: sensitivity(rate, limits, 'differencing'),
+      independent: sensitivity(rate, limits, 'independent'),
+    },
+  };
+}
+
+function oneSided(confidence: number, correctRate: number): { confidence: string; limit: string } {
+  return {
+    confidence: recordDecimal(confidence),
+    limit: recordDecimal(Math.max(0, aboveGuessingRate(correctRate, evenChance))),
+  };
+}
+
+function sensitivity(rate: number, limits: Interval, model: AbxModel): PooledEstimates['dPrime'][AbxModel] {
+  const { lower, upper } = abxDPrimeInterval(limits, model);
+  return { dPrime: recordLimit(abxDPrime(rate, model)), lower: recordLimit(lower), upper: recordLimit(upper) };
+}

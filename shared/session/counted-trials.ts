@@ -1,0 +1,51 @@
+import type { Method, ScoredTrial } from '../methods/method.ts';
+import type { CodeKeyRow } from './commitments.ts';
+import { drawOf, truthOf } from './fitting.ts';
+import type { RevealedKey } from './revealed-key.ts';
+import type { SessionState } from './state.ts';
+
+/** The revealed contributions of a session, in the order in which the record lists them. */
+export function contributionsOf(state: SessionState): string[] {
+  return state.seats.flatMap((seat) => (seat.contributes && seat.revealed !== null ? [seat.revealed] : []));
+}
+
+/** The draw of a session that ran: a pure function of what closing revealed and of the record. */
+export function revealedDraw(state: SessionState, method: Method, secret: string, rows: readonly CodeKeyRow[]) {
+  const trials = state.plan.trials + state.plan.spares;
+  return drawOf({ secret, contributions: contributionsOf(state), method, trials, rows });
+}
+
+export type HeldChoice = {
+  readonly session: string;
+  readonly trial: number;
+  readonly seat: string;
+  readonly choice: string;
+};
+
+/**
+ * Every locked trial of every session, abandoned ones included, with its truth and its answers: what the registered
+ * analysis reads. A listener who was seated at a trial and gave no answer stands in it with null.
+ */
+export function countedTrials(
+  method: Method,
+  states: readonly SessionState[],
+  key: RevealedKey,
+  held: readonly HeldChoice[],
+): ScoredTrial[] {
+  const choices = new Map(held.map(({ session, trial, seat, choice }) => [`${session} ${trial} ${seat}`, choice]));
+  return states.flatMap((state) => {
+    const secret = key.draws.find((draw) => draw.session === state.session)?.secret;
+    const locked = state.ended.filter((trial) => trial.outcome === 'locked');
+    if (secret === undefined || locked.length === 0) return [];
+    const draw = revealedDraw(state, method, secret, key.codeKey.rows);
+    return locked.map(({ trial, seats }) => ({
+      session: state.session,
+      trial,
+      truth: truthOf(draw, trial),
+      answers: seats.map((listener) => ({
+        listener,
+        choice: choices.get(`${state.sessionId} ${trial} ${listener}`) ?? null,
+      })),
+    }));
+  });
+}
