@@ -27,7 +27,8 @@ export function problemHandler(log: Logger): ErrorRequestHandler {
   return (error, request, response, next) => {
     if (response.headersSent) return next(error);
     const problem = problemFrom(error, log);
-    const instance = typeof request.id === 'string' ? `urn:uuid:${request.id}` : undefined;
+    const { id } = request as { id?: unknown };
+    const instance = typeof id === 'string' ? `urn:uuid:${id}` : undefined;
     response.status(problem.status).type('application/problem+json').json(problem.toBody(instance));
   };
 }

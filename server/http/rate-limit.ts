@@ -22,7 +22,8 @@ export function limit({ attempts, windowMs, by, failuresOnly = false }: Limit): 
     skipSuccessfulRequests: failuresOnly,
     keyGenerator: (request) => by?.(request) ?? ipKeyGenerator(request.ip ?? ''),
     handler: (request, _response, next) => {
-      const resetAt = request.rateLimit?.resetTime?.getTime() ?? Date.now() + windowMs;
+      const resetAt =
+        (request as { rateLimit?: { resetTime?: Date } }).rateLimit?.resetTime?.getTime() ?? Date.now() + windowMs;
       const minutes = Math.max(1, Math.ceil((resetAt - Date.now()) / 60_000));
       next(
         new Problem(

@@ -8,6 +8,8 @@ export const health = z.strictObject({
   migrations: z.strictObject({ applied: z.int(), pending: z.int() }),
 });
 
+export type Health = z.output<typeof health>;
+
 export const healthApi = {
   get: endpoint({
     method: 'GET',

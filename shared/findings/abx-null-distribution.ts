@@ -21,8 +21,10 @@ export function abxNullDistribution(trials: readonly AbxTrial[]): { count: numbe
       chance: Math.exp(binomialLogProbability(count, answers, evenChance)),
     }));
   }
-  return sharedPresentationTest(sharedTrialsOf(trials), 'greater').nullDistribution.map(({ matching, probability }) => ({
-    count: matching,
-    chance: probability,
-  }));
+  return sharedPresentationTest(sharedTrialsOf(trials), 'greater').nullDistribution.map(
+    ({ matching, probability }) => ({
+      count: matching,
+      chance: probability,
+    }),
+  );
 }

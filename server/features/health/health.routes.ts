@@ -1,9 +1,14 @@
+import { readFileSync } from 'node:fs';
 import type { Router } from 'express';
-import { healthApi } from '#shared/contracts/health.ts';
-import packageJson from '../../../package.json' with { type: 'json' };
+import { z } from 'zod';
+import { type Health, healthApi } from '#shared/contracts/health.ts';
 import type { Deps } from '../../deps.ts';
 import type { Access } from '../../http/access.ts';
 import { mount } from '../../http/mount.ts';
+
+const { version } = z
+  .object({ version: z.string() })
+  .parse(JSON.parse(readFileSync(new URL('../../../package.json', import.meta.url), 'utf8')));
 
 async function migrationsOf({ db }: Deps): Promise<{ applied: number; pending: number }> {
   const applied: { count: string }[] = await db.query('select count(*) as count from migrations');
@@ -12,16 +17,16 @@ async function migrationsOf({ db }: Deps): Promise<{ applied: number; pending: n
 }
 
 export function healthRoutes(router: Router, access: Access, deps: Deps): void {
-  mount(router, access, healthApi.get, async ({ response }) => {
+  mount(router, access, healthApi.get, async ({ response }): Promise<Health> => {
     try {
       const migrations = await migrationsOf(deps);
-      return { status: 'ok', version: packageJson.version, database: 'up', migrations };
+      return { status: 'ok', version: version, database: 'up', migrations };
     } catch (error) {
       deps.log.error({ err: error }, 'the database does not answer');
       response.status(503);
       return {
         status: 'failing',
-        version: packageJson.version,
+        version: version,
         database: 'down',
         migrations: { applied: 0, pending: 0 },
       };

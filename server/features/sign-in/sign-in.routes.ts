@@ -8,6 +8,7 @@ import { signedInUserId, signIn, signOut, signOutEverywhere } from '../../http/s
 import { isFromThisMachine } from '../../http/this-machine.ts';
 import { checkCredentials, whoIs } from './sign-in.service.ts';
 
+const done = { ok: true } as const;
 const quarterHourMs = 15 * 60_000;
 const emailOf = (body: unknown) =>
   typeof body === 'object' && body !== null && 'email' in body ? String(body.email).toLowerCase().slice(0, 200) : '';
@@ -38,10 +39,10 @@ export function signInRoutes(router: Router, access: Access, deps: Deps): void {
   );
   mount(router, access, signInApi.signOut, async ({ request }) => {
     await signOut(request);
-    return { ok: true };
+    return done;
   });
   mount(router, access, signInApi.signOutEverywhere, async ({ request }, who) => {
     await signOutEverywhere(deps.db, request, who.userId);
-    return { ok: true };
+    return done;
   });
 }

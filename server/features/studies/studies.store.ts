@@ -27,6 +27,11 @@ export function lockStudy(tx: Tx, organisationId: string, id: string): Promise<S
   return tx.findOne(Study, { where: { organisationId, id }, lock: { mode: 'pessimistic_write' } });
 }
 
+/** Locks a study's row, so that numbers and labels are given out one after the other. */
+export async function lockStudyRow(tx: Tx, id: string): Promise<void> {
+  await tx.findOneOrFail(Study, { where: { id }, lock: { mode: 'pessimistic_write' } });
+}
+
 export function studyById(tx: Tx, id: string): Promise<Study> {
   return tx.findOneByOrFail(Study, { id });
 }

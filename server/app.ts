@@ -1,0 +1,101 @@
+import { randomUUID } from 'node:crypto';
+import { existsSync } from 'node:fs';
+import { join, resolve } from 'node:path';
+import express, { type Express, Router } from 'express';
+import helmet from 'helmet';
+import { pinoHttp } from 'pino-http';
+import type { Deps } from './deps.ts';
+import { cablesRoutes } from './features/cables/cables.routes.ts';
+import { codesRoutes } from './features/codes/codes.routes.ts';
+import { healthRoutes } from './features/health/health.routes.ts';
+import { reportsRoutes } from './features/reports/reports.routes.ts';
+import { sessionsRoutes } from './features/sessions/sessions.routes.ts';
+import { signInRoutes } from './features/sign-in/sign-in.routes.ts';
+import { studiesRoutes } from './features/studies/studies.routes.ts';
+import { usersRoutes } from './features/users/users.routes.ts';
+import type { Access } from './http/access.ts';
+import type { Mounted } from './http/mount.ts';
+import { nothingHere, problemHandler } from './http/problem-handler.ts';
+import { signInMiddleware } from './http/sign-in.ts';
+import { Sittings } from './live/sittings.ts';
+
+const oneYearMs = 365 * 24 * 60 * 60 * 1000;
+
+function contentSecurity() {
+  return helmet({
+    // Fairlead is also served over plain http on a local network, where these two would break it.
+    strictTransportSecurity: false,
+    contentSecurityPolicy: {
+      directives: {
+        defaultSrc: ["'self'"],
+        imgSrc: ["'self'", 'data:'],
+        styleSrc: ["'self'", "'unsafe-inline'"],
+        connectSrc: ["'self'", 'ws:', 'wss:'],
+        frameAncestors: ["'none'"],
+        upgradeInsecureRequests: null,
+      },
+    },
+    referrerPolicy: { policy: 'no-referrer' },
+  });
+}
+
+/** Serves the built client: its files under their digests for a year, its page for every other address. */
+function serveClient(app: Express, clientDir: string): void {
+  const root = resolve(clientDir);
+  const page = join(root, 'index.html');
+  app.use('/assets', express.static(join(root, 'assets'), { immutable: true, maxAge: oneYearMs, fallthrough: false }));
+  app.use(express.static(root, { index: false }));
+  app.get('/{*any}', (_request, response, next) => {
+    if (!existsSync(page)) return next();
+    response.set('cache-control', 'no-cache').sendFile(page);
+  });
+}
+
+/** Wires the application from what it is given; opens no port and reads no environment. */
+export function createApp(deps: Deps) {
+  const { config, db, log, clock } = deps;
+  const app = express();
+  app.disable('x-powered-by');
+  app.set('trust proxy', config.trustProxy ? 1 : false);
+  app.set('query parser', 'simple');
+  app.use(contentSecurity());
+  app.use(
+    pinoHttp({
+      logger: log,
+      genReqId: () => randomUUID(),
+      serializers: {
+        req: ({ id, method, url }) => ({ id, method, path: String(url).split('?')[0] }),
+        res: ({ statusCode }) => ({ statusCode }),
+      },
+      customLogLevel: (_request, response, error) =>
+        error !== undefined || response.statusCode >= 500 ? 'error' : 'debug',
+    }),
+  );
+
+  const mounted: Mounted[] = [];
+  const access: Access = { db, log, strictReplies: config.strictReplies, mounted };
+  const signedIn = signInMiddleware(db, config, clock.now);
+  const sittings = new Sittings(deps);
+
+  const api = Router();
+  api.use((_request, response, next) => {
+    response.set('cache-control', 'no-store');
+    next();
+  });
+  api.use(express.json({ limit: '256kb' }));
+  api.use(signedIn);
+  healthRoutes(api, access, deps);
+  signInRoutes(api, access, deps);
+  usersRoutes(api, access, deps);
+  cablesRoutes(api, access, deps);
+  studiesRoutes(api, access, deps);
+  codesRoutes(api, access, deps);
+  sessionsRoutes(api, access, deps, sittings);
+  reportsRoutes(api, access, deps);
+  api.use(nothingHere);
+  app.use('/api', api);
+  serveClient(app, config.clientDir);
+  app.use(nothingHere);
+  app.use(problemHandler(log));
+  return { app, mounted, sittings, signedIn };
+}

@@ -1,0 +1,91 @@
+import { z } from 'zod';
+
+const port = z.coerce.number<string>().int().min(1).max(65_535);
+const onOff = z.enum(['on', 'off']);
+
+const environment = z.object({
+  PORT: port.default(4180),
+  HOST: z.string().min(1).default('127.0.0.1'),
+  PUBLIC_URL: z.url({ protocol: /^https?$/ }).optional(),
+  DATABASE_URL: z.url({ protocol: /^(mysql|mariadb)$/ }).optional(),
+  DATABASE_HOST: z.string().min(1).default('127.0.0.1'),
+  DATABASE_PORT: port.default(4181),
+  DATABASE_SOCKET: z.string().min(1).optional(),
+  DATABASE_USER: z.string().min(1).default('fairlead'),
+  DATABASE_PASSWORD: z.string().default(''),
+  DATABASE_NAME: z.string().min(1).default('fairlead'),
+  SESSION_SECRET: z.string().min(32, 'needs at least 32 characters'),
+  FAIRLEAD_DEMO: onOff.default('on'),
+  TRUST_PROXY: onOff.default('off'),
+  CLIENT_DIR: z.string().min(1).default('dist/client'),
+  NODE_ENV: z.string().default('development'),
+  LOG_LEVEL: z.enum(['fatal', 'error', 'warn', 'info', 'debug', 'silent']).default('info'),
+});
+
+export type Config = Readonly<{
+  port: number;
+  host: string;
+  publicUrl: string;
+  database: Readonly<{
+    host: string;
+    port: number;
+    socketPath?: string;
+    user: string;
+    password: string;
+    name: string;
+  }>;
+  sessionSecret: string;
+  demo: boolean;
+  trustProxy: boolean;
+  clientDir: string;
+  logLevel: string;
+  /** Outside production a reply that breaks its contract is an error; in production the unknown field is left out. */
+  strictReplies: boolean;
+}>;
+
+function databaseOf(values: z.output<typeof environment>): Config['database'] {
+  if (values.DATABASE_URL !== undefined) {
+    const url = new URL(values.DATABASE_URL);
+    return {
+      host: url.hostname,
+      port: url.port === '' ? 3306 : Number(url.port),
+      user: decodeURIComponent(url.username),
+      password: decodeURIComponent(url.password),
+      name: url.pathname.slice(1),
+    };
+  }
+  return {
+    host: values.DATABASE_HOST,
+    port: values.DATABASE_PORT,
+    ...(values.DATABASE_SOCKET === undefined ? {} : { socketPath: values.DATABASE_SOCKET }),
+    user: values.DATABASE_USER,
+    password: values.DATABASE_PASSWORD,
+    name: values.DATABASE_NAME,
+  };
+}
+
+/**
+ * Reads the environment, once. Called by main.ts alone; everything else is handed the result.
+ *
+ * @throws Error that names every fault, one a line
+ */
+export function readConfig(env: Readonly<Record<string, string | undefined>>): Config {
+  const parsed = environment.safeParse(env);
+  if (!parsed.success) {
+    const faults = parsed.error.issues.map((issue) => `  ${issue.path.join('.')}: ${issue.message}`);
+    throw new Error(`The environment needs mending (see .env.example):\n${faults.join('\n')}`);
+  }
+  const values = parsed.data;
+  return Object.freeze({
+    port: values.PORT,
+    host: values.HOST,
+    publicUrl: (values.PUBLIC_URL ?? `http://${values.HOST}:${values.PORT}`).replace(/\/+$/, ''),
+    database: Object.freeze(databaseOf(values)),
+    sessionSecret: values.SESSION_SECRET,
+    demo: values.FAIRLEAD_DEMO === 'on',
+    trustProxy: values.TRUST_PROXY === 'on',
+    clientDir: values.CLIENT_DIR,
+    logLevel: values.LOG_LEVEL,
+    strictReplies: values.NODE_ENV !== 'production',
+  });
+}

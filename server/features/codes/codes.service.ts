@@ -1,0 +1,124 @@
+import type { CodeSheet, CodesStatus } from '#shared/contracts/codes.ts';
+import { Problem } from '#shared/problem.ts';
+import { studyEvents } from '#shared/session/study-events.ts';
+import { commitCodeKey, openForHolder, type SpecimenToCode } from '../../blind/index.ts';
+import { type Tx, withTransaction } from '../../db/transaction.ts';
+import type { Deps } from '../../deps.ts';
+import { append, readKinds } from '../../ledger/ledger.ts';
+import { qrSvg } from '../../qr/qr-svg.ts';
+import { lockedStudy, protocolOf, studyOrProblem } from '../studies/studies.service.ts';
+import { updateStudy } from '../studies/studies.store.ts';
+import type { Study } from '../studies/study.entity.ts';
+import { namesOf } from '../users/users.store.ts';
+
+type Where = { organisationId: string; id: string };
+type Asker = { userId: string; role: string | null };
+
+/** Scans carry a prefix, so that a scanner's typing is told from a person's. */
+const scanPrefix = 'FL:';
+
+/** A study shows its codes' state to its managers and its code holder; to anyone else it does not exist. */
+function requireInterest(study: Study, who: Asker): void {
+  const mayKnow = study.codeHolderId === who.userId || who.role === 'owner' || who.role === 'manager';
+  if (!mayKnow) throw new Problem('not-found', 'There is no such study.');
+}
+
+function requireHolder(study: Study, who: Asker): void {
+  requireInterest(study, who);
+  if (study.codeHolderId !== who.userId)
+    throw new Problem('not-allowed', 'Only the code holder of this study does this.');
+}
+
+function specimensOf(study: Study): SpecimenToCode[] {
+  const [first, second] = protocolOf(study).cables;
+  const rows = (cable: 0 | 1) =>
+    (cable === 0 ? first : second).specimens.map(({ id, serial }) => ({ specimen: id, serial, cable }));
+  return [...rows(0), ...rows(1)];
+}
+
+async function statusOf(tx: Tx, study: Study, who: Asker): Promise<CodesStatus> {
+  const entries = await readKinds(tx, study.id, ['code-key-committed', 'code-key-opened']);
+  const openings = entries
+    .filter((entry) => entry.kind === 'code-key-opened')
+    .map((entry) => ({ at: entry.at, ...studyEvents['code-key-opened'].parse(entry.payload) }));
+  const names = await namesOf(tx, [study.codeHolderId, ...openings.map(({ by }) => by)]);
+  const committed = entries.find((entry) => entry.kind === 'code-key-committed');
+  return {
+    studyId: study.id,
+    title: study.title,
+    state: study.codesState,
+    specimenCount: study.draft.cables.reduce((sum, { specimenIds }) => sum + specimenIds.length, 0),
+    codeHolder: names.get(study.codeHolderId) ?? 'unknown',
+    youHoldCodes: study.codeHolderId === who.userId,
+    commitment: committed === undefined ? null : String(committed.payload.commitment),
+    openings: openings.map(({ at, by, purpose }) => ({ at, by: names.get(by) ?? 'unknown', purpose })),
+  };
+}
+
+export function codesStatus({ db }: Deps, where: Where, who: Asker): Promise<CodesStatus> {
+  return withTransaction(db, async (tx) => {
+    const study = await studyOrProblem(tx, where);
+    requireInterest(study, who);
+    return statusOf(tx, study, who);
+  });
+}
+
+/** Draws the codes and puts the commitment to the code key on the record. */
+export function drawCodes({ db, random, clock }: Deps, where: Where, who: Asker): Promise<CodesStatus> {
+  return withTransaction(db, async (tx) => {
+    const study = await lockedStudy(tx, where);
+    requireHolder(study, who);
+    if (study.state === 'draft') throw new Problem('wrong-phase', 'Codes are drawn once the protocol is sealed.');
+    if (study.codesState !== 'none') throw new Problem('wrong-phase', 'The codes are drawn already.');
+    const specimens = specimensOf(study);
+    const commitment = await commitCodeKey(tx, random, study.id, specimens);
+    const payload = { commitment, specimens: specimens.length, by: who.userId };
+    await append(tx, random, study.id, [{ kind: 'code-key-committed', at: clock.now(), payload, session: null }]);
+    await updateStudy(tx, study.id, { codesState: 'drawn' }, new Date(clock.now()));
+    return statusOf(tx, await studyOrProblem(tx, where), who);
+  });
+}
+
+/** The code sheet for its holder; the opening goes on the record first. */
+export function openCodes(
+  { db, random, clock }: Deps,
+  where: Where,
+  who: Asker,
+  purpose: 'labels' | 'check',
+): Promise<CodeSheet> {
+  return withTransaction(db, async (tx) => {
+    const study = await lockedStudy(tx, where);
+    requireHolder(study, who);
+    if (study.codesState === 'none') throw new Problem('wrong-phase', 'No codes are drawn yet.');
+    const payload = { by: who.userId, purpose };
+    await append(tx, random, study.id, [{ kind: 'code-key-opened', at: clock.now(), payload, session: null }]);
+    const rows = await openForHolder(tx, study.id, who.userId);
+    const { cables } = protocolOf(study);
+    return {
+      title: study.title,
+      rows: await Promise.all(
+        rows.map(async ({ code, serial, cable }) => {
+          const scanText = `${scanPrefix}${code}`;
+          return { code, cable: cables[cable === 0 ? 0 : 1].name, serial, scanText, qrSvg: await qrSvg(scanText) };
+        }),
+      ),
+    };
+  });
+}
+
+/** The code holder's word that every specimen is sleeved and labelled at both ends. */
+export function confirmCodes({ db, random, clock }: Deps, where: Where, who: Asker): Promise<CodesStatus> {
+  return withTransaction(db, async (tx) => {
+    const study = await lockedStudy(tx, where);
+    requireHolder(study, who);
+    if (study.codesState !== 'drawn')
+      throw new Problem(
+        'wrong-phase',
+        study.codesState === 'none' ? 'Draw the codes first.' : 'The codes are confirmed already.',
+      );
+    const payload = { by: who.userId };
+    await append(tx, random, study.id, [{ kind: 'code-key-confirmed', at: clock.now(), payload, session: null }]);
+    await updateStudy(tx, study.id, { codesState: 'confirmed' }, new Date(clock.now()));
+    return statusOf(tx, await studyOrProblem(tx, where), who);
+  });
+}

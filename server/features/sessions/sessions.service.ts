@@ -1,0 +1,110 @@
+import type { SessionDraft, SessionRow } from '#shared/contracts/sessions.ts';
+import { Problem } from '#shared/problem.ts';
+import { sessionPlanOf } from '#shared/protocol/protocol.ts';
+import { type Tx, withTransaction } from '../../db/transaction.ts';
+import type { Deps } from '../../deps.ts';
+import { append } from '../../ledger/ledger.ts';
+import { lockedStudy, protocolOf } from '../studies/studies.service.ts';
+import { studyById, updateStudy } from '../studies/studies.store.ts';
+import { membersOf, namesOf } from '../users/users.store.ts';
+import type { Session } from './session.entity.ts';
+import * as store from './sessions.store.ts';
+
+async function rowsOf(tx: Tx, sessions: readonly Session[]): Promise<SessionRow[]> {
+  const names = await namesOf(
+    tx,
+    sessions.map(({ proctorId }) => proctorId),
+  );
+  const studies = new Map<string, Awaited<ReturnType<typeof studyById>>>();
+  for (const { studyId } of sessions) if (!studies.has(studyId)) studies.set(studyId, await studyById(tx, studyId));
+  return sessions.map(({ id, studyId, number, phase, room, plannedAt, proctorId, trialsLocked, listeners }) => ({
+    id,
+    studyId,
+    title: studies.get(studyId)?.title ?? '',
+    number,
+    phase,
+    room,
+    plannedAt: plannedAt.toISOString(),
+    proctor: names.get(proctorId) ?? 'unknown',
+    proctorId,
+    trials: studies.get(studyId)?.draft.trials ?? 0,
+    trialsLocked,
+    listeners,
+  }));
+}
+
+export function listSessions(
+  { db }: Deps,
+  who: { organisationId: string; userId: string; role: string | null },
+  query: { q: string; page: number; studyId?: string | undefined; phase: 'any' | 'open' | 'ended' },
+) {
+  return withTransaction(db, async (tx) => {
+    const own = who.role === 'proctor' ? { proctorId: who.userId } : {};
+    const { q, page, phase, studyId } = query;
+    const filter = { q, page, phase, ...own, ...(studyId === undefined ? {} : { studyId }) };
+    const found = await store.listSessions(tx, who.organisationId, filter);
+    return { ...found, rows: await rowsOf(tx, found.rows) };
+  });
+}
+
+export function getSession(
+  { db }: Deps,
+  who: { organisationId: string; userId: string; role: string | null },
+  id: string,
+): Promise<SessionRow> {
+  return withTransaction(db, async (tx) => {
+    const session = await store.findSession(tx, who.organisationId, id);
+    const isHidden = who.role === 'proctor' && session?.proctorId !== who.userId;
+    if (session === null || isHidden) throw new Problem('not-found', 'There is no such session.');
+    const [row] = await rowsOf(tx, [session]);
+    if (row === undefined) throw new Error('a session without a row');
+    return row;
+  });
+}
+
+/** Plans a session: it takes the study's next number and keeps it, whatever becomes of it. */
+export function planSession(
+  deps: Deps,
+  where: { organisationId: string; id: string },
+  draft: SessionDraft,
+): Promise<SessionRow> {
+  const { random, clock } = deps;
+  return withTransaction(deps.db, async (tx) => {
+    const study = await lockedStudy(tx, where);
+    if (study.state !== 'sealed' && study.state !== 'collecting')
+      throw new Problem('wrong-phase', 'Sessions are planned between sealing and closing.');
+    const members = await membersOf(tx, where.organisationId);
+    const proctor = members.find(({ userId }) => userId === draft.proctorId);
+    if (proctor === undefined || proctor.role === 'reviewer')
+      throw new Problem('invalid-input', 'Choose another proctor.', [
+        { pointer: '/proctorId', detail: 'Choose a member who may run sessions' },
+      ]);
+    const sessions = await store.sessionsOfStudy(tx, study.id);
+    const session: Session = {
+      id: random.id(),
+      organisationId: where.organisationId,
+      studyId: study.id,
+      number: sessions.length + 1,
+      proctorId: draft.proctorId,
+      room: draft.room,
+      plannedAt: new Date(draft.plannedAt),
+      phase: 'planned',
+      code: null,
+      trialsLocked: 0,
+      listeners: 0,
+    };
+    await store.insertSession(tx, session);
+    const { number } = session;
+    const payload = {
+      session: number,
+      sessionId: session.id,
+      proctor: draft.proctorId,
+      plan: sessionPlanOf(protocolOf(study)),
+    };
+    await append(tx, random, study.id, [{ kind: 'session-planned', at: clock.now(), payload, session: number }]);
+    await updateStudy(tx, study.id, {}, new Date(clock.now()));
+    const [row] = await rowsOf(tx, [session]);
+    if (row === undefined) throw new Error('a session without a row');
+    return row;
+  });
+}

@@ -1,0 +1,46 @@
+import { Problem } from '#shared/problem.ts';
+import type { Deps } from '../deps.ts';
+import { openSessions } from '../features/sessions/sessions.store.ts';
+import { Sitting } from './sitting.ts';
+
+/** The sessions that this server has in memory; the database stays the authority. */
+export class Sittings {
+  readonly #deps: Deps;
+  readonly #byId = new Map<string, Promise<Sitting | null>>();
+
+  constructor(deps: Deps) {
+    this.#deps = deps;
+  }
+
+  /** @throws Problem `not-found` */
+  async of(sessionId: string): Promise<Sitting> {
+    const known = await this.#byId.get(sessionId);
+    if (known?.isBroken === true) this.forget(sessionId, known);
+    if (!this.#byId.has(sessionId)) {
+      const loading = Sitting.load(this.#deps, sessionId);
+      this.#byId.set(sessionId, loading);
+      loading.catch(() => this.#byId.delete(sessionId));
+    }
+    const sitting = await this.#byId.get(sessionId);
+    if (sitting === null || sitting === undefined) {
+      this.#byId.delete(sessionId);
+      throw new Problem('not-found', 'There is no such session.');
+    }
+    return sitting;
+  }
+
+  forget(sessionId: string, sitting: Sitting): void {
+    sitting.stop();
+    this.#byId.delete(sessionId);
+  }
+
+  /** Takes up the sessions that were open when the server stopped, so that what falls due happens. */
+  async resumeAll(): Promise<void> {
+    for (const { id } of await openSessions(this.#deps.db.manager)) await (await this.of(id)).noteRestart();
+  }
+
+  async stop(): Promise<void> {
+    for (const sitting of await Promise.all(this.#byId.values())) sitting?.stop();
+    this.#byId.clear();
+  }
+}

@@ -1,0 +1,57 @@
+import 'reflect-metadata';
+import { pino } from 'pino';
+import { readConfig } from './config.ts';
+import { createDataSource } from './db/data-source.ts';
+import { demoPeople } from './demo/demo-people.ts';
+import { loadDemo } from './demo/load-demo.ts';
+import type { Deps } from './deps.ts';
+import { serve } from './serve.ts';
+import { systemClock, systemRandom } from './system.ts';
+
+const say = (line: string) => process.stdout.write(`${line}\n`);
+
+async function step<T>(name: string, work: () => Promise<T>): Promise<T> {
+  const begun = performance.now();
+  const result = await work();
+  say(`${name.padEnd(18)}${((performance.now() - begun) / 1000).toFixed(1).padStart(6)} s`);
+  return result;
+}
+
+async function main(): Promise<void> {
+  const config = readConfig(process.env);
+  const db = createDataSource(config.database);
+  const deps: Deps = { config, db, clock: systemClock, random: systemRandom, log: pino({ level: config.logLevel }) };
+  await step('migrations', async () => {
+    await db.initialize();
+    await db.runMigrations();
+  });
+  if (config.demo) await step('demo', () => loadDemo(deps));
+  const server = await step('server', () => serve(deps));
+
+  say(`\nFairlead is at ${config.publicUrl}`);
+  if (config.demo) {
+    say('\nSign in as:');
+    for (const { email, password, duty } of demoPeople) say(`  ${email.padEnd(28)}${password.padEnd(20)}${duty}`);
+  }
+  say('\nCtrl-C stops it.');
+
+  const stop = () => {
+    server
+      .stop()
+      .then(() => db.destroy())
+      .then(
+        () => process.exit(0),
+        (error) => {
+          deps.log.error({ err: error }, 'stopping failed');
+          process.exit(1);
+        },
+      );
+  };
+  process.once('SIGINT', stop);
+  process.once('SIGTERM', stop);
+}
+
+main().catch((error: unknown) => {
+  process.stderr.write(`\n${error instanceof Error ? error.message : String(error)}\n`);
+  process.exit(1);
+});

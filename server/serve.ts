@@ -1,0 +1,35 @@
+import { createServer, type Server } from 'node:http';
+import type { AddressInfo } from 'node:net';
+import { createApp } from './app.ts';
+import type { Deps } from './deps.ts';
+import { forgetExpired } from './http/sign-in.ts';
+import { serveSockets } from './live/socket-server.ts';
+
+const hourMs = 60 * 60 * 1000;
+
+function listen(http: Server, port: number, host: string): Promise<number> {
+  return new Promise((resolve, reject) => {
+    http.once('error', reject);
+    http.listen(port, host, () => resolve((http.address() as AddressInfo).port));
+  });
+}
+
+/** Opens the port, takes up the sessions that were open, and returns how to stop. Port 0 takes any free one. */
+export async function serve(deps: Deps) {
+  const { app, sittings, signedIn, mounted } = createApp(deps);
+  const http = createServer(app);
+  const io = serveSockets(http, deps, sittings, signedIn);
+  await sittings.resumeAll();
+  await forgetExpired(deps.db, deps.clock.now());
+  const sweeping = setInterval(() => {
+    forgetExpired(deps.db, deps.clock.now()).catch((error) => deps.log.error({ err: error }, 'sweeping failed'));
+  }, hourMs);
+  const port = await listen(http, deps.config.port, deps.config.host);
+  const stop = async () => {
+    clearInterval(sweeping);
+    await sittings.stop();
+    await io.close();
+    http.closeAllConnections();
+  };
+  return { port, stop, sittings, mounted };
+}
