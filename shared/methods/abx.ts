@@ -1,10 +1,18 @@
+import { abxNullDistribution } from '../findings/abx-null-distribution.ts';
 import { analyseAbx } from '../findings/analyse-abx.ts';
-import type { Method } from './method.ts';
+import type { Method, ScoredTrial } from './method.ts';
 
 const side = (label: string): 'A' | 'B' => {
   if (label === 'A' || label === 'B') return label;
   throw new RangeError(`${label} is neither A nor B`);
 };
+
+const abxTrial = ({ session, trial, truth, answers }: ScoredTrial) => ({
+  session,
+  trial,
+  truth: side(truth),
+  answers: answers.map(({ listener, choice }) => ({ listener, choice: choice === null ? null : side(choice) })),
+});
 
 /** ABX: A and B are presented and named, X is one of them; the listener says which. */
 export const abx: Method = {
@@ -24,19 +32,8 @@ export const abx: Method = {
   isRight: (choice, truth) => choice === truth,
   chance: { numerator: 1, denominator: 2 },
   analyse: ({ alpha, listenersPerSession }, trials) =>
-    analyseAbx({
-      alpha,
-      listenersPerSession,
-      trials: trials.map((trial) => ({
-        session: trial.session,
-        trial: trial.trial,
-        truth: side(trial.truth),
-        answers: trial.answers.map(({ listener, choice }) => ({
-          listener,
-          choice: choice === null ? null : side(choice),
-        })),
-      })),
-    }),
+    analyseAbx({ alpha, listenersPerSession, trials: trials.map(abxTrial) }),
+  nullDistribution: (trials) => abxNullDistribution(trials.map(abxTrial)),
   source:
     'Macmillan and Creelman, Detection Theory: A User’s Guide, 2nd ed. (2005); Kaplan, Macmillan and Creelman (1978)',
 };

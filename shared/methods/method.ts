@@ -38,5 +38,7 @@ export type Method = {
     plan: { readonly alpha: string; readonly listenersPerSession: number },
     trials: readonly ScoredTrial[],
   ): RegisteredResult;
+  /** Where the registered count falls when nothing is heard: the test's own distribution. */
+  nullDistribution(trials: readonly ScoredTrial[]): { count: number; chance: number }[];
   readonly source: string;
 };

@@ -17,6 +17,7 @@ export const studyEvents = {
     /** The duties as they stood, from which the blinding rung is derived. */
     manager: z.uuid(),
     owners: z.array(z.uuid()),
+    managers: z.array(z.uuid()),
     codeHolder: z.uuid(),
   }),
   'result-recorded': z.strictObject({ analysis: z.string(), result: registeredResult }),

@@ -44,9 +44,14 @@ async function closedEntry(
   at: number,
 ): Promise<NewEntry> {
   const members = await membersOf(tx, study.organisationId);
-  const owners = members.filter(({ role }) => role === 'owner').map(({ userId }) => userId);
+  const withRole = (role: string) => members.filter((member) => member.role === role).map(({ userId }) => userId);
   const { managerId: manager, codeHolderId: codeHolder } = study;
-  return { kind: 'study-closed', at, payload: { by, complete, reason, manager, owners, codeHolder }, session: null };
+  return {
+    kind: 'study-closed',
+    at,
+    payload: { by, complete, reason, manager, codeHolder, owners: withRole('owner'), managers: withRole('manager') },
+    session: null,
+  };
 }
 
 async function recordResult(

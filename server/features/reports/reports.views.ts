@@ -1,0 +1,181 @@
+import type { Report } from '#shared/contracts/reports.ts';
+import type { Finding } from '#shared/findings/finding.ts';
+import type { RegisteredResult } from '#shared/findings/registered-result.ts';
+import type { Entry } from '#shared/ledger/chain.ts';
+import type { Check } from '#shared/ledger/verify.ts';
+import { methodOf } from '#shared/methods/methods.ts';
+import type { Protocol } from '#shared/protocol/protocol.ts';
+import type { AnswerContent } from '#shared/session/answer-leaf.ts';
+import type { BlindingRung } from '#shared/session/blinding-rung.ts';
+import { countedTrials, revealedDraw } from '#shared/session/counted-trials.ts';
+import { cableOfSide, type Draw } from '#shared/session/draw.ts';
+import { truthOf } from '#shared/session/fitting.ts';
+import { type RevealedKey, revealedKey } from '#shared/session/revealed-key.ts';
+import type { SessionState } from '#shared/session/state.ts';
+import type { StudyPayloadOf } from '#shared/session/study-events.ts';
+import type { Study } from '../studies/study.entity.ts';
+
+export type ReportSource = {
+  readonly study: Study;
+  readonly protocol: Protocol;
+  readonly entries: readonly Entry[];
+  readonly answers: readonly AnswerContent[];
+  readonly states: readonly SessionState[];
+  readonly rooms: ReadonlyMap<number, string>;
+  readonly result: RegisteredResult;
+  readonly finding: Finding;
+  readonly checks: readonly Check[];
+  readonly rung: BlindingRung;
+  readonly closing: StudyPayloadOf<'study-closed'>;
+};
+
+function flowOf({ states, entries }: ReportSource): Report['flow'] {
+  const seated = new Set(entries.filter(({ kind }) => kind === 'seating-opened').map(({ payload }) => payload.session));
+  const wasOpened = ({ session }: SessionState) => seated.has(session);
+  const trials = states.flatMap((state) => state.ended);
+  const locked = trials.filter(({ outcome }) => outcome === 'locked');
+  const opened = states.filter(wasOpened);
+  const seats = states.flatMap((state) => state.seats);
+  return {
+    sessionsPlanned: states.length,
+    sessionsOpened: opened.length,
+    sessionsFinished: states.filter(({ phase }) => phase === 'finished').length,
+    sessionsAbandoned: opened.filter(({ phase }) => phase === 'abandoned').length,
+    sessionsNeverStarted: states.length - opened.length,
+    trialsOpened: trials.length + states.filter(({ trial }) => trial !== null && trial.trial > 0).length,
+    trialsVoid: trials.length - locked.length,
+    trialsCounted: locked.length,
+    answersExpected: locked.reduce((sum, trial) => sum + trial.seats.length, 0),
+    answersMissing: locked.reduce((sum, trial) => sum + trial.missing.length, 0),
+    listeners: seats.length,
+    listenersLeft: seats.filter(({ left }) => left).length,
+  };
+}
+
+function drawFor(source: ReportSource, state: SessionState, key: RevealedKey): Draw | null {
+  const secret = key.draws.find(({ session }) => session === state.session)?.secret;
+  const ran = state.ended.length > 0;
+  return secret === undefined || !ran
+    ? null
+    : revealedDraw(state, methodOf(source.protocol.method), secret, key.codeKey.rows);
+}
+
+function sessionView(source: ReportSource, state: SessionState, key: RevealedKey): Report['sessions'][number] {
+  const { protocol, entries, answers, rooms } = source;
+  const own = entries.filter(({ payload }) => payload.session === state.session);
+  const atOf = (...kinds: string[]) => own.find(({ kind }) => kinds.includes(kind))?.at ?? null;
+  const draw = drawFor(source, state, key);
+  const method = methodOf(protocol.method);
+  const choiceOf = (trial: number, seat: string) =>
+    answers.find((answer) => answer.session === state.sessionId && answer.trial === trial && answer.seat === seat)
+      ?.choice ?? null;
+  const abandoned = own.find(({ kind }) => kind === 'session-abandoned');
+  return {
+    number: state.session,
+    phase: state.phase,
+    room: rooms.get(state.session) ?? '',
+    startedAt: atOf('seating-opened'),
+    endedAt: atOf('session-finished', 'session-abandoned'),
+    listeners: state.seats.length,
+    labelA: draw === null ? null : protocol.cables[cableOfSide(draw, method, method.sides[0])].name,
+    reason: abandoned === undefined ? null : String(abandoned.payload.reason),
+    trials: state.ended.map(({ trial, outcome, excerpt, seats, longChanges }) => ({
+      trial,
+      outcome,
+      excerpt: state.plan.programme[excerpt]?.title ?? '',
+      truth: draw === null ? '' : truthOf(draw, trial),
+      answers: seats.map((listener) => ({ listener, choice: choiceOf(trial, listener) })),
+      longChanges,
+    })),
+  };
+}
+
+function voidsOf(entries: readonly Entry[]): Report['voids'] {
+  return entries
+    .filter(({ kind }) => kind === 'trial-voided')
+    .map(({ payload }) => ({
+      session: Number(payload.session),
+      trial: Number(payload.trial),
+      reason: String(payload.reason),
+      note: String(payload.note),
+      answersHeld: Number(payload.answersHeld),
+    }));
+}
+
+function missingOf(states: readonly SessionState[]): Report['missing'] {
+  return states.flatMap(({ session, ended, seats, late }) =>
+    ended.flatMap(({ trial, missing }) =>
+      missing.map((listener) => {
+        const arrivedLate = late.some((answer) => answer.trial === trial && answer.seat === listener);
+        const left = seats.some(({ seat, left: hasLeft }) => seat === listener && hasLeft);
+        const why = arrivedLate
+          ? 'arrived after the trial had locked'
+          : left
+            ? 'had left the session by its end'
+            : 'no answer in time';
+        return { session, trial, listener, why };
+      }),
+    ),
+  );
+}
+
+function factsOf({ design, conduct, analysis, cables, method }: Protocol): Report['protocol']['facts'] {
+  const specimens = cables.map(({ name, specimens: own }) => `${name}: ${own.map(({ serial }) => serial).join(', ')}`);
+  return [
+    { label: 'Method', value: methodOf(method).name },
+    { label: 'Specimens', value: specimens.join('; ') },
+    { label: 'Sessions', value: String(design.sessions) },
+    { label: 'Listeners per session', value: String(design.listenersPerSession) },
+    { label: 'Trials per session', value: `${design.trials}, ${design.spares} spare` },
+    { label: 'Level', value: `${analysis.alpha}, one-sided` },
+    { label: 'Missing answers', value: analysis.missing },
+    { label: 'Stopping', value: analysis.stopping },
+    { label: 'Exclusions', value: analysis.exclusions },
+    { label: 'Change', value: `${conduct.changeS} s, real or sham` },
+    { label: 'Answer window', value: `${conduct.answerS} s` },
+    { label: 'Programme', value: conduct.programme.map(({ title, lengthS }) => `${title} (${lengthS} s)`).join('; ') },
+    { label: 'Chain', value: conduct.chain },
+  ];
+}
+
+/** The report, field by field. */
+export function reportView(source: ReportSource): Report {
+  const { study, protocol, entries, states, answers, result, finding, checks, rung, closing } = source;
+  const method = methodOf(protocol.method);
+  const key = revealedKey.parse(entries.find(({ kind }) => kind === 'key-revealed')?.payload);
+  const sealing = entries.find(({ kind }) => kind === 'protocol-sealed');
+  const closedAt = entries.find(({ kind }) => kind === 'study-closed')?.at;
+  const head = entries.at(-1);
+  if (sealing === undefined || closedAt === undefined || head === undefined)
+    throw new Error('a closed study without its record');
+  return {
+    studyId: study.id,
+    title: study.title,
+    question: protocol.question,
+    cables: [protocol.cables[0].name, protocol.cables[1].name],
+    method: method.name,
+    closedAt,
+    endedEarly: closing.complete ? null : closing.reason,
+    finding,
+    result,
+    nullDistribution: method.nullDistribution(countedTrials(method, states, key, answers)),
+    rung: { name: rung.name, why: rung.why },
+    flow: flowOf(source),
+    sessions: states.map((state) => sessionView(source, state, key)),
+    voids: voidsOf(entries),
+    missing: missingOf(states),
+    deviations: entries
+      .filter(({ kind }) => kind === 'deviation-recorded')
+      .map(({ at, payload }) => ({
+        at,
+        session: payload.session === null ? null : Number(payload.session),
+        text: String(payload.text),
+      })),
+    protocol: { digest: String(sealing.payload.digest), sealedAt: sealing.at, facts: factsOf(protocol) },
+    record: {
+      entries: entries.length,
+      head: head.digest,
+      checks: checks.map(({ name, outcome, reason }) => ({ name, outcome, reason })),
+    },
+  };
+}
