@@ -99,6 +99,11 @@ export class Sitting {
     return this.#broken;
   }
 
+  /** Resolves once everything asked for so far has been done and shown. */
+  async settled(): Promise<void> {
+    await this.#queue;
+  }
+
   stop(): void {
     this.#cancelTimer();
   }

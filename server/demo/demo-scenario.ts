@@ -1,0 +1,85 @@
+import type { CableDraft } from '#shared/contracts/cables.ts';
+import type { StudyDraft } from '#shared/contracts/studies.ts';
+
+// The demo's scenario: an invented workshop that makes loudspeaker cable for ships' saloons and homes.
+
+export const demoOrganisation = 'Skerry Line Works';
+
+export const demoCables: readonly { key: 'thin' | 'thick' | 'spare'; draft: CableDraft; serials: readonly string[] }[] =
+  [
+    {
+      key: 'thin',
+      draft: {
+        name: 'Skerry 0.5 twin',
+        kind: 'loudspeaker',
+        lengthMm: 6000,
+        description:
+          'Two stranded copper conductors of 0.5 mm² each, side by side, clear sheath. The workshop’s cheapest run.',
+      },
+      serials: ['ST-0412', 'ST-0413'],
+    },
+    {
+      key: 'thick',
+      draft: {
+        name: 'Skerry 4.0 twin',
+        kind: 'loudspeaker',
+        lengthMm: 6000,
+        description: 'Two stranded copper conductors of 4 mm² each, same sheath and connectors as the 0.5 twin.',
+      },
+      serials: ['SF-0077', 'SF-0078'],
+    },
+    {
+      key: 'spare',
+      draft: {
+        name: 'Holm interconnect',
+        kind: 'interconnect',
+        lengthMm: 1500,
+        description: 'Coaxial, braided shield, 90 pF per metre as measured by the workshop.',
+      },
+      serials: ['HI-0101'],
+    },
+  ];
+
+type Free = Omit<StudyDraft, 'cables' | 'codeHolderId'>;
+
+const chain =
+  'Network player, integrated amplifier (0.05 Ω output), two-way loudspeakers of nominal 4 Ω, listening room of 28 m².';
+
+/** Ready to run in three minutes: short changes and excerpts, so that a visitor sees a whole session. */
+export const studyToRun: Free = {
+  title: 'Study Heron',
+  question: 'Can listeners in this room tell the two 6 m runs apart?',
+  method: 'abx',
+  sessions: 1,
+  listenersPerSession: 2,
+  trials: 5,
+  spares: 1,
+  alphaPerMille: 50,
+  programme: [
+    { title: 'Piano, slow', lengthS: 3, start: '0:42' },
+    { title: 'Pink noise', lengthS: 3, start: '0:00' },
+  ],
+  rig: 'loudspeaker',
+  chain,
+  changeS: 5,
+  answerS: 30,
+  confidence: false,
+};
+
+/** Closed, with a void and a missing answer in it. */
+export const closedStudy: Free = {
+  ...studyToRun,
+  title: 'Study Curlew',
+  question: 'Do listeners hear the level that a thin 6 m run costs into 4 Ω?',
+  listenersPerSession: 3,
+  trials: 16,
+  spares: 2,
+  programme: [
+    { title: 'Piano, slow', lengthS: 20, start: '0:42' },
+    { title: 'Strings', lengthS: 20, start: '1:10' },
+    { title: 'Pink noise', lengthS: 15, start: '0:00' },
+    { title: 'Cymbals', lengthS: 18, start: '2:05' },
+  ],
+  changeS: 30,
+  answerS: 45,
+};

@@ -1,0 +1,112 @@
+import type { StudyDraft } from '#shared/contracts/studies.ts';
+import { withTransaction } from '../db/transaction.ts';
+import type { Deps } from '../deps.ts';
+import { addSpecimen, createCable, getCable } from '../features/cables/cables.service.ts';
+import { confirmCodes, drawCodes, openCodes } from '../features/codes/codes.service.ts';
+import { Membership } from '../features/organisations/membership.entity.ts';
+import { Organisation } from '../features/organisations/organisation.entity.ts';
+import { planSession } from '../features/sessions/sessions.service.ts';
+import { closeStudy } from '../features/studies/closing.service.ts';
+import { createStudy, sealStudy } from '../features/studies/studies.service.ts';
+import { studiesOf } from '../features/studies/studies.store.ts';
+import { hashPassword } from '../features/users/passwords.ts';
+import { User } from '../features/users/user.entity.ts';
+import { Sittings } from '../live/sittings.ts';
+import { demoPeople } from './demo-people.ts';
+import { closedStudy, demoCables, demoOrganisation, studyToRun } from './demo-scenario.ts';
+import { forgetDemo } from './forget-demo.ts';
+import { HandClock } from './hand-clock.ts';
+import { type Hearing, SimulatedSession } from './simulated-session.ts';
+
+type People = Record<(typeof demoPeople)[number]['key'], string>;
+
+async function makePeople(deps: Deps, organisationId: string): Promise<People> {
+  const createdAt = new Date(deps.clock.now());
+  const made = await Promise.all(
+    demoPeople.map(async (person) => ({ ...person, id: deps.random.id(), hash: await hashPassword(person.password) })),
+  );
+  await withTransaction(deps.db, async (tx) => {
+    await tx.insert(Organisation, { id: organisationId, name: demoOrganisation, demo: true, createdAt });
+    for (const { id, email, name, hash, role } of made) {
+      await tx.insert(User, { id, email, name, passwordHash: hash, createdAt });
+      await tx.insert(Membership, { organisationId, userId: id, role });
+    }
+  });
+  return Object.fromEntries(made.map(({ key, id }) => [key, id])) as People;
+}
+
+async function makeCables(deps: Deps, organisationId: string): Promise<StudyDraft['cables']> {
+  const chosen: StudyDraft['cables'][number][] = [];
+  for (const { draft, serials } of demoCables) {
+    const { id } = await createCable(deps, organisationId, draft);
+    for (const serial of serials) await addSpecimen(deps, organisationId, id, { serial, note: '' });
+    const { specimens } = await getCable(deps, organisationId, id);
+    chosen.push({ cableId: id, specimenIds: specimens.map((specimen) => specimen.id) });
+  }
+  const [first, second] = chosen;
+  if (first === undefined || second === undefined) throw new Error('the demo needs two cables');
+  return [first, second];
+}
+
+/** Draft, seal, codes and one planned session: a study ready to run. */
+async function prepareStudy(deps: Deps, organisationId: string, people: People, draft: StudyDraft) {
+  const study = await createStudy(deps, organisationId, people.manager, draft);
+  const where = { organisationId, id: study.id };
+  await sealStudy(deps, where, people.manager);
+  const holder = { userId: people.codeHolder, role: 'reviewer' };
+  await drawCodes(deps, where, holder);
+  await openCodes(deps, where, holder, 'labels');
+  await confirmCodes(deps, where, holder);
+  const plannedAt = new Date(deps.clock.now() + 3_600_000).toISOString();
+  const session = await planSession(deps, where, { plannedAt, room: 'Listening room', proctorId: people.proctor });
+  return { where, sessionId: session.id };
+}
+
+/** Simulated listeners: each hears the difference in some trials and guesses in the others; one answer stays out. */
+const hearing: Hearing = (codes, seat, trial) => {
+  if (seat === 1 && trial === 11) return null;
+  const [a, , x] = codes;
+  const hears = Math.random() < ([0.6, 0.35, 0.5][seat] ?? 0);
+  if (hears) return x === a ? 'A' : 'B';
+  return Math.random() < 0.5 ? 'A' : 'B';
+};
+
+async function runClosedStudy(deps: Deps, clock: HandClock, organisationId: string, people: People, draft: StudyDraft) {
+  const { where, sessionId } = await prepareStudy(deps, organisationId, people, draft);
+  clock.advance(3_600_000);
+  const sittings = new Sittings(deps);
+  const session = await SimulatedSession.open(deps, clock, sittings, sessionId);
+  await session.seat(['Sofa, left', 'Sofa, right', 'Armchair']);
+  await session.familiarise();
+  let trial = 0;
+  while (session.trialsLeft) {
+    trial += 1;
+    const fault = trial === 6 ? { reason: 'noise' as const, note: 'A door slammed during X.' } : undefined;
+    await session.trial(hearing, fault);
+  }
+  await session.finish();
+  await sittings.stop();
+  clock.advance(900_000);
+  await closeStudy(deps, where, people.manager, '');
+}
+
+/**
+ * Makes the demo once: an organisation, its people and cables, one study ready to run and one closed, all through the
+ * program's own services, so that their records verify. A demo that was cut short is made anew.
+ */
+export async function loadDemo(deps: Deps): Promise<void> {
+  const existing = await deps.db.manager.findOneBy(Organisation, { demo: true });
+  if (existing !== null) {
+    const studies = await studiesOf(deps.db.manager, existing.id);
+    if (studies.length >= 2) return;
+    await forgetDemo(deps.db, existing.id);
+  }
+  const clock = new HandClock(deps.clock.now() - 3 * 24 * 3_600_000);
+  const past: Deps = { ...deps, clock };
+  const organisationId = deps.random.id();
+  const people = await makePeople(past, organisationId);
+  const cables = await makeCables(past, organisationId);
+  const codeHolderId = people.codeHolder;
+  await runClosedStudy(past, clock, organisationId, people, { ...closedStudy, cables, codeHolderId });
+  await prepareStudy(deps, organisationId, people, { ...studyToRun, cables, codeHolderId });
+}
