@@ -74,7 +74,7 @@ export function createApp(deps: Deps) {
 
   const mounted: Mounted[] = [];
   const access: Access = { db, log, strictReplies: config.strictReplies, mounted };
-  const signedIn = signInMiddleware(db, config, clock.now);
+  const signedIn = signInMiddleware(db, config, () => clock.now());
   const sittings = new Sittings(deps);
 
   const api = Router();

@@ -1,0 +1,35 @@
+import type { HandClock } from '../../server/demo/hand-clock.ts';
+import type { Console, Phone } from './live.ts';
+
+/** One presentation: every step of the change, its registered time, the excerpt. Returns the code that was fitted. */
+async function present(desk: Console, clock: HandClock): Promise<string> {
+  const { trial } = await desk.sees('a change', (view) => view.trial?.stage === 'change');
+  const presentation = trial?.presentationNumber;
+  for (const step of ['mute', 'unplug', 'fit', 'check']) await desk.act({ kind: 'confirm-step', step });
+  clock.advance((desk.now.trial?.endsAt ?? 0) - clock.now());
+  await desk.act({ kind: 'confirm-step', step: 'unmute' });
+  const code = desk.now.trial?.code ?? '';
+  clock.advance((desk.now.trial?.endsAt ?? 0) - clock.now());
+  await desk.sees(
+    'the end of the excerpt',
+    ({ trial: now }) => now === null || now.stage === 'answering' || now.presentationNumber !== presentation,
+  );
+  return code;
+}
+
+/** Seating closed, randomness revealed, familiarisation over. */
+export async function begin(desk: Console, phones: readonly Phone[], clock: HandClock): Promise<void> {
+  await desk.act({ kind: 'close-seating' });
+  for (const phone of phones) await phone.reveal();
+  await desk.sees('the draw fixed', (view) => view.phase === 'running');
+  await desk.act({ kind: 'begin-familiarisation' });
+  await present(desk, clock);
+  await present(desk, clock);
+  await desk.sees('the familiarisation over', (view) => view.familiarised);
+}
+
+/** A trial up to its question. Returns the codes fitted for A, B and X. */
+export async function presentTrial(desk: Console, clock: HandClock): Promise<string[]> {
+  await desk.act({ kind: 'begin-trial' });
+  return [await present(desk, clock), await present(desk, clock), await present(desk, clock)];
+}

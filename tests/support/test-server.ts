@@ -1,0 +1,79 @@
+import 'reflect-metadata';
+import { randomBytes } from 'node:crypto';
+import { createConnection } from 'mysql2/promise';
+import { pino } from 'pino';
+import { type Config, readConfig } from '../../server/config.ts';
+import { createDataSource } from '../../server/db/data-source.ts';
+import type { Clock, Deps, Random } from '../../server/deps.ts';
+import { serve } from '../../server/serve.ts';
+import { systemClock, systemRandom } from '../../server/system.ts';
+
+function required(name: string): string {
+  const value = process.env[name];
+  if (value === undefined) throw new Error(`${name} is not set; run the tests with npm test`);
+  return value;
+}
+
+const account = () => ({
+  socketPath: required('TEST_DATABASE_SOCKET'),
+  user: required('TEST_DATABASE_USER'),
+  password: required('TEST_DATABASE_PASSWORD'),
+});
+
+/** A database of this test's own, and how to remove it. */
+export async function testDatabase() {
+  const name = `fairlead_test_${randomBytes(6).toString('hex')}`;
+  const admin = await createConnection(account());
+  await admin.query(`create database ${name} character set utf8mb4`);
+  return {
+    name,
+    remove: async () => {
+      await admin.query(`drop database ${name}`);
+      await admin.end();
+    },
+  };
+}
+
+export function testConfig(databaseName: string, environment: Record<string, string> = {}): Config {
+  const { socketPath, user, password } = account();
+  const config = readConfig({
+    SESSION_SECRET: 'a secret for tests, and long enough for the rule',
+    FAIRLEAD_DEMO: 'off',
+    DATABASE_SOCKET: socketPath,
+    DATABASE_USER: user,
+    DATABASE_PASSWORD: password,
+    DATABASE_NAME: databaseName,
+    PUBLIC_URL: 'http://fairlead.test:4180',
+    LOG_LEVEL: 'error',
+    ...environment,
+  });
+  return { ...config, port: 0 };
+}
+
+/** The real application on a port of its own, over a real, empty database. */
+export async function testServer(given: { clock?: Clock; random?: Random; environment?: Record<string, string> } = {}) {
+  const database = await testDatabase();
+  const config = testConfig(database.name, given.environment);
+  const db = createDataSource(config.database);
+  await db.initialize();
+  await db.runMigrations();
+  const deps: Deps = {
+    config,
+    db,
+    clock: given.clock ?? systemClock,
+    random: given.random ?? systemRandom,
+    log: pino({ level: config.logLevel }),
+  };
+  const server = await serve(deps);
+  return {
+    deps,
+    server,
+    address: `http://127.0.0.1:${server.port}`,
+    stop: async () => {
+      await server.stop();
+      await db.destroy();
+      await database.remove();
+    },
+  };
+}
+export type TestServer = Awaited<ReturnType<typeof testServer>>;
