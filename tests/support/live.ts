@@ -34,9 +34,8 @@ export class LivePage<View> {
       this.view = view;
     });
     const listen = () => {
-      this.socket.io.engine.on('data', (data: unknown) => {
-        const text = String(data);
-        if (text.startsWith('42') || text.startsWith('43')) this.received.push(text);
+      this.socket.io.engine.on('packet', ({ type, data }) => {
+        if (type === 'message' && typeof data === 'string' && /^[23]/.test(data)) this.received.push(data);
       });
     };
     this.socket.io.on('open', listen);

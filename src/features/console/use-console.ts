@@ -1,0 +1,50 @@
+import { useCallback, useEffect, useState, useSyncExternalStore } from 'react';
+import { type ProctorCommand, type ProctorView, proctorView } from '#shared/contracts/proctor-live.ts';
+import { Problem } from '#shared/problem.ts';
+import { type Live, type LiveSnapshot, openLive } from '../../lib/live.ts';
+
+type WithoutVersion<C> = C extends unknown ? Omit<C, 'expectVersion'> : never;
+export type ConsoleCommand = WithoutVersion<ProctorCommand>;
+
+export type ConsoleActions = {
+  /** Sends a command on the view as it is shown. Resolves to whether it was done. */
+  readonly act: (command: ConsoleCommand) => Promise<boolean>;
+  readonly isBusy: boolean;
+  /** Why the last command was refused, in words; null when it was not. */
+  readonly problem: string | null;
+};
+
+const nothing: LiveSnapshot<ProctorView> = { view: null, connection: 'connecting', refused: null, clockOffsetMs: 0 };
+
+/** The live view of a session for its proctor. */
+export function useConsole(sessionId: string): LiveSnapshot<ProctorView> & ConsoleActions {
+  const [live, setLive] = useState<Live<ProctorView> | null>(null);
+  useEffect(() => {
+    const opened = openLive({ audience: 'proctor', sessionId }, (value) => proctorView.parse(value));
+    setLive(opened);
+    return () => opened.close();
+  }, [sessionId]);
+
+  const subscribe = useCallback((listener: () => void) => live?.subscribe(listener) ?? (() => {}), [live]);
+  const snapshot = useSyncExternalStore(subscribe, () => live?.getSnapshot() ?? nothing);
+  const [isBusy, setBusy] = useState(false);
+  const [problem, setProblem] = useState<string | null>(null);
+
+  const act = async (command: ConsoleCommand): Promise<boolean> => {
+    if (live === null || snapshot.view === null) return false;
+    setBusy(true);
+    setProblem(null);
+    try {
+      await live.send({ ...command, expectVersion: snapshot.view.version });
+      return true;
+    } catch (error) {
+      if (!(error instanceof Problem)) throw error;
+      // The newer view is already on the screen; what was pressed was meant for the older one.
+      if (error.code !== 'stale-view') setProblem(error.message);
+      return false;
+    } finally {
+      setBusy(false);
+    }
+  };
+  return { ...snapshot, act, isBusy, problem };
+}

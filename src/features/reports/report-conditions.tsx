@@ -1,0 +1,58 @@
+import type { Report } from '#shared/contracts/reports.ts';
+import { formatDate } from '../../lib/format.ts';
+import { type Fact, Facts } from '../../ui/facts.tsx';
+import { levelOf } from './report-words.ts';
+
+/** The conditions under which the count came about, beside it and never below the fold. */
+export function ReportConditions({ report }: { report: Report }) {
+  const { rung, flow, voids, deviations, result, record, protocol, endedEarly } = report;
+  const failed = record.checks.filter(({ outcome }) => outcome === 'fail').length;
+  const passed = record.checks.filter(({ outcome }) => outcome === 'pass').length;
+  const unsettled = record.checks.length - passed - failed;
+  const conditions: Fact[] = [
+    { label: 'Blinding', value: rung.name, isWords: true },
+    { label: 'Level at the load', value: 'not recorded', isWords: true, tone: 'amber' },
+    { label: 'Void trials', value: voids.length === 0 ? 'none' : `${flow.trialsVoid}, listed`, isWords: true },
+    {
+      label: 'Missing answers',
+      value: flow.answersMissing === 0 ? 'none' : `${flow.answersMissing}, counted as wrong`,
+      isWords: true,
+    },
+    {
+      label: 'Deviations',
+      value: deviations.length === 0 ? 'none' : `${deviations.length}, listed`,
+      isWords: true,
+      ...(deviations.length === 0 ? {} : { tone: 'amber' as const }),
+    },
+    { label: 'Registered level', value: `${levelOf(result.alpha)}, one-sided` },
+    ...(result.critical ? [{ label: 'Right answers needed', value: result.critical.count }] : []),
+    ...(endedEarly === null
+      ? []
+      : [{ label: 'Ended early', value: endedEarly, isWords: true, tone: 'amber' as const }]),
+  ];
+  return (
+    <section aria-labelledby="conditions" className="flex flex-col gap-8 print:mt-8">
+      <h2 id="conditions" className="sr-only">
+        Conditions and record
+      </h2>
+      <div className="flex flex-col gap-2">
+        <Facts title="Conditions" facts={conditions} />
+        <p className="text-soft">{rung.why}</p>
+      </div>
+      <Facts
+        title="Record"
+        facts={[
+          { label: 'Protocol sealed', value: formatDate(protocol.sealedAt), isWords: true },
+          { label: 'Study closed', value: formatDate(report.closedAt), isWords: true },
+          { label: 'Entries', value: record.entries },
+          {
+            label: 'Checks passed',
+            value: `${passed} of ${record.checks.length}`,
+            tone: failed > 0 ? 'amber' : 'held',
+          },
+          ...(unsettled > 0 ? [{ label: 'Not checkable', value: unsettled }] : []),
+        ]}
+      />
+    </section>
+  );
+}

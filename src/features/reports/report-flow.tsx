@@ -1,0 +1,59 @@
+import type { Report } from '#shared/contracts/reports.ts';
+import { ReportSection } from './report-section.tsx';
+
+/** From what was planned to what was counted; every loss stands beside the step at which it happened. */
+export function ReportFlow({ flow }: Pick<Report, 'flow'>) {
+  return (
+    <ReportSection
+      title="From plan to count"
+      lede="Every opened session and every locked trial counts, those of abandoned sessions too."
+    >
+      <ol className="grid gap-x-10 gap-y-8 sm:grid-cols-2 xl:grid-cols-4">
+        <Step
+          count={flow.sessionsOpened}
+          of={`of ${flow.sessionsPlanned} planned sessions opened`}
+          losses={[
+            `${flow.sessionsFinished} finished`,
+            `${flow.sessionsAbandoned} abandoned`,
+            `${flow.sessionsNeverStarted} never started`,
+          ]}
+        />
+        <Step count={flow.listeners} of="listeners" losses={[`${flow.listenersLeft} left before the end`]} />
+        <Step
+          count={flow.trialsCounted}
+          of={`of ${flow.trialsOpened} opened trials counted`}
+          losses={[`${flow.trialsVoid} void`, ...unlocked(flow)]}
+        />
+        <Step
+          count={flow.answersExpected - flow.answersMissing}
+          of={`of ${flow.answersExpected} answers given`}
+          losses={[`${flow.answersMissing} missing, counted as wrong`]}
+        />
+      </ol>
+    </ReportSection>
+  );
+}
+
+/** A trial that was open when its session was abandoned is neither locked nor void. */
+function unlocked({ trialsOpened, trialsVoid, trialsCounted }: Report['flow']): string[] {
+  const count = trialsOpened - trialsVoid - trialsCounted;
+  return count > 0 ? [`${count} never locked`] : [];
+}
+
+type StepProps = { count: number; of: string; losses: readonly string[] };
+
+function Step({ count, of, losses }: StepProps) {
+  return (
+    <li className="flex flex-col gap-2 border-t-2 border-ink pt-3">
+      <p className="flex items-baseline gap-3">
+        <span className="font-mono text-2xl font-semibold">{count}</span>
+        <span className="text-soft">{of}</span>
+      </p>
+      <ul className="border-l border-rule pl-4">
+        {losses.map((loss) => (
+          <li key={loss}>{loss}</li>
+        ))}
+      </ul>
+    </li>
+  );
+}

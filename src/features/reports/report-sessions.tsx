@@ -1,0 +1,72 @@
+import type { Report } from '#shared/contracts/reports.ts';
+import type { Method } from '#shared/methods/method.ts';
+import { formatCount, formatDateTime } from '../../lib/format.ts';
+import { CourseLine } from '../../ui/course-line.tsx';
+import { ReportSection } from './report-section.tsx';
+import { SessionTrials } from './session-trials.tsx';
+
+type Session = Report['sessions'][number];
+
+type ReportSessionsProps = Pick<Report, 'sessions' | 'cables'> & { method: Method };
+
+/** Every session, whatever became of it; numbers have no gaps. */
+export function ReportSessions({ sessions, cables, method }: ReportSessionsProps) {
+  return (
+    <ReportSection
+      title="Every session"
+      lede="Filled rings are locked trials, struck ones are void. What X was and what was answered was hidden from everybody until closing."
+    >
+      {sessions.length === 0 ? <p className="text-soft">No session was opened.</p> : null}
+      <ol className="flex flex-col gap-8">
+        {sessions.map((session) => (
+          <li key={session.number} className="flex flex-col gap-3 border-t border-rule pt-4 print:break-inside-auto">
+            <SessionHead session={session} cables={cables} />
+            {session.trials.length > 0 ? (
+              <>
+                <CourseLine trials={courseOf(session)} />
+                <details className="group print:[&::details-content]:block print:[&::details-content]:[content-visibility:visible]">
+                  <summary className="min-h-12 cursor-pointer py-2.5 font-semibold underline-offset-4 hover:underline print:hidden">
+                    The {formatCount(session.trials.length, 'trial')} of session {session.number}
+                  </summary>
+                  <SessionTrials session={session} method={method} />
+                </details>
+              </>
+            ) : null}
+          </li>
+        ))}
+      </ol>
+    </ReportSection>
+  );
+}
+
+function SessionHead({ session, cables }: { session: Session; cables: Report['cables'] }) {
+  const { number, phase, room, startedAt, endedAt, listeners, labelA, reason } = session;
+  const other = cables.find((name) => name !== labelA);
+  return (
+    <div className="flex flex-col gap-0.5">
+      <h3 className="text-lg">
+        Session {number}, {phase}
+      </h3>
+      <p className="text-soft">
+        {[
+          room,
+          formatCount(listeners, 'listener'),
+          startedAt === null ? 'never started' : `started ${formatDateTime(startedAt)}`,
+          ...(endedAt === null ? [] : [`ended ${formatDateTime(endedAt)}`]),
+        ].join(', ')}
+      </p>
+      {labelA === null ? null : (
+        <p className="text-soft">
+          A was {labelA}
+          {other === undefined ? '' : `, B was ${other}`}.
+        </p>
+      )}
+      {reason === null ? null : <p className="font-semibold">Reason: {reason}</p>}
+    </div>
+  );
+}
+
+/** A trial that never locked stays an open ring. */
+function courseOf({ trials }: Session) {
+  return trials.map(({ trial, outcome }) => ({ number: trial, state: outcome }));
+}

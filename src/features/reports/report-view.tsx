@@ -1,0 +1,43 @@
+import type { Report } from '#shared/contracts/reports.ts';
+import { methodOf } from '#shared/methods/methods.ts';
+import { Button } from '../../ui/button.tsx';
+import { FindingHead } from './finding-head.tsx';
+import { ReportConditions } from './report-conditions.tsx';
+import { ReportDistribution } from './report-distribution.tsx';
+import { ReportFigures } from './report-figures.tsx';
+import { ReportFlow } from './report-flow.tsx';
+import { ReportIncidents } from './report-incidents.tsx';
+import { ReportListeners } from './report-listeners.tsx';
+import { ReportProtocol } from './report-protocol.tsx';
+import { ReportRecord } from './report-record.tsx';
+import { ReportSessions } from './report-sessions.tsx';
+import { WhatToSay } from './what-to-say.tsx';
+
+type ReportViewProps = { report: Report; back: { to: string; label: string } };
+
+/** The finding first, then what it rests on, down to every answer. */
+export function ReportView({ report, back }: ReportViewProps) {
+  const { result } = report;
+  return (
+    <article className="flex flex-col gap-14">
+      <div className="grid gap-x-16 gap-y-10 lg:grid-cols-[minmax(0,1fr)_21rem] lg:items-start print:block">
+        <div className="flex min-w-0 flex-col gap-8">
+          <FindingHead report={report} back={back} />
+          <ReportFigures result={result} />
+          <WhatToSay finding={report.finding} />
+          <div className="print:hidden">
+            <Button onClick={() => window.print()}>Print the report</Button>
+          </div>
+        </div>
+        <ReportConditions report={report} />
+      </div>
+      <ReportDistribution result={result} nullDistribution={report.nullDistribution} />
+      <ReportListeners result={result} />
+      <ReportFlow flow={report.flow} />
+      <ReportIncidents voids={report.voids} missing={report.missing} deviations={report.deviations} />
+      <ReportSessions sessions={report.sessions} cables={report.cables} method={methodOf(result.method)} />
+      <ReportProtocol protocol={report.protocol} />
+      <ReportRecord record={report.record} />
+    </article>
+  );
+}

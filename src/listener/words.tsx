@@ -1,0 +1,9 @@
+/** What is going on, in the middle of the phone. */
+export function Words({ title, detail }: { title: string; detail: string }) {
+  return (
+    <div role="status" className="flex flex-1 flex-col items-center justify-center gap-4 text-center">
+      <h1 className="text-2xl">{title}</h1>
+      <p className="max-w-[22rem] text-xl text-soft">{detail}</p>
+    </div>
+  );
+}

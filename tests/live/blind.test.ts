@@ -1,0 +1,110 @@
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { HandClock } from '../../server/demo/hand-clock.ts';
+import { Console, Phone } from '../support/live.ts';
+import { makeOrganisation, readyStudy } from '../support/people.ts';
+import { repeatableRandom } from '../support/random.ts';
+import { begin, presentTrial } from '../support/run-session.ts';
+import { testServer } from '../support/test-server.ts';
+
+// Non-interference: the same session, with the same clock, ids, phones and answers, but with other code keys and other
+// server secrets. Whatever reaches a listener or a manager before closing must be the same, byte for byte.
+
+type Seeds = { codeKey: string; drawSecret: string };
+type Run = { phones: string[][]; manager: string[]; proctor: string[]; codes: string[][] };
+
+// Commitments, and the digests chained from them, are random by design.
+const withoutDigests = (text: string) => text.replace(/[0-9a-f]{64}/g, '#').replace(/urn:uuid:[0-9a-f-]{36}/g, 'urn');
+
+async function run({ codeKey, drawSecret }: Seeds): Promise<Run> {
+  const clock = new HandClock(Date.parse('2026-12-05T18:00:00.000Z'));
+  const random = repeatableRandom({ 'code-key': codeKey, 'draw-secret': drawSecret });
+  const server = await testServer({ clock, random });
+  const people = await makeOrganisation(server, 'Harbour');
+  const study = await readyStudy(server, people);
+  const manager: string[] = [];
+  const look = async () => {
+    for (const path of [
+      study.at,
+      `${study.base}/studies`,
+      `${study.base}/sessions`,
+      `${study.base}/sessions/${study.sessionId}`,
+      `${study.at}/codes`,
+      `${study.base}/waiting`,
+      `${study.base}/reports`,
+    ]) {
+      const reply = await study.manager.get(path);
+      manager.push(`${reply.status} ${reply.headers['content-length']} ${reply.text}`);
+    }
+  };
+  await look();
+  const desk = await Console.open(server.address, people.proctor.email, study.sessionId);
+  const code = await desk.openSeating();
+  const phones: Phone[] = [];
+  for (const name of ['left', 'right']) phones.push(await Phone.join(server.address, code, name));
+  await begin(desk, phones, clock);
+  const codes: string[][] = [];
+  for (const [index, choice] of (['A', 'B', 'B', 'A', 'A'] as const).entries()) {
+    codes.push(await presentTrial(desk, clock));
+    for (const phone of phones) await phone.answer(index + 1, choice);
+    await desk.sees('all in', (view) => view.trial?.answered === phones.length);
+    await desk.act({ kind: 'lock-trial' });
+    for (const phone of phones) await phone.sees('the lock', ({ lastLock }) => lastLock?.trial === index + 1);
+    await look();
+  }
+  await desk.act({ kind: 'finish' });
+  for (const phone of phones) await phone.sees('the end', ({ phase }) => phase === 'finished');
+  await look();
+  const seen: Run = {
+    phones: phones.map(({ received }) => received.map(withoutDigests)),
+    manager: manager.map(withoutDigests),
+    proctor: desk.received.map(withoutDigests),
+    codes,
+  };
+  for (const page of [desk, ...phones]) page.close();
+  await server.stop();
+  return seen;
+}
+
+describe('what leaves the server before closing', () => {
+  const seeds: Seeds[] = [
+    { codeKey: 'key one', drawSecret: 'draw one' },
+    { codeKey: 'key two', drawSecret: 'draw one' },
+    { codeKey: 'key one', drawSecret: 'draw two' },
+    { codeKey: 'key three', drawSecret: 'draw three' },
+  ];
+  let runs: Run[] = [];
+  beforeAll(async () => {
+    runs = [];
+    for (const seed of seeds) runs.push(await run(seed));
+  }, 120_000);
+  afterAll(() => {
+    runs = [];
+  });
+
+  const other = (index: number): Run => {
+    const found = runs[index];
+    if (found === undefined) throw new Error(`no run ${index}`);
+    return found;
+  };
+
+  it('differs in code key and in X between the runs, so that the comparison means something [B1]', () => {
+    const sameAsA = runs.map(({ codes }) => codes.map(([a, , x]) => (a === x ? 'A' : 'B')).join(''));
+    expect(new Set(sameAsA).size).toBeGreaterThan(1);
+    expect(new Set(runs.map(({ codes }) => [...new Set(codes.flat())].sort().join())).size).toBeGreaterThan(1);
+  });
+
+  it.each([1, 2, 3])('is the same for listeners, whatever the secrets (run %i) [B1]', (index) => {
+    expect(other(index).phones).toEqual(other(0).phones);
+    expect(other(0).phones[0]?.length).toBeGreaterThan(40);
+  });
+
+  it.each([1, 2, 3])('is the same for managers, whatever the secrets (run %i) [B1]', (index) => {
+    expect(other(index).manager).toEqual(other(0).manager);
+  });
+
+  it.each([1, 2, 3])('is the same for the proctor but for the code to be fitted (run %i) [B2]', (index) => {
+    const withoutCode = (texts: readonly string[]) => texts.map((text) => text.replace(/"code":"\d{3}"/g, '"code":""'));
+    expect(withoutCode(other(index).proctor)).toEqual(withoutCode(other(0).proctor));
+    expect(other(0).proctor.some((text) => /"code":"\d{3}"/.test(text))).toBe(true);
+  });
+});
