@@ -5,5 +5,6 @@ const root = document.getElementById('root');
 if (root === null) throw new Error('the page has no root element');
 
 const isListener = /^\/(listen|seat)(\/|$)/.test(window.location.pathname);
-const program = isListener ? await import('./listener/start.tsx') : await import('./app/start.tsx');
-program.start(root);
+// No top-level await here: the chunks loaded below may import this one, and would wait for it for ever.
+const program = isListener ? import('./listener/start.tsx') : import('./app/start.tsx');
+void program.then(({ start }) => start(root));

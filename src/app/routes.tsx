@@ -14,7 +14,7 @@ const id = ':id';
 
 /** Pages about one organisation, below its navigation; a problem on one of them leaves the navigation in place. */
 const organisationPages: RouteObject[] = [
-  { path: paths.home(organisationId), lazy: () => import('../pages/home-page.tsx') },
+  { index: true, lazy: () => import('../pages/home-page.tsx') },
   { path: paths.cables(organisationId), lazy: () => import('../pages/cables-page.tsx') },
   { path: paths.newCable(organisationId), lazy: () => import('../pages/cable-new-page.tsx') },
   { path: paths.cable(organisationId, id), lazy: () => import('../pages/cable-page.tsx') },

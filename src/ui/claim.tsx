@@ -19,7 +19,7 @@ export function Claim({ children, caution, actions }: ClaimProps) {
       {caution || actions ? (
         <figcaption className="flex flex-col gap-4">
           {caution ? <div className="max-w-[44em] text-soft">{caution}</div> : null}
-          {actions ? <div className="flex flex-wrap gap-3">{actions}</div> : null}
+          {actions ? <div className="flex flex-wrap gap-3 print:hidden">{actions}</div> : null}
         </figcaption>
       ) : null}
     </figure>

@@ -52,17 +52,19 @@ function CompactLine({ trials, reached }: { trials: readonly CourseTrial[]; reac
       <rect className="fill-rule" style={{ x: '0', y: '12px', width: '100%', height: '4px' }} />
       <rect
         className="fill-jacket transition-[width] duration-200"
-        style={{ x: '0', y: '12px', width: `${share}%`, height: '4px' }}
+        style={{ x: '0', y: '12px', width: reached < 0 ? '0' : `${share}%`, height: '4px' }}
       />
       <circle
         r="10"
         strokeWidth="4"
-        style={{ cx: `${share}%`, cy: '14px' }}
-        className={classNames(
-          'transition-[cx] duration-200',
-          isOn ? 'fill-page stroke-copper' : 'fill-jacket stroke-jacket',
-        )}
+        style={{ cx: `clamp(12px, ${share}%, 100% - 12px)`, cy: '14px' }}
+        className={classNames('transition-[cx] duration-200', ringLook(isOn, reached < 0))}
       />
     </svg>
   );
+}
+
+function ringLook(isOn: boolean, isAhead: boolean): string {
+  if (isOn) return 'fill-page stroke-copper';
+  return isAhead ? 'fill-page stroke-edge' : 'fill-jacket stroke-jacket';
 }

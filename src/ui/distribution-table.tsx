@@ -21,10 +21,10 @@ export function DistributionTable({ shown, observed, limit, quantity }: Distribu
         <caption className="sr-only">{quantity}, with the chance of each by guessing</caption>
         <thead>
           <tr className="border-b-2 border-ink text-left">
-            <th scope="col" className="py-2 pr-8">
+            <th scope="col" className="py-2 pr-4 sm:pr-8">
               {quantity}
             </th>
-            <th scope="col" className="py-2 pr-8 text-right">
+            <th scope="col" className="py-2 pr-4 sm:pr-8 text-right">
               Chance
             </th>
             <th scope="col" className="py-2">
@@ -59,10 +59,10 @@ function remarkOn(bar: DistributionBar, observed: number, limit: number | undefi
 function TableRow({ name, chance, remark }: { name: string; chance: number; remark?: string }) {
   return (
     <tr className="border-b border-rule">
-      <th scope="row" className="py-1 pr-8 text-left font-mono font-normal">
+      <th scope="row" className="py-1 pr-4 sm:pr-8 text-left font-mono font-normal">
         {name}
       </th>
-      <td className="py-1 pr-8 text-right font-mono whitespace-nowrap">{percentFace(chance)}</td>
+      <td className="py-1 pr-4 sm:pr-8 text-right font-mono whitespace-nowrap">{percentFace(chance)}</td>
       <td className="py-1">{remark}</td>
     </tr>
   );

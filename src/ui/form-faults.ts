@@ -17,6 +17,8 @@ export function countFieldFaults(errors: FieldErrors): number {
 
 function countFaults(fault: unknown): number {
   if (typeof fault !== 'object' || fault === null || fault instanceof Element) return 0;
-  if ('type' in fault && typeof fault.type === 'string') return 1;
+  const isFault =
+    ('type' in fault && typeof fault.type === 'string') || ('message' in fault && typeof fault.message === 'string');
+  if (isFault) return 1;
   return Object.values(fault).reduce<number>((sum, inner) => sum + countFaults(inner), 0);
 }

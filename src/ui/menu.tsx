@@ -5,8 +5,7 @@ import { Caret } from './caret.tsx';
 
 const itemLook =
   'flex min-h-12 cursor-pointer items-center rounded px-3 text-ink no-underline outline-none ' +
-  'data-highlighted:bg-jacket-tint data-highlighted:outline-2 data-highlighted:-outline-offset-2 ' +
-  'data-highlighted:outline-ink data-disabled:cursor-not-allowed data-disabled:text-soft';
+  'data-highlighted:bg-ink data-highlighted:text-page data-disabled:cursor-not-allowed data-disabled:text-soft';
 
 type MenuProps = {
   /** What the button shows; also the menu's name. */

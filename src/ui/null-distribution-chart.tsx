@@ -62,6 +62,7 @@ export function NullDistributionChart({ bars, observed, limit, quantity }: NullD
             />
             <Tooltip
               isAnimationActive={false}
+              separator=" "
               cursor={{ fill: 'var(--color-rule)', opacity: 0.6 }}
               contentStyle={readoutLook}
               itemStyle={{ color: 'var(--color-ink)' }}
