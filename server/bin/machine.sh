@@ -8,6 +8,9 @@
 # An ordinary user's PATH lacks the folder of mariadbd.
 PATH=$PATH:/usr/sbin:/sbin
 
+# tsx takes the decorators' settings from here.
+export TSX_TSCONFIG_PATH=server/tsconfig.json
+
 # --- Sentences and steps ---------------------------------------------------------------------------------------------
 
 complain() { printf '\n%s\n' "$*" >&2; }
@@ -15,6 +18,14 @@ complain() { printf '\n%s\n' "$*" >&2; }
 give_up() {
   complain "$@"
   exit 1
+}
+
+# The same, with an exit code of one's own.
+give_up_with() {
+  local status=$1
+  shift
+  complain "$@"
+  exit "$((status == 0 ? 1 : status))"
 }
 
 notes=()
@@ -74,6 +85,9 @@ is_running() {
   state=$(sed -n 's/^State:[[:space:]]*\(.\).*/\1/p' "/proc/$1/status" 2>/dev/null) || return
   [[ -n $state && $state != Z ]]
 }
+
+# Whether a process was started by this script, which alone can be waited for.
+is_own_child() { [[ -n $1 && $(ps -o ppid= -p "$1" 2>/dev/null | tr -d ' ') == "$$" ]]; }
 
 # Waits until a process is gone; fails when it is still there after so many seconds.
 outlast() {
