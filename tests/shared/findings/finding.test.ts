@@ -1,0 +1,78 @@
+import { describe, expect, it } from 'vitest';
+import { analyseAbx } from '#shared/findings/analyse-abx.ts';
+import { type FindingContext, findingOf } from '#shared/findings/finding.ts';
+
+const context: FindingContext = {
+  cables: ['Northern run', 'Southern run'],
+  gate: { listenersBlind: true, commitmentsHold: true, allTrialsAccounted: true },
+  endedEarly: null,
+  setting: 'player, amplifier, loudspeakers',
+};
+
+/** A study in which each of some listeners is right in the first `right` trials; the last `silent` of them are missing. */
+function study(listeners: number, trials: number, right: number, silent = 0) {
+  return analyseAbx({
+    alpha: '0.05',
+    listenersPerSession: listeners,
+    trials: Array.from({ length: trials }, (_, index) => {
+      const truth = index % 3 === 0 ? ('A' as const) : ('B' as const);
+      const wrong = truth === 'A' ? ('B' as const) : ('A' as const);
+      return {
+        session: 1,
+        trial: index + 1,
+        truth,
+        answers: Array.from({ length: listeners }, (_unused, listener) => ({
+          listener: `L0${listener + 1}`,
+          choice: index >= trials - silent ? null : index < right ? truth : wrong,
+        })),
+      };
+    }),
+  });
+}
+
+const forbidden = [
+  /\bproves?\b/i,
+  /identical/i,
+  /cannot be heard/i,
+  /inaudible/i,
+  /95\s?% sure/i,
+  /probability of guessing/i,
+  /transparent/i,
+];
+
+describe('the finding', () => {
+  it('takes one row for each result, and no forbidden word ever [T8]', () => {
+    const rows = new Set<string>();
+    for (const listeners of [1, 2, 4])
+      for (const trials of [5, 8, 16, 24])
+        for (let right = 0; right <= trials; right += 1)
+          for (const silent of [0, 2])
+            for (const commitmentsHold of [true, false])
+              for (const endedEarly of [null, 'The room was needed.']) {
+                const gate = { ...context.gate, commitmentsHold };
+                const found = findingOf(study(listeners, trials, right, silent), { ...context, gate, endedEarly });
+                rows.add(found.row);
+                const said = [found.headline, ...found.modifiers, found.scope, found.maySay ?? ''];
+                expect(said.filter((words) => forbidden.some((word) => word.test(words)))).toEqual([]);
+                expect(found.headline.length).toBeGreaterThan(20);
+                expect(found.maySay === null).toBe(found.row === '0' || found.row === '1');
+              }
+    expect([...rows].sort()).toEqual(['0', '1', '2', '5']);
+  });
+
+  it('speaks of one listener, and of a panel as at least one of its members [T8]', () => {
+    expect(findingOf(study(1, 16, 12), context).headline).toBe(
+      'One listener told Northern run from Southern run more often than guessing allows.',
+    );
+    expect(findingOf(study(3, 16, 14), context).headline).toMatch(/^At least one panel member told/);
+  });
+
+  it('counts a missing answer as wrong [T9]', () => {
+    expect(study(1, 16, 14, 2)).toMatchObject({ answers: 16, missing: 2, correct: 14 });
+    expect(study(1, 16, 16, 5)).toMatchObject({ answers: 16, missing: 5, correct: 11, isSignificant: false });
+  });
+
+  it('always says that the level was not recorded [T8]', () => {
+    expect(findingOf(study(1, 16, 12), context).modifiers.join(' ')).toMatch(/Level at the load was not recorded/);
+  });
+});
