@@ -1,11 +1,12 @@
 import { useSuspenseQuery } from '@tanstack/react-query';
 import { type LoaderFunctionArgs, useNavigate, useParams, useSearchParams } from 'react-router-dom';
-import { sessionsApi } from '#shared/contracts/sessions.ts';
+import { type SessionRow, sessionsApi } from '#shared/contracts/sessions.ts';
 import { paths } from '../app/paths.ts';
 import { sessionQueries } from '../features/sessions/sessions.queries.ts';
 import { usePresence } from '../features/sign-in/membership.ts';
 import { SessionTable } from '../features/studies/overview/session-table.tsx';
 import { StudyOverview } from '../features/studies/overview/study-overview.tsx';
+import { upcomingOf } from '../features/studies/overview/upcoming-session.ts';
 import { studyQueries } from '../features/studies/studies.queries.ts';
 import { readListQuery, useListAddress } from '../lib/list-address.ts';
 import { queryClient } from '../lib/query-client.ts';
@@ -28,7 +29,8 @@ export async function loader({ params, request }: LoaderFunctionArgs) {
 }
 
 export function Component() {
-  const { organisationId } = usePresence().membership;
+  const { person, membership } = usePresence();
+  const { organisationId } = membership;
   const id = param(useParams(), 'id');
   const [search] = useSearchParams();
   const changeAddress = useListAddress();
@@ -36,6 +38,9 @@ export function Component() {
   const { data: study } = useSuspenseQuery(studyQueries.detail(organisationId, id));
   const { data: sessions } = useSuspenseQuery(sessionQueries.list(organisationId, sessionsOf(id, search)));
   const report = paths.report(organisationId, id);
+  const upcoming = upcomingOf(sessions.rows);
+  const consoleOf = (session: SessionRow) =>
+    session.proctorId === person.id ? paths.console(organisationId, session.id) : null;
 
   return (
     <StudyOverview
@@ -48,6 +53,7 @@ export function Component() {
         planSession: paths.planSession(organisationId, id),
         report,
       }}
+      upcoming={upcoming && { ...upcoming, consoleTo: consoleOf(upcoming) }}
       onDiscarded={() => navigate(paths.studies(organisationId), { replace: true })}
       onClosed={() => navigate(report)}
       sessions={
@@ -56,7 +62,7 @@ export function Component() {
           page={sessions.page}
           pageCount={sessions.pages}
           onPage={(page) => changeAddress({ page })}
-          hrefOf={(sessionId) => paths.console(organisationId, sessionId)}
+          consoleOf={consoleOf}
           empty={<p className="text-soft">None planned yet.</p>}
         />
       }

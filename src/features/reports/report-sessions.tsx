@@ -14,7 +14,7 @@ export function ReportSessions({ sessions, cables, method }: ReportSessionsProps
   return (
     <ReportSection
       title="Every session"
-      lede="Filled rings are locked trials, struck ones are void. What X was and what was answered was hidden from everybody until closing."
+      lede="Filled rings are locked trials, struck ones are void; in the tables the answers that matched X are bold. What X was and what was answered was hidden from everybody until closing."
     >
       {sessions.length === 0 ? <p className="text-soft">No session was opened.</p> : null}
       <ol className="flex flex-col gap-8">

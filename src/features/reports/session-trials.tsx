@@ -1,5 +1,6 @@
 import type { Report } from '#shared/contracts/reports.ts';
 import type { Method } from '#shared/methods/method.ts';
+import { classNames } from '../../ui/class-names.ts';
 import { DataTable } from '../../ui/data-table.tsx';
 import type { Column } from '../../ui/table-column.ts';
 
@@ -22,9 +23,8 @@ export function SessionTrials({ session, method }: { session: Session; method: M
 }
 
 function columnsFor({ trials }: Session, method: Method): Column<Trial>[] {
-  const hasMissing = trials.some(({ answers }) => answers.some(({ choice }) => choice === null));
+  const hasMissing = trials.some((trial) => missingIn(trial).length > 0);
   const hasLongChanges = trials.some(({ longChanges }) => longChanges > 0);
-  const answered = (choice: string | null) => (trial: Trial) => listenersOf(trial, choice);
   return [
     {
       key: 'trial',
@@ -37,9 +37,11 @@ function columnsFor({ trials }: Session, method: Method): Column<Trial>[] {
     ...method.options.map(({ value }) => ({
       key: value,
       header: `Answered ${value}`,
-      cell: answered(value),
+      cell: (trial: Trial) => <Labels of={answeredIn(trial, value)} isRight={method.isRight(value, trial.truth)} />,
     })),
-    ...(hasMissing ? [{ key: 'missing', header: 'Missing', cell: answered(null) }] : []),
+    ...(hasMissing
+      ? [{ key: 'missing', header: 'Missing', cell: (trial: Trial) => <Labels of={missingIn(trial)} /> }]
+      : []),
     { key: 'matched', header: 'Matched', isFigure: true, cell: (trial) => matchedOf(trial, method) },
     ...(hasLongChanges
       ? [{ key: 'long', header: 'Long changes', isFigure: true, cell: ({ longChanges }: Trial) => longChanges }]
@@ -47,13 +49,18 @@ function columnsFor({ trials }: Session, method: Method): Column<Trial>[] {
   ];
 }
 
-function listenersOf({ answers }: Trial, choice: string | null) {
-  const labels = answers.filter((answer) => answer.choice === choice).map(({ listener }) => listener);
-  return labels.length === 0 ? (
-    <span className="text-soft">none</span>
-  ) : (
-    <span className="font-mono">{labels.join(' ')}</span>
-  );
+function answeredIn({ answers }: Trial, choice: string | null): string[] {
+  return answers.filter((answer) => answer.choice === choice).map(({ listener }) => listener);
+}
+
+/** Nobody owes an answer to a trial that was set aside. */
+function missingIn(trial: Trial): string[] {
+  return trial.outcome === 'locked' ? answeredIn(trial, null) : [];
+}
+
+function Labels({ of, isRight = false }: { of: readonly string[]; isRight?: boolean }) {
+  if (of.length === 0) return <span className="text-soft">none</span>;
+  return <span className={classNames('font-mono', isRight && 'font-bold')}>{of.join(' ')}</span>;
 }
 
 /** A void trial is shown, answers and all, and does not count. */

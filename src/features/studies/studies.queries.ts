@@ -5,6 +5,8 @@ import { call } from '../../lib/call.ts';
 
 export type StudyListQuery = QueryOf<typeof studiesApi.list>;
 
+const followingMs = 15_000;
+
 export const studyQueries = {
   all: () => ['studies'] as const,
   list: (organisationId: string, query: StudyListQuery) =>
@@ -16,6 +18,8 @@ export const studyQueries = {
     queryOptions({
       queryKey: [...studyQueries.all(), 'detail', organisationId, id],
       queryFn: ({ signal }) => call(studiesApi.get, { params: { organisationId, id } }, signal),
+      // While sessions are held somebody may be watching how far they are.
+      refetchInterval: ({ state }) => (state.data?.state === 'collecting' ? followingMs : false),
     }),
 };
 

@@ -12,7 +12,8 @@ type SessionTableProps = {
   pageCount: number;
   onPage: (page: number) => void;
   empty: ReactNode;
-  hrefOf: (id: string) => string;
+  /** Where to lead this session from; null for whoever does not lead it. */
+  consoleOf: (session: SessionRow) => string | null;
 };
 
 const phases: Record<SessionRow['phase'], { word: string; tone: 'neutral' | 'held' | 'now' | 'amber' }> = {
@@ -25,29 +26,25 @@ const phases: Record<SessionRow['phase'], { word: string; tone: 'neutral' | 'hel
 };
 
 /** The sessions of one study. Numbers have no gaps: an opened session keeps its own for good. */
-export function SessionTable({ hrefOf, ...table }: SessionTableProps) {
+export function SessionTable({ consoleOf, ...table }: SessionTableProps) {
   return (
     <DataTable
       caption="Sessions of this study"
       isCaptionShown
-      columns={columnsFor(hrefOf)}
+      columns={columnsFor(consoleOf)}
       rowKey={({ id }) => id}
       {...table}
     />
   );
 }
 
-function columnsFor(hrefOf: (id: string) => string): Column<SessionRow>[] {
+function columnsFor(consoleOf: SessionTableProps['consoleOf']): Column<SessionRow>[] {
   return [
     {
       key: 'number',
       header: 'Session',
       isRowHeader: true,
-      cell: ({ id, number }) => (
-        <Link to={hrefOf(id)} className="whitespace-nowrap">
-          Session {number}
-        </Link>
-      ),
+      cell: (session) => <SessionName number={session.number} to={consoleOf(session)} />,
     },
     {
       key: 'phase',
@@ -65,4 +62,9 @@ function columnsFor(hrefOf: (id: string) => string): Column<SessionRow>[] {
       cell: ({ trialsLocked, trials }) => `${trialsLocked}\u00a0of\u00a0${trials}`,
     },
   ];
+}
+
+function SessionName({ number, to }: { number: number; to: string | null }) {
+  const name = `Session\u00a0${number}`;
+  return to === null ? name : <Link to={to}>{name}</Link>;
 }

@@ -6,6 +6,8 @@ import { DiscardDraft } from './discard-draft.tsx';
 import { NextStep } from './next-step.tsx';
 import { RecordDeviation } from './record-deviation.tsx';
 import { SealStudy } from './seal-study.tsx';
+import { SessionActs } from './session-acts.tsx';
+import { type UpcomingSession, upcomingTitle, upcomingWords } from './upcoming-session.ts';
 
 export type StudyPlaces = { edit: string; codes: string; planSession: string; report: string };
 
@@ -13,6 +15,8 @@ type StudyNextStepProps = {
   organisationId: string;
   study: Study;
   places: StudyPlaces;
+  /** The session that runs, or the next one to run. */
+  upcoming: UpcomingSession | null;
   onDiscarded: () => void;
   onClosed: () => void;
 };
@@ -71,27 +75,27 @@ const codesWords: Record<Study['codes'], { title: string; say: (holder: string) 
   },
 };
 
-function SealedStep({ organisationId, study, places }: StudyNextStepProps) {
+function SealedStep({ organisationId, study, places, upcoming }: StudyNextStepProps) {
   const { title, say } = codesWords[study.codes];
+  const isCoded = study.codes === 'confirmed';
   return (
     <NextStep
-      title={title}
+      title={isCoded && upcoming ? upcomingTitle(upcoming) : title}
       actions={
         <>
-          <LinkButton variant="primary" to={places.planSession}>
-            Plan a session
-          </LinkButton>
+          <SessionActs upcoming={upcoming} planTo={places.planSession} />
           <LinkButton to={places.codes}>See where the codes stand</LinkButton>
           <RecordDeviation organisationId={organisationId} studyId={study.id} />
         </>
       }
     >
       <p>{say(study.codeHolder)}</p>
+      {upcoming ? <p>{upcomingWords(upcoming)}</p> : null}
     </NextStep>
   );
 }
 
-function CollectingStep({ organisationId, study, places, onClosed }: StudyNextStepProps) {
+function CollectingStep({ organisationId, study, places, upcoming, onClosed }: StudyNextStepProps) {
   const { closing, progress } = study;
   const close = <CloseStudy organisationId={organisationId} study={study} onClosed={onClosed} />;
   const isReady = closing.allowed && closing.complete;
@@ -100,16 +104,14 @@ function CollectingStep({ organisationId, study, places, onClosed }: StudyNextSt
       title={titleOf(isReady, progress)}
       actions={
         <>
-          {isReady ? close : null}
-          <LinkButton variant={isReady ? 'plain' : 'primary'} to={places.planSession}>
-            Plan a session
-          </LinkButton>
+          {isReady ? close : <SessionActs upcoming={upcoming} planTo={places.planSession} />}
           <RecordDeviation organisationId={organisationId} studyId={study.id} />
         </>
       }
       stop={closing.allowed && !closing.complete ? close : null}
     >
       <p>{closing.why}</p>
+      {upcoming ? <p>{upcomingWords(upcoming)}</p> : null}
     </NextStep>
   );
 }

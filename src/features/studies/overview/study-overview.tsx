@@ -8,11 +8,13 @@ import { Protocol } from './protocol.tsx';
 import { SealFacts } from './seal-facts.tsx';
 import { StudyNextStep, type StudyPlaces } from './study-next-step.tsx';
 import { StudyProgress } from './study-progress.tsx';
+import type { UpcomingSession } from './upcoming-session.ts';
 
 type StudyOverviewProps = {
   organisationId: string;
   study: Study;
   places: StudyPlaces & { all: string };
+  upcoming: UpcomingSession | null;
   onDiscarded: () => void;
   onClosed: () => void;
   /** The table of its sessions. */
