@@ -13,7 +13,8 @@ const quiet = [
 export default defineConfig({
   testDir: '.',
   outputDir: '../../test-results',
-  timeout: 180_000,
+  timeout: 420_000,
+  expect: { timeout: 15_000 },
   workers: 1,
   reporter: [
     ['line'],

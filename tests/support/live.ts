@@ -21,7 +21,7 @@ export class LivePage<View> {
   readonly socket: Socket;
 
   constructor(address: string, auth: object, cookie?: string) {
-    const extraHeaders = cookie === undefined ? {} : { cookie };
+    const extraHeaders: Record<string, string> = cookie === undefined ? {} : { cookie };
     this.socket = io(address, {
       auth,
       extraHeaders,

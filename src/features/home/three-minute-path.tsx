@@ -32,6 +32,7 @@ export function ThreeMinutePath({ session, proctor, manager, places }: ThreeMinu
   const consoleTo = session === null ? places.start : places.console(session.id);
   const studyTo = session === null ? places.start : places.study(session.studyId);
   const reportTo = session === null ? places.start : places.report(session.studyId);
+  const hasEnded = session !== null && !session.isOpen;
   return (
     <section aria-labelledby="three-minutes" className="border-t-2 border-ink pt-5">
       <h2 id="three-minutes" className="text-xl">
@@ -53,7 +54,7 @@ export function ThreeMinutePath({ session, proctor, manager, places }: ThreeMinu
         <Step number={4} title="Close the study as the manager" act={act(manager, studyTo, 'Open the study')}>
           {manager.name} closes it. Only then are the secrets opened and the answers counted, once.
         </Step>
-        <Step number={5} title="Read the report" act={act(manager, reportTo, 'Read the report')}>
+        <Step number={5} title="Read the report" act={hasEnded ? act(manager, reportTo, 'Read the report') : undefined}>
           It says what was found, what may be said of it, and how anybody can check.
         </Step>
       </ol>

@@ -18,7 +18,7 @@ export function WaitingList({ items, places }: WaitingListProps) {
             className="flex flex-wrap items-center justify-between gap-x-10 gap-y-4 border-b border-rule py-5"
           >
             <div className="min-w-0 flex-1 basis-72">
-              <h3 className="text-lg">{item.title}</h3>
+              <h2 className="text-lg">{item.title}</h2>
               <p>{item.detail}</p>
               <p className="text-soft">
                 Since <time dateTime={item.since}>{formatDateTime(item.since)}</time>

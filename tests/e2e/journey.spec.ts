@@ -1,0 +1,235 @@
+import { execFileSync } from 'node:child_process';
+import AxeBuilder from '@axe-core/playwright';
+import { type Browser, expect, type Page, test } from '@playwright/test';
+import type { Report } from '#shared/contracts/reports.ts';
+import { type RunningFairlead, runFairlead } from './run-fairlead.ts';
+
+// A proctor and three phones at once: plan, seal, code, seat, 8 trials with one void and one phone offline in the middle,
+// close, report. The figures are compared with what R makes of the same answers.
+
+let fairlead: RunningFairlead;
+test.beforeAll(async () => {
+  fairlead = await runFairlead();
+});
+test.afterAll(async () => {
+  await fairlead.stop();
+});
+
+async function signIn(browser: Browser, name: string): Promise<Page> {
+  const context = await browser.newContext({ viewport: { width: 1440, height: 900 } });
+  const page = await context.newPage();
+  await page.goto(`${fairlead.address}/sign-in`);
+  await page.getByRole('button', { name: `Sign in as ${name}` }).click();
+  await page.waitForURL(/organisations/);
+  return page;
+}
+
+async function expectAccessible(page: Page, what: string): Promise<void> {
+  const { violations } = await new AxeBuilder({ page }).analyze();
+  const grave = violations.filter(({ impact }) => impact === 'serious' || impact === 'critical');
+  expect(grave.map(({ id, nodes }) => `${what}: ${id} at ${nodes[0]?.target.join(' ')}`)).toEqual([]);
+}
+
+/** What R makes of the answers: the exact convolution over the draws, answers held fixed, and binom.test per listener. */
+function fromR(trials: { truth: string; choices: (string | null)[] }[]): {
+  correct: number;
+  p: number;
+  listenerP: number[];
+} {
+  const listeners = trials[0]?.choices.length ?? 0;
+  const lines = trials.map(({ truth, choices }) => {
+    const count = (label: string) => choices.filter((choice) => choice === label).length;
+    return `c(${count('A')},${count('B')},${truth === 'A' ? 1 : 2})`;
+  });
+  const right = Array.from(
+    { length: listeners },
+    (_, index) => trials.filter(({ truth, choices }) => choices[index] === truth).length,
+  );
+  const script = `
+    trials <- list(${lines.join(',')})
+    dist <- c(1); observed <- 0
+    for (t in trials) {
+      next_dist <- numeric(length(dist) + max(t[1:2]))
+      for (label in 1:2) { k <- t[label]; next_dist[k + seq_along(dist)] <- next_dist[k + seq_along(dist)] + dist / 2 }
+      dist <- next_dist; observed <- observed + t[t[3]]
+    }
+    p <- sum(dist[(observed + 1):length(dist)])
+    per <- sapply(c(${right.join(',')}), function(k) binom.test(k, ${trials.length}, alternative = "greater")$p.value)
+    cat(sprintf("%.15g", c(observed, p, per)), sep = " ")
+  `;
+  const [correct = Number.NaN, p = Number.NaN, ...listenerP] = execFileSync('Rscript', ['-e', script], {
+    encoding: 'utf8',
+  })
+    .trim()
+    .split(' ')
+    .map(Number);
+  return { correct, p, listenerP };
+}
+
+async function planStudy(page: Page): Promise<void> {
+  const reply = await page.request.get(`${fairlead.address}/api/me`);
+  const organisation = (await reply.json()).person.memberships[0].organisationId;
+  const base = `${fairlead.address}/api/organisations/${organisation}`;
+  const { cables } = await (await page.request.get(`${base}/cables/choices`)).json();
+  const { members } = await (await page.request.get(`${base}/members`)).json();
+  const holder = members.find(({ name }: { name: string }) => name === 'Ines Halloran');
+  const pair = cables.slice(0, 2).map(({ id, specimens }: { id: string; specimens: { id: string }[] }) => ({
+    cableId: id,
+    specimenIds: specimens.map((specimen) => specimen.id),
+  }));
+  const draft = {
+    title: 'Study Dunlin',
+    question: 'Can three listeners tell the two cables apart?',
+    method: 'abx',
+    cables: pair,
+    sessions: 1,
+    listenersPerSession: 3,
+    trials: 8,
+    spares: 2,
+    alphaPerMille: 50,
+    programme: [{ title: 'Piano', lengthS: 2, start: '0:10' }],
+    rig: 'loudspeaker',
+    chain: 'Player, amplifier, loudspeakers',
+    changeS: 3,
+    answerS: 60,
+    confidence: false,
+    codeHolderId: holder.id,
+  };
+  const made = await page.request.post(`${base}/studies`, { data: draft });
+  expect(made.status()).toBe(200);
+  await page.goto(`${fairlead.address}/organisations/${organisation}/studies/${(await made.json()).id}`);
+}
+
+test('a study from its plan to a report that R agrees with [R1] [S1] [S13]', async ({ browser }) => {
+  const manager = await signIn(browser, 'Maren Oduya');
+  await planStudy(manager);
+  await expect(manager.getByRole('heading', { level: 1 })).toContainText('Study Dunlin');
+  await expectAccessible(manager, 'draft');
+  const studyAddress = manager.url();
+  await manager.getByRole('button', { name: /^Seal/ }).first().click();
+  await manager.getByRole('alertdialog').getByRole('button', { name: /^Seal/ }).click();
+  await expect(manager.getByRole('alertdialog')).toBeHidden();
+
+  const holder = await signIn(browser, 'Ines Halloran');
+  await holder.goto(`${studyAddress}/codes`);
+  await expectAccessible(holder, 'codes');
+  const apiAddress = studyAddress.replace('/organisations/', '/api/organisations/');
+  await holder.request.post(`${apiAddress}/codes/draw`, { data: {} });
+  await holder.request.post(`${apiAddress}/codes/confirm`, { data: {} });
+
+  const organisationApi = apiAddress.replace(/\/studies\/.*/, '');
+  const { members } = await (await manager.request.get(`${organisationApi}/members`)).json();
+  const proctorId = members.find(({ name }: { name: string }) => name === 'Tomas Brandt').id;
+  const planned = await manager.request.post(`${apiAddress}/sessions`, {
+    data: { plannedAt: new Date().toISOString(), room: 'Room B', proctorId },
+  });
+  const sessionId = (await planned.json()).id;
+
+  const desk = await signIn(browser, 'Tomas Brandt');
+  await desk.goto(`${studyAddress.replace(/\/studies\/.*/, '')}/sessions/${sessionId}/console`);
+  await desk.getByText('Before anybody is seated').waitFor();
+  await expectAccessible(desk, 'cautions');
+  for (const box of await desk.locator('section input[type=checkbox]').all()) await box.check();
+  await desk.getByRole('button', { name: 'Confirm the cautions' }).click();
+  await desk.getByRole('button', { name: 'Open seating' }).click();
+  const code = await desk.locator('[data-session-code]').getAttribute('data-session-code');
+  await expectAccessible(desk, 'seating');
+
+  const phones: Page[] = [];
+  for (const place of ['Left', 'Middle', 'Right']) {
+    const context = await browser.newContext({ viewport: { width: 390, height: 844 }, hasTouch: true });
+    const phone = await context.newPage();
+    await phone.goto(`${fairlead.address}/listen/${code}`);
+    await phone.getByRole('button', { name: 'Look it up' }).click();
+    await phone.getByLabel('I am an adult').check();
+    await phone.getByLabel('I agree to take part').check();
+    await phone.getByLabel(/Where do you sit/).fill(place);
+    if (phones.length === 0) await expectAccessible(phone, 'consent');
+    await phone.getByRole('button', { name: 'Take the seat' }).click();
+    await phone.getByText(/You are seated as/).waitFor();
+    phones.push(phone);
+  }
+  const [first, second, third] = phones as [Page, Page, Page];
+
+  const present = async () => {
+    for (const step of ['mute', 'unplug', 'fit', 'check']) await desk.locator(`[data-step=${step}]`).click();
+    await expect(desk.locator('[data-step=unmute]')).toBeEnabled();
+    await desk.locator('[data-step=unmute]').click();
+    await desk.getByText('They are listening').waitFor();
+    await desk.getByText('They are listening').waitFor({ state: 'hidden' });
+  };
+  const answer = async (phone: Page, choice: string) => {
+    await phone.getByText(`X was the same as ${choice}`).click();
+    await phone.getByRole('button', { name: `Send ${choice}` }).click();
+  };
+
+  await desk.getByRole('button', { name: 'Close seating and fix the draw' }).click();
+  await desk.getByRole('button', { name: 'Begin the familiarisation' }).click();
+  await present();
+  await present();
+
+  const pattern = ['A', 'B', 'B', 'A', 'A', 'B', 'A', 'B', 'B'];
+  for (let trial = 1; trial <= 9; trial += 1) {
+    await desk.getByRole('button', { name: `Begin trial ${trial}` }).click();
+    for (let count = 0; count < 3; count += 1) await present();
+    const choice = pattern[trial - 1] ?? 'A';
+    if (trial === 3) {
+      await desk.getByRole('button', { name: 'Void this trial' }).click();
+      await desk.getByLabel('Reason').selectOption('noise');
+      await desk.getByRole('button', { name: 'Set the trial aside' }).click();
+      await first.getByText('Trial 3 was set aside').waitFor();
+      continue;
+    }
+    await answer(first, choice);
+    await first.getByText('held by the server').waitFor();
+    await answer(third, choice === 'A' ? 'B' : 'A');
+    if (trial === 5) {
+      // The second phone loses the network, is tapped all the same, and comes back within the window.
+      await second.context().setOffline(true);
+      await desk.getByText('away').waitFor();
+      await answer(second, choice);
+      await expect(second.getByText('still on this phone')).toBeVisible();
+      await second.context().setOffline(false);
+      await expect(second.getByText('held by the server')).toBeVisible({ timeout: 20_000 });
+    } else {
+      await answer(second, choice);
+    }
+    if (trial === 6) {
+      // A phone that is reloaded comes back to where it was.
+      await second.getByText('held by the server').waitFor();
+      await second.reload();
+      await expect(second.getByText(`${choice}, held by the server`)).toBeVisible();
+      await expectAccessible(second, 'held');
+    }
+    await desk.getByRole('button', { name: `Lock trial ${trial}` }).click();
+  }
+  await desk.getByRole('button', { name: 'Finish the session' }).click();
+  await desk.getByText('The session is finished').waitFor();
+  await first.getByText('Your receipts').waitFor();
+  await expect(first.locator('ol > li')).toHaveCount(8);
+
+  await manager.goto(studyAddress);
+  await manager
+    .getByRole('button', { name: /^Close/ })
+    .first()
+    .click();
+  await manager
+    .getByRole('alertdialog')
+    .getByRole('button', { name: /^Close/ })
+    .click();
+  await expect(manager.getByRole('alertdialog')).toBeHidden();
+  await manager.goto(`${studyAddress}/report`);
+  await expect(manager.getByRole('heading', { name: 'What you may say' })).toBeVisible();
+  await expectAccessible(manager, 'report');
+
+  const report: Report = await (await manager.request.get(`${apiAddress}/report`)).json();
+  expect(report.record.checks.filter(({ outcome }) => outcome !== 'pass')).toEqual([]);
+  const locked = (report.sessions[0]?.trials ?? []).filter(({ outcome }) => outcome === 'locked');
+  expect(locked.map(({ trial }) => trial)).toEqual([1, 2, 4, 5, 6, 7, 8, 9]);
+  expect(locked.map(({ answers }) => answers[0]?.choice)).toEqual(pattern.filter((_, index) => index !== 2));
+  const r = fromR(locked.map(({ truth, answers }) => ({ truth, choices: answers.map(({ choice }) => choice) })));
+  expect(report.result.correct).toBe(r.correct);
+  expect(Number(report.result.p.value)).toBeCloseTo(r.p, 11);
+  expect(report.result.byListener.map(({ p }) => Number(p).toFixed(10))).toEqual(r.listenerP.map((p) => p.toFixed(10)));
+  await expect(manager.getByText(`${r.correct} / 24`)).toBeVisible();
+});
