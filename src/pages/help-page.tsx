@@ -33,11 +33,11 @@ export function Component() {
         <Section title="Words you will meet">
           <dl className="space-y-3">
             <Term word="Neutral title">names a study without telling maker, model, material or price.</Term>
-            <Term word="Blind code">three figures on a specimen’s sleeve, drawn for one study.</Term>
-            <Term word="Trial">one question to every listener present; in ABX: was X the same as A or as B?</Term>
-            <Term word="Void">a trial set aside for a stated fault before it locks; a spare takes its place.</Term>
+            <Term word="Blind code">is three figures on a specimen’s sleeve, drawn for one study.</Term>
+            <Term word="Trial">is one question to every listener present; in ABX: was X the same as A or as B?</Term>
+            <Term word="Void">is a trial set aside for a stated fault before it locks; a spare takes its place.</Term>
             <Term word="Record">
-              every step of a study, each entry bound to the one before, so that no one can be changed unseen.
+              is every step of a study, each entry bound to the one before, so that none can be changed unseen.
             </Term>
           </dl>
         </Section>

@@ -20,24 +20,26 @@ function ProblemShown({ problem }: { problem: Problem }) {
   useDocumentTitle(problem.title);
   const isWorthRepeating = problem.status >= 500 || problem.status === 0;
   return (
-    <ErrorState
-      title={problem.title}
-      detail={problem.message}
-      kept={isWorthRepeating ? 'Everything saved before is kept.' : undefined}
-      requestId={problem.instance}
-      actions={
-        <>
-          {isWorthRepeating ? (
-            <Button variant="primary" onClick={() => window.location.reload()}>
-              Try again
-            </Button>
-          ) : null}
-          <LinkButton variant={isWorthRepeating ? 'plain' : 'primary'} to={paths.start()}>
-            Go to the start
-          </LinkButton>
-        </>
-      }
-    />
+    <>
+      <h1 className="sr-only">{problem.title}</h1>
+      <ErrorState
+        title={problem.title}
+        detail={problem.message}
+        requestId={problem.instance?.replace('urn:uuid:', '')}
+        actions={
+          <>
+            {isWorthRepeating ? (
+              <Button variant="primary" onClick={() => window.location.reload()}>
+                Try again
+              </Button>
+            ) : null}
+            <LinkButton variant={isWorthRepeating ? 'plain' : 'primary'} to={paths.start()}>
+              Go to the start
+            </LinkButton>
+          </>
+        }
+      />
+    </>
   );
 }
 

@@ -62,7 +62,7 @@ export function Component() {
 
 function ledeOf({ draft, progress }: Study): string {
   const registered = `${draft.sessions} ${draft.sessions === 1 ? 'session is' : 'sessions are'} registered`;
-  return `${registered}, ${progress.sessionsPlanned} planned so far. A session that opens keeps its number for good.`;
+  return `${registered}, ${progress.sessionsPlanned} planned so far. Once planned, a session keeps its number for good.`;
 }
 
 function hindranceOf({ state }: Study): string | null {

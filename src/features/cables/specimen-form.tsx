@@ -50,7 +50,7 @@ export function SpecimenForm({ values, save, onSaved, saveWord, onCancel, 'aria-
         aria-label={label}
         actions={
           <Actions>
-            <Button type="submit" busy={isSubmitting} busyLabel="Saving">
+            <Button type="submit" variant="primary" busy={isSubmitting} busyLabel="Saving">
               {saveWord}
             </Button>
             {onCancel === undefined ? null : (

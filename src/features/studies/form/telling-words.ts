@@ -16,14 +16,12 @@ export function tellingWords(title: string, cableNames: readonly string[]): stri
   return [...new Set(wordsOf(title).filter((word) => told.has(word)))];
 }
 
+/** Runs of letters and figures; a decimal such as 0.5 is one word. */
 function wordsOf(text: string): string[] {
-  return text
-    .toLocaleLowerCase('en')
-    .split(/[^\p{L}\p{N}]+/u)
-    .filter((word) => word !== '');
+  return text.toLocaleLowerCase('en').match(/\p{N}+[.,]\p{N}+|[\p{L}\p{N}]+/gu) ?? [];
 }
 
-/** "3 m" tells nothing; "12a" and "silver" do. */
+/** "3 m" tells nothing; "0.5", "12a" and "silver" do. */
 function isTelling(word: string): boolean {
   return word.length >= 3 || (word.length === 2 && /\p{N}/u.test(word));
 }

@@ -110,7 +110,7 @@ function CollectingStep({ organisationId, study, places, upcoming, onClosed }: S
       }
       stop={closing.allowed && !closing.complete ? close : null}
     >
-      <p>{closing.why}</p>
+      <p>{closing.allowed ? closing.why : `It cannot be closed yet. ${closing.why}`}</p>
       {upcoming ? <p>{upcomingWords(upcoming)}</p> : null}
     </NextStep>
   );
