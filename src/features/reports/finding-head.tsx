@@ -27,7 +27,7 @@ export function FindingHead({ report, back }: { report: Report; back: { to: stri
 /** "48 answers in 16 trials by 3 listeners in 1 session, double-blind to the cable. ..." */
 function courseWords({ result, rung, flow }: Report): string {
   const { answers, trials, listeners, sessions, listenersPerSession } = result;
-  const who = `${formatCount(listeners, 'listener')} ${listenersPerSession === 1 ? 'one at a time ' : ''}in ${formatCount(sessions, 'session')}`;
+  const who = `${formatCount(listeners, 'listener')}${listenersPerSession === 1 && listeners > 1 ? ', one at a time,' : ''} in ${formatCount(sessions, 'session')}`;
   const course = `${formatCount(answers, 'answer')} due in ${formatCount(trials, 'trial')}, by ${who}, ${rung.name}.`;
   const voids =
     flow.trialsVoid === 0

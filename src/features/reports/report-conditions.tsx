@@ -1,5 +1,5 @@
 import type { Report } from '#shared/contracts/reports.ts';
-import { formatDate } from '../../lib/format.ts';
+import { formatCount, formatDate } from '../../lib/format.ts';
 import { type Fact, Facts } from '../../ui/facts.tsx';
 import { levelOf } from './report-words.ts';
 
@@ -28,7 +28,14 @@ export function ReportConditions({ report }: { report: Report }) {
     ...(result.critical ? [{ label: 'Right answers needed', value: result.critical.count }] : []),
     ...(endedEarly === null
       ? []
-      : [{ label: 'Ended early', value: endedEarly, isWords: true, tone: 'amber' as const }]),
+      : [
+          {
+            label: 'Ended early',
+            value: `at ${formatCount(result.trials, 'trial')}`,
+            isWords: true,
+            tone: 'amber' as const,
+          },
+        ]),
   ];
   return (
     <section aria-labelledby="conditions" className="flex flex-col gap-8 print:mt-8">

@@ -54,11 +54,15 @@ export function useDiscardStudy(organisationId: string, id: string) {
   });
 }
 
-export function useSealStudy(organisationId: string, id: string) {
-  const onSuccess = useRefresh();
+/** What follows is told to the mutation itself: the button that began it goes as soon as the study is refetched. */
+export function useSealStudy(organisationId: string, id: string, onSealed: () => void) {
+  const refresh = useRefresh();
   return useMutation({
     mutationFn: () => call(studiesApi.seal, { params: { organisationId, id }, body: {} }),
-    onSuccess,
+    onSuccess: () => {
+      onSealed();
+      return refresh();
+    },
   });
 }
 
@@ -70,10 +74,14 @@ export function useDeviate(organisationId: string, id: string) {
   });
 }
 
-export function useCloseStudy(organisationId: string, id: string) {
-  const onSuccess = useRefresh();
+/** As with sealing, what follows outlives the button. */
+export function useCloseStudy(organisationId: string, id: string, onClosed: () => void) {
+  const refresh = useRefresh();
   return useMutation({
     mutationFn: (reason: string) => call(studiesApi.close, { params: { organisationId, id }, body: { reason } }),
-    onSuccess,
+    onSuccess: () => {
+      onClosed();
+      return refresh();
+    },
   });
 }

@@ -10,7 +10,7 @@ type CloseStudyProps = { organisationId: string; study: Study; onClosed: () => v
 /** Complete: one question. Not complete: a reason as well. */
 export function CloseStudy({ organisationId, study, onClosed }: CloseStudyProps) {
   const [isOpen, setOpen] = useState(false);
-  const close = useCloseStudy(organisationId, study.id);
+  const close = useCloseStudy(organisationId, study.id, onClosed);
   const { complete } = study.closing;
 
   return (
@@ -33,7 +33,7 @@ export function CloseStudy({ organisationId, study, onClosed }: CloseStudyProps)
           : { reason: { label: 'Why it ends early', hint: 'Goes on the record and stands in the report.' } })}
         busy={close.isPending}
         problem={close.error ? problemText(close.error) : undefined}
-        onConfirm={(reason) => close.mutate(reason, { onSuccess: onClosed })}
+        onConfirm={(reason) => close.mutate(reason)}
       />
     </>
   );

@@ -11,17 +11,11 @@ type SealStudyProps = { organisationId: string; study: Study };
 
 export function SealStudy({ organisationId, study }: SealStudyProps) {
   const [isOpen, setOpen] = useState(false);
-  const seal = useSealStudy(organisationId, study.id);
   const toast = useToast();
-
-  function confirm() {
-    seal.mutate(undefined, {
-      onSuccess: () => {
-        setOpen(false);
-        toast('The protocol is sealed.', 'held');
-      },
-    });
-  }
+  const seal = useSealStudy(organisationId, study.id, () => {
+    setOpen(false);
+    toast('The protocol is sealed.', 'held');
+  });
 
   return (
     <>
@@ -40,7 +34,7 @@ export function SealStudy({ organisationId, study }: SealStudyProps) {
         keepWord="Keep the draft"
         busy={seal.isPending}
         problem={seal.error ? problemText(seal.error) : undefined}
-        onConfirm={confirm}
+        onConfirm={() => seal.mutate()}
       />
     </>
   );

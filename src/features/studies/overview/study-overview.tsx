@@ -41,7 +41,7 @@ export function StudyOverview({ study, places, sessions, ...acts }: StudyOvervie
       />
       <div className="flex flex-col gap-10">
         <StudyNextStep study={study} places={places} {...acts} />
-        {isSealed ? <StudyProgress draft={study.draft} progress={study.progress} /> : null}
+        {isSealed ? <StudyProgress state={study.state} draft={study.draft} progress={study.progress} /> : null}
         {isSealed ? sessions : null}
         <div className="grid gap-x-16 gap-y-10 lg:grid-cols-[minmax(0,1fr)_24rem] lg:items-start">
           <Protocol study={study} />

@@ -1,8 +1,9 @@
 import type { Study } from '#shared/contracts/studies.ts';
+import { formatCount } from '../../../lib/format.ts';
 import { Progress } from '../../../ui/progress.tsx';
 
 /** How far the study has come: sessions and locked trials, never answers. */
-export function StudyProgress({ draft, progress }: Pick<Study, 'draft' | 'progress'>) {
+export function StudyProgress({ state, draft, progress }: Pick<Study, 'state' | 'draft' | 'progress'>) {
   const { sessionsOpened, sessionsEnded, trialsLocked, trialsRegistered } = progress;
   return (
     <section aria-label="Progress" className="flex flex-col gap-5">
@@ -21,11 +22,13 @@ export function StudyProgress({ draft, progress }: Pick<Study, 'draft' | 'progre
         />
       </div>
       <p className="text-soft">
-        {sessionsOpened === 0
-          ? 'No session has opened yet.'
-          : `${sessionsOpened} opened so far; every opened session counts, abandoned ones too.`}{' '}
-        Scores stay hidden from everybody until the study is closed.
+        {sessionsOpened === 0 ? 'No session has opened yet.' : openedWords(sessionsOpened)}{' '}
+        {state === 'closed' ? '' : 'Scores stay hidden from everybody until the study is closed.'}
       </p>
     </section>
   );
+}
+
+function openedWords(sessionsOpened: number): string {
+  return `${formatCount(sessionsOpened, 'session')} opened; every opened session counts, abandoned ones too.`;
 }
