@@ -36,7 +36,7 @@ step() {
   shift
   notes=()
   printf '%-18s' "$name"
-  "$@" || return
+  "$@" || return 1
   tenths=$(((${EPOCHREALTIME//[!0-9]/} - begun + 50000) / 100000))
   printf '%6s s\n' "$((tenths / 10)).$((tenths % 10))"
   ((${#notes[@]} == 0)) || printf '%s\n' "${notes[@]}"
@@ -45,7 +45,7 @@ step() {
 # Runs a command without its output, of which the end is shown when it fails.
 quietly() {
   local path log status=0
-  path=$(mktemp) || return
+  path=$(mktemp) || return 1
   exec {log}<>"$path"
   rm -f "$path"
   "$@" >&"$log" 2>&1 || status=$?
@@ -80,9 +80,10 @@ attend() {
   return "$status"
 }
 
+# Returns name their status: within a trap a bare return would give that of the command before it.
 is_running() {
   local state
-  state=$(sed -n 's/^State:[[:space:]]*\(.\).*/\1/p' "/proc/$1/status" 2>/dev/null) || return
+  state=$(sed -n 's/^State:[[:space:]]*\(.\).*/\1/p' "/proc/$1/status" 2>/dev/null) || return 1
   [[ -n $state && $state != Z ]]
 }
 
@@ -93,7 +94,7 @@ is_own_child() { [[ -n $1 && $(ps -o ppid= -p "$1" 2>/dev/null | tr -d ' ') == "
 outlast() {
   local pid=$1 tenths=$(($2 * 10))
   while is_running "$pid"; do
-    ((tenths-- > 0)) || return
+    ((tenths-- > 0)) || return 1
     sleep 0.1
   done
 }
@@ -118,7 +119,7 @@ require_node() {
 
 require_space() {
   local folder=$1 needed_mb=$2 free_mb
-  free_mb=$(df --output=avail --block-size=1M "$folder" | tail -n 1 | tr -dc 0-9) || return
+  free_mb=$(df --output=avail --block-size=1M "$folder" | tail -n 1 | tr -dc 0-9) || return 1
   ((free_mb >= needed_mb)) && return
   complain "Too little room in $folder: $free_mb MB are free, $needed_mb MB are needed. Free some and start again."
   return 1
@@ -187,7 +188,7 @@ install_packages() { packages_are_current || one_at_a_time install_missing_packa
 
 install_missing_packages() {
   packages_are_current && return
-  require_space "$PWD" 700 || return
+  require_space "$PWD" 700 || return 1
   [[ -w . ]] || {
     complain "You may not write to $PWD. Run Fairlead as the user who owns that folder: $(stat -c %U .)."
     return 1
@@ -198,7 +199,7 @@ install_missing_packages() {
 }
 
 client_is_current() {
-  [[ -f dist/client/index.html && -f dist/client.built ]] || return
+  [[ -f dist/client/index.html && -f dist/client.built ]] || return 1
   [[ -z $(find src shared index.html vite.config.ts package-lock.json -newer dist/client.built -print -quit) ]]
 }
 
@@ -207,7 +208,7 @@ build_client() { client_is_current || one_at_a_time build_stale_client; }
 # Builds beside the client being served and then takes its place, so that a failed or interrupted build harms nobody.
 build_stale_client() {
   client_is_current && return
-  mkdir -p dist && touch dist/client.begun && rm -rf dist/client.next || return
+  mkdir -p dist && touch dist/client.begun && rm -rf dist/client.next || return 1
   quietly attend env NODE_ENV=production node node_modules/vite/bin/vite.js build --outDir dist/client.next || {
     complain "The client could not be built; vite's own words are above."
     return 1
@@ -248,7 +249,7 @@ install_from_debian() {
     }
     as_root=(sudo)
   fi
-  require_space /usr 1000 || return
+  require_space /usr 1000 || return 1
   # Not launched: apt-get is never cut short, since that would leave Debian's package database in pieces.
   quietly "${as_root[@]}" apt-get update -qq -o DPkg::Lock::Timeout=300 &&
     quietly "${as_root[@]}" env DEBIAN_FRONTEND=noninteractive apt-get install --yes -qq --no-install-recommends \
@@ -276,8 +277,8 @@ ask_database() {
 # Prints the process that has our data open, if there is one.
 database_process() {
   local pid
-  pid=$(cat "$database_home/mariadb/mariadb.pid" 2>/dev/null) || return
-  tr '\0' '\n' 2>/dev/null <"/proc/$pid/cmdline" | grep -qxF -e "--datadir=$database_home/mariadb" || return
+  pid=$(cat "$database_home/mariadb/mariadb.pid" 2>/dev/null) || return 1
+  tr '\0' '\n' 2>/dev/null <"/proc/$pid/cmdline" | grep -qxF -e "--datadir=$database_home/mariadb" || return 1
   printf '%s' "$pid"
 }
 
@@ -303,8 +304,8 @@ open_database() {
     notes+=("The database was still running from an earlier start and is used again.")
     return
   }
-  [[ -d $database_home/mariadb ]] || make_database_files || return
-  write_database_setup || return
+  [[ -d $database_home/mariadb ]] || make_database_files || return 1
+  write_database_setup || return 1
   local launched as_user=()
   ((EUID != 0)) || as_user=(--user=root)
   launch mariadbd --no-defaults "${as_user[@]}" --datadir="$database_home/mariadb" --socket=mariadb.sock \
@@ -313,7 +314,7 @@ open_database() {
     --character-set-server=utf8mb4 --collation-server=utf8mb4_unicode_ci --default-time-zone=+00:00 "$@" \
     >>"$database_home/mariadb.log" 2>&1 9>&-
   database_pid=$launched
-  await_database || return
+  await_database || return 1
   rm -f "$database_home/mariadb.sql"
   [[ -z $database_was_cut_off ]] ||
     notes+=("The database was not shut down cleanly last time; it has recovered by itself, nothing needs doing.")
@@ -367,7 +368,7 @@ end_database() {
 # Prints a random secret kept in a file of .data, made on first use.
 kept_secret() {
   local file=.data/$1
-  [[ -s $file ]] || (umask 077 && od -An -N32 -tx1 /dev/urandom | tr -d ' \n' >"$file") || return
+  [[ -s $file ]] || (umask 077 && od -An -N32 -tx1 /dev/urandom | tr -d ' \n' >"$file") || return 1
   cat "$file"
 }
 

@@ -12,6 +12,10 @@ export function problemText(error: unknown): string {
   return problemOf(error).message;
 }
 
+/** For whoever chose to keep what they had typed, rather than to leave for the sign-in page. */
+const signedOutMeanwhile =
+  'You have been signed out meanwhile. What you typed is still here: sign in in another window, then send it again.';
+
 /** Puts each fault that the server names on its field, and what belongs to none above the button. */
 export function showProblem<Values extends FieldValues, Context, Parsed>(
   form: UseFormReturn<Values, Context, Parsed>,
@@ -26,7 +30,8 @@ export function showProblem<Values extends FieldValues, Context, Parsed>(
   }
   const everythingIsPlaced = problem.errors.length > 0 && strays.length === 0;
   if (everythingIsPlaced) return;
-  form.setError('root.problem', { type: problem.code, message: [problem.message, ...strays].join(' ') });
+  const message = problem.code === 'not-signed-in' ? signedOutMeanwhile : problem.message;
+  form.setError('root.problem', { type: problem.code, message: [message, ...strays].join(' ') });
 }
 
 /** A JSON pointer (RFC 6901) as the form's dotted name. */

@@ -79,12 +79,14 @@ const seesSessions = ({ membership }: Presence) => membership.role !== 'reviewer
 function Demo({ presence, places }: { presence: Presence; places: HomePlaces }) {
   const { organisationId } = presence.membership;
   const { data } = useSuspenseQuery(organisationQueries.members(organisationId));
+  const { data: waiting } = useSuspenseQuery(homeQueries.waiting(organisationId));
   const { data: sessions } = useQuery({ ...latestSessions(organisationId), enabled: seesSessions(presence) });
   return (
     <DemoPath
       people={presence.demoPeople}
       members={data.members}
       sessions={sessions?.rows ?? []}
+      closedStudyIds={waiting.items.filter(({ kind }) => kind === 'report-to-read').map(({ studyId }) => studyId)}
       personId={presence.person.id}
       places={places}
       renderSignIn={(person, goTo) => <SignInAs person={person} goTo={goTo} />}

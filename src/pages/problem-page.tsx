@@ -16,6 +16,9 @@ export function ProblemPage() {
   return <ProblemShown problem={problem} />;
 }
 
+/** What a page says instead of a form's words: nothing was being typed here. */
+const unreachableDetail = 'Nothing that was saved is lost. Check the connection and try again.';
+
 function ProblemShown({ problem }: { problem: Problem }) {
   useDocumentTitle(problem.title);
   const isWorthRepeating = problem.status >= 500 || problem.status === 0;
@@ -24,7 +27,7 @@ function ProblemShown({ problem }: { problem: Problem }) {
       <h1 className="sr-only">{problem.title}</h1>
       <ErrorState
         title={problem.title}
-        detail={problem.message}
+        detail={problem.code === 'unreachable' ? unreachableDetail : problem.message}
         requestId={problem.instance?.replace('urn:uuid:', '')}
         actions={
           <>
@@ -48,6 +51,6 @@ function problemBehind(error: unknown): Problem {
   if (isRouteErrorResponse(error) && error.status === 404)
     return new Problem('not-found', 'There is nothing at this address.');
   if (error instanceof TypeError && /dynamically imported module|importing a module script/i.test(error.message))
-    return new Problem('unreachable', 'This page could not be fetched. Check the connection and try again.');
+    return new Problem('unreachable', 'This page could not be fetched.');
   return problemOf(error);
 }

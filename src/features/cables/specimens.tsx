@@ -58,7 +58,7 @@ export function Specimens({ organisationId, cable }: SpecimensProps) {
         </h2>
         <p className="pb-4 text-soft">
           {isFirst
-            ? 'No piece of this cable is listed yet. A study needs at least one of each cable: give it the mark that is on it.'
+            ? `No piece of this cable is ${archived.length > 0 ? 'in use' : 'listed yet'}. A study needs at least one: give it the mark that is on it.`
             : 'Each is one physical piece. A study gives every piece it uses a blind code.'}
         </p>
         <SpecimenList specimens={inUse} renderRow={renderRow} />

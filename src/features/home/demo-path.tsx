@@ -3,7 +3,7 @@ import type { SessionRow } from '#shared/contracts/sessions.ts';
 import type { WhoAmI } from '#shared/contracts/sign-in.ts';
 import type { Member } from '#shared/contracts/users.ts';
 import type { HomePlaces } from './home-places.ts';
-import { type DemoActor, ThreeMinutePath } from './three-minute-path.tsx';
+import { type DemoActor, type DemoSession, ThreeMinutePath } from './three-minute-path.tsx';
 
 export type DemoPerson = WhoAmI['demoPeople'][number];
 
@@ -12,6 +12,8 @@ type DemoPathProps = {
   members: readonly Member[];
   /** Latest first; empty for whoever may not see them. */
   sessions: readonly SessionRow[];
+  /** Studies that are known to be closed. */
+  closedStudyIds: readonly string[];
   /** Who is signed in now. */
   personId: string;
   places: HomePlaces;
@@ -19,7 +21,7 @@ type DemoPathProps = {
 };
 
 /** Finds the people and the session that the path needs; without them there is no path. */
-export function DemoPath({ people, members, sessions, personId, places, renderSignIn }: DemoPathProps) {
+export function DemoPath({ people, members, sessions, closedStudyIds, personId, places, renderSignIn }: DemoPathProps) {
   const session = sessions.find(isOpen) ?? sessions[0] ?? null;
 
   function actorWith(isFit: (member: Member) => boolean): DemoActor | null {
@@ -38,7 +40,7 @@ export function DemoPath({ people, members, sessions, personId, places, renderSi
   if (proctor === null || manager === null) return null;
   return (
     <ThreeMinutePath
-      session={session === null ? null : { ...session, isOpen: isOpen(session) }}
+      session={session === null ? null : { ...session, stage: stageOf(session, closedStudyIds) }}
       proctor={proctor}
       manager={manager}
       places={places}
@@ -48,4 +50,9 @@ export function DemoPath({ people, members, sessions, personId, places, renderSi
 
 function isOpen({ phase }: SessionRow): boolean {
   return phase !== 'finished' && phase !== 'abandoned';
+}
+
+function stageOf(session: SessionRow, closedStudyIds: readonly string[]): DemoSession['stage'] {
+  if (isOpen(session)) return 'open';
+  return closedStudyIds.includes(session.studyId) ? 'study-closed' : 'ended';
 }

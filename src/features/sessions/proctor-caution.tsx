@@ -11,8 +11,8 @@ export function ProctorCaution({ proctor, codeHolderId }: ProctorCautionProps) {
     <div role="status" className="empty:hidden">
       {reason === null ? null : (
         <Notice tone="amber" title="This lowers the blind to listener-blind.">
-          {reason} Choose a proctor who has seen neither, and the session can be double-blind to the cable. The result
-          says which it was.
+          {reason} Choose a proctor who has seen neither codes nor cables, and the session can be double-blind to the
+          cable. The result says which it was.
         </Notice>
       )}
     </div>
@@ -22,6 +22,6 @@ export function ProctorCaution({ proctor, codeHolderId }: ProctorCautionProps) {
 function reasonAgainst({ id, name, role }: Member, codeHolderId: string): string | null {
   if (id === codeHolderId) return `${name} holds this study’s codes and knows which code is which cable.`;
   if (isManaging(role))
-    return `${name} is ${roleWords[role].toLowerCase()} and can open the cable pages, so could know a cable by its looks.`;
+    return `As ${roleWords[role].toLowerCase()}, ${name} can open the cable pages and could know a cable by its looks.`;
   return null;
 }
