@@ -22,7 +22,6 @@ export type FindingContext = {
   readonly cables: readonly [string, string];
   /** What the record shows: each must hold, or the numbers support nothing. */
   readonly gate: {
-    readonly listenersBlind: boolean;
     readonly commitmentsHold: boolean;
     readonly allTrialsAccounted: boolean;
   };
@@ -74,7 +73,7 @@ function bodyOf(
   { cables, gate }: FindingContext,
 ): Pick<Finding, 'row' | 'headline' | 'maySay'> {
   const [first, second] = cables;
-  if (!gate.listenersBlind || !gate.commitmentsHold || !gate.allTrialsAccounted)
+  if (!gate.commitmentsHold || !gate.allTrialsAccounted)
     return { row: '0', headline: 'This study does not meet its protocol; its numbers support no claim.', maySay: null };
   if (result.isBelowGuessing)
     return {

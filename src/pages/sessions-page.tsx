@@ -24,7 +24,8 @@ export async function loader({ params, request }: LoaderFunctionArgs) {
 }
 
 export function Component() {
-  const { organisationId, role } = usePresence().membership;
+  const { person, membership } = usePresence();
+  const { organisationId, role } = membership;
   const [search] = useSearchParams();
   const change = useListAddress();
   const query = queryIn(search);
@@ -47,7 +48,7 @@ export function Component() {
         page={sessions.page}
         pageCount={sessions.pages}
         onPage={(page) => change({ page })}
-        consoleOf={(id) => paths.console(organisationId, id)}
+        consoleOf={({ id, proctorId }) => (proctorId === person.id ? paths.console(organisationId, id) : null)}
         empty={
           isFiltered ? (
             <NoneFound />

@@ -25,7 +25,7 @@ function findingFor(source: Pick<ReportSource, 'entries' | 'protocol' | 'result'
   const closing = closingOf(entries);
   return findingOf(result, {
     cables: [protocol.cables[0].name, protocol.cables[1].name],
-    gate: { listenersBlind: true, commitmentsHold: holds(checks), allTrialsAccounted: holds(checks) },
+    gate: { commitmentsHold: holds(checks), allTrialsAccounted: holds(checks) },
     endedEarly: closing.complete ? null : closing.reason,
     setting: protocol.conduct.chain,
   });

@@ -24,10 +24,10 @@ export function DayLayout({ homeTo, links, person, children }: DayLayoutProps) {
             Fairlead
           </Link>
           <nav aria-label="Main" className="order-last -mt-2 w-full pb-1 md:order-none md:mt-0 md:w-auto md:pb-0">
-            <ul className="flex flex-wrap gap-x-6">
+            <ul className="flex flex-wrap gap-x-4 sm:gap-x-6">
               {links.map((link) => (
                 <li key={link.to}>
-                  <TopLink {...link} />
+                  <TopLink {...link} isExact={link.to === homeTo} />
                 </li>
               ))}
             </ul>
@@ -51,10 +51,11 @@ export function DayLayout({ homeTo, links, person, children }: DayLayoutProps) {
 }
 
 /** Bold where one is; the hidden bold copy keeps the row from moving. */
-function TopLink({ to, label }: { to: string; label: string }) {
+function TopLink({ to, label, isExact }: { to: string; label: string; isExact: boolean }) {
   return (
     <NavLink
       to={to}
+      end={isExact}
       data-label={label}
       className="inline-flex min-h-12 flex-col justify-center text-soft no-underline after:invisible after:block after:h-0 after:overflow-hidden after:font-bold after:content-[attr(data-label)] hover:text-ink hover:underline aria-[current=page]:font-bold aria-[current=page]:text-ink"
     >

@@ -13,8 +13,8 @@ type SessionTableProps = {
   pageCount: number;
   onPage: (page: number) => void;
   empty: ReactNode;
-  /** Where a session is led from. */
-  consoleOf: (id: string) => string;
+  /** Where a session is led from, by its proctor; null for anybody else. */
+  consoleOf: (session: SessionRow) => string | null;
 };
 
 export function SessionTable({ consoleOf, ...table }: SessionTableProps) {
@@ -23,17 +23,13 @@ export function SessionTable({ consoleOf, ...table }: SessionTableProps) {
   );
 }
 
-function columnsFor(consoleOf: (id: string) => string): Column<SessionRow>[] {
+function columnsFor(consoleOf: SessionTableProps['consoleOf']): Column<SessionRow>[] {
   return [
     {
       key: 'title',
       header: 'Session',
       isRowHeader: true,
-      cell: ({ id, title, number }) => (
-        <Link to={consoleOf(id)}>
-          {title}, session {number}
-        </Link>
-      ),
+      cell: (session) => <SessionName session={session} to={consoleOf(session)} />,
     },
     {
       key: 'phase',
@@ -51,4 +47,9 @@ function columnsFor(consoleOf: (id: string) => string): Column<SessionRow>[] {
       cell: ({ trialsLocked, trials }) => `${trialsLocked} of ${trials}`,
     },
   ];
+}
+
+function SessionName({ session, to }: { session: SessionRow; to: string | null }) {
+  const name = `${session.title}, session ${session.number}`;
+  return to === null ? name : <Link to={to}>{name}</Link>;
 }
