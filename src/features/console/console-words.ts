@@ -52,7 +52,7 @@ export function cautionWords(caution: Caution, rig: Rig): string {
     case 'mains':
       return 'Nothing inside mains equipment is opened.';
     case 'hearing':
-      return 'The level is set and noted: 70 to 80 dBA recommended, a warning from 83 dBA, not from 90 dBA. Nobody with tinnitus or sore ears takes part without having been asked.';
+      return 'The level is set and noted: 70 to 80 dBA recommended, a warning from 83 dBA, refused from 90 dBA. Nobody with tinnitus or sore ears takes part without having been asked.';
     case 'local-rules':
       return 'Local codes and licensed practice prevail over anything shown here.';
   }
