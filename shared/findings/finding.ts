@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { evenChance } from '../statistics/chance.ts';
 import { detectableRate } from '../statistics/detectable-rate.ts';
-import { equationOfP } from './format-probability.ts';
+import { equationOfP, formatShare } from './format-probability.ts';
 import type { RegisteredResult } from './registered-result.ts';
 
 /** The one sentence that a registered analysis comes to, and what may and may not be said of it. */
@@ -31,7 +31,8 @@ export type FindingContext = {
   readonly setting: string;
 };
 
-const percent = (rate: number) => `${(100 * rate).toFixed(0)} %`;
+/** A confidence as it was chosen, such as 97.5%, not rounded to a whole percentage. */
+const confidenceText = (confidence: string) => `${Number((100 * Number(confidence)).toPrecision(6))}%`;
 const times = (count: number, one: string) => `${count} ${one}${count === 1 ? '' : 's'}`;
 
 function subjectOf({ listeners, test }: RegisteredResult): string {
@@ -50,15 +51,45 @@ function namedListeners({ byListener, isSignificant, listeners }: RegisteredResu
   return [`Above guessing on their own, adjusted by Holm’s rule: ${named.join(', ')}.`];
 }
 
+/** A listener above guessing where the registered test of all answers found nothing: a hint, not a result. */
+function hints({ byListener, isSignificant, listeners }: RegisteredResult): string[] {
+  if (isSignificant || listeners < 2) return [];
+  const hinting = byListener.filter(({ isAboveGuessing }) => isAboveGuessing).map(({ listener }) => listener);
+  if (hinting.length === 0) return [];
+  return [`Exploratory: ${hinting.join(', ')} scored above guessing; this needs a new pre-registered test.`];
+}
+
+/** Limits over several listeners' own draws are about these answers, not about people. */
+function average({ listeners }: RegisteredResult): string {
+  return listeners > 1 ? ' These figures are the average over this panel’s answers, not about people in general.' : '';
+}
+
+/** How large the effect is, with the one-sided limit that belongs to a one-sided test. */
+function effect(result: RegisteredResult): string[] {
+  if (result.estimates === null)
+    return ['The listeners heard the same presentations, so no rate is stated for their answers together.'];
+  const { rate, interval, oneSidedLower } = result.estimates.aboveGuessing;
+  const range = `${formatShare(Number(interval.lower), 'down')} to ${formatShare(Number(interval.upper), 'up')}`;
+  const lower = `one-sided ${confidenceText(oneSidedLower.confidence)} lower limit ${formatShare(Number(oneSidedLower.limit), 'down')}`;
+  return [
+    `Share of answers above guessing: ${formatShare(Number(rate), 'nearest')} (95% interval ${range}; ${lower}).${average(result)}`,
+  ];
+}
+
 /** What a result that found nothing leaves open. */
-function openQuestion({ estimates, answers, alpha, test }: RegisteredResult): string {
+function openQuestion(result: RegisteredResult): string {
+  const { estimates, answers, alpha, test } = result;
+  if (answers === 0) return 'No answers were counted.';
   if (test === 'shared-presentations' || estimates === null)
     return 'No upper limit for the above-chance rate is valid for a group in this version, so none is given.';
   const { confidence, limit } = estimates.aboveGuessing.oneSidedUpper;
   const rate = detectableRate(answers, evenChance, Number(alpha), 0.8);
   const found =
-    rate === null ? '' : ` It could have found a listener who is right ${percent(rate)} of the time, with 80 % power.`;
-  return `An above-chance rate up to ${percent(Number(limit))} is not excluded (one-sided ${percent(Number(confidence))} limit).${found}`;
+    rate === null
+      ? ''
+      : ` It could have found a listener who is right ${formatShare(rate, 'up')} of the time, with 80% power.`;
+  const open = `An above-chance rate up to ${formatShare(Number(limit), 'up')} is not excluded (one-sided ${confidenceText(confidence)} limit).`;
+  return `${Number(limit) > 0 ? open : 'Scores were lower than guessing usually gives.'}${found}${average(result)}`;
 }
 
 const levelUnknown = 'Level at the load was not recorded in Fairlead; loudness may explain a difference.';
@@ -86,7 +117,10 @@ function bodyOf(
     return {
       row: '5',
       headline: `Inconclusive. The test did not detect a difference between ${first} and ${second}, and does not exclude one.`,
-      maySay: `A registered blind test did not detect a difference between ${first} and ${second} (${countOf(result)}); it does not exclude one.`,
+      maySay:
+        result.answers === 0
+          ? null
+          : `A registered blind test did not detect a difference between ${first} and ${second} (${countOf(result)}); it does not exclude one.`,
     };
   const subject = subjectOf(result);
   return {
@@ -115,11 +149,11 @@ export function findingOf(result: RegisteredResult, context: FindingContext): Fi
   const unreachable = result.canReachAlpha
     ? []
     : ['With so few trials no result could have reached the registered level.'];
-  const open = body.row === '5' ? [openQuestion(result)] : [];
+  const open = body.row === '5' ? [openQuestion(result), ...hints(result)] : [];
   return {
     ...body,
     modifiers: [
-      ...(body.row === '2' ? namedListeners(result) : []),
+      ...(body.row === '2' ? [...effect(result), ...namedListeners(result)] : []),
       ...open,
       ...unreachable,
       ...early,

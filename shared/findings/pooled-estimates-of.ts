@@ -13,7 +13,7 @@ const upperConfidence = 0.95;
  * Rate of right answers, share above guessing and d′ of a study in which every answer has a draw of its own.
  *
  * Missing answers stand against whatever a limit could be used to claim: wrong for lower limits, right for upper ones.
- * The one-sided lower limit has confidence 1 - alpha, so that it exceeds guessing exactly when the test reaches its level.
+ * The one-sided lower limit has confidence 1 - alpha: it lies above guessing when p lies below the level.
  *
  * @param counts right answers, missing ones and all that were due, at least 1
  * @param alpha  the registered level as a decimal

@@ -37,7 +37,7 @@ export const pooledEstimates = z.strictObject({
     rate: decimal,
     rawInterval: interval,
     interval,
-    /** The dual of the registered test: above 0 exactly when the test reaches its level. */
+    /** The dual of the registered test: above 0 when p lies below the level. */
     oneSidedLower: z.strictObject({ confidence: decimal, limit: decimal }),
     oneSidedUpper: z.strictObject({ confidence: decimal, limit: decimal }),
   }),

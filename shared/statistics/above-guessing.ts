@@ -18,7 +18,8 @@ import { requireBetween } from './domain.ts';
 export function aboveGuessingRate(correctRate: number, chance: Chance): number {
   requireBetween('correctRate', correctRate, 0, 1, 'closed');
   const { right, wrong } = chanceAsNumbers(chance);
-  return (correctRate - right) / wrong;
+  // One third less than one is a hair more than two thirds in doubles; the share of all right is 1.
+  return Math.min(1, (correctRate - right) / wrong);
 }
 
 /**

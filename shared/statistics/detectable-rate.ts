@@ -13,7 +13,7 @@ import { requireBetween } from './domain.ts';
  * @param targetPower power asked for, strictly between 0 and 1
  * @returns the rate, or null when the level is out of reach with so few trials
  * @throws RangeError when an argument is outside its domain
- * @example detectableRate(16, evenChance, 0.05, 0.8) // 0.8005 ; R: pbinom(11, 16, 0.8005, lower.tail = FALSE) is 0.800
+ * @example detectableRate(16, evenChance, 0.05, 0.8) // 0.8006 ; R: pbinom(11, 16, 0.8006, lower.tail = FALSE) is 0.800
  * @see power for the test it inverts
  */
 export function detectableRate(trials: number, chance: Chance, alpha: number, targetPower: number): number | null {

@@ -31,7 +31,8 @@ describe('against R 4.2.2, SciPy and mpmath', () => {
       compare(test('two-sided').p, expected.pTwoSidedMinlike, 0, 'two-sided');
       compare(test('greater').logP, expected.logPUpper, 1, 'log upper');
       compare(test('less').logP, expected.logPLower, 1, 'log lower');
-      compare(test('greater').midP, expected.midPUpper, 0, 'mid-p');
+      compare(test('greater').midP, expected.midPUpper, 0, 'mid-p upper');
+      compare(test('less').midP, expected.midPLower, 0, 'mid-p lower');
     }
   });
 
