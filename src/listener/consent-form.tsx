@@ -1,6 +1,8 @@
-import { type FormEvent, type ReactNode, useState } from 'react';
+import { type FormEvent, useEffect, useRef, useState } from 'react';
 import type { OpenSession } from '#shared/contracts/seats.ts';
 import { Button } from '../ui/button.tsx';
+import { CheckboxField } from '../ui/checkbox-field.tsx';
+import { TextField } from '../ui/text-field.tsx';
 
 type ConsentFormProps = {
   session: OpenSession;
@@ -10,86 +12,80 @@ type ConsentFormProps = {
   onBack: () => void;
 };
 
-function Tick({
-  isTicked,
-  onChange,
-  children,
-}: {
-  isTicked: boolean;
-  onChange: (ticked: boolean) => void;
-  children: ReactNode;
-}) {
-  return (
-    <label className="flex min-h-14 cursor-pointer items-center gap-4">
-      <input
-        type="checkbox"
-        checked={isTicked}
-        onChange={(event) => onChange(event.target.checked)}
-        className="size-7 shrink-0 accent-copper"
-      />
-      <span>{children}</span>
-    </label>
-  );
-}
-
 /** What the session is and what taking part means; a seat is taken by agreeing. */
 export function ConsentForm({ session, busy, problem, onTake, onBack }: ConsentFormProps) {
   const [isAdult, setAdult] = useState(false);
   const [hasAgreed, setAgreed] = useState(false);
   const [place, setPlace] = useState('');
   const [wasTried, setTried] = useState(false);
-  const isReady = isAdult && hasAgreed;
+  const heading = useRef<HTMLHeadingElement>(null);
+  const form = useRef<HTMLFormElement>(null);
+  useEffect(() => heading.current?.focus(), []);
+
   const submit = (event: FormEvent) => {
     event.preventDefault();
     setTried(true);
-    if (isReady) onTake(place);
+    if (!isAdult || !hasAgreed) form.current?.querySelector<HTMLElement>('input[type=checkbox]:not(:checked)')?.focus();
+    else if (!busy) onTake(place);
   };
-  const note = problem ?? (wasTried && !isReady ? 'Tick both boxes to take the seat.' : null);
+  const missing = (isTicked: boolean, words: string) => (wasTried && !isTicked ? { error: words } : {});
+
   return (
-    <form onSubmit={submit} noValidate className="flex flex-1 flex-col gap-5 py-8">
+    <form ref={form} onSubmit={submit} noValidate className="flex flex-1 flex-col gap-5 py-8">
       <div>
-        <p className="text-soft">{session.room}</p>
-        <h1 className="text-3xl">{session.title}</h1>
+        <h1 ref={heading} tabIndex={-1} className="text-3xl outline-none">
+          {session.title}
+        </h1>
+        <p className="mt-2 text-soft">
+          {session.room} · {session.trials} trials · about {session.minutes} minutes
+        </p>
       </div>
-      <p>
-        You hear cables, one after the other, without seeing them, and say what you hear. {session.trials} trials, about{' '}
-        {session.minutes} minutes.
-      </p>
+      <p>You hear cables, one after the other, without seeing them, and say what you hear.</p>
       {session.running ? (
-        <p className="text-amber">The session has begun; you take part from the next trial on.</p>
+        <p className="border-l-[5px] border-amber pl-4">
+          The session has begun. You take part from the next trial on, and your phone’s random number does not count in
+          the draw.
+        </p>
       ) : null}
       <ul className="flex list-disc flex-col gap-2 pl-5 text-soft">
         <li>Your answers are recorded under a seat label, without your name.</li>
-        <li>You may stop whenever you like. An answer cannot be taken back once its trial has locked.</li>
-        <li>If it is too loud, press “Too loud”: the session pauses at once. Say so if your ears ring or hurt.</li>
+        <li>You can stop at any time. An answer cannot be withdrawn once its trial has locked.</li>
+        <li>If it is too loud, press “Too loud”: the session pauses at once. Stop if your ears ring or hurt.</li>
       </ul>
-      <label className="flex flex-col gap-2">
-        <span className="font-bold">Where do you sit? (may be left empty)</span>
-        <input
-          value={place}
-          onChange={(event) => setPlace(event.target.value)}
-          maxLength={24}
-          placeholder="Front left"
-          autoComplete="off"
-          className="min-h-14 rounded border-2 border-edge bg-sheet px-4 placeholder:text-soft"
+      <TextField
+        label="Where do you sit?"
+        optional={true}
+        hint="For the proctor, such as front left. It is not published."
+        value={place}
+        onChange={(event) => setPlace(event.target.value)}
+        maxLength={24}
+        autoComplete="off"
+        className="[&_input]:min-h-14"
+      />
+      <div className="flex flex-col gap-1">
+        <CheckboxField
+          label="I am an adult"
+          checked={isAdult}
+          onChange={(event) => setAdult(event.target.checked)}
+          className="[&>label]:min-h-14 [&>label]:items-center [&>label]:py-0"
+          {...missing(isAdult, 'Only adults can take part.')}
         />
-      </label>
-      <div>
-        <Tick isTicked={isAdult} onChange={setAdult}>
-          I am an adult
-        </Tick>
-        <Tick isTicked={hasAgreed} onChange={setAgreed}>
-          I agree to take part
-        </Tick>
+        <CheckboxField
+          label="I agree to take part"
+          checked={hasAgreed}
+          onChange={(event) => setAgreed(event.target.checked)}
+          className="[&>label]:min-h-14 [&>label]:items-center [&>label]:py-0"
+          {...missing(hasAgreed, 'Please agree, or leave this page.')}
+        />
       </div>
-      <p role="status" className="text-amber empty:hidden">
-        {note}
+      <p role="alert" className="font-bold text-amber empty:hidden">
+        {problem}
       </p>
       <Button type="submit" variant="primary" size="touch" busy={busy}>
         Take the seat
       </Button>
-      <Button size="touch" onClick={onBack}>
-        Another code
+      <Button variant="quiet" size="touch" onClick={onBack}>
+        Use another code
       </Button>
     </form>
   );

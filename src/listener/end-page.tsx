@@ -1,7 +1,10 @@
+import type { ReactNode } from 'react';
 import type { ListenerView } from '#shared/contracts/listener-live.ts';
 import { CopyButton } from '../ui/copy-button.tsx';
+import { CourseLine } from '../ui/course-line.tsx';
 import { PhonePage } from './phone-page.tsx';
-import type { KeptReceipt } from './seat-memory.ts';
+import { ReceiptList, receiptsText } from './receipt-list.tsx';
+import type { SeatSnapshot } from './seat.ts';
 
 function headingOf({ left, phase }: ListenerView): { title: string; detail: string } {
   if (left)
@@ -13,43 +16,49 @@ function headingOf({ left, phase }: ListenerView): { title: string; detail: stri
     };
   return {
     title: 'The session is over',
-    detail: 'Thank you for listening. Nobody knows a score yet, not even the proctor.',
+    detail: 'Thank you for listening. Nobody knows a result yet, not even the proctor.',
   };
 }
 
-const textOf = (receipts: readonly KeptReceipt[]) =>
-  receipts
-    .map(({ trial, leaf, sequence, digest }) => `trial ${trial}  leaf ${leaf}  entry ${sequence}  ${digest}`)
-    .join('\n');
+type EndPageProps = { view: ListenerView; snapshot: SeatSnapshot; alarm: ReactNode };
 
 /** Thanks, and the receipts of this phone. */
-export function EndPage({ view, receipts }: { view: ListenerView; receipts: readonly KeptReceipt[] }) {
+export function EndPage({ view, snapshot, alarm }: EndPageProps) {
   const { title, detail } = headingOf(view);
+  const { receipts, answers } = snapshot;
+  const late = answers.filter(({ state }) => state === 'late');
+  const here = answers.filter(({ state }) => state === 'here');
   return (
     <PhonePage>
-      <div className="flex flex-col gap-5 py-10">
-        <p className="text-soft">
-          {view.title}, session {view.session}, seat <span className="font-mono">{view.seat}</span>
-        </p>
-        <h1 className="text-3xl">{title}</h1>
-        <p className="text-xl text-soft">{detail}</p>
+      <p className="pt-4 text-soft">
+        {view.title}, session {view.session}, seat <span className="font-mono">{view.seat}</span>
+      </p>
+      <CourseLine trials={view.course} isCompact={true} className="-mx-5 mt-3" />
+      <div className="flex flex-col gap-4 py-8">
+        {alarm}
+        <div role="status" className="flex flex-col gap-4">
+          <h1 className="text-3xl">{title}</h1>
+          <p className="text-xl text-soft">{detail}</p>
+        </div>
+        {here.map(({ trial }) => (
+          <p key={trial} className="text-amber">
+            Trial {trial}: your answer is still on this phone. Keep this page open.
+          </p>
+        ))}
+        {late.map(({ trial, why }) => (
+          <p key={trial}>
+            <strong>Too late.</strong> {why}
+          </p>
+        ))}
         {receipts.length === 0 ? null : (
           <section className="mt-4 flex flex-col gap-4">
             <h2 className="text-xl">Your receipts</h2>
             <p className="text-soft">
-              Each line is the digest of one answer and of the entry that locked it. Once the result is published, they
-              show whether the record still holds what you answered.
+              A receipt names the leaf that stands for your answer and the entry that locked it. Once the result is
+              published, anyone can look both up in the record and see whether it still holds what you answered.
             </p>
-            <CopyButton text={textOf(receipts)} label="Copy the receipts" />
-            <ol className="flex flex-col gap-3">
-              {receipts.map(({ trial, leaf, sequence, digest }) => (
-                <li key={trial} className="border-t border-rule pt-3">
-                  Trial {trial}, entry {sequence}
-                  <span className="block font-mono break-all text-soft">{leaf}</span>
-                  <span className="block font-mono break-all text-soft">{digest}</span>
-                </li>
-              ))}
-            </ol>
+            <CopyButton text={receiptsText(view, receipts)} label="Copy the receipts" />
+            <ReceiptList receipts={receipts} />
           </section>
         )}
       </div>

@@ -1,14 +1,12 @@
-import { type FormEvent, useState } from 'react';
+import { useState } from 'react';
 import { consentVersion, type OpenSession, seatsApi } from '#shared/contracts/seats.ts';
 import { Problem } from '#shared/problem.ts';
 import { contributionCommitment } from '#shared/session/answer-leaf.ts';
 import { call } from '../lib/call.ts';
-import { Button } from '../ui/button.tsx';
+import { CodeForm } from './code-form.tsx';
 import { ConsentForm } from './consent-form.tsx';
 import { PhonePage } from './phone-page.tsx';
 import { randomHex, remember } from './seat-memory.ts';
-
-const codeInAddress = () => /^\/listen\/([A-Za-z0-9]{6})$/.exec(window.location.pathname)?.[1]?.toUpperCase() ?? '';
 
 type Found = { code: string; session: OpenSession };
 
@@ -23,11 +21,12 @@ export function JoinPage({ onSeated }: { onSeated: (token: string) => void }) {
   const [problem, setProblem] = useState<string | null>(null);
   const [busy, setBusy] = useState(false);
 
-  const attempt = async (work: () => Promise<void>) => {
+  const attempt = (work: () => Promise<void>) => {
     setBusy(true);
     setProblem(null);
-    await work().catch((error: unknown) => setProblem(wordsOf(error)));
-    setBusy(false);
+    work()
+      .catch((error: unknown) => setProblem(wordsOf(error)))
+      .finally(() => setBusy(false));
   };
 
   const look = (code: string) =>
@@ -43,6 +42,11 @@ export function JoinPage({ onSeated }: { onSeated: (token: string) => void }) {
       onSeated(token);
     });
 
+  const goBack = () => {
+    setFound(null);
+    setProblem(null);
+  };
+
   return (
     <PhonePage>
       {found === null ? (
@@ -53,47 +57,9 @@ export function JoinPage({ onSeated }: { onSeated: (token: string) => void }) {
           busy={busy}
           problem={problem}
           onTake={(place) => take(found.code, place)}
-          onBack={() => setFound(null)}
+          onBack={goBack}
         />
       )}
     </PhonePage>
-  );
-}
-
-type CodeFormProps = { busy: boolean; problem: string | null; onLook: (code: string) => void };
-
-function CodeForm({ busy, problem, onLook }: CodeFormProps) {
-  const [code, setCode] = useState(codeInAddress);
-  const submit = (event: FormEvent) => {
-    event.preventDefault();
-    onLook(code);
-  };
-  return (
-    <form onSubmit={submit} noValidate className="flex flex-1 flex-col gap-6 py-10">
-      <h1 className="text-3xl">Take a seat</h1>
-      <div className="flex flex-col gap-2">
-        <label htmlFor="code" className="font-bold">
-          Session code
-        </label>
-        <input
-          id="code"
-          value={code}
-          onChange={(event) => setCode(event.target.value.toUpperCase())}
-          maxLength={6}
-          autoCapitalize="characters"
-          autoComplete="off"
-          spellCheck={false}
-          aria-invalid={problem !== null}
-          aria-describedby="code-note"
-          className="min-h-16 rounded border-2 border-edge bg-sheet px-4 font-mono text-3xl tracking-[0.2em]"
-        />
-        <p id="code-note" role="status" className={problem === null ? 'text-soft' : 'text-amber'}>
-          {problem ?? 'The six characters on the proctor’s screen.'}
-        </p>
-      </div>
-      <Button type="submit" variant="primary" size="touch" busy={busy}>
-        Look it up
-      </Button>
-    </form>
   );
 }

@@ -4,28 +4,37 @@ import type { OwnAnswer } from './answers.ts';
 // A seat lives in its tab: what belongs to it is kept in session storage under its token.
 
 export type KeptReceipt = LockReceipt & {
-  /** Whether the leaf in the record is the one this phone computed; null when the phone no longer has the answer. */
+  /** Whether the leaf in the record is the one this phone computed; null when the phone cannot tell. */
   readonly isOwn: boolean | null;
 };
 
 type Memory = {
-  contribution: string | null;
-  answer: OwnAnswer | null;
-  receipts: KeptReceipt[];
+  /** The phone's 32 random bytes (hex); null when another tab or phone took the seat. */
+  readonly contribution: string | null;
+  readonly answers: readonly OwnAnswer[];
+  readonly receipts: readonly KeptReceipt[];
 };
 
-const empty: Memory = { contribution: null, answer: null, receipts: [] };
+const empty: Memory = { contribution: null, answers: [], receipts: [] };
 const keyOf = (token: string) => `fairlead seat ${token}`;
+const lastSeatKey = 'fairlead last seat';
 
 export function recall(token: string): Memory {
   const text = sessionStorage.getItem(keyOf(token));
   return text === null ? empty : { ...empty, ...(JSON.parse(text) as Partial<Memory>) };
 }
 
-export function remember(token: string, change: Partial<Memory>): Memory {
-  const memory = { ...recall(token), ...change };
-  sessionStorage.setItem(keyOf(token), JSON.stringify(memory));
-  return memory;
+export function remember(token: string, change: Partial<Memory>): void {
+  sessionStorage.setItem(keyOf(token), JSON.stringify({ ...recall(token), ...change }));
+}
+
+/** The token of the seat that this tab took last. */
+export function lastSeat(): string | null {
+  return sessionStorage.getItem(lastSeatKey);
+}
+
+export function rememberSeat(token: string): void {
+  sessionStorage.setItem(lastSeatKey, token);
 }
 
 export function randomHex(bytes: number): string {

@@ -1,30 +1,53 @@
-import { type Confidence, type ListenerView, listenerView } from '#shared/contracts/listener-live.ts';
-import { Problem } from '#shared/problem.ts';
+import { type Confidence, type HeldAnswer, type ListenerView, listenerView } from '#shared/contracts/listener-live.ts';
+import { Problem, type ProblemCode } from '#shared/problem.ts';
 import { type Live, type LiveSnapshot, openLive } from '../lib/live.ts';
-import { acknowledged, commandOf, leafOf, type OwnAnswer, refusedAsLate, tapped } from './answers.ts';
+import {
+  acknowledged,
+  answerTo,
+  commandOf,
+  isDifferent,
+  isOwnLeaf,
+  learnt,
+  nextToSend,
+  type OwnAnswer,
+  refused,
+  tapped,
+  withAnswer,
+} from './answers.ts';
 import { type KeptReceipt, randomHex, recall, remember } from './seat-memory.ts';
 
 export type SeatSnapshot = LiveSnapshot<ListenerView> & {
-  readonly answer: OwnAnswer | null;
+  readonly answers: readonly OwnAnswer[];
   readonly receipts: readonly KeptReceipt[];
-  /** Something the listener must know: what was sent and what was stored are not the same, or a call failed. */
+  /** Whether this tab has the random number that the seat committed to. */
+  readonly hasContribution: boolean;
+  /** What the listener must know and tell: what was sent and what was stored are not the same. */
   readonly alarm: string | null;
 };
 
-/** One seat on this phone: the live view, the answer being held, and the receipts. */
+/** After these the command may still be taken; everything else is the server's last word. */
+const passing: readonly ProblemCode[] = ['unreachable', 'unavailable', 'internal', 'too-many-requests', 'too-early'];
+const againMs = 2_000;
+
+/** One seat on this phone: the live view, the answers being held, and the receipts. */
 export class Seat {
   readonly #token: string;
+  readonly #contribution: string | null;
   readonly #live: Live<ListenerView>;
   readonly #listeners = new Set<() => void>();
   #snapshot: SeatSnapshot;
   #isSending = false;
   #isRevealing = false;
+  #isRevealRefused = false;
+  #again: ReturnType<typeof setTimeout> | undefined;
 
   constructor(token: string) {
     this.#token = token;
-    const { answer, receipts } = recall(token);
+    const { contribution, answers, receipts } = recall(token);
+    this.#contribution = contribution;
     this.#live = openLive({ audience: 'listener', token }, (value) => listenerView.parse(value));
-    this.#snapshot = { ...this.#live.getSnapshot(), answer, receipts, alarm: null };
+    const hasContribution = contribution !== null;
+    this.#snapshot = { ...this.#live.getSnapshot(), answers, receipts, hasContribution, alarm: null };
     this.#live.subscribe(() => this.#viewed());
     window.addEventListener('focus', () => this.#deliver());
     window.addEventListener('online', () => this.#deliver());
@@ -39,10 +62,11 @@ export class Seat {
 
   /** Stores an answer on the phone, then sends it. */
   answer(choice: string, confidence: Confidence | null): void {
-    const trial = this.#snapshot.view?.trial?.number;
-    if (trial === undefined) return;
-    const answer = tapped(this.#known(trial), { trial, choice, confidence, salt: randomHex(16) });
-    this.#keep(answer);
+    const { view, answers } = this.#snapshot;
+    const trial = view?.trial?.number;
+    if (view === null || trial === undefined) return;
+    const tap = { trial, choice, confidence, salt: randomHex(16) };
+    this.#keep(tapped(answerTo(answers, trial), tap, { session: view.sessionId, seat: view.seat }));
     this.#deliver();
   }
 
@@ -51,18 +75,14 @@ export class Seat {
     await this.#live.send({ kind: 'too-loud' });
   }
 
+  /** @throws Problem when the server cannot be told */
   async leave(): Promise<void> {
     await this.#live.send({ kind: 'leave' });
   }
 
-  /** The answer to a trial as far as it is known: on the phone, or, after a loss of memory, on the server. */
-  #known(trial: number): OwnAnswer | null {
-    const { answer, view } = this.#snapshot;
-    if (answer?.trial === trial) return answer;
-    const held = view?.trial?.held;
-    if (held?.trial !== trial) return null;
-    const { choice, confidence, revision, heldAt } = held;
-    return { trial, choice, confidence, revision, heldAt, salt: '', state: 'held', why: null };
+  /** The listener has read the alarm and told the proctor. */
+  dismissAlarm(): void {
+    this.#update({ alarm: null });
   }
 
   #update(change: Partial<SeatSnapshot>): void {
@@ -71,84 +91,98 @@ export class Seat {
   }
 
   #keep(answer: OwnAnswer): void {
-    remember(this.#token, { answer });
-    this.#update({ answer });
+    const answers = withAnswer(this.#snapshot.answers, answer);
+    remember(this.#token, { answers });
+    this.#update({ answers });
   }
 
   #viewed(): void {
-    const live = this.#live.getSnapshot();
-    this.#update({ ...live, answer: this.#snapshot.answer });
-    const { view } = live;
+    this.#update(this.#live.getSnapshot());
+    const { view } = this.#snapshot;
     if (view === null) return;
-    const trial = view.trial?.number;
-    const known = trial === undefined ? null : this.#known(trial);
-    if (known !== null && known !== this.#snapshot.answer) this.#update({ answer: known });
-    if (view.lastLock !== null) this.#receive(view.lastLock, view);
+    if (view.trial?.held) this.#hear(view.trial.held);
+    if (view.lastLock !== null) this.#receive(view.lastLock);
     if (view.revealWanted) this.#reveal();
     this.#deliver();
   }
 
-  #receive(lock: NonNullable<ListenerView['lastLock']>, view: ListenerView): void {
-    const { receipts, answer } = this.#snapshot;
+  /** Takes in what the server says it holds. */
+  #hear(held: HeldAnswer): void {
+    const known = answerTo(this.#snapshot.answers, held.trial);
+    if (known?.state === 'held' && known.revision === held.revision && !isDifferent(known, held)) return;
+    this.#keep(known === null ? learnt(held) : acknowledged(known, held));
+    if (known !== null && isDifferent(known, held))
+      this.#update({ alarm: `For trial ${held.trial} the server holds something else than this phone sent.` });
+  }
+
+  #receive(lock: NonNullable<ListenerView['lastLock']>): void {
+    const { receipts, answers } = this.#snapshot;
     if (receipts.some(({ trial }) => trial === lock.trial)) return;
-    const own = answer?.trial === lock.trial && answer.salt !== '' ? answer : null;
-    const isOwn = own === null ? null : leafOf(own, { session: view.sessionId, seat: view.seat }) === lock.leaf;
+    const isOwn = isOwnLeaf(answerTo(answers, lock.trial), lock.leaf);
     const kept = [...receipts, { ...lock, isOwn }];
     remember(this.#token, { receipts: kept });
-    const alarm =
-      isOwn === false
-        ? `The record of trial ${lock.trial} does not hold the answer of this phone. Tell the proctor.`
-        : this.#snapshot.alarm;
-    this.#update({ receipts: kept, alarm });
+    this.#update({ receipts: kept });
+    if (isOwn === false)
+      this.#update({ alarm: `The record of trial ${lock.trial} does not hold the answer that this phone sent.` });
   }
 
   #reveal(): void {
-    const { contribution } = recall(this.#token);
-    if (contribution === null || this.#isRevealing) return;
+    if (this.#contribution === null || this.#isRevealing || this.#isRevealRefused) return;
     this.#isRevealing = true;
     this.#live
-      .send({ kind: 'reveal', value: contribution })
-      .catch((error: unknown) => this.#report(error))
+      .send({ kind: 'reveal', value: this.#contribution })
+      .catch((error: unknown) => {
+        if (isPassing(error)) this.#tryAgain();
+        else this.#isRevealRefused = true;
+      })
       .finally(() => {
         this.#isRevealing = false;
       });
   }
 
-  /** Sends what is still on this phone, until it is acknowledged or refused as late. */
+  /** Sends what is still on this phone, until it is acknowledged or refused for good. */
   #deliver(): void {
-    const { answer, connection, view } = this.#snapshot;
-    if (answer === null || answer.state !== 'here' || connection !== 'connected' || this.#isSending) return;
+    const { answers, connection } = this.#snapshot;
+    const answer = nextToSend(answers);
+    if (answer === null || connection !== 'connected' || this.#isSending) return;
     this.#isSending = true;
     this.#live
       .send(commandOf(answer))
       .then(
         ({ held }) => {
-          if (held === undefined || view === null) return;
-          if (
-            held.revision === answer.revision &&
-            held.leaf !== leafOf(answer, { session: view.sessionId, seat: view.seat })
-          )
-            this.#update({ alarm: 'The server stored something else than this phone sent. Tell the proctor.' });
-          const current = this.#snapshot.answer;
-          if (current !== null) this.#keep(acknowledged(current, held));
+          if (held === undefined) throw new Error('an answer was acknowledged without its leaf');
+          this.#hear(held);
+          return true;
         },
         (error: unknown) => this.#refused(answer, error),
       )
       .finally(() => {
         this.#isSending = false;
-        if (this.#snapshot.answer !== answer) this.#deliver();
-      });
+      })
+      .then((isSettled) => (isSettled ? this.#deliver() : this.#tryAgain()));
   }
 
-  #refused(answer: OwnAnswer, error: unknown): void {
-    if (!(error instanceof Problem)) throw error;
-    // Unreachable is no refusal: the answer stays on this phone and goes out with the next connection.
-    if (error.code === 'unreachable') return;
-    if (this.#snapshot.answer === answer) this.#keep(refusedAsLate(answer, error.message));
+  /** Whether the matter is settled; if not, the answer stays on this phone and is sent again. */
+  #refused(answer: OwnAnswer, error: unknown): boolean {
+    if (isPassing(error)) return false;
+    const { code, message } = error as Problem;
+    const current = answerTo(this.#snapshot.answers, answer.trial);
+    if (current?.revision === answer.revision)
+      this.#keep(refused(current, code === 'too-late' ? 'late' : 'refused', message));
+    return true;
   }
 
-  #report(error: unknown): void {
-    if (!(error instanceof Problem)) throw error;
-    if (error.code !== 'unreachable') this.#update({ alarm: error.message });
+  #tryAgain(): void {
+    clearTimeout(this.#again);
+    this.#again = setTimeout(() => {
+      if (this.#snapshot.view?.revealWanted) this.#reveal();
+      this.#deliver();
+    }, againMs);
   }
+}
+
+/** @throws whatever is no Problem, which is a fault of the program */
+function isPassing(error: unknown): boolean {
+  if (!(error instanceof Problem)) throw error;
+  return passing.includes(error.code);
 }

@@ -3,6 +3,5 @@ import { Listener } from './listener.tsx';
 
 /** The listener's phone. Not in React's strict mode, which would open every seat twice during development. */
 export function start(root: HTMLElement): void {
-  document.documentElement.dataset.theme = 'dim';
   createRoot(root).render(<Listener />);
 }

@@ -1,9 +1,14 @@
+import type { ReactNode } from 'react';
+
+export type WordsProps = { title: string; detail: string; children?: ReactNode };
+
 /** What is going on, in the middle of the phone. */
-export function Words({ title, detail }: { title: string; detail: string }) {
+export function Words({ title, detail, children }: WordsProps) {
   return (
-    <div role="status" className="flex flex-1 flex-col items-center justify-center gap-4 text-center">
+    <div className="flex flex-1 flex-col items-center justify-center gap-4 py-4 text-center">
       <h1 className="text-2xl">{title}</h1>
       <p className="max-w-[22rem] text-xl text-soft">{detail}</p>
+      {children}
     </div>
   );
 }

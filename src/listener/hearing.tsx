@@ -1,0 +1,24 @@
+import type { ListenerView } from '#shared/contracts/listener-live.ts';
+
+type Trial = NonNullable<ListenerView['trial']>;
+
+function nextOf({ familiarisation, presentationNumber, presentations }: Trial): string {
+  if (familiarisation) return 'Get to know the sound. Nothing is asked.';
+  return presentationNumber === presentations ? 'Next you say which one it matches.' : 'Just listen.';
+}
+
+/** What is heard now, as large as the phone takes it. */
+export function Hearing({ trial }: { trial: Trial }) {
+  const isLetter = trial.presentation.length <= 2;
+  return (
+    <div className="flex flex-1 flex-col items-center justify-center gap-6 py-4 text-center">
+      <span aria-hidden="true" className={`leading-none font-bold ${isLetter ? 'text-[13rem]' : 'text-[4.5rem]'}`}>
+        {trial.presentation}
+      </span>
+      <div>
+        <h1 className="text-xl font-normal text-soft">You are hearing {trial.presentation}.</h1>
+        <p className="text-xl text-soft">{nextOf(trial)}</p>
+      </div>
+    </div>
+  );
+}
