@@ -3,7 +3,7 @@ import type { ListenerView } from '#shared/contracts/listener-live.ts';
 import { CopyButton } from '../ui/copy-button.tsx';
 import { CourseLine } from '../ui/course-line.tsx';
 import { PhonePage } from './phone-page.tsx';
-import { ReceiptList, receiptsText } from './receipt-list.tsx';
+import { DisputedList, ReceiptList, receiptsText } from './receipt-list.tsx';
 import type { SeatSnapshot } from './seat.ts';
 
 function headingOf({ left, phase }: ListenerView): { title: string; detail: string } {
@@ -25,7 +25,7 @@ type EndPageProps = { view: ListenerView; snapshot: SeatSnapshot; alarm: ReactNo
 /** Thanks, and the receipts of this phone. */
 export function EndPage({ view, snapshot, alarm }: EndPageProps) {
   const { title, detail } = headingOf(view);
-  const { receipts, answers } = snapshot;
+  const { receipts, answers, disputed } = snapshot;
   const late = answers.filter(({ state }) => state === 'late');
   const here = answers.filter(({ state }) => state === 'here');
   return (
@@ -50,6 +50,7 @@ export function EndPage({ view, snapshot, alarm }: EndPageProps) {
             <strong>Too late.</strong> {why}
           </p>
         ))}
+        <DisputedList disputed={disputed} />
         {receipts.length === 0 ? null : (
           <section className="mt-4 flex flex-col gap-4">
             <h2 className="text-xl">Your receipts</h2>
@@ -57,7 +58,7 @@ export function EndPage({ view, snapshot, alarm }: EndPageProps) {
               A receipt names the leaf that stands for your answer and the entry that locked it. Once the result is
               published, anyone can look both up in the record and see whether it still holds what you answered.
             </p>
-            <CopyButton text={receiptsText(view, receipts)} label="Copy the receipts" />
+            <CopyButton text={receiptsText(view, snapshot)} label="Copy the receipts" />
             <ReceiptList receipts={receipts} />
           </section>
         )}

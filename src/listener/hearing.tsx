@@ -11,8 +11,11 @@ function nextOf({ familiarisation, presentationNumber, presentations }: Trial): 
 export function Hearing({ trial }: { trial: Trial }) {
   const isLetter = trial.presentation.length <= 2;
   return (
-    <div className="flex flex-1 flex-col items-center justify-center gap-6 py-4 text-center">
-      <span aria-hidden="true" className={`leading-none font-bold ${isLetter ? 'text-[13rem]' : 'text-[4.5rem]'}`}>
+    <div className="flex flex-1 flex-col items-center justify-center gap-6 py-4 [@media(max-height:699px)]:gap-3 [@media(max-height:699px)]:py-1 text-center">
+      <span
+        aria-hidden="true"
+        className={`leading-none font-bold ${isLetter ? 'text-[min(13rem,28dvh)]' : 'text-[4.5rem]'}`}
+      >
         {trial.presentation}
       </span>
       <div>

@@ -1,12 +1,20 @@
-import { type Ref, useRef, useState } from 'react';
+import { type Ref, useEffect, useRef, useState } from 'react';
 import { Problem } from '#shared/problem.ts';
 import { Button } from '../ui/button.tsx';
 import type { Seat } from './seat.ts';
+
+/** How long a note stays: by then it has been read, or the button is pressed again. */
+const noteMs = 12_000;
 
 /** Always there: "Too loud", and apart from it the way out, which asks once. */
 export function LoudAndLeave({ seat }: { seat: Seat }) {
   const dialog = useRef<HTMLDialogElement>(null);
   const [note, setNote] = useState('');
+  useEffect(() => {
+    if (note === '') return;
+    const timer = setTimeout(() => setNote(''), noteMs);
+    return () => clearTimeout(timer);
+  }, [note]);
   const attempt = (work: Promise<void>, whenUnreachable: string) => {
     setNote('');
     work.catch((error: unknown) => {

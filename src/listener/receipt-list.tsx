@@ -1,13 +1,20 @@
 import type { ListenerView } from '#shared/contracts/listener-live.ts';
+import type { OwnAnswer } from './answers.ts';
 import type { KeptReceipt } from './seat-memory.ts';
 
-/** The receipts as text to keep. */
-export function receiptsText({ title, session, seat }: ListenerView, receipts: readonly KeptReceipt[]): string {
+type Kept = { readonly receipts: readonly KeptReceipt[]; readonly disputed: readonly OwnAnswer[] };
+
+/** The receipts as text to keep, and after them what this phone sent where the server holds something else. */
+export function receiptsText({ title, session, seat }: ListenerView, { receipts, disputed }: Kept): string {
   const head = `${title}, session ${session}, seat ${seat}`;
   const lines = receipts.map(
     ({ trial, leaf, sequence, digest }) => `trial ${trial}\n  leaf ${leaf}\n  entry ${sequence} ${digest}`,
   );
-  return [head, ...lines].join('\n');
+  const sent = disputed.map(
+    ({ trial, choice, confidence, revision, salt }) =>
+      `trial ${trial}, sent by this phone and not held: ${choice}${confidence === null ? '' : `, ${confidence}`}\n  revision ${revision} salt ${salt}`,
+  );
+  return [head, ...lines, ...sent].join('\n');
 }
 
 function Check({ isOwn }: Pick<KeptReceipt, 'isOwn'>) {
@@ -36,4 +43,14 @@ export function ReceiptList({ receipts }: { receipts: readonly KeptReceipt[] }) 
       ))}
     </ol>
   );
+}
+
+/** What this phone sent where the server holds something else, with the salt that proves it. */
+export function DisputedList({ disputed }: Pick<Kept, 'disputed'>) {
+  return disputed.map(({ trial, choice, revision, salt }) => (
+    <p key={`${trial} ${revision}`} className="border-l-[5px] border-amber pl-4">
+      Trial {trial}: this phone sent {choice}, and the server holds something else. Salt{' '}
+      <span className="font-mono break-all">{salt}</span>
+    </p>
+  ));
 }

@@ -13,9 +13,11 @@ type Memory = {
   readonly contribution: string | null;
   readonly answers: readonly OwnAnswer[];
   readonly receipts: readonly KeptReceipt[];
+  /** What this phone sent where the server holds something else under the same revision. */
+  readonly disputed: readonly OwnAnswer[];
 };
 
-const empty: Memory = { contribution: null, answers: [], receipts: [] };
+const empty: Memory = { contribution: null, answers: [], receipts: [], disputed: [] };
 const keyOf = (token: string) => `fairlead seat ${token}`;
 const lastSeatKey = 'fairlead last seat';
 

@@ -32,10 +32,10 @@ export function SeatPage({ seat }: { seat: Seat }) {
 /** Takes the whole page: what it says is the one thing that a listener must not overlook. */
 function Alarm({ text, onTold }: { text: string; onTold: () => void }) {
   return (
-    <div role="alert" className="my-4 flex flex-1 flex-col justify-center gap-5 border-l-[5px] border-amber pl-4">
+    <div role="alert" className="my-2 flex flex-1 flex-col justify-center gap-5 border-l-[5px] border-amber pl-4">
       <h1 className="text-2xl text-amber">Tell the proctor now</h1>
       <p className="text-xl">{text}</p>
-      <p className="text-soft">Your own answer and its receipt stay on this phone.</p>
+      <p className="text-soft">This phone keeps what it sent and lists it with the receipts.</p>
       <Button size="touch" onClick={onTold}>
         I have told the proctor
       </Button>
@@ -68,12 +68,12 @@ function Finding() {
 }
 
 function Refused({ problem }: { problem: Problem }) {
-  const title = problem.code === 'not-found' ? 'This seat is not known' : 'This seat cannot be opened';
+  const title = problem.code === 'not-found' ? 'This link leads to no seat' : 'This seat cannot be opened';
   return (
     <PhonePage>
       <Words title={title} detail={problem.message} />
       <a href="/listen" className={buttonLook('primary', 'touch', 'mb-6')}>
-        Take a seat with a session code
+        Enter a session code
       </a>
     </PhonePage>
   );

@@ -19,6 +19,8 @@ import { type KeptReceipt, randomHex, recall, remember } from './seat-memory.ts'
 export type SeatSnapshot = LiveSnapshot<ListenerView> & {
   readonly answers: readonly OwnAnswer[];
   readonly receipts: readonly KeptReceipt[];
+  /** What this phone sent where the server holds something else; kept with its salt. */
+  readonly disputed: readonly OwnAnswer[];
   /** Whether this tab has the random number that the seat committed to. */
   readonly hasContribution: boolean;
   /** What the listener must know and tell: what was sent and what was stored are not the same. */
@@ -43,11 +45,11 @@ export class Seat {
 
   constructor(token: string) {
     this.#token = token;
-    const { contribution, answers, receipts } = recall(token);
+    const { contribution, answers, receipts, disputed } = recall(token);
     this.#contribution = contribution;
     this.#live = openLive({ audience: 'listener', token }, (value) => listenerView.parse(value));
     const hasContribution = contribution !== null;
-    this.#snapshot = { ...this.#live.getSnapshot(), answers, receipts, hasContribution, alarm: null };
+    this.#snapshot = { ...this.#live.getSnapshot(), answers, receipts, disputed, hasContribution, alarm: null };
     this.#live.subscribe(() => this.#viewed());
     window.addEventListener('focus', () => this.#deliver());
     window.addEventListener('online', () => this.#deliver());
@@ -110,9 +112,14 @@ export class Seat {
   #hear(held: HeldAnswer): void {
     const known = answerTo(this.#snapshot.answers, held.trial);
     if (known?.state === 'held' && known.revision === held.revision && !isDifferent(known, held)) return;
+    if (known !== null && isDifferent(known, held)) this.#dispute(known);
     this.#keep(known === null ? learnt(held) : acknowledged(known, held));
-    if (known !== null && isDifferent(known, held))
-      this.#update({ alarm: `For trial ${held.trial} the server holds something else than this phone sent.` });
+  }
+
+  #dispute(sent: OwnAnswer): void {
+    const disputed = [...this.#snapshot.disputed, sent];
+    remember(this.#token, { disputed });
+    this.#update({ disputed, alarm: `For trial ${sent.trial} the server holds something else than this phone sent.` });
   }
 
   #receive(lock: NonNullable<ListenerView['lastLock']>): void {

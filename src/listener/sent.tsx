@@ -1,4 +1,4 @@
-import { useState } from 'react';
+import { useEffect, useState } from 'react';
 import { Button } from '../ui/button.tsx';
 import type { OwnAnswer } from './answers.ts';
 import { Words } from './words.tsx';
@@ -26,16 +26,16 @@ function wordsOf({ choice, state, heldAt, why }: OwnAnswer): { title: string; de
 
 /** What became of the answer, in plain words. */
 export function Sent({ own, onChange }: { own: OwnAnswer; onChange: () => void }) {
-  const [shownAt] = useState(() => performance.now());
+  const [isSettled, setSettled] = useState(false);
+  useEffect(() => {
+    const timer = setTimeout(() => setSettled(true), settleMs);
+    return () => clearTimeout(timer);
+  }, []);
   return (
     <div className="flex flex-1 flex-col">
       <Words {...wordsOf(own)}>{own.state === 'held' ? <p className="text-xl">Rest your ears.</p> : null}</Words>
       {own.state === 'late' ? null : (
-        <Button
-          size="touch"
-          className="mb-4"
-          onClick={() => (performance.now() - shownAt < settleMs ? undefined : onChange())}
-        >
+        <Button size="touch" className="mb-4" disabled={!isSettled} onClick={onChange}>
           Change the answer
         </Button>
       )}
