@@ -25,27 +25,31 @@ export function Component() {
 
   if (refused !== null) return <Outside title="This console cannot be opened" detail={refused.message} back={back} />;
   if (view === null) return <Outside title="Opening the console" detail="Waiting for the server." back={back} />;
+  const isLost = connection === 'lost';
   const next = nextActOf(view);
   const goOn = () => {
-    if (next !== null && !console.isBusy) void console.act(next.command);
+    if (next === null || console.isBusy || isLost) return;
+    const isTooEarly = next.opensAt !== null && Date.now() + clockOffsetMs < next.opensAt;
+    if (!isTooEarly) void console.act(next.command);
   };
   const isOver = view.phase === 'finished' || view.phase === 'abandoned';
   return (
-    <DimLayout header={<ConsoleHead view={view} isLost={connection === 'lost'} back={back} />}>
+    <DimLayout header={<ConsoleHead view={view} isLost={isLost} clockOffsetMs={clockOffsetMs} back={back} />}>
       <div className="flex flex-1 flex-col lg:flex-row">
         <ConsoleBody
           view={view}
           clockOffsetMs={clockOffsetMs}
+          isLost={isLost}
           actions={console}
           next={next}
           onNext={goOn}
           back={back}
         />
-        <SeatsPanel view={view} act={console.act} isBusy={console.isBusy} />
+        <SeatsPanel view={view} clockOffsetMs={clockOffsetMs} actions={console} />
       </div>
       {isOver ? null : (
-        <div className="flex flex-col gap-4 border-t border-rule px-5 py-4 lg:flex-row lg:items-center lg:gap-10 lg:px-11">
-          <CourseLine trials={view.course} className="min-w-0 flex-1" />
+        <div className="flex flex-col gap-4 border-t border-rule px-5 py-4 lg:px-11">
+          <CourseLine trials={view.course} />
           <SideActs view={view} actions={console} onNext={next === null ? null : goOn} keys={keys} />
         </div>
       )}

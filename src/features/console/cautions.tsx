@@ -11,35 +11,53 @@ export function Cautions({ view, act, isBusy }: { view: ProctorView } & Pick<Con
     setTicked(ticked.includes(caution) ? ticked.filter((other) => other !== caution) : [...ticked, caution]);
   const left = cautions.length - ticked.length;
   return (
-    <section className="flex max-w-[46rem] flex-col gap-6">
+    <section className="flex max-w-[54rem] flex-1 flex-col gap-4">
       <h2 className="text-step font-bold">Before anybody is seated</h2>
       <div>
         {cautions.map((caution) => (
-          <label key={caution} className="flex min-h-16 cursor-pointer items-start gap-4 border-b border-rule py-4">
-            <input
-              type="checkbox"
-              checked={ticked.includes(caution)}
-              onChange={() => toggle(caution)}
-              className="mt-0.5 size-7 shrink-0 accent-copper"
-            />
-            <span>{cautionWords(caution, view.rig)}</span>
-          </label>
+          <CautionRow
+            key={caution}
+            {...cautionWords(caution, view.rig)}
+            isTicked={ticked.includes(caution)}
+            onToggle={() => toggle(caution)}
+          />
         ))}
       </div>
-      <Button
-        variant="primary"
-        size="large"
-        disabled={left > 0}
-        busy={isBusy}
-        onClick={() => act({ kind: 'confirm-cautions', items: [...ticked] })}
-      >
-        Confirm the cautions
-      </Button>
-      <p role="status" className="text-soft">
-        {left === 0
-          ? 'Your confirmation goes on the record.'
-          : `${left} of ${cautions.length} still to be read and ticked.`}
-      </p>
+      <div className="mt-auto flex flex-col gap-3 pt-2">
+        <p role="status" className="text-soft">
+          {left === 0
+            ? 'Your confirmation goes on the record.'
+            : `${left} of ${cautions.length} still to be read and ticked.`}
+        </p>
+        <Button
+          variant="primary"
+          size="large"
+          disabled={left > 0}
+          busy={isBusy}
+          className="text-2xl"
+          onClick={() => void act({ kind: 'confirm-cautions', items: [...ticked] })}
+        >
+          Confirm the cautions
+        </Button>
+      </div>
     </section>
+  );
+}
+
+type CautionRowProps = { name: string; rule: string; isTicked: boolean; onToggle: () => void };
+
+function CautionRow({ name, rule, isTicked, onToggle }: CautionRowProps) {
+  return (
+    <label className="flex min-h-16 cursor-pointer items-start gap-4 border-b border-rule py-3">
+      <input
+        type="checkbox"
+        checked={isTicked}
+        onChange={onToggle}
+        className="mt-0.5 size-7 shrink-0 cursor-pointer accent-jacket"
+      />
+      <span className="grid flex-1 gap-x-6 sm:grid-cols-[7rem_1fr]">
+        <strong>{name}</strong> <span className={isTicked ? 'text-soft' : ''}>{rule}</span>
+      </span>
+    </label>
   );
 }

@@ -1,10 +1,17 @@
+import { Link } from 'react-router-dom';
 import type { ProctorView } from '#shared/contracts/proctor-live.ts';
 import { StatusWord } from '../../ui/status-word.tsx';
+import { useSecondsSince } from './use-seconds-since.ts';
 
-type ConsoleHeadProps = { view: ProctorView; isLost: boolean; back: { to: string; label: string } };
+type ConsoleHeadProps = {
+  view: ProctorView;
+  isLost: boolean;
+  clockOffsetMs: number;
+  back: { to: string; label: string };
+};
 
-/** Which session this is, and whether its record is being held. */
-export function ConsoleHead({ view, isLost, back }: ConsoleHeadProps) {
+/** Which session this is, whether its record is being held, and what time it is. */
+export function ConsoleHead({ view, isLost, clockOffsetMs, back }: ConsoleHeadProps) {
   return (
     <div className="flex flex-wrap items-center justify-between gap-x-6 gap-y-1 border-b border-rule px-5 py-3 lg:px-8">
       <h1 className="text-base font-normal text-soft">
@@ -12,21 +19,28 @@ export function ConsoleHead({ view, isLost, back }: ConsoleHeadProps) {
         Session {view.session} · {view.room} · {view.method}
       </h1>
       <div className="flex flex-wrap items-center gap-x-6 gap-y-1">
-        <span role="status">
-          {isLost ? (
-            <StatusWord tone="amber" hasDot={true}>
-              No connection; the session goes on when it is back
-            </StatusWord>
-          ) : (
-            <StatusWord tone="held" hasDot={true}>
-              Record held, {view.record.entries} entries
-            </StatusWord>
-          )}
-        </span>
-        <a href={back.to} className="text-soft">
+        {isLost ? (
+          <StatusWord tone="amber" hasDot={true}>
+            No connection
+          </StatusWord>
+        ) : (
+          <StatusWord tone="held" hasDot={true}>
+            Record held, {view.record.entries} entries
+          </StatusWord>
+        )}
+        <TimeOfDay clockOffsetMs={clockOffsetMs} />
+        <Link to={back.to} className="inline-flex min-h-11 items-center text-soft hover:text-ink">
           {back.label}
-        </a>
+        </Link>
       </div>
     </div>
   );
+}
+
+const timeOfDay = new Intl.DateTimeFormat('en-GB', { hour: '2-digit', minute: '2-digit' });
+
+/** By the server's clock, which is the one the record goes by. */
+function TimeOfDay({ clockOffsetMs }: { clockOffsetMs: number }) {
+  const seconds = useSecondsSince(0, clockOffsetMs);
+  return <span className="font-mono text-soft tabular-nums">{timeOfDay.format(seconds * 1000)}</span>;
 }

@@ -1,4 +1,5 @@
 import type { Caution, ChangeStep, ProctorView, VoidReason } from '#shared/contracts/proctor-live.ts';
+import { changeSteps } from '#shared/contracts/proctor-live.ts';
 
 type Rig = ProctorView['rig'];
 
@@ -7,8 +8,24 @@ export type StepWords = { readonly act: string; readonly how: string; readonly d
 
 const muteOf: Record<Rig, StepWords> = {
   loudspeaker: { act: 'Stop and mute', how: 'music stopped, amplifier muted or off', done: 'It is muted' },
-  line: { act: 'Stop and mute', how: 'music stopped, amplifier muted', done: 'It is muted' },
-  headphone: { act: 'Stop, headphones off', how: 'music stopped, nobody wears them', done: 'They are off' },
+  line: { act: 'Stop and mute', how: 'music stopped, amplifier muted or off', done: 'It is muted' },
+  headphone: {
+    act: 'Stop, headphones off',
+    how: 'music stopped, amplifier muted, nobody wears them',
+    done: 'They are off',
+  },
+};
+
+const fitOf: Record<Rig, string> = {
+  loudspeaker: 'loudspeaker end first, amplifier last',
+  line: 'far end first, amplifier last',
+  headphone: 'headphone end first, amplifier last',
+};
+
+const checkOf: Record<Rig, string> = {
+  loudspeaker: 'read the sleeve at both ends, no strand loose, seated firmly',
+  line: 'read the sleeve at both ends, plugs home',
+  headphone: 'read the sleeve at both ends, plugs home, headphones back on',
 };
 
 /** The words of a step. The code is shown on its sleeve; here it is named once more, to be read and said. */
@@ -23,39 +40,20 @@ export function stepWords(step: ChangeStep, rig: Rig, code: string): StepWords {
         done: 'It is unplugged',
       };
     case 'fit':
-      return { act: `Fit ${code}`, how: 'the far end first, the amplifier end last', done: `${code} is in` };
+      return { act: `Fit ${code}`, how: fitOf[rig], done: `${code} is in` };
     case 'check':
-      return {
-        act: `Check ${code}`,
-        how: 'read the sleeve at both ends, no strand loose, seated firmly',
-        done: `${code} is checked`,
-      };
+      return { act: `Check ${code}`, how: checkOf[rig], done: `${code} is checked` };
     case 'unmute':
       return { act: 'Unmute and play', how: 'the same start point as always', done: 'Unmute and start listening' };
   }
 }
 
-const amplifierOf: Record<Rig, string> = {
-  loudspeaker:
-    'Before a cable is changed the amplifier is muted, better powered down. Unplug at the amplifier first and plug in there last. Valve amplifiers with output transformers never run without load.',
-  line: 'Mute before a plug is pulled: the pin touches before the sleeve. Mute, wait, change, wait, unmute.',
-  headphone: 'Headphones are off the head, or the amplifier is muted, at every change. The first second plays quietly.',
-};
-
-/** What is read and ticked before seating opens. */
-export function cautionWords(caution: Caution, rig: Rig): string {
-  switch (caution) {
-    case 'amplifier':
-      return amplifierOf[rig];
-    case 'shorts':
-      return 'No output is ever shorted: no loose strands, never two cables in parallel. Bridged and class-D outputs are live on both terminals.';
-    case 'mains':
-      return 'Nothing inside mains equipment is opened.';
-    case 'hearing':
-      return 'The level is set and noted: 70 to 80 dBA recommended, a warning from 83 dBA, refused from 90 dBA. Nobody with tinnitus or sore ears takes part without having been asked.';
-    case 'local-rules':
-      return 'Local codes and licensed practice prevail over anything shown here.';
-  }
+/** What comes after a step, as the end of a line: "fit 417". */
+export function wordsAfter(step: ChangeStep, rig: Rig, code: string): string {
+  const after = changeSteps[changeSteps.indexOf(step) + 1];
+  if (after === undefined) return 'they listen';
+  const { act } = stepWords(after, rig, code);
+  return act.charAt(0).toLowerCase() + act.slice(1);
 }
 
 export const voidWords: Record<VoidReason, string> = {
@@ -67,7 +65,46 @@ export const voidWords: Record<VoidReason, string> = {
   safety: 'Safety',
 };
 
-export function pauseWords({ reason, seat }: NonNullable<ProctorView['paused']>): string {
-  if (reason === 'too-loud') return `Too loud${seat === null ? '' : `, from ${seat}`}`;
-  return reason === 'break' ? 'Break' : 'Paused';
+/** One caution, by its name and its rule. */
+export type CautionWords = { readonly name: string; readonly rule: string };
+
+const amplifierOf: Record<Rig, string> = {
+  loudspeaker:
+    'Muted or off before a cable is changed; off is better. A cable comes off at the amplifier first and goes on there last. Valve amplifiers with output transformers never play without their load.',
+  line: 'Muted or off before a plug is pulled: the pin touches before the sleeve. Mute, wait, change, wait, unmute. A cable comes off at the amplifier first and goes on there last.',
+  headphone:
+    'Muted or off, and the headphones off the head, at every change. A cable comes off at the amplifier first and goes on there last. The first second plays quietly, then the level rises.',
+};
+
+const shortsOf: Record<Rig, string> = {
+  loudspeaker:
+    'No output is ever shorted: no loose strand, one cable out before the next goes in, never two in parallel. Bridged and class-D outputs are live on both terminals: the minus is not ground.',
+  line: 'No output is ever shorted: one cable out before the next goes in, never two in parallel. Balanced, bridged and class-D outputs are live on both terminals: neither may touch ground.',
+  headphone:
+    'No output is ever shorted: a plug moved while it is live can bridge its own contacts. Balanced, bridged and class-D outputs are live on both terminals: neither may touch ground.',
+};
+
+/** What is read and ticked before seating opens. */
+export function cautionWords(caution: Caution, rig: Rig): CautionWords {
+  switch (caution) {
+    case 'amplifier':
+      return { name: 'Amplifier', rule: amplifierOf[rig] };
+    case 'shorts':
+      return { name: 'Shorts', rule: shortsOf[rig] };
+    case 'mains':
+      return {
+        name: 'Mains',
+        rule: 'Mains parts stay closed. No cover of mains equipment comes off, pulled plug or not: capacitors hold their charge.',
+      };
+    case 'hearing':
+      return {
+        name: 'Hearing',
+        rule: 'The level is measured and noted: 70 to 80 dBA recommended, a warning from 83 dBA, refused from 90 dBA. Everybody was asked about tinnitus and sensitive ears, and knows “Too loud” on the phone.',
+      };
+    case 'local-rules':
+      return {
+        name: 'Local rules',
+        rule: 'Local codes and licensed practice prevail over anything shown here.',
+      };
+  }
 }

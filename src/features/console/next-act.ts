@@ -12,23 +12,36 @@ export type NextAct = {
 
 const now = (label: string, command: ConsoleCommand): NextAct => ({ label, command, step: null, opensAt: null });
 
+export const isAnybodySeated = (view: ProctorView): boolean => view.seats.some(({ state }) => state !== 'left');
+
+/** Whether every trial has ended and none is to come. */
+export const isComplete = (view: ProctorView): boolean =>
+  view.phase === 'running' &&
+  view.trial === null &&
+  view.nextTrial === null &&
+  view.familiarised &&
+  view.course.every(({ state }) => state === 'locked' || state === 'void');
+
 /** The one act that comes next, or null when the console waits for somebody else. */
 export function nextActOf(view: ProctorView): NextAct | null {
   if (view.paused !== null) return now('Resume', { kind: 'resume' });
   if (view.phase === 'planned' && view.cautionsConfirmed) return now('Open seating', { kind: 'open-seating' });
-  if (view.phase === 'seating' && view.seats.some(({ state }) => state !== 'left'))
+  if (view.phase === 'seating' && isAnybodySeated(view))
     return now('Close seating and fix the draw', { kind: 'close-seating' });
   if (view.phase !== 'running') return null;
-  const { trial } = view;
-  if (trial === null) {
-    if (!view.familiarised) return now('Begin the familiarisation', { kind: 'begin-familiarisation' });
-    if (view.nextTrial !== null) return now(`Begin trial ${view.nextTrial}`, { kind: 'begin-trial' });
-    return view.course.every(({ state }) => state === 'locked' || state === 'void')
-      ? now('Finish the session', { kind: 'finish' })
-      : null;
-  }
-  if (trial.step !== null) {
-    const { step } = trial;
+  return view.trial === null ? actBetweenTrials(view) : actInTrial(view, view.trial);
+}
+
+function actBetweenTrials(view: ProctorView): NextAct | null {
+  if (isComplete(view)) return now('Finish the session', { kind: 'finish' });
+  if (!isAnybodySeated(view)) return null;
+  if (!view.familiarised) return now('Begin the familiarisation', { kind: 'begin-familiarisation' });
+  return view.nextTrial === null ? null : now(`Begin trial ${view.nextTrial}`, { kind: 'begin-trial' });
+}
+
+function actInTrial(view: ProctorView, trial: NonNullable<ProctorView['trial']>): NextAct | null {
+  const { step } = trial;
+  if (step !== null) {
     const { done } = stepWords(step, view.rig, trial.code ?? '');
     const isLast = step === changeSteps.at(-1);
     return { label: done, command: { kind: 'confirm-step', step }, step, opensAt: isLast ? trial.endsAt : null };

@@ -1,49 +1,53 @@
 import { useState } from 'react';
 import type { ProctorView } from '#shared/contracts/proctor-live.ts';
-import { Button } from '../../ui/button.tsx';
 import { ConfirmDialog } from '../../ui/confirm-dialog.tsx';
-import { StatusWord } from '../../ui/status-word.tsx';
+import { SeatRow } from './seat-row.tsx';
 import type { ConsoleActions } from './use-console.ts';
 
 type SeatView = ProctorView['seats'][number];
 
-const words = { ready: 'ready', answered: 'answered', away: 'away', left: 'has left' } as const;
-const tones = { ready: 'held', answered: 'held', away: 'amber', left: 'neutral' } as const;
+type SeatsPanelProps = {
+  view: ProctorView;
+  clockOffsetMs: number;
+  actions: Pick<ConsoleActions, 'act' | 'isBusy' | 'problem' | 'forgetProblem'>;
+};
 
 /** Who is here and who has answered; never what. */
-export function SeatsPanel({ view, act, isBusy }: { view: ProctorView } & Pick<ConsoleActions, 'act' | 'isBusy'>) {
+export function SeatsPanel({ view, clockOffsetMs, actions }: SeatsPanelProps) {
   const [excused, setExcused] = useState<SeatView | null>(null);
-  const here = view.seats.filter(({ state }) => state === 'ready' || state === 'answered').length;
+  const staying = view.seats.filter(({ state }) => state !== 'left');
+  const here = staying.filter(({ state }) => state !== 'away').length;
   const isOpen = view.phase === 'seating' || view.phase === 'revealing' || view.phase === 'running';
+  const ask = (seat: SeatView) => {
+    actions.forgetProblem();
+    setExcused(seat);
+  };
   return (
-    <aside aria-label="Listeners" className="border-rule px-5 py-6 max-lg:border-t lg:w-[21.5rem] lg:border-l lg:px-7">
+    <aside aria-label="Listeners" className="border-rule px-5 py-6 max-lg:border-t lg:w-[22.5rem] lg:border-l lg:px-7">
       <div className="flex items-baseline justify-between gap-4">
         <h2 className="text-lg">Listeners</h2>
-        <span className="text-soft">
-          {here} of {view.seats.length} here
-        </span>
+        {view.seats.length === 0 ? null : (
+          <span className="text-soft">
+            {here} of {staying.length} here
+          </span>
+        )}
       </div>
-      {view.seats.length === 0 ? <p className="mt-3 text-soft">Nobody is seated yet.</p> : null}
+      {view.seats.length === 0 ? <p className="mt-3 text-soft">Seats appear here as they are taken.</p> : null}
       <ul>
         {view.seats.map((seat) => (
-          <li
+          <SeatRow
             key={seat.seat}
-            className="flex min-h-13 flex-wrap items-center gap-x-4 gap-y-1 border-b border-rule py-2"
-          >
-            <span className="font-mono text-soft">{seat.seat}</span>
-            <span className="min-w-0 flex-1">{seat.place}</span>
-            <StatusWord tone={tones[seat.state]}>
-              {words[seat.state]}
-              {seat.late ? ', one late' : ''}
-            </StatusWord>
-            {isOpen && seat.state === 'away' ? (
-              <Button className="min-h-11" onClick={() => setExcused(seat)}>
-                Excuse {seat.seat}
-              </Button>
-            ) : null}
-          </li>
+            seat={seat}
+            clockOffsetMs={clockOffsetMs}
+            onExcuse={isOpen && seat.state !== 'left' ? () => ask(seat) : null}
+          />
         ))}
       </ul>
+      {view.phase === 'running' && view.join !== null ? (
+        <p className="mt-5 text-soft">
+          Whoever comes late joins with <span className="font-mono text-ink">{view.join.code}</span>
+        </p>
+      ) : null}
       <p className="mt-5 text-soft">
         Scores stay sealed until the study is closed. Nobody, you included, can see who is right.
       </p>
@@ -51,13 +55,14 @@ export function SeatsPanel({ view, act, isBusy }: { view: ProctorView } & Pick<C
         isOpen={excused !== null}
         onOpenChange={(isShown) => (isShown ? undefined : setExcused(null))}
         title={`Excuse ${excused?.seat ?? ''}?`}
-        consequence="The listener takes no further part. Answers of locked trials stay; later trials do not wait for this seat."
+        consequence="The listener takes no further part and cannot come back to this seat. Answers of locked trials stay; no trial waits for this seat any more."
         confirmWord="Excuse the listener"
-        keepWord="Wait for them"
-        busy={isBusy}
+        keepWord="Keep the seat"
+        busy={actions.isBusy}
+        {...(actions.problem === null ? {} : { problem: actions.problem })}
         onConfirm={() => {
           if (excused === null) return;
-          void act({ kind: 'excuse-seat', seat: excused.seat }).then(() => setExcused(null));
+          void actions.act({ kind: 'excuse-seat', seat: excused.seat }).then((isDone) => isDone && setExcused(null));
         }}
       />
     </aside>

@@ -1,72 +1,78 @@
-import type { ProctorView } from '#shared/contracts/proctor-live.ts';
+import { changeSteps, type ProctorView } from '#shared/contracts/proctor-live.ts';
 import { CableRun } from '../../ui/cable-run.tsx';
 import { Countdown } from '../../ui/countdown.tsx';
 import { Sleeve } from '../../ui/sleeve.tsx';
-import { stepWords } from './console-words.ts';
+import { stepWords, wordsAfter } from './console-words.ts';
 
 type Trial = NonNullable<ProctorView['trial']>;
 type Words = { title: string; detail: string };
 
 function wordsOf(trial: Trial, view: ProctorView): Words {
-  if (view.paused !== null)
-    return { title: 'Paused', detail: 'After it, this presentation starts again from its change.' };
+  const code = trial.code ?? '';
+  if (view.paused !== null) return { title: 'Nothing moves', detail: 'leave everything as it is until you resume' };
   if (trial.step !== null) {
-    const { act, how } = stepWords(trial.step, view.rig, trial.code ?? '');
-    return { title: act, detail: how };
+    const { act, how } = stepWords(trial.step, view.rig, code);
+    return { title: act, detail: `${how} · next: ${wordsAfter(trial.step, view.rig, code)}` };
   }
   if (trial.stage === 'listening')
-    return { title: 'They are listening', detail: `play “${trial.excerpt}”; stop when the time is out` };
+    return { title: 'They are listening', detail: `“${trial.excerpt}” · stop the music when the time is out` };
   const out = trial.expected - trial.answered;
   return {
     title: `${trial.answered} of ${trial.expected} answered`,
-    detail: out === 0 ? 'all are in; lock the trial, or void it if something went wrong' : `the trial waits for ${out}`,
+    detail: out === 0 ? 'all are in · next: lock the trial' : `${out} still to come · say nothing, show nothing`,
   };
 }
-
-const stepCount = 5;
 
 function placeOf(trial: Trial): string {
   const presentation = `presentation ${trial.presentationNumber} of ${trial.presentations}`;
   if (trial.stage === 'answering') return 'answers';
   if (trial.stage === 'listening') return `${presentation} · listening`;
-  return `${presentation} · step ${Math.min(trial.stepsDone.length + 1, stepCount)} of ${stepCount}`;
+  const step = Math.min(trial.stepsDone.length + 1, changeSteps.length);
+  return `${presentation} · step ${step} of ${changeSteps.length}`;
 }
 
-/** The open trial: the code to be fitted, the step now, and the clock. */
-export function TrialPanel({ trial, view, clockOffsetMs }: { trial: Trial; view: ProctorView; clockOffsetMs: number }) {
+/** The open trial: the code to be fitted on its sleeve, and the step now. */
+export function TrialPanel({ trial, view }: { trial: Trial; view: ProctorView }) {
   const { title, detail } = wordsOf(trial, view);
   return (
-    <section className="flex flex-1 flex-col justify-between gap-6">
+    <section className="flex flex-1 flex-col gap-6">
       <p className="text-soft">
         <strong className="text-ink">{trial.familiarisation ? 'Familiarisation' : `Trial ${trial.number}`}</strong>
         {trial.familiarisation ? ', not counted' : ` of ${trial.of}`} · {placeOf(trial)}
       </p>
-      {trial.code === null ? null : (
-        <CableRun className="-mx-5 lg:-mx-11">
-          <div data-code={trial.code} className="px-5">
+      <CableRun className="-mx-5 flex min-h-32 flex-1 items-center lg:-mx-11">
+        {trial.code === null ? null : (
+          <div data-code={trial.code} className="w-full px-5">
             <Sleeve code={trial.code} size="huge" />
           </div>
-        </CableRun>
-      )}
-      <div className="flex flex-wrap items-baseline gap-x-7 gap-y-2" aria-live="polite">
+        )}
+      </CableRun>
+      <div className="flex flex-wrap items-baseline gap-x-7 gap-y-2" aria-live="polite" aria-atomic="true">
         <h2 className="text-step font-bold">{title}</h2>
         <p className="text-xl text-soft">{detail}</p>
       </div>
-      <Clock trial={trial} clockOffsetMs={clockOffsetMs} />
     </section>
   );
 }
 
-function Clock({ trial, clockOffsetMs }: { trial: Trial; clockOffsetMs: number }) {
-  if (trial.endsAt === null) return null;
-  const label = { change: 'Listening starts in', listening: 'The excerpt ends in', answering: 'The trial waits until' }[
-    trial.stage
-  ];
+/** How long the change still has, beside its steps; the last step carries the time itself. */
+export function ChangeClock({ trial, clockOffsetMs }: { trial: Trial | null; clockOffsetMs: number }) {
+  if (trial === null || trial.stage !== 'change' || trial.endsAt === null) return null;
+  const isLast = trial.step === changeSteps.at(-1);
+  if (isLast && !trial.longChange) return null;
   return (
-    <p className="flex flex-wrap items-baseline gap-x-4 text-soft">
-      {label}
-      <Countdown deadlineMs={trial.endsAt} clockOffsetMs={clockOffsetMs} className="text-2xl font-bold text-ink" />
-      {trial.longChange ? <span className="text-amber">a longer change than registered; it is noted</span> : null}
-    </p>
+    <div className="flex min-h-19 min-w-60 flex-col justify-center rounded bg-sheet px-5 py-2 max-sm:w-full">
+      {trial.longChange ? <span className="text-amber">Longer than registered; it is noted</span> : null}
+      {isLast ? null : (
+        <>
+          <span className="text-soft">Listening starts in</span>
+          <Countdown
+            deadlineMs={trial.endsAt}
+            clockOffsetMs={clockOffsetMs}
+            className="text-2xl leading-tight font-bold"
+          />
+        </>
+      )}
+    </div>
   );
 }

@@ -12,6 +12,8 @@ export type ConsoleActions = {
   readonly isBusy: boolean;
   /** Why the last command was refused, in words; null when it was not. */
   readonly problem: string | null;
+  /** Takes those words back, so that an old refusal does not greet a new question. */
+  readonly forgetProblem: () => void;
 };
 
 const nothing: LiveSnapshot<ProctorView> = { view: null, connection: 'connecting', refused: null, clockOffsetMs: 0 };
@@ -46,5 +48,6 @@ export function useConsole(sessionId: string): LiveSnapshot<ProctorView> & Conso
       setBusy(false);
     }
   };
-  return { ...snapshot, act, isBusy, problem };
+  const forgetProblem = useCallback(() => setProblem(null), []);
+  return { ...snapshot, act, isBusy, problem, forgetProblem };
 }

@@ -1,0 +1,37 @@
+import type { ProctorView } from '#shared/contracts/proctor-live.ts';
+import { CourseLine } from '../../ui/course-line.tsx';
+import { Facts } from '../../ui/facts.tsx';
+import { LinkButton } from '../../ui/link-button.tsx';
+
+/** What was recorded, and the way back. */
+export function Ended({ view, back }: { view: ProctorView; back: { to: string; label: string } }) {
+  const count = (state: string) => view.course.filter((ring) => ring.state === state).length;
+  const isFinished = view.phase === 'finished';
+  const open = count('open') + count('now');
+  return (
+    <section className="flex max-w-[54rem] flex-1 flex-col gap-6">
+      <h2 className="text-step font-bold">{isFinished ? 'The session is finished' : 'The session was ended early'}</h2>
+      <p className="text-xl text-soft">
+        Leave the amplifier muted or off, and store the cables as they are, sleeved. Scores stay sealed until the study
+        is closed.
+      </p>
+      <CourseLine trials={view.course} />
+      <Facts
+        title="On the record"
+        facts={[
+          { label: 'Trials locked', value: String(count('locked')) },
+          { label: 'Trials void', value: String(count('void')) },
+          ...(open > 0 ? [{ label: 'Trials not held', value: String(open) }] : []),
+          { label: 'Listeners', value: String(view.seats.length) },
+          { label: 'Entries of this session', value: String(view.record.sessionEntries) },
+          { label: 'Entries of the study', value: String(view.record.entries), tone: 'held' },
+        ]}
+      />
+      <div>
+        <LinkButton to={back.to} variant="primary">
+          Back to the sessions
+        </LinkButton>
+      </div>
+    </section>
+  );
+}
