@@ -32,6 +32,7 @@ export function Component() {
     const isTooEarly = next.opensAt !== null && Date.now() + clockOffsetMs < next.opensAt;
     if (!isTooEarly) void console.act(next.command);
   };
+  const hasCourse = view.phase === 'revealing' || view.phase === 'running';
   const isOver = view.phase === 'finished' || view.phase === 'abandoned';
   return (
     <DimLayout header={<ConsoleHead view={view} isLost={isLost} clockOffsetMs={clockOffsetMs} back={back} />}>
@@ -49,7 +50,7 @@ export function Component() {
       </div>
       {isOver ? null : (
         <div className="flex flex-col gap-4 border-t border-rule px-5 py-4 lg:px-11">
-          <CourseLine trials={view.course} />
+          {hasCourse ? <CourseLine trials={view.course} /> : null}
           <SideActs view={view} actions={console} onNext={next === null ? null : goOn} keys={keys} />
         </div>
       )}

@@ -1,6 +1,7 @@
 import { useState } from 'react';
 import { type Caution, cautions, type ProctorView } from '#shared/contracts/proctor-live.ts';
 import { Button } from '../../ui/button.tsx';
+import { CheckboxField } from '../../ui/checkbox-field.tsx';
 import { cautionWords } from './console-words.ts';
 import type { ConsoleActions } from './use-console.ts';
 
@@ -47,17 +48,10 @@ export function Cautions({ view, act, isBusy }: { view: ProctorView } & Pick<Con
 type CautionRowProps = { name: string; rule: string; isTicked: boolean; onToggle: () => void };
 
 function CautionRow({ name, rule, isTicked, onToggle }: CautionRowProps) {
-  return (
-    <label className="flex min-h-16 cursor-pointer items-start gap-4 border-b border-rule py-3">
-      <input
-        type="checkbox"
-        checked={isTicked}
-        onChange={onToggle}
-        className="mt-0.5 size-7 shrink-0 cursor-pointer accent-jacket"
-      />
-      <span className="grid flex-1 gap-x-6 sm:grid-cols-[7rem_1fr]">
-        <strong>{name}</strong> <span className={isTicked ? 'text-soft' : ''}>{rule}</span>
-      </span>
-    </label>
+  const words = (
+    <span className="grid gap-x-6 sm:grid-cols-[7rem_1fr]">
+      <strong>{name}</strong> <span className={isTicked ? 'text-soft' : ''}>{rule}</span>
+    </span>
   );
+  return <CheckboxField label={words} checked={isTicked} onChange={onToggle} className="border-b border-rule" />;
 }

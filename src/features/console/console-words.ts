@@ -99,7 +99,7 @@ export function cautionWords(caution: Caution, rig: Rig): CautionWords {
     case 'hearing':
       return {
         name: 'Hearing',
-        rule: 'The level is measured and noted: 70 to 80 dBA recommended, a warning from 83 dBA, refused from 90 dBA. Everybody was asked about tinnitus and sensitive ears, and knows “Too loud” on the phone.',
+        rule: 'The level is measured and noted: 70 to 80 dBA recommended, a warning from 83 dBA, refused from 90 dBA. Everybody was asked about tinnitus and sensitive ears, and knows “Too loud” on the phone.',
       };
     case 'local-rules':
       return {

@@ -29,7 +29,7 @@ export function NextActButton({ next, clockOffsetMs, isLost, onPress }: NextActB
       data-step={next.step ?? undefined}
       onClick={click}
       onKeyDown={ignoreRepeats}
-      className="text-2xl"
+      className="text-2xl max-sm:[&_kbd]:hidden"
     >
       {isWaiting ? `Listening starts in ${clockFace(seconds)}` : next.label}
     </Button>

@@ -4,24 +4,23 @@ import { useSecondsSince } from './use-seconds-since.ts';
 
 type Pause = NonNullable<ProctorView['paused']>;
 
-function pauseWords({ reason, seat }: Pause, isInTrial: boolean): { title: string; detail: string } {
-  const again = isInTrial ? ' The presentation then starts again from its change.' : '';
+function pauseWords({ reason, seat }: Pause): { title: string; detail: string } {
   if (reason === 'too-loud')
     return {
       title: `Too loud${seat === null ? '' : ` from ${seat}`}`,
-      detail: `Mute, turn the level down, and ask how they are. Resume when it is right; a changed level is a deviation to record.${again}`,
+      detail: 'Mute, turn the level down, and ask how they are. A changed level is a deviation to record.',
     };
   if (reason === 'break')
-    return { title: 'Break', detail: `Ears need ten minutes at least. Ask who is tired before you resume.${again}` };
-  return { title: 'Paused', detail: `Nothing goes on until you resume.${again}` };
+    return { title: 'Break', detail: 'Ears need ten minutes at least. Ask who is tired before you resume.' };
+  return { title: 'Paused', detail: 'Nothing goes on until you resume.' };
 }
 
-type PauseBannerProps = { pause: Pause; isInTrial: boolean; clockOffsetMs: number };
+type PauseBannerProps = { pause: Pause; clockOffsetMs: number };
 
 /** Why nothing goes on, and for how long by now. */
-export function PauseBanner({ pause, isInTrial, clockOffsetMs }: PauseBannerProps) {
+export function PauseBanner({ pause, clockOffsetMs }: PauseBannerProps) {
   const seconds = useSecondsSince(pause.since, clockOffsetMs);
-  const { title, detail } = pauseWords(pause, isInTrial);
+  const { title, detail } = pauseWords(pause);
   return (
     <div className="flex flex-wrap items-start justify-between gap-x-8 gap-y-1 rounded border-2 border-amber px-5 py-4">
       <div role="alert" className="min-w-0 flex-1">

@@ -16,7 +16,7 @@ const tones = { ready: 'held', answered: 'held', left: 'neutral' } as const;
 /** One listener: the label, where they sit, and how they stand. */
 export function SeatRow({ seat, clockOffsetMs, onExcuse }: SeatRowProps) {
   return (
-    <li className="flex min-h-14 items-center gap-x-4 border-b border-rule py-1">
+    <li className="flex min-h-14 items-center gap-x-3 border-b border-rule py-1">
       <span className="font-mono text-soft">{seat.seat}</span>
       <span className="min-w-0 flex-1">
         {seat.place}
@@ -31,7 +31,7 @@ export function SeatRow({ seat, clockOffsetMs, onExcuse }: SeatRowProps) {
         <Button
           variant="quiet"
           aria-label={`Excuse ${seat.seat}`}
-          className="-mr-2 px-2 font-normal text-soft hover:text-ink"
+          className="-mr-1 px-0.5 text-soft hover:text-ink"
           onClick={onExcuse}
         >
           Excuse

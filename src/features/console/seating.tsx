@@ -12,10 +12,10 @@ export function Seating({ join, seats, isDemo }: SeatingProps) {
   const seated = seats.filter(({ state }) => state !== 'left').length;
   return (
     <section className="flex flex-1 flex-wrap items-start justify-between gap-x-10 gap-y-6">
-      <div className="flex min-w-0 flex-1 basis-96 flex-col gap-4">
+      <div className="@container flex min-w-0 flex-1 basis-96 flex-col gap-4">
         <h2 className="text-xl">Listeners take a seat with this code</h2>
         <p
-          className="font-mono text-[clamp(3rem,min(13vw,20svh),8.5rem)] leading-none font-bold tracking-[0.08em]"
+          className="font-mono text-[clamp(2.5rem,min(24cqi,22svh),9rem)] leading-none font-bold tracking-[0.06em] whitespace-nowrap"
           data-session-code={join.code}
         >
           {join.code}

@@ -23,7 +23,7 @@ export function SeatsPanel({ view, clockOffsetMs, actions }: SeatsPanelProps) {
     setExcused(seat);
   };
   return (
-    <aside aria-label="Listeners" className="border-rule px-5 py-6 max-lg:border-t lg:w-[22.5rem] lg:border-l lg:px-7">
+    <aside aria-label="Listeners" className="border-rule px-5 py-6 max-lg:border-t lg:w-96 lg:border-l lg:px-7">
       <div className="flex items-baseline justify-between gap-4">
         <h2 className="text-lg">Listeners</h2>
         {view.seats.length === 0 ? null : (

@@ -20,6 +20,9 @@ type SideActsProps = {
 type Asked = 'void' | 'deviation' | 'end';
 type SideAct = { label: string; letter: string; run: () => void };
 
+// A phone has no Alt key to speak of.
+const noHintOnPhone = 'max-sm:[&_kbd]:hidden';
+
 /** Whatever may become necessary beside the next act; each on Alt and a letter. */
 export function SideActs({ view, actions, onNext, keys: [areKeysOn, setKeysOn] }: SideActsProps) {
   const [asked, setAsked] = useState<Asked | null>(null);
@@ -57,18 +60,18 @@ export function SideActs({ view, actions, onNext, keys: [areKeysOn, setKeysOn] }
       <Actions
         stop={
           end === null ? null : (
-            <Button variant="stop" {...hint(end.letter)} onClick={end.run}>
+            <Button variant="stop" {...hint(end.letter)} onClick={end.run} className={noHintOnPhone}>
               {end.label}
             </Button>
           )
         }
       >
         {acts.map(({ label, letter, run }) => (
-          <Button key={label} {...hint(letter)} onClick={run}>
+          <Button key={label} {...hint(letter)} onClick={run} className={noHintOnPhone}>
             {label}
           </Button>
         ))}
-        <label className="flex min-h-12 cursor-pointer items-center gap-2 text-soft">
+        <label className="flex min-h-12 cursor-pointer items-center gap-2 text-soft max-sm:hidden">
           <input
             type="checkbox"
             checked={areKeysOn}

@@ -9,7 +9,11 @@ type Words = { title: string; detail: string };
 
 function wordsOf(trial: Trial, view: ProctorView): Words {
   const code = trial.code ?? '';
-  if (view.paused !== null) return { title: 'Nothing moves', detail: 'leave everything as it is until you resume' };
+  if (view.paused !== null)
+    return {
+      title: 'Wait',
+      detail: `resume when all is well · next: presentation ${trial.presentationNumber}, from its change`,
+    };
   if (trial.step !== null) {
     const { act, how } = stepWords(trial.step, view.rig, code);
     return { title: act, detail: `${how} · next: ${wordsAfter(trial.step, view.rig, code)}` };
@@ -41,7 +45,7 @@ export function TrialPanel({ trial, view }: { trial: Trial; view: ProctorView })
         {trial.familiarisation ? ', not counted' : ` of ${trial.of}`} · {placeOf(trial)}
       </p>
       <CableRun className="-mx-5 flex min-h-32 flex-1 items-center lg:-mx-11">
-        {trial.code === null ? null : (
+        {trial.code === null || view.paused !== null ? null : (
           <div data-code={trial.code} className="w-full px-5">
             <Sleeve code={trial.code} size="huge" />
           </div>
