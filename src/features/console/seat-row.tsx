@@ -31,7 +31,7 @@ export function SeatRow({ seat, clockOffsetMs, onExcuse }: SeatRowProps) {
         <Button
           variant="quiet"
           aria-label={`Excuse ${seat.seat}`}
-          className="-mr-1 px-0.5 text-soft hover:text-ink"
+          className="-mr-1 px-1! text-soft hover:text-ink"
           onClick={onExcuse}
         >
           Excuse

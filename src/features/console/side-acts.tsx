@@ -81,7 +81,7 @@ export function SideActs({ view, actions, onNext, keys: [areKeysOn, setKeysOn] }
           Alt keys
         </label>
       </Actions>
-      <VoidDialog {...dialog('void')} />
+      <VoidDialog {...dialog('void')} isFamiliarisation={view.trial?.familiarisation ?? false} />
       <DeviationDialog {...dialog('deviation')} />
       <EndDialog {...dialog('end')} view={view} />
     </>

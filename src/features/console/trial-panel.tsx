@@ -10,10 +10,7 @@ type Words = { title: string; detail: string };
 function wordsOf(trial: Trial, view: ProctorView): Words {
   const code = trial.code ?? '';
   if (view.paused !== null)
-    return {
-      title: 'Wait',
-      detail: `resume when all is well · next: presentation ${trial.presentationNumber}, from its change`,
-    };
+    return { title: 'Wait', detail: `resume when all is well · next: ${wordsAfterPause(trial)}` };
   if (trial.step !== null) {
     const { act, how } = stepWords(trial.step, view.rig, code);
     return { title: act, detail: `${how} · next: ${wordsAfter(trial.step, view.rig, code)}` };
@@ -26,6 +23,10 @@ function wordsOf(trial: Trial, view: ProctorView): Words {
     detail: out === 0 ? 'all are in · next: lock the trial' : `${out} still to come · say nothing, show nothing`,
   };
 }
+
+/** A presentation is given again whole; answering goes on with the time that was left. */
+const wordsAfterPause = (trial: Trial) =>
+  trial.stage === 'answering' ? 'the answers go on' : `presentation ${trial.presentationNumber}, from its change`;
 
 function placeOf(trial: Trial): string {
   const presentation = `presentation ${trial.presentationNumber} of ${trial.presentations}`;

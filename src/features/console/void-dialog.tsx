@@ -8,8 +8,10 @@ import type { ConsoleDialogProps } from './console-dialog.ts';
 import { voidWords } from './console-words.ts';
 import { Refusal } from './refusal.tsx';
 
+type VoidDialogProps = ConsoleDialogProps & { isFamiliarisation: boolean };
+
 /** Sets the open trial aside for one of the fixed reasons. */
-export function VoidDialog({ isOpen, onOpenChange, actions }: ConsoleDialogProps) {
+export function VoidDialog({ isFamiliarisation, isOpen, onOpenChange, actions }: VoidDialogProps) {
   const [reason, setReason] = useState<VoidReason | ''>('');
   const [note, setNote] = useState('');
   const change = (isShown: boolean) => {
@@ -27,7 +29,11 @@ export function VoidDialog({ isOpen, onOpenChange, actions }: ConsoleDialogProps
       isOpen={isOpen}
       onOpenChange={change}
       title="Void this trial?"
-      description="It stays in the record with its reason and does not count. While spares last, one takes its place at the end."
+      description={
+        isFamiliarisation
+          ? 'It stays in the record with its reason, and is begun again.'
+          : 'It stays in the record with its reason and does not count. While spares last, one takes its place at the end.'
+      }
       actions={
         <Button variant="stop" disabled={reason === ''} busy={actions.isBusy} onClick={send} className="ml-9">
           Set the trial aside
