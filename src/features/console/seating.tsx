@@ -69,7 +69,7 @@ function QrCode({ svg }: { svg: string }) {
     <img
       src={source}
       alt="QR code that leads to a seat in this session"
-      className="aspect-square w-full max-w-80 rounded bg-plate p-3"
+      className="aspect-square w-full max-w-80 rounded bg-plate"
     />
   );
 }
