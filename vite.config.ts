@@ -14,7 +14,10 @@ export default defineConfig({
     projects: [
       {
         extends: true,
-        test: { name: 'unit', include: ['tests/shared/**/*.test.ts', 'tests/guards/**/*.test.ts'] },
+        test: {
+          name: 'unit',
+          include: ['tests/shared/**/*.test.ts', 'tests/src/**/*.test.ts', 'tests/guards/**/*.test.ts'],
+        },
       },
       {
         extends: true,

@@ -67,6 +67,8 @@ export const studyProgress = z.strictObject({
   sessionsPlanned: z.int(),
   sessionsOpened: z.int(),
   sessionsEnded: z.int(),
+  /** Registered sessions that are not planned yet; an abandoned one leaves its place. */
+  sessionsToPlan: z.int(),
   trialsLocked: z.int(),
   trialsRegistered: z.int(),
 });

@@ -2,9 +2,9 @@ import { useSuspenseQuery } from '@tanstack/react-query';
 import { type LoaderFunctionArgs, useNavigate, useParams, useSearchParams } from 'react-router-dom';
 import { type SessionRow, sessionsApi } from '#shared/contracts/sessions.ts';
 import { paths } from '../app/paths.ts';
+import { SessionTable } from '../features/sessions/session-table.tsx';
 import { sessionQueries } from '../features/sessions/sessions.queries.ts';
 import { usePresence } from '../features/sign-in/membership.ts';
-import { SessionTable } from '../features/studies/overview/session-table.tsx';
 import { StudyOverview } from '../features/studies/overview/study-overview.tsx';
 import { upcomingOf } from '../features/studies/overview/upcoming-session.ts';
 import { studyQueries } from '../features/studies/studies.queries.ts';
@@ -58,6 +58,7 @@ export function Component() {
       onClosed={() => navigate(report)}
       sessions={
         <SessionTable
+          isOfOneStudy
           rows={sessions.rows}
           page={sessions.page}
           pageCount={sessions.pages}

@@ -6,9 +6,12 @@ import type { Deps } from '../../deps.ts';
 import { append } from '../../ledger/ledger.ts';
 import { lockedStudy, protocolOf } from '../studies/studies.service.ts';
 import { studyById, updateStudy } from '../studies/studies.store.ts';
+import { progressOf } from '../studies/studies.views.ts';
 import { membersOf, namesOf } from '../users/users.store.ts';
 import type { Session } from './session.entity.ts';
 import * as store from './sessions.store.ts';
+
+const formatSessions = (count: number) => (count === 1 ? 'one session' : `${count} sessions`);
 
 async function rowsOf(tx: Tx, sessions: readonly Session[]): Promise<SessionRow[]> {
   const names = await namesOf(
@@ -80,6 +83,11 @@ export function planSession(
         { pointer: '/proctorId', detail: 'Choose a member who may run sessions' },
       ]);
     const sessions = await store.sessionsOfStudy(tx, study.id);
+    if (progressOf(study, sessions).sessionsToPlan === 0)
+      throw new Problem(
+        'wrong-phase',
+        `The protocol registers ${formatSessions(study.draft.sessions)}, and no more can be planned. One that is abandoned leaves its place to another.`,
+      );
     const session: Session = {
       id: random.id(),
       organisationId: where.organisationId,
