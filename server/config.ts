@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { networkAddresses } from './network/network-addresses.ts';
 
 const port = z.coerce.number<string>().int().min(1).max(65_535);
 const onOff = z.enum(['on', 'off']);
@@ -6,6 +7,7 @@ const onOff = z.enum(['on', 'off']);
 const environment = z.object({
   PORT: port.default(4180),
   HOST: z.string().min(1).default('127.0.0.1'),
+  TLS_PORT: port.default(4443),
   PUBLIC_URL: z.url({ protocol: /^https?$/ }).optional(),
   DATABASE_URL: z.url({ protocol: /^(mysql|mariadb)$/ }).optional(),
   DATABASE_HOST: z.string().min(1).default('127.0.0.1'),
@@ -16,6 +18,8 @@ const environment = z.object({
   DATABASE_NAME: z.string().min(1).default('fairlead'),
   SESSION_SECRET: z.string().min(32, 'needs at least 32 characters'),
   FAIRLEAD_DEMO: onOff.default('on'),
+  FAIRLEAD_LAN: onOff.default('off'),
+  DATA_DIR: z.string().min(1).default('.data'),
   TRUST_PROXY: onOff.default('off'),
   CLIENT_DIR: z.string().min(1).default('dist/client'),
   NODE_ENV: z.string().default('development'),
@@ -26,6 +30,9 @@ export type Config = Readonly<{
   port: number;
   host: string;
   publicUrl: string;
+  /** On the local network TLS is offered beside plain http; null elsewhere. */
+  lan: Readonly<{ tlsPort: number; addresses: readonly string[] }> | null;
+  dataDir: string;
   database: Readonly<{
     host: string;
     port: number;
@@ -76,10 +83,16 @@ export function readConfig(env: Readonly<Record<string, string | undefined>>): C
     throw new Error(`The environment needs mending (see .env.example):\n${faults.join('\n')}`);
   }
   const values = parsed.data;
+  const lan = values.FAIRLEAD_LAN === 'on' ? { tlsPort: values.TLS_PORT, addresses: networkAddresses() } : null;
+  if (lan?.addresses.length === 0)
+    throw new Error('This machine is on no network, so no phone can reach it. Connect it, or start without --lan.');
+  const host = lan?.addresses[0] ?? values.HOST;
   return Object.freeze({
     port: values.PORT,
     host: values.HOST,
-    publicUrl: (values.PUBLIC_URL ?? `http://${values.HOST}:${values.PORT}`).replace(/\/+$/, ''),
+    publicUrl: (values.PUBLIC_URL ?? `http://${host}:${values.PORT}`).replace(/\/+$/, ''),
+    lan,
+    dataDir: values.DATA_DIR,
     database: Object.freeze(databaseOf(values)),
     sessionSecret: values.SESSION_SECRET,
     demo: values.FAIRLEAD_DEMO === 'on',

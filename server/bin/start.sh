@@ -21,7 +21,19 @@ finish() {
 trap finish EXIT
 trap 'exit 130' INT TERM HUP
 
+for argument in "$@"; do
+  case $argument in
+    --lan) export FAIRLEAD_LAN=on HOST=0.0.0.0 ;;
+    *) give_up "\"$argument\" is no option of npm start. There is: --lan, for phones on the local network." ;;
+  esac
+done
+
 prepare_home
+[[ ${FAIRLEAD_LAN:-off} == off ]] || {
+  export TLS_PORT=${TLS_PORT:-4443}
+  require_free_port TLS_PORT "$HOST" "$TLS_PORT"
+  need_from_debian openssl:openssl
+}
 step client build_client
 
 export NODE_ENV=${NODE_ENV:-production}

@@ -1,4 +1,6 @@
 import { createHash } from 'node:crypto';
+import type { IncomingMessage } from 'node:http';
+import { TLSSocket } from 'node:tls';
 import type { Request, RequestHandler } from 'express';
 import session, { type SessionData } from 'express-session';
 import { type DataSource, LessThan } from 'typeorm';
@@ -71,18 +73,33 @@ class DatabaseStore extends session.Store {
   }
 }
 
-/** Keeps people signed in: a cookie that scripts cannot read, and a row in MariaDB. */
+/** Whether a request came over TLS, to this server or to the proxy that it trusts. */
+function isSecure(request: IncomingMessage, config: Config): boolean {
+  if (request.socket instanceof TLSSocket) return true;
+  const [protocol] = String(request.headers['x-forwarded-proto'] ?? '').split(',');
+  return config.trustProxy && protocol?.trim() === 'https';
+}
+
+/**
+ * Keeps people signed in: a cookie that scripts cannot read, and a row in MariaDB. Under TLS the cookie has a name of
+ * its own, because cookies do not tell ports apart: a browser that holds a secure one refuses a plain one of that name.
+ */
 export function signInMiddleware(db: DataSource, config: Config, now: () => number): RequestHandler {
-  return session({
-    name: 'fairlead',
-    secret: config.sessionSecret,
-    store: new DatabaseStore(db, now),
-    resave: false,
-    saveUninitialized: false,
-    rolling: false,
-    proxy: config.trustProxy,
-    cookie: { httpOnly: true, sameSite: 'lax', secure: 'auto', path: '/', maxAge: lifetimeMs },
-  });
+  const withCookie = (name: string, secure: boolean) =>
+    session({
+      name,
+      secret: config.sessionSecret,
+      // One each: express-session writes into its store how a cookie is made.
+      store: new DatabaseStore(db, now),
+      resave: false,
+      saveUninitialized: false,
+      rolling: false,
+      proxy: config.trustProxy,
+      cookie: { httpOnly: true, sameSite: 'lax', secure, path: '/', maxAge: lifetimeMs },
+    });
+  const plain = withCookie('fairlead', false);
+  const secure = withCookie('__Host-fairlead', true);
+  return (request, response, next) => (isSecure(request, config) ? secure : plain)(request, response, next);
 }
 
 export function signedInUserId(request: { session?: Partial<SessionData> }): string | null {

@@ -2,8 +2,8 @@ import { expect, type Page } from '@playwright/test';
 
 // What the manager and the code holder do before anybody listens, all of it by hand in the browser.
 
-/** Plans a study of eight trials and three listeners through the form; leaves the page on its draft. */
-export async function planStudy(manager: Page): Promise<void> {
+/** Plans a study of eight trials through the form; leaves the page on its draft. */
+export async function planStudy(manager: Page, plan: { listeners: number; answerS: number }): Promise<void> {
   await manager.getByRole('link', { name: 'Studies', exact: true }).click();
   await manager.getByRole('link', { name: 'Plan a study' }).first().click();
   await manager.getByLabel('Neutral title').fill('Study Dunlin');
@@ -12,7 +12,7 @@ export async function planStudy(manager: Page): Promise<void> {
   await choose(manager, 'The other cable', '4.0 twin');
   await manager.getByLabel('ST-0412').check();
   await manager.getByLabel('SF-0077').check();
-  await manager.getByLabel('Listeners per session').fill('3');
+  await manager.getByLabel('Listeners per session').fill(String(plan.listeners));
   await manager.getByLabel('Trials per session').fill('8');
   for (;;) {
     const extra = manager.getByRole('button', { name: /^Remove excerpt/ });
@@ -23,7 +23,7 @@ export async function planStudy(manager: Page): Promise<void> {
   await manager.getByLabel('Length', { exact: true }).fill('2');
   await manager.getByLabel('Chain').fill('Player, amplifier, loudspeakers');
   await manager.getByLabel('Length of a change').fill('3');
-  await manager.getByLabel('Answer window').fill('60');
+  await manager.getByLabel('Answer window').fill(String(plan.answerS));
   await choose(manager, 'Code holder', 'Ines Halloran');
   await manager.locator('form button[type=submit]').click();
   await expect(manager.getByRole('heading', { level: 1 })).toContainText('Study Dunlin');

@@ -46,8 +46,8 @@ function Unreachable({ children }: { children: ReactNode }) {
   return (
     <Notice tone="amber" title="Phones cannot reach this address." className="max-w-[26rem]">
       <span className="mt-1 mb-3 block">
-        It leads to this machine only. Set <code>HOST</code> and <code>PUBLIC_URL</code> to an address of the network
-        and start again; or open the listeners on this machine, one window per seat.
+        It leads to this machine only. Stop Fairlead and start it with <code>npm start -- --lan</code>; or open the
+        listeners on this machine, one window per seat.
       </span>
       {children}
     </Notice>
