@@ -13,6 +13,7 @@ export async function signIn(browser: Browser, address: string, name: string): P
 
 /** Ticks the cautions and opens seating. Returns the session code. */
 export async function openSeating(desk: Page): Promise<string> {
+  await desk.getByText('Before anybody is seated').waitFor();
   for (const box of await desk.locator('section input[type=checkbox]').all()) await box.check();
   await desk.getByRole('button', { name: 'Confirm the cautions' }).click();
   await desk.getByRole('button', { name: 'Open seating' }).click();
