@@ -72,7 +72,7 @@ async function pureWork(): Promise<void> {
   await compare({
     name: 'the exact test of 160 trials, 12 listeners',
     floor: 'the same convolution in floating point',
-    limit: 120,
+    limit: 15,
     work: () => sharedPresentationTest(trials, 'greater'),
     least: () => {
       let ways = new Float64Array([1]);
