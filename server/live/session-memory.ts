@@ -17,10 +17,12 @@ import { readSessionEntries } from '../ledger/ledger.ts';
 /** The last trial that locked, with the leaves that phones keep as receipts. */
 export type Lock = { sequence: number; digest: string; trial: number; leaves: ReadonlyMap<string, string> };
 
-/** What the server holds in memory of a session: nothing that the database does not hold too. */
+/** What the server holds in memory of a session: nothing that its keeper does not hold too. */
 export type SessionMemory = {
   readonly session: Session;
   readonly title: string;
+  /** A rehearsal is on no record and leaves nothing behind. */
+  readonly isRehearsal: boolean;
   readonly method: Method;
   readonly state: SessionState;
   /** Entries of the study's record so far. */
@@ -92,6 +94,7 @@ export async function loadMemory({ db }: Deps, session: Session): Promise<Sessio
     return {
       session,
       title: study.title,
+      isRehearsal: false,
       method,
       state: rows.reduce((state, { seat, leaf }) => holdAnswer(state, seat, leaf), replayed),
       entries: study.headSequence,

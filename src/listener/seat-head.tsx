@@ -23,7 +23,10 @@ export function SeatHead({ view, isLost, clockOffsetMs }: SeatHeadProps) {
   return (
     <header className="pt-4 [@media(max-height:699px)]:pt-2">
       <div className="flex justify-between gap-4 px-5">
-        <strong>{headOf(view)}</strong>
+        <strong>
+          {view.rehearsal ? 'Rehearsal · ' : ''}
+          {headOf(view)}
+        </strong>
         <span className="shrink-0 text-soft">
           Seat <span className="font-mono">{view.seat}</span>
         </span>
