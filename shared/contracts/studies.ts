@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { endpoint, managers } from './endpoint.ts';
 import { organisationParams, thingParams } from './organisation-params.ts';
-import { listQuery, pageOf } from './paging.ts';
+import { listQuery, pageOf, sortBy } from './paging.ts';
 
 export const studyStates = ['draft', 'sealed', 'collecting', 'closed'] as const;
 export type StudyState = (typeof studyStates)[number];
@@ -108,6 +108,12 @@ export type Study = z.output<typeof study>;
 
 const base = '/organisations/:organisationId/studies';
 
+const studyListQuery = listQuery.extend({
+  state: z.enum(['any', ...studyStates]).default('any'),
+  sort: sortBy(['title', 'state', 'updatedAt'], '-updatedAt'),
+});
+export type StudyListQuery = z.output<typeof studyListQuery>;
+
 export const studiesApi = {
   list: endpoint({
     method: 'GET',
@@ -115,7 +121,7 @@ export const studiesApi = {
     summary: 'Studies, newest change first',
     access: managers,
     params: organisationParams,
-    query: listQuery.extend({ state: z.enum(['any', ...studyStates]).default('any') }),
+    query: studyListQuery,
     reply: pageOf(studyRow),
   }),
   get: endpoint({

@@ -58,6 +58,8 @@ export function Component() {
         page={sessions.page}
         pageCount={sessions.pages}
         onPage={(page) => change({ page })}
+        sort={query.sort}
+        onSort={(sort) => change({ sort })}
         consoleOf={({ id, proctorId }) => (proctorId === person.id ? paths.console(organisationId, id) : null)}
         empty={
           isFiltered ? (

@@ -36,7 +36,8 @@ export function Component() {
   const changeAddress = useListAddress();
   const navigate = useNavigate();
   const { data: study } = useSuspenseQuery(studyQueries.detail(organisationId, id));
-  const { data: sessions } = useSuspenseQuery(sessionQueries.list(organisationId, sessionsOf(id, search)));
+  const query = sessionsOf(id, search);
+  const { data: sessions } = useSuspenseQuery(sessionQueries.list(organisationId, query));
   const report = paths.report(organisationId, id);
   const upcoming = upcomingOf(sessions.rows);
   const consoleOf = (session: SessionRow) =>
@@ -63,6 +64,8 @@ export function Component() {
           page={sessions.page}
           pageCount={sessions.pages}
           onPage={(page) => changeAddress({ page })}
+          sort={query.sort}
+          onSort={(sort) => changeAddress({ sort })}
           consoleOf={consoleOf}
           empty={<p className="text-soft">None planned yet.</p>}
         />

@@ -76,7 +76,7 @@ export function getReport({ db }: Deps, where: { organisationId: string; id: str
 
 export function listReports({ db }: Deps, organisationId: string, query: { q: string; page: number }) {
   return withTransaction(db, async (tx) => {
-    const found = await listStudies(tx, organisationId, { ...query, state: 'closed' });
+    const found = await listStudies(tx, organisationId, { ...query, state: 'closed', sort: '-updatedAt' });
     const rows: ReportRow[] = [];
     for (const study of found.rows) {
       const { entries, finding } = await sourceOf(tx, study);

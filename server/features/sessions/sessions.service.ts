@@ -1,4 +1,4 @@
-import type { SessionDraft, SessionRow } from '#shared/contracts/sessions.ts';
+import type { SessionDraft, SessionListQuery, SessionRow } from '#shared/contracts/sessions.ts';
 import { Problem } from '#shared/problem.ts';
 import { sessionPlanOf } from '#shared/protocol/protocol.ts';
 import { type Tx, withTransaction } from '../../db/transaction.ts';
@@ -39,13 +39,11 @@ async function rowsOf(tx: Tx, sessions: readonly Session[]): Promise<SessionRow[
 export function listSessions(
   { db }: Deps,
   who: { organisationId: string; userId: string; role: string | null },
-  query: { q: string; page: number; studyId?: string | undefined; phase: 'any' | 'open' | 'ended' },
+  query: SessionListQuery,
 ) {
   return withTransaction(db, async (tx) => {
     const own = who.role === 'proctor' ? { proctorId: who.userId } : {};
-    const { q, page, phase, studyId } = query;
-    const filter = { q, page, phase, ...own, ...(studyId === undefined ? {} : { studyId }) };
-    const found = await store.listSessions(tx, who.organisationId, filter);
+    const found = await store.listSessions(tx, who.organisationId, { ...query, ...own });
     return { ...found, rows: await rowsOf(tx, found.rows) };
   });
 }

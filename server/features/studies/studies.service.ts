@@ -1,4 +1,4 @@
-import type { StudyDraft, Study as StudyReply, StudyState } from '#shared/contracts/studies.ts';
+import type { StudyDraft, StudyListQuery, Study as StudyReply } from '#shared/contracts/studies.ts';
 import { canonicalJson } from '#shared/ledger/canonical-json.ts';
 import { type InputFault, Problem } from '#shared/problem.ts';
 import { type Protocol, type ProtocolCable, protocolDigest, protocolFromDraft } from '#shared/protocol/protocol.ts';
@@ -66,11 +66,7 @@ async function requireReferences(tx: Tx, organisationId: string, draft: StudyDra
   if (faults.length > 0) throw new Problem('invalid-input', 'Please mend what is marked; nothing was saved.', faults);
 }
 
-export function listStudies(
-  { db }: Deps,
-  organisationId: string,
-  query: { q: string; page: number; state: StudyState | 'any' },
-) {
+export function listStudies({ db }: Deps, organisationId: string, query: StudyListQuery) {
   return withTransaction(db, async (tx) => {
     const found = await store.listStudies(tx, organisationId, query);
     const sessions = await sessionsOfStudies(

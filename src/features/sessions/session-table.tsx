@@ -9,6 +9,8 @@ import { phaseWords } from './session-words.ts';
 
 type SessionTableProps = {
   rows: readonly SessionRow[];
+  sort: string;
+  onSort: (word: string) => void;
   page: number;
   pageCount: number;
   onPage: (page: number) => void;
@@ -25,9 +27,9 @@ export function SessionTable({ consoleOf, isOfOneStudy = false, ...table }: Sess
     isOfOneStudy ? `Session\u00a0${number}` : `${title}, session\u00a0${number}`;
   return (
     <DataTable
-      caption={isOfOneStudy ? 'Sessions of this study' : 'Sessions, latest first'}
+      caption={isOfOneStudy ? 'Sessions of this study' : 'Sessions'}
       isCaptionShown={isOfOneStudy}
-      columns={columnsFor(nameOf, consoleOf)}
+      columns={columnsFor(isOfOneStudy, nameOf, consoleOf)}
       rowKey={({ id }) => id}
       {...table}
     />
@@ -35,23 +37,26 @@ export function SessionTable({ consoleOf, isOfOneStudy = false, ...table }: Sess
 }
 
 function columnsFor(
+  isOfOneStudy: boolean,
   nameOf: (session: SessionRow) => string,
   consoleOf: SessionTableProps['consoleOf'],
 ): Column<SessionRow>[] {
   return [
     {
-      key: 'title',
+      key: isOfOneStudy ? 'number' : 'title',
       header: 'Session',
+      isSortable: true,
       isRowHeader: true,
       cell: (session) => <SessionName name={nameOf(session)} to={consoleOf(session)} />,
     },
     {
       key: 'phase',
       header: 'Phase',
+      isSortable: true,
       cell: ({ phase }) => <StatusWord tone={phaseWords[phase].tone}>{phaseWords[phase].word}</StatusWord>,
     },
-    { key: 'plannedAt', header: 'Planned for', cell: ({ plannedAt }) => formatDateTime(plannedAt) },
-    { key: 'room', header: 'Room', cell: ({ room }) => room },
+    { key: 'plannedAt', header: 'Planned for', isSortable: true, cell: ({ plannedAt }) => formatDateTime(plannedAt) },
+    { key: 'room', header: 'Room', isSortable: true, cell: ({ room }) => room },
     { key: 'proctor', header: 'Proctor', cell: ({ proctor }) => proctor },
     { key: 'listeners', header: 'Listeners', isFigure: true, cell: ({ listeners }) => listeners },
     {
