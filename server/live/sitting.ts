@@ -10,7 +10,7 @@ import { contributionsOf } from '#shared/session/counted-trials.ts';
 import { decide, type SessionCommand } from '#shared/session/decide.ts';
 import { readSessionEvent, type SessionEvent, sessionEvents } from '#shared/session/events.ts';
 import { evolve, holdAnswer } from '#shared/session/evolve.ts';
-import { dueAt, presentationsOf } from '#shared/session/progress.ts';
+import { dueAt, optionsOf, presentationsOf } from '#shared/session/progress.ts';
 import type { SessionState } from '#shared/session/state.ts';
 import { listenerViewOf, type Presence, proctorViewOf } from '#shared/session/views.ts';
 import { commitDraw, cueFor } from '../blind/index.ts';
@@ -306,7 +306,7 @@ export class Sitting {
   #requireAnswerable(seat: string, { choice, confidence }: AnswerCommand): void {
     const own = this.#state.seats.find((candidate) => candidate.seat === seat);
     if (own === undefined || own.left) throw new Problem('wrong-phase', 'This seat has left the session.');
-    if (!this.#method.options.some((option) => option.value === choice))
+    if (!optionsOf(this.#state, this.#method).some((option) => option.value === choice))
       throw new Problem('invalid-input', 'That is not one of the answers.');
     if ((confidence !== null) !== this.#state.plan.confidence)
       throw new Problem(

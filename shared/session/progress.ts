@@ -38,6 +38,9 @@ export function openAnswers(state: SessionState, trial: OpenTrial): string[] {
 export const presentationsOf = (method: Method, trial: number): readonly string[] =>
   trial === 0 ? method.familiarisation : method.presentations;
 
+/** The answers that a session offers. */
+export const optionsOf = ({ plan }: SessionState, method: Method) => method.options(plan.methodSettings ?? []);
+
 /** The step to be confirmed now, or null outside a change. */
 export function nextStep(trial: OpenTrial) {
   return trial.stage === 'change' ? (changeSteps[trial.stepsDone.length] ?? null) : null;

@@ -3,7 +3,7 @@ import { type Confidence, confidences, type ListenerView } from '#shared/contrac
 import { Button } from '../ui/button.tsx';
 import { OptionList } from '../ui/option-list.tsx';
 import { Segmented } from '../ui/segmented.tsx';
-import type { OwnAnswer } from './answers.ts';
+import { capitalised, type OwnAnswer, shortOf } from './answers.ts';
 
 type QuestionProps = {
   question: ListenerView['question'];
@@ -34,7 +34,7 @@ export function Question({ question, own, onSend }: QuestionProps) {
       disabled={!isReady}
       onClick={() => (choice === null ? undefined : onSend(choice, confidence))}
     >
-      {choice === null ? 'Choose one' : `Send ${choice}`}
+      {choice === null ? 'Choose one' : `Send ${shortOf(question, choice)}`}
     </Button>
   );
   const howSure = (
@@ -65,7 +65,7 @@ export function Question({ question, own, onSend }: QuestionProps) {
       </div>
       {inTwoSteps ? (
         <Button variant="primary" size="touch" disabled={choice === null} onClick={() => setStep('confidence')}>
-          {choice === null ? 'Choose one' : `${choice}, and how sure?`}
+          {choice === null ? 'Choose one' : `${capitalised(shortOf(question, choice))}, and how sure?`}
         </Button>
       ) : (
         <>

@@ -1,5 +1,6 @@
 import { createHash } from 'node:crypto';
 import type { OpenSession } from '#shared/contracts/seats.ts';
+import { methodOf } from '#shared/methods/methods.ts';
 import { Problem } from '#shared/problem.ts';
 import { type Tx, withTransaction } from '../../db/transaction.ts';
 import type { Deps } from '../../deps.ts';
@@ -21,11 +22,13 @@ async function openSession(tx: Tx, code: string): Promise<Session> {
 function minutesOf({
   draft,
 }: {
-  draft: { trials: number; changeS: number; answerS: number; programme: { lengthS: number }[] };
+  draft: { method: string; trials: number; changeS: number; answerS: number; programme: { lengthS: number }[] };
 }): number {
+  const { presentations, familiarisation } = methodOf(draft.method);
   const longest = Math.max(...draft.programme.map(({ lengthS }) => lengthS));
   const presentation = draft.changeS + longest;
-  const seconds = draft.trials * (3 * presentation + draft.answerS) + 2 * presentation;
+  const trial = presentations.length * presentation + draft.answerS;
+  const seconds = draft.trials * trial + familiarisation.length * presentation;
   return Math.max(1, Math.ceil(seconds / 60));
 }
 

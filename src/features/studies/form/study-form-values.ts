@@ -9,6 +9,7 @@ export const newStudyValues: StudyFormValues = {
   title: '',
   question: '',
   method: 'abx',
+  methodSettings: [],
   cables: [
     { cableId: '', specimenIds: [] },
     { cableId: '', specimenIds: [] },
