@@ -120,7 +120,7 @@ export function abxFinding(result: AbxResult, context: FindingContext): Finding 
     modifiers: [
       ...(body.row === '2' ? [...effect(result), ...namedListeners(result)] : []),
       ...(body.row === '5' ? [openQuestion(result), ...hints(result)] : []),
-      ...courseModifiers(result, result.missingAnswers, context),
+      ...courseModifiers(result, { tooFew: 'trials', missing: result.missingAnswers }, context),
       levelUnknown,
     ],
     scope: scopeOf(context),

@@ -46,13 +46,13 @@ export const confidenceText = (confidence: string) => `${Number((100 * Number(co
 /** What every method's finding says of how its count came about. */
 export function courseModifiers(
   { canReachAlpha, trials, missing }: ResultFrame,
-  missingWords: string,
+  words: { readonly tooFew: string; readonly missing: string },
   { endedEarly }: FindingContext,
 ): string[] {
   return [
-    ...(canReachAlpha ? [] : ['With so few trials no result could have reached the registered level.']),
+    ...(canReachAlpha ? [] : [`With so few ${words.tooFew} no result could have reached the registered level.`]),
     ...(endedEarly === null ? [] : [`Ended early while blind, at ${times(trials, 'trial')}: ${endedEarly}`]),
-    ...(missing === 0 ? [] : [`${times(missing, 'answer')} missing, ${missingWords}.`]),
+    ...(missing === 0 ? [] : [`${times(missing, 'answer')} missing, ${words.missing}.`]),
   ];
 }
 

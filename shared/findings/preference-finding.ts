@@ -118,7 +118,11 @@ export function preferenceFinding(result: PreferenceResult, context: FindingCont
   const { modifiers, ...body } = bodyOf(result, context);
   return {
     ...body,
-    modifiers: [...modifiers, ...courseModifiers(result, result.missingAnswers, context), levelUnknown],
+    modifiers: [
+      ...modifiers,
+      ...courseModifiers(result, { tooFew: 'answers that prefer one', missing: result.missingAnswers }, context),
+      levelUnknown,
+    ],
     scope: scopeOf(context),
     mustNotSay: [
       'that either cable is better',

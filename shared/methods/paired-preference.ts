@@ -1,9 +1,9 @@
 import { analysePreference } from '../findings/analyse-preference.ts';
 import { preferenceFinding } from '../findings/preference-finding.ts';
+import { preferenceNullDistribution } from '../findings/preference-null-distribution.ts';
 import { preferencePortrait } from '../findings/preference-portrait.ts';
 import type { PreferenceResult } from '../findings/preference-result.ts';
-import { type PreferenceChoice, preferenceSharedTrials, preferredCable } from '../findings/preference-trials.ts';
-import { sharedPresentationTest } from '../statistics/shared-presentation-test.ts';
+import { type PreferenceChoice, preferredCable } from '../findings/preference-trials.ts';
 import type { AnswerOption, Method, ScoredAnswer, ScoredTrial } from './method.ts';
 
 const noPreference = 'no-preference';
@@ -26,10 +26,10 @@ const pair = ({ session, trial, truth, answers }: ScoredTrial) => ({
 const ofPlace = (value: 'first' | 'second', letter: string): AnswerOption => ({
   value,
   letter,
-  sentence: `I prefer the ${value}`,
+  sentence: value === 'first' ? 'The first' : 'The second',
   short: `the ${value}`,
 });
-const ofNone: AnswerOption = { value: 'none', letter: '–', sentence: 'I have no preference', short: 'no preference' };
+const ofNone: AnswerOption = { value: 'none', letter: '–', sentence: 'No preference', short: 'no preference' };
 
 const forFirstCable = (answers: readonly ScoredAnswer[], truth: string) =>
   answers.filter(({ choice }) => preferredCable(place(truth), choiceOf(choice)) === 0).length;
@@ -42,7 +42,7 @@ export const pairedPreference: Method<PreferenceResult> = {
   id: 'paired-preference',
   name: 'Paired preference',
   explanation:
-    'You hear two cables, one after the other, in an order that is drawn anew each time. You say which one you prefer.',
+    'You hear two cables, one after the other, in an order that is drawn anew each time. You say which you prefer.',
   settings: [
     {
       id: noPreference,
@@ -61,8 +61,8 @@ export const pairedPreference: Method<PreferenceResult> = {
   fitterCouldSee: 'Whoever fits the cables could still see which code came first in a trial.',
 
   spoken: (presentation) => `the ${presentation}`,
-  question: 'Which one do you prefer?',
-  announcement: 'Next you say which one you prefer.',
+  question: 'Which do you prefer?',
+  announcement: 'Next you say which you prefer.',
   options: (settings) => [
     ofPlace('first', '1'),
     ofPlace('second', '2'),
@@ -83,10 +83,7 @@ export const pairedPreference: Method<PreferenceResult> = {
       offersNoPreference: undecided !== undefined,
       trials: trials.map(pair),
     }),
-  nullDistribution: (trials) =>
-    sharedPresentationTest(preferenceSharedTrials(trials.map(pair)), 'two-sided').nullDistribution.map(
-      ({ matching, probability }) => ({ count: matching, chance: probability }),
-    ),
+  nullDistribution: (trials) => preferenceNullDistribution(trials.map(pair)),
   finding: preferenceFinding,
 
   plan: {

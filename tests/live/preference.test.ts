@@ -160,7 +160,7 @@ describe('a paired preference from plan to report', () => {
   });
 
   it('asks which one is preferred, with “no preference” only where it was registered [P1]', () => {
-    expect(group.view?.question).toMatchObject({ text: 'Which one do you prefer?' });
+    expect(group.view?.question).toMatchObject({ text: 'Which do you prefer?' });
     expect(group.view?.question.options.map(({ value }) => value)).toEqual(['first', 'second', 'none']);
     expect(alone.view?.question.options.map(({ value }) => value)).toEqual(['first', 'second']);
     expect(alone.refused).toMatchObject({ ok: false, problem: { type: 'urn:fairlead:problem:invalid-input' } });

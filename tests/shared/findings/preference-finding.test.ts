@@ -151,7 +151,7 @@ describe('the finding of a paired preference', () => {
     const one = found({ listeners: 1, forFirst: 5, missing: 1, trials: 6 }, { endedEarly: 'The room was needed.' });
     expect(one.modifiers).toEqual(
       expect.arrayContaining([
-        'With so few trials no result could have reached the registered level.',
+        'With so few answers that prefer one no result could have reached the registered level.',
         'Ended early while blind, at 6 trials: The room was needed.',
         '1 answer missing, left out.',
       ]),

@@ -21,7 +21,7 @@ export function PlanWarnings({ plan }: { plan: Plan }) {
           {nSafe === null ? 'more than 5,000 trials' : formatCount(nSafe, 'trial')}. {words.notShown}
         </Notice>
       ) : null}
-      {caution === null ? null : <Notice title="With “no preference” on offer">{caution}</Notice>}
+      {caution === null ? null : <Notice title="“No preference” is on offer.">{caution}</Notice>}
       <Notice tone="amber" title="Level is not measured here.">
         If the two cables differ in level at the load, loudness alone may explain what is found. Measure and match it
         yourself; the report will say “not recorded”.

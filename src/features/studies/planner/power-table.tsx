@@ -15,7 +15,7 @@ export function PowerTable({ power, words }: PowerTableProps) {
         <tr className="border-b border-rule">
           <td />
           {power.map(({ correctRate }) => (
-            <th key={correctRate} scope="col" className="py-1.5 pl-3 text-right font-normal whitespace-nowrap">
+            <th key={correctRate} scope="col" className="py-1.5 pl-3 text-right align-bottom font-normal">
               {percent(correctRate)} {words.atRate}
             </th>
           ))}
