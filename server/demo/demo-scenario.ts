@@ -83,3 +83,12 @@ export const closedStudy: Free = {
   changeS: 30,
   answerS: 45,
 };
+
+/** Closed as well: which of the two they prefer, with “no preference” on offer. */
+export const closedPreference: Free = {
+  ...closedStudy,
+  title: 'Study Turnstone',
+  question: 'Do listeners prefer one of the two 6 m runs in this room?',
+  method: 'paired-preference',
+  methodSettings: ['no-preference'],
+};

@@ -1,6 +1,7 @@
 import type { ListenerCommand } from '#shared/contracts/listener-live.ts';
 import { Problem } from '#shared/problem.ts';
 import { answerLeaf } from '#shared/session/answer-leaf.ts';
+import { optionsOf } from '#shared/session/progress.ts';
 import type { SessionState } from '#shared/session/state.ts';
 import type { Answer } from '../features/sessions/answer.entity.ts';
 import type { SessionMemory } from './session-memory.ts';
@@ -14,7 +15,7 @@ export type AnswerCommand = Extract<ListenerCommand, { kind: 'answer' }>;
 export function requireAnswerable({ state, method }: SessionMemory, seat: string, command: AnswerCommand): void {
   const own = state.seats.find((candidate) => candidate.seat === seat);
   if (own === undefined || own.left) throw new Problem('wrong-phase', 'This seat has left the session.');
-  if (!method.options.some((option) => option.value === command.choice))
+  if (!optionsOf(state, method).some((option) => option.value === command.choice))
     throw new Problem('invalid-input', 'That is not one of the answers.');
   if ((command.confidence !== null) !== state.plan.confidence)
     throw new Problem(

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { methodIds, methods } from '../methods/methods.ts';
 import { endpoint, managers } from './endpoint.ts';
 import { organisationParams, thingParams } from './organisation-params.ts';
 import { listQuery, pageOf, sortBy } from './paging.ts';
@@ -36,7 +37,9 @@ export const studyDraft = z
   .strictObject({
     title: line(80).min(3, 'At least 3 characters'),
     question: line(400).min(3, 'Write the question in a sentence'),
-    method: z.enum(['abx']),
+    method: z.enum(methodIds),
+    /** The settings of the method that are on; left out where there are none. */
+    methodSettings: z.array(z.string().max(40)).max(10).optional(),
     cables: z.tuple([chosenCable, chosenCable]),
     sessions: whole(1, 20, 'sessions'),
     listenersPerSession: whole(1, 24, 'listeners'),
@@ -59,6 +62,17 @@ export const studyDraft = z
         input: second.cableId,
         path: ['cables', 1, 'cableId'],
         message: 'Choose two different cables',
+      });
+    const { method, methodSettings = [] } = check.value;
+    const known = methods[method].settings.map(({ id }) => id);
+    const isSound =
+      methodSettings.every((id) => known.includes(id)) && new Set(methodSettings).size === methodSettings.length;
+    if (!isSound)
+      check.issues.push({
+        code: 'custom',
+        input: methodSettings,
+        path: ['methodSettings'],
+        message: `Choose among the settings of ${methods[method].name}, each once`,
       });
   });
 export type StudyDraft = z.output<typeof studyDraft>;
@@ -83,7 +97,7 @@ export const sealedProtocol = z.strictObject({
 const rowShape = {
   id: z.uuid(),
   title: z.string(),
-  method: z.enum(['abx']),
+  method: z.enum(methodIds),
   state: z.enum(studyStates),
   updatedAt: z.iso.datetime(),
 };

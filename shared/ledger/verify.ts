@@ -1,9 +1,8 @@
-import type { RegisteredResult } from '../findings/registered-result.ts';
 import { methodOf } from '../methods/methods.ts';
+import { runRegistered } from '../methods/run-registered.ts';
 import { type Protocol, protocolDigest } from '../protocol/protocol.ts';
 import { type AnswerContent, answerLeaf, contributionCommitment } from '../session/answer-leaf.ts';
 import { codeKeyCommitment, drawSecretCommitment } from '../session/commitments.ts';
-import { countedTrials } from '../session/counted-trials.ts';
 import { sessionsInRecord } from '../session/read-record.ts';
 import { type RevealedKey, revealedKey } from '../session/revealed-key.ts';
 import type { SessionState } from '../session/state.ts';
@@ -102,13 +101,7 @@ function figuresRecomputed({ entries, protocol, sessions, key, answers }: Readin
   const name = 'Draws and figures recomputed';
   const recorded = payloadOf(entries, 'result-recorded')?.result;
   if (recorded === undefined) return { name, outcome: 'not checkable', reason: 'No result is on the record.' };
-  const method = methodOf(protocol.method);
-  const { alpha } = protocol.analysis;
-  const { listenersPerSession } = protocol.design;
-  const result: RegisteredResult = method.analyse(
-    { alpha, listenersPerSession },
-    countedTrials(method, sessions, key, answers),
-  );
+  const result = runRegistered(protocol, sessions, key, answers);
   const same = canonicalJson(result as unknown as Json) === canonicalJson(recorded);
   return verdict(
     name,

@@ -1,4 +1,5 @@
 import type { Entry } from '../ledger/chain.ts';
+import type { Method } from '../methods/method.ts';
 import type { SessionState } from './state.ts';
 import { studyEvents } from './study-events.ts';
 
@@ -7,12 +8,16 @@ export type BlindingRung = { readonly name: 'listener-blind' | 'double-blind to 
 /**
  * How blind a closed study was, derived from its record and never ticked in a box.
  *
- * ABX fitted from the specimens of A and B reaches *double-blind to the cable* at most: whoever fits X sees whether its
- * code is that of A. A doubled duty, or a proctor who could see the cables' pages, caps it at *listener-blind*.
+ * A cable that is fitted under one code all through a session reaches *double-blind to the cable* at most: whoever fits it
+ * learns something from the codes, and the method says what. A doubled duty, or a proctor who could see the cables' pages, caps it at *listener-blind*.
  *
  * @throws RangeError when the record has no closing
  */
-export function blindingRung(entries: readonly Entry[], sessions: readonly SessionState[]): BlindingRung {
+export function blindingRung(
+  entries: readonly Entry[],
+  sessions: readonly SessionState[],
+  method: Pick<Method, 'fitterCouldSee'>,
+): BlindingRung {
   const closing = entries.find((entry) => entry.kind === 'study-closed');
   if (closing === undefined) throw new RangeError('the blinding rung is derived once the study is closed');
   const { manager, owners, managers, codeHolder } = studyEvents['study-closed'].parse(closing.payload);
@@ -24,6 +29,6 @@ export function blindingRung(entries: readonly Entry[], sessions: readonly Sessi
     return { name: 'listener-blind', why: 'The code holder also managed the study or owns the organisation.' };
   return {
     name: 'double-blind to the cable',
-    why: 'The proctor never saw code key or cable pages. Whoever fits X could still see whether its code is that of A.',
+    why: `The proctor never saw code key or cable pages. ${method.fitterCouldSee}`,
   };
 }

@@ -45,6 +45,8 @@ export function presentationNow({ trial }: SessionState, method: Method): string
   if (presentation === undefined) throw new RangeError('a trial beyond its presentations');
   return presentation;
 }
+/** The answers that a session offers. */
+export const optionsOf = ({ plan }: SessionState, method: Method) => method.options(plan.methodSettings ?? []);
 
 /** The step to be confirmed now, or null outside a change. */
 export function nextStep(trial: OpenTrial) {

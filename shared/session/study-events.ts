@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { registeredResult } from '../findings/registered-result.ts';
+import { registeredResult } from '../methods/methods.ts';
 
 // What the study itself puts on its record. The payload of `key-revealed` has a file of its own: revealed-key.ts.
 

@@ -8,6 +8,7 @@ import {
   nextStep,
   nextTrial,
   openAnswers,
+  optionsOf,
   presentationsOf,
   trialsInAll,
 } from './progress.ts';
@@ -69,6 +70,7 @@ export function listenerViewOf(state: SessionState, method: Method, context: Lis
             takesPart: trial.seats.includes(seat),
             stage: trial.stage,
             presentation: presentationAt(trial, method),
+            spoken: method.spoken(presentationAt(trial, method)),
             presentationNumber: trial.presentation + 1,
             presentations: presentationsOf(method, trial.trial).length,
             endsAt: state.paused === null ? trial.endsAt : null,
@@ -76,7 +78,13 @@ export function listenerViewOf(state: SessionState, method: Method, context: Lis
           },
     question: {
       text: method.question,
-      options: method.options.map(({ value, letter, sentence }) => ({ value, letter, sentence })),
+      announcement: method.announcement,
+      options: optionsOf(state, method).map(({ value, letter, sentence, short }) => ({
+        value,
+        letter,
+        sentence,
+        short,
+      })),
       confidence: state.plan.confidence,
     },
     lastLock,

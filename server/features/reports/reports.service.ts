@@ -1,9 +1,7 @@
 import type { Report, ReportRow } from '#shared/contracts/reports.ts';
-import { findingOf } from '#shared/findings/finding.ts';
-import { registeredResult } from '#shared/findings/registered-result.ts';
 import type { Entry } from '#shared/ledger/chain.ts';
 import { type Check, verifyStudy } from '#shared/ledger/verify.ts';
-import { methodOf } from '#shared/methods/methods.ts';
+import { methodOf, registeredResult } from '#shared/methods/methods.ts';
 import { Problem } from '#shared/problem.ts';
 import type { Protocol } from '#shared/protocol/protocol.ts';
 import { blindingRung } from '#shared/session/blinding-rung.ts';
@@ -23,7 +21,7 @@ const holds = (checks: readonly Check[]) => checks.every(({ outcome }) => outcom
 function findingFor(source: Pick<ReportSource, 'entries' | 'protocol' | 'result' | 'checks'>) {
   const { entries, protocol, result, checks } = source;
   const closing = closingOf(entries);
-  return findingOf(result, {
+  return methodOf(result.method).finding(result, {
     cables: [protocol.cables[0].name, protocol.cables[1].name],
     gate: { commitmentsHold: holds(checks), allTrialsAccounted: holds(checks) },
     endedEarly: closing.complete ? null : closing.reason,
@@ -53,7 +51,8 @@ async function sourceOf(tx: Tx, study: Study): Promise<ReportSource> {
     salt,
   }));
   const recorded = entries.find(({ kind }) => kind === 'result-recorded');
-  const states = sessionsInRecord(entries, methodOf(protocol.method));
+  const method = methodOf(protocol.method);
+  const states = sessionsInRecord(entries, method);
   const source = {
     study,
     protocol,
@@ -63,7 +62,7 @@ async function sourceOf(tx: Tx, study: Study): Promise<ReportSource> {
     rooms: new Map(sessions.map(({ number, room }) => [number, room])),
     result: registeredResult.parse(recorded?.payload.result),
     checks: verifyStudy({ entries, protocol, answers }),
-    rung: blindingRung(entries, states),
+    rung: blindingRung(entries, states, method),
     closing: closingOf(entries),
   };
   return { ...source, finding: findingFor(source) };
