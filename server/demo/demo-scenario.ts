@@ -83,3 +83,19 @@ export const closedStudy: Free = {
   changeS: 30,
   answerS: 45,
 };
+
+/** Published: one listener at a time, so that the effect has an interval; one session was abandoned before its trials. */
+export const publishedStudy: Free = {
+  ...closedStudy,
+  title: 'Study Turnstone',
+  question: 'Do listeners, one at a time, tell a 0.5 mm² run of 6 m from one of 4 mm² into 4 Ω?',
+  sessions: 3,
+  listenersPerSession: 1,
+  trials: 8,
+};
+
+export const publishedStatements = {
+  paid: 'Skerry Line Works, which makes both cables, paid for the study out of its own funds.',
+  supplied: 'Skerry Line Works. Both specimens of each cable were taken from stock by the code holder, unopened.',
+  ties: 'The manager, the proctor and the code holder are employed by Skerry Line Works. The listeners are customers of a neighbouring shop and were not paid.',
+};

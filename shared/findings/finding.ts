@@ -24,6 +24,8 @@ export type FindingContext = {
   readonly gate: {
     readonly commitmentsHold: boolean;
     readonly allTrialsAccounted: boolean;
+    /** Whether listeners could not know what they heard: the blinding rung is above *open*. */
+    readonly isBlind: boolean;
   };
   /** Why the study was closed before its registered number, or null. */
   readonly endedEarly: string | null;
@@ -106,6 +108,8 @@ function bodyOf(
   const [first, second] = cables;
   if (!gate.commitmentsHold || !gate.allTrialsAccounted)
     return { row: '0', headline: 'This study does not meet its protocol; its numbers support no claim.', maySay: null };
+  if (!gate.isBlind)
+    return { row: '0', headline: 'This study was not blind; its numbers support no claim.', maySay: null };
   if (result.isBelowGuessing)
     return {
       row: '1',

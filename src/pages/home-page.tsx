@@ -9,6 +9,7 @@ import type { HomePlaces } from '../features/home/home-places.ts';
 import { NoReportWaits, NoSessionWaits, NothingWaits } from '../features/home/nothing-waits.tsx';
 import { WaitingList } from '../features/home/waiting-list.tsx';
 import { organisationQueries } from '../features/organisations/organisations.queries.ts';
+import { LatestPublications } from '../features/publications/latest-publications.tsx';
 import { sessionQueries } from '../features/sessions/sessions.queries.ts';
 import { type Presence, presenceIn, usePresence } from '../features/sign-in/membership.ts';
 import { signInQueries } from '../features/sign-in/sign-in.queries.ts';
@@ -49,11 +50,21 @@ export function Component() {
     <>
       <PageHeader title="What waits for you" lede={`${presence.person.name}, ${organisation}`} />
       <div className="grid gap-x-20 gap-y-14 lg:grid-cols-[minmax(0,1fr)_minmax(0,28rem)]">
-        {data.items.length > 0 ? (
-          <WaitingList items={data.items} places={places} />
-        ) : (
-          <EmptyHome role={role} organisationId={organisationId} places={places} />
-        )}
+        <div className="flex min-w-0 flex-col gap-14">
+          {data.items.length > 0 ? (
+            <WaitingList items={data.items} places={places} />
+          ) : (
+            <EmptyHome role={role} organisationId={organisationId} places={places} />
+          )}
+          {role === 'proctor' ? null : (
+            <LatestPublications
+              title="Published by you"
+              organisationId={organisationId}
+              allTo={paths.publications()}
+              hrefOf={paths.publication}
+            />
+          )}
+        </div>
         {presence.demoPeople.length > 0 ? <Demo presence={presence} places={places} /> : null}
       </div>
     </>

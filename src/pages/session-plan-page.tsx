@@ -1,6 +1,6 @@
 import { useSuspenseQuery } from '@tanstack/react-query';
 import { type LoaderFunctionArgs, useNavigate, useParams } from 'react-router-dom';
-import type { Study } from '#shared/contracts/studies.ts';
+import { isClosed, type Study } from '#shared/contracts/studies.ts';
 import { paths } from '../app/paths.ts';
 import { organisationQueries } from '../features/organisations/organisations.queries.ts';
 import { SessionForm } from '../features/sessions/session-form.tsx';
@@ -67,6 +67,6 @@ function ledeOf({ draft, progress }: Study): string {
 
 function hindranceOf({ state }: Study): string | null {
   if (state === 'draft') return 'Seal the protocol first; a session belongs to a sealed study';
-  if (state === 'closed') return 'This study is closed; it takes no further session';
+  if (isClosed(state)) return 'This study is closed; it takes no further session';
   return null;
 }

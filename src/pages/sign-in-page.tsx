@@ -3,6 +3,7 @@ import { useEffect } from 'react';
 import { type LoaderFunctionArgs, redirect, useLoaderData, useNavigate } from 'react-router-dom';
 import type { WhoAmI } from '#shared/contracts/sign-in.ts';
 import { paths } from '../app/paths.ts';
+import { LatestPublications } from '../features/publications/latest-publications.tsx';
 import { DemoPeople } from '../features/sign-in/demo-people.tsx';
 import { signInQueries } from '../features/sign-in/sign-in.queries.ts';
 import { SignInForm } from '../features/sign-in/sign-in-form.tsx';
@@ -36,9 +37,19 @@ export function Component() {
 
   return (
     <div className="grid gap-x-20 gap-y-12 lg:grid-cols-[minmax(0,26rem)_minmax(0,1fr)]">
-      <div>
-        <PageHeader title="Sign in" lede="Listeners need no account: their session code or personal link is enough." />
-        <SignInForm onSignedIn={goOn} />
+      <div className="flex flex-col gap-14">
+        <div>
+          <PageHeader
+            title="Sign in"
+            lede="Listeners need no account: their session code or personal link is enough."
+          />
+          <SignInForm onSignedIn={goOn} />
+        </div>
+        <LatestPublications
+          title="Published here, for anybody to check"
+          allTo={paths.publications()}
+          hrefOf={paths.publication}
+        />
       </div>
       {demoPeople.length > 0 ? (
         <div className="max-w-2xl lg:pt-3">

@@ -1,4 +1,4 @@
-import type { StudyDraft, StudyState } from '#shared/contracts/studies.ts';
+import { closedStates, type StudyDraft, type StudyState } from '#shared/contracts/studies.ts';
 import { likePattern, pageOfRows } from '../../db/paging.ts';
 import type { Tx } from '../../db/transaction.ts';
 import { Study } from './study.entity.ts';
@@ -6,14 +6,15 @@ import { Study } from './study.entity.ts';
 export function listStudies(
   tx: Tx,
   organisationId: string,
-  query: { q: string; page: number; state: StudyState | 'any' },
+  query: { q: string; page: number; state: StudyState | 'any' | 'any-closed' },
 ) {
   const rows = tx
     .createQueryBuilder(Study, 'study')
     .where('study.organisationId = :organisationId', { organisationId })
     .orderBy('study.updatedAt', 'DESC')
     .addOrderBy('study.id');
-  if (query.state !== 'any') rows.andWhere('study.state = :state', { state: query.state });
+  const states = query.state === 'any-closed' ? closedStates : [query.state];
+  if (query.state !== 'any') rows.andWhere('study.state in (:...states)', { states });
   if (query.q !== '') rows.andWhere('study.title like :q', { q: likePattern(query.q) });
   return pageOfRows(rows, query.page);
 }

@@ -49,7 +49,7 @@ function SessionHead({ session, cables }: { session: Session; cables: Report['ca
       </h3>
       <p className="text-soft">
         {[
-          room,
+          ...(room === '' ? [] : [room]),
           formatCount(listeners, 'listener'),
           startedAt === null ? 'never started' : `started ${formatDateTime(startedAt)}`,
           ...(endedAt === null ? [] : [`ended ${formatDateTime(endedAt)}`]),
