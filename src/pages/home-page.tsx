@@ -10,6 +10,7 @@ import { NoReportWaits, NoSessionWaits, NothingWaits } from '../features/home/no
 import { WaitingList } from '../features/home/waiting-list.tsx';
 import { organisationQueries } from '../features/organisations/organisations.queries.ts';
 import { LatestPublications } from '../features/publications/latest-publications.tsx';
+import { publicationQueries } from '../features/publications/publications.queries.ts';
 import { sessionQueries } from '../features/sessions/sessions.queries.ts';
 import { type Presence, presenceIn, usePresence } from '../features/sign-in/membership.ts';
 import { signInQueries } from '../features/sign-in/sign-in.queries.ts';
@@ -32,6 +33,7 @@ export async function loader({ params }: LoaderFunctionArgs) {
   const isDemo = presence.demoPeople.length > 0;
   await Promise.all([
     queryClient.ensureQueryData(homeQueries.waiting(organisationId)),
+    queryClient.ensureQueryData(publicationQueries.list({ organisationId })),
     isManager ? queryClient.ensureQueryData(firstCables(organisationId)) : null,
     isManager ? queryClient.ensureQueryData(firstStudies(organisationId)) : null,
     isDemo ? queryClient.ensureQueryData(organisationQueries.members(organisationId)) : null,
@@ -44,6 +46,7 @@ export function Component() {
   const presence = usePresence();
   const { organisationId, role, organisation } = presence.membership;
   const { data } = useSuspenseQuery(homeQueries.waiting(organisationId));
+  const { data: published } = useSuspenseQuery(publicationQueries.list({ organisationId }));
   const places = placesIn(organisationId);
 
   return (
@@ -59,7 +62,7 @@ export function Component() {
           {role === 'proctor' ? null : (
             <LatestPublications
               title="Published by you"
-              organisationId={organisationId}
+              rows={published.rows}
               allTo={paths.publications()}
               hrefOf={paths.publication}
             />

@@ -39,7 +39,7 @@ async function openPublication(page: Page): Promise<string> {
 test('a stranger reads a publication without a script, and checks it in the browser [V7] [V12]', async ({
   browser,
 }) => {
-  const page = await browser.newPage();
+  const page = await (await browser.newContext()).newPage();
   const address = await openPublication(page);
 
   const plain = await browser.newContext({ javaScriptEnabled: false });
@@ -162,7 +162,7 @@ test('a manager publishes a closed study, and withdraws it [V5] [V9]', async ({ 
   await expect(dialog).toBeHidden();
   await expect(page.getByText('It is withdrawn: The sleeves had slipped.')).toBeVisible();
 
-  const stranger = await browser.newPage();
+  const stranger = await (await browser.newContext()).newPage();
   await stranger.goto(address);
   await expect(stranger.getByText('The sleeves had slipped.')).toBeVisible();
   await expect(stranger.getByText('Nothing in public: these numbers support no claim.')).toBeVisible();
