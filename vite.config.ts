@@ -16,6 +16,7 @@ export default defineConfig({
         extends: true,
         test: {
           name: 'unit',
+          testTimeout: 30_000,
           include: ['tests/shared/**/*.test.ts', 'tests/src/**/*.test.ts', 'tests/guards/**/*.test.ts'],
         },
       },

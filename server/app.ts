@@ -9,6 +9,8 @@ import { apiReferenceRoutes } from './features/api-reference/api-reference.route
 import { cablesRoutes } from './features/cables/cables.routes.ts';
 import { codesRoutes } from './features/codes/codes.routes.ts';
 import { healthRoutes, version } from './features/health/health.routes.ts';
+import { publicPages } from './features/publications/public-pages.ts';
+import { publicationsRoutes } from './features/publications/publications.routes.ts';
 import { reportsRoutes } from './features/reports/reports.routes.ts';
 import { sessionsRoutes } from './features/sessions/sessions.routes.ts';
 import { signInRoutes } from './features/sign-in/sign-in.routes.ts';
@@ -93,9 +95,11 @@ export function createApp(deps: Deps) {
   codesRoutes(api, access, deps);
   sessionsRoutes(api, access, deps, sittings);
   reportsRoutes(api, access, deps);
+  publicationsRoutes(api, access, deps);
   apiReferenceRoutes(api, mounted, version);
   api.use(nothingHere);
   app.use('/api', api);
+  app.use(publicPages(deps));
   serveClient(app, config.clientDir);
   app.use(nothingHere);
   app.use(problemHandler(log));

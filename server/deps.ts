@@ -13,6 +13,7 @@ export type RandomPurpose =
   | 'draw-salt'
   | 'seat-token'
   | 'session-code'
+  | 'publication-id'
   | 'password-salt';
 
 export type Random = {

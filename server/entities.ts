@@ -4,6 +4,7 @@ import { Cable } from './features/cables/cable.entity.ts';
 import { Specimen } from './features/cables/specimen.entity.ts';
 import { Membership } from './features/organisations/membership.entity.ts';
 import { Organisation } from './features/organisations/organisation.entity.ts';
+import { Publication } from './features/publications/publication.entity.ts';
 import { Answer } from './features/sessions/answer.entity.ts';
 import { Seat } from './features/sessions/seat.entity.ts';
 import { Session } from './features/sessions/session.entity.ts';
@@ -27,4 +28,5 @@ export const entities = [
   Answer,
   CodeKey,
   DrawSecret,
+  Publication,
 ];

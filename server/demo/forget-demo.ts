@@ -4,10 +4,11 @@ import { Cable } from '../features/cables/cable.entity.ts';
 import { Specimen } from '../features/cables/specimen.entity.ts';
 import { Membership } from '../features/organisations/membership.entity.ts';
 import { Organisation } from '../features/organisations/organisation.entity.ts';
+import { Publication } from '../features/publications/publication.entity.ts';
 import { User } from '../features/users/user.entity.ts';
 import { demoPeople } from './demo-people.ts';
 
-/** Removes a demo whose making was cut short: its people, cables and organisation. Its studies were never shown to anyone. */
+/** Removes a demo whose making was cut short: its people, cables and organisation. Its studies were never shown to anyone, nor is what it published. */
 export function forgetDemo(db: DataSource, organisationId: string): Promise<void> {
   return withTransaction(db, async (tx) => {
     const cables = await tx.findBy(Cable, { organisationId });
@@ -15,6 +16,7 @@ export function forgetDemo(db: DataSource, organisationId: string): Promise<void
     await tx.delete(Cable, { organisationId });
     await tx.delete(Membership, { organisationId });
     await tx.delete(User, { email: In(demoPeople.map(({ email }) => email)) });
+    await tx.delete(Publication, { organisationId });
     await tx.delete(Organisation, { id: organisationId });
   });
 }

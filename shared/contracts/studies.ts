@@ -4,8 +4,12 @@ import { endpoint, managers } from './endpoint.ts';
 import { organisationParams, thingParams } from './organisation-params.ts';
 import { listQuery, pageOf, sortBy } from './paging.ts';
 
-export const studyStates = ['draft', 'sealed', 'collecting', 'closed'] as const;
+export const studyStates = ['draft', 'sealed', 'collecting', 'closed', 'published', 'shelved'] as const;
 export type StudyState = (typeof studyStates)[number];
+
+/** The states after closing: the secrets are open and the result is on the record. */
+export const closedStates = ['closed', 'published', 'shelved'] as const satisfies readonly StudyState[];
+export const isClosed = (state: StudyState) => (closedStates as readonly StudyState[]).includes(state);
 
 export const rigs = ['loudspeaker', 'line', 'headphone'] as const;
 export type Rig = (typeof rigs)[number];

@@ -1,10 +1,14 @@
-/** Every address of the signed-in application. The route table is built from the same functions. */
+/** Every address of the application. The route table is built from the same functions. */
 export const paths = {
   start: () => '/',
   /** With a way back to where one was. */
   signIn: (next?: string) => (next === undefined ? '/sign-in' : `/sign-in?${new URLSearchParams({ next })}`),
   help: () => '/help',
   kit: () => '/kit',
+
+  /** Public: what is published, for anybody. */
+  publications: () => '/p',
+  publication: (id: string) => `/p/${id}`,
 
   home: (organisationId: string) => organisation(organisationId),
 
@@ -20,6 +24,7 @@ export const paths = {
   codes: (organisationId: string, studyId: string) => `${organisation(organisationId)}/studies/${studyId}/codes`,
   labels: (organisationId: string, studyId: string) => `${organisation(organisationId)}/studies/${studyId}/labels`,
   report: (organisationId: string, studyId: string) => `${organisation(organisationId)}/studies/${studyId}/report`,
+  publish: (organisationId: string, studyId: string) => `${organisation(organisationId)}/studies/${studyId}/publish`,
   reports: (organisationId: string) => `${organisation(organisationId)}/reports`,
 
   sessions: (organisationId: string) => `${organisation(organisationId)}/sessions`,

@@ -12,6 +12,8 @@ import type { HomePlaces } from '../features/home/home-places.ts';
 import { NoReportWaits, NoSessionWaits, NothingWaits } from '../features/home/nothing-waits.tsx';
 import { WaitingList } from '../features/home/waiting-list.tsx';
 import { organisationQueries } from '../features/organisations/organisations.queries.ts';
+import { LatestPublications } from '../features/publications/latest-publications.tsx';
+import { publicationQueries } from '../features/publications/publications.queries.ts';
 import { sessionQueries } from '../features/sessions/sessions.queries.ts';
 import { type Presence, presenceIn, usePresence } from '../features/sign-in/membership.ts';
 import { signInQueries } from '../features/sign-in/sign-in.queries.ts';
@@ -38,6 +40,7 @@ export async function loader({ params }: LoaderFunctionArgs) {
   const isDemo = presence.demoPeople.length > 0;
   await Promise.all([
     queryClient.ensureQueryData(homeQueries.waiting(organisationId)),
+    queryClient.ensureQueryData(publicationQueries.list({ organisationId })),
     isManager ? queryClient.ensureQueryData(firstCables(organisationId)) : null,
     isManager ? queryClient.ensureQueryData(firstStudies(organisationId)) : null,
     isDemo ? queryClient.ensureQueryData(organisationQueries.members(organisationId)) : null,
@@ -50,17 +53,28 @@ export function Component() {
   const presence = usePresence();
   const { organisationId, role, organisation } = presence.membership;
   const { data } = useSuspenseQuery(homeQueries.waiting(organisationId));
+  const { data: published } = useSuspenseQuery(publicationQueries.list({ organisationId }));
   const places = placesIn(organisationId);
 
   return (
     <>
       <PageHeader title="What waits for you" lede={`${presence.person.name}, ${organisation}`} />
       <div className="grid gap-x-20 gap-y-14 lg:grid-cols-[minmax(0,1fr)_minmax(0,28rem)]">
-        {data.items.length > 0 ? (
-          <WaitingList items={data.items} places={places} />
-        ) : (
-          <EmptyHome role={role} organisationId={organisationId} places={places} />
-        )}
+        <div className="flex min-w-0 flex-col gap-14">
+          {data.items.length > 0 ? (
+            <WaitingList items={data.items} places={places} />
+          ) : (
+            <EmptyHome role={role} organisationId={organisationId} places={places} />
+          )}
+          {role === 'proctor' ? null : (
+            <LatestPublications
+              title="Published by you"
+              rows={published.rows}
+              allTo={paths.publications()}
+              hrefOf={paths.publication}
+            />
+          )}
+        </div>
         {presence.demoPeople.length > 0 ? <Demo presence={presence} places={places} /> : null}
       </div>
     </>

@@ -168,10 +168,11 @@ describe('a session with a proctor and three phones', () => {
     expect(report.record.checks.map(({ name, outcome }) => `${name}: ${outcome}`)).toEqual([
       'Record unbroken: pass',
       'Protocol unchanged since sealing: pass',
-      'Commitments match what was revealed: pass',
+      'Commitments match the revealed secrets: pass',
+      'Draws recomputed: pass',
       'Answers match their leaves: pass',
-      'Every session and trial accounted for: pass',
-      'Draws and figures recomputed: pass',
+      'Every drawn trial accounted for: pass',
+      'Figures recomputed: pass',
     ]);
     const truths = codesOfX.map((codes) => (codes[2] === codes[0] ? 'A' : 'B'));
     const locked = report.sessions[0]?.trials.filter(({ outcome }) => outcome === 'locked') ?? [];

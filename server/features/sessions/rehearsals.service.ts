@@ -1,3 +1,4 @@
+import { methodIds } from '#shared/methods/methods.ts';
 import type { SessionPlan } from '#shared/session/events.ts';
 import type { Deps } from '../../deps.ts';
 import type { Sittings } from '../../live/sittings.ts';
@@ -5,7 +6,7 @@ import { getSession } from './sessions.service.ts';
 
 /** Three quick trials: enough to meet every step once, and a void. */
 const shortPlan: SessionPlan = {
-  method: 'abx',
+  method: methodIds[0],
   trials: 3,
   spares: 1,
   rig: 'loudspeaker',

@@ -1,4 +1,4 @@
-import type { Study as StudyReply } from '#shared/contracts/studies.ts';
+import { isClosed, type Study as StudyReply } from '#shared/contracts/studies.ts';
 import type { Json } from '#shared/ledger/canonical-json.ts';
 import { methodOf } from '#shared/methods/methods.ts';
 import { runRegistered } from '#shared/methods/run-registered.ts';
@@ -89,7 +89,7 @@ export function closeStudy(
     const study = await lockedStudy(tx, where);
     const sessions = await sessionsOfStudy(tx, study.id);
     const { allowed, complete, why } = closingOf(study, sessions);
-    if (!allowed) throw new Problem('wrong-phase', study.state === 'closed' ? 'The study is closed already.' : why);
+    if (!allowed) throw new Problem('wrong-phase', isClosed(study.state) ? 'The study is closed already.' : why);
     if (!complete && reason === '')
       throw new Problem('invalid-input', 'Ending early needs a reason.', [
         { pointer: '/reason', detail: 'Say why the study ends before its registered number of trials' },

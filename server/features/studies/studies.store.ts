@@ -1,13 +1,18 @@
-import type { StudyDraft, StudyListQuery } from '#shared/contracts/studies.ts';
+import { closedStates, type StudyDraft, type StudyListQuery } from '#shared/contracts/studies.ts';
 import { likePattern, pageOfRows, sortRows } from '../../db/paging.ts';
 import type { Tx } from '../../db/transaction.ts';
 import { Study } from './study.entity.ts';
 
-export function listStudies(tx: Tx, organisationId: string, query: StudyListQuery) {
+export function listStudies(
+  tx: Tx,
+  organisationId: string,
+  query: Omit<StudyListQuery, 'state'> & { state: StudyListQuery['state'] | 'any-closed' },
+) {
   const rows = tx
     .createQueryBuilder(Study, 'study')
     .where('study.organisationId = :organisationId', { organisationId });
-  if (query.state !== 'any') rows.andWhere('study.state = :state', { state: query.state });
+  const states = query.state === 'any-closed' ? closedStates : [query.state];
+  if (query.state !== 'any') rows.andWhere('study.state in (:...states)', { states });
   if (query.q !== '') rows.andWhere('study.title like :q', { q: likePattern(query.q) });
   const columns = { title: 'study.title', state: 'study.state', updatedAt: 'study.updatedAt' };
   return pageOfRows(sortRows(rows, query.sort, columns, 'study.id'), query.page);

@@ -6,7 +6,7 @@ import type { PreferenceChoice } from '#shared/findings/preference-trials.ts';
 
 const context: FindingContext = {
   cables: ['Northern run', 'Southern run'],
-  gate: { commitmentsHold: true, allTrialsAccounted: true },
+  gate: { commitmentsHold: true, allTrialsAccounted: true, isBlind: true },
   endedEarly: null,
   setting: 'player, amplifier, loudspeakers',
 };
@@ -69,7 +69,7 @@ describe('the finding of a paired preference', () => {
           [16, 0],
         ])
           for (const commitmentsHold of [true, false]) {
-            const gate = { commitmentsHold, allTrialsAccounted: true };
+            const gate = { commitmentsHold, allTrialsAccounted: true, isBlind: true };
             const one = found({ listeners, forFirst, ties, missing }, { gate });
             rows.add(one.row);
             expect(finding.parse(one)).toEqual(one);

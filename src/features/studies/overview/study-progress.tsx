@@ -1,4 +1,4 @@
-import type { Study } from '#shared/contracts/studies.ts';
+import { isClosed, type Study } from '#shared/contracts/studies.ts';
 import { formatCount } from '../../../lib/format.ts';
 import { Progress } from '../../../ui/progress.tsx';
 
@@ -23,7 +23,7 @@ export function StudyProgress({ state, draft, progress }: Pick<Study, 'state' | 
       </div>
       <p className="text-soft">
         {sessionsOpened === 0 ? 'No session has opened yet.' : openedWords(sessionsOpened)}{' '}
-        {state === 'closed' ? '' : 'Scores stay hidden from everybody until the study is closed.'}
+        {isClosed(state) ? '' : 'Scores stay hidden from everybody until the study is closed.'}
       </p>
     </section>
   );
