@@ -8,6 +8,7 @@ import type { Deps } from './deps.ts';
 import { cablesRoutes } from './features/cables/cables.routes.ts';
 import { codesRoutes } from './features/codes/codes.routes.ts';
 import { healthRoutes } from './features/health/health.routes.ts';
+import { mailRoutes } from './features/mail/mail.routes.ts';
 import { reportsRoutes } from './features/reports/reports.routes.ts';
 import { sessionsRoutes } from './features/sessions/sessions.routes.ts';
 import { signInRoutes } from './features/sign-in/sign-in.routes.ts';
@@ -92,6 +93,7 @@ export function createApp(deps: Deps) {
   codesRoutes(api, access, deps);
   sessionsRoutes(api, access, deps, sittings);
   reportsRoutes(api, access, deps);
+  mailRoutes(api, access, deps);
   api.use(nothingHere);
   app.use('/api', api);
   serveClient(app, config.clientDir);

@@ -13,7 +13,8 @@ export type RandomPurpose =
   | 'draw-salt'
   | 'seat-token'
   | 'session-code'
-  | 'password-salt';
+  | 'password-salt'
+  | 'link-token';
 
 export type Random = {
   bytes(purpose: RandomPurpose, count: number): Buffer;

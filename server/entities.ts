@@ -11,6 +11,7 @@ import { WebSession } from './features/sign-in/web-session.entity.ts';
 import { Study } from './features/studies/study.entity.ts';
 import { User } from './features/users/user.entity.ts';
 import { RecordEntry } from './ledger/entry.entity.ts';
+import { OutgoingMail } from './mail/outgoing-mail.entity.ts';
 
 /** Every table. */
 export const entities = [
@@ -27,4 +28,5 @@ export const entities = [
   Answer,
   CodeKey,
   DrawSecret,
+  OutgoingMail,
 ];

@@ -4,6 +4,7 @@ import { createApp } from './app.ts';
 import type { Deps } from './deps.ts';
 import { forgetExpired } from './http/sign-in.ts';
 import { serveSockets } from './live/socket-server.ts';
+import { forgetOldTexts, Postman } from './mail/postman.ts';
 
 const hourMs = 60 * 60 * 1000;
 
@@ -14,19 +15,27 @@ function listen(http: Server, port: number, host: string): Promise<number> {
   });
 }
 
+async function sweep(deps: Deps): Promise<void> {
+  await forgetExpired(deps.db, deps.clock.now());
+  await forgetOldTexts(deps);
+}
+
 /** Opens the port, takes up the sessions that were open, and returns how to stop. Port 0 takes any free one. */
 export async function serve(deps: Deps) {
   const { app, sittings, signedIn, mounted } = createApp(deps);
   const http = createServer(app);
   const io = serveSockets(http, deps, sittings, signedIn);
   await sittings.resumeAll();
-  await forgetExpired(deps.db, deps.clock.now());
+  await sweep(deps);
   const sweeping = setInterval(() => {
-    forgetExpired(deps.db, deps.clock.now()).catch((error) => deps.log.error({ err: error }, 'sweeping failed'));
+    sweep(deps).catch((error) => deps.log.error({ err: error }, 'sweeping failed'));
   }, hourMs);
+  const postman = deps.config.smtp === null ? null : new Postman(deps, deps.config.smtp);
+  postman?.start();
   const port = await listen(http, deps.config.port, deps.config.host);
   const stop = async () => {
     clearInterval(sweeping);
+    await postman?.stop();
     await sittings.stop();
     await io.close();
     http.closeAllConnections();

@@ -5,6 +5,8 @@ export const paths = {
   signIn: (next?: string) => (next === undefined ? '/sign-in' : `/sign-in?${new URLSearchParams({ next })}`),
   help: () => '/help',
   kit: () => '/kit',
+  mailbox: () => '/mailbox',
+  mailboxMail: (id: string) => `/mailbox/${id}`,
 
   home: (organisationId: string) => organisation(organisationId),
 
@@ -21,6 +23,9 @@ export const paths = {
   labels: (organisationId: string, studyId: string) => `${organisation(organisationId)}/studies/${studyId}/labels`,
   report: (organisationId: string, studyId: string) => `${organisation(organisationId)}/studies/${studyId}/report`,
   reports: (organisationId: string) => `${organisation(organisationId)}/reports`,
+
+  people: (organisationId: string) => `${organisation(organisationId)}/people`,
+  mail: (organisationId: string) => `${organisation(organisationId)}/mail`,
 
   sessions: (organisationId: string) => `${organisation(organisationId)}/sessions`,
   planSession: (organisationId: string, studyId: string) =>
