@@ -2,9 +2,11 @@ import 'reflect-metadata';
 import { pino } from 'pino';
 import { readConfig } from './config.ts';
 import { createDataSource } from './db/data-source.ts';
+import { closeDemo } from './demo/close-demo.ts';
 import { demoPeople } from './demo/demo-people.ts';
 import { loadDemo } from './demo/load-demo.ts';
 import type { Deps } from './deps.ts';
+import { pageAddresses } from './mail/page-addresses.ts';
 import { serve } from './serve.ts';
 import { systemClock, systemRandom } from './system.ts';
 
@@ -26,12 +28,18 @@ async function main(): Promise<void> {
     await db.runMigrations();
   });
   if (config.demo) await step('demo', () => loadDemo(deps));
+  else await closeDemo(db);
   const server = await step('server', () => serve(deps));
 
   say(`\nFairlead is at ${config.publicUrl}`);
   if (config.demo) {
     say('\nSign in as:');
     for (const { email, password, duty } of demoPeople) say(`  ${email.padEnd(28)}${password.padEnd(20)}${duty}`);
+  }
+  const token = config.demo ? null : await server.firstOwner.offer();
+  if (token !== null) {
+    say('\nNobody owns this Fairlead yet. Create your organisation with this link; it works once:');
+    say(`  ${pageAddresses.firstOwner(config, token)}`);
   }
   say('\nCtrl-C stops it.');
 

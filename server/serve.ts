@@ -2,6 +2,8 @@ import { createServer, type Server } from 'node:http';
 import type { AddressInfo } from 'node:net';
 import { createApp } from './app.ts';
 import type { Deps } from './deps.ts';
+import { forgetOldAttempts } from './features/account/account.service.ts';
+import { forgetExpiredResets } from './features/account/password-resets.service.ts';
 import { forgetExpired } from './http/sign-in.ts';
 import { serveSockets } from './live/socket-server.ts';
 import { forgetOldTexts, Postman } from './mail/postman.ts';
@@ -18,13 +20,16 @@ function listen(http: Server, port: number, host: string): Promise<number> {
 async function sweep(deps: Deps): Promise<void> {
   await forgetExpired(deps.db, deps.clock.now());
   await forgetOldTexts(deps);
+  await forgetExpiredResets(deps);
+  await forgetOldAttempts(deps);
 }
 
 /** Opens the port, takes up the sessions that were open, and returns how to stop. Port 0 takes any free one. */
 export async function serve(deps: Deps) {
-  const { app, sittings, signedIn, mounted } = createApp(deps);
+  const { app, sittings, signedIn, mounted, consoles, firstOwner } = createApp(deps);
   const http = createServer(app);
   const io = serveSockets(http, deps, sittings, signedIn);
+  consoles.watch(io);
   await sittings.resumeAll();
   await sweep(deps);
   const sweeping = setInterval(() => {
@@ -40,5 +45,5 @@ export async function serve(deps: Deps) {
     await io.close();
     http.closeAllConnections();
   };
-  return { port, stop, sittings, mounted };
+  return { port, stop, sittings, mounted, firstOwner };
 }

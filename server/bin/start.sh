@@ -1,10 +1,12 @@
 #!/usr/bin/env bash
 # npm start: makes a bare Debian 12 with Node ready and serves Fairlead until it is told to stop.
+# npm start -- --no-demo: the same without the demo; the first start prints a link that creates organisation and owner.
 set -euo pipefail
 cd "$(dirname "${BASH_SOURCE[0]}")/../.."
 # shellcheck source=server/bin/machine.sh
 source server/bin/machine.sh
 follow_npm "$@"
+read_flags "$@"
 
 server_pid=''
 
