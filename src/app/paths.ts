@@ -5,6 +5,11 @@ export const paths = {
   signIn: (next?: string) => (next === undefined ? '/sign-in' : `/sign-in?${new URLSearchParams({ next })}`),
   help: () => '/help',
   kit: () => '/kit',
+  account: () => '/account',
+  invitation: () => '/invitation',
+  firstOwner: () => '/first-owner',
+  forgottenPassword: () => '/forgotten-password',
+  newPassword: () => '/new-password',
   mailbox: () => '/mailbox',
   mailboxMail: (id: string) => `/mailbox/${id}`,
 
@@ -25,6 +30,7 @@ export const paths = {
   reports: (organisationId: string) => `${organisation(organisationId)}/reports`,
 
   people: (organisationId: string) => `${organisation(organisationId)}/people`,
+  invitations: (organisationId: string) => `${organisation(organisationId)}/people/invitations`,
   mail: (organisationId: string) => `${organisation(organisationId)}/mail`,
 
   sessions: (organisationId: string) => `${organisation(organisationId)}/sessions`,

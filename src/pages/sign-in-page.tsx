@@ -1,6 +1,6 @@
 import { useQueryClient } from '@tanstack/react-query';
 import { useEffect } from 'react';
-import { type LoaderFunctionArgs, redirect, useLoaderData, useNavigate } from 'react-router-dom';
+import { Link, type LoaderFunctionArgs, redirect, useLoaderData, useNavigate } from 'react-router-dom';
 import type { WhoAmI } from '#shared/contracts/sign-in.ts';
 import { paths } from '../app/paths.ts';
 import { DemoPeople } from '../features/sign-in/demo-people.tsx';
@@ -39,6 +39,11 @@ export function Component() {
       <div>
         <PageHeader title="Sign in" lede="Listeners need no account: their session code or personal link is enough." />
         <SignInForm onSignedIn={goOn} />
+        <p className="pt-5">
+          <Link to={paths.forgottenPassword()} className="inline-flex min-h-12 items-center">
+            Forgotten your password?
+          </Link>
+        </p>
       </div>
       {demoPeople.length > 0 ? (
         <div className="max-w-2xl lg:pt-3">
