@@ -19,9 +19,11 @@ type MenuProps = {
 export function Menu({ label, of, children }: MenuProps) {
   return (
     <DropdownMenu.Root modal={false}>
-      <DropdownMenu.Trigger className="-mx-2 inline-flex max-w-full min-h-12 cursor-pointer items-center gap-2 rounded px-2 text-left text-soft hover:text-ink data-[state=open]:text-ink">
+      <DropdownMenu.Trigger
+        aria-label={of === undefined ? undefined : `${label}: ${of}`}
+        className="-mx-2 inline-flex max-w-full min-h-12 cursor-pointer items-center gap-2 rounded px-2 text-left text-soft hover:text-ink data-[state=open]:text-ink"
+      >
         <span className="min-w-0 truncate">{label}</span>
-        {of ? <span className="sr-only">: {of}</span> : null}
         <Caret direction="down" />
       </DropdownMenu.Trigger>
       <DropdownMenu.Portal>

@@ -1,11 +1,14 @@
+import { useState } from 'react';
 import type { MailboxMail as Mail } from '#shared/contracts/mail.ts';
 import { formatDateTime } from '../../lib/format.ts';
+import { Button } from '../../ui/button.tsx';
 import { Facts } from '../../ui/facts.tsx';
 
 const linksIn = (text: string) => [...new Set(text.match(/https?:\/\/[^\s<>"]+/g))];
 
 /** The plain text and its links, and the HTML as a reader shows it, shut off from everything. */
 export function MailboxMail({ mail }: { mail: Mail }) {
+  const [isShown, setShown] = useState(false);
   const links = linksIn(mail.text);
   return (
     <div className="grid gap-x-14 gap-y-10 lg:grid-cols-2">
@@ -36,12 +39,18 @@ export function MailboxMail({ mail }: { mail: Mail }) {
         <h2 id="mail-html" className="text-xl">
           As HTML
         </h2>
-        <iframe
-          title={`${mail.subject}, as HTML`}
-          sandbox=""
-          srcDoc={mail.html}
-          className="h-[34rem] w-full rounded border border-rule"
-        />
+        {isShown ? (
+          <iframe
+            title={`${mail.subject}, as HTML`}
+            sandbox=""
+            srcDoc={mail.html}
+            className="h-[34rem] w-full rounded border border-rule"
+          />
+        ) : (
+          <Button className="self-start" onClick={() => setShown(true)}>
+            Show it as HTML
+          </Button>
+        )}
       </section>
     </div>
   );
