@@ -5,10 +5,16 @@ import express, { type Express, Router } from 'express';
 import helmet from 'helmet';
 import { pinoHttp } from 'pino-http';
 import type { Deps } from './deps.ts';
+import { accountRoutes } from './features/account/account.routes.ts';
 import { apiReferenceRoutes } from './features/api-reference/api-reference.routes.ts';
 import { cablesRoutes } from './features/cables/cables.routes.ts';
 import { codesRoutes } from './features/codes/codes.routes.ts';
+import { firstOwnerRoutes } from './features/first-owner/first-owner.routes.ts';
+import { FirstOwner } from './features/first-owner/first-owner.service.ts';
 import { healthRoutes, version } from './features/health/health.routes.ts';
+import { invitationsRoutes } from './features/invitations/invitations.routes.ts';
+import { mailRoutes } from './features/mail/mail.routes.ts';
+import { peopleRoutes } from './features/people/people.routes.ts';
 import { publicPages } from './features/publications/public-pages.ts';
 import { publicationsRoutes } from './features/publications/publications.routes.ts';
 import { reportsRoutes } from './features/reports/reports.routes.ts';
@@ -18,6 +24,7 @@ import { studiesRoutes } from './features/studies/studies.routes.ts';
 import { usersRoutes } from './features/users/users.routes.ts';
 import type { Access } from './http/access.ts';
 import type { Mounted } from './http/mount.ts';
+import { OpenConsoles } from './http/open-consoles.ts';
 import { nothingHere, problemHandler } from './http/problem-handler.ts';
 import { signInMiddleware } from './http/sign-in.ts';
 import { Sittings } from './live/sittings.ts';
@@ -79,6 +86,8 @@ export function createApp(deps: Deps) {
   const access: Access = { db, log, strictReplies: config.strictReplies, mounted };
   const signedIn = signInMiddleware(db, config, () => clock.now());
   const sittings = new Sittings(deps);
+  const consoles = new OpenConsoles(deps);
+  const firstOwner = new FirstOwner(deps);
 
   const api = Router();
   api.use((_request, response, next) => {
@@ -88,14 +97,19 @@ export function createApp(deps: Deps) {
   api.use(express.json({ limit: '256kb' }));
   api.use(signedIn);
   healthRoutes(api, access, deps);
-  signInRoutes(api, access, deps);
+  signInRoutes(api, access, deps, consoles);
+  accountRoutes(api, access, deps, consoles);
+  firstOwnerRoutes(api, access, deps, firstOwner);
   usersRoutes(api, access, deps);
+  peopleRoutes(api, access, deps, consoles);
+  invitationsRoutes(api, access, deps);
   cablesRoutes(api, access, deps);
   studiesRoutes(api, access, deps);
   codesRoutes(api, access, deps);
   sessionsRoutes(api, access, deps, sittings);
   reportsRoutes(api, access, deps);
   publicationsRoutes(api, access, deps);
+  mailRoutes(api, access, deps);
   apiReferenceRoutes(api, mounted, version);
   api.use(nothingHere);
   app.use('/api', api);
@@ -103,5 +117,5 @@ export function createApp(deps: Deps) {
   serveClient(app, config.clientDir);
   app.use(nothingHere);
   app.use(problemHandler(log));
-  return { app, mounted, sittings, signedIn };
+  return { app, mounted, sittings, signedIn, consoles, firstOwner };
 }

@@ -3,9 +3,11 @@ import { join } from 'node:path';
 import { pino } from 'pino';
 import { readConfig } from './config.ts';
 import { createDataSource } from './db/data-source.ts';
+import { closeDemo } from './demo/close-demo.ts';
 import { demoPeople } from './demo/demo-people.ts';
 import { loadDemo } from './demo/load-demo.ts';
 import type { Deps } from './deps.ts';
+import { pageAddresses } from './mail/page-addresses.ts';
 import { onTheNetwork } from './network/on-the-network.ts';
 import { ownCertificate } from './network/own-certificate.ts';
 import { serve } from './serve.ts';
@@ -29,6 +31,7 @@ async function main(): Promise<void> {
     await db.runMigrations();
   });
   if (config.demo) await step('demo', () => loadDemo(deps));
+  else await closeDemo(db);
   const { lan } = config;
   const certificate =
     lan === null
@@ -46,6 +49,11 @@ async function main(): Promise<void> {
         : `\nSign in as (browsers show these on this machine only, at http://127.0.0.1:${config.port}):`,
     );
     for (const { email, password, duty } of demoPeople) say(`  ${email.padEnd(28)}${password.padEnd(20)}${duty}`);
+  }
+  const token = config.demo ? null : await server.firstOwner.offer();
+  if (token !== null) {
+    say('\nNobody owns this Fairlead yet. Create your organisation with this link; it works once:');
+    say(`  ${pageAddresses.firstOwner(config, token)}`);
   }
   say('\nCtrl-C stops it.');
 

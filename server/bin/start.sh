@@ -1,10 +1,13 @@
 #!/usr/bin/env bash
 # npm start: makes a bare Debian 12 with Node ready and serves Fairlead until it is told to stop.
+# npm start -- --lan: the same for phones on the local network, with TLS beside plain http.
+# npm start -- --no-demo: the same without the demo; the first start prints a link that creates organisation and owner.
 set -euo pipefail
 cd "$(dirname "${BASH_SOURCE[0]}")/../.."
 # shellcheck source=server/bin/machine.sh
 source server/bin/machine.sh
 follow_npm "$@"
+read_flags "$@"
 
 server_pid=''
 
@@ -20,13 +23,6 @@ finish() {
 
 trap finish EXIT
 trap 'exit 130' INT TERM HUP
-
-for argument in "$@"; do
-  case $argument in
-    --lan) export FAIRLEAD_LAN=on HOST=0.0.0.0 ;;
-    *) give_up "\"$argument\" is no option of npm start. There is: --lan, for phones on the local network." ;;
-  esac
-done
 
 prepare_home
 [[ ${FAIRLEAD_LAN:-off} == off ]] || {

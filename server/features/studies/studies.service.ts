@@ -5,10 +5,13 @@ import { type Protocol, type ProtocolCable, protocolDigest, protocolFromDraft } 
 import { type Tx, withTransaction } from '../../db/transaction.ts';
 import type { Deps } from '../../deps.ts';
 import { append, readKinds } from '../../ledger/ledger.ts';
+import { codesToDrawMail } from '../../mail/mails.ts';
+import { postMail } from '../../mail/outbox.ts';
+import { pageAddresses } from '../../mail/page-addresses.ts';
 import type { Cable } from '../cables/cable.entity.ts';
 import { cablesById } from '../cables/cables.store.ts';
 import { sessionsOfStudies, sessionsOfStudy } from '../sessions/sessions.store.ts';
-import { membersOf, namesOf } from '../users/users.store.ts';
+import { findById, membersOf, namesOf } from '../users/users.store.ts';
 import * as store from './studies.store.ts';
 import { studyRowView, studyView } from './studies.views.ts';
 import type { Study } from './study.entity.ts';
@@ -146,8 +149,16 @@ export function sealStudy(deps: Deps, where: Where, userId: string) {
     const payload = { protocolVersion: 1, digest: protocolDigest(protocol), sealedBy: userId };
     await append(tx, random, study.id, [{ kind: 'protocol-sealed', at: now, payload, session: null }]);
     await store.updateStudy(tx, study.id, { state: 'sealed', protocol: canonicalJson(protocol) }, new Date(now));
+    await tellCodeHolder(tx, deps, study);
     return viewOf(tx, await studyOrProblem(tx, where));
   });
+}
+
+async function tellCodeHolder(tx: Tx, deps: Deps, { id, organisationId, title, codeHolderId }: Study): Promise<void> {
+  const holder = await findById(tx, codeHolderId);
+  if (holder === null) throw new Error('a checked code holder is gone');
+  const url = pageAddresses.codes(deps.config, organisationId, id);
+  await postMail(tx, deps, { organisationId, recipient: holder.email }, codesToDrawMail({ title, url }));
 }
 
 export function recordDeviation(deps: Deps, where: Where, text: string) {

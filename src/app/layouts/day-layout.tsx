@@ -7,13 +7,15 @@ import { SkipLink } from './skip-link.tsx';
 type DayLayoutProps = {
   homeTo: string;
   links: ReadonlyArray<{ to: string; label: string }>;
+  /** Beside the name: the organisation one is in, where there are several. */
+  organisation?: ReactNode;
   /** Who is signed in: what the menu's button shows, and the items behind it (MenuItem, MenuLink ...). */
   person?: { label: string; menu: ReactNode };
   children: ReactNode;
 };
 
 /** For planning, reading and publishing. */
-export function DayLayout({ homeTo, links, person, children }: DayLayoutProps) {
+export function DayLayout({ homeTo, links, organisation, person, children }: DayLayoutProps) {
   usePageTheme('day');
   return (
     <div className="flex min-h-dvh flex-col">
@@ -23,6 +25,7 @@ export function DayLayout({ homeTo, links, person, children }: DayLayoutProps) {
           <Link to={homeTo} className="inline-flex min-h-14 items-center font-bold no-underline hover:underline">
             Fairlead
           </Link>
+          {organisation ? <div className="min-w-0 max-w-[45%]">{organisation}</div> : null}
           <nav aria-label="Main" className="order-last -mt-2 w-full pb-1 md:order-none md:mt-0 md:w-auto md:pb-0">
             <ul className="flex flex-wrap gap-x-4 sm:gap-x-6">
               {links.map((link) => (
