@@ -46,7 +46,7 @@ export const peopleApi = {
     params: organisationParams,
     query: listQuery.extend({
       role: z.enum(['any', ...roles]).default('any'),
-      sort: z.enum(['name', 'email', 'role', 'joined']).default('name'),
+      sort: z.enum(['name', 'role', 'joined']).default('name'),
       direction: z.enum(['ascending', 'descending']).default('ascending'),
     }),
     reply: pageOf(personRow),

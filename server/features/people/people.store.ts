@@ -12,11 +12,11 @@ export type PeopleQuery = {
   q: string;
   page: number;
   role: Role | 'any';
-  sort: 'name' | 'email' | 'role' | 'joined';
+  sort: 'name' | 'role' | 'joined';
   direction: 'ascending' | 'descending';
 };
 
-const sortColumns = { name: 'user.name', email: 'user.email', role: 'membership.role', joined: 'membership.joinedAt' };
+const sortColumns = { name: 'user.name', role: 'membership.role', joined: 'membership.joinedAt' };
 
 export function listPeople(tx: Tx, organisationId: string, { q, page, role, sort, direction }: PeopleQuery) {
   const rows = tx
