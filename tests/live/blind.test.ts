@@ -31,6 +31,10 @@ async function run({ codeKey, drawSecret }: Seeds): Promise<Run> {
       `${study.at}/codes`,
       `${study.base}/waiting`,
       `${study.base}/reports`,
+      `${study.at}/publication`,
+      '/api/publications',
+      '/p',
+      '/sitemap.xml',
     ]) {
       const reply = await study.manager.get(path);
       manager.push(`${reply.status} ${reply.headers['content-length']} ${reply.text}`);

@@ -76,16 +76,14 @@ export function publicPages(deps: Deps): Router {
       .send(shellPage(clientDir, head, publicationContent(publication)));
   });
 
-  router.get(filePath(':id'), async (request, response) => {
+  router.get(filePath(':id', ':digest'), async (request, response) => {
     const id = idOf(request.params.id);
     if (id === null) throw new Problem('not-found', 'Nothing is published at this address.');
-    const { document, digest } = await getDocument(deps, id);
     response
-      .set('cache-control', 'no-cache')
-      .set('etag', `"${digest}"`)
+      .set('cache-control', 'public, max-age=31536000, immutable')
       .set('content-disposition', `attachment; filename="fairlead-${id}.json"`)
       .type('application/json')
-      .send(document);
+      .send(await getDocument(deps, id, String(request.params.digest)));
   });
   return router;
 }
