@@ -67,9 +67,16 @@ export function publicPages(deps: Deps): Router {
       response.status(404);
       return next();
     }
-    const { headline, description, address } = publication;
+    const { headline, description, address, withdrawn } = publication;
+    // Where a search engine shows no more than these two, they say it too.
+    const said = withdrawn === null ? '' : 'Withdrawn: ';
     const data = jsonScript('application/ld+json', structuredData(publication));
-    const head = { title: `${headline} · Fairlead`, description, canonical: address, data: html`${data}` };
+    const head = {
+      title: `${said}${headline} · Fairlead`,
+      description: said + description,
+      canonical: address,
+      data: html`${data}`,
+    };
     response
       .set('cache-control', 'no-cache')
       .type('html')

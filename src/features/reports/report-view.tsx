@@ -1,3 +1,4 @@
+import type { ReactNode } from 'react';
 import type { Report } from '#shared/contracts/reports.ts';
 import { methodOf } from '#shared/methods/methods.ts';
 import { Button } from '../../ui/button.tsx';
@@ -13,10 +14,15 @@ import { ReportRecord } from './report-record.tsx';
 import { ReportSessions } from './report-sessions.tsx';
 import { WhatToSay } from './what-to-say.tsx';
 
-type ReportViewProps = { report: Report; back: { to: string; label: string } };
+type ReportViewProps = {
+  report: Report;
+  back: { to: string; label: string };
+  /** What can be done with the result, beside printing it. */
+  actions?: ReactNode;
+};
 
 /** The finding first, then what it rests on, down to every answer. */
-export function ReportView({ report, back }: ReportViewProps) {
+export function ReportView({ report, back, actions }: ReportViewProps) {
   const { result } = report;
   return (
     <article className="flex flex-col gap-14">
@@ -25,7 +31,8 @@ export function ReportView({ report, back }: ReportViewProps) {
           <FindingHead report={report} back={back} />
           <ReportFigures result={result} />
           <WhatToSay finding={report.finding} />
-          <div className="print:hidden">
+          <div className="flex flex-wrap gap-3 print:hidden">
+            {actions}
             <Button onClick={() => window.print()}>Print the report</Button>
           </div>
         </div>
