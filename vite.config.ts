@@ -20,7 +20,11 @@ export default defineConfig({
     projects: [
       {
         extends: true,
-        test: { name: 'unit', include: ['tests/shared/**/*.test.ts', 'tests/guards/**/*.test.ts'] },
+        test: {
+          name: 'unit',
+          testTimeout: 30_000,
+          include: ['tests/shared/**/*.test.ts', 'tests/src/**/*.test.ts', 'tests/guards/**/*.test.ts'],
+        },
       },
       {
         extends: true,

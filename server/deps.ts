@@ -14,7 +14,8 @@ export type RandomPurpose =
   | 'seat-token'
   | 'session-code'
   | 'publication-id'
-  | 'password-salt';
+  | 'password-salt'
+  | 'link-token';
 
 export type Random = {
   bytes(purpose: RandomPurpose, count: number): Buffer;

@@ -84,6 +84,15 @@ export const closedStudy: Free = {
   answerS: 45,
 };
 
+/** Closed as well: which of the two they prefer, with “no preference” on offer. */
+export const closedPreference: Free = {
+  ...closedStudy,
+  title: 'Study Sanderling',
+  question: 'Do listeners prefer one of the two 6 m runs in this room?',
+  method: 'paired-preference',
+  methodSettings: ['no-preference'],
+};
+
 /** Published: one listener at a time, so that the effect has an interval; one session was abandoned before its trials. */
 export const publishedStudy: Free = {
   ...closedStudy,

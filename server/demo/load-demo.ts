@@ -10,7 +10,14 @@ import { hashPassword } from '../features/users/passwords.ts';
 import { User } from '../features/users/user.entity.ts';
 import { Sittings } from '../live/sittings.ts';
 import { demoPeople } from './demo-people.ts';
-import { closedStudy, demoCables, demoOrganisation, publishedStudy, studyToRun } from './demo-scenario.ts';
+import {
+  closedPreference,
+  closedStudy,
+  demoCables,
+  demoOrganisation,
+  publishedStudy,
+  studyToRun,
+} from './demo-scenario.ts';
 import { forgetDemo } from './forget-demo.ts';
 import { HandClock } from './hand-clock.ts';
 import { type People, prepareStudy } from './prepare-study.ts';
@@ -48,7 +55,7 @@ async function makeCables(deps: Deps, organisationId: string): Promise<StudyDraf
 }
 
 /** Simulated listeners: each hears the difference in some trials and guesses in the others; one answer stays out. */
-const hearing: Hearing = (codes, seat, trial) => {
+const matching: Hearing = (codes, seat, trial) => {
   if (seat === 1 && trial === 11) return null;
   const [a, , x] = codes;
   const hears = Math.random() < ([0.6, 0.35, 0.5][seat] ?? 0);
@@ -56,7 +63,22 @@ const hearing: Hearing = (codes, seat, trial) => {
   return Math.random() < 0.5 ? 'A' : 'B';
 };
 
-async function runClosedStudy(deps: Deps, clock: HandClock, organisationId: string, people: People, draft: StudyDraft) {
+/** Simulated listeners in a pair: one leans to one code, one hardly does, and one often has no preference. */
+const preference: Hearing = ([one = '', other = ''], seat, trial) => {
+  if (seat === 0 && trial === 4) return null;
+  if (Math.random() < ([0.05, 0.15, 0.5][seat] ?? 0)) return 'none';
+  const leans = Math.random() < ([0.9, 0.65, 0.6][seat] ?? 0.5);
+  return leans === one < other ? 'first' : 'second';
+};
+
+async function runClosedStudy(
+  deps: Deps,
+  clock: HandClock,
+  organisationId: string,
+  people: People,
+  draft: StudyDraft,
+  hearing: Hearing,
+) {
   const { where, sessionId } = await prepareStudy(deps, organisationId, people, draft);
   clock.advance(3_600_000);
   const sittings = new Sittings(deps);
@@ -66,7 +88,7 @@ async function runClosedStudy(deps: Deps, clock: HandClock, organisationId: stri
   let trial = 0;
   while (session.trialsLeft) {
     trial += 1;
-    const fault = trial === 6 ? { reason: 'noise' as const, note: 'A door slammed during X.' } : undefined;
+    const fault = trial === 6 ? { reason: 'noise' as const, note: 'A door slammed while it played.' } : undefined;
     await session.trial(hearing, fault);
   }
   await session.finish();
@@ -76,9 +98,9 @@ async function runClosedStudy(deps: Deps, clock: HandClock, organisationId: stri
 }
 
 /**
- * Makes the demo once: an organisation, its people and cables, a study that is published, one that is closed and one ready
- * to run, all through the program's own services, so that their records verify. The last is made last: a demo without it
- * was cut short, and is made anew.
+ * Makes the demo once: an organisation, its people and cables, a study that is published, one closed for each method and
+ * one ready to run, all through the program's own services, so that their records verify. The last is made last: a demo
+ * without it was cut short, and is made anew.
  */
 export async function loadDemo(deps: Deps): Promise<void> {
   const existing = await deps.db.manager.findOneBy(Organisation, { demo: true });
@@ -95,6 +117,9 @@ export async function loadDemo(deps: Deps): Promise<void> {
   const codeHolderId = people.codeHolder;
   await runPublishedStudy(past, clock, organisationId, people, { ...publishedStudy, cables, codeHolderId });
   clock.advance(deps.clock.now() - 3 * dayMs - clock.now());
-  await runClosedStudy(past, clock, organisationId, people, { ...closedStudy, cables, codeHolderId });
+  await runClosedStudy(past, clock, organisationId, people, { ...closedStudy, cables, codeHolderId }, matching);
+  clock.advance(3_600_000);
+  const preferred = { ...closedPreference, cables, codeHolderId };
+  await runClosedStudy(past, clock, organisationId, people, preferred, preference);
   await prepareStudy(deps, organisationId, people, { ...studyToRun, cables, codeHolderId });
 }

@@ -15,7 +15,7 @@ type Command = ProctorCommand extends infer C ? (C extends ProctorCommand ? Omit
 type Phone = { seat: string; secret: string; view: ListenerView | null };
 
 /** What one simulated listener answers, from the codes that were fitted for each presentation and from chance. */
-export type Hearing = (codes: readonly string[], seat: number, trial: number) => 'A' | 'B' | null;
+export type Hearing = (codes: readonly string[], seat: number, trial: number) => string | null;
 
 /** A whole session run through the program's own services: a proctor at the console and phones in the room. */
 export class SimulatedSession {

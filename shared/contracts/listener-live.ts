@@ -51,6 +51,8 @@ export type LockReceipt = z.output<typeof lockReceipt>;
 export const listenerView = z.strictObject({
   audience: z.literal('listener'),
   title: z.string(),
+  /** A run with invented codes, on no record. */
+  rehearsal: z.boolean(),
   session: z.int(),
   /** The session's id, part of what an answer's leaf is made of. */
   sessionId: z.string(),
@@ -70,8 +72,10 @@ export const listenerView = z.strictObject({
       familiarisation: z.boolean(),
       takesPart: z.boolean(),
       stage: z.enum(['change', 'listening', 'answering']),
-      /** What is heard now (A, B, X ...), or comes next during a change. */
+      /** What is heard now (A, B, X, first ...), or comes next during a change. */
       presentation: z.string(),
+      /** The same in a sentence: "A", "the first". */
+      spoken: z.string(),
       presentationNumber: z.int(),
       presentations: z.int(),
       endsAt: z.nullable(time),
@@ -80,7 +84,17 @@ export const listenerView = z.strictObject({
   ),
   question: z.strictObject({
     text: z.string(),
-    options: z.array(z.strictObject({ value: z.string(), letter: z.string(), sentence: z.string() })),
+    /** Said during the last presentation: what is asked next. */
+    announcement: z.string(),
+    options: z.array(
+      z.strictObject({
+        value: z.string(),
+        letter: z.optional(z.string()),
+        sentence: z.string(),
+        /** How the answer is named on a button: "A", "the first". */
+        short: z.string(),
+      }),
+    ),
     confidence: z.boolean(),
   }),
   lastLock: z.nullable(lockReceipt),

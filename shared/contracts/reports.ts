@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { finding } from '../findings/finding.ts';
-import { registeredResult } from '../findings/registered-result.ts';
+import { registeredResult } from '../methods/methods.ts';
 import { endpoint } from './endpoint.ts';
 import { organisationParams, thingParams } from './organisation-params.ts';
 import { listQuery, pageOf } from './paging.ts';
@@ -50,7 +50,8 @@ export const report = z.strictObject({
       startedAt: z.iso.datetime().nullable(),
       endedAt: z.iso.datetime().nullable(),
       listeners: z.int(),
-      labelA: z.string().nullable(),
+      /** The session's draw in words: which cable bore which label; null when nothing was presented. */
+      drawn: z.string().nullable(),
       reason: z.string().nullable(),
       trials: z.array(
         z.strictObject({

@@ -1,7 +1,8 @@
 import { z } from 'zod';
+import { methodIds, methods } from '../methods/methods.ts';
 import { endpoint, managers } from './endpoint.ts';
 import { organisationParams, thingParams } from './organisation-params.ts';
-import { listQuery, pageOf } from './paging.ts';
+import { listQuery, pageOf, sortBy } from './paging.ts';
 
 export const studyStates = ['draft', 'sealed', 'collecting', 'closed', 'published', 'shelved'] as const;
 export type StudyState = (typeof studyStates)[number];
@@ -40,7 +41,9 @@ export const studyDraft = z
   .strictObject({
     title: line(80).min(3, 'At least 3 characters'),
     question: line(400).min(3, 'Write the question in a sentence'),
-    method: z.enum(['abx']),
+    method: z.enum(methodIds),
+    /** The settings of the method that are on; left out where there are none. */
+    methodSettings: z.array(z.string().max(40)).max(10).optional(),
     cables: z.tuple([chosenCable, chosenCable]),
     sessions: whole(1, 20, 'sessions'),
     listenersPerSession: whole(1, 24, 'listeners'),
@@ -64,6 +67,17 @@ export const studyDraft = z
         path: ['cables', 1, 'cableId'],
         message: 'Choose two different cables',
       });
+    const { method, methodSettings = [] } = check.value;
+    const known = methods[method].settings.map(({ id }) => id);
+    const isSound =
+      methodSettings.every((id) => known.includes(id)) && new Set(methodSettings).size === methodSettings.length;
+    if (!isSound)
+      check.issues.push({
+        code: 'custom',
+        input: methodSettings,
+        path: ['methodSettings'],
+        message: `Choose among the settings of ${methods[method].name}, each once`,
+      });
   });
 export type StudyDraft = z.output<typeof studyDraft>;
 
@@ -71,6 +85,8 @@ export const studyProgress = z.strictObject({
   sessionsPlanned: z.int(),
   sessionsOpened: z.int(),
   sessionsEnded: z.int(),
+  /** Registered sessions that are not planned yet; an abandoned one leaves its place. */
+  sessionsToPlan: z.int(),
   trialsLocked: z.int(),
   trialsRegistered: z.int(),
 });
@@ -85,7 +101,7 @@ export const sealedProtocol = z.strictObject({
 const rowShape = {
   id: z.uuid(),
   title: z.string(),
-  method: z.enum(['abx']),
+  method: z.enum(methodIds),
   state: z.enum(studyStates),
   updatedAt: z.iso.datetime(),
 };
@@ -110,6 +126,12 @@ export type Study = z.output<typeof study>;
 
 const base = '/organisations/:organisationId/studies';
 
+const studyListQuery = listQuery.extend({
+  state: z.enum(['any', ...studyStates]).default('any'),
+  sort: sortBy(['title', 'state', 'updatedAt'], '-updatedAt'),
+});
+export type StudyListQuery = z.output<typeof studyListQuery>;
+
 export const studiesApi = {
   list: endpoint({
     method: 'GET',
@@ -117,7 +139,7 @@ export const studiesApi = {
     summary: 'Studies, newest change first',
     access: managers,
     params: organisationParams,
-    query: listQuery.extend({ state: z.enum(['any', ...studyStates]).default('any') }),
+    query: studyListQuery,
     reply: pageOf(studyRow),
   }),
   get: endpoint({

@@ -1,7 +1,8 @@
 import { binomialLogProbability } from '../statistics/binomial-log-probability.ts';
 import { evenChance } from '../statistics/chance.ts';
 import { sharedPresentationTest } from '../statistics/shared-presentation-test.ts';
-import { type AbxTrial, hasOwnDraws, sharedTrialsOf } from './abx-trials.ts';
+import { type AbxTrial, sharedTrialsOf } from './abx-trials.ts';
+import { hasOwnDraws } from './own-draws.ts';
 
 /**
  * Where the number of right answers falls if nobody hears a difference: the distribution behind the registered p, for

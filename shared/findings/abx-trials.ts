@@ -15,18 +15,6 @@ export interface AbxTrial {
 }
 
 /**
- * Whether every answer has a draw of its own: at most one seat in every trial of every session. Seats count, not
- * answers, so that the choice of the test does not depend on who happened to answer.
- *
- * @param trials all locked trials
- * @returns true for one listener at a time
- * @example hasOwnDraws([]) // true
- */
-export function hasOwnDraws(trials: readonly AbxTrial[]): boolean {
-  return trials.every(({ answers }) => answers.length <= 1);
-}
-
-/**
  * ABX trials as the shared-presentation test reads them.
  *
  * A missing answer is wrong whichever label is drawn: it goes into the number of answers and into neither label's count.
@@ -41,23 +29,4 @@ export function sharedTrialsOf(trials: readonly AbxTrial[]): SharedTrial[] {
     const of = (choice: 'A' | 'B' | null) => answers.filter((answer) => answer.choice === choice).length;
     return { counts: [of('A'), of('B')], truth: truth === 'A' ? 0 : 1, missing: of(null) };
   });
-}
-
-/**
- * Refuses trials that cannot be right: the same trial twice, or the same listener twice in one trial.
- *
- * @param trials all locked trials
- * @throws RangeError naming the first trial at fault
- * @example requireDistinct([]) // nothing to refuse
- */
-export function requireDistinct(trials: readonly AbxTrial[]): void {
-  const seen = new Set<string>();
-  for (const { session, trial, answers } of trials) {
-    const name = `session ${session}, trial ${trial}`;
-    if (seen.has(name)) throw new RangeError(`${name} comes twice`);
-    seen.add(name);
-    if (new Set(answers.map(({ listener }) => listener)).size < answers.length) {
-      throw new RangeError(`${name} has two answers of one listener`);
-    }
-  }
 }

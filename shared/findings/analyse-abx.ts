@@ -5,11 +5,12 @@ import { requireBetween, requireWhole } from '../statistics/domain.ts';
 import { exactBinomialUpperTail } from '../statistics/exact-binomial.ts';
 import { compareFractions, type Fraction, fractionToNumber, reduceFraction } from '../statistics/fraction.ts';
 import { type SharedPresentationTest, sharedPresentationTest } from '../statistics/shared-presentation-test.ts';
-import { type AbxTrial, hasOwnDraws, requireDistinct, sharedTrialsOf } from './abx-trials.ts';
+import type { AbxResult } from './abx-result.ts';
+import { type AbxTrial, sharedTrialsOf } from './abx-trials.ts';
 import { listenerResults } from './listener-results.ts';
+import { hasOwnDraws, requireDistinct } from './own-draws.ts';
 import { pooledEstimatesOf } from './pooled-estimates-of.ts';
 import { recordDecimal, recordDecimalOfFraction } from './record-decimal.ts';
-import type { RegisteredResult } from './registered-result.ts';
 
 export interface AbxData {
   /** The registered one-sided level as a decimal, strictly between 0 and 1: "0.05". */
@@ -38,7 +39,7 @@ const suspectTail: Fraction = { numerator: 1n, denominator: 100n };
  *   ; R: binom.test(12, 16, alternative = "greater")
  * @see binomialTest and sharedPresentationTest for the tests and their sources
  */
-export function analyseAbx({ alpha, listenersPerSession, trials }: AbxData): RegisteredResult {
+export function analyseAbx({ alpha, listenersPerSession, trials }: AbxData): AbxResult {
   const level = parseDecimal(alpha);
   requireBetween('alpha', fractionToNumber(level), 0, 1, 'open');
   requireWhole('listenersPerSession', listenersPerSession, 1, 1000);
@@ -83,11 +84,11 @@ export function analyseAbx({ alpha, listenersPerSession, trials }: AbxData): Reg
 }
 
 interface Test {
-  readonly name: RegisteredResult['test'];
+  readonly name: AbxResult['test'];
   readonly p: Fraction;
   readonly coins: number;
   readonly least: Fraction;
-  readonly critical: RegisteredResult['critical'];
+  readonly critical: AbxResult['critical'];
 }
 
 function binomialOf({ matching, answers }: SharedPresentationTest, level: Fraction): Test {

@@ -2,10 +2,10 @@ import { evenChance } from '../statistics/chance.ts';
 import { exactBinomialUpperTail } from '../statistics/exact-binomial.ts';
 import { type Fraction, fractionToNumber } from '../statistics/fraction.ts';
 import { holm } from '../statistics/holm.ts';
+import type { ListenerResult } from './abx-result.ts';
 import type { AbxTrial } from './abx-trials.ts';
 import { intervalWithMissing } from './interval-with-missing.ts';
 import { recordDecimal } from './record-decimal.ts';
-import type { ListenerResult } from './registered-result.ts';
 
 /**
  * Each listener's own result, in the order of their labels.

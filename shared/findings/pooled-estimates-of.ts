@@ -2,9 +2,9 @@ import { aboveGuessingRate, intervalAboveGuessing } from '../statistics/above-gu
 import { evenChance } from '../statistics/chance.ts';
 import { clopperPearsonLower, clopperPearsonUpper, type Interval } from '../statistics/clopper-pearson.ts';
 import { type AbxModel, abxDPrime, abxDPrimeInterval } from '../statistics/d-prime.ts';
+import type { PooledEstimates } from './abx-result.ts';
 import { limitsWithMissing, recordInterval } from './interval-with-missing.ts';
 import { recordDecimal, recordLimit } from './record-decimal.ts';
-import type { PooledEstimates } from './registered-result.ts';
 
 /** What the registered test leaves open is stated with this confidence, whatever its level. */
 const upperConfidence = 0.95;

@@ -1,5 +1,5 @@
 import { differentFigure } from '../findings/different-figure.ts';
-import { countedTrials } from '../session/counted-trials.ts';
+import { runRegistered } from '../methods/run-registered.ts';
 import { canonicalJson, type Json } from './canonical-json.ts';
 import type { StudyReading } from './study-reading.ts';
 import type { Verdict } from './verify.ts';
@@ -10,11 +10,7 @@ export function checkFigures(study: StudyReading): Verdict {
   if (recorded === undefined) return { faults: ['No result is on the record.'], held: '' };
   if (canonicalJson(study.parts.result as Json) !== canonicalJson(recorded))
     return { faults: ['The result is not the one on the record.'], held: '' };
-  const protocol = study.protocol();
-  const { alpha } = protocol.analysis;
-  const { listenersPerSession } = protocol.design;
-  const trials = countedTrials(study.method(), study.sessions(), study.secrets(), study.answers());
-  const recomputed = study.method().analyse({ alpha, listenersPerSession }, trials);
+  const recomputed = runRegistered(study.protocol(), study.sessions(), study.secrets(), study.answers());
   const place = differentFigure(recorded, recomputed as unknown as Json);
   return {
     faults: place === null ? [] : [`Recomputed, ${place} differs from the result on the record.`],

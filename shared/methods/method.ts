@@ -1,4 +1,8 @@
-import type { RegisteredResult } from '../findings/registered-result.ts';
+import type { Finding, FindingContext } from '../findings/finding.ts';
+import type { ResultFrame } from '../findings/result-frame.ts';
+import type { RegisteredAnalysis } from '../protocol/registered-analysis.ts';
+import type { RegisteredResult } from './methods.ts';
+import type { Portrait } from './portrait.ts';
 
 /** One answered or missing question as a registered test reads it. `choice` is null for a missing answer. */
 export type ScoredAnswer = { readonly listener: string; readonly choice: string | null };
@@ -9,36 +13,117 @@ export type ScoredTrial = {
   readonly answers: readonly ScoredAnswer[];
 };
 
+/** One of the protocol's two cables, in its order. */
+export type CablePlace = 0 | 1;
+export type CableNames = readonly [string, string];
+
+/** Something about the method that a study fixes with a yes or a no; the protocol lists those that are on. */
+export type MethodSetting = { readonly id: string; readonly label: string; readonly hint: string };
+
+export type AnswerOption = {
+  /** What stands in the record. */
+  readonly value: string;
+  /** A large sign before the sentence, where the listener knows one. */
+  readonly letter?: string;
+  readonly sentence: string;
+  /** How the answer is named on a button and in a sentence: "A", "the first". */
+  readonly short: string;
+};
+
+/** What the planner says in the method's words; figures are put in by the planner. */
+export type PlanWords = {
+  /** "12 right" */
+  needed(count: number): string;
+  /** What follows the number needed and its verb: "are needed. If nobody hears a difference," */
+  readonly underNull: string;
+  /** What such a test finds: "a difference". */
+  readonly found: string;
+  /** "right", after a percentage: at that rate the test is asked for its power. */
+  readonly atRate: string;
+  /** The counted answers: "right answers". */
+  readonly counted: string;
+  /** Of one trial, under guessing, before the percentage. */
+  readonly guessing: string;
+  /** Even the most extreme count is out of reach: "even with every answer right". */
+  readonly extreme: string;
+  /** Before the percentage of a small effect that is easily missed. */
+  readonly smallEffect: string;
+  /** What a result that found nothing does not show. */
+  readonly notShown: string;
+  /** What the method's settings do to the plan. */
+  caution(settings: readonly string[]): string | null;
+};
+
+/** How the trials of a session stand in a report. */
+export type TrialWords = {
+  /** Said once above every session. */
+  readonly legend: string;
+  /** The draw of a session in words, once it is open: "A was ..., B was ...". */
+  session(firstSide: CablePlace, cables: CableNames): string;
+  readonly drawnHeader: string;
+  drawn(truth: string, cables: CableNames): string;
+  answeredHeader(option: AnswerOption): string;
+  /** Whether an answer is right; null for a method without right answers. */
+  readonly isRight: ((choice: string, truth: string) => boolean) | null;
+  countHeader(cables: CableNames): string;
+  count(answers: readonly ScoredAnswer[], truth: string): string;
+};
+
 /**
  * A method of comparison: one module each, all of this shape. The live session, the phone, the planner and the
  * report ask the module and know no method by name.
  */
-export type Method = {
+export type Method<R extends ResultFrame = RegisteredResult> = {
   readonly id: string;
   readonly name: string;
   /** What a listener is told the test is, in one or two sentences. */
   readonly explanation: string;
-  /** The labels of the two sides; which cable bears the first is drawn per session. */
-  readonly sides: readonly [string, string];
+  readonly settings: readonly MethodSetting[];
+
+  // How a trial is drawn and presented.
+
   /** What a trial's truth can be; drawn fairly and independently for every trial. */
   readonly truths: readonly string[];
   /** What each presentation is called, in order. */
   readonly presentations: readonly string[];
-  /** What the familiarisation trial presents, labelled. */
+  /** What the familiarisation trial presents. */
   readonly familiarisation: readonly string[];
-  /** Which side is fitted for a presentation of a trial with that truth. */
-  fittedSide(presentation: string, truth: string): string;
+  /**
+   * Which of the protocol's cables is fitted for a presentation. `truth` is the trial's, null in the familiarisation
+   * trial; `firstSide` is drawn once per session, 0 or 1 with equal chance.
+   */
+  fitted(presentation: string, truth: string | null, firstSide: CablePlace): CablePlace;
+  /** What whoever fits the cables could still learn from their codes: a sentence for the blinding rung. */
+  readonly fitterCouldSee: string;
+
+  // What the listener is asked.
+
+  /** A presentation in a sentence: "You are hearing ...". */
+  spoken(presentation: string): string;
   readonly question: string;
-  readonly options: readonly { readonly value: string; readonly letter: string; readonly sentence: string }[];
-  isRight(choice: string, truth: string): boolean;
-  /** Chance of a right answer when nothing is heard, as a fraction. */
+  /** Said during the last presentation. */
+  readonly announcement: string;
+  options(settings: readonly string[]): readonly AnswerOption[];
+
+  // How answers are scored.
+
+  /** The part of the registered analysis that the method fixes. */
+  registered(settings: readonly string[]): Pick<RegisteredAnalysis, 'name' | 'alternative' | 'missing' | 'undecided'>;
+  /** Chance of an answer on the counted side when nothing is heard, as a fraction. */
   readonly chance: { readonly numerator: number; readonly denominator: number };
-  /** The registered analysis: a pure function of the counted trials. `alpha` is a decimal text such as '0.05'. */
+  /** The registered analysis: a pure function of the sealed value and the counted trials. */
   analyse(
-    plan: { readonly alpha: string; readonly listenersPerSession: number },
+    plan: { readonly analysis: RegisteredAnalysis; readonly listenersPerSession: number },
     trials: readonly ScoredTrial[],
-  ): RegisteredResult;
+  ): R;
   /** Where the registered count falls when nothing is heard: the test's own distribution. */
   nullDistribution(trials: readonly ScoredTrial[]): { count: number; chance: number }[];
+  finding(result: R, context: FindingContext): Finding;
+
+  // How it is told.
+
+  readonly plan: PlanWords;
+  readonly trials: TrialWords;
+  portray(result: R, cables: CableNames): Portrait;
   readonly source: string;
 };

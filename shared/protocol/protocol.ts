@@ -5,6 +5,7 @@ import { canonicalJson } from '../ledger/canonical-json.ts';
 import { digest } from '../ledger/digest.ts';
 import { methodOf } from '../methods/methods.ts';
 import type { SessionPlan } from '../session/events.ts';
+import { registeredAnalysis } from './registered-analysis.ts';
 
 const protocolCable = z.strictObject({
   id: z.uuid(),
@@ -33,6 +34,8 @@ export const protocol = z.strictObject({
     trials: z.int(),
     spares: z.int(),
     confidence: z.boolean(),
+    /** The settings of the method that are on; left out where there are none. */
+    methodSettings: z.array(z.string()).optional(),
     codeHolder: z.uuid(),
   }),
   conduct: z.strictObject({
@@ -43,20 +46,18 @@ export const protocol = z.strictObject({
     programme: z.array(z.strictObject({ title: z.string(), start: z.string(), lengthS: z.int() })),
   }),
   /** The registered analysis, as data: what is run once at closing. */
-  analysis: z.strictObject({
-    name: z.string(),
-    alpha: z.string(),
-    alternative: z.literal('greater'),
-    missing: z.literal('counted as wrong'),
-    stopping: z.literal('fixed number of trials'),
-    exclusions: z.literal('none'),
-  }),
+  analysis: registeredAnalysis,
 });
 export type Protocol = z.output<typeof protocol>;
 
 /** The significance level as decimal text: 50 per mille is '0.05'. */
 export function alphaText(perMille: number): string {
   return (perMille / 1000).toString();
+}
+
+/** Settings in one order, whatever the order in which they were ticked, and no field where there are none. */
+function onlyIfAny(settings: readonly string[] = []): { methodSettings?: string[] } {
+  return settings.length === 0 ? {} : { methodSettings: [...settings].sort() };
 }
 
 /** The protocol that a draft comes to, with its cables spelt out as they are now. */
@@ -79,6 +80,7 @@ export function protocolFromDraft(
       trials: draft.trials,
       spares: draft.spares,
       confidence: draft.confidence,
+      ...onlyIfAny(draft.methodSettings),
       codeHolder: draft.codeHolderId,
     },
     conduct: {
@@ -89,10 +91,8 @@ export function protocolFromDraft(
       programme: draft.programme.map(({ title, start, lengthS }) => ({ title, start, lengthS })),
     },
     analysis: {
-      name: `${methodOf(draft.method).id}/1`,
+      ...methodOf(draft.method).registered(draft.methodSettings ?? []),
       alpha: alphaText(draft.alphaPerMille),
-      alternative: 'greater',
-      missing: 'counted as wrong',
       stopping: 'fixed number of trials',
       exclusions: 'none',
     },
@@ -108,6 +108,7 @@ export function protocolDigest(value: Protocol): string {
 export function sessionPlanOf({ method, design, conduct }: Protocol): SessionPlan {
   return {
     method,
+    ...onlyIfAny(design.methodSettings),
     trials: design.trials,
     spares: design.spares,
     rig: conduct.rig,

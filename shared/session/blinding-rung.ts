@@ -1,5 +1,5 @@
 import type { Entry } from '../ledger/chain.ts';
-import { methodOf } from '../methods/methods.ts';
+import type { Method } from '../methods/method.ts';
 import type { SessionState } from './state.ts';
 import { studyEvents } from './study-events.ts';
 
@@ -35,26 +35,21 @@ function keyHoldersOf(entries: readonly Entry[], codeHolder: string): Set<string
   ]);
 }
 
-/** With more presentations than cables one cable is fitted twice, and whoever fits it sees which. */
-function inference(sessions: readonly SessionState[]): string {
-  const plan = sessions[0]?.plan;
-  if (plan === undefined) return '';
-  const { presentations, sides } = methodOf(plan.method);
-  const unnamed = presentations.find((presentation) => !sides.includes(presentation));
-  if (presentations.length <= sides.length || unnamed === undefined) return '';
-  return ` Whoever fits ${unnamed} could still see whether its code is that of ${sides[0]}.`;
-}
-
 /**
  * How blind a closed study was, derived from its record and never ticked in a box.
  *
  * *Open* when the record itself shows that something was not sealed in time: nothing of it may be published. A doubled
- * duty, or a proctor who could see the code key or the cables' pages, caps it at *listener-blind*. A method that fits one
- * cable twice in a trial reaches *double-blind to the cable* at most.
+ * duty, or a proctor who could see the code key or the cables' pages, caps it at *listener-blind*. A cable that is fitted
+ * under one code all through a session reaches *double-blind to the cable* at most: whoever fits it learns something from
+ * the codes, and the method says what.
  *
  * @throws RangeError when the record has no closing
  */
-export function blindingRung(entries: readonly Entry[], sessions: readonly SessionState[]): BlindingRung {
+export function blindingRung(
+  entries: readonly Entry[],
+  sessions: readonly SessionState[],
+  method: Pick<Method, 'fitterCouldSee'>,
+): BlindingRung {
   const closing = entries.find((entry) => entry.kind === 'study-closed');
   if (closing === undefined) throw new RangeError('the blinding rung is derived once the study is closed');
   const open = whyOpen(entries);
@@ -70,6 +65,6 @@ export function blindingRung(entries: readonly Entry[], sessions: readonly Sessi
     return { name: 'listener-blind', why: 'The code holder also managed the study or owns the organisation.' };
   return {
     name: 'double-blind to the cable',
-    why: `The proctor never saw code key or cable pages.${inference(sessions)} No observer was recorded.`,
+    why: `The proctor never saw code key or cable pages. ${method.fitterCouldSee} No observer was recorded.`,
   };
 }

@@ -37,9 +37,9 @@ export function fairNumber(seed: string, label: string, below: number): number {
   }
 }
 
-/** What a session's draw fixes: which cable bears the first side's label, which specimens are used, what every trial's truth is. */
+/** What a session's draw fixes: which cable has the method's first side, which specimens are used, what every trial's truth is. */
 export type Draw = {
-  /** 0: the protocol's first cable bears the method's first label; 1: its second cable does. */
+  /** The protocol's cable that has the method's first side: A, or what familiarisation presents first. */
   readonly firstSide: 0 | 1;
   /** For each of the protocol's two cables the place of the specimen used, from 0. */
   readonly specimens: readonly [number, number];
@@ -64,10 +64,4 @@ export function drawSession(seed: string, method: Pick<Method, 'truths'>, shape:
     ],
     truths,
   };
-}
-
-/** Which of the protocol's two cables, 0 or 1, bears a side's label in this session. */
-export function cableOfSide(draw: Draw, method: Pick<Method, 'sides'>, side: string): 0 | 1 {
-  const isFirst = side === method.sides[0];
-  return isFirst === (draw.firstSide === 0) ? 0 : 1;
 }

@@ -11,6 +11,7 @@ const trial = z.int().min(0);
 /** What a session takes from the sealed protocol; times in milliseconds. Trial 0 is the familiarisation trial. */
 export const sessionPlan = z.strictObject({
   method: z.string(),
+  methodSettings: z.array(z.string()).optional(),
   trials: z.int(),
   spares: z.int(),
   rig: z.enum(['loudspeaker', 'line', 'headphone']),

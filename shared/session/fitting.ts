@@ -1,6 +1,6 @@
 import type { Method } from '../methods/method.ts';
 import type { CodeKeyRow } from './commitments.ts';
-import { cableOfSide, type Draw, drawSeed, drawSession } from './draw.ts';
+import { type Draw, drawSeed, drawSession } from './draw.ts';
 
 export type DrawnSession = {
   readonly secret: string;
@@ -31,8 +31,7 @@ export function truthOf(draw: Draw, trial: number): string {
 export function codeFitted(question: DrawnSession & { readonly trial: number; readonly presentation: string }): string {
   const { method, rows, trial, presentation } = question;
   const draw = drawOf(question);
-  const side = trial === 0 ? presentation : method.fittedSide(presentation, truthOf(draw, trial));
-  const cable = cableOfSide(draw, method, side);
+  const cable = method.fitted(presentation, trial === 0 ? null : truthOf(draw, trial), draw.firstSide);
   const row = rowsOfCable(rows, cable)[draw.specimens[cable]];
   if (row === undefined) throw new RangeError('the code key has no such specimen');
   return row.code;

@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { confirmations } from '../contracts/publications.ts';
-import { registeredResult } from '../findings/registered-result.ts';
+import { registeredResult } from '../methods/methods.ts';
 
 // What the study itself puts on its record. The payload of `key-revealed` has a file of its own: revealed-key.ts.
 

@@ -8,6 +8,7 @@ import {
   nextStep,
   nextTrial,
   openAnswers,
+  optionsOf,
   presentationsOf,
   trialsInAll,
 } from './progress.ts';
@@ -32,6 +33,7 @@ function presentationAt(trial: OpenTrial, method: Method): string {
 
 export type ListenerContext = {
   readonly title: string;
+  readonly rehearsal: boolean;
   readonly seat: string;
   readonly now: number;
   readonly held: HeldAnswer | null;
@@ -47,6 +49,7 @@ export function listenerViewOf(state: SessionState, method: Method, context: Lis
   return {
     audience: 'listener',
     title,
+    rehearsal: context.rehearsal,
     session: state.session,
     sessionId: state.sessionId,
     seat,
@@ -67,6 +70,7 @@ export function listenerViewOf(state: SessionState, method: Method, context: Lis
             takesPart: trial.seats.includes(seat),
             stage: trial.stage,
             presentation: presentationAt(trial, method),
+            spoken: method.spoken(presentationAt(trial, method)),
             presentationNumber: trial.presentation + 1,
             presentations: presentationsOf(method, trial.trial).length,
             endsAt: state.paused === null ? trial.endsAt : null,
@@ -74,7 +78,13 @@ export function listenerViewOf(state: SessionState, method: Method, context: Lis
           },
     question: {
       text: method.question,
-      options: method.options.map(({ value, letter, sentence }) => ({ value, letter, sentence })),
+      announcement: method.announcement,
+      options: optionsOf(state, method).map(({ value, letter, sentence, short }) => ({
+        value,
+        letter,
+        sentence,
+        short,
+      })),
       confidence: state.plan.confidence,
     },
     lastLock,
@@ -101,6 +111,7 @@ export type ProctorContext = {
   readonly presence: readonly Presence[];
   readonly entries: number;
   readonly demo: boolean;
+  readonly rehearsal: boolean;
 };
 
 function seatsFor(state: SessionState, presence: readonly Presence[]): ProctorView['seats'] {
@@ -172,5 +183,6 @@ export function proctorViewOf(state: SessionState, method: Method, context: Proc
     seats: seatsFor(state, context.presence),
     record: { entries: context.entries, sessionEntries: state.version },
     demo: context.demo,
+    rehearsal: context.rehearsal,
   };
 }

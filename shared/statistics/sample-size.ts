@@ -45,6 +45,24 @@ export interface SampleSize {
  *   Chernick & Liu, "The saw-toothed behavior of power versus sample size", American Statistician 56 (2002), 149-155
  */
 export function sampleSize(question: SampleSizeQuestion): SampleSize {
+  const { correctRate } = question;
+  return searchSampleSize(question, (critical, trials) =>
+    Math.exp(logTailFrom(critical, trials, correctRate, 1 - correctRate)),
+  );
+}
+
+/**
+ * The search behind sampleSize, for a test that reaches its level at the critical count of `alpha` on one side.
+ *
+ * @param question as for sampleSize
+ * @param powerAt  the test's power with that critical count and number of trials, at least that of the one side
+ * @returns as sampleSize
+ * @throws RangeError when an argument is outside its domain
+ */
+export function searchSampleSize(
+  question: SampleSizeQuestion,
+  powerAt: (critical: number, trials: number) => number,
+): SampleSize {
   const { chance, alpha, correctRate, targetPower, limit } = question;
   const { right } = chanceAsNumbers(chance);
   requireBetween('alpha', alpha, 0, 1, 'open');
@@ -62,7 +80,7 @@ export function sampleSize(question: SampleSizeQuestion): SampleSize {
   for (let trials = 1; trials <= searchTo; trials++) {
     // One trial more never lowers the critical count and raises it by at most one.
     if (!isUpperTailAtMost(critical, trials, chance, alpha)) critical++;
-    const power = Math.exp(logTailFrom(critical, trials, correctRate, 1 - correctRate));
+    const power = powerAt(critical, trials);
     if (power < targetPower) safe = null;
     else {
       first ??= { trials, power };

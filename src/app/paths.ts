@@ -5,6 +5,13 @@ export const paths = {
   signIn: (next?: string) => (next === undefined ? '/sign-in' : `/sign-in?${new URLSearchParams({ next })}`),
   help: () => '/help',
   kit: () => '/kit',
+  account: () => '/account',
+  invitation: () => '/invitation',
+  firstOwner: () => '/first-owner',
+  forgottenPassword: () => '/forgotten-password',
+  newPassword: () => '/new-password',
+  mailbox: () => '/mailbox',
+  mailboxMail: (id: string) => `/mailbox/${id}`,
 
   /** Public: what is published, for anybody. */
   publications: () => '/p',
@@ -26,6 +33,10 @@ export const paths = {
   report: (organisationId: string, studyId: string) => `${organisation(organisationId)}/studies/${studyId}/report`,
   publish: (organisationId: string, studyId: string) => `${organisation(organisationId)}/studies/${studyId}/publish`,
   reports: (organisationId: string) => `${organisation(organisationId)}/reports`,
+
+  people: (organisationId: string) => `${organisation(organisationId)}/people`,
+  invitations: (organisationId: string) => `${organisation(organisationId)}/people/invitations`,
+  mail: (organisationId: string) => `${organisation(organisationId)}/mail`,
 
   sessions: (organisationId: string) => `${organisation(organisationId)}/sessions`,
   planSession: (organisationId: string, studyId: string) =>

@@ -30,6 +30,9 @@ const organisationPages: RouteObject[] = [
   { path: paths.reports(organisationId), lazy: () => import('../pages/reports-page.tsx') },
   { path: paths.sessions(organisationId), lazy: () => import('../pages/sessions-page.tsx') },
   { path: paths.planSession(organisationId, id), lazy: () => import('../pages/session-plan-page.tsx') },
+  { path: paths.people(organisationId), lazy: () => import('../pages/people-page.tsx') },
+  { path: paths.invitations(organisationId), lazy: () => import('../pages/invitations-page.tsx') },
+  { path: paths.mail(organisationId), lazy: () => import('../pages/mail-page.tsx') },
   { path: `${paths.home(organisationId)}/*`, Component: NotFoundPage },
 ];
 
@@ -39,6 +42,13 @@ const plainPages: RouteObject[] = [
   { path: paths.start(), lazy: () => import('../pages/start-page.tsx') },
   { path: paths.publications(), lazy: () => import('../pages/publications-page.tsx') },
   { path: paths.publication(id), lazy: () => import('../pages/publication-page.tsx') },
+  { path: paths.account(), lazy: () => import('../pages/account-page.tsx') },
+  { path: paths.invitation(), lazy: () => import('../pages/invitation-page.tsx') },
+  { path: paths.firstOwner(), lazy: () => import('../pages/first-owner-page.tsx') },
+  { path: paths.forgottenPassword(), lazy: () => import('../pages/forgotten-password-page.tsx') },
+  { path: paths.newPassword(), lazy: () => import('../pages/new-password-page.tsx') },
+  { path: paths.mailbox(), lazy: () => import('../pages/mailbox-page.tsx') },
+  { path: paths.mailboxMail(id), lazy: () => import('../pages/mailbox-mail-page.tsx') },
   { path: paths.help(), lazy: () => import('../pages/help-page.tsx') },
   { path: '*', Component: NotFoundPage },
 ];

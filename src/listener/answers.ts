@@ -1,4 +1,4 @@
-import type { Confidence, HeldAnswer } from '#shared/contracts/listener-live.ts';
+import type { Confidence, HeldAnswer, ListenerView } from '#shared/contracts/listener-live.ts';
 import { answerLeaf } from '#shared/session/answer-leaf.ts';
 
 /** A leaf that the record may carry for a trial; `isOwn` when this phone computed it from a salt of its own. */
@@ -78,6 +78,13 @@ export function isOwnLeaf(answer: OwnAnswer | null, lockedLeaf: string): boolean
   if (found === undefined) return false;
   return found.isOwn ? true : null;
 }
+
+/** How an answer is named in a sentence: "A", "the first". */
+export function shortOf({ options }: ListenerView['question'], choice: string): string {
+  return options.find(({ value }) => value === choice)?.short ?? choice;
+}
+
+export const capitalised = (words: string): string => `${words.charAt(0).toUpperCase()}${words.slice(1)}`;
 
 export function answerTo(answers: readonly OwnAnswer[], trial: number | undefined): OwnAnswer | null {
   return answers.find((answer) => answer.trial === trial) ?? null;

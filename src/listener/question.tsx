@@ -3,7 +3,7 @@ import { type Confidence, confidences, type ListenerView } from '#shared/contrac
 import { Button } from '../ui/button.tsx';
 import { OptionList } from '../ui/option-list.tsx';
 import { Segmented } from '../ui/segmented.tsx';
-import type { OwnAnswer } from './answers.ts';
+import { capitalised, type OwnAnswer, shortOf } from './answers.ts';
 
 type QuestionProps = {
   question: ListenerView['question'];
@@ -15,7 +15,7 @@ const sureness = confidences.map((value) => ({ value, label: `${value.charAt(0).
 const isConfidence = (value: string): value is Confidence => confidences.some((known) => known === value);
 
 /** Below this height the confidence has a step of its own; fixed when the question appears, so that nothing jumps. */
-const isLow = () => window.matchMedia('(max-height: 699px)').matches;
+const isLow = (options: number) => window.matchMedia(`(max-height: ${options > 2 ? 919 : 699}px)`).matches;
 
 const column = 'flex flex-1 flex-col gap-5 py-4 [@media(max-height:699px)]:gap-3 [@media(max-height:699px)]:py-2';
 
@@ -23,7 +23,7 @@ const column = 'flex flex-1 flex-col gap-5 py-4 [@media(max-height:699px)]:gap-3
 export function Question({ question, own, onSend }: QuestionProps) {
   const [choice, setChoice] = useState<string | null>(own?.choice ?? null);
   const [confidence, setConfidence] = useState<Confidence | null>(own?.confidence ?? null);
-  const [inTwoSteps] = useState(() => question.confidence && isLow());
+  const [inTwoSteps] = useState(() => question.confidence && isLow(question.options.length));
   const [step, setStep] = useState<'choice' | 'confidence'>('choice');
 
   const isReady = choice !== null && (!question.confidence || confidence !== null);
@@ -34,7 +34,7 @@ export function Question({ question, own, onSend }: QuestionProps) {
       disabled={!isReady}
       onClick={() => (choice === null ? undefined : onSend(choice, confidence))}
     >
-      {choice === null ? 'Choose one' : `Send ${choice}`}
+      {choice === null ? 'Choose one' : `Send ${shortOf(question, choice)}`}
     </Button>
   );
   const howSure = (
@@ -65,7 +65,7 @@ export function Question({ question, own, onSend }: QuestionProps) {
       </div>
       {inTwoSteps ? (
         <Button variant="primary" size="touch" disabled={choice === null} onClick={() => setStep('confidence')}>
-          {choice === null ? 'Choose one' : `${choice}, and how sure?`}
+          {choice === null ? 'Choose one' : `${capitalised(shortOf(question, choice))}, and how sure?`}
         </Button>
       ) : (
         <>

@@ -1,6 +1,6 @@
 import { useState } from 'react';
 import type { ListenerView } from '#shared/contracts/listener-live.ts';
-import { answerTo } from './answers.ts';
+import { answerTo, shortOf } from './answers.ts';
 import { Hearing } from './hearing.tsx';
 import { Question } from './question.tsx';
 import type { Seat, SeatSnapshot } from './seat.ts';
@@ -28,11 +28,11 @@ function saidBy(view: ListenerView, snapshot: SeatSnapshot, paused: ListenerView
   if (trial === null) return <Words {...waitingWords(view, snapshot)} />;
   if (!trial.takesPart)
     return <Words title="One moment" detail="This trial began without you. You take part from the next one on." />;
-  if (trial.stage === 'listening') return <Hearing trial={trial} />;
+  if (trial.stage === 'listening') return <Hearing trial={trial} announcement={view.question.announcement} />;
   return (
     <Words
       title="Rest your ears"
-      detail={`The next cable is being fitted. Then you hear ${trial.presentation}${trial.familiarisation ? ', to get to know it' : ''}.`}
+      detail={`The next cable is being fitted. Then you hear ${trial.spoken}${trial.familiarisation ? ', to get to know it' : ''}.`}
     />
   );
 }
@@ -43,7 +43,12 @@ function Answering({ view, snapshot, seat }: SeatNowProps) {
   if (own !== null && !isChanging)
     return (
       <div className="flex flex-1 flex-col" role="status">
-        <Sent key={own.revision} own={own} onChange={() => setChanging(true)} />
+        <Sent
+          key={own.revision}
+          own={own}
+          short={shortOf(view.question, own.choice)}
+          onChange={() => setChanging(true)}
+        />
       </div>
     );
   return (

@@ -1,6 +1,6 @@
 import { useEffect, useState } from 'react';
 import { Button } from '../ui/button.tsx';
-import type { OwnAnswer } from './answers.ts';
+import { capitalised, type OwnAnswer } from './answers.ts';
 import { Words } from './words.tsx';
 
 const clock = new Intl.DateTimeFormat('en-GB', { hour: '2-digit', minute: '2-digit', second: '2-digit' });
@@ -8,15 +8,18 @@ const clock = new Intl.DateTimeFormat('en-GB', { hour: '2-digit', minute: '2-dig
 /** A second tap of the finger that sent the answer is not a wish to change it. */
 const settleMs = 600;
 
-function wordsOf({ choice, state, heldAt, why }: OwnAnswer): { title: string; detail: string } {
+function wordsOf({ state, heldAt, why }: OwnAnswer, short: string): { title: string; detail: string } {
   switch (state) {
     case 'held':
       return {
-        title: `${choice}, held by the server`,
+        title: `${capitalised(short)}, held by the server`,
         detail: `${heldAt === null ? '' : `${clock.format(heldAt)} · `}you can still change it`,
       };
     case 'here':
-      return { title: `${choice}, still on this phone`, detail: 'It is sent by itself when the network is back.' };
+      return {
+        title: `${capitalised(short)}, still on this phone`,
+        detail: 'It is sent by itself when the network is back.',
+      };
     case 'late':
       return { title: 'Too late', detail: why ?? 'This answer is not counted.' };
     case 'refused':
@@ -24,8 +27,10 @@ function wordsOf({ choice, state, heldAt, why }: OwnAnswer): { title: string; de
   }
 }
 
+type SentProps = { own: OwnAnswer; short: string; onChange: () => void };
+
 /** What became of the answer, in plain words. */
-export function Sent({ own, onChange }: { own: OwnAnswer; onChange: () => void }) {
+export function Sent({ own, short, onChange }: SentProps) {
   const [isSettled, setSettled] = useState(false);
   useEffect(() => {
     const timer = setTimeout(() => setSettled(true), settleMs);
@@ -33,7 +38,7 @@ export function Sent({ own, onChange }: { own: OwnAnswer; onChange: () => void }
   }, []);
   return (
     <div className="flex flex-1 flex-col">
-      <Words {...wordsOf(own)}>{own.state === 'held' ? <p className="text-xl">Rest your ears.</p> : null}</Words>
+      <Words {...wordsOf(own, short)}>{own.state === 'held' ? <p className="text-xl">Rest your ears.</p> : null}</Words>
       {own.state === 'late' ? null : (
         <Button size="touch" className="mb-4" disabled={!isSettled} onClick={onChange}>
           Change the answer

@@ -1,5 +1,5 @@
 import type { ListenerView } from '#shared/contracts/listener-live.ts';
-import { answerTo } from './answers.ts';
+import { answerTo, capitalised, shortOf } from './answers.ts';
 import type { SeatSnapshot } from './seat.ts';
 
 type Said = { readonly title: string; readonly detail: string };
@@ -26,16 +26,13 @@ function beforeTheRun({ phase, seat, contributes }: ListenerView, hasContributio
 }
 
 /** What the end of a trial means to this listener; never whether an answer was right. */
-function afterTrial(
-  { trial, outcome, counted }: NonNullable<ListenerView['lastOutcome']>,
-  choice: string | null,
-): Said {
+function afterTrial({ trial, outcome, counted }: NonNullable<ListenerView['lastOutcome']>, short: string | null): Said {
   if (outcome === 'void')
     return { title: `Trial ${trial} was set aside`, detail: 'A spare takes its place. Rest your ears.' };
   const title = `Trial ${trial} is locked`;
   if (!counted)
     return { title, detail: 'No answer of yours is in it. Rest your ears; you take part in the next trial.' };
-  const answer = choice === null ? 'Your answer' : `Your answer, ${choice},`;
+  const answer = short === null ? 'Your answer' : `Your answer, ${short},`;
   return { title, detail: `${answer} is in the record. Rest your ears; the next trial follows.` };
 }
 
@@ -54,6 +51,9 @@ export function waitingWords(view: ListenerView, { answers, hasContribution }: S
   if (own?.state === 'late' && lastOutcome.outcome === 'locked')
     return { title: 'Too late', detail: own.why ?? 'This answer is not counted.' };
   if (own?.state === 'here')
-    return { title: `${own.choice}, still on this phone`, detail: 'It is sent as soon as the server can be reached.' };
-  return afterTrial(lastOutcome, own?.state === 'held' ? own.choice : null);
+    return {
+      title: `${capitalised(shortOf(view.question, own.choice))}, still on this phone`,
+      detail: 'It is sent as soon as the server can be reached.',
+    };
+  return afterTrial(lastOutcome, own?.state === 'held' ? shortOf(view.question, own.choice) : null);
 }

@@ -38,7 +38,9 @@ export function Component() {
           <dl className="space-y-3">
             <Term word="Neutral title">names a study without telling maker, model, material or price.</Term>
             <Term word="Blind code">is three figures on a specimen’s sleeve, drawn for one study.</Term>
-            <Term word="Trial">is one question to every listener present; in ABX: was X the same as A or as B?</Term>
+            <Term word="Trial">
+              is one question to every listener present; was X the same as A or as B, say, or which of two you prefer.
+            </Term>
             <Term word="Void">is a trial set aside for a stated fault before it locks; a spare takes its place.</Term>
             <Term word="Record">
               is every step of a study, each entry bound to the one before, so that none can be changed unseen.

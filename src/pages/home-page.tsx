@@ -1,6 +1,9 @@
 import { useQuery, useSuspenseQuery } from '@tanstack/react-query';
 import type { LoaderFunctionArgs } from 'react-router-dom';
+import { cablesApi } from '#shared/contracts/cables.ts';
 import type { Role } from '#shared/contracts/endpoint.ts';
+import { sessionsApi } from '#shared/contracts/sessions.ts';
+import { studiesApi } from '#shared/contracts/studies.ts';
 import { paths } from '../app/paths.ts';
 import { cableQueries } from '../features/cables/cables.queries.ts';
 import { DemoPath } from '../features/home/demo-path.tsx';
@@ -16,15 +19,19 @@ import { type Presence, presenceIn, usePresence } from '../features/sign-in/memb
 import { signInQueries } from '../features/sign-in/sign-in.queries.ts';
 import { SignInAs } from '../features/sign-in/sign-in-as.tsx';
 import { studyQueries } from '../features/studies/studies.queries.ts';
+import { readListQuery } from '../lib/list-address.ts';
 import { queryClient } from '../lib/query-client.ts';
 import { isManaging } from '../lib/role-words.ts';
 import { param } from '../lib/route-params.ts';
 import { PageHeader } from '../ui/page-header.tsx';
 
-const firstCables = (organisationId: string) => cableQueries.list(organisationId, { q: '', page: 1, archived: 'no' });
-const firstStudies = (organisationId: string) => studyQueries.list(organisationId, { q: '', page: 1, state: 'any' });
+const asUsual = new URLSearchParams();
+const firstCables = (organisationId: string) =>
+  cableQueries.list(organisationId, readListQuery(cablesApi.list, asUsual));
+const firstStudies = (organisationId: string) =>
+  studyQueries.list(organisationId, readListQuery(studiesApi.list, asUsual));
 const latestSessions = (organisationId: string) =>
-  sessionQueries.list(organisationId, { q: '', page: 1, phase: 'any' });
+  sessionQueries.list(organisationId, readListQuery(sessionsApi.list, asUsual));
 
 export async function loader({ params }: LoaderFunctionArgs) {
   const organisationId = param(params, 'organisationId');

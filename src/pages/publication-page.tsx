@@ -28,6 +28,8 @@ export async function loader({ params }: LoaderFunctionArgs) {
 export function Component() {
   const { data: publication } = useSuspenseQuery(publicationQueries.detail(param(useParams(), 'id')));
   const { report, withdrawn, publisher, publishedAt } = publication;
+  const method = methodOf(report.result.method);
+  const portrait = method.portray(report.result, report.cables);
   const finding = withdrawn === null ? report.finding : { ...report.finding, maySay: null };
   return (
     <article className="flex flex-col gap-14">
@@ -46,18 +48,23 @@ export function Component() {
           <p className="text-soft">
             Published <time dateTime={publishedAt}>{formatDate(publishedAt)}</time> by {publisher}
           </p>
-          <ReportFigures result={report.result} />
+          <ReportFigures figures={portrait.figures} note={portrait.note} />
           <WhatToSay finding={finding} title="What may be said" />
         </div>
-        <ReportConditions report={report} isPublic />
+        <ReportConditions report={report} portrait={portrait} isPublic />
       </div>
       <VerificationSection publication={publication} />
       <Statements publication={publication} />
-      <ReportDistribution result={report.result} nullDistribution={report.nullDistribution} />
-      <ReportListeners result={report.result} />
-      <ReportFlow flow={report.flow} />
-      <ReportIncidents voids={report.voids} missing={report.missing} deviations={report.deviations} />
-      <ReportSessions sessions={report.sessions} cables={report.cables} method={methodOf(report.result.method)} />
+      <ReportDistribution nullDistribution={report.nullDistribution} distribution={portrait.distribution} />
+      <ReportListeners listeners={portrait.listeners} chance={report.result.chance} />
+      <ReportFlow flow={report.flow} missingWords={report.result.missingAnswers} />
+      <ReportIncidents
+        voids={report.voids}
+        missing={report.missing}
+        deviations={report.deviations}
+        missingWords={report.result.missingAnswers}
+      />
+      <ReportSessions sessions={report.sessions} cables={report.cables} method={method} />
       <ReportProtocol protocol={report.protocol} />
     </article>
   );

@@ -65,8 +65,10 @@ function ledeOf({ draft, progress }: Study): string {
   return `${registered}, ${progress.sessionsPlanned} planned so far. Once planned, a session keeps its number for good.`;
 }
 
-function hindranceOf({ state }: Study): string | null {
+function hindranceOf({ state, progress }: Study): string | null {
   if (state === 'draft') return 'Seal the protocol first; a session belongs to a sealed study';
   if (isClosed(state)) return 'This study is closed; it takes no further session';
+  if (progress.sessionsToPlan === 0)
+    return 'Every registered session is planned; an abandoned one would leave its place';
   return null;
 }

@@ -1,6 +1,6 @@
 import { useQueryClient } from '@tanstack/react-query';
 import { useEffect } from 'react';
-import { type LoaderFunctionArgs, redirect, useLoaderData, useNavigate } from 'react-router-dom';
+import { Link, type LoaderFunctionArgs, redirect, useLoaderData, useNavigate } from 'react-router-dom';
 import type { PublicationRow } from '#shared/contracts/publications.ts';
 import type { WhoAmI } from '#shared/contracts/sign-in.ts';
 import { paths } from '../app/paths.ts';
@@ -49,6 +49,11 @@ export function Component() {
             lede="Listeners need no account: their session code or personal link is enough."
           />
           <SignInForm onSignedIn={goOn} />
+          <p className="pt-5">
+            <Link to={paths.forgottenPassword()} className="inline-flex min-h-12 items-center">
+              Forgotten your password?
+            </Link>
+          </p>
         </div>
         <LatestPublications
           title="Published here, for anybody to check"

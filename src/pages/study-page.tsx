@@ -5,9 +5,9 @@ import type { Study } from '#shared/contracts/studies.ts';
 import { paths } from '../app/paths.ts';
 import { ShelveStudy, WithdrawPublication } from '../features/publications/end-with-reason.tsx';
 import { publicationQueries } from '../features/publications/publications.queries.ts';
+import { SessionTable } from '../features/sessions/session-table.tsx';
 import { sessionQueries } from '../features/sessions/sessions.queries.ts';
 import { usePresence } from '../features/sign-in/membership.ts';
-import { SessionTable } from '../features/studies/overview/session-table.tsx';
 import { StudyOverview } from '../features/studies/overview/study-overview.tsx';
 import { upcomingOf } from '../features/studies/overview/upcoming-session.ts';
 import { studyQueries } from '../features/studies/studies.queries.ts';
@@ -41,7 +41,8 @@ export function Component() {
   const changeAddress = useListAddress();
   const navigate = useNavigate();
   const { data: study } = useSuspenseQuery(studyQueries.detail(organisationId, id));
-  const { data: sessions } = useSuspenseQuery(sessionQueries.list(organisationId, sessionsOf(id, search)));
+  const query = sessionsOf(id, search);
+  const { data: sessions } = useSuspenseQuery(sessionQueries.list(organisationId, query));
   const report = paths.report(organisationId, id);
   const upcoming = upcomingOf(sessions.rows);
   const consoleOf = (session: SessionRow) =>
@@ -64,10 +65,13 @@ export function Component() {
       publishing={usePublishing(organisationId, study)}
       sessions={
         <SessionTable
+          isOfOneStudy
           rows={sessions.rows}
           page={sessions.page}
           pageCount={sessions.pages}
           onPage={(page) => changeAddress({ page })}
+          sort={query.sort}
+          onSort={(sort) => changeAddress({ sort })}
           consoleOf={consoleOf}
           empty={<p className="text-soft">None planned yet.</p>}
         />

@@ -1,9 +1,9 @@
 import { DefaultZIndexes, usePlotArea, useXAxisScale, ZIndexLayer } from 'recharts';
 
 type DistributionMarkProps = {
-  /** The bar that it marks: the observed one through its middle, the limit's at its start. */
+  /** The bar that it marks: the observed one and the one as far through their middle, the limit's at its start. */
   bar: number;
-  kind: 'observed' | 'limit';
+  kind: 'observed' | 'limit' | 'mirrored';
   text: string;
   /** The side on which the words stand if there is room for them. */
   side: 'left' | 'right';
@@ -18,6 +18,12 @@ const looks = {
     words: 'fill-copper font-bold',
   },
   limit: { position: 'start', row: 1, line: 'stroke-ink [stroke-dasharray:4_4] [stroke-width:1.5]', words: 'fill-ink' },
+  mirrored: {
+    position: 'middle',
+    row: 1,
+    line: 'stroke-ink [stroke-dasharray:4_4] [stroke-width:1.5]',
+    words: 'fill-ink',
+  },
 } as const;
 
 /** A line down to the axis with its name beside its upper end; each kind has a row of its own. */

@@ -1,15 +1,15 @@
-import type { DistributionBar, ShownDistribution } from './distribution-bars.ts';
+import type { DistributionBar, DistributionEdges, ShownDistribution } from './distribution-bars.ts';
 import { percentFace } from './percent-face.ts';
 
 type DistributionTableProps = {
   shown: ShownDistribution;
   observed: number;
-  limit?: number;
+  edges: DistributionEdges;
   quantity: string;
 };
 
 /** The chart's figures as a table, behind a word that opens it. */
-export function DistributionTable({ shown, observed, limit, quantity }: DistributionTableProps) {
+export function DistributionTable({ shown, observed, edges, quantity }: DistributionTableProps) {
   const lowest = shown.bars[0]?.from;
   const highest = shown.bars.at(-1)?.to;
   return (
@@ -18,7 +18,7 @@ export function DistributionTable({ shown, observed, limit, quantity }: Distribu
         The same as a table
       </summary>
       <table className="mt-3 border-collapse">
-        <caption className="sr-only">{quantity}, with the chance of each by guessing</caption>
+        <caption className="sr-only">{quantity}, with the chance of each</caption>
         <thead>
           <tr className="border-b-2 border-ink text-left">
             <th scope="col" className="py-2 pr-4 sm:pr-8">
@@ -39,7 +39,7 @@ export function DistributionTable({ shown, observed, limit, quantity }: Distribu
               key={bar.from}
               name={bar.from === bar.to ? String(bar.from) : `${bar.from} to ${bar.to}`}
               chance={bar.chance}
-              remark={remarkOn(bar, observed, limit)}
+              remark={remarkOn(bar, observed, edges)}
             />
           ))}
           {shown.above > 0 ? <TableRow name={`more than ${highest}`} chance={shown.above} /> : null}
@@ -49,9 +49,13 @@ export function DistributionTable({ shown, observed, limit, quantity }: Distribu
   );
 }
 
-function remarkOn(bar: DistributionBar, observed: number, limit: number | undefined): string {
+function remarkOn(bar: DistributionBar, observed: number, { limit, beyond }: DistributionEdges): string {
   const holds = (count: number) => bar.from <= count && count <= bar.to;
-  return [holds(observed) ? 'observed' : '', limit !== undefined && holds(limit) ? 'registered limit' : '']
+  return [
+    holds(observed) ? 'observed' : '',
+    limit !== undefined && holds(limit) ? 'registered limit' : '',
+    beyond !== undefined && bar.isBeyond ? 'counts towards p' : '',
+  ]
     .filter(Boolean)
     .join(', ');
 }

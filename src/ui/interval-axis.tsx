@@ -15,7 +15,11 @@ export function IntervalAxis({ from, to, shareOf, quantity, format }: IntervalAx
       <td className="px-3">
         <div className="relative h-8 border-t border-ink font-mono">
           {niceTicks(from, to, 6).map((tick) => (
-            <span key={tick} className="absolute top-1 -translate-x-1/2" style={{ left: `${shareOf(tick) * 100}%` }}>
+            <span
+              key={tick}
+              className="absolute top-1 -translate-x-1/2 whitespace-nowrap"
+              style={{ left: `${shareOf(tick) * 100}%` }}
+            >
               {format(tick)}
             </span>
           ))}

@@ -7,8 +7,8 @@ type IntervalChartProps = {
   /** What a row is: "Listener". */
   rowName: string;
   rows: readonly IntervalEntry[];
-  /** The value that guessing gives. */
-  guessing: number;
+  /** The value that comes of nothing, such as guessing, and what it is called. */
+  middle: { value: number; words: string };
   /** What is measured, with its unit: "Correct answers out of 16". */
   quantity: string;
   /** The ends of the axis; from 0 to the highest end of an interval if left out. */
@@ -17,19 +17,19 @@ type IntervalChartProps = {
   format?: (value: number) => string;
 };
 
-/** Rows side by side: a point with its interval and the line of guessing. It is a table, so it reads as one. */
+/** Rows side by side: a point with its interval and the line of what comes of nothing. It is a table, so it reads as one. */
 export function IntervalChart({
   caption,
   rowName,
   rows,
-  guessing,
+  middle,
   quantity,
   domain,
   format = String,
 }: IntervalChartProps) {
-  const [from, to] = domain ?? [0, Math.max(guessing, ...rows.map((row) => row.high))];
+  const [from, to] = domain ?? [0, Math.max(middle.value, ...rows.map((row) => row.high))];
   const shareOf = (value: number) => (Math.min(Math.max(value, from), to) - from) / (to - from || 1);
-  const guessingShare = shareOf(guessing);
+  const middleShare = shareOf(middle.value);
   return (
     <table className="w-full border-collapse">
       <caption className="sr-only">{caption}</caption>
@@ -40,14 +40,14 @@ export function IntervalChart({
           </th>
           <td aria-hidden="true" className="relative h-9 w-full px-3 text-soft">
             <span className="absolute inset-x-3 bottom-1">
-              <span className="relative block whitespace-nowrap" style={markAt(guessingShare)}>
-                guessing {format(guessing)}
+              <span className="relative block whitespace-nowrap" style={markAt(middleShare)}>
+                {middle.words} {format(middle.value)}
               </span>
             </span>
           </td>
           <th scope="col" className="pb-1 pl-4 text-right font-semibold">
             <span className="sr-only">
-              {quantity}; guessing gives {format(guessing)}
+              {quantity}; {middle.words}: {format(middle.value)}
             </span>
           </th>
           <th scope="col" className="max-md:sr-only md:pb-1 md:pl-6 md:text-right md:font-semibold">
@@ -57,7 +57,7 @@ export function IntervalChart({
       </thead>
       <tbody>
         {rows.map((row) => (
-          <IntervalRow key={row.label} entry={row} shareOf={shareOf} guessingShare={guessingShare} format={format} />
+          <IntervalRow key={row.label} entry={row} shareOf={shareOf} middleShare={middleShare} format={format} />
         ))}
       </tbody>
       <tfoot aria-hidden="true">

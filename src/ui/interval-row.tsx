@@ -4,17 +4,17 @@ type IntervalRowProps = {
   entry: IntervalEntry;
   /** Where a value lies on the axis, 0 to 1. */
   shareOf: (value: number) => number;
-  guessingShare: number;
+  middleShare: number;
   format: (value: number) => string;
 };
 
-export function IntervalRow({ entry, shareOf, guessingShare, format }: IntervalRowProps) {
+export function IntervalRow({ entry, shareOf, middleShare, format }: IntervalRowProps) {
   const percent = (share: number) => `${share * 100}%`;
   const [low, value, high, guess] = [
     percent(shareOf(entry.low)),
     percent(shareOf(entry.value)),
     percent(shareOf(entry.high)),
-    percent(guessingShare),
+    percent(middleShare),
   ];
   return (
     <tr>

@@ -1,5 +1,5 @@
 import { Bar, BarChart, type BarShapeProps, ResponsiveContainer, Tooltip, XAxis, YAxis } from 'recharts';
-import { type CountChance, distributionBars } from './distribution-bars.ts';
+import { type CountChance, type DistributionEdges, distributionBars } from './distribution-bars.ts';
 import { DistributionMark } from './distribution-mark.tsx';
 import { DistributionTable } from './distribution-table.tsx';
 import { niceTicks } from './nice-ticks.ts';
@@ -11,6 +11,10 @@ type NullDistributionChartProps = {
   observed: number;
   /** The registered limit: the least count that is a finding. */
   limit?: number;
+  /** Two-sided: counts at or beyond these lie as far from the middle as the observed one; they are tinted. */
+  beyond?: DistributionEdges['beyond'];
+  /** Whose chance a bar is: "Chance by guessing". */
+  chanceOf: string;
   /** What is counted, with its unit: "Correct answers out of 96". */
   quantity: string;
 };
@@ -20,8 +24,16 @@ const chartHeightPx = 300;
 const headroom = 1.42;
 
 /** Where the observed count falls if nobody hears a difference. */
-export function NullDistributionChart({ bars, observed, limit, quantity }: NullDistributionChartProps) {
-  const shown = distributionBars(bars, observed, limit);
+export function NullDistributionChart({
+  bars,
+  observed,
+  limit,
+  beyond,
+  chanceOf,
+  quantity,
+}: NullDistributionChartProps) {
+  const shown = distributionBars(bars, observed, { limit, beyond });
+  const mirrored = beyond === undefined ? undefined : beyond.low + beyond.high - observed;
   const peak = Math.max(0, ...shown.bars.map((bar) => bar.chance));
   const lowest = shown.bars[0]?.from ?? 0;
   const highest = shown.bars.at(-1)?.to ?? 0;
@@ -31,9 +43,13 @@ export function NullDistributionChart({ bars, observed, limit, quantity }: NullD
   return (
     <figure className="flex flex-col gap-1 [&_svg]:max-w-full">
       <p aria-hidden="true" className="text-soft">
-        Chance by guessing, %
+        {chanceOf}, %
       </p>
-      <div role="img" aria-label={summarise(observed, limit, quantity)} className="font-mono">
+      <div
+        role="img"
+        aria-label={summarise(`${quantity}: ${chanceOf.toLowerCase()}, count by count.`, observed, { limit, beyond })}
+        className="font-mono"
+      >
         <ResponsiveContainer width="100%" height={chartHeightPx} minWidth={0}>
           <BarChart
             data={shown.bars}
@@ -78,11 +94,19 @@ export function NullDistributionChart({ bars, observed, limit, quantity }: NullD
                 side={observed < limit ? 'right' : 'left'}
               />
             )}
+            {mirrored === undefined || mirrored === observed ? null : (
+              <DistributionMark
+                bar={barOf(mirrored)}
+                kind="mirrored"
+                text="as far"
+                side={mirrored > observed ? 'right' : 'left'}
+              />
+            )}
             <DistributionMark
               bar={barOf(observed)}
               kind="observed"
               text={`${observed} observed`}
-              side={limit !== undefined && observed < limit ? 'left' : 'right'}
+              side={isLeft(observed, limit ?? mirrored) ? 'left' : 'right'}
             />
           </BarChart>
         </ResponsiveContainer>
@@ -91,7 +115,7 @@ export function NullDistributionChart({ bars, observed, limit, quantity }: NullD
         <span aria-hidden="true" className="text-center text-soft">
           {quantity}
         </span>
-        <DistributionTable shown={shown} observed={observed} limit={limit} quantity={quantity} />
+        <DistributionTable shown={shown} observed={observed} edges={{ limit, beyond }} quantity={quantity} />
       </figcaption>
     </figure>
   );
@@ -121,7 +145,13 @@ function rangeFace(bar: { from: number; to: number } | undefined): string {
   return bar.from === bar.to ? String(bar.from) : `${bar.from} to ${bar.to}`;
 }
 
-function summarise(observed: number, limit: number | undefined, quantity: string): string {
+/** Words go to the side away from the other line. */
+function isLeft(observed: number, other: number | undefined): boolean {
+  return other !== undefined && observed < other;
+}
+
+function summarise(head: string, observed: number, { limit, beyond }: DistributionEdges): string {
   const against = limit === undefined ? '' : ` The registered limit was ${limit}.`;
-  return `${quantity}: the chance of each count by guessing. Observed: ${observed}.${against} The table below has the same figures.`;
+  const far = beyond === undefined ? '' : ` As far from the middle: up to ${beyond.low}, and from ${beyond.high} on.`;
+  return `${head} Observed: ${observed}.${against}${far} The table below has the same figures.`;
 }

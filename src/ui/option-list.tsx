@@ -18,6 +18,12 @@ type OptionListProps = {
   name?: string;
 };
 
+/** As high as a thumb likes it, and low enough that nothing scrolls while answering. */
+function rowHeight(rows: number): string {
+  if (rows <= 2) return 'h-[7.5rem] [@media(max-height:699px)]:h-22';
+  return 'h-[7.5rem] [@media(min-height:600px)_and_(max-height:799px)]:h-22 [@media(max-height:599px)]:h-16';
+}
+
 /** The phone's answers: one ruled list, a row each; arrow keys move the choice. */
 export function OptionList({ legend, options, value, onChange, disabled, name }: OptionListProps) {
   const ownName = useId();
@@ -28,8 +34,8 @@ export function OptionList({ legend, options, value, onChange, disabled, name }:
         <label
           key={option.value}
           className={classNames(
-            'relative flex h-[7.5rem] cursor-pointer items-center gap-6 border-b-2 border-edge px-5',
-            '[@media(max-height:699px)]:h-22 has-disabled:cursor-default',
+            'relative flex cursor-pointer items-center gap-6 border-b-2 border-edge px-5 has-disabled:cursor-default',
+            rowHeight(options.length),
             'has-focus-visible:outline-3 has-focus-visible:-outline-offset-4 has-focus-visible:outline-ink',
             value === option.value &&
               'bg-copper-tint before:absolute before:inset-y-0 before:left-0 before:w-2 before:bg-copper',

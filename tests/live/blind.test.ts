@@ -1,4 +1,5 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import type { StudyDraft } from '#shared/contracts/studies.ts';
 import { HandClock } from '../../server/demo/hand-clock.ts';
 import { Console, Phone } from '../support/live.ts';
 import { makeOrganisation, readyStudy } from '../support/people.ts';
@@ -10,17 +11,23 @@ import { testServer } from '../support/test-server.ts';
 // server secrets. Whatever reaches a listener or a manager before closing must be the same, byte for byte.
 
 type Seeds = { codeKey: string; drawSecret: string };
+type Asked = {
+  study: Partial<StudyDraft>;
+  choices: readonly string[];
+  /** What the draw decided, trial by trial, read from the codes that were fitted. */
+  drawn: (codes: readonly string[], trials: readonly string[][]) => string;
+};
 type Run = { phones: string[][]; manager: string[]; proctor: string[]; codes: string[][] };
 
 // Commitments, and the digests chained from them, are random by design.
 const withoutDigests = (text: string) => text.replace(/[0-9a-f]{64}/g, '#').replace(/urn:uuid:[0-9a-f-]{36}/g, 'urn');
 
-async function run({ codeKey, drawSecret }: Seeds): Promise<Run> {
+async function run({ study: change, choices }: Asked, { codeKey, drawSecret }: Seeds): Promise<Run> {
   const clock = new HandClock(Date.parse('2026-12-05T18:00:00.000Z'));
   const random = repeatableRandom({ 'code-key': codeKey, 'draw-secret': drawSecret });
   const server = await testServer({ clock, random });
   const people = await makeOrganisation(server, 'Harbour');
-  const study = await readyStudy(server, people);
+  const study = await readyStudy(server, people, change);
   const manager: string[] = [];
   const look = async () => {
     for (const path of [
@@ -47,7 +54,7 @@ async function run({ codeKey, drawSecret }: Seeds): Promise<Run> {
   for (const name of ['left', 'right']) phones.push(await Phone.join(server.address, code, name));
   await begin(desk, phones, clock);
   const codes: string[][] = [];
-  for (const [index, choice] of (['A', 'B', 'B', 'A', 'A'] as const).entries()) {
+  for (const [index, choice] of choices.entries()) {
     codes.push(await presentTrial(desk, clock));
     for (const phone of phones) await phone.answer(index + 1, choice);
     await desk.sees('all in', (view) => view.trial?.answered === phones.length);
@@ -69,7 +76,21 @@ async function run({ codeKey, drawSecret }: Seeds): Promise<Run> {
   return seen;
 }
 
-describe('what leaves the server before closing', () => {
+// In ABX the draw is what X is; in a preference it is which cable comes first.
+const methods: Record<string, Asked> = {
+  ABX: {
+    study: { method: 'abx' },
+    choices: ['A', 'B', 'B', 'A', 'A'],
+    drawn: ([a, , x]) => (a === x ? 'A' : 'B'),
+  },
+  'paired preference': {
+    study: { method: 'paired-preference', methodSettings: ['no-preference'] },
+    choices: ['first', 'second', 'none', 'first', 'second'],
+    drawn: ([first], trials) => (first === trials[0]?.[0] ? 'as in trial 1' : 'the other way'),
+  },
+};
+
+describe.each(Object.entries(methods))('what leaves the server before closing, %s', (_name, asked) => {
   const seeds: Seeds[] = [
     { codeKey: 'key one', drawSecret: 'draw one' },
     { codeKey: 'key two', drawSecret: 'draw one' },
@@ -79,7 +100,7 @@ describe('what leaves the server before closing', () => {
   let runs: Run[] = [];
   beforeAll(async () => {
     runs = [];
-    for (const seed of seeds) runs.push(await run(seed));
+    for (const seed of seeds) runs.push(await run(asked, seed));
   }, 120_000);
   afterAll(() => {
     runs = [];
@@ -91,9 +112,9 @@ describe('what leaves the server before closing', () => {
     return found;
   };
 
-  it('differs in code key and in X between the runs, so that the comparison means something [B1]', () => {
-    const sameAsA = runs.map(({ codes }) => codes.map(([a, , x]) => (a === x ? 'A' : 'B')).join(''));
-    expect(new Set(sameAsA).size).toBeGreaterThan(1);
+  it('differs in code key and in the draw between the runs, so that the comparison means something [B1]', () => {
+    const draws = runs.map(({ codes }) => codes.map((trial) => asked.drawn(trial, codes)).join());
+    expect(new Set(draws).size).toBeGreaterThan(1);
     expect(new Set(runs.map(({ codes }) => [...new Set(codes.flat())].sort().join())).size).toBeGreaterThan(1);
   });
 

@@ -4,10 +4,10 @@ import { canonicalJson, type Json } from '#shared/ledger/canonical-json.ts';
 import { type Entry, nextEntry } from '#shared/ledger/chain.ts';
 import type { ClosedStudy } from '#shared/ledger/publication-parts.ts';
 import { methodOf } from '#shared/methods/methods.ts';
+import { runRegistered } from '#shared/methods/run-registered.ts';
 import { type Protocol, protocolDigest, sessionPlanOf } from '#shared/protocol/protocol.ts';
 import { type AnswerContent, answerLeaf, contributionCommitment } from '#shared/session/answer-leaf.ts';
 import { codeKeyCommitment, drawSecretCommitment } from '#shared/session/commitments.ts';
-import { countedTrials } from '#shared/session/counted-trials.ts';
 import { decide, type SessionCommand } from '#shared/session/decide.ts';
 import { evolve, holdAnswer } from '#shared/session/evolve.ts';
 import { nextStep } from '#shared/session/progress.ts';
@@ -211,8 +211,7 @@ export function closedStudy(listeners: number): ClosedStudy {
   const key = { codeKey, draws };
   maker.put('key-revealed', key);
   const method = methodOf('abx');
-  const trials = countedTrials(method, sessionsInRecord(maker.entries, method), key, maker.answers);
-  const result = method.analyse({ alpha: '0.05', listenersPerSession: listeners }, trials);
+  const result = runRegistered(protocol, sessionsInRecord(maker.entries, method), key, maker.answers);
   maker.put('result-recorded', { analysis: 'abx/1', result });
   return JSON.parse(
     canonicalJson({ entries: maker.entries, protocol, answers: maker.answers } as unknown as Json),

@@ -28,8 +28,10 @@ export async function begin(desk: Console, phones: readonly Phone[], clock: Hand
   await desk.sees('the familiarisation over', (view) => view.familiarised);
 }
 
-/** A trial up to its question. Returns the codes fitted for A, B and X. */
+/** A trial up to its question. Returns the codes fitted, presentation by presentation. */
 export async function presentTrial(desk: Console, clock: HandClock): Promise<string[]> {
   await desk.act({ kind: 'begin-trial' });
-  return [await present(desk, clock), await present(desk, clock), await present(desk, clock)];
+  const codes: string[] = [];
+  for (let count = desk.now.trial?.presentations ?? 0; count > 0; count -= 1) codes.push(await present(desk, clock));
+  return codes;
 }

@@ -1,11 +1,9 @@
 import type { Report, ReportRow } from '#shared/contracts/reports.ts';
 import { isClosed } from '#shared/contracts/studies.ts';
-import { findingOf } from '#shared/findings/finding.ts';
-import { registeredResult } from '#shared/findings/registered-result.ts';
 import type { Entry } from '#shared/ledger/chain.ts';
 import { type ClosedStudy, publicationParts } from '#shared/ledger/publication-parts.ts';
 import { type Check, type CheckId, verifyStudy } from '#shared/ledger/verify.ts';
-import { methodOf } from '#shared/methods/methods.ts';
+import { methodOf, registeredResult } from '#shared/methods/methods.ts';
 import { Problem } from '#shared/problem.ts';
 import { blindingRung } from '#shared/session/blinding-rung.ts';
 import { sessionsInRecord } from '#shared/session/read-record.ts';
@@ -37,12 +35,13 @@ export type ClosedRecord = ClosedStudy & {
 /** Everything that a report says, from the record alone: what was checked, how blind it was, what was found. */
 function sourceFrom(closed: ClosedRecord): ReportSource {
   const { entries, protocol } = closed;
-  const states = sessionsInRecord(entries, methodOf(protocol.method));
+  const method = methodOf(protocol.method);
+  const states = sessionsInRecord(entries, method);
   const checks = verifyStudy(publicationParts(closed));
-  const rung = blindingRung(entries, states);
+  const rung = blindingRung(entries, states, method);
   const closing = closingOf(entries);
   const result = registeredResult.parse(entries.find(({ kind }) => kind === 'result-recorded')?.payload.result);
-  const finding = findingOf(result, {
+  const finding = method.finding(result, {
     cables: [protocol.cables[0].name, protocol.cables[1].name],
     gate: {
       commitmentsHold: passed(checks, ['record', 'protocol', 'commitments', 'draws', 'answers', 'figures']),
@@ -91,7 +90,7 @@ export function getReport({ db }: Deps, where: { organisationId: string; id: str
 
 export function listReports({ db }: Deps, organisationId: string, query: { q: string; page: number }) {
   return withTransaction(db, async (tx) => {
-    const found = await listStudies(tx, organisationId, { ...query, state: 'any-closed' });
+    const found = await listStudies(tx, organisationId, { ...query, state: 'any-closed', sort: '-updatedAt' });
     const rows: ReportRow[] = [];
     for (const study of found.rows) {
       const { entries, finding } = sourceFrom(await closedRecord(tx, study));

@@ -1,14 +1,14 @@
 import type { Report } from '#shared/contracts/reports.ts';
 import type { Finding } from '#shared/findings/finding.ts';
-import type { RegisteredResult } from '#shared/findings/registered-result.ts';
 import type { Entry } from '#shared/ledger/chain.ts';
 import type { Check } from '#shared/ledger/verify.ts';
-import { methodOf } from '#shared/methods/methods.ts';
+import { methodOf, type RegisteredResult } from '#shared/methods/methods.ts';
+import { analysisFacts } from '#shared/protocol/analysis-facts.ts';
 import type { Protocol } from '#shared/protocol/protocol.ts';
 import type { AnswerContent } from '#shared/session/answer-leaf.ts';
 import type { BlindingRung } from '#shared/session/blinding-rung.ts';
 import { countedTrials, revealedDraw } from '#shared/session/counted-trials.ts';
-import { cableOfSide, type Draw } from '#shared/session/draw.ts';
+import type { Draw } from '#shared/session/draw.ts';
 import { truthOf } from '#shared/session/fitting.ts';
 import { type RevealedKey, revealedKey } from '#shared/session/revealed-key.ts';
 import type { SessionState } from '#shared/session/state.ts';
@@ -51,6 +51,8 @@ function flowOf({ states, entries }: ReportSource): Report['flow'] {
   };
 }
 
+const namesOf = ({ cables: [first, second] }: Protocol): [string, string] => [first.name, second.name];
+
 function drawFor(source: ReportSource, state: SessionState, key: RevealedKey): Draw | null {
   const secret = key.draws.find(({ session }) => session === state.session)?.secret;
   const ran = state.ended.length > 0;
@@ -76,7 +78,7 @@ function sessionView(source: ReportSource, state: SessionState, key: RevealedKey
     startedAt: atOf('seating-opened'),
     endedAt: atOf('session-finished', 'session-abandoned'),
     listeners: state.seats.length,
-    labelA: draw === null ? null : protocol.cables[cableOfSide(draw, method, method.sides[0])].name,
+    drawn: draw === null ? null : method.trials.session(draw.firstSide, namesOf(protocol)),
     reason: abandoned === undefined ? null : String(abandoned.payload.reason),
     trials: state.ended.map(({ trial, outcome, excerpt, seats, longChanges }) => ({
       trial,
@@ -126,10 +128,8 @@ function factsOf({ design, conduct, analysis, cables, method }: Protocol): Repor
     { label: 'Sessions', value: String(design.sessions) },
     { label: 'Listeners per session', value: String(design.listenersPerSession) },
     { label: 'Trials per session', value: `${design.trials}, ${design.spares} spare` },
-    { label: 'Level', value: `${analysis.alpha}, one-sided` },
-    { label: 'Missing answers', value: analysis.missing },
-    { label: 'Stopping', value: analysis.stopping },
-    { label: 'Exclusions', value: analysis.exclusions },
+    { label: 'Level', value: analysis.alpha },
+    ...analysisFacts(analysis),
     { label: 'Change', value: `${conduct.changeS} s, real or sham` },
     { label: 'Answer window', value: `${conduct.answerS} s` },
     { label: 'Programme', value: conduct.programme.map(({ title, lengthS }) => `${title} (${lengthS} s)`).join('; ') },
@@ -151,7 +151,7 @@ export function reportView(source: ReportSource): Report {
     studyId: study.id,
     title: study.title,
     question: protocol.question,
-    cables: [protocol.cables[0].name, protocol.cables[1].name],
+    cables: namesOf(protocol),
     method: method.name,
     closedAt,
     endedEarly: closing.complete ? null : closing.reason,

@@ -1,7 +1,8 @@
 import { isClosed, type Study as StudyReply } from '#shared/contracts/studies.ts';
+import type { Json } from '#shared/ledger/canonical-json.ts';
 import { methodOf } from '#shared/methods/methods.ts';
+import { runRegistered } from '#shared/methods/run-registered.ts';
 import { Problem } from '#shared/problem.ts';
-import { countedTrials } from '#shared/session/counted-trials.ts';
 import { decide } from '#shared/session/decide.ts';
 import { sessionsInRecord } from '#shared/session/read-record.ts';
 import type { RevealedKey } from '#shared/session/revealed-key.ts';
@@ -9,6 +10,7 @@ import { reveal } from '../../blind/index.ts';
 import { type Tx, withTransaction } from '../../db/transaction.ts';
 import type { Deps } from '../../deps.ts';
 import { append, type NewEntry, readRecord } from '../../ledger/ledger.ts';
+import { pastManagersOf } from '../people/people.store.ts';
 import type { Session } from '../sessions/session.entity.ts';
 import { answersOfSessions, sessionsOfStudy, updateSession } from '../sessions/sessions.store.ts';
 import { membersOf } from '../users/users.store.ts';
@@ -44,7 +46,11 @@ async function closedEntry(
   at: number,
 ): Promise<NewEntry> {
   const members = await membersOf(tx, study.organisationId);
-  const withRole = (role: string) => members.filter((member) => member.role === role).map(({ userId }) => userId);
+  // Whoever once could see the cables' pages counts, also after another role or none.
+  const everyone = [...members, ...(await pastManagersOf(tx, study.organisationId))];
+  const withRole = (role: string) => [
+    ...new Set(everyone.filter((member) => member.role === role).map(({ userId }) => userId)),
+  ];
   const { managerId: manager, codeHolderId: codeHolder } = study;
   return {
     kind: 'study-closed',
@@ -61,20 +67,15 @@ async function recordResult(
   sessions: readonly Session[],
   key: RevealedKey,
 ): Promise<void> {
-  const { analysis, design, method: methodId } = protocolOf(study);
-  const method = methodOf(methodId);
-  const states = sessionsInRecord(await readRecord(tx, study.id), method);
+  const protocol = protocolOf(study);
+  const states = sessionsInRecord(await readRecord(tx, study.id), methodOf(protocol.method));
   const answers = await answersOfSessions(
     tx,
     sessions.map(({ id }) => id),
   );
   const held = answers.map(({ sessionId, trial, seat, choice }) => ({ session: sessionId, trial, seat, choice }));
-  const { listenersPerSession } = design;
-  const result = method.analyse(
-    { alpha: analysis.alpha, listenersPerSession },
-    countedTrials(method, states, key, held),
-  );
-  const payload = { analysis: analysis.name, result };
+  const result = runRegistered(protocol, states, key, held) as unknown as Json;
+  const payload = { analysis: protocol.analysis.name, result };
   await append(tx, random, study.id, [{ kind: 'result-recorded', at: clock.now(), payload, session: null }]);
 }
 

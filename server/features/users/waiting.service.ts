@@ -25,14 +25,14 @@ const item = (
 });
 
 function forManager(study: Study, sessions: readonly Session[]): WaitingItem[] {
-  const { sessionsPlanned, trialsRegistered, trialsLocked } = progressOf(study, sessions);
+  const { sessionsPlanned, sessionsToPlan, trialsRegistered, trialsLocked } = progressOf(study, sessions);
   const closing = closingOf(study, sessions);
   if (study.state === 'draft') return [item(study, 'draft-to-finish', 'A draft, not sealed yet')];
   if (study.state === 'closed')
     return [item(study, 'report-to-read', 'Closed; read the report, then publish or shelve it')];
   if (isClosed(study.state)) return [];
   const waiting: WaitingItem[] = [];
-  if (sessionsPlanned < study.draft.sessions)
+  if (sessionsToPlan > 0)
     waiting.push(item(study, 'session-to-plan', `${sessionsPlanned} of ${study.draft.sessions} sessions planned`));
   if (closing.allowed && closing.complete)
     waiting.push(item(study, 'study-to-close', `${trialsLocked} of ${trialsRegistered} trials locked`));

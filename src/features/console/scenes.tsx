@@ -58,7 +58,7 @@ export function BetweenTrials({ view }: { view: ProctorView }) {
   if (!view.familiarised)
     return (
       <Scene title="The draw is fixed" hasCable={true}>
-        Now the familiarisation: A and B are heard once, labelled and sleeved. Nothing is asked, nothing counts.
+        Now the familiarisation: both cables are heard once, labelled and sleeved. Nothing is asked, nothing counts.
       </Scene>
     );
   return (

@@ -1,20 +1,19 @@
-import type { RegisteredResult } from '#shared/findings/registered-result.ts';
+import type { RegisteredResult } from '#shared/methods/methods.ts';
+import type { Portrait } from '#shared/methods/portrait.ts';
 import { IntervalChart } from '../../ui/interval-chart.tsx';
 
-/** Rates of right answers side by side, with their intervals and the line of guessing. */
-export function ListenerIntervals({ byListener, chance }: Pick<RegisteredResult, 'byListener' | 'chance'>) {
+type ListenerIntervalsProps = Pick<RegisteredResult, 'chance'> & Pick<Portrait['listeners'], 'chart'>;
+
+/** Rates side by side, with their intervals and the line of what comes of nothing. */
+export function ListenerIntervals({ chart, chance }: ListenerIntervalsProps) {
+  const { caption, quantity, middle, rows } = chart;
   return (
     <IntervalChart
-      caption="Rate of right answers by listener, with 95 % Clopper-Pearson intervals"
+      caption={caption}
       rowName="Listener"
-      rows={byListener.map(({ listener, correct, answers, interval }) => ({
-        label: listener,
-        value: answers === 0 ? 0 : correct / answers,
-        low: Number(interval.lower),
-        high: Number(interval.upper),
-      }))}
-      guessing={chance.numerator / chance.denominator}
-      quantity="Right answers"
+      rows={rows}
+      middle={{ value: chance.numerator / chance.denominator, words: middle }}
+      quantity={quantity}
       domain={[0, 1]}
       format={(share) => `${Math.round(share * 100)} %`}
     />

@@ -1,16 +1,18 @@
 import type { Report } from '#shared/contracts/reports.ts';
+import type { Portrait } from '#shared/methods/portrait.ts';
 import { formatCount, formatDate } from '../../lib/format.ts';
 import { type Fact, Facts } from '../../ui/facts.tsx';
-import { levelOf } from './report-words.ts';
+import { levelOf, sideWords } from './report-words.ts';
 
 type ReportConditionsProps = {
   report: Report;
+  portrait: Portrait;
   /** The public does not take the server's word for its checks; they run in the visitor's browser. */
   isPublic?: boolean;
 };
 
 /** The conditions under which the count came about, beside it and never below the fold. */
-export function ReportConditions({ report, isPublic = false }: ReportConditionsProps) {
+export function ReportConditions({ report, portrait, isPublic = false }: ReportConditionsProps) {
   const { rung, flow, voids, deviations, result, record, protocol, endedEarly } = report;
   const failed = record.checks.filter(({ outcome }) => outcome === 'fail').length;
   const passed = record.checks.filter(({ outcome }) => outcome === 'pass').length;
@@ -21,7 +23,7 @@ export function ReportConditions({ report, isPublic = false }: ReportConditionsP
     { label: 'Void trials', value: voids.length === 0 ? 'none' : `${flow.trialsVoid}, listed`, isWords: true },
     {
       label: 'Missing answers',
-      value: flow.answersMissing === 0 ? 'none' : `${flow.answersMissing}, counted as wrong`,
+      value: flow.answersMissing === 0 ? 'none' : `${flow.answersMissing}, ${result.missingAnswers}`,
       isWords: true,
     },
     {
@@ -30,8 +32,8 @@ export function ReportConditions({ report, isPublic = false }: ReportConditionsP
       isWords: true,
       ...(deviations.length === 0 ? {} : { tone: 'amber' as const }),
     },
-    { label: 'Registered level', value: `${levelOf(result.alpha)}, one-sided` },
-    ...(result.critical ? [{ label: 'Right answers needed', value: result.critical.count }] : []),
+    { label: 'Registered level', value: `${levelOf(result.alpha)}, ${sideWords[result.alternative]}` },
+    ...portrait.conditions,
     ...(endedEarly === null
       ? []
       : [

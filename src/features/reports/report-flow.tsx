@@ -2,7 +2,7 @@ import type { Report } from '#shared/contracts/reports.ts';
 import { ReportSection } from './report-section.tsx';
 
 /** From what was planned to what was counted; every loss stands beside the step at which it happened. */
-export function ReportFlow({ flow }: Pick<Report, 'flow'>) {
+export function ReportFlow({ flow, missingWords }: Pick<Report, 'flow'> & { missingWords: string }) {
   return (
     <ReportSection
       title="From plan to count"
@@ -27,7 +27,7 @@ export function ReportFlow({ flow }: Pick<Report, 'flow'>) {
         <Step
           count={flow.answersExpected - flow.answersMissing}
           of={`of ${flow.answersExpected} answers given`}
-          losses={[`${flow.answersMissing} missing, counted as wrong`]}
+          losses={[`${flow.answersMissing} missing, ${missingWords}`]}
         />
       </ol>
     </ReportSection>

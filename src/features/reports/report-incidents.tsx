@@ -3,10 +3,10 @@ import type { Report } from '#shared/contracts/reports.ts';
 import { formatCount, formatDateTime } from '../../lib/format.ts';
 import { ReportSection } from './report-section.tsx';
 
-type Incidents = Pick<Report, 'voids' | 'missing' | 'deviations'>;
+type Incidents = Pick<Report, 'voids' | 'missing' | 'deviations'> & { missingWords: string };
 
 /** Whatever did not go as planned: void trials, missing answers, deviations. */
-export function ReportIncidents({ voids, missing, deviations }: Incidents) {
+export function ReportIncidents({ voids, missing, deviations, missingWords }: Incidents) {
   return (
     <ReportSection title="What did not go as planned">
       <Incident title="Void trials" none="No trial was set aside.">
@@ -25,7 +25,7 @@ export function ReportIncidents({ voids, missing, deviations }: Incidents) {
       <Incident title="Missing answers" none="Every answer that was due was given.">
         {missing.map((entry) => (
           <Line key={`${entry.session} ${entry.trial} ${entry.listener}`} where={trialName(entry)}>
-            <span className="font-mono">{entry.listener}</span>: {entry.why}. Counted as wrong.
+            <span className="font-mono">{entry.listener}</span>: {entry.why}; {missingWords}.
           </Line>
         ))}
       </Incident>

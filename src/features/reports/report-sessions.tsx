@@ -12,15 +12,12 @@ type ReportSessionsProps = Pick<Report, 'sessions' | 'cables'> & { method: Metho
 /** Every session, whatever became of it; numbers have no gaps. */
 export function ReportSessions({ sessions, cables, method }: ReportSessionsProps) {
   return (
-    <ReportSection
-      title="Every session"
-      lede="Filled rings are locked trials, struck ones are void; in the tables the answers that matched X are bold. What X was and what was answered was hidden from everybody until closing."
-    >
+    <ReportSection title="Every session" lede={method.trials.legend}>
       {sessions.length === 0 ? <p className="text-soft">No session was opened.</p> : null}
       <ol className="flex flex-col gap-8">
         {sessions.map((session) => (
           <li key={session.number} className="flex flex-col gap-3 border-t border-rule pt-4 print:break-inside-auto">
-            <SessionHead session={session} cables={cables} />
+            <SessionHead session={session} />
             {session.trials.length > 0 ? (
               <>
                 <CourseLine trials={courseOf(session)} />
@@ -28,7 +25,7 @@ export function ReportSessions({ sessions, cables, method }: ReportSessionsProps
                   <summary className="min-h-12 cursor-pointer py-2.5 font-semibold underline-offset-4 hover:underline print:hidden">
                     The {formatCount(session.trials.length, 'trial')} of session {session.number}
                   </summary>
-                  <SessionTrials session={session} method={method} />
+                  <SessionTrials session={session} cables={cables} method={method} />
                 </details>
               </>
             ) : null}
@@ -39,9 +36,8 @@ export function ReportSessions({ sessions, cables, method }: ReportSessionsProps
   );
 }
 
-function SessionHead({ session, cables }: { session: Session; cables: Report['cables'] }) {
-  const { number, phase, room, startedAt, endedAt, listeners, labelA, reason } = session;
-  const other = cables.find((name) => name !== labelA);
+function SessionHead({ session }: { session: Session }) {
+  const { number, phase, room, startedAt, endedAt, listeners, drawn, reason } = session;
   return (
     <div className="flex flex-col gap-0.5">
       <h3 className="text-lg">
@@ -55,12 +51,7 @@ function SessionHead({ session, cables }: { session: Session; cables: Report['ca
           ...(endedAt === null ? [] : [`ended ${formatDateTime(endedAt)}`]),
         ].join(', ')}
       </p>
-      {labelA === null ? null : (
-        <p className="text-soft">
-          A was {labelA}
-          {other === undefined ? '' : `, B was ${other}`}.
-        </p>
-      )}
+      {drawn === null ? null : <p className="text-soft">{drawn}</p>}
       {reason === null ? null : <p className="font-semibold">Reason: {reason}</p>}
     </div>
   );

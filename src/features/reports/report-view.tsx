@@ -23,26 +23,33 @@ type ReportViewProps = {
 
 /** The finding first, then what it rests on, down to every answer. */
 export function ReportView({ report, back, actions }: ReportViewProps) {
-  const { result } = report;
+  const { result, cables } = report;
+  const method = methodOf(result.method);
+  const portrait = method.portray(result, cables);
   return (
     <article className="flex flex-col gap-14">
       <div className="grid gap-x-16 gap-y-10 lg:grid-cols-[minmax(0,1fr)_21rem] lg:items-start print:block">
         <div className="flex min-w-0 flex-col gap-8">
           <FindingHead report={report} back={back} />
-          <ReportFigures result={result} />
+          <ReportFigures figures={portrait.figures} note={portrait.note} />
           <WhatToSay finding={report.finding} />
           <div className="flex flex-wrap gap-3 print:hidden">
             {actions}
             <Button onClick={() => window.print()}>Print the report</Button>
           </div>
         </div>
-        <ReportConditions report={report} />
+        <ReportConditions report={report} portrait={portrait} />
       </div>
-      <ReportDistribution result={result} nullDistribution={report.nullDistribution} />
-      <ReportListeners result={result} />
-      <ReportFlow flow={report.flow} />
-      <ReportIncidents voids={report.voids} missing={report.missing} deviations={report.deviations} />
-      <ReportSessions sessions={report.sessions} cables={report.cables} method={methodOf(result.method)} />
+      <ReportDistribution nullDistribution={report.nullDistribution} distribution={portrait.distribution} />
+      <ReportListeners listeners={portrait.listeners} chance={result.chance} />
+      <ReportFlow flow={report.flow} missingWords={result.missingAnswers} />
+      <ReportIncidents
+        voids={report.voids}
+        missing={report.missing}
+        deviations={report.deviations}
+        missingWords={result.missingAnswers}
+      />
+      <ReportSessions sessions={report.sessions} cables={cables} method={method} />
       <ReportProtocol protocol={report.protocol} />
       <ReportRecord record={report.record} />
     </article>

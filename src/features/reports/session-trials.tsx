@@ -1,5 +1,5 @@
 import type { Report } from '#shared/contracts/reports.ts';
-import type { Method } from '#shared/methods/method.ts';
+import type { AnswerOption, Method } from '#shared/methods/method.ts';
 import { classNames } from '../../ui/class-names.ts';
 import { DataTable } from '../../ui/data-table.tsx';
 import type { Column } from '../../ui/table-column.ts';
@@ -9,12 +9,14 @@ type Trial = Session['trials'][number];
 
 const outcomeWords: Record<Trial['outcome'], string> = { locked: '', void: ', void', open: ', never locked' };
 
-/** What X was and who answered what, trial by trial: by answer, so that a full room still fits the page. */
-export function SessionTrials({ session, method }: { session: Session; method: Method }) {
+type SessionTrialsProps = { session: Session; cables: Report['cables']; method: Method };
+
+/** What was drawn and who answered what, trial by trial: by answer, so that a full room still fits the page. */
+export function SessionTrials({ session, cables, method }: SessionTrialsProps) {
   return (
     <DataTable
       caption={`Trials of session ${session.number}`}
-      columns={columnsFor(session, method)}
+      columns={columnsFor(session, cables, method)}
       rows={session.trials}
       rowKey={({ trial }) => String(trial)}
       empty={null}
@@ -22,7 +24,8 @@ export function SessionTrials({ session, method }: { session: Session; method: M
   );
 }
 
-function columnsFor({ trials }: Session, method: Method): Column<Trial>[] {
+function columnsFor({ trials }: Session, cables: Report['cables'], method: Method): Column<Trial>[] {
+  const words = method.trials;
   const hasMissing = trials.some((trial) => missingIn(trial).length > 0);
   const hasLongChanges = trials.some(({ longChanges }) => longChanges > 0);
   return [
@@ -33,20 +36,30 @@ function columnsFor({ trials }: Session, method: Method): Column<Trial>[] {
       cell: ({ trial, outcome }) => `${trial}${outcomeWords[outcome]}`,
     },
     { key: 'excerpt', header: 'Excerpt', cell: ({ excerpt }) => excerpt },
-    { key: 'truth', header: 'X was', cell: ({ truth }) => <span className="font-mono">{truth}</span> },
-    ...method.options.map(({ value }) => ({
-      key: value,
-      header: `Answered ${value}`,
-      cell: (trial: Trial) => <Labels of={answeredIn(trial, value)} isRight={method.isRight(value, trial.truth)} />,
+    { key: 'truth', header: words.drawnHeader, cell: ({ truth }) => words.drawn(truth, cables) },
+    ...optionsIn(trials, method).map((option) => ({
+      key: option.value,
+      header: words.answeredHeader(option),
+      cell: (trial: Trial) => (
+        <Labels of={answeredIn(trial, option.value)} isRight={words.isRight?.(option.value, trial.truth) ?? false} />
+      ),
     })),
     ...(hasMissing
       ? [{ key: 'missing', header: 'Missing', cell: (trial: Trial) => <Labels of={missingIn(trial)} /> }]
       : []),
-    { key: 'matched', header: 'Matched', isFigure: true, cell: (trial) => matchedOf(trial, method) },
+    { key: 'counted', header: words.countHeader(cables), isFigure: true, cell: (trial) => countedOf(trial, method) },
     ...(hasLongChanges
       ? [{ key: 'long', header: 'Long changes', isFigure: true, cell: ({ longChanges }: Trial) => longChanges }]
       : []),
   ];
+}
+
+/** The answers that every study of the method offers, and of the others those that were given. */
+function optionsIn(trials: readonly Trial[], method: Method): readonly AnswerOption[] {
+  const given = new Set(trials.flatMap(({ answers }) => answers.map(({ choice }) => choice)));
+  const always = method.options([]).map(({ value }) => value);
+  const all = method.options(method.settings.map(({ id }) => id));
+  return all.filter(({ value }) => always.includes(value) || given.has(value));
 }
 
 function answeredIn({ answers }: Trial, choice: string | null): string[] {
@@ -64,8 +77,6 @@ function Labels({ of, isRight = false }: { of: readonly string[]; isRight?: bool
 }
 
 /** A void trial is shown, answers and all, and does not count. */
-function matchedOf({ outcome, answers, truth }: Trial, method: Method): string {
-  if (outcome !== 'locked') return 'not counted';
-  const matched = answers.filter(({ choice }) => choice !== null && method.isRight(choice, truth)).length;
-  return `${matched} of ${answers.length}`;
+function countedOf({ outcome, answers, truth }: Trial, method: Method): string {
+  return outcome === 'locked' ? method.trials.count(answers, truth) : 'not counted';
 }

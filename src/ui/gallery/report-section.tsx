@@ -39,6 +39,7 @@ const distributions = [
   { trials: 96, observed: 61, limit: 57 },
   { trials: 16, observed: 5, limit: 12 },
   { trials: 1200, observed: 571, limit: 630 },
+  { trials: 40, observed: 13, beyond: { low: 13, high: 27 } },
 ];
 
 export function ReportSection() {
@@ -69,6 +70,7 @@ export function ReportSection() {
               <NullDistributionChart
                 {...marks}
                 bars={fairGuesses(trials)}
+                chanceOf="Chance by guessing"
                 quantity={`Correct answers out of ${trials}`}
               />
             </Suspense>
@@ -78,7 +80,7 @@ export function ReportSection() {
             caption="Correct answers by listener, with 95 % intervals"
             rowName="Listener"
             rows={listeners}
-            guessing={8}
+            middle={{ value: 8, words: 'guessing' }}
             quantity="Correct answers out of 16"
           />
         </div>

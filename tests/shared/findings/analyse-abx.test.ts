@@ -3,8 +3,8 @@ import { describe, expect, it } from 'vitest';
 import { abxNullDistribution } from '#shared/findings/abx-null-distribution.ts';
 import type { AbxTrial } from '#shared/findings/abx-trials.ts';
 import { analyseAbx } from '#shared/findings/analyse-abx.ts';
-import { registeredResult } from '#shared/findings/registered-result.ts';
 import { canonicalJson } from '#shared/ledger/canonical-json.ts';
+import { registeredResult } from '#shared/methods/methods.ts';
 
 type Choice = 'A' | 'B' | null;
 const listeners = ['L01', 'L02', 'L03', 'L04'];

@@ -1,7 +1,8 @@
 import { describe, expect, it } from 'vitest';
+import { abxFinding } from '#shared/findings/abx-finding.ts';
 import type { AbxTrial } from '#shared/findings/abx-trials.ts';
 import { analyseAbx } from '#shared/findings/analyse-abx.ts';
-import { type Finding, type FindingContext, finding, findingOf } from '#shared/findings/finding.ts';
+import { type Finding, type FindingContext, finding } from '#shared/findings/finding.ts';
 
 const context: FindingContext = {
   cables: ['Northern run', 'Southern run'],
@@ -32,7 +33,7 @@ function inTurn(trials: number, right: readonly number[]): AbxTrial[] {
 }
 
 const found = (trials: readonly AbxTrial[], alpha = '0.05'): Finding =>
-  findingOf(analyseAbx({ alpha, listenersPerSession: 1, trials }), context);
+  abxFinding(analyseAbx({ alpha, listenersPerSession: 1, trials }), context);
 const words = ({ modifiers }: Finding) => modifiers.join(' ');
 
 describe('what stands beside a headline', () => {
@@ -103,7 +104,7 @@ describe('what stands beside a headline', () => {
       { commitmentsHold: true, allTrialsAccounted: false, isBlind: true },
       { commitmentsHold: true, allTrialsAccounted: true, isBlind: false },
     ])
-      expect(findingOf(result, { ...context, gate })).toMatchObject({ row: '0', maySay: null });
+      expect(abxFinding(result, { ...context, gate })).toMatchObject({ row: '0', maySay: null });
     expect(found(together(16, [2]))).toMatchObject({ row: '1', maySay: null });
     // R: pbinom(4, 16, 0.5) = 0.0384 is above .01.
     expect(found(together(16, [4])).row).toBe('5');
@@ -111,7 +112,7 @@ describe('what stands beside a headline', () => {
 
   it('says when the study was ended early, and stays a registered result at the number reached [T24]', () => {
     const result = analyseAbx({ alpha: '0.05', listenersPerSession: 1, trials: together(12, [10]) });
-    const early = findingOf(result, { ...context, endedEarly: 'The room was needed.' });
+    const early = abxFinding(result, { ...context, endedEarly: 'The room was needed.' });
     expect(early.row).toBe('2');
     expect(words(early)).toContain('Ended early while blind, at 12 trials: The room was needed.');
   });

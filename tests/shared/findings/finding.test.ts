@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
+import { abxFinding } from '#shared/findings/abx-finding.ts';
 import { analyseAbx } from '#shared/findings/analyse-abx.ts';
-import { type FindingContext, findingOf } from '#shared/findings/finding.ts';
+import type { FindingContext } from '#shared/findings/finding.ts';
 
 const context: FindingContext = {
   cables: ['Northern run', 'Southern run'],
@@ -50,7 +51,7 @@ describe('the finding', () => {
             for (const commitmentsHold of [true, false])
               for (const endedEarly of [null, 'The room was needed.']) {
                 const gate = { ...context.gate, commitmentsHold };
-                const found = findingOf(study(listeners, trials, right, silent), { ...context, gate, endedEarly });
+                const found = abxFinding(study(listeners, trials, right, silent), { ...context, gate, endedEarly });
                 rows.add(found.row);
                 const said = [found.headline, ...found.modifiers, found.scope, found.maySay ?? ''];
                 expect(said.filter((words) => forbidden.some((word) => word.test(words)))).toEqual([]);
@@ -61,10 +62,10 @@ describe('the finding', () => {
   });
 
   it('speaks of one listener, and of a panel as at least one of its members [T8]', () => {
-    expect(findingOf(study(1, 16, 12), context).headline).toBe(
+    expect(abxFinding(study(1, 16, 12), context).headline).toBe(
       'One listener told Northern run from Southern run more often than guessing allows.',
     );
-    expect(findingOf(study(3, 16, 14), context).headline).toMatch(/^At least one panel member told/);
+    expect(abxFinding(study(3, 16, 14), context).headline).toMatch(/^At least one panel member told/);
   });
 
   it('counts a missing answer as wrong [T9]', () => {
@@ -73,6 +74,6 @@ describe('the finding', () => {
   });
 
   it('always says that the level was not recorded [T8]', () => {
-    expect(findingOf(study(1, 16, 12), context).modifiers.join(' ')).toMatch(/Level at the load was not recorded/);
+    expect(abxFinding(study(1, 16, 12), context).modifiers.join(' ')).toMatch(/Level at the load was not recorded/);
   });
 });

@@ -8,7 +8,7 @@ import { chainedAgain, closedStudy, people } from '../../support/closed-study.ts
 
 const { entries } = closedStudy(2);
 const states = sessionsInRecord(entries, methodOf('abx'));
-const rungOf = (record: readonly Entry[]) => blindingRung(chainedAgain(record), states);
+const rungOf = (record: readonly Entry[]) => blindingRung(chainedAgain(record), states, methodOf('abx'));
 
 const closedAs = (change: Record<string, Json>) =>
   entries.map((entry) =>

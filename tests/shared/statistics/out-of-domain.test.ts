@@ -1,6 +1,5 @@
 import { describe, expect, it } from 'vitest';
 import { aboveGuessingRate, correctRateOf } from '#shared/statistics/above-guessing.ts';
-import { abxPlanFigures } from '#shared/statistics/abx-plan.ts';
 import { binomialLogProbability } from '#shared/statistics/binomial-log-probability.ts';
 import { binomialLogLowerTail, binomialLogUpperTail } from '#shared/statistics/binomial-tails.ts';
 import { binomialTest } from '#shared/statistics/binomial-test.ts';
@@ -14,6 +13,7 @@ import { fractionToLog, fractionToNumber } from '#shared/statistics/fraction.ts'
 import { holm } from '#shared/statistics/holm.ts';
 import { normalQuantile } from '#shared/statistics/normal-quantile.ts';
 import { normalAreaFromCentre, normalLogUpperTail, normalUpperTail } from '#shared/statistics/normal-tail.ts';
+import { planFigures } from '#shared/statistics/plan-figures.ts';
 import { power } from '#shared/statistics/power.ts';
 import { sampleSize } from '#shared/statistics/sample-size.ts';
 import { sharedPresentationTest } from '#shared/statistics/shared-presentation-test.ts';
@@ -26,7 +26,8 @@ const plan = {
   trials: 16,
   alpha: '0.05',
   listeners: 1,
-  presentationsPerTrial: 3 as const,
+  presentationsPerTrial: 3,
+  alternative: 'greater' as const,
   changeMs: 30_000,
   listenMs: 20_000,
   answerMs: 15_000,
@@ -76,11 +77,11 @@ const cases: [string, () => unknown][] = [
   ['one label only', () => sharedPresentationTest([{ counts: [1], truth: 0, missing: 0 }], 'greater')],
   ['a negative count', () => sharedPresentationTest([{ counts: [-1, 0], truth: 0, missing: 0 }], 'greater')],
   ['half a missing answer', () => sharedPresentationTest([{ counts: [1, 0], truth: 0, missing: 0.5 }], 'greater')],
-  ['a plan without trials', () => abxPlanFigures({ ...plan, trials: 0 })],
-  ['a plan at level 1', () => abxPlanFigures({ ...plan, alpha: '1' })],
-  ['a plan at no level', () => abxPlanFigures({ ...plan, alpha: 'five' })],
-  ['a change of negative length', () => abxPlanFigures({ ...plan, changeMs: -1 })],
-  ['a break after no trial', () => abxPlanFigures({ ...plan, breaks: { everyTrials: 0, lengthMs: 1 } })],
+  ['a plan without trials', () => planFigures({ ...plan, trials: 0 })],
+  ['a plan at level 1', () => planFigures({ ...plan, alpha: '1' })],
+  ['a plan at no level', () => planFigures({ ...plan, alpha: 'five' })],
+  ['a change of negative length', () => planFigures({ ...plan, changeMs: -1 })],
+  ['a break after no trial', () => planFigures({ ...plan, breaks: { everyTrials: 0, lengthMs: 1 } })],
 ];
 
 describe('an argument outside its domain', () => {

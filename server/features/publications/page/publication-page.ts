@@ -1,23 +1,15 @@
 import { notShown, type Publication } from '#shared/contracts/publications.ts';
 import type { Report } from '#shared/contracts/reports.ts';
-import { equationOfP, formatProbability, formatShare } from '#shared/findings/format-probability.ts';
+import { methodOf } from '#shared/methods/methods.ts';
+import type { Portrait } from '#shared/methods/portrait.ts';
 import { type Html, html } from './html.ts';
 import { count, facts, frame, list, section, table, utc } from './page-parts.ts';
 
-function effectOf({ result }: Report): string {
-  if (result.estimates === null)
-    return 'No effect with an interval is given: answers to a shared presentation are not independent. Each listener’s own rate is below.';
-  const { rate, interval } = result.estimates.aboveGuessing;
-  return `${formatShare(Number(rate), 'nearest')} of answers above guessing, 95 % interval ${formatShare(Number(interval.lower), 'down')} to ${formatShare(Number(interval.upper), 'up')}.`;
-}
-
-const testNames: Record<string, string> = {
-  'exact-binomial': 'exact binomial test, one-sided',
-  'shared-presentations': 'exact shared-presentation test, one-sided',
-};
+const portraitOf = ({ result, cables }: Report): Portrait => methodOf(result.method).portray(result, cables);
 
 function head({ headline, withdrawn, conditions, report, title }: Publication): Html {
   const { result, finding, question, flow } = report;
+  const portrait = portraitOf(report);
   return html`<div class="flex flex-col gap-5">
     ${
       withdrawn === null
@@ -28,11 +20,14 @@ function head({ headline, withdrawn, conditions, report, title }: Publication): 
     <p class="max-w-3xl text-lg text-soft">${count(result.answers, 'answer')} due in ${count(result.trials, 'trial')} by ${count(result.listeners, 'listener')} in ${count(result.sessions, 'session')}; ${count(flow.trialsVoid, 'trial')} void. Registered before the first trial.</p>
     <ul class="flex max-w-3xl flex-col gap-2">${[...finding.modifiers, ...conditions].map((line) => html`<li class="border-l-[5px] border-edge pl-4">${line}</li>`)}</ul>
     <p class="max-w-3xl"><strong>${title}.</strong> <span class="text-soft">${question}</span></p>
-    <p class="flex flex-col gap-1 border-t-2 border-b border-t-ink border-b-rule py-5">
-      <span class="font-mono text-figure font-semibold tracking-tight text-copper">${result.correct} / ${result.answers}</span>
-      <span class="text-soft">answers right; ${equationOfP(Number(result.p.value), Number(result.alpha))} (${result.p.numerator} / ${result.p.denominator}), ${testNames[result.test] ?? result.test}; registered level ${result.alpha}</span>
-      <span>${effectOf(report)}</span>
-    </p>
+    <div class="flex flex-col gap-1 border-t-2 border-b border-t-ink border-b-rule py-5">
+      ${portrait.figures.map(
+        ({ value, label }, index) =>
+          html`<p><span class="${index === 0 ? 'font-mono text-figure font-semibold tracking-tight text-copper' : 'font-mono text-xl font-semibold'}">${value}</span> <span class="text-soft">${label}</span></p>`,
+      )}
+      <p class="text-soft">Registered level ${result.alpha}; exact p = ${result.p.numerator} / ${result.p.denominator}.</p>
+      <p>${portrait.note}</p>
+    </div>
   </div>`;
 }
 
@@ -47,7 +42,7 @@ function claims({ report: { finding }, withdrawn }: Publication): Html {
   );
 }
 
-function flow({ flow: of }: Report): Html {
+function flow({ flow: of, result }: Report): Html {
   return table(
     'From plan to count',
     ['What', 'Count'],
@@ -61,22 +56,20 @@ function flow({ flow: of }: Report): Html {
       ['Trials void', of.trialsVoid],
       ['Trials counted', of.trialsCounted],
       ['Answers due', of.answersExpected],
-      ['Answers missing, counted as wrong', of.answersMissing],
+      [`Answers missing, ${result.missingAnswers}`, of.answersMissing],
       ['Listeners', of.listeners],
       ['Listeners who left', of.listenersLeft],
     ],
   );
 }
 
-function listeners({ result }: Report): Html {
-  const rows = result.byListener.map(({ listener, correct, answers, missing, p, holmP }) => [
-    listener,
-    `${correct} of ${answers}`,
-    missing,
-    formatProbability(Number(p)),
-    formatProbability(Number(holmP)),
-  ]);
-  return table('By listener', ['Listener', 'Right', 'Missing', 'Exact p', 'p by Holm'], rows);
+function listeners(report: Report): Html {
+  const { columns, rows } = portraitOf(report).listeners;
+  return table(
+    'By listener',
+    ['Listener', ...columns.map(({ header }) => header)],
+    rows.map(({ listener, cells }) => [listener, ...cells]),
+  );
 }
 
 function session({
@@ -85,7 +78,7 @@ function session({
   startedAt,
   endedAt,
   listeners: seated,
-  labelA,
+  drawn,
   reason,
   trials,
 }: Report['sessions'][number]): Html {
@@ -99,7 +92,7 @@ function session({
   ]);
   return html`<li class="flex flex-col gap-3 border-t border-rule pt-4">
     <h3 class="text-lg">Session ${number}, ${phase}</h3>
-    <p class="text-soft">${count(seated, 'listener')}, ${times}.${labelA === null ? '' : ` A was ${labelA}.`}</p>
+    <p class="text-soft">${count(seated, 'listener')}, ${times}.${drawn === null ? '' : ` ${drawn}`}</p>
     ${reason === null ? null : html`<p class="font-semibold">Reason: ${reason}</p>`}
     ${rows.length === 0 ? null : table(`Trials of session ${number}`, ['Trial', 'Outcome', 'Excerpt', 'Drawn', 'Answers'], rows)}
   </li>`;

@@ -1,19 +1,15 @@
 import { useFormContext, useWatch } from 'react-hook-form';
 import type { Cable } from '#shared/contracts/cables.ts';
-import { methodOf, methods } from '#shared/methods/methods.ts';
 import { Notice } from '../../../ui/notice.tsx';
-import { SelectField } from '../../../ui/select-field.tsx';
 import { TextAreaField } from '../../../ui/text-area-field.tsx';
 import { TextField } from '../../../ui/text-field.tsx';
 import { FormSection } from './form-section.tsx';
+import { MethodFields } from './method-fields.tsx';
 import type { StudyFormValues } from './study-form-values.ts';
 import { tellingWords } from './telling-words.ts';
 
-const methodOptions = Object.values(methods).map(({ id, name }) => ({ value: id, label: name }));
-
 export function QuestionFields({ cables }: { cables: readonly Cable[] }) {
   const { register } = useFormContext<StudyFormValues>();
-  const method = useWatch<StudyFormValues, 'method'>({ name: 'method' });
   return (
     <FormSection title="What it asks">
       <div className="flex flex-col gap-3">
@@ -31,12 +27,7 @@ export function QuestionFields({ cables }: { cables: readonly Cable[] }) {
         rows={2}
         hint="What the study is to answer, in one sentence. Never shown to a listener or a proctor."
       />
-      <SelectField
-        {...register('method')}
-        label="Method"
-        options={methodOptions}
-        hint={`Listeners are told: “${methodOf(method).explanation}”`}
-      />
+      <MethodFields />
     </FormSection>
   );
 }

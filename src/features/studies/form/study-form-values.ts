@@ -1,5 +1,6 @@
 import type { z } from 'zod';
 import type { studyDraft } from '#shared/contracts/studies.ts';
+import { methodIds } from '#shared/methods/methods.ts';
 
 /** What the form holds while it is being typed; numbers that are not there yet are NaN. */
 export type StudyFormValues = z.input<typeof studyDraft>;
@@ -8,7 +9,8 @@ export type StudyFormValues = z.input<typeof studyDraft>;
 export const newStudyValues: StudyFormValues = {
   title: '',
   question: '',
-  method: 'abx',
+  method: methodIds[0],
+  methodSettings: [],
   cables: [
     { cableId: '', specimenIds: [] },
     { cableId: '', specimenIds: [] },

@@ -46,7 +46,7 @@ function WhatClosingDoes({ study }: { study: Study }) {
     <div className="flex flex-col gap-3">
       <p>Closing does three things, at once and for good:</p>
       <ul className="flex list-disc flex-col gap-1.5 pl-6">
-        <li>It opens both secrets: which code was which cable, and what X was in every trial.</li>
+        <li>It opens both secrets: which code was which cable, and what was drawn for every trial.</li>
         <li>It runs the registered analysis, once, and puts its result on the record, whatever it is.</li>
         <li>No further session can be held in this study.</li>
       </ul>

@@ -1,5 +1,6 @@
 import type { Study, StudyDraft } from '#shared/contracts/studies.ts';
 import { methodOf } from '#shared/methods/methods.ts';
+import { analysisFacts } from '#shared/protocol/analysis-facts.ts';
 import { formatCount } from '../../../lib/format.ts';
 import { percentOfPerMille, rigWords } from '../study-words.ts';
 
@@ -19,10 +20,12 @@ export function protocolFacts({ draft, cableNames, codeHolder }: Study): Protoco
     ),
     words('Listening', listeningWords(draft)),
     words('Spares', `${draft.spares} in each session`),
-    words('Test', `one-sided, exact, at ${percentOfPerMille(draft.alphaPerMille)}`),
-    words('Missing answers', 'count as wrong'),
-    words('Stopping', 'fixed number of trials'),
-    words('Exclusions', 'none'),
+    words('Level', percentOfPerMille(draft.alphaPerMille)),
+    ...analysisFacts({
+      ...methodOf(draft.method).registered(draft.methodSettings ?? []),
+      stopping: 'fixed number of trials',
+      exclusions: 'none',
+    }),
     ...draft.programme.map(({ title, start, lengthS }, index) =>
       words(`Excerpt ${index + 1}`, `${title}, ${lengthS} s${start === '' ? '' : ` from ${start}`}`),
     ),

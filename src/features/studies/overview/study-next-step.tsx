@@ -88,7 +88,7 @@ function SealedStep({ organisationId, study, places, upcoming }: StudyNextStepPr
       title={isCoded && upcoming ? upcomingTitle(upcoming) : title}
       actions={
         <>
-          <SessionActs upcoming={upcoming} planTo={places.planSession} />
+          <SessionActs upcoming={upcoming} planTo={places.planSession} toPlan={study.progress.sessionsToPlan} />
           <LinkButton to={places.codes}>See where the codes stand</LinkButton>
           <RecordDeviation organisationId={organisationId} studyId={study.id} />
         </>
@@ -109,7 +109,11 @@ function CollectingStep({ organisationId, study, places, upcoming, onClosed }: S
       title={titleOf(isReady, progress)}
       actions={
         <>
-          {isReady ? close : <SessionActs upcoming={upcoming} planTo={places.planSession} />}
+          {isReady ? (
+            close
+          ) : (
+            <SessionActs upcoming={upcoming} planTo={places.planSession} toPlan={study.progress.sessionsToPlan} />
+          )}
           <RecordDeviation organisationId={organisationId} studyId={study.id} />
         </>
       }

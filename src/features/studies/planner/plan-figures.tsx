@@ -24,10 +24,11 @@ export function PlanFigures({ plan }: { plan: Plan }) {
 const clockWords = (minutes: number) => formatDuration(minutes * 60_000);
 
 /** A group's test has no fixed limit, so its true level cannot be told beforehand either; it holds the one asked for. */
-function levelWords({ listeners, alpha, figures }: Plan): string {
-  const guessing = `Guessing is right ${percent(figures.chance)} of the time.`;
-  if (listeners > 1 || figures.critical === null) return `${guessing} The level asked for is ${percent(alpha)}.`;
-  return `${guessing} The level asked for is ${percent(alpha)}; counts being whole, the test really has ${percent(figures.critical.attainedSize)}.`;
+function levelWords({ method, listeners, alpha, alternative, figures }: Plan): string {
+  const side = alternative === 'two-sided' ? ', both sides together' : '';
+  const guessing = `${method.plan.guessing} ${percent(figures.chance)} of the time.`;
+  if (listeners > 1 || figures.critical === null) return `${guessing} The level asked for is ${percent(alpha)}${side}.`;
+  return `${guessing} The level asked for is ${percent(alpha)}${side}; counts being whole, the test really has ${percent(figures.critical.attainedSize)}.`;
 }
 
 function breakWords({ trialsPerSession }: Plan): string {

@@ -12,43 +12,45 @@ export function PlanHeadline({ plan }: { plan: Plan }) {
 
 function OwnDraws({ plan }: { plan: Plan }) {
   const { critical } = plan.figures;
+  const words = plan.method.plan;
   if (critical === null) return <OutOfReach plan={plan} />;
   return (
     <Headline>
-      Plan <Planned>{plan.trials} trials</Planned>. <Planned>{critical.count} right</Planned> are needed. If nobody
-      hears a difference, <Planned>{percent(critical.attainedSize)}</Planned> of such tests find one.
+      Plan <Planned>{plan.trials} trials</Planned>. <Planned>{words.needed(critical.count)}</Planned> {words.underNull}{' '}
+      <Planned>{percent(critical.attainedSize)}</Planned> of such tests find {words.found}.
     </Headline>
   );
 }
 
 function SharedDraws({ plan }: { plan: Plan }) {
-  const { leastAttainableP } = plan.figures;
+  const { leastAttainableP, leastPHalvings } = plan.figures;
+  const { counted } = plan.method.plan;
   return (
     <div className="flex flex-col gap-3">
       <Headline>
-        Plan <Planned>{plan.trials} trials</Planned>, each heard by {plan.listeners}. No fixed number of right answers
-        can be promised.
+        Plan <Planned>{plan.trials} trials</Planned>, each heard by {plan.listeners}. No fixed number of {counted} can
+        be promised.
       </Headline>
       <p>
         All listeners of a session hear the same presentations: there is one coin per trial, not one per answer. How
-        many right answers are needed depends on how alike the listeners answer; the registered test works it out at
+        many {counted} are needed depends on how alike the listeners answer; the registered test works it out at
         closing, exactly.
       </p>
       <p>
         The least p that {formatCount(plan.trials, 'trial')} can give is{' '}
-        <span className="font-mono">{formatProbability(leastAttainableP)}</span> (1 in {drawsOf(plan.trials)}), however
-        many listen. <strong>Plan trials, not heads.</strong>
+        <span className="font-mono">{formatProbability(leastAttainableP)}</span> (1 in {drawsOf(leastPHalvings)}),
+        however many listen. <strong>Plan trials, not heads.</strong>
       </p>
     </div>
   );
 }
 
 /** How many draws there are: written out as long as somebody reads it. */
-function drawsOf(trials: number): ReactNode {
-  if (trials <= 30) return formatNumber(2 ** trials);
+function drawsOf(halvings: number): ReactNode {
+  if (halvings <= 30) return formatNumber(2 ** halvings);
   return (
     <>
-      2<sup>{trials}</sup>
+      2<sup>{halvings}</sup>
     </>
   );
 }
@@ -56,8 +58,8 @@ function drawsOf(trials: number): ReactNode {
 function OutOfReach({ plan }: { plan: Plan }) {
   return (
     <Headline>
-      {formatCount(plan.trials, 'trial')} can never find a difference at {percent(plan.alpha)}: even with every answer
-      right, guessing does as well in {percent(plan.figures.leastAttainableP)} of tests. Plan more trials.
+      {formatCount(plan.trials, 'trial')} can never find {plan.method.plan.found} at {percent(plan.alpha)}:{' '}
+      {plan.method.plan.extreme} in {percent(plan.figures.leastAttainableP)} of tests. Plan more trials.
     </Headline>
   );
 }

@@ -1,13 +1,18 @@
 import { z } from 'zod';
 import { studyDraft } from '#shared/contracts/studies.ts';
+import type { Method } from '#shared/methods/method.ts';
+import { methodOf } from '#shared/methods/methods.ts';
 import { alphaText } from '#shared/protocol/protocol.ts';
-import { type AbxPlanFigures, abxPlanFigures } from '#shared/statistics/abx-plan.ts';
+import { type PlanFigures, planFigures } from '#shared/statistics/plan-figures.ts';
 import type { StudyFormValues } from '../form/study-form-values.ts';
 
-const { sessions, trials, listenersPerSession, alphaPerMille, changeS, answerS, programme } = studyDraft.shape;
+const { method, methodSettings, sessions, trials, listenersPerSession, alphaPerMille, changeS, answerS, programme } =
+  studyDraft.shape;
 
 /** The part of a draft that decides how much listening there is; it is planned as soon as this part is sound. */
 const listening = z.object({
+  method,
+  methodSettings,
   sessions,
   trials,
   listenersPerSession,
@@ -18,13 +23,17 @@ const listening = z.object({
 });
 
 export type Plan = {
+  method: Method;
+  settings: readonly string[];
+  /** Whether the level stands for one side or for both together. */
+  alternative: 'greater' | 'two-sided';
   sessions: number;
   trialsPerSession: number;
   /** Over all sessions: what the registered test pools. */
   trials: number;
   listeners: number;
   alpha: number;
-  figures: AbxPlanFigures;
+  figures: PlanFigures;
   /** Over all sessions. */
   fittings: number;
   minutesPerSession: number;
@@ -40,12 +49,16 @@ export function planOf(values: Partial<StudyFormValues>): Plan | null {
   if (!parsed.success) return null;
   const draft = parsed.data;
   const alpha = alphaText(draft.alphaPerMille);
-  const figures = abxPlanFigures({
+  const chosen = methodOf(draft.method);
+  const settings = draft.methodSettings ?? [];
+  const { alternative } = chosen.registered(settings);
+  const figures = planFigures({
     sessions: draft.sessions,
     trials: draft.trials,
     alpha,
+    alternative,
     listeners: draft.listenersPerSession,
-    presentationsPerTrial: 3,
+    presentationsPerTrial: chosen.presentations.length,
     changeMs: draft.changeS * 1000,
     listenMs: meanExcerptMs(draft.programme, draft.trials),
     answerMs: draft.answerS * 1000,
@@ -53,6 +66,9 @@ export function planOf(values: Partial<StudyFormValues>): Plan | null {
     breaks,
   });
   return {
+    method: chosen,
+    settings,
+    alternative,
     sessions: draft.sessions,
     trialsPerSession: draft.trials,
     trials: figures.trialsInAll,

@@ -13,7 +13,7 @@ export function PlanPower({ plan }: { plan: Plan }) {
           nobody knows beforehand.
         </p>
       ) : null}
-      <PowerTable power={plan.figures.power} />
+      <PowerTable power={plan.figures.power} words={plan.method.plan} />
     </section>
   );
 }

@@ -1,17 +1,22 @@
-import type { AbxPlanFigures } from '#shared/statistics/abx-plan.ts';
+import type { PlanWords } from '#shared/methods/method.ts';
+import type { PlanFigures } from '#shared/statistics/plan-figures.ts';
 import { percent, powerPercent } from './plan-words.ts';
 
-/** Three rates of right answers side by side, each with the chance that the test finds it. */
-export function PowerTable({ power }: Pick<AbxPlanFigures, 'power'>) {
+type PowerTableProps = Pick<PlanFigures, 'power'> & { words: Pick<PlanWords, 'found' | 'atRate'> };
+
+/** Three rates side by side, each with the chance that the test finds it. */
+export function PowerTable({ power, words }: PowerTableProps) {
   return (
     <table className="w-full border-collapse">
-      <caption className="sr-only">Chance of finding a difference, by how often a listener is right</caption>
+      <caption className="sr-only">
+        Chance of finding {words.found}, by the share of answers {words.atRate}
+      </caption>
       <thead>
         <tr className="border-b border-rule">
           <td />
           {power.map(({ correctRate }) => (
-            <th key={correctRate} scope="col" className="py-1.5 pl-3 text-right font-normal whitespace-nowrap">
-              {percent(correctRate)} right
+            <th key={correctRate} scope="col" className="py-1.5 pl-3 text-right align-bottom font-normal">
+              {percent(correctRate)} {words.atRate}
             </th>
           ))}
         </tr>

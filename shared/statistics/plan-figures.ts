@@ -4,18 +4,21 @@ import { parseDecimal } from './decimal.ts';
 import { requireBetween, requireWhole } from './domain.ts';
 import { compareFractions, fractionToNumber } from './fraction.ts';
 import { power } from './power.ts';
+import { twoSidedCriticalCount, twoSidedPower } from './two-sided-even.ts';
 
-export interface AbxPlan {
+export interface StudyPlan {
   /** Sittings, whole, 1 ... 100; the registered test pools their trials. */
   readonly sessions: number;
   /** Counted trials of one session, whole, 1 ... 1000. */
   readonly trials: number;
-  /** One-sided level as a decimal, strictly between 0 and 1: "0.05". */
+  /** Level as a decimal, strictly between 0 and 1: "0.05". */
   readonly alpha: string;
+  /** Whether the level stands for one side or for both together. */
+  readonly alternative: 'greater' | 'two-sided';
   /** Listeners who answer each trial of a session, whole, 1 ... 1000. */
   readonly listeners: number;
-  /** Cables fitted and heard per trial: A, B and X. */
-  readonly presentationsPerTrial: 3;
+  /** Cables fitted and heard per trial, 1 ... 10: three in ABX (A, B and X), two in a pair. */
+  readonly presentationsPerTrial: number;
   /** Registered length of every change of cable, real or sham, in milliseconds. */
   readonly changeMs: number;
   /** Length of each presentation. */
@@ -28,26 +31,28 @@ export interface AbxPlan {
   readonly breaks: { readonly everyTrials: number; readonly lengthMs: number } | null;
 }
 
-export interface AbxPlanFigures {
-  /** Chance of a right answer by guessing. */
+export interface PlanFigures {
+  /** Chance of an answer on the counted side by guessing. */
   readonly chance: number;
   /** Trials of all sessions: one draw each. */
   readonly trialsInAll: number;
   /** What one answer per trial must reach over all sessions; null when out of reach. */
   readonly critical: CriticalCount | null;
-  /** Power of that test at rates of right answers of 0.6, 0.7 and 0.8. */
+  /** Power of that test at rates of 0.6, 0.7 and 0.8: of right answers, or of answers for one cable. */
   readonly power: readonly { readonly correctRate: number; readonly power: number }[];
   /** False when several listeners share the presentations: then no fixed number of right answers can be promised. */
   readonly isCriticalCountBinding: boolean;
-  /** One over the number of possible draws: no test of this many trials gives a smaller p, however many listen. */
+  /** No test of this many trials gives a smaller p, however many listen: half to the power of `leastPHalvings`. */
   readonly leastAttainableP: number;
+  /** One per trial; one less when two draws, one on either side, are equally extreme. */
+  readonly leastPHalvings: number;
   readonly canReachAlpha: boolean;
-  readonly session: AbxSessionFigures;
+  readonly session: SessionFigures;
 }
 
 /** What one session takes. */
-export interface AbxSessionFigures {
-  /** Cables to be fitted: three per trial, and A and B once for familiarisation. */
+export interface SessionFigures {
+  /** Cables to be fitted: those of every trial, and both once for familiarisation. */
   readonly fittings: number;
   readonly familiarisationMs: number;
   readonly trialMs: number;
@@ -57,45 +62,47 @@ export interface AbxSessionFigures {
   readonly durationMinutes: number;
 }
 
-/** Familiarisation fits A and B once each; it does not count. */
+/** Familiarisation fits both cables once each; it does not count. */
 const familiarisationPresentations = 2;
 
 const displayedRates = [0.6, 0.7, 0.8];
 
 /**
- * What an ABX plan can show and what it takes, before it is sealed.
+ * What a plan can show and what it takes, before it is sealed.
  *
  * @param plan sessions, trials, level, listeners and the lengths of a trial's parts, in milliseconds
  * @returns the figures the planner shows; lengths in milliseconds unless the name says minutes
  * @throws RangeError when a value is outside the domain stated beside it
- * @example abxPlanFigures({ sessions: 1, trials: 16, alpha: '0.05', listeners: 1, presentationsPerTrial: 3,
- *   changeMs: 30_000, listenMs: 20_000, answerMs: 15_000, resetMs: 0, breaks: null })
+ * @example planFigures({ sessions: 1, trials: 16, alpha: '0.05', alternative: 'greater', listeners: 1,
+ *   presentationsPerTrial: 3, changeMs: 30_000, listenMs: 20_000, answerMs: 15_000, resetMs: 0, breaks: null })
  *   // critical 12 (size 0.0384), power 0.167, 0.450 and 0.798, 50 fittings, 165 s a trial,
  *   // 16 * 165 s = 44 min and 100 s for familiarisation: 46 min ; R: pbinom(11, 16, c(.6, .7, .8), lower.tail = FALSE)
  * @see power and criticalCount for the test and its sources; fittings and minutes are plain sums
  */
-export function abxPlanFigures(plan: AbxPlan): AbxPlanFigures {
+export function planFigures(plan: StudyPlan): PlanFigures {
   requirePlan(plan);
   const trialsInAll = plan.sessions * plan.trials;
   const exactAlpha = parseDecimal(plan.alpha);
   const alpha = fractionToNumber(exactAlpha);
-  const leastP = { numerator: 1n, denominator: 2n ** BigInt(trialsInAll) };
+  const isTwoSided = plan.alternative === 'two-sided';
+  const leastPHalvings = isTwoSided ? trialsInAll - 1 : trialsInAll;
+  const leastP = { numerator: 1n, denominator: 2n ** BigInt(leastPHalvings) };
+  const powerAt = (rate: number) =>
+    isTwoSided ? twoSidedPower(trialsInAll, alpha, rate) : power(trialsInAll, evenChance, alpha, rate);
   return {
     chance: evenChance.numerator / evenChance.denominator,
     trialsInAll,
-    critical: criticalCount(trialsInAll, evenChance, alpha),
-    power: displayedRates.map((correctRate) => ({
-      correctRate,
-      power: power(trialsInAll, evenChance, alpha, correctRate).power,
-    })),
+    critical: isTwoSided ? twoSidedCriticalCount(trialsInAll, alpha) : criticalCount(trialsInAll, evenChance, alpha),
+    power: displayedRates.map((correctRate) => ({ correctRate, power: powerAt(correctRate).power })),
     isCriticalCountBinding: plan.listeners === 1,
     leastAttainableP: fractionToNumber(leastP),
+    leastPHalvings,
     canReachAlpha: compareFractions(leastP, exactAlpha) <= 0,
     session: sessionFigures(plan),
   };
 }
 
-function sessionFigures(plan: AbxPlan): AbxSessionFigures {
+function sessionFigures(plan: StudyPlan): SessionFigures {
   const presentationMs = plan.changeMs + plan.listenMs;
   const familiarisationMs = familiarisationPresentations * presentationMs;
   const trialMs = plan.presentationsPerTrial * presentationMs + plan.answerMs;
@@ -113,11 +120,11 @@ function sessionFigures(plan: AbxPlan): AbxSessionFigures {
   };
 }
 
-function requirePlan(plan: AbxPlan): void {
+function requirePlan(plan: StudyPlan): void {
   requireWhole('sessions', plan.sessions, 1, 100);
   requireWhole('trials', plan.trials, 1, 1000);
   requireWhole('listeners', plan.listeners, 1, 1000);
-  requireWhole('presentationsPerTrial', plan.presentationsPerTrial, 3, 3);
+  requireWhole('presentationsPerTrial', plan.presentationsPerTrial, 1, 10);
   requireBetween('alpha', fractionToNumber(parseDecimal(plan.alpha)), 0, 1, 'open');
   for (const name of ['changeMs', 'listenMs', 'answerMs', 'resetMs'] as const)
     requireWhole(name, plan[name], 0, 3_600_000);

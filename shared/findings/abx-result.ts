@@ -1,14 +1,7 @@
 import { z } from 'zod';
-import { recordDecimalPattern } from './record-decimal.ts';
+import { count, decimal, interval, resultFrame } from './result-frame.ts';
 
-// What the registered analysis comes to, as it stands on the record: whole numbers and decimal text only.
-
-const decimal = z.string().regex(recordDecimalPattern);
 const limit = z.union([decimal, z.literal('Infinity')]);
-const count = z.int().min(0);
-const digits = z.string().regex(/^\d+$/);
-
-const interval = z.strictObject({ confidence: decimal, lower: decimal, upper: decimal });
 const sensitivity = z.strictObject({ dPrime: limit, lower: limit, upper: limit });
 
 export const listenerResult = z.strictObject({
@@ -45,35 +38,18 @@ export const pooledEstimates = z.strictObject({
 });
 export type PooledEstimates = z.output<typeof pooledEstimates>;
 
-export const registeredResult = z.strictObject({
+/** What the registered analysis of an ABX study comes to, as it stands on the record. */
+export const abxResult = z.strictObject({
+  ...resultFrame,
   method: z.literal('abx'),
-  randomisation: z.literal('independent fair draw per trial'),
-  stopping: z.literal('fixed number of trials'),
   missingAnswers: z.literal('counted as wrong'),
+  /** The level is one-sided. */
   alternative: z.literal('greater'),
-  test: z.enum(['exact-binomial', 'shared-presentations']),
-  chance: z.strictObject({ numerator: z.literal(1), denominator: z.literal(2) }),
-  /** As registered, one-sided. */
-  alpha: z.string(),
-  listenersPerSession: count,
-  sessions: count,
-  trials: count,
-  listeners: count,
-  answers: count,
-  missing: count,
   correct: count,
-  p: z.strictObject({ numerator: digits, denominator: digits, value: decimal }),
-  isSignificant: z.boolean(),
   /** Chance of so few right answers or fewer, missing answers left out; at .01 or less the labels are suspect. */
   lowerTail: decimal,
   isBelowGuessing: z.boolean(),
-  /** Draws that could change the count, and the smallest p they allow. */
-  coins: count,
-  leastAttainableP: decimal,
-  canReachAlpha: z.boolean(),
-  /** What the binomial test had to reach; null in a group, where no fixed number can be promised. */
-  critical: z.strictObject({ count: z.int(), attainedSize: decimal }).nullable(),
   byListener: z.array(listenerResult),
   estimates: pooledEstimates.nullable(),
 });
-export type RegisteredResult = z.output<typeof registeredResult>;
+export type AbxResult = z.output<typeof abxResult>;

@@ -1,0 +1,44 @@
+/** What a report shows of a registered result, in its method's words: text, and numbers to draw. */
+export type Portrait = {
+  /** The first leads. */
+  readonly figures: readonly { readonly value: string; readonly label: string }[];
+  /** Below the figures. */
+  readonly note: string;
+  /** Beside the finding, with the other conditions. */
+  readonly conditions: readonly { readonly label: string; readonly value: string }[];
+  readonly distribution: {
+    readonly title: string;
+    readonly lede: readonly string[];
+    readonly observed: number;
+    /** What is counted: "Right answers out of 48". */
+    readonly quantity: string;
+    /** The least count that is a finding. */
+    readonly limit?: number;
+    /** Counts at or beyond these lie as far from the middle as the observed one; their chances add up to p. */
+    readonly beyond?: { readonly low: number; readonly high: number };
+    /** Whose chance a bar shows: "Chance by guessing". */
+    readonly chanceOf: string;
+  };
+  readonly listeners: {
+    readonly lede: string;
+    readonly columns: readonly { readonly header: string; readonly isFigure: boolean }[];
+    readonly rows: readonly {
+      readonly listener: string;
+      readonly cells: readonly string[];
+      /** Why this listener may be named, or null. */
+      readonly named: string | null;
+    }[];
+    readonly chart: {
+      readonly caption: string;
+      readonly quantity: string;
+      /** What the line stands for, before its value: "guessing". */
+      readonly middle: string;
+      readonly rows: readonly {
+        readonly label: string;
+        readonly value: number;
+        readonly low: number;
+        readonly high: number;
+      }[];
+    };
+  };
+};

@@ -1,0 +1,25 @@
+import type { Protocol } from '../protocol/protocol.ts';
+import { countedTrials, type HeldChoice } from '../session/counted-trials.ts';
+import type { RevealedKey } from '../session/revealed-key.ts';
+import type { SessionState } from '../session/state.ts';
+import { methodOf, type RegisteredResult } from './methods.ts';
+
+/**
+ * The registered analysis of a study: a pure function of its sealed protocol and its record.
+ *
+ * @throws RangeError when the protocol registers an analysis that this version does not have
+ */
+export function runRegistered(
+  { method: id, analysis, design }: Protocol,
+  states: readonly SessionState[],
+  key: RevealedKey,
+  held: readonly HeldChoice[],
+): RegisteredResult {
+  const method = methodOf(id);
+  const { name } = method.registered(design.methodSettings ?? []);
+  if (analysis.name !== name) throw new RangeError(`the protocol registers ${analysis.name}; this version has ${name}`);
+  return method.analyse(
+    { analysis, listenersPerSession: design.listenersPerSession },
+    countedTrials(method, states, key, held),
+  );
+}

@@ -1,0 +1,17 @@
+import type { RegisteredAnalysis } from './registered-analysis.ts';
+
+type Registered = Pick<RegisteredAnalysis, 'alternative' | 'missing' | 'undecided' | 'stopping' | 'exclusions'>;
+
+/** What is registered about the analysis, in the words of every page that shows a protocol. */
+export function analysisFacts(analysis: Registered): { label: string; value: string }[] {
+  const { alternative, missing, undecided, stopping, exclusions } = analysis;
+  return [
+    { label: 'Test', value: `exact, ${alternative === 'greater' ? 'one-sided' : 'two-sided'}` },
+    { label: 'Missing answers', value: missing },
+    ...(undecided === undefined
+      ? []
+      : [{ label: 'No preference', value: `offered, ${undecided} of the test and stated` }]),
+    { label: 'Stopping', value: stopping },
+    { label: 'Exclusions', value: exclusions },
+  ];
+}

@@ -1,0 +1,16 @@
+import { z } from 'zod';
+
+/** The registered analysis as a value: what is run once at closing, fixed before data. Part of the sealed protocol. */
+export const registeredAnalysis = z.strictObject({
+  /** The method's module and the version of its analysis, such as 'abx/1'. */
+  name: z.string(),
+  /** Significance level as decimal text. */
+  alpha: z.string(),
+  alternative: z.enum(['greater', 'two-sided']),
+  missing: z.enum(['counted as wrong', 'left out']),
+  /** Answers that state no preference; there only where the study offers that answer. */
+  undecided: z.literal('left out').optional(),
+  stopping: z.literal('fixed number of trials'),
+  exclusions: z.literal('none'),
+});
+export type RegisteredAnalysis = z.output<typeof registeredAnalysis>;

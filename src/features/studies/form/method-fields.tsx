@@ -1,0 +1,38 @@
+import { useController, useFormContext } from 'react-hook-form';
+import { methodOf, methods } from '#shared/methods/methods.ts';
+import { CheckboxField } from '../../../ui/checkbox-field.tsx';
+import { SelectField } from '../../../ui/select-field.tsx';
+import type { StudyFormValues } from './study-form-values.ts';
+
+const methodOptions = Object.values(methods).map(({ id, name }) => ({ value: id, label: name }));
+
+/** The method, and whatever it leaves to the study. Another method starts with its settings off. */
+export function MethodFields() {
+  const { register, setValue, watch } = useFormContext<StudyFormValues>();
+  const { field, fieldState } = useController<StudyFormValues, 'methodSettings'>({ name: 'methodSettings' });
+  const method = methodOf(watch('method'));
+  const chosen = field.value ?? [];
+  const turn = (id: string, isOn: boolean) =>
+    field.onChange([...chosen.filter((other) => other !== id), ...(isOn ? [id] : [])]);
+  return (
+    <div className="flex flex-col gap-3">
+      <SelectField
+        {...register('method', { onChange: () => setValue('methodSettings', [], { shouldDirty: true }) })}
+        label="Method"
+        options={methodOptions}
+        hint={`Listeners are told: “${method.explanation}”`}
+      />
+      {method.settings.map(({ id, label, hint }) => (
+        <CheckboxField
+          key={id}
+          label={label}
+          hint={hint}
+          error={fieldState.error?.message}
+          checked={chosen.includes(id)}
+          onChange={(event) => turn(id, event.target.checked)}
+          onBlur={field.onBlur}
+        />
+      ))}
+    </div>
+  );
+}
