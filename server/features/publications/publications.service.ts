@@ -194,18 +194,17 @@ export function getPublication({ db, config }: Deps, id: string): Promise<Public
   return withTransaction(db, async (tx) => {
     const row = await store.findPublication(tx, id);
     if (row === null) throw nothingPublished();
-    const read = kept.get(row.digest) ?? readDocument(row.digest, (await store.documentOf(tx, id)) ?? '');
+    const read = kept.get(row.digest) ?? readDocument(row.digest, (await store.documentOf(tx, id, row.digest)) ?? '');
     return publicationView({ row, publicUrl: config.publicUrl, ...read });
   });
 }
 
-/** The frozen document, byte for byte. @throws Problem `not-found` */
-export function getDocument({ db }: Deps, id: string): Promise<{ document: string; digest: string }> {
+/** The frozen document, byte for byte. @throws Problem `not-found`, also where the digest is another one */
+export function getDocument({ db }: Deps, id: string, digest: string): Promise<string> {
   return withTransaction(db, async (tx) => {
-    const row = await store.findPublication(tx, id);
-    const document = row === null ? null : await store.documentOf(tx, id);
-    if (row === null || document === null) throw nothingPublished();
-    return { document, digest: row.digest };
+    const document = await store.documentOf(tx, id, digest);
+    if (document === null) throw nothingPublished();
+    return document;
   });
 }
 

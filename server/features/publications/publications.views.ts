@@ -12,8 +12,8 @@ import type { Publication } from './publication.entity.ts';
 
 /** Where a publication stands, for good. */
 export const publicPath = (id: string) => `/p/${id}`;
-/** Where its frozen document is. */
-export const filePath = (id: string) => `${publicPath(id)}/publication.json`;
+/** Where its frozen document is: the address names the digest, so that what stands there can never change. */
+export const filePath = (id: string, digest: string) => `${publicPath(id)}/${digest}.json`;
 
 const withdrawalOf = ({ withdrawnAt, withdrawnReason }: Publication) =>
   withdrawnAt === null ? null : { at: withdrawnAt.toISOString(), reason: withdrawnReason ?? '' };
@@ -76,7 +76,7 @@ export function publicationView({ row, publicUrl, protocol, report, declared }: 
     statements: { paid, supplied, ties },
     confirmations: declared.confirmations.map((name) => confirmations[name]),
     conditions: conditionsOf(protocol, report),
-    file: { digest, bytes, path: filePath(id) },
+    file: { digest, bytes, path: filePath(id, digest) },
     report,
   };
 }
