@@ -128,7 +128,7 @@ function factsOf({ design, conduct, analysis, cables, method }: Protocol): Repor
     { label: 'Sessions', value: String(design.sessions) },
     { label: 'Listeners per session', value: String(design.listenersPerSession) },
     { label: 'Trials per session', value: `${design.trials}, ${design.spares} spare` },
-    { label: 'Level', value: analysis.alpha },
+    { label: 'Significance level', value: analysis.alpha },
     ...analysisFacts(analysis),
     { label: 'Change', value: `${conduct.changeS} s, real or sham` },
     { label: 'Answer window', value: `${conduct.answerS} s` },
