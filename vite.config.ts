@@ -8,13 +8,23 @@ export default defineConfig({
   plugins: [react(), tailwindcss()],
   build: { outDir: 'dist/client', manifest: true, sourcemap: false, chunkSizeWarningLimit: 700 },
   server: {
-    proxy: { '/api': server, '/socket.io': { target: server, ws: true } },
+    proxy: {
+      '/api': server,
+      '/socket.io': { target: server, ws: true },
+      // Frozen documents and what leads search engines come from the server; the pages themselves from here.
+      '^/p/[^/]+/[0-9a-f]+\\.json$': server,
+      '^/(sitemap\\.xml|robots\\.txt)$': server,
+    },
   },
   test: {
     projects: [
       {
         extends: true,
-        test: { name: 'unit', include: ['tests/shared/**/*.test.ts', 'tests/guards/**/*.test.ts'] },
+        test: {
+          name: 'unit',
+          testTimeout: 30_000,
+          include: ['tests/shared/**/*.test.ts', 'tests/src/**/*.test.ts', 'tests/guards/**/*.test.ts'],
+        },
       },
       {
         extends: true,

@@ -13,7 +13,9 @@ export type RandomPurpose =
   | 'draw-salt'
   | 'seat-token'
   | 'session-code'
-  | 'password-salt';
+  | 'publication-id'
+  | 'password-salt'
+  | 'link-token';
 
 export type Random = {
   bytes(purpose: RandomPurpose, count: number): Buffer;

@@ -1,16 +1,22 @@
 import { CodeKey } from './blind/code-key.entity.ts';
 import { DrawSecret } from './blind/draw-secret.entity.ts';
+import { PasswordReset } from './features/account/password-reset.entity.ts';
 import { Cable } from './features/cables/cable.entity.ts';
 import { Specimen } from './features/cables/specimen.entity.ts';
+import { Invitation } from './features/invitations/invitation.entity.ts';
 import { Membership } from './features/organisations/membership.entity.ts';
 import { Organisation } from './features/organisations/organisation.entity.ts';
+import { PastRole } from './features/organisations/past-role.entity.ts';
+import { Publication } from './features/publications/publication.entity.ts';
 import { Answer } from './features/sessions/answer.entity.ts';
 import { Seat } from './features/sessions/seat.entity.ts';
 import { Session } from './features/sessions/session.entity.ts';
+import { SignInAttempt } from './features/sign-in/sign-in-attempt.entity.ts';
 import { WebSession } from './features/sign-in/web-session.entity.ts';
 import { Study } from './features/studies/study.entity.ts';
 import { User } from './features/users/user.entity.ts';
 import { RecordEntry } from './ledger/entry.entity.ts';
+import { OutgoingMail } from './mail/outgoing-mail.entity.ts';
 
 /** Every table. */
 export const entities = [
@@ -27,4 +33,10 @@ export const entities = [
   Answer,
   CodeKey,
   DrawSecret,
+  Publication,
+  OutgoingMail,
+  Invitation,
+  PasswordReset,
+  SignInAttempt,
+  PastRole,
 ];

@@ -1,10 +1,15 @@
 import 'reflect-metadata';
+import { join } from 'node:path';
 import { pino } from 'pino';
 import { readConfig } from './config.ts';
 import { createDataSource } from './db/data-source.ts';
+import { closeDemo } from './demo/close-demo.ts';
 import { demoPeople } from './demo/demo-people.ts';
 import { loadDemo } from './demo/load-demo.ts';
 import type { Deps } from './deps.ts';
+import { pageAddresses } from './mail/page-addresses.ts';
+import { onTheNetwork } from './network/on-the-network.ts';
+import { ownCertificate } from './network/own-certificate.ts';
 import { serve } from './serve.ts';
 import { systemClock, systemRandom } from './system.ts';
 
@@ -26,12 +31,29 @@ async function main(): Promise<void> {
     await db.runMigrations();
   });
   if (config.demo) await step('demo', () => loadDemo(deps));
-  const server = await step('server', () => serve(deps));
+  else await closeDemo(db);
+  const { lan } = config;
+  const certificate =
+    lan === null
+      ? null
+      : await step('certificate', () => ownCertificate(join(config.dataDir, 'tls'), lan.addresses, Date.now()));
+  const server = await step('server', () => serve(deps, certificate));
 
   say(`\nFairlead is at ${config.publicUrl}`);
+  if (certificate !== null && server.tlsPort !== null)
+    say(await onTheNetwork(config.publicUrl, server.tlsPort, certificate));
   if (config.demo) {
-    say('\nSign in as:');
+    say(
+      lan === null
+        ? '\nSign in as:'
+        : `\nSign in as (browsers show these on this machine only, at http://127.0.0.1:${config.port}):`,
+    );
     for (const { email, password, duty } of demoPeople) say(`  ${email.padEnd(28)}${password.padEnd(20)}${duty}`);
+  }
+  const token = config.demo ? null : await server.firstOwner.offer();
+  if (token !== null) {
+    say('\nNobody owns this Fairlead yet. Create your organisation with this link; it works once:');
+    say(`  ${pageAddresses.firstOwner(config, token)}`);
   }
   say('\nCtrl-C stops it.');
 

@@ -1,35 +1,60 @@
 import { createServer, type Server } from 'node:http';
+import { createServer as createTlsServer } from 'node:https';
 import type { AddressInfo } from 'node:net';
 import { createApp } from './app.ts';
 import type { Deps } from './deps.ts';
+import { forgetOldAttempts } from './features/account/account.service.ts';
+import { forgetExpiredResets } from './features/account/password-resets.service.ts';
 import { forgetExpired } from './http/sign-in.ts';
 import { serveSockets } from './live/socket-server.ts';
+import { forgetOldTexts, Postman } from './mail/postman.ts';
+import type { OwnCertificate } from './network/own-certificate.ts';
 
 const hourMs = 60 * 60 * 1000;
 
-function listen(http: Server, port: number, host: string): Promise<number> {
+function listen(http: Pick<Server, 'once' | 'listen' | 'address'>, port: number, host: string): Promise<number> {
   return new Promise((resolve, reject) => {
     http.once('error', reject);
     http.listen(port, host, () => resolve((http.address() as AddressInfo).port));
   });
 }
 
-/** Opens the port, takes up the sessions that were open, and returns how to stop. Port 0 takes any free one. */
-export async function serve(deps: Deps) {
-  const { app, sittings, signedIn, mounted } = createApp(deps);
-  const http = createServer(app);
-  const io = serveSockets(http, deps, sittings, signedIn);
-  await sittings.resumeAll();
+async function sweep(deps: Deps): Promise<void> {
   await forgetExpired(deps.db, deps.clock.now());
+  await forgetOldTexts(deps);
+  await forgetExpiredResets(deps);
+  await forgetOldAttempts(deps);
+}
+
+/**
+ * Opens the port, takes up the sessions that were open, and returns how to stop. Port 0 takes any free one. With a
+ * certificate the same is served under TLS, on a port beside it.
+ */
+export async function serve(deps: Deps, certificate: Pick<OwnCertificate, 'key' | 'cert'> | null = null) {
+  const { app, sittings, signedIn, mounted, consoles, firstOwner } = createApp(deps);
+  const http = createServer(app);
+  const https = certificate === null ? null : createTlsServer({ key: certificate.key, cert: certificate.cert }, app);
+  const io = serveSockets(http, deps, sittings, signedIn);
+  if (https !== null) io.engine.attach(https, { path: io.path() });
+  consoles.watch(io);
+  await sittings.resumeAll();
+  await sweep(deps);
   const sweeping = setInterval(() => {
-    forgetExpired(deps.db, deps.clock.now()).catch((error) => deps.log.error({ err: error }, 'sweeping failed'));
+    sweep(deps).catch((error) => deps.log.error({ err: error }, 'sweeping failed'));
   }, hourMs);
-  const port = await listen(http, deps.config.port, deps.config.host);
+  const postman = deps.config.smtp === null ? null : new Postman(deps, deps.config.smtp);
+  postman?.start();
+  const { config } = deps;
+  const port = await listen(http, config.port, config.host);
+  const tlsPort = https === null ? null : await listen(https, config.lan?.tlsPort ?? 0, config.host);
   const stop = async () => {
     clearInterval(sweeping);
+    await postman?.stop();
     await sittings.stop();
     await io.close();
     http.closeAllConnections();
+    https?.close();
+    https?.closeAllConnections();
   };
-  return { port, stop, sittings, mounted };
+  return { port, tlsPort, stop, sittings, mounted, firstOwner };
 }

@@ -5,6 +5,7 @@ cd "$(dirname "${BASH_SOURCE[0]}")/../.."
 # shellcheck source=server/bin/machine.sh
 source server/bin/machine.sh
 follow_npm "$@"
+read_flags "$@"
 
 pids=()
 finish() {

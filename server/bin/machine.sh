@@ -107,6 +107,18 @@ end_launched() {
   kill -KILL -- "-$pid" 2>/dev/null || return 0
 }
 
+# A flag wins over what the environment and .env say.
+read_flags() {
+  local flag
+  for flag in "$@"; do
+    case $flag in
+      --no-demo) export FAIRLEAD_DEMO=off ;;
+      --lan) export FAIRLEAD_LAN=on HOST=0.0.0.0 ;;
+      *) give_up "\"$flag\" is not a flag of Fairlead; there are two: npm start -- --no-demo and npm start -- --lan" ;;
+    esac
+  done
+}
+
 # --- What must be there first ----------------------------------------------------------------------------------------
 
 require_node() {

@@ -1,10 +1,13 @@
 #!/usr/bin/env bash
 # npm start: makes a bare Debian 12 with Node ready and serves Fairlead until it is told to stop.
+# npm start -- --lan: the same for phones on the local network, with TLS beside plain http.
+# npm start -- --no-demo: the same without the demo; the first start prints a link that creates organisation and owner.
 set -euo pipefail
 cd "$(dirname "${BASH_SOURCE[0]}")/../.."
 # shellcheck source=server/bin/machine.sh
 source server/bin/machine.sh
 follow_npm "$@"
+read_flags "$@"
 
 server_pid=''
 
@@ -22,6 +25,11 @@ trap finish EXIT
 trap 'exit 130' INT TERM HUP
 
 prepare_home
+[[ ${FAIRLEAD_LAN:-off} == off ]] || {
+  export TLS_PORT=${TLS_PORT:-4443}
+  require_free_port TLS_PORT "$HOST" "$TLS_PORT"
+  need_from_debian openssl:openssl
+}
 step client build_client
 
 export NODE_ENV=${NODE_ENV:-production}

@@ -1,6 +1,6 @@
 #!/usr/bin/env bash
 # npm test: everything the tests need on a bare Debian 12 with Node, then all of them. The last line counts them.
-# With an argument (unit, api, e2e) only that group.
+# With an argument (unit, api, e2e) only that group; with bench the ratios instead of the tests.
 set -euo pipefail
 cd "$(dirname "${BASH_SOURCE[0]}")/../.."
 # shellcheck source=server/bin/machine.sh
@@ -8,8 +8,9 @@ source server/bin/machine.sh
 follow_npm "$@"
 
 only=${1:-all}
-case $only in all | unit | api | e2e) ;; *) give_up "Unknown group \"$only\". Choose unit, api or e2e, or none for all." ;; esac
+case $only in all | unit | api | e2e | bench) ;; *) give_up "Unknown group \"$only\". Choose unit, api, e2e or bench, or none for all." ;; esac
 wants() { [[ $only == all || $only == "$1" ]]; }
+wants_bench() { [[ $only == bench ]]; }
 
 reports=''
 passed=0
@@ -57,6 +58,11 @@ run_browser() {
   count_report "$reports/e2e.json" "$status"
 }
 
+# The check values themselves, computed again in R.
+run_reference() {
+  if attend Rscript tests/fixtures/reference/reference.R; then passed=$((passed + 1)); else failed=$((failed + 1)); fi
+}
+
 check() {
   attend node node_modules/@biomejs/biome/bin/biome ci . && attend node node_modules/typescript/bin/tsc -b
 }
@@ -76,10 +82,17 @@ step database open_database --skip-networking --innodb-flush-log-at-trx-commit=0
 export TEST_DATABASE_SOCKET=$database_home/mariadb/mariadb.sock TEST_DATABASE_USER=$database_user \
   TEST_DATABASE_PASSWORD=$database_password
 
+if wants_bench; then
+  attend node --import tsx tests/bench/bench.ts
+  exit
+fi
 if [[ $only == all ]]; then
   if check; then passed=$((passed + 1)); else failed=$((failed + 1)); fi
 fi
-! wants unit || run_vitest unit
+if wants unit; then
+  run_vitest unit
+  run_reference
+fi
 ! wants api || run_vitest api
 if wants e2e; then
   step client build_client

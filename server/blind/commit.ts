@@ -12,7 +12,8 @@ function fairThreeDigits(random: Random): number {
   }
 }
 
-function drawCodes(random: Random, count: number): string[] {
+/** Three-digit codes that may stand beside one another. */
+export function drawCodes(random: Random, count: number): string[] {
   const drawn: string[] = [];
   while (drawn.length < count) {
     const code = String(fairThreeDigits(random)).padStart(3, '0');

@@ -1,8 +1,10 @@
 import type { Role } from '#shared/contracts/endpoint.ts';
 
+export type DemoPersonKey = 'owner' | 'manager' | 'codeHolder' | 'proctor' | 'reviewer';
+
 /** The demo's people. Their passwords are no secret: they open invented data, and are shown on the demo's own machine only. */
 export const demoPeople: readonly {
-  key: 'owner' | 'manager' | 'codeHolder' | 'proctor' | 'reviewer';
+  key: DemoPersonKey;
   name: string;
   duty: string;
   email: string;
@@ -12,7 +14,7 @@ export const demoPeople: readonly {
   {
     key: 'manager',
     name: 'Maren Oduya',
-    duty: 'Product manager: plans, seals, closes, reads the report',
+    duty: 'Product manager: plans, seals, closes, reads the report, publishes',
     email: 'manager@fairlead.example',
     password: 'open-the-sleeve-1',
     role: 'manager',

@@ -87,8 +87,24 @@ export const closedStudy: Free = {
 /** Closed as well: which of the two they prefer, with “no preference” on offer. */
 export const closedPreference: Free = {
   ...closedStudy,
-  title: 'Study Turnstone',
+  title: 'Study Sanderling',
   question: 'Do listeners prefer one of the two 6 m runs in this room?',
   method: 'paired-preference',
   methodSettings: ['no-preference'],
+};
+
+/** Published: one listener at a time, so that the effect has an interval; one session was abandoned before its trials. */
+export const publishedStudy: Free = {
+  ...closedStudy,
+  title: 'Study Turnstone',
+  question: 'Do listeners, one at a time, tell a 0.5 mm² run of 6 m from one of 4 mm² into 4 Ω?',
+  sessions: 3,
+  listenersPerSession: 1,
+  trials: 8,
+};
+
+export const publishedStatements = {
+  paid: 'Skerry Line Works, which makes both cables, paid for the study out of its own funds.',
+  supplied: 'Skerry Line Works. Both specimens of each cable were taken from stock by the code holder, unopened.',
+  ties: 'The manager, the proctor and the code holder are employed by Skerry Line Works. The listeners are customers of a neighbouring shop and were not paid.',
 };

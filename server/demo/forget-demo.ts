@@ -2,19 +2,27 @@ import { type DataSource, In } from 'typeorm';
 import { withTransaction } from '../db/transaction.ts';
 import { Cable } from '../features/cables/cable.entity.ts';
 import { Specimen } from '../features/cables/specimen.entity.ts';
+import { Invitation } from '../features/invitations/invitation.entity.ts';
 import { Membership } from '../features/organisations/membership.entity.ts';
 import { Organisation } from '../features/organisations/organisation.entity.ts';
+import { PastRole } from '../features/organisations/past-role.entity.ts';
+import { Publication } from '../features/publications/publication.entity.ts';
 import { User } from '../features/users/user.entity.ts';
+import { OutgoingMail } from '../mail/outgoing-mail.entity.ts';
 import { demoPeople } from './demo-people.ts';
 
-/** Removes a demo whose making was cut short: its people, cables and organisation. Its studies were never shown to anyone. */
+/** Removes a demo whose making was cut short: its people, cables and organisation. Its studies were never shown to anyone, nor is what it published. */
 export function forgetDemo(db: DataSource, organisationId: string): Promise<void> {
   return withTransaction(db, async (tx) => {
     const cables = await tx.findBy(Cable, { organisationId });
     if (cables.length > 0) await tx.delete(Specimen, { cableId: In(cables.map(({ id }) => id)) });
     await tx.delete(Cable, { organisationId });
+    await tx.delete(OutgoingMail, { organisationId });
+    await tx.delete(Invitation, { organisationId });
+    await tx.delete(PastRole, { organisationId });
     await tx.delete(Membership, { organisationId });
     await tx.delete(User, { email: In(demoPeople.map(({ email }) => email)) });
+    await tx.delete(Publication, { organisationId });
     await tx.delete(Organisation, { id: organisationId });
   });
 }

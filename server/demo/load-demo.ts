@@ -2,23 +2,29 @@ import type { StudyDraft } from '#shared/contracts/studies.ts';
 import { withTransaction } from '../db/transaction.ts';
 import type { Deps } from '../deps.ts';
 import { addSpecimen, createCable, getCable } from '../features/cables/cables.service.ts';
-import { confirmCodes, drawCodes, openCodes } from '../features/codes/codes.service.ts';
 import { Membership } from '../features/organisations/membership.entity.ts';
 import { Organisation } from '../features/organisations/organisation.entity.ts';
-import { planSession } from '../features/sessions/sessions.service.ts';
 import { closeStudy } from '../features/studies/closing.service.ts';
-import { createStudy, sealStudy } from '../features/studies/studies.service.ts';
 import { studiesOf } from '../features/studies/studies.store.ts';
 import { hashPassword } from '../features/users/passwords.ts';
 import { User } from '../features/users/user.entity.ts';
 import { Sittings } from '../live/sittings.ts';
 import { demoPeople } from './demo-people.ts';
-import { closedPreference, closedStudy, demoCables, demoOrganisation, studyToRun } from './demo-scenario.ts';
+import {
+  closedPreference,
+  closedStudy,
+  demoCables,
+  demoOrganisation,
+  publishedStudy,
+  studyToRun,
+} from './demo-scenario.ts';
 import { forgetDemo } from './forget-demo.ts';
 import { HandClock } from './hand-clock.ts';
+import { type People, prepareStudy } from './prepare-study.ts';
+import { runPublishedStudy } from './published-study.ts';
 import { type Hearing, SimulatedSession } from './simulated-session.ts';
 
-type People = Record<(typeof demoPeople)[number]['key'], string>;
+const dayMs = 24 * 3_600_000;
 
 async function makePeople(deps: Deps, organisationId: string): Promise<People> {
   const createdAt = new Date(deps.clock.now());
@@ -46,20 +52,6 @@ async function makeCables(deps: Deps, organisationId: string): Promise<StudyDraf
   const [first, second] = chosen;
   if (first === undefined || second === undefined) throw new Error('the demo needs two cables');
   return [first, second];
-}
-
-/** Draft, seal, codes and one planned session: a study ready to run. */
-async function prepareStudy(deps: Deps, organisationId: string, people: People, draft: StudyDraft) {
-  const study = await createStudy(deps, organisationId, people.manager, draft);
-  const where = { organisationId, id: study.id };
-  await sealStudy(deps, where, people.manager);
-  const holder = { userId: people.codeHolder, role: 'reviewer' };
-  await drawCodes(deps, where, holder);
-  await openCodes(deps, where, holder, 'labels');
-  await confirmCodes(deps, where, holder);
-  const plannedAt = new Date(deps.clock.now() + 3_600_000).toISOString();
-  const session = await planSession(deps, where, { plannedAt, room: 'Listening room', proctorId: people.proctor });
-  return { where, sessionId: session.id };
 }
 
 /** Simulated listeners: each hears the difference in some trials and guesses in the others; one answer stays out. */
@@ -106,23 +98,25 @@ async function runClosedStudy(
 }
 
 /**
- * Makes the demo once: an organisation, its people and cables, one study ready to run and one closed for each method, all through the
- * program's own services, so that their records verify. A demo that was cut short is made anew.
+ * Makes the demo once: an organisation, its people and cables, a study that is published, one closed for each method and
+ * one ready to run, all through the program's own services, so that their records verify. The last is made last: a demo
+ * without it was cut short, and is made anew.
  */
 export async function loadDemo(deps: Deps): Promise<void> {
   const existing = await deps.db.manager.findOneBy(Organisation, { demo: true });
   if (existing !== null) {
     const studies = await studiesOf(deps.db.manager, existing.id);
-    // Made last, so it is there once everything is.
     if (studies.some(({ title }) => title === studyToRun.title)) return;
     await forgetDemo(deps.db, existing.id);
   }
-  const clock = new HandClock(deps.clock.now() - 3 * 24 * 3_600_000);
+  const clock = new HandClock(deps.clock.now() - 9 * dayMs);
   const past: Deps = { ...deps, clock };
   const organisationId = deps.random.id();
   const people = await makePeople(past, organisationId);
   const cables = await makeCables(past, organisationId);
   const codeHolderId = people.codeHolder;
+  await runPublishedStudy(past, clock, organisationId, people, { ...publishedStudy, cables, codeHolderId });
+  clock.advance(deps.clock.now() - 3 * dayMs - clock.now());
   await runClosedStudy(past, clock, organisationId, people, { ...closedStudy, cables, codeHolderId }, matching);
   clock.advance(3_600_000);
   const preferred = { ...closedPreference, cables, codeHolderId };

@@ -135,6 +135,10 @@ export class SimulatedSession {
     return this.#view.nextTrial !== null;
   }
 
+  async abandon(reason: string): Promise<void> {
+    await this.#command({ kind: 'abandon', reason });
+  }
+
   async finish(): Promise<void> {
     await this.#command({ kind: 'finish' });
   }

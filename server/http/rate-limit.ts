@@ -36,3 +36,7 @@ export function limit({ attempts, windowMs, by, failuresOnly = false }: Limit): 
 }
 
 export const addressOf = (request: Request) => ipKeyGenerator(request.ip ?? '');
+
+/** The e-mail address in a body that nobody has checked yet; empty when there is none. */
+export const emailOf = (body: unknown) =>
+  typeof body === 'object' && body !== null && 'email' in body ? String(body.email).toLowerCase().slice(0, 200) : '';

@@ -1,8 +1,11 @@
 import { createHash } from 'node:crypto';
+import type { IncomingMessage } from 'node:http';
+import { TLSSocket } from 'node:tls';
 import type { Request, RequestHandler } from 'express';
 import session, { type SessionData } from 'express-session';
-import { type DataSource, LessThan } from 'typeorm';
+import { type DataSource, LessThan, Not } from 'typeorm';
 import type { Config } from '../config.ts';
+import type { Tx } from '../db/transaction.ts';
 import { WebSession } from '../features/sign-in/web-session.entity.ts';
 
 // The one file that reads or writes the web framework's session. People sign in; only rooms have sessions.
@@ -10,6 +13,7 @@ import { WebSession } from '../features/sign-in/web-session.entity.ts';
 declare module 'express-session' {
   interface SessionData {
     userId?: string;
+    place?: { address: string; browser: string; signedInAt: number };
   }
 }
 
@@ -35,15 +39,16 @@ class DatabaseStore extends session.Store {
   }
 
   override set(sid: string, data: SessionData, callback?: (error?: unknown) => void): void {
-    const expires = data.cookie.expires ?? new Date(this.#now() + lifetimeMs);
     this.#db.manager
       .upsert(
         WebSession,
         {
           idDigest: digestOf(sid),
           userId: data.userId ?? null,
-          data: JSON.stringify(data),
-          expiresAt: new Date(expires),
+          address: data.place?.address ?? '',
+          browser: data.place?.browser ?? '',
+          signedInAt: new Date(data.place?.signedInAt ?? this.#now()),
+          ...this.#seen(data),
         },
         ['idDigest'],
       )
@@ -61,7 +66,17 @@ class DatabaseStore extends session.Store {
   }
 
   override touch(sid: string, data: SessionData, callback?: (error?: unknown) => void): void {
-    this.set(sid, data, callback);
+    // Never an upsert: a request that was under way when its sign-in ended must not bring it back.
+    this.#db.manager.update(WebSession, { idDigest: digestOf(sid) }, this.#seen(data)).then(
+      () => callback?.(),
+      (error) => callback?.(error),
+    );
+  }
+
+  #seen(data: SessionData) {
+    const now = this.#now();
+    const expiresAt = new Date(data.cookie.expires ?? now + lifetimeMs);
+    return { data: JSON.stringify(data), expiresAt, lastSeenAt: new Date(now) };
   }
 
   async #read(sid: string): Promise<SessionData | null> {
@@ -71,18 +86,33 @@ class DatabaseStore extends session.Store {
   }
 }
 
-/** Keeps people signed in: a cookie that scripts cannot read, and a row in MariaDB. */
+/** Whether a request came over TLS, to this server or to the proxy that it trusts. */
+function isSecure(request: IncomingMessage, config: Config): boolean {
+  if (request.socket instanceof TLSSocket) return true;
+  const [protocol] = String(request.headers['x-forwarded-proto'] ?? '').split(',');
+  return config.trustProxy && protocol?.trim() === 'https';
+}
+
+/**
+ * Keeps people signed in: a cookie that scripts cannot read, and a row in MariaDB. Under TLS the cookie has a name of
+ * its own, because cookies do not tell ports apart: a browser that holds a secure one refuses a plain one of that name.
+ */
 export function signInMiddleware(db: DataSource, config: Config, now: () => number): RequestHandler {
-  return session({
-    name: 'fairlead',
-    secret: config.sessionSecret,
-    store: new DatabaseStore(db, now),
-    resave: false,
-    saveUninitialized: false,
-    rolling: false,
-    proxy: config.trustProxy,
-    cookie: { httpOnly: true, sameSite: 'lax', secure: 'auto', path: '/', maxAge: lifetimeMs },
-  });
+  const withCookie = (name: string, secure: boolean) =>
+    session({
+      name,
+      secret: config.sessionSecret,
+      // One each: express-session writes into its store how a cookie is made.
+      store: new DatabaseStore(db, now),
+      resave: false,
+      saveUninitialized: false,
+      rolling: false,
+      proxy: config.trustProxy,
+      cookie: { httpOnly: true, sameSite: 'lax', secure, path: '/', maxAge: lifetimeMs },
+    });
+  const plain = withCookie('fairlead', false);
+  const secure = withCookie('__Host-fairlead', true);
+  return (request, response, next) => (isSecure(request, config) ? secure : plain)(request, response, next);
 }
 
 export function signedInUserId(request: { session?: Partial<SessionData> }): string | null {
@@ -92,10 +122,21 @@ export function signedInUserId(request: { session?: Partial<SessionData> }): str
 const asPromise = (run: (done: (error?: unknown) => void) => void) =>
   new Promise<void>((resolve, reject) => run((error) => (error ? reject(error) : resolve())));
 
+/** The network address and the browser that a request comes from, for its person to see later. */
+export function originOf(request: Request): { address: string; browser: string } {
+  return { address: (request.ip ?? '').slice(0, 45), browser: (request.headers['user-agent'] ?? '').slice(0, 200) };
+}
+
+/** Names a signed-in browser to its person; from it the cookie cannot be made. */
+export function placeIdOf(request: { sessionID?: string }): string {
+  return digestOf(request.sessionID ?? '');
+}
+
 /** Signs a person in under a fresh session id. */
-export async function signIn(request: Request, userId: string): Promise<void> {
+export async function signIn(request: Request, userId: string, now: number): Promise<void> {
   await asPromise((done) => request.session.regenerate(done));
   request.session.userId = userId;
+  request.session.place = { ...originOf(request), signedInAt: now };
   await asPromise((done) => request.session.save(done));
 }
 
@@ -107,6 +148,26 @@ export async function signOut(request: Request): Promise<void> {
 export async function signOutEverywhere(db: DataSource, request: Request, userId: string): Promise<void> {
   await signOut(request);
   await db.manager.delete(WebSession, { userId });
+}
+
+/** Where a person is signed in, last seen first. */
+export function placesOf(db: Pick<DataSource, 'manager'>, userId: string): Promise<WebSession[]> {
+  return db.manager.find(WebSession, { where: { userId }, order: { lastSeenAt: 'DESC' } });
+}
+
+/** Ends one signed-in browser of a person; says whether there was one. */
+export async function endPlace(db: DataSource, userId: string, placeId: string): Promise<boolean> {
+  const { affected } = await db.manager.delete(WebSession, { userId, idDigest: placeId });
+  return affected === 1;
+}
+
+export async function endOtherPlaces(db: DataSource, userId: string, placeId: string): Promise<void> {
+  await db.manager.delete(WebSession, { userId, idDigest: Not(placeId) });
+}
+
+/** Ends every signed-in browser of a person, in the transaction of what makes it necessary. */
+export async function endAllPlaces(tx: Tx, userId: string): Promise<void> {
+  await tx.delete(WebSession, { userId });
 }
 
 /** Removes what has expired. */

@@ -1,19 +1,24 @@
 import { Problem } from '#shared/problem.ts';
 import type { Deps } from '../deps.ts';
 import { openSessions } from '../features/sessions/sessions.store.ts';
+import { Rehearsals } from './rehearsals.ts';
 import { Sitting } from './sitting.ts';
 
 /** The sessions that this server has in memory; the database stays the authority. */
 export class Sittings {
   readonly #deps: Deps;
+  readonly rehearsals: Rehearsals;
   readonly #byId = new Map<string, Promise<Sitting | null>>();
 
   constructor(deps: Deps) {
     this.#deps = deps;
+    this.rehearsals = new Rehearsals(deps);
   }
 
   /** @throws Problem `not-found` */
   async of(sessionId: string): Promise<Sitting> {
+    const rehearsal = this.rehearsals.of(sessionId);
+    if (rehearsal !== null) return rehearsal;
     const known = await this.#byId.get(sessionId);
     if (known?.isBroken === true) this.forget(sessionId, known);
     if (!this.#byId.has(sessionId)) {
@@ -40,6 +45,7 @@ export class Sittings {
   }
 
   async stop(): Promise<void> {
+    this.rehearsals.stop();
     for (const sitting of await Promise.all(this.#byId.values())) sitting?.stop();
     this.#byId.clear();
   }

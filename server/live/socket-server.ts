@@ -26,14 +26,18 @@ async function placeOf(deps: Deps, sittings: Sittings, socket: LiveSocket): Prom
   const auth = liveAuth.safeParse(socket.handshake.auth);
   if (!auth.success) throw new Problem('not-found', 'This link leads to no session.');
   if (auth.data.audience === 'listener') {
-    const seat = await seatByToken(deps.db.manager, tokenDigest(auth.data.token));
+    const digest = tokenDigest(auth.data.token);
+    const rehearsed = sittings.rehearsals.bySeat(digest);
+    if (rehearsed !== null)
+      return { audience: 'listener', sessionId: rehearsed.sitting.memory.session.id, seat: rehearsed.seat };
+    const seat = await seatByToken(deps.db.manager, digest);
     if (seat === null) throw new Problem('not-found', 'This seat is not known. Take a seat with the session’s code.');
     return { audience: 'listener', sessionId: seat.sessionId, seat: seat.label };
   }
   const userId = signedInUserId(socket.request as Parameters<typeof signedInUserId>[0]);
   if (userId === null) throw new Problem('not-signed-in', 'Sign in to run this session.');
   const sitting = await sittings.of(auth.data.sessionId);
-  if (sitting.proctorId !== userId) throw new Problem('not-found', 'There is no such session.');
+  if (sitting.memory.session.proctorId !== userId) throw new Problem('not-found', 'There is no such session.');
   return { audience: 'proctor', sessionId: auth.data.sessionId };
 }
 

@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { endpoint, managers } from './endpoint.ts';
 import { organisationParams, thingParams } from './organisation-params.ts';
-import { listQuery, pageOf } from './paging.ts';
+import { listQuery, pageOf, sortBy } from './paging.ts';
 
 export const cableKinds = ['loudspeaker', 'interconnect', 'headphone', 'other'] as const;
 
@@ -47,6 +47,12 @@ const base = '/organisations/:organisationId/cables';
 const specimenParams = z.strictObject({ organisationId: z.uuid(), id: z.uuid(), specimenId: z.uuid() });
 const archiving = z.strictObject({ archived: z.boolean() });
 
+const cableListQuery = listQuery.extend({
+  archived: z.enum(['no', 'yes']).default('no'),
+  sort: sortBy(['name', 'kind', 'length', 'updatedAt'], '-updatedAt'),
+});
+export type CableListQuery = z.output<typeof cableListQuery>;
+
 export const cablesApi = {
   list: endpoint({
     method: 'GET',
@@ -54,7 +60,7 @@ export const cablesApi = {
     summary: 'Cables, newest change first; archived ones on request',
     access: managers,
     params: organisationParams,
-    query: listQuery.extend({ archived: z.enum(['no', 'yes']).default('no') }),
+    query: cableListQuery,
     reply: pageOf(cableRow),
   }),
   /** Every cable that is not archived with its specimens: what a study can choose from. */

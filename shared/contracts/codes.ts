@@ -6,6 +6,8 @@ import { thingParams } from './organisation-params.ts';
 export const codesStatus = z.strictObject({
   studyId: z.uuid(),
   title: z.string(),
+  /** Codes are drawn for a sealed protocol only. */
+  isSealed: z.boolean(),
   state: z.enum(['none', 'drawn', 'confirmed']),
   specimenCount: z.int(),
   codeHolder: z.string(),

@@ -51,6 +51,8 @@ export type LockReceipt = z.output<typeof lockReceipt>;
 export const listenerView = z.strictObject({
   audience: z.literal('listener'),
   title: z.string(),
+  /** A run with invented codes, on no record. */
+  rehearsal: z.boolean(),
   session: z.int(),
   /** The session's id, part of what an answer's leaf is made of. */
   sessionId: z.string(),

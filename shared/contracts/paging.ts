@@ -8,6 +8,15 @@ export const listQuery = z.strictObject({
 });
 export type ListQuery = z.output<typeof listQuery>;
 
+/** A column to sort by, ascending; with a minus before it, descending. */
+export type SortWord<Key extends string> = Key | `-${Key}`;
+
+/** The columns that a list sorts by, and how it is sorted when nobody says. */
+export function sortBy<const Key extends string>(keys: readonly Key[], standard: SortWord<NoInfer<Key>>) {
+  const words = keys.flatMap((key): SortWord<Key>[] => [key, `-${key}`]);
+  return z.enum(words as [SortWord<Key>, ...SortWord<Key>[]]).default(standard as never);
+}
+
 /** One page of a list. */
 export function pageOf<T extends z.ZodType>(row: T) {
   return z.strictObject({ rows: z.array(row), total: z.int(), page: z.int(), pages: z.int() });

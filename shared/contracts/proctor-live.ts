@@ -98,5 +98,7 @@ export const proctorView = z.strictObject({
   ),
   record: z.strictObject({ entries: z.int(), sessionEntries: z.int() }),
   demo: z.boolean(),
+  /** A run with invented codes, on no record. */
+  rehearsal: z.boolean(),
 });
 export type ProctorView = z.output<typeof proctorView>;

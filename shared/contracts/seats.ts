@@ -19,6 +19,7 @@ export const openSession = z.strictObject({
   minutes: z.int(),
   trials: z.int(),
   running: z.boolean(),
+  rehearsal: z.boolean(),
 });
 export type OpenSession = z.output<typeof openSession>;
 

@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { crew, endpoint } from './endpoint.ts';
 import { organisationParams, thingParams } from './organisation-params.ts';
-import { listQuery, pageOf } from './paging.ts';
+import { listQuery, pageOf, sortBy } from './paging.ts';
 
 export const sessionPhases = ['planned', 'seating', 'revealing', 'running', 'finished', 'abandoned'] as const;
 
@@ -31,6 +31,13 @@ export type SessionRow = z.output<typeof sessionRow>;
 
 const base = '/organisations/:organisationId/sessions';
 
+const sessionListQuery = listQuery.extend({
+  studyId: z.uuid().optional(),
+  phase: z.enum(['any', 'open', 'ended']).default('any'),
+  sort: sortBy(['title', 'number', 'phase', 'plannedAt', 'room'], '-plannedAt'),
+});
+export type SessionListQuery = z.output<typeof sessionListQuery>;
+
 export const sessionsApi = {
   list: endpoint({
     method: 'GET',
@@ -38,7 +45,7 @@ export const sessionsApi = {
     summary: 'Sessions, latest first; a proctor sees their own',
     access: crew,
     params: organisationParams,
-    query: listQuery.extend({ studyId: z.uuid().optional(), phase: z.enum(['any', 'open', 'ended']).default('any') }),
+    query: sessionListQuery,
     reply: pageOf(sessionRow),
   }),
   get: endpoint({

@@ -2,8 +2,13 @@ import { z } from 'zod';
 import { endpoint, roles } from './endpoint.ts';
 import { done } from './organisation-params.ts';
 
+/** An e-mail address as people type it; upper and lower case are the same person. */
+export const emailAddress = z
+  .email('Enter an e-mail address such as name@example.org')
+  .max(200, 'At most 200 characters');
+
 export const credentials = z.strictObject({
-  email: z.email('Enter an e-mail address such as name@example.org').max(200, 'At most 200 characters'),
+  email: emailAddress,
   password: z.string().min(1, 'Enter your password').max(200, 'At most 200 characters'),
 });
 export type Credentials = z.output<typeof credentials>;
@@ -23,10 +28,14 @@ export const signedInPerson = z.strictObject({
 });
 export type SignedInPerson = z.output<typeof signedInPerson>;
 
-/** Who is signed in (null when nobody is), and the demo's people when this is the demo seen on its own machine. */
+/**
+ * Who is signed in (null when nobody is); the demo's people when this is the demo seen on its own machine; and whether
+ * mail can be read at /mailbox from here.
+ */
 export const whoAmI = z.strictObject({
   person: signedInPerson.nullable(),
   demoPeople: z.array(z.strictObject({ name: z.string(), duty: z.string(), email: z.string(), password: z.string() })),
+  mailbox: z.boolean(),
 });
 export type WhoAmI = z.output<typeof whoAmI>;
 

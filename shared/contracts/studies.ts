@@ -2,10 +2,14 @@ import { z } from 'zod';
 import { methodIds, methods } from '../methods/methods.ts';
 import { endpoint, managers } from './endpoint.ts';
 import { organisationParams, thingParams } from './organisation-params.ts';
-import { listQuery, pageOf } from './paging.ts';
+import { listQuery, pageOf, sortBy } from './paging.ts';
 
-export const studyStates = ['draft', 'sealed', 'collecting', 'closed'] as const;
+export const studyStates = ['draft', 'sealed', 'collecting', 'closed', 'published', 'shelved'] as const;
 export type StudyState = (typeof studyStates)[number];
+
+/** The states after closing: the secrets are open and the result is on the record. */
+export const closedStates = ['closed', 'published', 'shelved'] as const satisfies readonly StudyState[];
+export const isClosed = (state: StudyState) => (closedStates as readonly StudyState[]).includes(state);
 
 export const rigs = ['loudspeaker', 'line', 'headphone'] as const;
 export type Rig = (typeof rigs)[number];
@@ -81,6 +85,8 @@ export const studyProgress = z.strictObject({
   sessionsPlanned: z.int(),
   sessionsOpened: z.int(),
   sessionsEnded: z.int(),
+  /** Registered sessions that are not planned yet; an abandoned one leaves its place. */
+  sessionsToPlan: z.int(),
   trialsLocked: z.int(),
   trialsRegistered: z.int(),
 });
@@ -120,6 +126,12 @@ export type Study = z.output<typeof study>;
 
 const base = '/organisations/:organisationId/studies';
 
+const studyListQuery = listQuery.extend({
+  state: z.enum(['any', ...studyStates]).default('any'),
+  sort: sortBy(['title', 'state', 'updatedAt'], '-updatedAt'),
+});
+export type StudyListQuery = z.output<typeof studyListQuery>;
+
 export const studiesApi = {
   list: endpoint({
     method: 'GET',
@@ -127,7 +139,7 @@ export const studiesApi = {
     summary: 'Studies, newest change first',
     access: managers,
     params: organisationParams,
-    query: listQuery.extend({ state: z.enum(['any', ...studyStates]).default('any') }),
+    query: studyListQuery,
     reply: pageOf(studyRow),
   }),
   get: endpoint({

@@ -6,7 +6,6 @@ import {
   courseModifiers,
   type Finding,
   type FindingContext,
-  isKept,
   notKept,
   scopeOf,
   times,
@@ -79,7 +78,8 @@ const neverSaid = [
 
 function bodyOf(result: AbxResult, context: FindingContext): Pick<Finding, 'row' | 'headline' | 'maySay'> {
   const [first, second] = context.cables;
-  if (!isKept(context)) return notKept;
+  const barred = notKept(context);
+  if (barred !== null) return barred;
   if (result.isBelowGuessing)
     return {
       row: '1',

@@ -21,6 +21,8 @@ export type FindingContext = {
   readonly gate: {
     readonly commitmentsHold: boolean;
     readonly allTrialsAccounted: boolean;
+    /** Whether listeners could not know what they heard: the blinding rung is above *open*. */
+    readonly isBlind: boolean;
   };
   /** Why the study was closed before its registered number, or null. */
   readonly endedEarly: string | null;
@@ -29,13 +31,17 @@ export type FindingContext = {
 };
 
 /** Row 0, which comes before every other: where the record does not hold, no number says anything. */
-export const notKept = {
-  row: '0',
-  headline: 'This study does not meet its protocol; its numbers support no claim.',
-  maySay: null,
-} as const;
-
-export const isKept = ({ gate }: FindingContext): boolean => gate.commitmentsHold && gate.allTrialsAccounted;
+export function notKept({ gate }: FindingContext): { row: '0'; headline: string; maySay: null } | null {
+  if (!gate.commitmentsHold || !gate.allTrialsAccounted)
+    return {
+      row: '0',
+      headline: 'This study does not meet its protocol; its numbers support no claim.',
+      maySay: null,
+    };
+  if (!gate.isBlind)
+    return { row: '0', headline: 'This study was not blind; its numbers support no claim.', maySay: null };
+  return null;
+}
 
 /** "1 trial", "16 trials". */
 export const times = (count: number, one: string) => `${count} ${one}${count === 1 ? '' : 's'}`;

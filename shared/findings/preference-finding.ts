@@ -3,7 +3,6 @@ import {
   courseModifiers,
   type Finding,
   type FindingContext,
-  isKept,
   notKept,
   scopeOf,
   times,
@@ -78,7 +77,8 @@ function bodyOf(
   context: FindingContext,
 ): Pick<Finding, 'row' | 'headline' | 'maySay' | 'modifiers'> {
   const { cables } = context;
-  if (!isKept(context)) return { ...notKept, modifiers: [] };
+  const barred = notKept(context);
+  if (barred !== null) return { ...barred, modifiers: [] };
   const { favours } = result;
   if (!result.isSignificant || favours === null) {
     const shown = `between ${cables[0]} and ${cables[1]}`;

@@ -35,4 +35,9 @@ export function keyedDigest(key: Uint8Array, message: Uint8Array): Uint8Array {
   return hmac(sha256, key, message);
 }
 
+/** SHA-256 of a file's bytes and nothing else, as `sha256sum` prints it; 64 lower-case hexadecimal digits. */
+export function fileDigest(bytes: Uint8Array): string {
+  return bytesToHex(sha256(bytes));
+}
+
 export { bytesToHex, concatBytes, hexToBytes, utf8ToBytes };

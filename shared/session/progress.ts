@@ -38,6 +38,13 @@ export function openAnswers(state: SessionState, trial: OpenTrial): string[] {
 export const presentationsOf = (method: Method, trial: number): readonly string[] =>
   trial === 0 ? method.familiarisation : method.presentations;
 
+/** What is being fitted or heard, or null outside a trial's presentations. */
+export function presentationNow({ trial }: SessionState, method: Method): string | null {
+  if (trial === null || trial.stage === 'answering') return null;
+  const presentation = presentationsOf(method, trial.trial)[trial.presentation];
+  if (presentation === undefined) throw new RangeError('a trial beyond its presentations');
+  return presentation;
+}
 /** The answers that a session offers. */
 export const optionsOf = ({ plan }: SessionState, method: Method) => method.options(plan.methodSettings ?? []);
 

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { confirmations } from '../contracts/publications.ts';
 import { registeredResult } from '../methods/methods.ts';
 
 // What the study itself puts on its record. The payload of `key-revealed` has a file of its own: revealed-key.ts.
@@ -21,6 +22,18 @@ export const studyEvents = {
     codeHolder: z.uuid(),
   }),
   'result-recorded': z.strictObject({ analysis: z.string(), result: registeredResult }),
+  /** What the publisher states and confirms; the published document ends with it. */
+  'publication-declared': z.strictObject({
+    by: z.uuid(),
+    publisher: z.string(),
+    paid: z.string(),
+    supplied: z.string(),
+    ties: z.string(),
+    confirmations: z.array(z.enum(Object.keys(confirmations) as (keyof typeof confirmations)[])),
+  }),
+  'study-published': z.strictObject({ by: z.uuid(), id: z.string(), digest: hex32 }),
+  'publication-withdrawn': z.strictObject({ by: z.uuid(), id: z.string(), reason: z.string() }),
+  'study-shelved': z.strictObject({ by: z.uuid(), reason: z.string() }),
 } as const;
 export type StudyEventKind = keyof typeof studyEvents;
 export type StudyPayloadOf<K extends StudyEventKind> = z.output<(typeof studyEvents)[K]>;

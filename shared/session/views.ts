@@ -33,6 +33,7 @@ function presentationAt(trial: OpenTrial, method: Method): string {
 
 export type ListenerContext = {
   readonly title: string;
+  readonly rehearsal: boolean;
   readonly seat: string;
   readonly now: number;
   readonly held: HeldAnswer | null;
@@ -48,6 +49,7 @@ export function listenerViewOf(state: SessionState, method: Method, context: Lis
   return {
     audience: 'listener',
     title,
+    rehearsal: context.rehearsal,
     session: state.session,
     sessionId: state.sessionId,
     seat,
@@ -109,6 +111,7 @@ export type ProctorContext = {
   readonly presence: readonly Presence[];
   readonly entries: number;
   readonly demo: boolean;
+  readonly rehearsal: boolean;
 };
 
 function seatsFor(state: SessionState, presence: readonly Presence[]): ProctorView['seats'] {
@@ -180,5 +183,6 @@ export function proctorViewOf(state: SessionState, method: Method, context: Proc
     seats: seatsFor(state, context.presence),
     record: { entries: context.entries, sessionEntries: state.version },
     demo: context.demo,
+    rehearsal: context.rehearsal,
   };
 }

@@ -10,8 +10,9 @@ export function navigationLinks(role: Role, organisationId: string): Link[] {
   const cables = { to: paths.cables(organisationId), label: 'Cables' };
   const sessions = { to: paths.sessions(organisationId), label: 'Sessions' };
   const reports = { to: paths.reports(organisationId), label: 'Reports' };
+  const people = { to: paths.people(organisationId), label: 'People' };
   const places: Record<Role, Link[]> = {
-    owner: [home, studies, cables, sessions, reports],
+    owner: [home, studies, cables, sessions, reports, people],
     manager: [home, studies, cables, sessions, reports],
     proctor: [home, sessions],
     reviewer: [home, reports],

@@ -1,5 +1,6 @@
 import { useState } from 'react';
 import { Outlet, useNavigate } from 'react-router-dom';
+import { OrganisationSwitch } from '../features/organisations/organisation-switch.tsx';
 import { usePresence } from '../features/sign-in/membership.ts';
 import { PersonMenu } from '../features/sign-in/person-menu.tsx';
 import { SignOutEverywhere } from '../features/sign-in/sign-out-everywhere.tsx';
@@ -18,7 +19,7 @@ export function OrganisationFrame() {
   const menu = (
     <PersonMenu
       presence={presence}
-      organisationsTo={paths.start()}
+      accountTo={paths.account()}
       helpTo={paths.help()}
       onSignedOut={leave}
       onSignOutEverywhere={() => setAsked(true)}
@@ -28,6 +29,15 @@ export function OrganisationFrame() {
     <DayLayout
       homeTo={paths.home(organisationId)}
       links={navigationLinks(role, organisationId)}
+      organisation={
+        presence.person.memberships.length > 1 ? (
+          <OrganisationSwitch
+            current={presence.membership}
+            memberships={presence.person.memberships}
+            homeOf={paths.home}
+          />
+        ) : null
+      }
       person={{ label: presence.person.name, menu }}
     >
       <Outlet />

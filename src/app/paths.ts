@@ -1,10 +1,21 @@
-/** Every address of the signed-in application. The route table is built from the same functions. */
+/** Every address of the application. The route table is built from the same functions. */
 export const paths = {
   start: () => '/',
   /** With a way back to where one was. */
   signIn: (next?: string) => (next === undefined ? '/sign-in' : `/sign-in?${new URLSearchParams({ next })}`),
   help: () => '/help',
   kit: () => '/kit',
+  account: () => '/account',
+  invitation: () => '/invitation',
+  firstOwner: () => '/first-owner',
+  forgottenPassword: () => '/forgotten-password',
+  newPassword: () => '/new-password',
+  mailbox: () => '/mailbox',
+  mailboxMail: (id: string) => `/mailbox/${id}`,
+
+  /** Public: what is published, for anybody. */
+  publications: () => '/p',
+  publication: (id: string) => `/p/${id}`,
 
   home: (organisationId: string) => organisation(organisationId),
 
@@ -20,7 +31,12 @@ export const paths = {
   codes: (organisationId: string, studyId: string) => `${organisation(organisationId)}/studies/${studyId}/codes`,
   labels: (organisationId: string, studyId: string) => `${organisation(organisationId)}/studies/${studyId}/labels`,
   report: (organisationId: string, studyId: string) => `${organisation(organisationId)}/studies/${studyId}/report`,
+  publish: (organisationId: string, studyId: string) => `${organisation(organisationId)}/studies/${studyId}/publish`,
   reports: (organisationId: string) => `${organisation(organisationId)}/reports`,
+
+  people: (organisationId: string) => `${organisation(organisationId)}/people`,
+  invitations: (organisationId: string) => `${organisation(organisationId)}/people/invitations`,
+  mail: (organisationId: string) => `${organisation(organisationId)}/mail`,
 
   sessions: (organisationId: string) => `${organisation(organisationId)}/sessions`,
   planSession: (organisationId: string, studyId: string) =>

@@ -26,16 +26,29 @@ const organisationPages: RouteObject[] = [
   { path: paths.codes(organisationId, id), lazy: () => import('../pages/codes-page.tsx') },
   { path: paths.labels(organisationId, id), lazy: () => import('../pages/labels-page.tsx') },
   { path: paths.report(organisationId, id), lazy: () => import('../pages/report-page.tsx') },
+  { path: paths.publish(organisationId, id), lazy: () => import('../pages/publish-page.tsx') },
   { path: paths.reports(organisationId), lazy: () => import('../pages/reports-page.tsx') },
   { path: paths.sessions(organisationId), lazy: () => import('../pages/sessions-page.tsx') },
   { path: paths.planSession(organisationId, id), lazy: () => import('../pages/session-plan-page.tsx') },
+  { path: paths.people(organisationId), lazy: () => import('../pages/people-page.tsx') },
+  { path: paths.invitations(organisationId), lazy: () => import('../pages/invitations-page.tsx') },
+  { path: paths.mail(organisationId), lazy: () => import('../pages/mail-page.tsx') },
   { path: `${paths.home(organisationId)}/*`, Component: NotFoundPage },
 ];
 
-/** Pages that stand alone: signing in, help, and addresses that lead nowhere. */
+/** Pages that stand alone: signing in, what is published, help, and addresses that lead nowhere. */
 const plainPages: RouteObject[] = [
   { path: paths.signIn(), lazy: () => import('../pages/sign-in-page.tsx') },
   { path: paths.start(), lazy: () => import('../pages/start-page.tsx') },
+  { path: paths.publications(), lazy: () => import('../pages/publications-page.tsx') },
+  { path: paths.publication(id), lazy: () => import('../pages/publication-page.tsx') },
+  { path: paths.account(), lazy: () => import('../pages/account-page.tsx') },
+  { path: paths.invitation(), lazy: () => import('../pages/invitation-page.tsx') },
+  { path: paths.firstOwner(), lazy: () => import('../pages/first-owner-page.tsx') },
+  { path: paths.forgottenPassword(), lazy: () => import('../pages/forgotten-password-page.tsx') },
+  { path: paths.newPassword(), lazy: () => import('../pages/new-password-page.tsx') },
+  { path: paths.mailbox(), lazy: () => import('../pages/mailbox-page.tsx') },
+  { path: paths.mailboxMail(id), lazy: () => import('../pages/mailbox-mail-page.tsx') },
   { path: paths.help(), lazy: () => import('../pages/help-page.tsx') },
   { path: '*', Component: NotFoundPage },
 ];

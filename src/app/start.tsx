@@ -13,11 +13,22 @@ export function start(root: HTMLElement): void {
     const { pathname, search } = router.state.location;
     if (pathname !== paths.signIn()) void router.navigate(paths.signIn(pathname + search));
   });
-  createRoot(root).render(
-    <StrictMode>
-      <QueryClientProvider client={queryClient}>
-        <RouterProvider router={router} />
-      </QueryClientProvider>
-    </StrictMode>,
-  );
+  const render = () =>
+    createRoot(root).render(
+      <StrictMode>
+        <QueryClientProvider client={queryClient}>
+          <RouterProvider router={router} />
+        </QueryClientProvider>
+      </StrictMode>,
+    );
+  // A page that came from the server ready to read stays until the application has the same page ready.
+  if (root.childElementCount === 0 || router.state.initialized) {
+    render();
+    return;
+  }
+  const stop = router.subscribe(({ initialized }) => {
+    if (!initialized) return;
+    stop();
+    render();
+  });
 }

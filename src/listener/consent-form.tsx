@@ -48,8 +48,14 @@ export function ConsentForm({ session, busy, problem, onTake, onBack }: ConsentF
         </p>
       ) : null}
       <ul className="flex list-disc flex-col gap-2 pl-5 text-soft">
-        <li>Your answers are recorded under a seat label, without your name.</li>
-        <li>You can stop at any time. An answer cannot be withdrawn once its trial has locked.</li>
+        {session.rehearsal ? (
+          <li>This is a rehearsal: nothing that you answer is kept, and no cable is under test.</li>
+        ) : (
+          <>
+            <li>Your answers are recorded under a seat label, without your name.</li>
+            <li>You can stop at any time. An answer cannot be withdrawn once its trial has locked.</li>
+          </>
+        )}
         <li>If it is too loud, press “Too loud”: the session pauses at once. Stop if your ears ring or hurt.</li>
       </ul>
       <TextField

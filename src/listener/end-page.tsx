@@ -6,7 +6,9 @@ import { PhonePage } from './phone-page.tsx';
 import { DisputedList, ReceiptList, receiptsText } from './receipt-list.tsx';
 import type { SeatSnapshot } from './seat.ts';
 
-function headingOf({ left, phase }: ListenerView): { title: string; detail: string } {
+function headingOf({ left, phase, rehearsal }: ListenerView): { title: string; detail: string } {
+  if (rehearsal && !left)
+    return { title: 'The rehearsal is over', detail: 'Thank you. Nothing was kept; there is no result.' };
   if (left)
     return { title: 'You have left the session', detail: 'Thank you for coming. Later trials go on without you.' };
   if (phase === 'abandoned')
@@ -51,7 +53,7 @@ export function EndPage({ view, snapshot, alarm }: EndPageProps) {
           </p>
         ))}
         <DisputedList disputed={disputed} />
-        {receipts.length === 0 ? null : (
+        {receipts.length === 0 || view.rehearsal ? null : (
           <section className="mt-4 flex flex-col gap-4">
             <h2 className="text-xl">Your receipts</h2>
             <p className="text-soft">

@@ -7,6 +7,10 @@ function headOf({ trial, phase, session }: ListenerView): string {
   return trial.familiarisation ? 'Familiarisation, not counted' : `Trial ${trial.number} of ${trial.of}`;
 }
 
+function rehearsalHeadOf({ trial }: ListenerView): string {
+  return trial === null || trial.familiarisation ? 'Rehearsal' : `Rehearsal, trial ${trial.number} of ${trial.of}`;
+}
+
 function statusOf({ trial, paused }: ListenerView, isLost: boolean): string {
   if (isLost) return 'No connection. It comes back by itself.';
   const isAnswering = trial?.stage === 'answering' && trial.takesPart;
@@ -23,7 +27,7 @@ export function SeatHead({ view, isLost, clockOffsetMs }: SeatHeadProps) {
   return (
     <header className="pt-4 [@media(max-height:699px)]:pt-2">
       <div className="flex justify-between gap-4 px-5">
-        <strong>{headOf(view)}</strong>
+        <strong>{view.rehearsal ? rehearsalHeadOf(view) : headOf(view)}</strong>
         <span className="shrink-0 text-soft">
           Seat <span className="font-mono">{view.seat}</span>
         </span>

@@ -47,6 +47,8 @@ export function Component() {
         page={cables.page}
         pageCount={cables.pages}
         onPage={(page) => change({ page })}
+        sort={query.sort}
+        onSort={(sort) => change({ sort })}
         hrefOf={(id) => paths.cable(organisationId, id)}
         empty={hasNone ? <FirstCable addTo={paths.newCable(organisationId)} /> : <NoneFound words={query.q} />}
       />

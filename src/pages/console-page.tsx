@@ -1,4 +1,4 @@
-import { useParams } from 'react-router-dom';
+import { useNavigate, useParams } from 'react-router-dom';
 import { DimLayout } from '../app/layouts/dim-layout.tsx';
 import { paths } from '../app/paths.ts';
 import { ConsoleBody } from '../features/console/console-body.tsx';
@@ -8,6 +8,7 @@ import { SeatsPanel } from '../features/console/seats-panel.tsx';
 import { SideActs } from '../features/console/side-acts.tsx';
 import { useConsole } from '../features/console/use-console.ts';
 import { useKeySetting } from '../features/console/use-keys.ts';
+import { RehearseButton } from '../features/sessions/rehearse-button.tsx';
 import { param } from '../lib/route-params.ts';
 import { CourseLine } from '../ui/course-line.tsx';
 import { useDocumentTitle } from '../ui/document-title.ts';
@@ -17,7 +18,9 @@ import { LinkButton } from '../ui/link-button.tsx';
 export function Component() {
   const params = useParams();
   const organisationId = param(params, 'organisationId');
-  const console = useConsole(param(params, 'id'));
+  const sessionId = param(params, 'id');
+  const navigate = useNavigate();
+  const console = useConsole(sessionId);
   const keys = useKeySetting();
   const back = { to: paths.sessions(organisationId), label: 'All sessions' };
   const { view, refused, connection, clockOffsetMs } = console;
@@ -35,7 +38,20 @@ export function Component() {
   const hasCourse = view.phase === 'revealing' || view.phase === 'running';
   const isOver = view.phase === 'finished' || view.phase === 'abandoned';
   return (
-    <DimLayout header={<ConsoleHead view={view} isLost={isLost} clockOffsetMs={clockOffsetMs} back={back} />}>
+    <DimLayout
+      header={
+        <ConsoleHead view={view} isLost={isLost} clockOffsetMs={clockOffsetMs} back={back}>
+          {view.phase === 'planned' && !view.rehearsal ? (
+            <RehearseButton
+              organisationId={organisationId}
+              sessionId={sessionId}
+              label="Rehearse it first"
+              onBegun={(id) => navigate(paths.console(organisationId, id))}
+            />
+          ) : null}
+        </ConsoleHead>
+      }
+    >
       <div className="flex flex-1 flex-col lg:flex-row">
         <ConsoleBody
           view={view}

@@ -1,6 +1,6 @@
 import { useSuspenseQuery } from '@tanstack/react-query';
 import { type LoaderFunctionArgs, useNavigate, useParams } from 'react-router-dom';
-import type { Study } from '#shared/contracts/studies.ts';
+import { isClosed, type Study } from '#shared/contracts/studies.ts';
 import { paths } from '../app/paths.ts';
 import { organisationQueries } from '../features/organisations/organisations.queries.ts';
 import { SessionForm } from '../features/sessions/session-form.tsx';
@@ -65,8 +65,10 @@ function ledeOf({ draft, progress }: Study): string {
   return `${registered}, ${progress.sessionsPlanned} planned so far. Once planned, a session keeps its number for good.`;
 }
 
-function hindranceOf({ state }: Study): string | null {
+function hindranceOf({ state, progress }: Study): string | null {
   if (state === 'draft') return 'Seal the protocol first; a session belongs to a sealed study';
-  if (state === 'closed') return 'This study is closed; it takes no further session';
+  if (isClosed(state)) return 'This study is closed; it takes no further session';
+  if (progress.sessionsToPlan === 0)
+    return 'Every registered session is planned; an abandoned one would leave its place';
   return null;
 }

@@ -1,7 +1,8 @@
 import { useSuspenseQuery } from '@tanstack/react-query';
-import { type LoaderFunctionArgs, redirect, useSearchParams } from 'react-router-dom';
+import { type LoaderFunctionArgs, redirect, useNavigate, useSearchParams } from 'react-router-dom';
 import { sessionsApi } from '#shared/contracts/sessions.ts';
 import { paths } from '../app/paths.ts';
+import { RehearseButton } from '../features/sessions/rehearse-button.tsx';
 import { SessionFilter } from '../features/sessions/session-filter.tsx';
 import { SessionTable } from '../features/sessions/session-table.tsx';
 import { sessionQueries } from '../features/sessions/sessions.queries.ts';
@@ -28,6 +29,7 @@ export function Component() {
   const { organisationId, role } = membership;
   const [search] = useSearchParams();
   const change = useListAddress();
+  const navigate = useNavigate();
   const query = queryIn(search);
   const { data: sessions } = useSuspenseQuery(sessionQueries.list(organisationId, query));
   const isFiltered = query.q !== '' || query.phase !== 'any' || query.studyId !== undefined;
@@ -41,6 +43,14 @@ export function Component() {
             ? 'One sitting of listeners each, planned from its study and led from its console.'
             : 'The sittings of listeners that you lead. Open one to prepare the room and run it from its console.'
         }
+        actions={
+          <RehearseButton
+            organisationId={organisationId}
+            sessionId={null}
+            label="Rehearse"
+            onBegun={(id) => navigate(paths.console(organisationId, id))}
+          />
+        }
       />
       {sessions.total > 0 || isFiltered ? <SessionFilter query={query} onChange={change} /> : null}
       <SessionTable
@@ -48,6 +58,8 @@ export function Component() {
         page={sessions.page}
         pageCount={sessions.pages}
         onPage={(page) => change({ page })}
+        sort={query.sort}
+        onSort={(sort) => change({ sort })}
         consoleOf={({ id, proctorId }) => (proctorId === person.id ? paths.console(organisationId, id) : null)}
         empty={
           isFiltered ? (

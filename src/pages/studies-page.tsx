@@ -56,6 +56,8 @@ export function Component() {
         page={studies.page}
         pageCount={studies.pages}
         onPage={(page) => changeAddress({ page })}
+        sort={query.sort}
+        onSort={(sort) => changeAddress({ sort })}
         hrefOf={(id) => paths.study(organisationId, id)}
         empty={
           isNarrowed ? (

@@ -1,7 +1,7 @@
 import type { ReactNode } from 'react';
 import { classNames } from './class-names.ts';
 import { Pager } from './pager.tsx';
-import type { Column, Sort } from './table-column.ts';
+import { type Column, sortIn, wordOf } from './table-column.ts';
 import { TableHead } from './table-head.tsx';
 
 type DataTableProps<Row> = {
@@ -13,8 +13,9 @@ type DataTableProps<Row> = {
   rowKey: (row: Row) => string;
   /** Stands in for the table while there are no rows; usually an EmptyState. */
   empty: ReactNode;
-  sort?: Sort;
-  onSort?: (sort: Sort) => void;
+  /** The word of a list's contract: a column's key, with a minus before it when it descends. */
+  sort?: string;
+  onSort?: (word: string) => void;
   /** From 1. The pager shows when there is more than one page. */
   page?: number;
   pageCount?: number;
@@ -42,7 +43,11 @@ export function DataTable<Row>({
         <caption className={isCaptionShown ? 'block pb-3 text-left text-xl font-bold @2xl:table-caption' : 'sr-only'}>
           {caption}
         </caption>
-        <TableHead columns={columns} sort={sort} onSort={onSort} />
+        <TableHead
+          columns={columns}
+          sort={sort === undefined ? undefined : sortIn(sort)}
+          onSort={onSort && ((next) => onSort(wordOf(next)))}
+        />
         <tbody className="block border-t-2 border-ink @2xl:table-row-group @2xl:border-t-0">
           {rows.map((row) => (
             <tr key={rowKey(row)} className="block border-b border-rule py-3 @2xl:table-row @2xl:py-0">

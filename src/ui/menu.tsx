@@ -10,15 +10,20 @@ const itemLook =
 type MenuProps = {
   /** What the button shows; also the menu's name. */
   label: string;
+  /** What it is about, where several look alike; read out only. */
+  of?: string;
   children: ReactNode;
 };
 
 /** A button that opens a short list of acts and places. */
-export function Menu({ label, children }: MenuProps) {
+export function Menu({ label, of, children }: MenuProps) {
   return (
     <DropdownMenu.Root modal={false}>
-      <DropdownMenu.Trigger className="-mx-2 inline-flex min-h-12 cursor-pointer items-center gap-2 rounded px-2 text-left text-soft hover:text-ink data-[state=open]:text-ink">
-        {label}
+      <DropdownMenu.Trigger
+        aria-label={of === undefined ? undefined : `${label}: ${of}`}
+        className="-mx-2 inline-flex max-w-64 min-h-12 cursor-pointer items-center gap-2 rounded px-2 text-left text-soft hover:text-ink data-[state=open]:text-ink"
+      >
+        <span className="min-w-0 truncate">{label}</span>
         <Caret direction="down" />
       </DropdownMenu.Trigger>
       <DropdownMenu.Portal>
@@ -45,12 +50,12 @@ export function MenuItem({ onSelect, disabled, children }: MenuItemProps) {
   );
 }
 
-type MenuLinkProps = { to: string; children: ReactNode };
+type MenuLinkProps = { to: string; isCurrent?: boolean; children: ReactNode };
 
-export function MenuLink({ to, children }: MenuLinkProps) {
+export function MenuLink({ to, isCurrent, children }: MenuLinkProps) {
   return (
     <DropdownMenu.Item asChild>
-      <Link to={to} className={itemLook}>
+      <Link to={to} aria-current={isCurrent ? 'true' : undefined} className={itemLook}>
         {children}
       </Link>
     </DropdownMenu.Item>

@@ -13,3 +13,8 @@ export type Column<Row> = {
 };
 
 export type Sort = { key: string; direction: 'ascending' | 'descending' };
+
+/** What an address says of a sort: the column's key, with a minus before it when it descends. */
+export const sortIn = (word: string): Sort =>
+  word.startsWith('-') ? { key: word.slice(1), direction: 'descending' } : { key: word, direction: 'ascending' };
+export const wordOf = ({ key, direction }: Sort): string => (direction === 'descending' ? `-${key}` : key);

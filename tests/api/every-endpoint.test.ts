@@ -1,7 +1,7 @@
 import request from 'supertest';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { z } from 'zod';
-import type * as core from 'zod/v4/core';
+import * as core from 'zod/v4/core';
 import { type Endpoint, roles } from '#shared/contracts/endpoint.ts';
 import { type Agent, makeOrganisation, readyStudy, signedIn, type TestOrganisation } from '../support/people.ts';
 import { type TestServer, testServer } from '../support/test-server.ts';
@@ -84,7 +84,7 @@ describe('every endpoint', () => {
         { [name]: [1, 2] },
       ]),
       { unknownField: 1 },
-    ];
+    ].filter((body) => !core.safeParse(schema, body).success);
   }
 
   it('answers bad input with a message at the field, and never with a 500 [A3]', async () => {

@@ -11,7 +11,7 @@ describe('the settings of a method', () => {
   });
   afterAll(() => server.stop());
 
-  it('are refused at their field where the method does not have them, or twice [A3] [P1]', async () => {
+  it('are refused at their field where the method does not have them, or twice [A3] [F1]', async () => {
     const { base, at, manager } = await readyStudy(server, people);
     const { draft } = (await manager.get(at).expect(200)).body;
     for (const change of [
@@ -27,7 +27,7 @@ describe('the settings of a method', () => {
     }
   });
 
-  it('stand in the draft as they were chosen, and none need be [P1]', async () => {
+  it('stand in the draft as they were chosen, and none need be [F1]', async () => {
     const change = { method: 'paired-preference' as const, methodSettings: ['no-preference'] };
     const chosen = await readyStudy(server, people, change);
     expect((await chosen.manager.get(chosen.at).expect(200)).body).toMatchObject({

@@ -1,7 +1,9 @@
 import { execFileSync } from 'node:child_process';
 import AxeBuilder from '@axe-core/playwright';
-import { type Browser, expect, type Page, test } from '@playwright/test';
+import { expect, type Page, test } from '@playwright/test';
 import type { Report } from '#shared/contracts/reports.ts';
+import { answer, beginSession, openPhone, openSeating, presentTrial, signIn, takeSeat } from './at-the-desk.ts';
+import { codeSpecimens, planSession, planStudy } from './plan-a-study.ts';
 import { type RunningFairlead, runFairlead } from './run-fairlead.ts';
 
 // A proctor and three phones at once: plan, seal, code, seat, 8 trials with one void and one phone offline in the middle,
@@ -14,15 +16,6 @@ test.beforeAll(async () => {
 test.afterAll(async () => {
   await fairlead.stop();
 });
-
-async function signIn(browser: Browser, name: string): Promise<Page> {
-  const context = await browser.newContext({ viewport: { width: 1440, height: 900 } });
-  const page = await context.newPage();
-  await page.goto(`${fairlead.address}/sign-in`);
-  await page.getByRole('button', { name: `Sign in as ${name}` }).click();
-  await page.waitForURL(/organisations/);
-  return page;
-}
 
 async function expectAccessible(page: Page, what: string): Promise<void> {
   const { violations } = await new AxeBuilder({ page }).analyze();
@@ -66,112 +59,50 @@ function fromR(trials: { truth: string; choices: (string | null)[] }[]): {
   return { correct, p, listenerP };
 }
 
-async function planStudy(page: Page): Promise<void> {
-  const reply = await page.request.get(`${fairlead.address}/api/me`);
-  const organisation = (await reply.json()).person.memberships[0].organisationId;
-  const base = `${fairlead.address}/api/organisations/${organisation}`;
-  const { cables } = await (await page.request.get(`${base}/cables/choices`)).json();
-  const { members } = await (await page.request.get(`${base}/members`)).json();
-  const holder = members.find(({ name }: { name: string }) => name === 'Ines Halloran');
-  const pair = cables.slice(0, 2).map(({ id, specimens }: { id: string; specimens: { id: string }[] }) => ({
-    cableId: id,
-    specimenIds: specimens.map((specimen) => specimen.id),
-  }));
-  const draft = {
-    title: 'Study Dunlin',
-    question: 'Can three listeners tell the two cables apart?',
-    method: 'abx',
-    cables: pair,
-    sessions: 1,
-    listenersPerSession: 3,
-    trials: 8,
-    spares: 2,
-    alphaPerMille: 50,
-    programme: [{ title: 'Piano', lengthS: 2, start: '0:10' }],
-    rig: 'loudspeaker',
-    chain: 'Player, amplifier, loudspeakers',
-    changeS: 3,
-    answerS: 60,
-    confidence: false,
-    codeHolderId: holder.id,
-  };
-  const made = await page.request.post(`${base}/studies`, { data: draft });
-  expect(made.status()).toBe(200);
-  await page.goto(`${fairlead.address}/organisations/${organisation}/studies/${(await made.json()).id}`);
-}
-
 test('a study from its plan to a report that R agrees with [R1] [S1] [S13]', async ({ browser }) => {
-  const manager = await signIn(browser, 'Maren Oduya');
-  await planStudy(manager);
-  await expect(manager.getByRole('heading', { level: 1 })).toContainText('Study Dunlin');
+  const manager = await signIn(browser, fairlead.address, 'Maren Oduya');
+  await planStudy(manager, { listeners: 3, answerS: 60 });
   await expectAccessible(manager, 'draft');
   const studyAddress = manager.url();
   await manager.getByRole('button', { name: /^Seal/ }).first().click();
   await manager.getByRole('alertdialog').getByRole('button', { name: /^Seal/ }).click();
   await expect(manager.getByRole('alertdialog')).toBeHidden();
 
-  const holder = await signIn(browser, 'Ines Halloran');
-  await holder.goto(`${studyAddress}/codes`);
+  const holder = await signIn(browser, fairlead.address, 'Ines Halloran');
+  await codeSpecimens(holder, studyAddress);
   await expectAccessible(holder, 'codes');
-  const apiAddress = studyAddress.replace('/organisations/', '/api/organisations/');
-  await holder.request.post(`${apiAddress}/codes/draw`, { data: {} });
-  await holder.request.post(`${apiAddress}/codes/confirm`, { data: {} });
 
-  const organisationApi = apiAddress.replace(/\/studies\/.*/, '');
-  const { members } = await (await manager.request.get(`${organisationApi}/members`)).json();
-  const proctorId = members.find(({ name }: { name: string }) => name === 'Tomas Brandt').id;
-  const planned = await manager.request.post(`${apiAddress}/sessions`, {
-    data: { plannedAt: new Date().toISOString(), room: 'Room B', proctorId },
-  });
-  const sessionId = (await planned.json()).id;
+  await planSession(manager, studyAddress);
 
-  const desk = await signIn(browser, 'Tomas Brandt');
-  await desk.goto(`${studyAddress.replace(/\/studies\/.*/, '')}/sessions/${sessionId}/console`);
+  const desk = await signIn(browser, fairlead.address, 'Tomas Brandt');
+  await desk
+    .getByRole('link', { name: /Study Dunlin/ })
+    .first()
+    .click();
   await desk.getByText('Before anybody is seated').waitFor();
   await expectAccessible(desk, 'cautions');
-  for (const box of await desk.locator('section input[type=checkbox]').all()) await box.check();
-  await desk.getByRole('button', { name: 'Confirm the cautions' }).click();
-  await desk.getByRole('button', { name: 'Open seating' }).click();
-  const code = await desk.locator('[data-session-code]').getAttribute('data-session-code');
+  const code = await openSeating(desk);
   await expectAccessible(desk, 'seating');
 
   const phones: Page[] = [];
-  for (const place of ['Left', 'Middle', 'Right']) {
-    const context = await browser.newContext({ viewport: { width: 390, height: 844 }, hasTouch: true });
-    const phone = await context.newPage();
-    await phone.goto(`${fairlead.address}/listen/${code}`);
-    await phone.getByRole('button', { name: 'Look it up' }).click();
-    await phone.getByLabel('I am an adult').check();
-    await phone.getByLabel('I agree to take part').check();
-    await phone.getByLabel(/Where do you sit/).fill(place);
+  // The third phone is a small one: there, how sure the listener is has a step of its own.
+  for (const [place, height] of [
+    ['Left', 844],
+    ['Middle', 844],
+    ['Right', 640],
+  ] as const) {
+    const phone = await openPhone(browser, fairlead.address, code, height);
     if (phones.length === 0) await expectAccessible(phone, 'consent');
-    await phone.getByRole('button', { name: 'Take the seat' }).click();
-    await phone.getByText(/You are seated as/).waitFor();
+    await takeSeat(phone, place);
     phones.push(phone);
   }
   const [first, second, third] = phones as [Page, Page, Page];
 
-  const present = async () => {
-    for (const step of ['mute', 'unplug', 'fit', 'check']) await desk.locator(`[data-step=${step}]`).click();
-    await expect(desk.locator('[data-step=unmute]')).toBeEnabled();
-    await desk.locator('[data-step=unmute]').click();
-    await desk.getByText('They are listening').waitFor();
-    await desk.getByText('They are listening').waitFor({ state: 'hidden' });
-  };
-  const answer = async (phone: Page, choice: string) => {
-    await phone.getByText(`X was the same as ${choice}`).click();
-    await phone.getByRole('button', { name: `Send ${choice}` }).click();
-  };
-
-  await desk.getByRole('button', { name: 'Close seating and fix the draw' }).click();
-  await desk.getByRole('button', { name: 'Begin the familiarisation' }).click();
-  await present();
-  await present();
+  await beginSession(desk);
 
   const pattern = ['A', 'B', 'B', 'A', 'A', 'B', 'A', 'B', 'B'];
   for (let trial = 1; trial <= 9; trial += 1) {
-    await desk.getByRole('button', { name: `Begin trial ${trial}` }).click();
-    for (let count = 0; count < 3; count += 1) await present();
+    await presentTrial(desk, trial);
     const choice = pattern[trial - 1] ?? 'A';
     if (trial === 3) {
       await desk.getByRole('button', { name: 'Void this trial' }).click();
@@ -222,6 +153,7 @@ test('a study from its plan to a report that R agrees with [R1] [S1] [S13]', asy
   await expect(manager.getByRole('heading', { name: 'What you may say' })).toBeVisible();
   await expectAccessible(manager, 'report');
 
+  const apiAddress = studyAddress.replace('/organisations/', '/api/organisations/');
   const report: Report = await (await manager.request.get(`${apiAddress}/report`)).json();
   expect(report.record.checks.filter(({ outcome }) => outcome !== 'pass')).toEqual([]);
   const locked = (report.sessions[0]?.trials ?? []).filter(({ outcome }) => outcome === 'locked');

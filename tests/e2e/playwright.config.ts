@@ -13,9 +13,9 @@ const quiet = [
 export default defineConfig({
   testDir: '.',
   outputDir: '../../test-results',
-  timeout: 420_000,
+  timeout: 600_000,
   expect: { timeout: 15_000 },
-  workers: 1,
+  workers: 2,
   reporter: [
     ['line'],
     ['json', { outputFile: process.env.PLAYWRIGHT_JSON_OUTPUT_NAME ?? '../../test-results/e2e.json' }],

@@ -5,7 +5,7 @@ import { type AddressInfo, createServer } from 'node:net';
 import { fileURLToPath } from 'node:url';
 import { createConnection } from 'mysql2/promise';
 
-export type RunningFairlead = { address: string; stop: () => Promise<void> };
+export type RunningFairlead = { address: string; said: string; stop: () => Promise<void> };
 
 const top = fileURLToPath(new URL('../..', import.meta.url));
 
@@ -24,13 +24,13 @@ async function freePort(): Promise<number> {
   return port;
 }
 
-/** Resolves once the server has said that it is up; rejects with its words when it ends before. */
-function upOf(server: ChildProcess): Promise<void> {
+/** Resolves with what the server said, once it is up; rejects with its words when it ends before. */
+function upOf(server: ChildProcess): Promise<string> {
   return new Promise((resolve, reject) => {
     let said = '';
     const listen = (chunk: Buffer) => {
       said += chunk.toString();
-      if (said.includes('Fairlead is at')) resolve();
+      if (said.includes('Ctrl-C stops it')) resolve(said);
     };
     server.stdout?.on('data', listen);
     server.stderr?.on('data', listen);
@@ -38,8 +38,8 @@ function upOf(server: ChildProcess): Promise<void> {
   });
 }
 
-/** The real server with its demo, as a process of its own, over a database of its own. */
-export async function runFairlead(): Promise<RunningFairlead> {
+/** The real server, with its demo unless told otherwise, as a process of its own, over a database of its own. */
+export async function runFairlead(environment: Record<string, string> = {}): Promise<RunningFairlead> {
   const name = `fairlead_e2e_${randomBytes(6).toString('hex')}`;
   const account = {
     socketPath: required('TEST_DATABASE_SOCKET'),
@@ -62,11 +62,13 @@ export async function runFairlead(): Promise<RunningFairlead> {
       DATABASE_PASSWORD: account.password,
       DATABASE_NAME: name,
       LOG_LEVEL: 'error',
+      ...environment,
     },
   });
-  await upOf(server);
+  const said = await upOf(server);
   return {
     address: `http://127.0.0.1:${port}`,
+    said,
     stop: async () => {
       server.kill('SIGTERM');
       await once(server, 'exit');

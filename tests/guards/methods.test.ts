@@ -6,7 +6,7 @@ import { methodIds } from '#shared/methods/methods.ts';
 // Adding a method must touch its own files and the list, and nothing else.
 
 describe('a method', () => {
-  it('is named by its own files, the list, the demo and the kit’s samples alone [P1]', () => {
+  it('is named by its own files, the list, the demo and the kit’s samples alone [F1]', () => {
     const named = new RegExp(`['"\`](${methodIds.join('|')})['"\`]`);
     const naming = ['shared', 'server', 'src']
       .flatMap((folder) => readdirSync(folder, { recursive: true, encoding: 'utf8' }).map((name) => join(folder, name)))

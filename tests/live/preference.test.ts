@@ -134,7 +134,7 @@ describe('a paired preference from plan to report', () => {
     await server.stop();
   });
 
-  it('verifies, and the sealed analysis is two-sided with silent and undecided answers left out [L3] [P2]', () => {
+  it('verifies, and the sealed analysis is two-sided with silent and undecided answers left out [L3] [F2]', () => {
     for (const { report } of [group, alone])
       expect(report.record.checks.filter(({ outcome }) => outcome !== 'pass')).toEqual([]);
     expect(group.report.protocol.facts).toEqual(
@@ -148,7 +148,7 @@ describe('a paired preference from plan to report', () => {
     expect(alone.report.protocol.facts.map(({ label }) => label)).not.toContain('No preference');
   });
 
-  it('presents two cables under places, both of them in every trial [P1]', () => {
+  it('presents two cables under places, both of them in every trial [F1]', () => {
     for (const { heard, report, firstCode } of [group, alone]) {
       const both = [...new Set(heard.flatMap(({ codes }) => codes))];
       expect(both).toHaveLength(2);
@@ -159,14 +159,14 @@ describe('a paired preference from plan to report', () => {
     }
   });
 
-  it('asks which one is preferred, with “no preference” only where it was registered [P1]', () => {
+  it('asks which one is preferred, with “no preference” only where it was registered [F1]', () => {
     expect(group.view?.question).toMatchObject({ text: 'Which do you prefer?' });
     expect(group.view?.question.options.map(({ value }) => value)).toEqual(['first', 'second', 'none']);
     expect(alone.view?.question.options.map(({ value }) => value)).toEqual(['first', 'second']);
     expect(alone.refused).toMatchObject({ ok: false, problem: { type: 'urn:fairlead:problem:invalid-input' } });
   });
 
-  it('reports the figures that R computes of a group’s answers [R1] [P2] [P5]', () => {
+  it('reports the figures that R computes of a group’s answers [R1] [F2] [F5]', () => {
     const { result, heard } = group;
     const r = fromR(heard, group.firstCode);
     expect(result).toMatchObject({
@@ -192,7 +192,7 @@ describe('a paired preference from plan to report', () => {
     expect(group.report.nullDistribution.reduce((sum, { chance }) => sum + chance, 0)).toBeCloseTo(1, 12);
   });
 
-  it('reports R’s exact two-sided binomial test for one listener, with its interval [R1] [P2]', () => {
+  it('reports R’s exact two-sided binomial test for one listener, with its interval [R1] [F2]', () => {
     const { result, heard } = alone;
     const r = fromR(heard, alone.firstCode);
     expect(result).toMatchObject({ test: 'exact-binomial', decided: 8, missing: 0, undecided: 0, listeners: 1 });
@@ -202,7 +202,7 @@ describe('a paired preference from plan to report', () => {
     close(result.estimates?.interval.upper, r.upper);
   });
 
-  it('finds what the two listeners who agree make of it, in the words of a preference [P6]', () => {
+  it('finds what the two listeners who agree make of it, in the words of a preference [F6]', () => {
     const { report, result, heard, firstCode } = group;
     const { finding, cables } = report;
     // The draw that was made lies at one end of all 256, whatever the third listener did: p is 2/256.

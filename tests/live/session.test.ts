@@ -38,6 +38,15 @@ describe('a session with a proctor and three phones', () => {
     return found;
   };
 
+  it('plans no more sessions than the protocol registers [S15]', async () => {
+    const manager = await signedIn(server, people.manager.email);
+    const more = await manager
+      .post(`/api/organisations/${people.organisationId}/studies/${study.studyId}/sessions`)
+      .send({ plannedAt: '2026-12-06T18:00:00.000Z', room: 'Room C', proctorId: people.proctor.id });
+    expect(more.status).toBe(409);
+    expect(more.body.detail).toContain('registers one session');
+  });
+
   it('gives labels in the order of joining, and every phone counts in the draw [S3]', () => {
     expect(phones.map(({ seat }) => seat)).toEqual(['L01', 'L02', 'L03']);
     expect(phones.map(({ view }) => view?.contributes)).toEqual([true, true, true]);
@@ -159,10 +168,11 @@ describe('a session with a proctor and three phones', () => {
     expect(report.record.checks.map(({ name, outcome }) => `${name}: ${outcome}`)).toEqual([
       'Record unbroken: pass',
       'Protocol unchanged since sealing: pass',
-      'Commitments match what was revealed: pass',
+      'Commitments match the revealed secrets: pass',
+      'Draws recomputed: pass',
       'Answers match their leaves: pass',
-      'Every session and trial accounted for: pass',
-      'Draws and figures recomputed: pass',
+      'Every drawn trial accounted for: pass',
+      'Figures recomputed: pass',
     ]);
     const truths = codesOfX.map((codes) => (codes[2] === codes[0] ? 'A' : 'B'));
     const locked = report.sessions[0]?.trials.filter(({ outcome }) => outcome === 'locked') ?? [];

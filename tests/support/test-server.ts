@@ -5,6 +5,7 @@ import { pino } from 'pino';
 import { type Config, readConfig } from '../../server/config.ts';
 import { createDataSource } from '../../server/db/data-source.ts';
 import type { Clock, Deps, Random } from '../../server/deps.ts';
+import type { OwnCertificate } from '../../server/network/own-certificate.ts';
 import { serve } from '../../server/serve.ts';
 import { systemClock, systemRandom } from '../../server/system.ts';
 
@@ -51,7 +52,9 @@ export function testConfig(databaseName: string, environment: Record<string, str
 }
 
 /** The real application on a port of its own, over a real, empty database. */
-export async function testServer(given: { clock?: Clock; random?: Random; environment?: Record<string, string> } = {}) {
+export async function testServer(
+  given: { clock?: Clock; random?: Random; environment?: Record<string, string>; certificate?: OwnCertificate } = {},
+) {
   const database = await testDatabase();
   const config = testConfig(database.name, given.environment);
   const db = createDataSource(config.database);
@@ -64,7 +67,7 @@ export async function testServer(given: { clock?: Clock; random?: Random; enviro
     random: given.random ?? systemRandom,
     log: pino({ level: config.logLevel }),
   };
-  const server = await serve(deps);
+  const server = await serve(deps, given.certificate);
   return {
     deps,
     server,

@@ -1,4 +1,4 @@
-import type { CableDraft, Cable as CableReply, SpecimenDraft } from '#shared/contracts/cables.ts';
+import type { CableDraft, CableListQuery, Cable as CableReply, SpecimenDraft } from '#shared/contracts/cables.ts';
 import { Problem } from '#shared/problem.ts';
 import { type Tx, withTransaction } from '../../db/transaction.ts';
 import type { Deps } from '../../deps.ts';
@@ -22,13 +22,9 @@ function requireFreeSerial(cable: Cable, serial: string, own?: string): void {
     ]);
 }
 
-export function listCables(
-  { db }: Deps,
-  organisationId: string,
-  query: { q: string; page: number; archived: 'no' | 'yes' },
-) {
+export function listCables({ db }: Deps, organisationId: string, query: CableListQuery) {
   return withTransaction(db, async (tx) => {
-    const found = await store.listCables(tx, organisationId, { ...query, archived: query.archived === 'yes' });
+    const found = await store.listCables(tx, organisationId, query);
     return { ...found, rows: found.rows.map(cableRowView) };
   });
 }

@@ -1,23 +1,22 @@
 import { In } from 'typeorm';
-import type { CableDraft, SpecimenDraft } from '#shared/contracts/cables.ts';
-import { likePattern, pageOfRows } from '../../db/paging.ts';
+import type { CableDraft, CableListQuery, SpecimenDraft } from '#shared/contracts/cables.ts';
+import { likePattern, pageOfRows, sortRows } from '../../db/paging.ts';
 import type { Tx } from '../../db/transaction.ts';
 import { Cable } from './cable.entity.ts';
 import { Specimen } from './specimen.entity.ts';
 
-export function listCables(tx: Tx, organisationId: string, query: { q: string; page: number; archived: boolean }) {
+export function listCables(tx: Tx, organisationId: string, query: CableListQuery) {
   const rows = tx
     .createQueryBuilder(Cable, 'cable')
     .leftJoinAndSelect('cable.specimens', 'specimen', 'specimen.archived = false')
-    .where('cable.organisationId = :organisationId', { organisationId })
-    .orderBy('cable.updatedAt', 'DESC')
-    .addOrderBy('cable.id');
-  if (!query.archived) rows.andWhere('cable.archived = false');
+    .where('cable.organisationId = :organisationId', { organisationId });
+  if (query.archived === 'no') rows.andWhere('cable.archived = false');
   if (query.q !== '')
     rows.andWhere('(cable.name like :q or cable.description like :q or cable.kind like :q)', {
       q: likePattern(query.q),
     });
-  return pageOfRows(rows, query.page);
+  const columns = { name: 'cable.name', kind: 'cable.kind', length: 'cable.lengthMm', updatedAt: 'cable.updatedAt' };
+  return pageOfRows(sortRows(rows, query.sort, columns, 'cable.id'), query.page);
 }
 
 const inOrder = { specimens: { position: 'ASC' } } as const;

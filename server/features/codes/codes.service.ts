@@ -46,6 +46,7 @@ async function statusOf(tx: Tx, study: Study, who: Asker): Promise<CodesStatus> 
   return {
     studyId: study.id,
     title: study.title,
+    isSealed: study.state !== 'draft',
     state: study.codesState,
     specimenCount: study.draft.cables.reduce((sum, { specimenIds }) => sum + specimenIds.length, 0),
     codeHolder: names.get(study.codeHolderId) ?? 'unknown',

@@ -6,7 +6,7 @@ import type { Deps } from '../../deps.ts';
 import type { Access } from '../../http/access.ts';
 import { mount } from '../../http/mount.ts';
 
-const { version } = z
+export const { version } = z
   .object({ version: z.string() })
   .parse(JSON.parse(readFileSync(new URL('../../../package.json', import.meta.url), 'utf8')));
 

@@ -15,6 +15,9 @@ export class Membership {
   @Column({ type: 'varchar', length: 16 })
   role: Role;
 
+  @Column({ type: 'datetime', precision: 3, name: 'joined_at', default: () => 'CURRENT_TIMESTAMP(3)' })
+  joinedAt: Date;
+
   @ManyToOne(() => Organisation)
   @JoinColumn({ name: 'organisation_id', foreignKeyConstraintName: 'memberships_organisation' })
   organisation: Relation<Organisation>;

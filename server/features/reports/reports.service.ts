@@ -1,9 +1,10 @@
 import type { Report, ReportRow } from '#shared/contracts/reports.ts';
+import { isClosed } from '#shared/contracts/studies.ts';
 import type { Entry } from '#shared/ledger/chain.ts';
-import { type Check, verifyStudy } from '#shared/ledger/verify.ts';
+import { type ClosedStudy, publicationParts } from '#shared/ledger/publication-parts.ts';
+import { type Check, type CheckId, verifyStudy } from '#shared/ledger/verify.ts';
 import { methodOf, registeredResult } from '#shared/methods/methods.ts';
 import { Problem } from '#shared/problem.ts';
-import type { Protocol } from '#shared/protocol/protocol.ts';
 import { blindingRung } from '#shared/session/blinding-rung.ts';
 import { sessionsInRecord } from '#shared/session/read-record.ts';
 import { studyEvents } from '#shared/session/study-events.ts';
@@ -16,69 +17,83 @@ import { listStudies } from '../studies/studies.store.ts';
 import type { Study } from '../studies/study.entity.ts';
 import { type ReportSource, reportView } from './reports.views.ts';
 
-const holds = (checks: readonly Check[]) => checks.every(({ outcome }) => outcome === 'pass');
-
-function findingFor(source: Pick<ReportSource, 'entries' | 'protocol' | 'result' | 'checks'>) {
-  const { entries, protocol, result, checks } = source;
-  const closing = closingOf(entries);
-  return methodOf(result.method).finding(result, {
-    cables: [protocol.cables[0].name, protocol.cables[1].name],
-    gate: { commitmentsHold: holds(checks), allTrialsAccounted: holds(checks) },
-    endedEarly: closing.complete ? null : closing.reason,
-    setting: protocol.conduct.chain,
-  });
+/** Whether the checks that a gate stands on have all passed. */
+function passed(checks: readonly Check[], ids: readonly CheckId[]): boolean {
+  return checks.every(({ id, outcome }) => !ids.includes(id) || outcome === 'pass');
 }
 
 function closingOf(entries: readonly Entry[]) {
   return studyEvents['study-closed'].parse(entries.find(({ kind }) => kind === 'study-closed')?.payload);
 }
 
-async function sourceOf(tx: Tx, study: Study): Promise<ReportSource> {
-  if (study.state !== 'closed') throw new Problem('wrong-phase', 'There is a report once the study is closed.');
-  const protocol: Protocol = protocolOf(study);
-  const entries = await readRecord(tx, study.id);
+export type ClosedRecord = ClosedStudy & {
+  readonly study: { readonly id: string; readonly title: string };
+  /** Where each session was held, by its number; beside the record. */
+  readonly rooms: ReadonlyMap<number, string>;
+};
+
+/** Everything that a report says, from the record alone: what was checked, how blind it was, what was found. */
+function sourceFrom(closed: ClosedRecord): ReportSource {
+  const { entries, protocol } = closed;
+  const method = methodOf(protocol.method);
+  const states = sessionsInRecord(entries, method);
+  const checks = verifyStudy(publicationParts(closed));
+  const rung = blindingRung(entries, states, method);
+  const closing = closingOf(entries);
+  const result = registeredResult.parse(entries.find(({ kind }) => kind === 'result-recorded')?.payload.result);
+  const finding = method.finding(result, {
+    cables: [protocol.cables[0].name, protocol.cables[1].name],
+    gate: {
+      commitmentsHold: passed(checks, ['record', 'protocol', 'commitments', 'draws', 'answers', 'figures']),
+      allTrialsAccounted: passed(checks, ['trials']),
+      isBlind: rung.name !== 'open',
+    },
+    endedEarly: closing.complete ? null : closing.reason,
+    setting: protocol.conduct.chain,
+  });
+  return { ...closed, states, checks, rung, closing, result, finding };
+}
+
+/** The report of a closed record, wherever it was read from. */
+export function reportOf(closed: ClosedRecord): Report {
+  return reportView(sourceFrom(closed));
+}
+
+/** A closed study as its tables hold it. @throws Problem before closing */
+export async function closedRecord(tx: Tx, study: Study): Promise<ClosedRecord> {
+  if (!isClosed(study.state)) throw new Problem('wrong-phase', 'There is a report once the study is closed.');
   const sessions = await sessionsOfStudy(tx, study.id);
   const rows = await answersOfSessions(
     tx,
     sessions.map(({ id }) => id),
   );
-  const answers = rows.map(({ sessionId, trial, seat, choice, confidence, salt }) => ({
-    session: sessionId,
-    trial,
-    seat,
-    choice,
-    confidence,
-    salt,
-  }));
-  const recorded = entries.find(({ kind }) => kind === 'result-recorded');
-  const method = methodOf(protocol.method);
-  const states = sessionsInRecord(entries, method);
-  const source = {
+  return {
     study,
-    protocol,
-    entries,
-    answers,
-    states,
+    protocol: protocolOf(study),
+    entries: await readRecord(tx, study.id),
+    answers: rows.map(({ sessionId, trial, seat, choice, confidence, salt }) => ({
+      session: sessionId,
+      trial,
+      seat,
+      choice,
+      confidence,
+      salt,
+    })),
     rooms: new Map(sessions.map(({ number, room }) => [number, room])),
-    result: registeredResult.parse(recorded?.payload.result),
-    checks: verifyStudy({ entries, protocol, answers }),
-    rung: blindingRung(entries, states, method),
-    closing: closingOf(entries),
   };
-  return { ...source, finding: findingFor(source) };
 }
 
 /** The report of a closed study, computed from its record. */
 export function getReport({ db }: Deps, where: { organisationId: string; id: string }): Promise<Report> {
-  return withTransaction(db, async (tx) => reportView(await sourceOf(tx, await studyOrProblem(tx, where))));
+  return withTransaction(db, async (tx) => reportOf(await closedRecord(tx, await studyOrProblem(tx, where))));
 }
 
 export function listReports({ db }: Deps, organisationId: string, query: { q: string; page: number }) {
   return withTransaction(db, async (tx) => {
-    const found = await listStudies(tx, organisationId, { ...query, state: 'closed' });
+    const found = await listStudies(tx, organisationId, { ...query, state: 'any-closed', sort: '-updatedAt' });
     const rows: ReportRow[] = [];
     for (const study of found.rows) {
-      const { entries, finding } = await sourceOf(tx, study);
+      const { entries, finding } = sourceFrom(await closedRecord(tx, study));
       const closedAt = entries.find(({ kind }) => kind === 'study-closed')?.at ?? study.updatedAt.toISOString();
       rows.push({ studyId: study.id, title: study.title, closedAt, headline: finding.headline });
     }

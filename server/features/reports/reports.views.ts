@@ -13,10 +13,9 @@ import { truthOf } from '#shared/session/fitting.ts';
 import { type RevealedKey, revealedKey } from '#shared/session/revealed-key.ts';
 import type { SessionState } from '#shared/session/state.ts';
 import type { StudyPayloadOf } from '#shared/session/study-events.ts';
-import type { Study } from '../studies/study.entity.ts';
 
 export type ReportSource = {
-  readonly study: Study;
+  readonly study: { readonly id: string; readonly title: string };
   readonly protocol: Protocol;
   readonly entries: readonly Entry[];
   readonly answers: readonly AnswerContent[];

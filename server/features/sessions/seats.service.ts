@@ -1,59 +1,50 @@
 import { createHash } from 'node:crypto';
 import type { OpenSession } from '#shared/contracts/seats.ts';
-import { methodOf } from '#shared/methods/methods.ts';
 import { Problem } from '#shared/problem.ts';
-import { type Tx, withTransaction } from '../../db/transaction.ts';
 import type { Deps } from '../../deps.ts';
+import type { SessionMemory } from '../../live/session-memory.ts';
+import type { Sitting } from '../../live/sitting.ts';
 import type { Sittings } from '../../live/sittings.ts';
-import { studyById } from '../studies/studies.store.ts';
-import type { Session } from './session.entity.ts';
 import { sessionByCode } from './sessions.store.ts';
 
 export const tokenDigest = (token: string) => createHash('sha256').update(token).digest('hex');
 
-async function openSession(tx: Tx, code: string): Promise<Session> {
-  const session = await sessionByCode(tx, code);
-  if (session === null)
+/** The session or rehearsal that takes listeners under a code. */
+async function sittingUnder({ db }: Deps, sittings: Sittings, code: string): Promise<Sitting> {
+  const session = await sessionByCode(db.manager, code);
+  const sitting = session === null ? sittings.rehearsals.byCode(code) : await sittings.of(session.id);
+  if (sitting === null)
     throw new Problem('not-found', 'No session takes listeners under this code. Check it on the proctor’s screen.');
-  return session;
+  return sitting;
 }
 
 /** How long a session takes, in whole minutes: every presentation with its change, the answers, and the familiarisation. */
-function minutesOf({
-  draft,
-}: {
-  draft: { method: string; trials: number; changeS: number; answerS: number; programme: { lengthS: number }[] };
-}): number {
-  const { presentations, familiarisation } = methodOf(draft.method);
-  const longest = Math.max(...draft.programme.map(({ lengthS }) => lengthS));
-  const presentation = draft.changeS + longest;
-  const trial = presentations.length * presentation + draft.answerS;
-  const seconds = draft.trials * trial + familiarisation.length * presentation;
-  return Math.max(1, Math.ceil(seconds / 60));
+function minutesOf({ method, state: { plan } }: SessionMemory): number {
+  const longestMs = Math.max(...plan.programme.map(({ lengthMs }) => lengthMs));
+  const presentationMs = plan.changeMs + longestMs;
+  const trialMs = method.presentations.length * presentationMs + plan.answerMs;
+  return Math.max(1, Math.ceil((plan.trials * trialMs + method.familiarisation.length * presentationMs) / 60_000));
 }
 
 /** What a listener is told before taking a seat. */
-export function lookAtSession({ db }: Deps, code: string): Promise<OpenSession> {
-  return withTransaction(db, async (tx) => {
-    const session = await openSession(tx, code);
-    const study = await studyById(tx, session.studyId);
-    return {
-      title: study.title,
-      room: session.room,
-      minutes: minutesOf(study),
-      trials: study.draft.trials,
-      running: session.phase === 'running',
-    };
-  });
+export async function lookAtSession(deps: Deps, sittings: Sittings, code: string): Promise<OpenSession> {
+  const { memory } = await sittingUnder(deps, sittings, code);
+  return {
+    title: memory.title,
+    room: memory.session.room,
+    minutes: minutesOf(memory),
+    trials: memory.state.plan.trials,
+    running: memory.state.phase === 'running',
+    rehearsal: memory.isRehearsal,
+  };
 }
 
 /** Takes a seat: consent, a label in the study, and a token that is the seat. */
 export async function takeSeat(
-  { db }: Deps,
+  deps: Deps,
   sittings: Sittings,
   body: { code: string; place: string; commitment: string; consentVersion: number },
 ): Promise<{ token: string; seat: string }> {
-  const session = await openSession(db.manager, body.code);
-  const sitting = await sittings.of(session.id);
+  const sitting = await sittingUnder(deps, sittings, body.code);
   return sitting.takeSeat(body);
 }

@@ -1,14 +1,20 @@
-import type { SessionDraft, SessionRow } from '#shared/contracts/sessions.ts';
+import type { SessionDraft, SessionListQuery, SessionRow } from '#shared/contracts/sessions.ts';
 import { Problem } from '#shared/problem.ts';
 import { sessionPlanOf } from '#shared/protocol/protocol.ts';
 import { type Tx, withTransaction } from '../../db/transaction.ts';
 import type { Deps } from '../../deps.ts';
 import { append } from '../../ledger/ledger.ts';
+import { sessionPlannedMail } from '../../mail/mails.ts';
+import { postMail } from '../../mail/outbox.ts';
+import { pageAddresses } from '../../mail/page-addresses.ts';
 import { lockedStudy, protocolOf } from '../studies/studies.service.ts';
 import { studyById, updateStudy } from '../studies/studies.store.ts';
+import { progressOf } from '../studies/studies.views.ts';
 import { membersOf, namesOf } from '../users/users.store.ts';
 import type { Session } from './session.entity.ts';
 import * as store from './sessions.store.ts';
+
+const formatSessions = (count: number) => (count === 1 ? 'one session' : `${count} sessions`);
 
 async function rowsOf(tx: Tx, sessions: readonly Session[]): Promise<SessionRow[]> {
   const names = await namesOf(
@@ -36,13 +42,11 @@ async function rowsOf(tx: Tx, sessions: readonly Session[]): Promise<SessionRow[
 export function listSessions(
   { db }: Deps,
   who: { organisationId: string; userId: string; role: string | null },
-  query: { q: string; page: number; studyId?: string | undefined; phase: 'any' | 'open' | 'ended' },
+  query: SessionListQuery,
 ) {
   return withTransaction(db, async (tx) => {
     const own = who.role === 'proctor' ? { proctorId: who.userId } : {};
-    const { q, page, phase, studyId } = query;
-    const filter = { q, page, phase, ...own, ...(studyId === undefined ? {} : { studyId }) };
-    const found = await store.listSessions(tx, who.organisationId, filter);
+    const found = await store.listSessions(tx, who.organisationId, { ...query, ...own });
     return { ...found, rows: await rowsOf(tx, found.rows) };
   });
 }
@@ -80,6 +84,11 @@ export function planSession(
         { pointer: '/proctorId', detail: 'Choose a member who may run sessions' },
       ]);
     const sessions = await store.sessionsOfStudy(tx, study.id);
+    if (progressOf(study, sessions).sessionsToPlan === 0)
+      throw new Problem(
+        'wrong-phase',
+        `The protocol registers ${formatSessions(study.draft.sessions)}, and no more can be planned. One that is abandoned leaves its place to another.`,
+      );
     const session: Session = {
       id: random.id(),
       organisationId: where.organisationId,
@@ -103,6 +112,10 @@ export function planSession(
     };
     await append(tx, random, study.id, [{ kind: 'session-planned', at: clock.now(), payload, session: number }]);
     await updateStudy(tx, study.id, {}, new Date(clock.now()));
+    const { organisationId } = where;
+    const url = pageAddresses.console(deps.config, organisationId, session.id);
+    const mail = sessionPlannedMail({ title: study.title, url }, session);
+    await postMail(tx, deps, { organisationId, recipient: proctor.user.email }, mail);
     const [row] = await rowsOf(tx, [session]);
     if (row === undefined) throw new Error('a session without a row');
     return row;

@@ -1,30 +1,32 @@
 import { In } from 'typeorm';
-import { likePattern, pageOfRows } from '../../db/paging.ts';
+import type { SessionListQuery } from '#shared/contracts/sessions.ts';
+import { likePattern, pageOfRows, sortRows } from '../../db/paging.ts';
 import type { Tx } from '../../db/transaction.ts';
 import { Study } from '../studies/study.entity.ts';
 import { Answer } from './answer.entity.ts';
 import { Seat } from './seat.entity.ts';
 import { Session } from './session.entity.ts';
 
-export function listSessions(
-  tx: Tx,
-  organisationId: string,
-  query: { q: string; page: number; studyId?: string; phase: 'any' | 'open' | 'ended'; proctorId?: string },
-) {
+export function listSessions(tx: Tx, organisationId: string, query: SessionListQuery & { proctorId?: string }) {
   const rows = tx
     .createQueryBuilder(Session, 'session')
     .innerJoin(Study, 'study', 'study.id = session.studyId')
-    .where('session.organisationId = :organisationId', { organisationId })
-    .orderBy('session.plannedAt', 'DESC')
-    .addOrderBy('session.number', 'DESC')
-    .addOrderBy('session.id');
+    .addSelect('study.title')
+    .where('session.organisationId = :organisationId', { organisationId });
   if (query.proctorId !== undefined) rows.andWhere('session.proctorId = :proctorId', { proctorId: query.proctorId });
   if (query.studyId !== undefined) rows.andWhere('session.studyId = :studyId', { studyId: query.studyId });
   const ended = ['finished', 'abandoned'];
   if (query.phase === 'ended') rows.andWhere('session.phase in (:...ended)', { ended });
   if (query.phase === 'open') rows.andWhere('session.phase not in (:...ended)', { ended });
   if (query.q !== '') rows.andWhere('(session.room like :q or study.title like :q)', { q: likePattern(query.q) });
-  return pageOfRows(rows, query.page);
+  const columns = {
+    title: 'study.title',
+    number: 'session.number',
+    phase: 'session.phase',
+    plannedAt: 'session.plannedAt',
+    room: 'session.room',
+  };
+  return pageOfRows(sortRows(rows, query.sort, columns, 'session.id'), query.page);
 }
 
 export function findSession(tx: Tx, organisationId: string, id: string): Promise<Session | null> {

@@ -14,6 +14,19 @@ export class WebSession {
   @Column({ type: 'text' })
   data: string;
 
+  /** The network address and the browser that signed in. */
+  @Column({ type: 'varchar', length: 45, default: '' })
+  address: string;
+
+  @Column({ type: 'varchar', length: 200, default: '' })
+  browser: string;
+
+  @Column({ type: 'datetime', precision: 3, name: 'signed_in_at', default: () => 'CURRENT_TIMESTAMP(3)' })
+  signedInAt: Date;
+
+  @Column({ type: 'datetime', precision: 3, name: 'last_seen_at', default: () => 'CURRENT_TIMESTAMP(3)' })
+  lastSeenAt: Date;
+
   @Index('web_sessions_expires')
   @Column({ type: 'datetime', precision: 3, name: 'expires_at' })
   expiresAt: Date;

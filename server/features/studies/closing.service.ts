@@ -1,4 +1,4 @@
-import type { Study as StudyReply } from '#shared/contracts/studies.ts';
+import { isClosed, type Study as StudyReply } from '#shared/contracts/studies.ts';
 import type { Json } from '#shared/ledger/canonical-json.ts';
 import { methodOf } from '#shared/methods/methods.ts';
 import { runRegistered } from '#shared/methods/run-registered.ts';
@@ -10,6 +10,7 @@ import { reveal } from '../../blind/index.ts';
 import { type Tx, withTransaction } from '../../db/transaction.ts';
 import type { Deps } from '../../deps.ts';
 import { append, type NewEntry, readRecord } from '../../ledger/ledger.ts';
+import { pastManagersOf } from '../people/people.store.ts';
 import type { Session } from '../sessions/session.entity.ts';
 import { answersOfSessions, sessionsOfStudy, updateSession } from '../sessions/sessions.store.ts';
 import { membersOf } from '../users/users.store.ts';
@@ -45,7 +46,11 @@ async function closedEntry(
   at: number,
 ): Promise<NewEntry> {
   const members = await membersOf(tx, study.organisationId);
-  const withRole = (role: string) => members.filter((member) => member.role === role).map(({ userId }) => userId);
+  // Whoever once could see the cables' pages counts, also after another role or none.
+  const everyone = [...members, ...(await pastManagersOf(tx, study.organisationId))];
+  const withRole = (role: string) => [
+    ...new Set(everyone.filter((member) => member.role === role).map(({ userId }) => userId)),
+  ];
   const { managerId: manager, codeHolderId: codeHolder } = study;
   return {
     kind: 'study-closed',
@@ -89,7 +94,7 @@ export function closeStudy(
     const study = await lockedStudy(tx, where);
     const sessions = await sessionsOfStudy(tx, study.id);
     const { allowed, complete, why } = closingOf(study, sessions);
-    if (!allowed) throw new Problem('wrong-phase', study.state === 'closed' ? 'The study is closed already.' : why);
+    if (!allowed) throw new Problem('wrong-phase', isClosed(study.state) ? 'The study is closed already.' : why);
     if (!complete && reason === '')
       throw new Problem('invalid-input', 'Ending early needs a reason.', [
         { pointer: '/reason', detail: 'Say why the study ends before its registered number of trials' },

@@ -1,14 +1,17 @@
-import type { StudyDraft, Study as StudyReply, StudyState } from '#shared/contracts/studies.ts';
+import type { StudyDraft, StudyListQuery, Study as StudyReply } from '#shared/contracts/studies.ts';
 import { canonicalJson } from '#shared/ledger/canonical-json.ts';
 import { type InputFault, Problem } from '#shared/problem.ts';
 import { type Protocol, type ProtocolCable, protocolDigest, protocolFromDraft } from '#shared/protocol/protocol.ts';
 import { type Tx, withTransaction } from '../../db/transaction.ts';
 import type { Deps } from '../../deps.ts';
 import { append, readKinds } from '../../ledger/ledger.ts';
+import { codesToDrawMail } from '../../mail/mails.ts';
+import { postMail } from '../../mail/outbox.ts';
+import { pageAddresses } from '../../mail/page-addresses.ts';
 import type { Cable } from '../cables/cable.entity.ts';
 import { cablesById } from '../cables/cables.store.ts';
 import { sessionsOfStudies, sessionsOfStudy } from '../sessions/sessions.store.ts';
-import { membersOf, namesOf } from '../users/users.store.ts';
+import { findById, membersOf, namesOf } from '../users/users.store.ts';
 import * as store from './studies.store.ts';
 import { studyRowView, studyView } from './studies.views.ts';
 import type { Study } from './study.entity.ts';
@@ -66,11 +69,7 @@ async function requireReferences(tx: Tx, organisationId: string, draft: StudyDra
   if (faults.length > 0) throw new Problem('invalid-input', 'Please mend what is marked; nothing was saved.', faults);
 }
 
-export function listStudies(
-  { db }: Deps,
-  organisationId: string,
-  query: { q: string; page: number; state: StudyState | 'any' },
-) {
+export function listStudies({ db }: Deps, organisationId: string, query: StudyListQuery) {
   return withTransaction(db, async (tx) => {
     const found = await store.listStudies(tx, organisationId, query);
     const sessions = await sessionsOfStudies(
@@ -150,8 +149,16 @@ export function sealStudy(deps: Deps, where: Where, userId: string) {
     const payload = { protocolVersion: 1, digest: protocolDigest(protocol), sealedBy: userId };
     await append(tx, random, study.id, [{ kind: 'protocol-sealed', at: now, payload, session: null }]);
     await store.updateStudy(tx, study.id, { state: 'sealed', protocol: canonicalJson(protocol) }, new Date(now));
+    await tellCodeHolder(tx, deps, study);
     return viewOf(tx, await studyOrProblem(tx, where));
   });
+}
+
+async function tellCodeHolder(tx: Tx, deps: Deps, { id, organisationId, title, codeHolderId }: Study): Promise<void> {
+  const holder = await findById(tx, codeHolderId);
+  if (holder === null) throw new Error('a checked code holder is gone');
+  const url = pageAddresses.codes(deps.config, organisationId, id);
+  await postMail(tx, deps, { organisationId, recipient: holder.email }, codesToDrawMail({ title, url }));
 }
 
 export function recordDeviation(deps: Deps, where: Where, text: string) {

@@ -1,21 +1,21 @@
-import type { StudyDraft, StudyState } from '#shared/contracts/studies.ts';
-import { likePattern, pageOfRows } from '../../db/paging.ts';
+import { closedStates, type StudyDraft, type StudyListQuery } from '#shared/contracts/studies.ts';
+import { likePattern, pageOfRows, sortRows } from '../../db/paging.ts';
 import type { Tx } from '../../db/transaction.ts';
 import { Study } from './study.entity.ts';
 
 export function listStudies(
   tx: Tx,
   organisationId: string,
-  query: { q: string; page: number; state: StudyState | 'any' },
+  query: Omit<StudyListQuery, 'state'> & { state: StudyListQuery['state'] | 'any-closed' },
 ) {
   const rows = tx
     .createQueryBuilder(Study, 'study')
-    .where('study.organisationId = :organisationId', { organisationId })
-    .orderBy('study.updatedAt', 'DESC')
-    .addOrderBy('study.id');
-  if (query.state !== 'any') rows.andWhere('study.state = :state', { state: query.state });
+    .where('study.organisationId = :organisationId', { organisationId });
+  const states = query.state === 'any-closed' ? closedStates : [query.state];
+  if (query.state !== 'any') rows.andWhere('study.state in (:...states)', { states });
   if (query.q !== '') rows.andWhere('study.title like :q', { q: likePattern(query.q) });
-  return pageOfRows(rows, query.page);
+  const columns = { title: 'study.title', state: 'study.state', updatedAt: 'study.updatedAt' };
+  return pageOfRows(sortRows(rows, query.sort, columns, 'study.id'), query.page);
 }
 
 export function findStudy(tx: Tx, organisationId: string, id: string): Promise<Study | null> {

@@ -9,10 +9,12 @@ export function progressOf(study: Study, sessions: readonly Session[]): StudyRow
   const opened = sessions.filter(
     (session) => session.code !== null || session.listeners > 0 || session.phase === 'finished',
   );
+  const standing = sessions.filter(({ phase }) => phase !== 'abandoned');
   return {
     sessionsPlanned: sessions.length,
     sessionsOpened: opened.length,
     sessionsEnded: sessions.filter(({ phase }) => phase === 'finished' || phase === 'abandoned').length,
+    sessionsToPlan: Math.max(0, study.draft.sessions - standing.length),
     trialsLocked: sessions.reduce((sum, session) => sum + session.trialsLocked, 0),
     trialsRegistered: study.draft.sessions * study.draft.trials,
   };

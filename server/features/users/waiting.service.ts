@@ -1,3 +1,4 @@
+import { isClosed } from '#shared/contracts/studies.ts';
 import type { WaitingItem } from '#shared/contracts/users.ts';
 import { withTransaction } from '../../db/transaction.ts';
 import type { Deps } from '../../deps.ts';
@@ -24,12 +25,14 @@ const item = (
 });
 
 function forManager(study: Study, sessions: readonly Session[]): WaitingItem[] {
-  const { sessionsPlanned, trialsRegistered, trialsLocked } = progressOf(study, sessions);
+  const { sessionsPlanned, sessionsToPlan, trialsRegistered, trialsLocked } = progressOf(study, sessions);
   const closing = closingOf(study, sessions);
   if (study.state === 'draft') return [item(study, 'draft-to-finish', 'A draft, not sealed yet')];
-  if (study.state === 'closed') return [item(study, 'report-to-read', 'Closed; the report is ready')];
+  if (study.state === 'closed')
+    return [item(study, 'report-to-read', 'Closed; read the report, then publish or shelve it')];
+  if (isClosed(study.state)) return [];
   const waiting: WaitingItem[] = [];
-  if (sessionsPlanned < study.draft.sessions)
+  if (sessionsToPlan > 0)
     waiting.push(item(study, 'session-to-plan', `${sessionsPlanned} of ${study.draft.sessions} sessions planned`));
   if (closing.allowed && closing.complete)
     waiting.push(item(study, 'study-to-close', `${trialsLocked} of ${trialsRegistered} trials locked`));
@@ -37,7 +40,7 @@ function forManager(study: Study, sessions: readonly Session[]): WaitingItem[] {
 }
 
 function forCodeHolder(study: Study): WaitingItem[] {
-  if (study.state === 'draft' || study.state === 'closed') return [];
+  if (study.state === 'draft' || isClosed(study.state)) return [];
   if (study.codesState === 'none')
     return [item(study, 'codes-to-draw', 'Draw the blind codes and sleeve the specimens')];
   if (study.codesState === 'drawn') return [item(study, 'codes-to-confirm', 'Label both ends, then confirm')];

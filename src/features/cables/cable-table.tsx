@@ -8,6 +8,8 @@ import { kindWords } from './cable-words.ts';
 
 type CableTableProps = {
   rows: readonly CableRow[];
+  sort: string;
+  onSort: (word: string) => void;
   page: number;
   pageCount: number;
   onPage: (page: number) => void;
@@ -16,9 +18,7 @@ type CableTableProps = {
 };
 
 export function CableTable({ hrefOf, ...table }: CableTableProps) {
-  return (
-    <DataTable caption="Cables, newest change first" columns={columnsFor(hrefOf)} rowKey={({ id }) => id} {...table} />
-  );
+  return <DataTable caption="Cables" columns={columnsFor(hrefOf)} rowKey={({ id }) => id} {...table} />;
 }
 
 function columnsFor(hrefOf: (id: string) => string): Column<CableRow>[] {
@@ -26,6 +26,7 @@ function columnsFor(hrefOf: (id: string) => string): Column<CableRow>[] {
     {
       key: 'name',
       header: 'Cable',
+      isSortable: true,
       isRowHeader: true,
       cell: ({ id, name, archived }) => (
         <>
@@ -34,9 +35,15 @@ function columnsFor(hrefOf: (id: string) => string): Column<CableRow>[] {
         </>
       ),
     },
-    { key: 'kind', header: 'Kind', cell: ({ kind }) => kindWords[kind] },
-    { key: 'length', header: 'Length', isFigure: true, cell: ({ lengthMm }) => formatLength(lengthMm) },
+    { key: 'kind', header: 'Kind', isSortable: true, cell: ({ kind }) => kindWords[kind] },
+    {
+      key: 'length',
+      header: 'Length',
+      isSortable: true,
+      isFigure: true,
+      cell: ({ lengthMm }) => formatLength(lengthMm),
+    },
     { key: 'specimens', header: 'Specimens', isFigure: true, cell: ({ specimenCount }) => specimenCount },
-    { key: 'updatedAt', header: 'Last change', cell: ({ updatedAt }) => formatDate(updatedAt) },
+    { key: 'updatedAt', header: 'Last change', isSortable: true, cell: ({ updatedAt }) => formatDate(updatedAt) },
   ];
 }

@@ -28,6 +28,13 @@ export function HolderSteps({ organisationId, status, labelsTo }: HolderStepsPro
 
 function DrawStep({ organisationId, status }: { organisationId: string; status: CodesStatus }) {
   const draw = useDrawCodes(organisationId, status.studyId);
+  if (!status.isSealed)
+    return (
+      <Step title="The protocol is not sealed yet" actions={null}>
+        Its specimens can still change, so there is nothing to code. Once a manager has sealed the study, the codes are
+        drawn here.
+      </Step>
+    );
   return (
     <Step
       title="Draw the codes"

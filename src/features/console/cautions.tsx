@@ -27,7 +27,9 @@ export function Cautions({ view, act, isBusy }: { view: ProctorView } & Pick<Con
       <div className="mt-auto flex flex-col gap-3 pt-2">
         <p role="status" className="text-soft">
           {left === 0
-            ? 'Your confirmation goes on the record.'
+            ? view.rehearsal
+              ? 'In a rehearsal nothing goes on a record.'
+              : 'Your confirmation goes on the record.'
             : `${left} of ${cautions.length} still to be read and ticked.`}
         </p>
         <Button

@@ -52,7 +52,9 @@ function Scenery({ view, actions, back }: SceneryProps) {
       if (view.cautionsConfirmed) return <ReadyForListeners />;
       return <Cautions view={view} act={actions.act} isBusy={actions.isBusy} />;
     case 'seating':
-      return view.join === null ? null : <Seating join={view.join} seats={view.seats} isDemo={view.demo} />;
+      return view.join === null ? null : (
+        <Seating join={view.join} seats={view.seats} canListenHere={view.demo || view.rehearsal} />
+      );
     case 'revealing':
       return <Revealing view={view} />;
     case 'running':

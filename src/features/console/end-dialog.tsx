@@ -3,6 +3,7 @@ import { ConfirmDialog } from '../../ui/confirm-dialog.tsx';
 import type { ConsoleDialogProps } from './console-dialog.ts';
 
 function consequenceOf(view: ProctorView): string {
+  if (view.rehearsal) return 'Nothing of it is kept. The session itself stays as it is.';
   const open = view.trial === null ? '' : ' The open trial is not counted.';
   return `It cannot be taken up again, keeps its number for good, and every locked trial counts.${open}`;
 }
@@ -13,15 +14,19 @@ export function EndDialog({ view, isOpen, onOpenChange, actions }: ConsoleDialog
     <ConfirmDialog
       isOpen={isOpen}
       onOpenChange={onOpenChange}
-      title="End this session before its last trial?"
+      title={view.rehearsal ? 'End this rehearsal?' : 'End this session before its last trial?'}
       consequence={consequenceOf(view)}
-      confirmWord="End the session"
+      confirmWord={view.rehearsal ? 'End the rehearsal' : 'End the session'}
       keepWord="Go on"
-      reason={{ label: 'Why does it end here?', hint: 'This goes on the record. No names.' }}
+      {...(view.rehearsal
+        ? {}
+        : { reason: { label: 'Why does it end here?', hint: 'This goes on the record. No names.' } })}
       busy={actions.isBusy}
       {...(actions.problem === null ? {} : { problem: actions.problem })}
       onConfirm={(reason) =>
-        void actions.act({ kind: 'abandon', reason }).then((isDone) => isDone && onOpenChange(false))
+        void actions
+          .act({ kind: 'abandon', reason: view.rehearsal ? 'rehearsed' : reason })
+          .then((isDone) => isDone && onOpenChange(false))
       }
     />
   );

@@ -3,8 +3,30 @@ import { CourseLine } from '../../ui/course-line.tsx';
 import { Facts } from '../../ui/facts.tsx';
 import { LinkButton } from '../../ui/link-button.tsx';
 
+type EndedProps = { view: ProctorView; back: { to: string; label: string } };
+
 /** What was recorded, and the way back. */
-export function Ended({ view, back }: { view: ProctorView; back: { to: string; label: string } }) {
+export function Ended({ view, back }: EndedProps) {
+  return view.rehearsal ? <Rehearsed back={back} /> : <Recorded view={view} back={back} />;
+}
+
+function Rehearsed({ back }: Pick<EndedProps, 'back'>) {
+  return (
+    <section className="flex max-w-[54rem] flex-1 flex-col gap-6">
+      <h2 className="text-step font-bold">The rehearsal is over</h2>
+      <p className="text-xl text-soft">
+        Nothing of it was kept: no answer, no code, no entry on any record. The session itself is as it was before.
+      </p>
+      <div>
+        <LinkButton to={back.to} variant="primary">
+          Back to the sessions
+        </LinkButton>
+      </div>
+    </section>
+  );
+}
+
+function Recorded({ view, back }: EndedProps) {
   const count = (state: string) => view.course.filter((ring) => ring.state === state).length;
   const isFinished = view.phase === 'finished';
   const open = count('open') + count('now');

@@ -5,10 +5,10 @@ import { CopyButton } from '../../ui/copy-button.tsx';
 import { Notice } from '../../ui/notice.tsx';
 
 type Join = NonNullable<ProctorView['join']>;
-type SeatingProps = { join: Join; seats: ProctorView['seats']; isDemo: boolean };
+type SeatingProps = { join: Join; seats: ProctorView['seats']; canListenHere: boolean };
 
 /** How phones come in: the code, the link, and a QR code where the address can be reached by a phone. */
-export function Seating({ join, seats, isDemo }: SeatingProps) {
+export function Seating({ join, seats, canListenHere }: SeatingProps) {
   const seated = seats.filter(({ state }) => state !== 'left').length;
   return (
     <section className="flex flex-1 flex-wrap items-start justify-between gap-x-10 gap-y-6">
@@ -23,7 +23,7 @@ export function Seating({ join, seats, isDemo }: SeatingProps) {
         <p className="text-xl [overflow-wrap:anywhere] text-soft">{join.address}</p>
         <div className="flex flex-wrap gap-3">
           <CopyButton text={join.address} label="Copy the link" />
-          {isDemo && join.qrSvg !== null ? <OpenListener code={join.code} /> : null}
+          {canListenHere && join.qrSvg !== null ? <OpenListener code={join.code} /> : null}
         </div>
         <p role="status" className="text-step font-bold">
           {seated === 0 ? 'Nobody is seated yet' : `${seated} seated`}
@@ -34,7 +34,7 @@ export function Seating({ join, seats, isDemo }: SeatingProps) {
         </p>
       </div>
       {join.qrSvg === null ? (
-        <Unreachable>{isDemo ? <OpenListener code={join.code} /> : null}</Unreachable>
+        <Unreachable>{canListenHere ? <OpenListener code={join.code} /> : null}</Unreachable>
       ) : (
         <QrCode svg={join.qrSvg} />
       )}
@@ -46,8 +46,8 @@ function Unreachable({ children }: { children: ReactNode }) {
   return (
     <Notice tone="amber" title="Phones cannot reach this address." className="max-w-[26rem]">
       <span className="mt-1 mb-3 block">
-        It leads to this machine only. Set <code>HOST</code> and <code>PUBLIC_URL</code> to an address of the network
-        and start again; or open the listeners on this machine, one window per seat.
+        It leads to this machine only. Stop Fairlead and start it with <code>npm start -- --lan</code>; or open the
+        listeners on this machine, one window per seat.
       </span>
       {children}
     </Notice>

@@ -2,8 +2,15 @@ import type { Report } from '#shared/contracts/reports.ts';
 import { formatCount } from '../../lib/format.ts';
 import { PageHeader } from '../../ui/page-header.tsx';
 
+type FindingHeadProps = {
+  report: Report;
+  back: { to: string; label: string };
+  /** Further lines that belong beside the finding. */
+  more?: readonly string[];
+};
+
 /** The finding in one sentence, how it came about in the next, and whatever modifies it. */
-export function FindingHead({ report, back }: { report: Report; back: { to: string; label: string } }) {
+export function FindingHead({ report, back, more = [] }: FindingHeadProps) {
   const { finding, title, question } = report;
   return (
     <div className="flex flex-col gap-5">
@@ -11,7 +18,7 @@ export function FindingHead({ report, back }: { report: Report; back: { to: stri
         <PageHeader title={finding.headline} lede={courseWords(report)} back={back} />
       </div>
       <ul className="flex max-w-3xl flex-col gap-2">
-        {finding.modifiers.map((modifier) => (
+        {[...finding.modifiers, ...more].map((modifier) => (
           <li key={modifier} className="border-l-[5px] border-edge pl-4">
             {modifier}
           </li>

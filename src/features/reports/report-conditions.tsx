@@ -4,8 +4,15 @@ import { formatCount, formatDate } from '../../lib/format.ts';
 import { type Fact, Facts } from '../../ui/facts.tsx';
 import { levelOf, sideWords } from './report-words.ts';
 
+type ReportConditionsProps = {
+  report: Report;
+  portrait: Portrait;
+  /** The public does not take the server's word for its checks; they run in the visitor's browser. */
+  isPublic?: boolean;
+};
+
 /** The conditions under which the count came about, beside it and never below the fold. */
-export function ReportConditions({ report, portrait }: { report: Report; portrait: Portrait }) {
+export function ReportConditions({ report, portrait, isPublic = false }: ReportConditionsProps) {
   const { rung, flow, voids, deviations, result, record, protocol, endedEarly } = report;
   const failed = record.checks.filter(({ outcome }) => outcome === 'fail').length;
   const passed = record.checks.filter(({ outcome }) => outcome === 'pass').length;
@@ -38,6 +45,10 @@ export function ReportConditions({ report, portrait }: { report: Report; portrai
           },
         ]),
   ];
+  const checks: Fact[] = [
+    { label: 'Checks passed', value: `${passed} of ${record.checks.length}`, tone: failed > 0 ? 'amber' : 'held' },
+    ...(unsettled > 0 ? [{ label: 'Not checkable', value: unsettled }] : []),
+  ];
   return (
     <section aria-labelledby="conditions" className="flex flex-col gap-8 print:mt-8">
       <h2 id="conditions" className="sr-only">
@@ -53,12 +64,7 @@ export function ReportConditions({ report, portrait }: { report: Report; portrai
           { label: 'Protocol sealed', value: formatDate(protocol.sealedAt), isWords: true },
           { label: 'Study closed', value: formatDate(report.closedAt), isWords: true },
           { label: 'Entries', value: record.entries },
-          {
-            label: 'Checks passed',
-            value: `${passed} of ${record.checks.length}`,
-            tone: failed > 0 ? 'amber' : 'held',
-          },
-          ...(unsettled > 0 ? [{ label: 'Not checkable', value: unsettled }] : []),
+          ...(isPublic ? [] : checks),
         ]}
       />
     </section>

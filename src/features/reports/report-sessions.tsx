@@ -45,7 +45,7 @@ function SessionHead({ session }: { session: Session }) {
       </h3>
       <p className="text-soft">
         {[
-          room,
+          ...(room === '' ? [] : [room]),
           formatCount(listeners, 'listener'),
           startedAt === null ? 'never started' : `started ${formatDateTime(startedAt)}`,
           ...(endedAt === null ? [] : [`ended ${formatDateTime(endedAt)}`]),

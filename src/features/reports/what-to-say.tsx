@@ -4,9 +4,9 @@ import { CopyButton } from '../../ui/copy-button.tsx';
 import { ReportSection } from './report-section.tsx';
 
 /** The sentence that the finding licenses, and what it does not. */
-export function WhatToSay({ finding }: { finding: Finding }) {
+export function WhatToSay({ finding, title = 'What you may say' }: { finding: Finding; title?: string }) {
   return (
-    <ReportSection title="What you may say">
+    <ReportSection title={title}>
       {finding.maySay === null ? (
         <p className="max-w-3xl">Nothing in public: these numbers support no claim.</p>
       ) : (
@@ -15,7 +15,7 @@ export function WhatToSay({ finding }: { finding: Finding }) {
         </Claim>
       )}
       <div className="flex max-w-3xl flex-col gap-1.5">
-        <h3 className="text-lg">What it does not allow you to say</h3>
+        <h3 className="text-lg">What it does not allow to say</h3>
         <ul className="flex list-disc flex-col gap-1 pl-6">
           {finding.mustNotSay.map((words) => (
             <li key={words}>{words}</li>

@@ -9,47 +9,65 @@ import { phaseWords } from './session-words.ts';
 
 type SessionTableProps = {
   rows: readonly SessionRow[];
+  sort: string;
+  onSort: (word: string) => void;
   page: number;
   pageCount: number;
   onPage: (page: number) => void;
   empty: ReactNode;
+  /** Sessions of one study bear their number alone. */
+  isOfOneStudy?: boolean;
   /** Where a session is led from, by its proctor; null for anybody else. */
   consoleOf: (session: SessionRow) => string | null;
 };
 
-export function SessionTable({ consoleOf, ...table }: SessionTableProps) {
+/** Sessions with the way to their console. Numbers have no gaps: an opened session keeps its own for good. */
+export function SessionTable({ consoleOf, isOfOneStudy = false, ...table }: SessionTableProps) {
+  const nameOf = ({ title, number }: SessionRow) =>
+    isOfOneStudy ? `Session\u00a0${number}` : `${title}, session\u00a0${number}`;
   return (
-    <DataTable caption="Sessions, latest first" columns={columnsFor(consoleOf)} rowKey={({ id }) => id} {...table} />
+    <DataTable
+      caption={isOfOneStudy ? 'Sessions of this study' : 'Sessions'}
+      isCaptionShown={isOfOneStudy}
+      columns={columnsFor(isOfOneStudy, nameOf, consoleOf)}
+      rowKey={({ id }) => id}
+      {...table}
+    />
   );
 }
 
-function columnsFor(consoleOf: SessionTableProps['consoleOf']): Column<SessionRow>[] {
+function columnsFor(
+  isOfOneStudy: boolean,
+  nameOf: (session: SessionRow) => string,
+  consoleOf: SessionTableProps['consoleOf'],
+): Column<SessionRow>[] {
   return [
     {
-      key: 'title',
+      key: isOfOneStudy ? 'number' : 'title',
       header: 'Session',
+      isSortable: true,
       isRowHeader: true,
-      cell: (session) => <SessionName session={session} to={consoleOf(session)} />,
+      cell: (session) => <SessionName name={nameOf(session)} to={consoleOf(session)} />,
     },
     {
       key: 'phase',
       header: 'Phase',
+      isSortable: true,
       cell: ({ phase }) => <StatusWord tone={phaseWords[phase].tone}>{phaseWords[phase].word}</StatusWord>,
     },
-    { key: 'plannedAt', header: 'Planned for', cell: ({ plannedAt }) => formatDateTime(plannedAt) },
-    { key: 'room', header: 'Room', cell: ({ room }) => room },
+    { key: 'plannedAt', header: 'Planned for', isSortable: true, cell: ({ plannedAt }) => formatDateTime(plannedAt) },
+    { key: 'room', header: 'Room', isSortable: true, cell: ({ room }) => room },
     { key: 'proctor', header: 'Proctor', cell: ({ proctor }) => proctor },
     { key: 'listeners', header: 'Listeners', isFigure: true, cell: ({ listeners }) => listeners },
     {
       key: 'trials',
       header: 'Trials locked',
       isFigure: true,
-      cell: ({ trialsLocked, trials }) => `${trialsLocked} of ${trials}`,
+      cell: ({ trialsLocked, trials }) => `${trialsLocked}\u00a0of\u00a0${trials}`,
     },
   ];
 }
 
-function SessionName({ session, to }: { session: SessionRow; to: string | null }) {
-  const name = `${session.title}, session ${session.number}`;
+function SessionName({ name, to }: { name: string; to: string | null }) {
   return to === null ? name : <Link to={to}>{name}</Link>;
 }

@@ -1,5 +1,6 @@
 import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
 import type { QueryOf } from '#shared/contracts/endpoint.ts';
+import { rehearsalsApi } from '#shared/contracts/rehearsals.ts';
 import { type SessionDraft, sessionsApi } from '#shared/contracts/sessions.ts';
 import { call } from '../../lib/call.ts';
 
@@ -18,6 +19,13 @@ export const sessionQueries = {
       queryFn: ({ signal }) => call(sessionsApi.get, { params: { organisationId, id } }, signal),
     }),
 };
+
+export function useBeginRehearsal(organisationId: string) {
+  return useMutation({
+    mutationFn: (sessionId: string | null) =>
+      call(rehearsalsApi.begin, { params: { organisationId }, body: { sessionId } }),
+  });
+}
 
 export function usePlanSession(organisationId: string, studyId: string) {
   const client = useQueryClient();

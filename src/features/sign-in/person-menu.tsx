@@ -8,15 +8,15 @@ import { useSignOut } from './sign-in.queries.ts';
 
 type PersonMenuProps = {
   presence: Presence;
-  /** Where the person chooses among several organisations. */
-  organisationsTo: string;
+  /** Where the person sees their own sign-ins. */
+  accountTo: string;
   helpTo: string;
   onSignedOut: () => void;
   onSignOutEverywhere: () => void;
 };
 
 /** Who is signed in, as what and where, and the ways out. */
-export function PersonMenu({ presence, organisationsTo, helpTo, onSignedOut, onSignOutEverywhere }: PersonMenuProps) {
+export function PersonMenu({ presence, accountTo, helpTo, onSignedOut, onSignOutEverywhere }: PersonMenuProps) {
   const { person, membership } = presence;
   const signOut = useSignOut();
   const showToast = useToast();
@@ -35,7 +35,7 @@ export function PersonMenu({ presence, organisationsTo, helpTo, onSignedOut, onS
         <Line>{person.email}</Line>
       </MenuHeading>
       <MenuSeparator />
-      {person.memberships.length > 1 ? <MenuLink to={organisationsTo}>Other organisations</MenuLink> : null}
+      <MenuLink to={accountTo}>Your sign-ins</MenuLink>
       <MenuLink to={helpTo}>How Fairlead works</MenuLink>
       <MenuItem onSelect={leave}>Sign out</MenuItem>
       <MenuItem onSelect={onSignOutEverywhere}>Sign out everywhere …</MenuItem>

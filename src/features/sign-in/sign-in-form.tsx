@@ -8,12 +8,16 @@ import { Form } from '../../ui/form.tsx';
 import { TextField } from '../../ui/text-field.tsx';
 import { useSignIn } from './sign-in.queries.ts';
 
-type SignInFormProps = { onSignedIn: () => void };
+type SignInFormProps = {
+  /** The one address that will do, where it is settled. */
+  email?: string;
+  onSignedIn: () => void;
+};
 
-export function SignInForm({ onSignedIn }: SignInFormProps) {
+export function SignInForm({ email, onSignedIn }: SignInFormProps) {
   const form = useForm<Credentials>({
     resolver: zodResolver(credentials),
-    defaultValues: { email: '', password: '' },
+    defaultValues: { email: email ?? '', password: '' },
   });
   const signIn = useSignIn();
   const isBusy = form.formState.isSubmitting;
@@ -44,6 +48,7 @@ export function SignInForm({ onSignedIn }: SignInFormProps) {
         label="E-mail"
         type="email"
         autoComplete="username"
+        readOnly={email !== undefined}
         autoCapitalize="none"
         spellCheck={false}
         {...form.register('email')}

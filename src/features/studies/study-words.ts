@@ -7,6 +7,8 @@ export const stateWords: Record<StudyState, { word: string; tone: 'neutral' | 'h
   sealed: { word: 'Sealed', tone: 'held', meaning: 'The protocol is fixed; no session has opened yet.' },
   collecting: { word: 'Collecting', tone: 'held', meaning: 'Sessions are being held. Nobody sees a score.' },
   closed: { word: 'Closed', tone: 'held', meaning: 'The registered analysis has run.' },
+  published: { word: 'Published', tone: 'held', meaning: 'Anybody can read the result and check it.' },
+  shelved: { word: 'Shelved', tone: 'neutral', meaning: 'Closed; no result is published.' },
 };
 
 export const rigWords: Record<Rig, string> = {

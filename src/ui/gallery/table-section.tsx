@@ -4,7 +4,7 @@ import { DataTable } from '../data-table.tsx';
 import { EmptyState } from '../empty-state.tsx';
 import { Sleeve } from '../sleeve.tsx';
 import { StatusWord } from '../status-word.tsx';
-import type { Column, Sort } from '../table-column.ts';
+import { type Column, sortIn } from '../table-column.ts';
 import { GallerySection } from './gallery-section.tsx';
 
 type Sample = { mark: string; place: string; code: string; trials: number; level: 'in' | 'out' };
@@ -35,11 +35,12 @@ const columns: Array<Column<Sample>> = [
 ];
 
 export function TableSection() {
-  const [sort, setSort] = useState<Sort>({ key: 'trials', direction: 'descending' });
+  const [sort, setSort] = useState('-trials');
   const [page, setPage] = useState(1);
-  const order = sort.direction === 'ascending' ? 1 : -1;
+  const { key, direction } = sortIn(sort);
+  const order = direction === 'ascending' ? 1 : -1;
   const rows = samples.toSorted((one, other) =>
-    sort.key === 'trials' ? order * (one.trials - other.trials) : order * one.mark.localeCompare(other.mark),
+    key === 'trials' ? order * (one.trials - other.trials) : order * one.mark.localeCompare(other.mark),
   );
   return (
     <GallerySection title="Tables">

@@ -49,7 +49,7 @@ type Studied = {
 };
 
 describe('the registered analysis of a paired preference', () => {
-  it('gives what R gives when it goes through every draw of a study [P2] [P3] [P5]', () => {
+  it('gives what R gives when it goes through every draw of a study [F2] [F3] [F5]', () => {
     const records = reference<Studied['inputs'], Studied['expected']>('preference.json').filter(
       ({ fn }) => fn === 'study',
     );
@@ -75,7 +75,7 @@ describe('the registered analysis of a paired preference', () => {
     }
   });
 
-  it('leaves out what was not preferred: without those answers nothing of the test changes [P2]', () => {
+  it('leaves out what was not preferred: without those answers nothing of the test changes [F2]', () => {
     fc.assert(
       fc.property(rows(8, 3), (given) => {
         const all = analyse(study(given));
@@ -94,7 +94,7 @@ describe('the registered analysis of a paired preference', () => {
     );
   });
 
-  it('keeps its level over all draws, whatever the answers are [P3]', () => {
+  it('keeps its level over all draws, whatever the answers are [F3]', () => {
     fc.assert(
       fc.property(rows(6, 3), fc.constantFrom('0.05', '0.1', '0.2'), (given, alpha) => {
         const draws = 2 ** given.length;
@@ -112,7 +112,7 @@ describe('the registered analysis of a paired preference', () => {
     );
   });
 
-  it('does not care which cable the protocol names first [P3]', () => {
+  it('does not care which cable the protocol names first [F3]', () => {
     fc.assert(
       fc.property(rows(8, 3), (given) => {
         const turned = given.map((row) => ({
@@ -127,7 +127,7 @@ describe('the registered analysis of a paired preference', () => {
     );
   });
 
-  it('is not moved by a habit of choosing the first: only the draw decides its p [P3]', () => {
+  it('is not moved by a habit of choosing the first: only the draw decides its p [F3]', () => {
     // Twelve trials, always “first”: the draws alone make it 6 : 6, and p is 1.
     const habit = study(
       Array.from({ length: 12 }, (_, index) => ({
@@ -140,7 +140,7 @@ describe('the registered analysis of a paired preference', () => {
   });
 
   // Two halves of a panel, each consistent: a small p over answers when one half is larger, and no sentence about people.
-  it('says more people only where people are tested too, and on the same side [P5]', () => {
+  it('says more people only where people are tested too, and on the same side [F5]', () => {
     const panel = (forFirst: number, forSecond: number, trials: number) =>
       analyse(
         study(
@@ -164,7 +164,7 @@ describe('the registered analysis of a paired preference', () => {
     expect(panel(9, 1, 4).majorities.holdsForPeople).toBe(false);
   });
 
-  it('gives an interval only where every answer has a draw of its own [P4]', () => {
+  it('gives an interval only where every answer has a draw of its own [F4]', () => {
     const own = analyse(study([{ truth: 'first', choices: ['first'] }]));
     const shared = analyse(study([{ truth: 'first', choices: ['first', 'first'] }]));
     expect([own.test, shared.test]).toEqual(['exact-binomial', 'shared-presentations']);
@@ -173,7 +173,7 @@ describe('the registered analysis of a paired preference', () => {
     expect(analyse(study([{ truth: 'first', choices: ['none'] }])).estimates).toBeNull();
   });
 
-  it('leaves out a half just where p reaches the level [P4]', () => {
+  it('leaves out a half just where p reaches the level [F4]', () => {
     for (let trials = 1; trials <= 40; trials += 1)
       for (let first = 0; first <= trials; first += 1)
         for (const alpha of ['0.05', '0.01']) {
@@ -191,7 +191,7 @@ describe('the registered analysis of a paired preference', () => {
         }
   });
 
-  it('is a plain value that the record can hold, and has no NaN in it [P2]', () => {
+  it('is a plain value that the record can hold, and has no NaN in it [F2]', () => {
     fc.assert(
       fc.property(rows(6, 3), (given) => {
         const result = analyse(study(given));
@@ -202,7 +202,7 @@ describe('the registered analysis of a paired preference', () => {
     expect(analyse([]).p.value).toBe(recordDecimal(1));
   });
 
-  it('draws p as a picture: the bars as far from the middle add up to it [P3]', () => {
+  it('draws p as a picture: the bars as far from the middle add up to it [F3]', () => {
     fc.assert(
       fc.property(rows(8, 3), (given) => {
         const trials = study(given);
@@ -221,7 +221,7 @@ describe('the registered analysis of a paired preference', () => {
     );
   });
 
-  it('refuses what cannot be: a level out of range, a trial twice, an answer that was not offered [P2]', () => {
+  it('refuses what cannot be: a level out of range, a trial twice, an answer that was not offered [F2]', () => {
     const trials = study([{ truth: 'first', choices: ['none'] }]);
     expect(() => analyse(trials, '1')).toThrow(RangeError);
     expect(() => analyse([...trials, ...trials])).toThrow('comes twice');

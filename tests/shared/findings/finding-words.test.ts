@@ -6,7 +6,7 @@ import { type Finding, type FindingContext, finding } from '#shared/findings/fin
 
 const context: FindingContext = {
   cables: ['Northern run', 'Southern run'],
-  gate: { commitmentsHold: true, allTrialsAccounted: true },
+  gate: { commitmentsHold: true, allTrialsAccounted: true, isBlind: true },
   endedEarly: null,
   setting: 'player, amplifier, loudspeakers',
 };
@@ -100,8 +100,9 @@ describe('what stands beside a headline', () => {
   it('takes the record before the count, and the count from below before the one from above [T8]', () => {
     const result = analyseAbx({ alpha: '0.05', listenersPerSession: 1, trials: together(16, [16]) });
     for (const gate of [
-      { commitmentsHold: false, allTrialsAccounted: true },
-      { commitmentsHold: true, allTrialsAccounted: false },
+      { commitmentsHold: false, allTrialsAccounted: true, isBlind: true },
+      { commitmentsHold: true, allTrialsAccounted: false, isBlind: true },
+      { commitmentsHold: true, allTrialsAccounted: true, isBlind: false },
     ])
       expect(abxFinding(result, { ...context, gate })).toMatchObject({ row: '0', maySay: null });
     expect(found(together(16, [2]))).toMatchObject({ row: '1', maySay: null });

@@ -5,7 +5,7 @@ import type { FindingContext } from '#shared/findings/finding.ts';
 
 const context: FindingContext = {
   cables: ['Northern run', 'Southern run'],
-  gate: { commitmentsHold: true, allTrialsAccounted: true },
+  gate: { commitmentsHold: true, allTrialsAccounted: true, isBlind: true },
   endedEarly: null,
   setting: 'player, amplifier, loudspeakers',
 };

@@ -6,7 +6,7 @@ import type { PreferenceChoice } from '#shared/findings/preference-trials.ts';
 
 const context: FindingContext = {
   cables: ['Northern run', 'Southern run'],
-  gate: { commitmentsHold: true, allTrialsAccounted: true },
+  gate: { commitmentsHold: true, allTrialsAccounted: true, isBlind: true },
   endedEarly: null,
   setting: 'player, amplifier, loudspeakers',
 };
@@ -58,7 +58,7 @@ const never = [
 ];
 
 describe('the finding of a paired preference', () => {
-  it('takes one row for each result, and never says better, audible or proven [P6]', () => {
+  it('takes one row for each result, and never says better, audible or proven [F6]', () => {
     const rows = new Set<string>();
     for (const listeners of [1, 3, 8])
       for (let forFirst = 0; forFirst <= 16; forFirst += 1)
@@ -69,7 +69,7 @@ describe('the finding of a paired preference', () => {
           [16, 0],
         ])
           for (const commitmentsHold of [true, false]) {
-            const gate = { commitmentsHold, allTrialsAccounted: true };
+            const gate = { commitmentsHold, allTrialsAccounted: true, isBlind: true };
             const one = found({ listeners, forFirst, ties, missing }, { gate });
             rows.add(one.row);
             expect(finding.parse(one)).toEqual(one);
@@ -80,7 +80,7 @@ describe('the finding of a paired preference', () => {
     expect([...rows].sort()).toEqual(['0', '10', 'none']);
   });
 
-  it('names the cable, k of n answers, the listeners and those without a preference [P6]', () => {
+  it('names the cable, k of n answers, the listeners and those without a preference [F6]', () => {
     const one = found({ listeners: 3, forFirst: 12, ties: 2 });
     expect(one.headline).toBe(
       'This panel’s answers favoured Northern run over Southern run: 36 of the 42 answers that preferred one, by 3 listeners; 6 stated no preference.',
@@ -90,7 +90,7 @@ describe('the finding of a paired preference', () => {
     expect(one.maySay).toContain('loudness may explain the preference');
   });
 
-  it('names the second cable where that one is favoured [P6]', () => {
+  it('names the second cable where that one is favoured [F6]', () => {
     const one = found({ listeners: 1, forFirst: 2, offers: false });
     expect(one.headline).toBe(
       'One listener’s answers favoured Southern run over Northern run: 14 of the 16 answers that preferred one, by 1 listener.',
@@ -101,7 +101,7 @@ describe('the finding of a paired preference', () => {
     );
   });
 
-  it('shows no preference without saying that both are liked equally [P6]', () => {
+  it('shows no preference without saying that both are liked equally [F6]', () => {
     const one = found({ listeners: 1, forFirst: 9, ties: 1 });
     expect(one.row).toBe('none');
     expect(one.headline).toBe('No preference was shown between Northern run and Southern run.');
@@ -111,7 +111,7 @@ describe('the finding of a paired preference', () => {
     expect(found({ listeners: 1, forFirst: 0, ties: 16 }).maySay).toBeNull();
   });
 
-  it('speaks of people only with the sign test over people, and says why where it does not [P5]', () => {
+  it('speaks of people only with the sign test over people, and says why where it does not [F5]', () => {
     const few = found({ listeners: 3, forFirst: 16 });
     expect(few.modifiers.join(' ')).toContain(
       'Repeated answers are not people: by their own majorities 3 of 3 listeners',
@@ -122,7 +122,7 @@ describe('the finding of a paired preference', () => {
     expect(many.mustNotSay).not.toContain('that more people prefer one of them');
   });
 
-  it('names listeners by Holm’s rule, and calls them exploratory where the panel showed nothing [P5]', () => {
+  it('names listeners by Holm’s rule, and calls them exploratory where the panel showed nothing [F5]', () => {
     expect(found({ listeners: 2, forFirst: 16 }).modifiers).toContain(
       'On their own, adjusted by Holm’s rule: L01 preferred Northern run, L02 preferred Northern run.',
     );
@@ -147,7 +147,7 @@ describe('the finding of a paired preference', () => {
     );
   });
 
-  it('says what was missing, what ended early and what could not be reached [P6]', () => {
+  it('says what was missing, what ended early and what could not be reached [F6]', () => {
     const one = found({ listeners: 1, forFirst: 5, missing: 1, trials: 6 }, { endedEarly: 'The room was needed.' });
     expect(one.modifiers).toEqual(
       expect.arrayContaining([

@@ -7,13 +7,13 @@ import { drawSeed, drawSession } from '#shared/session/draw.ts';
 describe.each(methodIds)('the method %s', (id) => {
   const method = methods[id];
 
-  it('is listed under its own name and names the source it is published in [P1]', () => {
+  it('is listed under its own name and names the source it is published in [F1]', () => {
     expect(method.id).toBe(id);
     expect(method.source.length).toBeGreaterThan(20);
     expect(method.registered([]).name).toMatch(new RegExp(`^${id}/\\d+$`));
   });
 
-  it('fits both cables in every trial, each truth another way, and turns with the draw of the session [P1]', () => {
+  it('fits both cables in every trial, each truth another way, and turns with the draw of the session [F1]', () => {
     const fitted = (truth: string, firstSide: 0 | 1) =>
       method.presentations.map((presentation) => method.fitted(presentation, truth, firstSide));
     for (const firstSide of [0, 1] as const) {
@@ -28,7 +28,7 @@ describe.each(methodIds)('the method %s', (id) => {
     ]);
   });
 
-  it('draws every truth about equally often, trial by trial [P1]', () => {
+  it('draws every truth about equally often, trial by trial [F1]', () => {
     const seed = drawSeed('11'.repeat(32), ['22'.repeat(32)]);
     const { truths } = drawSession(seed, method, { specimenCounts: [1, 1], trials: 2000 });
     for (const truth of method.truths) {
@@ -38,7 +38,7 @@ describe.each(methodIds)('the method %s', (id) => {
     }
   });
 
-  it('offers answers with words of their own, with every setting and without [P1]', () => {
+  it('offers answers with words of their own, with every setting and without [F1]', () => {
     for (const settings of [[], method.settings.map((setting) => setting.id)]) {
       const options = method.options(settings);
       for (const field of ['value', 'sentence', 'short'] as const)

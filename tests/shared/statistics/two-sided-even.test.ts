@@ -16,7 +16,7 @@ import { expectClose, reference } from '../../support/reference.ts';
 const records = <I, E>(wanted: string) => reference<I, E>('preference.json').filter(({ fn }) => fn === wanted);
 
 describe('the two-sided test at an even chance', () => {
-  it('gives R’s p and limits of binom.test [P3] [P4]', () => {
+  it('gives R’s p and limits of binom.test [F3] [F4]', () => {
     type Expected = { p: number; interval: [number, number] };
     const sides = records<{ k: number; n: number; conf: number }, Expected>('sides');
     expect(sides.length).toBeGreaterThan(250);
@@ -29,7 +29,7 @@ describe('the two-sided test at an even chance', () => {
     }
   });
 
-  it('is the least-likelihood p, symmetric, and 1 at an even split [P3]', () => {
+  it('is the least-likelihood p, symmetric, and 1 at an even split [F3]', () => {
     fc.assert(
       fc.property(fc.integer({ min: 1, max: 300 }), fc.double({ min: 0, max: 1, noNaN: true }), (trials, share) => {
         const k = Math.round(share * trials);
@@ -42,7 +42,7 @@ describe('the two-sided test at an even chance', () => {
     expect(fractionToNumber(exactTwoSidedEven(0, 0))).toBe(1);
   });
 
-  it('needs what R finds by trying every count, with R’s size and power [P7]', () => {
+  it('needs what R finds by trying every count, with R’s size and power [F7]', () => {
     type Expected = { count: number | null; size: number; power: number[] };
     for (const { id, inputs, expected, tol } of records<{ n: number; alpha: number }, Expected>('need')) {
       const { n, alpha } = inputs;
@@ -56,13 +56,13 @@ describe('the two-sided test at an even chance', () => {
     expect(twoSidedPower(4, 0.05, 0.9)).toEqual({ critical: null, power: 0 });
   });
 
-  it('says how many trials are needed, as R finds by trying every number [P7]', () => {
+  it('says how many trials are needed, as R finds by trying every number [F7]', () => {
     type Inputs = { alpha: number; rate: number; targetPower: number };
     for (const { id, inputs, expected } of records<Inputs, { nFirst: number; nSafe: number }>('trials'))
       expect(twoSidedSampleSize({ ...inputs, limit: 5000 }), id).toMatchObject(expected);
   });
 
-  it('plans a pair: two fittings a trial, both sides, and the least p of two draws [P7]', () => {
+  it('plans a pair: two fittings a trial, both sides, and the least p of two draws [F7]', () => {
     const plan = {
       sessions: 1,
       trials: 16,
@@ -87,7 +87,7 @@ describe('the two-sided test at an even chance', () => {
     expect(planFigures({ ...plan, trials: 6 }).canReachAlpha).toBe(true);
   });
 
-  it('refuses what is out of its domain [P3]', () => {
+  it('refuses what is out of its domain [F3]', () => {
     expect(() => exactTwoSidedEven(3, 2)).toThrow(RangeError);
     expect(() => exactTwoSidedEven(Number.NaN, 2)).toThrow(RangeError);
     expect(() => twoSidedCriticalCount(10, 1)).toThrow(RangeError);

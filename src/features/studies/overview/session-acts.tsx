@@ -1,12 +1,17 @@
 import { LinkButton } from '../../../ui/link-button.tsx';
 import type { UpcomingSession } from './upcoming-session.ts';
 
-type SessionActsProps = { upcoming: UpcomingSession | null; planTo: string };
+type SessionActsProps = {
+  upcoming: UpcomingSession | null;
+  planTo: string;
+  /** Registered sessions that are not planned yet. */
+  toPlan: number;
+};
 
 /** To the console for whoever leads the session that comes next; a further session for everybody else. */
-export function SessionActs({ upcoming, planTo }: SessionActsProps) {
+export function SessionActs({ upcoming, planTo, toPlan }: SessionActsProps) {
   if (upcoming === null)
-    return (
+    return toPlan === 0 ? null : (
       <LinkButton variant="primary" to={planTo}>
         Plan a session
       </LinkButton>
@@ -18,7 +23,7 @@ export function SessionActs({ upcoming, planTo }: SessionActsProps) {
           Go to the console
         </LinkButton>
       )}
-      <LinkButton to={planTo}>Plan another session</LinkButton>
+      {toPlan === 0 ? null : <LinkButton to={planTo}>Plan another session</LinkButton>}
     </>
   );
 }

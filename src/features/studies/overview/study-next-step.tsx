@@ -1,4 +1,5 @@
-import type { Study } from '#shared/contracts/studies.ts';
+import type { ReactNode } from 'react';
+import { isClosed, type Study } from '#shared/contracts/studies.ts';
 import { formatCount } from '../../../lib/format.ts';
 import { LinkButton } from '../../../ui/link-button.tsx';
 import { CloseStudy } from './close-study.tsx';
@@ -11,7 +12,7 @@ import { type UpcomingSession, upcomingTitle, upcomingWords } from './upcoming-s
 
 export type StudyPlaces = { edit: string; codes: string; planSession: string; report: string };
 
-type StudyNextStepProps = {
+export type StudyNextStepProps = {
   organisationId: string;
   study: Study;
   places: StudyPlaces;
@@ -19,6 +20,8 @@ type StudyNextStepProps = {
   upcoming: UpcomingSession | null;
   onDiscarded: () => void;
   onClosed: () => void;
+  /** What can be done about publishing a study that is closed. */
+  publishing: { words: string; actions: ReactNode; stop: ReactNode };
 };
 
 /** The one thing to do now, by the study's state. */
@@ -31,6 +34,8 @@ export function StudyNextStep(props: StudyNextStepProps) {
     case 'collecting':
       return <CollectingStep {...props} />;
     case 'closed':
+    case 'published':
+    case 'shelved':
       return <ClosedStep {...props} />;
   }
 }
@@ -83,7 +88,7 @@ function SealedStep({ organisationId, study, places, upcoming }: StudyNextStepPr
       title={isCoded && upcoming ? upcomingTitle(upcoming) : title}
       actions={
         <>
-          <SessionActs upcoming={upcoming} planTo={places.planSession} />
+          <SessionActs upcoming={upcoming} planTo={places.planSession} toPlan={study.progress.sessionsToPlan} />
           <LinkButton to={places.codes}>See where the codes stand</LinkButton>
           <RecordDeviation organisationId={organisationId} studyId={study.id} />
         </>
@@ -104,7 +109,11 @@ function CollectingStep({ organisationId, study, places, upcoming, onClosed }: S
       title={titleOf(isReady, progress)}
       actions={
         <>
-          {isReady ? close : <SessionActs upcoming={upcoming} planTo={places.planSession} />}
+          {isReady ? (
+            close
+          ) : (
+            <SessionActs upcoming={upcoming} planTo={places.planSession} toPlan={study.progress.sessionsToPlan} />
+          )}
           <RecordDeviation organisationId={organisationId} studyId={study.id} />
         </>
       }
@@ -122,17 +131,29 @@ function titleOf(isReady: boolean, { trialsRegistered, trialsLocked }: Study['pr
   return trialsLeft > 0 ? `${formatCount(trialsLeft, 'trial')} to go` : 'All registered trials are locked';
 }
 
-function ClosedStep({ places }: StudyNextStepProps) {
+const closedTitles = {
+  closed: 'The result is in',
+  published: 'The result is published',
+  shelved: 'No result is published',
+};
+
+function ClosedStep({ study, places, publishing }: StudyNextStepProps) {
+  const { state } = study;
+  if (!isClosed(state)) return null;
   return (
     <NextStep
-      title="The result is in"
+      title={closedTitles[state as keyof typeof closedTitles]}
       actions={
-        <LinkButton variant="primary" to={places.report}>
-          Read the report
-        </LinkButton>
+        <>
+          <LinkButton variant={state === 'closed' ? 'primary' : 'plain'} to={places.report}>
+            Read the report
+          </LinkButton>
+          {publishing.actions}
+        </>
       }
+      stop={publishing.stop}
     >
-      <p>Both secrets are open, the registered analysis has run, and its result is on the record.</p>
+      <p>{publishing.words}</p>
     </NextStep>
   );
 }

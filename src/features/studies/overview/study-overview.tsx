@@ -6,7 +6,7 @@ import { stateWords } from '../study-words.ts';
 import { Deviations } from './deviations.tsx';
 import { Protocol } from './protocol.tsx';
 import { SealFacts } from './seal-facts.tsx';
-import { StudyNextStep, type StudyPlaces } from './study-next-step.tsx';
+import { StudyNextStep, type StudyNextStepProps, type StudyPlaces } from './study-next-step.tsx';
 import { StudyProgress } from './study-progress.tsx';
 import type { UpcomingSession } from './upcoming-session.ts';
 
@@ -17,6 +17,7 @@ type StudyOverviewProps = {
   upcoming: UpcomingSession | null;
   onDiscarded: () => void;
   onClosed: () => void;
+  publishing: StudyNextStepProps['publishing'];
   /** The table of its sessions. */
   sessions: ReactNode;
 };

@@ -1,4 +1,4 @@
-import type { Study } from '#shared/contracts/studies.ts';
+import { isClosed, type Study } from '#shared/contracts/studies.ts';
 import { formatCount } from '../../../lib/format.ts';
 import { Progress } from '../../../ui/progress.tsx';
 
@@ -18,12 +18,16 @@ export function StudyProgress({ state, draft, progress }: Pick<Study, 'state' | 
           label="Sessions ended"
           value={sessionsEnded}
           max={Math.max(draft.sessions, sessionsEnded)}
-          valueText={`${sessionsEnded} of ${draft.sessions}`}
+          valueText={
+            sessionsEnded > draft.sessions
+              ? `${sessionsEnded}, ${draft.sessions} registered`
+              : `${sessionsEnded} of ${draft.sessions}`
+          }
         />
       </div>
       <p className="text-soft">
         {sessionsOpened === 0 ? 'No session has opened yet.' : openedWords(sessionsOpened)}{' '}
-        {state === 'closed' ? '' : 'Scores stay hidden from everybody until the study is closed.'}
+        {isClosed(state) ? '' : 'Scores stay hidden from everybody until the study is closed.'}
       </p>
     </section>
   );

@@ -10,6 +10,8 @@ import { stateWords } from '../study-words.ts';
 
 type StudyTableProps = {
   rows: readonly StudyRow[];
+  sort: string;
+  onSort: (word: string) => void;
   page: number;
   pageCount: number;
   onPage: (page: number) => void;
@@ -17,19 +19,8 @@ type StudyTableProps = {
   hrefOf: (id: string) => string;
 };
 
-export function StudyTable({ rows, page, pageCount, onPage, empty, hrefOf }: StudyTableProps) {
-  return (
-    <DataTable
-      caption="Studies, newest change first"
-      columns={columnsFor(hrefOf)}
-      rows={rows}
-      rowKey={({ id }) => id}
-      page={page}
-      pageCount={pageCount}
-      onPage={onPage}
-      empty={empty}
-    />
-  );
+export function StudyTable({ hrefOf, ...table }: StudyTableProps) {
+  return <DataTable caption="Studies" columns={columnsFor(hrefOf)} rowKey={({ id }) => id} {...table} />;
 }
 
 function columnsFor(hrefOf: (id: string) => string): Column<StudyRow>[] {
@@ -37,18 +28,20 @@ function columnsFor(hrefOf: (id: string) => string): Column<StudyRow>[] {
     {
       key: 'title',
       header: 'Neutral title',
+      isSortable: true,
       isRowHeader: true,
       cell: ({ id, title }) => <Link to={hrefOf(id)}>{title}</Link>,
     },
     {
       key: 'state',
       header: 'State',
+      isSortable: true,
       cell: ({ state }) => <StatusWord tone={stateWords[state].tone}>{stateWords[state].word}</StatusWord>,
     },
     { key: 'method', header: 'Method', cell: ({ method }) => methodOf(method).name },
     { key: 'sessions', header: 'Sessions', cell: sessionsOf },
     { key: 'trials', header: 'Trials locked', isFigure: true, cell: trialsOf },
-    { key: 'updatedAt', header: 'Last change', cell: ({ updatedAt }) => formatDate(updatedAt) },
+    { key: 'updatedAt', header: 'Last change', isSortable: true, cell: ({ updatedAt }) => formatDate(updatedAt) },
   ];
 }
 

@@ -1,0 +1,22 @@
+import type { StudyDraft } from '#shared/contracts/studies.ts';
+import type { Deps } from '../deps.ts';
+import { confirmCodes, drawCodes, openCodes } from '../features/codes/codes.service.ts';
+import { planSession } from '../features/sessions/sessions.service.ts';
+import { createStudy, sealStudy } from '../features/studies/studies.service.ts';
+import type { DemoPersonKey } from './demo-people.ts';
+
+export type People = Record<DemoPersonKey, string>;
+
+/** Draft, seal, codes and one planned session: a study ready to run. */
+export async function prepareStudy(deps: Deps, organisationId: string, people: People, draft: StudyDraft) {
+  const study = await createStudy(deps, organisationId, people.manager, draft);
+  const where = { organisationId, id: study.id };
+  await sealStudy(deps, where, people.manager);
+  const holder = { userId: people.codeHolder, role: 'reviewer' };
+  await drawCodes(deps, where, holder);
+  await openCodes(deps, where, holder, 'labels');
+  await confirmCodes(deps, where, holder);
+  const plannedAt = new Date(deps.clock.now() + 3_600_000).toISOString();
+  const session = await planSession(deps, where, { plannedAt, room: 'Listening room', proctorId: people.proctor });
+  return { where, sessionId: session.id };
+}

@@ -1,0 +1,160 @@
+import { notShown, type Publication } from '#shared/contracts/publications.ts';
+import type { Report } from '#shared/contracts/reports.ts';
+import { methodOf } from '#shared/methods/methods.ts';
+import type { Portrait } from '#shared/methods/portrait.ts';
+import { type Html, html } from './html.ts';
+import { count, facts, frame, list, section, table, utc } from './page-parts.ts';
+
+const portraitOf = ({ result, cables }: Report): Portrait => methodOf(result.method).portray(result, cables);
+
+function head({ headline, withdrawn, conditions, report, title }: Publication): Html {
+  const { result, finding, question, flow } = report;
+  const portrait = portraitOf(report);
+  return html`<div class="flex flex-col gap-5">
+    ${
+      withdrawn === null
+        ? null
+        : html`<p class="max-w-3xl border-l-[5px] border-stop py-1 pl-4"><strong>Withdrawn ${utc(withdrawn.at)}.</strong> ${withdrawn.reason} Nothing may be claimed on it any more. The page stays.</p>`
+    }
+    <h1 class="max-w-3xl text-3xl">${headline}</h1>
+    <p class="max-w-3xl text-lg text-soft">${count(result.answers, 'answer')} due in ${count(result.trials, 'trial')} by ${count(result.listeners, 'listener')} in ${count(result.sessions, 'session')}; ${count(flow.trialsVoid, 'trial')} void. Registered before the first trial.</p>
+    <ul class="flex max-w-3xl flex-col gap-2">${[...finding.modifiers, ...conditions].map((line) => html`<li class="border-l-[5px] border-edge pl-4">${line}</li>`)}</ul>
+    <p class="max-w-3xl"><strong>${title}.</strong> <span class="text-soft">${question}</span></p>
+    <div class="flex flex-col gap-1 border-t-2 border-b border-t-ink border-b-rule py-5">
+      ${portrait.figures.map(
+        ({ value, label }, index) =>
+          html`<p><span class="${index === 0 ? 'font-mono text-figure font-semibold tracking-tight text-copper' : 'font-mono text-xl font-semibold'}">${value}</span> <span class="text-soft">${label}</span></p>`,
+      )}
+      <p class="text-soft">Registered level ${result.alpha}; exact p = ${result.p.numerator} / ${result.p.denominator}.</p>
+      <p>${portrait.note}</p>
+    </div>
+  </div>`;
+}
+
+function claims({ report: { finding }, withdrawn }: Publication): Html {
+  const may =
+    finding.maySay === null || withdrawn !== null
+      ? html`<p>Nothing: ${withdrawn === null ? 'these numbers support no claim' : 'the publication is withdrawn'}.</p>`
+      : html`<blockquote class="max-w-[38em] rounded border border-rule bg-sheet px-5 py-5 font-serif text-xl">${finding.maySay}</blockquote>`;
+  return section(
+    'What may be said',
+    html`${may}<p class="max-w-3xl text-soft">${finding.scope}</p><h3 class="text-lg">What may not be said</h3>${list(finding.mustNotSay, '')}`,
+  );
+}
+
+function flow({ flow: of, result }: Report): Html {
+  return table(
+    'From plan to count',
+    ['What', 'Count'],
+    [
+      ['Sessions planned', of.sessionsPlanned],
+      ['Sessions opened', of.sessionsOpened],
+      ['Sessions finished', of.sessionsFinished],
+      ['Sessions abandoned', of.sessionsAbandoned],
+      ['Sessions never started', of.sessionsNeverStarted],
+      ['Trials opened', of.trialsOpened],
+      ['Trials void', of.trialsVoid],
+      ['Trials counted', of.trialsCounted],
+      ['Answers due', of.answersExpected],
+      [`Answers missing, ${result.missingAnswers}`, of.answersMissing],
+      ['Listeners', of.listeners],
+      ['Listeners who left', of.listenersLeft],
+    ],
+  );
+}
+
+function listeners(report: Report): Html {
+  const { columns, rows } = portraitOf(report).listeners;
+  return table(
+    'By listener',
+    ['Listener', ...columns.map(({ header }) => header)],
+    rows.map(({ listener, cells }) => [listener, ...cells]),
+  );
+}
+
+function session({
+  number,
+  phase,
+  startedAt,
+  endedAt,
+  listeners: seated,
+  drawn,
+  reason,
+  trials,
+}: Report['sessions'][number]): Html {
+  const times = `${startedAt === null ? 'never started' : `started ${utc(startedAt)}`}${endedAt === null ? '' : `, ended ${utc(endedAt)}`}`;
+  const rows = trials.map(({ trial, outcome, excerpt, truth, answers }) => [
+    trial,
+    outcome === 'locked' ? 'counted' : outcome,
+    excerpt,
+    truth,
+    answers.map(({ listener, choice }) => `${listener} ${choice ?? 'none'}`).join(', '),
+  ]);
+  return html`<li class="flex flex-col gap-3 border-t border-rule pt-4">
+    <h3 class="text-lg">Session ${number}, ${phase}</h3>
+    <p class="text-soft">${count(seated, 'listener')}, ${times}.${drawn === null ? '' : ` ${drawn}`}</p>
+    ${reason === null ? null : html`<p class="font-semibold">Reason: ${reason}</p>`}
+    ${rows.length === 0 ? null : table(`Trials of session ${number}`, ['Trial', 'Outcome', 'Excerpt', 'Drawn', 'Answers'], rows)}
+  </li>`;
+}
+
+function incidents({ voids, missing, deviations }: Report): Html {
+  const where = (of: { session: number; trial: number }) => `Session ${of.session}, trial ${of.trial}`;
+  return html`<h3 class="text-lg">Void trials</h3>
+    ${list(
+      voids.map(
+        (entry) =>
+          `${where(entry)}: ${entry.reason}${entry.note === '' ? '' : `. ${entry.note}`} (${entry.answersHeld} answers held)`,
+      ),
+      'No trial was set aside.',
+    )}
+    <h3 class="text-lg">Missing answers</h3>
+    ${list(
+      missing.map((entry) => `${where(entry)}, ${entry.listener}: ${entry.why}`),
+      'Every answer that was due was given.',
+    )}
+    <h3 class="text-lg">Deviations from the protocol</h3>
+    ${list(
+      deviations.map(({ at, text }) => `${utc(at)}: ${text}`),
+      'None was recorded.',
+    )}`;
+}
+
+function verification({ file, report: { record, protocol } }: Publication): Html {
+  return html`<p class="max-w-3xl">With JavaScript this page downloads the record and checks it in your browser, step by step. Without it, download the record and check it with the command “npm run verify”, or by hand as the guide “Check a result” says.</p>
+    <p><a href="${file.path}" download>Download the record, ${Math.ceil(file.bytes / 1000)} kB</a></p>
+    ${facts([
+      { label: 'SHA-256 of the file', value: html`<code>${file.digest}</code>` },
+      { label: `Head of the record, entry ${record.entries}`, value: html`<code>${record.head}</code>` },
+      { label: `Protocol, sealed ${utc(protocol.sealedAt)}`, value: html`<code>${protocol.digest}</code>` },
+    ])}
+    <h3 class="text-lg">What no software can show</h3>
+    <p class="max-w-3xl">${notShown} Repeating the test is the cure.</p>`;
+}
+
+/** The whole publication in plain markup, in the order in which the application shows it. */
+export function publicationContent(publication: Publication): Html {
+  const { report, statements, confirmations, publisher, publishedAt } = publication;
+  return frame(
+    `Published ${utc(publishedAt)} by ${publisher}`,
+    html`<article class="flex flex-col gap-12">
+      ${head(publication)}
+      ${claims(publication)}
+      ${section(
+        'Who paid, who supplied, who is tied to whom',
+        html`${facts([
+          { label: 'Publisher', value: publisher },
+          { label: 'Who paid', value: statements.paid },
+          { label: 'Who supplied the specimens', value: statements.supplied },
+          { label: 'Ties to the maker', value: statements.ties },
+        ])}<h3 class="text-lg">The publisher confirms</h3>${list(confirmations, '')}`,
+      )}
+      ${section('Check it yourself', verification(publication))}
+      ${section('From plan to count', flow(report))}
+      ${section('By listener', listeners(report))}
+      ${section('Every session', html`<ol class="flex flex-col gap-8">${report.sessions.map(session)}</ol>`)}
+      ${section('What did not go as planned', incidents(report))}
+      ${section('The sealed protocol', facts(report.protocol.facts))}
+    </article>`,
+  );
+}

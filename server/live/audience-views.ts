@@ -1,0 +1,55 @@
+import { type ListenerView, type LockReceipt, listenerView } from '#shared/contracts/listener-live.ts';
+import { type ProctorView, proctorView } from '#shared/contracts/proctor-live.ts';
+import { listenerViewOf, type Presence, proctorViewOf } from '#shared/session/views.ts';
+import type { Deps } from '../deps.ts';
+import { joinOf } from './join.ts';
+import type { Keeper } from './keeper.ts';
+import type { SessionMemory } from './session-memory.ts';
+
+/** What one seat's phone shows now. */
+export function phoneViewOf(memory: SessionMemory, seat: string, now: number): ListenerView {
+  const { lock } = memory;
+  const leaf = lock?.leaves.get(seat);
+  const lastLock: LockReceipt | null =
+    lock === null || leaf === undefined
+      ? null
+      : { trial: lock.trial, leaf, sequence: lock.sequence, digest: lock.digest };
+  const context = {
+    title: memory.title,
+    rehearsal: memory.isRehearsal,
+    seat,
+    now,
+    held: memory.held.get(seat) ?? null,
+    lastLock,
+  };
+  return listenerView.parse(listenerViewOf(memory.state, memory.method, context));
+}
+
+/** What the console shows now. */
+export async function consoleViewOf(
+  { config, clock }: Deps,
+  memory: SessionMemory,
+  keeper: Keeper,
+  awaySince: (seat: string) => number | null,
+): Promise<ProctorView> {
+  const { state, session, method } = memory;
+  const presence: Presence[] = [...memory.seats].map(([seat, { place }]) => ({
+    seat,
+    place,
+    awaySince: awaySince(seat),
+  }));
+  const isOpen = state.phase === 'seating' || state.phase === 'revealing' || state.phase === 'running';
+  return proctorView.parse(
+    proctorViewOf(state, method, {
+      title: memory.title,
+      room: session.room,
+      now: clock.now(),
+      code: await keeper.codeToFit(memory),
+      join: isOpen && session.code !== null ? await joinOf(config.publicUrl, session.code) : null,
+      presence,
+      entries: memory.entries,
+      demo: config.demo,
+      rehearsal: memory.isRehearsal,
+    }),
+  );
+}

@@ -1,0 +1,80 @@
+import { Problem } from '#shared/problem.ts';
+import { contributionsOf } from '#shared/session/counted-trials.ts';
+import { presentationNow } from '#shared/session/progress.ts';
+import { commitDraw, cueFor } from '../blind/index.ts';
+import { type Tx, withTransaction } from '../db/transaction.ts';
+import type { Deps } from '../deps.ts';
+import * as store from '../features/sessions/sessions.store.ts';
+import { lockStudyRow, studyById, updateStudy } from '../features/studies/studies.store.ts';
+import { append } from '../ledger/ledger.ts';
+import { newSessionCode } from './join.ts';
+import type { Keeper, Keeping } from './keeper.ts';
+import { afterEvents, type SessionMemory } from './session-memory.ts';
+
+/** Keeps a session in the database and on its study's record: one action, one transaction. */
+export function databaseKeeper(deps: Deps): Keeper {
+  return {
+    keep: (work) => withTransaction(deps.db, (tx) => work(keepingIn(tx, deps))),
+    codeToFit: async ({ state, session, method }) => {
+      const presentation = presentationNow(state, method);
+      if (presentation === null || state.trial === null) return null;
+      return cueFor(deps.db.manager, {
+        studyId: session.studyId,
+        sessionId: session.id,
+        contributions: contributionsOf(state),
+        method,
+        trials: state.plan.trials + state.plan.spares,
+        trial: state.trial.trial,
+        presentation,
+      });
+    },
+  };
+}
+
+function keepingIn(tx: Tx, { random, clock }: Deps): Keeping {
+  return {
+    openSeating: async ({ session, state }) => {
+      const study = await studyById(tx, session.studyId);
+      if (study.codesState !== 'confirmed')
+        throw new Problem(
+          'wrong-phase',
+          'The code holder has not confirmed the sleeves yet. Seating opens after that.',
+        );
+      if (state.phase !== 'planned') throw new Problem('wrong-phase', 'Seating is open already.');
+      const commitment = await commitDraw(tx, random, session.id);
+      const code = await newSessionCode(tx, random);
+      await store.updateSession(tx, session.id, { code });
+      await updateStudy(tx, study.id, { state: 'collecting' }, new Date(clock.now()));
+      return { commitment, code };
+    },
+    addSeat: async (seat) => {
+      await lockStudyRow(tx, seat.studyId);
+      const label = `L${String((await store.countSeatsOfStudy(tx, seat.studyId)) + 1).padStart(2, '0')}`;
+      await store.insertSeat(tx, { ...seat, label });
+      return { ...seat, label };
+    },
+    saveAnswer: (row) => store.saveAnswer(tx, row),
+    record: async (memory, events) => {
+      const { studyId, id, number } = memory.session;
+      const entries = await append(
+        tx,
+        random,
+        studyId,
+        events.map(({ kind, at, payload }) => ({ kind, at, payload, session: number })),
+      );
+      await store.updateSession(tx, id, columnsOf(afterEvents(memory, events, entries)));
+      return entries;
+    },
+  };
+}
+
+/** What lists read of a session, so that they need no replay. */
+function columnsOf({ state }: SessionMemory) {
+  const isOver = state.phase === 'finished' || state.phase === 'abandoned';
+  return {
+    phase: state.phase,
+    ...(isOver ? { code: null } : {}),
+    trialsLocked: state.ended.filter(({ outcome }) => outcome === 'locked').length,
+    listeners: state.seats.length,
+  };
+}

@@ -1,0 +1,27 @@
+import type { Entry } from '#shared/ledger/chain.ts';
+import type { SessionEvent } from '#shared/session/events.ts';
+import type { Answer } from '../features/sessions/answer.entity.ts';
+import type { Seat } from '../features/sessions/seat.entity.ts';
+import type { SessionMemory } from './session-memory.ts';
+
+/** What can be kept of a session within one action. */
+export type Keeping = {
+  /**
+   * Commits to the draw's secret and takes a session code.
+   * @throws Problem `wrong-phase` while the specimens are not coded
+   */
+  openSeating(memory: SessionMemory): Promise<{ commitment: string; code: string }>;
+  /** Writes down a seat under the next free label. */
+  addSeat(seat: Omit<Seat, 'label'>): Promise<Seat>;
+  saveAnswer(row: Answer): Promise<void>;
+  /** Puts events on the record. */
+  record(memory: SessionMemory, events: readonly SessionEvent[]): Promise<Entry[]>;
+};
+
+/** Where a session is kept: the database with the study's record, or the memory alone for a rehearsal. */
+export type Keeper = {
+  /** One action: everything in it is kept, or nothing. */
+  keep<T>(work: (keeping: Keeping) => Promise<T>): Promise<T>;
+  /** The blind code of the presentation that is being fitted or heard, for the proctor alone. */
+  codeToFit(memory: SessionMemory): Promise<string | null>;
+};

@@ -1,0 +1,63 @@
+import { type Entry, nextEntry } from '#shared/ledger/chain.ts';
+import { Problem } from '#shared/problem.ts';
+import { drawSecretCommitment } from '#shared/session/commitments.ts';
+import { contributionsOf } from '#shared/session/counted-trials.ts';
+import { codeFitted } from '#shared/session/fitting.ts';
+import { presentationNow } from '#shared/session/progress.ts';
+import { drawCodes } from '../blind/index.ts';
+import type { Random } from '../deps.ts';
+import type { Keeper, Keeping } from './keeper.ts';
+
+/** A rehearsal's invented codes: one specimen for either cable, and nothing behind them. */
+function inventedKey(random: Random) {
+  return drawCodes(random, 2).map((code, cable) => ({ code, specimen: '', serial: '', cable }));
+}
+
+/** Keeps a rehearsal in memory alone: invented codes, a draw of its own, and no record. */
+export function rehearsalKeeper(random: Random, code: string): Keeper {
+  const rows = inventedKey(random);
+  const secret = random.bytes('draw-secret', 32).toString('hex');
+  let head: Entry | null = null;
+  let seats = 0;
+  const keeping: Keeping = {
+    openSeating: async ({ state }) => {
+      if (state.phase !== 'planned') throw new Problem('wrong-phase', 'Seating is open already.');
+      return { commitment: drawSecretCommitment(random.bytes('draw-salt', 32).toString('hex'), secret), code };
+    },
+    addSeat: async (seat) => {
+      seats += 1;
+      return { ...seat, label: `L${String(seats).padStart(2, '0')}` };
+    },
+    // The memory holds the open trial's answers, and nothing else asks for them.
+    saveAnswer: async () => {},
+    record: async ({ session }, events) =>
+      events.map(({ kind, at, payload }) => {
+        const nonce = random.bytes('entry-nonce', 16).toString('hex');
+        head = nextEntry(head, {
+          study: session.studyId,
+          at: new Date(at).toISOString(),
+          kind,
+          version: 1,
+          payload,
+          nonce,
+        });
+        return head;
+      }),
+  };
+  return {
+    keep: (work) => work(keeping),
+    codeToFit: async ({ state, method }) => {
+      const presentation = presentationNow(state, method);
+      if (presentation === null || state.trial === null) return null;
+      return codeFitted({
+        secret,
+        rows,
+        contributions: contributionsOf(state),
+        method,
+        trials: state.plan.trials + state.plan.spares,
+        trial: state.trial.trial,
+        presentation,
+      });
+    },
+  };
+}

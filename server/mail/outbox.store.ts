@@ -1,0 +1,55 @@
+import { In, LessThan, LessThanOrEqual } from 'typeorm';
+import type { MailState } from '#shared/contracts/mail.ts';
+import { likePattern, pageOfRows } from '../db/paging.ts';
+import type { Tx } from '../db/transaction.ts';
+import { OutgoingMail } from './outgoing-mail.entity.ts';
+
+export async function insertMail(tx: Tx, mail: OutgoingMail): Promise<void> {
+  await tx.insert(OutgoingMail, mail);
+}
+
+/** Mails that are due, locked; what another server has locked is passed over. */
+export function lockDue(tx: Tx, now: Date, most: number): Promise<OutgoingMail[]> {
+  return tx.find(OutgoingMail, {
+    where: { state: 'waiting', nextAttemptAt: LessThanOrEqual(now) },
+    order: { nextAttemptAt: 'ASC' },
+    take: most,
+    lock: { mode: 'pessimistic_write', onLocked: 'skip_locked' },
+  });
+}
+
+export async function updateMail(tx: Tx, id: string, change: Partial<OutgoingMail>): Promise<void> {
+  await tx.update(OutgoingMail, { id }, change);
+}
+
+export async function eraseTexts(tx: Tx, writtenBefore: Date, states: readonly MailState[]): Promise<void> {
+  await tx.update(OutgoingMail, { state: In([...states]), createdAt: LessThan(writtenBefore) }, { text: '', html: '' });
+}
+
+function newestFirst(tx: Tx, q: string) {
+  const rows = tx.createQueryBuilder(OutgoingMail, 'mail').orderBy('mail.createdAt', 'DESC').addOrderBy('mail.id');
+  if (q !== '') rows.andWhere('(mail.recipient like :q or mail.subject like :q)', { q: likePattern(q) });
+  return rows;
+}
+
+export function listMail(
+  tx: Tx,
+  organisationId: string,
+  { q, page, state }: { q: string; page: number; state: MailState | 'any' },
+) {
+  const rows = newestFirst(tx, q).andWhere('mail.organisationId = :organisationId', { organisationId });
+  if (state !== 'any') rows.andWhere('mail.state = :state', { state });
+  return pageOfRows(rows, page);
+}
+
+export function listKept(tx: Tx, { q, page }: { q: string; page: number }) {
+  return pageOfRows(newestFirst(tx, q).andWhere("mail.state = 'kept'"), page);
+}
+
+export function findKept(tx: Tx, id: string): Promise<OutgoingMail | null> {
+  return tx.findOneBy(OutgoingMail, { id, state: 'kept' });
+}
+
+export function lockMail(tx: Tx, organisationId: string, id: string): Promise<OutgoingMail | null> {
+  return tx.findOne(OutgoingMail, { where: { organisationId, id }, lock: { mode: 'pessimistic_write' } });
+}

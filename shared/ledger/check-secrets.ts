@@ -1,0 +1,64 @@
+import { contributionCommitment } from '../session/answer-leaf.ts';
+import { codeKeyCommitment, drawSecretCommitment } from '../session/commitments.ts';
+import { revealedDraw } from '../session/counted-trials.ts';
+import { canonicalJson, type Json } from './canonical-json.ts';
+import type { PublishedDraw } from './publication-parts.ts';
+import type { StudyReading } from './study-reading.ts';
+import type { Verdict } from './verify.ts';
+
+const textOf = (value: unknown) => canonicalJson(value as Json);
+
+/** What was revealed at closing is what had been committed to before anybody listened; the phones’ numbers too. */
+export function checkCommitments(study: StudyReading): Verdict {
+  const secrets = study.secrets();
+  const { salt, rows } = secrets.codeKey;
+  const faults: string[] = [];
+  if (study.payloadOf('code-key-committed')?.commitment !== codeKeyCommitment(salt, rows))
+    faults.push('The revealed code key is not the one committed to.');
+  for (const { payload } of study.entries().filter(({ kind }) => kind === 'seating-opened')) {
+    const draw = secrets.draws.find(({ session }) => session === payload.session);
+    if (draw === undefined || drawSecretCommitment(draw.salt, draw.secret) !== payload.commitment)
+      faults.push(`Session ${payload.session}: the revealed secret is not the one committed to.`);
+  }
+  for (const { session, seats } of study.sessions())
+    for (const { seat, revealed, commitment } of seats)
+      if (revealed !== null && contributionCommitment(revealed) !== commitment)
+        faults.push(`Session ${session}, ${seat}: the revealed number is not the one committed to.`);
+  if (textOf(secrets) !== textOf(study.payloadOf('key-revealed') ?? null))
+    faults.push('The secrets are not those that the record reveals.');
+  const phones = study.sessions().flatMap(({ seats }) => seats.filter(({ revealed }) => revealed !== null));
+  return {
+    faults,
+    held: `The code key, ${secrets.draws.length} session secrets and the numbers of ${phones.length} phones.`,
+  };
+}
+
+/** Every draw follows from the committed secret and the phones’ numbers in the order that the record lists. */
+export function checkDraws(study: StudyReading): Verdict {
+  const published = study.draws();
+  const secrets = study.secrets();
+  const faults: string[] = [];
+  const recomputed: PublishedDraw[] = [];
+  for (const { payload } of study.entries().filter(({ kind }) => kind === 'draw-fixed')) {
+    const state = study.sessions().find(({ session }) => session === payload.session);
+    const secret = secrets.draws.find(({ session }) => session === payload.session)?.secret;
+    if (state === undefined || secret === undefined) {
+      faults.push(`Session ${payload.session}: there is no secret to draw from.`);
+      continue;
+    }
+    const contributors = state.seats.filter(({ contributes, revealed }) => contributes && revealed !== null);
+    if (textOf(contributors.map(({ seat }) => seat)) !== textOf(payload.contributors ?? null))
+      faults.push(`Session ${state.session}: the draw was not fixed with the phones that the record lists.`);
+    const draw = revealedDraw(state, study.method(), secret, secrets.codeKey.rows);
+    recomputed.push({ session: state.session, ...draw });
+  }
+  recomputed.sort((a, b) => a.session - b.session);
+  for (const draw of recomputed) {
+    const shown = published.find(({ session }) => session === draw.session);
+    if (shown === undefined || textOf(shown) !== textOf(draw))
+      faults.push(`Session ${draw.session}: the draw does not follow from its secrets.`);
+  }
+  if (textOf(published) !== textOf(recomputed)) faults.push('The listed draws are not those that the record fixes.');
+  const trials = recomputed.reduce((sum, { truths }) => sum + truths.length, 0);
+  return { faults, held: `${trials} trials in ${recomputed.length} sessions drawn again, spares included.` };
+}

@@ -1,0 +1,68 @@
+import { notShown, type Publication } from '#shared/contracts/publications.ts';
+import { formatNumber } from '../../lib/format.ts';
+import { Button } from '../../ui/button.tsx';
+import { buttonLook } from '../../ui/button-look.ts';
+import { CopyButton } from '../../ui/copy-button.tsx';
+import { CheckList } from './check-list.tsx';
+import { FileDrop } from './file-drop.tsx';
+import { useVerification } from './use-verification.ts';
+import { VerificationOutcome } from './verification-outcome.tsx';
+
+/** The record, checked in the visitor's own browser from the downloaded file; and the file itself, to be checked elsewhere. */
+export function VerificationSection({ publication }: { publication: Publication }) {
+  const { file } = publication;
+  const { verification, checkPublished, checkFile } = useVerification(file.path);
+  const { phase, fileName, checks } = verification;
+  const isRunning = phase === 'fetching' || phase === 'checking';
+  return (
+    <section
+      aria-labelledby="verification"
+      className="grid gap-x-16 gap-y-10 lg:grid-cols-[minmax(0,1fr)_21rem] lg:items-start"
+    >
+      <div className="flex min-w-0 flex-col gap-5">
+        <h2 id="verification" className="text-xl [overflow-wrap:anywhere]">
+          {fileName === null ? 'Checked in your browser, not by the publisher' : `Your file ${fileName}, checked`}
+        </h2>
+        <div role="status" className="flex flex-col gap-2">
+          <VerificationOutcome verification={verification} published={file.digest} />
+        </div>
+        <CheckList checks={checks} isRunning={isRunning} />
+        <div className="print:hidden">
+          <Button busy={isRunning} busyLabel="Checking" onClick={checkPublished}>
+            {fileName === null ? 'Check again' : 'Check the published file'}
+          </Button>
+        </div>
+      </div>
+      <WithoutUs file={file} onFile={checkFile} />
+    </section>
+  );
+}
+
+function WithoutUs({ file, onFile }: { file: Publication['file']; onFile: (file: File) => void }) {
+  return (
+    <div className="flex min-w-0 flex-col gap-8">
+      <section aria-labelledby="without-us" className="flex flex-col gap-3 border-t-2 border-ink pt-4">
+        <h3 id="without-us" className="text-base font-bold">
+          Without us
+        </h3>
+        <p className="text-soft">
+          Everything is in one file: the record, the protocol, the secrets, the draws, every counted answer and the
+          result.
+        </p>
+        <a href={file.path} download className={buttonLook('plain', 'normal')}>
+          Download the record, {formatNumber(Math.ceil(file.bytes / 1000))} kB
+        </a>
+        <FileDrop onFile={onFile} />
+        <p className="text-soft">SHA-256 of the published file, as sha256sum prints it</p>
+        <code className="break-all">{file.digest}</code>
+        <CopyButton text={file.digest} label="Copy the digest" />
+      </section>
+      <section aria-labelledby="not-shown" className="flex flex-col gap-2 border-t-2 border-ink pt-4">
+        <h3 id="not-shown" className="text-base font-bold">
+          What no software can show
+        </h3>
+        <p className="text-soft">{notShown} Repeating the test is the cure.</p>
+      </section>
+    </div>
+  );
+}

@@ -1,0 +1,219 @@
+import { createHash } from 'node:crypto';
+import { cautions } from '#shared/contracts/proctor-live.ts';
+import { canonicalJson, type Json } from '#shared/ledger/canonical-json.ts';
+import { type Entry, nextEntry } from '#shared/ledger/chain.ts';
+import type { ClosedStudy } from '#shared/ledger/publication-parts.ts';
+import { methodOf } from '#shared/methods/methods.ts';
+import { runRegistered } from '#shared/methods/run-registered.ts';
+import { type Protocol, protocolDigest, sessionPlanOf } from '#shared/protocol/protocol.ts';
+import { type AnswerContent, answerLeaf, contributionCommitment } from '#shared/session/answer-leaf.ts';
+import { codeKeyCommitment, drawSecretCommitment } from '#shared/session/commitments.ts';
+import { decide, type SessionCommand } from '#shared/session/decide.ts';
+import { evolve, holdAnswer } from '#shared/session/evolve.ts';
+import { nextStep } from '#shared/session/progress.ts';
+import { sessionsInRecord } from '#shared/session/read-record.ts';
+import type { SessionState } from '#shared/session/state.ts';
+
+// A closed study made by the state machine alone: two sessions, the second abandoned, with a void and a missing answer.
+
+const hex = (text: string, bytes: number) =>
+  createHash('sha256')
+    .update(text)
+    .digest('hex')
+    .slice(0, bytes * 2);
+const id = (text: string) => {
+  const h = hex(text, 16);
+  return `${h.slice(0, 8)}-${h.slice(8, 12)}-4${h.slice(13, 16)}-8${h.slice(17, 20)}-${h.slice(20)}`;
+};
+export const people = { manager: id('manager'), holder: id('holder'), proctor: id('proctor'), owner: id('owner') };
+
+/** Entries chained again from the first, so that only what they say has changed. */
+export function chainedAgain(entries: readonly Entry[]): Entry[] {
+  const chained: Entry[] = [];
+  for (const { study, at, kind, version, payload, nonce } of entries)
+    chained.push(nextEntry(chained.at(-1) ?? null, { study, at, kind, version, payload, nonce }));
+  return chained;
+}
+
+class StudyMaker {
+  readonly study = id('study');
+  readonly entries: Entry[] = [];
+  readonly answers: AnswerContent[] = [];
+  now = Date.parse('2026-12-05T18:00:00.000Z');
+
+  put(kind: string, payload: object): void {
+    const nonce = hex(`nonce ${this.entries.length}`, 16);
+    const at = new Date(this.now).toISOString();
+    const content = { study: this.study, at, kind, version: 1, payload: payload as Entry['payload'], nonce };
+    this.entries.push(nextEntry(this.entries.at(-1) ?? null, content));
+  }
+}
+
+const cable = (name: string) => ({
+  id: id(name),
+  name,
+  kind: 'loudspeaker' as const,
+  lengthMm: 3000,
+  description: '',
+  specimens: [1, 2].map((n) => ({ id: id(`${name} ${n}`), serial: `${name[0]}-${n}`, note: '' })),
+});
+
+const protocolFor = (study: string, listeners: number): Protocol => ({
+  format: 'fairlead-protocol',
+  version: 1,
+  study,
+  salt: hex('salt', 32),
+  title: 'Study Plover',
+  question: 'Can these listeners tell the two cables apart?',
+  method: 'abx',
+  cables: [cable('Northern run'), cable('Southern run')],
+  design: {
+    sessions: 2,
+    listenersPerSession: listeners,
+    trials: 5,
+    spares: 2,
+    confidence: false,
+    codeHolder: people.holder,
+  },
+  conduct: {
+    rig: 'loudspeaker',
+    chain: 'Player, amplifier, loudspeakers',
+    changeS: 30,
+    answerS: 20,
+    programme: [{ title: 'Piano', start: '0:10', lengthS: 12 }],
+  },
+  analysis: {
+    name: 'abx/1',
+    alpha: '0.05',
+    alternative: 'greater',
+    missing: 'counted as wrong',
+    stopping: 'fixed number of trials',
+    exclusions: 'none',
+  },
+});
+
+class SessionMaker {
+  readonly #maker: StudyMaker;
+  #state: SessionState;
+
+  constructor(maker: StudyMaker, protocol: Protocol, session: number) {
+    this.#maker = maker;
+    const payload = {
+      session,
+      sessionId: id(`session ${session}`),
+      proctor: people.proctor,
+      plan: sessionPlanOf(protocol),
+    };
+    maker.put('session-planned', payload);
+    this.#state = evolve(null, { kind: 'session-planned', at: maker.now, payload }, methodOf('abx'));
+  }
+
+  do(command: SessionCommand): void {
+    for (const event of decide(this.#state, command, this.#maker.now)) {
+      this.#maker.put(event.kind, event.payload);
+      this.#state = evolve(this.#state, event, methodOf('abx'));
+    }
+  }
+
+  seat(labels: readonly string[], commitment: string): void {
+    this.do({ kind: 'confirm-cautions', items: [...cautions] });
+    this.do({ kind: 'open-seating', commitment });
+    const value = (seat: string) => hex(`contribution ${seat}`, 32);
+    for (const seat of labels)
+      this.do({ kind: 'take-seat', seat, commitment: contributionCommitment(value(seat)), consentVersion: 1 });
+    this.do({ kind: 'close-seating' });
+    for (const seat of labels) this.do({ kind: 'reveal', seat, value: value(seat) });
+  }
+
+  present(): void {
+    for (;;) {
+      const { trial } = this.#state;
+      if (trial === null || trial.stage === 'answering') return;
+      const step = nextStep(trial);
+      if (step === 'unmute') this.#maker.now = trial.changeStartedAt + this.#state.plan.changeMs;
+      if (step !== null) this.do({ kind: 'confirm-step', step });
+      else {
+        this.#maker.now = trial.endsAt ?? this.#maker.now;
+        this.do({ kind: 'tick' });
+      }
+    }
+  }
+
+  answer(seat: string, choice: string): void {
+    const { trial, sessionId: session } = this.#state;
+    const number = trial?.trial ?? 0;
+    const salt = hex(`salt ${session} ${seat} ${number}`, 16);
+    const content = { session, seat, trial: number, choice, confidence: null, salt };
+    this.#maker.answers.push(content);
+    this.#state = holdAnswer(this.#state, seat, answerLeaf(content));
+  }
+
+  lock(): void {
+    this.#maker.now = this.#state.trial?.endsAt ?? this.#maker.now;
+    this.do({ kind: 'tick' });
+  }
+}
+
+function runSession(maker: StudyMaker, protocol: Protocol, session: number, listeners: number): void {
+  const made = new SessionMaker(maker, protocol, session);
+  const seats = Array.from({ length: listeners }, (_, index) => `L0${(session - 1) * listeners + index + 1}`);
+  made.seat(seats, drawSecretCommitment(hex(`draw salt ${session}`, 32), hex(`secret ${session}`, 32)));
+  made.do({ kind: 'begin-familiarisation' });
+  made.present();
+  const last = session === 1 ? 6 : 3;
+  for (let trial = 1; trial <= last; trial += 1) {
+    made.do({ kind: 'begin-trial' });
+    made.present();
+    const isSilent = (index: number) => session === 1 && trial === 4 && index === 0;
+    for (const [index, seat] of seats.entries())
+      if (!isSilent(index)) made.answer(seat, (trial + index) % 3 ? 'A' : 'B');
+    if (session === 1 && trial === 2) made.do({ kind: 'void-trial', reason: 'noise', note: 'A door.' });
+    else made.lock();
+  }
+  if (session === 1) made.do({ kind: 'finish' });
+  else made.do({ kind: 'abandon', reason: 'The amplifier failed.' });
+}
+
+/** @param listeners seats per session, 1 to 4 */
+export function closedStudy(listeners: number): ClosedStudy {
+  const maker = new StudyMaker();
+  const protocol = protocolFor(maker.study, listeners);
+  const rows = protocol.cables.flatMap(({ specimens }, index) =>
+    specimens.map(({ id: specimen, serial }, n) => ({
+      code: String(317 + index * 211 + n * 38),
+      specimen,
+      serial,
+      cable: index,
+    })),
+  );
+  const codeKey = { salt: hex('key salt', 32), rows };
+  maker.put('protocol-sealed', { protocolVersion: 1, digest: protocolDigest(protocol), sealedBy: people.manager });
+  maker.put('code-key-committed', {
+    commitment: codeKeyCommitment(codeKey.salt, rows),
+    specimens: rows.length,
+    by: people.holder,
+  });
+  for (const session of [1, 2]) runSession(maker, protocol, session, listeners);
+  maker.put('study-closed', {
+    by: people.manager,
+    complete: false,
+    reason: 'The amplifier failed.',
+    manager: people.manager,
+    owners: [people.owner],
+    managers: [people.manager],
+    codeHolder: people.holder,
+  });
+  const draws = [1, 2].map((session) => ({
+    session,
+    secret: hex(`secret ${session}`, 32),
+    salt: hex(`draw salt ${session}`, 32),
+  }));
+  const key = { codeKey, draws };
+  maker.put('key-revealed', key);
+  const method = methodOf('abx');
+  const result = runRegistered(protocol, sessionsInRecord(maker.entries, method), key, maker.answers);
+  maker.put('result-recorded', { analysis: 'abx/1', result });
+  return JSON.parse(
+    canonicalJson({ entries: maker.entries, protocol, answers: maker.answers } as unknown as Json),
+  ) as ClosedStudy;
+}
