@@ -32,6 +32,31 @@ describe('the demo', () => {
     }
   });
 
+  it('has a study in each state, and of those closed one with a clear difference and one with none [D1]', async () => {
+    const { deps } = server;
+    const studies: { id: string; title: string; state: string; organisation_id: string }[] = await deps.db.query(
+      'select id, title, state, organisation_id from studies',
+    );
+    expect([...new Set(studies.map(({ state }) => state))].toSorted()).toEqual([
+      'closed',
+      'collecting',
+      'draft',
+      'published',
+      'sealed',
+    ]);
+    const resultOf = async (wanted: string) => {
+      const study = studies.find(({ title }) => title === wanted);
+      if (study === undefined) throw new Error(`no ${wanted}`);
+      return (await getReport(deps, { organisationId: study.organisation_id, id: study.id })).result;
+    };
+    expect(await resultOf('Study Curlew')).toMatchObject({ isSignificant: true });
+    expect(await resultOf('Study Dotterel')).toMatchObject({ isSignificant: false });
+    const planned = await deps.db.query(
+      "select count(*) as count from sessions join studies on studies.id = sessions.study_id where sessions.phase = 'planned' and studies.state = 'collecting'",
+    );
+    expect(Number(planned[0].count)).toBe(1);
+  });
+
   it('is made once: a second start leaves it as it is', async () => {
     const before = await server.deps.db.query('select count(*) as entries from record_entries');
     await loadDemo(server.deps);
