@@ -77,7 +77,6 @@ export const publication = z.strictObject({
   statements: publicationStatements,
   confirmations: z.array(z.string()),
   /** What belongs to the finding's first lines beside its own: the gap between presentations and how blind it was. */
-  conditions: z.array(z.string()),
   /** The frozen document: its SHA-256 digest, its size in bytes, and where it is. */
   file: z.strictObject({ digest: z.string(), bytes: z.int(), path: z.string() }),
   report,

@@ -94,7 +94,7 @@ describe('a publication', () => {
 
   it('is readable without a script: what was found, how, and by whom it was paid [V7]', async () => {
     const text = await page();
-    const { report, conditions } = await view();
+    const { report } = await view();
     const { finding, result, record: kept } = report;
     const escaped = (words: string) => words.replaceAll('&', '&amp;').replaceAll('<', '&lt;').replaceAll('>', '&gt;');
     const words = [
@@ -103,7 +103,7 @@ describe('a publication', () => {
       finding.scope,
       ...finding.mustNotSay,
       ...finding.modifiers,
-      ...conditions,
+      ...report.conditions,
       `${result.correct} / ${result.answers}`,
       `${result.p.numerator} / ${result.p.denominator}`,
       `Blinding: ${report.rung.name}.`,

@@ -137,6 +137,16 @@ function factsOf({ design, conduct, analysis, cables, method }: Protocol): Repor
   ];
 }
 
+/** How level was handled is among the finding's own lines. */
+function conditionsOf({ protocol: { conduct }, states, rung }: ReportSource): Report['conditions'] {
+  const long = states.flatMap(({ ended }) => ended).reduce((sum, { longChanges }) => sum + longChanges, 0);
+  const late = long === 0 ? '' : `; ${long} of them took a whole number of times as long`;
+  return [
+    `Changes between presentations lasted ${conduct.changeS} s, real or sham${late}.`,
+    `Blinding: ${rung.name}. ${rung.why}`,
+  ];
+}
+
 /** The report, field by field. */
 export function reportView(source: ReportSource): Report {
   const { study, protocol, entries, states, answers, result, finding, checks, rung, closing } = source;
@@ -159,6 +169,7 @@ export function reportView(source: ReportSource): Report {
     result,
     nullDistribution: method.nullDistribution(countedTrials(method, states, key, answers)),
     rung: { name: rung.name, why: rung.why },
+    conditions: conditionsOf(source),
     flow: flowOf(source),
     sessions: states.map((state) => sessionView(source, state, key)),
     voids: voidsOf(entries),

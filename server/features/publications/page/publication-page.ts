@@ -7,8 +7,8 @@ import { count, facts, frame, list, section, table, utc } from './page-parts.ts'
 
 const portraitOf = ({ result, cables }: Report): Portrait => methodOf(result.method).portray(result, cables);
 
-function head({ headline, withdrawn, conditions, report, title }: Publication): Html {
-  const { result, finding, question, flow } = report;
+function head({ headline, withdrawn, report, title }: Publication): Html {
+  const { result, finding, question, flow, conditions } = report;
   const portrait = portraitOf(report);
   return html`<div class="flex flex-col gap-5">
     ${
