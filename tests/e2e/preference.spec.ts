@@ -16,6 +16,7 @@ test.afterAll(async () => {
 
 async function prefer(phone: Page, what: 'The first' | 'The second' | 'No preference'): Promise<void> {
   await phone.getByText(what, { exact: true }).click();
+  await phone.getByRole('button', { name: /how sure/ }).click();
   await phone.getByText('Fairly', { exact: true }).click();
   await phone.getByRole('button', { name: /^Send/ }).click();
   await phone.getByText('held by the server').waitFor();
