@@ -20,6 +20,7 @@ import {
 } from './demo-scenario.ts';
 import { forgetDemo } from './forget-demo.ts';
 import { HandClock } from './hand-clock.ts';
+import { inviteDemoListeners } from './invite-listeners.ts';
 import { type People, prepareStudy } from './prepare-study.ts';
 import { runPublishedStudy } from './published-study.ts';
 import { type Hearing, SimulatedSession } from './simulated-session.ts';
@@ -121,5 +122,6 @@ export async function loadDemo(deps: Deps): Promise<void> {
   clock.advance(3_600_000);
   const preferred = { ...closedPreference, cables, codeHolderId };
   await runClosedStudy(past, clock, organisationId, people, preferred, preference);
-  await prepareStudy(deps, organisationId, people, { ...studyToRun, cables, codeHolderId });
+  const toRun = await prepareStudy(deps, organisationId, people, { ...studyToRun, cables, codeHolderId });
+  await inviteDemoListeners(deps, { organisationId, userId: people.manager }, toRun.sessionId);
 }

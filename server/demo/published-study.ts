@@ -8,7 +8,7 @@ import { recordDeviation } from '../features/studies/studies.service.ts';
 import { Sittings } from '../live/sittings.ts';
 import { publishedStatements } from './demo-scenario.ts';
 import type { HandClock } from './hand-clock.ts';
-import { type People, prepareStudy } from './prepare-study.ts';
+import { demoTimeZone, type People, prepareStudy } from './prepare-study.ts';
 import { type Hearing, SimulatedSession } from './simulated-session.ts';
 
 /** A simulated listener who hears the difference in some of the trials and guesses in the others. */
@@ -38,7 +38,14 @@ export async function runPublishedStudy(
     const id =
       index === 0
         ? sessionId
-        : (await planSession(deps, where, { plannedAt, room: 'Listening room', proctorId: people.proctor })).id;
+        : (
+            await planSession(deps, where, {
+              plannedAt,
+              timeZone: demoTimeZone,
+              room: 'Listening room',
+              proctorId: people.proctor,
+            })
+          ).id;
     const session = await SimulatedSession.open(deps, clock, sittings, id);
     await session.seat(['Armchair']);
     if (share === null) {

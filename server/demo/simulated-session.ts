@@ -62,7 +62,7 @@ export class SimulatedSession {
       await this.#wait(21_000);
       const secret = randomBytes(32).toString('hex');
       const commitment = contributionCommitment(secret);
-      const { token } = await this.#sitting.takeSeat({ place, commitment, consentVersion });
+      const { token } = await this.#sitting.takeSeat({ place, commitment, consentVersion }, null);
       const seat = await seatByToken(this.#deps.db.manager, tokenDigest(token));
       if (seat === null) throw new Error('a taken seat is gone');
       const phone: Phone = { seat: seat.label, secret, view: null };

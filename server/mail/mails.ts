@@ -35,6 +35,26 @@ export function sessionPlannedMail(
   };
 }
 
+/** A session moved or does not take place; to its proctor. */
+export function sessionChangedMail(
+  study: StudyMail,
+  session: { readonly number: number; readonly room: string; readonly plannedAt: Date },
+  change: 'moved' | 'cancelled',
+): MailContent {
+  const what = `Session ${session.number} of ${study.title}, of which you are the proctor,`;
+  return {
+    subject: `${study.title}: session ${session.number} is ${change}`,
+    paragraphs: [
+      change === 'moved'
+        ? `${what} now takes place in ${session.room}, on ${onDay(session.plannedAt)} (UTC).`
+        : `${what} on ${onDay(session.plannedAt)} (UTC) does not take place.`,
+      'Whoever is invited to listen is told too.',
+    ],
+    action: { label: 'See the session', url: study.url },
+    footer: 'You get this because a manager named you as the proctor.',
+  };
+}
+
 /** A study was sealed; to its code holder. */
 export function codesToDrawMail(study: StudyMail): MailContent {
   return {

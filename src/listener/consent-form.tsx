@@ -5,11 +5,12 @@ import { CheckboxField } from '../ui/checkbox-field.tsx';
 import { TextField } from '../ui/text-field.tsx';
 
 type ConsentFormProps = {
-  session: OpenSession;
+  session: Pick<OpenSession, 'title' | 'room' | 'minutes' | 'trials' | 'running' | 'rehearsal'>;
   busy: boolean;
   problem: string | null;
   onTake: (place: string) => void;
-  onBack: () => void;
+  /** To another code; whoever came by a personal link has none. */
+  onBack?: () => void;
 };
 
 /** What the session is and what taking part means; a seat is taken by agreeing. */
@@ -90,9 +91,11 @@ export function ConsentForm({ session, busy, problem, onTake, onBack }: ConsentF
       <Button type="submit" variant="primary" size="touch" busy={busy}>
         Take the seat
       </Button>
-      <Button variant="quiet" size="touch" onClick={onBack}>
-        Use another code
-      </Button>
+      {onBack === undefined ? null : (
+        <Button variant="quiet" size="touch" onClick={onBack}>
+          Use another code
+        </Button>
+      )}
     </form>
   );
 }

@@ -25,7 +25,7 @@ const outcomes = (page: Page) =>
       lines.map((line) => `${line.getAttribute('data-check')} ${line.lastElementChild?.lastElementChild?.textContent}`),
     );
 
-const allPass = ['file', 'record', 'protocol', 'commitments', 'draws', 'answers', 'trials', 'figures'].map(
+const allPass = ['file', 'record', 'protocol', 'commitments', 'draws', 'answers', 'trials', 'listeners', 'figures'].map(
   (id) => `${id} pass`,
 );
 

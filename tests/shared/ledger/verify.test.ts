@@ -49,6 +49,7 @@ describe.each(studies)('a published study, $listeners at a time', ({ parts, text
       'draws pass',
       'answers pass',
       'trials pass',
+      'listeners pass',
       'figures pass',
     ]);
     expect(verifyStudy(parts)).toEqual([...checksOfFile(text)].slice(1));
