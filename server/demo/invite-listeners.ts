@@ -13,18 +13,21 @@ const demoListeners: readonly { email: string; coming: boolean | null }[] = [
   { email: 'teodor.lindqvaern@listeners.example', coming: null },
 ];
 
-/** Invites the demo's listeners to a session and gives their answers: one comes, one does not, one moved up, one waits. */
-export async function inviteDemoListeners(
-  deps: Deps,
-  who: { organisationId: string; userId: string },
-  sessionId: string,
-): Promise<void> {
-  const addresses = demoListeners.map(({ email }) => email);
+type Who = { organisationId: string; userId: string };
+
+/** Invites by address, and hands out the personal links in the same order. */
+export async function demoLinks(deps: Deps, who: Who, sessionId: string, addresses: readonly string[]) {
   await inviteListeners(deps, { ...who, role: 'manager' }, sessionId, { addresses });
   const attendances = await withTransaction(deps.db, (tx) => attendancesOf(tx, sessionId));
+  return attendances.map(({ id }) => linkTokenOf(deps.config, id));
+}
+
+/** Invites the demo's listeners to a session and gives their answers: one comes, one does not, one moved up, one waits. */
+export async function inviteDemoListeners(deps: Deps, who: Who, sessionId: string): Promise<void> {
+  const addresses = demoListeners.map(({ email }) => email);
+  const links = await demoLinks(deps, who, sessionId, addresses);
   for (const [index, { coming }] of demoListeners.entries()) {
-    const attendance = attendances[index];
-    if (attendance === undefined || coming === null) continue;
-    await answerInvitation(deps, linkTokenOf(deps.config, attendance.id), coming);
+    const link = links[index];
+    if (link !== undefined && coming !== null) await answerInvitation(deps, link, coming);
   }
 }

@@ -71,7 +71,7 @@ function keepingIn(tx: Tx, deps: Deps): Keeping {
       const happened = new Set(events.map(({ kind }) => kind));
       const isCancelled = happened.has('session-abandoned') && memory.state.phase === 'planned';
       if (isCancelled) await tellCancelled(tx, deps, memory.session);
-      else if (happened.has('seating-opened')) await dropReminders(tx, id);
+      else if (happened.has('seating-opened')) await dropReminders(tx, deps, id);
       return entries;
     },
   };

@@ -1,4 +1,4 @@
-import { In, LessThan, LessThanOrEqual } from 'typeorm';
+import { In, LessThan, LessThanOrEqual, MoreThan } from 'typeorm';
 import type { MailState } from '#shared/contracts/mail.ts';
 import { likePattern, pageOfRows } from '../db/paging.ts';
 import type { Tx } from '../db/transaction.ts';
@@ -30,8 +30,9 @@ export async function eraseTexts(tx: Tx, writtenBefore: Date, states: readonly M
 /** Without its text a mail is also without its calendar file, which names the recipient and holds the link. */
 export const textErased = { text: '', html: '', calendar: null, calendarMethod: null };
 
-export async function deleteUnsent(tx: Tx, id: string): Promise<void> {
-  await tx.delete(OutgoingMail, { id, state: In(['waiting', 'kept']), attempts: 0 });
+/** Deletes a mail that is not due yet. */
+export async function deleteUndue(tx: Tx, id: string, now: Date): Promise<void> {
+  await tx.delete(OutgoingMail, { id, attempts: 0, nextAttemptAt: MoreThan(now) });
 }
 
 export async function deleteWaitingFor(tx: Tx, listenerId: string): Promise<void> {

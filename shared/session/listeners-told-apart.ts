@@ -25,9 +25,9 @@ export function listenersToldApart(sessions: readonly SessionState[]): Listeners
  */
 export function toldApartWords({ listeners, unlinked }: ListenersToldApart): string {
   if (listeners === 0) return 'Nobody took a seat.';
-  const of = listeners === 1 ? 'The one listener' : `${unlinked} of ${listeners} listeners`;
   if (unlinked === 0) return 'Every listener joined by a personal link, one to an address.';
-  return `${of} joined by code alone, so it is not certain that each is a different person.`;
+  if (listeners === 1) return 'The one listener joined by code alone.';
+  return `${unlinked} of ${listeners} listeners joined by code alone, so it is not certain that each is a different person.`;
 }
 
 /** Where labels stand for more or fewer than one listener each: a label twice in a session, or one that came back by code. */

@@ -6,7 +6,7 @@ import type { Deps } from '../../deps.ts';
 import { calendarFile } from '../../mail/calendar-file.ts';
 import * as mails from '../../mail/listener-mails.ts';
 import type { MailContent } from '../../mail/mails.ts';
-import { dropUnsent, postMail } from '../../mail/outbox.ts';
+import { postMail, takeBack } from '../../mail/outbox.ts';
 import { pageAddresses } from '../../mail/page-addresses.ts';
 import type { Session } from '../sessions/session.entity.ts';
 import { protocolOf } from '../studies/studies.service.ts';
@@ -80,7 +80,7 @@ export async function calendarOf(tx: Tx, deps: Deps, session: Session, attendanc
 
 /** Sees to it that whoever holds a seat is reminded a day before, and nobody else; writes a waiting reminder anew. */
 export async function setReminder(tx: Tx, deps: Deps, session: Session, attendance: Attendance): Promise<void> {
-  if (attendance.reminderId !== null) await dropUnsent(tx, attendance.reminderId);
+  if (attendance.reminderId !== null) await takeBack(tx, deps, attendance.reminderId);
   attendance.reminderId = null;
   const dueAt = session.plannedAt.getTime() - reminderBeforeMs;
   const { email } = await listenerById(tx, attendance.listenerId);
@@ -94,17 +94,17 @@ export async function setReminder(tx: Tx, deps: Deps, session: Session, attendan
 }
 
 /** Takes back the reminders of a session that were not sent. */
-export async function dropReminders(tx: Tx, sessionId: string): Promise<void> {
+export async function dropReminders(tx: Tx, deps: Deps, sessionId: string): Promise<void> {
   for (const { id, reminderId } of await attendancesOf(tx, sessionId)) {
     if (reminderId === null) continue;
-    await dropUnsent(tx, reminderId);
+    await takeBack(tx, deps, reminderId);
     await updateAttendance(tx, id, { reminderId: null });
   }
 }
 
 /** A planned session does not take place: whoever holds a seat or waits for one is told. */
 export async function tellCancelled(tx: Tx, deps: Deps, session: Session): Promise<void> {
-  await dropReminders(tx, session.id);
+  await dropReminders(tx, deps, session.id);
   for (const attendance of await attendancesOf(tx, session.id))
     if (holdsSeat(attendance) || attendance.state === 'waiting')
       await tell(tx, deps, session, attendance, mails.cancelledMail, 'CANCEL');

@@ -38,11 +38,11 @@ export function AttendanceTable({ organisationId, isPlanned, canChange, ...table
       header: 'Answer',
       cell: (row) => <StatusWord tone={stateWordOf(row).tone}>{stateWordOf(row).word}</StatusWord>,
     },
-    { key: 'invitedAt', header: 'Invited', cell: ({ invitedAt }) => formatDateTime(invitedAt) },
     {
       key: 'answeredAt',
       header: 'Answered',
-      cell: ({ answeredAt }) => (answeredAt === null ? '' : formatDateTime(answeredAt)),
+      cell: ({ answeredAt }) =>
+        answeredAt === null ? <span className="text-soft">Not yet</span> : formatDateTime(answeredAt),
     },
   ];
   const change: Column<AttendanceRow> = {
