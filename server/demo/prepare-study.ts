@@ -19,7 +19,7 @@ export async function prepareStudy(deps: Deps, organisationId: string, people: P
   await drawCodes(deps, where, holder);
   await openCodes(deps, where, holder, 'labels');
   await confirmCodes(deps, where, holder);
-  const plannedAt = new Date(deps.clock.now() + 3_600_000).toISOString();
+  const plannedAt = new Date(Math.ceil((deps.clock.now() + 3_600_000) / 900_000) * 900_000).toISOString();
   const session = await planSession(deps, where, {
     plannedAt,
     timeZone: demoTimeZone,

@@ -1,7 +1,7 @@
 import { randomBytes } from 'node:crypto';
 import type { ListenerView } from '#shared/contracts/listener-live.ts';
 import { cautions, type ProctorCommand, type ProctorView } from '#shared/contracts/proctor-live.ts';
-import { consentVersion } from '#shared/contracts/seats.ts';
+import { consentVersion, linkedConsentVersion } from '#shared/contracts/seats.ts';
 import { contributionCommitment } from '#shared/session/answer-leaf.ts';
 import type { Deps } from '../deps.ts';
 import { takeLinkedSeat } from '../features/attendances/answering.service.ts';
@@ -69,12 +69,16 @@ export class SimulatedSession {
       await this.#wait(21_000);
       const secret = randomBytes(32).toString('hex');
       const commitment = contributionCommitment(secret);
-      const consent = { place, commitment, consentVersion };
+      const consent = { place, commitment };
       const link = links[index];
       const { token } =
         link === undefined
-          ? await this.#sitting.takeSeat(consent, null)
-          : await takeLinkedSeat(this.#deps, this.#sittings, { token: link, ...consent });
+          ? await this.#sitting.takeSeat({ ...consent, consentVersion }, null)
+          : await takeLinkedSeat(this.#deps, this.#sittings, {
+              token: link,
+              ...consent,
+              consentVersion: linkedConsentVersion,
+            });
       const seat = await seatByToken(this.#deps.db.manager, tokenDigest(token));
       if (seat === null) throw new Error('a taken seat is gone');
       const phone: Phone = { seat: seat.label, secret, view: null };

@@ -22,11 +22,15 @@ export function senderAddress({ smtp, publicUrl }: Deps['config']): string {
   return address?.trim() ?? `fairlead@${new URL(publicUrl).hostname}`;
 }
 
-/** The zone's VTIMEZONE. UTC needs none: its times end in Z. */
-function zoneBlock(timeZone: string): string | null {
+/**
+ * The zone's VTIMEZONE with the name that it bears, which for an older name of a zone is the present one. UTC needs none:
+ * its times end in Z.
+ */
+function zoneOf(timeZone: string): { name: string; block: string } | null {
   if (timeZone === 'UTC') return null;
-  const [block] = [tzlib_get_ical_block(timeZone)].flat();
-  return typeof block === 'string' && block.startsWith('BEGIN:VTIMEZONE') ? `${block}\r\n` : null;
+  const block = [tzlib_get_ical_block(timeZone)].flat()[0] ?? '';
+  const name = /^BEGIN:VTIMEZONE\r\nTZID:(.+)\r\n/.exec(block)?.[1];
+  return name === undefined ? null : { name, block: `${block}\r\n` };
 }
 
 /**
@@ -35,14 +39,14 @@ function zoneBlock(timeZone: string): string | null {
  */
 export function calendarFile({ config, clock }: Deps, entry: CalendarEntry): string {
   const { method, uid, sequence, attendee, title, room, plannedAt, minutes, timeZone, url, invitedBy } = entry;
-  const block = zoneBlock(timeZone);
-  const zone = block === null ? 'UTC' : timeZone;
+  const zone = zoneOf(timeZone);
   const startsAt = plannedAt.getTime();
-  const local = (at: number) => (block === null ? new Date(at) : new TZDate(at, zone));
+  const local = (at: number) => (zone === null ? new Date(at) : new TZDate(at, zone.name));
   const calendar = ical({
     prodId: { company: 'Fairlead', product: 'Fairlead', language: 'EN' },
     method: ICalCalendarMethod[method],
-    ...(block === null ? {} : { timezone: { name: zone, generator: () => block } }),
+    // The zone stands at the event alone: a zone of the whole calendar would take the Z from DTSTAMP.
+    ...(zone === null ? {} : { timezone: { name: null, generator: () => zone.block } }),
   });
   const isCancelled = method === 'CANCEL';
   calendar.createEvent({
@@ -51,7 +55,7 @@ export function calendarFile({ config, clock }: Deps, entry: CalendarEntry): str
     stamp: new Date(clock.now()),
     start: local(startsAt),
     end: local(startsAt + minutes * 60_000),
-    ...(block === null ? {} : { timezone: zone }),
+    ...(zone === null ? {} : { timezone: zone.name }),
     summary: `${title}: listening session`,
     location: room,
     ...(isCancelled ? {} : { description: `Say whether you come, and take your seat: ${url}`, url }),

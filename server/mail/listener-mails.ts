@@ -100,7 +100,7 @@ export function movedWhileWaitingMail(to: ListenerInvitation): MailContent {
 
 /** A day before. */
 export function reminderMail(to: ListenerInvitation): MailContent {
-  return mailWithLink(to, 'your session is tomorrow', 'Open your invitation', [
+  return mailWithLink(to, 'a reminder of your session', 'Open your invitation', [
     `This is a reminder of the listening session that has a seat for you: ${whereAndWhen(to)}`,
     'If you cannot come, please say so by the link, so that somebody else can.',
   ]);

@@ -30,9 +30,12 @@ export async function eraseTexts(tx: Tx, writtenBefore: Date, states: readonly M
 /** Without its text a mail is also without its calendar file, which names the recipient and holds the link. */
 export const textErased = { text: '', html: '', calendar: null, calendarMethod: null };
 
-/** Deletes a mail that is not due yet. */
-export async function deleteUndue(tx: Tx, id: string, now: Date): Promise<void> {
-  await tx.delete(OutgoingMail, { id, attempts: 0, nextAttemptAt: MoreThan(now) });
+/** Deletes a mail that has not gone out, or that the mailbox does not show yet. */
+export async function deleteUnsent(tx: Tx, id: string, now: Date): Promise<void> {
+  await tx.delete(OutgoingMail, [
+    { id, state: 'waiting' },
+    { id, state: 'kept', nextAttemptAt: MoreThan(now) },
+  ]);
 }
 
 export async function deleteWaitingFor(tx: Tx, listenerId: string): Promise<void> {

@@ -1,7 +1,7 @@
 import type { Tx } from '../db/transaction.ts';
 import type { Deps } from '../deps.ts';
 import type { MailContent } from './mails.ts';
-import { deleteUndue, deleteWaitingFor, eraseRecipient, insertMail } from './outbox.store.ts';
+import { deleteUnsent, deleteWaitingFor, eraseRecipient, insertMail } from './outbox.store.ts';
 import { htmlOf, plainTextOf } from './render-mail.ts';
 
 export type Addressed = {
@@ -52,9 +52,9 @@ export async function postMail(
   return id;
 }
 
-/** Takes back a mail that is not due yet. */
+/** Takes back a mail that has not gone out. */
 export async function takeBack(tx: Tx, { clock }: Deps, id: string): Promise<void> {
-  await deleteUndue(tx, id, new Date(clock.now()));
+  await deleteUnsent(tx, id, new Date(clock.now()));
 }
 
 /** Takes back what a listener was not sent yet, and erases their address and every text from what they were. */

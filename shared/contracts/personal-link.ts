@@ -1,6 +1,6 @@
 import * as z from 'zod/mini';
 import { endpoint } from './endpoint.ts';
-import { takeSeatBody } from './seats.ts';
+import { linkedConsentVersion, takeSeatBody } from './seats.ts';
 
 // What a listener does who comes by the personal link of a mail. The token travels in the body alone, so that it stands
 // in no log.
@@ -27,7 +27,7 @@ export const personalInvitation = z.strictObject({
 });
 export type PersonalInvitation = z.output<typeof personalInvitation>;
 
-const { code: _code, ...consent } = takeSeatBody.shape;
+const { code: _code, consentVersion: _version, ...consent } = takeSeatBody.shape;
 
 export const personalLinkApi = {
   look: endpoint({
@@ -59,7 +59,7 @@ export const personalLinkApi = {
     path: '/personal-link/seat',
     summary: 'Consent and take the seat without a code, under the label that this listener has in the study',
     access: 'anyone',
-    body: z.strictObject({ token, ...consent }),
+    body: z.strictObject({ token, ...consent, consentVersion: z.literal(linkedConsentVersion) }),
     reply: z.strictObject({ token: z.string(), seat: z.string() }),
   }),
   erase: endpoint({

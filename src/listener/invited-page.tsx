@@ -1,6 +1,6 @@
 import { useCallback, useEffect, useState } from 'react';
 import { type PersonalInvitation, personalLinkApi } from '#shared/contracts/personal-link.ts';
-import { consentVersion } from '#shared/contracts/seats.ts';
+import { linkedConsentVersion } from '#shared/contracts/seats.ts';
 import { Problem } from '#shared/problem.ts';
 import { contributionCommitment } from '#shared/session/answer-leaf.ts';
 import { call } from '../lib/call.ts';
@@ -70,7 +70,14 @@ export function InvitedPage({ token, onSeated }: InvitedPageProps) {
     attempt(async () => {
       const contribution = randomHex(32);
       const commitment = contributionCommitment(contribution);
-      const body = { token, place, adult: true, agreed: true, consentVersion, commitment } as const;
+      const body = {
+        token,
+        place,
+        adult: true,
+        agreed: true,
+        consentVersion: linkedConsentVersion,
+        commitment,
+      } as const;
       const taken = await call(personalLinkApi.takeSeat, { body });
       // The seat may be one that this phone took before; what it then committed to stays.
       if (recall(taken.token).contribution === null) remember(taken.token, { contribution });
@@ -91,7 +98,7 @@ export function InvitedPage({ token, onSeated }: InvitedPageProps) {
   if (isSeat)
     return (
       <PhonePage>
-        <ConsentForm session={{ ...invitation, rehearsal: false }} busy={busy} problem={fault} onTake={take} />
+        <ConsentForm isLinked session={{ ...invitation, rehearsal: false }} busy={busy} problem={fault} onTake={take} />
       </PhonePage>
     );
   return (

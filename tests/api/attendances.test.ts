@@ -1,12 +1,15 @@
 import request from 'supertest';
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
 import type { AttendanceRow } from '#shared/contracts/attendances.ts';
+import { linkTokenOf } from '../../server/features/attendances/personal-link.ts';
+import { OutgoingMail } from '../../server/mail/outgoing-mail.entity.ts';
 import { serve } from '../../server/serve.ts';
 import { calendarIn, readCalendar } from '../support/calendar.ts';
 import { type Agent, makeOrganisation, readyStudy, signedIn, type TestOrganisation } from '../support/people.ts';
 import { PostmansClock } from '../support/postmans-clock.ts';
 import { SmtpReceiver, smtpEnvironment } from '../support/smtp-receiver.ts';
 import { type TestServer, testServer } from '../support/test-server.ts';
+import { untilAsked } from '../support/until.ts';
 
 const hourMs = 3_600_000;
 const dayMs = 24 * hourMs;
@@ -70,12 +73,40 @@ describe('listeners who are invited to a session', () => {
       uid: await idOf('ada@listeners.example'),
     });
     expect(file.text).toContain('DTSTART;TZID=Europe/Paris:20261205T190000');
+    // RFC 5545, 3.8.7.2: in UTC.
+    expect(file.text).toMatch(/^DTSTAMP:20261201T0900\d\dZ\r?$/m);
     expect(file.longestLine).toBeLessThanOrEqual(75);
     expect(Date.parse(file.end)).toBeGreaterThan(Date.parse(start));
     expect(mail.text).toContain('Saturday, 5 December 2026 at 19:00 (Europe/Paris)');
+    const sent = await untilAsked('the mail to be sent', () =>
+      server.deps.db.manager.findOneBy(OutgoingMail, { recipient: 'ada@listeners.example', state: 'sent' }),
+    );
+    expect([sent.text, sent.calendar]).toEqual(['', null]);
     const { body } = await link('calendar', { token: tokenIn(mail) }).expect(200);
     expect(body.content.replaceAll('\r\n', '')).not.toContain('\n');
     expect(readCalendar(body.content)).toMatchObject({ method: 'PUBLISH', uid: file.uid, start, attendee: '' });
+  });
+
+  it('get a file that names one zone, also where their manager’s browser names it by an older name, or UTC [G1]', async () => {
+    for (const [timeZone, zones] of [
+      ['Asia/Calcutta', ['Asia/Kolkata']],
+      ['US/Eastern', ['America/New_York']],
+      ['UTC', []],
+    ] as const) {
+      await manager.put(session).send({ plannedAt: start, timeZone, room: 'Room B' }).expect(200);
+      const email = `${timeZone.toLowerCase().replace('/', '.')}@listeners.example`;
+      await invite(email).expect(200);
+      const { rows: invited } = (await manager.get(`${session}/attendances`)).body;
+      const { id } = invited.find((row: AttendanceRow) => row.email === email);
+      const token = linkTokenOf(server.deps.config, id);
+      const { content } = (await link('calendar', { token }).expect(200)).body;
+      expect(readCalendar(content)).toMatchObject({ zones, start });
+    }
+    const nowhere = await manager
+      .put(session)
+      .send({ plannedAt: start, timeZone: 'Mars/Olympus', room: 'B' })
+      .expect(400);
+    expect(nowhere.body.errors).toEqual([{ pointer: '/timeZone', detail: 'There is no such time zone' }]);
   });
 
   it('learn the neutral title and nothing of a cable, a maker or the organisation [G2]', async () => {
@@ -133,7 +164,7 @@ describe('listeners who are invited to a session', () => {
     await manager.post(`${session}/cancel`).send({ reason: 'Again.' }).expect(409);
     clock.advance(5 * dayMs);
     await clock.pass(1000);
-    expect(receiver.mails.filter(({ subject }) => subject?.includes('tomorrow'))).toEqual([]);
+    expect(receiver.mails.filter(({ subject }) => subject?.includes('a reminder'))).toEqual([]);
   });
 
   it('are invited by pasted addresses, each checked, and nobody when one is wrong [G4]', async () => {
@@ -214,12 +245,12 @@ describe('listeners who are invited to a session', () => {
     clock.advance(Date.parse(start) - dayMs - 5_000 - clock.now());
     server = { ...server, server: await serve(server.deps) };
     await clock.pass(1000);
-    expect(receiver.mails.filter(({ subject }) => subject?.includes('tomorrow'))).toEqual([]);
+    expect(receiver.mails.filter(({ subject }) => subject?.includes('a reminder'))).toEqual([]);
     await clock.pass(5000);
-    await receiver.to('ada@listeners.example', 'your session is tomorrow');
-    await receiver.to('cy@listeners.example', 'your session is tomorrow');
+    await receiver.to('ada@listeners.example', 'a reminder of your session');
+    await receiver.to('cy@listeners.example', 'a reminder of your session');
     await clock.pass(1000);
-    const reminded = receiver.mails.filter(({ subject }) => subject?.includes('tomorrow'));
+    const reminded = receiver.mails.filter(({ subject }) => subject?.includes('a reminder'));
     expect(reminded.map(({ to }) => to?.[0]?.address).sort()).toEqual([
       'ada@listeners.example',
       'cy@listeners.example',
@@ -234,10 +265,10 @@ describe('listeners who are invited to a session', () => {
     await mailTo('ada@listeners.example', 'has moved');
     clock.advance(Date.parse(start) - clock.now());
     await clock.pass(1000);
-    expect(receiver.mails.filter(({ subject }) => subject?.includes('tomorrow'))).toEqual([]);
+    expect(receiver.mails.filter(({ subject }) => subject?.includes('a reminder'))).toEqual([]);
     clock.advance(2 * dayMs);
     await clock.pass(1000);
-    expect((await receiver.to('ada@listeners.example', 'your session is tomorrow')).text).toContain('8 December');
+    expect((await receiver.to('ada@listeners.example', 'a reminder of your session')).text).toContain('8 December');
   });
 
   it('have their address erased when they or a manager ask, and every link of it ends [G9]', async () => {
@@ -259,8 +290,8 @@ describe('listeners who are invited to a session', () => {
     expect(mails).not.toContain('bo@listeners.example');
     clock.advance(Date.parse(start) - clock.now());
     await clock.pass(1000);
-    await receiver.to('cy@listeners.example', 'tomorrow');
-    expect(receiver.mails.filter(({ subject }) => subject?.includes('tomorrow'))).toHaveLength(1);
+    await receiver.to('cy@listeners.example', 'a reminder');
+    expect(receiver.mails.filter(({ subject }) => subject?.includes('a reminder'))).toHaveLength(1);
   });
 
   it('are known to the session’s own proctor and to managers, and to no other member [G8]', async () => {

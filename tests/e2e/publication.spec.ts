@@ -93,7 +93,7 @@ test('one altered byte of the download fails the right check on the page [V2] [V
       route.fulfill({ contentType: 'application/json', body: altered }),
     );
     await page.goto(address);
-    await expect(page.getByText(/of 8 checks pass/)).toBeVisible();
+    await expect(page.getByText(/of 9 checks pass/)).toBeVisible();
     expect((await outcomes(page)).filter((line) => line.endsWith(' fail'))).toEqual([`${check} fail`]);
     await expect(page.getByText('it was altered on its way to you')).toBeVisible();
     if (check === 'answers') await expectAccessible(page, 'altered');

@@ -45,7 +45,7 @@ describe('a listener who comes back by a personal link', () => {
     const [ada = '', bo = ''] = await linksOf(study.sessionId, 'ada@listeners.example, bo@listeners.example');
     const early = await request(server.address)
       .post('/api/personal-link/seat')
-      .send({ token: ada, place: '', adult: true, agreed: true, consentVersion: 1, commitment: 'a'.repeat(64) });
+      .send({ token: ada, place: '', adult: true, agreed: true, consentVersion: 2, commitment: 'a'.repeat(64) });
     expect([early.status, early.body.detail]).toEqual([409, expect.stringContaining('once the proctor opens')]);
     const desk = await Console.open(server.address, people.proctor.email, study.sessionId);
     const code = await desk.openSeating();

@@ -125,7 +125,7 @@ export class Phone extends LivePage<ListenerView> {
   static async joinByLink(address: string, link: string, name: string): Promise<Phone> {
     const contribution = hexOf(`contribution ${name}`, 32);
     const commitment = contributionCommitment(contribution);
-    const body = { token: link, place: name, adult: true, agreed: true, consentVersion: 1, commitment };
+    const body = { token: link, place: name, adult: true, agreed: true, consentVersion: 2, commitment };
     const reply = await request(address).post('/api/personal-link/seat').send(body).expect(200);
     const phone = new Phone(address, reply.body, contribution);
     await phone.sees('a first view', () => true);
