@@ -8,7 +8,13 @@ export default defineConfig({
   plugins: [react(), tailwindcss()],
   build: { outDir: 'dist/client', manifest: true, sourcemap: false, chunkSizeWarningLimit: 700 },
   server: {
-    proxy: { '/api': server, '/socket.io': { target: server, ws: true } },
+    proxy: {
+      '/api': server,
+      '/socket.io': { target: server, ws: true },
+      // Frozen documents and what leads search engines come from the server; the pages themselves from here.
+      '^/p/[^/]+/[0-9a-f]+\\.json$': server,
+      '^/(sitemap\\.xml|robots\\.txt)$': server,
+    },
   },
   test: {
     projects: [

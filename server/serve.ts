@@ -36,7 +36,7 @@ export async function serve(deps: Deps, certificate: Pick<OwnCertificate, 'key' 
   const https = certificate === null ? null : createTlsServer({ key: certificate.key, cert: certificate.cert }, app);
   const io = serveSockets(http, deps, sittings, signedIn);
   if (https !== null) io.engine.attach(https, { path: io.path() });
-  consoles.watch(io);
+  consoles.watch(io, async (sessionId) => (await sittings.of(sessionId)).memory.session.organisationId);
   await sittings.resumeAll();
   await sweep(deps);
   const sweeping = setInterval(() => {

@@ -66,7 +66,24 @@ export const studyToRun: Free = {
   confidence: false,
 };
 
-/** Closed, with a void and a missing answer in it. */
+/** Not sealed yet: a manager is still at it. */
+export const draftStudy: Free = {
+  ...studyToRun,
+  title: 'Study Knot',
+  question: 'Can one trained listener tell the two 6 m runs apart over an evening?',
+  listenersPerSession: 1,
+  trials: 42,
+  spares: 3,
+  programme: [
+    { title: 'Piano, slow', lengthS: 20, start: '0:42' },
+    { title: 'Cymbals', lengthS: 18, start: '2:05' },
+  ],
+  changeS: 30,
+  answerS: 45,
+  confidence: true,
+};
+
+/** Closed with a difference, with a void and a missing answer in it. */
 export const closedStudy: Free = {
   ...studyToRun,
   title: 'Study Curlew',
@@ -82,6 +99,22 @@ export const closedStudy: Free = {
   ],
   changeS: 30,
   answerS: 45,
+};
+
+/** Closed, and no difference found. */
+export const closedWithout: Free = {
+  ...closedStudy,
+  title: 'Study Dotterel',
+  question: 'Do listeners hear the thin 6 m run when the level is that of a conversation?',
+};
+
+/** Collecting: its first session is held, its second is planned. */
+export const collectingStudy: Free = {
+  ...closedStudy,
+  title: 'Study Whimbrel',
+  question: 'Do listeners on two evenings tell the two 6 m runs apart?',
+  sessions: 2,
+  trials: 12,
 };
 
 /** Closed as well: which of the two they prefer, with “no preference” on offer. */

@@ -4,7 +4,9 @@ import type { Deps } from '../deps.ts';
 import { addSpecimen, createCable, getCable } from '../features/cables/cables.service.ts';
 import { Membership } from '../features/organisations/membership.entity.ts';
 import { Organisation } from '../features/organisations/organisation.entity.ts';
+import { planSession } from '../features/sessions/sessions.service.ts';
 import { closeStudy } from '../features/studies/closing.service.ts';
+import { createStudy } from '../features/studies/studies.service.ts';
 import { studiesOf } from '../features/studies/studies.store.ts';
 import { hashPassword } from '../features/users/passwords.ts';
 import { User } from '../features/users/user.entity.ts';
@@ -13,8 +15,11 @@ import { demoPeople } from './demo-people.ts';
 import {
   closedPreference,
   closedStudy,
+  closedWithout,
+  collectingStudy,
   demoCables,
   demoOrganisation,
+  draftStudy,
   publishedStudy,
   studyToRun,
 } from './demo-scenario.ts';
@@ -55,13 +60,19 @@ async function makeCables(deps: Deps, organisationId: string): Promise<StudyDraf
   return [first, second];
 }
 
-/** Simulated listeners: each hears the difference in some trials and guesses in the others; one answer stays out. */
-const matching: Hearing = (codes, seat, trial) => {
+const other = (answer: string) => (answer === 'A' ? 'B' : 'A');
+
+/** Simulated listeners who hear the difference in nearly every trial; one answer stays out. */
+const hearing: Hearing = ([a, , x], seat, trial) => {
   if (seat === 1 && trial === 11) return null;
-  const [a, , x] = codes;
-  const hears = Math.random() < ([0.6, 0.35, 0.5][seat] ?? 0);
-  if (hears) return x === a ? 'A' : 'B';
-  return Math.random() < 0.5 ? 'A' : 'B';
+  const right = x === a ? 'A' : 'B';
+  return (trial + 2 * seat) % 5 === 0 ? other(right) : right;
+};
+
+/** Simulated listeners who are right every other time. */
+const notHearing: Hearing = ([a, , x], seat, trial) => {
+  const right = x === a ? 'A' : 'B';
+  return (trial + seat) % 2 === 0 ? right : other(right);
 };
 
 /** Simulated listeners in a pair: one leans to one code, one hardly does, and one often has no preference. */
@@ -72,15 +83,8 @@ const preference: Hearing = ([one = '', other = ''], seat, trial) => {
   return leans === one < other ? 'first' : 'second';
 };
 
-async function runClosedStudy(
-  deps: Deps,
-  clock: HandClock,
-  organisationId: string,
-  people: People,
-  draft: StudyDraft,
-  hearing: Hearing,
-) {
-  const { where, sessionId } = await prepareStudy(deps, organisationId, people, draft);
+/** Runs the session that is planned, with a void in it, to its end. */
+async function runSession(deps: Deps, clock: HandClock, sessionId: string, hears: Hearing): Promise<void> {
   clock.advance(3_600_000);
   const sittings = new Sittings(deps);
   const session = await SimulatedSession.open(deps, clock, sittings, sessionId);
@@ -90,18 +94,43 @@ async function runClosedStudy(
   while (session.trialsLeft) {
     trial += 1;
     const fault = trial === 6 ? { reason: 'noise' as const, note: 'A door slammed while it played.' } : undefined;
-    await session.trial(hearing, fault);
+    await session.trial(hears, fault);
   }
   await session.finish();
   await sittings.stop();
   clock.advance(900_000);
+}
+
+async function runClosedStudy(
+  deps: Deps,
+  clock: HandClock,
+  organisationId: string,
+  people: People,
+  draft: StudyDraft,
+  hears: Hearing,
+) {
+  const { where, sessionId } = await prepareStudy(deps, organisationId, people, draft);
+  await runSession(deps, clock, sessionId, hears);
   await closeStudy(deps, where, people.manager, '');
 }
 
+/** A study between its two sessions. */
+async function runFirstSession(
+  deps: Deps,
+  clock: HandClock,
+  organisationId: string,
+  people: People,
+  draft: StudyDraft,
+) {
+  const { where, sessionId } = await prepareStudy(deps, organisationId, people, draft);
+  await runSession(deps, clock, sessionId, hearing);
+  const plannedAt = new Date(clock.now() + 7 * dayMs).toISOString();
+  await planSession(deps, where, { plannedAt, room: 'Listening room', proctorId: people.proctor });
+}
+
 /**
- * Makes the demo once: an organisation, its people and cables, a study that is published, one closed for each method and
- * one ready to run, all through the program's own services, so that their records verify. The last is made last: a demo
- * without it was cut short, and is made anew.
+ * Makes the demo once: an organisation, its people and cables, and a study in each state, all through the program's own
+ * services, so that their records verify. The one to run is made last: a demo without it was cut short, and is made anew.
  */
 export async function loadDemo(deps: Deps): Promise<void> {
   const existing = await deps.db.manager.findOneBy(Organisation, { demo: true });
@@ -118,10 +147,12 @@ export async function loadDemo(deps: Deps): Promise<void> {
   const codeHolderId = people.codeHolder;
   await runPublishedStudy(past, clock, organisationId, people, { ...publishedStudy, cables, codeHolderId });
   clock.advance(deps.clock.now() - 3 * dayMs - clock.now());
-  await runClosedStudy(past, clock, organisationId, people, { ...closedStudy, cables, codeHolderId }, matching);
-  clock.advance(3_600_000);
-  const preferred = { ...closedPreference, cables, codeHolderId };
-  await runClosedStudy(past, clock, organisationId, people, preferred, preference);
-  const toRun = await prepareStudy(deps, organisationId, people, { ...studyToRun, cables, codeHolderId });
+  const of = (free: Omit<StudyDraft, 'cables' | 'codeHolderId'>): StudyDraft => ({ ...free, cables, codeHolderId });
+  await runClosedStudy(past, clock, organisationId, people, of(closedStudy), hearing);
+  await runClosedStudy(past, clock, organisationId, people, of(closedWithout), notHearing);
+  await runClosedStudy(past, clock, organisationId, people, of(closedPreference), preference);
+  await runFirstSession(past, clock, organisationId, people, of(collectingStudy));
+  await createStudy(past, organisationId, people.manager, of(draftStudy));
+  const toRun = await prepareStudy(deps, organisationId, people, of(studyToRun));
   await inviteDemoListeners(deps, { organisationId, userId: people.manager }, toRun.sessionId);
 }

@@ -3,7 +3,6 @@ import { crew } from '#shared/contracts/endpoint.ts';
 import { Problem } from '#shared/problem.ts';
 import type { Deps } from '../deps.ts';
 import { Membership } from '../features/organisations/membership.entity.ts';
-import { sessionById } from '../features/sessions/sessions.store.ts';
 import { problemFrom } from './problem-handler.ts';
 import { placeIdOf, signedInUserId } from './sign-in.ts';
 
@@ -24,11 +23,12 @@ export class OpenConsoles {
     this.#deps = deps;
   }
 
+  /** `organisationOf` finds the organisation whose session or rehearsal it is. @throws Problem when there is none */
   // biome-ignore lint/suspicious/noExplicitAny: the events are the live server's business
-  watch(io: Server<any, any, any, any>): void {
+  watch(io: Server<any, any, any, any>, organisationOf: (sessionId: string) => Promise<string>): void {
     io.use((socket, next) => {
       if (socket.handshake.auth.audience !== 'proctor') return next();
-      this.#admit(socket).then(
+      this.#admit(socket, organisationOf).then(
         () => next(),
         (error) => {
           this.#open.delete(socket);
@@ -39,13 +39,12 @@ export class OpenConsoles {
   }
 
   /** Registers first and checks then, so that no end falls between the two. */
-  async #admit(socket: Socket): Promise<void> {
+  async #admit(socket: Socket, organisationOf: (sessionId: string) => Promise<string>): Promise<void> {
     const { manager } = this.#deps.db;
     const request = socket.request as unknown as SignedInRequest;
     const userId = signedInUserId(request);
-    const session = await sessionById(manager, String(socket.handshake.auth.sessionId));
-    if (userId === null || session === null) throw new Problem('not-found', 'There is no such session.');
-    const { organisationId } = session;
+    if (userId === null) throw new Problem('not-found', 'There is no such session.');
+    const organisationId = await organisationOf(String(socket.handshake.auth.sessionId));
     this.#open.set(socket, { userId, placeId: placeIdOf(request), organisationId });
     socket.on('disconnect', () => this.#open.delete(socket));
     const membership = await manager.findOneBy(Membership, { organisationId, userId });

@@ -111,7 +111,7 @@ export class Postman {
         headers: { 'Auto-Submitted': 'auto-generated' },
       });
     } catch (error) {
-      log.warn({ err: error, mail: id, attempts: mail.attempts }, 'a mail could not be sent');
+      log.warn({ mail: id, attempts: mail.attempts, reason: wordsOf(error) }, 'a mail could not be sent');
       await this.#postpone(mail, error);
       return;
     }

@@ -46,7 +46,7 @@ export const peopleApi = {
     params: organisationParams,
     query: listQuery.extend({
       role: z.enum(['any', ...roles]).default('any'),
-      sort: sortBy(['name', 'email', 'role', 'joined'], 'name'),
+      sort: sortBy(['name', 'role', 'joined'], 'name'),
     }),
     reply: pageOf(personRow),
   }),

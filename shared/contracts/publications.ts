@@ -26,6 +26,10 @@ export const confirmations = {
 } as const;
 export const confirmationIds = Object.keys(confirmations) as (keyof typeof confirmations)[];
 
+/** What no record can show; said on every publication and every report. */
+export const notShown =
+  'No software shows what was physically plugged in, that nobody told, or that whoever runs the server did not read the secrets early.';
+
 const confirmed = z.literal(true, 'Confirm this, or do not publish yet');
 
 /** What a manager states when publishing; all of it is public. */
@@ -73,7 +77,6 @@ export const publication = z.strictObject({
   statements: publicationStatements,
   confirmations: z.array(z.string()),
   /** What belongs to the finding's first lines beside its own: the gap between presentations and how blind it was. */
-  conditions: z.array(z.string()),
   /** The frozen document: its SHA-256 digest, its size in bytes, and where it is. */
   file: z.strictObject({ digest: z.string(), bytes: z.int(), path: z.string() }),
   report,

@@ -28,6 +28,8 @@ export const report = z.strictObject({
   result: registeredResult,
   nullDistribution: z.array(chanceBar),
   rung: z.strictObject({ name: z.string(), why: z.string() }),
+  /** The gap between presentations and the blinding rung, each in a sentence: part of the finding’s first lines. */
+  conditions: z.array(z.string()),
   flow: z.strictObject({
     sessionsPlanned: z.int(),
     sessionsOpened: z.int(),

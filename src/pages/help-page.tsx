@@ -19,11 +19,15 @@ export function Component() {
             <li>The manager plans sessions; listeners join the proctor’s session with their phones.</li>
             <li>The proctor fits the code that the screen names. Nobody sees a score, not even a count.</li>
             <li>The manager closes the study. The secrets are opened and the registered analysis runs once.</li>
+            <li>
+              The manager publishes the result, or shelves the study. A published page checks its record in the
+              visitor’s own browser.
+            </li>
           </ol>
         </Section>
         <Section title="Who does what">
           <dl className="space-y-3">
-            <Term word="Product manager">plans, seals, follows progress, closes and reads the report.</Term>
+            <Term word="Product manager">plans, seals, follows progress, closes, reads the report and publishes.</Term>
             <Term word="Proctor">prepares the room and runs the session, knowing codes but no cables.</Term>
             <Term word="Code holder">is named in a study; alone knows which code is on which cable until closing.</Term>
             <Term word="Reviewer">checks a result without having to trust whoever publishes it.</Term>

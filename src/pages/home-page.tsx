@@ -9,7 +9,7 @@ import { cableQueries } from '../features/cables/cables.queries.ts';
 import { DemoPath } from '../features/home/demo-path.tsx';
 import { homeQueries } from '../features/home/home.queries.ts';
 import type { HomePlaces } from '../features/home/home-places.ts';
-import { NoReportWaits, NoSessionWaits, NothingWaits } from '../features/home/nothing-waits.tsx';
+import { NobodyElse, NoReportWaits, NoSessionWaits, NothingWaits } from '../features/home/nothing-waits.tsx';
 import { WaitingList } from '../features/home/waiting-list.tsx';
 import { organisationQueries } from '../features/organisations/organisations.queries.ts';
 import { LatestPublications } from '../features/publications/latest-publications.tsx';
@@ -43,7 +43,7 @@ export async function loader({ params }: LoaderFunctionArgs) {
     queryClient.ensureQueryData(publicationQueries.list({ organisationId })),
     isManager ? queryClient.ensureQueryData(firstCables(organisationId)) : null,
     isManager ? queryClient.ensureQueryData(firstStudies(organisationId)) : null,
-    isDemo ? queryClient.ensureQueryData(organisationQueries.members(organisationId)) : null,
+    isDemo || isManager ? queryClient.ensureQueryData(organisationQueries.members(organisationId)) : null,
     isDemo && seesSessions(presence) ? queryClient.ensureQueryData(latestSessions(organisationId)) : null,
   ]);
   return null;
@@ -86,12 +86,15 @@ type EmptyHomeProps = { role: Role; organisationId: string; places: HomePlaces }
 function EmptyHome({ role, organisationId, places }: EmptyHomeProps) {
   if (role === 'proctor') return <NoSessionWaits places={places} />;
   if (role === 'reviewer') return <NoReportWaits places={places} />;
-  return <EmptyManagerHome organisationId={organisationId} places={places} />;
+  return <EmptyManagerHome role={role} organisationId={organisationId} places={places} />;
 }
 
-function EmptyManagerHome({ organisationId, places }: Omit<EmptyHomeProps, 'role'>) {
+function EmptyManagerHome({ role, organisationId, places }: EmptyHomeProps) {
+  const { members } = useSuspenseQuery(organisationQueries.members(organisationId)).data;
   const { data: cables } = useSuspenseQuery(firstCables(organisationId));
   const { data: studies } = useSuspenseQuery(firstStudies(organisationId));
+  const isAlone = role === 'owner' && members.length === 1 && cables.total === 0;
+  if (isAlone) return <NobodyElse places={places} />;
   return <NothingWaits inventory={{ cableCount: cables.total, studyCount: studies.total }} places={places} />;
 }
 
@@ -128,5 +131,6 @@ function placesIn(organisationId: string): HomePlaces {
     newStudy: paths.newStudy(organisationId),
     sessions: paths.sessions(organisationId),
     reports: paths.reports(organisationId),
+    people: paths.people(organisationId),
   };
 }

@@ -40,11 +40,7 @@ export function Component() {
               {withdrawn.reason} Nothing may be claimed on it any more. The page stays.
             </Notice>
           )}
-          <FindingHead
-            report={report}
-            back={{ to: paths.publications(), label: 'All published results' }}
-            more={publication.conditions}
-          />
+          <FindingHead report={report} back={{ to: paths.publications(), label: 'All published results' }} />
           <p className="text-soft">
             Published <time dateTime={publishedAt}>{formatDate(publishedAt)}</time> by {publisher}
           </p>

@@ -21,7 +21,7 @@ export function Menu({ label, of, children }: MenuProps) {
     <DropdownMenu.Root modal={false}>
       <DropdownMenu.Trigger
         aria-label={of === undefined ? undefined : `${label}: ${of}`}
-        className="-mx-2 inline-flex max-w-[calc(100%+1rem)] min-h-12 cursor-pointer items-center gap-2 rounded px-2 text-left text-soft hover:text-ink data-[state=open]:text-ink"
+        className="-mx-2 inline-flex max-w-64 min-h-12 cursor-pointer items-center gap-2 rounded px-2 text-left text-soft hover:text-ink data-[state=open]:text-ink"
       >
         <span className="min-w-0 truncate">{label}</span>
         <Caret direction="down" />

@@ -61,7 +61,7 @@ function ToastCard({ toast, onDismiss }: ToastCardProps) {
         rules[toast.tone],
       )}
     >
-      <span>{toast.message}</span>
+      <span className="min-w-0 [overflow-wrap:anywhere]">{toast.message}</span>
       <button
         type="button"
         onClick={() => onDismiss(toast.id)}

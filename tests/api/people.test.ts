@@ -143,7 +143,9 @@ describe('members', () => {
       return body.rows.map(({ name }: { name: string }) => name.split(' ')[0]);
     };
     expect(await names('')).toEqual(['codes', 'manager', 'owner', 'proctor', 'reviewer']);
-    expect(await names('sort=-email')).toEqual(['reviewer', 'proctor', 'owner', 'manager', 'codes']);
+    expect(await names('sort=-name')).toEqual(['reviewer', 'proctor', 'owner', 'manager', 'codes']);
+    const byRole = await names('sort=role');
+    expect([byRole[0], byRole[1], byRole[2]]).toEqual(['manager', 'owner', 'proctor']);
     expect(await names('role=reviewer')).toEqual(['codes', 'reviewer']);
     expect(await names('q=manager%40')).toEqual(['manager']);
     const { body } = await owner.get(`${base}/people?page=9`).expect(200);

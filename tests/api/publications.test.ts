@@ -69,7 +69,9 @@ describe('a publication', () => {
     expect((await study.manager.get(study.at)).body.state).toBe('published');
     const again = await study.manager.post(`${study.at}/publication`).send(draft);
     expect([again.status, again.body.detail]).toEqual([409, 'The study is published already.']);
-    const file = await anybody().get(`/p/${published.id}/publication.json`).expect(200);
+    const file = await anybody()
+      .get((await view()).file.path)
+      .expect(200);
     const parts = JSON.parse(file.text);
     expect(parts.record.at(-1)).toEqual(declared);
   });
@@ -83,7 +85,7 @@ describe('a publication', () => {
   });
 
   it('holds nobody’s name, address, room or place [V6]', async () => {
-    const { text } = await anybody().get(`/p/${published.id}/publication.json`);
+    const { text } = await anybody().get((await view()).file.path);
     const api = (await anybody().get(`/api/publications/${published.id}`)).text;
     for (const shown of [text, api, await page()])
       for (const word of ['.example', ' of Harbour', 'window seat', 'door seat', 'Room B', password])
@@ -92,7 +94,7 @@ describe('a publication', () => {
 
   it('is readable without a script: what was found, how, and by whom it was paid [V7]', async () => {
     const text = await page();
-    const { report, conditions } = await view();
+    const { report } = await view();
     const { finding, result, record: kept } = report;
     const escaped = (words: string) => words.replaceAll('&', '&amp;').replaceAll('<', '&lt;').replaceAll('>', '&gt;');
     const words = [
@@ -101,7 +103,7 @@ describe('a publication', () => {
       finding.scope,
       ...finding.mustNotSay,
       ...finding.modifiers,
-      ...conditions,
+      ...report.conditions,
       `${result.correct} / ${result.answers}`,
       `${result.p.numerator} / ${result.p.denominator}`,
       `Blinding: ${report.rung.name}.`,
@@ -142,7 +144,7 @@ describe('a publication', () => {
       identifier: `sha256:${published.digest}`,
       creativeWorkStatus: 'Published',
       publisher: { name: 'Harbour' },
-      distribution: { contentUrl: `${published.address}/publication.json`, sha256: published.digest },
+      distribution: { contentUrl: `${published.address}/${published.digest}.json`, sha256: published.digest },
     });
   });
 
@@ -173,7 +175,8 @@ describe('a publication', () => {
     for (const path of [
       '/api/publications/zzzzzzzz',
       '/api/publications/..',
-      '/p/zzzzzzzz/publication.json',
+      `/p/zzzzzzzz/${published.digest}.json`,
+      `/p/${published.id}/${'0'.repeat(64)}.json`,
       '/p/zzzzzzzz',
       '/p/nope',
     ])
@@ -199,7 +202,7 @@ describe('a publication', () => {
     expect(text).toContain('Nothing: the publication is withdrawn.');
     expect(text).not.toContain('<blockquote');
     expect(text).toContain('"creativeWorkStatus":"Withdrawn"');
-    await anybody().get(`/p/${published.id}/publication.json`).expect(200);
+    await anybody().get(after.file.path).expect(200);
     expect((await anybody().get('/api/publications')).body.rows[0].isWithdrawn).toBe(true);
     const twice = await study.manager.post(`${study.at}/publication/withdrawal`).send({ reason: 'Once more.' });
     expect(twice.status).toBe(409);

@@ -55,9 +55,10 @@ export async function beginSession(desk: Page): Promise<void> {
   await present(desk);
 }
 
-export async function presentTrial(desk: Page, trial: number): Promise<void> {
+/** A trial up to its question: three presentations in ABX, two in a pair. */
+export async function presentTrial(desk: Page, trial: number, presentations = 3): Promise<void> {
   await desk.getByRole('button', { name: `Begin trial ${trial}` }).click();
-  for (let count = 0; count < 3; count += 1) await present(desk);
+  for (let count = 0; count < presentations; count += 1) await present(desk);
 }
 
 /** Taps an answer and how sure the listener is; on a low phone that is a step of its own. */

@@ -44,7 +44,8 @@ test('from an empty Fairlead to an organisation with members [P1] [P2] [P12] [M7
   await owner.getByRole('button', { name: 'Create the organisation' }).click();
   await owner.waitForURL(/organisations/);
 
-  await owner.getByRole('link', { name: 'People' }).click();
+  await expectAccessible(owner, 'the home of an owner alone');
+  await owner.getByRole('link', { name: 'Invite the others' }).click();
   await expect(owner.getByRole('heading', { name: 'People' })).toBeVisible();
   await expectAccessible(owner, 'people');
   await owner.getByRole('button', { name: 'Invite somebody' }).click();

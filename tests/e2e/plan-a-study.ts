@@ -2,18 +2,24 @@ import { expect, type Page } from '@playwright/test';
 
 // What the manager and the code holder do before anybody listens, all of it by hand in the browser.
 
-/** Plans a study of eight trials through the form; leaves the page on its draft. */
-export async function planStudy(manager: Page, plan: { listeners: number; answerS: number }): Promise<void> {
+export type Plan = { listeners: number; answerS: number; trials?: number; preference?: boolean };
+
+/** Plans a study through the form, of eight trials and ABX unless it is said otherwise; leaves the page on its draft. */
+export async function planStudy(manager: Page, plan: Plan): Promise<void> {
   await manager.getByRole('link', { name: 'Studies', exact: true }).click();
   await manager.getByRole('link', { name: 'Plan a study' }).first().click();
   await manager.getByLabel('Neutral title').fill('Study Dunlin');
   await manager.getByLabel('Question').fill('Can three listeners tell the two cables apart?');
+  if (plan.preference === true) {
+    await manager.getByLabel('Method').selectOption('paired-preference');
+    await manager.getByLabel('Offer “no preference” as an answer').check();
+  }
   await choose(manager, 'One cable', '0.5 twin');
   await choose(manager, 'The other cable', '4.0 twin');
   await manager.getByLabel('ST-0412').check();
   await manager.getByLabel('SF-0077').check();
   await manager.getByLabel('Listeners per session').fill(String(plan.listeners));
-  await manager.getByLabel('Trials per session').fill('8');
+  await manager.getByLabel('Trials per session').fill(String(plan.trials ?? 8));
   for (;;) {
     const extra = manager.getByRole('button', { name: /^Remove excerpt/ });
     if ((await extra.count()) === 0) break;

@@ -60,7 +60,8 @@ test('a stranger reads a publication without a script, and checks it in the brow
 
 test('one altered byte of the download fails the right check on the page [V2] [V12]', async ({ page }) => {
   const address = await openPublication(page);
-  const whole = await (await page.request.get(`${address}/publication.json`)).text();
+  const publication = await (await page.request.get(address.replace('/p/', '/api/publications/'))).json();
+  const whole = await (await page.request.get(fairlead.address + publication.file.path)).text();
   // A published study begins with its answers (canonical JSON sorts names), so each of these lies in the part it names.
   const alterations = [
     { check: 'answers', pattern: /"choice":"([AB])"/, put: (was: string) => (was === 'A' ? 'B' : 'A') },
@@ -89,15 +90,13 @@ test('one altered byte of the download fails the right check on the page [V2] [V
     const [at = 0] = match?.indices?.[1] ?? [];
     expect(at, check).toBeGreaterThan(0);
     const altered = whole.slice(0, at) + put(whole.charAt(at)) + whole.slice(at + 1);
-    await page.route('**/publication.json', (route) =>
-      route.fulfill({ contentType: 'application/json', body: altered }),
-    );
+    await page.route('**/p/*/*.json', (route) => route.fulfill({ contentType: 'application/json', body: altered }));
     await page.goto(address);
     await expect(page.getByText(/of 9 checks pass/)).toBeVisible();
     expect((await outcomes(page)).filter((line) => line.endsWith(' fail'))).toEqual([`${check} fail`]);
     await expect(page.getByText('it was altered on its way to you')).toBeVisible();
     if (check === 'answers') await expectAccessible(page, 'altered');
-    await page.unroute('**/publication.json');
+    await page.unroute('**/p/*/*.json');
   }
 });
 
@@ -124,10 +123,10 @@ test('a visitor downloads the record and checks a file of their own [V12]', asyn
 
 test('a page that cannot fetch the record says so, and verifies nothing [V12]', async ({ page }) => {
   const address = await openPublication(page);
-  await page.route('**/publication.json', (route) => route.abort());
+  await page.route('**/p/*/*.json', (route) => route.abort());
   await page.goto(address);
   await expect(page.getByText('The file could not be read.')).toBeVisible();
-  await page.unroute('**/publication.json');
+  await page.unroute('**/p/*/*.json');
   await page.getByRole('button', { name: 'Check again' }).click();
   await expect(page.getByText('All 9 checks pass.')).toBeVisible();
 });

@@ -41,6 +41,10 @@ async function run({ study: change, choices }: Asked, { codeKey, drawSecret }: S
       `${study.at}/codes`,
       `${study.base}/waiting`,
       `${study.base}/reports`,
+      `${study.at}/publication`,
+      '/api/publications',
+      '/p',
+      '/sitemap.xml',
     ]) {
       const reply = await study.manager.get(path);
       manager.push(`${reply.status} ${reply.headers['content-length']} ${reply.text}`);

@@ -3,6 +3,7 @@ import { cautions } from '#shared/contracts/proctor-live.ts';
 import { canonicalJson, type Json } from '#shared/ledger/canonical-json.ts';
 import { type Entry, nextEntry } from '#shared/ledger/chain.ts';
 import type { ClosedStudy } from '#shared/ledger/publication-parts.ts';
+import type { Method } from '#shared/methods/method.ts';
 import { methodOf } from '#shared/methods/methods.ts';
 import { runRegistered } from '#shared/methods/run-registered.ts';
 import { type Protocol, protocolDigest, sessionPlanOf } from '#shared/protocol/protocol.ts';
@@ -58,14 +59,14 @@ const cable = (name: string) => ({
   specimens: [1, 2].map((n) => ({ id: id(`${name} ${n}`), serial: `${name[0]}-${n}`, note: '' })),
 });
 
-const protocolFor = (study: string, listeners: number): Protocol => ({
+const protocolFor = (study: string, listeners: number, method: string): Protocol => ({
   format: 'fairlead-protocol',
   version: 1,
   study,
   salt: hex('salt', 32),
   title: 'Study Plover',
   question: 'Can these listeners tell the two cables apart?',
-  method: 'abx',
+  method,
   cables: [cable('Northern run'), cable('Southern run')],
   design: {
     sessions: 2,
@@ -83,10 +84,8 @@ const protocolFor = (study: string, listeners: number): Protocol => ({
     programme: [{ title: 'Piano', start: '0:10', lengthS: 12 }],
   },
   analysis: {
-    name: 'abx/1',
+    ...methodOf(method).registered([]),
     alpha: '0.05',
-    alternative: 'greater',
-    missing: 'counted as wrong',
     stopping: 'fixed number of trials',
     exclusions: 'none',
   },
@@ -94,10 +93,12 @@ const protocolFor = (study: string, listeners: number): Protocol => ({
 
 class SessionMaker {
   readonly #maker: StudyMaker;
+  readonly #method: Method;
   #state: SessionState;
 
   constructor(maker: StudyMaker, protocol: Protocol, session: number) {
     this.#maker = maker;
+    this.#method = methodOf(protocol.method);
     const payload = {
       session,
       sessionId: id(`session ${session}`),
@@ -105,13 +106,13 @@ class SessionMaker {
       plan: sessionPlanOf(protocol),
     };
     maker.put('session-planned', payload);
-    this.#state = evolve(null, { kind: 'session-planned', at: maker.now, payload }, methodOf('abx'));
+    this.#state = evolve(null, { kind: 'session-planned', at: maker.now, payload }, this.#method);
   }
 
   do(command: SessionCommand): void {
     for (const event of decide(this.#state, command, this.#maker.now)) {
       this.#maker.put(event.kind, event.payload);
-      this.#state = evolve(this.#state, event, methodOf('abx'));
+      this.#state = evolve(this.#state, event, this.#method);
     }
   }
 
@@ -166,13 +167,16 @@ function runSession(maker: StudyMaker, protocol: Protocol, session: number, list
   made.seat(seats, drawSecretCommitment(hex(`draw salt ${session}`, 32), hex(`secret ${session}`, 32)));
   made.do({ kind: 'begin-familiarisation' });
   made.present();
+  const choices = methodOf(protocol.method)
+    .options([])
+    .map(({ value }) => value);
   const last = session === 1 ? 6 : 3;
   for (let trial = 1; trial <= last; trial += 1) {
     made.do({ kind: 'begin-trial' });
     made.present();
     const isSilent = (index: number) => session === 1 && trial === 4 && index === 0;
     for (const [index, seat] of seats.entries())
-      if (!isSilent(index)) made.answer(seat, (trial + index) % 3 ? 'A' : 'B');
+      if (!isSilent(index)) made.answer(seat, choices[(trial + index) % 3 ? 0 : 1] ?? '');
     if (session === 1 && trial === 2) made.do({ kind: 'void-trial', reason: 'noise', note: 'A door.' });
     else made.lock();
   }
@@ -181,9 +185,9 @@ function runSession(maker: StudyMaker, protocol: Protocol, session: number, list
 }
 
 /** @param listeners seats per session, 1 to 4 */
-export function closedStudy(listeners: number): ClosedStudy {
+export function closedStudy(listeners: number, methodId = 'abx'): ClosedStudy {
   const maker = new StudyMaker();
-  const protocol = protocolFor(maker.study, listeners);
+  const protocol = protocolFor(maker.study, listeners, methodId);
   const rows = protocol.cables.flatMap(({ specimens }, index) =>
     specimens.map(({ id: specimen, serial }, n) => ({
       code: String(317 + index * 211 + n * 38),
@@ -216,9 +220,9 @@ export function closedStudy(listeners: number): ClosedStudy {
   }));
   const key = { codeKey, draws };
   maker.put('key-revealed', key);
-  const method = methodOf('abx');
+  const method = methodOf(methodId);
   const result = runRegistered(protocol, sessionsInRecord(maker.entries, method), key, maker.answers);
-  maker.put('result-recorded', { analysis: 'abx/1', result });
+  maker.put('result-recorded', { analysis: protocol.analysis.name, result });
   return JSON.parse(
     canonicalJson({ entries: maker.entries, protocol, answers: maker.answers } as unknown as Json),
   ) as ClosedStudy;

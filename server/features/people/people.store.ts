@@ -16,7 +16,7 @@ export type PeopleQuery = {
   sort: SortWord<keyof typeof sortColumns>;
 };
 
-const sortColumns = { name: 'user.name', email: 'user.email', role: 'membership.role', joined: 'membership.joinedAt' };
+const sortColumns = { name: 'user.name', role: 'membership.role', joined: 'membership.joinedAt' };
 
 export function listPeople(tx: Tx, organisationId: string, { q, page, role, sort }: PeopleQuery) {
   const rows = tx

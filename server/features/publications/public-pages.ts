@@ -67,25 +67,30 @@ export function publicPages(deps: Deps): Router {
       response.status(404);
       return next();
     }
-    const { headline, description, address } = publication;
+    const { headline, description, address, withdrawn } = publication;
+    // Where a search engine shows no more than these two, they say it too.
+    const said = withdrawn === null ? '' : 'Withdrawn: ';
     const data = jsonScript('application/ld+json', structuredData(publication));
-    const head = { title: `${headline} · Fairlead`, description, canonical: address, data: html`${data}` };
+    const head = {
+      title: `${said}${headline} · Fairlead`,
+      description: said + description,
+      canonical: address,
+      data: html`${data}`,
+    };
     response
       .set('cache-control', 'no-cache')
       .type('html')
       .send(shellPage(clientDir, head, publicationContent(publication)));
   });
 
-  router.get(filePath(':id'), async (request, response) => {
+  router.get(filePath(':id', ':digest'), async (request, response) => {
     const id = idOf(request.params.id);
     if (id === null) throw new Problem('not-found', 'Nothing is published at this address.');
-    const { document, digest } = await getDocument(deps, id);
     response
-      .set('cache-control', 'no-cache')
-      .set('etag', `"${digest}"`)
+      .set('cache-control', 'public, max-age=31536000, immutable')
       .set('content-disposition', `attachment; filename="fairlead-${id}.json"`)
       .type('application/json')
-      .send(document);
+      .send(await getDocument(deps, id, String(request.params.digest)));
   });
   return router;
 }

@@ -9,7 +9,6 @@ import { fileDigest, utf8ToBytes } from '#shared/ledger/digest.ts';
 import { publicationParts, publicationText, readPublication } from '#shared/ledger/publication-parts.ts';
 import { StudyReading } from '#shared/ledger/study-reading.ts';
 import { Problem } from '#shared/problem.ts';
-import type { Protocol } from '#shared/protocol/protocol.ts';
 import { type StudyPayloadOf, studyEvents } from '#shared/session/study-events.ts';
 import { type Tx, withTransaction } from '../../db/transaction.ts';
 import type { Deps, Random } from '../../deps.ts';
@@ -158,7 +157,7 @@ export function listPublications({ db }: Deps, query: { q: string; page: number;
   });
 }
 
-type Read = { report: Report; protocol: Protocol; declared: StudyPayloadOf<'publication-declared'> };
+type Read = { report: Report; declared: StudyPayloadOf<'publication-declared'> };
 
 // A frozen document always reads the same, so that its report is computed once and not for every visitor.
 const mostKept = 40;
@@ -172,7 +171,6 @@ function readDocument(digest: string, document: string): Read {
   const study = new StudyReading(read.parts);
   const protocol = study.protocol();
   const made = {
-    protocol,
     report: reportOf({
       study: { id: protocol.study, title: protocol.title },
       protocol,
@@ -194,18 +192,17 @@ export function getPublication({ db, config }: Deps, id: string): Promise<Public
   return withTransaction(db, async (tx) => {
     const row = await store.findPublication(tx, id);
     if (row === null) throw nothingPublished();
-    const read = kept.get(row.digest) ?? readDocument(row.digest, (await store.documentOf(tx, id)) ?? '');
+    const read = kept.get(row.digest) ?? readDocument(row.digest, (await store.documentOf(tx, id, row.digest)) ?? '');
     return publicationView({ row, publicUrl: config.publicUrl, ...read });
   });
 }
 
-/** The frozen document, byte for byte. @throws Problem `not-found` */
-export function getDocument({ db }: Deps, id: string): Promise<{ document: string; digest: string }> {
+/** The frozen document, byte for byte. @throws Problem `not-found`, also where the digest is another one */
+export function getDocument({ db }: Deps, id: string, digest: string): Promise<string> {
   return withTransaction(db, async (tx) => {
-    const row = await store.findPublication(tx, id);
-    const document = row === null ? null : await store.documentOf(tx, id);
-    if (row === null || document === null) throw nothingPublished();
-    return { document, digest: row.digest };
+    const document = await store.documentOf(tx, id, digest);
+    if (document === null) throw nothingPublished();
+    return document;
   });
 }
 

@@ -29,12 +29,12 @@ export function publicationOfStudy(tx: Tx, studyId: string): Promise<Publication
   return tx.findOneBy(Publication, { studyId });
 }
 
-/** The document's text, or null when nothing is published at the id. */
-export async function documentOf(tx: Tx, id: string): Promise<string | null> {
+/** The document's text, or null when no such document is published at the id. */
+export async function documentOf(tx: Tx, id: string, digest: string): Promise<string | null> {
   const row = await tx
     .createQueryBuilder(Publication, 'publication')
     .addSelect('publication.document')
-    .where('publication.id = :id', { id })
+    .where('publication.id = :id and publication.digest = :digest', { id, digest })
     .getOne();
   return row?.document ?? null;
 }

@@ -6,14 +6,14 @@ import {
 } from '#shared/contracts/publications.ts';
 import type { Report } from '#shared/contracts/reports.ts';
 import { equationOfP } from '#shared/findings/format-probability.ts';
-import type { Protocol } from '#shared/protocol/protocol.ts';
+import { methodOf } from '#shared/methods/methods.ts';
 import type { StudyPayloadOf } from '#shared/session/study-events.ts';
 import type { Publication } from './publication.entity.ts';
 
 /** Where a publication stands, for good. */
 export const publicPath = (id: string) => `/p/${id}`;
-/** Where its frozen document is. */
-export const filePath = (id: string) => `${publicPath(id)}/publication.json`;
+/** Where its frozen document is: the address names the digest, so that what stands there can never change. */
+export const filePath = (id: string, digest: string) => `${publicPath(id)}/${digest}.json`;
 
 const withdrawalOf = ({ withdrawnAt, withdrawnReason }: Publication) =>
   withdrawnAt === null ? null : { at: withdrawnAt.toISOString(), reason: withdrawnReason ?? '' };
@@ -36,32 +36,22 @@ export function ownPublicationView(row: Publication, publicUrl: string): OwnPubl
   return { id, address, publishedAt: publishedAt.toISOString(), digest, withdrawn: withdrawalOf(row) };
 }
 
-/** The gap and the blinding rung, each in a sentence; how level was handled is among the finding's own lines. */
-function conditionsOf({ conduct }: Protocol, { rung, sessions }: Report): PublicationReply['conditions'] {
-  const long = sessions.flatMap(({ trials }) => trials).reduce((sum, { longChanges }) => sum + longChanges, 0);
-  const late = long === 0 ? '' : `; ${long} of them took a whole number of times as long`;
-  return [
-    `Changes between presentations lasted ${conduct.changeS} s, real or sham${late}.`,
-    `Blinding: ${rung.name}. ${rung.why}`,
-  ];
-}
-
 function descriptionOf({ result, rung, cables }: Report, publisher: string): string {
-  const { correct, answers, listeners, trials, p, alpha } = result;
-  const count = `${correct} of ${answers} answers right in ${trials} trials, ${listeners} listener${listeners === 1 ? '' : 's'}, ${equationOfP(Number(p.value), Number(alpha))}`;
+  const { listeners, trials, p, alpha } = result;
+  const [lead] = methodOf(result.method).portray(result, cables).figures;
+  const count = `${lead?.value} ${lead?.label} in ${trials} trials, ${listeners} listener${listeners === 1 ? '' : 's'}, ${equationOfP(Number(p.value), Number(alpha))}`;
   return `${cables[0]} and ${cables[1]}, compared blind (${rung.name}): ${count}. Published by ${publisher}, with everything needed to check it.`;
 }
 
 export type PublicationSource = {
   readonly row: Publication;
   readonly publicUrl: string;
-  readonly protocol: Protocol;
   readonly report: Report;
   readonly declared: StudyPayloadOf<'publication-declared'>;
 };
 
 /** A publication, field by field. */
-export function publicationView({ row, publicUrl, protocol, report, declared }: PublicationSource): PublicationReply {
+export function publicationView({ row, publicUrl, report, declared }: PublicationSource): PublicationReply {
   const { id, title, publisher, publishedAt, digest, bytes } = row;
   const { paid, supplied, ties } = declared;
   return {
@@ -75,8 +65,7 @@ export function publicationView({ row, publicUrl, protocol, report, declared }: 
     withdrawn: withdrawalOf(row),
     statements: { paid, supplied, ties },
     confirmations: declared.confirmations.map((name) => confirmations[name]),
-    conditions: conditionsOf(protocol, report),
-    file: { digest, bytes, path: filePath(id) },
+    file: { digest, bytes, path: filePath(id, digest) },
     report,
   };
 }

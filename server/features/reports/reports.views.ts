@@ -131,12 +131,22 @@ function factsOf({ design, conduct, analysis, cables, method }: Protocol): Repor
     { label: 'Sessions', value: String(design.sessions) },
     { label: 'Listeners per session', value: String(design.listenersPerSession) },
     { label: 'Trials per session', value: `${design.trials}, ${design.spares} spare` },
-    { label: 'Level', value: analysis.alpha },
+    { label: 'Significance level', value: analysis.alpha },
     ...analysisFacts(analysis),
     { label: 'Change', value: `${conduct.changeS} s, real or sham` },
     { label: 'Answer window', value: `${conduct.answerS} s` },
     { label: 'Programme', value: conduct.programme.map(({ title, lengthS }) => `${title} (${lengthS} s)`).join('; ') },
     { label: 'Chain', value: conduct.chain },
+  ];
+}
+
+/** How level was handled is among the finding's own lines. */
+function conditionsOf({ protocol: { conduct }, states, rung }: ReportSource): Report['conditions'] {
+  const long = states.flatMap(({ ended }) => ended).reduce((sum, { longChanges }) => sum + longChanges, 0);
+  const late = long === 0 ? '' : `; ${long} of them took a whole number of times as long`;
+  return [
+    `Changes between presentations lasted ${conduct.changeS} s, real or sham${late}.`,
+    `Blinding: ${rung.name}. ${rung.why}`,
   ];
 }
 
@@ -162,6 +172,7 @@ export function reportView(source: ReportSource): Report {
     result,
     nullDistribution: method.nullDistribution(countedTrials(method, states, key, answers)),
     rung: { name: rung.name, why: rung.why },
+    conditions: conditionsOf(source),
     flow: flowOf(source),
     sessions: states.map((state) => sessionView(source, state, key)),
     voids: voidsOf(entries),

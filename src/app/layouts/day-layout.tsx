@@ -1,5 +1,6 @@
 import type { ReactNode } from 'react';
 import { Link, NavLink } from 'react-router-dom';
+import { classNames } from '../../ui/class-names.ts';
 import { Menu } from '../../ui/menu.tsx';
 import { usePageTheme } from './page-theme.ts';
 import { SkipLink } from './skip-link.tsx';
@@ -14,6 +15,9 @@ type DayLayoutProps = {
   children: ReactNode;
 };
 
+const besideFromMd = 'md:order-none md:mt-0 md:w-auto md:pb-0';
+const besideFromXl = 'xl:order-none xl:mt-0 xl:w-auto xl:pb-0';
+
 /** For planning, reading and publishing. */
 export function DayLayout({ homeTo, links, organisation, person, children }: DayLayoutProps) {
   usePageTheme('day');
@@ -25,8 +29,11 @@ export function DayLayout({ homeTo, links, organisation, person, children }: Day
           <Link to={homeTo} className="inline-flex min-h-14 items-center font-bold no-underline hover:underline">
             Fairlead
           </Link>
-          {organisation ? <div className="min-w-0 max-w-[45%]">{organisation}</div> : null}
-          <nav aria-label="Main" className="order-last -mt-2 w-full pb-1 md:order-none md:mt-0 md:w-auto md:pb-0">
+          {organisation ? <div className="order-2 w-full sm:order-none sm:w-auto">{organisation}</div> : null}
+          <nav
+            aria-label="Main"
+            className={classNames('order-last -mt-2 w-full pb-1', organisation ? besideFromXl : besideFromMd)}
+          >
             <ul className="flex flex-wrap gap-x-4 sm:gap-x-6">
               {links.map((link) => (
                 <li key={link.to}>

@@ -29,12 +29,14 @@ export function useConsole(sessionId: string): LiveSnapshot<ProctorView> & Conso
 
   const subscribe = useCallback((listener: () => void) => live?.subscribe(listener) ?? (() => {}), [live]);
   const snapshot = useSyncExternalStore(subscribe, () => live?.getSnapshot() ?? nothing);
-  const [isBusy, setBusy] = useState(false);
+  // The view that a command went out on. Once a newer one is shown, its acts are free, acknowledged or not.
+  const [sentOn, setSentOn] = useState<number | null>(null);
+  const isBusy = sentOn !== null && sentOn === snapshot.view?.version;
   const [problem, setProblem] = useState<string | null>(null);
 
   const act = async (command: ConsoleCommand): Promise<boolean> => {
     if (live === null || snapshot.view === null) return false;
-    setBusy(true);
+    setSentOn(snapshot.view.version);
     setProblem(null);
     try {
       await live.send({ ...command, expectVersion: snapshot.view.version });
@@ -45,7 +47,7 @@ export function useConsole(sessionId: string): LiveSnapshot<ProctorView> & Conso
       if (error.code !== 'stale-view') setProblem(error.message);
       return false;
     } finally {
-      setBusy(false);
+      setSentOn((latest) => (latest === snapshot.view?.version ? null : latest));
     }
   };
   const forgetProblem = useCallback(() => setProblem(null), []);

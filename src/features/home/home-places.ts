@@ -11,4 +11,5 @@ export type HomePlaces = {
   readonly newStudy: string;
   readonly sessions: string;
   readonly reports: string;
+  readonly people: string;
 };

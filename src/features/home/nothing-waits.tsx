@@ -1,3 +1,4 @@
+import { Actions } from '../../ui/actions.tsx';
 import { EmptyState } from '../../ui/empty-state.tsx';
 import { LinkButton } from '../../ui/link-button.tsx';
 import type { HomePlaces } from './home-places.ts';
@@ -39,6 +40,26 @@ export function NothingWaits({ inventory, places }: { inventory: Inventory; plac
   return (
     <EmptyState title="Nothing waits for you" action={<LinkButton to={places.newStudy}>Begin a study</LinkButton>}>
       Drafts to finish, sessions to plan, studies to close and reports to read will be listed here.
+    </EmptyState>
+  );
+}
+
+/** For an owner whom nobody has joined yet. */
+export function NobodyElse({ places }: { places: HomePlaces }) {
+  return (
+    <EmptyState
+      title="Begin with the people"
+      action={
+        <Actions>
+          <LinkButton variant="primary" to={places.people}>
+            Invite the others
+          </LinkButton>
+          <LinkButton to={places.newCable}>Add the first cable</LinkButton>
+        </Actions>
+      }
+    >
+      A blind study needs more than one person: besides whoever plans it, a proctor who runs its sessions and a code
+      holder who alone knows which cable is which.
     </EmptyState>
   );
 }

@@ -31,12 +31,12 @@ export function MailTable({ organisationId, ...table }: MailTableProps) {
       key: 'subject',
       header: 'Mail',
       isRowHeader: true,
-      cell: ({ subject }) => <span className="[overflow-wrap:anywhere]">{subject}</span>,
-    },
-    {
-      key: 'recipient',
-      header: 'To',
-      cell: ({ recipient }) => <span className="[overflow-wrap:anywhere]">{recipient}</span>,
+      cell: ({ subject, recipient }) => (
+        <span className="[overflow-wrap:anywhere]">
+          {subject}
+          <span className="block text-base font-normal text-soft">to {recipient}</span>
+        </span>
+      ),
     },
     { key: 'createdAt', header: 'Written', cell: ({ createdAt }) => formatDateTime(createdAt) },
     { key: 'state', header: 'State', cell: (mail) => <MailState organisationId={organisationId} mail={mail} /> },
@@ -61,7 +61,7 @@ function MailDetail({ mail: { sentAt, lastError, attempts, nextAttemptAt } }: { 
   return (
     <span className="max-w-96 text-soft [overflow-wrap:anywhere]">
       {attempts === 1 ? 'Tried once' : `Tried ${attempts} times`}: {lastError}
-      {nextAttemptAt === null ? null : <> Next: {formatDateTime(nextAttemptAt)}.</>}
+      {nextAttemptAt === null ? null : <span className="block">Next attempt: {formatDateTime(nextAttemptAt)}</span>}
     </span>
   );
 }

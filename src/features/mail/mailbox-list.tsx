@@ -20,16 +20,12 @@ export function MailboxList({ hrefOf, ...table }: MailboxListProps) {
       key: 'subject',
       header: 'Mail',
       isRowHeader: true,
-      cell: ({ id, subject }) => (
-        <Link to={hrefOf(id)} className="[overflow-wrap:anywhere]">
-          {subject}
-        </Link>
+      cell: ({ id, subject, recipient }) => (
+        <span className="[overflow-wrap:anywhere]">
+          <Link to={hrefOf(id)}>{subject}</Link>
+          <span className="block text-base font-normal text-soft">to {recipient}</span>
+        </span>
       ),
-    },
-    {
-      key: 'recipient',
-      header: 'To',
-      cell: ({ recipient }) => <span className="[overflow-wrap:anywhere]">{recipient}</span>,
     },
     { key: 'createdAt', header: 'Written', cell: ({ createdAt }) => formatDateTime(createdAt) },
   ];

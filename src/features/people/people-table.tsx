@@ -27,18 +27,13 @@ export function PeopleTable({ organisationId, ownId, onChanged, ...table }: Peop
       header: 'Name',
       isRowHeader: true,
       isSortable: true,
-      cell: ({ id, name }) => (
+      cell: ({ id, name, email }) => (
         <>
           {name}
           {id === ownId ? <span className="font-normal text-soft"> (you)</span> : null}
+          <span className="block text-base font-normal text-soft [overflow-wrap:anywhere]">{email}</span>
         </>
       ),
-    },
-    {
-      key: 'email',
-      header: 'E-mail',
-      isSortable: true,
-      cell: ({ email }) => <span className="[overflow-wrap:anywhere]">{email}</span>,
     },
     { key: 'role', header: 'Role', isSortable: true, cell: ({ role }) => roleWords[role] },
     { key: 'joined', header: 'Member since', isSortable: true, cell: ({ joinedAt }) => formatDate(joinedAt) },

@@ -41,7 +41,7 @@ export function CheckList({ checks, isRunning }: { checks: readonly Check[]; isR
               className={classNames('relative mt-1 size-[1.125rem] shrink-0 rounded-full border-4', rings[state])}
             />
             <span className="flex min-w-0 flex-1 flex-wrap justify-between gap-x-6">
-              <span className="min-w-0 flex-1 basis-56">
+              <span className="min-w-0 flex-1 basis-40">
                 <span className="block font-semibold">{name}</span>
                 {check ? <span className="block text-soft [overflow-wrap:anywhere]">{check.reason}</span> : null}
               </span>

@@ -30,7 +30,7 @@ export function VerificationOutcome({ verification, published }: { verification:
       )}
       <p className="text-soft [overflow-wrap:anywhere]">
         {digest === published
-          ? 'It is the file that was published: its SHA-256 digest is the one on the record.'
+          ? 'It is the file that was published: its SHA-256 digest is the one that this page names.'
           : `It is not the file that was published${fileName === null ? '; it was altered on its way to you' : ''}. Its SHA-256 digest is ${digest}.`}
       </p>
     </>

@@ -1,4 +1,4 @@
-import type { Publication } from '#shared/contracts/publications.ts';
+import { notShown, type Publication } from '#shared/contracts/publications.ts';
 import { formatNumber } from '../../lib/format.ts';
 import { Button } from '../../ui/button.tsx';
 import { buttonLook } from '../../ui/button-look.ts';
@@ -61,10 +61,7 @@ function WithoutUs({ file, onFile }: { file: Publication['file']; onFile: (file:
         <h3 id="not-shown" className="text-base font-bold">
           What no software can show
         </h3>
-        <p className="text-soft">
-          No software shows what was physically plugged in, that nobody told, or that whoever runs the server did not
-          read the secrets early. Repeating the test is the cure.
-        </p>
+        <p className="text-soft">{notShown} Repeating the test is the cure.</p>
       </section>
     </div>
   );

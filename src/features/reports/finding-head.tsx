@@ -5,20 +5,18 @@ import { PageHeader } from '../../ui/page-header.tsx';
 type FindingHeadProps = {
   report: Report;
   back: { to: string; label: string };
-  /** Further lines that belong beside the finding. */
-  more?: readonly string[];
 };
 
 /** The finding in one sentence, how it came about in the next, and whatever modifies it. */
-export function FindingHead({ report, back, more = [] }: FindingHeadProps) {
-  const { finding, title, question } = report;
+export function FindingHead({ report, back }: FindingHeadProps) {
+  const { finding, title, question, conditions } = report;
   return (
     <div className="flex flex-col gap-5">
       <div className="-mb-5">
         <PageHeader title={finding.headline} lede={courseWords(report)} back={back} />
       </div>
       <ul className="flex max-w-3xl flex-col gap-2">
-        {[...finding.modifiers, ...more].map((modifier) => (
+        {[...finding.modifiers, ...conditions].map((modifier) => (
           <li key={modifier} className="border-l-[5px] border-edge pl-4">
             {modifier}
           </li>

@@ -1,3 +1,4 @@
+import { notShown } from '#shared/contracts/publications.ts';
 import type { Report } from '#shared/contracts/reports.ts';
 import { CopyButton } from '../../ui/copy-button.tsx';
 import { DataTable } from '../../ui/data-table.tsx';
@@ -26,10 +27,7 @@ const columns: Column<Check>[] = [
 /** The record, line by line: what it shows, and what no software can show. */
 export function ReportRecord({ record }: Pick<Report, 'record'>) {
   return (
-    <ReportSection
-      title="The record, checked"
-      lede="No software shows what was physically plugged in, that nobody told, or that whoever runs the server did not read the secrets early."
-    >
+    <ReportSection title="The record, checked" lede={notShown}>
       <DataTable
         caption="Checks of the record"
         columns={columns}

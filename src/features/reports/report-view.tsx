@@ -1,3 +1,4 @@
+import type { ReactNode } from 'react';
 import type { Report } from '#shared/contracts/reports.ts';
 import { methodOf } from '#shared/methods/methods.ts';
 import { Button } from '../../ui/button.tsx';
@@ -13,10 +14,15 @@ import { ReportRecord } from './report-record.tsx';
 import { ReportSessions } from './report-sessions.tsx';
 import { WhatToSay } from './what-to-say.tsx';
 
-type ReportViewProps = { report: Report; back: { to: string; label: string } };
+type ReportViewProps = {
+  report: Report;
+  back: { to: string; label: string };
+  /** What can be done with the result, beside printing it. */
+  actions?: ReactNode;
+};
 
 /** The finding first, then what it rests on, down to every answer. */
-export function ReportView({ report, back }: ReportViewProps) {
+export function ReportView({ report, back, actions }: ReportViewProps) {
   const { result, cables } = report;
   const method = methodOf(result.method);
   const portrait = method.portray(result, cables);
@@ -27,7 +33,8 @@ export function ReportView({ report, back }: ReportViewProps) {
           <FindingHead report={report} back={back} />
           <ReportFigures figures={portrait.figures} note={portrait.note} />
           <WhatToSay finding={report.finding} />
-          <div className="print:hidden">
+          <div className="flex flex-wrap gap-3 print:hidden">
+            {actions}
             <Button onClick={() => window.print()}>Print the report</Button>
           </div>
         </div>

@@ -1,18 +1,14 @@
-import type { Publication } from '#shared/contracts/publications.ts';
+import { notShown, type Publication } from '#shared/contracts/publications.ts';
 import type { Report } from '#shared/contracts/reports.ts';
 import { methodOf } from '#shared/methods/methods.ts';
 import type { Portrait } from '#shared/methods/portrait.ts';
 import { type Html, html } from './html.ts';
 import { count, facts, frame, list, section, table, utc } from './page-parts.ts';
 
-/** What no record can show; said on every publication. */
-export const notShown =
-  'No software shows what was physically plugged in, that nobody told, or that whoever runs the server did not read the secrets early. Repeating the test is the cure.';
-
 const portraitOf = ({ result, cables }: Report): Portrait => methodOf(result.method).portray(result, cables);
 
-function head({ headline, withdrawn, conditions, report, title }: Publication): Html {
-  const { result, finding, question, flow } = report;
+function head({ headline, withdrawn, report, title }: Publication): Html {
+  const { result, finding, question, flow, conditions } = report;
   const portrait = portraitOf(report);
   return html`<div class="flex flex-col gap-5">
     ${
@@ -134,7 +130,7 @@ function verification({ file, report: { record, protocol } }: Publication): Html
       { label: `Protocol, sealed ${utc(protocol.sealedAt)}`, value: html`<code>${protocol.digest}</code>` },
     ])}
     <h3 class="text-lg">What no software can show</h3>
-    <p class="max-w-3xl">${notShown}</p>`;
+    <p class="max-w-3xl">${notShown} Repeating the test is the cure.</p>`;
 }
 
 /** The whole publication in plain markup, in the order in which the application shows it. */

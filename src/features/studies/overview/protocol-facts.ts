@@ -20,7 +20,7 @@ export function protocolFacts({ draft, cableNames, codeHolder }: Study): Protoco
     ),
     words('Listening', listeningWords(draft)),
     words('Spares', `${draft.spares} in each session`),
-    words('Level', percentOfPerMille(draft.alphaPerMille)),
+    words('Significance level', percentOfPerMille(draft.alphaPerMille)),
     ...analysisFacts({
       ...methodOf(draft.method).registered(draft.methodSettings ?? []),
       stopping: 'fixed number of trials',

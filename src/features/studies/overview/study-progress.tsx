@@ -18,7 +18,11 @@ export function StudyProgress({ state, draft, progress }: Pick<Study, 'state' | 
           label="Sessions ended"
           value={sessionsEnded}
           max={Math.max(draft.sessions, sessionsEnded)}
-          valueText={`${sessionsEnded} of ${draft.sessions}`}
+          valueText={
+            sessionsEnded > draft.sessions
+              ? `${sessionsEnded}, ${draft.sessions} registered`
+              : `${sessionsEnded} of ${draft.sessions}`
+          }
         />
       </div>
       <p className="text-soft">

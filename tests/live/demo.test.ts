@@ -1,0 +1,65 @@
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import type { Report } from '#shared/contracts/reports.ts';
+import { methodIds } from '#shared/methods/methods.ts';
+import { loadDemo } from '../../server/demo/load-demo.ts';
+import { Organisation } from '../../server/features/organisations/organisation.entity.ts';
+import { getReport, listReports } from '../../server/features/reports/reports.service.ts';
+import { type TestServer, testServer } from '../support/test-server.ts';
+
+describe('the demo', () => {
+  let server: TestServer;
+  beforeAll(async () => {
+    server = await testServer();
+    await loadDemo(server.deps);
+  }, 120_000);
+  afterAll(() => server.stop());
+
+  it('has a closed study of every method, run by simulated phones, whose record verifies [L3] [F1]', async () => {
+    const { deps } = server;
+    const { id: organisationId } = await deps.db.manager.findOneByOrFail(Organisation, { demo: true });
+    const { rows } = await listReports(deps, organisationId, { q: '', page: 1 });
+    const reports: Report[] = [];
+    for (const { studyId } of rows) reports.push(await getReport(deps, { organisationId, id: studyId }));
+    expect(new Set(reports.map(({ result }) => result.method))).toEqual(new Set(methodIds));
+    for (const { record, flow, result } of reports) {
+      expect(record.checks.filter(({ outcome }) => outcome !== 'pass')).toEqual([]);
+      expect(result.trials).toBeGreaterThanOrEqual(5);
+      expect(flow).toMatchObject({
+        trialsCounted: result.trials,
+        answersExpected: result.answers,
+        answersMissing: result.missing,
+      });
+    }
+  });
+
+  it('has a study in each state, and of those closed one with a clear difference and one with none [D1]', async () => {
+    const { deps } = server;
+    const studies: { id: string; title: string; state: string; organisation_id: string }[] = await deps.db.query(
+      'select id, title, state, organisation_id from studies',
+    );
+    expect([...new Set(studies.map(({ state }) => state))].toSorted()).toEqual([
+      'closed',
+      'collecting',
+      'draft',
+      'published',
+      'sealed',
+    ]);
+    const resultOf = async (wanted: string) => {
+      const study = studies.find(({ title }) => title === wanted);
+      if (study === undefined) throw new Error(`no ${wanted}`);
+      return (await getReport(deps, { organisationId: study.organisation_id, id: study.id })).result;
+    };
+    expect(await resultOf('Study Curlew')).toMatchObject({ isSignificant: true });
+    expect(await resultOf('Study Dotterel')).toMatchObject({ isSignificant: false });
+    const planned = await deps.db.query(
+      "select count(*) as count from sessions join studies on studies.id = sessions.study_id where sessions.phase = 'planned' and studies.state = 'collecting'",
+    );
+    expect(Number(planned[0].count)).toBe(1);
+  });
+
+  it('is made once: a second start leaves it as it is', async () => {
+    const before = await server.deps.db.query('select count(*) as entries from record_entries');
+    await loadDemo(server.deps);
+    expect(await server.deps.db.query('select count(*) as entries from record_entries')).toEqual(before);
+  });
+});
