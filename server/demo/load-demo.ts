@@ -26,7 +26,7 @@ import {
 import { forgetDemo } from './forget-demo.ts';
 import { HandClock } from './hand-clock.ts';
 import { inviteDemoListeners } from './invite-listeners.ts';
-import { type People, prepareStudy } from './prepare-study.ts';
+import { demoTimeZone, type People, prepareStudy } from './prepare-study.ts';
 import { runPublishedStudy } from './published-study.ts';
 import { type Hearing, SimulatedSession } from './simulated-session.ts';
 
@@ -125,7 +125,8 @@ async function runFirstSession(
   const { where, sessionId } = await prepareStudy(deps, organisationId, people, draft);
   await runSession(deps, clock, sessionId, hearing);
   const plannedAt = new Date(clock.now() + 7 * dayMs).toISOString();
-  await planSession(deps, where, { plannedAt, room: 'Listening room', proctorId: people.proctor });
+  const room = 'Listening room';
+  await planSession(deps, where, { plannedAt, timeZone: demoTimeZone, room, proctorId: people.proctor });
 }
 
 /**

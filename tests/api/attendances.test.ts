@@ -235,7 +235,7 @@ describe('listeners who are invited to a session', () => {
     expect(counts).toEqual({ seats: 2, invited: 2, accepted: 0, waiting: 0, declined: 2 });
   });
 
-  it('are reminded a day before, also by a server that was restarted meanwhile [G6]', async () => {
+  it('are reminded a day before, also by a server that was restarted meanwhile [G6] [M9]', async () => {
     await invite('ada@listeners.example\nbo@listeners.example\ncy@listeners.example').expect(200);
     const bo = tokenIn(await mailTo('bo@listeners.example', 'invited'));
     await mailTo('ada@listeners.example', 'invited');
@@ -257,7 +257,7 @@ describe('listeners who are invited to a session', () => {
     ]);
   });
 
-  it('are reminded by the new time alone when the session moves [G6]', async () => {
+  it('are reminded by the new time alone when the session moves [G6] [M9]', async () => {
     await invite('ada@listeners.example').expect(200);
     await mailTo('ada@listeners.example', 'invited');
     const later = new Date(Date.parse(start) + 3 * dayMs).toISOString();
