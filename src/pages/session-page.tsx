@@ -54,7 +54,7 @@ export function Component() {
     <>
       <PageHeader
         title={`${session.title}, session ${session.number}`}
-        lede={ledeOf(session)}
+        lede={ledeOf(session, canChange)}
         back={
           canChange
             ? { to: paths.study(organisationId, session.studyId), label: session.title }
@@ -112,9 +112,10 @@ export function Component() {
   );
 }
 
-function ledeOf({ phase }: SessionRow): string {
+function ledeOf({ phase }: SessionRow, canChange: boolean): string {
+  const planned = 'each answers, and takes the seat, by a link of their own.';
   if (phase === 'planned')
-    return 'Planned. Invite listeners; each answers, and takes the seat, by a link of their own.';
+    return canChange ? `Planned. Invite listeners; ${planned}` : `Planned. A manager invites listeners; ${planned}`;
   if (phase === 'finished') return 'It is over. Its trials stand on the record.';
   if (phase === 'abandoned') return 'It ended early. It keeps its number, and the record says why.';
   return 'It is under way. Its proctor leads it from the console.';
