@@ -1,6 +1,8 @@
+import request from 'supertest';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type { StudyDraft } from '#shared/contracts/studies.ts';
 import { HandClock } from '../../server/demo/hand-clock.ts';
+import { linkTokenOf } from '../../server/features/attendances/personal-link.ts';
 import { Console, Phone } from '../support/live.ts';
 import { makeOrganisation, readyStudy } from '../support/people.ts';
 import { repeatableRandom } from '../support/random.ts';
@@ -35,6 +37,7 @@ async function run({ study: change, choices }: Asked, { codeKey, drawSecret }: S
       `${study.base}/studies`,
       `${study.base}/sessions`,
       `${study.base}/sessions/${study.sessionId}`,
+      `${study.base}/sessions/${study.sessionId}/attendances`,
       `${study.at}/codes`,
       `${study.base}/waiting`,
       `${study.base}/reports`,
@@ -46,12 +49,21 @@ async function run({ study: change, choices }: Asked, { codeKey, drawSecret }: S
       const reply = await study.manager.get(path);
       manager.push(`${reply.status} ${reply.headers['content-length']} ${reply.text}`);
     }
+    for (const token of links) {
+      const reply = await request(server.address).post('/api/personal-link/look').send({ token });
+      manager.push(`${reply.status} ${reply.text}`);
+    }
   };
+  const links: string[] = [];
+  const invited = `${study.base}/sessions/${study.sessionId}/attendances`;
+  await study.manager.post(invited).send({ addresses: 'ada@listeners.example' }).expect(200);
+  for (const { id } of (await study.manager.get(invited)).body.rows) links.push(linkTokenOf(server.deps.config, id));
   await look();
   const desk = await Console.open(server.address, people.proctor.email, study.sessionId);
   const code = await desk.openSeating();
   const phones: Phone[] = [];
-  for (const name of ['left', 'right']) phones.push(await Phone.join(server.address, code, name));
+  phones.push(await Phone.joinByLink(server.address, links[0] ?? '', 'left'));
+  phones.push(await Phone.join(server.address, code, 'right'));
   await begin(desk, phones, clock);
   const codes: string[][] = [];
   for (const [index, choice] of choices.entries()) {
