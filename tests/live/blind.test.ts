@@ -19,7 +19,7 @@ type Asked = {
   /** What the draw decided, trial by trial, read from the codes that were fitted. */
   drawn: (codes: readonly string[], trials: readonly string[][]) => string;
 };
-type Run = { phones: string[][]; manager: string[]; proctor: string[]; codes: string[][] };
+type Run = { phones: string[][]; manager: string[]; mails: string[]; proctor: string[]; codes: string[][] };
 
 // Commitments, and the digests chained from them, are random by design.
 const withoutDigests = (text: string) => text.replace(/[0-9a-f]{64}/g, '#').replace(/urn:uuid:[0-9a-f-]{36}/g, 'urn');
@@ -77,9 +77,11 @@ async function run({ study: change, choices }: Asked, { codeKey, drawSecret }: S
   await desk.act({ kind: 'finish' });
   for (const phone of phones) await phone.sees('the end', ({ phase }) => phase === 'finished');
   await look();
+  const mails: object[] = await server.deps.db.query('select * from outbox order by created_at, recipient, subject');
   const seen: Run = {
     phones: phones.map(({ received }) => received.map(withoutDigests)),
     manager: manager.map(withoutDigests),
+    mails: mails.map((mail) => withoutDigests(JSON.stringify(mail))),
     proctor: desk.received.map(withoutDigests),
     codes,
   };
@@ -137,6 +139,11 @@ describe.each(Object.entries(methods))('what leaves the server before closing, %
 
   it.each([1, 2, 3])('is the same for managers, whatever the secrets (run %i) [B1]', (index) => {
     expect(other(index).manager).toEqual(other(0).manager);
+  });
+
+  it.each([1, 2, 3])('is the same in every mail and calendar file, whatever the secrets (run %i) [B1]', (index) => {
+    expect(other(index).mails).toEqual(other(0).mails);
+    expect(other(0).mails.some((mail) => mail.includes('BEGIN:VCALENDAR'))).toBe(true);
   });
 
   it.each([1, 2, 3])('is the same for the proctor but for the code to be fitted (run %i) [B2]', (index) => {
