@@ -14,7 +14,7 @@ const stateWords: Record<AttendanceRow['state'], StateWord> = {
 export function stateWordOf({ state, waitingPlace, seated }: AttendanceRow): StateWord {
   if (seated) return { word: 'Has taken the seat', tone: 'held' };
   const { word, tone } = stateWords[state];
-  return { word: waitingPlace === null ? word : `${word}, place ${waitingPlace}`, tone };
+  return { word: waitingPlace === null ? word : `${word}, place\u00a0${waitingPlace}`, tone };
 }
 
 /** "2 of 3 seats offered: 1 comes, 1 without an answer" */
