@@ -3,10 +3,11 @@ import { expect } from 'vitest';
 
 export type ReferenceRecord<I, E> = { id: string; fn: string; inputs: I; expected: E; tol: number; source: string };
 
-/** Check values from R, SciPy and mpmath; the source stands in each record. */
-export function reference<I, E>(file: string): ReferenceRecord<I, E>[] {
+/** Check values from R, SciPy and mpmath, of the functions named or of all; the source stands in each record. */
+export function reference<I, E>(file: string, ...functions: string[]): ReferenceRecord<I, E>[] {
   const url = new URL(`../fixtures/reference/${file}`, import.meta.url);
-  return JSON.parse(readFileSync(url, 'utf8')) as ReferenceRecord<I, E>[];
+  const records = JSON.parse(readFileSync(url, 'utf8')) as ReferenceRecord<I, E>[];
+  return functions.length === 0 ? records : records.filter(({ fn }) => functions.includes(fn));
 }
 
 const numberOf = (value: number | string) =>

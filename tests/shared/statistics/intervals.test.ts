@@ -83,7 +83,10 @@ describe('the share above guessing', () => {
       pdLowerOneSided95: number;
       pdUpperOneSided95: number;
     };
-    for (const { id, inputs, expected, tol } of reference<Inputs, Expected>('above-guessing.json')) {
+    for (const { id, inputs, expected, tol } of reference<Inputs, Expected>(
+      'power-similarity.json',
+      'proportionDiscriminators',
+    )) {
       const chance = inputs.guess === 0.5 ? evenChance : third;
       const found = aboveGuessing(inputs.k, inputs.n, chance, inputs.conf);
       const pairs: [number, number][] = [

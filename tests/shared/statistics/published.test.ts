@@ -49,7 +49,7 @@ describe('published values', () => {
 
   // Leventhal, J. Audio Eng. Soc. 34 (1986), 437-453: false alarms and misses of 15-trial tests.
   it('gives Leventhal’s risks of tests of 15 trials [T23]', () => {
-    const risks = about('type');
+    const risks = about('type').filter(({ item }) => item.startsWith('N=15'));
     expect(risks.length).toBe(44);
     for (const { item, published, tol } of risks) {
       const isMiss = item.includes('type II');
@@ -66,7 +66,7 @@ describe('published values', () => {
 
   // Newcombe, Statistics in Medicine 17 (1998), 857-872, table I.
   it('gives Newcombe’s Wilson and Clopper-Pearson limits [T23]', () => {
-    const limits = about('intervals');
+    const limits = about('intervals').filter(({ item }) => !item.includes('mid-P'));
     expect(limits.length).toBe(16);
     for (const { item, published, tol } of limits) {
       const [successes = 0, trials = 0] = partsOf(item, /^(\d+)\/(\d+) /);
@@ -80,7 +80,11 @@ describe('published values', () => {
 
   // Conover, Practical Nonparametric Statistics (1971), p. 97: Mendel's peas, 682 of 925 against 3/4.
   it('gives Conover’s p for Mendel’s peas [T23]', () => {
-    expect(about('exact two-sided').map(({ published }) => published)).toEqual([0.3825]);
+    expect(
+      about('exact two-sided')
+        .filter(({ citation }) => citation.startsWith('Conover'))
+        .map(({ published }) => published),
+    ).toEqual([0.3825]);
     expect(binomialTest(682, 925, { numerator: 3, denominator: 4 }, 'two-sided').p).toBeCloseTo(0.3825, 4);
   });
 });

@@ -96,7 +96,11 @@ describe('against R 4.2.2, SciPy and mpmath', () => {
   it('gives exact power, and the saw-tooth’s first and safe number of trials [T5]', () => {
     type Inputs = { n: number; p0: number; alpha: number; pd: number; targetPower: number };
     type Expected = { pc: number; minCorrect: number | null; power: number; nFirst: number; nSafe: number };
-    for (const { id, fn, inputs, expected, tol } of reference<Inputs, Expected>('power.json')) {
+    for (const { id, fn, inputs, expected, tol } of reference<Inputs, Expected>(
+      'power-similarity.json',
+      'powerExact',
+      'sampleSizeExact',
+    )) {
       const chance = chanceOf(inputs.p0);
       if (fn === 'powerExact') {
         const found = power(inputs.n, chance, inputs.alpha, expected.pc);
@@ -117,7 +121,7 @@ describe('against R 4.2.2, SciPy and mpmath', () => {
   });
 
   it('gives Holm’s adjusted p-values [T6]', () => {
-    for (const { id, inputs, expected, tol } of reference<{ p: number[] }, { holm: number[] }>('holm.json'))
+    for (const { id, inputs, expected, tol } of reference<{ p: number[] }, { holm: number[] }>('multiplicity.json'))
       for (const [index, value] of holm(inputs.p).entries())
         expectClose(value, expected.holm[index] ?? Number.NaN, tol, 0, id);
   });

@@ -1,0 +1,52 @@
+import { binomialTest } from '#shared/statistics/binomial-test.ts';
+import { evenChance } from '#shared/statistics/chance.ts';
+import { clopperPearson } from '#shared/statistics/clopper-pearson.ts';
+import { criticalCount } from '#shared/statistics/critical-count.ts';
+import { wilsonInterval } from '#shared/statistics/wilson.ts';
+import type { PublishedValue } from './check-published.ts';
+
+const numbersOf = (item: string): number[] => (item.match(/\d*\.?\d+/g) ?? []).map(Number);
+
+const smallestRight: PublishedValue = ({ item, topic }) => {
+  const [trials = 0, alpha = 0] = numbersOf(item);
+  const chance = topic.endsWith('triangle') ? { numerator: 1, denominator: 3 } : evenChance;
+  return criticalCount(trials, chance, alpha)?.count ?? null;
+};
+
+/** The chance of a false alarm and of a miss, when `right` are asked for. */
+const risk: PublishedValue = ({ item }) => {
+  const [trials = 0, first = 0, second = 0.5, third = 0] = numbersOf(item);
+  // One item names the level before the rate and the number to reach last.
+  const [right, rate] = item.includes('critical r=') ? [third, second] : [first, second];
+  return item.includes('type II')
+    ? binomialTest(right - 1, trials, rate, 'less').p
+    : binomialTest(right, trials, evenChance, 'greater').p;
+};
+
+/** Mendel's peas, where an item says no more than "p". */
+const twoSided: PublishedValue = ({ item }) => {
+  const [successes = 0, trials = 0, numerator = 1, denominator = 2] = numbersOf(item === 'p' ? '682/925 3/4' : item);
+  return binomialTest(successes, trials, { numerator, denominator }, 'two-sided').p;
+};
+
+/** Where an item names no side, the limit nearer to the printed one. */
+const limit: PublishedValue = ({ item, published }) => {
+  const [successes = 0, trials = 0] = numbersOf(item);
+  if (/midP|mid-P/.test(item)) return undefined;
+  const { lower, upper } = (item.includes('Wilson') ? wilsonInterval : clopperPearson)(successes, trials, 0.95);
+  const isLower = /(lo|lower|hi|upper)$/.test(item)
+    ? /lo(wer)?$/.test(item)
+    : Math.abs(lower - Number(published)) < Math.abs(upper - Number(published));
+  return isLower ? lower : upper;
+};
+
+/** The items of each topic of the printed values, in terms of the functions of shared/. */
+export const publishedValues: { readonly [topic: string]: PublishedValue } = {
+  'typeI/II': risk,
+  'critical triangle': smallestRight,
+  'critical duo-trio': smallestRight,
+  'critical paired': smallestRight,
+  'Clopper-Pearson': limit,
+  intervals: limit,
+  'exact two-sided': twoSided,
+};
