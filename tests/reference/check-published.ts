@@ -30,9 +30,16 @@ export function checkPublished(
   return topics.map((topic) => {
     const about = checks.filter((check) => check.topic === topic);
     const fn = `published: ${topic}`;
-    const line = { fn, cases: about.length, largestError: 0, failures: [] as string[], pending: [] as string[] };
     const reason = pending.functions[fn];
     const value = values[topic];
+    const line = {
+      fn,
+      cases: about.length,
+      largestError: 0,
+      isCompared: value !== undefined,
+      failures: [] as string[],
+      pending: [] as string[],
+    };
     if (value === undefined) {
       if (reason === undefined) line.failures.push(`${fn}: no function here, and not pending`);
       else line.pending.push(reason);

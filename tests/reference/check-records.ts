@@ -26,6 +26,8 @@ export interface Line {
   readonly fn: string;
   readonly cases: number;
   readonly largestError: number;
+  /** False where no value of it was computed here. */
+  readonly isCompared: boolean;
   readonly failures: readonly string[];
   /** Why nothing, or not everything, was compared. */
   readonly pending: readonly string[];
@@ -59,7 +61,7 @@ function checkFunction(
   mapping: Mapping | undefined,
   pending: Pending,
 ): Line {
-  const line = { fn, cases: records.length, largestError: 0 };
+  const line = { fn, cases: records.length, largestError: 0, isCompared: mapping !== undefined };
   const reason = pending.functions[fn];
   if (mapping === undefined) {
     const failures = reason === undefined ? [`${fn}: no function here, and not pending`] : [];

@@ -1,14 +1,19 @@
 import { aboveGuessing } from '#shared/statistics/above-guessing.ts';
+import { bayesFactor } from '#shared/statistics/bayes-factor.ts';
+import { benjaminiHochberg } from '#shared/statistics/benjamini-hochberg.ts';
 import { binomialTest } from '#shared/statistics/binomial-test.ts';
-import { type Chance, evenChance } from '#shared/statistics/chance.ts';
+import { chiSquareUpperTail } from '#shared/statistics/chi-square-tail.ts';
 import { clopperPearson, clopperPearsonLower, clopperPearsonUpper } from '#shared/statistics/clopper-pearson.ts';
 import { criticalCount } from '#shared/statistics/critical-count.ts';
-import { type Fraction, fractionToNumber } from '#shared/statistics/fraction.ts';
+import { equivalenceAboutHalf } from '#shared/statistics/equivalence.ts';
+import { fractionToNumber } from '#shared/statistics/fraction.ts';
 import { holm } from '#shared/statistics/holm.ts';
+import { midPInterval } from '#shared/statistics/mid-p-interval.ts';
 import { normalLogUpperTail, normalUpperTail } from '#shared/statistics/normal-tail.ts';
 import { power } from '#shared/statistics/power.ts';
 import { sampleSize } from '#shared/statistics/sample-size.ts';
 import { sharedPresentationTest } from '#shared/statistics/shared-presentation-test.ts';
+import { similarityCriticalCount, similarityPower, similaritySampleSize } from '#shared/statistics/similarity.ts';
 import {
   exactTwoSidedEven,
   twoSidedCriticalCount,
@@ -16,24 +21,16 @@ import {
   twoSidedSampleSize,
 } from '#shared/statistics/two-sided-even.ts';
 import { wilsonInterval } from '#shared/statistics/wilson.ts';
-import type { Mapping, Outcome } from './check-records.ts';
-
-/** A third is stored as the nearest double in the check values; here it is the ratio. */
-const chanceOf = (p0: number): Chance =>
-  p0 === 0.5 ? evenChance : Math.abs(p0 - 1 / 3) < 1e-15 ? { numerator: 1, denominator: 3 } : p0;
-
-const of =
-  <I>(compute: (inputs: I) => Outcome): Mapping =>
-  (inputs) =>
-    compute(inputs as I);
-
-const fractionText = ({ numerator, denominator }: Fraction) =>
-  denominator === 1n ? `${numerator}` : `${numerator}/${denominator}`;
-
-const pair = ({ lower, upper }: { lower: number; upper: number }) => [lower, upper];
+import type { Mapping } from './check-records.ts';
+import { chanceOf, fractionText, of, pair } from './inputs.ts';
+import { listenerMappings } from './listener-functions.ts';
+import { orderMappings } from './order-functions.ts';
 
 /** Each function of the check values, in terms of the functions of shared/. */
 export const mappings: { readonly [fn: string]: Mapping } = {
+  ...listenerMappings,
+  ...orderMappings,
+
   binomialTest: of<{ k: number; n: number; p0: number }>(({ k, n, p0 }) => {
     const chance = chanceOf(p0);
     const greater = binomialTest(k, n, chance, 'greater');
@@ -54,6 +51,7 @@ export const mappings: { readonly [fn: string]: Mapping } = {
     scaled: {
       clopperPearson: pair(clopperPearson(k, n, conf)),
       wilson: pair(wilsonInterval(k, n, conf)),
+      midP: pair(midPInterval(k, n, conf)),
       oneSidedLower: clopperPearsonLower(k, n, conf),
       oneSidedUpper: clopperPearsonUpper(k, n, conf),
     },
@@ -106,7 +104,55 @@ export const mappings: { readonly [fn: string]: Mapping } = {
     },
   ),
 
-  adjustPValues: of<{ p: number[] }>(({ p }) => ({ relative: { holm: holm(p) } })),
+  similarityCritical: of<{ n: number; p0: number; pdMax: number; alpha: number }>(({ n, p0, pdMax, alpha }) => {
+    const critical = similarityCriticalCount(n, chanceOf(p0), pdMax, alpha);
+    return {
+      exact: { maxCorrect: critical?.count ?? null },
+      relative: {
+        attainedSize: critical?.attainedSize ?? null,
+        powerAtPd0: similarityPower(n, chanceOf(p0), pdMax, alpha, 0),
+      },
+    };
+  }),
+
+  similaritySampleSize: of<{ p0: number; pdMax: number; alpha: number; targetPower: number; truePd: number }>(
+    ({ p0, pdMax, alpha, targetPower, truePd }) => {
+      const found = similaritySampleSize({
+        chance: chanceOf(p0),
+        margin: pdMax,
+        alpha,
+        trueShare: truePd,
+        targetPower,
+        limit: 3000,
+      });
+      const { nFirst, nSafe, powerAtFirst, powerAtSafe } = found;
+      return { exact: { nFirst, nSafe }, relative: { powerAtFirst, powerAtSafe } };
+    },
+  ),
+
+  equivalenceTwoSided: of<{ k: number; n: number; margin: number }>(({ k, n, margin }) => {
+    const { pAgainstLower, pAgainstUpper, p } = equivalenceAboutHalf(k, n, margin);
+    return { relative: { pAgainstLower, pAgainstUpper, pTost: p } };
+  }),
+
+  bayesFactorBinomial: of<BayesInputs>((inputs) => {
+    const { logFactor, logFactorAbove } = factorOf(inputs);
+    return {
+      scaled: { logBF10: logFactor, logBFPlus0: logFactorAbove },
+      relative: { BF10: Math.exp(logFactor), BFPlus0: Math.exp(logFactorAbove) },
+    };
+  }),
+
+  eValueBernoulli: of<BayesInputs>((inputs) => {
+    const { logFactor, logFactorAbove } = factorOf(inputs);
+    return { scaled: { logE: logFactor, logEOneSided: logFactorAbove } };
+  }),
+
+  chiSquareUpper: of<{ x: number; df: number }>(({ x, df }) => ({ relative: { upper: chiSquareUpperTail(x, df) } })),
+
+  adjustPValues: of<{ p: number[] }>(({ p }) => ({
+    relative: { holm: holm(p), benjaminiHochberg: benjaminiHochberg(p) },
+  })),
 
   sharedPresentationTest: of<{ choices: number[][]; truth: number[] }>(({ choices, truth }) => {
     const trials = choices.map((counts, index) => ({ counts, truth: truth[index] ?? 0, missing: 0 }));
@@ -148,6 +194,17 @@ export const mappings: { readonly [fn: string]: Mapping } = {
     scaled: { logLower: normalLogUpperTail(-z), logUpper: normalLogUpperTail(z) },
   })),
 };
+
+interface BayesInputs {
+  readonly k: number;
+  readonly n: number;
+  readonly p0: number;
+  readonly priorA: number;
+  readonly priorB: number;
+}
+
+const factorOf = ({ k, n, p0, priorA, priorB }: BayesInputs) =>
+  bayesFactor(k, n, chanceOf(p0), { a: priorA, b: priorB });
 
 /** What the answers would give, were they independent: shown beside the test to warn of it. */
 function pooledBinomial(choices: readonly number[][], matching: number, answers: number): number | null {

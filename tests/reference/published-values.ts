@@ -2,6 +2,8 @@ import { binomialTest } from '#shared/statistics/binomial-test.ts';
 import { evenChance } from '#shared/statistics/chance.ts';
 import { clopperPearson } from '#shared/statistics/clopper-pearson.ts';
 import { criticalCount } from '#shared/statistics/critical-count.ts';
+import { fisherExactTest } from '#shared/statistics/fisher-exact.ts';
+import { midPInterval } from '#shared/statistics/mid-p-interval.ts';
 import { wilsonInterval } from '#shared/statistics/wilson.ts';
 import type { PublishedValue } from './check-published.ts';
 
@@ -29,11 +31,13 @@ const twoSided: PublishedValue = ({ item }) => {
   return binomialTest(successes, trials, { numerator, denominator }, 'two-sided').p;
 };
 
+const intervalOf = (item: string) =>
+  item.includes('Wilson') ? wilsonInterval : item.includes('mid-P') ? midPInterval : clopperPearson;
+
 /** Where an item names no side, the limit nearer to the printed one. */
 const limit: PublishedValue = ({ item, published }) => {
   const [successes = 0, trials = 0] = numbersOf(item);
-  if (/midP|mid-P/.test(item)) return undefined;
-  const { lower, upper } = (item.includes('Wilson') ? wilsonInterval : clopperPearson)(successes, trials, 0.95);
+  const { lower, upper } = intervalOf(item)(successes, trials, 0.95);
   const isLower = /(lo|lower|hi|upper)$/.test(item)
     ? /lo(wer)?$/.test(item)
     : Math.abs(lower - Number(published)) < Math.abs(upper - Number(published));
@@ -49,4 +53,13 @@ export const publishedValues: { readonly [topic: string]: PublishedValue } = {
   'Clopper-Pearson': limit,
   intervals: limit,
   'exact two-sided': twoSided,
+  // Eight cups, four of each, all told right.
+  randomisation: () =>
+    fisherExactTest(
+      [
+        [4, 0],
+        [0, 4],
+      ],
+      'greater',
+    ).p,
 };

@@ -9,8 +9,8 @@ const pending = JSON.parse(readFileSync(new URL('pending.json', here), 'utf8')) 
 const folder = process.argv[2] ?? here.pathname;
 
 const { lines, files, skipped } = checkFolder(folder, pending);
-for (const { fn, cases, largestError, failures, pending: waits } of lines) {
-  const error = largestError.toExponential(1).padStart(8);
+for (const { fn, cases, largestError, failures, pending: waits, isCompared } of lines) {
+  const error = (isCompared ? largestError.toExponential(1) : 'pending').padStart(8);
   console.log(
     `${fn.padEnd(36)} ${String(cases).padStart(5)} cases ${error} ${String(failures.length).padStart(4)} failed`,
   );

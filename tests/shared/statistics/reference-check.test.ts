@@ -16,7 +16,7 @@ const failuresOf = (list: readonly ReferenceRecord[]) =>
   checkRecords(list, mappings, nothingPending).flatMap(({ failures }) => failures);
 
 describe('every check value of the folder', () => {
-  it('agrees with what is computed here, or is named as pending with a reason [T40]', () => {
+  it('agrees with what is computed here, or is named as pending with a reason [T25]', () => {
     const { lines, files, skipped } = checkFolder(folder, pending);
     expect(lines.flatMap(({ failures }) => failures)).toEqual([]);
     expect(skipped).toEqual(['pending.json']);
@@ -24,7 +24,7 @@ describe('every check value of the folder', () => {
     expect(lines.reduce((sum, { cases }) => sum + cases, 0)).toBeGreaterThan(3500);
   });
 
-  it('is a list without a name that no value needs [T40]', () => {
+  it('is a list without a name that no value needs [T25]', () => {
     const { lines } = checkFolder(folder, pending);
     const names = lines.map(({ fn }) => fn);
     const unneeded = Object.keys(pending.functions).filter(
@@ -39,7 +39,7 @@ describe('a wrong value planted in a copy', () => {
   const [first] = runs;
   if (first === undefined) throw new Error('no check values');
 
-  it('is found, by its id and its field [T40]', () => {
+  it('is found, by its id and its field [T25]', () => {
     const middle = runs.length >> 1;
     const planted = runs.map((record, index) =>
       index === middle
@@ -50,7 +50,7 @@ describe('a wrong value planted in a copy', () => {
     expect(failuresOf(planted)).toEqual([`${runs[middle]?.id} pLower`]);
   });
 
-  it('is found where one count of a table is off by one [T40]', () => {
+  it('is found where one count of a table is off by one [T25]', () => {
     const tables = records('critical-values-two-sided.json');
     const planted = tables.map((record, index) =>
       index === 40
@@ -60,7 +60,7 @@ describe('a wrong value planted in a copy', () => {
     expect(failuresOf(planted)).toEqual([`${tables[40]?.id} minAgreeing`]);
   });
 
-  it('is found among the printed values, whether they agree or not [T40]', () => {
+  it('is found among the printed values, whether they agree or not [T25]', () => {
     const check = { topic: 'critical paired', citation: 'ISO 5495', item: 'n=10 alpha=0.05', tol: 0 };
     const failures = (published: number, computed: number, agrees: boolean) =>
       checkPublished([{ ...check, published, computed, agrees }], publishedValues, nothingPending).flatMap(
@@ -73,13 +73,13 @@ describe('a wrong value planted in a copy', () => {
     expect(failures(9, 8, true)).toHaveLength(1);
   });
 
-  it('is not hidden by a function, a field or a value that is not there [T40]', () => {
+  it('is not hidden by a function, a field or a value that is not there [T25]', () => {
     expect(failuresOf([{ ...first, fn: 'unheardOf' }])).toEqual(['unheardOf: no function here, and not pending']);
     expect(failuresOf([{ ...first, expected: { ...first.expected, pMiddle: 0.5 } }])).toEqual([`${first.id} pMiddle`]);
     expect(failuresOf([{ ...first, inputs: { k: 2, n: 1, p0: 0.5 } }])[0]).toContain('threw RangeError');
   });
 
-  it('is not hidden by an entry of the pending list that nothing needs [T40]', () => {
+  it('is not hidden by an entry of the pending list that nothing needs [T25]', () => {
     const check = (list: Pending) => checkRecords([first], mappings, list).flatMap(({ failures }) => failures);
     expect(check({ functions: { binomialTest: 'later' }, records: {} })).toEqual([
       'binomialTest is pending and has a function',
@@ -89,7 +89,7 @@ describe('a wrong value planted in a copy', () => {
 });
 
 describe('the pass rule', () => {
-  it('is relative for probabilities, has a floor of 1 for logs and limits, and is exact for counts [T40]', () => {
+  it('is relative for probabilities, has a floor of 1 for logs and limits, and is exact for counts [T25]', () => {
     expect(compare(1.1e-9, 1e-9, 1e-8, 'relative').agrees).toBe(false);
     expect(compare(1.1e-9, 1e-9, 1e-8, 'scaled').agrees).toBe(true);
     expect(compare(1e-11, 0, 1, 'relative').agrees).toBe(false);

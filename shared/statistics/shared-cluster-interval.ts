@@ -1,0 +1,91 @@
+import type { Interval } from './clopper-pearson.ts';
+import { clusterVariance } from './cluster-variance.ts';
+import { requireBetween, requireWhole } from './domain.ts';
+import { studentTQuantile } from './student-t-quantile.ts';
+
+/** One answer to a shared presentation. */
+export interface SharedAnswer {
+  readonly listener: string;
+  readonly trial: string;
+  readonly isRight: boolean;
+}
+
+export interface ClusteredRate {
+  readonly rate: number;
+  readonly standardError: number;
+  readonly degreesOfFreedom: number;
+  /** Student's t about the rate, cut to 0 ... 1; null where nothing varies and no interval can be had from it. */
+  readonly interval: Interval | null;
+}
+
+/**
+ * Interval for the rate of this panel when its listeners hear the same presentations: trials are counted, not answers.
+ *
+ * Whatever the listeners share in a trial (a habit, a nudge) is inside its cluster. It speaks of these listeners alone.
+ *
+ * @param answers    one for each answer, in at least two trials; a listener answers a trial once
+ * @param confidence from 0 to 1 - 2e-12, both excluded, for both sides together
+ * @returns rate, standard error and interval on one degree of freedom fewer than there are trials
+ * @throws RangeError when an argument is outside its domain
+ * @example trialClusterInterval(answers, 0.95) // of 2 listeners, both right in 3 of 4 trials: rate 0.75, 0 ... 1
+ * @see Cochran, Sampling Techniques, 3rd ed. (1977), sec. 3.12
+ */
+export function trialClusterInterval(answers: readonly SharedAnswer[], confidence: number): ClusteredRate {
+  const rate = rateOf(answers, confidence);
+  const residuals = residualsBy(answers, rate, ({ trial }) => trial);
+  return clustered(rate, clusterVariance(residuals, answers.length), residuals.length - 1, confidence);
+}
+
+/**
+ * Interval for the rate of listeners in general when a panel hears the same presentations: both the listeners and the
+ * trials are counted as drawn at random.
+ *
+ * The variance is that by listener plus that by trial less that by single answer, and no smaller than either of the two.
+ *
+ * @param answers    one for each answer, of at least two listeners in at least two trials, each trial answered once
+ * @param confidence from 0 to 1 - 2e-12, both excluded, for both sides together
+ * @returns rate, standard error and interval on one degree of freedom fewer than there are listeners, or trials, if fewer
+ * @throws RangeError when an argument is outside its domain
+ * @example twoWayClusterInterval(answers, 0.95) // never narrower than trialClusterInterval
+ * @see Cameron, Gelbach & Miller, "Robust inference with multiway clustering", J. Business & Economic Statistics 29
+ *   (2011), 238-249
+ */
+export function twoWayClusterInterval(answers: readonly SharedAnswer[], confidence: number): ClusteredRate {
+  const rate = rateOf(answers, confidence);
+  const byListener = residualsBy(answers, rate, ({ listener }) => listener);
+  const byTrial = residualsBy(answers, rate, ({ trial }) => trial);
+  const byAnswer = answers.map(({ isRight }) => (isRight ? 1 : 0) - rate);
+  const [listeners, trials, cells] = [byListener, byTrial, byAnswer].map((residuals) =>
+    clusterVariance(residuals, answers.length),
+  ) as [number, number, number];
+  const variance = Math.max(listeners + trials - cells, listeners, trials);
+  return clustered(rate, variance, Math.min(byListener.length, byTrial.length) - 1, confidence);
+}
+
+function rateOf(answers: readonly SharedAnswer[], confidence: number): number {
+  requireBetween('confidence', confidence, 0, 1 - 2e-12, 'open');
+  requireWhole('number of answers', answers.length, 2, 1_000_000);
+  const cells = new Set(answers.map(({ listener, trial }) => JSON.stringify([listener, trial])));
+  if (cells.size < answers.length) throw new RangeError('a listener answers a trial once');
+  return answers.filter(({ isRight }) => isRight).length / answers.length;
+}
+
+function residualsBy(
+  answers: readonly SharedAnswer[],
+  rate: number,
+  clusterOf: (answer: SharedAnswer) => string,
+): number[] {
+  const residuals = new Map<string, number>();
+  for (const answer of answers) {
+    const cluster = clusterOf(answer);
+    residuals.set(cluster, (residuals.get(cluster) ?? 0) + (answer.isRight ? 1 : 0) - rate);
+  }
+  return [...residuals.values()];
+}
+
+function clustered(rate: number, variance: number, degreesOfFreedom: number, confidence: number): ClusteredRate {
+  const standardError = Math.sqrt(variance);
+  const reach = studentTQuantile((1 - confidence) / 2, degreesOfFreedom) * standardError;
+  const interval = { lower: Math.max(0, rate - reach), upper: Math.min(1, rate + reach) };
+  return { rate, standardError, degreesOfFreedom, interval: variance === 0 ? null : interval };
+}
