@@ -40,7 +40,7 @@ export function betaBinomialFit(scores: readonly ListenerScore[]): BetaBinomialF
   const isSettled = pooled === 0 || pooled === 1;
   const best = isSettled
     ? common
-    : [...turningPoints(scores), ...allOrNone(scores, pooled)].reduce(
+    : [...turningPoints(talliesOf(scores)), ...allOrNone(scores)].reduce(
         (found, candidate) => (candidate.logLikelihood > found.logLikelihood ? candidate : found),
         common,
       );
@@ -55,10 +55,41 @@ interface Candidate {
   readonly logLikelihood: number;
 }
 
-function turningPoints(scores: readonly ListenerScore[]): Candidate[] {
+/**
+ * How many listeners have more than 0, 1, 2 ... right answers, wrong ones, trials: answer i of a listener has odds
+ * rate + i theta after i like it, so listeners with as many share a term.
+ */
+interface Tallies {
+  readonly right: readonly number[];
+  readonly wrong: readonly number[];
+  readonly trials: readonly number[];
+  /** Logarithm of the number of orders in which the counts can come about. */
+  readonly logOrders: number;
+}
+
+function talliesOf(scores: readonly ListenerScore[]): Tallies {
+  return {
+    right: exceeding(scores.map(({ successes }) => successes)),
+    wrong: exceeding(scores.map(({ successes, trials }) => trials - successes)),
+    trials: exceeding(scores.map(({ trials }) => trials)),
+    logOrders: scores.reduce(
+      (sum, { successes, trials }) => sum + logPoint(successes, trials, 0.5, 0.5) + trials * Math.LN2,
+      0,
+    ),
+  };
+}
+
+function exceeding(counts: readonly number[]): number[] {
+  const tally = new Array<number>(Math.max(...counts)).fill(0);
+  for (const count of counts) if (count > 0) tally[count - 1] = (tally[count - 1] ?? 0) + 1;
+  for (let index = tally.length - 2; index >= 0; index--) tally[index] = (tally[index] ?? 0) + (tally[index + 1] ?? 0);
+  return tally;
+}
+
+function turningPoints(tallies: Tallies): Candidate[] {
   const slope = (correlation: number) => {
     const theta = correlation / (1 - correlation);
-    return slopeInTheta(scores, bestRate(scores, theta), theta);
+    return slopeInTheta(tallies, bestRate(tallies, theta), theta);
   };
   const slopes = correlations.map(slope);
   return correlations.flatMap((low, index) => {
@@ -66,47 +97,37 @@ function turningPoints(scores: readonly ListenerScore[]): Candidate[] {
     if (high === undefined || !((slopes[index] ?? 0) > 0 && (slopes[index + 1] ?? 0) <= 0)) return [];
     const correlation = halve(low, high, (middle) => slope(middle) > 0);
     const theta = correlation / (1 - correlation);
-    const rate = bestRate(scores, theta);
-    return [{ rate, correlation, logLikelihood: logLikelihoodAt(scores, rate, theta) }];
+    const rate = bestRate(tallies, theta);
+    return [{ rate, correlation, logLikelihood: logLikelihoodAt(tallies, rate, theta) }];
   });
 }
 
 /** Every listener all right or all wrong: the likelihood rises up to correlation 1, where it is that of single answers. */
-function allOrNone(scores: readonly ListenerScore[], pooled: number): Candidate[] {
+function allOrNone(scores: readonly ListenerScore[]): Candidate[] {
   if (scores.some(({ successes, trials }) => successes !== 0 && successes !== trials)) return [];
   if (scores.every(({ trials }) => trials === 1)) return [];
   const right = scores.filter(({ successes }) => successes > 0).length;
   const rate = right / scores.length;
-  if (pooled === 0 || pooled === 1) return [];
   const logLikelihood = right * Math.log(rate) + (scores.length - right) * Math.log1p(-rate);
   return [{ rate, correlation: 1, logLikelihood }];
 }
 
-/** theta = correlation / (1 - correlation): answer j of a listener has odds rate + i theta after i like it. */
-function logLikelihoodAt(scores: readonly ListenerScore[], rate: number, theta: number): number {
-  return scores.reduce((sum, { successes, trials }) => {
-    const failures = trials - successes;
-    const ways = logPoint(successes, trials, 0.5, 0.5) + trials * Math.LN2;
-    const right = sumOver(successes, (i) => Math.log(rate + i * theta));
-    const wrong = sumOver(failures, (i) => Math.log(1 - rate + i * theta));
-    return sum + ways + right + wrong - sumOver(trials, (i) => Math.log1p(i * theta));
-  }, 0);
+/** theta = correlation / (1 - correlation). */
+function logLikelihoodAt({ right, wrong, trials, logOrders }: Tallies, rate: number, theta: number): number {
+  const rights = weigh(right, (i) => Math.log(rate + i * theta));
+  const wrongs = weigh(wrong, (i) => Math.log(1 - rate + i * theta));
+  return logOrders + rights + wrongs - weigh(trials, (i) => Math.log1p(i * theta));
 }
 
-function slopeInTheta(scores: readonly ListenerScore[], rate: number, theta: number): number {
-  return scores.reduce((sum, { successes, trials }) => {
-    const right = sumOver(successes, (i) => i / (rate + i * theta));
-    const wrong = sumOver(trials - successes, (i) => i / (1 - rate + i * theta));
-    return sum + right + wrong - sumOver(trials, (i) => i / (1 + i * theta));
-  }, 0);
+function slopeInTheta({ right, wrong, trials }: Tallies, rate: number, theta: number): number {
+  const rights = weigh(right, (i) => i / (rate + i * theta));
+  const wrongs = weigh(wrong, (i) => i / (1 - rate + i * theta));
+  return rights + wrongs - weigh(trials, (i) => i / (1 + i * theta));
 }
 
-function bestRate(scores: readonly ListenerScore[], theta: number): number {
+function bestRate({ right, wrong }: Tallies, theta: number): number {
   const slope = (rate: number) =>
-    scores.reduce((sum, { successes, trials }) => {
-      const right = sumOver(successes, (i) => 1 / (rate + i * theta));
-      return sum + right - sumOver(trials - successes, (i) => 1 / (1 - rate + i * theta));
-    }, 0);
+    weigh(right, (i) => 1 / (rate + i * theta)) - weigh(wrong, (i) => 1 / (1 - rate + i * theta));
   return halve(0, 1, (middle) => slope(middle) > 0);
 }
 
@@ -122,9 +143,9 @@ function halve(from: number, to: number, isBelow: (middle: number) => boolean): 
   return low + (high - low) / 2;
 }
 
-function sumOver(count: number, term: (index: number) => number): number {
+function weigh(tally: readonly number[], term: (index: number) => number): number {
   let sum = 0;
-  for (let index = 0; index < count; index++) sum += term(index);
+  for (let index = 0; index < tally.length; index++) sum += (tally[index] ?? 0) * term(index);
   return sum;
 }
 
