@@ -9,6 +9,7 @@ import { equivalenceAboutHalf } from '#shared/statistics/equivalence.ts';
 import { fractionToNumber } from '#shared/statistics/fraction.ts';
 import { holm } from '#shared/statistics/holm.ts';
 import { midPInterval } from '#shared/statistics/mid-p-interval.ts';
+import { normalQuantile } from '#shared/statistics/normal-quantile.ts';
 import { normalLogUpperTail, normalUpperTail } from '#shared/statistics/normal-tail.ts';
 import { power } from '#shared/statistics/power.ts';
 import { sampleSize } from '#shared/statistics/sample-size.ts';
@@ -188,6 +189,8 @@ export const mappings: { readonly [fn: string]: Mapping } = {
     const { nFirst, nSafe } = twoSidedSampleSize({ ...question, limit: 3000 });
     return { exact: { nFirst, nSafe } };
   }),
+
+  normalQuantile: of<{ p: number }>(({ p }) => ({ scaled: { z: normalQuantile(p) } })),
 
   normalTail: of<{ z: number }>(({ z }) => ({
     relative: { lower: normalUpperTail(-z), upper: normalUpperTail(z) },
