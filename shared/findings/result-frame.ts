@@ -14,7 +14,6 @@ export const resultFrame = {
   randomisation: z.literal('independent fair draw per trial'),
   stopping: z.literal('fixed number of trials'),
   test: z.enum(['exact-binomial', 'shared-presentations']),
-  chance: z.strictObject({ numerator: z.literal(1), denominator: z.literal(2) }),
   /** As registered. */
   alpha: z.string(),
   listenersPerSession: count,

@@ -10,7 +10,7 @@ describe.each(methodIds)('the method %s', (id) => {
   it('is listed under its own name and names the source it is published in [F1]', () => {
     expect(method.id).toBe(id);
     expect(method.source.length).toBeGreaterThan(20);
-    expect(method.registered([]).name).toMatch(new RegExp(`^${id}/\\d+$`));
+    expect(method.registered({}).name).toMatch(new RegExp(`^${id}/\\d+$`));
   });
 
   it('fits both cables in every trial, each truth another way, and turns with the draw of the session [F1]', () => {
@@ -40,7 +40,7 @@ describe.each(methodIds)('the method %s', (id) => {
 
   it('offers answers with words of their own, with every setting and without [F1]', () => {
     for (const settings of [[], method.settings.map((setting) => setting.id)]) {
-      const options = method.options(settings);
+      const options = method.options({ methodSettings: settings });
       for (const field of ['value', 'sentence', 'short'] as const)
         expect(new Set(options.map((option) => option[field])).size).toBe(options.length);
       expect(options.length).toBeGreaterThan(1);

@@ -23,7 +23,7 @@ function OwnDraws({ plan }: { plan: Plan }) {
 }
 
 function SharedDraws({ plan }: { plan: Plan }) {
-  const { leastAttainableP, leastPHalvings } = plan.figures;
+  const { leastAttainableP, leastPDenominator } = plan.figures;
   const { counted } = plan.method.plan;
   return (
     <div className="flex flex-col gap-3">
@@ -38,7 +38,7 @@ function SharedDraws({ plan }: { plan: Plan }) {
       </p>
       <p>
         The least p that {formatCount(plan.trials, 'trial')} can give is{' '}
-        <span className="font-mono">{formatProbability(leastAttainableP)}</span> (1 in {drawsOf(leastPHalvings)}),
+        <span className="font-mono">{formatProbability(leastAttainableP)}</span> (1 in {drawsOf(leastPDenominator)}),
         however many listen. <strong>Plan trials, not heads.</strong>
       </p>
     </div>
@@ -46,11 +46,11 @@ function SharedDraws({ plan }: { plan: Plan }) {
 }
 
 /** How many draws there are: written out as long as somebody reads it. */
-function drawsOf(halvings: number): ReactNode {
-  if (halvings <= 30) return formatNumber(2 ** halvings);
+function drawsOf(draws: bigint): ReactNode {
+  if (draws <= 2n ** 30n) return formatNumber(Number(draws));
   return (
     <>
-      2<sup>{halvings}</sup>
+      more than 10<sup>{draws.toString().length - 1}</sup>
     </>
   );
 }

@@ -1,6 +1,4 @@
-import { evenChance } from '../statistics/chance.ts';
 import { detectableRate } from '../statistics/detectable-rate.ts';
-import type { AbxResult } from './abx-result.ts';
 import {
   confidenceText,
   courseModifiers,
@@ -10,18 +8,29 @@ import {
   scopeOf,
   times,
 } from './finding.ts';
+import type { ForcedChoiceResult } from './forced-choice-result.ts';
 import { equationOfP, formatShare } from './format-probability.ts';
 
-function subjectOf({ listeners, test }: AbxResult): string {
+/** What a method with one right answer says in its own words. */
+export interface DifferenceWords {
+  /** After the listeners: "told A from B". */
+  told(result: ForcedChoiceResult, cables: FindingContext['cables']): string;
+  /** What the test looked for: "a difference between A and B". */
+  sought(result: ForcedChoiceResult, cables: FindingContext['cables']): string;
+  /** What scores below chance must not be taken for, or nothing. */
+  readonly below?: string;
+}
+
+function subjectOf({ listeners, test }: ForcedChoiceResult): string {
   if (listeners === 1) return 'One listener';
   return test === 'shared-presentations' ? 'At least one panel member' : 'At least one of these listeners';
 }
 
-function countOf({ correct, answers, p, alpha }: AbxResult): string {
+function countOf({ correct, answers, p, alpha }: ForcedChoiceResult): string {
   return `${correct} of ${answers} right, ${equationOfP(Number(p.value), Number(alpha))}, one-sided level ${alpha}`;
 }
 
-function namedListeners({ byListener, isSignificant, listeners }: AbxResult): string[] {
+function namedListeners({ byListener, isSignificant, listeners }: ForcedChoiceResult): string[] {
   if (!isSignificant || listeners < 2) return [];
   const named = byListener.filter(({ isAboveGuessing }) => isAboveGuessing).map(({ listener }) => listener);
   if (named.length === 0) return ['The panel as a whole scored above chance; no single listener can be named.'];
@@ -29,7 +38,7 @@ function namedListeners({ byListener, isSignificant, listeners }: AbxResult): st
 }
 
 /** A listener above guessing where the registered test of all answers found nothing: a hint, not a result. */
-function hints({ byListener, isSignificant, listeners }: AbxResult): string[] {
+function hints({ byListener, isSignificant, listeners }: ForcedChoiceResult): string[] {
   if (isSignificant || listeners < 2) return [];
   const hinting = byListener.filter(({ isAboveGuessing }) => isAboveGuessing).map(({ listener }) => listener);
   if (hinting.length === 0) return [];
@@ -37,12 +46,12 @@ function hints({ byListener, isSignificant, listeners }: AbxResult): string[] {
 }
 
 /** Limits over several listeners' own draws are about these answers, not about people. */
-function average({ listeners }: AbxResult): string {
+function average({ listeners }: ForcedChoiceResult): string {
   return listeners > 1 ? ' These figures are the average over this panel’s answers, not about people in general.' : '';
 }
 
 /** How large the effect is, with the one-sided limit that belongs to a one-sided test. */
-function effect(result: AbxResult): string[] {
+function effect(result: ForcedChoiceResult): string[] {
   if (result.estimates === null)
     return ['The listeners heard the same presentations, so no rate is stated for their answers together.'];
   const { rate, interval, oneSidedLower } = result.estimates.aboveGuessing;
@@ -54,13 +63,13 @@ function effect(result: AbxResult): string[] {
 }
 
 /** What a result that found nothing leaves open. */
-function openQuestion(result: AbxResult): string {
-  const { estimates, answers, alpha, test } = result;
+function openQuestion(result: ForcedChoiceResult): string {
+  const { estimates, answers, alpha, test, chance } = result;
   if (answers === 0) return 'No answers were counted.';
   if (test === 'shared-presentations' || estimates === null)
     return 'No upper limit for the above-chance rate is valid for a group in this version, so none is given.';
   const { confidence, limit } = estimates.aboveGuessing.oneSidedUpper;
-  const rate = detectableRate(answers, evenChance, Number(alpha), 0.8);
+  const rate = detectableRate(answers, chance, Number(alpha), 0.8);
   const found =
     rate === null
       ? ''
@@ -76,8 +85,12 @@ const neverSaid = [
   'that it holds for other systems, listeners or music',
 ];
 
-function bodyOf(result: AbxResult, context: FindingContext): Pick<Finding, 'row' | 'headline' | 'maySay'> {
-  const [first, second] = context.cables;
+function bodyOf(
+  result: ForcedChoiceResult,
+  context: FindingContext,
+  words: DifferenceWords,
+): Pick<Finding, 'row' | 'headline' | 'maySay'> {
+  const sought = words.sought(result, context.cables);
   const barred = notKept(context);
   if (barred !== null) return barred;
   if (result.isBelowGuessing)
@@ -90,34 +103,41 @@ function bodyOf(result: AbxResult, context: FindingContext): Pick<Finding, 'row'
   if (!result.isSignificant)
     return {
       row: '5',
-      headline: `Inconclusive. The test did not detect a difference between ${first} and ${second}, and does not exclude one.`,
+      headline: `Inconclusive. The test did not detect ${sought}, and does not exclude one.`,
       maySay:
         result.answers === 0
           ? null
-          : `A registered blind test did not detect a difference between ${first} and ${second} (${countOf(result)}); it does not exclude one.`,
+          : `A registered blind test did not detect ${sought} (${countOf(result)}); it does not exclude one.`,
     };
   const subject = subjectOf(result);
+  const told = `${words.told(result, context.cables)} more often than guessing allows`;
   return {
     row: '2',
-    headline: `${subject} told ${first} from ${second} more often than guessing allows.`,
-    maySay: `In a registered blind test with ${times(result.listeners, 'listener')}, ${subject.toLowerCase()} told ${first} from ${second} more often than guessing allows (${countOf(result)}). Level at the load was not recorded; loudness may explain the difference.`,
+    headline: `${subject} ${told}.`,
+    maySay: `In a registered blind test with ${times(result.listeners, 'listener')}, ${subject.toLowerCase()} ${told} (${countOf(result)}). Level at the load was not recorded; loudness may explain the difference.`,
   };
 }
 
 /**
- * The finding of an ABX study: exactly one headline, what modifies it, and what may be said.
+ * The finding of a method with one right answer: exactly one headline, what modifies it, and what may be said.
  *
  * The rows are those of the table in docs/spec/statistics.md that this analysis can reach: 0 the record does not hold,
  * 1 below chance, 2 a difference, 5 inconclusive.
  *
  * @param result  the registered result, as on the record
  * @param context what it was found about, and what the record shows
+ * @param words   the method's own
  */
-export function abxFinding(result: AbxResult, context: FindingContext): Finding {
-  const body = bodyOf(result, context);
+export function differenceFinding(
+  result: ForcedChoiceResult,
+  context: FindingContext,
+  words: DifferenceWords,
+): Finding {
+  const body = bodyOf(result, context, words);
   return {
     ...body,
     modifiers: [
+      ...(body.row === '1' && words.below !== undefined ? [words.below] : []),
       ...(body.row === '2' ? [...effect(result), ...namedListeners(result)] : []),
       ...(body.row === '5' ? [openQuestion(result), ...hints(result)] : []),
       ...courseModifiers(result, { tooFew: 'trials', missing: result.missingAnswers }, context),

@@ -34,14 +34,16 @@ export const pooledEstimates = z.strictObject({
     oneSidedLower: z.strictObject({ confidence: decimal, limit: decimal }),
     oneSidedUpper: z.strictObject({ confidence: decimal, limit: decimal }),
   }),
-  dPrime: z.strictObject({ differencing: sensitivity, independent: sensitivity }),
+  /** By the method's rules of deciding. */
+  dPrime: z.record(z.string(), sensitivity),
 });
 export type PooledEstimates = z.output<typeof pooledEstimates>;
 
-/** What the registered analysis of an ABX study comes to, as it stands on the record. */
-export const abxResult = z.strictObject({
+/** What the registered analysis of a method with one right answer comes to, as it stands on the record. */
+export const forcedChoiceResult = z.strictObject({
   ...resultFrame,
-  method: z.literal('abx'),
+  method: z.enum(['abx', 'triangle', 'duo-trio']),
+  chance: z.strictObject({ numerator: z.literal(1), denominator: z.int().min(2) }),
   missingAnswers: z.literal('counted as wrong'),
   /** The level is one-sided. */
   alternative: z.literal('greater'),
@@ -52,4 +54,4 @@ export const abxResult = z.strictObject({
   byListener: z.array(listenerResult),
   estimates: pooledEstimates.nullable(),
 });
-export type AbxResult = z.output<typeof abxResult>;
+export type ForcedChoiceResult = z.output<typeof forcedChoiceResult>;
