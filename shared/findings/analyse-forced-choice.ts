@@ -11,6 +11,7 @@ import { listenerResults } from './listener-results.ts';
 import { hasOwnDraws, requireDistinct } from './own-draws.ts';
 import { pooledEstimatesOf } from './pooled-estimates-of.ts';
 import { recordDecimal, recordDecimalOfFraction } from './record-decimal.ts';
+import { suspectTail } from './result-frame.ts';
 
 export interface ForcedChoiceData {
   /** The registered one-sided level as a decimal, strictly between 0 and 1: "0.05". */
@@ -19,10 +20,9 @@ export interface ForcedChoiceData {
   readonly listenersPerSession: number;
   /** All locked trials of all sessions, abandoned ones included. */
   readonly trials: readonly ForcedChoiceTrial[];
+  /** Of what the first cable was to have more, where the method asks for it. */
+  readonly attribute?: string | undefined;
 }
-
-/** At this lower tail or below, scores are too low for guessing and the labels are suspect. */
-const suspectTail: Fraction = { numerator: 1n, denominator: 100n };
 
 /**
  * The registered analysis of a method with one right answer: were the answers right more often than guessing explains?
@@ -43,7 +43,7 @@ const suspectTail: Fraction = { numerator: 1n, denominator: 100n };
  */
 export function analyseForcedChoice(
   question: ForcedChoice,
-  { alpha, listenersPerSession, trials }: ForcedChoiceData,
+  { alpha, listenersPerSession, trials, attribute }: ForcedChoiceData,
 ): ForcedChoiceResult {
   const chance = chanceOf(question);
   const level = parseDecimal(alpha);
@@ -62,6 +62,7 @@ export function analyseForcedChoice(
     stopping: 'fixed number of trials',
     missingAnswers: 'counted as wrong',
     alternative: 'greater',
+    ...(attribute === undefined ? {} : { attribute }),
     test: test.name,
     chance: { numerator: 1, denominator: chance.denominator },
     alpha,

@@ -1,7 +1,8 @@
+import { anyDifference } from '../findings/difference-finding.ts';
 import type { ForcedChoice } from '../findings/forced-choice.ts';
 import type { ForcedChoiceResult } from '../findings/forced-choice-result.ts';
 import { matchingByDistance, matchingByMidpoint } from '../statistics/psychometric.ts';
-import { anyDifference, forcedChoiceScoring } from './forced-choice-method.ts';
+import { forcedChoiceScoring } from './forced-choice-method.ts';
 import type { Method } from './method.ts';
 
 const side = (label: string | null): 'A' | 'B' => {

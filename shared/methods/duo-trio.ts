@@ -1,8 +1,9 @@
+import { anyDifference } from '../findings/difference-finding.ts';
 import type { ForcedChoice } from '../findings/forced-choice.ts';
 import type { ForcedChoiceResult } from '../findings/forced-choice-result.ts';
 import { matchingByDistance } from '../statistics/psychometric.ts';
 import { fittedAtFirst, oneAndOther, spokenPlace } from './familiarisation.ts';
-import { anyDifference, forcedChoiceScoring } from './forced-choice-method.ts';
+import { forcedChoiceScoring } from './forced-choice-method.ts';
 import type { CablePlace, Method } from './method.ts';
 
 const places = ['first', 'second'] as const;

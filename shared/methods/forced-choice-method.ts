@@ -1,9 +1,10 @@
 import { analyseForcedChoice } from '../findings/analyse-forced-choice.ts';
-import { type DifferenceWords, differenceFinding } from '../findings/difference-finding.ts';
+import { differenceFinding, type SoughtWords } from '../findings/difference-finding.ts';
 import { chanceOf, type ForcedChoice } from '../findings/forced-choice.ts';
 import { forcedChoiceNullDistribution } from '../findings/forced-choice-null-distribution.ts';
 import { forcedChoicePortrait } from '../findings/forced-choice-portrait.ts';
 import type { ForcedChoiceResult } from '../findings/forced-choice-result.ts';
+import { forcedChoiceWords } from '../findings/forced-choice-words.ts';
 import { percentOf } from '../findings/portrait-words.ts';
 import { oneSidedPlan } from '../statistics/planned-test.ts';
 import type { Method, ScoredAnswer, ScoredTrial, TrialWords } from './method.ts';
@@ -18,15 +19,9 @@ type Asked = {
   readonly question: ForcedChoice;
   /** The answer that a trial's truth makes right. */
   rightOf(truth: string): string;
-  readonly words: DifferenceWords;
+  readonly words: SoughtWords<ForcedChoiceResult>;
   /** "Two matched cables rarely give more than", before the rate of a small effect. */
   readonly smallEffect: string;
-};
-
-/** What a test finds that looks for any difference. */
-export const anyDifference: DifferenceWords = {
-  told: (_result, [first, second]) => `told ${first} from ${second}`,
-  sought: (_result, [first, second]) => `a difference between ${first} and ${second}`,
 };
 
 /** The scoring half of a method with one right answer: one analysis for them all, at the chance of its labels. */
@@ -43,13 +38,14 @@ export function forcedChoiceScoring({ question, rightOf, words, smallEffect }: A
   return {
     registered: () => ({ name: `${question.method}/1`, alternative: 'greater', missing: 'counted as wrong' }),
     planned: oneSidedPlan(chanceOf(question)),
-    analyse: ({ analysis: { alpha }, listenersPerSession }, trials) =>
-      analyseForcedChoice(question, { alpha, listenersPerSession, trials: trials.map(forcedChoiceTrial) }),
+    analyse: ({ analysis: { alpha }, listenersPerSession, attribute }, trials) =>
+      analyseForcedChoice(question, { alpha, listenersPerSession, attribute, trials: trials.map(forcedChoiceTrial) }),
     nullDistribution: (trials) => forcedChoiceNullDistribution(question, trials.map(forcedChoiceTrial)),
-    finding: (result, context) => differenceFinding(result, context, words),
+    finding: (result, context) => differenceFinding(result, context, { ...forcedChoiceWords, ...words }),
     plan: {
       needed: (count) => `${count} right`,
       underNull: 'are needed. If nobody hears a difference,',
+      unfixed: null,
       found: 'a difference',
       atRate: (rate) => `${percentOf(rate)} right`,
       counted: 'right answers',

@@ -45,6 +45,8 @@ export type PlanWords = {
   needed(count: number): string;
   /** What follows the number needed and its verb: "are needed. If nobody hears a difference," */
   readonly underNull: string;
+  /** Why no number can be fixed beforehand even for one listener, or null where one can. */
+  readonly unfixed: string | null;
   /** What such a test finds: "a difference". */
   readonly found: string;
   /** A rate at which the test is asked for its power: "60 % right". */

@@ -90,6 +90,7 @@ export const pairedPreference: Method<PreferenceResult> = {
   plan: {
     needed: (count) => `${count} for the same cable`,
     underNull: 'are needed, when every answer prefers one. If nobody prefers either,',
+    unfixed: null,
     found: 'a preference',
     atRate: (rate) => `${percentOf(rate)} for one cable`,
     counted: 'answers for one cable',

@@ -21,8 +21,10 @@ export interface PlannedTest {
   power(trials: number, alpha: number, rate: number): number;
   /** No draw of so many trials gives a p smaller than one in this many. */
   leastPDenominator(trials: number): bigint;
-  /** How many trials find that rate with 80 % power. */
-  needed(alpha: number, rate: number): SampleSize;
+  /** How many trials find that rate with 80 % power: the first number, and the one from which on all do. */
+  needed(alpha: number, rate: number): Pick<SampleSize, 'nFirst' | 'nSafe'>;
+  /** The largest number of trials that `needed` looks at. */
+  readonly searchedTo: number;
 }
 
 /**
@@ -45,6 +47,7 @@ export function oneSidedPlan(chance: Chance): PlannedTest {
     power: (trials, alpha, rate) => power(trials, chance, alpha, rate).power,
     leastPDenominator: (trials) => (denominator / numerator) ** BigInt(trials),
     needed: (alpha, rate) => sampleSize({ ...aim, chance, alpha, correctRate: rate }),
+    searchedTo: aim.limit,
   };
 }
 
@@ -61,4 +64,5 @@ export const twoSidedPlan: PlannedTest = {
   power: (trials, alpha, rate) => twoSidedPower(trials, alpha, rate).power,
   leastPDenominator: (trials) => 2n ** BigInt(trials - 1),
   needed: (alpha, rate) => twoSidedSampleSize({ ...aim, alpha, rate }),
+  searchedTo: aim.limit,
 };

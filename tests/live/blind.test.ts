@@ -99,6 +99,16 @@ const methods: Record<MethodId, Asked> = {
     choices: ['first', 'second', 'second', 'first', 'second'],
     drawn: likeTheFirst,
   },
+  'same-different': {
+    study: { method: 'same-different' },
+    choices: ['same', 'different', 'different', 'same', 'same'],
+    drawn: likeTheFirst,
+  },
+  'directional-comparison': {
+    study: { method: 'directional-comparison', attribute: 'bass' },
+    choices: ['first', 'second', 'second', 'first', 'second'],
+    drawn: firstCodes,
+  },
   'paired-preference': {
     study: { method: 'paired-preference', methodSettings: ['no-preference'] },
     choices: ['first', 'second', 'none', 'first', 'second'],

@@ -61,6 +61,14 @@ const methods: Asked[] = [
     truth: order,
     rules: { differencing: byDistance },
   },
+  {
+    study: { method: 'directional-comparison', attribute: 'bass' },
+    labels: ['first', 'second'],
+    question: 'Which one had more bass?',
+    right: ([first], firstCode) => (first === firstCode ? 'first' : 'second'),
+    truth: ([first], firstCode) => (first === firstCode ? 'first' : 'second'),
+    rules: { 'more-of-it': 'function(d) pnorm(d / sqrt(2))' },
+  },
 ];
 
 /** What R makes of the answers. */

@@ -1,11 +1,11 @@
 import { describe, expect, it } from 'vitest';
 import { analyseForcedChoice } from '#shared/findings/analyse-forced-choice.ts';
-import { differenceFinding } from '#shared/findings/difference-finding.ts';
+import { anyDifference, differenceFinding } from '#shared/findings/difference-finding.ts';
 import { type Finding, type FindingContext, finding } from '#shared/findings/finding.ts';
 import type { ForcedChoiceResult } from '#shared/findings/forced-choice-result.ts';
 import type { ForcedChoiceTrial } from '#shared/findings/forced-choice-trials.ts';
+import { forcedChoiceWords } from '#shared/findings/forced-choice-words.ts';
 import { abxQuestion } from '#shared/methods/abx.ts';
-import { anyDifference } from '#shared/methods/forced-choice-method.ts';
 
 const context: FindingContext = {
   cables: ['Northern run', 'Southern run'],
@@ -15,7 +15,7 @@ const context: FindingContext = {
 };
 
 const abxFinding = (result: ForcedChoiceResult, about: FindingContext) =>
-  differenceFinding(result, about, anyDifference);
+  differenceFinding(result, about, { ...forcedChoiceWords, ...anyDifference });
 
 /** One row per seat: how many of the first trials that listener has right. X is always A. */
 function together(trials: number, right: readonly number[]): ForcedChoiceTrial[] {

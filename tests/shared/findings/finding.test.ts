@@ -1,10 +1,10 @@
 import { describe, expect, it } from 'vitest';
 import { analyseForcedChoice } from '#shared/findings/analyse-forced-choice.ts';
-import { differenceFinding } from '#shared/findings/difference-finding.ts';
+import { anyDifference, differenceFinding } from '#shared/findings/difference-finding.ts';
 import type { FindingContext } from '#shared/findings/finding.ts';
 import type { ForcedChoiceResult } from '#shared/findings/forced-choice-result.ts';
+import { forcedChoiceWords } from '#shared/findings/forced-choice-words.ts';
 import { abxQuestion } from '#shared/methods/abx.ts';
-import { anyDifference } from '#shared/methods/forced-choice-method.ts';
 
 const context: FindingContext = {
   cables: ['Northern run', 'Southern run'],
@@ -14,7 +14,7 @@ const context: FindingContext = {
 };
 
 const abxFinding = (result: ForcedChoiceResult, about: FindingContext) =>
-  differenceFinding(result, about, anyDifference);
+  differenceFinding(result, about, { ...forcedChoiceWords, ...anyDifference });
 
 /** A study in which each of some listeners is right in the first `right` trials; the last `silent` of them are missing. */
 function study(listeners: number, trials: number, right: number, silent = 0) {

@@ -1,14 +1,15 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { analyseForcedChoice } from '#shared/findings/analyse-forced-choice.ts';
-import { differenceFinding } from '#shared/findings/difference-finding.ts';
+import { anyDifference, differenceFinding } from '#shared/findings/difference-finding.ts';
 import type { FindingContext } from '#shared/findings/finding.ts';
 import { chanceOf, type ForcedChoice } from '#shared/findings/forced-choice.ts';
 import { forcedChoiceNullDistribution } from '#shared/findings/forced-choice-null-distribution.ts';
 import type { ForcedChoiceTrial } from '#shared/findings/forced-choice-trials.ts';
+import { forcedChoiceWords } from '#shared/findings/forced-choice-words.ts';
 import { abxQuestion } from '#shared/methods/abx.ts';
+import { directionalQuestion } from '#shared/methods/directional-comparison.ts';
 import { duoTrioQuestion } from '#shared/methods/duo-trio.ts';
-import { anyDifference } from '#shared/methods/forced-choice-method.ts';
 import { methods, registeredResult } from '#shared/methods/methods.ts';
 import { triangleQuestion } from '#shared/methods/triangle.ts';
 import { binomialLogProbability } from '#shared/statistics/binomial-log-probability.ts';
@@ -16,10 +17,9 @@ import { exactBinomialUpperTail } from '#shared/statistics/exact-binomial.ts';
 import { compareFractions } from '#shared/statistics/fraction.ts';
 import { planFigures } from '#shared/statistics/plan-figures.ts';
 
-const questions: [string, ForcedChoice][] = [abxQuestion, triangleQuestion, duoTrioQuestion].map((question) => [
-  question.method,
-  question,
-]);
+const questions: [string, ForcedChoice][] = [abxQuestion, triangleQuestion, duoTrioQuestion, directionalQuestion].map(
+  (question) => [question.method, question],
+);
 const listeners = ['L01', 'L02', 'L03', 'L04'];
 
 const analyse = (question: ForcedChoice, trials: readonly ForcedChoiceTrial[], alpha = '0.05') =>
@@ -166,12 +166,57 @@ describe('a triangle', () => {
       setting: 'player, amplifier, loudspeakers',
     };
     const row = (right: number) =>
-      differenceFinding(analyse(triangleQuestion, alone(triangleQuestion, right, 30 - right)), context, anyDifference);
+      differenceFinding(analyse(triangleQuestion, alone(triangleQuestion, right, 30 - right)), context, {
+        ...forcedChoiceWords,
+        ...anyDifference,
+      });
     expect(row(16)).toMatchObject({
       row: '2',
       headline: 'One listener told Northern run from Southern run more often than guessing allows.',
     });
     expect(row(12).row).toBe('5');
     expect(row(2).row).toBe('1');
+  });
+});
+
+describe('a directional comparison', () => {
+  const context: FindingContext = {
+    cables: ['Northern run', 'Southern run'],
+    gate: { commitmentsHold: true, allTrialsAccounted: true, isBlind: true },
+    endedEarly: null,
+    setting: 'player, amplifier, loudspeakers',
+  };
+  const method = methods['directional-comparison'];
+  const result = (right: number) =>
+    analyseForcedChoice(directionalQuestion, {
+      alpha: '0.05',
+      listenersPerSession: 1,
+      attribute: 'bass',
+      trials: alone(directionalQuestion, right, 20 - right),
+    });
+
+  it('seals its direction with the analysis, and asks for more of its attribute [C4]', () => {
+    expect(method.registered({ attribute: 'bass' })).toEqual({
+      name: 'directional-comparison/1',
+      alternative: 'greater',
+      missing: 'counted as wrong',
+      direction: 'more in the first cable',
+    });
+    expect(method.question({ attribute: 'bass' })).toBe('Which one had more bass?');
+    expect(result(15).attribute).toBe('bass');
+  });
+
+  // R: binom.test(15, 20, alternative = "greater")$p.value = 0.02069
+  it('finds more of it in the first cable alone [C4]', () => {
+    expect(method.finding(result(15), context)).toMatchObject({
+      row: '2',
+      headline: 'One listener found more bass in Northern run than in Southern run more often than guessing allows.',
+    });
+    expect(method.finding(result(10), context).headline).toBe(
+      'Inconclusive. The test did not detect more bass in Northern run than in Southern run, and does not exclude it.',
+    );
+    const reversed = method.finding(result(3), context);
+    expect(reversed).toMatchObject({ row: '1', maySay: null });
+    expect(reversed.modifiers.join(' ')).toContain('that the other cable has more of it is no finding');
   });
 });

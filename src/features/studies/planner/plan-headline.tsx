@@ -13,12 +13,25 @@ export function PlanHeadline({ plan }: { plan: Plan }) {
 function OwnDraws({ plan }: { plan: Plan }) {
   const { critical } = plan.figures;
   const words = plan.method.plan;
+  if (words.unfixed !== null) return <Unfixed plan={plan} why={words.unfixed} />;
   if (critical === null) return <OutOfReach plan={plan} />;
   return (
     <Headline>
       Plan <Planned>{plan.trials} trials</Planned>. <Planned>{words.needed(critical.count)}</Planned> {words.underNull}{' '}
       <Planned>{percent(critical.attainedSize)}</Planned> of such tests find {words.found}.
     </Headline>
+  );
+}
+
+/** A test whose number to reach is known only once the draws and the answers are. */
+function Unfixed({ plan, why }: { plan: Plan; why: string }) {
+  return (
+    <div className="flex flex-col gap-3">
+      <Headline>
+        Plan <Planned>{plan.trials} trials</Planned>. No fixed number of {plan.method.plan.counted} can be promised.
+      </Headline>
+      <p>{why}</p>
+    </div>
   );
 }
 

@@ -1,3 +1,4 @@
+import { useMemo } from 'react';
 import { formatCount } from '../../../lib/format.ts';
 import type { Plan } from './plan-of.ts';
 import { powerPercent } from './plan-words.ts';
@@ -8,7 +9,7 @@ import { powerCurve } from './power-curve.ts';
 export function PlanSaw({ plan }: { plan: Plan }) {
   const { planned, plan: words } = plan.method;
   const [, drawnRate] = planned.rates;
-  const { nFirst, nSafe } = planned.needed(plan.alpha, drawnRate);
+  const { nFirst, nSafe } = useMemo(() => planned.needed(plan.alpha, drawnRate), [planned, plan.alpha, drawnRate]);
   return (
     <section className="flex flex-col gap-3">
       <h3 className="text-lg">Why more trials do not always help</h3>
