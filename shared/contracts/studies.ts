@@ -44,6 +44,8 @@ export const studyDraft = z
     method: z.enum(methodIds),
     /** The settings of the method that are on; left out where there are none. */
     methodSettings: z.array(z.string().max(40)).max(10).optional(),
+    /** Of what one cable is asked to have more; left out or empty where the method asks for none. */
+    attribute: line(30).optional(),
     cables: z.tuple([chosenCable, chosenCable]),
     sessions: whole(1, 20, 'sessions'),
     listenersPerSession: whole(1, 24, 'listeners'),
@@ -77,6 +79,15 @@ export const studyDraft = z
         input: methodSettings,
         path: ['methodSettings'],
         message: `Choose among the settings of ${methods[method].name}, each once`,
+      });
+    const { attribute = '' } = check.value;
+    const isAsked = methods[method].attribute !== null;
+    if (isAsked !== attribute.length > 0)
+      check.issues.push({
+        code: 'custom',
+        input: attribute,
+        path: ['attribute'],
+        message: isAsked ? 'Name it in a word or two, such as bass' : `${methods[method].name} asks for no attribute`,
       });
   });
 export type StudyDraft = z.output<typeof studyDraft>;

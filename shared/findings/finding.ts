@@ -64,3 +64,8 @@ export function courseModifiers(
 
 export const scopeOf = ({ setting }: FindingContext): string =>
   `It holds for these cables, these listeners, this programme and this system: ${setting}`;
+
+/** Limits over several listeners' own draws are about these answers, not about people. */
+export function averageWords({ listeners }: Pick<ResultFrame, 'listeners'>): string {
+  return listeners > 1 ? ' These figures are the average over this panel’s answers, not about people in general.' : '';
+}

@@ -1,9 +1,9 @@
-import { evenChance } from '../statistics/chance.ts';
+import type { Chance } from '../statistics/chance.ts';
 import { exactBinomialUpperTail } from '../statistics/exact-binomial.ts';
 import { type Fraction, fractionToNumber } from '../statistics/fraction.ts';
 import { holm } from '../statistics/holm.ts';
-import type { ListenerResult } from './abx-result.ts';
-import type { AbxTrial } from './abx-trials.ts';
+import type { ListenerResult } from './forced-choice-result.ts';
+import type { ForcedChoiceTrial } from './forced-choice-trials.ts';
 import { intervalWithMissing } from './interval-with-missing.ts';
 import { recordDecimal } from './record-decimal.ts';
 
@@ -15,14 +15,19 @@ import { recordDecimal } from './record-decimal.ts';
  *
  * @param trials all locked trials
  * @param level  the registered level
+ * @param chance chance of a right answer by guessing
  * @returns counts, exact p, Holm-adjusted p and a 95 % interval of the rate of right answers, per listener
  * @example a listener with 9 of 12 right, alone: p = 299/4096 = 0.0730 ; R: pbinom(8, 12, 0.5, lower.tail = FALSE)
  * @see holm and exactBinomialUpperTail for the sources
  */
-export function listenerResults(trials: readonly AbxTrial[], level: Fraction): ListenerResult[] {
+export function listenerResults(
+  trials: readonly ForcedChoiceTrial[],
+  level: Fraction,
+  chance: Chance,
+): ListenerResult[] {
   const counts = [...countsByListener(trials)].sort(([a], [b]) => (a < b ? -1 : 1));
   const pValues = counts.map(([, { correct, answers }]) =>
-    fractionToNumber(exactBinomialUpperTail(correct, answers, evenChance)),
+    fractionToNumber(exactBinomialUpperTail(correct, answers, chance)),
   );
   const alpha = fractionToNumber(level);
   const adjusted = holm(pValues);
@@ -44,15 +49,15 @@ interface Counts {
   correct: number;
 }
 
-function countsByListener(trials: readonly AbxTrial[]): Map<string, Counts> {
+function countsByListener(trials: readonly ForcedChoiceTrial[]): Map<string, Counts> {
   const counts = new Map<string, Counts>();
-  for (const { truth, answers } of trials) {
+  for (const { right, answers } of trials) {
     for (const { listener, choice } of answers) {
       const before = counts.get(listener) ?? { answers: 0, missing: 0, correct: 0 };
       counts.set(listener, {
         answers: before.answers + 1,
         missing: before.missing + (choice === null ? 1 : 0),
-        correct: before.correct + (choice === truth ? 1 : 0),
+        correct: before.correct + (choice === right ? 1 : 0),
       });
     }
   }

@@ -1,8 +1,8 @@
 import { aboveGuessingRate, intervalAboveGuessing } from '../statistics/above-guessing.ts';
-import { evenChance } from '../statistics/chance.ts';
 import { clopperPearsonLower, clopperPearsonUpper, type Interval } from '../statistics/clopper-pearson.ts';
-import { type AbxModel, abxDPrime, abxDPrimeInterval } from '../statistics/d-prime.ts';
-import type { PooledEstimates } from './abx-result.ts';
+import { dPrimeAt, dPrimeLimits } from '../statistics/psychometric.ts';
+import { chanceOf, type DecidingRule, type ForcedChoice } from './forced-choice.ts';
+import type { PooledEstimates } from './forced-choice-result.ts';
 import { limitsWithMissing, recordInterval } from './interval-with-missing.ts';
 import { recordDecimal, recordLimit } from './record-decimal.ts';
 
@@ -17,19 +17,22 @@ const upperConfidence = 0.95;
  *
  * @param counts right answers, missing ones and all that were due, at least 1
  * @param alpha  the registered level as a decimal
+ * @param question the labels, which give the chance, and the rules by which d′ is stated
  * @returns the estimates in the form that goes on the record
  * @throws RangeError when a count is outside its domain
- * @example 12 of 16, alpha "0.05": rate 0.75, above guessing 0.5 (one-sided lower limit 0.0312), d′ 2.02 and 1.79
- * @see aboveGuessing, clopperPearson and abxDPrime for the sources
+ * @example 12 of 16 in ABX, alpha "0.05": rate 0.75, above guessing 0.5 (one-sided lower limit 0.0312), d′ 2.02 and 1.79
+ * @see aboveGuessing, clopperPearson and dPrimeAt for the sources
  */
 export function pooledEstimatesOf(
   { matching, missing, answers }: { matching: number; missing: number; answers: number },
   alpha: string,
+  question: ForcedChoice,
 ): PooledEstimates {
+  const chance = chanceOf(question);
   const rate = matching / answers;
   const limits = limitsWithMissing(matching, missing, answers);
-  const rawRate = aboveGuessingRate(rate, evenChance);
-  const { raw, clipped } = intervalAboveGuessing(limits, evenChance);
+  const rawRate = aboveGuessingRate(rate, chance);
+  const { raw, clipped } = intervalAboveGuessing(limits, chance);
   const lowerConfidence = 1 - Number(alpha);
   return {
     correctRate: recordDecimal(rate),
@@ -39,24 +42,31 @@ export function pooledEstimatesOf(
       rate: recordDecimal(Math.max(0, rawRate)),
       rawInterval: recordInterval(raw),
       interval: recordInterval(clipped),
-      oneSidedLower: oneSided(lowerConfidence, clopperPearsonLower(matching, answers, lowerConfidence)),
-      oneSidedUpper: oneSided(upperConfidence, clopperPearsonUpper(matching + missing, answers, upperConfidence)),
+      oneSidedLower: oneSided(lowerConfidence, clopperPearsonLower(matching, answers, lowerConfidence), chance),
+      oneSidedUpper: oneSided(
+        upperConfidence,
+        clopperPearsonUpper(matching + missing, answers, upperConfidence),
+        chance,
+      ),
     },
-    dPrime: {
-      differencing: sensitivity(rate, limits, 'differencing'),
-      independent: sensitivity(rate, limits, 'independent'),
-    },
+    dPrime: Object.fromEntries(
+      Object.entries(question.rules).map(([name, rule]) => [name, sensitivity(rate, limits, rule)]),
+    ),
   };
 }
 
-function oneSided(confidence: number, correctRate: number): { confidence: string; limit: string } {
+function oneSided(
+  confidence: number,
+  correctRate: number,
+  chance: ReturnType<typeof chanceOf>,
+): { confidence: string; limit: string } {
   return {
     confidence: recordDecimal(confidence),
-    limit: recordDecimal(Math.max(0, aboveGuessingRate(correctRate, evenChance))),
+    limit: recordDecimal(Math.max(0, aboveGuessingRate(correctRate, chance))),
   };
 }
 
-function sensitivity(rate: number, limits: Interval, model: AbxModel): PooledEstimates['dPrime'][AbxModel] {
-  const { lower, upper } = abxDPrimeInterval(limits, model);
-  return { dPrime: recordLimit(abxDPrime(rate, model)), lower: recordLimit(lower), upper: recordLimit(upper) };
+function sensitivity(rate: number, limits: Interval, { psychometric }: DecidingRule) {
+  const { lower, upper } = dPrimeLimits(psychometric, limits);
+  return { dPrime: recordLimit(dPrimeAt(psychometric, rate)), lower: recordLimit(lower), upper: recordLimit(upper) };
 }

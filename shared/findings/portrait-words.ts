@@ -5,6 +5,7 @@ import type { ResultFrame } from './result-frame.ts';
 export const testWords: Record<ResultFrame['test'], string> = {
   'exact-binomial': 'exact binomial test',
   'shared-presentations': 'exact shared-presentation test',
+  'fixed-different-trials': 'exact test over assignments',
 };
 
 /** Decimal text of the record as a percentage, limits rounded so that they claim less: "0.476206" as a lower one is "47 %". */

@@ -106,7 +106,7 @@ function listenersOf(result: PreferenceResult, cables: CableNames): Portrait['li
     chart: {
       caption: `Share of answers for ${cables[lead]} by listener, with ${confidence} Clopper-Pearson intervals`,
       quantity: `Answers for ${cables[lead]}`,
-      middle: 'no preference',
+      middle: { value: 0.5, words: 'no preference' },
       rows: byListener.flatMap((own) => {
         if (own.interval === null) return [];
         const [low, high] = limitsOf(own.interval, lead);

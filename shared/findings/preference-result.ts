@@ -30,6 +30,7 @@ export const preferenceResult = z.strictObject({
   method: z.literal('paired-preference'),
   missingAnswers: z.literal('left out'),
   alternative: z.literal('two-sided'),
+  chance: z.strictObject({ numerator: z.literal(1), denominator: z.literal(2) }),
   noPreference: z.enum(['offered, left out of the test', 'not offered']),
   undecided: count,
   /** Answers that preferred one cable: what the test runs over. */

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import type { Fraction } from '../statistics/fraction.ts';
 import { recordDecimalPattern } from './record-decimal.ts';
 
 // What the registered results of all methods have in common, as they stand on the record: whole numbers and decimal
@@ -13,8 +14,7 @@ export const interval = z.strictObject({ confidence: decimal, lower: decimal, up
 export const resultFrame = {
   randomisation: z.literal('independent fair draw per trial'),
   stopping: z.literal('fixed number of trials'),
-  test: z.enum(['exact-binomial', 'shared-presentations']),
-  chance: z.strictObject({ numerator: z.literal(1), denominator: z.literal(2) }),
+  test: z.enum(['exact-binomial', 'shared-presentations', 'fixed-different-trials']),
   /** As registered. */
   alpha: z.string(),
   listenersPerSession: count,
@@ -35,3 +35,6 @@ export const resultFrame = {
 };
 const frame = z.strictObject(resultFrame);
 export type ResultFrame = z.output<typeof frame>;
+
+/** At this lower tail or below, answers go against the draw more than guessing explains and the labels are suspect. */
+export const suspectTail: Fraction = { numerator: 1n, denominator: 100n };

@@ -1,6 +1,7 @@
 import type { Finding, FindingContext } from '../findings/finding.ts';
 import type { ResultFrame } from '../findings/result-frame.ts';
 import type { RegisteredAnalysis } from '../protocol/registered-analysis.ts';
+import type { PlannedTest } from '../statistics/planned-test.ts';
 import type { RegisteredResult } from './methods.ts';
 import type { Portrait } from './portrait.ts';
 
@@ -16,6 +17,14 @@ export type ScoredTrial = {
 /** One of the protocol's two cables, in its order. */
 export type CablePlace = 0 | 1;
 export type CableNames = readonly [string, string];
+
+/** What a study chooses about its method, as it stands in the draft, in the protocol and in a session's plan. */
+export type MethodChoices = {
+  /** The settings that are on. */
+  readonly methodSettings?: readonly string[] | undefined;
+  /** Of what one cable is asked to have more, where the method asks for an attribute. */
+  readonly attribute?: string | undefined;
+};
 
 /** Something about the method that a study fixes with a yes or a no; the protocol lists those that are on. */
 export type MethodSetting = { readonly id: string; readonly label: string; readonly hint: string };
@@ -36,22 +45,24 @@ export type PlanWords = {
   needed(count: number): string;
   /** What follows the number needed and its verb: "are needed. If nobody hears a difference," */
   readonly underNull: string;
+  /** Why no number can be fixed beforehand even for one listener, or null where one can. */
+  readonly unfixed: string | null;
   /** What such a test finds: "a difference". */
   readonly found: string;
-  /** "right", after a percentage: at that rate the test is asked for its power. */
-  readonly atRate: string;
+  /** A rate at which the test is asked for its power: "60 % right". */
+  atRate(rate: number): string;
   /** The counted answers: "right answers". */
   readonly counted: string;
-  /** Of one trial, under guessing, before the percentage. */
-  readonly guessing: string;
+  /** Of one trial, under guessing, before the percentage; null where nothing of the kind is counted. */
+  readonly guessing: string | null;
   /** Even the most extreme count is out of reach: "even with every answer right". */
   readonly extreme: string;
   /** Before the percentage of a small effect that is easily missed. */
   readonly smallEffect: string;
   /** What a result that found nothing does not show. */
   readonly notShown: string;
-  /** What the method's settings do to the plan. */
-  caution(settings: readonly string[]): string | null;
+  /** What the study's choices do to the plan. */
+  caution(choices: MethodChoices): { readonly title: string; readonly words: string } | null;
 };
 
 /** How the trials of a session stand in a report. */
@@ -79,6 +90,8 @@ export type Method<R extends ResultFrame = RegisteredResult> = {
   /** What a listener is told the test is, in one or two sentences. */
   readonly explanation: string;
   readonly settings: readonly MethodSetting[];
+  /** How a study is asked for an attribute, or null where the method needs none. */
+  readonly attribute: { readonly label: string; readonly hint: string } | null;
 
   // How a trial is drawn and presented.
 
@@ -100,20 +113,26 @@ export type Method<R extends ResultFrame = RegisteredResult> = {
 
   /** A presentation in a sentence: "You are hearing ...". */
   spoken(presentation: string): string;
-  readonly question: string;
+  question(choices: MethodChoices): string;
   /** Said during the last presentation. */
   readonly announcement: string;
-  options(settings: readonly string[]): readonly AnswerOption[];
+  options(choices: MethodChoices): readonly AnswerOption[];
 
   // How answers are scored.
 
   /** The part of the registered analysis that the method fixes. */
-  registered(settings: readonly string[]): Pick<RegisteredAnalysis, 'name' | 'alternative' | 'missing' | 'undecided'>;
-  /** Chance of an answer on the counted side when nothing is heard, as a fraction. */
-  readonly chance: { readonly numerator: number; readonly denominator: number };
+  registered(
+    choices: MethodChoices,
+  ): Pick<RegisteredAnalysis, 'name' | 'alternative' | 'missing' | 'undecided' | 'direction'>;
+  /** The same test as the planner asks it, with one answer per trial. */
+  readonly planned: PlannedTest;
   /** The registered analysis: a pure function of the sealed value and the counted trials. */
   analyse(
-    plan: { readonly analysis: RegisteredAnalysis; readonly listenersPerSession: number },
+    plan: {
+      readonly analysis: RegisteredAnalysis;
+      readonly listenersPerSession: number;
+      readonly attribute?: string | undefined;
+    },
     trials: readonly ScoredTrial[],
   ): R;
   /** Where the registered count falls when nothing is heard: the test's own distribution. */

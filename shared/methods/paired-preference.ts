@@ -1,12 +1,16 @@
 import { analysePreference } from '../findings/analyse-preference.ts';
+import { percentOf } from '../findings/portrait-words.ts';
 import { preferenceFinding } from '../findings/preference-finding.ts';
 import { preferenceNullDistribution } from '../findings/preference-null-distribution.ts';
 import { preferencePortrait } from '../findings/preference-portrait.ts';
 import type { PreferenceResult } from '../findings/preference-result.ts';
 import { type PreferenceChoice, preferredCable } from '../findings/preference-trials.ts';
-import type { AnswerOption, Method, ScoredAnswer, ScoredTrial } from './method.ts';
+import { twoSidedPlan } from '../statistics/planned-test.ts';
+import { fittedAtFirst, spokenPlace } from './familiarisation.ts';
+import type { AnswerOption, Method, MethodChoices, ScoredAnswer, ScoredTrial } from './method.ts';
 
 const noPreference = 'no-preference';
+const offersNone = ({ methodSettings = [] }: MethodChoices) => methodSettings.includes(noPreference);
 
 const place = (label: string): 'first' | 'second' => {
   if (label === 'first' || label === 'second') return label;
@@ -50,32 +54,29 @@ export const pairedPreference: Method<PreferenceResult> = {
       hint: 'Such answers are left out of the test and stated beside the result. Without it, every answer must prefer one.',
     },
   ],
+  attribute: null,
 
   truths: ['first', 'second'],
   presentations: ['first', 'second'],
   familiarisation: ['first', 'second'],
   fitted: (presentation, truth, firstSide) => {
-    const isFirstCable = truth === null ? (presentation === 'first') === (firstSide === 0) : presentation === truth;
-    return isFirstCable ? 0 : 1;
+    if (truth === null) return fittedAtFirst(presentation === 'first', firstSide);
+    return presentation === truth ? 0 : 1;
   },
   fitterCouldSee: 'Whoever fits the cables could still see which code came first in a trial.',
 
-  spoken: (presentation) => `the ${presentation}`,
-  question: 'Which do you prefer?',
+  spoken: spokenPlace,
+  question: () => 'Which do you prefer?',
   announcement: 'Next you say which you prefer.',
-  options: (settings) => [
-    ofPlace('first', '1'),
-    ofPlace('second', '2'),
-    ...(settings.includes(noPreference) ? [ofNone] : []),
-  ],
+  options: (choices) => [ofPlace('first', '1'), ofPlace('second', '2'), ...(offersNone(choices) ? [ofNone] : [])],
 
-  registered: (settings) => ({
+  registered: (choices) => ({
     name: 'paired-preference/1',
     alternative: 'two-sided',
     missing: 'left out',
-    ...(settings.includes(noPreference) ? { undecided: 'left out' } : {}),
+    ...(offersNone(choices) ? { undecided: 'left out' } : {}),
   }),
-  chance: { numerator: 1, denominator: 2 },
+  planned: twoSidedPlan,
   analyse: ({ analysis: { alpha, undecided }, listenersPerSession }, trials) =>
     analysePreference({
       alpha,
@@ -89,16 +90,21 @@ export const pairedPreference: Method<PreferenceResult> = {
   plan: {
     needed: (count) => `${count} for the same cable`,
     underNull: 'are needed, when every answer prefers one. If nobody prefers either,',
+    unfixed: null,
     found: 'a preference',
-    atRate: 'for one cable',
+    atRate: (rate) => `${percentOf(rate)} for one cable`,
     counted: 'answers for one cable',
     guessing: 'Without a preference an answer falls on either cable',
     extreme: 'even with every answer for the same cable, indifference does as well',
     smallEffect: 'A slight preference gives perhaps',
     notShown: 'A test that finds no preference does not show that both are liked equally.',
-    caution: (settings) =>
-      settings.includes(noPreference)
-        ? 'The figures hold when every answer prefers one. Every answer of “no preference” is left out and takes from them.'
+    caution: (choices) =>
+      offersNone(choices)
+        ? {
+            title: '“No preference” is on offer.',
+            words:
+              'The figures hold when every answer prefers one. Every answer of “no preference” is left out and takes from them.',
+          }
         : null,
   },
   trials: {

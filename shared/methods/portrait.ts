@@ -31,8 +31,8 @@ export type Portrait = {
     readonly chart: {
       readonly caption: string;
       readonly quantity: string;
-      /** What the line stands for, before its value: "guessing". */
-      readonly middle: string;
+      /** The value that comes of nothing, drawn as a line, and what it stands for: "guessing". Null where there is none. */
+      readonly middle: { readonly value: number; readonly words: string } | null;
       readonly rows: readonly {
         readonly label: string;
         readonly value: number;

@@ -16,10 +16,10 @@ export function runRegistered(
   held: readonly HeldChoice[],
 ): RegisteredResult {
   const method = methodOf(id);
-  const { name } = method.registered(design.methodSettings ?? []);
+  const { name } = method.registered(design);
   if (analysis.name !== name) throw new RangeError(`the protocol registers ${analysis.name}; this version has ${name}`);
   return method.analyse(
-    { analysis, listenersPerSession: design.listenersPerSession },
+    { analysis, listenersPerSession: design.listenersPerSession, attribute: design.attribute },
     countedTrials(method, states, key, held),
   );
 }

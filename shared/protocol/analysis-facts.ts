@@ -1,12 +1,16 @@
 import type { RegisteredAnalysis } from './registered-analysis.ts';
 
-type Registered = Pick<RegisteredAnalysis, 'alternative' | 'missing' | 'undecided' | 'stopping' | 'exclusions'>;
+type Registered = Pick<
+  RegisteredAnalysis,
+  'alternative' | 'missing' | 'undecided' | 'direction' | 'stopping' | 'exclusions'
+>;
 
 /** What is registered about the analysis, in the words of every page that shows a protocol. */
 export function analysisFacts(analysis: Registered): { label: string; value: string }[] {
-  const { alternative, missing, undecided, stopping, exclusions } = analysis;
+  const { alternative, missing, undecided, direction, stopping, exclusions } = analysis;
   return [
     { label: 'Test', value: `exact, ${alternative === 'greater' ? 'one-sided' : 'two-sided'}` },
+    ...(direction === undefined ? [] : [{ label: 'Direction', value: `fixed in advance: ${direction}` }]),
     { label: 'Missing answers', value: missing },
     ...(undecided === undefined
       ? []

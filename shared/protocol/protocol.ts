@@ -3,6 +3,7 @@ import { cableKinds } from '../contracts/cables.ts';
 import { rigs, type StudyDraft } from '../contracts/studies.ts';
 import { canonicalJson } from '../ledger/canonical-json.ts';
 import { digest } from '../ledger/digest.ts';
+import type { MethodChoices } from '../methods/method.ts';
 import { methodOf } from '../methods/methods.ts';
 import type { SessionPlan } from '../session/events.ts';
 import { registeredAnalysis } from './registered-analysis.ts';
@@ -36,6 +37,8 @@ export const protocol = z.strictObject({
     confidence: z.boolean(),
     /** The settings of the method that are on; left out where there are none. */
     methodSettings: z.array(z.string()).optional(),
+    /** Of what one cable is asked to have more; left out where the method asks for none. */
+    attribute: z.string().optional(),
     codeHolder: z.uuid(),
   }),
   conduct: z.strictObject({
@@ -55,9 +58,15 @@ export function alphaText(perMille: number): string {
   return (perMille / 1000).toString();
 }
 
-/** Settings in one order, whatever the order in which they were ticked, and no field where there are none. */
-function onlyIfAny(settings: readonly string[] = []): { methodSettings?: string[] } {
-  return settings.length === 0 ? {} : { methodSettings: [...settings].sort() };
+/** Settings in one order, whatever the order in which they were ticked, and no field where nothing was chosen. */
+function chosenOf({ methodSettings = [], attribute = '' }: MethodChoices): {
+  methodSettings?: string[];
+  attribute?: string;
+} {
+  return {
+    ...(methodSettings.length === 0 ? {} : { methodSettings: [...methodSettings].sort() }),
+    ...(attribute === '' ? {} : { attribute }),
+  };
 }
 
 /** The protocol that a draft comes to, with its cables spelt out as they are now. */
@@ -80,7 +89,7 @@ export function protocolFromDraft(
       trials: draft.trials,
       spares: draft.spares,
       confidence: draft.confidence,
-      ...onlyIfAny(draft.methodSettings),
+      ...chosenOf(draft),
       codeHolder: draft.codeHolderId,
     },
     conduct: {
@@ -91,7 +100,7 @@ export function protocolFromDraft(
       programme: draft.programme.map(({ title, start, lengthS }) => ({ title, start, lengthS })),
     },
     analysis: {
-      ...methodOf(draft.method).registered(draft.methodSettings ?? []),
+      ...methodOf(draft.method).registered(draft),
       alpha: alphaText(draft.alphaPerMille),
       stopping: 'fixed number of trials',
       exclusions: 'none',
@@ -108,7 +117,7 @@ export function protocolDigest(value: Protocol): string {
 export function sessionPlanOf({ method, design, conduct }: Protocol): SessionPlan {
   return {
     method,
-    ...onlyIfAny(design.methodSettings),
+    ...chosenOf(design),
     trials: design.trials,
     spares: design.spares,
     rig: conduct.rig,

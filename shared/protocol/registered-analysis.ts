@@ -10,6 +10,8 @@ export const registeredAnalysis = z.strictObject({
   missing: z.enum(['counted as wrong', 'left out']),
   /** Answers that state no preference; there only where the study offers that answer. */
   undecided: z.literal('left out').optional(),
+  /** Which cable is expected to have more of the attribute; there only where the method asks for one. */
+  direction: z.literal('more in the first cable').optional(),
   stopping: z.literal('fixed number of trials'),
   exclusions: z.literal('none'),
 });

@@ -12,6 +12,7 @@ const trial = z.int().min(0);
 export const sessionPlan = z.strictObject({
   method: z.string(),
   methodSettings: z.array(z.string()).optional(),
+  attribute: z.string().optional(),
   trials: z.int(),
   spares: z.int(),
   rig: z.enum(['loudspeaker', 'line', 'headphone']),

@@ -46,7 +46,7 @@ export function presentationNow({ trial }: SessionState, method: Method): string
   return presentation;
 }
 /** The answers that a session offers. */
-export const optionsOf = ({ plan }: SessionState, method: Method) => method.options(plan.methodSettings ?? []);
+export const optionsOf = ({ plan }: SessionState, method: Method) => method.options(plan);
 
 /** The step to be confirmed now, or null outside a change. */
 export function nextStep(trial: OpenTrial) {

@@ -1,7 +1,14 @@
 import { mostTrials } from './binomial-log-probability.ts';
 import { clopperPearson, type Interval } from './clopper-pearson.ts';
-import { requireBetween, requireWhole } from './domain.ts';
-import { normalAreaFromCentre, normalUpperTail } from './normal-tail.ts';
+import { requireWhole } from './domain.ts';
+import {
+  correctRateAt,
+  dPrimeAt,
+  dPrimeLimits,
+  matchingByDistance,
+  matchingByMidpoint,
+  type Psychometric,
+} from './psychometric.ts';
 
 /**
  * How a listener is supposed to decide in ABX: by which of A and B lies nearer to X (differencing), or by which side
@@ -9,11 +16,7 @@ import { normalAreaFromCentre, normalUpperTail } from './normal-tail.ts';
  */
 export type AbxModel = 'differencing' | 'independent';
 
-/** pc = U(d'/√2) U(d'/s) + L(d'/√2) L(d'/s) with the upper and lower normal tails; s is all that tells the models apart. */
-const secondSpread: Record<AbxModel, number> = { differencing: Math.sqrt(6), independent: 2 };
-
-/** A rate short of 1 by a single rounding step lies below this d′ in either model. */
-const largestDPrime = 64;
+const rules: Record<AbxModel, Psychometric> = { differencing: matchingByDistance, independent: matchingByMidpoint };
 
 /**
  * Rate of right answers that a listener of sensitivity d′ reaches in ABX.
@@ -31,8 +34,7 @@ const largestDPrime = 64;
  *   Perception & Psychophysics 64 (2002), 89-106
  */
 export function abxCorrectRate(dPrime: number, model: AbxModel): number {
-  requireBetween('dPrime', dPrime, 0, Number.MAX_VALUE, 'closed');
-  return 0.5 + rateAboveHalf(dPrime, model);
+  return correctRateAt(rules[model], dPrime);
 }
 
 /**
@@ -46,21 +48,7 @@ export function abxCorrectRate(dPrime: number, model: AbxModel): number {
  * @see as for abxCorrectRate
  */
 export function abxDPrime(correctRate: number, model: AbxModel): number {
-  requireBetween('correctRate', correctRate, 0, 1, 'closed');
-  if (correctRate <= 0.5) return 0;
-  if (correctRate === 1) return Number.POSITIVE_INFINITY;
-  const isShort =
-    correctRate < 0.75
-      ? (dPrime: number) => rateAboveHalf(dPrime, model) < correctRate - 0.5
-      : (dPrime: number) => rateWrong(dPrime, model) > 1 - correctRate;
-  let low = 0;
-  let high = largestDPrime;
-  for (;;) {
-    const middle = low + (high - low) / 2;
-    if (middle <= low || middle >= high) return middle;
-    if (isShort(middle)) low = middle;
-    else high = middle;
-  }
+  return dPrimeAt(rules[model], correctRate);
 }
 
 export interface DPrimeEstimate {
@@ -109,17 +97,5 @@ export function abxDPrimeEstimate(
  * @example abxDPrimeInterval({ lower: 0.5, upper: 1 }, 'independent') // 0, Infinity
  */
 export function abxDPrimeInterval(interval: Interval, model: AbxModel): Interval {
-  return { lower: abxDPrime(interval.lower, model), upper: abxDPrime(interval.upper, model) };
-}
-
-/** The rate less one half, without taking one half from it: keeps its digits for the smallest d′. */
-function rateAboveHalf(dPrime: number, model: AbxModel): number {
-  return 2 * normalAreaFromCentre(dPrime / Math.SQRT2) * normalAreaFromCentre(dPrime / secondSpread[model]);
-}
-
-/** One less the rate, without taking the rate from one: keeps its digits for the largest d′. */
-function rateWrong(dPrime: number, model: AbxModel): number {
-  const first = normalUpperTail(dPrime / Math.SQRT2);
-  const second = normalUpperTail(dPrime / secondSpread[model]);
-  return first * (1 - second) + (1 - first) * second;
+  return dPrimeLimits(rules[model], interval);
 }

@@ -1,10 +1,9 @@
-import { evenChance } from './chance.ts';
-import { type CriticalCount, criticalCount } from './critical-count.ts';
+import { chanceAsNumbers } from './chance.ts';
+import type { CriticalCount } from './critical-count.ts';
 import { parseDecimal } from './decimal.ts';
 import { requireBetween, requireWhole } from './domain.ts';
 import { compareFractions, fractionToNumber } from './fraction.ts';
-import { power } from './power.ts';
-import { twoSidedCriticalCount, twoSidedPower } from './two-sided-even.ts';
+import type { PlannedTest } from './planned-test.ts';
 
 export interface StudyPlan {
   /** Sittings, whole, 1 ... 100; the registered test pools their trials. */
@@ -13,8 +12,8 @@ export interface StudyPlan {
   readonly trials: number;
   /** Level as a decimal, strictly between 0 and 1: "0.05". */
   readonly alpha: string;
-  /** Whether the level stands for one side or for both together. */
-  readonly alternative: 'greater' | 'two-sided';
+  /** The registered test with one answer per trial. */
+  readonly test: PlannedTest;
   /** Listeners who answer each trial of a session, whole, 1 ... 1000. */
   readonly listeners: number;
   /** Cables fitted and heard per trial, 1 ... 10: three in ABX (A, B and X), two in a pair. */
@@ -32,20 +31,19 @@ export interface StudyPlan {
 }
 
 export interface PlanFigures {
-  /** Chance of an answer on the counted side by guessing. */
-  readonly chance: number;
+  /** Chance of an answer on the counted side by guessing; null where nothing of the kind is counted. */
+  readonly chance: number | null;
   /** Trials of all sessions: one draw each. */
   readonly trialsInAll: number;
   /** What one answer per trial must reach over all sessions; null when out of reach. */
   readonly critical: CriticalCount | null;
-  /** Power of that test at rates of 0.6, 0.7 and 0.8: of right answers, or of answers for one cable. */
-  readonly power: readonly { readonly correctRate: number; readonly power: number }[];
+  /** Power of that test at a small, a middling and a large rate: of right answers, or of answers for one cable. */
+  readonly power: readonly { readonly rate: number; readonly power: number }[];
   /** False when several listeners share the presentations: then no fixed number of right answers can be promised. */
   readonly isCriticalCountBinding: boolean;
-  /** No test of this many trials gives a smaller p, however many listen: half to the power of `leastPHalvings`. */
+  /** No test of this many trials gives a smaller p, however many listen: one in `leastPDenominator`. */
   readonly leastAttainableP: number;
-  /** One per trial; one less when two draws, one on either side, are equally extreme. */
-  readonly leastPHalvings: number;
+  readonly leastPDenominator: bigint;
   readonly canReachAlpha: boolean;
   readonly session: SessionFigures;
 }
@@ -65,15 +63,13 @@ export interface SessionFigures {
 /** Familiarisation fits both cables once each; it does not count. */
 const familiarisationPresentations = 2;
 
-const displayedRates = [0.6, 0.7, 0.8];
-
 /**
  * What a plan can show and what it takes, before it is sealed.
  *
  * @param plan sessions, trials, level, listeners and the lengths of a trial's parts, in milliseconds
  * @returns the figures the planner shows; lengths in milliseconds unless the name says minutes
  * @throws RangeError when a value is outside the domain stated beside it
- * @example planFigures({ sessions: 1, trials: 16, alpha: '0.05', alternative: 'greater', listeners: 1,
+ * @example planFigures({ sessions: 1, trials: 16, alpha: '0.05', test: oneSidedPlan(evenChance), listeners: 1,
  *   presentationsPerTrial: 3, changeMs: 30_000, listenMs: 20_000, answerMs: 15_000, resetMs: 0, breaks: null })
  *   // critical 12 (size 0.0384), power 0.167, 0.450 and 0.798, 50 fittings, 165 s a trial,
  *   // 16 * 165 s = 44 min and 100 s for familiarisation: 46 min ; R: pbinom(11, 16, c(.6, .7, .8), lower.tail = FALSE)
@@ -84,19 +80,17 @@ export function planFigures(plan: StudyPlan): PlanFigures {
   const trialsInAll = plan.sessions * plan.trials;
   const exactAlpha = parseDecimal(plan.alpha);
   const alpha = fractionToNumber(exactAlpha);
-  const isTwoSided = plan.alternative === 'two-sided';
-  const leastPHalvings = isTwoSided ? trialsInAll - 1 : trialsInAll;
-  const leastP = { numerator: 1n, denominator: 2n ** BigInt(leastPHalvings) };
-  const powerAt = (rate: number) =>
-    isTwoSided ? twoSidedPower(trialsInAll, alpha, rate) : power(trialsInAll, evenChance, alpha, rate);
+  const { test } = plan;
+  const leastPDenominator = test.leastPDenominator(trialsInAll);
+  const leastP = { numerator: 1n, denominator: leastPDenominator };
   return {
-    chance: evenChance.numerator / evenChance.denominator,
+    chance: test.chance === null ? null : chanceAsNumbers(test.chance).right,
     trialsInAll,
-    critical: isTwoSided ? twoSidedCriticalCount(trialsInAll, alpha) : criticalCount(trialsInAll, evenChance, alpha),
-    power: displayedRates.map((correctRate) => ({ correctRate, power: powerAt(correctRate).power })),
+    critical: test.critical(trialsInAll, alpha),
+    power: test.rates.map((rate) => ({ rate, power: test.power(trialsInAll, alpha, rate) })),
     isCriticalCountBinding: plan.listeners === 1,
     leastAttainableP: fractionToNumber(leastP),
-    leastPHalvings,
+    leastPDenominator,
     canReachAlpha: compareFractions(leastP, exactAlpha) <= 0,
     session: sessionFigures(plan),
   };

@@ -52,7 +52,7 @@ export function Component() {
       <VerificationSection publication={publication} />
       <Statements publication={publication} />
       <ReportDistribution nullDistribution={report.nullDistribution} distribution={portrait.distribution} />
-      <ReportListeners listeners={portrait.listeners} chance={report.result.chance} />
+      <ReportListeners listeners={portrait.listeners} />
       <ReportFlow flow={report.flow} missingWords={report.result.missingAnswers} />
       <ReportIncidents
         voids={report.voids}

@@ -7,8 +7,8 @@ type IntervalChartProps = {
   /** What a row is: "Listener". */
   rowName: string;
   rows: readonly IntervalEntry[];
-  /** The value that comes of nothing, such as guessing, and what it is called. */
-  middle: { value: number; words: string };
+  /** The value that comes of nothing, such as guessing, and what it is called; null where there is none. */
+  middle: { value: number; words: string } | null;
   /** What is measured, with its unit: "Correct answers out of 16". */
   quantity: string;
   /** The ends of the axis; from 0 to the highest end of an interval if left out. */
@@ -27,9 +27,9 @@ export function IntervalChart({
   domain,
   format = String,
 }: IntervalChartProps) {
-  const [from, to] = domain ?? [0, Math.max(middle.value, ...rows.map((row) => row.high))];
+  const [from, to] = domain ?? [0, Math.max(middle?.value ?? 0, ...rows.map((row) => row.high))];
   const shareOf = (value: number) => (Math.min(Math.max(value, from), to) - from) / (to - from || 1);
-  const middleShare = shareOf(middle.value);
+  const middleShare = middle === null ? null : shareOf(middle.value);
   return (
     <table className="w-full border-collapse">
       <caption className="sr-only">{caption}</caption>
@@ -40,14 +40,17 @@ export function IntervalChart({
           </th>
           <td aria-hidden="true" className="relative h-9 w-full px-3 text-soft">
             <span className="absolute inset-x-3 bottom-1">
-              <span className="relative block whitespace-nowrap" style={markAt(middleShare)}>
-                {middle.words} {format(middle.value)}
-              </span>
+              {middle === null ? null : (
+                <span className="relative block whitespace-nowrap" style={markAt(shareOf(middle.value))}>
+                  {middle.words} {format(middle.value)}
+                </span>
+              )}
             </span>
           </td>
           <th scope="col" className="pb-1 pl-4 text-right font-semibold">
             <span className="sr-only">
-              {quantity}; {middle.words}: {format(middle.value)}
+              {quantity}
+              {middle === null ? null : `; ${middle.words}: ${format(middle.value)}`}
             </span>
           </th>
           <th scope="col" className="max-md:sr-only md:pb-1 md:pl-6 md:text-right md:font-semibold">

@@ -4,18 +4,14 @@ type IntervalRowProps = {
   entry: IntervalEntry;
   /** Where a value lies on the axis, 0 to 1. */
   shareOf: (value: number) => number;
-  middleShare: number;
+  /** Where the line of what comes of nothing lies, 0 to 1; null for none. */
+  middleShare: number | null;
   format: (value: number) => string;
 };
 
 export function IntervalRow({ entry, shareOf, middleShare, format }: IntervalRowProps) {
   const percent = (share: number) => `${share * 100}%`;
-  const [low, value, high, guess] = [
-    percent(shareOf(entry.low)),
-    percent(shareOf(entry.value)),
-    percent(shareOf(entry.high)),
-    percent(middleShare),
-  ];
+  const [low, value, high] = [percent(shareOf(entry.low)), percent(shareOf(entry.value)), percent(shareOf(entry.high))];
   return (
     <tr>
       <th scope="row" className="pr-4 text-left font-mono font-normal whitespace-nowrap sm:pr-8">
@@ -23,15 +19,17 @@ export function IntervalRow({ entry, shareOf, middleShare, format }: IntervalRow
       </th>
       <td aria-hidden="true" className="h-12 w-full px-3">
         <svg aria-hidden="true" className="block h-12 w-full overflow-visible">
-          <line
-            x1={guess}
-            x2={guess}
-            y1="0"
-            y2="100%"
-            strokeDasharray="4 4"
-            className="stroke-edge"
-            strokeWidth="1.5"
-          />
+          {middleShare === null ? null : (
+            <line
+              x1={percent(middleShare)}
+              x2={percent(middleShare)}
+              y1="0"
+              y2="100%"
+              strokeDasharray="4 4"
+              className="stroke-edge"
+              strokeWidth="1.5"
+            />
+          )}
           <g className="stroke-ink" strokeWidth="2">
             <line x1={low} x2={high} y1="50%" y2="50%" />
             <line x1={low} x2={low} y1="36%" y2="64%" />

@@ -37,4 +37,20 @@ describe('the settings of a method', () => {
     const plain = await readyStudy(server, people);
     expect((await plain.manager.get(plain.at).expect(200)).body.draft.methodSettings ?? []).toEqual([]);
   });
+
+  it('ask a directional comparison for its attribute, and no other method [A3] [C4]', async () => {
+    const { base, at, manager } = await readyStudy(server, people);
+    const { draft } = (await manager.get(at).expect(200)).body;
+    for (const [change, detail] of [
+      [{ method: 'directional-comparison' }, 'Name it in a word or two, such as bass'],
+      [{ method: 'directional-comparison', attribute: '  ' }, 'Name it in a word or two, such as bass'],
+      [{ method: 'triangle', attribute: 'bass' }, 'Triangle asks for no attribute'],
+    ] as const) {
+      const reply = await manager.post(`${base}/studies`).send({ ...draft, ...change });
+      expect(reply.status).toBe(400);
+      expect(reply.body.errors).toEqual([{ pointer: '/attribute', detail }]);
+    }
+    const chosen = await readyStudy(server, people, { method: 'directional-comparison', attribute: 'bass' });
+    expect((await chosen.manager.get(chosen.at).expect(200)).body).toMatchObject({ draft: { attribute: 'bass' } });
+  });
 });

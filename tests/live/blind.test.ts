@@ -1,6 +1,7 @@
 import request from 'supertest';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type { StudyDraft } from '#shared/contracts/studies.ts';
+import { type MethodId, methodIds } from '#shared/methods/methods.ts';
 import { HandClock } from '../../server/demo/hand-clock.ts';
 import { linkTokenOf } from '../../server/features/attendances/personal-link.ts';
 import { Console, Phone } from '../support/live.ts';
@@ -90,21 +91,47 @@ async function run({ study: change, choices }: Asked, { codeKey, drawSecret }: S
   return seen;
 }
 
-// In ABX the draw is what X is; in a preference it is which cable comes first.
-const methods: Record<string, Asked> = {
-  ABX: {
+const firstCodes = ([first]: readonly string[], trials: readonly string[][]) =>
+  first === trials[0]?.[0] ? 'as in trial 1' : 'the other way';
+const likeTheFirst = ([first, ...others]: readonly string[]) =>
+  others.map((code) => (code === first ? 'again' : 'other')).join(' ');
+
+// In ABX the draw is what X is, elsewhere what is heard first, and what is heard again.
+const methods: Record<MethodId, Asked> = {
+  abx: {
     study: { method: 'abx' },
     choices: ['A', 'B', 'B', 'A', 'A'],
     drawn: ([a, , x]) => (a === x ? 'A' : 'B'),
   },
-  'paired preference': {
+  triangle: {
+    study: { method: 'triangle' },
+    choices: ['first', 'third', 'second', 'first', 'second'],
+    drawn: likeTheFirst,
+  },
+  'duo-trio': {
+    study: { method: 'duo-trio' },
+    choices: ['first', 'second', 'second', 'first', 'second'],
+    drawn: likeTheFirst,
+  },
+  'same-different': {
+    study: { method: 'same-different' },
+    choices: ['same', 'different', 'different', 'same', 'same'],
+    drawn: likeTheFirst,
+  },
+  'directional-comparison': {
+    study: { method: 'directional-comparison', attribute: 'bass' },
+    choices: ['first', 'second', 'second', 'first', 'second'],
+    drawn: firstCodes,
+  },
+  'paired-preference': {
     study: { method: 'paired-preference', methodSettings: ['no-preference'] },
     choices: ['first', 'second', 'none', 'first', 'second'],
-    drawn: ([first], trials) => (first === trials[0]?.[0] ? 'as in trial 1' : 'the other way'),
+    drawn: firstCodes,
   },
 };
 
-describe.each(Object.entries(methods))('what leaves the server before closing, %s', (_name, asked) => {
+describe.each(methodIds)('what leaves the server before closing, %s', (id) => {
+  const asked = methods[id];
   const seeds: Seeds[] = [
     { codeKey: 'key one', drawSecret: 'draw one' },
     { codeKey: 'key two', drawSecret: 'draw one' },

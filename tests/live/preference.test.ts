@@ -1,18 +1,15 @@
 import { execFileSync } from 'node:child_process';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import type { Report } from '#shared/contracts/reports.ts';
 import type { PreferenceResult } from '#shared/findings/preference-result.ts';
 import { HandClock } from '../../server/demo/hand-clock.ts';
-import { Console, Phone } from '../support/live.ts';
-import { makeOrganisation, readyStudy, type TestOrganisation } from '../support/people.ts';
-import { begin, presentTrial } from '../support/run-session.ts';
+import { makeOrganisation, type TestOrganisation } from '../support/people.ts';
+import { type Heard, runMethod } from '../support/run-method.ts';
 import { type TestServer, testServer } from '../support/test-server.ts';
 
 // A paired preference from its plan to its report, in a group and with one listener; R computes the figures again from the
 // codes that were fitted and the answers that were given.
 
 type Choice = 'first' | 'second' | 'none' | null;
-type Heard = { codes: string[]; choices: Choice[] };
 
 /** What R makes of the answers, from the code of the protocol's first cable. */
 function fromR(trials: readonly Heard[], firstCable: string) {
@@ -58,64 +55,27 @@ function fromR(trials: readonly Heard[], firstCable: string) {
 
 const close = (decimal: string | undefined, value: number) => expect(Number(decimal)).toBeCloseTo(value, 10);
 
-async function runSession(
+async function runPreference(
   server: TestServer,
   people: TestOrganisation,
   clock: HandClock,
-  asked: { seats: string[]; settings: string[]; choose: (codes: string[], seat: number, trial: number) => Choice },
+  { settings, ...asked }: { seats: string[]; settings: string[]; choose: Parameters<typeof runMethod>[3]['choose'] },
 ) {
-  const study = await readyStudy(server, people, {
-    method: 'paired-preference',
-    methodSettings: asked.settings,
-    listenersPerSession: asked.seats.length,
-    trials: 8,
-    spares: 1,
-  });
-  const desk = await Console.open(server.address, people.proctor.email, study.sessionId);
-  const code = await desk.openSeating();
-  const phones: Phone[] = [];
-  for (const name of asked.seats) phones.push(await Phone.join(server.address, code, name));
-  await begin(desk, phones, clock);
-  const heard: Heard[] = [];
-  for (let trial = 1; trial <= 8; trial += 1) {
-    const codes = await presentTrial(desk, clock);
-    const choices = phones.map((_, seat) => asked.choose(codes, seat, trial));
-    for (const [seat, phone] of phones.entries()) {
-      const choice = choices[seat];
-      if (choice !== null && choice !== undefined) await phone.answer(trial, choice);
-    }
-    const given = choices.filter((choice) => choice !== null).length;
-    await desk.sees('the answers', (view) => view.trial?.answered === given);
-    if (given === phones.length) await desk.act({ kind: 'lock-trial' });
-    else clock.advance(20_000);
-    await desk.sees('the lock', (view) => view.trial === null);
-    heard.push({ codes, choices });
-  }
-  const refused = await phones[0]?.send(phones[0].answerCommand(8, 'both', 9));
-  await desk.act({ kind: 'finish' });
-  await phones[0]?.sees('the end', (view) => view.phase === 'finished');
-  await study.manager.post(`${study.at}/close`).send({ reason: '' }).expect(200);
-  const report: Report = (await study.manager.get(`${study.at}/report`).expect(200)).body;
-  // The holder's sheet is what the room had in its hands: it says which code was which cable, and the report does not.
-  const sheet = await study.holder.post(`${study.at}/codes/open`).send({ purpose: 'check' }).expect(200);
-  const [firstName] = report.cables;
-  const firstCode: string = sheet.body.rows.find(({ cable }: { cable: string }) => cable === firstName).code;
-  const view = phones[0]?.view;
-  for (const page of [desk, ...phones]) page.close();
-  const result = report.result as PreferenceResult;
-  return { report, result, heard, firstCode, view, refused };
+  const study = { method: 'paired-preference', methodSettings: settings } as const;
+  const run = await runMethod(server, people, clock, { ...asked, study, impossible: 'both' });
+  return { ...run, result: run.report.result as PreferenceResult };
 }
 
 describe('a paired preference from plan to report', () => {
   const clock = new HandClock(Date.parse('2026-12-05T18:00:00.000Z'));
   let server: TestServer;
-  let group: Awaited<ReturnType<typeof runSession>>;
-  let alone: Awaited<ReturnType<typeof runSession>>;
+  let group: Awaited<ReturnType<typeof runMethod>> & { result: PreferenceResult };
+  let alone: Awaited<ReturnType<typeof runMethod>> & { result: PreferenceResult };
 
   beforeAll(async () => {
     server = await testServer({ clock });
     // Two listeners prefer the lower code, whatever its place; a third follows a habit, states none, or stays silent.
-    group = await runSession(server, await makeOrganisation(server, 'Harbour'), clock, {
+    group = await runPreference(server, await makeOrganisation(server, 'Harbour'), clock, {
       seats: ['left', 'middle', 'right'],
       settings: ['no-preference'],
       choose: ([one = '', other = ''], seat, trial) => {
@@ -124,7 +84,7 @@ describe('a paired preference from plan to report', () => {
         return trial % 2 === 0 ? 'none' : 'first';
       },
     });
-    alone = await runSession(server, await makeOrganisation(server, 'Elsewhere'), clock, {
+    alone = await runPreference(server, await makeOrganisation(server, 'Elsewhere'), clock, {
       seats: ['middle'],
       settings: [],
       choose: ([one = '', other = ''], _seat, trial) => (trial === 2 || one < other ? 'first' : 'second'),

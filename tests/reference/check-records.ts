@@ -16,7 +16,7 @@ export type Mapping = (inputs: unknown) => Outcome;
 
 /** What has no function yet, or differs on purpose, each with the reason. */
 export interface Pending {
-  /** `fn`, or `fn.field` for one field of it. */
+  /** `fn`, `fn.field` for one field of it, or `fn method` for the records of one method. */
   readonly functions: { readonly [name: string]: string };
   /** Ids of records. */
   readonly records: { readonly [id: string]: string };
@@ -71,7 +71,7 @@ function checkFunction(
   const reasons = new Set<string>();
   let largestError = 0;
   for (const record of records) {
-    const differs = pending.records[record.id];
+    const differs = pending.records[record.id] ?? pending.functions[`${fn} ${methodOf(record)}`];
     const faults: string[] = [];
     for (const { field, agrees, error } of compareRecord(record, mapping)) {
       const waits = pending.functions[`${fn}.${field}`];
@@ -81,9 +81,14 @@ function checkFunction(
     }
     if (differs === undefined) failures.push(...faults);
     else if (faults.length === 0) failures.push(`${record.id} is pending and agrees`);
-    else reasons.add(`${record.id}: ${differs}`);
+    else reasons.add(`${methodOf(record) ?? record.id}: ${differs}`);
   }
   return { ...line, largestError, failures, pending: [...reasons] };
+}
+
+function methodOf({ inputs }: ReferenceRecord): string | undefined {
+  const { method } = inputs as { method?: string };
+  return method;
 }
 
 function compareRecord(record: ReferenceRecord, mapping: Mapping): (Comparison & { field: string })[] {

@@ -25,11 +25,13 @@ import { wilsonInterval } from '#shared/statistics/wilson.ts';
 import type { Mapping } from './check-records.ts';
 import { chanceOf, fractionText, of, pair } from './inputs.ts';
 import { listenerMappings } from './listener-functions.ts';
+import { methodMappings } from './method-functions.ts';
 import { orderMappings } from './order-functions.ts';
 
 /** Each function of the check values, in terms of the functions of shared/. */
 export const mappings: { readonly [fn: string]: Mapping } = {
   ...listenerMappings,
+  ...methodMappings,
   ...orderMappings,
 
   binomialTest: of<{ k: number; n: number; p0: number }>(({ k, n, p0 }) => {

@@ -84,7 +84,7 @@ const protocolFor = (study: string, listeners: number, method: string): Protocol
     programme: [{ title: 'Piano', start: '0:10', lengthS: 12 }],
   },
   analysis: {
-    ...methodOf(method).registered([]),
+    ...methodOf(method).registered({}),
     alpha: '0.05',
     stopping: 'fixed number of trials',
     exclusions: 'none',
@@ -168,7 +168,7 @@ function runSession(maker: StudyMaker, protocol: Protocol, session: number, list
   made.do({ kind: 'begin-familiarisation' });
   made.present();
   const choices = methodOf(protocol.method)
-    .options([])
+    .options({})
     .map(({ value }) => value);
   const last = session === 1 ? 6 : 3;
   for (let trial = 1; trial <= last; trial += 1) {

@@ -127,6 +127,7 @@ function factsOf({ design, conduct, analysis, cables, method }: Protocol): Repor
   const specimens = cables.map(({ name, specimens: own }) => `${name}: ${own.map(({ serial }) => serial).join(', ')}`);
   return [
     { label: 'Method', value: methodOf(method).name },
+    ...(design.attribute === undefined ? [] : [{ label: 'Attribute', value: design.attribute }]),
     { label: 'Specimens', value: specimens.join('; ') },
     { label: 'Sessions', value: String(design.sessions) },
     { label: 'Listeners per session', value: String(design.listenersPerSession) },

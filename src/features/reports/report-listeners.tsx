@@ -1,4 +1,3 @@
-import type { RegisteredResult } from '#shared/methods/methods.ts';
 import type { Portrait } from '#shared/methods/portrait.ts';
 import { DataTable } from '../../ui/data-table.tsx';
 import { StatusWord } from '../../ui/status-word.tsx';
@@ -32,14 +31,14 @@ function columnsOf({ columns }: Listeners): Column<Row>[] {
   ];
 }
 
-type ReportListenersProps = { listeners: Listeners } & Pick<RegisteredResult, 'chance'>;
+type ReportListenersProps = { listeners: Listeners };
 
 /** Listeners side by side, and adjusted for how many of them there are. */
-export function ReportListeners({ listeners, chance }: ReportListenersProps) {
+export function ReportListeners({ listeners }: ReportListenersProps) {
   const { lede, rows, chart } = listeners;
   return (
     <ReportSection title="By listener" lede={lede}>
-      {chart.rows.length > 0 ? <ListenerIntervals chart={chart} chance={chance} /> : null}
+      {chart.rows.length > 0 ? <ListenerIntervals chart={chart} /> : null}
       <DataTable
         caption="Results by listener"
         columns={columnsOf(listeners)}

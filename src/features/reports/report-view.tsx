@@ -41,7 +41,7 @@ export function ReportView({ report, back, actions }: ReportViewProps) {
         <ReportConditions report={report} portrait={portrait} />
       </div>
       <ReportDistribution nullDistribution={report.nullDistribution} distribution={portrait.distribution} />
-      <ReportListeners listeners={portrait.listeners} chance={result.chance} />
+      <ReportListeners listeners={portrait.listeners} />
       <ReportFlow flow={report.flow} missingWords={result.missingAnswers} />
       <ReportIncidents
         voids={report.voids}

@@ -57,8 +57,8 @@ function columnsFor({ trials }: Session, cables: Report['cables'], method: Metho
 /** The answers that every study of the method offers, and of the others those that were given. */
 function optionsIn(trials: readonly Trial[], method: Method): readonly AnswerOption[] {
   const given = new Set(trials.flatMap(({ answers }) => answers.map(({ choice }) => choice)));
-  const always = method.options([]).map(({ value }) => value);
-  const all = method.options(method.settings.map(({ id }) => id));
+  const always = method.options({}).map(({ value }) => value);
+  const all = method.options({ methodSettings: method.settings.map(({ id }) => id) });
   return all.filter(({ value }) => always.includes(value) || given.has(value));
 }
 

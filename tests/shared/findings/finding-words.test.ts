@@ -1,8 +1,11 @@
 import { describe, expect, it } from 'vitest';
-import { abxFinding } from '#shared/findings/abx-finding.ts';
-import type { AbxTrial } from '#shared/findings/abx-trials.ts';
-import { analyseAbx } from '#shared/findings/analyse-abx.ts';
+import { analyseForcedChoice } from '#shared/findings/analyse-forced-choice.ts';
+import { anyDifference, differenceFinding } from '#shared/findings/difference-finding.ts';
 import { type Finding, type FindingContext, finding } from '#shared/findings/finding.ts';
+import type { ForcedChoiceResult } from '#shared/findings/forced-choice-result.ts';
+import type { ForcedChoiceTrial } from '#shared/findings/forced-choice-trials.ts';
+import { forcedChoiceWords } from '#shared/findings/forced-choice-words.ts';
+import { abxQuestion } from '#shared/methods/abx.ts';
 
 const context: FindingContext = {
   cables: ['Northern run', 'Southern run'],
@@ -11,18 +14,21 @@ const context: FindingContext = {
   setting: 'player, amplifier, loudspeakers',
 };
 
+const abxFinding = (result: ForcedChoiceResult, about: FindingContext) =>
+  differenceFinding(result, about, { ...forcedChoiceWords, ...anyDifference });
+
 /** One row per seat: how many of the first trials that listener has right. X is always A. */
-function together(trials: number, right: readonly number[]): AbxTrial[] {
+function together(trials: number, right: readonly number[]): ForcedChoiceTrial[] {
   return Array.from({ length: trials }, (_, index) => ({
     session: 1,
     trial: index + 1,
-    truth: 'A',
+    right: 'A',
     answers: right.map((count, seat) => ({ listener: `L0${seat + 1}`, choice: index < count ? 'A' : 'B' })),
   }));
 }
 
 /** The same listeners one after another, each in a session of their own. */
-function inTurn(trials: number, right: readonly number[]): AbxTrial[] {
+function inTurn(trials: number, right: readonly number[]): ForcedChoiceTrial[] {
   return right.flatMap((count, seat) =>
     together(trials, [count]).map((trial) => ({
       ...trial,
@@ -32,8 +38,8 @@ function inTurn(trials: number, right: readonly number[]): AbxTrial[] {
   );
 }
 
-const found = (trials: readonly AbxTrial[], alpha = '0.05'): Finding =>
-  abxFinding(analyseAbx({ alpha, listenersPerSession: 1, trials }), context);
+const found = (trials: readonly ForcedChoiceTrial[], alpha = '0.05'): Finding =>
+  abxFinding(analyseForcedChoice(abxQuestion, { alpha, listenersPerSession: 1, trials }), context);
 const words = ({ modifiers }: Finding) => modifiers.join(' ');
 
 describe('what stands beside a headline', () => {
@@ -98,7 +104,11 @@ describe('what stands beside a headline', () => {
   });
 
   it('takes the record before the count, and the count from below before the one from above [T8]', () => {
-    const result = analyseAbx({ alpha: '0.05', listenersPerSession: 1, trials: together(16, [16]) });
+    const result = analyseForcedChoice(abxQuestion, {
+      alpha: '0.05',
+      listenersPerSession: 1,
+      trials: together(16, [16]),
+    });
     for (const gate of [
       { commitmentsHold: false, allTrialsAccounted: true, isBlind: true },
       { commitmentsHold: true, allTrialsAccounted: false, isBlind: true },
@@ -111,7 +121,11 @@ describe('what stands beside a headline', () => {
   });
 
   it('says when the study was ended early, and stays a registered result at the number reached [T24]', () => {
-    const result = analyseAbx({ alpha: '0.05', listenersPerSession: 1, trials: together(12, [10]) });
+    const result = analyseForcedChoice(abxQuestion, {
+      alpha: '0.05',
+      listenersPerSession: 1,
+      trials: together(12, [10]),
+    });
     const early = abxFinding(result, { ...context, endedEarly: 'The room was needed.' });
     expect(early.row).toBe('2');
     expect(words(early)).toContain('Ended early while blind, at 12 trials: The room was needed.');

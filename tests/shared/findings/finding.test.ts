@@ -1,7 +1,10 @@
 import { describe, expect, it } from 'vitest';
-import { abxFinding } from '#shared/findings/abx-finding.ts';
-import { analyseAbx } from '#shared/findings/analyse-abx.ts';
+import { analyseForcedChoice } from '#shared/findings/analyse-forced-choice.ts';
+import { anyDifference, differenceFinding } from '#shared/findings/difference-finding.ts';
 import type { FindingContext } from '#shared/findings/finding.ts';
+import type { ForcedChoiceResult } from '#shared/findings/forced-choice-result.ts';
+import { forcedChoiceWords } from '#shared/findings/forced-choice-words.ts';
+import { abxQuestion } from '#shared/methods/abx.ts';
 
 const context: FindingContext = {
   cables: ['Northern run', 'Southern run'],
@@ -10,9 +13,12 @@ const context: FindingContext = {
   setting: 'player, amplifier, loudspeakers',
 };
 
+const abxFinding = (result: ForcedChoiceResult, about: FindingContext) =>
+  differenceFinding(result, about, { ...forcedChoiceWords, ...anyDifference });
+
 /** A study in which each of some listeners is right in the first `right` trials; the last `silent` of them are missing. */
 function study(listeners: number, trials: number, right: number, silent = 0) {
-  return analyseAbx({
+  return analyseForcedChoice(abxQuestion, {
     alpha: '0.05',
     listenersPerSession: listeners,
     trials: Array.from({ length: trials }, (_, index) => {
@@ -21,7 +27,7 @@ function study(listeners: number, trials: number, right: number, silent = 0) {
       return {
         session: 1,
         trial: index + 1,
-        truth,
+        right: truth,
         answers: Array.from({ length: listeners }, (_unused, listener) => ({
           listener: `L0${listener + 1}`,
           choice: index >= trials - silent ? null : index < right ? truth : wrong,

@@ -14,6 +14,7 @@ import { holm } from '#shared/statistics/holm.ts';
 import { normalQuantile } from '#shared/statistics/normal-quantile.ts';
 import { normalAreaFromCentre, normalLogUpperTail, normalUpperTail } from '#shared/statistics/normal-tail.ts';
 import { planFigures } from '#shared/statistics/plan-figures.ts';
+import { oneSidedPlan } from '#shared/statistics/planned-test.ts';
 import { power } from '#shared/statistics/power.ts';
 import { sampleSize } from '#shared/statistics/sample-size.ts';
 import { sharedPresentationTest } from '#shared/statistics/shared-presentation-test.ts';
@@ -27,7 +28,7 @@ const plan = {
   alpha: '0.05',
   listeners: 1,
   presentationsPerTrial: 3,
-  alternative: 'greater' as const,
+  test: oneSidedPlan(evenChance),
   changeMs: 30_000,
   listenMs: 20_000,
   answerMs: 15_000,

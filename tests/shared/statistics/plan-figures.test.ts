@@ -1,5 +1,7 @@
 import { describe, expect, it } from 'vitest';
+import { evenChance } from '#shared/statistics/chance.ts';
 import { planFigures, type StudyPlan } from '#shared/statistics/plan-figures.ts';
+import { oneSidedPlan } from '#shared/statistics/planned-test.ts';
 
 const plan: StudyPlan = {
   sessions: 1,
@@ -7,7 +9,7 @@ const plan: StudyPlan = {
   alpha: '0.05',
   listeners: 1,
   presentationsPerTrial: 3,
-  alternative: 'greater',
+  test: oneSidedPlan(evenChance),
   changeMs: 30_000,
   listenMs: 20_000,
   answerMs: 15_000,
@@ -42,7 +44,7 @@ describe('what the planner shows', () => {
     expect(chance).toBe(0.5);
     expect(critical).toMatchObject({ count: 12 });
     expect(critical?.attainedSize).toBeCloseTo(2517 / 65536, 14);
-    expect(power.map((point) => [point.correctRate, Number(point.power.toFixed(4))])).toEqual([
+    expect(power.map((point) => [point.rate, Number(point.power.toFixed(4))])).toEqual([
       [0.6, 0.1666],
       [0.7, 0.4499],
       [0.8, 0.7982],

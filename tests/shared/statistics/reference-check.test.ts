@@ -28,7 +28,7 @@ describe('every check value of the folder', () => {
     const { lines } = checkFolder(folder, pending);
     const names = lines.map(({ fn }) => fn);
     const unneeded = Object.keys(pending.functions).filter(
-      (name) => !names.includes(name) && !names.some((fn) => name.startsWith(`${fn}.`)),
+      (name) => !names.includes(name) && !names.some((fn) => name.startsWith(`${fn}.`) || name.startsWith(`${fn} `)),
     );
     expect(unneeded).toEqual([]);
   });

@@ -6,6 +6,16 @@ import { criticalCount } from '#shared/statistics/critical-count.ts';
 import { type AbxModel, abxCorrectRate, abxDPrime } from '#shared/statistics/d-prime.ts';
 import { holm } from '#shared/statistics/holm.ts';
 import { power } from '#shared/statistics/power.ts';
+import {
+  correctRateAt,
+  dPrimeAt,
+  dPrimeLimits,
+  matchingByDistance,
+  matchingByMidpoint,
+  moreOfAttribute,
+  oddByDistance,
+  type Psychometric,
+} from '#shared/statistics/psychometric.ts';
 import { sampleSize } from '#shared/statistics/sample-size.ts';
 import { sharedPresentationTest } from '#shared/statistics/shared-presentation-test.ts';
 import { expectClose, reference } from '../../support/reference.ts';
@@ -134,6 +144,50 @@ describe('against R 4.2.2, SciPy and mpmath', () => {
       if (model === undefined) throw new Error(`no model for ${inputs.method}`);
       if (fn === 'psychometric') expectClose(abxCorrectRate(inputs.dPrime, model), expected.pc, tol, 0, id);
       else expectClose(abxDPrime(inputs.pc, model), expected.dPrime, Math.max(tol, 1e-7), 1, id);
+    }
+  });
+});
+
+describe('d′ of the other methods', () => {
+  const rules: Record<string, Psychometric> = {
+    twoAFC: moreOfAttribute,
+    duoTrio: matchingByDistance,
+    triangle: oddByDistance,
+  };
+  type Inputs = { method: string; dPrime: number; pc: number; k: number; n: number; conf: number };
+  type Expected = { pc: number; dPrime: number; exactInterval: [number | string, number | string] };
+
+  it('gives the rate at d′, its inverse, and exact limits through the inverse [C3]', () => {
+    const seen = new Set<string>();
+    for (const { id, fn, inputs, expected, tol } of reference<Inputs, Expected>('d-prime-methods.json')) {
+      const rule = rules[inputs.method];
+      if (rule === undefined) throw new Error(`no rule for ${inputs.method}`);
+      seen.add(`${fn} ${inputs.method}`);
+      if (fn === 'psychometric') expectClose(correctRateAt(rule, inputs.dPrime), expected.pc, tol, 0, id);
+      else if (fn === 'dPrimeFromPc')
+        expectClose(dPrimeAt(rule, inputs.pc), expected.dPrime, Math.max(tol, 1e-7), 1, id);
+      else {
+        const { k, n, conf } = inputs;
+        const limits = dPrimeLimits(rule, clopperPearson(k, n, conf));
+        expectClose(dPrimeAt(rule, k / n), expected.dPrime, tol, 1, id);
+        expectClose(limits.lower, expected.exactInterval[0], tol, 1, id);
+        expectClose(limits.upper, expected.exactInterval[1], tol, 1, id);
+      }
+    }
+    expect(seen.size).toBe(9);
+  });
+
+  // A d′ of 12 is wrong about once in 10^12: the inverse takes the rate's complement, and loses nothing.
+  it('comes back from the rate to d′ all the way up, and rises with it [C3]', () => {
+    for (const rule of [...Object.values(rules), matchingByMidpoint]) {
+      for (let dPrime = 0.25; dPrime <= 8; dPrime += 0.25) {
+        expect(correctRateAt(rule, dPrime)).toBeGreaterThan(correctRateAt(rule, dPrime - 0.25));
+        expect(Math.abs(dPrimeAt(rule, correctRateAt(rule, dPrime)) - dPrime)).toBeLessThan(1e-6);
+      }
+      expect(dPrimeAt(rule, rule.chance)).toBe(0);
+      expect(dPrimeAt(rule, 1)).toBe(Number.POSITIVE_INFINITY);
+      expect(() => correctRateAt(rule, -1)).toThrow(RangeError);
+      expect(() => dPrimeAt(rule, 1.1)).toThrow(RangeError);
     }
   });
 });

@@ -5,6 +5,7 @@ import { binomialTest } from '#shared/statistics/binomial-test.ts';
 import { evenChance } from '#shared/statistics/chance.ts';
 import { fractionToNumber } from '#shared/statistics/fraction.ts';
 import { planFigures } from '#shared/statistics/plan-figures.ts';
+import { twoSidedPlan } from '#shared/statistics/planned-test.ts';
 import {
   exactTwoSidedEven,
   twoSidedCriticalCount,
@@ -67,7 +68,7 @@ describe('the two-sided test at an even chance', () => {
       sessions: 1,
       trials: 16,
       alpha: '0.05',
-      alternative: 'two-sided' as const,
+      test: twoSidedPlan,
       listeners: 3,
       presentationsPerTrial: 2,
       changeMs: 30_000,
@@ -82,7 +83,7 @@ describe('the two-sided test at an even chance', () => {
     // R: binom.test(13, 16)$p.value
     expect(figures.critical?.count).toBe(13);
     expectClose(figures.critical?.attainedSize ?? 0, 0.021270751953125, 1e-10, 0, 'size');
-    expect([figures.leastPHalvings, figures.leastAttainableP]).toEqual([15, 2 ** -15]);
+    expect([figures.leastPDenominator, figures.leastAttainableP]).toEqual([2n ** 15n, 2 ** -15]);
     expect(planFigures({ ...plan, trials: 5 }).canReachAlpha).toBe(false);
     expect(planFigures({ ...plan, trials: 6 }).canReachAlpha).toBe(true);
   });

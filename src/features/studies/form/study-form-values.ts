@@ -11,6 +11,7 @@ export const newStudyValues: StudyFormValues = {
   question: '',
   method: methodIds[0],
   methodSettings: [],
+  attribute: '',
   cables: [
     { cableId: '', specimenIds: [] },
     { cableId: '', specimenIds: [] },

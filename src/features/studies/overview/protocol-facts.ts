@@ -12,6 +12,7 @@ export function protocolFacts({ draft, cableNames, codeHolder }: Study): Protoco
   return [
     words('Question', draft.question),
     words('Method', methodOf(draft.method).name),
+    ...(draft.attribute ? [words('Attribute', draft.attribute)] : []),
     ...draft.cables.map(({ specimenIds }, index) =>
       words(
         index === 0 ? 'One cable' : 'The other cable',
@@ -22,7 +23,7 @@ export function protocolFacts({ draft, cableNames, codeHolder }: Study): Protoco
     words('Spares', `${draft.spares} in each session`),
     words('Significance level', percentOfPerMille(draft.alphaPerMille)),
     ...analysisFacts({
-      ...methodOf(draft.method).registered(draft.methodSettings ?? []),
+      ...methodOf(draft.method).registered(draft),
       stopping: 'fixed number of trials',
       exclusions: 'none',
     }),

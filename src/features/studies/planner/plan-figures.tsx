@@ -26,9 +26,9 @@ const clockWords = (minutes: number) => formatDuration(minutes * 60_000);
 /** A group's test has no fixed limit, so its true level cannot be told beforehand either; it holds the one asked for. */
 function levelWords({ method, listeners, alpha, alternative, figures }: Plan): string {
   const side = alternative === 'two-sided' ? ', both sides together' : '';
-  const guessing = `${method.plan.guessing} ${percent(figures.chance)} of the time.`;
-  if (listeners > 1 || figures.critical === null) return `${guessing} The level asked for is ${percent(alpha)}${side}.`;
-  return `${guessing} The level asked for is ${percent(alpha)}${side}; counts being whole, the test really has ${percent(figures.critical.attainedSize)}.`;
+  const guessing = figures.chance === null ? '' : `${method.plan.guessing} ${percent(figures.chance)} of the time. `;
+  if (listeners > 1 || figures.critical === null) return `${guessing}The level asked for is ${percent(alpha)}${side}.`;
+  return `${guessing}The level asked for is ${percent(alpha)}${side}; counts being whole, the test really has ${percent(figures.critical.attainedSize)}.`;
 }
 
 function breakWords({ trialsPerSession }: Plan): string {

@@ -13,6 +13,7 @@ export function PlanHeadline({ plan }: { plan: Plan }) {
 function OwnDraws({ plan }: { plan: Plan }) {
   const { critical } = plan.figures;
   const words = plan.method.plan;
+  if (words.unfixed !== null) return <Unfixed plan={plan} why={words.unfixed} />;
   if (critical === null) return <OutOfReach plan={plan} />;
   return (
     <Headline>
@@ -22,8 +23,20 @@ function OwnDraws({ plan }: { plan: Plan }) {
   );
 }
 
+/** A test whose number to reach is known only once the draws and the answers are. */
+function Unfixed({ plan, why }: { plan: Plan; why: string }) {
+  return (
+    <div className="flex flex-col gap-3">
+      <Headline>
+        Plan <Planned>{plan.trials} trials</Planned>. No fixed number of {plan.method.plan.counted} can be promised.
+      </Headline>
+      <p>{why}</p>
+    </div>
+  );
+}
+
 function SharedDraws({ plan }: { plan: Plan }) {
-  const { leastAttainableP, leastPHalvings } = plan.figures;
+  const { leastAttainableP, leastPDenominator } = plan.figures;
   const { counted } = plan.method.plan;
   return (
     <div className="flex flex-col gap-3">
@@ -38,7 +51,7 @@ function SharedDraws({ plan }: { plan: Plan }) {
       </p>
       <p>
         The least p that {formatCount(plan.trials, 'trial')} can give is{' '}
-        <span className="font-mono">{formatProbability(leastAttainableP)}</span> (1 in {drawsOf(leastPHalvings)}),
+        <span className="font-mono">{formatProbability(leastAttainableP)}</span> (1 in {drawsOf(leastPDenominator)}),
         however many listen. <strong>Plan trials, not heads.</strong>
       </p>
     </div>
@@ -46,11 +59,11 @@ function SharedDraws({ plan }: { plan: Plan }) {
 }
 
 /** How many draws there are: written out as long as somebody reads it. */
-function drawsOf(halvings: number): ReactNode {
-  if (halvings <= 30) return formatNumber(2 ** halvings);
+function drawsOf(draws: bigint): ReactNode {
+  if (draws <= 2n ** 30n) return formatNumber(Number(draws));
   return (
     <>
-      2<sup>{halvings}</sup>
+      more than 10<sup>{draws.toString().length - 1}</sup>
     </>
   );
 }

@@ -1,18 +1,29 @@
 import { z } from 'zod';
 import { studyDraft } from '#shared/contracts/studies.ts';
-import type { Method } from '#shared/methods/method.ts';
+import type { Method, MethodChoices } from '#shared/methods/method.ts';
 import { methodOf } from '#shared/methods/methods.ts';
 import { alphaText } from '#shared/protocol/protocol.ts';
 import { type PlanFigures, planFigures } from '#shared/statistics/plan-figures.ts';
 import type { StudyFormValues } from '../form/study-form-values.ts';
 
-const { method, methodSettings, sessions, trials, listenersPerSession, alphaPerMille, changeS, answerS, programme } =
-  studyDraft.shape;
+const {
+  method,
+  methodSettings,
+  attribute,
+  sessions,
+  trials,
+  listenersPerSession,
+  alphaPerMille,
+  changeS,
+  answerS,
+  programme,
+} = studyDraft.shape;
 
 /** The part of a draft that decides how much listening there is; it is planned as soon as this part is sound. */
 const listening = z.object({
   method,
   methodSettings,
+  attribute,
   sessions,
   trials,
   listenersPerSession,
@@ -24,7 +35,7 @@ const listening = z.object({
 
 export type Plan = {
   method: Method;
-  settings: readonly string[];
+  choices: MethodChoices;
   /** Whether the level stands for one side or for both together. */
   alternative: 'greater' | 'two-sided';
   sessions: number;
@@ -50,13 +61,12 @@ export function planOf(values: Partial<StudyFormValues>): Plan | null {
   const draft = parsed.data;
   const alpha = alphaText(draft.alphaPerMille);
   const chosen = methodOf(draft.method);
-  const settings = draft.methodSettings ?? [];
-  const { alternative } = chosen.registered(settings);
+  const { alternative } = chosen.registered(draft);
   const figures = planFigures({
     sessions: draft.sessions,
     trials: draft.trials,
     alpha,
-    alternative,
+    test: chosen.planned,
     listeners: draft.listenersPerSession,
     presentationsPerTrial: chosen.presentations.length,
     changeMs: draft.changeS * 1000,
@@ -67,7 +77,7 @@ export function planOf(values: Partial<StudyFormValues>): Plan | null {
   });
   return {
     method: chosen,
-    settings,
+    choices: draft,
     alternative,
     sessions: draft.sessions,
     trialsPerSession: draft.trials,

@@ -1,6 +1,6 @@
 import type { PlanWords } from '#shared/methods/method.ts';
 import type { PlanFigures } from '#shared/statistics/plan-figures.ts';
-import { percent, powerPercent } from './plan-words.ts';
+import { powerPercent } from './plan-words.ts';
 
 type PowerTableProps = Pick<PlanFigures, 'power'> & { words: Pick<PlanWords, 'found' | 'atRate'> };
 
@@ -8,15 +8,13 @@ type PowerTableProps = Pick<PlanFigures, 'power'> & { words: Pick<PlanWords, 'fo
 export function PowerTable({ power, words }: PowerTableProps) {
   return (
     <table className="w-full border-collapse">
-      <caption className="sr-only">
-        Chance of finding {words.found}, by the share of answers {words.atRate}
-      </caption>
+      <caption className="sr-only">Chance of finding {words.found}, by how often answers are as named</caption>
       <thead>
         <tr className="border-b border-rule">
           <td />
-          {power.map(({ correctRate }) => (
-            <th key={correctRate} scope="col" className="py-1.5 pl-3 text-right align-bottom font-normal">
-              {percent(correctRate)} {words.atRate}
+          {power.map(({ rate }) => (
+            <th key={rate} scope="col" className="py-1.5 pl-3 text-right align-bottom font-normal">
+              {words.atRate(rate)}
             </th>
           ))}
         </tr>
@@ -26,8 +24,8 @@ export function PowerTable({ power, words }: PowerTableProps) {
           <th scope="row" className="py-1.5 text-left font-normal whitespace-nowrap text-soft">
             found in
           </th>
-          {power.map(({ correctRate, power: found }) => (
-            <td key={correctRate} className="py-1.5 pl-3 text-right font-mono font-semibold whitespace-nowrap">
+          {power.map(({ rate, power: found }) => (
+            <td key={rate} className="py-1.5 pl-3 text-right font-mono font-semibold whitespace-nowrap">
               {powerPercent(found)}
             </td>
           ))}
@@ -36,8 +34,8 @@ export function PowerTable({ power, words }: PowerTableProps) {
           <th scope="row" className="py-1.5 text-left font-normal whitespace-nowrap text-soft">
             missed in
           </th>
-          {power.map(({ correctRate, power: found }) => (
-            <td key={correctRate} className="py-1.5 pl-3 text-right font-mono whitespace-nowrap">
+          {power.map(({ rate, power: found }) => (
+            <td key={rate} className="py-1.5 pl-3 text-right font-mono whitespace-nowrap">
               {powerPercent(1 - found)}
             </td>
           ))}

@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { count, decimal, interval, resultFrame } from './result-frame.ts';
 
-const limit = z.union([decimal, z.literal('Infinity')]);
+export const limit = z.union([decimal, z.literal('Infinity')]);
 const sensitivity = z.strictObject({ dPrime: limit, lower: limit, upper: limit });
 
 export const listenerResult = z.strictObject({
@@ -34,17 +34,21 @@ export const pooledEstimates = z.strictObject({
     oneSidedLower: z.strictObject({ confidence: decimal, limit: decimal }),
     oneSidedUpper: z.strictObject({ confidence: decimal, limit: decimal }),
   }),
-  dPrime: z.strictObject({ differencing: sensitivity, independent: sensitivity }),
+  /** By the method's rules of deciding. */
+  dPrime: z.record(z.string(), sensitivity),
 });
 export type PooledEstimates = z.output<typeof pooledEstimates>;
 
-/** What the registered analysis of an ABX study comes to, as it stands on the record. */
-export const abxResult = z.strictObject({
+/** What the registered analysis of a method with one right answer comes to, as it stands on the record. */
+export const forcedChoiceResult = z.strictObject({
   ...resultFrame,
-  method: z.literal('abx'),
+  method: z.enum(['abx', 'triangle', 'duo-trio', 'directional-comparison']),
+  chance: z.strictObject({ numerator: z.literal(1), denominator: z.int().min(2) }),
   missingAnswers: z.literal('counted as wrong'),
   /** The level is one-sided. */
   alternative: z.literal('greater'),
+  /** Of what the first cable was to have more; there only where the method asks for it. */
+  attribute: z.string().optional(),
   correct: count,
   /** Chance of so few right answers or fewer, missing answers left out; at .01 or less the labels are suspect. */
   lowerTail: decimal,
@@ -52,4 +56,4 @@ export const abxResult = z.strictObject({
   byListener: z.array(listenerResult),
   estimates: pooledEstimates.nullable(),
 });
-export type AbxResult = z.output<typeof abxResult>;
+export type ForcedChoiceResult = z.output<typeof forcedChoiceResult>;

@@ -1,22 +1,22 @@
-import type { CableNames } from '../methods/method.ts';
 import type { Portrait } from '../methods/portrait.ts';
-import type { AbxResult, PooledEstimates } from './abx-result.ts';
+import type { ForcedChoice } from './forced-choice.ts';
+import type { ForcedChoiceResult, PooledEstimates } from './forced-choice-result.ts';
 import { equationOfP, formatProbability } from './format-probability.ts';
 import { noGroupInterval, percentOf, testWords } from './portrait-words.ts';
 
-/** What the report of an ABX study shows: the count, p with its test, and an effect only where one is valid. */
-export function abxPortrait(result: AbxResult, _cables: CableNames): Portrait {
+/** What the report of a method with one right answer shows: the count, p with its test, and an effect only where one is valid. */
+export function forcedChoicePortrait({ rules }: Pick<ForcedChoice, 'rules'>, result: ForcedChoiceResult): Portrait {
   const { correct, answers, p, alpha, test, critical, estimates } = result;
   return {
     figures: [
-      { value: `${correct} / ${answers}`, label: 'answers matched X' },
+      { value: `${correct} / ${answers}`, label: 'answers right' },
       { value: equationOfP(Number(p.value), Number(alpha)), label: `${testWords[test]}, one-sided` },
       ...(estimates ? [effect(estimates)] : []),
     ],
-    note: estimates ? sensitivityWords(estimates) : noGroupInterval,
+    note: estimates ? sensitivityWords(rules, estimates) : noGroupInterval,
     conditions: critical ? [{ label: 'Right answers needed', value: String(critical.count) }] : [],
     distribution: {
-      title: `Where ${correct} falls if nobody hears a difference`,
+      title: `Where ${correct} falls if every answer is a guess`,
       lede: ledeOf(result),
       observed: correct,
       quantity: `Right answers out of ${answers}`,
@@ -32,33 +32,34 @@ function effect({ aboveGuessing: { rate, interval } }: PooledEstimates): Portrai
   return { value: percentOf(rate), label: `of answers above guessing, 95 % interval ${limits}` };
 }
 
-/** Both readings of ABX, the one by differences first; each depends on its model and decides nothing. */
-function sensitivityWords({ dPrime: { differencing, independent } }: PooledEstimates): string {
-  const face = ({ dPrime, lower, upper }: typeof differencing) =>
+/** Every reading that the method has; each depends on its model and decides nothing. */
+function sensitivityWords(rules: ForcedChoice['rules'], { dPrime: readings }: PooledEstimates): string {
+  const face = ({ dPrime, lower, upper }: PooledEstimates['dPrime'][string]) =>
     `${figureOf(dPrime)} (95 % interval ${figureOf(lower)} to ${figureOf(upper)})`;
-  return `Expressed as d′, which depends on how listeners compare: ${face(differencing)} if by differences, ${face(independent)} if each is judged by itself.`;
+  const faces = Object.entries(readings).map(([name, reading]) => `${face(reading)} ${rules[name]?.words ?? name}`);
+  return `Expressed as d′, which depends on how listeners compare and decides nothing: ${faces.join(', ')}.`;
 }
 
 function figureOf(limit: string): string {
   return limit === 'Infinity' ? 'no upper limit' : Number(limit).toFixed(2);
 }
 
-function ledeOf({ test, coins, critical }: AbxResult): string[] {
+function ledeOf({ test, coins, critical }: ForcedChoiceResult): string[] {
   if (test === 'shared-presentations')
     return [
-      `All listeners of a session heard the same presentations, so there was one coin per trial and not one per answer; answers that agree out of habit would make a plain binomial test find differences that nobody hears. The registered test therefore keeps the answers as they are, re-draws what X was in all ${coins.toLocaleString('en')} trials that could change the count, and asks how often a fresh draw matches as well as the real one.`,
-      'Each bar is the chance of that many matches over all draws.',
+      `All listeners of a session heard the same presentations, so there was one coin per trial and not one per answer; answers that agree out of habit would make a plain binomial test find differences that nobody hears. The registered test therefore keeps the answers as they are, re-draws what was right in all ${coins.toLocaleString('en')} trials that could change the count, and asks how often a fresh draw fits the answers as well as the real one.`,
+      'Each bar is the chance of that many right answers over all draws.',
     ];
   const limit = critical === null ? '' : ` The registered limit was ${critical.count}.`;
   return [`Each bar is the chance of that many right answers by guessing.${limit}`];
 }
 
 /** Listeners side by side: each against guessing, and adjusted for how many of them there are. */
-function listenersOf({ byListener }: AbxResult): Portrait['listeners'] {
+function listenersOf({ byListener, chance }: ForcedChoiceResult): Portrait['listeners'] {
   const figure = (header: string) => ({ header, isFigure: true });
   return {
     lede: 'One listener gives one answer per trial, so the binomial test is exact for each of them. Only somebody whose p still reaches the level after Holm’s adjustment for all listeners may be named. Intervals are Clopper-Pearson, 95 %.',
-    columns: ['Matched', 'Missing', 'Exact p', 'p by Holm', 'Rate, 95 % interval'].map(figure),
+    columns: ['Right', 'Missing', 'Exact p', 'p by Holm', 'Rate, 95 % interval'].map(figure),
     rows: byListener.map(({ listener, correct, answers, missing, p, holmP, interval, isAboveGuessing }) => ({
       listener,
       cells: [
@@ -71,9 +72,9 @@ function listenersOf({ byListener }: AbxResult): Portrait['listeners'] {
       named: isAboveGuessing ? 'yes' : null,
     })),
     chart: {
+      middle: { value: chance.numerator / chance.denominator, words: 'guessing' },
       caption: 'Rate of right answers by listener, with 95 % Clopper-Pearson intervals',
       quantity: 'Right answers',
-      middle: 'guessing',
       rows: byListener.map(({ listener, correct, answers, interval }) => ({
         label: listener,
         value: answers === 0 ? 0 : correct / answers,

@@ -1,0 +1,65 @@
+import { analyseForcedChoice } from '../findings/analyse-forced-choice.ts';
+import { differenceFinding, type SoughtWords } from '../findings/difference-finding.ts';
+import { chanceOf, type ForcedChoice } from '../findings/forced-choice.ts';
+import { forcedChoiceNullDistribution } from '../findings/forced-choice-null-distribution.ts';
+import { forcedChoicePortrait } from '../findings/forced-choice-portrait.ts';
+import type { ForcedChoiceResult } from '../findings/forced-choice-result.ts';
+import { forcedChoiceWords } from '../findings/forced-choice-words.ts';
+import { percentOf } from '../findings/portrait-words.ts';
+import { oneSidedPlan } from '../statistics/planned-test.ts';
+import type { Method, ScoredAnswer, ScoredTrial, TrialWords } from './method.ts';
+
+type Scoring = Pick<
+  Method<ForcedChoiceResult>,
+  'registered' | 'planned' | 'analyse' | 'nullDistribution' | 'finding' | 'plan' | 'portray'
+> & { readonly trials: Pick<TrialWords, 'isRight' | 'countHeader' | 'count'> };
+
+/** What a method says beside the words that all methods with one right answer share. */
+type Asked = {
+  readonly question: ForcedChoice;
+  /** The answer that a trial's truth makes right. */
+  rightOf(truth: string): string;
+  readonly words: SoughtWords<ForcedChoiceResult>;
+  /** "Two matched cables rarely give more than", before the rate of a small effect. */
+  readonly smallEffect: string;
+};
+
+/** The scoring half of a method with one right answer: one analysis for them all, at the chance of its labels. */
+export function forcedChoiceScoring({ question, rightOf, words, smallEffect }: Asked): Scoring {
+  const forcedChoiceTrial = ({ session, trial, truth, answers }: ScoredTrial) => ({
+    session,
+    trial,
+    right: rightOf(truth),
+    answers,
+  });
+  const isRight = (choice: string, truth: string) => choice === rightOf(truth);
+  const rightIn = (answers: readonly ScoredAnswer[], truth: string) =>
+    answers.filter(({ choice }) => choice !== null && isRight(choice, truth)).length;
+  return {
+    registered: () => ({ name: `${question.method}/1`, alternative: 'greater', missing: 'counted as wrong' }),
+    planned: oneSidedPlan(chanceOf(question)),
+    analyse: ({ analysis: { alpha }, listenersPerSession, attribute }, trials) =>
+      analyseForcedChoice(question, { alpha, listenersPerSession, attribute, trials: trials.map(forcedChoiceTrial) }),
+    nullDistribution: (trials) => forcedChoiceNullDistribution(question, trials.map(forcedChoiceTrial)),
+    finding: (result, context) => differenceFinding(result, context, { ...forcedChoiceWords, ...words }),
+    plan: {
+      needed: (count) => `${count} right`,
+      underNull: 'are needed. If nobody hears a difference,',
+      unfixed: null,
+      found: 'a difference',
+      atRate: (rate) => `${percentOf(rate)} right`,
+      counted: 'right answers',
+      guessing: 'Guessing is right',
+      extreme: 'even with every answer right, guessing does as well',
+      smallEffect,
+      notShown: 'A test that finds nothing does not show that there is nothing.',
+      caution: () => null,
+    },
+    trials: {
+      isRight,
+      countHeader: () => 'Right',
+      count: (answers, truth) => `${rightIn(answers, truth)} of ${answers.length}`,
+    },
+    portray: (result) => forcedChoicePortrait(question, result),
+  };
+}
