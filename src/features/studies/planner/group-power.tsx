@@ -1,3 +1,4 @@
+import { type Chance, chanceAsFraction } from '#shared/statistics/chance.ts';
 import { formatCount, formatNumber } from '../../../lib/format.ts';
 import { Progress } from '../../../ui/progress.tsx';
 import type { Plan } from './plan-of.ts';
@@ -5,18 +6,19 @@ import { PowerTable } from './power-table.tsx';
 import { useGroupPower } from './use-group-power.ts';
 
 /** What a group finds, simulated by the registered test: there is no formula for it. */
-export function GroupPower({ plan }: { plan: Plan }) {
-  const rates = plan.figures.power.map(({ correctRate }) => correctRate);
+export function GroupPower({ plan, chance }: { plan: Plan; chance: Chance }) {
+  const { numerator, denominator } = chanceAsFraction(chance);
+  const rates = plan.figures.power.map(({ rate }) => rate);
   const soFar = useGroupPower({
     listeners: plan.listeners,
     trials: plan.trials,
-    labels: plan.method.chance.denominator,
+    labels: Number(denominator / numerator),
     alpha: plan.alpha,
     alternative: plan.alternative,
     rates,
   });
-  const power = rates.map((correctRate, index) => ({
-    correctRate,
+  const power = rates.map((rate, index) => ({
+    rate,
     // Half a study either way: a simulation promises neither all nor nothing.
     power: soFar === null ? 0 : ((soFar.found[index] ?? 0) + 0.5) / (soFar.done + 1),
   }));
