@@ -7,6 +7,7 @@ import { pinoHttp } from 'pino-http';
 import type { Deps } from './deps.ts';
 import { accountRoutes } from './features/account/account.routes.ts';
 import { apiReferenceRoutes } from './features/api-reference/api-reference.routes.ts';
+import { attendancesRoutes } from './features/attendances/attendances.routes.ts';
 import { cablesRoutes } from './features/cables/cables.routes.ts';
 import { codesRoutes } from './features/codes/codes.routes.ts';
 import { firstOwnerRoutes } from './features/first-owner/first-owner.routes.ts';
@@ -107,6 +108,7 @@ export function createApp(deps: Deps) {
   studiesRoutes(api, access, deps);
   codesRoutes(api, access, deps);
   sessionsRoutes(api, access, deps, sittings);
+  attendancesRoutes(api, access, deps, sittings);
   reportsRoutes(api, access, deps);
   publicationsRoutes(api, access, deps);
   mailRoutes(api, access, deps);

@@ -1,6 +1,8 @@
 import { CodeKey } from './blind/code-key.entity.ts';
 import { DrawSecret } from './blind/draw-secret.entity.ts';
 import { PasswordReset } from './features/account/password-reset.entity.ts';
+import { Attendance } from './features/attendances/attendance.entity.ts';
+import { Listener } from './features/attendances/listener.entity.ts';
 import { Cable } from './features/cables/cable.entity.ts';
 import { Specimen } from './features/cables/specimen.entity.ts';
 import { Invitation } from './features/invitations/invitation.entity.ts';
@@ -39,4 +41,6 @@ export const entities = [
   PasswordReset,
   SignInAttempt,
   PastRole,
+  Listener,
+  Attendance,
 ];

@@ -1,5 +1,7 @@
 import { type DataSource, In } from 'typeorm';
 import { withTransaction } from '../db/transaction.ts';
+import { Attendance } from '../features/attendances/attendance.entity.ts';
+import { Listener } from '../features/attendances/listener.entity.ts';
 import { Cable } from '../features/cables/cable.entity.ts';
 import { Specimen } from '../features/cables/specimen.entity.ts';
 import { Invitation } from '../features/invitations/invitation.entity.ts';
@@ -19,6 +21,8 @@ export function forgetDemo(db: DataSource, organisationId: string): Promise<void
     await tx.delete(Cable, { organisationId });
     await tx.delete(OutgoingMail, { organisationId });
     await tx.delete(Invitation, { organisationId });
+    await tx.delete(Attendance, { organisationId });
+    await tx.delete(Listener, { organisationId });
     await tx.delete(PastRole, { organisationId });
     await tx.delete(Membership, { organisationId });
     await tx.delete(User, { email: In(demoPeople.map(({ email }) => email)) });

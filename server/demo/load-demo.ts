@@ -25,7 +25,8 @@ import {
 } from './demo-scenario.ts';
 import { forgetDemo } from './forget-demo.ts';
 import { HandClock } from './hand-clock.ts';
-import { type People, prepareStudy } from './prepare-study.ts';
+import { inviteDemoListeners } from './invite-listeners.ts';
+import { demoTimeZone, type People, prepareStudy } from './prepare-study.ts';
 import { runPublishedStudy } from './published-study.ts';
 import { type Hearing, SimulatedSession } from './simulated-session.ts';
 
@@ -124,7 +125,8 @@ async function runFirstSession(
   const { where, sessionId } = await prepareStudy(deps, organisationId, people, draft);
   await runSession(deps, clock, sessionId, hearing);
   const plannedAt = new Date(clock.now() + 7 * dayMs).toISOString();
-  await planSession(deps, where, { plannedAt, room: 'Listening room', proctorId: people.proctor });
+  const room = 'Listening room';
+  await planSession(deps, where, { plannedAt, timeZone: demoTimeZone, room, proctorId: people.proctor });
 }
 
 /**
@@ -152,5 +154,6 @@ export async function loadDemo(deps: Deps): Promise<void> {
   await runClosedStudy(past, clock, organisationId, people, of(closedPreference), preference);
   await runFirstSession(past, clock, organisationId, people, of(collectingStudy));
   await createStudy(past, organisationId, people.manager, of(draftStudy));
-  await prepareStudy(deps, organisationId, people, { ...studyToRun, cables, codeHolderId });
+  const toRun = await prepareStudy(deps, organisationId, people, of(studyToRun));
+  await inviteDemoListeners(deps, { organisationId, userId: people.manager }, toRun.sessionId);
 }

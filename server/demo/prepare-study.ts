@@ -5,6 +5,9 @@ import { planSession } from '../features/sessions/sessions.service.ts';
 import { createStudy, sealStudy } from '../features/studies/studies.service.ts';
 import type { DemoPersonKey } from './demo-people.ts';
 
+/** Where the demo's workshop stands. */
+export const demoTimeZone = 'Europe/Lisbon';
+
 export type People = Record<DemoPersonKey, string>;
 
 /** Draft, seal, codes and one planned session: a study ready to run. */
@@ -16,7 +19,12 @@ export async function prepareStudy(deps: Deps, organisationId: string, people: P
   await drawCodes(deps, where, holder);
   await openCodes(deps, where, holder, 'labels');
   await confirmCodes(deps, where, holder);
-  const plannedAt = new Date(deps.clock.now() + 3_600_000).toISOString();
-  const session = await planSession(deps, where, { plannedAt, room: 'Listening room', proctorId: people.proctor });
+  const plannedAt = new Date(Math.ceil((deps.clock.now() + 3_600_000) / 900_000) * 900_000).toISOString();
+  const session = await planSession(deps, where, {
+    plannedAt,
+    timeZone: demoTimeZone,
+    room: 'Listening room',
+    proctorId: people.proctor,
+  });
   return { where, sessionId: session.id };
 }

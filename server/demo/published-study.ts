@@ -8,7 +8,8 @@ import { recordDeviation } from '../features/studies/studies.service.ts';
 import { Sittings } from '../live/sittings.ts';
 import { publishedStatements } from './demo-scenario.ts';
 import type { HandClock } from './hand-clock.ts';
-import { type People, prepareStudy } from './prepare-study.ts';
+import { demoLinks } from './invite-listeners.ts';
+import { demoTimeZone, type People, prepareStudy } from './prepare-study.ts';
 import { type Hearing, SimulatedSession } from './simulated-session.ts';
 
 /** A simulated listener who hears the difference in some of the trials and guesses in the others. */
@@ -32,15 +33,26 @@ export async function runPublishedStudy(
   const { where, sessionId } = await prepareStudy(deps, organisationId, people, draft);
   const sittings = new Sittings(deps);
   const hearings = [0.75, null, 0.6, 0.8];
+  const listeners = ['ilse', 'bram', 'bram', 'oona'].map((name) => `${name}@listeners.example`);
   for (const [index, share] of hearings.entries()) {
     clock.advance(3_600_000);
     const plannedAt = new Date(clock.now()).toISOString();
     const id =
       index === 0
         ? sessionId
-        : (await planSession(deps, where, { plannedAt, room: 'Listening room', proctorId: people.proctor })).id;
+        : (
+            await planSession(deps, where, {
+              plannedAt,
+              timeZone: demoTimeZone,
+              room: 'Listening room',
+              proctorId: people.proctor,
+            })
+          ).id;
     const session = await SimulatedSession.open(deps, clock, sittings, id);
-    await session.seat(['Armchair']);
+    // Whoever came when the amplifier failed comes back: one listener, one label.
+    const listener = listeners[index];
+    const invited = { organisationId, userId: people.manager };
+    await session.seat(['Armchair'], listener === undefined ? [] : await demoLinks(deps, invited, id, [listener]));
     if (share === null) {
       await session.abandon('The amplifier went into protection during seating.');
       continue;

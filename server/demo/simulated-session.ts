@@ -1,9 +1,10 @@
 import { randomBytes } from 'node:crypto';
 import type { ListenerView } from '#shared/contracts/listener-live.ts';
 import { cautions, type ProctorCommand, type ProctorView } from '#shared/contracts/proctor-live.ts';
-import { consentVersion } from '#shared/contracts/seats.ts';
+import { consentVersion, linkedConsentVersion } from '#shared/contracts/seats.ts';
 import { contributionCommitment } from '#shared/session/answer-leaf.ts';
 import type { Deps } from '../deps.ts';
+import { takeLinkedSeat } from '../features/attendances/answering.service.ts';
 import { tokenDigest } from '../features/sessions/seats.service.ts';
 import { seatByToken } from '../features/sessions/sessions.store.ts';
 import type { Sitting } from '../live/sitting.ts';
@@ -21,11 +22,13 @@ export type Hearing = (codes: readonly string[], seat: number, trial: number) =>
 export class SimulatedSession {
   readonly #clock: HandClock;
   readonly #sitting: Sitting;
+  readonly #sittings: Sittings;
   readonly #deps: Deps;
   #console: ProctorView | null = null;
   readonly #phones: Phone[] = [];
 
-  private constructor(deps: Deps, clock: HandClock, sitting: Sitting) {
+  private constructor(deps: Deps, clock: HandClock, sittings: Sittings, sitting: Sitting) {
+    this.#sittings = sittings;
     this.#deps = deps;
     this.#clock = clock;
     this.#sitting = sitting;
@@ -35,7 +38,7 @@ export class SimulatedSession {
   }
 
   static async open(deps: Deps, clock: HandClock, sittings: Sittings, sessionId: string): Promise<SimulatedSession> {
-    const session = new SimulatedSession(deps, clock, await sittings.of(sessionId));
+    const session = new SimulatedSession(deps, clock, sittings, await sittings.of(sessionId));
     await session.#sitting.settled();
     return session;
   }
@@ -54,15 +57,28 @@ export class SimulatedSession {
     await this.#sitting.settled();
   }
 
-  /** Cautions, seating, and the phones' randomness, up to the fixed draw. */
-  async seat(places: readonly string[]): Promise<void> {
+  /**
+   * Cautions, seating, and the phones' randomness, up to the fixed draw.
+   *
+   * @param links personal links, place by place; whoever has none joins by code
+   */
+  async seat(places: readonly string[], links: readonly string[] = []): Promise<void> {
     await this.#command({ kind: 'confirm-cautions', items: [...cautions] });
     await this.#command({ kind: 'open-seating' });
-    for (const place of places) {
+    for (const [index, place] of places.entries()) {
       await this.#wait(21_000);
       const secret = randomBytes(32).toString('hex');
       const commitment = contributionCommitment(secret);
-      const { token } = await this.#sitting.takeSeat({ place, commitment, consentVersion });
+      const consent = { place, commitment };
+      const link = links[index];
+      const { token } =
+        link === undefined
+          ? await this.#sitting.takeSeat({ ...consent, consentVersion }, null)
+          : await takeLinkedSeat(this.#deps, this.#sittings, {
+              token: link,
+              ...consent,
+              consentVersion: linkedConsentVersion,
+            });
       const seat = await seatByToken(this.#deps.db.manager, tokenDigest(token));
       if (seat === null) throw new Error('a taken seat is gone');
       const phone: Phone = { seat: seat.label, secret, view: null };

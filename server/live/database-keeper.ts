@@ -4,6 +4,8 @@ import { presentationNow } from '#shared/session/progress.ts';
 import { commitDraw, cueFor } from '../blind/index.ts';
 import { type Tx, withTransaction } from '../db/transaction.ts';
 import type { Deps } from '../deps.ts';
+import { labelOf, noteSeated } from '../features/attendances/attendances.store.ts';
+import { dropReminders, tellCancelled } from '../features/attendances/telling.service.ts';
 import * as store from '../features/sessions/sessions.store.ts';
 import { lockStudyRow, studyById, updateStudy } from '../features/studies/studies.store.ts';
 import { append } from '../ledger/ledger.ts';
@@ -31,7 +33,8 @@ export function databaseKeeper(deps: Deps): Keeper {
   };
 }
 
-function keepingIn(tx: Tx, { random, clock }: Deps): Keeping {
+function keepingIn(tx: Tx, deps: Deps): Keeping {
+  const { random, clock } = deps;
   return {
     openSeating: async ({ session, state }) => {
       const study = await studyById(tx, session.studyId);
@@ -47,10 +50,12 @@ function keepingIn(tx: Tx, { random, clock }: Deps): Keeping {
       await updateStudy(tx, study.id, { state: 'collecting' }, new Date(clock.now()));
       return { commitment, code };
     },
-    addSeat: async (seat) => {
+    addSeat: async (seat, link) => {
       await lockStudyRow(tx, seat.studyId);
-      const label = `L${String((await store.countSeatsOfStudy(tx, seat.studyId)) + 1).padStart(2, '0')}`;
+      const known = link === null ? null : await labelOf(tx, link.listenerId);
+      const label = known ?? (await store.nextLabel(tx, seat.studyId));
       await store.insertSeat(tx, { ...seat, label });
+      if (link !== null) await noteSeated(tx, link, label);
       return { ...seat, label };
     },
     saveAnswer: (row) => store.saveAnswer(tx, row),
@@ -63,6 +68,10 @@ function keepingIn(tx: Tx, { random, clock }: Deps): Keeping {
         events.map(({ kind, at, payload }) => ({ kind, at, payload, session: number })),
       );
       await store.updateSession(tx, id, columnsOf(afterEvents(memory, events, entries)));
+      const happened = new Set(events.map(({ kind }) => kind));
+      const isCancelled = happened.has('session-abandoned') && memory.state.phase === 'planned';
+      if (isCancelled) await tellCancelled(tx, deps, memory.session);
+      else if (happened.has('seating-opened')) await dropReminders(tx, deps, id);
       return entries;
     },
   };

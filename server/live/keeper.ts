@@ -4,6 +4,9 @@ import type { Answer } from '../features/sessions/answer.entity.ts';
 import type { Seat } from '../features/sessions/seat.entity.ts';
 import type { SessionMemory } from './session-memory.ts';
 
+/** Whoever comes by a personal link: the listener of the study, their attendance, and the token that their seat gets. */
+export type SeatLink = { readonly attendanceId: string; readonly listenerId: string; readonly seatToken: string };
+
 /** What can be kept of a session within one action. */
 export type Keeping = {
   /**
@@ -11,8 +14,8 @@ export type Keeping = {
    * @throws Problem `wrong-phase` while the specimens are not coded
    */
   openSeating(memory: SessionMemory): Promise<{ commitment: string; code: string }>;
-  /** Writes down a seat under the next free label. */
-  addSeat(seat: Omit<Seat, 'label'>): Promise<Seat>;
+  /** Writes down a seat: under the label that a linked listener has in the study, or the next free one. */
+  addSeat(seat: Omit<Seat, 'label'>, link: SeatLink | null): Promise<Seat>;
   saveAnswer(row: Answer): Promise<void>;
   /** Puts events on the record. */
   record(memory: SessionMemory, events: readonly SessionEvent[]): Promise<Entry[]>;

@@ -52,6 +52,7 @@ export class Rehearsals {
         proctorId: of.proctorId,
         room: of.room,
         plannedAt: new Date(clock.now()),
+        timeZone: 'UTC',
         phase: 'planned',
         code: null,
         trialsLocked: 0,

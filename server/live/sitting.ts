@@ -6,11 +6,12 @@ import { dueAt } from '#shared/session/progress.ts';
 import type { Deps } from '../deps.ts';
 import type { Seat } from '../features/sessions/seat.entity.ts';
 import { tokenDigest } from '../features/sessions/seats.service.ts';
+import type { Session } from '../features/sessions/session.entity.ts';
 import { sessionById } from '../features/sessions/sessions.store.ts';
 import { type AnswerCommand, answerRow, requireAnswerable, requireLate } from './answers.ts';
 import { consoleViewOf, phoneViewOf } from './audience-views.ts';
 import { databaseKeeper } from './database-keeper.ts';
-import type { Keeper, Keeping } from './keeper.ts';
+import type { Keeper, Keeping, SeatLink } from './keeper.ts';
 import { afterAnswer, afterEvents, heldOf, loadMemory, type SessionMemory } from './session-memory.ts';
 import { Watchers } from './watchers.ts';
 
@@ -94,23 +95,49 @@ export class Sitting {
     });
   }
 
-  takeSeat(body: {
-    place: string;
-    commitment: string;
-    consentVersion: number;
-  }): Promise<{ token: string; seat: string }> {
+  /** Takes a seat. Whoever comes by a personal link finds the seat again that they took by it before. */
+  takeSeat(
+    body: { place: string; commitment: string; consentVersion: number },
+    link: SeatLink | null,
+  ): Promise<{ token: string; seat: string }> {
     return this.#inTurn(async () => {
-      const token = this.#deps.random.bytes('seat-token', 24).toString('base64url');
+      const token = link?.seatToken ?? this.#deps.random.bytes('seat-token', 24).toString('base64url');
+      const digest = tokenDigest(token);
+      const own = [...this.#memory.seats.values()].find((seat) => seat.tokenDigest === digest);
+      if (own !== undefined) return { token, seat: own.label };
       const { id: sessionId, studyId } = this.#memory.session;
       const { place, commitment, consentVersion } = body;
-      const unlabelled = { id: this.#deps.random.id(), studyId, sessionId, place, tokenDigest: tokenDigest(token) };
+      const unlabelled = { id: this.#deps.random.id(), studyId, sessionId, place, tokenDigest: digest };
+      const joinedBy = link === null ? 'code' : 'personal-link';
       const seat = await this.#perform(async (keeping) => {
-        const added = await keeping.addSeat(unlabelled);
-        const command = { kind: 'take-seat', seat: added.label, commitment, consentVersion } as const;
+        const added = await keeping.addSeat(unlabelled, link);
+        const command = { kind: 'take-seat', seat: added.label, commitment, consentVersion, joinedBy } as const;
         return { command, stored: () => this.#seatTaken(added), result: added.label };
       });
       return { token, seat };
     });
+  }
+
+  /** Changes what is planned while seating has not opened; `store` keeps it. */
+  replan(store: () => Promise<Session>): Promise<void> {
+    return this.#inTurn(async () => {
+      this.#requirePlanned('moved');
+      this.#memory = { ...this.#memory, session: await store() };
+      await this.#show();
+    });
+  }
+
+  /** Ends the session before anybody was seated. */
+  cancel(reason: string): Promise<void> {
+    return this.#inTurn(async () => {
+      this.#requirePlanned('cancelled');
+      await this.#do({ kind: 'abandon', reason });
+    });
+  }
+
+  #requirePlanned(done: string): void {
+    if (this.#memory.state.phase !== 'planned')
+      throw new Problem('wrong-phase', `A session can be ${done} until its seating opens.`);
   }
 
   noteRestart(): Promise<void> {

@@ -14,23 +14,47 @@ export type MailContent = {
   readonly footer: string;
 };
 
-const onDay = (at: Date) =>
-  new Intl.DateTimeFormat('en-GB', { dateStyle: 'long', timeStyle: 'short', timeZone: 'UTC' }).format(at);
+const onDay = (at: Date, timeZone = 'UTC') =>
+  `${new Intl.DateTimeFormat('en-GB', { dateStyle: 'long', timeStyle: 'short', timeZone }).format(at)} (${timeZone})`;
 
 export type StudyMail = { readonly title: string; readonly url: string };
 
+type PlannedSession = {
+  readonly number: number;
+  readonly room: string;
+  readonly plannedAt: Date;
+  readonly timeZone: string;
+};
+
 /** A session was planned; to its proctor. */
-export function sessionPlannedMail(
-  study: StudyMail,
-  session: { readonly number: number; readonly room: string; readonly plannedAt: Date },
-): MailContent {
+export function sessionPlannedMail(study: StudyMail, session: PlannedSession): MailContent {
   return {
     subject: `${study.title}: session ${session.number} is yours to run`,
     paragraphs: [
-      `You are the proctor of session ${session.number} of ${study.title}, in ${session.room}, on ${onDay(session.plannedAt)} (UTC).`,
+      `You are the proctor of session ${session.number} of ${study.title}, in ${session.room}, on ${onDay(session.plannedAt, session.timeZone)}.`,
       'Its console leads you through the room check, the seating and every change.',
     ],
     action: { label: 'Open the console', url: study.url },
+    footer: 'You get this because a manager named you as the proctor.',
+  };
+}
+
+/** A session moved or does not take place; to its proctor. */
+export function sessionChangedMail(
+  study: StudyMail,
+  session: PlannedSession,
+  change: 'moved' | 'cancelled',
+): MailContent {
+  const what = `Session ${session.number} of ${study.title}, of which you are the proctor,`;
+  return {
+    subject: `${study.title}: session ${session.number} is ${change}`,
+    paragraphs: [
+      change === 'moved'
+        ? `${what} now takes place in ${session.room}, on ${onDay(session.plannedAt, session.timeZone)}.`
+        : `${what} on ${onDay(session.plannedAt, session.timeZone)} does not take place.`,
+      'Whoever is invited to listen is told too.',
+    ],
+    action: { label: 'See the session', url: study.url },
     footer: 'You get this because a manager named you as the proctor.',
   };
 }
@@ -68,7 +92,7 @@ export function invitationMail(invitation: {
     subject: `${invitedBy} invites you to ${organisation} on Fairlead`,
     paragraphs: [
       `${invitedBy} invites you to join ${organisation} as ${roleWords[role]}.`,
-      `The link works once, until ${onDay(expiresAt)} (UTC).`,
+      `The link works once, until ${onDay(expiresAt)}.`,
     ],
     action: { label: 'See the invitation', url },
     footer: 'If you do not know what this is about, do nothing: without the link nobody joins in your name.',

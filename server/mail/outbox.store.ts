@@ -1,4 +1,4 @@
-import { In, LessThan, LessThanOrEqual } from 'typeorm';
+import { In, LessThan, LessThanOrEqual, MoreThan } from 'typeorm';
 import type { MailState } from '#shared/contracts/mail.ts';
 import { likePattern, pageOfRows } from '../db/paging.ts';
 import type { Tx } from '../db/transaction.ts';
@@ -23,7 +23,27 @@ export async function updateMail(tx: Tx, id: string, change: Partial<OutgoingMai
 }
 
 export async function eraseTexts(tx: Tx, writtenBefore: Date, states: readonly MailState[]): Promise<void> {
-  await tx.update(OutgoingMail, { state: In([...states]), createdAt: LessThan(writtenBefore) }, { text: '', html: '' });
+  const old = { state: In([...states]), createdAt: LessThan(writtenBefore) };
+  await tx.update(OutgoingMail, old, textErased);
+}
+
+/** Without its text a mail is also without its calendar file, which names the recipient and holds the link. */
+export const textErased = { text: '', html: '', calendar: null, calendarMethod: null };
+
+/** Deletes a mail that has not gone out, or that the mailbox does not show yet. */
+export async function deleteUnsent(tx: Tx, id: string, now: Date): Promise<void> {
+  await tx.delete(OutgoingMail, [
+    { id, state: 'waiting' },
+    { id, state: 'kept', nextAttemptAt: MoreThan(now) },
+  ]);
+}
+
+export async function deleteWaitingFor(tx: Tx, listenerId: string): Promise<void> {
+  await tx.delete(OutgoingMail, { listenerId, state: 'waiting' });
+}
+
+export async function eraseRecipient(tx: Tx, listenerId: string): Promise<void> {
+  await tx.update(OutgoingMail, { listenerId }, { ...textErased, recipient: 'erased', lastError: null });
 }
 
 function newestFirst(tx: Tx, q: string) {
@@ -42,12 +62,14 @@ export function listMail(
   return pageOfRows(rows, page);
 }
 
-export function listKept(tx: Tx, { q, page }: { q: string; page: number }) {
-  return pageOfRows(newestFirst(tx, q).andWhere("mail.state = 'kept'"), page);
+/** Mail that a server would have sent by now. */
+export function listKept(tx: Tx, { q, page, now }: { q: string; page: number; now: Date }) {
+  const kept = newestFirst(tx, q).andWhere("mail.state = 'kept' and mail.nextAttemptAt <= :now", { now });
+  return pageOfRows(kept, page);
 }
 
-export function findKept(tx: Tx, id: string): Promise<OutgoingMail | null> {
-  return tx.findOneBy(OutgoingMail, { id, state: 'kept' });
+export function findKept(tx: Tx, id: string, now: Date): Promise<OutgoingMail | null> {
+  return tx.findOneBy(OutgoingMail, { id, state: 'kept', nextAttemptAt: LessThanOrEqual(now) });
 }
 
 export function lockMail(tx: Tx, organisationId: string, id: string): Promise<OutgoingMail | null> {

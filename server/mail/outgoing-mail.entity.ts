@@ -26,6 +26,18 @@ export class OutgoingMail {
   @Column({ type: 'mediumtext' })
   html: string;
 
+  /** A calendar file that goes with it (RFC 5546), and its method. Emptied like the text. */
+  @Column({ type: 'mediumtext', nullable: true })
+  calendar: string | null;
+
+  @Column({ type: 'varchar', length: 16, name: 'calendar_method', nullable: true })
+  calendarMethod: 'REQUEST' | 'CANCEL' | null;
+
+  /** The listener whom it is for, so that erasing their address finds it; null for everybody else. */
+  @Index('outbox_listener')
+  @Column({ type: 'uuid', name: 'listener_id', nullable: true })
+  listenerId: string | null;
+
   @Column({ type: 'varchar', length: 16 })
   state: MailState;
 

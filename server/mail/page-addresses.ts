@@ -6,6 +6,9 @@ export const pageAddresses = {
     `${publicUrl}/organisations/${organisationId}/studies/${studyId}/codes`,
   console: ({ publicUrl }: Config, organisationId: string, sessionId: string) =>
     `${publicUrl}/organisations/${organisationId}/sessions/${sessionId}/console`,
+  session: ({ publicUrl }: Config, organisationId: string, sessionId: string) =>
+    `${publicUrl}/organisations/${organisationId}/sessions/${sessionId}`,
+  personalLink: ({ publicUrl }: Config, token: string) => `${publicUrl}/listen/invitation#${token}`,
   invitation: ({ publicUrl }: Config, token: string) => `${publicUrl}/invitation#${token}`,
   newPassword: ({ publicUrl }: Config, token: string) => `${publicUrl}/new-password#${token}`,
   forgottenPassword: ({ publicUrl }: Config) => `${publicUrl}/forgotten-password`,

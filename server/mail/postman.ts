@@ -1,7 +1,7 @@
 import { createTransport } from 'nodemailer';
 import { withTransaction } from '../db/transaction.ts';
 import type { Deps } from '../deps.ts';
-import { eraseTexts, lockDue, updateMail } from './outbox.store.ts';
+import { eraseTexts, lockDue, textErased, updateMail } from './outbox.store.ts';
 import type { OutgoingMail } from './outgoing-mail.entity.ts';
 
 const secondMs = 1000;
@@ -96,7 +96,7 @@ export class Postman {
 
   async #send(mail: OutgoingMail): Promise<void> {
     const { db, clock, log, config } = this.#deps;
-    const { id, recipient, subject, text, html } = mail;
+    const { id, recipient, subject, text, html, calendar, calendarMethod } = mail;
     try {
       await this.#transport.sendMail({
         from: this.#from,
@@ -104,6 +104,9 @@ export class Postman {
         subject,
         text,
         html,
+        ...(calendar === null || calendarMethod === null
+          ? {}
+          : { icalEvent: { method: calendarMethod, filename: 'session.ics', content: calendar } }),
         messageId: `<${id}@${new URL(config.publicUrl).hostname}>`,
         headers: { 'Auto-Submitted': 'auto-generated' },
       });
@@ -113,7 +116,7 @@ export class Postman {
       return;
     }
     const sentAt = new Date(clock.now());
-    await updateMail(db.manager, id, { state: 'sent', sentAt, lastError: null, text: '', html: '' });
+    await updateMail(db.manager, id, { state: 'sent', sentAt, lastError: null, ...textErased });
   }
 
   async #postpone({ id, attempts }: OutgoingMail, error: unknown): Promise<void> {

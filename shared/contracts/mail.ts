@@ -59,7 +59,12 @@ export const mailboxRow = z.strictObject({
   createdAt: z.iso.datetime(),
 });
 export type MailboxRow = z.output<typeof mailboxRow>;
-export const mailboxMail = mailboxRow.extend({ text: z.string(), html: z.string() });
+export const mailboxMail = mailboxRow.extend({
+  text: z.string(),
+  html: z.string(),
+  /** The calendar file that goes with it, and its method (RFC 5546). */
+  calendar: z.strictObject({ method: z.string(), content: z.string() }).nullable(),
+});
 export type MailboxMail = z.output<typeof mailboxMail>;
 
 /** What stands in for a mail server. Answers only on the server's own machine, and only while no mail server is set. */

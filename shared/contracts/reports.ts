@@ -41,8 +41,11 @@ export const report = z.strictObject({
     trialsCounted: z.int(),
     answersExpected: z.int(),
     answersMissing: z.int(),
+    /** Labels, each counted once over all sessions. */
     listeners: z.int(),
     listenersLeft: z.int(),
+    /** Of the listeners, how many joined by code alone. */
+    listenersUnlinked: z.int(),
   }),
   sessions: z.array(
     z.strictObject({

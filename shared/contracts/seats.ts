@@ -10,7 +10,10 @@ export const sessionCode = z
   .string()
   .check(z.trim(), z.toUpperCase(), z.regex(/^[2-9A-HJ-NP-Z]{6}$/, 'Enter the six characters on the screen'));
 
+/** What a listener agrees to who joins by code; the phone's words of it. A change of the words is another version. */
 export const consentVersion = 1;
+/** The same for whoever comes by a personal link, whose address stands beside the label until it is erased. */
+export const linkedConsentVersion = 2;
 
 /** What a phone learns before it takes a seat. */
 export const openSession = z.strictObject({

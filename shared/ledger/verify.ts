@@ -1,11 +1,21 @@
 import { checkAnswers, checkTrials } from './check-answers.ts';
 import { checkFigures } from './check-figures.ts';
+import { checkListeners } from './check-listeners.ts';
 import { checkProtocol, checkRecord } from './check-record.ts';
 import { checkCommitments, checkDraws } from './check-secrets.ts';
 import { type PublicationParts, readPublication } from './publication-parts.ts';
 import { StudyReading } from './study-reading.ts';
 
-export type CheckId = 'file' | 'record' | 'protocol' | 'commitments' | 'draws' | 'answers' | 'trials' | 'figures';
+export type CheckId =
+  | 'file'
+  | 'record'
+  | 'protocol'
+  | 'commitments'
+  | 'draws'
+  | 'answers'
+  | 'trials'
+  | 'listeners'
+  | 'figures';
 
 export type Check = {
   readonly id: CheckId;
@@ -32,6 +42,7 @@ const steps: readonly Step[] = [
   { id: 'draws', name: 'Draws recomputed', restsOn: ['record', 'commitments'], run: checkDraws },
   { id: 'answers', name: 'Answers match their leaves', restsOn: ['record'], run: checkAnswers },
   { id: 'trials', name: 'Every drawn trial accounted for', restsOn: ['record'], run: checkTrials },
+  { id: 'listeners', name: 'One label to a listener', restsOn: ['record'], run: checkListeners },
   {
     id: 'figures',
     name: 'Figures recomputed',

@@ -12,7 +12,13 @@ type Plain<C> = C extends unknown ? Omit<C, 'expectVersion'> : never;
 export type SessionCommand =
   | Plain<Exclude<ProctorCommand, { kind: 'open-seating' }>>
   | { kind: 'open-seating'; commitment: string }
-  | { kind: 'take-seat'; seat: string; commitment: string; consentVersion: number }
+  | {
+      kind: 'take-seat';
+      seat: string;
+      commitment: string;
+      consentVersion: number;
+      joinedBy: 'code' | 'personal-link';
+    }
   | { kind: 'reveal'; seat: string; value: string }
   | { kind: 'too-loud'; seat: string }
   | { kind: 'leave'; seat: string }
@@ -132,8 +138,11 @@ export function decide(state: SessionState, command: SessionCommand, now: number
       return [emit('seating-opened', { commitment: command.commitment })];
     case 'take-seat': {
       requirePhase(state, live, 'This session takes no listeners now.');
-      const { seat, commitment, consentVersion } = command;
-      return [emit('listener-joined', { seat, commitment, consentVersion, contributes: state.phase === 'seating' })];
+      const { seat, commitment, consentVersion, joinedBy } = command;
+      const isTaken = state.seats.some((other) => other.seat === seat);
+      refuseUnless(!isTaken, 'already-taken', 'This listener has a seat in this session already.');
+      const contributes = state.phase === 'seating';
+      return [emit('listener-joined', { seat, commitment, consentVersion, contributes, joinedBy })];
     }
     case 'close-seating': {
       requirePhase(state, ['seating'], 'Seating is closed already.');

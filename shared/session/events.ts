@@ -33,6 +33,8 @@ export const sessionEvents = {
     commitment: hex32,
     contributes: z.boolean(),
     consentVersion: z.int(),
+    /** How the listener came. Records from before personal links say nothing: all came by code. */
+    joinedBy: z.enum(['code', 'personal-link']).optional(),
   }),
   'contributions-fixed': z.strictObject({
     session,

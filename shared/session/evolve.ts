@@ -50,8 +50,10 @@ function fold(state: SessionState, event: SessionEvent, method: Method): Folded 
     case 'seating-opened':
       return { ...state, phase: 'seating' };
     case 'listener-joined': {
-      const { seat, commitment, contributes } = event.payload;
-      return { ...state, seats: [...state.seats, { seat, commitment, contributes, revealed: null, left: false }] };
+      const { seat, commitment, contributes, joinedBy } = event.payload;
+      const isLinked = joinedBy === 'personal-link';
+      const joined = { seat, commitment, contributes, isLinked, revealed: null, left: false };
+      return { ...state, seats: [...state.seats, joined] };
     }
     case 'contributions-fixed':
       return { ...state, phase: 'revealing', revealEndsAt: event.at + revealMs };

@@ -7,6 +7,8 @@ export type SeatState = {
   readonly seat: string;
   readonly commitment: string;
   readonly contributes: boolean;
+  /** By a personal link, so that the label is known to stand for one and the same person. */
+  readonly isLinked: boolean;
   /** The phone's revealed 32 bytes, once they are in. */
   readonly revealed: string | null;
   readonly left: boolean;

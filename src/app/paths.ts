@@ -41,6 +41,7 @@ export const paths = {
   sessions: (organisationId: string) => `${organisation(organisationId)}/sessions`,
   planSession: (organisationId: string, studyId: string) =>
     `${organisation(organisationId)}/studies/${studyId}/sessions/new`,
+  session: (organisationId: string, id: string) => `${organisation(organisationId)}/sessions/${id}`,
   console: (organisationId: string, id: string) => `${organisation(organisationId)}/sessions/${id}/console`,
 };
 

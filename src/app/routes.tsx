@@ -29,6 +29,7 @@ const organisationPages: RouteObject[] = [
   { path: paths.publish(organisationId, id), lazy: () => import('../pages/publish-page.tsx') },
   { path: paths.reports(organisationId), lazy: () => import('../pages/reports-page.tsx') },
   { path: paths.sessions(organisationId), lazy: () => import('../pages/sessions-page.tsx') },
+  { path: paths.session(organisationId, id), lazy: () => import('../pages/session-page.tsx') },
   { path: paths.planSession(organisationId, id), lazy: () => import('../pages/session-plan-page.tsx') },
   { path: paths.people(organisationId), lazy: () => import('../pages/people-page.tsx') },
   { path: paths.invitations(organisationId), lazy: () => import('../pages/invitations-page.tsx') },

@@ -25,6 +25,13 @@ export function formatDateTime(iso: string): string {
   return `${formatDate(iso)}, ${formatTime(iso)}`;
 }
 
+/** "Sat, 5 Dec 2026, 19:00 (Europe/Paris)": a time as the people in that zone tell it. */
+export function formatDateTimeIn(iso: string, zone: string): string {
+  const day = { weekday: 'short', day: 'numeric', month: 'short', year: 'numeric' } as const;
+  const time = { hour: '2-digit', minute: '2-digit', hourCycle: 'h23' } as const;
+  return `${new Intl.DateTimeFormat('en-GB', { ...day, ...time, timeZone: zone }).format(new Date(iso))} (${zone})`;
+}
+
 /** The reader's time zone as its name in the zone database, such as "Europe/Paris". */
 export function timeZone(): string {
   return new Intl.DateTimeFormat().resolvedOptions().timeZone;

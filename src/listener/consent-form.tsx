@@ -5,15 +5,21 @@ import { CheckboxField } from '../ui/checkbox-field.tsx';
 import { TextField } from '../ui/text-field.tsx';
 
 type ConsentFormProps = {
-  session: OpenSession;
+  session: Pick<OpenSession, 'title' | 'room' | 'minutes' | 'trials' | 'running' | 'rehearsal'>;
+  /** By a personal link: the label is kept, and the address known. */
+  isLinked?: boolean;
   busy: boolean;
   problem: string | null;
   onTake: (place: string) => void;
-  onBack: () => void;
+  /** To another code; whoever came by a personal link has none. */
+  onBack?: () => void;
 };
 
+const linkedWords =
+  'Your answers are recorded under a label that you keep in this study. Nobody is shown your e-mail address together with it, and you can have the address erased by your link.';
+
 /** What the session is and what taking part means; a seat is taken by agreeing. */
-export function ConsentForm({ session, busy, problem, onTake, onBack }: ConsentFormProps) {
+export function ConsentForm({ session, isLinked = false, busy, problem, onTake, onBack }: ConsentFormProps) {
   const [isAdult, setAdult] = useState(false);
   const [hasAgreed, setAgreed] = useState(false);
   const [place, setPlace] = useState('');
@@ -52,7 +58,7 @@ export function ConsentForm({ session, busy, problem, onTake, onBack }: ConsentF
           <li>This is a rehearsal: nothing that you answer is kept, and no cable is under test.</li>
         ) : (
           <>
-            <li>Your answers are recorded under a seat label, without your name.</li>
+            <li>{isLinked ? linkedWords : 'Your answers are recorded under a seat label, without your name.'}</li>
             <li>You can stop at any time. An answer cannot be withdrawn once its trial has locked.</li>
           </>
         )}
@@ -90,9 +96,11 @@ export function ConsentForm({ session, busy, problem, onTake, onBack }: ConsentF
       <Button type="submit" variant="primary" size="touch" busy={busy}>
         Take the seat
       </Button>
-      <Button variant="quiet" size="touch" onClick={onBack}>
-        Use another code
-      </Button>
+      {onBack === undefined ? null : (
+        <Button variant="quiet" size="touch" onClick={onBack}>
+          Use another code
+        </Button>
+      )}
     </form>
   );
 }

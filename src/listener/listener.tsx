@@ -1,6 +1,7 @@
 import { useEffect, useState } from 'react';
 import { usePageTheme } from '../app/layouts/page-theme.ts';
 import { useDocumentTitle } from '../ui/document-title.ts';
+import { InvitedPage } from './invited-page.tsx';
 import { JoinPage } from './join-page.tsx';
 import { Seat } from './seat.ts';
 import { lastSeat, rememberSeat } from './seat-memory.ts';
@@ -13,6 +14,11 @@ function tokenInAddress(): string | null {
   return token === '' ? lastSeat() : token;
 }
 
+/** The token of a personal link, which leads to its own seat and to no other. */
+function linkInAddress(): string | null {
+  return window.location.pathname === '/listen/invitation' ? window.location.hash.slice(1) : null;
+}
+
 /** Before a seat: the way to one. With a seat: the session, at the address that is the seat. */
 export function Listener() {
   usePageTheme('dim');
@@ -20,14 +26,22 @@ export function Listener() {
     const token = tokenInAddress();
     return token === null ? null : sitDown(token);
   });
-  useDocumentTitle(seat === null ? 'Take a seat' : 'Your seat');
+  const [link] = useState(linkInAddress);
+  useDocumentTitle(titleOf(seat, link));
   useEffect(() => {
     // Another seat's link, opened in this tab, changes nothing but the part after the #.
     const reload = () => window.location.reload();
     window.addEventListener('hashchange', reload);
     return () => window.removeEventListener('hashchange', reload);
   }, []);
-  return seat === null ? <JoinPage onSeated={(token) => setSeat(sitDown(token))} /> : <SeatPage seat={seat} />;
+  if (seat !== null) return <SeatPage seat={seat} />;
+  const takeSeat = (token: string) => setSeat(sitDown(token));
+  return link === null ? <JoinPage onSeated={takeSeat} /> : <InvitedPage token={link} onSeated={takeSeat} />;
+}
+
+function titleOf(seat: Seat | null, link: string | null): string {
+  if (seat !== null) return 'Your seat';
+  return link === null ? 'Take a seat' : 'Your invitation';
 }
 
 function sitDown(token: string): Seat {

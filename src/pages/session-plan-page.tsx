@@ -43,9 +43,9 @@ export function Component() {
           members={data.members}
           codeHolderId={study.draft.codeHolderId}
           save={plan.mutateAsync}
-          onSaved={({ number, plannedAt }) => {
+          onSaved={({ id, number, plannedAt }) => {
             showToast(`Session ${number} is planned for ${formatDateTime(plannedAt)}.`, 'held');
-            void navigate(studyTo, { replace: true });
+            void navigate(paths.session(organisationId, id), { replace: true });
           }}
           cancel={
             <LinkButton variant="quiet" to={studyTo}>

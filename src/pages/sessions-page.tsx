@@ -25,8 +25,7 @@ export async function loader({ params, request }: LoaderFunctionArgs) {
 }
 
 export function Component() {
-  const { person, membership } = usePresence();
-  const { organisationId, role } = membership;
+  const { organisationId, role } = usePresence().membership;
   const [search] = useSearchParams();
   const change = useListAddress();
   const navigate = useNavigate();
@@ -60,7 +59,7 @@ export function Component() {
         onPage={(page) => change({ page })}
         sort={query.sort}
         onSort={(sort) => change({ sort })}
-        consoleOf={({ id, proctorId }) => (proctorId === person.id ? paths.console(organisationId, id) : null)}
+        sessionTo={({ id }) => paths.session(organisationId, id)}
         empty={
           isFiltered ? (
             <NoneFound />

@@ -72,7 +72,7 @@ export function Component() {
           onPage={(page) => changeAddress({ page })}
           sort={query.sort}
           onSort={(sort) => changeAddress({ sort })}
-          consoleOf={consoleOf}
+          sessionTo={(session) => paths.session(organisationId, session.id)}
           empty={<p className="text-soft">None planned yet.</p>}
         />
       }

@@ -4,16 +4,16 @@ import request from 'supertest';
 import { afterAll, afterEach, beforeAll, beforeEach, describe, expect, it } from 'vitest';
 import { readConfig } from '../../server/config.ts';
 import { withTransaction } from '../../server/db/transaction.ts';
-import { HandClock } from '../../server/demo/hand-clock.ts';
 import type { MailContent } from '../../server/mail/mails.ts';
 import { postMail } from '../../server/mail/outbox.ts';
 import { OutgoingMail } from '../../server/mail/outgoing-mail.entity.ts';
 import { forgetOldTexts, retryDelaysMs } from '../../server/mail/postman.ts';
 import { serve } from '../../server/serve.ts';
 import { type Agent, makeOrganisation, readyStudy, signedIn, type TestOrganisation } from '../support/people.ts';
+import { PostmansClock } from '../support/postmans-clock.ts';
 import { SmtpReceiver, smtpEnvironment } from '../support/smtp-receiver.ts';
 import { type TestServer, testServer } from '../support/test-server.ts';
-import { until, untilAsked } from '../support/until.ts';
+import { untilAsked } from '../support/until.ts';
 
 const content: MailContent = {
   subject: 'Study Plover: something happened',
@@ -23,29 +23,6 @@ const content: MailContent = {
 };
 
 const secondMs = 1000;
-
-/** Moves only once the postman waits for it, so that no round is missed. */
-class PostmansClock extends HandClock {
-  readonly #waiting = new Set<object>();
-
-  override at(atMs: number, callback: () => void): () => void {
-    const timer = {};
-    this.#waiting.add(timer);
-    const cancel = super.at(atMs, () => {
-      this.#waiting.delete(timer);
-      callback();
-    });
-    return () => {
-      this.#waiting.delete(timer);
-      cancel();
-    };
-  }
-
-  async pass(ms: number): Promise<void> {
-    await until('the postman to wait', () => this.#waiting.size > 0);
-    this.advance(ms);
-  }
-}
 
 async function unusedPort(): Promise<number> {
   const probe = createServer().listen(0, '127.0.0.1');

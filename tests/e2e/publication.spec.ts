@@ -25,7 +25,7 @@ const outcomes = (page: Page) =>
       lines.map((line) => `${line.getAttribute('data-check')} ${line.lastElementChild?.lastElementChild?.textContent}`),
     );
 
-const allPass = ['file', 'record', 'protocol', 'commitments', 'draws', 'answers', 'trials', 'figures'].map(
+const allPass = ['file', 'record', 'protocol', 'commitments', 'draws', 'answers', 'trials', 'listeners', 'figures'].map(
   (id) => `${id} pass`,
 );
 
@@ -52,7 +52,7 @@ test('a stranger reads a publication without a script, and checks it in the brow
 
   await page.goto(address);
   await expect(page.getByRole('heading', { level: 1 })).toHaveText(finding ?? '');
-  await expect(page.getByText('All 8 checks pass.')).toBeVisible();
+  await expect(page.getByText('All 9 checks pass.')).toBeVisible();
   await expect(page.getByText('It is the file that was published')).toBeVisible();
   expect(await outcomes(page)).toEqual(allPass);
   await expectAccessible(page, 'publication');
@@ -92,7 +92,7 @@ test('one altered byte of the download fails the right check on the page [V2] [V
     const altered = whole.slice(0, at) + put(whole.charAt(at)) + whole.slice(at + 1);
     await page.route('**/p/*/*.json', (route) => route.fulfill({ contentType: 'application/json', body: altered }));
     await page.goto(address);
-    await expect(page.getByText(/of 8 checks pass/)).toBeVisible();
+    await expect(page.getByText(/of 9 checks pass/)).toBeVisible();
     expect((await outcomes(page)).filter((line) => line.endsWith(' fail'))).toEqual([`${check} fail`]);
     await expect(page.getByText('it was altered on its way to you')).toBeVisible();
     if (check === 'answers') await expectAccessible(page, 'altered');
@@ -109,7 +109,7 @@ test('a visitor downloads the record and checks a file of their own [V12]', asyn
   const choose = page.getByLabel(/Check a file of your own/);
   await choose.setInputFiles({ name: 'mine.json', mimeType: 'application/json', buffer: content });
   await expect(page.getByRole('heading', { name: 'Your file mine.json, checked' })).toBeVisible();
-  await expect(page.getByText('All 8 checks pass.')).toBeVisible();
+  await expect(page.getByText('All 9 checks pass.')).toBeVisible();
   await expect(page.getByText('It is the file that was published')).toBeVisible();
   const bent = content.toString('utf8').replace('"seat":"L01"', '"seat":"L02"');
   await choose.setInputFiles({ name: 'bent.json', mimeType: 'application/json', buffer: Buffer.from(bent) });
@@ -118,7 +118,7 @@ test('a visitor downloads the record and checks a file of their own [V12]', asyn
   await choose.setInputFiles({ name: 'notes.txt', mimeType: 'text/plain', buffer: Buffer.from('not a record') });
   await expect(page.locator('[data-check=file]')).toContainText('It is not readable as JSON.');
   await page.getByRole('button', { name: 'Check the published file' }).click();
-  await expect(page.getByText('All 8 checks pass.')).toBeVisible();
+  await expect(page.getByText('All 9 checks pass.')).toBeVisible();
 });
 
 test('a page that cannot fetch the record says so, and verifies nothing [V12]', async ({ page }) => {
@@ -128,7 +128,7 @@ test('a page that cannot fetch the record says so, and verifies nothing [V12]', 
   await expect(page.getByText('The file could not be read.')).toBeVisible();
   await page.unroute('**/p/*/*.json');
   await page.getByRole('button', { name: 'Check again' }).click();
-  await expect(page.getByText('All 8 checks pass.')).toBeVisible();
+  await expect(page.getByText('All 9 checks pass.')).toBeVisible();
 });
 
 test('a manager publishes a closed study, and withdraws it [V5] [V9]', async ({ page, browser }) => {
@@ -148,7 +148,7 @@ test('a manager publishes a closed study, and withdraws it [V5] [V9]', async ({ 
   await page.getByRole('button', { name: 'Publish for good' }).click();
   await page.waitForURL(/\/p\/\w{8}$/);
   const address = page.url();
-  await expect(page.getByText('All 8 checks pass.')).toBeVisible();
+  await expect(page.getByText('All 9 checks pass.')).toBeVisible();
   await expect(page.getByText('The workshop itself.')).toBeVisible();
 
   await page.goBack();
@@ -165,6 +165,6 @@ test('a manager publishes a closed study, and withdraws it [V5] [V9]', async ({ 
   await stranger.goto(address);
   await expect(stranger.getByText('The sleeves had slipped.')).toBeVisible();
   await expect(stranger.getByText('Nothing in public: these numbers support no claim.')).toBeVisible();
-  await expect(stranger.getByText('All 8 checks pass.')).toBeVisible();
+  await expect(stranger.getByText('All 9 checks pass.')).toBeVisible();
   await expectAccessible(stranger, 'withdrawn');
 });

@@ -1,7 +1,9 @@
+import request from 'supertest';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type { StudyDraft } from '#shared/contracts/studies.ts';
 import { type MethodId, methodIds } from '#shared/methods/methods.ts';
 import { HandClock } from '../../server/demo/hand-clock.ts';
+import { linkTokenOf } from '../../server/features/attendances/personal-link.ts';
 import { Console, Phone } from '../support/live.ts';
 import { makeOrganisation, readyStudy } from '../support/people.ts';
 import { repeatableRandom } from '../support/random.ts';
@@ -18,7 +20,7 @@ type Asked = {
   /** What the draw decided, trial by trial, read from the codes that were fitted. */
   drawn: (codes: readonly string[], trials: readonly string[][]) => string;
 };
-type Run = { phones: string[][]; manager: string[]; proctor: string[]; codes: string[][] };
+type Run = { phones: string[][]; manager: string[]; mails: string[]; proctor: string[]; codes: string[][] };
 
 // Commitments, and the digests chained from them, are random by design.
 const withoutDigests = (text: string) => text.replace(/[0-9a-f]{64}/g, '#').replace(/urn:uuid:[0-9a-f-]{36}/g, 'urn');
@@ -36,6 +38,7 @@ async function run({ study: change, choices }: Asked, { codeKey, drawSecret }: S
       `${study.base}/studies`,
       `${study.base}/sessions`,
       `${study.base}/sessions/${study.sessionId}`,
+      `${study.base}/sessions/${study.sessionId}/attendances`,
       `${study.at}/codes`,
       `${study.base}/waiting`,
       `${study.base}/reports`,
@@ -47,12 +50,21 @@ async function run({ study: change, choices }: Asked, { codeKey, drawSecret }: S
       const reply = await study.manager.get(path);
       manager.push(`${reply.status} ${reply.headers['content-length']} ${reply.text}`);
     }
+    for (const token of links) {
+      const reply = await request(server.address).post('/api/personal-link/look').send({ token });
+      manager.push(`${reply.status} ${reply.text}`);
+    }
   };
+  const links: string[] = [];
+  const invited = `${study.base}/sessions/${study.sessionId}/attendances`;
+  await study.manager.post(invited).send({ addresses: 'ada@listeners.example' }).expect(200);
+  for (const { id } of (await study.manager.get(invited)).body.rows) links.push(linkTokenOf(server.deps.config, id));
   await look();
   const desk = await Console.open(server.address, people.proctor.email, study.sessionId);
   const code = await desk.openSeating();
   const phones: Phone[] = [];
-  for (const name of ['left', 'right']) phones.push(await Phone.join(server.address, code, name));
+  phones.push(await Phone.joinByLink(server.address, links[0] ?? '', 'left'));
+  phones.push(await Phone.join(server.address, code, 'right'));
   await begin(desk, phones, clock);
   const codes: string[][] = [];
   for (const [index, choice] of choices.entries()) {
@@ -66,9 +78,11 @@ async function run({ study: change, choices }: Asked, { codeKey, drawSecret }: S
   await desk.act({ kind: 'finish' });
   for (const phone of phones) await phone.sees('the end', ({ phase }) => phase === 'finished');
   await look();
+  const mails: object[] = await server.deps.db.query('select * from outbox order by created_at, recipient, subject');
   const seen: Run = {
     phones: phones.map(({ received }) => received.map(withoutDigests)),
     manager: manager.map(withoutDigests),
+    mails: mails.map((mail) => withoutDigests(JSON.stringify(mail))),
     proctor: desk.received.map(withoutDigests),
     codes,
   };
@@ -152,6 +166,11 @@ describe.each(methodIds)('what leaves the server before closing, %s', (id) => {
 
   it.each([1, 2, 3])('is the same for managers, whatever the secrets (run %i) [B1]', (index) => {
     expect(other(index).manager).toEqual(other(0).manager);
+  });
+
+  it.each([1, 2, 3])('is the same in every mail and calendar file, whatever the secrets (run %i) [B1]', (index) => {
+    expect(other(index).mails).toEqual(other(0).mails);
+    expect(other(0).mails.some((mail) => mail.includes('BEGIN:VCALENDAR'))).toBe(true);
   });
 
   it.each([1, 2, 3])('is the same for the proctor but for the code to be fitted (run %i) [B2]', (index) => {

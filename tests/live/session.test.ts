@@ -172,6 +172,7 @@ describe('a session with a proctor and three phones', () => {
       'Draws recomputed: pass',
       'Answers match their leaves: pass',
       'Every drawn trial accounted for: pass',
+      'One label to a listener: pass',
       'Figures recomputed: pass',
     ]);
     const truths = codesOfX.map((codes) => (codes[2] === codes[0] ? 'A' : 'B'));

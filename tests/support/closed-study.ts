@@ -121,7 +121,13 @@ class SessionMaker {
     this.do({ kind: 'open-seating', commitment });
     const value = (seat: string) => hex(`contribution ${seat}`, 32);
     for (const seat of labels)
-      this.do({ kind: 'take-seat', seat, commitment: contributionCommitment(value(seat)), consentVersion: 1 });
+      this.do({
+        kind: 'take-seat',
+        seat,
+        commitment: contributionCommitment(value(seat)),
+        consentVersion: 1,
+        joinedBy: 'personal-link',
+      });
     this.do({ kind: 'close-seating' });
     for (const seat of labels) this.do({ kind: 'reveal', seat, value: value(seat) });
   }

@@ -121,6 +121,17 @@ export class Phone extends LivePage<ListenerView> {
     return phone;
   }
 
+  /** Takes the seat of a personal link, or finds it again. */
+  static async joinByLink(address: string, link: string, name: string): Promise<Phone> {
+    const contribution = hexOf(`contribution ${name}`, 32);
+    const commitment = contributionCommitment(contribution);
+    const body = { token: link, place: name, adult: true, agreed: true, consentVersion: 2, commitment };
+    const reply = await request(address).post('/api/personal-link/seat').send(body).expect(200);
+    const phone = new Phone(address, reply.body, contribution);
+    await phone.sees('a first view', () => true);
+    return phone;
+  }
+
   reveal(): Promise<unknown> {
     return this.ask({ kind: 'reveal', value: this.contribution });
   }

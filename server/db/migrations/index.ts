@@ -2,6 +2,13 @@ import { FirstSchema1796083200000 } from './1796083200000-first-schema.ts';
 import { Publications1796126400000 } from './1796126400000-publications.ts';
 import { Mail1796130000000 } from './1796130000000-mail.ts';
 import { People1796130100000 } from './1796130100000-people.ts';
+import { Attendances1796130400000 } from './1796130400000-attendances.ts';
 
 /** Every migration, oldest first. */
-export const migrations = [FirstSchema1796083200000, Publications1796126400000, Mail1796130000000, People1796130100000];
+export const migrations = [
+  FirstSchema1796083200000,
+  Publications1796126400000,
+  Mail1796130000000,
+  People1796130100000,
+  Attendances1796130400000,
+];

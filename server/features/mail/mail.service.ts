@@ -33,16 +33,16 @@ export function sendAgain({ db, clock }: Deps, { organisationId, id }: { organis
   });
 }
 
-export function listKept({ db }: Deps, query: { q: string; page: number }) {
+export function listKept({ db, clock }: Deps, query: { q: string; page: number }) {
   return withTransaction(db, async (tx) => {
-    const found = await store.listKept(tx, query);
+    const found = await store.listKept(tx, { ...query, now: new Date(clock.now()) });
     return { ...found, rows: found.rows.map(mailboxRowView) };
   });
 }
 
-export function getKept({ db }: Deps, id: string) {
+export function getKept({ db, clock }: Deps, id: string) {
   return withTransaction(db, async (tx) => {
-    const mail = await store.findKept(tx, id);
+    const mail = await store.findKept(tx, id, new Date(clock.now()));
     if (mail === null) throw new Problem('not-found', 'There is no such mail.');
     return mailboxMailView(mail);
   });

@@ -20,5 +20,7 @@ export function mailboxRowView({ id, recipient, subject, createdAt }: OutgoingMa
 }
 
 export function mailboxMailView(mail: OutgoingMail): MailboxMail {
-  return { ...mailboxRowView(mail), text: mail.text, html: mail.html };
+  const { text, html, calendar, calendarMethod } = mail;
+  const file = calendar === null ? null : { method: calendarMethod ?? '', content: calendar };
+  return { ...mailboxRowView(mail), text, html, calendar: file };
 }

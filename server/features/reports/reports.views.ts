@@ -10,6 +10,7 @@ import type { BlindingRung } from '#shared/session/blinding-rung.ts';
 import { countedTrials, revealedDraw } from '#shared/session/counted-trials.ts';
 import type { Draw } from '#shared/session/draw.ts';
 import { truthOf } from '#shared/session/fitting.ts';
+import { listenersToldApart } from '#shared/session/listeners-told-apart.ts';
 import { type RevealedKey, revealedKey } from '#shared/session/revealed-key.ts';
 import type { SessionState } from '#shared/session/state.ts';
 import type { StudyPayloadOf } from '#shared/session/study-events.ts';
@@ -35,6 +36,7 @@ function flowOf({ states, entries }: ReportSource): Report['flow'] {
   const locked = trials.filter(({ outcome }) => outcome === 'locked');
   const opened = states.filter(wasOpened);
   const seats = states.flatMap((state) => state.seats);
+  const { listeners, unlinked } = listenersToldApart(states);
   return {
     sessionsPlanned: states.length,
     sessionsOpened: opened.length,
@@ -46,8 +48,9 @@ function flowOf({ states, entries }: ReportSource): Report['flow'] {
     trialsCounted: locked.length,
     answersExpected: locked.reduce((sum, trial) => sum + trial.seats.length, 0),
     answersMissing: locked.reduce((sum, trial) => sum + trial.missing.length, 0),
-    listeners: seats.length,
-    listenersLeft: seats.filter(({ left }) => left).length,
+    listeners,
+    listenersLeft: new Set(seats.filter(({ left }) => left).map(({ seat }) => seat)).size,
+    listenersUnlinked: unlinked,
   };
 }
 

@@ -2,7 +2,8 @@ import { Column, Entity, Index, PrimaryColumn } from 'typeorm';
 
 /** One listener's place in a session. The token is the seat; its digest is kept. */
 @Entity('seats')
-@Index('seats_label', ['studyId', 'label'], { unique: true })
+@Index('seats_label', ['sessionId', 'label'], { unique: true })
+@Index('seats_study', ['studyId'])
 export class Seat {
   @PrimaryColumn({ type: 'uuid' })
   id: string;
@@ -14,7 +15,7 @@ export class Seat {
   @Column({ type: 'uuid', name: 'session_id' })
   sessionId: string;
 
-  /** L01, L02 ...: one label per listener and study. */
+  /** L01, L02 ...: one label per listener and study, over all its sessions. */
   @Column({ type: 'varchar', length: 8 })
   label: string;
 

@@ -27,6 +27,10 @@ export class Session {
   @Column({ type: 'datetime', precision: 3, name: 'planned_at' })
   plannedAt: Date;
 
+  /** A name of the IANA database: the zone in which mail and calendars tell the time. */
+  @Column({ type: 'varchar', length: 64, name: 'time_zone' })
+  timeZone: string;
+
   @Column({ type: 'varchar', length: 16 })
   phase: SessionState['phase'];
 

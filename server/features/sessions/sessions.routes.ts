@@ -15,6 +15,12 @@ export function sessionsRoutes(router: Router, access: Access, deps: Deps, sitti
   mount(router, access, sessionsApi.list, async ({ query }, who) => sessions.listSessions(deps, who, query));
   mount(router, access, sessionsApi.get, async ({ params }, who) => sessions.getSession(deps, who, params.id));
   mount(router, access, sessionsApi.plan, async ({ params, body }) => sessions.planSession(deps, params, body));
+  mount(router, access, sessionsApi.move, async ({ params, body }, who) =>
+    sessions.moveSession(deps, sittings, who, params.id, body),
+  );
+  mount(router, access, sessionsApi.cancel, async ({ params, body }, who) =>
+    sessions.cancelSession(deps, sittings, who, params.id, body.reason),
+  );
 
   mount(router, access, rehearsalsApi.begin, async ({ body }, who) =>
     beginRehearsal(deps, sittings, who, body.sessionId),

@@ -1,16 +1,18 @@
-import type { SessionDraft, SessionListQuery, SessionRow } from '#shared/contracts/sessions.ts';
+import type { SessionDraft, SessionListQuery, SessionMove, SessionRow } from '#shared/contracts/sessions.ts';
 import { Problem } from '#shared/problem.ts';
 import { sessionPlanOf } from '#shared/protocol/protocol.ts';
 import { type Tx, withTransaction } from '../../db/transaction.ts';
 import type { Deps } from '../../deps.ts';
 import { append } from '../../ledger/ledger.ts';
-import { sessionPlannedMail } from '../../mail/mails.ts';
+import type { Sittings } from '../../live/sittings.ts';
+import { sessionChangedMail, sessionPlannedMail } from '../../mail/mails.ts';
 import { postMail } from '../../mail/outbox.ts';
 import { pageAddresses } from '../../mail/page-addresses.ts';
+import { tellMoved } from '../attendances/moved.service.ts';
 import { lockedStudy, protocolOf } from '../studies/studies.service.ts';
 import { studyById, updateStudy } from '../studies/studies.store.ts';
 import { progressOf } from '../studies/studies.views.ts';
-import { membersOf, namesOf } from '../users/users.store.ts';
+import { findById, membersOf, namesOf } from '../users/users.store.ts';
 import type { Session } from './session.entity.ts';
 import * as store from './sessions.store.ts';
 
@@ -23,20 +25,23 @@ async function rowsOf(tx: Tx, sessions: readonly Session[]): Promise<SessionRow[
   );
   const studies = new Map<string, Awaited<ReturnType<typeof studyById>>>();
   for (const { studyId } of sessions) if (!studies.has(studyId)) studies.set(studyId, await studyById(tx, studyId));
-  return sessions.map(({ id, studyId, number, phase, room, plannedAt, proctorId, trialsLocked, listeners }) => ({
-    id,
-    studyId,
-    title: studies.get(studyId)?.title ?? '',
-    number,
-    phase,
-    room,
-    plannedAt: plannedAt.toISOString(),
-    proctor: names.get(proctorId) ?? 'unknown',
-    proctorId,
-    trials: studies.get(studyId)?.draft.trials ?? 0,
-    trialsLocked,
-    listeners,
-  }));
+  return sessions.map(
+    ({ id, studyId, number, phase, room, plannedAt, timeZone, proctorId, trialsLocked, listeners }) => ({
+      id,
+      studyId,
+      title: studies.get(studyId)?.title ?? '',
+      number,
+      phase,
+      room,
+      plannedAt: plannedAt.toISOString(),
+      timeZone,
+      proctor: names.get(proctorId) ?? 'unknown',
+      proctorId,
+      trials: studies.get(studyId)?.draft.trials ?? 0,
+      trialsLocked,
+      listeners,
+    }),
+  );
 }
 
 export function listSessions(
@@ -97,6 +102,7 @@ export function planSession(
       proctorId: draft.proctorId,
       room: draft.room,
       plannedAt: new Date(draft.plannedAt),
+      timeZone: draft.timeZone,
       phase: 'planned',
       code: null,
       trialsLocked: 0,
@@ -120,4 +126,57 @@ export function planSession(
     if (row === undefined) throw new Error('a session without a row');
     return row;
   });
+}
+
+/** Tells the proctor, unless they did it themselves. */
+async function tellProctor(tx: Tx, deps: Deps, userId: string, session: Session, change: 'moved' | 'cancelled') {
+  const proctor = await findById(tx, session.proctorId);
+  if (proctor === null || proctor.id === userId) return;
+  const { organisationId, id, studyId } = session;
+  const { title } = await studyById(tx, studyId);
+  const mail = sessionChangedMail(
+    { title, url: pageAddresses.session(deps.config, organisationId, id) },
+    session,
+    change,
+  );
+  await postMail(tx, deps, { organisationId, recipient: proctor.email }, mail);
+}
+
+type Who = { organisationId: string; userId: string; role: string | null };
+
+/** Changes when or where a planned session takes place; proctor and listeners are told. */
+export async function moveSession(
+  deps: Deps,
+  sittings: Sittings,
+  who: Who,
+  id: string,
+  { plannedAt, room, timeZone }: SessionMove,
+): Promise<SessionRow> {
+  await getSession(deps, who, id);
+  const sitting = await sittings.of(id);
+  await sitting.replan(() =>
+    withTransaction(deps.db, async (tx) => {
+      const before = await store.lockSession(tx, who.organisationId, id);
+      if (before === null) throw new Problem('not-found', 'There is no such session.');
+      const session = { ...before, plannedAt: new Date(plannedAt), room, timeZone };
+      const isOtherTime = session.plannedAt.getTime() !== before.plannedAt.getTime();
+      if (!isOtherTime && before.room === room && before.timeZone === timeZone) return before;
+      await store.updateSession(tx, id, { plannedAt: session.plannedAt, room, timeZone });
+      await tellProctor(tx, deps, who.userId, session, 'moved');
+      await tellMoved(tx, deps, session, isOtherTime);
+      return session;
+    }),
+  );
+  return getSession(deps, who, id);
+}
+
+/** Ends a session before its seating opens. It keeps its number, and leaves its place to another. */
+export async function cancelSession(deps: Deps, sittings: Sittings, who: Who, id: string, reason: string) {
+  await getSession(deps, who, id);
+  await (await sittings.of(id)).cancel(reason);
+  await withTransaction(deps.db, async (tx) => {
+    const session = await store.sessionById(tx, id);
+    if (session !== null) await tellProctor(tx, deps, who.userId, session, 'cancelled');
+  });
+  return { ok: true } as const;
 }

@@ -74,8 +74,14 @@ export function seatByToken(tx: Tx, tokenDigest: string): Promise<Seat | null> {
   return tx.findOneBy(Seat, { tokenDigest });
 }
 
-export function countSeatsOfStudy(tx: Tx, studyId: string): Promise<number> {
-  return tx.countBy(Seat, { studyId });
+/** The label that the study's next new listener gets. A returning listener has one label in several sessions. */
+export async function nextLabel(tx: Tx, studyId: string): Promise<string> {
+  const seats = await tx.find(Seat, { where: { studyId }, select: { label: true } });
+  return `L${String(new Set(seats.map(({ label }) => label)).size + 1).padStart(2, '0')}`;
+}
+
+export function lockSession(tx: Tx, organisationId: string, id: string): Promise<Session | null> {
+  return tx.findOne(Session, { where: { organisationId, id }, lock: { mode: 'pessimistic_write' } });
 }
 
 export async function insertSeat(tx: Tx, seat: Seat) {

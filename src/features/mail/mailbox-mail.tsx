@@ -34,6 +34,7 @@ export function MailboxMail({ mail }: { mail: Mail }) {
             ))}
           </ul>
         )}
+        {mail.calendar === null ? null : <CalendarFile {...mail.calendar} />}
       </section>
       <section aria-labelledby="mail-html" className="flex min-w-0 flex-col gap-5">
         <h2 id="mail-html" className="text-xl">
@@ -52,6 +53,26 @@ export function MailboxMail({ mail }: { mail: Mail }) {
           </Button>
         )}
       </section>
+    </div>
+  );
+}
+
+/** What a mail program offers to put into the calendar, or to take out of it. */
+function CalendarFile({ method, content }: { method: string; content: string }) {
+  return (
+    <div className="flex flex-col gap-3">
+      <h3 className="text-lg">Calendar file, {method}</h3>
+      <a
+        href={`data:text/calendar;charset=utf-8,${encodeURIComponent(content)}`}
+        download="session.ics"
+        className="inline-flex min-h-12 items-center self-start"
+      >
+        Download session.ics
+      </a>
+      <details>
+        <summary className="cursor-pointer py-2 text-soft">Read it</summary>
+        <pre className="whitespace-pre-wrap font-mono text-sm [overflow-wrap:anywhere]">{content}</pre>
+      </details>
     </div>
   );
 }

@@ -1,8 +1,10 @@
 import type { Report } from '#shared/contracts/reports.ts';
+import { toldApartWords } from '#shared/session/listeners-told-apart.ts';
 import { ReportSection } from './report-section.tsx';
 
 /** From what was planned to what was counted; every loss stands beside the step at which it happened. */
 export function ReportFlow({ flow, missingWords }: Pick<Report, 'flow'> & { missingWords: string }) {
+  const toldApart = toldApartWords({ listeners: flow.listeners, unlinked: flow.listenersUnlinked });
   return (
     <ReportSection
       title="From plan to count"
@@ -18,7 +20,7 @@ export function ReportFlow({ flow, missingWords }: Pick<Report, 'flow'> & { miss
             `${flow.sessionsNeverStarted} never started`,
           ]}
         />
-        <Step count={flow.listeners} of="listeners" losses={[`${flow.listenersLeft} left before the end`]} />
+        <Step count={flow.listeners} of="listeners" losses={[`${flow.listenersLeft} left before the end`, toldApart]} />
         <Step
           count={flow.trialsCounted}
           of={`of ${flow.trialsOpened} opened trials counted`}

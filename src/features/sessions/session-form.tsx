@@ -28,7 +28,7 @@ type SessionFormProps = {
 export function SessionForm({ members, codeHolderId, save, onSaved, cancel }: SessionFormProps) {
   const form = useForm<SessionFormValues, unknown, SessionDraft>({
     resolver: zodResolver(typedSession),
-    defaultValues: emptySession,
+    defaultValues: emptySession(),
   });
   const proctorId = useWatch({ control: form.control, name: 'proctorId' });
   const { isDirty, isSubmitting } = form.formState;
@@ -65,7 +65,7 @@ export function SessionForm({ members, codeHolderId, save, onSaved, cancel }: Se
         <TextField
           label="Date and time"
           type="datetime-local"
-          hint={`In your time zone, ${timeZone()}`}
+          hint={`In your time zone, ${timeZone()}; mail and calendars tell it in this zone`}
           className="max-w-80"
           {...form.register('plannedAt')}
         />

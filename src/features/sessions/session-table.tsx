@@ -17,19 +17,19 @@ type SessionTableProps = {
   empty: ReactNode;
   /** Sessions of one study bear their number alone. */
   isOfOneStudy?: boolean;
-  /** Where a session is led from, by its proctor; null for anybody else. */
-  consoleOf: (session: SessionRow) => string | null;
+  /** The page of a session. */
+  sessionTo: (session: SessionRow) => string;
 };
 
-/** Sessions with the way to their console. Numbers have no gaps: an opened session keeps its own for good. */
-export function SessionTable({ consoleOf, isOfOneStudy = false, ...table }: SessionTableProps) {
+/** Sessions with the way to their pages. Numbers have no gaps: an opened session keeps its own for good. */
+export function SessionTable({ sessionTo, isOfOneStudy = false, ...table }: SessionTableProps) {
   const nameOf = ({ title, number }: SessionRow) =>
     isOfOneStudy ? `Session\u00a0${number}` : `${title}, session\u00a0${number}`;
   return (
     <DataTable
       caption={isOfOneStudy ? 'Sessions of this study' : 'Sessions'}
       isCaptionShown={isOfOneStudy}
-      columns={columnsFor(isOfOneStudy, nameOf, consoleOf)}
+      columns={columnsFor(isOfOneStudy, nameOf, sessionTo)}
       rowKey={({ id }) => id}
       {...table}
     />
@@ -39,7 +39,7 @@ export function SessionTable({ consoleOf, isOfOneStudy = false, ...table }: Sess
 function columnsFor(
   isOfOneStudy: boolean,
   nameOf: (session: SessionRow) => string,
-  consoleOf: SessionTableProps['consoleOf'],
+  sessionTo: SessionTableProps['sessionTo'],
 ): Column<SessionRow>[] {
   return [
     {
@@ -47,7 +47,7 @@ function columnsFor(
       header: 'Session',
       isSortable: true,
       isRowHeader: true,
-      cell: (session) => <SessionName name={nameOf(session)} to={consoleOf(session)} />,
+      cell: (session) => <Link to={sessionTo(session)}>{nameOf(session)}</Link>,
     },
     {
       key: 'phase',
@@ -66,8 +66,4 @@ function columnsFor(
       cell: ({ trialsLocked, trials }) => `${trialsLocked}\u00a0of\u00a0${trials}`,
     },
   ];
-}
-
-function SessionName({ name, to }: { name: string; to: string | null }) {
-  return to === null ? name : <Link to={to}>{name}</Link>;
 }

@@ -54,6 +54,7 @@ describe.each(studies)('a published study by $method, $listeners at a time', ({ 
       'draws pass',
       'answers pass',
       'trials pass',
+      'listeners pass',
       'figures pass',
     ]);
     expect(verifyStudy(parts)).toEqual([...checksOfFile(text)].slice(1));

@@ -59,6 +59,7 @@ function flow({ flow: of, result }: Report): Html {
       [`Answers missing, ${result.missingAnswers}`, of.answersMissing],
       ['Listeners', of.listeners],
       ['Listeners who left', of.listenersLeft],
+      ['Listeners who joined by code alone', of.listenersUnlinked],
     ],
   );
 }

@@ -13,7 +13,7 @@ export function PlanWarnings({ plan }: { plan: Plan }) {
   const caution = words.caution(plan.choices);
   return (
     <div className="flex flex-col gap-4">
-      {plan.figures.canReachAlpha && atSmall && atSmall.power < 0.8 ? (
+      {plan.listeners === 1 && plan.figures.canReachAlpha && atSmall && atSmall.power < 0.8 ? (
         <Notice tone="amber" title={`${formatCount(plan.trials, 'trial')} find only large effects.`}>
           {words.smallEffect} {words.atRate(smallEffect)}; that would be missed in {powerPercent(1 - atSmall.power)} of
           such tests. To find it in 80 %, plan{' '}

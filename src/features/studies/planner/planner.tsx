@@ -21,7 +21,7 @@ export function Planner() {
           <PlanFigures plan={plan} />
           <PlanPower plan={plan} />
           <PlanWarnings plan={plan} />
-          <PlanSaw plan={plan} />
+          {plan.listeners === 1 ? <PlanSaw plan={plan} /> : null}
         </>
       ) : (
         <Notice title="The plan appears here.">
