@@ -1,4 +1,3 @@
-import { type Chance, chanceAsFraction } from '#shared/statistics/chance.ts';
 import { formatCount, formatNumber } from '../../../lib/format.ts';
 import { Progress } from '../../../ui/progress.tsx';
 import type { Plan } from './plan-of.ts';
@@ -6,13 +5,12 @@ import { PowerTable } from './power-table.tsx';
 import { useGroupPower } from './use-group-power.ts';
 
 /** What a group finds, simulated by the registered test: there is no formula for it. */
-export function GroupPower({ plan, chance }: { plan: Plan; chance: Chance }) {
-  const { numerator, denominator } = chanceAsFraction(chance);
+export function GroupPower({ plan }: { plan: Plan }) {
   const rates = plan.figures.power.map(({ rate }) => rate);
   const soFar = useGroupPower({
     listeners: plan.listeners,
     trials: plan.trials,
-    labels: Number(denominator / numerator),
+    labels: plan.method.planned.labels,
     alpha: plan.alpha,
     alternative: plan.alternative,
     rates,
@@ -40,7 +38,7 @@ export function GroupPower({ plan, chance }: { plan: Plan; chance: Chance }) {
         />
       )}
       <p className="text-soft">
-        {formatCount(plan.listeners, 'listener')} who answer each on their own, as often right as the column says;{' '}
+        {formatCount(plan.listeners, 'listener')} who answer each on their own, as often as the column says;{' '}
         {formatNumber(soFar?.of ?? 2_000)} studies simulated with a fixed seed, good to two percentage points. Habits
         that they share take from it.
       </p>
