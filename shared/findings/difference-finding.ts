@@ -35,10 +35,12 @@ export const anyDifference: SoughtWords<DifferenceResult> = {
   sought: (_result, [first, second]) => `a difference between ${first} and ${second}`,
 };
 
-/** Listeners who came one at a time are no panel. */
-function subjectOf({ listeners, listenersPerSession }: DifferenceResult): string {
+/** Listeners who came one at a time, each answer with a draw of its own, are no panel. */
+function subjectOf({ listeners, test, answers, trials }: DifferenceResult): string {
   if (listeners === 1) return 'One listener';
-  return listenersPerSession > 1 ? 'At least one panel member' : 'At least one of these listeners';
+  return test === 'shared-presentations' || answers > trials
+    ? 'At least one panel member'
+    : 'At least one of these listeners';
 }
 
 function namedListeners({ byListener, isSignificant, listeners }: DifferenceResult): string[] {

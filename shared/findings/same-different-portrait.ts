@@ -45,9 +45,9 @@ function biasWords({ dPrime: { criterion } }: Estimates): string {
   return `d′ depends on the model that percepts are compared by differences and decides nothing: ${bias}. A percentage of right answers would mix hits with the habit of saying “different”, so none is given.`;
 }
 
-function ledeOf({ trials, differentTrials, listenersPerSession }: SameDifferentResult): string[] {
+function ledeOf({ trials, differentTrials, answers }: SameDifferentResult): string[] {
   const whole =
-    listenersPerSession > 1
+    answers > trials
       ? ' Whole trials are moved, because all listeners of a session heard the same pairs; answers that agree out of habit then find nothing.'
       : ' For one listener this is Fisher’s exact test.';
   return [

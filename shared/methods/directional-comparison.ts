@@ -41,7 +41,8 @@ export const directionalComparison: Method<ForcedChoiceResult> = {
   settings: [],
   attribute: {
     label: 'More of what?',
-    hint: 'A word or two that listeners read: “Which one had more bass?” The cable that should have more of it is the first one below; that direction is sealed with the protocol and told to nobody who listens.',
+    hint: 'A word or two that listeners read: “Which one had more bass?” Which cable should have more of it is chosen below; that direction is sealed with the protocol and told to nobody who listens.',
+    firstCable: 'The cable that should have more',
   },
 
   truths: places,

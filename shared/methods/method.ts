@@ -91,7 +91,12 @@ export type Method<R extends ResultFrame = RegisteredResult> = {
   readonly explanation: string;
   readonly settings: readonly MethodSetting[];
   /** How a study is asked for an attribute, or null where the method needs none. */
-  readonly attribute: { readonly label: string; readonly hint: string } | null;
+  readonly attribute: {
+    readonly label: string;
+    readonly hint: string;
+    /** What the protocol's first cable is called where it is chosen and shown: the order is the direction. */
+    readonly firstCable: string;
+  } | null;
 
   // How a trial is drawn and presented.
 

@@ -14,6 +14,8 @@ const effects = [0.2, 0.4, 0.6] as const;
 export interface PlannedTest {
   /** Chance of an answer on the counted side by guessing; null where nothing of the kind is counted. */
   readonly chance: Chance | null;
+  /** How many labels the draw of what is right chooses from; null for pairs that are the same or different. */
+  readonly labels: number | null;
   /** Rates at which the power is shown: a small, a middling and a large effect. */
   readonly rates: readonly [number, number, number];
   /** What one answer per trial must reach; null when out of reach, or when no fixed number can be told. */
@@ -42,6 +44,7 @@ export function oneSidedPlan(chance: Chance): PlannedTest {
   const [small, middling, large] = effects;
   return {
     chance,
+    labels: Number(denominator / numerator),
     rates: [right + small * wrong, right + middling * wrong, right + large * wrong],
     critical: (trials, alpha) => criticalCount(trials, chance, alpha),
     power: (trials, alpha, rate) => power(trials, chance, alpha, rate).power,
@@ -59,6 +62,7 @@ export function oneSidedPlan(chance: Chance): PlannedTest {
  */
 export const twoSidedPlan: PlannedTest = {
   chance: { numerator: 1, denominator: 2 },
+  labels: 2,
   rates: [0.6, 0.7, 0.8],
   critical: (trials, alpha) => twoSidedCriticalCount(trials, alpha),
   power: (trials, alpha, rate) => twoSidedPower(trials, alpha, rate).power,

@@ -197,6 +197,7 @@ function trialsNeeded(alpha: number, rate: number): { nFirst: number | null; nSa
 /** The test as the planner asks it. No number of hits can be fixed: it depends on how often "different" is said. */
 export const sameDifferentPlan: PlannedTest = {
   chance: null,
+  labels: null,
   rates: [0.6, 0.7, 0.8],
   critical: () => null,
   power: sameDifferentPower,

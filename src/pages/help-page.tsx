@@ -1,4 +1,5 @@
 import type { ReactNode } from 'react';
+import { methods } from '#shared/methods/methods.ts';
 import { paths } from '../app/paths.ts';
 import { LinkButton } from '../ui/link-button.tsx';
 import { PageHeader } from '../ui/page-header.tsx';
@@ -32,6 +33,15 @@ export function Component() {
             <Term word="Code holder">is named in a study; alone knows which code is on which cable until closing.</Term>
             <Term word="Reviewer">checks a result without having to trust whoever publishes it.</Term>
             <Term word="Listener">needs no account: a session code or a personal link.</Term>
+          </dl>
+        </Section>
+        <Section title="What listeners are asked">
+          <dl className="space-y-3">
+            {Object.values(methods).map(({ id, name, explanation }) => (
+              <Term key={id} word={`${name}.`}>
+                {explanation}
+              </Term>
+            ))}
           </dl>
         </Section>
         <Section title="Words you will meet">

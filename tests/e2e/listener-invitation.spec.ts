@@ -1,6 +1,7 @@
 import AxeBuilder from '@axe-core/playwright';
 import { expect, type Page, test } from '@playwright/test';
 import { openSeating, signIn } from './at-the-desk.ts';
+import { linkInMailTo } from './mail-links.ts';
 import { type RunningFairlead, runFairlead } from './run-fairlead.ts';
 
 // A manager invites by pasting an address; the listener answers on a phone by the link of the mail, and takes the seat by
@@ -21,18 +22,10 @@ async function expectAccessible(page: Page, what: string): Promise<void> {
   expect(violations.map(({ id, nodes }) => `${what}: ${id} at ${nodes[0]?.target.join(' ')}`)).toEqual([]);
 }
 
-/** The personal link in the newest mail to somebody, read in the mailbox. */
-async function linkInMailTo(page: Page, recipient: string, words: RegExp): Promise<string> {
-  await page.goto(`${fairlead.address}/mailbox?q=${encodeURIComponent(recipient)}`);
-  await page.getByRole('link', { name: words }).first().click();
-  await expect(page.getByRole('heading', { name: words })).toBeVisible();
-  const link = page.getByRole('list', { name: 'Links in this mail' }).getByRole('link').first();
-  return (await link.getAttribute('href')) ?? '';
-}
-
 test('an invited listener accepts on a phone and takes the seat by the link [G4] [G5] [G7]', async ({ browser }) => {
   const manager = await signIn(browser, fairlead.address, 'Maren Oduya');
   await manager.getByRole('link', { name: 'Sessions', exact: true }).click();
+  await expect(manager.getByRole('heading', { name: 'Sessions' })).toBeVisible();
   await manager.getByRole('link', { name: /Study Heron/ }).click();
   await expect(manager.getByText('2 of 2 seats offered: 1 comes, 1 without an answer, 1 waiting')).toBeVisible();
   await expectAccessible(manager, 'session');
@@ -56,7 +49,7 @@ test('an invited listener accepts on a phone and takes the seat by the link [G4]
   await expect(row).toContainText('No answer yet');
 
   const phone = await (await browser.newContext({ viewport: { width: 390, height: 844 }, hasTouch: true })).newPage();
-  await phone.goto(await linkInMailTo(manager, address, /a seat is yours/));
+  await phone.goto(await linkInMailTo(manager, fairlead.address, address, /a seat is yours/));
   await expect(phone.getByRole('heading', { name: 'A seat is kept for you' })).toBeVisible();
   await expectAccessible(phone, 'an invitation');
   await phone.getByRole('button', { name: 'I come', exact: true }).click();
@@ -68,6 +61,7 @@ test('an invited listener accepts on a phone and takes the seat by the link [G4]
 
   const desk = await signIn(browser, fairlead.address, 'Tomas Brandt');
   await desk.getByRole('link', { name: 'Sessions', exact: true }).click();
+  await expect(desk.getByRole('heading', { name: 'Sessions' })).toBeVisible();
   await desk.getByRole('link', { name: /Study Heron/ }).click();
   await expect(desk.getByRole('row', { name: new RegExp(address) })).toContainText('Comes');
   await expect(desk.getByRole('button', { name: 'Invite them' })).toHaveCount(0);
@@ -82,7 +76,7 @@ test('an invited listener accepts on a phone and takes the seat by the link [G4]
 
   // The same link on another phone leads to the same seat, and to no second one.
   const again = await (await browser.newContext({ viewport: { width: 390, height: 844 }, hasTouch: true })).newPage();
-  await again.goto(await linkInMailTo(manager, address, /a seat is yours/));
+  await again.goto(await linkInMailTo(manager, fairlead.address, address, /a seat is yours/));
   await again.getByRole('button', { name: 'Back to your seat' }).click();
   await again.getByText(/You are seated as/).waitFor();
   await expect(desk.getByText('1 of 1 here')).toBeVisible();

@@ -68,6 +68,20 @@ test('from an empty Fairlead to an organisation with members [P1] [P2] [P12] [M7
   await guest.getByRole('button', { name: 'Accept and join' }).click();
   await expect(guest.getByRole('heading', { name: 'What waits for you' })).toBeVisible();
 
+  // A manager is invited too, and accepts.
+  await owner.getByRole('link', { name: 'People', exact: true }).first().click();
+  await owner.getByRole('button', { name: 'Invite somebody' }).click();
+  await owner.getByRole('textbox', { name: 'E-mail' }).fill('ivo@harbour.example');
+  await owner.getByRole('radio', { name: 'Product manager' }).check();
+  await owner.getByRole('button', { name: 'Send the invitation' }).click();
+  await expect(owner.getByRole('link', { name: 'Invitations (1 open)' })).toBeVisible();
+  const second = await (await browser.newContext()).newPage();
+  await followMail(second, /invites you to Harbour Audio Works/);
+  await second.getByRole('textbox', { name: 'Your name' }).fill('Ivo Sander');
+  await second.getByRole('textbox', { name: 'Password' }).fill('a third long passphrase');
+  await second.getByRole('button', { name: 'Accept and join' }).click();
+  await expect(second.getByRole('link', { name: 'Studies' })).toBeVisible();
+
   await guest.getByRole('button', { name: 'Runa Falk' }).click();
   await guest.getByRole('menuitem', { name: 'Your sign-ins' }).click();
   await expect(guest.getByText('This one')).toBeVisible();

@@ -23,6 +23,7 @@ export default defineConfig({
   use: {
     browserName: 'chromium',
     launchOptions: { executablePath: process.env.CHROMIUM ?? '/usr/bin/chromium', args: quiet },
+    actionTimeout: 60_000,
     trace: 'retain-on-failure',
     screenshot: 'only-on-failure',
     locale: 'en-GB',

@@ -1,10 +1,14 @@
 import { expect, type Page, test } from '@playwright/test';
 import type { Report } from '#shared/contracts/reports.ts';
-import { beginSession, openPhone, openSeating, presentTrial, signIn, takeSeat } from './at-the-desk.ts';
+import { beginSession, openSeating, presentTrial, signIn } from './at-the-desk.ts';
+import { linkInMailTo } from './mail-links.ts';
 import { codeSpecimens, planSession, planStudy } from './plan-a-study.ts';
 import { type RunningFairlead, runFairlead } from './run-fairlead.ts';
 
-// A paired preference in a group of two, from its plan to its report.
+// A paired preference in a group of two, from its plan to its report: the listeners are invited by mail, accept by the link
+// in it and sit down by the same link.
+
+const listeners = ['oda.brekke@listeners.example', 'silvan.morath@listeners.example'];
 
 let fairlead: RunningFairlead;
 test.beforeAll(async () => {
@@ -32,16 +36,32 @@ test('a group says which cable it prefers, and the report counts by what came fi
   await codeSpecimens(await signIn(browser, fairlead.address, 'Ines Halloran'), studyAddress);
   await planSession(manager, studyAddress);
 
+  await manager.getByRole('link', { name: /Session\s1/ }).click();
+  await manager.getByRole('textbox', { name: 'E-mail addresses' }).fill(listeners.join('\n'));
+  await manager.getByRole('button', { name: 'Invite them' }).click();
+  await expect(manager.getByText('2 of 2 seats offered: 2 without an answer')).toBeVisible();
+  const phones: Page[] = [];
+  for (const listener of listeners) {
+    const phone = await (await browser.newContext({ viewport: { width: 390, height: 844 }, hasTouch: true })).newPage();
+    await phone.goto(await linkInMailTo(phone, fairlead.address, listener, /you are invited to listen/));
+    await phone.getByRole('button', { name: 'I come', exact: true }).click();
+    await expect(phone.getByRole('heading', { name: 'You come' })).toBeVisible();
+    phones.push(phone);
+  }
+
   const desk = await signIn(browser, fairlead.address, 'Tomas Brandt');
   await desk
     .getByRole('link', { name: /Study Dunlin/ })
     .first()
     .click();
-  const code = await openSeating(desk);
-  const phones = [await openPhone(browser, fairlead.address, code), await openPhone(browser, fairlead.address, code)];
+  await openSeating(desk);
   const [left, right] = phones as [Page, Page];
-  await takeSeat(left, 'Left');
-  await takeSeat(right, 'Right');
+  for (const phone of [left, right]) {
+    await phone.getByLabel('I am an adult').check();
+    await phone.getByLabel('I agree to take part').check();
+    await phone.getByRole('button', { name: 'Take the seat' }).click();
+    await phone.getByText(/You are seated as/).waitFor();
+  }
   await beginSession(desk);
   for (let trial = 1; trial <= 5; trial += 1) {
     await presentTrial(desk, trial, 2);

@@ -12,10 +12,12 @@ import { directionalQuestion } from '#shared/methods/directional-comparison.ts';
 import { duoTrioQuestion } from '#shared/methods/duo-trio.ts';
 import { methods, registeredResult } from '#shared/methods/methods.ts';
 import { triangleQuestion } from '#shared/methods/triangle.ts';
+import { sessionPlanOf } from '#shared/protocol/protocol.ts';
 import { binomialLogProbability } from '#shared/statistics/binomial-log-probability.ts';
 import { exactBinomialUpperTail } from '#shared/statistics/exact-binomial.ts';
 import { compareFractions } from '#shared/statistics/fraction.ts';
 import { planFigures } from '#shared/statistics/plan-figures.ts';
+import { closedStudy } from '../../support/closed-study.ts';
 
 const questions: [string, ForcedChoice][] = [abxQuestion, triangleQuestion, duoTrioQuestion, directionalQuestion].map(
   (question) => [question.method, question],
@@ -204,6 +206,19 @@ describe('a directional comparison', () => {
     });
     expect(method.question({ attribute: 'bass' })).toBe('Which one had more bass?');
     expect(result(15).attribute).toBe('bass');
+  });
+
+  it('lets a session know the attribute and not the direction [C4]', () => {
+    const { protocol } = closedStudy(1, 'abx');
+    const sealed = {
+      ...protocol,
+      method: 'directional-comparison',
+      design: { ...protocol.design, attribute: 'bass' },
+      analysis: { ...protocol.analysis, ...method.registered({ attribute: 'bass' }) },
+    };
+    const plan = sessionPlanOf(sealed);
+    expect(plan.attribute).toBe('bass');
+    expect(JSON.stringify(plan)).not.toMatch(/first cable|direction":|Northern|Southern/);
   });
 
   // R: binom.test(15, 20, alternative = "greater")$p.value = 0.02069

@@ -37,6 +37,8 @@ function spanOf(text: string, parts: PublicationParts, part: PartName): { from: 
 const studies = [
   { method: 'abx', listeners: 1 },
   { method: 'abx', listeners: 3 },
+  { method: 'triangle', listeners: 2 },
+  { method: 'same-different', listeners: 2 },
   { method: 'paired-preference', listeners: 1 },
   { method: 'paired-preference', listeners: 2 },
 ].map(({ method, listeners }) => {

@@ -1,4 +1,6 @@
 import fc from 'fast-check';
+import { uniformFloat64 } from 'pure-rand/distribution/uniformFloat64';
+import { xoroshiro128plus } from 'pure-rand/generator/xoroshiro128plus';
 import { describe, expect, it } from 'vitest';
 import { assignmentTest } from '#shared/statistics/assignment-test.ts';
 import { fractionToNumber } from '#shared/statistics/fraction.ts';
@@ -8,6 +10,7 @@ import {
   sameDifferentPower,
   sameDifferentSensitivity,
 } from '#shared/statistics/same-different.ts';
+import { sameDifferentGroupFindings } from '#shared/statistics/same-different-group-power.ts';
 import { expectClose, reference } from '../../support/reference.ts';
 
 const records = <I, E>(fn: string) => reference<I, E>('same-different.json').filter((record) => record.fn === fn);
@@ -136,6 +139,17 @@ describe('d′ of same-different', () => {
 });
 
 describe('planning same-different', () => {
+  // One listener's studies are found as often as the exact power says, within four standard deviations of 2000 studies.
+  it('simulates a group by the registered test, which for one listener is the exact power [W1] [H6]', () => {
+    const plan = { trials: 16, rate: 0.8, alpha: 0.05 };
+    const findings = (listeners: number) => {
+      const source = xoroshiro128plus(2139);
+      return sameDifferentGroupFindings({ ...plan, listeners }, 2000, () => uniformFloat64(source)) / 2000;
+    };
+    expect(Math.abs(findings(1) - sameDifferentPower(16, 0.05, 0.8))).toBeLessThan(4 * Math.sqrt(0.24 / 2000));
+    expect(findings(3)).toBeGreaterThan(findings(1));
+  });
+
   it('has the power that R sums over every outcome [H6]', () => {
     type Inputs = { trials: number; alpha: number; hitRate: number };
     for (const { id, inputs, expected, tol } of records<Inputs, { power: number }>('sameDifferentPower'))

@@ -15,7 +15,7 @@ export function protocolFacts({ draft, cableNames, codeHolder }: Study): Protoco
     ...(draft.attribute ? [words('Attribute', draft.attribute)] : []),
     ...draft.cables.map(({ specimenIds }, index) =>
       words(
-        index === 0 ? 'One cable' : 'The other cable',
+        index === 0 ? (methodOf(draft.method).attribute?.firstCable ?? 'One cable') : 'The other cable',
         `${cableNames[index === 0 ? 0 : 1]}, ${formatCount(specimenIds.length, 'specimen')}`,
       ),
     ),

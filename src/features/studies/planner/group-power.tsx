@@ -6,17 +6,17 @@ import { useGroupPower } from './use-group-power.ts';
 
 /** What a group finds, simulated by the registered test: there is no formula for it. */
 export function GroupPower({ plan }: { plan: Plan }) {
-  const rates = plan.figures.power.map(({ correctRate }) => correctRate);
+  const rates = plan.figures.power.map(({ rate }) => rate);
   const soFar = useGroupPower({
     listeners: plan.listeners,
     trials: plan.trials,
-    labels: plan.method.chance.denominator,
+    labels: plan.method.planned.labels,
     alpha: plan.alpha,
     alternative: plan.alternative,
     rates,
   });
-  const power = rates.map((correctRate, index) => ({
-    correctRate,
+  const power = rates.map((rate, index) => ({
+    rate,
     // Half a study either way: a simulation promises neither all nor nothing.
     power: soFar === null ? 0 : ((soFar.found[index] ?? 0) + 0.5) / (soFar.done + 1),
   }));
@@ -38,7 +38,7 @@ export function GroupPower({ plan }: { plan: Plan }) {
         />
       )}
       <p className="text-soft">
-        {formatCount(plan.listeners, 'listener')} who answer each on their own, as often right as the column says;{' '}
+        {formatCount(plan.listeners, 'listener')} who answer each on their own, as often as the column says;{' '}
         {formatNumber(soFar?.of ?? 2_000)} studies simulated with a fixed seed, good to two percentage points. Habits
         that they share take from it.
       </p>
