@@ -70,6 +70,7 @@ test('from an empty Fairlead to an organisation with members [P1] [P2] [P12] [M7
 
   // A manager is invited too, and accepts.
   await owner.getByRole('link', { name: 'People', exact: true }).first().click();
+  await expect(owner.getByRole('heading', { name: 'People' })).toBeVisible();
   await owner.getByRole('button', { name: 'Invite somebody' }).click();
   await owner.getByRole('textbox', { name: 'E-mail' }).fill('ivo@harbour.example');
   await owner.getByRole('radio', { name: 'Product manager' }).check();

@@ -36,7 +36,6 @@ test('a group says which cable it prefers, and the report counts by what came fi
   await codeSpecimens(await signIn(browser, fairlead.address, 'Ines Halloran'), studyAddress);
   await planSession(manager, studyAddress);
 
-  await manager.getByRole('link', { name: /Session\s1/ }).click();
   await manager.getByRole('textbox', { name: 'E-mail addresses' }).fill(listeners.join('\n'));
   await manager.getByRole('button', { name: 'Invite them' }).click();
   await expect(manager.getByText('2 of 2 seats offered: 2 without an answer')).toBeVisible();
