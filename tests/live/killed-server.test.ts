@@ -50,7 +50,7 @@ describe('a server that is killed', () => {
     };
     killed.stdout?.on('data', listen);
     killed.stderr?.on('data', listen);
-    await until(`the server to come up: ${said}`, () => said.includes('Fairlead is at'), 20_000);
+    await until(`the server to come up: ${said}`, () => said.includes('Fairlead is at'), 60_000);
   };
   const kill = async (): Promise<void> => {
     const gone = once(killed, 'exit');
@@ -86,7 +86,7 @@ describe('a server that is killed', () => {
       kills += 1;
       await kill();
       await start();
-      for (const page of [desk, left, right]) await until('the sockets back', () => page.socket.connected, 20_000);
+      for (const page of [desk, left, right]) await until('the sockets back', () => page.socket.connected, 60_000);
       const entries = await readRecord(helper.deps.db.manager, study.studyId);
       const restarts = entries.filter(({ kind }) => kind === 'server-restarted').length;
       expect(restarts).toBe(kills);
@@ -149,5 +149,5 @@ describe('a server that is killed', () => {
     expect(rows.map(({ seat, trial, choice, leaf }) => ({ seat, trial, choice, leaf }))).toEqual(acknowledged);
     expect(kills).toBe(10);
     for (const page of [desk, left, right]) page.close();
-  }, 180_000);
+  }, 300_000);
 });
