@@ -6,7 +6,6 @@ export const listQuery = z.strictObject({
   q: z.string().trim().max(80, 'At most 80 characters').default(''),
   page: z.coerce.number<string>().int().min(1).max(10_000).default(1),
 });
-export type ListQuery = z.output<typeof listQuery>;
 
 /** A column to sort by, ascending; with a minus before it, descending. */
 export type SortWord<Key extends string> = Key | `-${Key}`;

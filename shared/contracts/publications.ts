@@ -38,7 +38,6 @@ export const publicationStatements = z.strictObject({
   supplied: words(600, 'Say who supplied the specimens, and how they were chosen'),
   ties: words(600, 'Say what ties there are; type “none” if there are none'),
 });
-export type PublicationStatements = z.output<typeof publicationStatements>;
 
 export const publicationDraft = publicationStatements.extend({
   confirmations: z.strictObject({
