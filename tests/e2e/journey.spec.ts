@@ -1,7 +1,7 @@
 import { execFileSync } from 'node:child_process';
-import AxeBuilder from '@axe-core/playwright';
 import { expect, type Page, test } from '@playwright/test';
 import type { Report } from '#shared/contracts/reports.ts';
+import { expectAccessible } from './accessible.ts';
 import { answer, beginSession, openPhone, openSeating, presentTrial, signIn, takeSeat } from './at-the-desk.ts';
 import { codeSpecimens, planSession, planStudy } from './plan-a-study.ts';
 import { type RunningFairlead, runFairlead } from './run-fairlead.ts';
@@ -16,12 +16,6 @@ test.beforeAll(async () => {
 test.afterAll(async () => {
   await fairlead.stop();
 });
-
-async function expectAccessible(page: Page, what: string): Promise<void> {
-  const { violations } = await new AxeBuilder({ page }).analyze();
-  const grave = violations.filter(({ impact }) => impact === 'serious' || impact === 'critical');
-  expect(grave.map(({ id, nodes }) => `${what}: ${id} at ${nodes[0]?.target.join(' ')}`)).toEqual([]);
-}
 
 /** What R makes of the answers: the exact convolution over the draws, answers held fixed, and binom.test per listener. */
 function fromR(trials: { truth: string; choices: (string | null)[] }[]): {

@@ -1,5 +1,5 @@
-import AxeBuilder from '@axe-core/playwright';
-import { expect, type Page, test } from '@playwright/test';
+import { expect, test } from '@playwright/test';
+import { expectAccessible } from './accessible.ts';
 import { openSeating, signIn } from './at-the-desk.ts';
 import { linkInMailTo } from './mail-links.ts';
 import { type RunningFairlead, runFairlead } from './run-fairlead.ts';
@@ -16,11 +16,6 @@ test.afterAll(async () => {
 });
 
 const address = 'wilma.tarnowska@listeners.example';
-
-async function expectAccessible(page: Page, what: string): Promise<void> {
-  const { violations } = await new AxeBuilder({ page }).analyze();
-  expect(violations.map(({ id, nodes }) => `${what}: ${id} at ${nodes[0]?.target.join(' ')}`)).toEqual([]);
-}
 
 test('an invited listener accepts on a phone and takes the seat by the link [G4] [G5] [G7]', async ({ browser }) => {
   const manager = await signIn(browser, fairlead.address, 'Maren Oduya');

@@ -1,5 +1,5 @@
-import AxeBuilder from '@axe-core/playwright';
 import { expect, type Page, test } from '@playwright/test';
+import { expectAccessible } from './accessible.ts';
 import { type RunningFairlead, runFairlead } from './run-fairlead.ts';
 
 // A first start without the demo: the printed link makes organisation and owner, who invites; the invited joins by the
@@ -14,11 +14,6 @@ test.afterAll(async () => {
 });
 
 const invitedAddress = 'runa@harbour.example';
-
-async function expectAccessible(page: Page, what: string): Promise<void> {
-  const { violations } = await new AxeBuilder({ page }).analyze();
-  expect(violations.map(({ id, nodes }) => `${what}: ${id} at ${nodes[0]?.target.join(' ')}`)).toEqual([]);
-}
 
 /** Opens the newest mail with these words in the mailbox, and follows its link. */
 async function followMail(page: Page, words: RegExp): Promise<void> {

@@ -1,6 +1,6 @@
 import { readFileSync } from 'node:fs';
-import AxeBuilder from '@axe-core/playwright';
 import { expect, type Page, test } from '@playwright/test';
+import { expectAccessible } from './accessible.ts';
 import { type RunningFairlead, runFairlead } from './run-fairlead.ts';
 
 // A stranger without an account reads a published study and checks it in the browser; a manager publishes another.
@@ -12,11 +12,6 @@ test.beforeAll(async () => {
 test.afterAll(async () => {
   await fairlead.stop();
 });
-
-async function expectAccessible(page: Page, what: string): Promise<void> {
-  const { violations } = await new AxeBuilder({ page }).analyze();
-  expect(violations.map(({ id, nodes }) => `${what}: ${id} at ${nodes[0]?.target.join(' ')}`)).toEqual([]);
-}
 
 const outcomes = (page: Page) =>
   page
