@@ -208,4 +208,5 @@ export const sameDifferentPlan: PlannedTest = {
   },
   needed: trialsNeeded,
   searchedTo,
+  margin: null,
 };
