@@ -85,10 +85,11 @@ export const pairedPreference: Method<PreferenceResult> = {
     counts: 'listeners',
   },
   planned: twoSidedPlan,
-  analyse: ({ analysis: { alpha, undecided }, listenersPerSession }, trials) =>
+  analyse: ({ analysis: { alpha, undecided, margin }, listenersPerSession }, trials) =>
     analysePreference({
       alpha,
       listenersPerSession,
+      margin,
       offersNoPreference: undecided !== undefined,
       trials: trials.map(pair),
     }),
