@@ -18,7 +18,7 @@ export function amongWords(among: AmongListeners | null, listeners: number): str
   const lower =
     Number(prevalence.lowerLimit) > 0
       ? `at least ${percentOf(prevalence.lowerLimit, 'down')} of people of whom they were a sample hear it (one-sided 95\u00a0% limit; there is no upper one)`
-      : 'which bounds the share of people who hear it by nothing';
+      : 'no lower limit for the share of people who hear it follows';
   return [
     differences,
     `${prevalence.significant} of ${listeners} were significant on their own, each test at a true size of ${percentOf(prevalence.size)}: ${lower}.`,

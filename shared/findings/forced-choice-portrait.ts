@@ -14,6 +14,7 @@ export function forcedChoicePortrait({ rules }: Pick<ForcedChoice, 'rules'>, res
       { value: `${correct} / ${answers}`, label: 'answers right' },
       { value: equationOfP(Number(p.value), Number(alpha)), label: `${testWords[test]}, one-sided` },
       ...(estimates ? [effect(estimates)] : []),
+      ...upperLimit(result),
     ],
     note: estimates ? `${basisWords(estimates)}${sensitivityWords(rules, estimates)}` : noInterval,
     conditions: [
@@ -34,14 +35,21 @@ export function forcedChoicePortrait({ rules }: Pick<ForcedChoice, 'rules'>, res
 }
 
 /** The registered margin and what came of it. */
-function marginFacts({ margin, estimates }: ForcedChoiceResult): Portrait['conditions'] {
+function marginFacts({ margin }: ForcedChoiceResult): Portrait['conditions'] {
   if (margin === undefined) return [];
-  const limit = estimates?.aboveGuessing.oneSidedUpper.limit;
-  const upper = limit === undefined ? 'no limit' : `upper limit ${percentOf(limit, 'up')}`;
+  return [
+    { label: 'Margin', value: `${percentOf(margin.share)} above guessing, ${margin.isBelow ? 'kept' : 'not shown'}` },
+  ];
+}
+
+/** What the margin is held against. */
+function upperLimit({ margin, estimates }: ForcedChoiceResult): Portrait['figures'] {
+  if (margin === undefined || estimates === null) return [];
+  const { limit } = estimates.aboveGuessing.oneSidedUpper;
   return [
     {
-      label: 'Margin',
-      value: `${percentOf(margin.share)} above guessing: ${margin.isBelow ? 'below it' : 'not shown'} (${upper})`,
+      value: percentOf(limit, 'up'),
+      label: `upper limit, one-sided 95\u00a0%, for a margin of ${percentOf(margin.share)}`,
     },
   ];
 }
