@@ -21,6 +21,7 @@ import { publicationsRoutes } from './features/publications/publications.routes.
 import { reportsRoutes } from './features/reports/reports.routes.ts';
 import { sessionsRoutes } from './features/sessions/sessions.routes.ts';
 import { signInRoutes } from './features/sign-in/sign-in.routes.ts';
+import { signingKeysRoutes } from './features/signing-keys/signing-keys.routes.ts';
 import { studiesRoutes } from './features/studies/studies.routes.ts';
 import { usersRoutes } from './features/users/users.routes.ts';
 import type { Access } from './http/access.ts';
@@ -112,6 +113,7 @@ export function createApp(deps: Deps) {
   reportsRoutes(api, access, deps);
   publicationsRoutes(api, access, deps);
   mailRoutes(api, access, deps);
+  signingKeysRoutes(api, access, deps);
   apiReferenceRoutes(api, mounted, version);
   api.use(nothingHere);
   app.use('/api', api);

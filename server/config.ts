@@ -17,6 +17,8 @@ const variables = z.object({
   DATABASE_PASSWORD: z.string().default(''),
   DATABASE_NAME: z.string().min(1).default('fairlead'),
   SESSION_SECRET: z.string().min(32, 'needs at least 32 characters'),
+  SIGNING_SECRET: z.string().min(32, 'needs at least 32 characters'),
+  SIGNING_SECRET_LOST: onOff.default('off'),
   FAIRLEAD_DEMO: onOff.default('on'),
   FAIRLEAD_LAN: onOff.default('off'),
   DATA_DIR: z.string().min(1).default('.data'),
@@ -51,6 +53,10 @@ export type Config = Readonly<{
     name: string;
   }>;
   sessionSecret: string;
+  /** Encrypts the private parts of the organisations' signing keys in the database. */
+  signingSecret: string;
+  /** The secret is gone for good: keys that it does not open are replaced at the start. */
+  signingSecretLost: boolean;
   demo: boolean;
   trustProxy: boolean;
   /** The server that takes mail for delivery, and the sender it shows; null keeps every mail for the mailbox page. */
@@ -110,6 +116,8 @@ export function readConfig(env: Readonly<Record<string, string | undefined>>): C
     dataDir: values.DATA_DIR,
     database: Object.freeze(databaseOf(values)),
     sessionSecret: values.SESSION_SECRET,
+    signingSecret: values.SIGNING_SECRET,
+    signingSecretLost: values.SIGNING_SECRET_LOST === 'on',
     demo: values.FAIRLEAD_DEMO === 'on',
     trustProxy: values.TRUST_PROXY === 'on',
     smtp: smtpOf(values),

@@ -15,7 +15,9 @@ export type RandomPurpose =
   | 'session-code'
   | 'publication-id'
   | 'password-salt'
-  | 'link-token';
+  | 'link-token'
+  | 'signing-key'
+  | 'signing-key-iv';
 
 export type Random = {
   bytes(purpose: RandomPurpose, count: number): Buffer;

@@ -18,6 +18,8 @@ import { WebSession } from './features/sign-in/web-session.entity.ts';
 import { Study } from './features/studies/study.entity.ts';
 import { User } from './features/users/user.entity.ts';
 import { RecordEntry } from './ledger/entry.entity.ts';
+import { HeadSignatureRow } from './ledger/head-signature.entity.ts';
+import { SigningKey } from './ledger/signing-key.entity.ts';
 import { OutgoingMail } from './mail/outgoing-mail.entity.ts';
 
 /** Every table. */
@@ -30,6 +32,8 @@ export const entities = [
   Specimen,
   Study,
   RecordEntry,
+  SigningKey,
+  HeadSignatureRow,
   Session,
   Seat,
   Answer,

@@ -411,7 +411,8 @@ prepare_home() {
   claim_home
   require_free_port PORT "$HOST" "$PORT"
   SESSION_SECRET=${SESSION_SECRET:-$(kept_secret session-secret)}
-  export SESSION_SECRET
+  SIGNING_SECRET=${SIGNING_SECRET:-$(kept_secret signing-secret)}
+  export SESSION_SECRET SIGNING_SECRET
   if [[ -n ${DATABASE_URL:-}${DATABASE_HOST:-}${DATABASE_SOCKET:-} ]]; then
     step packages install_packages
   else

@@ -56,6 +56,7 @@ export async function runFairlead(environment: Record<string, string> = {}): Pro
       NODE_ENV: 'production',
       TSX_TSCONFIG_PATH: 'server/tsconfig.json',
       SESSION_SECRET: randomBytes(32).toString('hex'),
+      SIGNING_SECRET: randomBytes(32).toString('hex'),
       PORT: String(port),
       DATABASE_SOCKET: account.socketPath,
       DATABASE_USER: account.user,

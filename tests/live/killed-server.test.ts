@@ -35,6 +35,7 @@ describe('a server that is killed', () => {
         PATH: process.env.PATH,
         TSX_TSCONFIG_PATH: 'server/tsconfig.json',
         SESSION_SECRET: helper.deps.config.sessionSecret,
+        SIGNING_SECRET: helper.deps.config.signingSecret,
         FAIRLEAD_DEMO: 'off',
         PORT: String(port),
         DATABASE_SOCKET: database.socketPath,

@@ -39,6 +39,7 @@ export function testConfig(databaseName: string, environment: Record<string, str
   const { socketPath, user, password } = account();
   const config = readConfig({
     SESSION_SECRET: 'a secret for tests, and long enough for the rule',
+    SIGNING_SECRET: 'another secret for tests, and long enough too',
     FAIRLEAD_DEMO: 'off',
     DATABASE_SOCKET: socketPath,
     DATABASE_USER: user,

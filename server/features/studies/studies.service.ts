@@ -147,7 +147,7 @@ export function sealStudy(deps: Deps, where: Where, userId: string) {
     });
     const now = clock.now();
     const payload = { protocolVersion: 1, digest: protocolDigest(protocol), sealedBy: userId };
-    await append(tx, random, study.id, [{ kind: 'protocol-sealed', at: now, payload, session: null }]);
+    await append(tx, deps, study.id, [{ kind: 'protocol-sealed', at: now, payload, session: null }]);
     await store.updateStudy(tx, study.id, { state: 'sealed', protocol: canonicalJson(protocol) }, new Date(now));
     await tellCodeHolder(tx, deps, study);
     return viewOf(tx, await studyOrProblem(tx, where));
@@ -168,7 +168,7 @@ export function recordDeviation(deps: Deps, where: Where, text: string) {
       throw new Problem('wrong-phase', 'Deviations are recorded between sealing and closing.');
     const now = deps.clock.now();
     const payload = { session: null, text };
-    await append(tx, deps.random, study.id, [{ kind: 'deviation-recorded', at: now, payload, session: null }]);
+    await append(tx, deps, study.id, [{ kind: 'deviation-recorded', at: now, payload, session: null }]);
     await store.updateStudy(tx, study.id, {}, new Date(now));
     return viewOf(tx, await studyOrProblem(tx, where));
   });
