@@ -21,6 +21,8 @@ import { RecordEntry } from './ledger/entry.entity.ts';
 import { HeadSignatureRow } from './ledger/head-signature.entity.ts';
 import { SigningKey } from './ledger/signing-key.entity.ts';
 import { OutgoingMail } from './mail/outgoing-mail.entity.ts';
+import { TimestampToken } from './timestamps/timestamp-token.entity.ts';
+import { TokenRequest } from './timestamps/token-request.entity.ts';
 
 /** Every table. */
 export const entities = [
@@ -34,6 +36,8 @@ export const entities = [
   RecordEntry,
   SigningKey,
   HeadSignatureRow,
+  TokenRequest,
+  TimestampToken,
   Session,
   Seat,
   Answer,

@@ -14,6 +14,7 @@ import { onTheNetwork } from './network/on-the-network.ts';
 import { ownCertificate } from './network/own-certificate.ts';
 import { serve } from './serve.ts';
 import { systemClock, systemRandom } from './system.ts';
+import { timestampAuthority } from './timestamps/timestamp-authority.ts';
 
 const say = (line: string) => process.stdout.write(`${line}\n`);
 
@@ -27,7 +28,9 @@ async function step<T>(name: string, work: () => Promise<T>): Promise<T> {
 async function main(): Promise<void> {
   const config = readConfig(process.env);
   const db = createDataSource(config.database);
-  const deps: Deps = { config, db, clock: systemClock, random: systemRandom, log: pino({ level: config.logLevel }) };
+  const timestamps = await step('time authority', () => timestampAuthority(config));
+  const log = pino({ level: config.logLevel });
+  const deps: Deps = { config, db, clock: systemClock, random: systemRandom, timestamps, log };
   await step('migrations', async () => {
     await db.initialize();
     await db.runMigrations();

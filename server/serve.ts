@@ -9,6 +9,7 @@ import { forgetExpired } from './http/sign-in.ts';
 import { serveSockets } from './live/socket-server.ts';
 import { forgetOldTexts, Postman } from './mail/postman.ts';
 import type { OwnCertificate } from './network/own-certificate.ts';
+import { Timekeeper } from './timestamps/timekeeper.ts';
 
 const hourMs = 60 * 60 * 1000;
 
@@ -44,12 +45,15 @@ export async function serve(deps: Deps, certificate: Pick<OwnCertificate, 'key' 
   }, hourMs);
   const postman = deps.config.smtp === null ? null : new Postman(deps, deps.config.smtp);
   postman?.start();
+  const timekeeper = deps.timestamps === null ? null : new Timekeeper(deps, deps.timestamps);
+  timekeeper?.start();
   const { config } = deps;
   const port = await listen(http, config.port, config.host);
   const tlsPort = https === null ? null : await listen(https, config.lan?.tlsPort ?? 0, config.host);
   const stop = async () => {
     clearInterval(sweeping);
     await postman?.stop();
+    await timekeeper?.stop();
     await sittings.stop();
     await io.close();
     http.closeAllConnections();

@@ -3,12 +3,13 @@ import { momentOf } from '#shared/ledger/moments.ts';
 import { type HeadSignature, statementBytes } from '#shared/ledger/signed-head.ts';
 import type { Tx } from '../db/transaction.ts';
 import type { Deps } from '../deps.ts';
+import { requestToken } from '../timestamps/tokens.store.ts';
 import { HeadSignatureRow } from './head-signature.entity.ts';
 import { currentKey, signWith } from './signing-keys.ts';
 
 type SignDeps = Pick<Deps, 'config' | 'random' | 'clock'>;
 
-/** Signs every entry that marks a moment, in the transaction that writes it. */
+/** Signs every entry that marks a moment, in the transaction that writes it; a token is fetched afterwards. */
 export async function signHeads(
   tx: Tx,
   deps: SignDeps,
@@ -24,19 +25,26 @@ export async function signHeads(
     const signature = signWith(deps, key, statementBytes(statement));
     const { study: studyId, ...signed } = statement;
     await tx.insert(HeadSignatureRow, { ...signed, studyId, signature });
+    await requestToken(tx, { studyId, sequence }, new Date(deps.clock.now()));
   }
 }
+
+const read = ({ studyId, sequence, head, moment, at, key, signature }: HeadSignatureRow): HeadSignature => ({
+  study: studyId,
+  sequence,
+  head,
+  moment,
+  at,
+  key,
+  signature,
+});
 
 /** The signed heads of a study, in the order of the record. */
 export async function signaturesOf(tx: Tx, studyId: string): Promise<HeadSignature[]> {
   const rows = await tx.find(HeadSignatureRow, { where: { studyId }, order: { sequence: 'ASC' } });
-  return rows.map(({ sequence, head, moment, at, key, signature }) => ({
-    study: studyId,
-    sequence,
-    head,
-    moment,
-    at,
-    key,
-    signature,
-  }));
+  return rows.map(read);
+}
+
+export async function signatureOf(tx: Tx, studyId: string, sequence: number): Promise<HeadSignature> {
+  return read(await tx.findOneByOrFail(HeadSignatureRow, { studyId, sequence }));
 }

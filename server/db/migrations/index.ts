@@ -4,6 +4,7 @@ import { Mail1796130000000 } from './1796130000000-mail.ts';
 import { People1796130100000 } from './1796130100000-people.ts';
 import { Attendances1796130400000 } from './1796130400000-attendances.ts';
 import { Signatures1796140800000 } from './1796140800000-signatures.ts';
+import { Timestamps1796140900000 } from './1796140900000-timestamps.ts';
 
 /** Every migration, oldest first. */
 export const migrations = [
@@ -13,4 +14,5 @@ export const migrations = [
   People1796130100000,
   Attendances1796130400000,
   Signatures1796140800000,
+  Timestamps1796140900000,
 ];
