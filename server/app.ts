@@ -8,6 +8,7 @@ import type { Deps } from './deps.ts';
 import { accountRoutes } from './features/account/account.routes.ts';
 import { apiReferenceRoutes } from './features/api-reference/api-reference.routes.ts';
 import { attendancesRoutes } from './features/attendances/attendances.routes.ts';
+import { auditsRoutes } from './features/audits/audits.routes.ts';
 import { cablesRoutes } from './features/cables/cables.routes.ts';
 import { codesRoutes } from './features/codes/codes.routes.ts';
 import { firstOwnerRoutes } from './features/first-owner/first-owner.routes.ts';
@@ -114,6 +115,7 @@ export function createApp(deps: Deps) {
   publicationsRoutes(api, access, deps);
   mailRoutes(api, access, deps);
   signingKeysRoutes(api, access, deps);
+  auditsRoutes(api, access, deps);
   apiReferenceRoutes(api, mounted, version);
   api.use(nothingHere);
   app.use('/api', api);

@@ -4,11 +4,7 @@ import { networkAddresses } from './network/network-addresses.ts';
 const port = z.coerce.number<string>().int().min(1).max(65_535);
 const onOff = z.enum(['on', 'off']);
 
-const variables = z.object({
-  PORT: port.default(4180),
-  HOST: z.string().min(1).default('127.0.0.1'),
-  TLS_PORT: port.default(4443),
-  PUBLIC_URL: z.url({ protocol: /^https?$/ }).optional(),
+const databaseVariables = {
   DATABASE_URL: z.url({ protocol: /^(mysql|mariadb)$/ }).optional(),
   DATABASE_HOST: z.string().min(1).default('127.0.0.1'),
   DATABASE_PORT: port.default(4181),
@@ -16,6 +12,14 @@ const variables = z.object({
   DATABASE_USER: z.string().min(1).default('fairlead'),
   DATABASE_PASSWORD: z.string().default(''),
   DATABASE_NAME: z.string().min(1).default('fairlead'),
+};
+
+const variables = z.object({
+  PORT: port.default(4180),
+  HOST: z.string().min(1).default('127.0.0.1'),
+  TLS_PORT: port.default(4443),
+  PUBLIC_URL: z.url({ protocol: /^https?$/ }).optional(),
+  ...databaseVariables,
   SESSION_SECRET: z.string().min(32, 'needs at least 32 characters'),
   SIGNING_SECRET: z.string().min(32, 'needs at least 32 characters'),
   SIGNING_SECRET_LOST: onOff.default('off'),
@@ -71,7 +75,7 @@ export type Config = Readonly<{
   strictReplies: boolean;
 }>;
 
-function databaseOf(values: z.output<typeof environment>): Config['database'] {
+function databaseOf(values: z.output<z.ZodObject<typeof databaseVariables>>): Config['database'] {
   if (values.DATABASE_URL !== undefined) {
     const url = new URL(values.DATABASE_URL);
     return {
@@ -96,18 +100,26 @@ function smtpOf({ SMTP_URL: url, MAIL_FROM: from }: z.output<typeof environment>
   return url === undefined || from === undefined ? null : Object.freeze({ url, from });
 }
 
+/** @throws Error that names every fault, one a line */
+function parse<T>(schema: z.ZodType<T>, env: Readonly<Record<string, string | undefined>>): T {
+  const parsed = schema.safeParse(env);
+  if (parsed.success) return parsed.data;
+  const faults = parsed.error.issues.map((issue) => `  ${issue.path.join('.')}: ${issue.message}`);
+  throw new Error(`The environment needs mending (see .env.example):\n${faults.join('\n')}`);
+}
+
+/** Where the database is, for a program that needs nothing else. @throws Error that names every fault, one a line */
+export function readDatabase(env: Readonly<Record<string, string | undefined>>): Config['database'] {
+  return Object.freeze(databaseOf(parse(z.object(databaseVariables), env)));
+}
+
 /**
  * Reads the environment, once. Called by main.ts alone; everything else is handed the result.
  *
  * @throws Error that names every fault, one a line
  */
 export function readConfig(env: Readonly<Record<string, string | undefined>>): Config {
-  const parsed = environment.safeParse(env);
-  if (!parsed.success) {
-    const faults = parsed.error.issues.map((issue) => `  ${issue.path.join('.')}: ${issue.message}`);
-    throw new Error(`The environment needs mending (see .env.example):\n${faults.join('\n')}`);
-  }
-  const values = parsed.data;
+  const values = parse(environment, env);
   const lan = values.FAIRLEAD_LAN === 'on' ? { tlsPort: values.TLS_PORT, addresses: networkAddresses() } : null;
   if (lan?.addresses.length === 0)
     throw new Error('This machine is on no network, so no phone can reach it. Connect it, or start without --lan.');

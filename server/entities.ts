@@ -3,6 +3,7 @@ import { DrawSecret } from './blind/draw-secret.entity.ts';
 import { PasswordReset } from './features/account/password-reset.entity.ts';
 import { Attendance } from './features/attendances/attendance.entity.ts';
 import { Listener } from './features/attendances/listener.entity.ts';
+import { Audit } from './features/audits/audit.entity.ts';
 import { Cable } from './features/cables/cable.entity.ts';
 import { Specimen } from './features/cables/specimen.entity.ts';
 import { Invitation } from './features/invitations/invitation.entity.ts';
@@ -38,6 +39,7 @@ export const entities = [
   HeadSignatureRow,
   TokenRequest,
   TimestampToken,
+  Audit,
   Session,
   Seat,
   Answer,

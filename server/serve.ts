@@ -5,6 +5,7 @@ import { createApp } from './app.ts';
 import type { Deps } from './deps.ts';
 import { forgetOldAttempts } from './features/account/account.service.ts';
 import { forgetExpiredResets } from './features/account/password-resets.service.ts';
+import { auditWhenDue } from './features/audits/audits.service.ts';
 import { forgetExpired } from './http/sign-in.ts';
 import { serveSockets } from './live/socket-server.ts';
 import { forgetOldTexts, Postman } from './mail/postman.ts';
@@ -42,7 +43,15 @@ export async function serve(deps: Deps, certificate: Pick<OwnCertificate, 'key' 
   await sweep(deps);
   const sweeping = setInterval(() => {
     sweep(deps).catch((error) => deps.log.error({ err: error }, 'sweeping failed'));
+    audit();
   }, hourMs);
+  let auditing = Promise.resolve();
+  const audit = () => {
+    auditing = auditing
+      .then(() => auditWhenDue(deps))
+      .catch((error) => deps.log.error({ err: error }, 'the records could not be audited'));
+  };
+  audit();
   const postman = deps.config.smtp === null ? null : new Postman(deps, deps.config.smtp);
   postman?.start();
   const timekeeper = deps.timestamps === null ? null : new Timekeeper(deps, deps.timestamps);
@@ -54,6 +63,7 @@ export async function serve(deps: Deps, certificate: Pick<OwnCertificate, 'key' 
     clearInterval(sweeping);
     await postman?.stop();
     await timekeeper?.stop();
+    await auditing;
     await sittings.stop();
     await io.close();
     http.closeAllConnections();
