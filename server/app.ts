@@ -22,6 +22,7 @@ import { publicationsRoutes } from './features/publications/publications.routes.
 import { reportsRoutes } from './features/reports/reports.routes.ts';
 import { sessionsRoutes } from './features/sessions/sessions.routes.ts';
 import { signInRoutes } from './features/sign-in/sign-in.routes.ts';
+import { signedHeadsRoutes } from './features/signed-heads/signed-heads.routes.ts';
 import { signingKeysRoutes } from './features/signing-keys/signing-keys.routes.ts';
 import { studiesRoutes } from './features/studies/studies.routes.ts';
 import { usersRoutes } from './features/users/users.routes.ts';
@@ -115,6 +116,7 @@ export function createApp(deps: Deps) {
   publicationsRoutes(api, access, deps);
   mailRoutes(api, access, deps);
   signingKeysRoutes(api, access, deps);
+  signedHeadsRoutes(api, access, deps);
   auditsRoutes(api, access, deps);
   apiReferenceRoutes(api, mounted, version);
   api.use(nothingHere);

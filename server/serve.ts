@@ -13,6 +13,7 @@ import type { OwnCertificate } from './network/own-certificate.ts';
 import { Timekeeper } from './timestamps/timekeeper.ts';
 
 const hourMs = 60 * 60 * 1000;
+const firstAuditMs = 60 * 1000;
 
 function listen(http: Pick<Server, 'once' | 'listen' | 'address'>, port: number, host: string): Promise<number> {
   return new Promise((resolve, reject) => {
@@ -51,7 +52,8 @@ export async function serve(deps: Deps, certificate: Pick<OwnCertificate, 'key' 
       .then(() => auditWhenDue(deps))
       .catch((error) => deps.log.error({ err: error }, 'the records could not be audited'));
   };
-  audit();
+  // A start has more urgent things to do, and the tokens of the demo are still on their way.
+  const firstAudit = setTimeout(audit, firstAuditMs);
   const postman = deps.config.smtp === null ? null : new Postman(deps, deps.config.smtp);
   postman?.start();
   const timekeeper = deps.timestamps === null ? null : new Timekeeper(deps, deps.timestamps);
@@ -61,6 +63,7 @@ export async function serve(deps: Deps, certificate: Pick<OwnCertificate, 'key' 
   const tlsPort = https === null ? null : await listen(https, config.lan?.tlsPort ?? 0, config.host);
   const stop = async () => {
     clearInterval(sweeping);
+    clearTimeout(firstAudit);
     await postman?.stop();
     await timekeeper?.stop();
     await auditing;

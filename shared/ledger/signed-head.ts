@@ -97,11 +97,6 @@ export function signatureFault(
   return isSignedBy(signature, key.publicKey) ? null : 'it does not match its key and what it says';
 }
 
-/** A fingerprint in groups of four, as it is read out. */
-export function readableFingerprint(fingerprint: string): string {
-  return (fingerprint.match(/.{4}/g) ?? []).join(' ');
-}
-
 /** The public key in PEM, for `openssl pkeyutl -verify -pubin -inkey`. */
 export function publicKeyPem(publicKey: string): string {
   return `-----BEGIN PUBLIC KEY-----\n${base64(publicKeyDer(publicKey))}\n-----END PUBLIC KEY-----\n`;

@@ -15,6 +15,7 @@ import type { Deps, Random } from '../../deps.ts';
 import { append, type NewEntry } from '../../ledger/ledger.ts';
 import { organisationName } from '../organisations/organisations.store.ts';
 import { closedRecord, reportOf } from '../reports/reports.service.ts';
+import { signedHeadsOf } from '../signed-heads/signed-heads.service.ts';
 import { lockedStudy, studyOrProblem } from '../studies/studies.service.ts';
 import { updateStudy } from '../studies/studies.store.ts';
 import type { Study } from '../studies/study.entity.ts';
@@ -177,6 +178,8 @@ function readDocument(digest: string, document: string): Read {
       entries: study.entries(),
       answers: study.answers(),
       rooms: new Map(),
+      // Not in the document: tokens may still arrive.
+      heads: [],
     }),
     declared: studyEvents['publication-declared'].parse(study.payloadOf('publication-declared')),
   };
@@ -193,7 +196,8 @@ export function getPublication({ db, config }: Deps, id: string): Promise<Public
     const row = await store.findPublication(tx, id);
     if (row === null) throw nothingPublished();
     const read = kept.get(row.digest) ?? readDocument(row.digest, (await store.documentOf(tx, id, row.digest)) ?? '');
-    return publicationView({ row, publicUrl: config.publicUrl, ...read });
+    const heads = await signedHeadsOf(tx, row.studyId);
+    return publicationView({ row, publicUrl: config.publicUrl, ...read, heads });
   });
 }
 

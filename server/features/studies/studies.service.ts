@@ -11,6 +11,7 @@ import { pageAddresses } from '../../mail/page-addresses.ts';
 import type { Cable } from '../cables/cable.entity.ts';
 import { cablesById } from '../cables/cables.store.ts';
 import { sessionsOfStudies, sessionsOfStudy } from '../sessions/sessions.store.ts';
+import { signedHeadsOf } from '../signed-heads/signed-heads.service.ts';
 import { findById, membersOf, namesOf } from '../users/users.store.ts';
 import * as store from './studies.store.ts';
 import { studyRowView, studyView } from './studies.views.ts';
@@ -44,6 +45,7 @@ async function viewOf(tx: Tx, study: Study): Promise<StudyReply> {
     cableNames: [cableName(0), cableName(1)],
     sealing: entries.find((entry) => entry.kind === 'protocol-sealed') ?? null,
     deviations: entries.filter((entry) => entry.kind === 'deviation-recorded'),
+    heads: await signedHeadsOf(tx, study.id),
   });
 }
 
