@@ -1,5 +1,6 @@
 import { beforeAll, describe, expect, it } from 'vitest';
-import { bundleCheckNames, checksOfBundle } from '#shared/bundle/verify-bundle.ts';
+import { checksOfBundle } from '#shared/bundle/verify-bundle.ts';
+import { bundleCheckNames } from '#shared/ledger/check-names.ts';
 import type { Check } from '#shared/ledger/verify.ts';
 import { bentBundles, type Whole, wholeBundle } from '../support/bent-bundles.ts';
 

@@ -4,8 +4,8 @@ import { writeZip } from '#shared/bundle/zip.ts';
 import { canonicalJson, type Json } from '#shared/ledger/canonical-json.ts';
 import type { Entry } from '#shared/ledger/chain.ts';
 import { nextEntry } from '#shared/ledger/chain.ts';
+import type { CheckId } from '#shared/ledger/check-names.ts';
 import { fileDigest, utf8ToBytes } from '#shared/ledger/digest.ts';
-import type { CheckId } from '#shared/ledger/verify.ts';
 import { bundleSource, publishedEntry, signedHeads, signingKey, stampedSource } from './bundle.ts';
 import { chainedAgain, closedStudy } from './closed-study.ts';
 
