@@ -3,17 +3,11 @@ import { randomBytes } from 'node:crypto';
 import { once } from 'node:events';
 import { type AddressInfo, createServer } from 'node:net';
 import { fileURLToPath } from 'node:url';
-import { createConnection } from 'mysql2/promise';
+import { databaseAccount, ownDatabase } from './own-database.ts';
 
 export type RunningFairlead = { address: string; said: string; stop: () => Promise<void> };
 
 const top = fileURLToPath(new URL('../..', import.meta.url));
-
-function required(name: string): string {
-  const value = process.env[name];
-  if (value === undefined) throw new Error(`${name} is not set; run the tests with npm test`);
-  return value;
-}
 
 async function freePort(): Promise<number> {
   const probe = createServer().listen(0, '127.0.0.1');
@@ -38,17 +32,10 @@ function upOf(server: ChildProcess): Promise<string> {
   });
 }
 
-/** The real server, with its demo unless told otherwise, as a process of its own, over a database of its own. */
-export async function runFairlead(environment: Record<string, string> = {}): Promise<RunningFairlead> {
-  const name = `fairlead_e2e_${randomBytes(6).toString('hex')}`;
-  const account = {
-    socketPath: required('TEST_DATABASE_SOCKET'),
-    user: required('TEST_DATABASE_USER'),
-    password: required('TEST_DATABASE_PASSWORD'),
-  };
-  const admin = await createConnection(account);
-  await admin.query(`create database ${name} character set utf8mb4`);
+/** The real server as a process of its own, over the database that is named. */
+async function serverOver(databaseName: string, environment: Record<string, string>): Promise<RunningFairlead> {
   const port = await freePort();
+  const { socketPath, user, password } = databaseAccount();
   const server = spawn('node', ['--import', 'tsx', 'server/main.ts'], {
     cwd: top,
     env: {
@@ -57,10 +44,10 @@ export async function runFairlead(environment: Record<string, string> = {}): Pro
       TSX_TSCONFIG_PATH: 'server/tsconfig.json',
       SESSION_SECRET: randomBytes(32).toString('hex'),
       PORT: String(port),
-      DATABASE_SOCKET: account.socketPath,
-      DATABASE_USER: account.user,
-      DATABASE_PASSWORD: account.password,
-      DATABASE_NAME: name,
+      DATABASE_SOCKET: socketPath,
+      DATABASE_USER: user,
+      DATABASE_PASSWORD: password,
+      DATABASE_NAME: databaseName,
       LOG_LEVEL: 'error',
       ...environment,
     },
@@ -72,8 +59,40 @@ export async function runFairlead(environment: Record<string, string> = {}): Pro
     stop: async () => {
       server.kill('SIGTERM');
       await once(server, 'exit');
-      await admin.query(`drop database ${name}`);
-      await admin.end();
+    },
+  };
+}
+
+// The demo takes a quarter of a minute to make. A server makes it once, before the first test, and is stopped; every other
+// one gets a copy of its database, and its secret, from which the links in the demo's mails were made.
+const madeDemo = { database: 'FAIRLEAD_E2E_DEMO', secret: 'FAIRLEAD_E2E_SECRET' } as const;
+
+/** Has the demo made by the real server. Returns how to remove it. */
+export async function makeDemo(): Promise<() => Promise<void>> {
+  const database = await ownDatabase();
+  const secret = randomBytes(32).toString('hex');
+  const server = await serverOver(database.name, { SESSION_SECRET: secret });
+  await server.stop();
+  process.env[madeDemo.database] = database.name;
+  process.env[madeDemo.secret] = secret;
+  return database.remove;
+}
+
+/** The real server over a database of its own, with the demo in it unless told otherwise. */
+export async function runFairlead(environment: Record<string, string> = {}): Promise<RunningFairlead> {
+  const isDemo = environment.FAIRLEAD_DEMO !== 'off';
+  const { [madeDemo.database]: demo, [madeDemo.secret]: secret } = process.env;
+  if (isDemo && (demo === undefined || secret === undefined)) throw new Error('the demo was not made beforehand');
+  const database = await ownDatabase(isDemo ? demo : undefined);
+  const server = await serverOver(database.name, {
+    ...(isDemo && secret !== undefined ? { SESSION_SECRET: secret } : {}),
+    ...environment,
+  });
+  return {
+    ...server,
+    stop: async () => {
+      await server.stop();
+      await database.remove();
     },
   };
 }
