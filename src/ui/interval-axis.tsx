@@ -13,11 +13,11 @@ export function IntervalAxis({ from, to, shareOf, quantity, format }: IntervalAx
     <tr className="text-soft">
       <td />
       <td className="px-3">
-        <div className="relative h-8 border-t border-ink font-mono">
+        <div className="@container relative h-8 border-t border-ink font-mono">
           {niceTicks(from, to, 6).map((tick) => (
             <span
               key={tick}
-              className="absolute top-1 -translate-x-1/2 whitespace-nowrap"
+              className="absolute top-1 -translate-x-1/2 whitespace-nowrap @max-[14rem]:not-first:not-last:hidden"
               style={{ left: `${shareOf(tick) * 100}%` }}
             >
               {format(tick)}

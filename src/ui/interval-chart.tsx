@@ -15,6 +15,8 @@ type IntervalChartProps = {
   domain?: readonly [number, number];
   /** How a value is written; as it is if left out. */
   format?: (value: number) => string;
+  /** How a limit is written, rounded away from the value; like a value if left out. */
+  formatLimit?: (value: number, rounding: 'down' | 'up') => string;
 };
 
 /** Rows side by side: a point with its interval and the line of what comes of nothing. It is a table, so it reads as one. */
@@ -26,6 +28,7 @@ export function IntervalChart({
   quantity,
   domain,
   format = String,
+  formatLimit = format,
 }: IntervalChartProps) {
   const [from, to] = domain ?? [0, Math.max(middle?.value ?? 0, ...rows.map((row) => row.high))];
   const shareOf = (value: number) => (Math.min(Math.max(value, from), to) - from) / (to - from || 1);
@@ -60,7 +63,7 @@ export function IntervalChart({
       </thead>
       <tbody>
         {rows.map((row) => (
-          <IntervalRow key={row.label} entry={row} shareOf={shareOf} middleShare={middleShare} format={format} />
+          <IntervalRow key={row.label} entry={row} {...{ shareOf, middleShare, format, formatLimit }} />
         ))}
       </tbody>
       <tfoot aria-hidden="true">

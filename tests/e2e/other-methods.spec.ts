@@ -70,6 +70,7 @@ async function run(browser: Browser, { title, method, presentations, choices, ch
   ] as const;
   await takeSeat(phones[0], 'Left');
   await takeSeat(phones[1], 'Right');
+  for (const phone of phones) await expect(phone.getByText(methodOf(method.id).explanation)).toBeVisible();
   await beginSession(desk);
   const heard: Heard[] = [];
   for (let trial = 1; trial <= trialCount; trial += 1) {
@@ -127,7 +128,9 @@ const places = ['first', 'second', 'third'];
 const oddPlace = (codes: readonly string[]) =>
   places[codes.findIndex((code) => codes.filter((other) => other === code).length === 1)] ?? '';
 
-test('a triangle from its plan to a report that a count of all draws agrees with [C1] [C2]', async ({ browser }) => {
+test('a triangle from its plan to a report that a count of all draws agrees with [C1] [C2] [S17]', async ({
+  browser,
+}) => {
   const { manager, report, heard } = await run(browser, {
     title: 'Study Plover',
     method: { id: 'triangle' },

@@ -34,7 +34,8 @@ export default defineConfig({
     browserName: 'chromium',
     launchOptions: { executablePath: process.env.CHROMIUM ?? '/usr/bin/chromium', args: quiet },
     actionTimeout: 60_000,
-    trace: 'retain-on-failure',
+    // Pictures along the way cost as much as the journey itself; one of the failure is kept.
+    trace: { mode: 'retain-on-failure', screenshots: false },
     screenshot: 'only-on-failure',
     locale: 'en-GB',
     timezoneId: 'Europe/Berlin',
