@@ -18,7 +18,8 @@ describe('the labels under a distribution of counts', () => {
     const gaps = fc.array(fc.integer({ min: 1, max: 9 }), { minLength: 1, maxLength: 90 });
     fc.assert(
       fc.property(fc.nat(300), gaps, fc.integer({ min: 1, max: 5 }), (start, steps, width) => {
-        const counts = steps.reduce<number[]>((list, step) => [...list, (list.at(-1) ?? 0) + step], [start]);
+        const counts = [start];
+        for (const step of steps) counts.push((counts.at(-1) ?? 0) + step);
         const bars = counts.flatMap((from, index) =>
           index % width === 0 ? [{ from, to: counts[Math.min(index + width, counts.length) - 1] ?? from }] : [],
         );
