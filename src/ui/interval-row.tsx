@@ -6,11 +6,10 @@ type IntervalRowProps = {
   shareOf: (value: number) => number;
   /** Where the line of what comes of nothing lies, 0 to 1; null for none. */
   middleShare: number | null;
-  format: (value: number) => string;
-  formatLimit: (value: number, rounding: 'down' | 'up') => string;
+  format: (value: number, rounding?: 'down' | 'up') => string;
 };
 
-export function IntervalRow({ entry, shareOf, middleShare, format, formatLimit }: IntervalRowProps) {
+export function IntervalRow({ entry, shareOf, middleShare, format }: IntervalRowProps) {
   const percent = (share: number) => `${share * 100}%`;
   const [low, value, high] = [percent(shareOf(entry.low)), percent(shareOf(entry.value)), percent(shareOf(entry.high))];
   return (
@@ -41,7 +40,7 @@ export function IntervalRow({ entry, shareOf, middleShare, format, formatLimit }
       </td>
       <td className="pl-4 text-right font-mono font-semibold whitespace-nowrap">{format(entry.value)}</td>
       <td className="max-md:sr-only md:pl-6 md:text-right md:font-mono md:whitespace-nowrap md:text-soft">
-        {formatLimit(entry.low, 'down')} to {formatLimit(entry.high, 'up')}
+        {format(entry.low, 'down')} to {format(entry.high, 'up')}
       </td>
     </tr>
   );

@@ -15,8 +15,7 @@ export function ListenerIntervals({ chart }: ListenerIntervalsProps) {
       middle={middle}
       quantity={quantity}
       domain={[0, 1]}
-      format={(share) => percentOf(share)}
-      formatLimit={percentOf}
+      format={percentOf}
     />
   );
 }
