@@ -7,7 +7,8 @@ import { assignedTrials, type SameDifferentTrial } from '../findings/same-differ
 import { sameDifferentWords } from '../findings/same-different-words.ts';
 import { assignmentTest } from '../statistics/assignment-test.ts';
 import { fractionToNumber } from '../statistics/fraction.ts';
-import { sameDifferentPlan } from '../statistics/same-different.ts';
+import { sameDifferentLimits, sameDifferentPlan } from '../statistics/same-different.ts';
+import { unbiasedByDifference } from '../statistics/unbiased-same-different.ts';
 import { fittedAtFirst, oneAndOther, spokenPlace } from './familiarisation.ts';
 import type { AnswerOption, Method, ScoredTrial } from './method.ts';
 
@@ -61,6 +62,7 @@ export const sameDifferent: Method<SameDifferentResult> = {
   registered: () => ({ name: 'same-different/1', alternative: 'greater', missing: 'counted as wrong' }),
   margin: null,
   planned: sameDifferentPlan,
+  sensitivity: [{ psychometric: unbiasedByDifference, words: 'if percepts are compared by differences' }],
   analyse: ({ analysis: { alpha }, listenersPerSession }, trials) =>
     analyseSameDifferent({ alpha, listenersPerSession, trials: trials.map(pairTrial) }),
   nullDistribution: (trials) => {
@@ -73,6 +75,20 @@ export const sameDifferent: Method<SameDifferentResult> = {
   finding: (result, context) => differenceFinding(result, context, sameDifferentWords),
 
   plan: {
+    aim: { label: 'Find listeners who say “different” on different trials', rate: 'Hits' },
+    couldFind: (rate) =>
+      `a listener with ${percentOf(rate, 'up')} hits and ${percentOf(1 - rate, 'down')} false alarms`,
+    leftOpen: (trials) => {
+      const half = Math.floor(trials / 2);
+      const said = { count: Math.ceil(half / 2), trials: half, missing: 0 };
+      const { upper } = sameDifferentLimits(said, said, 0.95);
+      const limit =
+        upper === Number.POSITIVE_INFINITY
+          ? 'no d′ is excluded from above'
+          : `a d′ up to ${upper.toFixed(2)} is not excluded`;
+      return `With as many false alarms as hits, ${said.count} each in ${half} trials of either kind, ${limit} (limits at 95% or more, if percepts are compared by differences).`;
+    },
+    counts: null,
     needed: (count) => `${count} hits`,
     underNull: 'are needed. If nobody hears a difference,',
     unfixed:
