@@ -5,7 +5,8 @@ import type { CountRow, CountTable } from './count-table.ts';
 import { confidenceText } from './finding.ts';
 import { formatShare } from './format-probability.ts';
 
-const pieces = 12;
+/** About so many rows say what every count means. */
+const pieces = 8;
 
 /** What each number of answers for the first cable would mean, when every answer prefers one. */
 export const preferenceCounts: CountTable = {

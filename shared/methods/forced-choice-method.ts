@@ -50,7 +50,7 @@ export function forcedChoiceScoring({ question, rightOf, words, smallEffect }: A
       mostPercent: 90,
       shows: (percent) => `that fewer than ${percent}\u00a0% of answers are above guessing`,
       counts: 'trials',
-      most: (count) => `At most ${count} right`,
+      most: (count) => `at most ${count} right`,
     },
     planned: oneSidedPlan(chanceOf(question)),
     sensitivity: Object.values(question.rules),

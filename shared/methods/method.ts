@@ -39,7 +39,7 @@ export type MarginOffer = {
   shows(percent: number): string;
   /** What is counted towards it. */
   readonly counts: 'trials' | 'listeners';
-  /** What a count at most so large shows it by: "At most 9 right". */
+  /** What a count at most so large shows it by: "at most 9 right". */
   most(count: number, of: number): string;
 };
 

@@ -26,8 +26,8 @@ export interface OutcomeRange {
 const suspectTail = 0.01;
 /** What lies below a margin is shown at this level, whatever the level of the difference test. */
 const marginLevel = 0.05;
-/** A range is cut into pieces so that about so many rows say what every count means. */
-const rows = 12;
+/** A range is cut into pieces so that about so many rows say what every count means; where labels are suspect, none. */
+const rows = 8;
 
 /**
  * What every possible count of right answers would come to, in ranges that are short enough to read figures off.
@@ -59,7 +59,8 @@ export function countOutcomes(question: OutcomeQuestion): OutcomeRange[] {
   for (let from = 0; from <= trials; ) {
     const outcome = outcomeOf(from);
     let to = from;
-    while (to < trials && to - from + 1 < width && outcomeOf(to + 1) === outcome) to += 1;
+    const most = outcome === 'below chance' ? trials : width;
+    while (to < trials && to - from + 1 < most && outcomeOf(to + 1) === outcome) to += 1;
     ranges.push({ from, to, outcome });
     from = to + 1;
   }

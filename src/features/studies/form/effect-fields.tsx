@@ -12,8 +12,12 @@ import type { StudyFormValues } from './study-form-values.ts';
 
 /** What is to be found, on every scale of the method; whichever is typed, the others follow. */
 export function EffectFields() {
-  const { aim, setAim } = usePlan();
   const method = methodOf(useWatch<StudyFormValues, 'method'>({ name: 'method' }));
+  return <Effect key={method.id} method={method} />;
+}
+
+function Effect({ method }: { method: Method }) {
+  const { aim, setAim } = usePlan();
   const [typed, setTyped] = useState<{ key: EffectScale['key']; text: string } | null>(null);
   const scales = effectScales(method);
   const [rate] = scales;
@@ -58,15 +62,16 @@ export function EffectFields() {
           );
         })}
       </div>
-      <p className="text-soft">{meaningOf(method, aim.share)}</p>
+      <p className="text-soft">{meaningOf(method, aim.share, scales)}</p>
     </fieldset>
   );
 }
 
-function meaningOf({ plan, planned, sensitivity, ...method }: Method, share: number): string {
-  const rate = rateOf({ plan, planned, sensitivity, ...method }, share);
-  if (sensitivity.length === 0)
-    return 'The share of answers that prefer the same cable; without a preference it is half.';
-  const readings = sensitivity.map(({ psychometric, words }) => `${dPrimeAt(psychometric, rate).toFixed(2)} ${words}`);
-  return `${plan.atRate(rate)} comes out when the difference is heard in ${Math.round(share * 100)}\u00a0% of trials and the rest is guessed. d′ is how far apart the two cables are heard, in units of how much one of them varies from time to time: ${readings.join(', ')}.`;
+function meaningOf(method: Method, share: number, [, heard]: readonly EffectScale[]): string {
+  const rate = rateOf(method, share);
+  if (heard === undefined) return 'The share of answers that prefer the same cable; without a preference it is half.';
+  const readings = method.sensitivity.map(
+    ({ psychometric, words }) => `${dPrimeAt(psychometric, rate).toFixed(2)} ${words}`,
+  );
+  return `${method.plan.atRate(rate)}: so it comes out when the difference is heard in ${scaleFace(heard, share)}\u00a0% of trials and the rest is guessed. d′ is how far apart the two cables are heard, in units of how much one of them varies from time to time: ${readings.join(', ')}.`;
 }

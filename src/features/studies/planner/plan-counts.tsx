@@ -41,18 +41,31 @@ function Counts({ table, plan: { trials, alpha, choices } }: { table: CountTable
 
 function columnsOf({ counted, effect }: CountTable): Column<CountRow>[] {
   return [
-    { key: 'count', header: counted, isRowHeader: true, cell: ({ from, to }) => <Range from={from} to={to} /> },
-    { key: 'p', header: 'p', isFigure: true, cell: ({ p: [first, last] }) => rangeOf(first, last, formatProbability) },
+    {
+      key: 'count',
+      header: counted,
+      isRowHeader: true,
+      cell: ({ from, to }) => (
+        <span className="whitespace-nowrap">
+          <Range from={String(from)} to={String(to)} />
+        </span>
+      ),
+    },
+    {
+      key: 'p',
+      header: 'p',
+      isFigure: true,
+      cell: ({ p: [first, last] }) => <Range from={formatProbability(first)} to={formatProbability(last)} />,
+    },
     { key: 'finding', header: 'Finding', cell: ({ finding }) => finding },
     {
       key: 'effect',
-      header: `${effect} (limits)`,
+      header: `${effect} (interval)`,
       isFigure: true,
       cell: ({ share: [first, last], limits: { lower, upper } }) => (
         <>
-          {rangeOf(first, last, (share) => formatShare(share, 'nearest'))}
-          <span className="text-soft">
-            {' '}
+          <Range from={formatShare(first, 'nearest')} to={formatShare(last, 'nearest')} />{' '}
+          <span className="whitespace-nowrap text-soft">
             ({formatShare(lower, 'down')} to {formatShare(upper, 'up')})
           </span>
         </>
@@ -62,13 +75,19 @@ function columnsOf({ counted, effect }: CountTable): Column<CountRow>[] {
   ];
 }
 
-function Range({ from, to }: { from: number; to: number }) {
-  return <span className="font-mono whitespace-nowrap">{from === to ? from : `${from} to ${to}`}</span>;
-}
-
 /** The ends of a range, once where they read alike. */
-function rangeOf(first: number, last: number, face: (value: number) => string): string {
-  return face(first) === face(last) ? face(first) : `${face(first)} to ${face(last)}`;
+function Range({ from, to }: { from: string; to: string }) {
+  return (
+    <span className="font-mono">
+      <span className="whitespace-nowrap">{from}</span>
+      {from === to ? null : (
+        <>
+          {' to '}
+          <span className="whitespace-nowrap">{to}</span>
+        </>
+      )}
+    </span>
+  );
 }
 
 function NoCounts({ plan: { listeners, method } }: { plan: Plan }) {

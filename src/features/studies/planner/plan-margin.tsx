@@ -25,8 +25,8 @@ function OfAnswers({ plan, offer, test, percent }: Asked) {
   if (critical === null) return <OutOfReach what={formatCount(plan.trials, 'trial')} shows={offer.shows(percent)} />;
   return (
     <p className="text-lg text-pretty">
-      <Copper>{offer.most(critical.count, plan.trials)}</Copper> shows {offer.shows(percent)}. If nobody hears anything,{' '}
-      <Copper>{powerPercent(test.power(plan.trials, share, 0))}</Copper> of such studies show it.
+      With <Copper>{offer.most(critical.count, plan.trials)}</Copper> the study shows {offer.shows(percent)}. If nobody
+      hears anything, <Copper>{powerPercent(test.power(plan.trials, share, 0))}</Copper> of such studies show it.
     </p>
   );
 }

@@ -55,6 +55,7 @@ function simulationOf({ method, listeners, trials, alpha, alternative, choices }
     alpha,
     alternative,
     rates: [rateOf(method, aim.share), ...planned.rates],
+    goal: aim.goal,
     guessing: hasLimit ? right : null,
     marginRate: hasLimit && marginPercent !== undefined ? right + (marginPercent / 100) * wrong : null,
   };

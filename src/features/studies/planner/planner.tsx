@@ -12,7 +12,12 @@ import { PlanWarnings } from './plan-warnings.tsx';
 export function Planner() {
   const { plan } = usePlan();
   return (
-    <aside aria-label="What this plan comes to" className="flex min-w-0 flex-col gap-6 lg:sticky lg:top-6">
+    <aside
+      // biome-ignore lint/a11y/noNoninteractiveTabindex: where it scrolls beside the form, it must be reached by key
+      tabIndex={0}
+      aria-label="What this plan comes to"
+      className="flex min-w-0 flex-col gap-6 lg:sticky lg:top-6 lg:-mx-2 lg:max-h-[calc(100dvh-3rem)] lg:overflow-y-auto lg:px-2 lg:pb-6"
+    >
       {plan ? (
         <>
           <PlanHeadline plan={plan} />

@@ -26,7 +26,7 @@ export function PowerChart({ points, planned, needed, goal, caption }: PowerChar
     <figure className="flex flex-col gap-2">
       <div aria-hidden="true" className="flex flex-col gap-3">
         <p className="text-soft">Chance of finding it, %</p>
-        <div className="relative mt-6 mr-3 mb-7 ml-12 h-44">
+        <div className="relative mt-12 mr-3 mb-7 ml-12 h-44">
           <svg
             aria-hidden="true"
             viewBox="0 0 100 100"
@@ -115,21 +115,41 @@ const dots: Record<MarkKind, string> = {
   planned: 'size-4 border-[3px] border-ink bg-page',
 };
 
-/** First above stands over the line, stays above under it, the planned number where there is room. */
+const wordLooks: Record<MarkKind, string> = {
+  first: 'text-soft',
+  safe: 'font-bold text-copper',
+  planned: 'font-bold',
+};
+
+/** From the middle of the chart on, words over the line end at their mark instead of beginning there. */
+const middle = 35;
+/** Points lower than this leave no room for words between them and the axis. */
+const low = 80;
+
+/**
+ * Upper left there is no line, so that both needed numbers are named above the chart, each on a row of its own; lower right
+ * there is none either, and the planned number is named at the foot, or well above a point that lies there itself. A thin
+ * rule leads from the words to the mark.
+ */
 function Mark({ kind, x, y, words }: ChartMark & { x: number; y: number }) {
-  const place = { left: `${x}%`, top: `${y}%` };
-  const isLow = kind === 'safe' || (kind === 'planned' && y < 45);
+  const place = kind === 'planned' ? (y < low ? foot(y) : aloft(y)) : onTop(y, (kind === 'safe') === x > middle);
   return (
     <>
-      <span style={place} className={classNames('absolute -translate-1/2 rounded-full', dots[kind])} />
       <span
-        style={place}
+        style={{ left: `${x}%`, ...place.rule }}
+        className={classNames('absolute border-l border-edge', place.lift)}
+      />
+      <span
+        style={{ left: `${x}%`, top: `${y}%` }}
+        className={classNames('absolute -translate-1/2 rounded-full', dots[kind])}
+      />
+      <span
+        style={{ left: `${x}%`, ...place.words }}
         className={classNames(
-          'absolute bg-page/80 px-1 whitespace-nowrap',
-          kind === 'first' ? 'text-soft' : 'font-bold',
-          kind === 'safe' && 'text-copper',
-          x > 55 || kind === 'first' ? '-translate-x-full' : '',
-          isLow ? 'mt-3' : '-mt-9',
+          'absolute px-1.5 leading-6 whitespace-nowrap',
+          wordLooks[kind],
+          place.lift,
+          x > (kind === 'planned' ? 60 : middle) && '-translate-x-full',
         )}
       >
         {words}
@@ -137,3 +157,15 @@ function Mark({ kind, x, y, words }: ChartMark & { x: number; y: number }) {
     </>
   );
 }
+
+const onTop = (y: number, isUpper: boolean) => ({
+  rule: { top: 0, bottom: `${100 - y}%` },
+  words: { top: 0 },
+  lift: isUpper ? '-mt-13' : '-mt-7',
+});
+const foot = (y: number) => ({ rule: { top: `${y}%`, bottom: 0 }, words: { bottom: 0 }, lift: '' });
+const aloft = (y: number) => ({
+  rule: { top: `${y}%`, bottom: `${100 - y}%` },
+  words: { top: `${y}%` },
+  lift: '-mt-24',
+});
