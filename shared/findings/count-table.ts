@@ -4,7 +4,7 @@ import type { Interval } from '../statistics/clopper-pearson.ts';
 export interface CountTable {
   /** What is counted: "Right". */
   readonly counted: string;
-  /** What the effect is a share of: "Above guessing". */
+  /** What the effect is a share of, and which limits stand beside it: "Above guessing (one-sided limits)". */
   readonly effect: string;
   rows(plan: CountPlan): CountRow[];
 }
@@ -27,7 +27,7 @@ export interface CountRow {
   readonly finding: string;
   /** The effect at the first and at the last, 0 ... 1. */
   readonly share: readonly [number, number];
-  /** The lower limit of the first and the upper limit of the last, of the interval that a report gives. */
+  /** The lower limit of the first and the upper limit of the last: the duals of the tests, so that both agree. */
   readonly limits: Interval;
   readonly maySay: string;
 }

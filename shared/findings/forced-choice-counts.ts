@@ -1,13 +1,13 @@
-import { aboveGuessingRate, intervalAboveGuessing } from '../statistics/above-guessing.ts';
+import { aboveGuessingRate } from '../statistics/above-guessing.ts';
 import { binomialTest } from '../statistics/binomial-test.ts';
 import type { Chance } from '../statistics/chance.ts';
 import { chanceAsNumbers } from '../statistics/chance.ts';
-import { clopperPearson, clopperPearsonUpper } from '../statistics/clopper-pearson.ts';
+import { clopperPearsonLower, clopperPearsonUpper } from '../statistics/clopper-pearson.ts';
 import { type CountOutcome, countOutcomes } from '../statistics/count-outcomes.ts';
 import type { CountTable } from './count-table.ts';
 import { formatShare } from './format-probability.ts';
 
-/** The confidence of intervals and of limits from above, as a report gives them. */
+/** The confidence of limits from above, as a report gives them. */
 const confidence = 0.95;
 
 /** The share above guessing that so many right leave open from above, with one-sided confidence .95. */
@@ -19,26 +19,26 @@ function upperShare(count: number, trials: number, chance: Chance): number {
  * What each number of right answers would mean, in the rows and words of the findings.
  *
  * @param chance chance of a right answer by guessing
- * @example of 16 at chance 1/2: 12 right is a difference, p 0.0384, 50% above guessing (95% interval 0% to 86%)
+ * @example of 16 at chance 1/2: 12 right is a difference, p 0.0384, 50% above guessing, at least 3% and at most 80%, each with
+ *   confidence .95
  * @see countOutcomes, aboveGuessing and binomialTest for the figures
  */
 export function forcedChoiceCounts(chance: Chance): CountTable {
   return {
     counted: 'Right',
-    effect: 'Above guessing',
+    effect: 'Above guessing (one-sided limits)',
     rows: ({ trials, alpha, margin }) =>
       countOutcomes({ trials, chance, alpha, margin }).map(({ from, to, outcome }) => {
         const pOf = (count: number) => binomialTest(count, trials, chance, 'greater').p;
         const shareOf = (count: number) => Math.max(0, aboveGuessingRate(count / trials, chance));
-        const limitsOf = (count: number) =>
-          intervalAboveGuessing(clopperPearson(count, trials, confidence), chance).clipped;
+        const lower = aboveGuessingRate(clopperPearsonLower(from, trials, 1 - alpha), chance);
         return {
           from,
           to,
           p: [pOf(from), pOf(to)],
           finding: outcome,
           share: [shareOf(from), shareOf(to)],
-          limits: { lower: limitsOf(from).lower, upper: limitsOf(to).upper },
+          limits: { lower: Math.max(0, lower), upper: upperShare(to, trials, chance) },
           maySay: maySayOf(outcome, upperShare(to, trials, chance), margin),
         };
       }),

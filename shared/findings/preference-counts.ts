@@ -11,7 +11,7 @@ const pieces = 8;
 /** What each number of answers for the first cable would mean, when every answer prefers one. */
 export const preferenceCounts: CountTable = {
   counted: 'For one cable',
-  effect: 'Its share',
+  effect: 'Its share (interval)',
   rows: ({ trials, alpha }) => {
     const critical = twoSidedCriticalCount(trials, alpha)?.count ?? trials + 1;
     const findingOf = (count: number) => {

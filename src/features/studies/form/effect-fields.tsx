@@ -73,5 +73,5 @@ function meaningOf(method: Method, share: number, [, heard]: readonly EffectScal
   const readings = method.sensitivity.map(
     ({ psychometric, words }) => `${dPrimeAt(psychometric, rate).toFixed(2)} ${words}`,
   );
-  return `${method.plan.atRate(rate)}: so it comes out when the difference is heard in ${scaleFace(heard, share)}\u00a0% of trials and the rest is guessed. d′ is how far apart the two cables are heard, in units of how much one of them varies from time to time: ${readings.join(', ')}.`;
+  return `That is ${method.plan.atRate(rate)}, as when the difference is heard in ${scaleFace(heard, share)}\u00a0% of trials and the rest is guessed. d′ is how far apart the two cables are heard, in units of how much one of them varies from time to time: ${readings.join(', ')}.`;
 }

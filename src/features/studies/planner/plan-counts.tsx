@@ -57,10 +57,9 @@ function columnsOf({ counted, effect }: CountTable): Column<CountRow>[] {
       isFigure: true,
       cell: ({ p: [first, last] }) => <Range from={formatProbability(first)} to={formatProbability(last)} />,
     },
-    { key: 'finding', header: 'Finding', cell: ({ finding }) => finding },
     {
       key: 'effect',
-      header: `${effect} (interval)`,
+      header: effect,
       isFigure: true,
       cell: ({ share: [first, last], limits: { lower, upper } }) => (
         <>
@@ -71,7 +70,15 @@ function columnsOf({ counted, effect }: CountTable): Column<CountRow>[] {
         </>
       ),
     },
-    { key: 'say', header: 'May be said', cell: ({ maySay }) => maySay },
+    {
+      key: 'finding',
+      header: 'Finding, and what may be said',
+      cell: ({ finding, maySay }) => (
+        <>
+          <strong>{finding.charAt(0).toUpperCase() + finding.slice(1)}.</strong> {maySay}
+        </>
+      ),
+    },
   ];
 }
 
