@@ -3,6 +3,8 @@ import { describe, expect, it } from 'vitest';
 import { methods } from '#shared/methods/methods.ts';
 import { evenChance } from '#shared/statistics/chance.ts';
 import { detectableRate } from '#shared/statistics/detectable-rate.ts';
+import { normalQuantile } from '#shared/statistics/normal-quantile.ts';
+import { normalUpperTail } from '#shared/statistics/normal-tail.ts';
 import { plannedDetectableRate, plannedPowerCurve } from '#shared/statistics/planned-power.ts';
 import { oneSidedPlan, twoSidedPlan } from '#shared/statistics/planned-test.ts';
 import { correctRateAt, dPrimeAt } from '#shared/statistics/psychometric.ts';
@@ -94,6 +96,16 @@ describe('same-different without bias', () => {
       expect(dPrimeAt(unbiasedByDifference, hits)).toBeCloseTo(Number(dPrime), 8);
     }
     expect(correctRateAt(unbiasedByDifference, 0)).toBeCloseTo(0.5, 12);
+  });
+
+  it('misses as many hits as it makes false alarms, however much is heard [W2]', () => {
+    for (let dPrime = 0.05; dPrime < 12; dPrime += 0.05) {
+      const wrong = unbiasedByDifference.wrong(dPrime);
+      const criterion = -Math.SQRT2 * normalQuantile(wrong / 2);
+      const missed =
+        normalUpperTail((dPrime - criterion) / Math.SQRT2) - normalUpperTail((dPrime + criterion) / Math.SQRT2);
+      expect(Math.abs(missed / wrong - 1), `${dPrime}`).toBeLessThan(1e-9);
+    }
   });
 
   it('is the d′ that a report states of the same hits and false alarms [W2]', () => {

@@ -1,4 +1,4 @@
-import { useState } from 'react';
+import { useMemo, useState } from 'react';
 import { useWatch } from 'react-hook-form';
 import type { Method } from '#shared/methods/method.ts';
 import { methodOf } from '#shared/methods/methods.ts';
@@ -19,7 +19,9 @@ export function EffectFields() {
 function Effect({ method }: { method: Method }) {
   const { aim, setAim } = usePlan();
   const [typed, setTyped] = useState<{ key: EffectScale['key']; text: string } | null>(null);
-  const scales = effectScales(method);
+  const scales = useMemo(() => effectScales(method), [method]);
+  const faces = useMemo(() => scales.map((scale) => scaleFace(scale, aim.share)), [scales, aim.share]);
+  const meaning = useMemo(() => meaningOf(method, aim.share, faces), [method, aim.share, faces]);
   const [rate] = scales;
   if (rate === undefined) return null;
   const rateNow = rate.ofShare(aim.share);
@@ -46,9 +48,9 @@ function Effect({ method }: { method: Method }) {
         }}
       />
       <div className="grid grid-cols-3 items-start gap-x-4 max-sm:gap-x-3">
-        {scales.map((scale) => {
-          const text = typed?.key === scale.key ? typed.text : scaleFace(scale, aim.share);
-          const isSound = typed?.key !== scale.key || typedShare(scale, text) !== null;
+        {scales.map((scale, index) => {
+          const text = typed?.key === scale.key ? typed.text : faces[index];
+          const isSound = typed?.key !== scale.key || typedShare(scale, typed.text) !== null;
           return (
             <NumberField
               key={scale.key}
@@ -62,16 +64,18 @@ function Effect({ method }: { method: Method }) {
           );
         })}
       </div>
-      <p className="text-soft">{meaningOf(method, aim.share, scales)}</p>
+      <p className="text-soft">{meaning}</p>
     </fieldset>
   );
 }
 
-function meaningOf(method: Method, share: number, [, heard]: readonly EffectScale[]): string {
+/** The same in words; d′ by the first rule is on its field already, and takes a while to find. */
+function meaningOf(method: Method, share: number, [, heard, first]: readonly string[]): string {
   const rate = rateOf(method, share);
   if (heard === undefined) return 'The share of answers that prefer the same cable; without a preference it is half.';
-  const readings = method.sensitivity.map(
-    ({ psychometric, words }) => `${dPrimeAt(psychometric, rate).toFixed(2)} ${words}`,
-  );
-  return `That is ${method.plan.atRate(rate)}, as when the difference is heard in ${scaleFace(heard, share)}\u00a0% of trials and the rest is guessed. d′ is how far apart the two cables are heard, in units of how much one of them varies from time to time: ${readings.join(', ')}.`;
+  const readings = method.sensitivity.map(({ psychometric, words }, index) => {
+    const dPrime = index === 0 ? Number(first) : dPrimeAt(psychometric, rate);
+    return `${dPrime.toFixed(2)} ${words}`;
+  });
+  return `That is ${method.plan.atRate(rate)}, as when the difference is heard in ${heard}\u00a0% of trials and the rest is guessed. d′ is how far apart the two cables are heard, in units of how much one of them varies from time to time: ${readings.join(', ')}.`;
 }
