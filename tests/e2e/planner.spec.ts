@@ -1,6 +1,7 @@
 import { expect, type Page, test } from '@playwright/test';
 import { expectAccessible } from './accessible.ts';
 import { signIn } from './at-the-desk.ts';
+import { planStudy } from './plan-a-study.ts';
 import { type RunningFairlead, runFairlead } from './run-fairlead.ts';
 
 // A manager without statistics plans how much listening a study takes, in the form and in a real browser.
@@ -37,7 +38,7 @@ test('what is to be found becomes a number of trials, by keyboard alone [W2] [W3
   await expect(manager.getByLabel('Right', { exact: true })).toHaveValue('70.1');
   await manager.getByLabel('Right', { exact: true }).fill('120');
   await expect(manager.getByText('Enter 50.5 to 99.')).toBeVisible();
-  await expect(manager.getByLabel('Heard')).toHaveValue('40.1');
+  await expect(manager.getByLabel('Heard')).toHaveValue('40.2');
   await manager.getByLabel('Heard').fill('40');
 
   await plan.getByRole('button', { name: 'Plan 3 sessions of 14 trials' }).focus();
@@ -99,4 +100,22 @@ test('a group is simulated, its number of trials and its margin too [W1] [W3] [W
   await expect(plan.getByText('there is one coin per trial, not one per answer. So no table')).toBeVisible();
   await expect(plan.getByText('Plan trials, not heads.')).toBeVisible();
   await expectAccessible(manager, 'the planner of a group');
+});
+
+test('a margin and whom listeners are drawn from are kept with the draft, and what is to be found is not [W2] [W5]', async ({
+  browser,
+}) => {
+  const manager = await signIn(browser, fairlead.address, 'Maren Oduya');
+  await planStudy(manager, { listeners: 1, answerS: 15 });
+  await manager.getByRole('link', { name: 'Edit the draft' }).click();
+  await manager.getByLabel('If nobody hears it, I want to be able to say so').selectOption('yes');
+  await manager.getByLabel('Share of answers above guessing, below').fill('30');
+  await manager.getByLabel('Whom are the listeners drawn from?').fill('Members of a listening club');
+  await manager.getByLabel('Heard').fill('20');
+  await manager.locator('form button[type=submit]').click();
+  await expect(manager.getByText('Members of a listening club')).toBeVisible();
+  await expect(manager.getByText('30 %, shown by a one-sided 95 % limit')).toBeVisible();
+  await manager.getByRole('link', { name: 'Edit the draft' }).click();
+  await expect(manager.getByLabel('Share of answers above guessing, below')).toHaveValue('30');
+  await expect(manager.getByLabel('Heard')).toHaveValue('40');
 });
