@@ -46,7 +46,7 @@ export function forcedChoiceCounts(chance: Chance): CountTable {
 }
 
 function maySayOf(outcome: CountOutcome, upper: number, margin: number | null): string {
-  const below = `the above-chance rate is below ${formatShare(margin ?? 1, 'nearest')} with 95% confidence`;
+  const below = `the share of answers above guessing is below ${formatShare(margin ?? 1, 'nearest')}, with 95% confidence`;
   switch (outcome) {
     case 'below chance':
       return 'Nothing: the sessions must be checked for swapped labels.';

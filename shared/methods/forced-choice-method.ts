@@ -54,8 +54,15 @@ export function forcedChoiceScoring({ question, rightOf, words, smallEffect }: A
     },
     planned: oneSidedPlan(chanceOf(question)),
     sensitivity: Object.values(question.rules),
-    analyse: ({ analysis: { alpha }, listenersPerSession, attribute }, trials) =>
-      analyseForcedChoice(question, { alpha, listenersPerSession, attribute, trials: trials.map(forcedChoiceTrial) }),
+    analyse: ({ analysis: { alpha, margin }, listenersPerSession, attribute, samplingFrame }, trials) =>
+      analyseForcedChoice(question, {
+        alpha,
+        listenersPerSession,
+        attribute,
+        margin,
+        samplingFrame,
+        trials: trials.map(forcedChoiceTrial),
+      }),
     nullDistribution: (trials) => forcedChoiceNullDistribution(question, trials.map(forcedChoiceTrial)),
     finding: (result, context) => differenceFinding(result, context, { ...forcedChoiceWords, ...words }),
     plan: {

@@ -88,10 +88,11 @@ export const pairedPreference: Method<PreferenceResult> = {
   },
   planned: twoSidedPlan,
   sensitivity: [],
-  analyse: ({ analysis: { alpha, undecided }, listenersPerSession }, trials) =>
+  analyse: ({ analysis: { alpha, undecided, margin }, listenersPerSession }, trials) =>
     analysePreference({
       alpha,
       listenersPerSession,
+      margin,
       offersNoPreference: undecided !== undefined,
       trials: trials.map(pair),
     }),

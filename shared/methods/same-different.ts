@@ -1,13 +1,14 @@
 import { analyseSameDifferent } from '../findings/analyse-same-different.ts';
 import { differenceFinding } from '../findings/difference-finding.ts';
 import { percentOf } from '../findings/portrait-words.ts';
+import { sameDifferentLeftOpen } from '../findings/same-different-left-open.ts';
 import { sameDifferentPortrait } from '../findings/same-different-portrait.ts';
 import type { SameDifferentResult } from '../findings/same-different-result.ts';
 import { assignedTrials, type SameDifferentTrial } from '../findings/same-different-trials.ts';
 import { sameDifferentWords } from '../findings/same-different-words.ts';
 import { assignmentTest } from '../statistics/assignment-test.ts';
 import { fractionToNumber } from '../statistics/fraction.ts';
-import { sameDifferentLimits, sameDifferentPlan } from '../statistics/same-different.ts';
+import { sameDifferentPlan } from '../statistics/same-different.ts';
 import { unbiasedByDifference } from '../statistics/unbiased-same-different.ts';
 import { fittedAtFirst, oneAndOther, spokenPlace } from './familiarisation.ts';
 import type { AnswerOption, Method, ScoredTrial } from './method.ts';
@@ -78,16 +79,7 @@ export const sameDifferent: Method<SameDifferentResult> = {
     aim: { label: 'Find listeners who say “different” on different trials', rate: 'Hits' },
     couldFind: (rate) =>
       `a listener with ${percentOf(rate, 'up')} hits and ${percentOf(1 - rate, 'down')} false alarms`,
-    leftOpen: (trials) => {
-      const half = Math.floor(trials / 2);
-      const said = { count: Math.ceil(half / 2), trials: half, missing: 0 };
-      const { upper } = sameDifferentLimits(said, said, 0.95);
-      const limit =
-        upper === Number.POSITIVE_INFINITY
-          ? 'no d′ is excluded from above'
-          : `a d′ up to ${upper.toFixed(2)} is not excluded`;
-      return `With as many false alarms as hits, ${said.count} each in ${half} trials of either kind, ${limit} (limits at 95% or more, if percepts are compared by differences).`;
-    },
+    leftOpen: sameDifferentLeftOpen,
     counts: null,
     needed: (count) => `${count} hits`,
     underNull: 'are needed. If nobody hears a difference,',

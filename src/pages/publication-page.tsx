@@ -6,10 +6,12 @@ import { publicationQueries } from '../features/publications/publications.querie
 import { Statements } from '../features/publications/statements.tsx';
 import { VerificationSection } from '../features/publications/verification-section.tsx';
 import { FindingHead } from '../features/reports/finding-head.tsx';
+import { ReportChecks } from '../features/reports/report-checks.tsx';
 import { ReportConditions } from '../features/reports/report-conditions.tsx';
 import { ReportDistribution } from '../features/reports/report-distribution.tsx';
 import { ReportFigures } from '../features/reports/report-figures.tsx';
 import { ReportFlow } from '../features/reports/report-flow.tsx';
+import { ReportHeads } from '../features/reports/report-heads.tsx';
 import { ReportIncidents } from '../features/reports/report-incidents.tsx';
 import { ReportListeners } from '../features/reports/report-listeners.tsx';
 import { ReportProtocol } from '../features/reports/report-protocol.tsx';
@@ -53,6 +55,7 @@ export function Component() {
       <Statements publication={publication} />
       <ReportDistribution nullDistribution={report.nullDistribution} distribution={portrait.distribution} />
       <ReportListeners listeners={portrait.listeners} />
+      <ReportChecks checks={portrait.checks} />
       <ReportFlow flow={report.flow} missingWords={report.result.missingAnswers} />
       <ReportIncidents
         voids={report.voids}
@@ -62,6 +65,7 @@ export function Component() {
       />
       <ReportSessions sessions={report.sessions} cables={report.cables} method={method} />
       <ReportProtocol protocol={report.protocol} />
+      <ReportHeads record={report.record} />
     </article>
   );
 }

@@ -3,10 +3,12 @@ import type { Report } from '#shared/contracts/reports.ts';
 import { methodOf } from '#shared/methods/methods.ts';
 import { Button } from '../../ui/button.tsx';
 import { FindingHead } from './finding-head.tsx';
+import { ReportChecks } from './report-checks.tsx';
 import { ReportConditions } from './report-conditions.tsx';
 import { ReportDistribution } from './report-distribution.tsx';
 import { ReportFigures } from './report-figures.tsx';
 import { ReportFlow } from './report-flow.tsx';
+import { ReportHeads } from './report-heads.tsx';
 import { ReportIncidents } from './report-incidents.tsx';
 import { ReportListeners } from './report-listeners.tsx';
 import { ReportProtocol } from './report-protocol.tsx';
@@ -42,6 +44,7 @@ export function ReportView({ report, back, actions }: ReportViewProps) {
       </div>
       <ReportDistribution nullDistribution={report.nullDistribution} distribution={portrait.distribution} />
       <ReportListeners listeners={portrait.listeners} />
+      <ReportChecks checks={portrait.checks} />
       <ReportFlow flow={report.flow} missingWords={result.missingAnswers} />
       <ReportIncidents
         voids={report.voids}
@@ -52,6 +55,7 @@ export function ReportView({ report, back, actions }: ReportViewProps) {
       <ReportSessions sessions={report.sessions} cables={cables} method={method} />
       <ReportProtocol protocol={report.protocol} />
       <ReportRecord record={report.record} />
+      <ReportHeads record={report.record} />
     </article>
   );
 }

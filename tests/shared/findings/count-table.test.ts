@@ -17,7 +17,13 @@ const endsOf = (question: Parameters<typeof countOutcomes>[0]) => {
   return Object.fromEntries(ends);
 };
 
-const rowOf = { 'below chance': '1', inconclusive: '5', difference: '2' } as const;
+const rowOf = {
+  'below chance': '1',
+  difference: '2',
+  'small difference': '3',
+  'below the margin': '4',
+  inconclusive: '5',
+} as const;
 const context = {
   cables: ['One', 'Other'] as const,
   gate: { commitmentsHold: true, allTrialsAccounted: true, isBlind: true },
@@ -97,20 +103,29 @@ describe('what each count would mean', () => {
     expect(open?.maySay).toContain('up to 74% above guessing');
   });
 
+  const plans: { trials: number; marginPercent?: number }[] = [
+    { trials: 7 },
+    { trials: 16 },
+    { trials: 16, marginPercent: 20 },
+    { trials: 23, marginPercent: 50 },
+    { trials: 60, marginPercent: 40 },
+  ];
+
   it('says of every count what the registered analysis comes to, and so the finding [W7]', () => {
     for (const id of ['abx', 'triangle', 'duo-trio', 'directional-comparison'] as const) {
       const method = methods[id];
       const { counts } = method.plan;
       if (counts === null) throw new Error(`${id} has no table`);
-      for (const trials of [7, 16, 23]) {
-        const rows = counts.rows({ trials, alpha: 0.05, margin: null });
+      for (const { trials, marginPercent } of plans) {
+        const margin = marginPercent === undefined ? null : marginPercent / 100;
+        const rows = counts.rows({ trials, alpha: 0.05, margin });
         for (let right = 0; right <= trials; right++) {
           const result = method.analyse(
-            { analysis: registered(id), listenersPerSession: 1, attribute: 'bass' },
+            { analysis: registered(id, marginPercent), listenersPerSession: 1, attribute: 'bass' },
             answered(id, right, trials),
           );
           const row = rows.find(({ from, to }) => from <= right && right <= to);
-          expect(method.finding(result, context).row, `${id} ${right}/${trials}`).toBe(
+          expect(method.finding(result, context).row, `${id} ${right}/${trials} ${marginPercent}`).toBe(
             rowOf[row?.finding as keyof typeof rowOf],
           );
         }
@@ -155,9 +170,9 @@ describe('what a study leaves open that comes out as if there were nothing', () 
   });
 });
 
-function registered(id: 'abx' | 'triangle' | 'duo-trio' | 'directional-comparison') {
+function registered(id: 'abx' | 'triangle' | 'duo-trio' | 'directional-comparison', marginPercent?: number) {
   return {
-    ...methods[id].registered({ attribute: 'bass' }),
+    ...methods[id].registered({ attribute: 'bass', marginPercent }),
     alpha: '0.05',
     stopping: 'fixed number of trials' as const,
     exclusions: 'none' as const,
