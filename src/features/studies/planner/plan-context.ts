@@ -22,6 +22,7 @@ export type PlanState = {
   /** The newest answer of the search; `isCurrent` where it is the one to this very plan. */
   found: SearchFound | null;
   isCurrent: boolean;
+  hasFailed: boolean;
   simulated: GroupPowerSoFar | null;
 };
 

@@ -1,6 +1,7 @@
 import { useRef } from 'react';
 import type { PlanWords } from '#shared/methods/method.ts';
 import { formatCount, formatNumber } from '../../../lib/format.ts';
+import { Notice } from '../../../ui/notice.tsx';
 import { usePlan } from './plan-context.ts';
 import type { Plan } from './plan-of.ts';
 import type { SearchFound } from './plan-search.ts';
@@ -11,9 +12,15 @@ import { TakeSittings } from './take-sittings.tsx';
 
 /** How many trials find the effect, why not fewer, and what the planned number does. */
 export function PlanNumber({ plan }: { plan: Plan }) {
-  const { found, isCurrent } = usePlan();
+  const { found, isCurrent, hasFailed } = usePlan();
   const title = useRef<HTMLHeadingElement>(null);
   const words = plan.method.plan;
+  if (hasFailed && !isCurrent)
+    return (
+      <Notice tone="amber" title="How many trials it takes could not be worked out.">
+        What you typed is kept. Change a figure to try again, or reload the page once the draft is saved.
+      </Notice>
+    );
   if (found === null || found.own === null) return <p className="text-soft">Working out how many trials it takes …</p>;
   const { asked, own } = found;
   const [aimed] = own.power;

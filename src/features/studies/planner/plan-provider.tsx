@@ -15,7 +15,7 @@ export function PlanProvider({ children }: { children: ReactNode }) {
   const values = useDeferredValue(useWatch<StudyFormValues>());
   const plan = useMemo(() => planOf(values as Partial<StudyFormValues>), [values]);
   const shownAim = useDeferredValue(aim);
-  const { found, isCurrent } = usePlanSearch(plan && searchOf(plan, shownAim));
+  const { found, isCurrent, hasFailed } = usePlanSearch(plan && searchOf(plan, shownAim));
   const simulated = useGroupSimulation(plan === null || plan.listeners === 1 ? null : simulationOf(plan, shownAim));
   const state = useMemo<PlanState>(
     () => ({
@@ -24,9 +24,10 @@ export function PlanProvider({ children }: { children: ReactNode }) {
       plan,
       found,
       isCurrent,
+      hasFailed,
       simulated,
     }),
-    [aim, plan, found, isCurrent, simulated],
+    [aim, plan, found, isCurrent, hasFailed, simulated],
   );
   return <PlanContext value={state}>{children}</PlanContext>;
 }

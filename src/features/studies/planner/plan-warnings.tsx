@@ -71,7 +71,7 @@ function StrongerWithFewer({ plan: { method }, found: { asked, own } }: Warning)
       title={`${formatCount(trials, 'trial')} would find it more often than ${formatNumber(asked.trials)}.`}
     >
       {powerPercent(power)} of studies against {powerPercent(planned)}, for {method.plan.atRate(asked.rate)}: the number
-      needed jumps by one in between.
+      needed jumps in between.
     </Notice>
   );
 }
