@@ -5,8 +5,9 @@ import { join } from 'node:path';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type { AuditFault, AuditOutcome } from '#shared/contracts/audits.ts';
 import { HandClock } from '../../server/demo/hand-clock.ts';
-import { auditAll, auditWhenDue, recordTriggers } from '../../server/features/audits/audits.service.ts';
+import { auditAll, auditWhenDue } from '../../server/features/audits/audits.service.ts';
 import { localAuthority } from '../../server/timestamps/local-authority.ts';
+import { pastTriggers } from '../support/past-triggers.ts';
 import { makeOrganisation, signedIn, type TestOrganisation } from '../support/people.ts';
 import { type TestServer, testServer } from '../support/test-server.ts';
 import { untilAsked } from '../support/until.ts';
@@ -44,17 +45,7 @@ describe('the audit', () => {
     return faults;
   }
 
-  /** Does what the triggers refuse, as somebody could who holds the account: takes them away, and puts them back. */
-  async function pastTriggers(...statements: string[]): Promise<void> {
-    const made: string[] = [];
-    for (const name of recordTriggers) {
-      const [row] = await rowsOf(`show create trigger ${name}`);
-      made.push(row?.['SQL Original Statement'] ?? '');
-      await ask(`drop trigger ${name}`);
-    }
-    for (const statement of statements) await ask(statement);
-    for (const statement of made) await ask(statement);
-  }
+  const past = (...statements: string[]) => pastTriggers(server.deps.db, ...statements);
 
   it('finds that every record of the database holds [X8]', async () => {
     expect(await audited()).toEqual([]);
@@ -179,9 +170,9 @@ describe('the audit', () => {
       'L02 to trial 4 of session 1 is gone',
     ],
   ])('finds what was bent (%s) and says where [X8]', async (_what, table, bend, sequence, why) => {
-    await pastTriggers(keep(table), bend);
+    await past(keep(table), bend);
     const faults = await audited();
-    await pastTriggers(...putBack(table));
+    await past(...putBack(table));
     expect(faults).toHaveLength(1);
     expect(faults[0]).toMatchObject({ studyId: study.studyId, title: 'Study Plover' });
     expect(faults[0]?.why).toContain(why);
@@ -213,9 +204,9 @@ describe('the audit', () => {
     await auditWhenDue(server.deps);
     expect(await latest()).toEqual(first);
     clock.advance(1);
-    await pastTriggers(keep('head_signatures'), `delete from head_signatures ${ofFirst}`);
+    await past(keep('head_signatures'), `delete from head_signatures ${ofFirst}`);
     await auditWhenDue(server.deps);
-    await pastTriggers(...putBack('head_signatures'));
+    await past(...putBack('head_signatures'));
     const second = await latest();
     expect(second?.at).toBe(new Date(clock.now()).toISOString());
     expect(second?.faults.map(({ title, sequence }) => [title, sequence])).toEqual([['Study Plover', 1]]);
@@ -241,9 +232,9 @@ describe('the audit', () => {
       /2 organisations, 1 studies: \d+ entries, 4 signatures, 4 tokens\.\nEvery record holds\./,
     );
     expect(good.status).toBe(0);
-    await pastTriggers(keep('record_entries'), 'delete from record_entries where sequence = 12');
+    await past(keep('record_entries'), 'delete from record_entries where sequence = 12');
     const broken = run(name);
-    await pastTriggers(...putBack('record_entries'));
+    await past(...putBack('record_entries'));
     expect(broken.stdout).toContain(
       `BROKEN  Study Plover (${study.studyId}), entry 12: expected entry 12, found entry 13.`,
     );
