@@ -6,6 +6,7 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type { AuditFault, AuditOutcome } from '#shared/contracts/audits.ts';
 import { HandClock } from '../../server/demo/hand-clock.ts';
 import { auditAll, auditWhenDue } from '../../server/features/audits/audits.service.ts';
+import { OutgoingMail } from '../../server/mail/outgoing-mail.entity.ts';
 import { localAuthority } from '../../server/timestamps/local-authority.ts';
 import { pastTriggers } from '../support/past-triggers.ts';
 import { makeOrganisation, signedIn, type TestOrganisation } from '../support/people.ts';
@@ -206,10 +207,21 @@ describe('the audit', () => {
     clock.advance(1);
     await past(keep('head_signatures'), `delete from head_signatures ${ofFirst}`);
     await auditWhenDue(server.deps);
-    await past(...putBack('head_signatures'));
     const second = await latest();
     expect(second?.at).toBe(new Date(clock.now()).toISOString());
     expect(second?.faults.map(({ title, sequence }) => [title, sequence])).toEqual([['Study Plover', 1]]);
+    const mails = () =>
+      server.deps.db.manager.findBy(OutgoingMail, { recipient: people.owner.email, subject: 'A record does not hold' });
+    const [mail, ...others] = await mails();
+    expect(others).toEqual([]);
+    expect(mail?.text).toContain('Study Plover, at entry 1.');
+    expect(mail?.text).toContain(`/organisations/${people.organisationId}/proof`);
+    // The next day it is still so, and nobody is told again.
+    clock.advance(dayMs);
+    await auditWhenDue(server.deps);
+    expect((await latest())?.faults).toEqual(second?.faults);
+    expect(await mails()).toHaveLength(1);
+    await past(...putBack('head_signatures'));
     await study.manager.get(path).expect(403);
   });
 
