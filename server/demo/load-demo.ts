@@ -62,18 +62,21 @@ async function makeCables(deps: Deps, organisationId: string): Promise<StudyDraf
 
 const other = (answer: string) => (answer === 'A' ? 'B' : 'A');
 
-/** Simulated listeners who hear the difference in nearly every trial; one answer stays out. */
-const hearing: Hearing = ([a, , x], seat, trial) => {
-  if (seat === 1 && trial === 11) return null;
-  const right = x === a ? 'A' : 'B';
-  return (trial + 2 * seat) % 5 === 0 ? other(right) : right;
-};
+/** Who is right when, seat by seat over the trials opened, in an order as irregular as that of people. */
+const course =
+  (seats: readonly string[]): Hearing =>
+  ([a, , x], seat, trial) => {
+    const right = x === a ? 'A' : 'B';
+    const mark = seats[seat]?.[trial - 1];
+    if (mark === '.') return null;
+    return mark === '+' ? right : other(right);
+  };
 
-/** Simulated listeners who are right every other time. */
-const notHearing: Hearing = ([a, , x], seat, trial) => {
-  const right = x === a ? 'A' : 'B';
-  return (trial + seat) % 2 === 0 ? right : other(right);
-};
+/** They hear the difference in most trials; one answer stays out. */
+const hearing = course(['++-+++++-++++-+++', '+++-+++-++.+++-++', '-++++-++++-+++++-']);
+
+/** They are right every other time or so. */
+const notHearing = course(['+-++-++--+-++--+-', '-++-+--++--+-+--+', '++-+-+-+-+--++--+']);
 
 /** Simulated listeners in a pair: one leans to one code, one hardly does, and one often has no preference. */
 const preference: Hearing = ([one = '', other = ''], seat, trial) => {

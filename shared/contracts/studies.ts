@@ -47,6 +47,10 @@ export const studyDraft = z
     methodSettings: z.array(z.string().max(40)).max(10).optional(),
     /** Of what one cable is asked to have more; left out or empty where the method asks for none. */
     attribute: line(30).optional(),
+    /** What a result that finds nothing must be able to exclude, by the method's scale, in whole per cent; left out for none. */
+    marginPercent: whole(1, 90, 'the margin in per cent').optional(),
+    /** Whom the listeners are a sample of; left out or empty where nothing is said about people in general. */
+    samplingFrame: line(160).optional(),
     cables: z.tuple([chosenCable, chosenCable]),
     sessions: whole(1, 20, 'sessions'),
     listenersPerSession: whole(1, 24, 'listeners'),
@@ -89,6 +93,15 @@ export const studyDraft = z
         input: attribute,
         path: ['attribute'],
         message: isAsked ? 'Name it in a word or two, such as bass' : `${methods[method].name} asks for no attribute`,
+      });
+    const { marginPercent } = check.value;
+    const { margin } = methods[method];
+    if (marginPercent !== undefined && (margin === null || marginPercent > margin.mostPercent))
+      check.issues.push({
+        code: 'custom',
+        input: marginPercent,
+        path: ['marginPercent'],
+        message: margin === null ? `${methods[method].name} takes no margin` : `At most ${margin.mostPercent}`,
       });
   });
 export type StudyDraft = z.output<typeof studyDraft>;

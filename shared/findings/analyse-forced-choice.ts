@@ -1,17 +1,29 @@
+import { type BetaPrior, bayesFactor, middlePrior, uniformPrior } from '../statistics/bayes-factor.ts';
+import type { Chance } from '../statistics/chance.ts';
 import { criticalCount } from '../statistics/critical-count.ts';
 import { parseDecimal } from '../statistics/decimal.ts';
 import { requireBetween, requireWhole } from '../statistics/domain.ts';
 import { exactBinomialUpperTail } from '../statistics/exact-binomial.ts';
 import { compareFractions, type Fraction, fractionToNumber, reduceFraction } from '../statistics/fraction.ts';
-import { type SharedPresentationTest, sharedPresentationTest } from '../statistics/shared-presentation-test.ts';
+import { marginConfidence, similarityPlan } from '../statistics/planned-margin.ts';
+import { sharedEvidence } from '../statistics/shared-evidence.ts';
+import {
+  type SharedPresentationTest,
+  type SharedTrial,
+  sharedPresentationTest,
+} from '../statistics/shared-presentation-test.ts';
+import { amongListenersOf } from './among-listeners.ts';
 import { chanceOf, type ForcedChoice } from './forced-choice.ts';
-import type { ForcedChoiceResult } from './forced-choice-result.ts';
+import type { ForcedChoiceResult, RateEstimates } from './forced-choice-result.ts';
 import { type ForcedChoiceTrial, sharedTrialsOf } from './forced-choice-trials.ts';
 import { listenerResults } from './listener-results.ts';
 import { hasOwnDraws, requireDistinct } from './own-draws.ts';
-import { pooledEstimatesOf } from './pooled-estimates-of.ts';
+import { peopleEstimatesOf } from './people-estimates.ts';
+import { rateEstimates } from './rate-estimates.ts';
+import { type DueAnswer, ownDrawLimits, panelLimits } from './rate-limits.ts';
 import { recordDecimal, recordDecimalOfFraction } from './record-decimal.ts';
 import { suspectTail } from './result-frame.ts';
+import { coursesOf, sessionChecks } from './session-checks.ts';
 
 export interface ForcedChoiceData {
   /** The registered one-sided level as a decimal, strictly between 0 and 1: "0.05". */
@@ -22,6 +34,10 @@ export interface ForcedChoiceData {
   readonly trials: readonly ForcedChoiceTrial[];
   /** Of what the first cable was to have more, where the method asks for it. */
   readonly attribute?: string | undefined;
+  /** The share above guessing that the protocol registers as margin, as a decimal strictly between 0 and 1: "0.2". */
+  readonly margin?: string | undefined;
+  /** Whom the protocol says the listeners are drawn from. */
+  readonly samplingFrame?: string | undefined;
 }
 
 /**
@@ -43,7 +59,7 @@ export interface ForcedChoiceData {
  */
 export function analyseForcedChoice(
   question: ForcedChoice,
-  { alpha, listenersPerSession, trials, attribute }: ForcedChoiceData,
+  { alpha, listenersPerSession, trials, attribute, margin, samplingFrame }: ForcedChoiceData,
 ): ForcedChoiceResult {
   const chance = chanceOf(question);
   const level = parseDecimal(alpha);
@@ -51,16 +67,19 @@ export function analyseForcedChoice(
   requireWhole('listenersPerSession', listenersPerSession, 1, 1000);
   requireDistinct(trials);
 
-  const shared = sharedPresentationTest(sharedTrialsOf(trials, question.labels), 'greater');
+  const counted = sharedTrialsOf(trials, question.labels);
+  const shared = sharedPresentationTest(counted, 'greater');
   const isOwnDraws = hasOwnDraws(trials);
   const test = isOwnDraws ? binomialOf(shared, level, chance) : sharedOf(shared);
   const byListener = listenerResults(trials, level, chance);
+  const due = dueAnswers(trials);
+  const estimates = estimatesOf(question, alpha, shared, isOwnDraws ? null : due);
 
   return {
     method: question.method,
     randomisation: 'independent fair draw per trial',
     stopping: 'fixed number of trials',
-    missingAnswers: 'counted as wrong',
+    missingAnswers: margin === undefined ? 'counted as wrong' : 'counted as wrong, as right against the margin',
     alternative: 'greater',
     ...(attribute === undefined ? {} : { attribute }),
     test: test.name,
@@ -86,8 +105,70 @@ export function analyseForcedChoice(
     canReachAlpha: compareFractions(test.least, level) <= 0,
     critical: test.critical,
     byListener,
-    estimates: isOwnDraws && shared.answers > 0 ? pooledEstimatesOf(shared, alpha, question) : null,
+    estimates,
+    people: samplingFrame === undefined ? null : peopleEstimatesOf(byListener, due, isOwnDraws, chance, samplingFrame),
+    ...(margin === undefined ? {} : { margin: marginOf(margin, shared, estimates, chance) }),
+    guessingFactor: shared.answers === 0 ? null : guessingFactorOf(counted, shared, isOwnDraws, chance),
+    amongListeners: isOwnDraws ? amongListenersOf(byListener, chance, fractionToNumber(level)) : null,
+    checks: sessionChecks(coursesOf(trials), question.labels),
   };
+}
+
+/** Every answer that was due, in order, as limits over clusters read them. */
+function dueAnswers(trials: readonly ForcedChoiceTrial[]): DueAnswer[] {
+  return trials.flatMap(({ session, trial, right, answers }) =>
+    answers.map(({ listener, choice }) => ({
+      listener,
+      trial: `${session}/${trial}`,
+      counts: choice === null ? null : choice === right,
+    })),
+  );
+}
+
+function estimatesOf(
+  question: ForcedChoice,
+  alpha: string,
+  { matching, missing, answers }: SharedPresentationTest,
+  /** The answers of a group; null where every answer has a draw of its own. */
+  due: readonly DueAnswer[] | null,
+): RateEstimates | null {
+  if (answers === 0) return null;
+  const limits = due === null ? ownDrawLimits({ counted: matching, missing, due: answers }) : panelLimits(due);
+  if (limits === null) return null;
+  return {
+    basis: due === null ? 'own draws' : 'trials',
+    ...rateEstimates(matching / answers, limits, alpha, question),
+  };
+}
+
+/** With own draws the exact test decides, in whole numbers; in a group the limit over trials does. */
+function marginOf(
+  margin: string,
+  { matching, missing, answers }: SharedPresentationTest,
+  estimates: RateEstimates | null,
+  chance: Chance,
+): ForcedChoiceResult['margin'] {
+  const share = fractionToNumber(parseDecimal(margin));
+  requireBetween('margin', share, 0, 1, 'open');
+  const isBelow =
+    estimates !== null &&
+    (estimates.basis === 'own draws'
+      ? matching + missing <= (similarityPlan(chance).critical(answers, share)?.count ?? -1)
+      : Number(estimates.aboveGuessing.oneSidedUpper.limit) < share);
+  return { share: recordDecimal(share), confidence: recordDecimal(marginConfidence), isBelow };
+}
+
+/** Missing answers count as right: silence must not speak for guessing. */
+function guessingFactorOf(
+  counted: readonly SharedTrial[],
+  { matching, missing, answers }: SharedPresentationTest,
+  isOwnDraws: boolean,
+  chance: ReturnType<typeof chanceOf>,
+): ForcedChoiceResult['guessingFactor'] {
+  const factor = (log: number) => recordDecimal(Math.exp(-log));
+  if (!isOwnDraws) return { uniform: factor(sharedEvidence(counted, chance.denominator)), middle: null };
+  const by = (prior: BetaPrior) => factor(bayesFactor(matching + missing, answers, chance, prior).logFactorAbove);
+  return { uniform: by(uniformPrior), middle: by(middlePrior) };
 }
 
 interface Test {

@@ -2,13 +2,16 @@ import { evenChance } from '../statistics/chance.ts';
 import { parseDecimal } from '../statistics/decimal.ts';
 import { requireBetween, requireWhole } from '../statistics/domain.ts';
 import { compareFractions, type Fraction, fractionToNumber } from '../statistics/fraction.ts';
+import { equivalencePlan, marginConfidence } from '../statistics/planned-margin.ts';
 import { sharedPresentationTest } from '../statistics/shared-presentation-test.ts';
 import { exactTwoSidedEven, twoSidedCriticalCount } from '../statistics/two-sided-even.ts';
 import { favoured, listenerPreferences, shareInterval } from './listener-preferences.ts';
 import { hasOwnDraws, requireDistinct } from './own-draws.ts';
 import type { ListenerPreference, PreferenceResult } from './preference-result.ts';
-import { type PreferenceTrial, preferenceSharedTrials } from './preference-trials.ts';
+import { type PreferenceTrial, preferenceSharedTrials, preferredCable } from './preference-trials.ts';
+import { panelLimits } from './rate-limits.ts';
 import { recordDecimal, recordDecimalOfFraction } from './record-decimal.ts';
+import { type AnswerCourse, coursesOf, sessionChecks } from './session-checks.ts';
 
 export interface PreferenceData {
   /** The registered two-sided level as a decimal, strictly between 0 and 1: "0.05". */
@@ -17,6 +20,8 @@ export interface PreferenceData {
   readonly listenersPerSession: number;
   /** Whether "no preference" was among the answers. */
   readonly offersNoPreference: boolean;
+  /** The margin about one half that the protocol registers, as a decimal strictly between 0 and 1/2: "0.2". */
+  readonly margin?: string | undefined;
   /** All locked trials of all sessions, abandoned ones included. */
   readonly trials: readonly PreferenceTrial[];
 }
@@ -39,7 +44,7 @@ export interface PreferenceData {
  *   119-128, on answers without a preference
  */
 export function analysePreference(data: PreferenceData): PreferenceResult {
-  const { alpha, listenersPerSession, offersNoPreference, trials } = data;
+  const { alpha, listenersPerSession, offersNoPreference, margin, trials } = data;
   const level = parseDecimal(alpha);
   const alphaNumber = fractionToNumber(level);
   requireBetween('alpha', alphaNumber, 0, 1, 'open');
@@ -56,7 +61,7 @@ export function analysePreference(data: PreferenceData): PreferenceResult {
   const critical = isOwnDraws && decided > 0 ? twoSidedCriticalCount(decided, alphaNumber) : null;
   const isSignificant = compareFractions(test.pFraction, level) <= 0;
   const byListener = listenerPreferences(trials, level);
-  const ownInterval = isOwnDraws ? shareInterval(preferred, alphaNumber) : null;
+  const majorities = majoritiesOf(byListener, isSignificant ? favoured(preferred) : null, level);
 
   return {
     method: 'paired-preference',
@@ -90,9 +95,59 @@ export function analysePreference(data: PreferenceData): PreferenceResult {
     canReachAlpha: compareFractions(test.leastAttainable, level) <= 0,
     critical: critical && { count: critical.count, attainedSize: recordDecimal(critical.attainedSize) },
     byListener,
-    majorities: majoritiesOf(byListener, isSignificant ? favoured(preferred) : null, level),
-    estimates: ownInterval && { share: recordDecimal(test.matching / decided), interval: ownInterval },
+    majorities,
+    estimates: estimatesOf(trials, preferred, isOwnDraws, alphaNumber),
+    ...(margin === undefined ? {} : { margin: marginOf(margin, majorities) }),
+    checks: sessionChecks(placesOf(trials), ['first', 'second'], ['habit']),
   };
+}
+
+function estimatesOf(
+  trials: readonly PreferenceTrial[],
+  preferred: readonly [number, number],
+  isOwnDraws: boolean,
+  alpha: number,
+): PreferenceResult['estimates'] {
+  const decided = preferred[0] + preferred[1];
+  const interval = isOwnDraws ? shareInterval(preferred, alpha) : panelInterval(trials, 1 - alpha);
+  if (interval === null) return null;
+  return { basis: isOwnDraws ? 'own draws' : 'trials', share: recordDecimal(preferred[0] / decided), interval };
+}
+
+/** Trials are counted, for the panel heard the same; answers without a preference are left out as in the test. */
+function panelInterval(trials: readonly PreferenceTrial[], confidence: number): ListenerPreference['interval'] {
+  const limits = panelLimits(
+    trials.flatMap(({ session, trial, truth, answers }) =>
+      answers.flatMap(({ listener, choice }) => {
+        const cable = preferredCable(truth, choice);
+        return cable === null ? [] : [{ listener, trial: `${session}/${trial}`, counts: cable === 0 }];
+      }),
+    ),
+  );
+  if (limits === null) return null;
+  const { lower, upper } = limits.interval(confidence);
+  return { confidence: recordDecimal(confidence), lower: recordDecimal(lower), upper: recordDecimal(upper) };
+}
+
+/** People are counted, each by their own majority; those who are evenly split are left out, as in the sign test. */
+function marginOf(margin: string, { preferred }: PreferenceResult['majorities']): PreferenceResult['margin'] {
+  const share = fractionToNumber(parseDecimal(margin));
+  requireBetween('margin', share, 0, 0.5, 'open');
+  const people = preferred[0] + preferred[1];
+  const most = people === 0 ? null : equivalencePlan.critical(people, share);
+  const isWithin = most !== null && Math.max(...preferred) <= most.count;
+  return { share: recordDecimal(share), confidence: recordDecimal(marginConfidence), isWithin };
+}
+
+/** Which place each listener preferred, in order. Nothing is right here; only the habit is asked. */
+function placesOf(trials: readonly PreferenceTrial[]): AnswerCourse[] {
+  return coursesOf(
+    trials.map(({ truth, answers, ...trial }) => ({
+      ...trial,
+      right: truth,
+      answers: answers.map(({ listener, choice }) => ({ listener, choice: choice === 'none' ? null : choice })),
+    })),
+  );
 }
 
 /**

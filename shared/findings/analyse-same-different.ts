@@ -1,5 +1,4 @@
 import { assignmentTest } from '../statistics/assignment-test.ts';
-import { clopperPearson } from '../statistics/clopper-pearson.ts';
 import { parseDecimal } from '../statistics/decimal.ts';
 import { requireBetween, requireWhole } from '../statistics/domain.ts';
 import { compareFractions, type Fraction, fractionToNumber } from '../statistics/fraction.ts';
@@ -7,10 +6,12 @@ import { holm } from '../statistics/holm.ts';
 import { sameDifferentLimits, sameDifferentSensitivity } from '../statistics/same-different.ts';
 import { recordInterval } from './interval-with-missing.ts';
 import { hasOwnDraws, requireDistinct } from './own-draws.ts';
+import { ownDrawLimits, panelLimits, type RateLimits } from './rate-limits.ts';
 import { recordDecimal, recordDecimalOfFraction, recordLimit } from './record-decimal.ts';
 import { suspectTail } from './result-frame.ts';
 import type { SameDifferentListener, SameDifferentResult } from './same-different-result.ts';
 import { type AnswersOn, answersOn, assignedTrials, type SameDifferentTrial } from './same-different-trials.ts';
+import { coursesOf, type SessionCheck, sessionChecks } from './session-checks.ts';
 
 export interface SameDifferentData {
   /** The registered one-sided level as a decimal, strictly between 0 and 1: "0.05". */
@@ -82,7 +83,8 @@ export function analyseSameDifferent({ alpha, listenersPerSession, trials }: Sam
     canReachAlpha: compareFractions(test.leastAttainable, level) <= 0,
     critical: isOwnDraws ? criticalOf(test, level) : null,
     byListener,
-    estimates: isOwnDraws && onDifferent.answers > 0 && onSame.answers > 0 ? estimatesOf(onDifferent, onSame) : null,
+    estimates: estimatesOf(trials, isOwnDraws),
+    checks: checksOf(trials),
   };
 }
 
@@ -102,36 +104,47 @@ function criticalOf(
   return found;
 }
 
-/** A rate as wrong as missing answers make it for the claim, and limits that hold whatever they would have been. */
-function hitsOf({ different, missing, answers }: AnswersOn) {
-  return { count: different, missing, trials: answers };
-}
-
 /** False alarms count missing answers in; their upper limit is the one that stands against a claim. */
 function rateInterval({ different, missing, answers }: AnswersOn) {
   if (answers === 0) return null;
-  return recordInterval({
-    lower: clopperPearson(different, answers, confidence).lower,
-    upper: clopperPearson(different + missing, answers, confidence).upper,
-  });
+  return recordInterval(ownDrawLimits({ counted: different, missing, due: answers }).interval(confidence));
 }
 
-function estimatesOf(onDifferent: AnswersOn, onSame: AnswersOn): SameDifferentResult['estimates'] {
-  const hitInterval = rateInterval(onDifferent);
-  const falseAlarmInterval = rateInterval(onSame);
-  if (hitInterval === null || falseAlarmInterval === null) return null;
-  const hitRate = onDifferent.different / onDifferent.answers;
-  const falseAlarmRate = (onSame.different + onSame.missing) / onSame.answers;
+/** Limits of the rate of "different" on trials of one kind: exact for own draws, over trials in a group. */
+function limitsOn(trials: readonly SameDifferentTrial[], isDifferent: boolean, isOwnDraws: boolean): RateLimits | null {
+  const { different, missing, answers } = answersOn(trials, isDifferent);
+  if (answers === 0) return null;
+  if (isOwnDraws) return ownDrawLimits({ counted: different, missing, due: answers });
+  return panelLimits(
+    trials
+      .filter((trial) => trial.isDifferent === isDifferent)
+      .flatMap(({ session, trial, answers: given }) =>
+        given.map(({ listener, choice }) => ({
+          listener,
+          trial: `${session}/${trial}`,
+          counts: choice === null ? null : choice === 'different',
+        })),
+      ),
+  );
+}
+
+function estimatesOf(trials: readonly SameDifferentTrial[], isOwnDraws: boolean): SameDifferentResult['estimates'] {
+  const hits = limitsOn(trials, true, isOwnDraws);
+  const falseAlarms = limitsOn(trials, false, isOwnDraws);
+  if (hits === null || falseAlarms === null) return null;
+  const [onDifferent, onSame] = [answersOn(trials, true), answersOn(trials, false)];
+  const falseAlarmCount = onSame.different + onSame.missing;
   const { dPrime, criterion } = sameDifferentSensitivity(
     { count: onDifferent.different, trials: onDifferent.answers },
-    { count: onSame.different + onSame.missing, trials: onSame.answers },
+    { count: falseAlarmCount, trials: onSame.answers },
   );
-  const { lower, upper } = sameDifferentLimits(hitsOf(onDifferent), hitsOf(onSame), confidence);
+  const { lower, upper } = sameDifferentLimits({ hits: hits.interval, falseAlarms: falseAlarms.interval }, confidence);
   return {
-    hitRate: recordDecimal(hitRate),
-    hitInterval,
-    falseAlarmRate: recordDecimal(falseAlarmRate),
-    falseAlarmInterval,
+    basis: isOwnDraws ? 'own draws' : 'trials',
+    hitRate: recordDecimal(onDifferent.different / onDifferent.answers),
+    hitInterval: recordInterval(hits.interval(confidence)),
+    falseAlarmRate: recordDecimal(falseAlarmCount / onSame.answers),
+    falseAlarmInterval: recordInterval(falseAlarms.interval(confidence)),
     dPrime: {
       dPrime: recordLimit(dPrime),
       lower: recordLimit(lower),
@@ -139,6 +152,14 @@ function estimatesOf(onDifferent: AnswersOn, onSame: AnswersOn): SameDifferentRe
       criterion: recordLimit(criterion),
     },
   };
+}
+
+/** What each listener answered, in order; which answer comes more often is the criterion, and no fault. */
+function checksOf(trials: readonly SameDifferentTrial[]): SessionCheck[] {
+  const courses = coursesOf(
+    trials.map(({ isDifferent, ...trial }) => ({ ...trial, right: isDifferent ? 'different' : 'same' })),
+  );
+  return sessionChecks(courses, ['same', 'different'], ['trend', 'runs']);
 }
 
 /** Each listener's own answers, which faced draws of their own; adjusted for all who had an answer due. */

@@ -62,8 +62,8 @@ export function courseModifiers(
   ];
 }
 
-export const scopeOf = ({ setting }: FindingContext): string =>
-  `It holds for these cables, these listeners, this programme and this system: ${setting}`;
+export const scopeOf = ({ setting }: FindingContext, listeners = 'these listeners'): string =>
+  `It holds for these cables, ${listeners}, this programme and this system: ${setting}`;
 
 /** Limits over several listeners' own draws are about these answers, not about people. */
 export function averageWords({ listeners }: Pick<ResultFrame, 'listeners'>): string {

@@ -13,6 +13,12 @@ export function percentOf(decimal: string | number, rounding: 'down' | 'up' | 'n
   return formatShare(Number(decimal), rounding).replace('%', '\u00a0%');
 }
 
-/** Why a group has no interval for its answers together. */
-export const noGroupInterval =
-  'No effect with an interval is given: answers to a shared presentation are not independent, and no interval for such a group is valid yet. Each listener’s own rate, with its interval, is below.';
+/** What an interval in a group counts, before the words on d′; nothing where every answer has a draw of its own. */
+export const basisWords = ({ basis }: { basis: 'own draws' | 'trials' }): string =>
+  basis === 'own draws'
+    ? ''
+    : 'The listeners heard the same presentations, so the interval counts trials and not answers (Student’s t over trials) and speaks of this panel alone. ';
+
+/** Why there is no interval for the answers together. */
+export const noInterval =
+  'No interval is given for the answers together: trials are counted, and they were too few or all came out alike. Each listener’s own rate, with its interval, is below.';

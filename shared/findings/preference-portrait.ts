@@ -1,8 +1,9 @@
 import type { CableNames } from '../methods/method.ts';
 import type { Portrait } from '../methods/portrait.ts';
 import { equationOfP, formatProbability } from './format-probability.ts';
-import { noGroupInterval, percentOf, testWords } from './portrait-words.ts';
+import { basisWords, noInterval, percentOf, testWords } from './portrait-words.ts';
 import type { ListenerPreference, PreferenceResult } from './preference-result.ts';
+import { portrayChecks } from './session-checks.ts';
 
 /** The cable that the figures are about: the favoured one, or the protocol's first at an even split. */
 const leadOf = ({ favours }: PreferenceResult): 0 | 1 => favours ?? 0;
@@ -17,12 +18,22 @@ const confidenceOf = (confidence: string) => `${Number((Number(confidence) * 100
 
 /** What the report of a paired preference shows: answers per cable, p with its test, an interval only where one is valid. */
 export function preferencePortrait(result: PreferenceResult, cables: CableNames): Portrait {
-  const { preferred, decided, critical, estimates } = result;
+  const { preferred, decided, critical, estimates, margin } = result;
   const lead = leadOf(result);
   return {
     figures: figuresOf(result, cables),
-    note: `${estimates ? '' : `${noGroupInterval} `}${orderWords(result)}`,
-    conditions: critical ? [{ label: 'Needed for one cable', value: `${critical.count} of ${decided}` }] : [],
+    note: `${estimates ? basisWords(estimates) : `${noInterval} `}${orderWords(result)}`,
+    conditions: [
+      ...(critical ? [{ label: 'Needed for one cable', value: `${critical.count} of ${decided}` }] : []),
+      ...(margin === undefined
+        ? []
+        : [
+            {
+              label: 'Margin, by people',
+              value: `50\u00a0% ± ${percentOf(margin.share)}: ${margin.isWithin ? 'within it' : 'not shown'}`,
+            },
+          ]),
+    ],
     distribution: {
       title: `Where ${preferred[lead]} falls if nobody prefers either`,
       lede: ledeOf(result, cables[lead]),
@@ -32,6 +43,7 @@ export function preferencePortrait(result: PreferenceResult, cables: CableNames)
       chanceOf: 'Chance without a preference',
     },
     listeners: listenersOf(result, cables),
+    checks: portrayChecks(result.checks),
   };
 }
 
@@ -78,7 +90,9 @@ function listenersOf(result: PreferenceResult, cables: CableNames): Portrait['li
   const hasTies = noPreference !== 'not offered';
   const shareOf = ({ preferred }: ListenerPreference) => preferred[lead] / (preferred[0] + preferred[1]);
   return {
-    lede: `One listener gives one answer per trial, so the binomial test is exact for each of them. Only somebody whose p still reaches the level after Holm’s adjustment for all listeners may be named. Intervals are Clopper-Pearson, ${confidence}, of the share of ${cables[lead]} among the answers that preferred one.`,
+    lede: [
+      `One listener gives one answer per trial, so the binomial test is exact for each of them. Only somebody whose p still reaches the level after Holm’s adjustment for all listeners may be named. Intervals are Clopper-Pearson, ${confidence}, of the share of ${cables[lead]} among the answers that preferred one.`,
+    ],
     columns: [
       `For ${cables[0]}`,
       `For ${cables[1]}`,

@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { count, decimal, interval, resultFrame } from './result-frame.ts';
+import { sessionCheck } from './session-checks.ts';
 
 // The two cables stand in the protocol's order everywhere: 0 is its first cable, 1 its second.
 
@@ -45,7 +46,13 @@ export const preferenceResult = z.strictObject({
   byListener: z.array(listenerPreference),
   /** Listeners by the cable that most of their own answers preferred, and the exact two-sided sign test over them. */
   majorities: z.strictObject({ preferred: perCable, even: count, p: decimal, holdsForPeople: z.boolean() }),
-  /** Where every answer has a draw of its own: the first cable's share of the answers that preferred one. */
-  estimates: z.strictObject({ share: decimal, interval }).nullable(),
+  /**
+   * The first cable's share of the answers that preferred one: Clopper-Pearson where every answer has a draw of its own, in
+   * a group Student's t over trials, for this panel alone.
+   */
+  estimates: z.strictObject({ basis: z.enum(['own draws', 'trials']), share: decimal, interval }).nullable(),
+  /** The registered margin about one half, and whether the listeners' majorities lie within it by two one-sided tests. */
+  margin: z.strictObject({ share: decimal, confidence: decimal, isWithin: z.boolean() }).optional(),
+  checks: z.array(sessionCheck),
 });
 export type PreferenceResult = z.output<typeof preferenceResult>;

@@ -1,9 +1,10 @@
 import type { Portrait } from '../methods/portrait.ts';
 import { equationOfP, formatProbability } from './format-probability.ts';
-import { noGroupInterval, testWords } from './portrait-words.ts';
+import { basisWords, noInterval, testWords } from './portrait-words.ts';
 import type { SameDifferentListener, SameDifferentResult } from './same-different-result.ts';
 import type { AnswersOn } from './same-different-trials.ts';
 import { sensitivityFace } from './same-different-words.ts';
+import { portrayChecks } from './session-checks.ts';
 
 /** What the report of same-different shows: hits and false alarms side by side, p with its test, d′ only where it is valid. */
 export function sameDifferentPortrait(result: SameDifferentResult): Portrait {
@@ -15,7 +16,7 @@ export function sameDifferentPortrait(result: SameDifferentResult): Portrait {
       { value: equationOfP(Number(p.value), Number(alpha)), label: `${testWords[test]}, one-sided` },
       ...(estimates ? [sensitivity(estimates)] : []),
     ],
-    note: estimates ? biasWords(estimates) : noGroupInterval,
+    note: estimates ? `${basisWords(estimates)}${biasWords(estimates)}` : noInterval,
     conditions: critical ? [{ label: 'Hits needed, with these answers', value: String(critical.count) }] : [],
     distribution: {
       title: `Where ${onDifferent.different} hits fall if nobody hears a difference`,
@@ -26,6 +27,7 @@ export function sameDifferentPortrait(result: SameDifferentResult): Portrait {
       chanceOf: 'Chance by guessing',
     },
     listeners: listenersOf(result),
+    checks: portrayChecks(result.checks),
   };
 }
 
@@ -61,7 +63,9 @@ const of = ({ different, answers }: AnswersOn) => (answers === 0 ? 'none due' : 
 /** Listeners side by side, and adjusted for how many of them there are. */
 function listenersOf({ byListener }: SameDifferentResult): Portrait['listeners'] {
   return {
-    lede: 'One listener gives one answer per trial, so Fisher’s exact test holds for each of them. Only somebody whose p still reaches the level after Holm’s adjustment for all listeners may be named. Intervals are Clopper-Pearson, 95 %.',
+    lede: [
+      'One listener gives one answer per trial, so Fisher’s exact test holds for each of them. Only somebody whose p still reaches the level after Holm’s adjustment for all listeners may be named. Intervals are Clopper-Pearson, 95 %.',
+    ],
     columns: ['Hits', 'False alarms', 'Missing', 'Exact p', 'p by Holm'].map((header) => ({ header, isFigure: true })),
     rows: byListener.map(({ listener, onDifferent, onSame, missing, p, holmP, isAboveGuessing }) => ({
       listener,

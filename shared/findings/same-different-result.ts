@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { limit } from './forced-choice-result.ts';
 import { count, decimal, interval, resultFrame } from './result-frame.ts';
+import { sessionCheck } from './session-checks.ts';
 
 /** Answers due on trials of one kind. */
 const answersOn = z.strictObject({ answers: count, different: count, same: count, missing: count });
@@ -40,9 +41,11 @@ export const sameDifferentResult = z.strictObject({
   lowerTail: decimal,
   isBelowGuessing: z.boolean(),
   byListener: z.array(sameDifferentListener),
-  /** Where every answer has a draw of its own and trials of both kinds came. */
+  /** Where trials of both kinds came; null where limits cannot be had. */
   estimates: z
     .strictObject({
+      /** Exact limits where every answer has a draw of its own; in a group Student's t over trials, for this panel alone. */
+      basis: z.enum(['own draws', 'trials']),
       hitRate: decimal,
       hitInterval: interval,
       falseAlarmRate: decimal,
@@ -51,5 +54,6 @@ export const sameDifferentResult = z.strictObject({
       dPrime: z.strictObject({ dPrime: limit, lower: limit, upper: limit, criterion: limit }),
     })
     .nullable(),
+  checks: z.array(sessionCheck),
 });
 export type SameDifferentResult = z.output<typeof sameDifferentResult>;

@@ -6,12 +6,13 @@ import { forcedChoicePortrait } from '../findings/forced-choice-portrait.ts';
 import type { ForcedChoiceResult } from '../findings/forced-choice-result.ts';
 import { forcedChoiceWords } from '../findings/forced-choice-words.ts';
 import { percentOf } from '../findings/portrait-words.ts';
+import { marginText } from '../protocol/registered-analysis.ts';
 import { oneSidedPlan } from '../statistics/planned-test.ts';
 import type { Method, ScoredAnswer, ScoredTrial, TrialWords } from './method.ts';
 
 type Scoring = Pick<
   Method<ForcedChoiceResult>,
-  'registered' | 'planned' | 'analyse' | 'nullDistribution' | 'finding' | 'plan' | 'portray'
+  'registered' | 'margin' | 'planned' | 'analyse' | 'nullDistribution' | 'finding' | 'plan' | 'portray'
 > & { readonly trials: Pick<TrialWords, 'isRight' | 'countHeader' | 'count'> };
 
 /** What a method says beside the words that all methods with one right answer share. */
@@ -36,10 +37,29 @@ export function forcedChoiceScoring({ question, rightOf, words, smallEffect }: A
   const rightIn = (answers: readonly ScoredAnswer[], truth: string) =>
     answers.filter(({ choice }) => choice !== null && isRight(choice, truth)).length;
   return {
-    registered: () => ({ name: `${question.method}/1`, alternative: 'greater', missing: 'counted as wrong' }),
+    registered: ({ marginPercent }) => ({
+      name: `${question.method}/1`,
+      alternative: 'greater',
+      ...(marginPercent === undefined
+        ? { missing: 'counted as wrong' }
+        : { missing: 'counted as wrong, as right against the margin', margin: marginText(marginPercent) }),
+    }),
+    margin: {
+      label: 'Share of answers above guessing, below',
+      mostPercent: 90,
+      shows: (percent) => `that fewer than ${percent}\u00a0% of answers are above guessing`,
+      counts: 'trials',
+    },
     planned: oneSidedPlan(chanceOf(question)),
-    analyse: ({ analysis: { alpha }, listenersPerSession, attribute }, trials) =>
-      analyseForcedChoice(question, { alpha, listenersPerSession, attribute, trials: trials.map(forcedChoiceTrial) }),
+    analyse: ({ analysis: { alpha, margin }, listenersPerSession, attribute, samplingFrame }, trials) =>
+      analyseForcedChoice(question, {
+        alpha,
+        listenersPerSession,
+        attribute,
+        margin,
+        samplingFrame,
+        trials: trials.map(forcedChoiceTrial),
+      }),
     nullDistribution: (trials) => forcedChoiceNullDistribution(question, trials.map(forcedChoiceTrial)),
     finding: (result, context) => differenceFinding(result, context, { ...forcedChoiceWords, ...words }),
     plan: {

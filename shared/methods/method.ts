@@ -24,6 +24,19 @@ export type MethodChoices = {
   readonly methodSettings?: readonly string[] | undefined;
   /** Of what one cable is asked to have more, where the method asks for an attribute. */
   readonly attribute?: string | undefined;
+  /** What a result that finds nothing must be able to exclude, in whole per cent. */
+  readonly marginPercent?: number | undefined;
+};
+
+/** What a study may register so that finding nothing can say something: how large an effect it then excludes. */
+export type MarginOffer = {
+  /** Of the field: "Above guessing, less than". */
+  readonly label: string;
+  readonly mostPercent: number;
+  /** What such a study can show: "that less than 20 % of answers are above guessing". */
+  shows(percent: number): string;
+  /** What is counted towards it. */
+  readonly counts: 'trials' | 'listeners';
 };
 
 /** Something about the method that a study fixes with a yes or a no; the protocol lists those that are on. */
@@ -97,6 +110,8 @@ export type Method<R extends ResultFrame = RegisteredResult> = {
     /** What the protocol's first cable is called where it is chosen and shown: the order is the direction. */
     readonly firstCable: string;
   } | null;
+  /** The margin that a study may register, or null where the method has no scale for one. */
+  readonly margin: MarginOffer | null;
 
   // How a trial is drawn and presented.
 
@@ -128,7 +143,7 @@ export type Method<R extends ResultFrame = RegisteredResult> = {
   /** The part of the registered analysis that the method fixes. */
   registered(
     choices: MethodChoices,
-  ): Pick<RegisteredAnalysis, 'name' | 'alternative' | 'missing' | 'undecided' | 'direction'>;
+  ): Pick<RegisteredAnalysis, 'name' | 'alternative' | 'missing' | 'undecided' | 'direction' | 'margin'>;
   /** The same test as the planner asks it, with one answer per trial. */
   readonly planned: PlannedTest;
   /** The registered analysis: a pure function of the sealed value and the counted trials. */
@@ -137,6 +152,7 @@ export type Method<R extends ResultFrame = RegisteredResult> = {
       readonly analysis: RegisteredAnalysis;
       readonly listenersPerSession: number;
       readonly attribute?: string | undefined;
+      readonly samplingFrame?: string | undefined;
     },
     trials: readonly ScoredTrial[],
   ): R;

@@ -5,6 +5,7 @@ import { preferenceNullDistribution } from '../findings/preference-null-distribu
 import { preferencePortrait } from '../findings/preference-portrait.ts';
 import type { PreferenceResult } from '../findings/preference-result.ts';
 import { type PreferenceChoice, preferredCable } from '../findings/preference-trials.ts';
+import { marginText } from '../protocol/registered-analysis.ts';
 import { twoSidedPlan } from '../statistics/planned-test.ts';
 import { fittedAtFirst, spokenPlace } from './familiarisation.ts';
 import type { AnswerOption, Method, MethodChoices, ScoredAnswer, ScoredTrial } from './method.ts';
@@ -75,12 +76,20 @@ export const pairedPreference: Method<PreferenceResult> = {
     alternative: 'two-sided',
     missing: 'left out',
     ...(offersNone(choices) ? { undecided: 'left out' } : {}),
+    ...(choices.marginPercent === undefined ? {} : { margin: marginText(choices.marginPercent) }),
   }),
+  margin: {
+    label: 'Share of people who prefer either, 50 % plus or minus',
+    mostPercent: 45,
+    shows: (percent) => `that between ${50 - percent}\u00a0% and ${50 + percent}\u00a0% of people prefer either cable`,
+    counts: 'listeners',
+  },
   planned: twoSidedPlan,
-  analyse: ({ analysis: { alpha, undecided }, listenersPerSession }, trials) =>
+  analyse: ({ analysis: { alpha, undecided, margin }, listenersPerSession }, trials) =>
     analysePreference({
       alpha,
       listenersPerSession,
+      margin,
       offersNoPreference: undecided !== undefined,
       trials: trials.map(pair),
     }),

@@ -1,3 +1,11 @@
+/** How one check of the answers' course came out. */
+export type PortrayedCheck = {
+  readonly name: string;
+  readonly tail: string;
+  readonly isFlagged: boolean;
+  readonly words: string;
+};
+
 /** What a report shows of a registered result, in its method's words: text, and numbers to draw. */
 export type Portrait = {
   /** The first leads. */
@@ -20,7 +28,7 @@ export type Portrait = {
     readonly chanceOf: string;
   };
   readonly listeners: {
-    readonly lede: string;
+    readonly lede: readonly string[];
     readonly columns: readonly { readonly header: string; readonly isFigure: boolean }[];
     readonly rows: readonly {
       readonly listener: string;
@@ -41,4 +49,5 @@ export type Portrait = {
       }[];
     };
   };
+  readonly checks: readonly PortrayedCheck[];
 };

@@ -19,7 +19,12 @@ export function runRegistered(
   const { name } = method.registered(design);
   if (analysis.name !== name) throw new RangeError(`the protocol registers ${analysis.name}; this version has ${name}`);
   return method.analyse(
-    { analysis, listenersPerSession: design.listenersPerSession, attribute: design.attribute },
+    {
+      analysis,
+      listenersPerSession: design.listenersPerSession,
+      attribute: design.attribute,
+      samplingFrame: design.samplingFrame,
+    },
     countedTrials(method, states, key, held),
   );
 }

@@ -59,6 +59,7 @@ export const sameDifferent: Method<SameDifferentResult> = {
   options: () => [answer('same', '=', 'They were the same'), answer('different', '≠', 'They were different')],
 
   registered: () => ({ name: 'same-different/1', alternative: 'greater', missing: 'counted as wrong' }),
+  margin: null,
   planned: sameDifferentPlan,
   analyse: ({ analysis: { alpha }, listenersPerSession }, trials) =>
     analyseSameDifferent({ alpha, listenersPerSession, trials: trials.map(pairTrial) }),

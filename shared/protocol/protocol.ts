@@ -39,6 +39,8 @@ export const protocol = z.strictObject({
     methodSettings: z.array(z.string()).optional(),
     /** Of what one cable is asked to have more; left out where the method asks for none. */
     attribute: z.string().optional(),
+    /** Whom the listeners are a sample of; left out where nothing is to be said about people in general. */
+    samplingFrame: z.string().optional(),
     codeHolder: z.uuid(),
   }),
   conduct: z.strictObject({
@@ -90,6 +92,9 @@ export function protocolFromDraft(
       spares: draft.spares,
       confidence: draft.confidence,
       ...chosenOf(draft),
+      ...(draft.samplingFrame === undefined || draft.samplingFrame === ''
+        ? {}
+        : { samplingFrame: draft.samplingFrame }),
       codeHolder: draft.codeHolderId,
     },
     conduct: {

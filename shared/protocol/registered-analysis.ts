@@ -7,12 +7,20 @@ export const registeredAnalysis = z.strictObject({
   /** Significance level as decimal text. */
   alpha: z.string(),
   alternative: z.enum(['greater', 'two-sided']),
-  missing: z.enum(['counted as wrong', 'left out']),
+  /** Against a margin silence counts as right: either way it stands against whoever would gain by it. */
+  missing: z.enum(['counted as wrong', 'counted as wrong, as right against the margin', 'left out']),
   /** Answers that state no preference; there only where the study offers that answer. */
   undecided: z.literal('left out').optional(),
   /** Which cable is expected to have more of the attribute; there only where the method asks for one. */
   direction: z.literal('more in the first cable').optional(),
+  /** As decimal text, by the method's scale: a result whose limit lies below it shows that an effect is small. */
+  margin: z.string().optional(),
   stopping: z.literal('fixed number of trials'),
   exclusions: z.literal('none'),
 });
 export type RegisteredAnalysis = z.output<typeof registeredAnalysis>;
+
+/** A margin as decimal text: 20 per cent is '0.2'. */
+export function marginText(percent: number): string {
+  return (percent / 100).toString();
+}

@@ -1,5 +1,6 @@
 import { type Chance, chanceAsFraction, chanceAsNumbers } from './chance.ts';
 import { type CriticalCount, criticalCount } from './critical-count.ts';
+import { equivalencePlan, type PlannedMargin, similarityPlan } from './planned-margin.ts';
 import { power } from './power.ts';
 import { type SampleSize, sampleSize } from './sample-size.ts';
 import { twoSidedCriticalCount, twoSidedPower, twoSidedSampleSize } from './two-sided-even.ts';
@@ -27,6 +28,8 @@ export interface PlannedTest {
   needed(alpha: number, rate: number): Pick<SampleSize, 'nFirst' | 'nSafe'>;
   /** The largest number of trials that `needed` looks at. */
   readonly searchedTo: number;
+  /** What a registered margin asks of the plan; null for a test that takes none. */
+  readonly margin: PlannedMargin | null;
 }
 
 /**
@@ -51,6 +54,7 @@ export function oneSidedPlan(chance: Chance): PlannedTest {
     leastPDenominator: (trials) => (denominator / numerator) ** BigInt(trials),
     needed: (alpha, rate) => sampleSize({ ...aim, chance, alpha, correctRate: rate }),
     searchedTo: aim.limit,
+    margin: similarityPlan(chance),
   };
 }
 
@@ -69,4 +73,5 @@ export const twoSidedPlan: PlannedTest = {
   leastPDenominator: (trials) => 2n ** BigInt(trials - 1),
   needed: (alpha, rate) => twoSidedSampleSize({ ...aim, alpha, rate }),
   searchedTo: aim.limit,
+  margin: equivalencePlan,
 };

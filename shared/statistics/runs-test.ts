@@ -35,9 +35,11 @@ export function runsTest(right: number, wrong: number, runs: number): RunsTest {
   const fewest = right === 0 || wrong === 0 ? 1 : 2;
   const most = 2 * Math.min(right, wrong) + (right === wrong ? 0 : 1);
   requireWhole('runs', runs, fewest, most);
+  const ofRight = pieces(right);
+  const ofWrong = pieces(wrong);
   const share = (from: number, to: number) => {
     let numerator = 0n;
-    for (let count = from; count <= to; count++) numerator += arrangements(right, wrong, count);
+    for (let count = from; count <= to; count++) numerator += arrangements(ofRight, ofWrong, count);
     return fractionToNumber({ numerator, denominator: binomialCoefficient(all, right) });
   };
   const pFew = share(fewest, runs);
@@ -52,11 +54,19 @@ export function runsTest(right: number, wrong: number, runs: number): RunsTest {
   };
 }
 
-/** In how many orders the answers fall into exactly so many runs. */
-function arrangements(right: number, wrong: number, runs: number): bigint {
-  if (right === 0 || wrong === 0) return runs === 1 ? 1n : 0n;
-  const pieces = (answers: number, parts: number) => binomialCoefficient(answers - 1, parts - 1);
+/** In how many ways so many answers of a kind fall into 0, 1, 2 ... unbroken parts, none of them empty. */
+function pieces(answers: number): bigint[] {
+  if (answers === 0) return [1n];
+  const ways = [0n, 1n];
+  for (let parts = 2; parts <= answers; parts++)
+    ways.push(((ways[parts - 1] ?? 0n) * BigInt(answers - parts + 1)) / BigInt(parts - 1));
+  return ways;
+}
+
+/** In how many orders the answers fall into exactly so many runs: the kinds take turns, and either may begin. */
+function arrangements(ofRight: readonly bigint[], ofWrong: readonly bigint[], runs: number): bigint {
+  const both = (right: number, wrong: number) => (ofRight[right] ?? 0n) * (ofWrong[wrong] ?? 0n);
   const half = Math.floor(runs / 2);
-  if (runs % 2 === 0) return 2n * pieces(right, half) * pieces(wrong, half);
-  return pieces(right, half + 1) * pieces(wrong, half) + pieces(right, half) * pieces(wrong, half + 1);
+  if (runs % 2 === 0) return 2n * both(half, half);
+  return both(half + 1, half) + both(half, half + 1);
 }

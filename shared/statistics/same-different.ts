@@ -1,5 +1,5 @@
 import { mostTrials } from './binomial-log-probability.ts';
-import { clopperPearson, type Interval } from './clopper-pearson.ts';
+import type { Interval } from './clopper-pearson.ts';
 import { requireBetween, requireWhole } from './domain.ts';
 import { normalQuantile } from './normal-quantile.ts';
 import { normalUpperTail } from './normal-tail.ts';
@@ -70,36 +70,26 @@ function dPrimeOf(hitRate: number, falseAlarmRate: number): number {
   }
 }
 
-type RatedWithMissing = Rated & { readonly missing: number };
-
 /**
- * Limits of d′ from exact limits of both rates: each rate has half of what may be missed, so that together they hold with
- * the confidence at least. d′ rises with hits and falls with false alarms, so that the corners give its ends.
+ * Limits of d′ from limits of both rates: each rate has half of what may be missed, so that together they hold with the
+ * confidence at least. d′ rises with hits and falls with false alarms, so that the corners give its ends.
  *
- * @param hits        answers "different" on different trials, and how many of those due are missing: these count against
- *   whatever a limit could be used to claim
- * @param falseAlarms the same on same trials
- * @param confidence  strictly between 0 and 1, at least
+ * @param limitsOf   limits of one of the rates at a confidence: exact ones where draws are each answer's own
+ * @param confidence strictly between 0 and 1, at least
  * @returns limits from 0 to Infinity
- * @throws RangeError when a count or the confidence is outside its domain
+ * @throws RangeError when the confidence is outside its domain
  * @example 11 of 20 hits and 5 of 20 false alarms at 0.95: 0 ... 3.69 (rates 0.288 ... 0.793 and 0.073 ... 0.523)
- * @see Clopper & Pearson, Biometrika 26 (1934), 404-413; Bonferroni's inequality for the two rates
+ * @see Bonferroni's inequality for the two rates
  */
 export function sameDifferentLimits(
-  hits: RatedWithMissing,
-  falseAlarms: RatedWithMissing,
+  limitsOf: { readonly hits: (each: number) => Interval; readonly falseAlarms: (each: number) => Interval },
   confidence: number,
 ): Interval {
   requireBetween('confidence', confidence, 0, 1, 'open');
   const each = (1 + confidence) / 2;
-  const hitLower = clopperPearson(hits.count, hits.trials, each).lower;
-  const hitUpper = clopperPearson(hits.count + hits.missing, hits.trials, each).upper;
-  const falseLower = clopperPearson(falseAlarms.count, falseAlarms.trials, each).lower;
-  const falseUpper = clopperPearson(falseAlarms.count + falseAlarms.missing, falseAlarms.trials, each).upper;
-  return {
-    lower: dPrimeOf(hitLower, falseUpper),
-    upper: dPrimeOf(hitUpper, falseLower),
-  };
+  const hits = limitsOf.hits(each);
+  const falseAlarms = limitsOf.falseAlarms(each);
+  return { lower: dPrimeOf(hits.lower, falseAlarms.upper), upper: dPrimeOf(hits.upper, falseAlarms.lower) };
 }
 
 /** Shares of all outcomes smaller than this are left out of a power: together they lie far below what is shown. */
@@ -208,4 +198,5 @@ export const sameDifferentPlan: PlannedTest = {
   },
   needed: trialsNeeded,
   searchedTo,
+  margin: null,
 };

@@ -10,10 +10,14 @@ export interface SharedAnswer {
   readonly isRight: boolean;
 }
 
-export interface ClusteredRate {
+/** A rate whose answers come in clusters, and how far it may be off. */
+export interface ClusterError {
   readonly rate: number;
   readonly standardError: number;
   readonly degreesOfFreedom: number;
+}
+
+export interface ClusteredRate extends ClusterError {
   /** Student's t about the rate, cut to 0 ... 1; null where nothing varies and no interval can be had from it. */
   readonly interval: Interval | null;
 }
@@ -31,9 +35,14 @@ export interface ClusteredRate {
  * @see Cochran, Sampling Techniques, 3rd ed. (1977), sec. 3.12
  */
 export function trialClusterInterval(answers: readonly SharedAnswer[], confidence: number): ClusteredRate {
-  const rate = rateOf(answers, confidence);
+  return withInterval(trialClusterError(answers), confidence);
+}
+
+/** The same before any confidence is chosen. */
+export function trialClusterError(answers: readonly SharedAnswer[]): ClusterError {
+  const rate = rateOf(answers);
   const residuals = residualsBy(answers, rate, ({ trial }) => trial);
-  return clustered(rate, clusterVariance(residuals, answers.length), residuals.length - 1, confidence);
+  return errorOf(rate, clusterVariance(residuals, answers.length), residuals.length - 1);
 }
 
 /**
@@ -51,7 +60,12 @@ export function trialClusterInterval(answers: readonly SharedAnswer[], confidenc
  *   (2011), 238-249
  */
 export function twoWayClusterInterval(answers: readonly SharedAnswer[], confidence: number): ClusteredRate {
-  const rate = rateOf(answers, confidence);
+  return withInterval(twoWayClusterError(answers), confidence);
+}
+
+/** The same before any confidence is chosen. */
+export function twoWayClusterError(answers: readonly SharedAnswer[]): ClusterError {
+  const rate = rateOf(answers);
   const byListener = residualsBy(answers, rate, ({ listener }) => listener);
   const byTrial = residualsBy(answers, rate, ({ trial }) => trial);
   const byAnswer = answers.map(({ isRight }) => (isRight ? 1 : 0) - rate);
@@ -59,14 +73,17 @@ export function twoWayClusterInterval(answers: readonly SharedAnswer[], confiden
     clusterVariance(residuals, answers.length),
   ) as [number, number, number];
   const variance = Math.max(listeners + trials - cells, listeners, trials);
-  return clustered(rate, variance, Math.min(byListener.length, byTrial.length) - 1, confidence);
+  return errorOf(rate, variance, Math.min(byListener.length, byTrial.length) - 1);
 }
 
-function rateOf(answers: readonly SharedAnswer[], confidence: number): number {
-  requireBetween('confidence', confidence, 0, 1 - 2e-12, 'open');
+function rateOf(answers: readonly SharedAnswer[]): number {
   requireWhole('number of answers', answers.length, 2, 1_000_000);
-  const cells = new Set(answers.map(({ listener, trial }) => JSON.stringify([listener, trial])));
-  if (cells.size < answers.length) throw new RangeError('a listener answers a trial once');
+  const cells = new Map<string, Set<string>>();
+  for (const { trial, listener } of answers) {
+    const seen = cells.get(trial) ?? new Set();
+    if (seen.has(listener)) throw new RangeError('a listener answers a trial once');
+    cells.set(trial, seen.add(listener));
+  }
   return answers.filter(({ isRight }) => isRight).length / answers.length;
 }
 
@@ -83,9 +100,26 @@ function residualsBy(
   return [...residuals.values()];
 }
 
-function clustered(rate: number, variance: number, degreesOfFreedom: number, confidence: number): ClusteredRate {
-  const standardError = Math.sqrt(variance);
-  const reach = studentTQuantile((1 - confidence) / 2, degreesOfFreedom) * standardError;
-  const interval = { lower: Math.max(0, rate - reach), upper: Math.min(1, rate + reach) };
-  return { rate, standardError, degreesOfFreedom, interval: variance === 0 ? null : interval };
+function errorOf(rate: number, variance: number, degreesOfFreedom: number): ClusterError {
+  return { rate, standardError: Math.sqrt(variance), degreesOfFreedom };
 }
+
+/**
+ * Student's t about a clustered rate.
+ *
+ * @param confidence from 0 to 1 - 2e-12, both excluded, for both sides together
+ * @returns the interval cut to 0 ... 1; null where nothing varies
+ * @throws RangeError when the confidence is outside its domain
+ */
+export function intervalAbout(error: ClusterError, confidence: number): Interval | null {
+  requireBetween('confidence', confidence, 0, 1 - 2e-12, 'open');
+  const { rate, standardError, degreesOfFreedom } = error;
+  if (standardError === 0) return null;
+  const reach = studentTQuantile((1 - confidence) / 2, degreesOfFreedom) * standardError;
+  return { lower: Math.max(0, rate - reach), upper: Math.min(1, rate + reach) };
+}
+
+const withInterval = (error: ClusterError, confidence: number): ClusteredRate => ({
+  ...error,
+  interval: intervalAbout(error, confidence),
+});

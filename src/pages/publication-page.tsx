@@ -7,6 +7,7 @@ import { publicationQueries } from '../features/publications/publications.querie
 import { Statements } from '../features/publications/statements.tsx';
 import { VerificationSection } from '../features/publications/verification-section.tsx';
 import { FindingHead } from '../features/reports/finding-head.tsx';
+import { ReportChecks } from '../features/reports/report-checks.tsx';
 import { ReportConditions } from '../features/reports/report-conditions.tsx';
 import { ReportDistribution } from '../features/reports/report-distribution.tsx';
 import { ReportFigures } from '../features/reports/report-figures.tsx';
@@ -56,6 +57,7 @@ export function Component() {
       <Statements publication={publication} />
       <ReportDistribution nullDistribution={report.nullDistribution} distribution={portrait.distribution} />
       <ReportListeners listeners={portrait.listeners} />
+      <ReportChecks checks={portrait.checks} />
       <ReportFlow flow={report.flow} missingWords={report.result.missingAnswers} />
       <ReportIncidents
         voids={report.voids}

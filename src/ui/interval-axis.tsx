@@ -1,3 +1,4 @@
+import { classNames } from './class-names.ts';
 import { niceTicks } from './nice-ticks.ts';
 
 type IntervalAxisProps = {
@@ -9,15 +10,20 @@ type IntervalAxisProps = {
 };
 
 export function IntervalAxis({ from, to, shareOf, quantity, format }: IntervalAxisProps) {
+  const ticks = niceTicks(from, to, 6);
   return (
     <tr className="text-soft">
       <td />
       <td className="px-3">
         <div className="relative h-8 border-t border-ink font-mono">
-          {niceTicks(from, to, 6).map((tick) => (
+          {ticks.map((tick, index) => (
             <span
               key={tick}
-              className="absolute top-1 -translate-x-1/2 whitespace-nowrap"
+              className={classNames(
+                'absolute top-1 -translate-x-1/2 whitespace-nowrap',
+                // A phone has room for the ends alone.
+                index > 0 && index < ticks.length - 1 && 'max-sm:hidden',
+              )}
               style={{ left: `${shareOf(tick) * 100}%` }}
             >
               {format(tick)}

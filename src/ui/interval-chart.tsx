@@ -13,8 +13,8 @@ type IntervalChartProps = {
   quantity: string;
   /** The ends of the axis; from 0 to the highest end of an interval if left out. */
   domain?: readonly [number, number];
-  /** How a value is written; as it is if left out. */
-  format?: (value: number) => string;
+  /** How a value is written, a limit so that it claims less; as it is if left out. */
+  format?: (value: number, rounding?: 'down' | 'up') => string;
 };
 
 /** Rows side by side: a point with its interval and the line of what comes of nothing. It is a table, so it reads as one. */
@@ -25,7 +25,7 @@ export function IntervalChart({
   middle,
   quantity,
   domain,
-  format = String,
+  format = (value) => String(value),
 }: IntervalChartProps) {
   const [from, to] = domain ?? [0, Math.max(middle?.value ?? 0, ...rows.map((row) => row.high))];
   const shareOf = (value: number) => (Math.min(Math.max(value, from), to) - from) / (to - from || 1);

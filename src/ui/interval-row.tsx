@@ -6,7 +6,7 @@ type IntervalRowProps = {
   shareOf: (value: number) => number;
   /** Where the line of what comes of nothing lies, 0 to 1; null for none. */
   middleShare: number | null;
-  format: (value: number) => string;
+  format: (value: number, rounding?: 'down' | 'up') => string;
 };
 
 export function IntervalRow({ entry, shareOf, middleShare, format }: IntervalRowProps) {
@@ -40,7 +40,7 @@ export function IntervalRow({ entry, shareOf, middleShare, format }: IntervalRow
       </td>
       <td className="pl-4 text-right font-mono font-semibold whitespace-nowrap">{format(entry.value)}</td>
       <td className="max-md:sr-only md:pl-6 md:text-right md:font-mono md:whitespace-nowrap md:text-soft">
-        {format(entry.low)} to {format(entry.high)}
+        {format(entry.low, 'down')} to {format(entry.high, 'up')}
       </td>
     </tr>
   );

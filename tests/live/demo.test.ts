@@ -49,7 +49,7 @@ describe('the demo', () => {
       return (await getReport(deps, { organisationId: study.organisation_id, id: study.id })).result;
     };
     expect(await resultOf('Study Curlew')).toMatchObject({ isSignificant: true });
-    expect(await resultOf('Study Dotterel')).toMatchObject({ isSignificant: false });
+    expect(await resultOf('Study Dotterel')).toMatchObject({ isSignificant: false, margin: { isBelow: true } });
     const planned = await deps.db.query(
       "select count(*) as count from sessions join studies on studies.id = sessions.study_id where sessions.phase = 'planned' and studies.state = 'collecting'",
     );

@@ -140,8 +140,8 @@ describe('a paired preference from plan to report', () => {
       missing: 1,
       undecided: 4,
       decided: r.decided,
-      estimates: null,
     });
+    expect(result.estimates?.basis).toBe('trials');
     expect(result.preferred).toEqual([r.preferred, r.decided - r.preferred]);
     close(result.p.value, r.p);
     for (const [index, own] of result.byListener.entries()) {

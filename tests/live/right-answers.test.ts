@@ -75,7 +75,8 @@ const methods: Asked[] = [
 function fromR({ labels, right, rules }: Asked, trials: readonly Heard[], firstCode: string) {
   const rows = trials.map(({ codes, choices }) => {
     const counts = labels.map((label) => choices.filter((choice) => choice === label).length);
-    return `list(n = c(${counts.join()}), right = ${labels.indexOf(right(codes, firstCode)) + 1})`;
+    const missing = choices.filter((choice) => choice === null).length;
+    return `list(n = c(${counts.join()}), right = ${labels.indexOf(right(codes, firstCode)) + 1}, missing = ${missing})`;
   });
   const seats = trials[0]?.choices.length ?? 0;
   const own = Array.from({ length: seats }, (_, seat) => {
@@ -99,12 +100,17 @@ function fromR({ labels, right, rules }: Asked, trials: readonly Heard[], firstC
       uniroot(function(d) rate(d) - pc, c(0, 12), tol = 1e-12)$root
     rules <- list(${Object.values(rules).join(',')})
     d <- unlist(lapply(rules, function(rate) sapply(c(observed / answers, limits), function(pc) inverse(rate, pc))))
-    cat(sprintf("%.15g", c(observed, p, whole, limits, own, p.adjust(own, "holm"), d)))
+    n <- length(trials)
+    over <- function(of) { rate <- sum(of) / answers; spread <- sqrt(n / (n - 1) * sum((of - rate * answers / n)^2)) / answers
+      rate + c(-1, 1) * qt(.975, n - 1) * spread }
+    fit <- sapply(trials, function(t) t$n[t$right]); gone <- sapply(trials, function(t) t$missing)
+    panel <- c(max(0, over(fit)[1]), min(1, over(fit + gone)[2]))
+    cat(sprintf("%.15g", c(observed, p, whole, limits, panel, own, p.adjust(own, "holm"), d)))
   `;
   const values = execFileSync('Rscript', ['-e', script], { encoding: 'utf8' }).trim().split(' ').map(Number);
-  const [correct = Number.NaN, p = Number.NaN, binomialP = Number.NaN, lower, upper, ...rest] = values;
+  const [correct = Number.NaN, p = Number.NaN, binomialP = Number.NaN, lower, upper, low, high, ...rest] = values;
   return {
-    ...{ correct, p, binomialP, lower, upper },
+    ...{ correct, p, binomialP, lower, upper, panel: [low, high] },
     own: rest.slice(0, seats),
     holm: rest.slice(seats, 2 * seats),
     dPrime: rest.slice(2 * seats),
@@ -185,9 +191,11 @@ describe.each(methods.map((asked) => [asked.study.method, asked] as const))('%s 
       answers: 24,
       missing: 1,
       correct: r.correct,
-      estimates: null,
+      estimates: { basis: 'trials' },
     });
     close(result.p.value, r.p);
+    close(result.estimates?.interval.lower, r.panel[0]);
+    close(result.estimates?.interval.upper, r.panel[1]);
     for (const [index, own] of result.byListener.entries()) {
       close(own.p, r.own[index]);
       close(own.holmP, r.holm[index]);

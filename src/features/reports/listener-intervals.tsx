@@ -1,3 +1,4 @@
+import { percentOf } from '#shared/findings/portrait-words.ts';
 import type { Portrait } from '#shared/methods/portrait.ts';
 import { IntervalChart } from '../../ui/interval-chart.tsx';
 
@@ -14,7 +15,7 @@ export function ListenerIntervals({ chart }: ListenerIntervalsProps) {
       middle={middle}
       quantity={quantity}
       domain={[0, 1]}
-      format={(share) => `${Math.round(share * 100)} %`}
+      format={percentOf}
     />
   );
 }

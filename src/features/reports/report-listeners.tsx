@@ -37,7 +37,7 @@ type ReportListenersProps = { listeners: Listeners };
 export function ReportListeners({ listeners }: ReportListenersProps) {
   const { lede, rows, chart } = listeners;
   return (
-    <ReportSection title="By listener" lede={lede}>
+    <ReportSection title="By listener" lede={lede.map((words) => <p key={words}>{words}</p>)}>
       {chart.rows.length > 0 ? <ListenerIntervals chart={chart} /> : null}
       <DataTable
         caption="Results by listener"

@@ -3,6 +3,7 @@ import type { Report } from '#shared/contracts/reports.ts';
 import { methodOf } from '#shared/methods/methods.ts';
 import { Button } from '../../ui/button.tsx';
 import { FindingHead } from './finding-head.tsx';
+import { ReportChecks } from './report-checks.tsx';
 import { ReportConditions } from './report-conditions.tsx';
 import { ReportDistribution } from './report-distribution.tsx';
 import { ReportFigures } from './report-figures.tsx';
@@ -45,6 +46,7 @@ export function ReportView({ report, back, actions, proofs }: ReportViewProps) {
       </div>
       <ReportDistribution nullDistribution={report.nullDistribution} distribution={portrait.distribution} />
       <ReportListeners listeners={portrait.listeners} />
+      <ReportChecks checks={portrait.checks} />
       <ReportFlow flow={report.flow} missingWords={result.missingAnswers} />
       <ReportIncidents
         voids={report.voids}

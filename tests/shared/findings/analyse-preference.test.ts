@@ -164,12 +164,24 @@ describe('the registered analysis of a paired preference', () => {
     expect(panel(9, 1, 4).majorities.holdsForPeople).toBe(false);
   });
 
-  it('gives an interval only where every answer has a draw of its own [F4]', () => {
+  it('gives an interval by answers with draws of their own, and by trials in a group [F4]', () => {
     const own = analyse(study([{ truth: 'first', choices: ['first'] }]));
     const shared = analyse(study([{ truth: 'first', choices: ['first', 'first'] }]));
     expect([own.test, shared.test]).toEqual(['exact-binomial', 'shared-presentations']);
-    expect(own.estimates).not.toBeNull();
+    expect(own.estimates?.basis).toBe('own draws');
     expect(shared.estimates).toBeNull();
+    // R: trials of two answers each, for the first cable 2, 2, 1, 0: .625 +- qt(.975, 3) * sqrt(4/3 * 2.75) / 8
+    const panel = analyse(
+      study([
+        { truth: 'first', choices: ['first', 'first'] },
+        { truth: 'second', choices: ['second', 'second'] },
+        { truth: 'first', choices: ['first', 'second'] },
+        { truth: 'second', choices: ['first', 'first'] },
+      ]),
+    );
+    expect(panel.estimates).toMatchObject({ basis: 'trials', share: '0.625000000000' });
+    expectClose(Number(panel.estimates?.interval.lower), 0, 1e-10, 1, 'lower');
+    expectClose(Number(panel.estimates?.interval.upper), 1, 1e-10, 1, 'upper');
     expect(analyse(study([{ truth: 'first', choices: ['none'] }])).estimates).toBeNull();
   });
 

@@ -60,12 +60,14 @@ describe('what stands beside a headline', () => {
     expect(words(open)).toContain('It could have found a listener who is right 81% of the time, with 80% power.');
   });
 
-  it('gives no limit where scores were low, and none for a group [T24]', () => {
+  it('gives no limit where scores were low, and counts trials in a group [T24]', () => {
     expect(words(found(together(60, [22])))).toContain('Scores were lower than guessing usually gives.');
+    // R: 2 * (1/2 + qt(.95, 15) * sqrt(16/15 * 16 * 1) / 32) - 1 = 0.4527
     expect(words(found(together(16, [8, 8])))).toContain(
-      'No upper limit for the above-chance rate is valid for a group',
+      'An above-chance rate up to 46% is not excluded (one-sided 95% limit; counted by trials, which the listeners shared).',
     );
-    expect(words(found(together(16, [14, 14])))).toContain('no rate is stated for their answers together');
+    expect(words(found(together(16, [14, 14])))).toContain('counted by trials, which the listeners shared');
+    expect(words(found(together(16, [16, 16])))).toContain('they were too few or all came out alike');
   });
 
   it('speaks of the panel’s average and not of people where several came one at a time [T24]', () => {

@@ -1,9 +1,11 @@
+import { readFileSync } from 'node:fs';
 import { describe, expect, it } from 'vitest';
 import { analyseForcedChoice } from '#shared/findings/analyse-forced-choice.ts';
-import { anyDifference, differenceFinding } from '#shared/findings/difference-finding.ts';
+import { anyDifference, differenceFinding, differenceRows } from '#shared/findings/difference-finding.ts';
 import type { FindingContext } from '#shared/findings/finding.ts';
 import type { ForcedChoiceResult } from '#shared/findings/forced-choice-result.ts';
 import { forcedChoiceWords } from '#shared/findings/forced-choice-words.ts';
+import { preferenceRows } from '#shared/findings/preference-finding.ts';
 import { abxQuestion } from '#shared/methods/abx.ts';
 
 const context: FindingContext = {
@@ -17,9 +19,11 @@ const abxFinding = (result: ForcedChoiceResult, about: FindingContext) =>
   differenceFinding(result, about, { ...forcedChoiceWords, ...anyDifference });
 
 /** A study in which each of some listeners is right in the first `right` trials; the last `silent` of them are missing. */
-function study(listeners: number, trials: number, right: number, silent = 0) {
+function study(listeners: number, trials: number, right: number, silent = 0, margin?: string, samplingFrame?: string) {
   return analyseForcedChoice(abxQuestion, {
     alpha: '0.05',
+    margin,
+    samplingFrame,
     listenersPerSession: listeners,
     trials: Array.from({ length: trials }, (_, index) => {
       const truth = index % 3 === 0 ? ('A' as const) : ('B' as const);
@@ -65,6 +69,38 @@ describe('the finding', () => {
                 expect(found.maySay === null).toBe(found.row === '0' || found.row === '1');
               }
     expect([...rows].sort()).toEqual(['0', '1', '2', '5']);
+  });
+
+  it('comes from its table: every result to one row, and every row by some result [T41] [T8]', () => {
+    const rows = new Set<string>();
+    for (const [listeners, trials, step] of [
+      [1, 5, 1],
+      [1, 16, 1],
+      [1, 100, 3],
+      [1, 400, 20],
+      [3, 16, 1],
+      [7, 24, 2],
+    ] as const)
+      for (let right = 0; right <= trials; right += step)
+        for (const margin of [undefined, '0.2', '0.6'])
+          for (const samplingFrame of listeners < 6 ? [undefined] : [undefined, 'readers of a magazine'])
+            for (const silent of [0, 3]) {
+              const result = study(listeners, trials, right, silent, margin, samplingFrame);
+              const { row, ...found } = abxFinding(result, context);
+              rows.add(row);
+              expect([row === '3' || row === '4', margin === undefined].every(Boolean)).toBe(false);
+              expect(row === '2' || row === '3').toBe(result.isSignificant && !result.isBelowGuessing);
+              expect(row === '1').toBe(result.isBelowGuessing);
+              expect(row === '3' || row === '4').toBe(result.margin?.isBelow === true && !result.isBelowGuessing);
+              const said = [found.headline, ...found.modifiers, found.scope, found.maySay ?? '', ...found.mustNotSay];
+              expect(said.filter((words) => forbidden.some((word) => word.test(words)))).toEqual([]);
+              expect(new Set(found.modifiers).size).toBe(found.modifiers.length);
+            }
+    expect([...rows].sort()).toEqual([...differenceRows].sort());
+    const listed = [...readFileSync('docs/spec/statistics.md', 'utf8').matchAll(/^\| (\d+|none) +\|/gm)].map(
+      ([, row]) => row,
+    );
+    expect(listed).toEqual(['0', ...differenceRows, ...preferenceRows]);
   });
 
   it('speaks of one listener, and of a panel as at least one of its members [T8]', () => {

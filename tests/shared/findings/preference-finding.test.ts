@@ -18,11 +18,13 @@ type Panel = {
   missing?: number;
   trials?: number;
   offers?: boolean;
+  margin?: string;
 };
 
 /** Listeners who all hear the same trials; in each of the first `forFirst` trials all prefer the first cable. */
-function study({ listeners, forFirst, ties = 0, missing = 0, trials = 16, offers = true }: Panel) {
+function study({ listeners, forFirst, ties = 0, missing = 0, trials = 16, offers = true, margin }: Panel) {
   return analysePreference({
+    margin,
     alpha: '0.05',
     listenersPerSession: listeners,
     offersNoPreference: offers,
@@ -60,7 +62,12 @@ const never = [
 describe('the finding of a paired preference', () => {
   it('takes one row for each result, and never says better, audible or proven [F6]', () => {
     const rows = new Set<string>();
-    for (const listeners of [1, 3, 8])
+    for (const [listeners, margin] of [
+      [1, undefined],
+      [3, undefined],
+      [8, undefined],
+      [8, '0.4'],
+    ] as const)
       for (let forFirst = 0; forFirst <= 16; forFirst += 1)
         for (const [ties, missing] of [
           [0, 0],
@@ -70,7 +77,7 @@ describe('the finding of a paired preference', () => {
         ])
           for (const commitmentsHold of [true, false]) {
             const gate = { commitmentsHold, allTrialsAccounted: true, isBlind: true };
-            const one = found({ listeners, forFirst, ties, missing }, { gate });
+            const one = found({ listeners, forFirst, ties, missing, margin }, { gate });
             rows.add(one.row);
             expect(finding.parse(one)).toEqual(one);
             const said = [one.headline, ...one.modifiers, one.scope, one.maySay ?? ''];

@@ -7,6 +7,7 @@ import { evenChance } from '#shared/statistics/chance.ts';
 import { clopperPearson } from '#shared/statistics/clopper-pearson.ts';
 import { holm } from '#shared/statistics/holm.ts';
 import { midPInterval } from '#shared/statistics/mid-p-interval.ts';
+import { sharedEvidence } from '#shared/statistics/shared-evidence.ts';
 import { wilsonInterval } from '#shared/statistics/wilson.ts';
 
 const counts = fc.integer({ min: 1, max: 300 }).chain((trials) => fc.tuple(fc.nat(trials), fc.constant(trials)));
@@ -157,5 +158,45 @@ describe('the Bayes factor', () => {
       }
       expect(mean).toBeCloseTo(1, 12);
     }
+  });
+});
+
+describe('evidence from shared presentations', () => {
+  it('is the Bayes factor with the uniform prior where every trial has one answer [T39] [T29]', () => {
+    fc.assert(
+      fc.property(fc.array(fc.boolean(), { maxLength: 60 }), fc.constantFrom(2, 3), (marks, labels) => {
+        const trials = marks.map((isRight) => ({
+          counts: Array.from({ length: labels }, (_, label) => (label === (isRight ? 0 : 1) ? 1 : 0)),
+          truth: 0,
+          missing: 0,
+        }));
+        const right = marks.filter((mark) => mark).length;
+        const chance = { numerator: 1, denominator: labels };
+        const { logFactorAbove } = bayesFactor(right, marks.length, chance, uniformPrior);
+        expect(sharedEvidence(trials, labels)).toBeCloseTo(logFactorAbove, 9);
+      }),
+    );
+  });
+
+  // A panel that shares a habit of 80 to 20 on every trial hears nothing. Counting answers, evidence of twenty would come in
+  // 39 to 61 % of such studies; over every draw the factor of trials averages to 1 at the most, so in 5 % at the most.
+  it('averages to one over all draws of what was heard, whatever the panel answered [T39]', () => {
+    fc.assert(
+      fc.property(fc.array(fc.tuple(fc.nat(6), fc.nat(6)), { minLength: 1, maxLength: 7 }), (answers) => {
+        let mean = 0;
+        for (let draw = 0; draw < 2 ** answers.length; draw += 1) {
+          const trials = answers.map((counts, index) => ({ counts, truth: (draw >> index) & 1, missing: 0 }));
+          mean += Math.exp(sharedEvidence(trials, 2)) / 2 ** answers.length;
+        }
+        expect(mean).toBeCloseTo(1, 9);
+      }),
+      { numRuns: 30 },
+    );
+  });
+
+  it('takes silence as right, so that it never speaks for guessing [T39]', () => {
+    const trial = { counts: [2, 1], truth: 0, missing: 2 };
+    expect(sharedEvidence([trial], 2)).toBeCloseTo(sharedEvidence([{ counts: [4, 1], truth: 0, missing: 0 }], 2), 12);
+    expect(() => sharedEvidence([], 1)).toThrow(RangeError);
   });
 });

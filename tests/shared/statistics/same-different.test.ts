@@ -2,6 +2,7 @@ import fc from 'fast-check';
 import { uniformFloat64 } from 'pure-rand/distribution/uniformFloat64';
 import { xoroshiro128plus } from 'pure-rand/generator/xoroshiro128plus';
 import { describe, expect, it } from 'vitest';
+import { ownDrawLimits } from '#shared/findings/rate-limits.ts';
 import { assignmentTest } from '#shared/statistics/assignment-test.ts';
 import { fractionToNumber } from '#shared/statistics/fraction.ts';
 import {
@@ -123,8 +124,8 @@ describe('d′ of same-different', () => {
     );
     fc.assert(
       fc.property(rated, rated, (hits, falseAlarms) => {
-        const limits = sameDifferentLimits(hits, falseAlarms, 0.95);
-        const whole = sameDifferentLimits({ ...hits, missing: 0 }, { ...falseAlarms, missing: 0 }, 0.95);
+        const limits = sameDifferentLimits(limitsOf(hits, falseAlarms), 0.95);
+        const whole = sameDifferentLimits(limitsOf({ ...hits, missing: 0 }, { ...falseAlarms, missing: 0 }), 0.95);
         const { dPrime } = sameDifferentSensitivity(hits, falseAlarms);
         expect(limits.lower).toBeLessThanOrEqual(whole.lower);
         expect(limits.upper).toBeGreaterThanOrEqual(whole.upper);
@@ -137,6 +138,12 @@ describe('d′ of same-different', () => {
     expect(() => sameDifferentSensitivity({ count: 3, trials: 2 }, { count: 0, trials: 1 })).toThrow(RangeError);
   });
 });
+
+type Rated = { count: number; trials: number; missing: number };
+const limitsOf = (hits: Rated, falseAlarms: Rated) => {
+  const of = ({ count, trials, missing }: Rated) => ownDrawLimits({ counted: count, missing, due: trials }).interval;
+  return { hits: of(hits), falseAlarms: of(falseAlarms) };
+};
 
 describe('planning same-different', () => {
   // One listener's studies are found as often as the exact power says, within four standard deviations of 2000 studies.

@@ -76,6 +76,14 @@ function listeners(report: Report): Html {
   );
 }
 
+function checks(report: Report): Html {
+  return table(
+    'Checks of the answers',
+    ['Check', 'Adjusted p', 'Found'],
+    portraitOf(report).checks.map(({ name, tail, words }) => [name, tail, words]),
+  );
+}
+
 function session({
   number,
   phase,
@@ -175,6 +183,7 @@ export function publicationContent(publication: Publication): Html {
       ${section('Check it yourself', verification(publication))}
       ${section('From plan to count', flow(report))}
       ${section('By listener', listeners(report))}
+      ${section('Checks of the answers', checks(report))}
       ${section('Every session', html`<ol class="flex flex-col gap-8">${report.sessions.map(session)}</ol>`)}
       ${section('What did not go as planned', incidents(report))}
       ${section('The sealed protocol', facts(report.protocol.facts))}

@@ -20,6 +20,7 @@ export function protocolFacts({ draft, cableNames, codeHolder }: Study): Protoco
       ),
     ),
     words('Listening', listeningWords(draft)),
+    ...(draft.samplingFrame ? [words('Listeners are drawn from', draft.samplingFrame)] : []),
     words('Spares', `${draft.spares} in each session`),
     words('Significance level', percentOfPerMille(draft.alphaPerMille)),
     ...analysisFacts({
