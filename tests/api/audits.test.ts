@@ -4,6 +4,7 @@ import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type { AuditFault, AuditOutcome } from '#shared/contracts/audits.ts';
+import { confirmationIds } from '#shared/contracts/publications.ts';
 import { HandClock } from '../../server/demo/hand-clock.ts';
 import { auditAll, auditWhenDue } from '../../server/features/audits/audits.service.ts';
 import { OutgoingMail } from '../../server/mail/outgoing-mail.entity.ts';
@@ -27,6 +28,12 @@ describe('the audit', () => {
     people = await makeOrganisation(server, 'Harbour');
     await makeOrganisation(server, 'Elsewhere');
     study = await wholeStudy(server, people, clock, 'Study Plover');
+    const confirmations = Object.fromEntries(confirmationIds.map((id) => [id, true]));
+    const statements = { paid: 'The makers', supplied: 'The makers, from stock', ties: 'none' };
+    await study.manager
+      .post(`${study.at}/publication`)
+      .send({ ...statements, confirmations })
+      .expect(200);
     await untilAsked('every token', async () => {
       clock.advance(1000);
       return Number((await ask('select count(*) as n from token_requests'))[0].n) === 0;
@@ -54,7 +61,7 @@ describe('the audit', () => {
     for await (const { organisationId, studies, signatures, tokens, entries } of auditAll(server.deps))
       sums.push({ own: organisationId === people.organisationId, studies, signatures, tokens, some: entries > 50 });
     expect(sums.sort((a, b) => b.studies - a.studies)).toEqual([
-      { own: true, studies: 1, signatures: 4, tokens: 4, some: true },
+      { own: true, studies: 1, signatures: 5, tokens: 5, some: true },
       { own: false, studies: 0, signatures: 0, tokens: 0, some: false },
     ]);
   });
@@ -93,10 +100,18 @@ describe('the audit', () => {
     [
       'a missing end',
       'record_entries',
-      "delete from record_entries where kind in ('result-recorded')",
+      "delete from record_entries where kind in ('study-published')",
       null,
       'should end with entry',
     ],
+    [
+      'another document',
+      'publications',
+      "update publications set document = replace(document, 'Piano', 'Organ')",
+      null,
+      'not the one that was published',
+    ],
+    ['a document gone', 'publications', 'delete from publications', null, 'that was published is gone'],
     ['a whole record gone', 'record_entries', 'delete from record_entries', 1, 'and there is none'],
     [
       'another head kept',
@@ -200,7 +215,7 @@ describe('the audit', () => {
     expect(await latest()).toBeNull();
     await auditWhenDue(server.deps);
     const first = await latest();
-    expect(first).toMatchObject({ at: new Date(clock.now()).toISOString(), studies: 1, signatures: 4, faults: [] });
+    expect(first).toMatchObject({ at: new Date(clock.now()).toISOString(), studies: 1, signatures: 5, faults: [] });
     clock.advance(dayMs - 1);
     await auditWhenDue(server.deps);
     expect(await latest()).toEqual(first);
@@ -241,7 +256,7 @@ describe('the audit', () => {
       });
     const good = run(name);
     expect(good.stdout).toMatch(
-      /2 organisations, 1 studies: \d+ entries, 4 signatures, 4 tokens\.\nEvery record holds\./,
+      /2 organisations, 1 studies: \d+ entries, 5 signatures, 5 tokens\.\nEvery record holds\./,
     );
     expect(good.status).toBe(0);
     await past(keep('record_entries'), 'delete from record_entries where sequence = 12');
