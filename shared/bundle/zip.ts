@@ -59,3 +59,9 @@ export function readZip(bytes: Uint8Array): { files: ReadonlyMap<string, Uint8Ar
     return { fault: fault ?? 'It is no archive that can be unpacked, or a part of it is missing.' };
   }
 }
+
+/** The document of a bundle by itself, or null where there is none. */
+export function documentIn(bytes: Uint8Array): Uint8Array | null {
+  const read = readZip(bytes);
+  return 'files' in read ? (read.files.get('study.json') ?? null) : null;
+}

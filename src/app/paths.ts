@@ -16,6 +16,8 @@ export const paths = {
   /** Public: what is published, for anybody. */
   publications: () => '/p',
   publication: (id: string) => `/p/${id}`,
+  /** For whoever brings a file of a publication. */
+  verify: () => '/verify',
 
   home: (organisationId: string) => organisation(organisationId),
 

@@ -184,9 +184,10 @@ function runSession(maker: StudyMaker, protocol: Protocol, session: number, list
   else made.do({ kind: 'abandon', reason: 'The amplifier failed.' });
 }
 
-/** @param listeners seats per session, 1 to 4 */
-export function closedStudy(listeners: number, methodId = 'abx'): ClosedStudy {
+/** @param listeners seats per session, 1 to 4. @param startsAt when it is sealed, in milliseconds since 1970 */
+export function closedStudy(listeners: number, methodId = 'abx', startsAt?: number): ClosedStudy {
   const maker = new StudyMaker();
+  if (startsAt !== undefined) maker.now = startsAt;
   const protocol = protocolFor(maker.study, listeners, methodId);
   const rows = protocol.cables.flatMap(({ specimens }, index) =>
     specimens.map(({ id: specimen, serial }, n) => ({

@@ -2,13 +2,15 @@ import { Router } from 'express';
 import { publicationsApi } from '#shared/contracts/publications.ts';
 import { Problem } from '#shared/problem.ts';
 import type { Deps } from '../../deps.ts';
+import { limit } from '../../http/rate-limit.ts';
+import { getBundle } from './bundle.service.ts';
 import { html, jsonScript } from './page/html.ts';
 import { publicationContent } from './page/publication-page.ts';
 import { publicationsContent } from './page/publications-page.ts';
 import { shellPage } from './page/shell.ts';
 import { structuredData } from './page/structured-data.ts';
 import { getDocument, getPublication, listPublications, publicAddresses } from './publications.service.ts';
-import { filePath, publicPath } from './publications.views.ts';
+import { bundlePath, filePath, publicPath } from './publications.views.ts';
 
 const idOf = (id: unknown) => publicationsApi.get.params?.safeParse({ id }).data?.id ?? null;
 
@@ -81,6 +83,16 @@ export function publicPages(deps: Deps): Router {
       .set('cache-control', 'no-cache')
       .type('html')
       .send(shellPage(clientDir, head, publicationContent(publication)));
+  });
+
+  router.get(bundlePath(':id'), limit({ attempts: 120, windowMs: 600_000 }), async (request, response) => {
+    const id = idOf(request.params.id);
+    if (id === null) throw new Problem('not-found', 'Nothing is published at this address.');
+    response
+      .set('cache-control', 'no-cache')
+      .set('content-disposition', `attachment; filename="fairlead-${id}.zip"`)
+      .type('application/zip')
+      .send(Buffer.from(await getBundle(deps, id)));
   });
 
   router.get(filePath(':id', ':digest'), async (request, response) => {

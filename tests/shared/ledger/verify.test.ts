@@ -2,6 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { canonicalJson, type Json } from '#shared/ledger/canonical-json.ts';
 import type { Entry } from '#shared/ledger/chain.ts';
+import type { CheckId } from '#shared/ledger/check-names.ts';
 import {
   type PartName,
   type PublicationParts,
@@ -10,7 +11,7 @@ import {
   publicationText,
   readPublication,
 } from '#shared/ledger/publication-parts.ts';
-import { type CheckId, checksOfFile, verifyStudy } from '#shared/ledger/verify.ts';
+import { checksOfFile, verifyStudy } from '#shared/ledger/verify.ts';
 import { chainedAgain, closedStudy } from '../../support/closed-study.ts';
 
 /** Which check answers for each part of the document. */
