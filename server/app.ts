@@ -8,6 +8,7 @@ import type { Deps } from './deps.ts';
 import { accountRoutes } from './features/account/account.routes.ts';
 import { apiReferenceRoutes } from './features/api-reference/api-reference.routes.ts';
 import { attendancesRoutes } from './features/attendances/attendances.routes.ts';
+import { auditsRoutes } from './features/audits/audits.routes.ts';
 import { cablesRoutes } from './features/cables/cables.routes.ts';
 import { codesRoutes } from './features/codes/codes.routes.ts';
 import { firstOwnerRoutes } from './features/first-owner/first-owner.routes.ts';
@@ -21,6 +22,8 @@ import { publicationsRoutes } from './features/publications/publications.routes.
 import { reportsRoutes } from './features/reports/reports.routes.ts';
 import { sessionsRoutes } from './features/sessions/sessions.routes.ts';
 import { signInRoutes } from './features/sign-in/sign-in.routes.ts';
+import { signedHeadsRoutes } from './features/signed-heads/signed-heads.routes.ts';
+import { signingKeysRoutes } from './features/signing-keys/signing-keys.routes.ts';
 import { studiesRoutes } from './features/studies/studies.routes.ts';
 import { usersRoutes } from './features/users/users.routes.ts';
 import type { Access } from './http/access.ts';
@@ -112,6 +115,9 @@ export function createApp(deps: Deps) {
   reportsRoutes(api, access, deps);
   publicationsRoutes(api, access, deps);
   mailRoutes(api, access, deps);
+  signingKeysRoutes(api, access, deps);
+  signedHeadsRoutes(api, access, deps);
+  auditsRoutes(api, access, deps);
   apiReferenceRoutes(api, mounted, version);
   api.use(nothingHere);
   app.use('/api', api);

@@ -1,6 +1,7 @@
 import type { Logger } from 'pino';
 import type { DataSource } from 'typeorm';
 import type { Config } from './config.ts';
+import type { TimestampAuthority } from './timestamps/authority.ts';
 
 /** What randomness is for. Production draws all of it from the operating system; tests give each purpose a source of its own. */
 export type RandomPurpose =
@@ -15,7 +16,10 @@ export type RandomPurpose =
   | 'session-code'
   | 'publication-id'
   | 'password-salt'
-  | 'link-token';
+  | 'link-token'
+  | 'signing-key'
+  | 'signing-key-iv'
+  | 'token-nonce';
 
 export type Random = {
   bytes(purpose: RandomPurpose, count: number): Buffer;
@@ -35,5 +39,7 @@ export type Deps = {
   readonly db: DataSource;
   readonly clock: Clock;
   readonly random: Random;
+  /** Who stamps the time on signed heads; null leaves them waiting. */
+  readonly timestamps: TimestampAuthority | null;
   readonly log: Logger;
 };

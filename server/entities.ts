@@ -3,6 +3,7 @@ import { DrawSecret } from './blind/draw-secret.entity.ts';
 import { PasswordReset } from './features/account/password-reset.entity.ts';
 import { Attendance } from './features/attendances/attendance.entity.ts';
 import { Listener } from './features/attendances/listener.entity.ts';
+import { Audit } from './features/audits/audit.entity.ts';
 import { Cable } from './features/cables/cable.entity.ts';
 import { Specimen } from './features/cables/specimen.entity.ts';
 import { Invitation } from './features/invitations/invitation.entity.ts';
@@ -18,7 +19,11 @@ import { WebSession } from './features/sign-in/web-session.entity.ts';
 import { Study } from './features/studies/study.entity.ts';
 import { User } from './features/users/user.entity.ts';
 import { RecordEntry } from './ledger/entry.entity.ts';
+import { HeadSignatureRow } from './ledger/head-signature.entity.ts';
+import { SigningKey } from './ledger/signing-key.entity.ts';
 import { OutgoingMail } from './mail/outgoing-mail.entity.ts';
+import { TimestampToken } from './timestamps/timestamp-token.entity.ts';
+import { TokenRequest } from './timestamps/token-request.entity.ts';
 
 /** Every table. */
 export const entities = [
@@ -30,6 +35,11 @@ export const entities = [
   Specimen,
   Study,
   RecordEntry,
+  SigningKey,
+  HeadSignatureRow,
+  TokenRequest,
+  TimestampToken,
+  Audit,
   Session,
   Seat,
   Answer,

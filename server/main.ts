@@ -3,15 +3,18 @@ import { join } from 'node:path';
 import { pino } from 'pino';
 import { readConfig } from './config.ts';
 import { createDataSource } from './db/data-source.ts';
+import { withTransaction } from './db/transaction.ts';
 import { closeDemo } from './demo/close-demo.ts';
 import { demoPeople } from './demo/demo-people.ts';
 import { loadDemo } from './demo/load-demo.ts';
 import type { Deps } from './deps.ts';
+import { requireOpenableKeys } from './ledger/signing-keys.ts';
 import { pageAddresses } from './mail/page-addresses.ts';
 import { onTheNetwork } from './network/on-the-network.ts';
 import { ownCertificate } from './network/own-certificate.ts';
 import { serve } from './serve.ts';
 import { systemClock, systemRandom } from './system.ts';
+import { timestampAuthority } from './timestamps/timestamp-authority.ts';
 
 const say = (line: string) => process.stdout.write(`${line}\n`);
 
@@ -25,11 +28,14 @@ async function step<T>(name: string, work: () => Promise<T>): Promise<T> {
 async function main(): Promise<void> {
   const config = readConfig(process.env);
   const db = createDataSource(config.database);
-  const deps: Deps = { config, db, clock: systemClock, random: systemRandom, log: pino({ level: config.logLevel }) };
+  const timestamps = await step('time authority', () => timestampAuthority(config));
+  const log = pino({ level: config.logLevel });
+  const deps: Deps = { config, db, clock: systemClock, random: systemRandom, timestamps, log };
   await step('migrations', async () => {
     await db.initialize();
     await db.runMigrations();
   });
+  await withTransaction(db, (tx) => requireOpenableKeys(tx, deps, config.signingSecretLost));
   if (config.demo) await step('demo', () => loadDemo(deps));
   else await closeDemo(db);
   const { lan } = config;

@@ -5,12 +5,15 @@ import { createApp } from './app.ts';
 import type { Deps } from './deps.ts';
 import { forgetOldAttempts } from './features/account/account.service.ts';
 import { forgetExpiredResets } from './features/account/password-resets.service.ts';
+import { auditWhenDue } from './features/audits/audits.service.ts';
 import { forgetExpired } from './http/sign-in.ts';
 import { serveSockets } from './live/socket-server.ts';
 import { forgetOldTexts, Postman } from './mail/postman.ts';
 import type { OwnCertificate } from './network/own-certificate.ts';
+import { Timekeeper } from './timestamps/timekeeper.ts';
 
 const hourMs = 60 * 60 * 1000;
+const firstAuditMs = 60 * 1000;
 
 function listen(http: Pick<Server, 'once' | 'listen' | 'address'>, port: number, host: string): Promise<number> {
   return new Promise((resolve, reject) => {
@@ -41,15 +44,29 @@ export async function serve(deps: Deps, certificate: Pick<OwnCertificate, 'key' 
   await sweep(deps);
   const sweeping = setInterval(() => {
     sweep(deps).catch((error) => deps.log.error({ err: error }, 'sweeping failed'));
+    audit();
   }, hourMs);
+  let auditing = Promise.resolve();
+  const audit = () => {
+    auditing = auditing
+      .then(() => auditWhenDue(deps))
+      .catch((error) => deps.log.error({ err: error }, 'the records could not be audited'));
+  };
+  // A start has more urgent things to do, and the tokens of the demo are still on their way.
+  const firstAudit = setTimeout(audit, firstAuditMs);
   const postman = deps.config.smtp === null ? null : new Postman(deps, deps.config.smtp);
   postman?.start();
+  const timekeeper = deps.timestamps === null ? null : new Timekeeper(deps, deps.timestamps);
+  timekeeper?.start();
   const { config } = deps;
   const port = await listen(http, config.port, config.host);
   const tlsPort = https === null ? null : await listen(https, config.lan?.tlsPort ?? 0, config.host);
   const stop = async () => {
     clearInterval(sweeping);
+    clearTimeout(firstAudit);
     await postman?.stop();
+    await timekeeper?.stop();
+    await auditing;
     await sittings.stop();
     await io.close();
     http.closeAllConnections();

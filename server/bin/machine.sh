@@ -411,9 +411,11 @@ prepare_home() {
   claim_home
   require_free_port PORT "$HOST" "$PORT"
   SESSION_SECRET=${SESSION_SECRET:-$(kept_secret session-secret)}
-  export SESSION_SECRET
+  SIGNING_SECRET=${SIGNING_SECRET:-$(kept_secret signing-secret)}
+  export SESSION_SECRET SIGNING_SECRET
   if [[ -n ${DATABASE_URL:-}${DATABASE_HOST:-}${DATABASE_SOCKET:-} ]]; then
     step packages install_packages
+    need_from_debian openssl:openssl
   else
     prepare_own_database
   fi
@@ -429,6 +431,6 @@ prepare_own_database() {
   [[ -n $database_pid ]] || require_free_port DATABASE_PORT 127.0.0.1 "$DATABASE_PORT"
   require_space .data 200
   step packages install_packages
-  need_from_debian "${mariadb_programs[@]}"
+  need_from_debian "${mariadb_programs[@]}" openssl:openssl
   step database open_database --bind-address=127.0.0.1 --port="$DATABASE_PORT"
 }

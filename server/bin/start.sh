@@ -28,7 +28,6 @@ prepare_home
 [[ ${FAIRLEAD_LAN:-off} == off ]] || {
   export TLS_PORT=${TLS_PORT:-4443}
   require_free_port TLS_PORT "$HOST" "$TLS_PORT"
-  need_from_debian openssl:openssl
 }
 step client build_client
 

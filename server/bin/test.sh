@@ -69,7 +69,7 @@ check() {
 
 require_node
 step packages install_packages
-wanted=("${mariadb_programs[@]}")
+wanted=("${mariadb_programs[@]}" openssl:openssl)
 ! wants e2e || wanted+=(chromium:chromium)
 ! wants e2e && ! wants unit || wanted+=(Rscript:r-base-core)
 need_from_debian "${wanted[@]}"

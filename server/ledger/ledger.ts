@@ -1,9 +1,10 @@
 import { canonicalJson, type Json } from '#shared/ledger/canonical-json.ts';
 import { type Entry, nextEntry } from '#shared/ledger/chain.ts';
 import type { Tx } from '../db/transaction.ts';
-import type { Random } from '../deps.ts';
+import type { Deps } from '../deps.ts';
 import { Study } from '../features/studies/study.entity.ts';
 import { RecordEntry } from './entry.entity.ts';
+import { signHeads } from './head-signatures.ts';
 
 export type NewEntry = {
   kind: string;
@@ -31,14 +32,20 @@ function entryOf(row: RecordEntry): Entry {
 
 /**
  * Appends entries to a study's record, in order. The study's row is locked until the transaction ends, so that two
- * writers cannot both continue from one head; the primary key would refuse the second in any case.
+ * writers cannot both continue from one head; the primary key would refuse the second in any case. An entry that marks
+ * one of the five moments is signed with it.
  */
-export async function append(tx: Tx, random: Random, studyId: string, entries: readonly NewEntry[]): Promise<Entry[]> {
+export async function append(
+  tx: Tx,
+  deps: Pick<Deps, 'config' | 'random' | 'clock'>,
+  studyId: string,
+  entries: readonly NewEntry[],
+): Promise<Entry[]> {
   const study = await tx.findOneOrFail(Study, { where: { id: studyId }, lock: { mode: 'pessimistic_write' } });
   let head = study.headDigest === null ? null : { sequence: study.headSequence, digest: study.headDigest };
   const chained: Entry[] = [];
   for (const { kind, at, payload } of entries) {
-    const nonce = random.bytes('entry-nonce', 16).toString('hex');
+    const nonce = deps.random.bytes('entry-nonce', 16).toString('hex');
     const entry = nextEntry(head, {
       study: studyId,
       at: new Date(at).toISOString(),
@@ -67,6 +74,7 @@ export async function append(tx: Tx, random: Random, studyId: string, entries: r
     })),
   );
   await tx.update(Study, { id: studyId }, { headSequence: head.sequence, headDigest: head.digest });
+  await signHeads(tx, deps, study.organisationId, chained);
   return chained;
 }
 

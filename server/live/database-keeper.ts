@@ -63,7 +63,7 @@ function keepingIn(tx: Tx, deps: Deps): Keeping {
       const { studyId, id, number } = memory.session;
       const entries = await append(
         tx,
-        random,
+        deps,
         studyId,
         events.map(({ kind, at, payload }) => ({ kind, at, payload, session: number })),
       );

@@ -4,6 +4,7 @@ import { registeredResult } from '../methods/methods.ts';
 import { endpoint } from './endpoint.ts';
 import { organisationParams, thingParams } from './organisation-params.ts';
 import { listQuery, pageOf } from './paging.ts';
+import { signedHead } from './signed-heads.ts';
 
 export const reportRow = z.strictObject({
   studyId: z.uuid(),
@@ -83,6 +84,8 @@ export const report = z.strictObject({
   record: z.strictObject({
     entries: z.int(),
     head: z.string(),
+    /** Heads that were signed and time-stamped on the way, in order. */
+    heads: z.array(signedHead),
     checks: z.array(
       z.strictObject({ name: z.string(), outcome: z.enum(['pass', 'fail', 'not checkable']), reason: z.string() }),
     ),

@@ -3,6 +3,7 @@ import { methodIds, methods } from '../methods/methods.ts';
 import { endpoint, managers } from './endpoint.ts';
 import { organisationParams, thingParams } from './organisation-params.ts';
 import { listQuery, pageOf, sortBy } from './paging.ts';
+import { signedHead } from './signed-heads.ts';
 
 export const studyStates = ['draft', 'sealed', 'collecting', 'closed', 'published', 'shelved'] as const;
 export type StudyState = (typeof studyStates)[number];
@@ -120,6 +121,8 @@ export const sealedProtocol = z.strictObject({
   digest: z.string(),
   sealedAt: z.iso.datetime(),
   sealedBy: z.string(),
+  /** The signature with which it was sealed, and its token; null for what was sealed before there were signatures. */
+  signed: signedHead.nullable(),
 });
 
 const rowShape = {

@@ -37,6 +37,7 @@ export const paths = {
   people: (organisationId: string) => `${organisation(organisationId)}/people`,
   invitations: (organisationId: string) => `${organisation(organisationId)}/people/invitations`,
   mail: (organisationId: string) => `${organisation(organisationId)}/mail`,
+  proof: (organisationId: string) => `${organisation(organisationId)}/proof`,
 
   sessions: (organisationId: string) => `${organisation(organisationId)}/sessions`,
   planSession: (organisationId: string, studyId: string) =>

@@ -34,6 +34,7 @@ const organisationPages: RouteObject[] = [
   { path: paths.people(organisationId), lazy: () => import('../pages/people-page.tsx') },
   { path: paths.invitations(organisationId), lazy: () => import('../pages/invitations-page.tsx') },
   { path: paths.mail(organisationId), lazy: () => import('../pages/mail-page.tsx') },
+  { path: paths.proof(organisationId), lazy: () => import('../pages/proof-page.tsx') },
   { path: `${paths.home(organisationId)}/*`, Component: NotFoundPage },
 ];
 

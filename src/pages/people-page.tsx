@@ -49,6 +49,7 @@ export function Component() {
               {invitations.total === 0 ? 'Invitations' : `Invitations (${invitations.total} open)`}
             </LinkButton>
             <LinkButton to={paths.mail(organisationId)}>Mail</LinkButton>
+            <LinkButton to={paths.proof(organisationId)}>Proof</LinkButton>
           </>
         }
       />

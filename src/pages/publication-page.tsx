@@ -11,6 +11,7 @@ import { ReportConditions } from '../features/reports/report-conditions.tsx';
 import { ReportDistribution } from '../features/reports/report-distribution.tsx';
 import { ReportFigures } from '../features/reports/report-figures.tsx';
 import { ReportFlow } from '../features/reports/report-flow.tsx';
+import { ReportHeads } from '../features/reports/report-heads.tsx';
 import { ReportIncidents } from '../features/reports/report-incidents.tsx';
 import { ReportListeners } from '../features/reports/report-listeners.tsx';
 import { ReportProtocol } from '../features/reports/report-protocol.tsx';
@@ -64,6 +65,7 @@ export function Component() {
       />
       <ReportSessions sessions={report.sessions} cables={report.cables} method={method} />
       <ReportProtocol protocol={report.protocol} />
+      <ReportHeads record={report.record} />
     </article>
   );
 }

@@ -80,7 +80,7 @@ function Question({ title, consequence, confirmWord, keepWord, reason, busy, pro
           required
           value={text}
           onChange={(event) => setText(event.target.value)}
-          error={isRefused && text.trim() === '' ? 'Write a reason; it goes on the record.' : undefined}
+          error={isRefused && text.trim() === '' ? 'Write a reason; it is kept.' : undefined}
         />
       ) : null}
       <p role="alert" className="border-l-4 border-amber pl-2.5 font-semibold text-amber empty:hidden">

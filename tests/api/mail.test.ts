@@ -262,7 +262,12 @@ describe('mail without an SMTP server', () => {
   });
 
   it('is refused a mail server without a sender, in words that name the setting', () => {
-    const read = () => readConfig({ SESSION_SECRET: 'x'.repeat(32), SMTP_URL: 'smtp://mail.example:587' });
+    const read = () =>
+      readConfig({
+        SESSION_SECRET: 'x'.repeat(32),
+        SIGNING_SECRET: 'x'.repeat(32),
+        SMTP_URL: 'smtp://mail.example:587',
+      });
     expect(read).toThrow(/MAIL_FROM: is needed with SMTP_URL/);
   });
 });

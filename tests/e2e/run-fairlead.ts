@@ -1,7 +1,10 @@
 import { type ChildProcess, spawn } from 'node:child_process';
 import { randomBytes } from 'node:crypto';
 import { once } from 'node:events';
+import { mkdtempSync, rmSync } from 'node:fs';
 import { type AddressInfo, createServer } from 'node:net';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { createConnection } from 'mysql2/promise';
 
@@ -49,6 +52,7 @@ export async function runFairlead(environment: Record<string, string> = {}): Pro
   const admin = await createConnection(account);
   await admin.query(`create database ${name} character set utf8mb4`);
   const port = await freePort();
+  const dataDir = mkdtempSync(join(tmpdir(), 'fairlead-e2e-'));
   const server = spawn('node', ['--import', 'tsx', 'server/main.ts'], {
     cwd: top,
     env: {
@@ -56,7 +60,9 @@ export async function runFairlead(environment: Record<string, string> = {}): Pro
       NODE_ENV: 'production',
       TSX_TSCONFIG_PATH: 'server/tsconfig.json',
       SESSION_SECRET: randomBytes(32).toString('hex'),
+      SIGNING_SECRET: randomBytes(32).toString('hex'),
       PORT: String(port),
+      DATA_DIR: dataDir,
       DATABASE_SOCKET: account.socketPath,
       DATABASE_USER: account.user,
       DATABASE_PASSWORD: account.password,
@@ -74,6 +80,7 @@ export async function runFairlead(environment: Record<string, string> = {}): Pro
       await once(server, 'exit');
       await admin.query(`drop database ${name}`);
       await admin.end();
+      rmSync(dataDir, { recursive: true });
     },
   };
 }

@@ -1,6 +1,9 @@
 import { type ChildProcess, spawn } from 'node:child_process';
 import { once } from 'node:events';
+import { mkdtempSync, rmSync } from 'node:fs';
 import { type AddressInfo, createServer } from 'node:net';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { chainFault } from '#shared/ledger/chain.ts';
 import { Answer } from '../../server/features/sessions/answer.entity.ts';
@@ -27,6 +30,7 @@ describe('a server that is killed', () => {
   let study: Awaited<ReturnType<typeof readyStudy>>;
   let port: number;
   let killed: ChildProcess;
+  const dataDir = mkdtempSync(join(tmpdir(), 'fairlead-killed-'));
 
   const start = async (): Promise<void> => {
     const { database } = helper.deps.config;
@@ -35,8 +39,10 @@ describe('a server that is killed', () => {
         PATH: process.env.PATH,
         TSX_TSCONFIG_PATH: 'server/tsconfig.json',
         SESSION_SECRET: helper.deps.config.sessionSecret,
+        SIGNING_SECRET: helper.deps.config.signingSecret,
         FAIRLEAD_DEMO: 'off',
         PORT: String(port),
+        DATA_DIR: dataDir,
         DATABASE_SOCKET: database.socketPath,
         DATABASE_USER: database.user,
         DATABASE_PASSWORD: database.password,
@@ -72,6 +78,7 @@ describe('a server that is killed', () => {
   afterAll(async () => {
     await kill();
     await helper.stop();
+    rmSync(dataDir, { recursive: true });
   });
 
   it('loses no acknowledged answer, doubles none, and the chain holds [S14]', async () => {

@@ -8,6 +8,7 @@ import type { Clock, Deps, Random } from '../../server/deps.ts';
 import type { OwnCertificate } from '../../server/network/own-certificate.ts';
 import { serve } from '../../server/serve.ts';
 import { systemClock, systemRandom } from '../../server/system.ts';
+import type { TimestampAuthority } from '../../server/timestamps/authority.ts';
 
 function required(name: string): string {
   const value = process.env[name];
@@ -39,6 +40,7 @@ export function testConfig(databaseName: string, environment: Record<string, str
   const { socketPath, user, password } = account();
   const config = readConfig({
     SESSION_SECRET: 'a secret for tests, and long enough for the rule',
+    SIGNING_SECRET: 'another secret for tests, and long enough too',
     FAIRLEAD_DEMO: 'off',
     DATABASE_SOCKET: socketPath,
     DATABASE_USER: user,
@@ -53,7 +55,13 @@ export function testConfig(databaseName: string, environment: Record<string, str
 
 /** The real application on a port of its own, over a real, empty database. */
 export async function testServer(
-  given: { clock?: Clock; random?: Random; environment?: Record<string, string>; certificate?: OwnCertificate } = {},
+  given: {
+    clock?: Clock;
+    random?: Random;
+    environment?: Record<string, string>;
+    certificate?: OwnCertificate;
+    timestamps?: TimestampAuthority;
+  } = {},
 ) {
   const database = await testDatabase();
   const config = testConfig(database.name, given.environment);
@@ -65,6 +73,7 @@ export async function testServer(
     db,
     clock: given.clock ?? systemClock,
     random: given.random ?? systemRandom,
+    timestamps: given.timestamps ?? null,
     log: pino({ level: config.logLevel }),
   };
   const server = await serve(deps, given.certificate);

@@ -3,6 +3,10 @@ import { Publications1796126400000 } from './1796126400000-publications.ts';
 import { Mail1796130000000 } from './1796130000000-mail.ts';
 import { People1796130100000 } from './1796130100000-people.ts';
 import { Attendances1796130400000 } from './1796130400000-attendances.ts';
+import { Signatures1796140800000 } from './1796140800000-signatures.ts';
+import { Timestamps1796140900000 } from './1796140900000-timestamps.ts';
+import { ImmutableRecord1796141000000 } from './1796141000000-immutable-record.ts';
+import { Audits1796141100000 } from './1796141100000-audits.ts';
 
 /** Every migration, oldest first. */
 export const migrations = [
@@ -11,4 +15,8 @@ export const migrations = [
   Mail1796130000000,
   People1796130100000,
   Attendances1796130400000,
+  Signatures1796140800000,
+  Timestamps1796140900000,
+  ImmutableRecord1796141000000,
+  Audits1796141100000,
 ];

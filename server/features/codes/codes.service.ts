@@ -65,8 +65,9 @@ export function codesStatus({ db }: Deps, where: Where, who: Asker): Promise<Cod
 }
 
 /** Draws the codes and puts the commitment to the code key on the record. */
-export function drawCodes({ db, random, clock }: Deps, where: Where, who: Asker): Promise<CodesStatus> {
-  return withTransaction(db, async (tx) => {
+export function drawCodes(deps: Deps, where: Where, who: Asker): Promise<CodesStatus> {
+  const { random, clock } = deps;
+  return withTransaction(deps.db, async (tx) => {
     const study = await lockedStudy(tx, where);
     requireHolder(study, who);
     if (study.state === 'draft') throw new Problem('wrong-phase', 'Codes are drawn once the protocol is sealed.');
@@ -74,25 +75,21 @@ export function drawCodes({ db, random, clock }: Deps, where: Where, who: Asker)
     const specimens = specimensOf(study);
     const commitment = await commitCodeKey(tx, random, study.id, specimens);
     const payload = { commitment, specimens: specimens.length, by: who.userId };
-    await append(tx, random, study.id, [{ kind: 'code-key-committed', at: clock.now(), payload, session: null }]);
+    await append(tx, deps, study.id, [{ kind: 'code-key-committed', at: clock.now(), payload, session: null }]);
     await updateStudy(tx, study.id, { codesState: 'drawn' }, new Date(clock.now()));
     return statusOf(tx, await studyOrProblem(tx, where), who);
   });
 }
 
 /** The code sheet for its holder; the opening goes on the record first. */
-export function openCodes(
-  { db, random, clock }: Deps,
-  where: Where,
-  who: Asker,
-  purpose: 'labels' | 'check',
-): Promise<CodeSheet> {
-  return withTransaction(db, async (tx) => {
+export function openCodes(deps: Deps, where: Where, who: Asker, purpose: 'labels' | 'check'): Promise<CodeSheet> {
+  const { clock } = deps;
+  return withTransaction(deps.db, async (tx) => {
     const study = await lockedStudy(tx, where);
     requireHolder(study, who);
     if (study.codesState === 'none') throw new Problem('wrong-phase', 'No codes are drawn yet.');
     const payload = { by: who.userId, purpose };
-    await append(tx, random, study.id, [{ kind: 'code-key-opened', at: clock.now(), payload, session: null }]);
+    await append(tx, deps, study.id, [{ kind: 'code-key-opened', at: clock.now(), payload, session: null }]);
     const rows = await openForHolder(tx, study.id, who.userId);
     const { cables } = protocolOf(study);
     return {
@@ -108,8 +105,9 @@ export function openCodes(
 }
 
 /** The code holder's word that every specimen is sleeved and labelled at both ends. */
-export function confirmCodes({ db, random, clock }: Deps, where: Where, who: Asker): Promise<CodesStatus> {
-  return withTransaction(db, async (tx) => {
+export function confirmCodes(deps: Deps, where: Where, who: Asker): Promise<CodesStatus> {
+  const { clock } = deps;
+  return withTransaction(deps.db, async (tx) => {
     const study = await lockedStudy(tx, where);
     requireHolder(study, who);
     if (study.codesState !== 'drawn')
@@ -118,7 +116,7 @@ export function confirmCodes({ db, random, clock }: Deps, where: Where, who: Ask
         study.codesState === 'none' ? 'Draw the codes first.' : 'The codes are confirmed already.',
       );
     const payload = { by: who.userId };
-    await append(tx, random, study.id, [{ kind: 'code-key-confirmed', at: clock.now(), payload, session: null }]);
+    await append(tx, deps, study.id, [{ kind: 'code-key-confirmed', at: clock.now(), payload, session: null }]);
     await updateStudy(tx, study.id, { codesState: 'confirmed' }, new Date(clock.now()));
     return statusOf(tx, await studyOrProblem(tx, where), who);
   });

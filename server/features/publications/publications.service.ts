@@ -15,6 +15,7 @@ import type { Deps, Random } from '../../deps.ts';
 import { append, type NewEntry } from '../../ledger/ledger.ts';
 import { organisationName } from '../organisations/organisations.store.ts';
 import { closedRecord, reportOf } from '../reports/reports.service.ts';
+import { signedHeadsOf } from '../signed-heads/signed-heads.service.ts';
 import { lockedStudy, studyOrProblem } from '../studies/studies.service.ts';
 import { updateStudy } from '../studies/studies.store.ts';
 import type { Study } from '../studies/study.entity.ts';
@@ -86,13 +87,13 @@ export function publish(deps: Deps, where: Where, userId: string, draft: Publica
       ties,
       confirmations: confirmationIds,
     };
-    await append(tx, random, study.id, [entry('publication-declared', now, declared)]);
+    await append(tx, deps, study.id, [entry('publication-declared', now, declared)]);
     const closed = await closedRecord(tx, study);
     const document = publicationText(publicationParts(closed));
     const bytes = utf8ToBytes(document);
     const digest = fileDigest(bytes);
     const id = await freeId(tx, random);
-    await append(tx, random, study.id, [entry('study-published', now, { by: userId, id, digest })]);
+    await append(tx, deps, study.id, [entry('study-published', now, { by: userId, id, digest })]);
     await updateStudy(tx, study.id, { state: 'published' }, new Date(now));
     const row: Publication = {
       id,
@@ -115,14 +116,14 @@ export function publish(deps: Deps, where: Where, userId: string, draft: Publica
 
 /** Withdraws a publication. The page and its document stay; the record and the page say why. */
 export function withdraw(deps: Deps, where: Where, userId: string, reason: string): Promise<OwnPublication> {
-  const { random, clock, config } = deps;
+  const { clock, config } = deps;
   return withTransaction(deps.db, async (tx) => {
     const study = await lockedStudy(tx, where);
     const row = await store.publicationOfStudy(tx, study.id);
     if (row === null) throw new Problem('wrong-phase', 'The study is not published.');
     if (row.withdrawnAt !== null) throw new Problem('wrong-phase', 'The publication is withdrawn already.');
     const now = clock.now();
-    await append(tx, random, study.id, [entry('publication-withdrawn', now, { by: userId, id: row.id, reason })]);
+    await append(tx, deps, study.id, [entry('publication-withdrawn', now, { by: userId, id: row.id, reason })]);
     await store.withdrawPublication(tx, row.id, new Date(now), reason);
     await updateStudy(tx, study.id, {}, new Date(now));
     return ownPublicationView({ ...row, withdrawnAt: new Date(now), withdrawnReason: reason }, config.publicUrl);
@@ -136,7 +137,7 @@ export function shelve(deps: Deps, where: Where, userId: string, reason: string)
     if (study.state !== 'closed')
       throw new Problem('wrong-phase', 'Only a study that is closed and not published can be shelved.');
     const now = deps.clock.now();
-    await append(tx, deps.random, study.id, [entry('study-shelved', now, { by: userId, reason })]);
+    await append(tx, deps, study.id, [entry('study-shelved', now, { by: userId, reason })]);
     await updateStudy(tx, study.id, { state: 'shelved' }, new Date(now));
     return { ok: true };
   });
@@ -177,6 +178,8 @@ function readDocument(digest: string, document: string): Read {
       entries: study.entries(),
       answers: study.answers(),
       rooms: new Map(),
+      // Not in the document: tokens may still arrive.
+      heads: [],
     }),
     declared: studyEvents['publication-declared'].parse(study.payloadOf('publication-declared')),
   };
@@ -193,7 +196,8 @@ export function getPublication({ db, config }: Deps, id: string): Promise<Public
     const row = await store.findPublication(tx, id);
     if (row === null) throw nothingPublished();
     const read = kept.get(row.digest) ?? readDocument(row.digest, (await store.documentOf(tx, id, row.digest)) ?? '');
-    return publicationView({ row, publicUrl: config.publicUrl, ...read });
+    const heads = await signedHeadsOf(tx, row.studyId);
+    return publicationView({ row, publicUrl: config.publicUrl, ...read, heads });
   });
 }
 

@@ -5,6 +5,7 @@ import {
   type PublicationRow,
 } from '#shared/contracts/publications.ts';
 import type { Report } from '#shared/contracts/reports.ts';
+import type { SignedHead } from '#shared/contracts/signed-heads.ts';
 import { equationOfP } from '#shared/findings/format-probability.ts';
 import { methodOf } from '#shared/methods/methods.ts';
 import type { StudyPayloadOf } from '#shared/session/study-events.ts';
@@ -48,10 +49,11 @@ export type PublicationSource = {
   readonly publicUrl: string;
   readonly report: Report;
   readonly declared: StudyPayloadOf<'publication-declared'>;
+  readonly heads: readonly SignedHead[];
 };
 
 /** A publication, field by field. */
-export function publicationView({ row, publicUrl, report, declared }: PublicationSource): PublicationReply {
+export function publicationView({ row, publicUrl, report, declared, heads }: PublicationSource): PublicationReply {
   const { id, title, publisher, publishedAt, digest, bytes } = row;
   const { paid, supplied, ties } = declared;
   return {
@@ -66,6 +68,6 @@ export function publicationView({ row, publicUrl, report, declared }: Publicatio
     statements: { paid, supplied, ties },
     confirmations: declared.confirmations.map((name) => confirmations[name]),
     file: { digest, bytes, path: filePath(id, digest) },
-    report,
+    report: { ...report, record: { ...report.record, heads: [...heads] } },
   };
 }

@@ -1,4 +1,5 @@
 import type { Report, ReportRow } from '#shared/contracts/reports.ts';
+import type { SignedHead } from '#shared/contracts/signed-heads.ts';
 import { isClosed } from '#shared/contracts/studies.ts';
 import type { Entry } from '#shared/ledger/chain.ts';
 import { type ClosedStudy, publicationParts } from '#shared/ledger/publication-parts.ts';
@@ -12,6 +13,7 @@ import { type Tx, withTransaction } from '../../db/transaction.ts';
 import type { Deps } from '../../deps.ts';
 import { readRecord } from '../../ledger/ledger.ts';
 import { answersOfSessions, sessionsOfStudy } from '../sessions/sessions.store.ts';
+import { signedHeadsOf } from '../signed-heads/signed-heads.service.ts';
 import { protocolOf, studyOrProblem } from '../studies/studies.service.ts';
 import { listStudies } from '../studies/studies.store.ts';
 import type { Study } from '../studies/study.entity.ts';
@@ -30,6 +32,8 @@ export type ClosedRecord = ClosedStudy & {
   readonly study: { readonly id: string; readonly title: string };
   /** Where each session was held, by its number; beside the record. */
   readonly rooms: ReadonlyMap<number, string>;
+  /** Beside the record too. */
+  readonly heads: readonly SignedHead[];
 };
 
 /** Everything that a report says, from the record alone: what was checked, how blind it was, what was found. */
@@ -80,6 +84,7 @@ export async function closedRecord(tx: Tx, study: Study): Promise<ClosedRecord> 
       salt,
     })),
     rooms: new Map(sessions.map(({ number, room }) => [number, room])),
+    heads: await signedHeadsOf(tx, study.id),
   };
 }
 

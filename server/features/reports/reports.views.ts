@@ -1,4 +1,5 @@
 import type { Report } from '#shared/contracts/reports.ts';
+import type { SignedHead } from '#shared/contracts/signed-heads.ts';
 import type { Finding } from '#shared/findings/finding.ts';
 import type { Entry } from '#shared/ledger/chain.ts';
 import type { Check } from '#shared/ledger/verify.ts';
@@ -27,6 +28,7 @@ export type ReportSource = {
   readonly checks: readonly Check[];
   readonly rung: BlindingRung;
   readonly closing: StudyPayloadOf<'study-closed'>;
+  readonly heads: readonly SignedHead[];
 };
 
 function flowOf({ states, entries }: ReportSource): Report['flow'] {
@@ -154,7 +156,7 @@ function conditionsOf({ protocol: { conduct }, states, rung }: ReportSource): Re
 
 /** The report, field by field. */
 export function reportView(source: ReportSource): Report {
-  const { study, protocol, entries, states, answers, result, finding, checks, rung, closing } = source;
+  const { study, protocol, entries, states, answers, result, finding, checks, rung, closing, heads } = source;
   const method = methodOf(protocol.method);
   const key = revealedKey.parse(entries.find(({ kind }) => kind === 'key-revealed')?.payload);
   const sealing = entries.find(({ kind }) => kind === 'protocol-sealed');
@@ -190,6 +192,7 @@ export function reportView(source: ReportSource): Report {
     record: {
       entries: entries.length,
       head: head.digest,
+      heads: [...heads],
       checks: checks.map(({ name, outcome, reason }) => ({ name, outcome, reason })),
     },
   };

@@ -116,7 +116,7 @@ export function planSession(
       proctor: draft.proctorId,
       plan: sessionPlanOf(protocolOf(study)),
     };
-    await append(tx, random, study.id, [{ kind: 'session-planned', at: clock.now(), payload, session: number }]);
+    await append(tx, deps, study.id, [{ kind: 'session-planned', at: clock.now(), payload, session: number }]);
     await updateStudy(tx, study.id, {}, new Date(clock.now()));
     const { organisationId } = where;
     const url = pageAddresses.console(deps.config, organisationId, session.id);

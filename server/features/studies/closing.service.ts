@@ -32,7 +32,7 @@ async function endPlanned(tx: Tx, deps: Deps, study: Study, sessions: readonly S
       payload,
       session: number,
     }));
-    await append(tx, deps.random, study.id, entries);
+    await append(tx, deps, study.id, entries);
     await updateSession(tx, id, { phase: 'abandoned' });
   }
 }
@@ -62,7 +62,7 @@ async function closedEntry(
 
 async function recordResult(
   tx: Tx,
-  { random, clock }: Deps,
+  deps: Deps,
   study: Study,
   sessions: readonly Session[],
   key: RevealedKey,
@@ -76,7 +76,7 @@ async function recordResult(
   const held = answers.map(({ sessionId, trial, seat, choice }) => ({ session: sessionId, trial, seat, choice }));
   const result = runRegistered(protocol, states, key, held) as unknown as Json;
   const payload = { analysis: protocol.analysis.name, result };
-  await append(tx, random, study.id, [{ kind: 'result-recorded', at: clock.now(), payload, session: null }]);
+  await append(tx, deps, study.id, [{ kind: 'result-recorded', at: deps.clock.now(), payload, session: null }]);
 }
 
 /**
@@ -89,7 +89,7 @@ export function closeStudy(
   userId: string,
   reason: string,
 ): Promise<StudyReply> {
-  const { random, clock } = deps;
+  const { clock } = deps;
   return withTransaction(deps.db, async (tx) => {
     const study = await lockedStudy(tx, where);
     const sessions = await sessionsOfStudy(tx, study.id);
@@ -100,9 +100,9 @@ export function closeStudy(
         { pointer: '/reason', detail: 'Say why the study ends before its registered number of trials' },
       ]);
     await endPlanned(tx, deps, study, sessions);
-    await append(tx, random, study.id, [await closedEntry(tx, study, userId, complete, reason, clock.now())]);
+    await append(tx, deps, study.id, [await closedEntry(tx, study, userId, complete, reason, clock.now())]);
     const key = await reveal(tx, study.id, sessions);
-    await append(tx, random, study.id, [{ kind: 'key-revealed', at: clock.now(), payload: key, session: null }]);
+    await append(tx, deps, study.id, [{ kind: 'key-revealed', at: clock.now(), payload: key, session: null }]);
     await recordResult(tx, deps, study, sessions, key);
     await store.updateStudy(tx, study.id, { state: 'closed' }, new Date(clock.now()));
     return viewOf(tx, await studyOrProblem(tx, where));

@@ -11,6 +11,7 @@ import { pageAddresses } from '../../mail/page-addresses.ts';
 import type { Cable } from '../cables/cable.entity.ts';
 import { cablesById } from '../cables/cables.store.ts';
 import { sessionsOfStudies, sessionsOfStudy } from '../sessions/sessions.store.ts';
+import { signedHeadsOf } from '../signed-heads/signed-heads.service.ts';
 import { findById, membersOf, namesOf } from '../users/users.store.ts';
 import * as store from './studies.store.ts';
 import { studyRowView, studyView } from './studies.views.ts';
@@ -44,6 +45,7 @@ async function viewOf(tx: Tx, study: Study): Promise<StudyReply> {
     cableNames: [cableName(0), cableName(1)],
     sealing: entries.find((entry) => entry.kind === 'protocol-sealed') ?? null,
     deviations: entries.filter((entry) => entry.kind === 'deviation-recorded'),
+    heads: await signedHeadsOf(tx, study.id),
   });
 }
 
@@ -147,7 +149,7 @@ export function sealStudy(deps: Deps, where: Where, userId: string) {
     });
     const now = clock.now();
     const payload = { protocolVersion: 1, digest: protocolDigest(protocol), sealedBy: userId };
-    await append(tx, random, study.id, [{ kind: 'protocol-sealed', at: now, payload, session: null }]);
+    await append(tx, deps, study.id, [{ kind: 'protocol-sealed', at: now, payload, session: null }]);
     await store.updateStudy(tx, study.id, { state: 'sealed', protocol: canonicalJson(protocol) }, new Date(now));
     await tellCodeHolder(tx, deps, study);
     return viewOf(tx, await studyOrProblem(tx, where));
@@ -168,7 +170,7 @@ export function recordDeviation(deps: Deps, where: Where, text: string) {
       throw new Problem('wrong-phase', 'Deviations are recorded between sealing and closing.');
     const now = deps.clock.now();
     const payload = { session: null, text };
-    await append(tx, deps.random, study.id, [{ kind: 'deviation-recorded', at: now, payload, session: null }]);
+    await append(tx, deps, study.id, [{ kind: 'deviation-recorded', at: now, payload, session: null }]);
     await store.updateStudy(tx, study.id, {}, new Date(now));
     return viewOf(tx, await studyOrProblem(tx, where));
   });

@@ -1,3 +1,4 @@
+import type { SignedHead } from '#shared/contracts/signed-heads.ts';
 import type { Study as StudyReply, StudyRow } from '#shared/contracts/studies.ts';
 import type { Entry } from '#shared/ledger/chain.ts';
 import { studyEvents } from '#shared/session/study-events.ts';
@@ -52,11 +53,12 @@ export type StudyContext = {
   readonly cableNames: readonly [string, string];
   readonly sealing: Entry | null;
   readonly deviations: readonly Entry[];
+  readonly heads: readonly SignedHead[];
 };
 
 /** A study as its manager sees it before closing. */
 export function studyView(study: Study, context: StudyContext): StudyReply {
-  const { sessions, names, cableNames, sealing, deviations } = context;
+  const { sessions, names, cableNames, sealing, deviations, heads } = context;
   const nameOf = (id: string) => names.get(id) ?? 'unknown';
   const sealed = sealing === null ? null : studyEvents['protocol-sealed'].parse(sealing.payload);
   return {
@@ -73,6 +75,7 @@ export function studyView(study: Study, context: StudyContext): StudyReply {
             digest: sealed.digest,
             sealedAt: sealing.at,
             sealedBy: nameOf(sealed.sealedBy),
+            signed: heads.find(({ sequence }) => sequence === sealing.sequence) ?? null,
           },
     codes: study.codesState,
     progress: progressOf(study, sessions),

@@ -8,6 +8,7 @@ import { ReportConditions } from './report-conditions.tsx';
 import { ReportDistribution } from './report-distribution.tsx';
 import { ReportFigures } from './report-figures.tsx';
 import { ReportFlow } from './report-flow.tsx';
+import { ReportHeads } from './report-heads.tsx';
 import { ReportIncidents } from './report-incidents.tsx';
 import { ReportListeners } from './report-listeners.tsx';
 import { ReportProtocol } from './report-protocol.tsx';
@@ -54,6 +55,7 @@ export function ReportView({ report, back, actions }: ReportViewProps) {
       <ReportSessions sessions={report.sessions} cables={cables} method={method} />
       <ReportProtocol protocol={report.protocol} />
       <ReportRecord record={report.record} />
+      <ReportHeads record={report.record} />
     </article>
   );
 }

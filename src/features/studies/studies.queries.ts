@@ -19,7 +19,9 @@ export const studyQueries = {
       queryKey: [...studyQueries.all(), 'detail', organisationId, id],
       queryFn: ({ signal }) => call(studiesApi.get, { params: { organisationId, id } }, signal),
       // While sessions are held somebody may be watching how far they are.
-      refetchInterval: ({ state }) => (state.data?.state === 'collecting' ? followingMs : false),
+      // After sealing the token of the seal is on its way.
+      refetchInterval: ({ state: { data } }) =>
+        data?.state === 'collecting' || data?.sealed?.signed?.token === null ? followingMs : false,
     }),
 };
 

@@ -1,5 +1,8 @@
 import { notShown, type Publication } from '#shared/contracts/publications.ts';
 import type { Report } from '#shared/contracts/reports.ts';
+import { gapWords, localTimeWords, type SignedHead } from '#shared/contracts/signed-heads.ts';
+import { momentWords } from '#shared/ledger/moments.ts';
+import { readableFingerprint } from '#shared/ledger/readable-fingerprint.ts';
 import { methodOf } from '#shared/methods/methods.ts';
 import type { Portrait } from '#shared/methods/portrait.ts';
 import { type Html, html } from './html.ts';
@@ -129,6 +132,23 @@ function incidents({ voids, missing, deviations }: Report): Html {
     )}`;
 }
 
+function signedHeads(heads: readonly SignedHead[]): Html | null {
+  if (heads.length === 0) return null;
+  const lines = heads.map(({ moment, session: number, sequence, at, token }) => {
+    const which = `${momentWords[moment]}${number === null ? '' : `, session ${number}`}`;
+    const stamped =
+      token === null
+        ? 'waiting for a token'
+        : `time-stamped ${utc(token.time)} (${token.isLocal ? 'local' : token.authority}, ${gapWords(token.gapMs)})`;
+    return `${which}: entry ${sequence}, signed ${utc(at)}, ${stamped}`;
+  });
+  const keys = [...new Set(heads.map(({ key }) => key))];
+  return html`<h3 class="text-lg">Signed and time-stamped</h3>
+    ${list(lines, '')}
+    ${heads.some(({ token }) => token?.isLocal) ? html`<p class="max-w-3xl">${localTimeWords}</p>` : null}
+    ${facts(keys.map((key) => ({ label: 'Fingerprint of the key', value: html`<code>${readableFingerprint(key)}</code>` })))}`;
+}
+
 function verification({ file, report: { record, protocol } }: Publication): Html {
   return html`<p class="max-w-3xl">With JavaScript this page downloads the record and checks it in your browser, step by step. Without it, download the record and check it with the command “npm run verify”, or by hand as the guide “Check a result” says.</p>
     <p><a href="${file.path}" download>Download the record, ${Math.ceil(file.bytes / 1000)} kB</a></p>
@@ -137,6 +157,7 @@ function verification({ file, report: { record, protocol } }: Publication): Html
       { label: `Head of the record, entry ${record.entries}`, value: html`<code>${record.head}</code>` },
       { label: `Protocol, sealed ${utc(protocol.sealedAt)}`, value: html`<code>${protocol.digest}</code>` },
     ])}
+    ${signedHeads(record.heads)}
     <h3 class="text-lg">What no software can show</h3>
     <p class="max-w-3xl">${notShown} Repeating the test is the cure.</p>`;
 }

@@ -2,6 +2,7 @@ import type { Study } from '#shared/contracts/studies.ts';
 import { formatDateTime } from '../../../lib/format.ts';
 import { CopyButton } from '../../../ui/copy-button.tsx';
 import { type Fact, Facts } from '../../../ui/facts.tsx';
+import { SealSignature } from './seal-signature.tsx';
 
 /** Who sealed what and when, and where the record stands. */
 export function SealFacts({ study }: { study: Study }) {
@@ -20,6 +21,7 @@ export function SealFacts({ study }: { study: Study }) {
       <Facts title="Seal and record" facts={facts} />
       {sealed ? <Digest label="Digest of the protocol" value={sealed.digest} /> : null}
       {record.head ? <Digest label="Head of the record" value={record.head} /> : null}
+      {sealed?.signed ? <SealSignature signed={sealed.signed} /> : null}
     </div>
   );
 }
