@@ -19,6 +19,7 @@ import { mailRoutes } from './features/mail/mail.routes.ts';
 import { peopleRoutes } from './features/people/people.routes.ts';
 import { publicPages } from './features/publications/public-pages.ts';
 import { publicationsRoutes } from './features/publications/publications.routes.ts';
+import { registryRoutes } from './features/registry/registry.routes.ts';
 import { reportsRoutes } from './features/reports/reports.routes.ts';
 import { sessionsRoutes } from './features/sessions/sessions.routes.ts';
 import { signInRoutes } from './features/sign-in/sign-in.routes.ts';
@@ -114,6 +115,7 @@ export function createApp(deps: Deps) {
   attendancesRoutes(api, access, deps, sittings);
   reportsRoutes(api, access, deps);
   publicationsRoutes(api, access, deps);
+  registryRoutes(api, access, deps);
   mailRoutes(api, access, deps);
   signingKeysRoutes(api, access, deps);
   signedHeadsRoutes(api, access, deps);

@@ -20,6 +20,8 @@ import { Study } from './features/studies/study.entity.ts';
 import { User } from './features/users/user.entity.ts';
 import { RecordEntry } from './ledger/entry.entity.ts';
 import { HeadSignatureRow } from './ledger/head-signature.entity.ts';
+import { RegistryHeadRow } from './ledger/registry-head.entity.ts';
+import { RegistryLeafRow } from './ledger/registry-leaf.entity.ts';
 import { SigningKey } from './ledger/signing-key.entity.ts';
 import { OutgoingMail } from './mail/outgoing-mail.entity.ts';
 import { TimestampToken } from './timestamps/timestamp-token.entity.ts';
@@ -37,6 +39,8 @@ export const entities = [
   RecordEntry,
   SigningKey,
   HeadSignatureRow,
+  RegistryLeafRow,
+  RegistryHeadRow,
   TokenRequest,
   TimestampToken,
   Audit,

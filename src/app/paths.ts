@@ -1,3 +1,5 @@
+import { registryPath } from '#shared/contracts/registry.ts';
+
 /** Every address of the application. The route table is built from the same functions. */
 export const paths = {
   start: () => '/',
@@ -16,6 +18,7 @@ export const paths = {
   /** Public: what is published, for anybody. */
   publications: () => '/p',
   publication: (id: string) => `/p/${id}`,
+  registry: registryPath,
 
   home: (organisationId: string) => organisation(organisationId),
 

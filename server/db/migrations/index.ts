@@ -7,6 +7,7 @@ import { Signatures1796140800000 } from './1796140800000-signatures.ts';
 import { Timestamps1796140900000 } from './1796140900000-timestamps.ts';
 import { ImmutableRecord1796141000000 } from './1796141000000-immutable-record.ts';
 import { Audits1796141100000 } from './1796141100000-audits.ts';
+import { Registry1796142000000 } from './1796142000000-registry.ts';
 
 /** Every migration, oldest first. */
 export const migrations = [
@@ -19,4 +20,5 @@ export const migrations = [
   Timestamps1796140900000,
   ImmutableRecord1796141000000,
   Audits1796141100000,
+  Registry1796142000000,
 ];

@@ -9,7 +9,15 @@ const dayMs = 24 * 60 * 60 * 1000;
 const keepMs = 90 * dayMs;
 
 /** What makes the database refuse to change a record; without one of them it would not. */
-export const recordTriggers = ['record_entries', 'head_signatures', 'timestamp_tokens', 'answers', 'signing_keys']
+export const recordTriggers = [
+  'record_entries',
+  'head_signatures',
+  'timestamp_tokens',
+  'answers',
+  'signing_keys',
+  'registry_leaves',
+  'registry_heads',
+]
   .flatMap((table) => [`${table}_no_update`, `${table}_no_delete`])
   .sort();
 

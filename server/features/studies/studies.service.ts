@@ -5,6 +5,7 @@ import { type Protocol, type ProtocolCable, protocolDigest, protocolFromDraft } 
 import { type Tx, withTransaction } from '../../db/transaction.ts';
 import type { Deps } from '../../deps.ts';
 import { append, readKinds } from '../../ledger/ledger.ts';
+import { enterProtocol } from '../../ledger/registry-log.ts';
 import { codesToDrawMail } from '../../mail/mails.ts';
 import { postMail } from '../../mail/outbox.ts';
 import { pageAddresses } from '../../mail/page-addresses.ts';
@@ -148,7 +149,10 @@ export function sealStudy(deps: Deps, where: Where, userId: string) {
       cables: [protocolCable(cables, study.draft.cables[0]), protocolCable(cables, study.draft.cables[1])],
     });
     const now = clock.now();
-    const payload = { protocolVersion: 1, digest: protocolDigest(protocol), sealedBy: userId };
+    const digest = protocolDigest(protocol);
+    const sealed = { study: study.id, version: 1, digest, sealedAt: new Date(now).toISOString() };
+    await enterProtocol(tx, deps, study.organisationId, sealed);
+    const payload = { protocolVersion: 1, digest, sealedBy: userId };
     await append(tx, deps, study.id, [{ kind: 'protocol-sealed', at: now, payload, session: null }]);
     await store.updateStudy(tx, study.id, { state: 'sealed', protocol: canonicalJson(protocol) }, new Date(now));
     await tellCodeHolder(tx, deps, study);

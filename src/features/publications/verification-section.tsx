@@ -1,16 +1,17 @@
+import { Link } from 'react-router-dom';
 import { notShown, type Publication } from '#shared/contracts/publications.ts';
 import { formatNumber } from '../../lib/format.ts';
 import { Button } from '../../ui/button.tsx';
 import { buttonLook } from '../../ui/button-look.ts';
 import { CopyButton } from '../../ui/copy-button.tsx';
+import { FileDrop } from '../../ui/file-drop.tsx';
 import { CheckList } from './check-list.tsx';
-import { FileDrop } from './file-drop.tsx';
 import { useVerification } from './use-verification.ts';
 import { VerificationOutcome } from './verification-outcome.tsx';
 
 /** The record, checked in the visitor's own browser from the downloaded file; and the file itself, to be checked elsewhere. */
 export function VerificationSection({ publication }: { publication: Publication }) {
-  const { file } = publication;
+  const { file, registry } = publication;
   const { verification, checkPublished, checkFile } = useVerification(file.path);
   const { phase, fileName, checks } = verification;
   const isRunning = phase === 'fetching' || phase === 'checking';
@@ -33,12 +34,16 @@ export function VerificationSection({ publication }: { publication: Publication 
           </Button>
         </div>
       </div>
-      <WithoutUs file={file} onFile={checkFile} />
+      <WithoutUs file={file} registry={registry} onFile={checkFile} />
     </section>
   );
 }
 
-function WithoutUs({ file, onFile }: { file: Publication['file']; onFile: (file: File) => void }) {
+function WithoutUs({
+  file,
+  registry,
+  onFile,
+}: Pick<Publication, 'file' | 'registry'> & { onFile: (file: File) => void }) {
   return (
     <div className="flex min-w-0 flex-col gap-8">
       <section aria-labelledby="without-us" className="flex flex-col gap-3 border-t-2 border-ink pt-4">
@@ -56,6 +61,7 @@ function WithoutUs({ file, onFile }: { file: Publication['file']; onFile: (file:
         <p className="text-soft">SHA-256 of the published file, as sha256sum prints it</p>
         <code className="break-all">{file.digest}</code>
         <CopyButton text={file.digest} label="Copy the digest" />
+        <Link to={registry}>Every protocol that this publisher has sealed</Link>
       </section>
       <section aria-labelledby="not-shown" className="flex flex-col gap-2 border-t-2 border-ink pt-4">
         <h3 id="not-shown" className="text-base font-bold">

@@ -149,7 +149,7 @@ function signedHeads(heads: readonly SignedHead[]): Html | null {
     ${facts(keys.map((key) => ({ label: 'Fingerprint of the key', value: html`<code>${readableFingerprint(key)}</code>` })))}`;
 }
 
-function verification({ file, report: { record, protocol } }: Publication): Html {
+function verification({ file, registry, report: { record, protocol } }: Publication): Html {
   return html`<p class="max-w-3xl">With JavaScript this page downloads the record and checks it in your browser, step by step. Without it, download the record and check it with the command “npm run verify”, or by hand as the guide “Check a result” says.</p>
     <p><a href="${file.path}" download>Download the record, ${Math.ceil(file.bytes / 1000)} kB</a></p>
     ${facts([
@@ -157,6 +157,7 @@ function verification({ file, report: { record, protocol } }: Publication): Html
       { label: `Head of the record, entry ${record.entries}`, value: html`<code>${record.head}</code>` },
       { label: `Protocol, sealed ${utc(protocol.sealedAt)}`, value: html`<code>${protocol.digest}</code>` },
     ])}
+    <p><a href="${registry}">Every protocol that this publisher has sealed</a></p>
     ${signedHeads(record.heads)}
     <h3 class="text-lg">What no software can show</h3>
     <p class="max-w-3xl">${notShown} Repeating the test is the cure.</p>`;
