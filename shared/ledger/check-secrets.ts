@@ -13,8 +13,12 @@ export function checkCommitments(study: StudyReading): Verdict {
   const secrets = study.secrets();
   const { salt, rows } = secrets.codeKey;
   const faults: string[] = [];
-  if (study.payloadOf('code-key-committed')?.commitment !== codeKeyCommitment(salt, rows))
+  const committed = study.entries().findLast(({ kind }) => kind === 'code-key-committed');
+  const seating = study.entries().find(({ kind }) => kind === 'seating-opened');
+  if (committed?.payload.commitment !== codeKeyCommitment(salt, rows))
     faults.push('The revealed code key is not the one committed to.');
+  if (committed !== undefined && seating !== undefined && committed.sequence > seating.sequence)
+    faults.push('The code key was committed to after the first session had opened.');
   for (const { payload } of study.entries().filter(({ kind }) => kind === 'seating-opened')) {
     const draw = secrets.draws.find(({ session }) => session === payload.session);
     if (draw === undefined || drawSecretCommitment(draw.salt, draw.secret) !== payload.commitment)
