@@ -109,7 +109,7 @@ export function createApp(deps: Deps) {
   peopleRoutes(api, access, deps, consoles);
   invitationsRoutes(api, access, deps);
   cablesRoutes(api, access, deps);
-  studiesRoutes(api, access, deps);
+  studiesRoutes(api, access, deps, sittings);
   codesRoutes(api, access, deps);
   sessionsRoutes(api, access, deps, sittings);
   attendancesRoutes(api, access, deps, sittings);

@@ -16,6 +16,7 @@ import { Seat } from './features/sessions/seat.entity.ts';
 import { Session } from './features/sessions/session.entity.ts';
 import { SignInAttempt } from './features/sign-in/sign-in-attempt.entity.ts';
 import { WebSession } from './features/sign-in/web-session.entity.ts';
+import { ProtocolVersion } from './features/studies/protocol-version.entity.ts';
 import { Study } from './features/studies/study.entity.ts';
 import { User } from './features/users/user.entity.ts';
 import { RecordEntry } from './ledger/entry.entity.ts';
@@ -36,6 +37,7 @@ export const entities = [
   Cable,
   Specimen,
   Study,
+  ProtocolVersion,
   RecordEntry,
   SigningKey,
   HeadSignatureRow,

@@ -31,6 +31,7 @@ export const paths = {
   newStudy: (organisationId: string) => `${organisation(organisationId)}/studies/new`,
   study: (organisationId: string, id: string) => `${organisation(organisationId)}/studies/${id}`,
   editStudy: (organisationId: string, id: string) => `${organisation(organisationId)}/studies/${id}/edit`,
+  amendStudy: (organisationId: string, id: string) => `${organisation(organisationId)}/studies/${id}/amend`,
   codes: (organisationId: string, studyId: string) => `${organisation(organisationId)}/studies/${studyId}/codes`,
   labels: (organisationId: string, studyId: string) => `${organisation(organisationId)}/studies/${studyId}/labels`,
   report: (organisationId: string, studyId: string) => `${organisation(organisationId)}/studies/${studyId}/report`,

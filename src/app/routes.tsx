@@ -23,6 +23,7 @@ const organisationPages: RouteObject[] = [
   { path: paths.newStudy(organisationId), lazy: () => import('../pages/study-new-page.tsx') },
   { path: paths.study(organisationId, id), lazy: () => import('../pages/study-page.tsx') },
   { path: paths.editStudy(organisationId, id), lazy: () => import('../pages/study-edit-page.tsx') },
+  { path: paths.amendStudy(organisationId, id), lazy: () => import('../pages/study-amend-page.tsx') },
   { path: paths.codes(organisationId, id), lazy: () => import('../pages/codes-page.tsx') },
   { path: paths.labels(organisationId, id), lazy: () => import('../pages/labels-page.tsx') },
   { path: paths.report(organisationId, id), lazy: () => import('../pages/report-page.tsx') },

@@ -17,6 +17,7 @@ export const recordTriggers = [
   'signing_keys',
   'registry_leaves',
   'registry_heads',
+  'protocol_versions',
 ]
   .flatMap((table) => [`${table}_no_update`, `${table}_no_delete`])
   .sort();

@@ -132,6 +132,27 @@ function incidents({ voids, missing, deviations }: Report): Html {
     )}`;
 }
 
+/** What each amendment changed; nothing where there was none. */
+function versions(all: Report['protocol']['versions']): Html | null {
+  if (all.length < 2) return null;
+  return html`<h3 class="text-lg">Its versions</h3>
+    <ol class="flex flex-col gap-6">${all.map(
+      ({ version, sealedAt, reason, changes }) =>
+        html`<li class="flex min-w-0 flex-col gap-2">
+          <p><strong>Version ${version}</strong>, sealed ${utc(sealedAt)}, before any session opened.${reason === null ? '' : ` ${reason}`}</p>
+          ${
+            changes.length === 0
+              ? null
+              : table(
+                  `What version ${version} changed`,
+                  ['Line', 'Before', 'After'],
+                  changes.map(({ label, before, after }) => [label, before || 'none', after || 'none']),
+                )
+          }
+        </li>`,
+    )}</ol>`;
+}
+
 function signedHeads(heads: readonly SignedHead[]): Html | null {
   if (heads.length === 0) return null;
   const lines = heads.map(({ moment, session: number, sequence, at, token }) => {
@@ -186,7 +207,7 @@ export function publicationContent(publication: Publication): Html {
       ${section('Checks of the answers', checks(report))}
       ${section('Every session', html`<ol class="flex flex-col gap-8">${report.sessions.map(session)}</ol>`)}
       ${section('What did not go as planned', incidents(report))}
-      ${section('The sealed protocol', facts(report.protocol.facts))}
+      ${section('The sealed protocol', html`${facts(report.protocol.facts)}${versions(report.protocol.versions)}`)}
     </article>`,
   );
 }
