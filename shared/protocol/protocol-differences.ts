@@ -4,7 +4,8 @@ import { methodOf } from '../methods/methods.ts';
 import { analysisFacts } from './analysis-facts.ts';
 import type { Protocol, ProtocolCable } from './protocol.ts';
 
-type Line = { label: string; value: string };
+/** A line, and what it means beyond its words: two cables, pieces or people may bear one name. */
+type Line = { label: string; value: string; ids?: string };
 
 const rigWords = { loudspeaker: 'Loudspeaker', line: 'Line level', headphone: 'Headphone' };
 const cableLabels = ['One cable', 'The other cable'] as const;
@@ -13,8 +14,12 @@ function cableLines(cable: ProtocolCable, label: string): Line[] {
   const { name, kind, lengthMm, description, specimens } = cable;
   const pieces = specimens.map(({ serial, note }) => (note === '' ? serial : `${serial} (${note})`));
   return [
-    { label, value: `${name}, ${kind}, ${lengthMm / 1000} m${description === '' ? '' : `. ${description}`}` },
-    { label: `${label}, specimens`, value: pieces.join(', ') },
+    {
+      label,
+      value: `${name}, ${kind}, ${lengthMm / 1000} m${description === '' ? '' : `. ${description}`}`,
+      ids: cable.id,
+    },
+    { label: `${label}, specimens`, value: pieces.join(', '), ids: specimens.map(({ id }) => id).join() },
   ];
 }
 
@@ -49,7 +54,7 @@ function linesOf(protocol: Protocol, nameOf: (person: string) => string): Line[]
     { label: 'Every change', value: `${conduct.changeS} s, real or not` },
     { label: 'Answer window', value: `${conduct.answerS} s` },
     { label: 'Confidence', value: design.confidence ? 'asked with every answer' : 'not asked' },
-    { label: 'Code holder', value: nameOf(design.codeHolder) },
+    { label: 'Code holder', value: nameOf(design.codeHolder), ids: design.codeHolder },
   ];
 }
 
@@ -70,18 +75,11 @@ export function protocolDifferences(
   if (substance(before) === substance(after)) return [];
   const [old, next] = [linesOf(before, nameOf), linesOf(after, nameOf)];
   const labels = [...new Set([...old, ...next].map(({ label }) => label))];
-  const valueIn = (lines: readonly Line[], wanted: string) => lines.find(({ label }) => label === wanted)?.value ?? '';
-  const differences = labels
-    .map((label) => ({ label, before: valueIn(old, label), after: valueIn(next, label) }))
-    .filter((line) => line.before !== line.after);
-  // Two cables, pieces or people may bear one name.
-  return differences.length > 0
-    ? differences
-    : [
-        {
-          label: 'Which cables, specimens or code holder are meant',
-          before: 'as sealed',
-          after: 'others of the same name',
-        },
-      ];
+  const lineIn = (lines: readonly Line[], wanted: string) => lines.find(({ label }) => label === wanted);
+  return labels.flatMap((label) => {
+    const [was, is] = [lineIn(old, label), lineIn(next, label)];
+    const [before, after] = [was?.value ?? '', is?.value ?? ''];
+    if (before !== after) return { label, before, after };
+    return was?.ids === is?.ids ? [] : { label, before, after: `${after} (another of the same name)` };
+  });
 }

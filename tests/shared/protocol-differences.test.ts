@@ -28,6 +28,24 @@ describe('what an amendment changes', () => {
     expect(differences({ ...sealed, version: 2, salt: 'f'.repeat(64) })).toEqual([]);
   });
 
+  it('tells one cable, specimen or person from another of the same name, whatever else changes [J2]', () => {
+    const [first, second] = sealed.cables;
+    const design = { ...sealed.design, trials: 12, codeHolder: first.id };
+    const other = {
+      ...first,
+      id: second.id,
+      specimens: second.specimens.map((one, n) => ({ ...one, serial: first.specimens[n]?.serial ?? '' })),
+    };
+    const found = protocolDifferences(sealed, { ...sealed, cables: [other, second], design }, () => 'Ada');
+    expect(found.map(({ label }) => label)).toEqual([
+      'One cable',
+      'One cable, specimens',
+      'Trials per session',
+      'Code holder',
+    ]);
+    expect(found.at(-1)).toEqual({ label: 'Code holder', before: 'Ada', after: 'Ada (another of the same name)' });
+  });
+
   /** Every place of a value in it, as a path. */
   function placesIn(value: Json, path: readonly string[] = []): string[][] {
     if (typeof value !== 'object' || value === null) return [[...path]];
