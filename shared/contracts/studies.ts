@@ -135,8 +135,8 @@ export const amendmentPreview = z.strictObject({
   /** The version that it amends. */
   amends: z.int(),
   changes: z.array(protocolDifference),
-  /** Whether the codes that are drawn become void. */
-  voidsCodes: z.boolean(),
+  /** What becomes of the codes: none are drawn, or they stay in use, or they become void. */
+  codes: z.enum(['none', 'kept', 'void']),
   sessionsReplanned: z.int(),
 });
 export type AmendmentPreview = z.output<typeof amendmentPreview>;

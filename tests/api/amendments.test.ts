@@ -56,7 +56,7 @@ describe('an amended protocol', () => {
           after: 'Player, another amplifier, loudspeakers',
         },
       ],
-      voidsCodes: false,
+      codes: 'kept',
       sessionsReplanned: 1,
     });
     expect(await record()).toEqual(before);
@@ -135,7 +135,7 @@ describe('an amended protocol', () => {
       cables: [{ ...cables[0], specimenIds: [...cables[0].specimenIds, second] }, cables[1]],
     });
     expect((await preview(draft)).body).toMatchObject({
-      voidsCodes: true,
+      codes: 'void',
       changes: [{ label: 'One cable, specimens', before: 'N-1', after: 'N-1, N-2' }],
     });
     const codes = async () => (await study.holder.get(`${study.at}/codes`).expect(200)).body;
@@ -163,7 +163,7 @@ describe('an amended protocol', () => {
 
     const otherHolder = await changed({ codeHolderId: people.reviewer.id });
     expect((await preview(otherHolder)).body).toMatchObject({
-      voidsCodes: true,
+      codes: 'void',
       changes: [{ label: 'Code holder', before: 'codes of Harbour', after: 'reviewer of Harbour' }],
     });
   });

@@ -71,7 +71,7 @@ export function previewAmendment({ db }: Deps, where: Where, draft: StudyDraft):
     return {
       amends: before.version,
       changes: protocolDifferences(before, after, (id) => names.get(id) ?? 'unknown'),
-      voidsCodes,
+      codes: study.codesState === 'none' ? 'none' : voidsCodes ? 'void' : 'kept',
       sessionsReplanned: planned.length,
     };
   });

@@ -82,13 +82,17 @@ export function SealAmendment({ organisationId, studyId, draft, preview, onBack,
   );
 }
 
-function followsFrom({ amends, voidsCodes, sessionsReplanned }: AmendmentPreview): string[] {
+const codesWords: Record<AmendmentPreview['codes'], string> = {
+  none: 'No codes are drawn yet; they will be drawn for the new version.',
+  kept: 'The blind codes stay in use: specimens and code holder are the same.',
+  void: 'The blind codes are void: specimens or code holder are others. The code holder takes the old sleeves off and draws new codes; no session opens before.',
+};
+
+function followsFrom({ amends, codes, sessionsReplanned }: AmendmentPreview): string[] {
   return [
-    `Version ${amends} is kept. Both versions, the reason and every difference are published with the study.`,
+    `Version ${amends} is kept. Every version, its reason and its differences are published with the study.`,
     'The new digest goes on the record and, at once, into the public registry.',
-    voidsCodes
-      ? 'The blind codes are void: specimens or code holder are others. The code holder takes the old sleeves off and draws new codes; no session opens before.'
-      : 'Codes that are drawn stay in use: specimens and code holder are the same.',
+    codesWords[codes],
     sessionsReplanned === 0
       ? 'No session is planned yet.'
       : `${formatCount(sessionsReplanned, 'planned session')} will go by the new version. Listeners who are invited are not told.`,
