@@ -34,6 +34,9 @@ export default defineConfig({
           testTimeout: 30_000,
           hookTimeout: 60_000,
           maxWorkers: 2,
+          globalSetup: 'tests/support/global-setup.ts',
+          // The modules of the server and a migrated database serve a worker from its first file to its last.
+          isolate: false,
         },
       },
     ],

@@ -1,8 +1,11 @@
 import { readFileSync } from 'node:fs';
+import { checksOfBundle } from '#shared/bundle/verify-bundle.ts';
+import { isZip } from '#shared/bundle/zip.ts';
 import { fileDigest } from '#shared/ledger/digest.ts';
-import { checksOfFile } from '#shared/ledger/verify.ts';
+import { type Check, checksOfFile } from '#shared/ledger/verify.ts';
 
-// npm run verify <file>: the checks of a downloaded publication, offline, by the code that the public page runs.
+// npm run verify -- FILE [--json]: the checks of a downloaded bundle, or of the record alone, offline, by the code that the
+// public page runs. Status 0: every line passed; 1: a line failed; 2: none failed, and not every one can be checked here.
 
 function textOf(bytes: Uint8Array): string | null {
   try {
@@ -12,13 +15,39 @@ function textOf(bytes: Uint8Array): string | null {
   }
 }
 
-const [file] = process.argv.slice(2);
-if (file === undefined) {
-  process.stderr.write('Say which file: npm run verify -- fairlead-1a2b3c4d.json\n');
-  process.exit(2);
+function giveUp(words: string): never {
+  process.stderr.write(`${words}\n`);
+  process.exit(3);
 }
-const bytes = readFileSync(file);
-process.stdout.write(`SHA-256 ${fileDigest(bytes)}\n\n`);
-const checks = [...checksOfFile(textOf(bytes))];
-for (const { name, outcome, reason } of checks) process.stdout.write(`${outcome.padEnd(14)}${name}: ${reason}\n`);
-process.exit(checks.every(({ outcome }) => outcome === 'pass') ? 0 : 1);
+
+function read(file: string): Uint8Array {
+  try {
+    return readFileSync(file);
+  } catch (error) {
+    return giveUp(`${file} cannot be read: ${error instanceof Error ? error.message : String(error)}`);
+  }
+}
+
+const wanted = process.argv.slice(2);
+const isJson = wanted.includes('--json');
+const files = wanted.filter((word) => word !== '--json');
+const [file] = files;
+if (file === undefined || files.length > 1 || file.startsWith('--'))
+  giveUp('Say which file: npm run verify -- fairlead-1a2b3c4d.zip [--json]');
+const bytes = read(file);
+const digest = fileDigest(bytes);
+const checks: Check[] = [];
+if (isZip(bytes)) for await (const check of checksOfBundle(bytes, globalThis.crypto)) checks.push(check);
+else checks.push(...checksOfFile(textOf(bytes)));
+
+const failed = checks.some(({ outcome }) => outcome === 'fail');
+const isWhole = checks.every(({ outcome }) => outcome === 'pass');
+const status = failed ? 1 : isWhole ? 0 : 2;
+if (isJson) process.stdout.write(`${JSON.stringify({ file, sha256: digest, status, checks }, null, 2)}\n`);
+else {
+  process.stdout.write(`SHA-256 ${digest}\n\n`);
+  for (const { name, outcome, reason } of checks) process.stdout.write(`${outcome.padEnd(14)}${name}: ${reason}\n`);
+  const words = ['Every line passes.', 'A line fails.', 'No line fails; not every one can be checked.'];
+  process.stdout.write(`\n${words[status]}\n`);
+}
+process.exit(status);

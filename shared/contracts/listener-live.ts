@@ -83,6 +83,8 @@ export const listenerView = z.strictObject({
     }),
   ),
   question: z.strictObject({
+    /** What a trial presents and what is asked, told before the first one. */
+    explanation: z.string(),
     text: z.string(),
     /** Said during the last presentation: what is asked next. */
     announcement: z.string(),

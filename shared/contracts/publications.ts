@@ -80,6 +80,8 @@ export const publication = z.strictObject({
   file: z.strictObject({ digest: z.string(), bytes: z.int(), path: z.string() }),
   /** Where the publisher's registry of sealed protocols stands. */
   registry: z.string(),
+  /** Where the bundle is: the document with tables, signatures, tokens and what recomputes its figures. */
+  bundle: z.string(),
   report,
 });
 export type Publication = z.output<typeof publication>;

@@ -1,6 +1,7 @@
 import { contributionCommitment } from '../session/answer-leaf.ts';
 import { codeKeyCommitment, drawSecretCommitment } from '../session/commitments.ts';
 import { revealedDraw } from '../session/counted-trials.ts';
+import { revealedKey } from '../session/revealed-key.ts';
 import { canonicalJson, type Json } from './canonical-json.ts';
 import type { PublishedDraw } from './publication-parts.ts';
 import type { StudyReading } from './study-reading.ts';
@@ -11,14 +12,7 @@ const textOf = (value: unknown) => canonicalJson(value as Json);
 /** What was revealed at closing is what had been committed to before anybody listened; the phones’ numbers too. */
 export function checkCommitments(study: StudyReading): Verdict {
   const secrets = study.secrets();
-  const { salt, rows } = secrets.codeKey;
   const faults: string[] = [];
-  const committed = study.entries().findLast(({ kind }) => kind === 'code-key-committed');
-  const seating = study.entries().find(({ kind }) => kind === 'seating-opened');
-  if (committed?.payload.commitment !== codeKeyCommitment(salt, rows))
-    faults.push('The revealed code key is not the one committed to.');
-  if (committed !== undefined && seating !== undefined && committed.sequence > seating.sequence)
-    faults.push('The code key was committed to after the first session had opened.');
   for (const { payload } of study.entries().filter(({ kind }) => kind === 'seating-opened')) {
     const draw = secrets.draws.find(({ session }) => session === payload.session);
     if (draw === undefined || drawSecretCommitment(draw.salt, draw.secret) !== payload.commitment)
@@ -28,13 +22,31 @@ export function checkCommitments(study: StudyReading): Verdict {
     for (const { seat, revealed, commitment } of seats)
       if (revealed !== null && contributionCommitment(revealed) !== commitment)
         faults.push(`Session ${session}, ${seat}: the revealed number is not the one committed to.`);
-  if (textOf(secrets) !== textOf(study.payloadOf('key-revealed') ?? null))
+  const recorded = revealedKey.parse(study.payloadOf('key-revealed'));
+  if (textOf(secrets.draws) !== textOf(recorded.draws))
     faults.push('The secrets are not those that the record reveals.');
   const phones = study.sessions().flatMap(({ seats }) => seats.filter(({ revealed }) => revealed !== null));
   return {
     faults,
-    held: `The code key, ${secrets.draws.length} session secrets and the numbers of ${phones.length} phones.`,
+    held: `${secrets.draws.length} session secrets and the numbers of ${phones.length} phones.`,
   };
+}
+
+/** Which code is which specimen was committed to before anybody sat down, and revealed as it was. */
+export function checkCodeKey(study: StudyReading): Verdict {
+  const { codeKey } = study.secrets();
+  const entries = study.entries();
+  const committed = entries.filter(({ kind }) => kind === 'code-key-committed').at(-1);
+  const faults: string[] = [];
+  if (committed?.payload.commitment !== codeKeyCommitment(codeKey.salt, codeKey.rows))
+    faults.push('The revealed code key is not the one committed to.');
+  const seating = entries.find(({ kind }) => kind === 'seating-opened');
+  if (committed !== undefined && seating !== undefined && committed.sequence > seating.sequence)
+    faults.push('The code key was committed to after somebody had sat down.');
+  const recorded = revealedKey.parse(study.payloadOf('key-revealed'));
+  if (textOf(codeKey) !== textOf(recorded.codeKey)) faults.push('The code key is not the one that the record reveals.');
+  const of = codeKey.rows.length;
+  return { faults, held: `${of} codes, committed to with entry ${committed?.sequence} before anybody sat down.` };
 }
 
 /** Every draw follows from the committed secret and the phones’ numbers in the order that the record lists. */

@@ -11,7 +11,8 @@ import type { PublicationParts, PublishedDraw } from './publication-parts.ts';
 
 const hex = (bytes: number) => z.string().regex(new RegExp(`^[0-9a-f]{${bytes * 2}}$`));
 
-const entry = z.strictObject({
+/** An entry as it is read from a file. */
+export const entryShape = z.strictObject({
   study: z.string(),
   sequence: z.int(),
   at: z.string(),
@@ -42,14 +43,14 @@ const answer = z.strictObject({
 /** What a part must look like to be read at all, in words for people. */
 export class Unreadable extends Error {}
 
-function read<T>(what: string, schema: z.ZodType<T>, value: unknown): T {
+export function read<T>(what: string, schema: z.ZodType<T>, value: unknown): T {
   const parsed = schema.safeParse(value);
   if (parsed.success) return parsed.data;
   const [issue] = parsed.error.issues;
   throw new Unreadable(`${what} cannot be read: ${issue?.path.join('/') || 'the whole'}, ${issue?.message}.`);
 }
 
-function once<T>(make: () => T): () => T {
+export function once<T>(make: () => T): () => T {
   let made: { value: T } | null = null;
   return () => {
     made ??= { value: make() };
@@ -65,7 +66,7 @@ export class StudyReading {
     this.parts = parts;
   }
 
-  readonly entries = once((): readonly Entry[] => read('The record', z.array(entry).min(1), this.parts.record));
+  readonly entries = once((): readonly Entry[] => read('The record', z.array(entryShape).min(1), this.parts.record));
   readonly protocol = once((): Protocol => read('The protocol', protocol, this.parts.protocol));
   /** The versions before the one in force, in order. */
   readonly earlierProtocols = once((): readonly Protocol[] =>

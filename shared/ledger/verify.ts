@@ -1,21 +1,12 @@
-import { checkAnswers, checkTrials } from './check-answers.ts';
+import { checkAnswers, checkSessions, checkTrials } from './check-answers.ts';
+import { checkFlow, checkRules } from './check-counts.ts';
 import { checkFigures } from './check-figures.ts';
 import { checkListeners } from './check-listeners.ts';
+import { type CheckId, type NamedCheck, nameOfCheck, recordCheckNames } from './check-names.ts';
 import { checkProtocol, checkRecord } from './check-record.ts';
-import { checkCommitments, checkDraws } from './check-secrets.ts';
+import { checkCodeKey, checkCommitments, checkDraws } from './check-secrets.ts';
 import { type PublicationParts, readPublication } from './publication-parts.ts';
 import { StudyReading } from './study-reading.ts';
-
-export type CheckId =
-  | 'file'
-  | 'record'
-  | 'protocol'
-  | 'commitments'
-  | 'draws'
-  | 'answers'
-  | 'trials'
-  | 'listeners'
-  | 'figures';
 
 export type Check = {
   readonly id: CheckId;
@@ -24,51 +15,48 @@ export type Check = {
   readonly reason: string;
 };
 
-/** What a check found: faults, the first of which is told, or what was seen to hold. */
-export type Verdict = { readonly faults: readonly string[]; readonly held: string };
+/** What a check found: faults, the first of which is told; else what cannot be told here and why; else what was seen to hold. */
+export type Verdict = { readonly faults: readonly string[]; readonly open?: string; readonly held: string };
 
-type Step = {
+export type Step<T> = {
   readonly id: CheckId;
-  readonly name: string;
   /** What is compared with something altered says nothing: these must have passed. */
   readonly restsOn: readonly CheckId[];
-  readonly run: (study: StudyReading) => Verdict;
+  readonly run: (read: T) => Verdict;
 };
 
-const steps: readonly Step[] = [
-  { id: 'record', name: 'Record unbroken', restsOn: [], run: checkRecord },
-  { id: 'protocol', name: 'Protocol unchanged since sealing', restsOn: ['record'], run: checkProtocol },
-  { id: 'commitments', name: 'Commitments match the revealed secrets', restsOn: ['record'], run: checkCommitments },
-  { id: 'draws', name: 'Draws recomputed', restsOn: ['record', 'commitments'], run: checkDraws },
-  { id: 'answers', name: 'Answers match their leaves', restsOn: ['record'], run: checkAnswers },
-  { id: 'trials', name: 'Every drawn trial accounted for', restsOn: ['record'], run: checkTrials },
-  { id: 'listeners', name: 'One label to a listener', restsOn: ['record'], run: checkListeners },
+export const recordSteps: readonly Step<StudyReading>[] = [
+  { id: 'record', restsOn: [], run: checkRecord },
+  { id: 'protocol', restsOn: ['record'], run: checkProtocol },
+  { id: 'commitments', restsOn: ['record'], run: checkCommitments },
+  { id: 'codeKey', restsOn: ['record', 'commitments'], run: checkCodeKey },
+  { id: 'draws', restsOn: ['record', 'commitments', 'codeKey'], run: checkDraws },
+  { id: 'answers', restsOn: ['record'], run: checkAnswers },
+  { id: 'trials', restsOn: ['record'], run: checkTrials },
+  { id: 'sessions', restsOn: ['record'], run: checkSessions },
+  { id: 'listeners', restsOn: ['record'], run: checkListeners },
+  { id: 'rules', restsOn: ['record', 'protocol'], run: checkRules },
   {
     id: 'figures',
-    name: 'Figures recomputed',
-    restsOn: ['record', 'protocol', 'commitments', 'draws', 'answers'],
+    restsOn: ['record', 'protocol', 'commitments', 'codeKey', 'draws', 'answers'],
     run: checkFigures,
   },
+  { id: 'flow', restsOn: ['record'], run: checkFlow },
 ];
 
-const fileName = 'File readable';
-
-/** Every check by its name, in order, for a page that shows them before they have run. */
-export const checkNames: readonly { readonly id: CheckId; readonly name: string }[] = [
-  { id: 'file', name: fileName },
-  ...steps.map(({ id, name }) => ({ id, name })),
-];
-
-function runStep({ id, name, restsOn, run }: Step, study: StudyReading, done: readonly Check[]): Check {
+/** One check, after those it rests on. */
+export function runStep<T>({ id, restsOn, run }: Step<T>, read: T, done: readonly Check[]): Check {
+  const name = nameOfCheck(id);
   const missing = done.find((check) => restsOn.includes(check.id) && check.outcome !== 'pass');
   if (missing !== undefined)
     return { id, name, outcome: 'not checkable', reason: `It rests on “${missing.name}”, which did not pass.` };
   try {
-    const { faults, held } = run(study);
+    const { faults, open, held } = run(read);
     const [fault] = faults;
-    return fault === undefined
+    if (fault !== undefined) return { id, name, outcome: 'fail', reason: fault };
+    return open === undefined
       ? { id, name, outcome: 'pass', reason: held }
-      : { id, name, outcome: 'fail', reason: fault };
+      : { id, name, outcome: 'not checkable', reason: open };
   } catch (error) {
     // What it rests on has passed, so whatever cannot be read or computed lies in what is checked here.
     return { id, name, outcome: 'fail', reason: error instanceof Error ? error.message : String(error) };
@@ -82,7 +70,7 @@ function runStep({ id, name, restsOn, run }: Step, study: StudyReading, done: re
 export function* checksOf(parts: PublicationParts): Generator<Check> {
   const study = new StudyReading(parts);
   const done: Check[] = [];
-  for (const step of steps) {
+  for (const step of recordSteps) {
     const check = runStep(step, study, done);
     done.push(check);
     yield check;
@@ -101,11 +89,18 @@ export function verifyStudy(parts: PublicationParts): Check[] {
 export function* checksOfFile(text: string | null): Generator<Check> {
   const read = text === null ? { fault: 'It is not text in UTF-8.' } : readPublication(text);
   if ('parts' in read) {
-    yield { id: 'file', name: fileName, outcome: 'pass', reason: 'A published study in canonical form.' };
+    yield { id: 'file', name: nameOfCheck('file'), outcome: 'pass', reason: 'A published study in canonical form.' };
     yield* checksOf(read.parts);
     return;
   }
-  yield { id: 'file', name: fileName, outcome: 'fail', reason: read.fault };
-  const reason = `It rests on “${fileName}”, which did not pass.`;
-  for (const { id, name } of steps) yield { id, name, outcome: 'not checkable', reason };
+  yield* unreadable(read.fault, recordCheckNames);
+}
+
+/** Every check of a file that cannot be read: it fails at the first, and nothing else can be told. */
+export function unreadable(fault: string, names: readonly NamedCheck[]): Check[] {
+  return names.map(({ id, name }) =>
+    id === 'file'
+      ? { id, name, outcome: 'fail', reason: fault }
+      : { id, name, outcome: 'not checkable', reason: `It rests on “${nameOfCheck('file')}”, which did not pass.` },
+  );
 }

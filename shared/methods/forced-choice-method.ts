@@ -1,6 +1,7 @@
 import { analyseForcedChoice } from '../findings/analyse-forced-choice.ts';
 import { differenceFinding, type SoughtWords } from '../findings/difference-finding.ts';
 import { chanceOf, type ForcedChoice } from '../findings/forced-choice.ts';
+import { forcedChoiceCounts, leftOpenAtChance } from '../findings/forced-choice-counts.ts';
 import { forcedChoiceNullDistribution } from '../findings/forced-choice-null-distribution.ts';
 import { forcedChoicePortrait } from '../findings/forced-choice-portrait.ts';
 import type { ForcedChoiceResult } from '../findings/forced-choice-result.ts';
@@ -12,7 +13,7 @@ import type { Method, ScoredAnswer, ScoredTrial, TrialWords } from './method.ts'
 
 type Scoring = Pick<
   Method<ForcedChoiceResult>,
-  'registered' | 'margin' | 'planned' | 'analyse' | 'nullDistribution' | 'finding' | 'plan' | 'portray'
+  'registered' | 'margin' | 'planned' | 'sensitivity' | 'analyse' | 'nullDistribution' | 'finding' | 'plan' | 'portray'
 > & { readonly trials: Pick<TrialWords, 'isRight' | 'countHeader' | 'count'> };
 
 /** What a method says beside the words that all methods with one right answer share. */
@@ -49,8 +50,10 @@ export function forcedChoiceScoring({ question, rightOf, words, smallEffect }: A
       mostPercent: 90,
       shows: (percent) => `that fewer than ${percent}\u00a0% of answers are above guessing`,
       counts: 'trials',
+      most: (count) => `at most ${count} right`,
     },
     planned: oneSidedPlan(chanceOf(question)),
+    sensitivity: Object.values(question.rules),
     analyse: ({ analysis: { alpha, margin }, listenersPerSession, attribute, samplingFrame }, trials) =>
       analyseForcedChoice(question, {
         alpha,
@@ -63,6 +66,10 @@ export function forcedChoiceScoring({ question, rightOf, words, smallEffect }: A
     nullDistribution: (trials) => forcedChoiceNullDistribution(question, trials.map(forcedChoiceTrial)),
     finding: (result, context) => differenceFinding(result, context, { ...forcedChoiceWords, ...words }),
     plan: {
+      aim: { label: 'Find listeners who are right', rate: 'Right' },
+      couldFind: (rate) => `a listener who is right ${percentOf(rate, 'up')} of the time`,
+      leftOpen: (trials) => leftOpenAtChance(trials, chanceOf(question)),
+      counts: forcedChoiceCounts(chanceOf(question)),
       needed: (count) => `${count} right`,
       underNull: 'are needed. If nobody hears a difference,',
       unfixed: null,

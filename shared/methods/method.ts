@@ -1,4 +1,6 @@
+import type { CountTable } from '../findings/count-table.ts';
 import type { Finding, FindingContext } from '../findings/finding.ts';
+import type { DecidingRule } from '../findings/forced-choice.ts';
 import type { ResultFrame } from '../findings/result-frame.ts';
 import type { RegisteredAnalysis } from '../protocol/registered-analysis.ts';
 import type { PlannedTest } from '../statistics/planned-test.ts';
@@ -37,6 +39,8 @@ export type MarginOffer = {
   shows(percent: number): string;
   /** What is counted towards it. */
   readonly counts: 'trials' | 'listeners';
+  /** What a count at most so large shows it by: "at most 9 right". */
+  most(count: number, of: number): string;
 };
 
 /** Something about the method that a study fixes with a yes or a no; the protocol lists those that are on. */
@@ -54,6 +58,14 @@ export type AnswerOption = {
 
 /** What the planner says in the method's words; figures are put in by the planner. */
 export type PlanWords = {
+  /** What the planner is asked to find, before a rate: "Find listeners who are right"; and what the rate is of: "Right". */
+  readonly aim: { readonly label: string; readonly rate: string };
+  /** What a test could have found: "a listener who is right 70 % of the time". */
+  couldFind(rate: number): string;
+  /** What is left open by a study, every answer with a draw of its own, that comes out as if there were nothing. */
+  leftOpen(trials: number, alpha: number): string;
+  /** What each count would mean where a count alone decides, or null. */
+  readonly counts: CountTable | null;
   /** "12 right" */
   needed(count: number): string;
   /** What follows the number needed and its verb: "are needed. If nobody hears a difference," */
@@ -146,6 +158,8 @@ export type Method<R extends ResultFrame = RegisteredResult> = {
   ): Pick<RegisteredAnalysis, 'name' | 'alternative' | 'missing' | 'undecided' | 'direction' | 'margin'>;
   /** The same test as the planner asks it, with one answer per trial. */
   readonly planned: PlannedTest;
+  /** By which rules a rate is read as d′, the first one stated first; none where nothing is to be heard. */
+  readonly sensitivity: readonly DecidingRule[];
   /** The registered analysis: a pure function of the sealed value and the counted trials. */
   analyse(
     plan: {

@@ -1,5 +1,6 @@
 import { analysePreference } from '../findings/analyse-preference.ts';
 import { percentOf } from '../findings/portrait-words.ts';
+import { leftOpenAtEven, preferenceCounts } from '../findings/preference-counts.ts';
 import { preferenceFinding } from '../findings/preference-finding.ts';
 import { preferenceNullDistribution } from '../findings/preference-null-distribution.ts';
 import { preferencePortrait } from '../findings/preference-portrait.ts';
@@ -83,8 +84,10 @@ export const pairedPreference: Method<PreferenceResult> = {
     mostPercent: 45,
     shows: (percent) => `that between ${50 - percent}\u00a0% and ${50 + percent}\u00a0% of people prefer either cable`,
     counts: 'listeners',
+    most: (count, of) => `${of - count} to ${count} people for the same cable`,
   },
   planned: twoSidedPlan,
+  sensitivity: [],
   analyse: ({ analysis: { alpha, undecided, margin }, listenersPerSession }, trials) =>
     analysePreference({
       alpha,
@@ -97,6 +100,10 @@ export const pairedPreference: Method<PreferenceResult> = {
   finding: preferenceFinding,
 
   plan: {
+    aim: { label: 'Find a preference of', rate: 'For one cable' },
+    couldFind: (rate) => `a preference of ${percentOf(rate, 'up')} for one cable`,
+    leftOpen: leftOpenAtEven,
+    counts: preferenceCounts,
     needed: (count) => `${count} for the same cable`,
     underNull: 'are needed, when every answer prefers one. If nobody prefers either,',
     unfixed: null,

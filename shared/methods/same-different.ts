@@ -1,6 +1,7 @@
 import { analyseSameDifferent } from '../findings/analyse-same-different.ts';
 import { differenceFinding } from '../findings/difference-finding.ts';
 import { percentOf } from '../findings/portrait-words.ts';
+import { sameDifferentLeftOpen } from '../findings/same-different-left-open.ts';
 import { sameDifferentPortrait } from '../findings/same-different-portrait.ts';
 import type { SameDifferentResult } from '../findings/same-different-result.ts';
 import { assignedTrials, type SameDifferentTrial } from '../findings/same-different-trials.ts';
@@ -8,6 +9,7 @@ import { sameDifferentWords } from '../findings/same-different-words.ts';
 import { assignmentTest } from '../statistics/assignment-test.ts';
 import { fractionToNumber } from '../statistics/fraction.ts';
 import { sameDifferentPlan } from '../statistics/same-different.ts';
+import { unbiasedByDifference } from '../statistics/unbiased-same-different.ts';
 import { fittedAtFirst, oneAndOther, spokenPlace } from './familiarisation.ts';
 import type { AnswerOption, Method, ScoredTrial } from './method.ts';
 
@@ -61,6 +63,7 @@ export const sameDifferent: Method<SameDifferentResult> = {
   registered: () => ({ name: 'same-different/1', alternative: 'greater', missing: 'counted as wrong' }),
   margin: null,
   planned: sameDifferentPlan,
+  sensitivity: [{ psychometric: unbiasedByDifference, words: 'if percepts are compared by differences' }],
   analyse: ({ analysis: { alpha }, listenersPerSession }, trials) =>
     analyseSameDifferent({ alpha, listenersPerSession, trials: trials.map(pairTrial) }),
   nullDistribution: (trials) => {
@@ -73,6 +76,11 @@ export const sameDifferent: Method<SameDifferentResult> = {
   finding: (result, context) => differenceFinding(result, context, sameDifferentWords),
 
   plan: {
+    aim: { label: 'Find listeners who say “different” on different trials', rate: 'Hits' },
+    couldFind: (rate) =>
+      `a listener with ${percentOf(rate, 'up')} hits and ${percentOf(1 - rate, 'down')} false alarms`,
+    leftOpen: sameDifferentLeftOpen,
+    counts: null,
     needed: (count) => `${count} hits`,
     underNull: 'are needed. If nobody hears a difference,',
     unfixed:

@@ -77,6 +77,7 @@ export function listenerViewOf(state: SessionState, method: Method, context: Lis
             held,
           },
     question: {
+      explanation: method.explanation,
       text: method.question(state.plan),
       announcement: method.announcement,
       options: optionsOf(state, method).map(({ value, letter, sentence, short }) => ({

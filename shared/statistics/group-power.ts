@@ -64,9 +64,14 @@ const tie = 1e-9;
 /**
  * The p of the shared-presentation test in floating point, the truth of every trial being its first label.
  *
- * @param counts for each trial the answers under each label
+ * @param answers for each trial the answers under each label
  */
-export function pOfShared(counts: readonly (readonly number[])[], alternative: SharedAlternative): number {
+export function pOfShared(answers: readonly (readonly number[])[], alternative: SharedAlternative): number {
+  // What every draw of a trial gives anyway moves all sums alike: without it there are fewer of them.
+  const counts = answers.map((trial) => {
+    const fewest = Math.min(...trial);
+    return trial.map((count) => count - fewest);
+  });
   const most = counts.reduce((sum, trial) => sum + Math.max(...trial), 0);
   let chances = new Float64Array(most + 1);
   chances[0] = 1;

@@ -37,8 +37,6 @@ export interface PlanFigures {
   readonly trialsInAll: number;
   /** What one answer per trial must reach over all sessions; null when out of reach. */
   readonly critical: CriticalCount | null;
-  /** Power of that test at a small, a middling and a large rate: of right answers, or of answers for one cable. */
-  readonly power: readonly { readonly rate: number; readonly power: number }[];
   /** False when several listeners share the presentations: then no fixed number of right answers can be promised. */
   readonly isCriticalCountBinding: boolean;
   /** No test of this many trials gives a smaller p, however many listen: one in `leastPDenominator`. */
@@ -71,9 +69,9 @@ const familiarisationPresentations = 2;
  * @throws RangeError when a value is outside the domain stated beside it
  * @example planFigures({ sessions: 1, trials: 16, alpha: '0.05', test: oneSidedPlan(evenChance), listeners: 1,
  *   presentationsPerTrial: 3, changeMs: 30_000, listenMs: 20_000, answerMs: 15_000, resetMs: 0, breaks: null })
- *   // critical 12 (size 0.0384), power 0.167, 0.450 and 0.798, 50 fittings, 165 s a trial,
- *   // 16 * 165 s = 44 min and 100 s for familiarisation: 46 min ; R: pbinom(11, 16, c(.6, .7, .8), lower.tail = FALSE)
- * @see power and criticalCount for the test and its sources; fittings and minutes are plain sums
+ *   // critical 12 (size 0.0384), 50 fittings, 165 s a trial,
+ *   // 16 * 165 s = 44 min and 100 s for familiarisation: 46 min ; R: pbinom(11, 16, .5, lower.tail = FALSE)
+ * @see criticalCount for the test and its sources; fittings and minutes are plain sums
  */
 export function planFigures(plan: StudyPlan): PlanFigures {
   requirePlan(plan);
@@ -87,7 +85,6 @@ export function planFigures(plan: StudyPlan): PlanFigures {
     chance: test.chance === null ? null : chanceAsNumbers(test.chance).right,
     trialsInAll,
     critical: test.critical(trialsInAll, alpha),
-    power: test.rates.map((rate) => ({ rate, power: test.power(trialsInAll, alpha, rate) })),
     isCriticalCountBinding: plan.listeners === 1,
     leastAttainableP: fractionToNumber(leastP),
     leastPDenominator,

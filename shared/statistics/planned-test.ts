@@ -1,12 +1,12 @@
-import { type Chance, chanceAsFraction, chanceAsNumbers } from './chance.ts';
+import { type Chance, chanceAsFraction, chanceAsNumbers, evenChance } from './chance.ts';
 import { type CriticalCount, criticalCount } from './critical-count.ts';
 import { equivalencePlan, type PlannedMargin, similarityPlan } from './planned-margin.ts';
 import { power } from './power.ts';
 import { type SampleSize, sampleSize } from './sample-size.ts';
 import { twoSidedCriticalCount, twoSidedPower, twoSidedSampleSize } from './two-sided-even.ts';
 
-/** The power that a plan asks for, and how far its number of trials is looked for. */
-const aim = { targetPower: 0.8, limit: 5000 };
+/** How far a number of trials is looked for. */
+const limit = 5000;
 
 /** Shares above guessing that a plan is shown at: a small, a middling and a large effect. */
 const effects = [0.2, 0.4, 0.6] as const;
@@ -17,6 +17,8 @@ export interface PlannedTest {
   readonly chance: Chance | null;
   /** How many labels the draw of what is right chooses from; null for pairs that are the same or different. */
   readonly labels: number | null;
+  /** The rate when nothing is heard, and no cable preferred: effects are measured from here. */
+  readonly guessing: Chance;
   /** Rates at which the power is shown: a small, a middling and a large effect. */
   readonly rates: readonly [number, number, number];
   /** What one answer per trial must reach; null when out of reach, or when no fixed number can be told. */
@@ -24,8 +26,8 @@ export interface PlannedTest {
   power(trials: number, alpha: number, rate: number): number;
   /** No draw of so many trials gives a p smaller than one in this many. */
   leastPDenominator(trials: number): bigint;
-  /** How many trials find that rate with 80 % power: the first number, and the one from which on all do. */
-  needed(alpha: number, rate: number): Pick<SampleSize, 'nFirst' | 'nSafe'>;
+  /** How many trials find that rate with the power asked for: the first number, and the one from which on all do. */
+  needed(alpha: number, rate: number, targetPower: number): Pick<SampleSize, 'nFirst' | 'nSafe'>;
   /** The largest number of trials that `needed` looks at. */
   readonly searchedTo: number;
   /** What a registered margin asks of the plan; null for a test that takes none. */
@@ -48,12 +50,13 @@ export function oneSidedPlan(chance: Chance): PlannedTest {
   return {
     chance,
     labels: Number(denominator / numerator),
+    guessing: chance,
     rates: [right + small * wrong, right + middling * wrong, right + large * wrong],
     critical: (trials, alpha) => criticalCount(trials, chance, alpha),
     power: (trials, alpha, rate) => power(trials, chance, alpha, rate).power,
     leastPDenominator: (trials) => (denominator / numerator) ** BigInt(trials),
-    needed: (alpha, rate) => sampleSize({ ...aim, chance, alpha, correctRate: rate }),
-    searchedTo: aim.limit,
+    needed: (alpha, rate, targetPower) => sampleSize({ chance, alpha, correctRate: rate, targetPower, limit }),
+    searchedTo: limit,
     margin: similarityPlan(chance),
   };
 }
@@ -65,13 +68,14 @@ export function oneSidedPlan(chance: Chance): PlannedTest {
  * @see twoSidedCriticalCount, twoSidedPower and twoSidedSampleSize
  */
 export const twoSidedPlan: PlannedTest = {
-  chance: { numerator: 1, denominator: 2 },
+  chance: evenChance,
   labels: 2,
+  guessing: evenChance,
   rates: [0.6, 0.7, 0.8],
   critical: (trials, alpha) => twoSidedCriticalCount(trials, alpha),
   power: (trials, alpha, rate) => twoSidedPower(trials, alpha, rate).power,
   leastPDenominator: (trials) => 2n ** BigInt(trials - 1),
-  needed: (alpha, rate) => twoSidedSampleSize({ ...aim, alpha, rate }),
-  searchedTo: aim.limit,
+  needed: (alpha, rate, targetPower) => twoSidedSampleSize({ alpha, rate, targetPower, limit }),
+  searchedTo: limit,
   margin: equivalencePlan,
 };

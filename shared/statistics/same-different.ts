@@ -1,4 +1,5 @@
 import { mostTrials } from './binomial-log-probability.ts';
+import { evenChance } from './chance.ts';
 import type { Interval } from './clopper-pearson.ts';
 import { requireBetween, requireWhole } from './domain.ts';
 import { normalQuantile } from './normal-quantile.ts';
@@ -169,9 +170,13 @@ function fisherUpperTail(
 /** How far the number of trials is looked for, and for how many more its power is watched. */
 const searchedTo = 300;
 const watched = 40;
-const targetPower = 0.8;
 
-function trialsNeeded(alpha: number, rate: number): { nFirst: number | null; nSafe: number | null } {
+function trialsNeeded(
+  alpha: number,
+  rate: number,
+  targetPower: number,
+): { nFirst: number | null; nSafe: number | null } {
+  requireBetween('targetPower', targetPower, 0, 1, 'open');
   let first: number | null = null;
   let safe: number | null = null;
   for (let trials = 2; trials <= (safe === null ? searchedTo : Math.min(searchedTo, safe + watched)); trials++) {
@@ -188,6 +193,7 @@ function trialsNeeded(alpha: number, rate: number): { nFirst: number | null; nSa
 export const sameDifferentPlan: PlannedTest = {
   chance: null,
   labels: null,
+  guessing: evenChance,
   rates: [0.6, 0.7, 0.8],
   critical: () => null,
   power: sameDifferentPower,

@@ -19,6 +19,8 @@ export const paths = {
   publications: () => '/p',
   publication: (id: string) => `/p/${id}`,
   registry: registryPath,
+  /** For whoever brings a file of a publication. */
+  verify: () => '/verify',
 
   home: (organisationId: string) => organisation(organisationId),
 

@@ -46,6 +46,7 @@ const plainPages: RouteObject[] = [
   { path: paths.publications(), lazy: () => import('../pages/publications-page.tsx') },
   { path: paths.publication(id), lazy: () => import('../pages/publication-page.tsx') },
   { path: paths.registry(organisationId), lazy: () => import('../pages/registry-page.tsx') },
+  { path: paths.verify(), lazy: () => import('../pages/verify-page.tsx') },
   { path: paths.account(), lazy: () => import('../pages/account-page.tsx') },
   { path: paths.invitation(), lazy: () => import('../pages/invitation-page.tsx') },
   { path: paths.firstOwner(), lazy: () => import('../pages/first-owner-page.tsx') },

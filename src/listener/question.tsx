@@ -59,7 +59,7 @@ export function Question({ question, own, onSend }: QuestionProps) {
     );
   return (
     <div className={column}>
-      <h1 className="text-2xl">{question.text}</h1>
+      <h1 className="text-2xl [@media(max-height:699px)]:text-xl">{question.text}</h1>
       <div className="-mx-5 max-[389px]:[&_label]:gap-3 max-[389px]:[&_label]:px-4">
         <OptionList legend={question.text} options={question.options} value={choice} onChange={setChoice} />
       </div>

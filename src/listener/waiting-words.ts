@@ -2,7 +2,8 @@ import type { ListenerView } from '#shared/contracts/listener-live.ts';
 import { answerTo, capitalised, shortOf } from './answers.ts';
 import type { SeatSnapshot } from './seat.ts';
 
-type Said = { readonly title: string; readonly detail: string };
+/** `more` is the smaller print below. */
+type Said = { readonly title: string; readonly detail: string; readonly more?: string };
 
 export const pauseWords: Record<NonNullable<ListenerView['paused']>, Said> = {
   break: { title: 'Break', detail: 'Rest your ears. The session goes on from here.' },
@@ -10,7 +11,7 @@ export const pauseWords: Record<NonNullable<ListenerView['paused']>, Said> = {
   trouble: { title: 'Paused', detail: 'Something is being put right. The session goes on from here.' },
 };
 
-function beforeTheRun({ phase, seat, contributes }: ListenerView, hasContribution: boolean): Said {
+function beforeTheRun({ phase, seat, contributes, question }: ListenerView, hasContribution: boolean): Said {
   if (phase === 'revealing')
     return {
       title: 'The draw is being fixed',
@@ -18,7 +19,8 @@ function beforeTheRun({ phase, seat, contributes }: ListenerView, hasContributio
     };
   return {
     title: `You are seated as ${seat}`,
-    detail:
+    detail: question.explanation,
+    more:
       contributes && hasContribution
         ? 'The session starts soon. Your phone’s random number will count in the draw, so that nobody can choose it alone.'
         : 'The session starts soon. Your phone’s random number will not count in the draw; your answers will.',
@@ -43,7 +45,8 @@ export function waitingWords(view: ListenerView, { answers, hasContribution }: S
   if (lastOutcome === null)
     return {
       title: 'Ready',
-      detail: view.contributes
+      detail: view.question.explanation,
+      more: view.contributes
         ? 'The draw is fixed, and nobody has seen it. The next step follows.'
         : 'The next step follows. You joined too late for your phone’s random number to count in the draw; your answers count.',
     };

@@ -38,7 +38,7 @@ export function FileDrop({ label = 'Check a file of your own', onFile }: FileDro
       <input
         id={id}
         type="file"
-        accept=".json,application/json"
+        accept=".zip,.json,application/zip,application/json"
         className="sr-only"
         onChange={({ target }) => {
           take(target.files);

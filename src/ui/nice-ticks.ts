@@ -1,7 +1,11 @@
-/** Round figures from `from` to `to`, at most `atMost` of them: steps of 1, 2 or 5 times a power of ten. */
-export function niceTicks(from: number, to: number, atMost: number): number[] {
+/**
+ * Round figures from `from` to `to`, at most `atMost` of them: steps of 1, 2 or 5 times a power of ten.
+ *
+ * @param leastStep 1 for what is counted
+ */
+export function niceTicks(from: number, to: number, atMost: number, leastStep = 0): number[] {
   if (!(to > from) || atMost < 2) return [from];
-  const step = niceStep((to - from) / (atMost - 1));
+  const step = niceStep(Math.max(leastStep, (to - from) / (atMost - 1)));
   const first = Math.ceil(from / step - 1e-9);
   const count = Math.floor(to / step + 1e-9) - first + 1;
   return Array.from({ length: count }, (_, index) => Number(((first + index) * step).toPrecision(12)));

@@ -1,4 +1,5 @@
 import { Bar, BarChart, type BarShapeProps, ResponsiveContainer, Tooltip, XAxis, YAxis } from 'recharts';
+import { countTicks } from './count-ticks.ts';
 import { type CountChance, type DistributionEdges, distributionBars } from './distribution-bars.ts';
 import { DistributionMark } from './distribution-mark.tsx';
 import { DistributionTable } from './distribution-table.tsx';
@@ -36,9 +37,8 @@ export function NullDistributionChart({
   const mirrored = beyond === undefined ? undefined : beyond.low + beyond.high - observed;
   const peak = Math.max(0, ...shown.bars.map((bar) => bar.chance));
   const lowest = shown.bars[0]?.from ?? 0;
-  const highest = shown.bars.at(-1)?.to ?? 0;
   const barOf = (count: number) => shown.bars.findLast((bar) => bar.from <= count)?.from ?? lowest;
-  const labelled = new Map(niceTicks(lowest, highest, 8).map((tick) => [barOf(tick), tick]));
+  const labelled = countTicks(shown.bars, 8);
 
   return (
     <figure className="flex flex-col gap-1 [&_svg]:max-w-full">

@@ -54,7 +54,7 @@ export function OptionList({ legend, options, value, onChange, disabled, name }:
               {option.letter}
             </span>
           )}
-          <span className="min-w-0 flex-1 text-answer">{option.sentence}</span>
+          <span className="min-w-0 flex-1 text-answer text-balance">{option.sentence}</span>
           <span
             aria-hidden="true"
             className="size-7 shrink-0 rounded-full border-[3px] border-edge peer-checked:border-[9px] peer-checked:border-copper"

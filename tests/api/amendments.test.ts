@@ -207,7 +207,7 @@ describe('an amended protocol', () => {
     const { file } = (await request(server.address).get(`/api/publications/${published.body.id}`)).body;
     const document = (await request(server.address).get(file.path).expect(200)).text;
     expect(JSON.parse(document).earlierProtocols).toHaveLength(2);
-    expect([...checksOfFile(document)].map(({ outcome }) => outcome)).toEqual(Array(9).fill('pass'));
+    expect([...checksOfFile(document)].filter(({ outcome }) => outcome !== 'pass')).toEqual([]);
     expect(document).not.toContain('of Harbour"');
     const page = (await request(server.address).get(`/p/${published.body.id}`).expect(200)).text;
     expect(page).toContain('The amplifier was sold.');

@@ -12,6 +12,7 @@ import { HandClock } from '../../server/demo/hand-clock.ts';
 import { Console, Phone } from '../support/live.ts';
 import { makeOrganisation, readyStudy } from '../support/people.ts';
 import { begin, presentTrial } from '../support/run-session.ts';
+import { nameDatabases, removeDatabases } from '../support/test-database.ts';
 import { testServer } from '../support/test-server.ts';
 
 // What Fairlead does, as a multiple of the least work that could do it, timed in the same run on the same machine. The
@@ -91,6 +92,7 @@ async function pureWork(): Promise<void> {
 /** One answer over a real socket into the real database, against one row committed there. */
 async function liveWork(): Promise<void> {
   const clock = new HandClock(Date.parse('2026-12-05T18:00:00.000Z'));
+  nameDatabases();
   const server = await testServer({ clock });
   const people = await makeOrganisation(server, 'Bench');
   const { sessionId } = await readyStudy(server, people);
@@ -114,6 +116,7 @@ async function liveWork(): Promise<void> {
   await row.end();
   for (const page of [desk, ...phones]) page.close();
   await server.stop();
+  await removeDatabases();
 }
 
 await pureWork();

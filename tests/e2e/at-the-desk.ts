@@ -11,6 +11,15 @@ export async function signIn(browser: Browser, address: string, name: string): P
   return page;
 }
 
+/** Opens the console of a study's session from the proctor's home; it stands before the cautions. */
+export async function openConsole(desk: Page, title: string): Promise<void> {
+  await desk
+    .getByRole('link', { name: new RegExp(title) })
+    .first()
+    .click();
+  await desk.getByText('Before anybody is seated').waitFor();
+}
+
 /** Ticks the cautions and opens seating. Returns the session code. */
 export async function openSeating(desk: Page): Promise<string> {
   await desk.getByText('Before anybody is seated').waitFor();
@@ -38,13 +47,15 @@ export async function takeSeat(phone: Page, place: string): Promise<void> {
   await phone.getByText(/You are seated as/).waitFor();
 }
 
-/** One presentation: every step of the change, its registered time, the excerpt to its end. */
-export async function present(desk: Page): Promise<void> {
+/** One presentation: every step of the change, its registered time, the excerpt to its end. Returns the code fitted. */
+export async function present(desk: Page): Promise<string> {
   for (const step of ['mute', 'unplug', 'fit', 'check']) await desk.locator(`[data-step=${step}]`).click();
   await expect(desk.locator('[data-step=unmute]')).toBeEnabled();
+  const code = (await desk.locator('[data-code]').getAttribute('data-code')) ?? '';
   await desk.locator('[data-step=unmute]').click();
   await desk.getByText('They are listening').waitFor();
   await desk.getByText('They are listening').waitFor({ state: 'hidden' });
+  return code;
 }
 
 /** Fixes the draw and leads through the familiarisation. */
@@ -55,17 +66,30 @@ export async function beginSession(desk: Page): Promise<void> {
   await present(desk);
 }
 
-/** A trial up to its question: three presentations in ABX, two in a pair. */
-export async function presentTrial(desk: Page, trial: number, presentations = 3): Promise<void> {
+/** A trial up to its question: three presentations in ABX, two in a pair. Returns the codes fitted, in order. */
+export async function presentTrial(desk: Page, trial: number, presentations = 3): Promise<string[]> {
   await desk.getByRole('button', { name: `Begin trial ${trial}` }).click();
-  for (let count = 0; count < presentations; count += 1) await present(desk);
+  const codes: string[] = [];
+  while (codes.length < presentations) codes.push(await present(desk));
+  return codes;
 }
 
-/** Taps an answer and how sure the listener is; on a low phone that is a step of its own. */
-export async function answer(phone: Page, choice: string): Promise<void> {
-  await phone.getByText(`X was the same as ${choice}`).click();
-  if ((phone.viewportSize()?.height ?? 0) < 700)
-    await phone.getByRole('button', { name: `${choice}, and how sure?` }).click();
+export async function finishSession(desk: Page): Promise<void> {
+  await desk.getByRole('button', { name: 'Finish the session' }).click();
+  await desk.getByText('The session is finished').waitFor();
+}
+
+/** An answer as the phone words it, among how many. */
+export type Choice = { sentence: string; short: string; among: number };
+
+/** What ABX asks. */
+export const matched = (label: string): Choice => ({ sentence: `X was the same as ${label}`, short: label, among: 2 });
+
+/** Taps an answer and how sure the listener is; on a low phone, or a middling one with more answers, a step of its own. */
+export async function answer(phone: Page, { sentence, short, among }: Choice): Promise<void> {
+  await phone.getByText(sentence, { exact: true }).click();
+  if ((phone.viewportSize()?.height ?? 0) < (among > 2 ? 920 : 700))
+    await phone.getByRole('button', { name: new RegExp(`^${short}, and how sure\\?$`, 'i') }).click();
   await phone.getByText('Fairly', { exact: true }).click();
-  await phone.getByRole('button', { name: `Send ${choice}` }).click();
+  await phone.getByRole('button', { name: `Send ${short}` }).click();
 }

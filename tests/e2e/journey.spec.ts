@@ -2,8 +2,19 @@ import { execFileSync } from 'node:child_process';
 import { expect, type Page, test } from '@playwright/test';
 import type { Report } from '#shared/contracts/reports.ts';
 import { expectAccessible } from './accessible.ts';
-import { answer, beginSession, openPhone, openSeating, presentTrial, signIn, takeSeat } from './at-the-desk.ts';
-import { codeSpecimens, planSession, planStudy } from './plan-a-study.ts';
+import {
+  answer,
+  beginSession,
+  finishSession,
+  matched,
+  openConsole,
+  openPhone,
+  openSeating,
+  presentTrial,
+  signIn,
+  takeSeat,
+} from './at-the-desk.ts';
+import { closeStudy, codeSpecimens, planSession, planStudy, sealStudy } from './plan-a-study.ts';
 import { type RunningFairlead, runFairlead } from './run-fairlead.ts';
 
 // A proctor and three phones at once: plan, seal, code, seat, 8 trials with one void and one phone offline in the middle,
@@ -58,9 +69,7 @@ test('a study from its plan to a report that R agrees with [R1] [S1] [S13]', asy
   await planStudy(manager, { listeners: 3, answerS: 60 });
   await expectAccessible(manager, 'draft');
   const studyAddress = manager.url();
-  await manager.getByRole('button', { name: /^Seal/ }).first().click();
-  await manager.getByRole('alertdialog').getByRole('button', { name: /^Seal/ }).click();
-  await expect(manager.getByRole('alertdialog')).toBeHidden();
+  await sealStudy(manager);
 
   const holder = await signIn(browser, fairlead.address, 'Ines Halloran');
   await codeSpecimens(holder, studyAddress);
@@ -69,11 +78,7 @@ test('a study from its plan to a report that R agrees with [R1] [S1] [S13]', asy
   await planSession(manager, studyAddress);
 
   const desk = await signIn(browser, fairlead.address, 'Tomas Brandt');
-  await desk
-    .getByRole('link', { name: /Study Dunlin/ })
-    .first()
-    .click();
-  await desk.getByText('Before anybody is seated').waitFor();
+  await openConsole(desk, 'Study Dunlin');
   await expectAccessible(desk, 'cautions');
   const code = await openSeating(desk);
   await expectAccessible(desk, 'seating');
@@ -105,19 +110,19 @@ test('a study from its plan to a report that R agrees with [R1] [S1] [S13]', asy
       await first.getByText('Trial 3 was set aside').waitFor();
       continue;
     }
-    await answer(first, choice);
+    await answer(first, matched(choice));
     await first.getByText('held by the server').waitFor();
-    await answer(third, choice === 'A' ? 'B' : 'A');
+    await answer(third, matched(choice === 'A' ? 'B' : 'A'));
     if (trial === 5) {
       // The second phone loses the network, is tapped all the same, and comes back within the window.
       await second.context().setOffline(true);
       await desk.getByText('away').waitFor();
-      await answer(second, choice);
+      await answer(second, matched(choice));
       await expect(second.getByText('still on this phone')).toBeVisible();
       await second.context().setOffline(false);
       await expect(second.getByText('held by the server')).toBeVisible({ timeout: 20_000 });
     } else {
-      await answer(second, choice);
+      await answer(second, matched(choice));
     }
     if (trial === 6) {
       // A phone that is reloaded comes back to where it was.
@@ -128,23 +133,11 @@ test('a study from its plan to a report that R agrees with [R1] [S1] [S13]', asy
     }
     await desk.getByRole('button', { name: `Lock trial ${trial}` }).click();
   }
-  await desk.getByRole('button', { name: 'Finish the session' }).click();
-  await desk.getByText('The session is finished').waitFor();
+  await finishSession(desk);
   await first.getByText('Your receipts').waitFor();
   await expect(first.locator('ol > li')).toHaveCount(8);
 
-  await manager.goto(studyAddress);
-  await manager
-    .getByRole('button', { name: /^Close/ })
-    .first()
-    .click();
-  await manager
-    .getByRole('alertdialog')
-    .getByRole('button', { name: /^Close/ })
-    .click();
-  await expect(manager.getByRole('alertdialog')).toBeHidden();
-  await manager.goto(`${studyAddress}/report`);
-  await expect(manager.getByRole('heading', { name: 'What you may say' })).toBeVisible();
+  await closeStudy(manager, studyAddress);
   await expectAccessible(manager, 'report');
 
   const apiAddress = studyAddress.replace('/organisations/', '/api/organisations/');

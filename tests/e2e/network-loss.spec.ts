@@ -1,7 +1,17 @@
 import { expect, test } from '@playwright/test';
-import { answer, beginSession, openPhone, openSeating, presentTrial, signIn, takeSeat } from './at-the-desk.ts';
+import {
+  answer,
+  beginSession,
+  matched,
+  openConsole,
+  openPhone,
+  openSeating,
+  presentTrial,
+  signIn,
+  takeSeat,
+} from './at-the-desk.ts';
 import { type DeadNetwork, deadNetwork } from './dead-network.ts';
-import { codeSpecimens, planSession, planStudy } from './plan-a-study.ts';
+import { codeSpecimens, planSession, planStudy, sealStudy } from './plan-a-study.ts';
 import { type RunningFairlead, runFairlead } from './run-fairlead.ts';
 
 // The network of the room goes dead for two minutes, without a word to anybody, while a trial is open.
@@ -21,17 +31,12 @@ test('console and phone come back where they were after two minutes without a ne
   const manager = await signIn(browser, fairlead.address, 'Maren Oduya');
   await planStudy(manager, { listeners: 1, answerS: 300 });
   const studyAddress = manager.url();
-  await manager.getByRole('button', { name: /^Seal/ }).first().click();
-  await manager.getByRole('alertdialog').getByRole('button', { name: /^Seal/ }).click();
-  await expect(manager.getByRole('alertdialog')).toBeHidden();
+  await sealStudy(manager);
   await codeSpecimens(await signIn(browser, fairlead.address, 'Ines Halloran'), studyAddress);
   await planSession(manager, studyAddress);
 
   const desk = await signIn(browser, network.address, 'Tomas Brandt');
-  await desk
-    .getByRole('link', { name: /Study Dunlin/ })
-    .first()
-    .click();
+  await openConsole(desk, 'Study Dunlin');
   const code = await openSeating(desk);
   const phone = await openPhone(browser, network.address, code);
   await takeSeat(phone, 'Left');
@@ -40,7 +45,7 @@ test('console and phone come back where they were after two minutes without a ne
 
   network.cut();
   const cutAt = Date.now();
-  await answer(phone, 'A');
+  await answer(phone, matched('A'));
   await expect(phone.getByText('still on this phone')).toBeVisible();
   await expect(phone.getByText(/No connection/).first()).toBeVisible({ timeout: 30_000 });
   await expect(desk.getByText(/No connection/).first()).toBeVisible({ timeout: 30_000 });

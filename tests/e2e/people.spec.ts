@@ -29,6 +29,7 @@ test('from an empty Fairlead to an organisation with members [P1] [P2] [P12] [M7
   if (link === undefined) throw new Error(`no link was printed: ${fairlead.said}`);
   const owner = await (await browser.newContext()).newPage();
   await owner.goto(link);
+  await expect(owner.getByRole('button', { name: 'Create the organisation' })).toBeVisible();
   await expectAccessible(owner, 'first owner');
   await owner.getByRole('button', { name: 'Create the organisation' }).click();
   await expect(owner.getByText('4 fields above need a look.')).toBeVisible();
@@ -37,13 +38,14 @@ test('from an empty Fairlead to an organisation with members [P1] [P2] [P12] [M7
   await owner.getByRole('textbox', { name: 'E-mail' }).fill('edda@harbour.example');
   await owner.getByRole('textbox', { name: 'Password' }).fill('a very long passphrase');
   await owner.getByRole('button', { name: 'Create the organisation' }).click();
-  await owner.waitForURL(/organisations/);
 
+  await expect(owner.getByRole('heading', { name: 'What waits for you' })).toBeVisible();
   await expectAccessible(owner, 'the home of an owner alone');
   await owner.getByRole('link', { name: 'Invite the others' }).click();
   await expect(owner.getByRole('heading', { name: 'People' })).toBeVisible();
   await expectAccessible(owner, 'people');
   await owner.getByRole('button', { name: 'Invite somebody' }).click();
+  await expect(owner.getByRole('button', { name: 'Send the invitation' })).toBeVisible();
   await expectAccessible(owner, 'the form for an invitation');
   await owner.getByRole('button', { name: 'Send the invitation' }).click();
   await expect(owner.getByText('2 fields above need a look.')).toBeVisible();
@@ -86,11 +88,13 @@ test('from an empty Fairlead to an organisation with members [P1] [P2] [P12] [M7
   const elsewhere = await (await browser.newContext()).newPage();
   await elsewhere.goto(`${fairlead.address}/sign-in`);
   await elsewhere.getByRole('link', { name: 'Forgotten your password?' }).click();
+  await expect(elsewhere.getByRole('heading', { name: 'Forgotten your password?' })).toBeVisible();
   await expectAccessible(elsewhere, 'forgotten password');
   await elsewhere.getByRole('textbox', { name: 'E-mail' }).fill(invitedAddress);
   await elsewhere.getByRole('button', { name: 'Send me a link' }).click();
   await expect(elsewhere.getByRole('heading', { name: 'Look into your mail' })).toBeVisible();
   await followMail(elsewhere, /Set a new password/);
+  await expect(elsewhere.getByRole('textbox', { name: 'New password' })).toBeVisible();
   await expectAccessible(elsewhere, 'new password');
   const usedLink = elsewhere.url();
   await elsewhere.getByRole('textbox', { name: 'New password' }).fill('a third long passphrase');
@@ -108,6 +112,7 @@ test('from an empty Fairlead to an organisation with members [P1] [P2] [P12] [M7
   await owner.goto(owner.url().replace('/invitations', ''));
   await owner.getByRole('button', { name: 'Change: Runa Falk' }).click();
   await owner.getByRole('menuitem', { name: 'Make reviewer' }).click();
+  await expect(owner.getByRole('alertdialog')).toBeVisible();
   await expectAccessible(owner, 'a question');
   await owner.getByRole('button', { name: 'Make reviewer' }).click();
   await expect(owner.getByRole('row', { name: /Runa Falk.*Reviewer/ })).toBeVisible();

@@ -1,20 +1,28 @@
 import { expect, type Page } from '@playwright/test';
+import { type MethodId, methodOf } from '#shared/methods/methods.ts';
 
 // What the manager and the code holder do before anybody listens, all of it by hand in the browser.
 
-export type Plan = { listeners: number; answerS: number; trials?: number; preference?: boolean };
+/** What a manager chooses: the method, the settings to be switched on by their labels, and the attribute if it asks for one. */
+export type ChosenMethod = { id: MethodId; settings?: readonly string[]; attribute?: string };
+
+export type Plan = {
+  listeners: number;
+  answerS: number;
+  title?: string;
+  trials?: number;
+  method?: ChosenMethod;
+};
 
 /** Plans a study through the form, of eight trials and ABX unless it is said otherwise; leaves the page on its draft. */
 export async function planStudy(manager: Page, plan: Plan): Promise<void> {
+  const { title = 'Study Dunlin', method } = plan;
   await manager.getByRole('link', { name: 'Studies', exact: true }).click();
   await manager.getByRole('link', { name: 'Plan a study' }).first().click();
-  await manager.getByLabel('Neutral title').fill('Study Dunlin');
+  await manager.getByLabel('Neutral title').fill(title);
   await manager.getByLabel('Question').fill('Can three listeners tell the two cables apart?');
-  if (plan.preference === true) {
-    await manager.getByLabel('Method').selectOption('paired-preference');
-    await manager.getByLabel('Offer “no preference” as an answer').check();
-  }
-  await choose(manager, 'One cable', '0.5 twin');
+  if (method !== undefined) await chooseMethod(manager, method);
+  await choose(manager, method?.attribute === undefined ? 'One cable' : 'The cable that should have more', '0.5 twin');
   await choose(manager, 'The other cable', '4.0 twin');
   await manager.getByLabel('ST-0412').check();
   await manager.getByLabel('SF-0077').check();
@@ -32,7 +40,21 @@ export async function planStudy(manager: Page, plan: Plan): Promise<void> {
   await manager.getByLabel('Answer window').fill(String(plan.answerS));
   await choose(manager, 'Code holder', 'Ines Halloran');
   await manager.locator('form button[type=submit]').click();
-  await expect(manager.getByRole('heading', { level: 1 })).toContainText('Study Dunlin');
+  await expect(manager.getByRole('heading', { level: 1 })).toContainText(title);
+}
+
+async function chooseMethod(manager: Page, { id, settings = [], attribute }: ChosenMethod): Promise<void> {
+  await manager.getByLabel('Method').selectOption(id);
+  await expect(manager.getByText(methodOf(id).explanation)).toBeVisible();
+  for (const setting of settings) await manager.getByLabel(setting).check();
+  if (attribute !== undefined) await manager.getByLabel('More of what?').fill(attribute);
+}
+
+/** Seals the study whose page is open. */
+export async function sealStudy(manager: Page): Promise<void> {
+  await manager.getByRole('button', { name: /^Seal/ }).first().click();
+  await manager.getByRole('alertdialog').getByRole('button', { name: /^Seal/ }).click();
+  await expect(manager.getByRole('alertdialog')).toBeHidden();
 }
 
 /** Draws the codes, opens the sheet of sleeve labels and confirms the sleeves. */
@@ -56,6 +78,21 @@ export async function planSession(manager: Page, studyAddress: string): Promise<
   await choose(manager, 'Proctor', 'Tomas Brandt');
   await manager.locator('form button[type=submit]').click();
   await manager.waitForURL((address) => !address.pathname.endsWith('/new'));
+}
+
+/** Closes the study after its session and opens its report. */
+export async function closeStudy(manager: Page, studyAddress: string): Promise<void> {
+  await manager.goto(studyAddress);
+  await manager
+    .getByRole('button', { name: /^Close/ })
+    .first()
+    .click();
+  await manager
+    .getByRole('alertdialog')
+    .getByRole('button', { name: /^Close/ })
+    .click();
+  await manager.waitForURL(`${studyAddress}/report`);
+  await expect(manager.getByRole('heading', { name: 'What you may say' })).toBeVisible();
 }
 
 async function choose(page: Page, label: string, part: string): Promise<void> {

@@ -10,12 +10,22 @@ const quiet = [
   '--no-first-run',
 ];
 
+// The journeys that mostly wait, for excerpts, changes and a dead network. They start first, so that none is left to run
+// alone at the end.
+const long = ['journey', 'network-loss', 'other-methods', 'preference'].map((name) => `${name}.spec.ts`);
+
 export default defineConfig({
   testDir: '.',
+  globalSetup: './global-setup.ts',
   outputDir: '../../test-results',
   timeout: 600_000,
   expect: { timeout: 15_000 },
-  workers: 2,
+  // More than cores: a journey spends two thirds of its time waiting.
+  workers: 3,
+  projects: [
+    { name: 'long', testMatch: long },
+    { name: 'short', testMatch: '*.spec.ts', testIgnore: long },
+  ],
   reporter: [
     ['line'],
     ['json', { outputFile: process.env.PLAYWRIGHT_JSON_OUTPUT_NAME ?? '../../test-results/e2e.json' }],
@@ -24,7 +34,8 @@ export default defineConfig({
     browserName: 'chromium',
     launchOptions: { executablePath: process.env.CHROMIUM ?? '/usr/bin/chromium', args: quiet },
     actionTimeout: 60_000,
-    trace: 'retain-on-failure',
+    // Pictures along the way cost as much as the journey itself; one of the failure is kept.
+    trace: { mode: 'retain-on-failure', screenshots: false },
     screenshot: 'only-on-failure',
     locale: 'en-GB',
     timezoneId: 'Europe/Berlin',

@@ -1,8 +1,8 @@
 import { expect, type Page, test } from '@playwright/test';
 import type { Report } from '#shared/contracts/reports.ts';
-import { beginSession, openSeating, presentTrial, signIn } from './at-the-desk.ts';
+import { answer, beginSession, finishSession, openConsole, openSeating, presentTrial, signIn } from './at-the-desk.ts';
 import { linkInMailTo } from './mail-links.ts';
-import { codeSpecimens, planSession, planStudy } from './plan-a-study.ts';
+import { closeStudy, codeSpecimens, planSession, planStudy, sealStudy } from './plan-a-study.ts';
 import { type RunningFairlead, runFairlead } from './run-fairlead.ts';
 
 // A paired preference in a group of two, from its plan to its report: the listeners are invited by mail, accept by the link
@@ -18,21 +18,18 @@ test.afterAll(async () => {
   await fairlead?.stop();
 });
 
-async function prefer(phone: Page, what: 'The first' | 'The second' | 'No preference'): Promise<void> {
-  await phone.getByText(what, { exact: true }).click();
-  await phone.getByRole('button', { name: /how sure/ }).click();
-  await phone.getByText('Fairly', { exact: true }).click();
-  await phone.getByRole('button', { name: /^Send/ }).click();
+const preference = { id: 'paired-preference', settings: ['Offer “no preference” as an answer'] } as const;
+
+async function prefer(phone: Page, sentence: 'The first' | 'The second' | 'No preference'): Promise<void> {
+  await answer(phone, { sentence, short: sentence.toLowerCase(), among: 3 });
   await phone.getByText('held by the server').waitFor();
 }
 
 test('a group says which cable it prefers, and the report counts by what came first [F1] [F6]', async ({ browser }) => {
   const manager = await signIn(browser, fairlead.address, 'Maren Oduya');
-  await planStudy(manager, { listeners: 2, answerS: 60, trials: 5, preference: true });
+  await planStudy(manager, { listeners: 2, answerS: 60, trials: 5, method: preference });
   const studyAddress = manager.url();
-  await manager.getByRole('button', { name: /^Seal/ }).first().click();
-  await manager.getByRole('alertdialog').getByRole('button', { name: /^Seal/ }).click();
-  await expect(manager.getByRole('alertdialog')).toBeHidden();
+  await sealStudy(manager);
   await codeSpecimens(await signIn(browser, fairlead.address, 'Ines Halloran'), studyAddress);
   await planSession(manager, studyAddress);
 
@@ -49,10 +46,7 @@ test('a group says which cable it prefers, and the report counts by what came fi
   }
 
   const desk = await signIn(browser, fairlead.address, 'Tomas Brandt');
-  await desk
-    .getByRole('link', { name: /Study Dunlin/ })
-    .first()
-    .click();
+  await openConsole(desk, 'Study Dunlin');
   await openSeating(desk);
   const [left, right] = phones as [Page, Page];
   for (const phone of [left, right]) {
@@ -68,20 +62,9 @@ test('a group says which cable it prefers, and the report counts by what came fi
     await prefer(right, trial === 3 ? 'No preference' : 'The first');
     await desk.getByRole('button', { name: `Lock trial ${trial}` }).click();
   }
-  await desk.getByRole('button', { name: 'Finish the session' }).click();
-  await desk.getByText('The session is finished').waitFor();
+  await finishSession(desk);
 
-  await manager.goto(studyAddress);
-  await manager
-    .getByRole('button', { name: /^Close/ })
-    .first()
-    .click();
-  await manager
-    .getByRole('alertdialog')
-    .getByRole('button', { name: /^Close/ })
-    .click();
-  await expect(manager.getByRole('alertdialog')).toBeHidden();
-  await manager.goto(`${studyAddress}/report`);
+  await closeStudy(manager, studyAddress);
   const report: Report = await (
     await manager.request.get(`${studyAddress.replace('/organisations/', '/api/organisations/')}/report`)
   ).json();

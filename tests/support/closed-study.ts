@@ -186,10 +186,12 @@ function runSession(maker: StudyMaker, protocol: Protocol, session: number, list
 
 /**
  * @param listeners seats per session, 1 to 4
+ * @param startsAt  when it is sealed, in milliseconds since 1970
  * @param isAmended whether the protocol is sealed with another chain first, and amended before the codes are drawn
  */
-export function closedStudy(listeners: number, methodId = 'abx', isAmended = false): ClosedStudy {
+export function closedStudy(listeners: number, methodId = 'abx', startsAt?: number, isAmended = false): ClosedStudy {
   const maker = new StudyMaker();
+  if (startsAt !== undefined) maker.now = startsAt;
   const first = protocolFor(maker.study, listeners, methodId);
   const conduct = { ...first.conduct, chain: 'Player, another amplifier, loudspeakers' };
   const protocol = isAmended ? { ...first, version: 2, salt: hex('second salt', 32), conduct } : first;

@@ -9,11 +9,19 @@ import type { TestServer } from './test-server.ts';
 
 export const password = 'a-long-test-password';
 
+let hash: Promise<string> | undefined;
+
+/** The password is the same everywhere; one hash of it serves a whole file, at the cost that the program asks. */
+function hashOnce(): Promise<string> {
+  hash ??= hashPassword(password);
+  return hash;
+}
+
 /** An organisation with one person per role and a code holder (a second reviewer). */
 export async function makeOrganisation({ deps }: TestServer, name: string) {
   const { db, random, clock } = deps;
   const createdAt = new Date(clock.now());
-  const passwordHash = await hashPassword(password);
+  const passwordHash = await hashOnce();
   const organisationId = random.id();
   await db.manager.insert(Organisation, { id: organisationId, name, demo: false, createdAt });
   const add = async (key: string, role: Role) => {

@@ -1,6 +1,4 @@
 import 'reflect-metadata';
-import { randomBytes } from 'node:crypto';
-import { createConnection } from 'mysql2/promise';
 import { pino } from 'pino';
 import { type Config, readConfig } from '../../server/config.ts';
 import { createDataSource } from '../../server/db/data-source.ts';
@@ -9,35 +7,10 @@ import type { OwnCertificate } from '../../server/network/own-certificate.ts';
 import { serve } from '../../server/serve.ts';
 import { systemClock, systemRandom } from '../../server/system.ts';
 import type { TimestampAuthority } from '../../server/timestamps/authority.ts';
-
-function required(name: string): string {
-  const value = process.env[name];
-  if (value === undefined) throw new Error(`${name} is not set; run the tests with npm test`);
-  return value;
-}
-
-const account = () => ({
-  socketPath: required('TEST_DATABASE_SOCKET'),
-  user: required('TEST_DATABASE_USER'),
-  password: required('TEST_DATABASE_PASSWORD'),
-});
-
-/** A database of this test's own, and how to remove it. */
-export async function testDatabase() {
-  const name = `fairlead_test_${randomBytes(6).toString('hex')}`;
-  const admin = await createConnection(account());
-  await admin.query(`create database ${name} character set utf8mb4`);
-  return {
-    name,
-    remove: async () => {
-      await admin.query(`drop database ${name}`);
-      await admin.end();
-    },
-  };
-}
+import { databaseAccount, testDatabase } from './test-database.ts';
 
 export function testConfig(databaseName: string, environment: Record<string, string> = {}): Config {
-  const { socketPath, user, password } = account();
+  const { socketPath, user, password } = databaseAccount();
   const config = readConfig({
     SESSION_SECRET: 'a secret for tests, and long enough for the rule',
     SIGNING_SECRET: 'another secret for tests, and long enough too',
@@ -67,7 +40,7 @@ export async function testServer(
   const config = testConfig(database.name, given.environment);
   const db = createDataSource(config.database);
   await db.initialize();
-  await db.runMigrations();
+  if (database.isNew) await db.runMigrations();
   const deps: Deps = {
     config,
     db,
@@ -84,7 +57,7 @@ export async function testServer(
     stop: async () => {
       await server.stop();
       await db.destroy();
-      await database.remove();
+      await database.giveBack();
     },
   };
 }

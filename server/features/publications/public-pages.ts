@@ -3,7 +3,9 @@ import { publicationsApi } from '#shared/contracts/publications.ts';
 import { registryApi, registryPath } from '#shared/contracts/registry.ts';
 import { Problem } from '#shared/problem.ts';
 import type { Deps } from '../../deps.ts';
+import { limit } from '../../http/rate-limit.ts';
 import { listRegistry, publicRegistries } from '../registry/registry.service.ts';
+import { getBundle } from './bundle.service.ts';
 import { html, jsonScript } from './page/html.ts';
 import { publicationContent } from './page/publication-page.ts';
 import { publicationsContent } from './page/publications-page.ts';
@@ -11,7 +13,7 @@ import { registryContent } from './page/registry-page.ts';
 import { shellPage } from './page/shell.ts';
 import { structuredData } from './page/structured-data.ts';
 import { getDocument, getPublication, listPublications, publicAddresses } from './publications.service.ts';
-import { filePath, publicPath } from './publications.views.ts';
+import { bundlePath, filePath, publicPath } from './publications.views.ts';
 
 const idOf = (id: unknown) => publicationsApi.get.params?.safeParse({ id }).data?.id ?? null;
 
@@ -110,6 +112,16 @@ export function publicPages(deps: Deps): Router {
       .set('cache-control', 'no-cache')
       .type('html')
       .send(shellPage(clientDir, head, registryContent(organisationId, registry)));
+  });
+
+  router.get(bundlePath(':id'), limit({ attempts: 120, windowMs: 600_000 }), async (request, response) => {
+    const id = idOf(request.params.id);
+    if (id === null) throw new Problem('not-found', 'Nothing is published at this address.');
+    response
+      .set('cache-control', 'no-cache')
+      .set('content-disposition', `attachment; filename="fairlead-${id}.zip"`)
+      .type('application/zip')
+      .send(Buffer.from(await getBundle(deps, id)));
   });
 
   router.get(filePath(':id', ':digest'), async (request, response) => {

@@ -1,5 +1,6 @@
 import { likePattern, pageOfRows } from '../../db/paging.ts';
 import type { Tx } from '../../db/transaction.ts';
+import { TimestampToken } from '../../timestamps/timestamp-token.entity.ts';
 import { Publication } from './publication.entity.ts';
 
 export function listPublications(tx: Tx, query: { q: string; page: number; organisationId?: string }) {
@@ -37,6 +38,11 @@ export async function documentOf(tx: Tx, id: string, digest: string): Promise<st
     .where('publication.id = :id and publication.digest = :digest', { id, digest })
     .getOne();
   return row?.document ?? null;
+}
+
+/** How many tokens of a study's heads have come. */
+export function countTokens(tx: Tx, studyId: string): Promise<number> {
+  return tx.countBy(TimestampToken, { studyId });
 }
 
 export async function insertPublication(tx: Tx, publication: Publication) {

@@ -17,6 +17,9 @@ export const publicPath = (id: string) => `/p/${id}`;
 /** Where its frozen document is: the address names the digest, so that what stands there can never change. */
 export const filePath = (id: string, digest: string) => `${publicPath(id)}/${digest}.json`;
 
+/** Where its bundle is made on demand: it grows by tokens that arrive later. */
+export const bundlePath = (id: string) => `${publicPath(id)}/bundle.zip`;
+
 const withdrawalOf = ({ withdrawnAt, withdrawnReason }: Publication) =>
   withdrawnAt === null ? null : { at: withdrawnAt.toISOString(), reason: withdrawnReason ?? '' };
 
@@ -70,6 +73,7 @@ export function publicationView({ row, publicUrl, report, declared, heads }: Pub
     confirmations: declared.confirmations.map((name) => confirmations[name]),
     file: { digest, bytes, path: filePath(id, digest) },
     registry: registryPath(row.organisationId),
+    bundle: bundlePath(id),
     report: { ...report, record: { ...report.record, heads: [...heads] } },
   };
 }

@@ -2,8 +2,9 @@ import type { Report, ReportRow } from '#shared/contracts/reports.ts';
 import type { SignedHead } from '#shared/contracts/signed-heads.ts';
 import { isClosed } from '#shared/contracts/studies.ts';
 import type { Entry } from '#shared/ledger/chain.ts';
+import type { CheckId } from '#shared/ledger/check-names.ts';
 import { type ClosedStudy, publicationParts } from '#shared/ledger/publication-parts.ts';
-import { type Check, type CheckId, verifyStudy } from '#shared/ledger/verify.ts';
+import { type Check, verifyStudy } from '#shared/ledger/verify.ts';
 import { methodOf, registeredResult } from '#shared/methods/methods.ts';
 import { Problem } from '#shared/problem.ts';
 import { blindingRung } from '#shared/session/blinding-rung.ts';
@@ -48,8 +49,10 @@ function sourceFrom(closed: ClosedRecord): ReportSource {
   const finding = method.finding(result, {
     cables: [protocol.cables[0].name, protocol.cables[1].name],
     gate: {
-      commitmentsHold: passed(checks, ['record', 'protocol', 'commitments', 'draws', 'answers', 'figures']),
-      allTrialsAccounted: passed(checks, ['trials']),
+      commitmentsHold: passed(checks, [
+        ...(['record', 'protocol', 'commitments', 'codeKey', 'draws', 'answers', 'rules', 'figures'] as const),
+      ]),
+      allTrialsAccounted: passed(checks, ['trials', 'sessions', 'flow']),
       isBlind: rung.name !== 'open',
     },
     endedEarly: closing.complete ? null : closing.reason,

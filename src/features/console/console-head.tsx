@@ -19,7 +19,9 @@ export function ConsoleHead({ view, isLost, clockOffsetMs, back, children }: Con
     <div className="flex flex-wrap items-center justify-between gap-x-6 gap-y-1 border-b border-rule px-5 py-3 lg:px-8">
       <h1 className="text-base font-normal text-soft">
         <strong className="mr-4 text-ink">{view.title}</strong>
-        Session {view.session} · {view.room} · {view.method}
+        <span className="inline-block">
+          Session {view.session} · {view.room} · {view.method}
+        </span>
       </h1>
       <div className="flex flex-wrap items-center gap-x-6 gap-y-1">
         {isLost ? (

@@ -1,6 +1,7 @@
-import { type Check, checkNames } from '#shared/ledger/verify.ts';
+import type { Check } from '#shared/ledger/verify.ts';
 import { classNames } from '../../ui/class-names.ts';
 import { StatusWord } from '../../ui/status-word.tsx';
+import type { Verification } from './use-verification.ts';
 
 type State = Check['outcome'] | 'checking' | 'to do';
 
@@ -20,11 +21,13 @@ const rings: Record<State, string> = {
   'to do': 'border-edge bg-page',
 };
 
+type CheckListProps = Pick<Verification, 'names' | 'checks'> & { isRunning: boolean };
+
 /** Every check from the first, those to come as well; each with its outcome in a word and its reason in a sentence. */
-export function CheckList({ checks, isRunning }: { checks: readonly Check[]; isRunning: boolean }) {
+export function CheckList({ names, checks, isRunning }: CheckListProps) {
   return (
     <ol>
-      {checkNames.map(({ id, name }, index) => {
+      {names.map(({ id, name }, index) => {
         const check = checks.find((candidate) => candidate.id === id);
         const state: State = check?.outcome ?? (isRunning && index === checks.length ? 'checking' : 'to do');
         return (

@@ -1,19 +1,29 @@
 import { useCallback, useEffect, useRef, useState } from 'react';
+import { bundleCheckNames } from '#shared/ledger/check-names.ts';
 import type { Check } from '#shared/ledger/verify.ts';
 import type { VerifyMessage } from './verify-worker.ts';
 
 export type Verification = {
-  readonly phase: 'fetching' | 'checking' | 'done' | 'unreadable' | 'broken';
+  readonly phase: 'waiting' | 'fetching' | 'checking' | 'done' | 'unreadable' | 'broken';
   /** The name of the visitor's own file, or null for the published one. */
   readonly fileName: string | null;
+  /** Of the document, alone or in a bundle. */
   readonly digest: string | null;
+  /** Every check to come, in order. */
+  readonly names: readonly { readonly id: Check['id']; readonly name: string }[];
   readonly checks: readonly Check[];
 };
 
-const atFirst = (fileName: string | null): Verification => ({ phase: 'fetching', fileName, digest: null, checks: [] });
+const atFirst = (phase: Verification['phase'], fileName: string | null): Verification => ({
+  phase,
+  fileName,
+  digest: null,
+  names: bundleCheckNames,
+  checks: [],
+});
 
 function after(before: Verification, message: VerifyMessage): Verification {
-  if ('digest' in message) return { ...before, phase: 'checking', digest: message.digest };
+  if ('digest' in message) return { ...before, phase: 'checking', digest: message.digest, names: message.names };
   if ('check' in message) return { ...before, checks: [...before.checks, message.check] };
   return { ...before, phase: 'done' };
 }
@@ -24,9 +34,13 @@ async function download(path: string): Promise<ArrayBuffer> {
   return response.arrayBuffer();
 }
 
-/** Checks the published file as soon as the page is there, and whatever file the visitor gives it instead. */
-export function useVerification(path: string) {
-  const [verification, setVerification] = useState(() => atFirst(null));
+/**
+ * Checks the published file as soon as the page is there, and whatever file the visitor gives it instead.
+ *
+ * @param path where the published file is, or null where the visitor brings one
+ */
+export function useVerification(path: string | null) {
+  const [verification, setVerification] = useState(() => atFirst(path === null ? 'waiting' : 'fetching', null));
   const worker = useRef<Worker | null>(null);
 
   const check = useCallback((fileName: string | null, read: () => Promise<ArrayBuffer>) => {
@@ -37,7 +51,7 @@ export function useVerification(path: string) {
     const tell = (change: (before: Verification) => Verification) => {
       if (worker.current === own) setVerification(change);
     };
-    tell(() => atFirst(fileName));
+    tell(() => atFirst('fetching', fileName));
     own.onmessage = ({ data }: MessageEvent<VerifyMessage>) => tell((before) => after(before, data));
     own.onerror = () => tell((before) => ({ ...before, phase: 'broken' }));
     read().then(
@@ -46,7 +60,9 @@ export function useVerification(path: string) {
     );
   }, []);
 
-  const checkPublished = useCallback(() => check(null, () => download(path)), [check, path]);
+  const checkPublished = useCallback(() => {
+    if (path !== null) check(null, () => download(path));
+  }, [check, path]);
   const checkFile = useCallback((file: File) => check(file.name, () => file.arrayBuffer()), [check]);
 
   useEffect(() => {

@@ -11,9 +11,9 @@ import { VerificationOutcome } from './verification-outcome.tsx';
 
 /** The record, checked in the visitor's own browser from the downloaded file; and the file itself, to be checked elsewhere. */
 export function VerificationSection({ publication }: { publication: Publication }) {
-  const { file, registry } = publication;
-  const { verification, checkPublished, checkFile } = useVerification(file.path);
-  const { phase, fileName, checks } = verification;
+  const { file, bundle, registry } = publication;
+  const { verification, checkPublished, checkFile } = useVerification(bundle);
+  const { phase, fileName, checks, names } = verification;
   const isRunning = phase === 'fetching' || phase === 'checking';
   return (
     <section
@@ -27,40 +27,43 @@ export function VerificationSection({ publication }: { publication: Publication 
         <div role="status" className="flex flex-col gap-2">
           <VerificationOutcome verification={verification} published={file.digest} />
         </div>
-        <CheckList checks={checks} isRunning={isRunning} />
+        <CheckList names={names} checks={checks} isRunning={isRunning} />
         <div className="print:hidden">
           <Button busy={isRunning} busyLabel="Checking" onClick={checkPublished}>
             {fileName === null ? 'Check again' : 'Check the published file'}
           </Button>
         </div>
       </div>
-      <WithoutUs file={file} registry={registry} onFile={checkFile} />
+      <WithoutUs file={file} bundle={bundle} registry={registry} onFile={checkFile} />
     </section>
   );
 }
 
-function WithoutUs({
-  file,
-  registry,
-  onFile,
-}: Pick<Publication, 'file' | 'registry'> & { onFile: (file: File) => void }) {
+type WithoutUsProps = Pick<Publication, 'file' | 'bundle' | 'registry'> & { onFile: (file: File) => void };
+
+function WithoutUs({ file, bundle, registry, onFile }: WithoutUsProps) {
   return (
     <div className="flex min-w-0 flex-col gap-8">
       <section aria-labelledby="without-us" className="flex flex-col gap-3 border-t-2 border-ink pt-4">
         <h3 id="without-us" className="text-base font-bold">
           Without us
         </h3>
-        <p className="text-soft">
-          Everything is in one file: the record, the protocol, the secrets, the draws, every counted answer and the
-          result.
-        </p>
-        <a href={file.path} download className={buttonLook('plain', 'normal')}>
-          Download the record, {formatNumber(Math.ceil(file.bytes / 1000))} kB
+        <p className="text-soft">Download everything and check it with R and openssl alone; GUIDE.txt says how.</p>
+        <a href={bundle} download className={buttonLook('primary', 'normal')}>
+          Download the bundle
         </a>
+        <pre className="overflow-x-auto rounded border border-rule bg-sheet px-4 py-3 font-mono">
+          {'Rscript recompute.R\nopenssl ts -verify …\nsha256sum study.json'}
+        </pre>
         <FileDrop onFile={onFile} />
-        <p className="text-soft">SHA-256 of the published file, as sha256sum prints it</p>
+        <p className="text-soft">SHA-256 of the document in it, study.json</p>
         <code className="break-all">{file.digest}</code>
-        <CopyButton text={file.digest} label="Copy the digest" />
+        <div className="flex flex-wrap gap-3">
+          <CopyButton text={file.digest} label="Copy the digest" />
+          <a href={file.path} download className={buttonLook('plain', 'normal')}>
+            The document alone, {formatNumber(Math.ceil(file.bytes / 1000))} kB
+          </a>
+        </div>
         <Link to={registry}>Every protocol that this publisher has sealed</Link>
       </section>
       <section aria-labelledby="not-shown" className="flex flex-col gap-2 border-t-2 border-ink pt-4">

@@ -155,7 +155,7 @@ describe('a triangle', () => {
     expect(figures.chance).toBeCloseTo(1 / 3, 15);
     expect(figures.critical?.count).toBe(10);
     expect(figures.critical?.attainedSize).toBeCloseTo(0.0433480661886, 11);
-    expect(figures.power.map(({ rate }) => Number(rate.toFixed(4)))).toEqual([0.4667, 0.6, 0.7333]);
+    expect(methods.triangle.planned.rates.map((rate) => Number(rate.toFixed(4)))).toEqual([0.4667, 0.6, 0.7333]);
     expect(figures.leastPDenominator).toBe(3n ** 18n);
     expect(figures.session.fittings).toBe(56);
   });

@@ -15,7 +15,7 @@ import { sessionsInRecord } from '#shared/session/read-record.ts';
 import { chainedAgain, closedStudy } from '../../support/closed-study.ts';
 
 describe('a study whose protocol was amended before data', () => {
-  const study = closedStudy(2, 'abx', true);
+  const study = closedStudy(2, 'abx', undefined, true);
   const parts = publicationParts(study);
   const text = publicationText(parts);
   const { entries } = study;
@@ -23,7 +23,7 @@ describe('a study whose protocol was amended before data', () => {
   if (first === undefined) throw new Error('no earlier version');
 
   it('passes every check, with the versions before in its document [J6]', () => {
-    expect([...checksOfFile(text)].map(({ outcome }) => outcome)).toEqual(Array(9).fill('pass'));
+    expect([...checksOfFile(text)].filter(({ outcome }) => outcome !== 'pass')).toEqual([]);
     expect(verifyStudy(parts).find(({ id }) => id === 'protocol')?.reason).toContain('entry 2, as version 2');
     const read = readPublication(text);
     expect('parts' in read && read.parts.earlierProtocols).toEqual([first]);
@@ -85,9 +85,7 @@ describe('a study whose protocol was amended before data', () => {
   it('fails where the codes were committed to again once a session had opened [J5]', () => {
     const committed = entries.find(({ kind }) => kind === 'code-key-committed') as Entry;
     const late = rewritten((entry) => (entry.kind === 'seating-opened' ? [entry, committed] : [entry]));
-    expect(failures(late)).toEqual([
-      ['commitments', 'The code key was committed to after the first session had opened.'],
-    ]);
+    expect(failures(late)).toEqual([['codeKey', 'The code key was committed to after somebody had sat down.']]);
   });
 
   const rungOf = (changed: readonly Entry[]) => {

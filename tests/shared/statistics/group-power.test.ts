@@ -4,6 +4,7 @@ import { xoroshiro128plus } from 'pure-rand/generator/xoroshiro128plus';
 import { describe, expect, it } from 'vitest';
 import { evenChance } from '#shared/statistics/chance.ts';
 import { groupFindings, pOfShared } from '#shared/statistics/group-power.ts';
+import { groupTrialsNeeded } from '#shared/statistics/group-trials-needed.ts';
 import { power } from '#shared/statistics/power.ts';
 import { sharedPresentationTest } from '#shared/statistics/shared-presentation-test.ts';
 
@@ -56,5 +57,29 @@ describe('the power of a group', () => {
   it('refuses what is outside its domain', () => {
     expect(() => groupFindings({ ...half, listeners: 0, trials: 5, rate: 0.6 }, 10, source(4))).toThrow(RangeError);
     expect(() => groupFindings({ ...half, listeners: 2, trials: 5, rate: 1.2 }, 10, source(4))).toThrow(RangeError);
+  });
+});
+
+describe('how many trials a group needs', () => {
+  it('is the fewest that reach the goal where power rises, and none where it never does [W3]', () => {
+    // 1 - .9^15 is .794, 1 - .9^16 is .815
+    expect(groupTrialsNeeded((trials) => 1 - 0.9 ** trials, 0.8, 100)).toBe(16);
+    expect(groupTrialsNeeded(() => 0.9, 0.8, 100)).toBe(5);
+    expect(groupTrialsNeeded(() => 0.7, 0.8, 100)).toBeNull();
+    fc.assert(
+      fc.property(fc.integer({ min: 5, max: 400 }), fc.integer({ min: 5, max: 300 }), (from, most) => {
+        const found = groupTrialsNeeded((trials) => (trials >= from ? 0.9 : 0.1), 0.8, most);
+        expect(found).toBe(from <= most ? from : null);
+      }),
+    );
+  });
+
+  it('of six listeners, right seven times in ten, lies between what own draws and one listener need [W3]', () => {
+    const powerOf = (trials: number) =>
+      groupFindings({ ...half, listeners: 6, trials, rate: 0.7 }, 400, source(trials)) / 400;
+    const needed = groupTrialsNeeded(powerOf, 0.8, 320) ?? Number.NaN;
+    // One listener needs 42; 42 answers with draws of their own would be 7 trials of six.
+    expect(needed).toBeGreaterThan(7);
+    expect(needed).toBeLessThan(20);
   });
 });

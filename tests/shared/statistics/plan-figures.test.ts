@@ -40,11 +40,12 @@ describe('what the planner shows', () => {
 
   // R: pbinom(11, 16, c(.5, .6, .7, .8), lower.tail = FALSE)
   it('shows the number to reach, its true size and the power at .6, .7 and .8 [T22]', () => {
-    const { critical, power, chance } = planFigures(plan);
+    const { critical, chance } = planFigures(plan);
+    const { rates, power } = plan.test;
     expect(chance).toBe(0.5);
     expect(critical).toMatchObject({ count: 12 });
     expect(critical?.attainedSize).toBeCloseTo(2517 / 65536, 14);
-    expect(power.map((point) => [point.rate, Number(point.power.toFixed(4))])).toEqual([
+    expect(rates.map((rate) => [rate, Number(power(16, 0.05, rate).toFixed(4))])).toEqual([
       [0.6, 0.1666],
       [0.7, 0.4499],
       [0.8, 0.7982],

@@ -173,7 +173,7 @@ describe('planning same-different', () => {
   it('fixes no number of hits, and knows the least p of all choices [H6]', () => {
     expect(sameDifferentPlan.critical(16, 0.05)).toBeNull();
     expect(sameDifferentPlan.leastPDenominator(16)).toBe(12870n);
-    const { nFirst, nSafe } = sameDifferentPlan.needed(0.05, 0.8);
+    const { nFirst, nSafe } = sameDifferentPlan.needed(0.05, 0.8, 0.8);
     expect(nFirst).not.toBeNull();
     expect(sameDifferentPower((nFirst ?? 0) - 1, 0.05, 0.8)).toBeLessThan(0.8);
     for (let trials = nSafe ?? 0; trials < (nSafe ?? 0) + 30; trials++)

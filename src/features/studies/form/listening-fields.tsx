@@ -1,7 +1,11 @@
 import { useFormContext } from 'react-hook-form';
 import { NumberField } from '../../../ui/number-field.tsx';
+import { TextField } from '../../../ui/text-field.tsx';
 import { AlphaField } from './alpha-field.tsx';
+import { EffectFields } from './effect-fields.tsx';
 import { FormSection } from './form-section.tsx';
+import { GoalField } from './goal-field.tsx';
+import { MarginFields } from './margin-fields.tsx';
 import type { StudyFormValues } from './study-form-values.ts';
 
 const number = { valueAsNumber: true } as const;
@@ -10,7 +14,10 @@ export function ListeningFields() {
   const { register } = useFormContext<StudyFormValues>();
   return (
     <FormSection title="How much listening" lede="Change any of these and the plan follows.">
+      <EffectFields />
       <div className="grid gap-x-4 gap-y-6 sm:grid-cols-2">
+        <GoalField />
+        <AlphaField />
         <NumberField {...register('sessions', number)} label="Sessions" step={1} min={1} max={20} />
         <NumberField
           {...register('listenersPerSession', number)}
@@ -29,7 +36,13 @@ export function ListeningFields() {
           hint="Drawn beforehand; one takes the place of a trial that is set aside for a stated fault."
         />
       </div>
-      <AlphaField />
+      <MarginFields />
+      <TextField
+        {...register('samplingFrame')}
+        label="Whom are the listeners drawn from?"
+        optional
+        hint="Such as “members of a listening club, invited by lot”. Only with it, and from six listeners on, may a finding speak of listeners in general."
+      />
     </FormSection>
   );
 }

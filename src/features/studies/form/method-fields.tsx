@@ -7,7 +7,7 @@ import type { StudyFormValues } from './study-form-values.ts';
 
 const methodOptions = Object.values(methods).map(({ id, name }) => ({ value: id, label: name }));
 
-/** The method, and whatever it leaves to the study. Another method starts with its settings off and no attribute. */
+/** The method, and whatever it leaves to the study. Another method starts with its settings off, no attribute and no margin. */
 export function MethodFields() {
   const { register, setValue, watch, formState } = useFormContext<StudyFormValues>();
   const { field, fieldState } = useController<StudyFormValues, 'methodSettings'>({ name: 'methodSettings' });
@@ -18,6 +18,7 @@ export function MethodFields() {
   const startAnew = () => {
     setValue('methodSettings', [], { shouldDirty: true });
     setValue('attribute', '', { shouldDirty: true });
+    setValue('marginPercent', undefined, { shouldDirty: true });
   };
   return (
     <div className="flex flex-col gap-3">

@@ -12,6 +12,7 @@ export const newStudyValues: StudyFormValues = {
   method: methodIds[0],
   methodSettings: [],
   attribute: '',
+  samplingFrame: '',
   cables: [
     { cableId: '', specimenIds: [] },
     { cableId: '', specimenIds: [] },

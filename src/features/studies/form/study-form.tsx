@@ -6,6 +6,7 @@ import type { Member } from '#shared/contracts/users.ts';
 import { showProblem } from '../../../lib/show-problem.ts';
 import { Form } from '../../../ui/form.tsx';
 import { LeaveGuard } from '../../../ui/leave-guard.tsx';
+import { PlanProvider } from '../planner/plan-provider.tsx';
 import { Planner } from '../planner/planner.tsx';
 import { CableFields } from './cable-fields.tsx';
 import { CodeHolderField } from './code-holder-field.tsx';
@@ -65,15 +66,17 @@ export function StudyForm<Saved>({
         className="lg:grid lg:grid-cols-[minmax(0,32rem)_minmax(0,1fr)] lg:items-start lg:gap-x-16"
         actions={renderActions(isSubmitting)}
       >
-        <div className="flex min-w-0 flex-col gap-6">
-          <QuestionFields cables={cables} />
-          <CableFields cables={cables} />
-          <ListeningFields />
-          <ProgrammeFields />
-          <RigFields />
-          <CodeHolderField members={members} isManager={isManager} />
-        </div>
-        <Planner />
+        <PlanProvider>
+          <div className="flex min-w-0 flex-col gap-6">
+            <QuestionFields cables={cables} />
+            <CableFields cables={cables} />
+            <ListeningFields />
+            <ProgrammeFields />
+            <RigFields />
+            <CodeHolderField members={members} isManager={isManager} />
+          </div>
+          <Planner />
+        </PlanProvider>
       </Form>
     </>
   );

@@ -1,5 +1,6 @@
 import { formatDuration } from '../../../lib/format.ts';
 import { Figure, FigureRow } from '../../../ui/figure.tsx';
+import { FoundShare } from './found-share.tsx';
 import { breaks, type Plan } from './plan-of.ts';
 import { percent } from './plan-words.ts';
 
@@ -11,11 +12,12 @@ export function PlanFigures({ plan }: { plan: Plan }) {
       <FigureRow>
         <Figure value={plan.sessions} label={isSeveral ? 'sessions' : 'session'} />
         <Figure value={plan.fittings} label="changes of cable" />
-        <Figure value={clockWords(plan.minutes)} label={`${isSeveral ? 'in all, ' : ''}with changes and breaks`} />
-        {isSeveral ? <Figure value={clockWords(plan.minutesPerSession)} label="each session" /> : null}
+        <Figure value={clockWords(plan.minutes)} label={isSeveral ? 'in all, with breaks' : 'with breaks'} />
+        <Figure value={<FoundShare />} label="chance of finding it" />
       </FigureRow>
       <p className="text-soft">
-        {levelWords(plan)} {breakWords(plan)} Familiarisation is counted in.
+        {levelWords(plan)} {isSeveral ? `Each session takes ${clockWords(plan.minutesPerSession)}. ` : ''}
+        {breakWords(plan)} Familiarisation is counted in.
       </p>
     </div>
   );

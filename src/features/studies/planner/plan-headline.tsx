@@ -1,11 +1,21 @@
 import type { ReactNode } from 'react';
 import { formatProbability } from '#shared/findings/format-probability.ts';
 import { formatCount, formatNumber } from '../../../lib/format.ts';
+import { PlanMargin } from './plan-margin.tsx';
 import type { Plan } from './plan-of.ts';
 import { percent } from './plan-words.ts';
 
-/** The plan in one or two sentences. */
+/** The plan in a few sentences: what a finding needs and, with a margin, what finding nothing needs. */
 export function PlanHeadline({ plan }: { plan: Plan }) {
+  return (
+    <div className="flex flex-col gap-3">
+      <Needed plan={plan} />
+      <PlanMargin plan={plan} />
+    </div>
+  );
+}
+
+function Needed({ plan }: { plan: Plan }) {
   if (!plan.figures.canReachAlpha) return <OutOfReach plan={plan} />;
   return plan.listeners === 1 ? <OwnDraws plan={plan} /> : <SharedDraws plan={plan} />;
 }
@@ -18,7 +28,7 @@ function OwnDraws({ plan }: { plan: Plan }) {
   return (
     <Headline>
       Plan <Planned>{plan.trials} trials</Planned>. <Planned>{words.needed(critical.count)}</Planned> {words.underNull}{' '}
-      <Planned>{percent(critical.attainedSize)}</Planned> of such tests find {words.found}.
+      <Planned>{percent(critical.attainedSize)}</Planned> of such tests wrongly find {words.found}.
     </Headline>
   );
 }

@@ -3,6 +3,7 @@ import { studyDraft } from '#shared/contracts/studies.ts';
 import type { Method, MethodChoices } from '#shared/methods/method.ts';
 import { methodOf } from '#shared/methods/methods.ts';
 import { alphaText } from '#shared/protocol/protocol.ts';
+import { correctRateOf } from '#shared/statistics/above-guessing.ts';
 import { type PlanFigures, planFigures } from '#shared/statistics/plan-figures.ts';
 import type { StudyFormValues } from '../form/study-form-values.ts';
 
@@ -10,6 +11,7 @@ const {
   method,
   methodSettings,
   attribute,
+  marginPercent,
   sessions,
   trials,
   listenersPerSession,
@@ -24,6 +26,7 @@ const listening = z.object({
   method,
   methodSettings,
   attribute,
+  marginPercent: marginPercent.catch(undefined),
   sessions,
   trials,
   listenersPerSession,
@@ -54,6 +57,17 @@ export type Plan = {
 /** As good practice has it: no more than twenty trials in a row, then ten minutes of rest. */
 export const breaks = { everyTrials: 20, lengthMs: 600_000 };
 
+/** The rate at which a share of answers lies above guessing. */
+export function rateOf({ planned }: Method, share: number): number {
+  return correctRateOf(share, planned.guessing);
+}
+
+/** The margin that is spoken of while none is registered. */
+export const exampleMargin = 20;
+
+/** The registered margin, or the example. */
+export const spokenMargin = ({ marginPercent }: MethodChoices) => marginPercent ?? exampleMargin;
+
 /** What a draft comes to, or null while a figure that it takes is missing or out of range. */
 export function planOf(values: Partial<StudyFormValues>): Plan | null {
   const parsed = listening.safeParse(values);
@@ -61,7 +75,8 @@ export function planOf(values: Partial<StudyFormValues>): Plan | null {
   const draft = parsed.data;
   const alpha = alphaText(draft.alphaPerMille);
   const chosen = methodOf(draft.method);
-  const { alternative } = chosen.registered(draft);
+  const choices = { ...draft, marginPercent: soundMargin(chosen, draft.marginPercent) };
+  const { alternative } = chosen.registered(choices);
   const figures = planFigures({
     sessions: draft.sessions,
     trials: draft.trials,
@@ -77,7 +92,7 @@ export function planOf(values: Partial<StudyFormValues>): Plan | null {
   });
   return {
     method: chosen,
-    choices: draft,
+    choices,
     alternative,
     sessions: draft.sessions,
     trialsPerSession: draft.trials,
@@ -89,6 +104,11 @@ export function planOf(values: Partial<StudyFormValues>): Plan | null {
     minutesPerSession: figures.session.durationMinutes,
     minutes: draft.sessions * figures.session.durationMinutes,
   };
+}
+
+/** A margin that the method does not take is a fault of its field; the plan goes on without it. */
+function soundMargin({ margin }: Method, percent: number | undefined): number | undefined {
+  return margin === null || percent === undefined || percent > margin.mostPercent ? undefined : percent;
 }
 
 /** Trials take the excerpts in turn, so the first ones may come once more often than the last. */

@@ -1,27 +1,31 @@
-import { useDeferredValue } from 'react';
-import { useWatch } from 'react-hook-form';
 import { Notice } from '../../../ui/notice.tsx';
-import type { StudyFormValues } from '../form/study-form-values.ts';
+import { GroupPower } from './group-power.tsx';
+import { usePlan } from './plan-context.ts';
+import { PlanCounts } from './plan-counts.tsx';
 import { PlanFigures } from './plan-figures.tsx';
 import { PlanHeadline } from './plan-headline.tsx';
-import { planOf } from './plan-of.ts';
-import { PlanPower } from './plan-power.tsx';
-import { PlanSaw } from './plan-saw.tsx';
+import { PlanNull } from './plan-null.tsx';
+import { PlanNumber } from './plan-number.tsx';
 import { PlanWarnings } from './plan-warnings.tsx';
 
 /** What the study needs and what it can show, live as it is typed; words first. */
 export function Planner() {
-  const values = useDeferredValue(useWatch<StudyFormValues>());
-  const plan = planOf(values as Partial<StudyFormValues>);
+  const { plan } = usePlan();
   return (
-    <aside aria-label="What this plan comes to" className="flex min-w-0 flex-col gap-5 lg:sticky lg:top-6">
+    <aside
+      // biome-ignore lint/a11y/noNoninteractiveTabindex: where it scrolls beside the form, it must be reached by key
+      tabIndex={0}
+      aria-label="What this plan comes to"
+      className="flex min-w-0 flex-col gap-6 lg:sticky lg:top-6 lg:-mx-2 lg:max-h-[calc(100dvh-3rem)] lg:overflow-y-auto lg:px-2 lg:pb-6"
+    >
       {plan ? (
         <>
           <PlanHeadline plan={plan} />
           <PlanFigures plan={plan} />
-          <PlanPower plan={plan} />
+          {plan.listeners === 1 ? <PlanNumber plan={plan} /> : <GroupPower plan={plan} />}
           <PlanWarnings plan={plan} />
-          {plan.listeners === 1 ? <PlanSaw plan={plan} /> : null}
+          <PlanNull plan={plan} />
+          <PlanCounts plan={plan} />
         </>
       ) : (
         <Notice title="The plan appears here.">

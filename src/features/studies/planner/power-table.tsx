@@ -1,11 +1,17 @@
 import type { PlanWords } from '#shared/methods/method.ts';
-import type { PlanFigures } from '#shared/statistics/plan-figures.ts';
 import { powerPercent } from './plan-words.ts';
 
-type PowerTableProps = Pick<PlanFigures, 'power'> & { words: Pick<PlanWords, 'found' | 'atRate'> };
+type PowerTableProps = {
+  /** The rate that is looked for, then a small, a middling and a large one. */
+  power: readonly { readonly rate: number; readonly power: number }[];
+  words: Pick<PlanWords, 'found' | 'atRate'>;
+};
 
-/** Three rates side by side, each with the chance that the test finds it. */
-export function PowerTable({ power, words }: PowerTableProps) {
+/** Rates side by side, each once, with the chance that the test finds it. */
+export function PowerTable({ power: all, words }: PowerTableProps) {
+  const power = all
+    .filter(({ rate }, index) => all.findIndex((other) => words.atRate(other.rate) === words.atRate(rate)) === index)
+    .toSorted((a, b) => a.rate - b.rate);
   return (
     <table className="w-full border-collapse">
       <caption className="sr-only">Chance of finding {words.found}, by how often answers are as named</caption>

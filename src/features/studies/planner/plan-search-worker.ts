@@ -1,0 +1,3 @@
+import { type SearchAsked, searchPlan } from './plan-search.ts';
+
+self.addEventListener('message', ({ data }: MessageEvent<SearchAsked>) => self.postMessage(searchPlan(data)));

@@ -1,0 +1,44 @@
+import { beforeAll, describe, expect, it } from 'vitest';
+import { checksOfBundle } from '#shared/bundle/verify-bundle.ts';
+import { bundleCheckNames } from '#shared/ledger/check-names.ts';
+import type { Check } from '#shared/ledger/verify.ts';
+import { bentBundles, type Whole, wholeBundle } from '../support/bent-bundles.ts';
+
+async function checksOf(bytes: Uint8Array): Promise<Check[]> {
+  const checks: Check[] = [];
+  for await (const check of checksOfBundle(bytes, globalThis.crypto)) checks.push(check);
+  return checks;
+}
+
+describe('a bundle', () => {
+  let whole: Whole;
+  beforeAll(async () => {
+    whole = await wholeBundle();
+  }, 60_000);
+
+  it('passes every line when nobody has bent it [Z1]', async () => {
+    const checks = await checksOf(whole.zip);
+    expect(checks.filter(({ outcome }) => outcome !== 'pass')).toEqual([]);
+    expect(checks.map(({ id, name }) => ({ id, name }))).toEqual(bundleCheckNames);
+  });
+
+  it('is bent in sixty ways at least, no two alike [Z2]', () => {
+    expect(bentBundles.length).toBeGreaterThanOrEqual(60);
+    expect(new Set(bentBundles.map(({ name }) => name)).size).toBe(bentBundles.length);
+  });
+
+  it.each(bentBundles.map((bent) => [bent.name, bent] as const))('shows %s at its line [Z2]', async (_name, bent) => {
+    const checks = await checksOf(await bent.bend(whole));
+    const line = checks.find(({ id }) => id === bent.line);
+    expect(
+      line?.outcome,
+      JSON.stringify(
+        checks.filter(({ outcome }) => outcome !== 'pass'),
+        null,
+        1,
+      ),
+    ).toBe(bent.outcome ?? 'fail');
+    expect(line?.reason).toMatch(bent.says);
+    if (bent.outcome === 'not checkable') expect(checks.filter(({ outcome }) => outcome === 'fail')).toEqual([]);
+  });
+});
