@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { headProofs } from '../ledger/head-proofs.ts';
 import { endpoint, managers } from './endpoint.ts';
 import { done, thingParams } from './organisation-params.ts';
 import { listQuery, pageOf } from './paging.ts';
@@ -115,6 +116,14 @@ export const publicationsApi = {
     access: 'anyone',
     params: z.strictObject({ id: shortId }),
     reply: publication,
+  }),
+  signedHeads: endpoint({
+    method: 'GET',
+    path: '/publications/:id/signed-heads',
+    summary: 'The keys, signatures and tokens of a published record, for anybody, as a file to check',
+    access: 'anyone',
+    params: z.strictObject({ id: shortId }),
+    reply: headProofs,
   }),
   ofStudy: endpoint({
     method: 'GET',

@@ -44,12 +44,21 @@ test('a stranger reads a publication without a script, and checks it in the brow
   await expect(reader.getByText('What may be said')).toBeVisible();
   await expect(reader.getByText('Changes between presentations lasted 30 s')).toBeVisible();
   await expect(reader.getByRole('heading', { name: 'Session 2, abandoned' })).toBeVisible();
+  await expect(reader.getByText('Fingerprint of the key')).toBeVisible();
 
   await page.goto(address);
   await expect(page.getByRole('heading', { level: 1 })).toHaveText(finding ?? '');
   await expect(page.getByText('All 9 checks pass.')).toBeVisible();
   await expect(page.getByText('It is the file that was published')).toBeVisible();
   expect(await outcomes(page)).toEqual(allPass);
+  const heads = page.getByRole('region', { name: 'Signed and time-stamped' });
+  await expect(heads.getByRole('rowheader', { name: 'Published' })).toBeVisible();
+  await expect(heads.getByText('its tokens prove nothing about time')).toBeVisible();
+  const [file] = await Promise.all([
+    page.waitForEvent('download'),
+    heads.getByRole('link', { name: /^Download/ }).click(),
+  ]);
+  expect(JSON.parse(readFileSync(await file.path(), 'utf8')).format).toBe('fairlead-signed-heads');
   await expectAccessible(page, 'publication');
 });
 

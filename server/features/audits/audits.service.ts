@@ -1,6 +1,10 @@
 import type { AuditFault, AuditOutcome } from '#shared/contracts/audits.ts';
-import { withTransaction } from '../../db/transaction.ts';
+import { type Tx, withTransaction } from '../../db/transaction.ts';
 import type { Deps } from '../../deps.ts';
+import { auditFaultMail } from '../../mail/mails.ts';
+import { postMail } from '../../mail/outbox.ts';
+import { pageAddresses } from '../../mail/page-addresses.ts';
+import { membersOf } from '../users/users.store.ts';
 import type { Audit } from './audit.entity.ts';
 import { auditStudy, type StudyAudit } from './audit-study.ts';
 import * as store from './audits.store.ts';
@@ -18,6 +22,7 @@ export const recordTriggers = [
   'registry_leaves',
   'registry_heads',
   'protocol_versions',
+  'publications',
 ]
   .flatMap((table) => [`${table}_no_update`, `${table}_no_delete`])
   .sort();
@@ -70,6 +75,20 @@ export async function* auditAll(deps: AuditDeps): AsyncGenerator<OrganisationAud
   for (const organisationId of ids) yield auditOrganisation(deps, organisationId, shared);
 }
 
+const newFaults = (faults: readonly AuditFault[], before: readonly AuditFault[]) =>
+  faults.filter(
+    ({ studyId, sequence, why }) =>
+      !before.some((known) => known.studyId === studyId && known.sequence === sequence && known.why === why),
+  );
+
+/** Once for each finding: an audit that fails must not wait until somebody looks. */
+async function tellOwners(tx: Tx, deps: Deps, organisationId: string, faults: readonly AuditFault[]): Promise<void> {
+  if (faults.length === 0) return;
+  const mail = auditFaultMail(faults, pageAddresses.proof(deps.config, organisationId));
+  for (const { role, user } of await membersOf(tx, organisationId))
+    if (role === 'owner') await postMail(tx, deps, { organisationId, recipient: user.email }, mail);
+}
+
 /** Audits all records where the last audit is a day old, and keeps what it came to for the owners. */
 export async function auditWhenDue(deps: Deps): Promise<void> {
   const { db, clock, log } = deps;
@@ -81,7 +100,11 @@ export async function auditWhenDue(deps: Deps): Promise<void> {
     for (const { studyId, sequence, why } of faults)
       log.error({ organisation: organisationId, study: studyId, sequence, why }, 'a record does not hold');
     log.info({ organisation: organisationId, ...sums, faults: faults.length }, 'records audited');
-    await withTransaction(db, (tx) => store.insertAudit(tx, { ...audit, faults: [...faults], at }));
+    await withTransaction(db, async (tx) => {
+      const before = await store.latestAudit(tx, organisationId);
+      await store.insertAudit(tx, { ...audit, faults: [...faults], at });
+      await tellOwners(tx, deps, organisationId, newFaults(faults, before?.faults ?? []));
+    });
   }
   await withTransaction(db, (tx) => store.deleteAuditsBefore(tx, new Date(at.getTime() - keepMs)));
 }

@@ -153,7 +153,7 @@ function versions(all: Report['protocol']['versions']): Html | null {
     )}</ol>`;
 }
 
-function signedHeads(heads: readonly SignedHead[]): Html | null {
+function signedHeads(heads: readonly SignedHead[], id: string): Html | null {
   if (heads.length === 0) return null;
   const lines = heads.map(({ moment, session: number, sequence, at, token }) => {
     const which = `${momentWords[moment]}${number === null ? '' : `, session ${number}`}`;
@@ -167,10 +167,11 @@ function signedHeads(heads: readonly SignedHead[]): Html | null {
   return html`<h3 class="text-lg">Signed and time-stamped</h3>
     ${list(lines, '')}
     ${heads.some(({ token }) => token?.isLocal) ? html`<p class="max-w-3xl">${localTimeWords}</p>` : null}
+    <p><a href="/api/publications/${id}/signed-heads" download="fairlead-signed-heads.json">Download keys, signatures and tokens</a></p>
     ${facts(keys.map((key) => ({ label: 'Fingerprint of the key', value: html`<code>${readableFingerprint(key)}</code>` })))}`;
 }
 
-function verification({ file, registry, report: { record, protocol } }: Publication): Html {
+function verification({ id, file, registry, report: { record, protocol } }: Publication): Html {
   return html`<p class="max-w-3xl">With JavaScript this page downloads the record and checks it in your browser, step by step. Without it, download the record and check it with the command “npm run verify”, or by hand as the guide “Check a result” says.</p>
     <p><a href="${file.path}" download>Download the record, ${Math.ceil(file.bytes / 1000)} kB</a></p>
     ${facts([
@@ -179,7 +180,7 @@ function verification({ file, registry, report: { record, protocol } }: Publicat
       { label: `Protocol, sealed ${utc(protocol.sealedAt)}`, value: html`<code>${protocol.digest}</code>` },
     ])}
     <p><a href="${registry}">Every protocol that this publisher has sealed</a></p>
-    ${signedHeads(record.heads)}
+    ${signedHeads(record.heads, id)}
     <h3 class="text-lg">What no software can show</h3>
     <p class="max-w-3xl">${notShown} Repeating the test is the cure.</p>`;
 }
