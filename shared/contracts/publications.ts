@@ -79,6 +79,8 @@ export const publication = z.strictObject({
   /** What belongs to the finding's first lines beside its own: the gap between presentations and how blind it was. */
   /** The frozen document: its SHA-256 digest, its size in bytes, and where it is. */
   file: z.strictObject({ digest: z.string(), bytes: z.int(), path: z.string() }),
+  /** Where the publisher's registry of sealed protocols stands. */
+  registry: z.string(),
   /** Where the bundle is: the document with tables, signatures, tokens and what recomputes its figures. */
   bundle: z.string(),
   report,

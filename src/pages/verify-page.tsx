@@ -1,8 +1,8 @@
 import { notShown } from '#shared/contracts/publications.ts';
 import { CheckList } from '../features/publications/check-list.tsx';
-import { FileDrop } from '../features/publications/file-drop.tsx';
 import { useVerification } from '../features/publications/use-verification.ts';
 import { VerificationOutcome } from '../features/publications/verification-outcome.tsx';
+import { FileDrop } from '../ui/file-drop.tsx';
 
 /** For whoever holds a file and distrusts its publisher: it is checked here and sent nowhere. */
 export function Component() {

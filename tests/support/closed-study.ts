@@ -184,11 +184,17 @@ function runSession(maker: StudyMaker, protocol: Protocol, session: number, list
   else made.do({ kind: 'abandon', reason: 'The amplifier failed.' });
 }
 
-/** @param listeners seats per session, 1 to 4. @param startsAt when it is sealed, in milliseconds since 1970 */
-export function closedStudy(listeners: number, methodId = 'abx', startsAt?: number): ClosedStudy {
+/**
+ * @param listeners seats per session, 1 to 4
+ * @param startsAt  when it is sealed, in milliseconds since 1970
+ * @param isAmended whether the protocol is sealed with another chain first, and amended before the codes are drawn
+ */
+export function closedStudy(listeners: number, methodId = 'abx', startsAt?: number, isAmended = false): ClosedStudy {
   const maker = new StudyMaker();
   if (startsAt !== undefined) maker.now = startsAt;
-  const protocol = protocolFor(maker.study, listeners, methodId);
+  const first = protocolFor(maker.study, listeners, methodId);
+  const conduct = { ...first.conduct, chain: 'Player, another amplifier, loudspeakers' };
+  const protocol = isAmended ? { ...first, version: 2, salt: hex('second salt', 32), conduct } : first;
   const rows = protocol.cables.flatMap(({ specimens }, index) =>
     specimens.map(({ id: specimen, serial }, n) => ({
       code: String(317 + index * 211 + n * 38),
@@ -198,7 +204,14 @@ export function closedStudy(listeners: number, methodId = 'abx', startsAt?: numb
     })),
   );
   const codeKey = { salt: hex('key salt', 32), rows };
-  maker.put('protocol-sealed', { protocolVersion: 1, digest: protocolDigest(protocol), sealedBy: people.manager });
+  maker.put('protocol-sealed', { protocolVersion: 1, digest: protocolDigest(first), sealedBy: people.manager });
+  if (isAmended)
+    maker.put('protocol-amended', {
+      protocolVersion: 2,
+      digest: protocolDigest(protocol),
+      amendedBy: people.manager,
+      reason: 'The amplifier was sold.',
+    });
   maker.put('code-key-committed', {
     commitment: codeKeyCommitment(codeKey.salt, rows),
     specimens: rows.length,
@@ -225,6 +238,11 @@ export function closedStudy(listeners: number, methodId = 'abx', startsAt?: numb
   const result = runRegistered(protocol, sessionsInRecord(maker.entries, method), key, maker.answers);
   maker.put('result-recorded', { analysis: protocol.analysis.name, result });
   return JSON.parse(
-    canonicalJson({ entries: maker.entries, protocol, answers: maker.answers } as unknown as Json),
+    canonicalJson({
+      entries: maker.entries,
+      protocol,
+      ...(isAmended ? { earlierProtocols: [first] } : {}),
+      answers: maker.answers,
+    } as unknown as Json),
   ) as ClosedStudy;
 }

@@ -1,5 +1,7 @@
 import { type ChainFault, chainFault, type Entry } from '#shared/ledger/chain.ts';
 import { fileDigest, utf8ToBytes } from '#shared/ledger/digest.ts';
+import { sealedVersions } from '#shared/ledger/protocol-versions.ts';
+
 import { type HeadSignature, statementBytes, statementDigest } from '#shared/ledger/signed-head.ts';
 import { signaturesFault } from '#shared/ledger/signed-record.ts';
 import { readTimestampReply } from '#shared/ledger/timestamp-token.ts';
@@ -39,8 +41,8 @@ function studyFault(study: Study, entries: readonly Entry[]): StudyAudit['fault'
     return { sequence: head.sequence, why: `the record should end with entry ${study.headSequence}` };
   if (head.digest !== study.headDigest)
     return { sequence: head.sequence, why: 'its digest is not the head that the study keeps' };
-  const sealing = entries.find(({ kind }) => kind === 'protocol-sealed');
-  if (sealing !== undefined && sealing.payload.digest !== protocolDigest(protocolOf(study)))
+  const sealing = sealedVersions(entries).at(-1);
+  if (sealing !== undefined && sealing.digest !== protocolDigest(protocolOf(study)))
     return { sequence: sealing.sequence, why: 'the protocol is not the one that was sealed' };
   return null;
 }

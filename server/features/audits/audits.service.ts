@@ -19,6 +19,9 @@ export const recordTriggers = [
   'timestamp_tokens',
   'answers',
   'signing_keys',
+  'registry_leaves',
+  'registry_heads',
+  'protocol_versions',
   'publications',
 ]
   .flatMap((table) => [`${table}_no_update`, `${table}_no_delete`])

@@ -176,6 +176,7 @@ function readDocument(digest: string, document: string): Read {
     report: reportOf({
       study: { id: protocol.study, title: protocol.title },
       protocol,
+      earlierProtocols: study.earlierProtocols(),
       entries: study.entries(),
       answers: study.answers(),
       rooms: new Map(),

@@ -1,16 +1,17 @@
+import { Link } from 'react-router-dom';
 import { notShown, type Publication } from '#shared/contracts/publications.ts';
 import { formatNumber } from '../../lib/format.ts';
 import { Button } from '../../ui/button.tsx';
 import { buttonLook } from '../../ui/button-look.ts';
 import { CopyButton } from '../../ui/copy-button.tsx';
+import { FileDrop } from '../../ui/file-drop.tsx';
 import { CheckList } from './check-list.tsx';
-import { FileDrop } from './file-drop.tsx';
 import { useVerification } from './use-verification.ts';
 import { VerificationOutcome } from './verification-outcome.tsx';
 
 /** The record, checked in the visitor's own browser from the downloaded file; and the file itself, to be checked elsewhere. */
 export function VerificationSection({ publication }: { publication: Publication }) {
-  const { file, bundle } = publication;
+  const { file, bundle, registry } = publication;
   const { verification, checkPublished, checkFile } = useVerification(bundle);
   const { phase, fileName, checks, names } = verification;
   const isRunning = phase === 'fetching' || phase === 'checking';
@@ -33,14 +34,14 @@ export function VerificationSection({ publication }: { publication: Publication 
           </Button>
         </div>
       </div>
-      <WithoutUs file={file} bundle={bundle} onFile={checkFile} />
+      <WithoutUs file={file} bundle={bundle} registry={registry} onFile={checkFile} />
     </section>
   );
 }
 
-type WithoutUsProps = Pick<Publication, 'file' | 'bundle'> & { onFile: (file: File) => void };
+type WithoutUsProps = Pick<Publication, 'file' | 'bundle' | 'registry'> & { onFile: (file: File) => void };
 
-function WithoutUs({ file, bundle, onFile }: WithoutUsProps) {
+function WithoutUs({ file, bundle, registry, onFile }: WithoutUsProps) {
   return (
     <div className="flex min-w-0 flex-col gap-8">
       <section aria-labelledby="without-us" className="flex flex-col gap-3 border-t-2 border-ink pt-4">
@@ -63,6 +64,7 @@ function WithoutUs({ file, bundle, onFile }: WithoutUsProps) {
             The document alone, {formatNumber(Math.ceil(file.bytes / 1000))} kB
           </a>
         </div>
+        <Link to={registry}>Every protocol that this publisher has sealed</Link>
       </section>
       <section aria-labelledby="not-shown" className="flex flex-col gap-2 border-t-2 border-ink pt-4">
         <h3 id="not-shown" className="text-base font-bold">
