@@ -43,6 +43,12 @@ export function findLeaf(tx: Tx, organisationId: string, index: number): Promise
   return tx.findOneBy(RegistryLeafRow, { organisationId, index });
 }
 
+/** The place of the last sealed version of a study's protocol. */
+export async function lastLeafOf(tx: Tx, organisationId: string, studyId: string): Promise<number | null> {
+  const row = await tx.findOne(RegistryLeafRow, { where: { organisationId, studyId }, order: { version: 'DESC' } });
+  return row?.index ?? null;
+}
+
 /** What stands beside some entries: their studies, publications, newest versions and numbers of sessions. */
 export async function besideLeaves(tx: Tx, studyIds: readonly string[]) {
   if (studyIds.length === 0) return { studies: [], publications: [], versions: [], sessions: [] };
