@@ -27,12 +27,14 @@ import { chanceOf, fractionText, of, pair } from './inputs.ts';
 import { listenerMappings } from './listener-functions.ts';
 import { methodMappings } from './method-functions.ts';
 import { orderMappings } from './order-functions.ts';
+import { physicsMappings } from './physics-functions.ts';
 
 /** Each function of the check values, in terms of the functions of shared/. */
 export const mappings: { readonly [fn: string]: Mapping } = {
   ...listenerMappings,
   ...methodMappings,
   ...orderMappings,
+  ...physicsMappings,
 
   binomialTest: of<{ k: number; n: number; p0: number }>(({ k, n, p0 }) => {
     const chance = chanceOf(p0);

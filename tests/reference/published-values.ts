@@ -1,3 +1,8 @@
+import { conductorResistance } from '#shared/cables/dc-resistance.ts';
+import { resistivityFromIacs } from '#shared/cables/resistivity.ts';
+import { skinEffect } from '#shared/cables/round-wire.ts';
+import { skinDepth } from '#shared/cables/skin-depth.ts';
+import { areaOfDiameter, diameterOfGauge } from '#shared/cables/wire-gauge.ts';
 import { binomialTest } from '#shared/statistics/binomial-test.ts';
 import { evenChance } from '#shared/statistics/chance.ts';
 import { clopperPearson } from '#shared/statistics/clopper-pearson.ts';
@@ -44,6 +49,28 @@ const limit: PublishedValue = ({ item, published }) => {
   return isLower ? lower : upper;
 };
 
+const annealedCopper = resistivityFromIacs(100, 20, 0.00393);
+
+/** An item names radius over skin depth, or x, which is sqrt(2) of that. */
+const skinRatio: PublishedValue = ({ item }) => {
+  const [value = 0] = numbersOf(item.replace(/^.*?=/, ''));
+  return skinEffect(item.includes('a/delta') ? value * Math.SQRT2 : value).resistanceRatio;
+};
+
+/** In mm; one table names its own resistivity. */
+const depth: PublishedValue = ({ item, citation }) => {
+  const [frequency = 0] = numbersOf(item);
+  return skinDepth(citation.includes('1.7e-8') ? 1.7e-8 : annealedCopper, frequency) * 1000;
+};
+
+/** In thousandths of an inch where it is a diameter, else in ohm per km or per 100 ft. */
+const wireTable: PublishedValue = ({ item, citation }) => {
+  const diameter = diameterOfGauge(Number(/AWG (-?\d+)/.exec(item)?.[1]));
+  if (item.endsWith('mil')) return diameter / 25.4e-6;
+  const metres = citation.includes('100 ft') ? 30.48 : 1000;
+  return conductorResistance(annealedCopper, areaOfDiameter(diameter)) * metres;
+};
+
 /** The items of each topic of the printed values, in terms of the functions of shared/. */
 export const publishedValues: { readonly [topic: string]: PublishedValue } = {
   'typeI/II': risk,
@@ -53,6 +80,9 @@ export const publishedValues: { readonly [topic: string]: PublishedValue } = {
   'Clopper-Pearson': limit,
   intervals: limit,
   'exact two-sided': twoSided,
+  'skin effect': skinRatio,
+  'skin depth': depth,
+  AWG: wireTable,
   // Eight cups, four of each, all told right.
   randomisation: () =>
     fisherExactTest(
