@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { construction } from './construction.ts';
 import { endpoint, managers } from './endpoint.ts';
 import { organisationParams, thingParams } from './organisation-params.ts';
 import { listQuery, pageOf, sortBy } from './paging.ts';
@@ -11,6 +12,8 @@ export const cableDraft = z.strictObject({
   kind: z.enum(cableKinds, 'Choose a kind'),
   lengthMm: z.int('Enter a length').min(1, 'At least 1 mm').max(1_000_000, 'At most 1,000 m'),
   description: z.string().trim().max(2000, 'At most 2,000 characters'),
+  /** Left out: nothing is known of it, or what is known stays. */
+  construction: construction.optional(),
 });
 export type CableDraft = z.output<typeof cableDraft>;
 
@@ -39,7 +42,7 @@ const cableShape = {
   updatedAt: z.iso.datetime(),
 };
 export const cableRow = z.strictObject({ ...cableShape, specimenCount: z.int() });
-export const cable = z.strictObject({ ...cableShape, specimens: z.array(specimen) });
+export const cable = z.strictObject({ ...cableShape, construction, specimens: z.array(specimen) });
 export type CableRow = z.output<typeof cableRow>;
 export type Cable = z.output<typeof cable>;
 

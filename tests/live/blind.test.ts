@@ -5,7 +5,7 @@ import { type MethodId, methodIds } from '#shared/methods/methods.ts';
 import { HandClock } from '../../server/demo/hand-clock.ts';
 import { linkTokenOf } from '../../server/features/attendances/personal-link.ts';
 import { Console, Phone } from '../support/live.ts';
-import { makeOrganisation, readyStudy } from '../support/people.ts';
+import { makeOrganisation, readyStudy, secretTreatment } from '../support/people.ts';
 import { repeatableRandom } from '../support/random.ts';
 import { begin, presentTrial } from '../support/run-session.ts';
 import { testServer } from '../support/test-server.ts';
@@ -166,6 +166,11 @@ describe.each(methodIds)('what leaves the server before closing, %s', (id) => {
   it.each([1, 2, 3])('is the same for listeners, whatever the secrets (run %i) [B1]', (index) => {
     expect(other(index).phones).toEqual(other(0).phones);
     expect(other(0).phones[0]?.length).toBeGreaterThan(40);
+  });
+
+  it('has nothing of a cable’s construction for a listener or the proctor, or in a mail [Q7]', () => {
+    for (const { phones, proctor, mails } of runs)
+      expect([...phones.flat(), ...proctor, ...mails].filter((text) => text.includes(secretTreatment))).toEqual([]);
   });
 
   it.each([1, 2, 3])('is the same for managers, whatever the secrets (run %i) [B1]', (index) => {

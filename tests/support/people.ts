@@ -70,6 +70,9 @@ export const plainStudy: Omit<StudyDraft, 'cables' | 'codeHolderId'> = {
   confidence: false,
 };
 
+/** Stands in the construction of every cable of a study, so that a test can look for it where it must not be. */
+export const secretTreatment = 'cooled in the northern shed';
+
 /** Two cables, a sealed study with confirmed codes, and one planned session: all over the API, as people do it. */
 export async function readyStudy(server: TestServer, people: TestOrganisation, change: Partial<StudyDraft> = {}) {
   const base = `/api/organisations/${people.organisationId}`;
@@ -79,7 +82,13 @@ export async function readyStudy(server: TestServer, people: TestOrganisation, c
   for (const name of ['Northern run', 'Southern run']) {
     const cable = await manager
       .post(`${base}/cables`)
-      .send({ name, kind: 'loudspeaker', lengthMm: 3000, description: '' })
+      .send({
+        name,
+        kind: 'loudspeaker',
+        lengthMm: 3000,
+        description: '',
+        construction: { treatments: secretTreatment },
+      })
       .expect(200);
     const full = await manager
       .post(`${base}/cables/${cable.body.id}/specimens`)

@@ -12,6 +12,8 @@ import { FrozenPublications1796141200000 } from './1796141200000-frozen-publicat
 import { Registry1796142000000 } from './1796142000000-registry.ts';
 import { ProtocolVersions1796142100000 } from './1796142100000-protocol-versions.ts';
 
+import { Construction1796149000000 } from './1796149000000-construction.ts';
+
 /** Every migration, oldest first. */
 export const migrations = [
   FirstSchema1796083200000,
@@ -26,4 +28,5 @@ export const migrations = [
   FrozenPublications1796141200000,
   Registry1796142000000,
   ProtocolVersions1796142100000,
+  Construction1796149000000,
 ];

@@ -1,6 +1,7 @@
 import type { Relation } from 'typeorm';
 import { Column, Entity, Index, JoinColumn, ManyToOne, OneToMany, PrimaryColumn } from 'typeorm';
 import type { CableDraft } from '#shared/contracts/cables.ts';
+import type { Construction } from '#shared/contracts/construction.ts';
 import { Organisation } from '../organisations/organisation.entity.ts';
 import { Specimen } from './specimen.entity.ts';
 
@@ -25,6 +26,10 @@ export class Cable {
 
   @Column({ type: 'text' })
   description: string;
+
+  /** Null for a cable of which nothing was ever said. */
+  @Column({ type: 'json', nullable: true })
+  construction: Construction | null;
 
   @Column({ type: 'boolean' })
   archived: boolean;

@@ -43,7 +43,8 @@ export function findCable(tx: Tx, organisationId: string, id: string): Promise<C
 
 export async function insertCable(tx: Tx, cable: { id: string; organisationId: string; draft: CableDraft; now: Date }) {
   const { id, organisationId, draft, now } = cable;
-  await tx.insert(Cable, { id, organisationId, ...draft, archived: false, updatedAt: now });
+  const construction = draft.construction ?? null;
+  await tx.insert(Cable, { id, organisationId, ...draft, construction, archived: false, updatedAt: now });
 }
 
 export async function updateCable(tx: Tx, id: string, change: Partial<CableDraft & { archived: boolean }>, now: Date) {

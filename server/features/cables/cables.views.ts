@@ -17,5 +17,5 @@ export function cableRowView(cable: Cable): CableRow {
 
 export function cableView(cable: Cable): CableReply {
   const specimens = cable.specimens.map(({ id, serial, note, archived }) => ({ id, serial, note, archived }));
-  return { ...shape(cable), specimens };
+  return { ...shape(cable), construction: cable.construction ?? {}, specimens };
 }

@@ -2,6 +2,7 @@ import type { Cable } from '#shared/contracts/cables.ts';
 import { formatDateTime, formatLength } from '../../lib/format.ts';
 import { Facts } from '../../ui/facts.tsx';
 import { kindWords } from './cable-words.ts';
+import { ConstructionFacts } from './construction-facts.tsx';
 
 export function CableFacts({ cable }: { cable: Cable }) {
   return (
@@ -14,6 +15,7 @@ export function CableFacts({ cable }: { cable: Cable }) {
           { label: 'Last change', value: formatDateTime(cable.updatedAt), isWords: true },
         ]}
       />
+      <ConstructionFacts construction={cable.construction} />
       {cable.description === '' ? null : (
         <section aria-label="Description" className="border-t-2 border-ink pt-4">
           <h3 className="pb-2 text-base font-bold">Description</h3>

@@ -13,6 +13,7 @@ import { TextAreaField } from '../../ui/text-area-field.tsx';
 import { TextField } from '../../ui/text-field.tsx';
 import { type CableFormValues, typedCable } from './cable-form-values.ts';
 import { kindWords } from './cable-words.ts';
+import { ConstructionFields } from './construction-fields.tsx';
 
 type CableFormProps = {
   values: CableFormValues;
@@ -82,9 +83,10 @@ export function CableForm({ values, save, onSaved, saveWord, cancel }: CableForm
           label="Description"
           optional
           rows={5}
-          hint="Conductor, insulation, geometry, connectors, and who says so."
+          hint="Whatever the construction below has no field for, and who says so."
           {...form.register('description')}
         />
+        <ConstructionFields />
       </Form>
     </>
   );
