@@ -3,6 +3,7 @@ import { type LoaderFunctionArgs, useParams } from 'react-router-dom';
 import { paths } from '../app/paths.ts';
 import { CableFacts } from '../features/cables/cable-facts.tsx';
 import { cableQueries, useArchiveCable } from '../features/cables/cables.queries.ts';
+import { Consequences } from '../features/cables/consequences.tsx';
 import { Specimens } from '../features/cables/specimens.tsx';
 import { usePresence } from '../features/sign-in/membership.ts';
 import { queryClient } from '../lib/query-client.ts';
@@ -52,7 +53,10 @@ export function Component() {
         </Notice>
       ) : null}
       <div className="grid gap-x-16 gap-y-12 lg:grid-cols-[minmax(0,1fr)_22rem]">
-        <Specimens organisationId={organisationId} cable={cable} />
+        <div className="flex min-w-0 flex-col gap-12">
+          <Specimens organisationId={organisationId} cable={cable} />
+          <Consequences cable={cable} editTo={paths.editCable(organisationId, id)} />
+        </div>
         <CableFacts cable={cable} />
       </div>
     </>

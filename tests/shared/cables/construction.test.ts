@@ -58,11 +58,11 @@ describe('a construction', () => {
   });
 
   it('is told what does not fit in space, and what words exclude [Q9]', () => {
-    // 3.14 mm² is a wire of 2 mm.
-    expect(fieldsOf({ areaMm2: 3.1416, geometry: 'parallel', spacingMm: 1.9 })).toEqual(['spacingMm']);
-    expect(fieldsOf({ areaMm2: 3.1416, geometry: 'parallel', spacingMm: 2.5 })).toEqual([]);
-    expect(fieldsOf({ areaMm2: 3.1416, geometry: 'star-quad', spacingMm: 2.5 })).toEqual(['spacingMm']);
-    expect(fieldsOf({ areaMm2: 3.1416, geometry: 'coaxial', shieldDiameterMm: 1.5 })).toEqual(['shieldDiameterMm']);
+    // pi mm² is a wire of 2 mm.
+    expect(fieldsOf({ areaMm2: Math.PI, geometry: 'parallel', spacingMm: 1.9 })).toEqual(['spacingMm']);
+    expect(fieldsOf({ areaMm2: Math.PI, geometry: 'parallel', spacingMm: 2.5 })).toEqual([]);
+    expect(fieldsOf({ areaMm2: Math.PI, geometry: 'star-quad', spacingMm: 2.5 })).toEqual(['spacingMm']);
+    expect(fieldsOf({ areaMm2: Math.PI, geometry: 'coaxial', shieldDiameterMm: 1.5 })).toEqual(['shieldDiameterMm']);
     expect(fieldsOf({ spacingMm: 9, outsideMm: 8 })).toEqual(['outsideMm']);
     expect(fieldsOf({ shieldDiameterMm: 9, outsideMm: 8 })).toEqual(['outsideMm']);
     expect(fieldsOf({ geometry: 'star-quad', conductorsPerLeg: 1 })).toEqual(['conductorsPerLeg']);
