@@ -14,7 +14,7 @@ import { consequenceRows, consequenceWords } from '../../../src/features/cables/
 import { crossSectionLayout, type Disc } from '../../../src/features/cables/cross-section-layout.ts';
 import { siFigure } from '../../../src/features/cables/si-figure.ts';
 
-const valueOf = <Value>(prediction: Prediction<Value>): Value => {
+const told = <Value>(prediction: Prediction<Value>): Value => {
   if (!prediction.isKnown) throw new Error(`not known: ${prediction.lacks.join()} ${prediction.because ?? ''}`);
   return prediction.value;
 };
@@ -31,12 +31,12 @@ describe('what follows from a construction', () => {
   it('is the wire table’s resistance and the exact AC ratio for gauge 12 [Q10]', () => {
     const gauge12 = twin(3.308773, 6);
     // Copper Wire Tables: 5.21 ohm/km; mpmath: 1.35298 at 20 kHz.
-    expect(valueOf(predictedConductor(gauge12)).resistance).toBeCloseTo(5.2108e-3, 6);
-    expect(valueOf(predictedLegs(gauge12))).toEqual({
+    expect(told(predictedConductor(gauge12)).resistance).toBeCloseTo(5.2108e-3, 6);
+    expect(told(predictedLegs(gauge12))).toEqual({
       go: expect.closeTo(5.2108e-3, 6),
       back: expect.closeTo(5.2108e-3, 6),
     });
-    expect(valueOf(predictedSkinEffect(gauge12, 20_000)).resistanceRatio).toBeCloseTo(1.35298, 4);
+    expect(told(predictedSkinEffect(gauge12, 20_000)).resistanceRatio).toBeCloseTo(1.35298, 4);
     const words = consequenceWords(gauge12, 5000).map((sentence) => sentence.replaceAll('\u00a0', ' '));
     expect(words).toEqual([
       'There and back, 5 m of it have 52.1 mΩ at 20 °C.',
@@ -47,8 +47,8 @@ describe('what follows from a construction', () => {
   it('counts inductance inside the conductors once each, and a coaxial shield not [Q10]', () => {
     // mpmath: 0.91697 uH/m outside, mu0 / 8 pi = 0.05 uH/m inside each; 27.908 pF/m.
     const pair = { ...twin(Math.PI / 4, 5) };
-    expect(valueOf(predictedInductance(pair, 0))).toBeCloseTo(1.01697e-6, 10);
-    expect(valueOf(predictedCapacitance(pair))).toBeCloseTo(27.908e-12, 14);
+    expect(told(predictedInductance(pair, 0))).toBeCloseTo(1.01697e-6, 10);
+    expect(told(predictedCapacitance(pair))).toBeCloseTo(27.908e-12, 14);
     const coax: Construction = {
       material: 'copper',
       build: 'solid',
@@ -58,8 +58,8 @@ describe('what follows from a construction', () => {
       shieldAreaMm2: 2,
       permittivity: 2.25,
     };
-    expect(valueOf(predictedInductance(coax, 0))).toBeCloseTo(0.25851e-6 + 0.05e-6, 10);
-    expect(valueOf(predictedLegs(coax)).back).toBeCloseTo(1 / (58e6 * 2e-6), 9);
+    expect(told(predictedInductance(coax, 0))).toBeCloseTo(0.25851e-6 + 0.05e-6, 10);
+    expect(told(predictedLegs(coax)).back).toBeCloseTo(1 / (58e6 * 2e-6), 9);
   });
 
   it('takes litz strand by strand: less than the solid wire, never below direct current [Q10]', () => {
@@ -67,7 +67,7 @@ describe('what follows from a construction', () => {
       fc.property(fc.integer({ min: 2, max: 1000 }), fc.double({ min: 0.05, max: 0.5, noNaN: true }), (strands, mm) => {
         const made = { material: 'copper', strands, strandDiameterMm: mm } as const;
         const ratio = (build: 'solid' | 'litz') =>
-          valueOf(predictedSkinEffect({ ...made, build }, 20_000)).resistanceRatio;
+          told(predictedSkinEffect({ ...made, build }, 20_000)).resistanceRatio;
         expect(ratio('litz')).toBeGreaterThanOrEqual(1);
         expect(ratio('litz')).toBeLessThan(ratio('solid'));
       }),
@@ -76,10 +76,10 @@ describe('what follows from a construction', () => {
 
   it('halves with two conductors in each leg, and lengthens with the twist [Q10]', () => {
     const single: Construction = { material: 'copper', areaMm2: 1, geometry: 'twisted-pair', spacingMm: 4 };
-    const { go } = valueOf(predictedLegs(single));
-    expect(valueOf(predictedLegs({ ...single, conductorsPerLeg: 2 })).go).toBeCloseTo(go / 2, 12);
+    const { go } = told(predictedLegs(single));
+    expect(told(predictedLegs({ ...single, conductorsPerLeg: 2 })).go).toBeCloseTo(go / 2, 12);
     // 4 mm across in turns of 4 pi mm: a slope of 1, sqrt(2) longer.
-    expect(valueOf(predictedLegs({ ...single, pitchMm: 4 * Math.PI })).go / go).toBeCloseTo(Math.SQRT2, 9);
+    expect(told(predictedLegs({ ...single, pitchMm: 4 * Math.PI })).go / go).toBeCloseTo(Math.SQRT2, 9);
   });
 
   it('names what it would need, and says why where nothing helps [Q10]', () => {
@@ -96,7 +96,7 @@ describe('what follows from a construction', () => {
   });
 
   it('makes lines whose levels differ as their resistance says [Q10]', () => {
-    const [thin, thick] = [valueOf(predictedLine(twin(0.5, 2.2), 6000)), valueOf(predictedLine(twin(4, 4.6), 6000))];
+    const [thin, thick] = [told(predictedLine(twin(0.5, 2.2), 6000)), told(predictedLine(twin(4, 4.6), 6000))];
     const circuit = { sourceOhms: 0, load: { type: 'resistor', resistance: 8 } as const };
     const low = levelDifference(thick, thin, circuit).curve[0]?.decibels;
     const loop = (areaMm2: number) => (2 * 6) / (58e6 * areaMm2 * 1e-6);

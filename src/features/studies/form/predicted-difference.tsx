@@ -1,0 +1,61 @@
+import { useState } from 'react';
+import { useFormContext } from 'react-hook-form';
+import { type LevelDifference, levelDifference } from '#shared/cables/level-difference.ts';
+import { predictedLine } from '#shared/cables/predicted-line.ts';
+import type { Cable } from '#shared/contracts/cables.ts';
+import { NumberField } from '../../../ui/number-field.tsx';
+import type { StudyFormValues } from './study-form-values.ts';
+
+const usualLoadOhms = 8;
+
+/** What the constructions of the two chosen cables let expect, into a resistance; nothing where either is not known. */
+export function PredictedDifference({ cables }: { cables: readonly Cable[] }) {
+  const { watch } = useFormContext<StudyFormValues>();
+  const [typed, setTyped] = useState(String(usualLoadOhms));
+  const [first, second] = [0, 1].map((index) => {
+    const chosen = cables.find(({ id }) => id === watch(`cables.${index as 0 | 1}.cableId`));
+    if (chosen === undefined) return undefined;
+    const line = predictedLine(chosen.construction, chosen.lengthMm);
+    return line.isKnown ? line.value : undefined;
+  });
+  if (first === undefined || second === undefined) return null;
+  const load = Number(typed);
+  const isSound = typed.trim() !== '' && load >= 0.1 && load <= 1_000_000;
+  return (
+    <div className="flex flex-col gap-4 border-t border-rule pt-4">
+      <NumberField
+        label="Load for the prediction"
+        unit="Ω"
+        min={0.1}
+        value={typed}
+        onChange={(event) => setTyped(event.target.value)}
+        hint="A resistance, fed by a source without one. It is not part of the study."
+        error={isSound ? undefined : 'From 0.1 Ω to 1 MΩ'}
+        className="max-w-xs"
+      />
+      <p role="status">
+        {isSound
+          ? words(levelDifference(first, second, { sourceOhms: 0, load: { type: 'resistor', resistance: load } }))
+          : null}
+      </p>
+    </div>
+  );
+}
+
+/** What the level match has to take out, and what it cannot: the tilt against 1 kHz, where levels are matched. */
+function words({ curve, largestAudible }: LevelDifference): string {
+  const matched = curve.find(({ frequency }) => frequency >= 999)?.decibels ?? 0;
+  const audible = curve.filter(({ frequency }) => frequency >= 20 && frequency <= 20_000);
+  const left = Math.max(...audible.map(({ decibels }) => Math.abs(decibels - matched)));
+  return `By their construction the two differ by at most ${decibels(largestAudible.decibels)} between 20 Hz and 20 kHz, at ${hertz(largestAudible.frequency)}; matched in level at 1 kHz, by at most ${decibels(left)}.`;
+}
+
+function decibels(value: number): string {
+  const size = Math.abs(value);
+  return size < 0.001 ? 'less than 0.001\u00a0dB' : `${size.toPrecision(2)}\u00a0dB`;
+}
+
+const hertz = (frequency: number): string =>
+  frequency >= 1000
+    ? `${Number((frequency / 1000).toPrecision(2))}\u00a0kHz`
+    : `${Number(frequency.toPrecision(2))}\u00a0Hz`;
