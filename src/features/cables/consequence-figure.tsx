@@ -8,10 +8,10 @@ export function ConsequenceFigure({ row }: { row: ConsequenceRow }) {
   return (
     <div className="border-b border-rule py-2">
       <dt className="text-soft">{label}</dt>
-      <dd>
+      <dd className="flex flex-wrap items-baseline justify-between gap-x-6">
         {figure.isKnown ? <span className="font-mono">{figure.value}</span> : <span>{whyNot(figure)}</span>}
         {figure.isKnown ? (
-          <details>
+          <details className="open:w-full">
             <summary className="inline-flex min-h-8 cursor-pointer items-center rounded underline underline-offset-4 hover:decoration-2">
               How<span className="sr-only">: {label}</span>
             </summary>

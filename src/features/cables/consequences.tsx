@@ -12,7 +12,7 @@ export function Consequences({ cable, editTo }: { cable: Cable; editTo: string }
   return (
     <section aria-labelledby="consequences" className="flex flex-col gap-5">
       <h2 id="consequences" className="text-xl">
-        What follows from it
+        What follows from the construction
       </h2>
       {isAnythingKnown ? (
         <>

@@ -3,9 +3,9 @@ import type { Construction } from '#shared/contracts/construction.ts';
 type Words<Key extends keyof Construction> = Record<NonNullable<Construction[Key]> & string, string>;
 
 export const materialWords: Words<'material'> = {
-  'copper-ofe': 'Copper, oxygen-free electronic (OFE, C10100)',
+  'copper-ofe': 'Copper, oxygen-free (OFE, C10100)',
   'copper-of': 'Copper, oxygen-free (OF, C10200)',
-  'copper-etp': 'Copper, electrolytic tough-pitch (ETP, C11000)',
+  'copper-etp': 'Copper, tough-pitch (ETP, C11000)',
   'copper-long-crystal': 'Copper, continuously cast in long crystals',
   copper: 'Copper, grade not stated',
   silver: 'Silver',

@@ -14,8 +14,10 @@ export interface CrossSectionLayout {
   /** Inner edge of a coaxial shield. */
   readonly shieldRadius?: number;
   readonly outsideRadius?: number;
-  /** Half of the width and height that holds all of it. */
+  /** Half of the width that holds all of it. */
   readonly extent: number;
+  /** Half of the height. */
+  readonly height: number;
 }
 
 /** Beyond it strands are dots that no screen shows; the conductor is then one disc. */
@@ -81,6 +83,14 @@ type Parts = {
 function framed({ go, back, shieldDiameterMm, outsideMm }: Parts): CrossSectionLayout {
   const shieldRadius = shieldDiameterMm === undefined ? undefined : shieldDiameterMm / 2;
   const outsideRadius = outsideMm === undefined ? undefined : outsideMm / 2;
-  const edges = [...go, ...back].map(({ x, y, radius }) => Math.hypot(x, y) + radius);
-  return { go, back, shieldRadius, outsideRadius, extent: Math.max(...edges, shieldRadius ?? 0, outsideRadius ?? 0) };
+  const around = Math.max(shieldRadius ?? 0, outsideRadius ?? 0);
+  const furthest = (of: (disc: Disc) => number) => Math.max(around, ...[...go, ...back].map(of));
+  return {
+    go,
+    back,
+    shieldRadius,
+    outsideRadius,
+    extent: furthest(({ x, radius }) => Math.abs(x) + radius),
+    height: furthest(({ y, radius }) => Math.abs(y) + radius),
+  };
 }

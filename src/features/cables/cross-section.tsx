@@ -8,9 +8,10 @@ import { threeDigits } from './si-figure.ts';
 export function CrossSection({ construction }: { construction: Construction }) {
   const layout = crossSectionLayout(construction);
   if (layout === undefined) return null;
-  const { go, back, shieldRadius, outsideRadius, extent } = layout;
+  const { go, back, shieldRadius, outsideRadius, extent, height } = layout;
   const line = extent / 60;
-  const half = extent * 1.06;
+  const half = extent * 1.04;
+  const low = height + extent * 0.16;
   const bar = scaleBar(extent);
   const diameter = conductorDiameterMm(construction) ?? 0;
   const caption = `To scale: conductors with the metal of a ${withUnit(threeDigits(diameter), 'mm')} wire${
@@ -21,7 +22,7 @@ export function CrossSection({ construction }: { construction: Construction }) {
       <svg
         role="img"
         aria-label="Cross-section of the cable"
-        viewBox={`${-half} ${-half} ${2 * half} ${2 * half + extent * 0.3}`}
+        viewBox={`${-half} ${-height - line} ${2 * half} ${height + low + 3 * line}`}
         className="w-full max-w-72"
       >
         {outsideRadius === undefined ? null : (
@@ -32,11 +33,7 @@ export function CrossSection({ construction }: { construction: Construction }) {
         )}
         <Discs discs={go} className="fill-ink stroke-page" line={line / 3} />
         <Discs discs={back} className="fill-collar stroke-ink" line={line / 2} />
-        <path
-          d={`M ${-bar / 2} ${half + extent * 0.1} h ${bar}`}
-          className="fill-none stroke-ink"
-          strokeWidth={2 * line}
-        />
+        <path d={`M ${-bar / 2} ${low} h ${bar}`} className="fill-none stroke-ink" strokeWidth={2 * line} />
       </svg>
       <figcaption className="text-soft">
         The bar is {withUnit(String(bar), 'mm')}. {caption}

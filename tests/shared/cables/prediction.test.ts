@@ -13,6 +13,7 @@ import type { Construction } from '#shared/contracts/construction.ts';
 import { consequenceRows, consequenceWords } from '../../../src/features/cables/consequence-rows.ts';
 import { crossSectionLayout, type Disc } from '../../../src/features/cables/cross-section-layout.ts';
 import { siFigure } from '../../../src/features/cables/si-figure.ts';
+import { differenceWords } from '../../../src/features/studies/form/difference-words.ts';
 
 const told = <Value>(prediction: Prediction<Value>): Value => {
   if (!prediction.isKnown) throw new Error(`not known: ${prediction.lacks.join()} ${prediction.because ?? ''}`);
@@ -107,6 +108,20 @@ describe('what follows from a construction', () => {
     expect([0.0521, 9.17e-7, 2.79e-11, 0.9999, 12.34, 0].map((value) => siFigure(value, 'Ω'))).toEqual(
       ['52.1 mΩ', '917 nΩ', '27.9 pΩ', '1.00 Ω', '12.3 Ω', '0 Ω'].map((text) => text.replace(' ', '\u00a0')),
     );
+  });
+});
+
+describe('two constructions on the study form', () => {
+  const circuit = { sourceOhms: 0, load: { type: 'resistor', resistance: 8 } as const };
+  const between = (one: Construction, other: Construction) =>
+    differenceWords(levelDifference(told(predictedLine(one, 6000)), told(predictedLine(other, 6000)), circuit));
+
+  it('are said to differ by what their loops make of the load, before and after matching [Q12]', () => {
+    // By hand: 20 log10((8 + 12/(58 * 0.5)) / (8 + 12/(58 * 4))) = 0.382 dB at low frequency.
+    const words = between(twin(0.5, 2.2), twin(4, 4.6)).replaceAll('\u00a0', ' ');
+    expect(words).toMatch(/^By their construction the two differ by at most 0\.38 dB between 20 Hz and 20 kHz, at /);
+    expect(words).toMatch(/matched in level at 1 kHz, by at most 0\.0\d+ dB\.$/);
+    expect(between(twin(1, 3), twin(1, 3))).toContain('less than 0.001');
   });
 });
 

@@ -1,9 +1,10 @@
 import { useState } from 'react';
 import { useFormContext } from 'react-hook-form';
-import { type LevelDifference, levelDifference } from '#shared/cables/level-difference.ts';
+import { levelDifference } from '#shared/cables/level-difference.ts';
 import { predictedLine } from '#shared/cables/predicted-line.ts';
 import type { Cable } from '#shared/contracts/cables.ts';
 import { NumberField } from '../../../ui/number-field.tsx';
+import { differenceWords } from './difference-words.ts';
 import type { StudyFormValues } from './study-form-values.ts';
 
 const usualLoadOhms = 8;
@@ -35,27 +36,11 @@ export function PredictedDifference({ cables }: { cables: readonly Cable[] }) {
       />
       <p role="status">
         {isSound
-          ? words(levelDifference(first, second, { sourceOhms: 0, load: { type: 'resistor', resistance: load } }))
+          ? differenceWords(
+              levelDifference(first, second, { sourceOhms: 0, load: { type: 'resistor', resistance: load } }),
+            )
           : null}
       </p>
     </div>
   );
 }
-
-/** What the level match has to take out, and what it cannot: the tilt against 1 kHz, where levels are matched. */
-function words({ curve, largestAudible }: LevelDifference): string {
-  const matched = curve.find(({ frequency }) => frequency >= 999)?.decibels ?? 0;
-  const audible = curve.filter(({ frequency }) => frequency >= 20 && frequency <= 20_000);
-  const left = Math.max(...audible.map(({ decibels }) => Math.abs(decibels - matched)));
-  return `By their construction the two differ by at most ${decibels(largestAudible.decibels)} between 20 Hz and 20 kHz, at ${hertz(largestAudible.frequency)}; matched in level at 1 kHz, by at most ${decibels(left)}.`;
-}
-
-function decibels(value: number): string {
-  const size = Math.abs(value);
-  return size < 0.001 ? 'less than 0.001\u00a0dB' : `${size.toPrecision(2)}\u00a0dB`;
-}
-
-const hertz = (frequency: number): string =>
-  frequency >= 1000
-    ? `${Number((frequency / 1000).toPrecision(2))}\u00a0kHz`
-    : `${Number(frequency.toPrecision(2))}\u00a0Hz`;
