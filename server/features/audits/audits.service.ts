@@ -66,7 +66,8 @@ async function auditOrganisation(
     sum.tokens += tokens;
     if (fault !== null) faults.push({ studyId, title, ...fault });
   }
-  const why = await deps.db.transaction('REPEATABLE READ', (tx) => registryFault(tx, organisationId));
+  const broken = faults.flatMap(({ studyId }) => studyId ?? []);
+  const why = await deps.db.transaction('REPEATABLE READ', (tx) => registryFault(tx, organisationId, broken));
   if (why !== null) faults.push({ studyId: null, title: 'The registry', sequence: null, why });
   return { organisationId, ...sum, faults };
 }
