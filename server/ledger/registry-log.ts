@@ -63,6 +63,9 @@ export async function enterEarlierProtocols(tx: Tx, deps: LogDeps): Promise<numb
   for (const { studyId: study, at: sealedAt, payload } of sealings) {
     const { organisationId } = await tx.findOneByOrFail(Study, { id: study });
     const { protocolVersion: version, digest } = JSON.parse(payload);
+    // Another process may start at the same time.
+    await lockOrganisation(tx, organisationId);
+    if (await tx.existsBy(RegistryLeafRow, { studyId: study, version })) continue;
     await enterProtocol(tx, deps, organisationId, { study, version, digest, sealedAt });
   }
   return sealings.length;

@@ -12,6 +12,7 @@ import type { PublicKey } from '#shared/ledger/signed-head.ts';
 import { Problem } from '#shared/problem.ts';
 import { type Tx, withTransaction } from '../../db/transaction.ts';
 import type { Deps } from '../../deps.ts';
+import type { RegistryLeafRow } from '../../ledger/registry-leaf.entity.ts';
 import { leafHashes, registryHeadOf } from '../../ledger/registry-log.ts';
 import { keysOf, publicKeyView } from '../../ledger/signing-keys.ts';
 import { findOrganisation } from '../organisations/organisations.store.ts';
@@ -56,22 +57,40 @@ export function listRegistryKeys({ db }: Deps, organisationId: string): Promise<
   });
 }
 
+/**
+ * The proof that a version of a study's protocol is entered, for whoever gives out what is published of it.
+ *
+ * @returns null where it is not entered
+ */
+export async function inclusionOf(
+  tx: Tx,
+  organisationId: string,
+  sealed: { studyId: string; version: number },
+): Promise<InclusionFile | null> {
+  const row = await store.findLeafOf(tx, organisationId, sealed);
+  return row === null ? null : inclusionIn(tx, row);
+}
+
 /** The proof of an entry against the current head, which may be signed at a larger size a moment later. */
 export function proveInclusion({ db }: Deps, organisationId: string, index: number): Promise<InclusionFile> {
   return withTransaction(db, async (tx) => {
-    const head = await requireHead(tx, organisationId);
     const row = await store.findLeaf(tx, organisationId, index);
-    if (row === null || index >= head.size) throw new Problem('not-found', 'The registry has no such entry.');
-    const { studyId: study, version, digest, sealedAt } = row;
-    return {
-      format: inclusionFormat,
-      organisation: organisationId,
-      leaf: { format: registryLeafFormat, study, version, digest, sealedAt },
-      index,
-      hashes: inclusionProof(await leafHashes(tx, organisationId, head.size), index),
-      head,
-    };
+    if (row === null) throw new Problem('not-found', 'The registry has no such entry.');
+    return inclusionIn(tx, row);
   });
+}
+
+async function inclusionIn(tx: Tx, row: RegistryLeafRow): Promise<InclusionFile> {
+  const { organisationId, index, studyId: study, version, digest, sealedAt } = row;
+  const head = await requireHead(tx, organisationId);
+  return {
+    format: inclusionFormat,
+    organisation: organisationId,
+    leaf: { format: registryLeafFormat, study, version, digest, sealedAt },
+    index,
+    hashes: inclusionProof(await leafHashes(tx, organisationId, head.size), index),
+    head,
+  };
 }
 
 export function proveConsistency(

@@ -43,6 +43,14 @@ export function findLeaf(tx: Tx, organisationId: string, index: number): Promise
   return tx.findOneBy(RegistryLeafRow, { organisationId, index });
 }
 
+export function findLeafOf(
+  tx: Tx,
+  organisationId: string,
+  { studyId, version }: { studyId: string; version: number },
+): Promise<RegistryLeafRow | null> {
+  return tx.findOneBy(RegistryLeafRow, { organisationId, studyId, version });
+}
+
 /** What stands beside some entries: their studies, publications, newest versions and numbers of sessions. */
 export async function besideLeaves(tx: Tx, studyIds: readonly string[]) {
   if (studyIds.length === 0) return { studies: [], publications: [], versions: [], sessions: [] };
