@@ -77,21 +77,6 @@ export function inclusionFault({ organisation, leaf, index, hashes, head }: Incl
   return held ? null : `no proof leads from the entry to the root of the head with ${head.size} entries`;
 }
 
-/**
- * Why a proof does not show that a sealed protocol is in its publisher's registry, or null when it does.
- *
- * @param sealed what the record says of the sealing
- * @param keys   the organisation's keys, the retired ones too
- */
-export function entryFault(
-  file: InclusionFile,
-  sealed: Omit<RegistryLeaf, 'format'>,
-  keys: readonly PublicKey[],
-): string | null {
-  if (leafText(file.leaf) !== leafText(sealed)) return 'the entry is not that of this sealing';
-  return registryHeadFault(file.head, keys) ?? inclusionFault(file);
-}
-
 /** A file that a visitor kept: a head, or an entry with its proof; null for anything else. */
 export type KeptFile =
   | { readonly kind: 'head'; readonly head: RegistryHead }

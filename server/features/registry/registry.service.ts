@@ -12,7 +12,6 @@ import type { PublicKey } from '#shared/ledger/signed-head.ts';
 import { Problem } from '#shared/problem.ts';
 import { type Tx, withTransaction } from '../../db/transaction.ts';
 import type { Deps } from '../../deps.ts';
-import type { RegistryLeafRow } from '../../ledger/registry-leaf.entity.ts';
 import { leafHashes, registryHeadOf } from '../../ledger/registry-log.ts';
 import { keysOf, publicKeyView } from '../../ledger/signing-keys.ts';
 import { findOrganisation } from '../organisations/organisations.store.ts';
@@ -57,40 +56,36 @@ export function listRegistryKeys({ db }: Deps, organisationId: string): Promise<
   });
 }
 
-/**
- * The proof that a version of a study's protocol is entered, for whoever gives out what is published of it.
- *
- * @returns null where it is not entered
- */
-export async function inclusionOf(
-  tx: Tx,
-  organisationId: string,
-  sealed: { studyId: string; version: number },
-): Promise<InclusionFile | null> {
-  const row = await store.findLeafOf(tx, organisationId, sealed);
-  return row === null ? null : inclusionIn(tx, row);
+/** The proof of an entry against the current head; null where it has no such entry. */
+async function inclusionOf(tx: Tx, head: RegistryHead, index: number): Promise<InclusionFile | null> {
+  const { organisation } = head;
+  const row = await store.findLeaf(tx, organisation, index);
+  if (row === null || index >= head.size) return null;
+  const { studyId: study, version, digest, sealedAt } = row;
+  return {
+    format: inclusionFormat,
+    organisation,
+    leaf: { format: registryLeafFormat, study, version, digest, sealedAt },
+    index,
+    hashes: inclusionProof(await leafHashes(tx, organisation, head.size), index),
+    head,
+  };
 }
 
 /** The proof of an entry against the current head, which may be signed at a larger size a moment later. */
 export function proveInclusion({ db }: Deps, organisationId: string, index: number): Promise<InclusionFile> {
   return withTransaction(db, async (tx) => {
-    const row = await store.findLeaf(tx, organisationId, index);
-    if (row === null) throw new Problem('not-found', 'The registry has no such entry.');
-    return inclusionIn(tx, row);
+    const proof = await inclusionOf(tx, await requireHead(tx, organisationId), index);
+    if (proof === null) throw new Problem('not-found', 'The registry has no such entry.');
+    return proof;
   });
 }
 
-async function inclusionIn(tx: Tx, row: RegistryLeafRow): Promise<InclusionFile> {
-  const { organisationId, index, studyId: study, version, digest, sealedAt } = row;
-  const head = await requireHead(tx, organisationId);
-  return {
-    format: inclusionFormat,
-    organisation: organisationId,
-    leaf: { format: registryLeafFormat, study, version, digest, sealedAt },
-    index,
-    hashes: inclusionProof(await leafHashes(tx, organisationId, head.size), index),
-    head,
-  };
+/** The same for the last sealed version of a study's protocol; null where the organisation has no registry yet. */
+export async function inclusionOfStudy(tx: Tx, organisationId: string, studyId: string): Promise<InclusionFile | null> {
+  const head = await registryHeadOf(tx, organisationId);
+  const index = await store.lastLeafOf(tx, organisationId, studyId);
+  return head === null || index === null ? null : inclusionOf(tx, head, index);
 }
 
 export function proveConsistency(

@@ -43,12 +43,10 @@ export function findLeaf(tx: Tx, organisationId: string, index: number): Promise
   return tx.findOneBy(RegistryLeafRow, { organisationId, index });
 }
 
-export function findLeafOf(
-  tx: Tx,
-  organisationId: string,
-  { studyId, version }: { studyId: string; version: number },
-): Promise<RegistryLeafRow | null> {
-  return tx.findOneBy(RegistryLeafRow, { organisationId, studyId, version });
+/** The place of the last sealed version of a study's protocol. */
+export async function lastLeafOf(tx: Tx, organisationId: string, studyId: string): Promise<number | null> {
+  const row = await tx.findOne(RegistryLeafRow, { where: { organisationId, studyId }, order: { version: 'DESC' } });
+  return row?.index ?? null;
 }
 
 /** What stands beside some entries: their studies, publications, newest versions and numbers of sessions. */

@@ -9,7 +9,6 @@ import {
 } from '#shared/contracts/registry.ts';
 import { consistencyProof, inclusionProof, treeRoot } from '#shared/ledger/merkle.ts';
 import {
-  entryFault,
   growthFault,
   inclusionFault,
   leafText,
@@ -114,14 +113,6 @@ describe('a registry', () => {
     ];
     for (const file of bad) expect(inclusionFault(file)).toContain('no proof leads');
     expect(inclusionFault({ ...good, organisation: leaves[0]?.study ?? '' })).toContain('another organisation');
-  });
-
-  it('shows that a sealing is entered, by an entry that is its own and a head that can be trusted [E7]', () => {
-    const [own, other] = [leaves[1], leaves[2]] as [(typeof leaves)[0], (typeof leaves)[0]];
-    expect(entryFault(entry(1), own, [key.known])).toBeNull();
-    expect(entryFault(entry(1), other, [key.known])).toContain('not that of this sealing');
-    expect(entryFault(entry(1), own, [newKey().known])).toContain('does not name as its own');
-    expect(entryFault({ ...entry(1), hashes: [] }, own, [key.known])).toContain('no proof leads');
   });
 
   it('reads the files that it gives out, and no others [E7]', () => {
