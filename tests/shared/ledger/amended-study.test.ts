@@ -37,6 +37,26 @@ describe('a study whose protocol was amended before data', () => {
     ]);
   });
 
+  it('fails at the protocol for one altered character in an earlier version [V2] [J6]', () => {
+    const from = text.indexOf('"earlierProtocols":');
+    const to = text.indexOf('"format":"fairlead-publication"');
+    const values = [...text.slice(from, to).matchAll(/"(?:[^"\\]|\\.)*"(:?)|\d+/g)].filter(
+      ([token, colon]) => colon !== ':' && token !== '""',
+    );
+    expect(values.length).toBeGreaterThan(20);
+    for (const value of values) {
+      const at = from + value.index + value[0].length - (value[0].endsWith('"') ? 2 : 1);
+      const was = text.charAt(at);
+      const put = /\d/.test(was) ? String((Number(was) + 1) % 10) : was === 'a' ? 'b' : 'a';
+      const altered = text.slice(0, at) + put + text.slice(at + 1);
+      const failed = [...checksOfFile(altered)].filter(({ outcome }) => outcome === 'fail');
+      expect(
+        failed.map(({ id }) => id),
+        value[0],
+      ).toEqual(['protocol']);
+    }
+  });
+
   it('makes a bundle that no check fails: the later version is signed, and is the one in force [J1] [J6]', async () => {
     const checks: Check[] = [];
     for await (const check of checksOfBundle(writeZip(bundleFiles(bundleSource(study))), null)) checks.push(check);
