@@ -15,7 +15,7 @@ const frozen = [
 ];
 const changed = frozen.map((column) => `NEW.${column} <> OLD.${column}`).join(' OR ');
 
-/** A publication can be withdrawn, once. The demo's may go with a demo whose making was cut short. */
+/** A publication can be withdrawn, once, and is never deleted. */
 export class FrozenPublications1796141200000 implements MigrationInterface {
   name = 'FrozenPublications1796141200000';
 
@@ -24,7 +24,7 @@ export class FrozenPublications1796141200000 implements MigrationInterface {
       `CREATE TRIGGER publications_no_update BEFORE UPDATE ON publications FOR EACH ROW BEGIN IF ${changed} OR OLD.withdrawn_at IS NOT NULL THEN ${refuse('A publication is frozen; it can be withdrawn, once.')}; END IF; END`,
     );
     await runner.query(
-      `CREATE TRIGGER publications_no_delete BEFORE DELETE ON publications FOR EACH ROW BEGIN IF NOT EXISTS (SELECT 1 FROM organisations WHERE id = OLD.organisation_id AND demo = 1) THEN ${refuse('A publication stays at its address.')}; END IF; END`,
+      `CREATE TRIGGER publications_no_delete BEFORE DELETE ON publications FOR EACH ROW ${refuse('A publication stays at its address.')}`,
     );
   }
 
