@@ -63,15 +63,38 @@ export async function enterEarlierProtocols(tx: Tx, deps: LogDeps): Promise<numb
   for (const { studyId: study, at: sealedAt, payload } of sealings) {
     const { organisationId } = await tx.findOneByOrFail(Study, { id: study });
     const { protocolVersion: version, digest } = JSON.parse(payload);
+    // Another process may start at the same time.
+    await lockOrganisation(tx, organisationId);
+    if (await tx.existsBy(RegistryLeafRow, { studyId: study, version })) continue;
     await enterProtocol(tx, deps, organisationId, { study, version, digest, sealedAt });
   }
   return sealings.length;
 }
 
+/** Every entry of an organisation's registry, in order. */
+export function leavesOf(tx: Tx, organisationId: string): Promise<RegistryLeafRow[]> {
+  return tx.find(RegistryLeafRow, { where: { organisationId }, order: { index: 'ASC' } });
+}
+
+const headOf = ({ organisationId, size, root, at, key, publicKey, signature }: RegistryHeadRow): RegistryHead => ({
+  format: registryHeadFormat,
+  organisation: organisationId,
+  size,
+  root,
+  at,
+  key,
+  publicKey,
+  signature,
+});
+
+/** Every head that was signed, the smallest first. */
+export async function registryHeadsOf(tx: Tx, organisationId: string): Promise<RegistryHead[]> {
+  const rows = await tx.find(RegistryHeadRow, { where: { organisationId }, order: { size: 'ASC' } });
+  return rows.map(headOf);
+}
+
 /** The current head of an organisation's registry; null while nothing is entered. */
 export async function registryHeadOf(tx: Tx, organisationId: string): Promise<RegistryHead | null> {
   const row = await tx.findOne(RegistryHeadRow, { where: { organisationId }, order: { size: 'DESC' } });
-  if (row === null) return null;
-  const { size, root, at, key, publicKey, signature } = row;
-  return { format: registryHeadFormat, organisation: organisationId, size, root, at, key, publicKey, signature };
+  return row === null ? null : headOf(row);
 }

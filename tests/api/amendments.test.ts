@@ -1,13 +1,16 @@
 import request from 'supertest';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { cautions } from '#shared/contracts/proctor-live.ts';
 import { confirmationIds } from '#shared/contracts/publications.ts';
 import type { InclusionFile } from '#shared/contracts/registry.ts';
 import type { Study, StudyDraft } from '#shared/contracts/studies.ts';
 import { inclusionFault } from '#shared/ledger/registry.ts';
 import { checksOfFile } from '#shared/ledger/verify.ts';
 import { HandClock } from '../../server/demo/hand-clock.ts';
+import { amendStudy } from '../../server/features/studies/amending.service.ts';
 import { signaturesOf } from '../../server/ledger/head-signatures.ts';
 import { readRecord } from '../../server/ledger/ledger.ts';
+import { Sittings } from '../../server/live/sittings.ts';
 import { Console, Phone } from '../support/live.ts';
 import { makeOrganisation, readyStudy, signedIn, type TestOrganisation } from '../support/people.ts';
 import { begin, presentTrial } from '../support/run-session.ts';
@@ -168,12 +171,46 @@ describe('an amended protocol', () => {
     });
   });
 
+  it('is what a session opens by, also where another process sealed it [J4]', async () => {
+    const another = new Sittings(server.deps);
+    const where = { organisationId: people.organisationId, id: study.studyId };
+    const draft = await changed({ spares: 1 });
+    const amendment = { draft, reason: 'One spare is enough.', amends: 3 };
+    await amendStudy(server.deps, another, where, people.manager.id, amendment);
+    await expect(desk.act({ kind: 'open-seating' })).rejects.toThrow('The protocol has been amended.');
+    await desk.sees('the plan in force', ({ cautionsConfirmed }) => !cautionsConfirmed);
+    await desk.act({ kind: 'confirm-cautions', items: [...cautions] });
+  });
+
+  it('is never sealed beside the opening of a session: one of the two comes first [J1] [J4]', async () => {
+    const draft = await changed({ spares: 2 });
+    const both = await Promise.all([
+      amend(draft, 4, 'Two spares after all.'),
+      desk.ask({ kind: 'open-seating', expectVersion: desk.now.version }).then(
+        () => 'opened',
+        (error: Error) => error.message,
+      ),
+    ]);
+    const [amended, opened] = [both[0].status, both[1]];
+    const kinds = (await record()).map(({ kind }) => kind);
+    if (opened === 'opened') {
+      expect(amended).toBe(409);
+      expect(kinds.at(-1)).toBe('seating-opened');
+    } else {
+      expect([amended, opened]).toEqual([200, expect.stringMatching(/amended|moved on|cautions/)]);
+      expect(kinds).not.toContain('seating-opened');
+      await desk.sees('the plan in force', ({ cautionsConfirmed }) => !cautionsConfirmed);
+      await desk.openSeating();
+    }
+    inForce = amended === 200 ? 5 : 4;
+  });
+
+  let inForce = 0;
   it('cannot be made once a session has opened; the page is told so [J1]', async () => {
-    await desk.act({ kind: 'open-seating' });
     const { amending, state } = await view();
     expect([state, amending.allowed]).toEqual(['collecting', false]);
     const draft = await changed({ trials: 8 });
-    for (const refused of [await preview(draft), await amend(draft, 3)]) {
+    for (const refused of [await preview(draft), await amend(draft, inForce)]) {
       expect(refused.status).toBe(409);
       expect(refused.body.detail).toBe(
         'A session has opened, so the protocol stays as it is. Whatever differs from it is recorded as a deviation.',
@@ -196,7 +233,8 @@ describe('an amended protocol', () => {
     await study.manager.post(`${study.at}/close`).send({ reason: '' }).expect(200);
     const report = (await study.manager.get(`${study.at}/report`).expect(200)).body;
     expect(report.record.checks.filter(({ outcome }: { outcome: string }) => outcome !== 'pass')).toEqual([]);
-    expect(report.protocol.versions).toMatchObject([
+    expect(report.protocol.versions).toHaveLength(inForce);
+    expect(report.protocol.versions.slice(0, 3)).toMatchObject([
       { version: 1, reason: null, changes: [] },
       { version: 2, reason: 'The amplifier was sold.' },
       { version: 3, changes: [{ label: 'One cable, specimens', before: 'N-1', after: 'N-1, N-2' }] },
@@ -206,7 +244,7 @@ describe('an amended protocol', () => {
     const published = await study.manager.post(`${study.at}/publication`).send(statements).expect(200);
     const { file } = (await request(server.address).get(`/api/publications/${published.body.id}`)).body;
     const document = (await request(server.address).get(file.path).expect(200)).text;
-    expect(JSON.parse(document).earlierProtocols).toHaveLength(2);
+    expect(JSON.parse(document).earlierProtocols).toHaveLength(inForce - 1);
     expect([...checksOfFile(document)].filter(({ outcome }) => outcome !== 'pass')).toEqual([]);
     expect(document).not.toContain('of Harbour"');
     const page = (await request(server.address).get(`/p/${published.body.id}`).expect(200)).text;

@@ -5,7 +5,10 @@ import type { InclusionFile, RegistryHead, RegistryRow } from '#shared/contracts
 import { treeRoot } from '#shared/ledger/merkle.ts';
 import { growthFault, inclusionFault, registryHeadFault, registryLeafHash } from '#shared/ledger/registry.ts';
 import { HandClock } from '../../server/demo/hand-clock.ts';
+import { auditAll } from '../../server/features/audits/audits.service.ts';
+import { inclusionOfStudy } from '../../server/features/registry/registry.service.ts';
 import { enterEarlierProtocols, leafHashes } from '../../server/ledger/registry-log.ts';
+import { pastTriggers } from '../support/past-triggers.ts';
 import { makeOrganisation, plainStudy, readyStudy, signedIn, type TestOrganisation } from '../support/people.ts';
 import { type TestServer, testServer } from '../support/test-server.ts';
 import { wholeStudy } from '../support/whole-study.ts';
@@ -124,6 +127,9 @@ describe('a registry', () => {
       expect([reply.status, reply.body.errors.length > 0], query).toEqual([400, true]);
     }
     expect((await anybody().get(`${at}/entries/5/inclusion.json`)).status).toBe(404);
+    const { manager: tx } = server.deps.db;
+    expect(await inclusionOfStudy(tx, people.organisationId, study.studyId)).toEqual(await entry(0));
+    expect(await inclusionOfStudy(tx, people.organisationId, people.organisationId)).toBeNull();
     const file = await anybody().get(`${at}/registry-head.json`);
     expect(file.headers['content-disposition']).toBe('attachment; filename=registry-head.json');
   });
@@ -160,6 +166,39 @@ describe('a registry', () => {
     expect((await rows('?state=withdrawn')).map(({ title }) => title)).toEqual(['Study Knot']);
     expect(await rows('?state=published')).toEqual([]);
     expect(await rows('?state=sealed')).toHaveLength(5);
+  });
+
+  const inKept = (table: string, bend: string) => [`create table kept as select * from ${table}`, bend];
+  const back = (table: string) => [
+    `delete from ${table}`,
+    `insert into ${table} select * from kept`,
+    'drop table kept',
+  ];
+  it.each<[string, string, string, string]>([
+    [
+      'another digest',
+      'registry_leaves',
+      "update registry_leaves set digest = repeat('0', 64) where leaf_index = 1",
+      'entry 2 does not match its hash',
+    ],
+    ['an entry gone', 'registry_leaves', 'delete from registry_leaves where leaf_index = 2', 'entry 3 is gone'],
+    ['the last entry gone', 'registry_leaves', 'delete from registry_leaves where leaf_index = 5', 'not entered'],
+    ['another root', 'registry_heads', "update registry_heads set root = repeat('0', 64) where size = 3", 'signature'],
+    ['the last head gone', 'registry_heads', 'delete from registry_heads where size = 6', 'not over all 6 entries'],
+  ])('is audited with the records, which finds %s [E12]', async (_, table, bend, why) => {
+    const { db } = server.deps;
+    const faults = async () => {
+      const found: string[] = [];
+      for await (const audit of auditAll({ db }))
+        found.push(...audit.faults.filter(({ title }) => title === 'The registry').map((fault) => fault.why));
+      return found;
+    };
+    expect(await faults()).toEqual([]);
+    await pastTriggers(db, ...inKept(table, bend));
+    const found = await faults();
+    await pastTriggers(db, ...back(table));
+    expect(found).toHaveLength(1);
+    expect(found[0]).toContain(why);
   });
 
   it('enters what was sealed before there was a registry, once and in the order of sealing [E11]', async () => {

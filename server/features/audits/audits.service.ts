@@ -6,6 +6,7 @@ import { postMail } from '../../mail/outbox.ts';
 import { pageAddresses } from '../../mail/page-addresses.ts';
 import { membersOf } from '../users/users.store.ts';
 import type { Audit } from './audit.entity.ts';
+import { registryFault } from './audit-registry.ts';
 import { auditStudy, type StudyAudit } from './audit-study.ts';
 import * as store from './audits.store.ts';
 
@@ -65,6 +66,9 @@ async function auditOrganisation(
     sum.tokens += tokens;
     if (fault !== null) faults.push({ studyId, title, ...fault });
   }
+  const broken = faults.flatMap(({ studyId }) => studyId ?? []);
+  const why = await deps.db.transaction('REPEATABLE READ', (tx) => registryFault(tx, organisationId, broken));
+  if (why !== null) faults.push({ studyId: null, title: 'The registry', sequence: null, why });
   return { organisationId, ...sum, faults };
 }
 

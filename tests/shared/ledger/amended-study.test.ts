@@ -1,4 +1,7 @@
 import { describe, expect, it } from 'vitest';
+import { bundleFiles } from '#shared/bundle/bundle-files.ts';
+import { checksOfBundle } from '#shared/bundle/verify-bundle.ts';
+import { writeZip } from '#shared/bundle/zip.ts';
 import type { Entry } from '#shared/ledger/chain.ts';
 import { sealedVersions } from '#shared/ledger/protocol-versions.ts';
 import {
@@ -7,11 +10,12 @@ import {
   publicationText,
   readPublication,
 } from '#shared/ledger/publication-parts.ts';
-import { checksOfFile, verifyStudy } from '#shared/ledger/verify.ts';
+import { type Check, checksOfFile, verifyStudy } from '#shared/ledger/verify.ts';
 import { methodOf } from '#shared/methods/methods.ts';
 import { protocolDigest } from '#shared/protocol/protocol.ts';
 import { blindingRung } from '#shared/session/blinding-rung.ts';
 import { sessionsInRecord } from '#shared/session/read-record.ts';
+import { bundleSource } from '../../support/bundle.ts';
 import { chainedAgain, closedStudy } from '../../support/closed-study.ts';
 
 describe('a study whose protocol was amended before data', () => {
@@ -31,6 +35,36 @@ describe('a study whose protocol was amended before data', () => {
       { sequence: 1, version: 1, digest: protocolDigest(first), reason: null },
       { sequence: 2, version: 2, digest: protocolDigest(study.protocol), reason: 'The amplifier was sold.' },
     ]);
+  });
+
+  it('fails at the protocol for one altered character in an earlier version [V2] [J6]', () => {
+    const from = text.indexOf('"earlierProtocols":');
+    const to = text.indexOf('"format":"fairlead-publication"');
+    const values = [...text.slice(from, to).matchAll(/"(?:[^"\\]|\\.)*"(:?)|\d+/g)].filter(
+      ([token, colon]) => colon !== ':' && token !== '""',
+    );
+    expect(values.length).toBeGreaterThan(20);
+    for (const value of values) {
+      const at = from + value.index + value[0].length - (value[0].endsWith('"') ? 2 : 1);
+      const was = text.charAt(at);
+      const put = /\d/.test(was) ? String((Number(was) + 1) % 10) : was === 'a' ? 'b' : 'a';
+      const altered = text.slice(0, at) + put + text.slice(at + 1);
+      const failed = [...checksOfFile(altered)].filter(({ outcome }) => outcome === 'fail');
+      expect(
+        failed.map(({ id }) => id),
+        value[0],
+      ).toEqual(['protocol']);
+    }
+  });
+
+  it('makes a bundle that no check fails: the later version is signed, and is the one in force [J1] [J6]', async () => {
+    const checks: Check[] = [];
+    for await (const check of checksOfBundle(writeZip(bundleFiles(bundleSource(study))), null)) checks.push(check);
+    expect(checks.filter(({ outcome }) => outcome === 'fail')).toEqual([]);
+    // Without tokens their two lines stay open, and nothing else does.
+    const open = checks.filter(({ outcome }) => outcome === 'not checkable');
+    expect(open.map(({ id }) => id)).toEqual(['sealingTime', 'drawTime']);
+    expect(open[0]?.reason).toContain('token for entry 2');
   });
 
   it('has no such part where nothing was amended [J6]', () => {
