@@ -11,6 +11,7 @@ export interface Contradiction {
 /** How far strands and cross-section may differ: rounding to a standard size. Common practice, no source. */
 const tolerance = 0.1;
 const millimetre = 1e-3;
+const largestAreaMm2 = 1000;
 
 /** Cross-section of the strands together in mm², where both their number and diameter are known. */
 export function strandedAreaMm2({ strands, strandDiameterMm }: Construction): number | undefined {
@@ -20,7 +21,8 @@ export function strandedAreaMm2({ strands, strandDiameterMm }: Construction): nu
 
 /** The cross-section of a conductor's metal in mm²: as stated, else from its strands. */
 export function conductorAreaMm2(construction: Construction): number | undefined {
-  return construction.areaMm2 ?? strandedAreaMm2(construction);
+  const together = strandedAreaMm2(construction);
+  return construction.areaMm2 ?? (together !== undefined && together <= largestAreaMm2 ? together : undefined);
 }
 
 /** Diameter in mm of a solid wire of the conductor's cross-section. */
@@ -49,6 +51,8 @@ function ofStrands(construction: Construction): Contradiction[] {
       field: 'areaMm2',
       detail: `${strands} ${strands === 1 ? 'strand' : 'strands'} of this diameter make ${figure(together)} mm², not ${figure(areaMm2)} mm²`,
     });
+  else if (together !== undefined && together > largestAreaMm2)
+    found.push({ field: 'strands', detail: 'Strands of this diameter make more than 1,000 mm²' });
   if (build === 'solid' && strands !== undefined && strands > 1)
     found.push({ field: 'strands', detail: 'A solid conductor has one strand' });
   if ((build === 'stranded' || build === 'litz') && strands === 1)

@@ -16,7 +16,7 @@ export function CrossSection({ construction }: { construction: Construction }) {
   const diameter = conductorDiameterMm(construction) ?? 0;
   const caption = `To scale: conductors with the metal of a ${withUnit(threeDigits(diameter), 'mm')} wire${
     construction.spacingMm === undefined ? '' : `, centres ${withUnit(String(construction.spacingMm), 'mm')} apart`
-  }. ${back.length > 0 ? 'Dark goes, light returns.' : 'The ring is the shield, the return.'}`;
+  }. ${back.length > 0 ? 'Filled goes, hollow returns.' : 'The ring is the shield, the return.'}`;
   return (
     <figure className="flex flex-col gap-2">
       <svg
@@ -32,7 +32,7 @@ export function CrossSection({ construction }: { construction: Construction }) {
           <circle r={shieldRadius} className="fill-none stroke-edge" strokeWidth={3 * line} />
         )}
         <Discs discs={go} className="fill-ink stroke-page" line={line / 3} />
-        <Discs discs={back} className="fill-collar stroke-ink" line={line / 2} />
+        <Discs discs={back} className="fill-page stroke-ink" line={line / 2} />
         <path d={`M ${-bar / 2} ${low} h ${bar}`} className="fill-none stroke-ink" strokeWidth={2 * line} />
       </svg>
       <figcaption className="text-soft">

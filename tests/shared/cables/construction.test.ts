@@ -2,14 +2,25 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { conductorMetal } from '#shared/cables/conductor-metal.ts';
 import { contradictionsOf } from '#shared/cables/contradictions.ts';
+import { levelDifference } from '#shared/cables/level-difference.ts';
+import { predictedLine } from '#shared/cables/predicted-line.ts';
 import { purityPercent } from '#shared/cables/purity.ts';
 import { cableDraft } from '#shared/contracts/cables.ts';
-import { type Construction, conductorMaterials } from '#shared/contracts/construction.ts';
+import {
+  type Construction,
+  conductorBuilds,
+  conductorMaterials,
+  construction,
+  geometries,
+} from '#shared/contracts/construction.ts';
+import { consequenceRows } from '../../../src/features/cables/consequence-rows.ts';
 import {
   constructionValuesOf,
   soundConstruction,
   typedConstruction,
 } from '../../../src/features/cables/construction-values.ts';
+import { crossSectionLayout } from '../../../src/features/cables/cross-section-layout.ts';
+import { differenceWords } from '../../../src/features/studies/form/difference-words.ts';
 
 const fieldsOf = (made: Construction) => contradictionsOf(made).map(({ field }) => field);
 
@@ -79,5 +90,40 @@ describe('a construction', () => {
     }
     expect(conductorMetal({ material: 'other', percentIacs: 28 })?.percentIacs).toBe(28);
     expect(conductorMetal({})).toBeUndefined();
+  });
+
+  it('of any kind that the limits allow is answered, never refused by a formula [Q10]', () => {
+    const measure = (min: number, max: number) => fc.option(fc.double({ min, max, noNaN: true }), { nil: undefined });
+    const any = fc.record({
+      material: fc.constantFrom(...conductorMaterials),
+      build: fc.constantFrom(...conductorBuilds),
+      geometry: fc.constantFrom(...geometries),
+      percentIacs: measure(1, 120),
+      strands: fc.option(fc.integer({ min: 1, max: 100_000 }), { nil: undefined }),
+      conductorsPerLeg: fc.option(fc.integer({ min: 1, max: 100 }), { nil: undefined }),
+      strandDiameterMm: measure(0.01, 20),
+      areaMm2: measure(0.0001, 1000),
+      permittivity: measure(1, 20),
+      spacingMm: measure(0.01, 500),
+      pitchMm: measure(1, 5000),
+      shieldDiameterMm: measure(0.05, 200),
+      shieldAreaMm2: measure(0.001, 1000),
+      outsideMm: measure(0.05, 500),
+    });
+    fc.assert(
+      fc.property(any, fc.constantFrom(1, 3000, 1_000_000), (made, lengthMm) => {
+        const typed = construction.parse(made);
+        expect(consequenceRows(typed, lengthMm)).toHaveLength(7);
+        for (const { figure } of consequenceRows(typed, lengthMm))
+          if (figure.isKnown) expect(figure.value).not.toMatch(/NaN|Infinity|∞/);
+        crossSectionLayout(typed);
+        const line = predictedLine(typed, lengthMm);
+        if (!line.isKnown) return;
+        const circuit = { sourceOhms: 0, load: { type: 'resistor', resistance: 8 } as const };
+        const half = { ...line.value, length: line.value.length / 2 };
+        expect(differenceWords(levelDifference(line.value, half, circuit, 2))).not.toMatch(/NaN|Infinity/);
+      }),
+      { numRuns: 1000 },
+    );
   });
 });

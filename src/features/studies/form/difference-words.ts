@@ -2,6 +2,9 @@ import { audibleBand, type LevelDifference } from '#shared/cables/level-differen
 
 /** What the level match has to take out, and what it cannot: the tilt against 1 kHz, where levels are matched. */
 export function differenceWords({ curve, largestAudible }: LevelDifference): string {
+  // A line so lossy that nothing arrives has no level; no cable is one.
+  if (!curve.every(({ decibels: level }) => Number.isFinite(level)))
+    return 'By their construction hardly anything would arrive at the load: look at what is stated of the two cables.';
   const matched = curve.find(({ frequency }) => frequency >= 999)?.decibels ?? 0;
   const audible = curve.filter(({ frequency }) => frequency >= audibleBand.low && frequency <= audibleBand.high);
   const left = Math.max(...audible.map(({ decibels }) => Math.abs(decibels - matched)));
