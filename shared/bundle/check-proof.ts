@@ -65,6 +65,9 @@ function tokenOf(bundle: BundleReading, entry: Entry | undefined): Timed | { fau
   return { time: verdict.time, ...head.token };
 }
 
+/** An instant of the record in words: to the second, in UTC. What is compared keeps its milliseconds. */
+const timeWords = (at: string) => `${at.slice(0, 10)}, ${at.slice(11, 19)} UTC`;
+
 const authorityWords = ({ isLocal, authority }: Timed) =>
   isLocal ? 'the publisher’s own local authority, which proves nothing about time' : authority;
 
@@ -79,14 +82,17 @@ export function checkSealingTime(bundle: BundleReading): Verdict {
   if ('fault' in token) return { faults: [token.fault], held: '' };
   if ('open' in token) return { faults: [], open: token.open, held: '' };
   const first = entries.find(({ kind, payload }) => kind === 'trial-opened' && Number(payload.trial) > 0);
-  const said = `Stamped ${token.time} by ${authorityWords(token)}`;
+  const said = `Stamped ${timeWords(token.time)} by ${authorityWords(token)}`;
   if (first !== undefined && token.time > first.at)
     return {
       faults: [],
-      open: `${said}, after the first trial opened at ${first.at}: the token came too late to show that the protocol was there before.`,
+      open: `${said}, after the first trial opened (${timeWords(first.at)}): the token came too late to show that the protocol was there before.`,
       held: '',
     };
-  return { faults: [], held: `${said}; the first trial opened ${first === undefined ? 'never' : first.at}.` };
+  return {
+    faults: [],
+    held: `${said}; the first trial opened ${first === undefined ? 'never' : timeWords(first.at)}.`,
+  };
 }
 
 /** In every session the draw was fixed, and stamped, before its first trial opened. */
@@ -106,9 +112,9 @@ export function checkDrawTime(bundle: BundleReading): Verdict {
     if ('open' in token) late.push(`Session ${session}: ${token.open}`);
     else if (token.time > first.at)
       late.push(
-        `Session ${session}: its token is of ${token.time} by ${authorityWords(token)}, and its first trial opened at ${first.at}: too late to show the order.`,
+        `Session ${session}: its token is of ${timeWords(token.time)} by ${authorityWords(token)}, and its first trial opened ${timeWords(first.at)}: too late to show the order.`,
       );
-    else said.push(`session ${session} stamped ${token.time} by ${authorityWords(token)}`);
+    else said.push(`session ${session} stamped ${timeWords(token.time)} by ${authorityWords(token)}`);
   }
   const [open] = late;
   if (open !== undefined) return { faults: [], open, held: '' };
