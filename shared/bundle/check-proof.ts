@@ -4,12 +4,13 @@ import { signaturesFault } from '../ledger/signed-record.ts';
 import type { Verdict } from '../ledger/verify.ts';
 import { protocolDigest } from '../protocol/protocol.ts';
 import { filesOfHead, headFile, keyFile } from './bundle-files.ts';
-import { type BundleReading, sameBytes } from './bundle-reading.ts';
+import type { BundleReading } from './bundle-reading.ts';
+import { sameBytes } from './bytes.ts';
 
 /** The record goes on to its publication, which names the digest of the document that is here. */
 export function checkPublished(bundle: BundleReading): Verdict {
-  const entries = bundle.allEntries();
-  const fault = chainFault(entries);
+  // It rests on the record, so that only what came after is to be read.
+  const fault = chainFault(bundle.later(), bundle.study.entries().at(-1) ?? null);
   if (fault !== null) return { faults: [`Entry ${fault.sequence}: ${fault.why}.`], held: '' };
   const later = bundle.later();
   const published = later.find(({ kind }) => kind === 'study-published');
@@ -49,11 +50,14 @@ export function checkSignatures(bundle: BundleReading): Verdict {
   };
 }
 
+/** The familiarisation trial, numbered 0, is none. */
+const isTrialOpened = ({ kind, payload }: Entry) => kind === 'trial-opened' && Number(payload.trial) > 0;
+
 type Timed = { time: string; isLocal: boolean; authority: string };
 
 /** The token of an entry's head: its time, a fault, or why it says nothing. */
 function tokenOf(bundle: BundleReading, entry: Entry | undefined): Timed | { fault: string } | { open: string } {
-  const head = bundle.signed().heads.find(({ sequence }) => sequence === entry?.sequence);
+  const head = entry === undefined ? undefined : bundle.headsBySequence().get(entry.sequence);
   if (entry === undefined || head === undefined) return { open: 'The head is not signed, so that it has no token.' };
   if (head.token === null)
     return { open: `The token for entry ${entry.sequence} had not arrived when the bundle was made.` };
@@ -81,7 +85,7 @@ export function checkSealingTime(bundle: BundleReading): Verdict {
   const token = tokenOf(bundle, sealing);
   if ('fault' in token) return { faults: [token.fault], held: '' };
   if ('open' in token) return { faults: [], open: token.open, held: '' };
-  const first = entries.find(({ kind, payload }) => kind === 'trial-opened' && Number(payload.trial) > 0);
+  const first = entries.find(isTrialOpened);
   const said = `Stamped ${timeWords(token.time)} by ${authorityWords(token)}`;
   if (first !== undefined && token.time > first.at)
     return {
@@ -101,11 +105,12 @@ export function checkDrawTime(bundle: BundleReading): Verdict {
   const fixed = entries.filter(({ kind }) => kind === 'draw-fixed');
   const said: string[] = [];
   const late: string[] = [];
+  const firsts = new Map<unknown, Entry>();
+  for (const entry of entries)
+    if (isTrialOpened(entry) && !firsts.has(entry.payload.session)) firsts.set(entry.payload.session, entry);
   for (const entry of fixed) {
     const { session } = entry.payload;
-    const first = entries.find(
-      ({ kind, payload }) => kind === 'trial-opened' && payload.session === session && Number(payload.trial) > 0,
-    );
+    const first = firsts.get(session);
     if (first === undefined) continue;
     const token = tokenOf(bundle, entry);
     if ('fault' in token) return { faults: [`Session ${session}: ${token.fault}`], held: '' };

@@ -31,7 +31,7 @@ export function CheckList({ names, checks, isRunning }: CheckListProps) {
         const check = checks.find((candidate) => candidate.id === id);
         const state: State = check?.outcome ?? (isRunning && index === checks.length ? 'checking' : 'to do');
         return (
-          <li key={id} data-check={id} className="group relative flex gap-4 pb-5 last:pb-0">
+          <li key={id} data-check={id} data-outcome={state} className="group relative flex gap-4 pb-5 last:pb-0">
             <span
               aria-hidden="true"
               className={classNames(

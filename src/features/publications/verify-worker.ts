@@ -1,10 +1,10 @@
-import { checksOfBundle } from '#shared/bundle/verify-bundle.ts';
-import { documentIn, isZip } from '#shared/bundle/zip.ts';
+import { utf8Text } from '#shared/bundle/bytes.ts';
+import { checksOfAnyFile } from '#shared/bundle/verify-file.ts';
 import type { Entry } from '#shared/ledger/chain.ts';
-import { bundleCheckNames, type NamedCheck, recordCheckNames } from '#shared/ledger/check-names.ts';
+import type { NamedCheck } from '#shared/ledger/check-names.ts';
 import { fileDigest } from '#shared/ledger/digest.ts';
 import { type FoundReceipt, findReceipts, readReceipts } from '#shared/ledger/receipts.ts';
-import { type Check, checksOfFile } from '#shared/ledger/verify.ts';
+import type { Check } from '#shared/ledger/verify.ts';
 
 /** A file to check; then, as often as one likes, a text with receipts to look up in its record. */
 export type VerifyRequest = { readonly file: ArrayBuffer } | { readonly receipts: string };
@@ -24,14 +24,6 @@ export type VerifyMessage =
 
 const say = (message: VerifyMessage) => self.postMessage(message);
 
-function textOf(bytes: Uint8Array): string | null {
-  try {
-    return new TextDecoder('utf-8', { fatal: true, ignoreBOM: true }).decode(bytes);
-  } catch {
-    return null;
-  }
-}
-
 /** Browsers withhold their cryptography where an address has neither TLS nor is this machine's own. */
 const cryptography = () => (globalThis.crypto?.subtle === undefined ? null : globalThis.crypto);
 
@@ -39,21 +31,16 @@ let document: Uint8Array | null = null;
 let entries: readonly Entry[] | null = null;
 
 async function check(bytes: Uint8Array): Promise<void> {
-  if (isZip(bytes)) {
-    document = documentIn(bytes);
-    say({ digest: document === null ? null : fileDigest(document), names: bundleCheckNames });
-    for await (const check of checksOfBundle(bytes, cryptography())) say({ check });
-  } else {
-    document = bytes;
-    say({ digest: fileDigest(bytes), names: recordCheckNames });
-    for (const check of checksOfFile(textOf(bytes))) say({ check });
-  }
+  const file = checksOfAnyFile(bytes, cryptography());
+  document = file.document;
+  say({ digest: document === null ? null : fileDigest(document), names: file.names });
+  for await (const check of file.checks) say({ check });
   say({ done: true });
 }
 
 /** The page asks only of a record that passed its check, so that it has the shape of one. */
 function lookUp(text: string): void {
-  entries ??= (JSON.parse(textOf(document ?? new Uint8Array()) ?? '') as { record: readonly Entry[] }).record;
+  entries ??= (JSON.parse(utf8Text(document ?? new Uint8Array()) ?? '') as { record: readonly Entry[] }).record;
   const read = readReceipts(text);
   say({ receipts: { found: findReceipts(read, entries), notHeld: read.notHeld } });
 }
