@@ -33,6 +33,7 @@ let entries: readonly Entry[] | null = null;
 async function check(bytes: Uint8Array): Promise<void> {
   const file = checksOfAnyFile(bytes, cryptography());
   document = file.document;
+  entries = null;
   say({ digest: document === null ? null : fileDigest(document), names: file.names });
   for await (const check of file.checks) say({ check });
   say({ done: true });
