@@ -16,10 +16,13 @@ import { Seat } from './features/sessions/seat.entity.ts';
 import { Session } from './features/sessions/session.entity.ts';
 import { SignInAttempt } from './features/sign-in/sign-in-attempt.entity.ts';
 import { WebSession } from './features/sign-in/web-session.entity.ts';
+import { ProtocolVersion } from './features/studies/protocol-version.entity.ts';
 import { Study } from './features/studies/study.entity.ts';
 import { User } from './features/users/user.entity.ts';
 import { RecordEntry } from './ledger/entry.entity.ts';
 import { HeadSignatureRow } from './ledger/head-signature.entity.ts';
+import { RegistryHeadRow } from './ledger/registry-head.entity.ts';
+import { RegistryLeafRow } from './ledger/registry-leaf.entity.ts';
 import { SigningKey } from './ledger/signing-key.entity.ts';
 import { OutgoingMail } from './mail/outgoing-mail.entity.ts';
 import { TimestampToken } from './timestamps/timestamp-token.entity.ts';
@@ -34,9 +37,12 @@ export const entities = [
   Cable,
   Specimen,
   Study,
+  ProtocolVersion,
   RecordEntry,
   SigningKey,
   HeadSignatureRow,
+  RegistryLeafRow,
+  RegistryHeadRow,
   TokenRequest,
   TimestampToken,
   Audit,

@@ -8,6 +8,7 @@ import { closeDemo } from './demo/close-demo.ts';
 import { demoPeople } from './demo/demo-people.ts';
 import { loadDemo } from './demo/load-demo.ts';
 import type { Deps } from './deps.ts';
+import { enterEarlierProtocols } from './ledger/registry-log.ts';
 import { requireOpenableKeys } from './ledger/signing-keys.ts';
 import { pageAddresses } from './mail/page-addresses.ts';
 import { onTheNetwork } from './network/on-the-network.ts';
@@ -36,6 +37,7 @@ async function main(): Promise<void> {
     await db.runMigrations();
   });
   await withTransaction(db, (tx) => requireOpenableKeys(tx, deps, config.signingSecretLost));
+  await withTransaction(db, (tx) => enterEarlierProtocols(tx, deps));
   if (config.demo) await step('demo', () => loadDemo(deps));
   else await closeDemo(db);
   const { lan } = config;

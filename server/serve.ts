@@ -13,7 +13,7 @@ import type { OwnCertificate } from './network/own-certificate.ts';
 import { Timekeeper } from './timestamps/timekeeper.ts';
 
 const hourMs = 60 * 60 * 1000;
-const firstAuditMs = 60 * 1000;
+const firstAuditMs = 5 * 60 * 1000;
 
 function listen(http: Pick<Server, 'once' | 'listen' | 'address'>, port: number, host: string): Promise<number> {
   return new Promise((resolve, reject) => {

@@ -2,7 +2,7 @@ import { isUsableCode } from '#shared/session/blind-codes.ts';
 import { codeKeyCommitment, drawSecretCommitment } from '#shared/session/commitments.ts';
 import type { Tx } from '../db/transaction.ts';
 import type { Random } from '../deps.ts';
-import { type CodeRow, saveCodeKey, saveDrawSecret } from './secrets.store.ts';
+import { type CodeRow, deleteCodeKey, saveCodeKey, saveDrawSecret } from './secrets.store.ts';
 
 /** A fair number from 0 to 999 by rejection: two bytes reach 65,535; those from 65,000 on are passed over. */
 function fairThreeDigits(random: Random): number {
@@ -41,6 +41,11 @@ export async function commitCodeKey(
   const salt = random.bytes('code-key-salt', 32).toString('hex');
   await saveCodeKey(tx, studyId, { rows, salt });
   return codeKeyCommitment(salt, rows);
+}
+
+/** Forgets a code key that is void before anybody listened, so that another can be drawn. */
+export function voidCodeKey(tx: Tx, studyId: string): Promise<void> {
+  return deleteCodeKey(tx, studyId);
 }
 
 /** Makes a session's server secret, keeps it, and returns the commitment to it. */

@@ -12,6 +12,10 @@ export async function saveCodeKey(tx: Tx, studyId: string, { rows, salt }: CodeK
   await tx.insert(CodeKey, { studyId, rows: JSON.stringify(rows), salt });
 }
 
+export async function deleteCodeKey(tx: Tx, studyId: string): Promise<void> {
+  await tx.delete(CodeKey, { studyId });
+}
+
 export async function readCodeKey(tx: Tx, studyId: string): Promise<Sealed<CodeKeySecret> | null> {
   const row = await tx.findOneBy(CodeKey, { studyId });
   return row === null ? null : new Sealed({ rows: JSON.parse(row.rows) as CodeRow[], salt: row.salt });

@@ -141,7 +141,7 @@ export async function loadDemo(deps: Deps): Promise<void> {
   if (existing !== null) {
     const studies = await studiesOf(deps.db.manager, existing.id);
     if (studies.some(({ title }) => title === studyToRun.title)) return;
-    await forgetDemo(deps.db, existing.id);
+    await forgetDemo(deps, existing.id);
   }
   const clock = new HandClock(deps.clock.now() - 9 * dayMs);
   const past: Deps = { ...deps, clock };

@@ -2,7 +2,8 @@ import type { StudyDraft } from '#shared/contracts/studies.ts';
 import type { Deps } from '../deps.ts';
 import { confirmCodes, drawCodes, openCodes } from '../features/codes/codes.service.ts';
 import { planSession } from '../features/sessions/sessions.service.ts';
-import { createStudy, sealStudy } from '../features/studies/studies.service.ts';
+import { sealStudy } from '../features/studies/sealing.service.ts';
+import { createStudy } from '../features/studies/studies.service.ts';
 import type { DemoPersonKey } from './demo-people.ts';
 
 /** Where the demo's workshop stands. */

@@ -31,8 +31,8 @@ function keyInUse(tx: Tx, organisationId: string): Promise<SigningKey | null> {
   });
 }
 
-/** One organisation's keys are made and retired one after the other. */
-async function lockOrganisation(tx: Tx, id: string): Promise<void> {
+/** One organisation’s keys are made and retired one after the other, and its sealings entered in its registry. */
+export async function lockOrganisation(tx: Tx, id: string): Promise<void> {
   await tx.findOneOrFail(Organisation, { where: { id }, lock: { mode: 'pessimistic_write' } });
 }
 

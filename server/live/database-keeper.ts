@@ -1,5 +1,8 @@
+import { canonicalJson, type Json } from '#shared/ledger/canonical-json.ts';
 import { Problem } from '#shared/problem.ts';
+import { sessionPlanOf } from '#shared/protocol/protocol.ts';
 import { contributionsOf } from '#shared/session/counted-trials.ts';
+import type { SessionPlan } from '#shared/session/events.ts';
 import { presentationNow } from '#shared/session/progress.ts';
 import { commitDraw, cueFor } from '../blind/index.ts';
 import { type Tx, withTransaction } from '../db/transaction.ts';
@@ -7,6 +10,7 @@ import type { Deps } from '../deps.ts';
 import { labelOf, noteSeated } from '../features/attendances/attendances.store.ts';
 import { dropReminders, tellCancelled } from '../features/attendances/telling.service.ts';
 import * as store from '../features/sessions/sessions.store.ts';
+import { protocolOf } from '../features/studies/studies.service.ts';
 import { lockStudyRow, studyById, updateStudy } from '../features/studies/studies.store.ts';
 import { append } from '../ledger/ledger.ts';
 import { newSessionCode } from './join.ts';
@@ -33,11 +37,20 @@ export function databaseKeeper(deps: Deps): Keeper {
   };
 }
 
+const planText = (plan: SessionPlan) => canonicalJson(plan as unknown as Json);
+
 function keepingIn(tx: Tx, deps: Deps): Keeping {
   const { random, clock } = deps;
   return {
     openSeating: async ({ session, state }) => {
+      // Locked, so that the protocol is not amended while the session opens by it.
+      await lockStudyRow(tx, session.studyId);
       const study = await studyById(tx, session.studyId);
+      if (planText(sessionPlanOf(protocolOf(study))) !== planText(state.plan))
+        throw new Problem(
+          'stale-view',
+          'The protocol has been amended. The session goes by its new version now; look at it, then open seating again.',
+        );
       if (study.codesState !== 'confirmed')
         throw new Problem(
           'wrong-phase',

@@ -203,7 +203,29 @@ export class Sitting {
     return result;
   }
 
-  #openSeating(): Promise<void> {
+  /** Reads the session back from the database, where something else has changed it. */
+  readAfresh(): Promise<void> {
+    return this.#inTurn(() => this.#reread());
+  }
+
+  async #reread(): Promise<void> {
+    const session = await sessionById(this.#deps.db.manager, this.#memory.session.id);
+    if (session === null) return;
+    this.#memory = await loadMemory(this.#deps, session);
+    await this.#show();
+  }
+
+  async #openSeating(): Promise<void> {
+    try {
+      await this.#commitAndOpen();
+    } catch (error) {
+      // Another process may have amended the protocol: the next attempt goes by the new plan.
+      if (error instanceof Problem && error.code === 'stale-view') await this.#reread();
+      throw error;
+    }
+  }
+
+  #commitAndOpen(): Promise<void> {
     return this.#perform(async (keeping) => {
       const { commitment, code } = await keeping.openSeating(this.#memory);
       const stored = () => {

@@ -39,6 +39,11 @@ export class Sittings {
     this.#byId.delete(sessionId);
   }
 
+  /** Something else than its sitting has changed a session: whoever watches it sees it as it now is. */
+  async readAfresh(sessionId: string): Promise<void> {
+    await (await this.#byId.get(sessionId))?.readAfresh();
+  }
+
   /** Takes up the sessions that were open when the server stopped, so that what falls due happens. */
   async resumeAll(): Promise<void> {
     for (const { id } of await openSessions(this.#deps.db.manager)) await (await this.of(id)).noteRestart();

@@ -72,6 +72,22 @@ export function codesToDrawMail(study: StudyMail): MailContent {
   };
 }
 
+type BrokenRecord = { readonly title: string; readonly sequence: number | null };
+
+/** The daily audit found what it had not found before; to the owners. */
+export function auditFaultMail(broken: readonly BrokenRecord[], url: string): MailContent {
+  return {
+    subject: broken.length === 1 ? 'A record does not hold' : `${broken.length} records do not hold`,
+    paragraphs: [
+      'The daily audit verified every record and found what does not hold:',
+      ...broken.map(({ title, sequence }) => (sequence === null ? `${title}.` : `${title}, at entry ${sequence}.`)),
+      'Keep the database as it is, and compare it with a backup. Nothing that rests on such a record should be published.',
+    ],
+    action: { label: 'See what was found', url },
+    footer: 'You get this as an owner of the organisation. It comes once for each finding.',
+  };
+}
+
 const roleWords: Readonly<Record<Role, string>> = {
   owner: 'an owner',
   manager: 'a product manager',

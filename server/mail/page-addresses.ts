@@ -8,6 +8,7 @@ export const pageAddresses = {
     `${publicUrl}/organisations/${organisationId}/sessions/${sessionId}/console`,
   session: ({ publicUrl }: Config, organisationId: string, sessionId: string) =>
     `${publicUrl}/organisations/${organisationId}/sessions/${sessionId}`,
+  proof: ({ publicUrl }: Config, organisationId: string) => `${publicUrl}/organisations/${organisationId}/proof`,
   personalLink: ({ publicUrl }: Config, token: string) => `${publicUrl}/listen/invitation#${token}`,
   invitation: ({ publicUrl }: Config, token: string) => `${publicUrl}/invitation#${token}`,
   newPassword: ({ publicUrl }: Config, token: string) => `${publicUrl}/new-password#${token}`,

@@ -9,8 +9,13 @@ const longestMs = 20_000;
 
 /** Runs openssl in a folder; what it said is in the error when it fails. */
 export async function openssl(folder: string, args: readonly string[]): Promise<string> {
-  const { stdout } = await run('openssl', [...args], { cwd: folder, timeout: longestMs });
-  return stdout;
+  try {
+    const { stdout } = await run('openssl', [...args], { cwd: folder, timeout: longestMs });
+    return stdout;
+  } catch (error) {
+    if ((error as NodeJS.ErrnoException).code !== 'ENOENT') throw error;
+    throw new Error('openssl is not installed here; Debian’s package openssl brings it', { cause: error });
+  }
 }
 
 /** Gives work an empty folder, and removes it whatever happens. */

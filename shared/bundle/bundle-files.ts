@@ -1,3 +1,4 @@
+import type { InclusionFile } from '../contracts/registry.ts';
 import { canonicalJson, type Json } from '../ledger/canonical-json.ts';
 import type { Entry } from '../ledger/chain.ts';
 import { hexToBytes, utf8ToBytes } from '../ledger/digest.ts';
@@ -27,6 +28,8 @@ export type BundleSource = {
   /** Every key of the organisation, retired ones too. */
   readonly keys: readonly PublicKey[];
   readonly heads: readonly BundledHead[];
+  /** That the sealed protocol is in the organisation's registry; null where it has none. */
+  readonly registry: InclusionFile | null;
   /** Words for people, and the script that recomputes the figures in R; no check rests on them. */
   readonly guide: string;
   readonly recompute: string;
@@ -37,6 +40,7 @@ export const fileNames = {
   document: 'study.json',
   later: 'later.json',
   heads: 'heads.json',
+  registry: 'registry.json',
   protocol: 'protocol.json',
   result: 'result.json',
   dataPackage: 'datapackage.json',
@@ -104,6 +108,7 @@ export function bundleFiles(source: BundleSource): Map<string, Uint8Array> {
     [fileNames.document, utf8ToBytes(source.document)],
     [fileNames.later, text(source.later)],
     [fileNames.heads, headsText(source)],
+    [fileNames.registry, text(source.registry)],
     ...source.heads.flatMap(filesOfHead),
     ...source.keys.map(({ fingerprint, publicKey }): [string, Uint8Array] => [
       keyFile(fingerprint),

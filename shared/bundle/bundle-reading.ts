@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { inclusionFile } from '../contracts/registry.ts';
 import { canonicalJson, type Json } from '../ledger/canonical-json.ts';
 import type { Entry } from '../ledger/chain.ts';
 import { fileDigest } from '../ledger/digest.ts';
@@ -65,12 +66,12 @@ export class BundleReading {
   readonly verdicts: ReadonlyMap<number, TokenVerdict>;
   readonly #later: unknown;
   readonly #heads: unknown;
+  readonly #registry: unknown;
 
   constructor(
     files: Files,
     parts: PublicationParts,
-    later: unknown,
-    heads: unknown,
+    { later, heads, registry }: { later: unknown; heads: unknown; registry: unknown },
     verdicts: BundleReading['verdicts'],
   ) {
     this.files = files;
@@ -78,11 +79,13 @@ export class BundleReading {
     this.verdicts = verdicts;
     this.#later = later;
     this.#heads = heads;
+    this.#registry = registry;
   }
 
   readonly later = once((): readonly Entry[] => read('later.json', z.array(entryShape), this.#later));
   readonly signed = once(() => read('heads.json', headsShape, this.#heads));
   readonly headsBySequence = once(() => new Map(this.signed().heads.map((head) => [head.sequence, head])));
+  readonly inclusion = once(() => read('registry.json', inclusionFile.nullable(), this.#registry));
   /** The record with what came on it after the document. */
   readonly allEntries = once((): readonly Entry[] => [...this.study.entries(), ...this.later()]);
   readonly documentDigest = once(() => fileDigest(this.files.get(fileNames.document) ?? new Uint8Array()));
@@ -123,6 +126,8 @@ export async function openBundle(
   if ('fault' in later) return later;
   const heads = jsonIn(files, fileNames.heads);
   if ('fault' in heads) return heads;
+  const registry = jsonIn(files, fileNames.registry);
+  if ('fault' in registry) return registry;
   const signed = headsShape.safeParse(heads.value);
   const absent = Object.values(fileNames).find((name) => !files.has(name));
   if (absent !== undefined) return { fault: `${absent} is missing.` };
@@ -134,7 +139,8 @@ export async function openBundle(
   const verdicts = signed.success
     ? await verdictsOf(files, signed.data.heads, crypto)
     : new Map<number, TokenVerdict>();
-  return { bundle: new BundleReading(files, document.parts, later.value, heads.value, verdicts) };
+  const read = { later: later.value, heads: heads.value, registry: registry.value };
+  return { bundle: new BundleReading(files, document.parts, read, verdicts) };
 }
 
 async function verdictsOf(

@@ -3,6 +3,7 @@ import type { WebCrypto } from '../ledger/token-signature.ts';
 import { type Check, recordSteps, runStep, type Step, unreadable } from '../ledger/verify.ts';
 import { type BundleReading, openBundle } from './bundle-reading.ts';
 import { checkDrawTime, checkPublished, checkSealingTime, checkSignatures } from './check-proof.ts';
+import { checkRegistry } from './check-registry.ts';
 import { checkTables } from './check-tables.ts';
 
 /** The checks that need more than the record. */
@@ -12,6 +13,7 @@ const bundleSteps: readonly Step<BundleReading>[] = [
   { id: 'sealingTime', restsOn: ['record', 'signatures', 'protocol'], run: checkSealingTime },
   { id: 'drawTime', restsOn: ['record', 'signatures'], run: checkDrawTime },
   { id: 'tables', restsOn: ['record', 'protocol', 'draws', 'answers', 'figures'], run: checkTables },
+  { id: 'registry', restsOn: ['record', 'protocol', 'signatures'], run: checkRegistry },
 ];
 
 function run(id: Check['id'], bundle: BundleReading, done: readonly Check[]): Check {

@@ -13,6 +13,8 @@ export const codesStatus = z.strictObject({
   codeHolder: z.string(),
   youHoldCodes: z.boolean(),
   commitment: z.string().nullable(),
+  /** When the codes drawn before became void by an amendment; null where none did or others are drawn. */
+  voidedAt: z.iso.datetime().nullable(),
   openings: z.array(z.strictObject({ at: z.iso.datetime(), by: z.string(), purpose: z.string() })),
 });
 export type CodesStatus = z.output<typeof codesStatus>;

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { headProofs } from '../ledger/head-proofs.ts';
 import { endpoint, managers } from './endpoint.ts';
 import { done, thingParams } from './organisation-params.ts';
 import { listQuery, pageOf } from './paging.ts';
@@ -78,6 +79,8 @@ export const publication = z.strictObject({
   /** What belongs to the finding's first lines beside its own: the gap between presentations and how blind it was. */
   /** The frozen document: its SHA-256 digest, its size in bytes, and where it is. */
   file: z.strictObject({ digest: z.string(), bytes: z.int(), path: z.string() }),
+  /** Where the publisher's registry of sealed protocols stands. */
+  registry: z.string(),
   /** Where the bundle is: the document with tables, signatures, tokens and what recomputes its figures. */
   bundle: z.string(),
   report,
@@ -113,6 +116,14 @@ export const publicationsApi = {
     access: 'anyone',
     params: z.strictObject({ id: shortId }),
     reply: publication,
+  }),
+  signedHeads: endpoint({
+    method: 'GET',
+    path: '/publications/:id/signed-heads',
+    summary: 'The keys, signatures and tokens of a published record, for anybody, as a file to check',
+    access: 'anyone',
+    params: z.strictObject({ id: shortId }),
+    reply: headProofs,
   }),
   ofStudy: endpoint({
     method: 'GET',

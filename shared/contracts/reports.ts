@@ -4,6 +4,7 @@ import { registeredResult } from '../methods/methods.ts';
 import { endpoint } from './endpoint.ts';
 import { organisationParams, thingParams } from './organisation-params.ts';
 import { listQuery, pageOf } from './paging.ts';
+import { protocolDifference } from './protocol-versions.ts';
 import { signedHead } from './signed-heads.ts';
 
 export const reportRow = z.strictObject({
@@ -80,6 +81,16 @@ export const report = z.strictObject({
     digest: z.string(),
     sealedAt: z.iso.datetime(),
     facts: z.array(z.strictObject({ label: z.string(), value: z.string() })),
+    /** Every sealed version, the first first, with what it fixes otherwise than the one before. */
+    versions: z.array(
+      z.strictObject({
+        version: z.int(),
+        sealedAt: z.iso.datetime(),
+        digest: z.string(),
+        reason: z.string().nullable(),
+        changes: z.array(protocolDifference),
+      }),
+    ),
   }),
   record: z.strictObject({
     entries: z.int(),

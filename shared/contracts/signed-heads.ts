@@ -1,7 +1,8 @@
 import { z } from 'zod';
+import { headProofs } from '../ledger/head-proofs.ts';
 import { moments } from '../ledger/moments.ts';
 import { endpoint } from './endpoint.ts';
-import { organisationParams } from './organisation-params.ts';
+import { organisationParams, thingParams } from './organisation-params.ts';
 
 /** Said wherever a local authority's token shows. */
 export const localTimeWords =
@@ -61,6 +62,14 @@ export const timeState = z.strictObject({
 export type TimeState = z.output<typeof timeState>;
 
 export const signedHeadsApi = {
+  ofStudy: endpoint({
+    method: 'GET',
+    path: '/organisations/:organisationId/studies/:id/signed-heads',
+    summary: 'The keys, signatures and tokens of a study’s record, as a file to check',
+    access: ['owner', 'manager', 'reviewer'],
+    params: thingParams,
+    reply: headProofs,
+  }),
   time: endpoint({
     method: 'GET',
     path: '/organisations/:organisationId/timestamps',

@@ -3,6 +3,7 @@ import { methodIds, methods } from '../methods/methods.ts';
 import { endpoint, managers } from './endpoint.ts';
 import { organisationParams, thingParams } from './organisation-params.ts';
 import { listQuery, pageOf, sortBy } from './paging.ts';
+import { protocolDifference } from './protocol-versions.ts';
 import { signedHead } from './signed-heads.ts';
 
 export const studyStates = ['draft', 'sealed', 'collecting', 'closed', 'published', 'shelved'] as const;
@@ -123,7 +124,22 @@ export const sealedProtocol = z.strictObject({
   sealedBy: z.string(),
   /** The signature with which it was sealed, and its token; null for what was sealed before there were signatures. */
   signed: signedHead.nullable(),
+  /** Why the version before was amended; null for the first. */
+  reason: z.string().nullable(),
+  /** What it fixes otherwise than the version before. */
+  changes: z.array(protocolDifference),
 });
+
+/** What an amendment would change, and what would follow from it. */
+export const amendmentPreview = z.strictObject({
+  /** The version that it amends. */
+  amends: z.int(),
+  changes: z.array(protocolDifference),
+  /** What becomes of the codes: none are drawn, or they stay in use, or they become void. */
+  codes: z.enum(['none', 'kept', 'void']),
+  sessionsReplanned: z.int(),
+});
+export type AmendmentPreview = z.output<typeof amendmentPreview>;
 
 const rowShape = {
   id: z.uuid(),
@@ -142,7 +158,12 @@ export const study = z.strictObject({
   cableNames: z.tuple([z.string(), z.string()]),
   manager: z.string(),
   codeHolder: z.string(),
+  /** The version in force. */
   sealed: sealedProtocol.nullable(),
+  /** Every sealed version, the first first. */
+  versions: z.array(sealedProtocol),
+  /** Whether the sealed protocol can still be amended. */
+  amending: z.strictObject({ allowed: z.boolean(), why: z.string() }),
   codes: z.enum(['none', 'drawn', 'confirmed']),
   progress: studyProgress,
   record: z.strictObject({ entries: z.int(), head: z.string().nullable() }),
@@ -210,6 +231,29 @@ export const studiesApi = {
     access: managers,
     params: thingParams,
     body: z.strictObject({}),
+    reply: study,
+  }),
+  previewAmendment: endpoint({
+    method: 'POST',
+    path: `${base}/:id/amendment/preview`,
+    summary: 'What an amendment of the sealed protocol would change; stores nothing',
+    access: managers,
+    params: thingParams,
+    body: studyDraft,
+    reply: amendmentPreview,
+  }),
+  amend: endpoint({
+    method: 'POST',
+    path: `${base}/:id/amendment`,
+    summary: 'Amend the sealed protocol before its first session opens: seals the next version',
+    access: managers,
+    params: thingParams,
+    body: z.strictObject({
+      draft: studyDraft,
+      reason: line(500).min(3, 'Say why the protocol is amended'),
+      /** The version that was seen. */
+      amends: z.int().min(1),
+    }),
     reply: study,
   }),
   deviate: endpoint({

@@ -24,6 +24,8 @@ export interface SoughtWords<R extends DifferenceResult> {
   sought(result: R, cables: FindingContext['cables']): string;
   /** What scores below chance must not be taken for, or nothing. */
   readonly below?: string;
+  /** What a result that found nothing must not be taken for: "that nobody can hear a difference". */
+  readonly notShown: string;
 }
 
 /** What a method that looks for a difference says in its own words. */
@@ -44,6 +46,7 @@ export interface DifferenceWords<R extends DifferenceResult> extends SoughtWords
 export const anyDifference: SoughtWords<DifferenceResult> = {
   told: (_result, [first, second]) => `told ${first} from ${second}`,
   sought: (_result, [first, second]) => `a difference between ${first} and ${second}`,
+  notShown: 'that nobody can hear a difference',
 };
 
 /** Row 8: whom a difference is said of. Listeners who came one at a time, each answer with a draw of its own, are no panel. */
@@ -79,9 +82,9 @@ const levelUnknown = 'Level at the load was not recorded in Fairlead; loudness m
 const framedBy = (row: string, { people }: DifferenceResult) =>
   (row === '2' || row === '3') && people?.isAboveGuessing === true ? people.samplingFrame : null;
 
-const neverSaid = (frame: string | null) => [
+const neverSaid = (notShown: string, frame: string | null) => [
   'that either cable is better',
-  'that nobody can hear a difference',
+  notShown,
   `that it holds for other systems${frame === null ? ', listeners' : ''} or music`,
 ];
 
@@ -190,6 +193,6 @@ export function differenceFinding<R extends DifferenceResult>(
       levelUnknown,
     ],
     scope: scopeOf(context, frame === null ? undefined : `listeners of whom these were a sample (${frame})`),
-    mustNotSay: neverSaid(frame),
+    mustNotSay: neverSaid(words.notShown, frame),
   };
 }

@@ -19,13 +19,14 @@ const names = {
   figures: 'Figures recomputed',
   flow: 'Numbers add up',
   tables: 'Tables equal the record',
+  registry: 'In the publisher’s registry',
 } as const;
 
 export type CheckId = keyof typeof names;
 export type NamedCheck = { readonly id: CheckId; readonly name: string };
 
 /** What only a bundle brings with it. */
-const inBundleAlone: readonly CheckId[] = ['published', 'signatures', 'sealingTime', 'drawTime', 'tables'];
+const inBundleAlone: readonly CheckId[] = ['published', 'signatures', 'sealingTime', 'drawTime', 'tables', 'registry'];
 
 export const nameOfCheck = (id: CheckId): string => names[id];
 

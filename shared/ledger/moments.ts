@@ -15,6 +15,7 @@ export const momentWords: Record<Moment, string> = {
 // study is closed with its result, the last of the entries that closing writes.
 const momentOfKind: Readonly<Record<string, Moment>> = {
   'protocol-sealed': 'sealing',
+  'protocol-amended': 'sealing',
   'draw-fixed': 'draw-fixed',
   'session-finished': 'session-end',
   'session-abandoned': 'session-end',

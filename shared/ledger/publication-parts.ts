@@ -13,7 +13,10 @@ export const partNames = ['record', 'protocol', 'secrets', 'draws', 'answers', '
 export type PartName = (typeof partNames)[number];
 
 /** What a published document holds beside its format. Read from a file, every part is still unknown. */
-export type PublicationParts = { readonly [part in PartName]: unknown };
+export type PublicationParts = { readonly [part in PartName]: unknown } & {
+  /** The protocol's versions before the one in force, in order; left out where it was never amended. */
+  readonly earlierProtocols?: unknown;
+};
 
 /** What a session's draw came to, written out, so that nobody needs this program to read what X was. */
 export type PublishedDraw = Draw & { readonly session: number };
@@ -23,7 +26,10 @@ export const publicationVersion = 1;
 
 export type ClosedStudy = {
   readonly entries: readonly Entry[];
+  /** The version in force. */
   readonly protocol: Protocol;
+  /** The versions before it, in order. */
+  readonly earlierProtocols?: readonly Protocol[];
   /** Answers held in time. Those of void trials have no leaf on the record and are left out. */
   readonly answers: readonly AnswerContent[];
 };
@@ -55,7 +61,7 @@ function lockedAnswers({ entries, answers }: ClosedStudy, sessionIds: ReadonlyMa
  * @throws ZodError when the record has no revealed secrets
  */
 export function publicationParts(study: ClosedStudy): PublicationParts {
-  const { entries, protocol } = study;
+  const { entries, protocol, earlierProtocols = [] } = study;
   const method = methodOf(protocol.method);
   const states = sessionsInRecord(entries, method);
   const payloadOf = (wanted: string) => entries.find(({ kind }) => kind === wanted)?.payload;
@@ -71,6 +77,7 @@ export function publicationParts(study: ClosedStudy): PublicationParts {
   return {
     record: entries,
     protocol,
+    ...(earlierProtocols.length === 0 ? {} : { earlierProtocols }),
     secrets,
     draws,
     answers: lockedAnswers(study, sessionIds),
@@ -80,12 +87,13 @@ export function publicationParts(study: ClosedStudy): PublicationParts {
 
 /** The document as it is frozen: canonical text, so that one digest names it. */
 export function publicationText(parts: PublicationParts): string {
-  const { record, protocol, secrets, draws, answers, result } = parts;
+  const { record, protocol, earlierProtocols, secrets, draws, answers, result } = parts;
   const whole = {
     format: publicationFormat,
     version: publicationVersion,
     record,
     protocol,
+    ...(earlierProtocols === undefined ? {} : { earlierProtocols }),
     secrets,
     draws,
     answers,
@@ -115,7 +123,8 @@ export function readPublication(text: string): { parts: PublicationParts } | { f
     return { fault: `This program reads version ${publicationVersion} of the format.` };
   const absent = partNames.filter((name) => !Object.hasOwn(parts, name));
   if (absent.length > 0) return { fault: `It has no ${absent.join(', ')}.` };
-  const unknown = Object.keys(parts).filter((name) => !(partNames as readonly string[]).includes(name));
+  const known: readonly string[] = [...partNames, 'earlierProtocols'];
+  const unknown = Object.keys(parts).filter((name) => !known.includes(name));
   if (unknown.length > 0) return { fault: `It has a part that is not known: ${unknown.join(', ')}.` };
   return isCanonical(whole, text)
     ? { parts: parts as PublicationParts }

@@ -61,11 +61,10 @@ export function statementDigest(statement: Omit<HeadStatement, 'format'>): strin
   return fileDigest(statementBytes(statement));
 }
 
-function isSignedBy(signature: HeadSignature, publicKey: string): boolean {
+/** Whether a signature (Ed25519) over some bytes was made by the key; all but the bytes in hexadecimal digits. */
+export function isSignedBy(signature: string, bytes: Uint8Array, publicKey: string): boolean {
   try {
-    return verify(hexToBytes(signature.signature), statementBytes(signature), hexToBytes(publicKey), {
-      zip215: false,
-    });
+    return verify(hexToBytes(signature), bytes, hexToBytes(publicKey), { zip215: false });
   } catch {
     return false;
   }
@@ -94,7 +93,9 @@ export function signatureFault(
   if (fingerprintOf(key.publicKey) !== signature.key) return 'the key does not have the fingerprint that it names';
   if (signature.at < key.createdAt || (key.retiredAt !== null && signature.at > key.retiredAt))
     return 'it was made when its key was not in use';
-  return isSignedBy(signature, key.publicKey) ? null : 'it does not match its key and what it says';
+  return isSignedBy(signature.signature, statementBytes(signature), key.publicKey)
+    ? null
+    : 'it does not match its key and what it says';
 }
 
 /** The public key in PEM, for `openssl pkeyutl -verify -pubin -inkey`. */

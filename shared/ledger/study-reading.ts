@@ -68,13 +68,20 @@ export class StudyReading {
 
   readonly entries = once((): readonly Entry[] => read('The record', z.array(entryShape).min(1), this.parts.record));
   readonly protocol = once((): Protocol => read('The protocol', protocol, this.parts.protocol));
+  /** The versions before the one in force, in order. */
+  readonly earlierProtocols = once((): readonly Protocol[] =>
+    this.parts.earlierProtocols === undefined
+      ? []
+      : read('The earlier protocols', z.array(protocol).min(1), this.parts.earlierProtocols),
+  );
   readonly secrets = once((): RevealedKey => read('The secrets', revealedKey, this.parts.secrets));
   readonly draws = once((): PublishedDraw[] => read('The draws', z.array(draw), this.parts.draws));
   readonly answers = once((): AnswerContent[] => read('The answers', z.array(answer), this.parts.answers));
 
-  /** The method as the record's first session was planned with it. */
+  /** The method as the record's sessions were planned with it; an amendment plans those anew that have not opened. */
   readonly method = once((): Method => {
-    const plan = this.payloadOf('session-planned')?.plan as { method?: unknown } | undefined;
+    const planned = this.entries().findLast(({ kind }) => kind === 'session-planned' || kind === 'session-replanned');
+    const plan = planned?.payload.plan as { method?: unknown } | undefined;
     return methodOf(String(plan?.method));
   });
 

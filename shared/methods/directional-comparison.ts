@@ -19,6 +19,7 @@ const scoring = forcedChoiceScoring({
   words: {
     told: ({ attribute }, [first, second]) => `found more ${attribute} in ${first} than in ${second}`,
     sought: ({ attribute }, [first, second]) => `more ${attribute} in ${first} than in ${second}`,
+    notShown: 'that nobody can hear which has more of it, or that they sound alike in anything else',
     below:
       'The direction was registered before the first trial: that the other cable has more of it is no finding of this test.',
   },

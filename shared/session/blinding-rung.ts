@@ -15,7 +15,10 @@ function whyOpen(entries: readonly Entry[]): string | null {
   const lastTrial = entries.findLast(({ kind }) => kind === 'trial-opened' || kind === 'trial-locked')?.sequence ?? 0;
   if (opened === Number.POSITIVE_INFINITY) return null;
   if (first('protocol-sealed') > opened) return 'The protocol was not sealed before the first trial.';
-  if (first('code-key-committed') > opened) return 'The code key was not committed to before the first trial.';
+  const last = (kind: string) => entries.findLast((entry) => entry.kind === kind)?.sequence ?? 0;
+  if (last('protocol-amended') > opened) return 'The protocol was amended after the first trial.';
+  if (Math.max(first('code-key-committed'), last('code-key-committed')) > opened)
+    return 'The code key was not committed to before the first trial.';
   if (first('key-revealed') < lastTrial) return 'The secrets were revealed before the last trial had locked.';
   const fixed = new Set<unknown>();
   for (const { kind, payload } of entries) {
@@ -26,13 +29,12 @@ function whyOpen(entries: readonly Entry[]): string | null {
   return null;
 }
 
-/** Whoever drew, opened or confirmed the codes, beside the person named as their holder. */
+/** Whoever drew, opened or confirmed the codes in use, beside the person named as their holder. A void key tells nothing. */
 function keyHoldersOf(entries: readonly Entry[], codeHolder: string): Set<string> {
   const acts = ['code-key-committed', 'code-key-opened', 'code-key-confirmed'];
-  return new Set([
-    codeHolder,
-    ...entries.filter(({ kind }) => acts.includes(kind)).map(({ payload }) => String(payload.by)),
-  ]);
+  const since = entries.findLast(({ kind }) => kind === 'code-key-voided')?.sequence ?? 0;
+  const inUse = entries.filter(({ kind, sequence }) => acts.includes(kind) && sequence > since);
+  return new Set([codeHolder, ...inUse.map(({ payload }) => String(payload.by))]);
 }
 
 /**

@@ -25,6 +25,8 @@ export type SessionPlan = z.output<typeof sessionPlan>;
 
 export const sessionEvents = {
   'session-planned': z.strictObject({ session, sessionId: z.uuid(), proctor: z.uuid(), plan: sessionPlan }),
+  /** A planned session takes the plan of an amended protocol. */
+  'session-replanned': z.strictObject({ session, plan: sessionPlan }),
   'cautions-confirmed': z.strictObject({ session, items: z.array(z.enum(cautions)) }),
   'seating-opened': z.strictObject({ session, commitment: hex32 }),
   'listener-joined': z.strictObject({

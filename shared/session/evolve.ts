@@ -45,6 +45,10 @@ function fold(state: SessionState, event: SessionEvent, method: Method): Folded 
   switch (event.kind) {
     case 'session-planned':
       throw new RangeError('a session is planned once');
+    case 'session-replanned':
+      if (state.phase !== 'planned') throw new RangeError('a session that has opened keeps its plan');
+      // The rig may be another one now, and its cautions with it.
+      return { ...state, plan: event.payload.plan, cautionsConfirmed: false };
     case 'cautions-confirmed':
       return { ...state, cautionsConfirmed: true };
     case 'seating-opened':

@@ -8,8 +8,17 @@ const hex32 = z.string().regex(/^[0-9a-f]{64}$/);
 
 export const studyEvents = {
   'protocol-sealed': z.strictObject({ protocolVersion: z.int(), digest: hex32, sealedBy: z.uuid() }),
+  /** A later version, sealed before any session opened; nothing of it but its digest is on the record. */
+  'protocol-amended': z.strictObject({
+    protocolVersion: z.int().min(2),
+    digest: hex32,
+    amendedBy: z.uuid(),
+    reason: z.string(),
+  }),
   'code-key-committed': z.strictObject({ commitment: hex32, specimens: z.int(), by: z.uuid() }),
   'code-key-opened': z.strictObject({ by: z.uuid(), purpose: z.enum(['labels', 'check']) }),
+  /** The code key committed to before is void: the amended protocol has other specimens or another code holder. */
+  'code-key-voided': z.strictObject({ by: z.uuid() }),
   'code-key-confirmed': z.strictObject({ by: z.uuid() }),
   'study-closed': z.strictObject({
     by: z.uuid(),

@@ -1,3 +1,5 @@
+import { registryPath } from '#shared/contracts/registry.ts';
+
 /** Every address of the application. The route table is built from the same functions. */
 export const paths = {
   start: () => '/',
@@ -16,6 +18,7 @@ export const paths = {
   /** Public: what is published, for anybody. */
   publications: () => '/p',
   publication: (id: string) => `/p/${id}`,
+  registry: registryPath,
   /** For whoever brings a file of a publication. */
   verify: () => '/verify',
 
@@ -30,6 +33,7 @@ export const paths = {
   newStudy: (organisationId: string) => `${organisation(organisationId)}/studies/new`,
   study: (organisationId: string, id: string) => `${organisation(organisationId)}/studies/${id}`,
   editStudy: (organisationId: string, id: string) => `${organisation(organisationId)}/studies/${id}/edit`,
+  amendStudy: (organisationId: string, id: string) => `${organisation(organisationId)}/studies/${id}/amend`,
   codes: (organisationId: string, studyId: string) => `${organisation(organisationId)}/studies/${studyId}/codes`,
   labels: (organisationId: string, studyId: string) => `${organisation(organisationId)}/studies/${studyId}/labels`,
   report: (organisationId: string, studyId: string) => `${organisation(organisationId)}/studies/${studyId}/report`,

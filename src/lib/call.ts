@@ -8,7 +8,8 @@ type QueryInput<E> = QueryOf<E> extends undefined ? { query?: never } : { query?
 /** What a call of an endpoint needs: its parameters, query and body, as far as its contract has them. */
 export type CallInput<E> = Part<'params', ParamsOf<E>> & Part<'body', BodyInput<E>> & QueryInput<E>;
 
-function addressOf(contract: Endpoint, params: object, query: object): string {
+/** Where an endpoint is, for a link that downloads what it replies. */
+export function addressOf(contract: Endpoint, params: object, query: object = {}): string {
   const values = new Map<string, unknown>(Object.entries(params));
   const path = contract.path.replace(/:([a-zA-Z]+)/g, (_, name: string) =>
     encodeURIComponent(String(values.get(name))),

@@ -44,6 +44,7 @@ export function Component() {
         title="Proof"
         lede="The key that signs your records, who stamps the time on them, and whether they hold."
         back={{ to: paths.people(organisationId), label: 'People' }}
+        actions={<LinkButton to={paths.registry(organisationId)}>Open the public registry</LinkButton>}
       />
       <div className="flex flex-col gap-14">
         <div className="grid gap-x-16 gap-y-14 lg:grid-cols-[minmax(0,1fr)_24rem] lg:items-start">

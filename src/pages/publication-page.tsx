@@ -1,5 +1,6 @@
 import { useSuspenseQuery } from '@tanstack/react-query';
 import { type LoaderFunctionArgs, useParams } from 'react-router-dom';
+import { publicationsApi } from '#shared/contracts/publications.ts';
 import { methodOf } from '#shared/methods/methods.ts';
 import { paths } from '../app/paths.ts';
 import { publicationQueries } from '../features/publications/publications.queries.ts';
@@ -17,6 +18,7 @@ import { ReportListeners } from '../features/reports/report-listeners.tsx';
 import { ReportProtocol } from '../features/reports/report-protocol.tsx';
 import { ReportSessions } from '../features/reports/report-sessions.tsx';
 import { WhatToSay } from '../features/reports/what-to-say.tsx';
+import { addressOf } from '../lib/call.ts';
 import { formatDate } from '../lib/format.ts';
 import { queryClient } from '../lib/query-client.ts';
 import { param } from '../lib/route-params.ts';
@@ -65,7 +67,7 @@ export function Component() {
       />
       <ReportSessions sessions={report.sessions} cables={report.cables} method={method} />
       <ReportProtocol protocol={report.protocol} />
-      <ReportHeads record={report.record} />
+      <ReportHeads record={report.record} proofs={addressOf(publicationsApi.signedHeads, { id: publication.id })} />
     </article>
   );
 }

@@ -1,10 +1,12 @@
 import { useSuspenseQuery } from '@tanstack/react-query';
 import { type LoaderFunctionArgs, useParams } from 'react-router-dom';
+import { signedHeadsApi } from '#shared/contracts/signed-heads.ts';
 import { paths } from '../app/paths.ts';
 import { publicationQueries } from '../features/publications/publications.queries.ts';
 import { ReportView } from '../features/reports/report-view.tsx';
 import { reportQueries } from '../features/reports/reports.queries.ts';
 import { usePresence } from '../features/sign-in/membership.ts';
+import { addressOf } from '../lib/call.ts';
 import { queryClient } from '../lib/query-client.ts';
 import { isManaging } from '../lib/role-words.ts';
 import { param } from '../lib/route-params.ts';
@@ -29,6 +31,7 @@ export function Component() {
       report={report}
       back={{ to: paths.reports(organisationId), label: 'All reports' }}
       actions={<Publishing id={id} />}
+      proofs={addressOf(signedHeadsApi.ofStudy, { organisationId, id })}
     />
   );
 }

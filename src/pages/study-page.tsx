@@ -55,6 +55,8 @@ export function Component() {
       places={{
         all: paths.studies(organisationId),
         edit: paths.editStudy(organisationId, id),
+        amend: paths.amendStudy(organisationId, id),
+        registry: paths.registry(organisationId),
         codes: paths.codes(organisationId, id),
         planSession: paths.planSession(organisationId, id),
         report,

@@ -1,11 +1,11 @@
 import { Link } from 'react-router-dom';
 import { paths } from '../app/paths.ts';
 import { CheckList } from '../features/publications/check-list.tsx';
-import { FileDrop } from '../features/publications/file-drop.tsx';
 import { NotShown } from '../features/publications/not-shown.tsx';
 import { ReceiptCheck } from '../features/publications/receipt-check.tsx';
 import { useVerification } from '../features/publications/use-verification.ts';
 import { VerificationOutcome } from '../features/publications/verification-outcome.tsx';
+import { FileDrop } from '../ui/file-drop.tsx';
 import { PageHeader } from '../ui/page-header.tsx';
 
 /** For whoever holds a file and distrusts its publisher: it is checked here and sent nowhere. */

@@ -4,9 +4,12 @@ import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type { AuditFault, AuditOutcome } from '#shared/contracts/audits.ts';
+import { confirmationIds } from '#shared/contracts/publications.ts';
 import { HandClock } from '../../server/demo/hand-clock.ts';
-import { auditAll, auditWhenDue, recordTriggers } from '../../server/features/audits/audits.service.ts';
+import { auditAll, auditWhenDue } from '../../server/features/audits/audits.service.ts';
+import { OutgoingMail } from '../../server/mail/outgoing-mail.entity.ts';
 import { localAuthority } from '../../server/timestamps/local-authority.ts';
+import { pastTriggers } from '../support/past-triggers.ts';
 import { makeOrganisation, signedIn, type TestOrganisation } from '../support/people.ts';
 import { type TestServer, testServer } from '../support/test-server.ts';
 import { untilAsked } from '../support/until.ts';
@@ -25,6 +28,12 @@ describe('the audit', () => {
     people = await makeOrganisation(server, 'Harbour');
     await makeOrganisation(server, 'Elsewhere');
     study = await wholeStudy(server, people, clock, 'Study Plover');
+    const confirmations = Object.fromEntries(confirmationIds.map((id) => [id, true]));
+    const statements = { paid: 'The makers', supplied: 'The makers, from stock', ties: 'none' };
+    await study.manager
+      .post(`${study.at}/publication`)
+      .send({ ...statements, confirmations })
+      .expect(200);
     await untilAsked('every token', async () => {
       clock.advance(1000);
       return Number((await ask('select count(*) as n from token_requests'))[0].n) === 0;
@@ -44,17 +53,7 @@ describe('the audit', () => {
     return faults;
   }
 
-  /** Does what the triggers refuse, as somebody could who holds the account: takes them away, and puts them back. */
-  async function pastTriggers(...statements: string[]): Promise<void> {
-    const made: string[] = [];
-    for (const name of recordTriggers) {
-      const [row] = await rowsOf(`show create trigger ${name}`);
-      made.push(row?.['SQL Original Statement'] ?? '');
-      await ask(`drop trigger ${name}`);
-    }
-    for (const statement of statements) await ask(statement);
-    for (const statement of made) await ask(statement);
-  }
+  const past = (...statements: string[]) => pastTriggers(server.deps.db, ...statements);
 
   it('finds that every record of the database holds [X8]', async () => {
     expect(await audited()).toEqual([]);
@@ -62,7 +61,7 @@ describe('the audit', () => {
     for await (const { organisationId, studies, signatures, tokens, entries } of auditAll(server.deps))
       sums.push({ own: organisationId === people.organisationId, studies, signatures, tokens, some: entries > 50 });
     expect(sums.sort((a, b) => b.studies - a.studies)).toEqual([
-      { own: true, studies: 1, signatures: 4, tokens: 4, some: true },
+      { own: true, studies: 1, signatures: 5, tokens: 5, some: true },
       { own: false, studies: 0, signatures: 0, tokens: 0, some: false },
     ]);
   });
@@ -101,10 +100,18 @@ describe('the audit', () => {
     [
       'a missing end',
       'record_entries',
-      "delete from record_entries where kind in ('result-recorded')",
+      "delete from record_entries where kind in ('study-published')",
       null,
       'should end with entry',
     ],
+    [
+      'another document',
+      'publications',
+      "update publications set document = replace(document, 'Piano', 'Organ')",
+      null,
+      'not the one that was published',
+    ],
+    ['a document gone', 'publications', 'delete from publications', null, 'that was published is gone'],
     ['a whole record gone', 'record_entries', 'delete from record_entries', 1, 'and there is none'],
     [
       'another head kept',
@@ -179,9 +186,9 @@ describe('the audit', () => {
       'L02 to trial 4 of session 1 is gone',
     ],
   ])('finds what was bent (%s) and says where [X8]', async (_what, table, bend, sequence, why) => {
-    await pastTriggers(keep(table), bend);
+    await past(keep(table), bend);
     const faults = await audited();
-    await pastTriggers(...putBack(table));
+    await past(...putBack(table));
     expect(faults).toHaveLength(1);
     expect(faults[0]).toMatchObject({ studyId: study.studyId, title: 'Study Plover' });
     expect(faults[0]?.why).toContain(why);
@@ -208,17 +215,28 @@ describe('the audit', () => {
     expect(await latest()).toBeNull();
     await auditWhenDue(server.deps);
     const first = await latest();
-    expect(first).toMatchObject({ at: new Date(clock.now()).toISOString(), studies: 1, signatures: 4, faults: [] });
+    expect(first).toMatchObject({ at: new Date(clock.now()).toISOString(), studies: 1, signatures: 5, faults: [] });
     clock.advance(dayMs - 1);
     await auditWhenDue(server.deps);
     expect(await latest()).toEqual(first);
     clock.advance(1);
-    await pastTriggers(keep('head_signatures'), `delete from head_signatures ${ofFirst}`);
+    await past(keep('head_signatures'), `delete from head_signatures ${ofFirst}`);
     await auditWhenDue(server.deps);
-    await pastTriggers(...putBack('head_signatures'));
     const second = await latest();
     expect(second?.at).toBe(new Date(clock.now()).toISOString());
     expect(second?.faults.map(({ title, sequence }) => [title, sequence])).toEqual([['Study Plover', 1]]);
+    const mails = () =>
+      server.deps.db.manager.findBy(OutgoingMail, { recipient: people.owner.email, subject: 'A record does not hold' });
+    const [mail, ...others] = await mails();
+    expect(others).toEqual([]);
+    expect(mail?.text).toContain('Study Plover, at entry 1.');
+    expect(mail?.text).toContain(`/organisations/${people.organisationId}/proof`);
+    // The next day it is still so, and nobody is told again.
+    clock.advance(dayMs);
+    await auditWhenDue(server.deps);
+    expect((await latest())?.faults).toEqual(second?.faults);
+    expect(await mails()).toHaveLength(1);
+    await past(...putBack('head_signatures'));
     await study.manager.get(path).expect(403);
   });
 
@@ -238,12 +256,12 @@ describe('the audit', () => {
       });
     const good = run(name);
     expect(good.stdout).toMatch(
-      /2 organisations, 1 studies: \d+ entries, 4 signatures, 4 tokens\.\nEvery record holds\./,
+      /2 organisations, 1 studies: \d+ entries, 5 signatures, 5 tokens\.\nEvery record holds\./,
     );
     expect(good.status).toBe(0);
-    await pastTriggers(keep('record_entries'), 'delete from record_entries where sequence = 12');
+    await past(keep('record_entries'), 'delete from record_entries where sequence = 12');
     const broken = run(name);
-    await pastTriggers(...putBack('record_entries'));
+    await past(...putBack('record_entries'));
     expect(broken.stdout).toContain(
       `BROKEN  Study Plover (${study.studyId}), entry 12: expected entry 12, found entry 13.`,
     );

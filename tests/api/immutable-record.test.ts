@@ -82,6 +82,22 @@ describe('the database', () => {
     expect(await count(table)).toBe(before);
   });
 
+  it('lets a publication be withdrawn once, and nothing else be done to it [X12]', async () => {
+    await ask(
+      "insert into publications select substr(md5(rand()), 1, 8), id, organisation_id, title, 'A finding', 'Harbour', repeat('0', 64), '{}', 2, now(), null, null from studies",
+    );
+    for (const change of [
+      "document = '[]'",
+      "digest = repeat('1', 64)",
+      "headline = 'Another'",
+      'published_at = now() + interval 1 day',
+    ])
+      await expect(ask(`update publications set ${change}`)).rejects.toThrow('frozen');
+    await expect(ask('delete from publications')).rejects.toThrow('stays at its address');
+    await ask("update publications set withdrawn_at = now(), withdrawn_reason = 'The chain was wrong'");
+    await expect(ask('update publications set withdrawn_at = null')).rejects.toThrow('frozen');
+  });
+
   it('lets a key be retired once, and nothing else be done to it [X6]', async () => {
     for (const change of [
       "public_key = repeat('0', 64)",

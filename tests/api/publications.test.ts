@@ -8,6 +8,7 @@ import { bundleCheckNames } from '#shared/ledger/check-names.ts';
 import { type Check, checksOfFile } from '#shared/ledger/verify.ts';
 import { HandClock } from '../../server/demo/hand-clock.ts';
 import { readRecord } from '../../server/ledger/ledger.ts';
+import { pastTriggers } from '../support/past-triggers.ts';
 import { makeOrganisation, password, readyStudy, signedIn, type TestOrganisation } from '../support/people.ts';
 import { type TestServer, testServer } from '../support/test-server.ts';
 import { wholeStudy } from '../support/whole-study.ts';
@@ -262,14 +263,10 @@ describe('a publication', () => {
 
   it('is refused where the record does not hold [V11]', async () => {
     const third = await wholeStudy(server, people, clock, 'Study Sanderling');
-    const ask = (sql: string, values: string[] = []) => server.deps.db.query(sql, values);
-    // Whoever holds the account can take away what refuses this.
-    const [kept] = await ask('show create trigger answers_no_update');
-    await ask('drop trigger answers_no_update');
-    await ask('update answers set choice = if(choice = "A", "B", "A") where session_id = ? and trial = 1', [
-      third.sessionId,
+    await pastTriggers(server.deps.db, [
+      'update answers set choice = if(choice = "A", "B", "A") where session_id = ? and trial = 1',
+      [third.sessionId],
     ]);
-    await ask(kept['SQL Original Statement']);
     const report: Report = (await third.manager.get(`${third.at}/report`).expect(200)).body;
     expect(report.finding).toMatchObject({ row: '0', maySay: null });
     const refused = await third.manager.post(`${third.at}/publication`).send(draft);

@@ -1,17 +1,31 @@
-import { mkdtempSync, rmSync } from 'node:fs';
+import { execFileSync } from 'node:child_process';
+import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import request from 'supertest';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { confirmationIds } from '#shared/contracts/publications.ts';
 import { gapWords, localTimeWords, type SignedHead, type TimeState } from '#shared/contracts/signed-heads.ts';
+import { type HeadProofs, headProofs, headProofsFault } from '#shared/ledger/head-proofs.ts';
 import { readableFingerprint } from '#shared/ledger/readable-fingerprint.ts';
+import { withTransaction } from '../../server/db/transaction.ts';
 import { HandClock } from '../../server/demo/hand-clock.ts';
+import { readRecord } from '../../server/ledger/ledger.ts';
 import { localAuthority } from '../../server/timestamps/local-authority.ts';
 import { makeOrganisation, signedIn, type TestOrganisation } from '../support/people.ts';
 import { type TestServer, testServer } from '../support/test-server.ts';
 import { untilAsked } from '../support/until.ts';
 import { wholeStudy } from '../support/whole-study.ts';
+
+type Head = HeadProofs['heads'][number];
+const bend = (proofs: HeadProofs, place: number, change: Partial<Head>): HeadProofs => ({
+  ...proofs,
+  heads: proofs.heads.map((head, index) => (index === place ? { ...head, ...change } : head)),
+});
+const tokenWith = (proofs: HeadProofs, change: Partial<NonNullable<Head['token']>>): Head['token'] => {
+  const token = proofs.heads[0]?.token ?? null;
+  return token === null ? null : { ...token, ...change };
+};
 
 describe('where signatures and times show', () => {
   // A moment ago, so that the token's real time lies after the signature's.
@@ -103,6 +117,72 @@ describe('where signatures and times show', () => {
     expect(page).toMatch(/time-stamped \d+ \w+ \d{4}, \d\d:\d\d UTC \(local, \d+ \w+ (after|before) the signature/);
     expect(page).toContain(localTimeWords);
     expect(page).toContain(readableFingerprint(shown[0]?.key ?? ''));
+  });
+
+  it('keys, signatures and tokens can be downloaded by anybody, and openssl alone confirms each [X11] [K3] [X2]', async () => {
+    const { body: publication } = await study.manager.get(`${study.at}/publication`).expect(200);
+    const address = `/api/publications/${publication.publication.id}/signed-heads`;
+    const proofs = headProofs.parse((await request(server.address).get(address).expect(200)).body);
+    expect(proofs.heads.map(({ moment }) => moment)).toEqual([
+      'sealing',
+      'draw-fixed',
+      'session-end',
+      'closing',
+      'publication',
+    ]);
+    const entries = await withTransaction(server.deps.db, (tx) => readRecord(tx, study.studyId));
+    expect(headProofsFault(entries, proofs, bytesOf)).toBeNull();
+    const openssl = (args: string[]) => execFileSync('openssl', args, { cwd: folder, stdio: 'pipe' }).toString();
+    const write = (name: string, content: string | Uint8Array) => writeFileSync(join(folder, name), content);
+    for (const { study: of, sequence, head, moment, at, key, signature, token } of proofs.heads) {
+      // As the guide says: this text, made of what stands in the file.
+      const format = 'fairlead-signed-head/1';
+      write('head.json', JSON.stringify({ at, format, head, key, moment, sequence, study: of }));
+      write('head.sig', Buffer.from(signature, 'hex'));
+      const publicKey = proofs.keys.find(({ fingerprint }) => fingerprint === key)?.publicKey ?? '';
+      write('key.der', Buffer.from(`302a300506032b6570032100${publicKey}`, 'hex'));
+      const files = ['-keyform', 'DER', '-inkey', 'key.der', '-rawin', '-in', 'head.json', '-sigfile', 'head.sig'];
+      expect(openssl(['pkeyutl', '-verify', '-pubin', ...files])).toContain('Verified Successfully');
+      write('head.tsr', Buffer.from(token?.reply ?? '', 'base64'));
+      write('certificates.pem', token?.certificates ?? '');
+      const time = String(Math.floor(Date.parse(token?.time ?? '') / 1000));
+      const trusted = ['-CAfile', 'certificates.pem', '-partial_chain', '-attime', time];
+      expect(openssl(['ts', '-verify', '-data', 'head.json', '-in', 'head.tsr', ...trusted])).toContain('OK');
+    }
+    const own = await study.manager.get(`${study.at}/signed-heads`).expect(200);
+    expect(own.body).toEqual(proofs);
+    await request(server.address).get('/api/publications/00000000/signed-heads').expect(404);
+  });
+
+  const bytesOf = (base64: string) => new Uint8Array(Buffer.from(base64, 'base64'));
+  it.each<[string, (proofs: HeadProofs) => HeadProofs, number, string]>([
+    ['a head left out', (all) => ({ ...all, heads: all.heads.slice(1) }), 1, 'signature is missing'],
+    ['another key', (all) => ({ ...all, keys: [] }), 1, 'no key'],
+    ['another time signed', (all) => bend(all, 0, { at: '2026-12-01T00:00:00.000Z' }), 1, 'does not hold'],
+    [
+      'the token of another head',
+      (all) => bend(all, 0, { token: all.heads[1]?.token ?? null }),
+      1,
+      'another statement',
+    ],
+    [
+      'a token that is none',
+      (all) => bend(all, 0, { token: tokenWith(all, { reply: 'bm9uZQ==' }) }),
+      1,
+      'cannot be read',
+    ],
+    [
+      'another time stamped',
+      (all) => bend(all, 0, { token: tokenWith(all, { time: '2026-12-01T00:00:00.000Z' }) }),
+      1,
+      'another time',
+    ],
+  ])('%s in what was downloaded is found [X11]', async (_what, change, sequence, why) => {
+    const proofs = headProofs.parse((await study.manager.get(`${study.at}/signed-heads`).expect(200)).body);
+    const entries = await withTransaction(server.deps.db, (tx) => readRecord(tx, study.studyId));
+    const fault = headProofsFault(entries, change(proofs), bytesOf);
+    expect(fault?.sequence).toBe(sequence);
+    expect(fault?.why).toContain(why);
   });
 
   it.each([

@@ -1,7 +1,8 @@
 import { expect, type Page, test } from '@playwright/test';
+import type { Study } from '#shared/contracts/studies.ts';
 import { expectAccessible } from './accessible.ts';
 import { signIn } from './at-the-desk.ts';
-import { planStudy } from './plan-a-study.ts';
+import { planStudy, sealStudy } from './plan-a-study.ts';
 import { type RunningFairlead, runFairlead } from './run-fairlead.ts';
 
 // A manager without statistics plans how much listening a study takes, in the form and in a real browser.
@@ -102,7 +103,7 @@ test('a group is simulated, its number of trials and its margin too [W1] [W3] [W
   await expectAccessible(manager, 'the planner of a group');
 });
 
-test('a margin and whom listeners are drawn from are kept with the draft, and what is to be found is not [W2] [W5]', async ({
+test('a margin and whom listeners are drawn from are kept with the draft and sealed, and what is to be found is not [W2] [W5]', async ({
   browser,
 }) => {
   const manager = await signIn(browser, fairlead.address, 'Maren Oduya');
@@ -118,4 +119,14 @@ test('a margin and whom listeners are drawn from are kept with the draft, and wh
   await manager.getByRole('link', { name: 'Edit the draft' }).click();
   await expect(manager.getByLabel('Share of answers above guessing, below')).toHaveValue('30');
   await expect(manager.getByLabel('Heard')).toHaveValue('40');
+  await manager.getByRole('link', { name: 'Cancel' }).click();
+
+  // A study that is to show that what is heard is small, sealed with its margin.
+  await sealStudy(manager);
+  const study: Study = await (
+    await manager.request.get(manager.url().replace('/organisations/', '/api/organisations/'))
+  ).json();
+  expect(study).toMatchObject({ state: 'sealed', draft: { marginPercent: 30 }, sealed: { version: 1 } });
+  await expect(manager.getByText('30 %, shown by a one-sided 95 % limit')).toBeVisible();
+  await expect(manager.getByText('counted as wrong, as right against the margin')).toBeVisible();
 });

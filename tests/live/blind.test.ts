@@ -46,6 +46,10 @@ async function run({ study: change, choices }: Asked, { codeKey, drawSecret }: S
       '/api/publications',
       '/p',
       '/sitemap.xml',
+      `/registry/${people.organisationId}`,
+      `/api/registry/${people.organisationId}`,
+      `/api/registry/${people.organisationId}/registry-head.json`,
+      `/api/registry/${people.organisationId}/entries/0/inclusion.json`,
     ]) {
       const reply = await study.manager.get(path);
       manager.push(`${reply.status} ${reply.headers['content-length']} ${reply.text}`);

@@ -61,4 +61,22 @@ describe('the demo', () => {
     await loadDemo(server.deps);
     expect(await server.deps.db.query('select count(*) as entries from record_entries')).toEqual(before);
   });
+
+  it('is made anew where its making was cut short, and what it had published is withdrawn [D2]', async () => {
+    const { db } = server.deps;
+    await db.query("update studies set title = 'Study cut short' where title = 'Study Heron'");
+    await loadDemo(server.deps);
+    const demos = await db.manager.findBy(Organisation, { demo: true });
+    expect(demos).toHaveLength(1);
+    const published = await db.query(
+      'select organisation_id, withdrawn_reason from publications order by published_at',
+    );
+    expect(published).toEqual([
+      {
+        organisation_id: expect.not.stringMatching(demos[0]?.id ?? ''),
+        withdrawn_reason: expect.stringContaining('cut short'),
+      },
+      { organisation_id: demos[0]?.id, withdrawn_reason: null },
+    ]);
+  }, 60_000);
 });

@@ -6,7 +6,7 @@ import type { Entry } from '#shared/ledger/chain.ts';
 import { nextEntry } from '#shared/ledger/chain.ts';
 import type { CheckId } from '#shared/ledger/check-names.ts';
 import { fileDigest, utf8ToBytes } from '#shared/ledger/digest.ts';
-import { bundleSource, publishedEntry, signedHeads, signingKey, stampedSource } from './bundle.ts';
+import { bundleSource, inclusionIn, publishedEntry, signedHeads, signingKey, stampedSource } from './bundle.ts';
 import { chainedAgain, closedStudy } from './closed-study.ts';
 
 // Ways to bend a published bundle, each with the line at which it must fail and what that line says. One table, for the
@@ -122,6 +122,20 @@ const inHeads = (change: (heads: Heads) => void) => (whole: Whole) => {
   const heads = JSON.parse(textOf(whole.files.get(fileNames.heads))) as Heads;
   change(heads);
   return put({ [fileNames.heads]: canonical(heads) })(whole);
+};
+
+type Registry = {
+  leaf: { digest: string; sealedAt: string };
+  index: number;
+  hashes: string[];
+  head: { root: string; size: number };
+};
+
+/** registry.json changed. */
+const inRegistry = (change: (file: Registry) => void) => (whole: Whole) => {
+  const file = JSON.parse(textOf(whole.files.get('registry.json'))) as Registry;
+  change(file);
+  return put({ 'registry.json': canonical(file) })(whole);
 };
 
 const flipped = (hex: string) => `${hex.slice(0, -1)}${hex.endsWith('0') ? '1' : '0'}`;
@@ -875,6 +889,72 @@ export const bentBundles: readonly Bent[] = [
     line: 'tables',
     says: /result\.json/,
     bend: edit('result.json', (text) => text.replace('"isSignificant":false', '"isSignificant":true')),
+  },
+
+  // Registry
+  {
+    name: 'an entry of the registry for another digest',
+    line: 'registry',
+    says: /another protocol/,
+    bend: inRegistry((file) => {
+      file.leaf.digest = '0'.repeat(64);
+    }),
+  },
+  {
+    name: 'another time of sealing in the registry',
+    line: 'registry',
+    says: /another time of sealing/,
+    bend: inRegistry((file) => {
+      file.leaf.sealedAt = '2020-01-01T00:00:00.000Z';
+    }),
+  },
+  {
+    name: 'another place in the registry',
+    line: 'registry',
+    says: /no proof leads/,
+    bend: inRegistry((file) => {
+      file.index = 0;
+    }),
+  },
+  {
+    name: 'a hash of the registry’s proof changed',
+    line: 'registry',
+    says: /no proof leads/,
+    bend: inRegistry((file) => {
+      file.hashes[0] = flipped(first(file.hashes));
+    }),
+  },
+  {
+    name: 'another root of the registry',
+    line: 'registry',
+    says: /no proof leads|signature does not match/,
+    bend: inRegistry(({ head }) => {
+      head.root = flipped(head.root);
+    }),
+  },
+  {
+    name: 'a larger registry than was signed',
+    line: 'registry',
+    says: /no proof leads|signature does not match/,
+    bend: inRegistry(({ head }) => {
+      head.size = 4;
+    }),
+  },
+  {
+    name: 'a registry’s head signed by a key of nobody',
+    line: 'registry',
+    says: /does not name as its own|signature does not match/,
+    bend: (whole) => {
+      const { record } = readStudy(whole.files);
+      return put({ 'registry.json': canonical(inclusionIn(record, signingKey(first(record).at, 9))) })(whole);
+    },
+  },
+  {
+    name: 'no proof of the registry',
+    line: 'registry',
+    says: /no proof that the protocol/,
+    outcome: 'not checkable',
+    bend: put({ 'registry.json': 'null' }),
   },
 
   // Not bent, and yet not everything can be shown

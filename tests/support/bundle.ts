@@ -5,10 +5,21 @@ import { join } from 'node:path';
 import { getPublicKey, hashes, sign } from '@noble/ed25519';
 import { sha512 } from '@noble/hashes/sha2.js';
 import { type BundledHead, type BundleSource, bundleFiles } from '#shared/bundle/bundle-files.ts';
+import {
+  type InclusionFile,
+  inclusionFormat,
+  type RegistryHead,
+  type RegistryLeaf,
+  registryHeadFormat,
+  registryLeafFormat,
+} from '#shared/contracts/registry.ts';
 import { type Entry, nextEntry } from '#shared/ledger/chain.ts';
 import { bytesToHex, fileDigest, hexToBytes, utf8ToBytes } from '#shared/ledger/digest.ts';
+import { inclusionProof, treeRoot } from '#shared/ledger/merkle.ts';
 import { momentOf } from '#shared/ledger/moments.ts';
+import { sealedVersions } from '#shared/ledger/protocol-versions.ts';
 import { type ClosedStudy, publicationParts, publicationText } from '#shared/ledger/publication-parts.ts';
+import { registryHeadBytes, registryLeafHash } from '#shared/ledger/registry.ts';
 import {
   fingerprintOf,
   type HeadSignature,
@@ -57,16 +68,41 @@ export function publishedEntry(entries: readonly Entry[], document: string): Ent
   });
 }
 
+const organisation = '00000000-0000-4000-8000-00000000000f';
+
+/** The registry of an organisation that sealed three protocols, the study's own in the middle; its head signed. */
+export function inclusionIn(entries: readonly Entry[], { secret, key }: ReturnType<typeof signingKey>): InclusionFile {
+  const sealed = sealedVersions(entries).at(-1);
+  if (sealed === undefined) throw new Error('nothing is sealed');
+  const study = entries[0]?.study ?? '';
+  const leaf: RegistryLeaf = {
+    format: registryLeafFormat,
+    study,
+    version: sealed.version,
+    digest: sealed.digest,
+    sealedAt: sealed.at,
+  };
+  const other = { ...leaf, study: organisation };
+  const hashes = [other, leaf, { ...other, version: 2 }].map(registryLeafHash);
+  const at = key.createdAt;
+  const said = { organisation, size: hashes.length, root: treeRoot(hashes), at, key: key.fingerprint };
+  const signature = bytesToHex(sign(registryHeadBytes(said), secret));
+  const head: RegistryHead = { format: registryHeadFormat, ...said, publicKey: key.publicKey, signature };
+  return { format: inclusionFormat, organisation, leaf, index: 1, hashes: inclusionProof(hashes, 1), head };
+}
+
 /** A source of a bundle around a closed study, signed throughout; without tokens. */
 export function bundleSource(study: ClosedStudy, by = signingKey(study.entries[0]?.at ?? '')): BundleSource {
   const document = publicationText(publicationParts(study));
   const later = [publishedEntry(study.entries, document)];
   const heads = signedHeads([...study.entries, ...later], by).map((signature) => ({ signature, token: null }));
+  const registry = inclusionIn(study.entries, by);
   return {
     document,
     later,
     keys: [by.key],
     heads,
+    registry,
     guide: bundleText('GUIDE.txt'),
     recompute: bundleText('recompute.R'),
   };

@@ -190,8 +190,8 @@ function runSession(maker: StudyMaker, protocol: Protocol, session: number, list
   else made.do({ kind: 'abandon', reason: 'The amplifier failed.' });
 }
 
-/** What is sealed before anybody sits down: the protocol, and which code is which specimen. */
-export function seal(maker: StudyMaker, protocol: Protocol): RevealedKey['codeKey'] {
+/** What is sealed before anybody sits down: the protocol, perhaps amended once, and which code is which specimen. */
+export function seal(maker: StudyMaker, protocol: Protocol, earlier: Protocol | null): RevealedKey['codeKey'] {
   const rows = protocol.cables.flatMap(({ specimens }, index) =>
     specimens.map(({ id: specimen, serial }, n) => ({
       code: String(317 + index * 211 + n * 38),
@@ -201,7 +201,15 @@ export function seal(maker: StudyMaker, protocol: Protocol): RevealedKey['codeKe
     })),
   );
   const codeKey = { salt: hex('key salt', 32), rows };
-  maker.put('protocol-sealed', { protocolVersion: 1, digest: protocolDigest(protocol), sealedBy: people.manager });
+  const digest = protocolDigest(earlier ?? protocol);
+  maker.put('protocol-sealed', { protocolVersion: 1, digest, sealedBy: people.manager });
+  if (earlier !== null)
+    maker.put('protocol-amended', {
+      protocolVersion: 2,
+      digest: protocolDigest(protocol),
+      amendedBy: people.manager,
+      reason: 'The amplifier was sold.',
+    });
   maker.put('code-key-committed', {
     commitment: codeKeyCommitment(codeKey.salt, rows),
     specimens: rows.length,
@@ -216,6 +224,7 @@ export function close(
   protocol: Protocol,
   codeKey: RevealedKey['codeKey'],
   ending: { readonly complete: boolean; readonly reason: string },
+  earlier: Protocol | null,
 ): ClosedStudy {
   maker.put('study-closed', {
     by: people.manager,
@@ -236,19 +245,31 @@ export function close(
   const result = runRegistered(protocol, sessionsInRecord(maker.entries, method), key, maker.answers);
   maker.put('result-recorded', { analysis: protocol.analysis.name, result });
   return JSON.parse(
-    canonicalJson({ entries: maker.entries, protocol, answers: maker.answers } as unknown as Json),
+    canonicalJson({
+      entries: maker.entries,
+      protocol,
+      ...(earlier === null ? {} : { earlierProtocols: [earlier] }),
+      answers: maker.answers,
+    } as unknown as Json),
   ) as ClosedStudy;
 }
 
 export const sealedSecret = (session: number) =>
   drawSecretCommitment(hex(`draw salt ${session}`, 32), hex(`secret ${session}`, 32));
 
-/** @param listeners seats per session, 1 to 4. @param startsAt when it is sealed, in milliseconds since 1970 */
-export function closedStudy(listeners: number, methodId = 'abx', startsAt?: number): ClosedStudy {
+/**
+ * @param listeners seats per session, 1 to 4
+ * @param startsAt  when it is sealed, in milliseconds since 1970
+ * @param isAmended whether the protocol is sealed with another chain first, and amended before the codes are drawn
+ */
+export function closedStudy(listeners: number, methodId = 'abx', startsAt?: number, isAmended = false): ClosedStudy {
   const maker = new StudyMaker();
   if (startsAt !== undefined) maker.now = startsAt;
-  const protocol = protocolFor(maker.study, listeners, methodId);
-  const codeKey = seal(maker, protocol);
+  const first = protocolFor(maker.study, listeners, methodId);
+  const conduct = { ...first.conduct, chain: 'Player, another amplifier, loudspeakers' };
+  const protocol = isAmended ? { ...first, version: 2, salt: hex('second salt', 32), conduct } : first;
+  const earlier = isAmended ? first : null;
+  const codeKey = seal(maker, protocol, earlier);
   for (const session of [1, 2]) runSession(maker, protocol, session, listeners);
-  return close(maker, protocol, codeKey, { complete: false, reason: 'The amplifier failed.' });
+  return close(maker, protocol, codeKey, { complete: false, reason: 'The amplifier failed.' }, earlier);
 }

@@ -10,7 +10,7 @@ export function longStudy(sessions: number, trials: number, startsAt: number, me
   const maker = new StudyMaker();
   maker.now = startsAt;
   const protocol = protocolFor(maker.study, 1, methodId, { sessions, trials, spares: 0 });
-  const codeKey = seal(maker, protocol);
+  const codeKey = seal(maker, protocol, null);
   const choices = methodOf(methodId)
     .options({})
     .map(({ value }) => value);
@@ -28,5 +28,5 @@ export function longStudy(sessions: number, trials: number, startsAt: number, me
     }
     made.do({ kind: 'finish' });
   }
-  return close(maker, protocol, codeKey, { complete: true, reason: '' });
+  return close(maker, protocol, codeKey, { complete: true, reason: '' }, null);
 }

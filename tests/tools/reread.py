@@ -62,7 +62,8 @@ def payloads(kind):
     return [entry['payload'] for entry in entries if entry['kind'] == kind]
 
 
-agree('protocol', digest('fairlead/protocol/1', canon(study['protocol'])), entries[0]['payload']['digest'])
+sealed = [entry for entry in entries if entry['kind'] in ('protocol-sealed', 'protocol-amended')][-1]
+agree('protocol', digest('fairlead/protocol/1', canon(study['protocol'])), sealed['payload']['digest'])
 published = payloads('study-published')[0]
 agree('document', hashlib.sha256(archive.read('study.json')).hexdigest(), published['digest'])
 

@@ -1,10 +1,14 @@
 import { type ChainFault, chainFault, type Entry } from '#shared/ledger/chain.ts';
+import { fileDigest, utf8ToBytes } from '#shared/ledger/digest.ts';
+import { sealedVersions } from '#shared/ledger/protocol-versions.ts';
+
 import { type HeadSignature, statementBytes, statementDigest } from '#shared/ledger/signed-head.ts';
 import { signaturesFault } from '#shared/ledger/signed-record.ts';
 import { readTimestampReply } from '#shared/ledger/timestamp-token.ts';
 import { protocolDigest } from '#shared/protocol/protocol.ts';
 import { answerLeaf } from '#shared/session/answer-leaf.ts';
 import type { PayloadOf } from '#shared/session/events.ts';
+import type { StudyPayloadOf } from '#shared/session/study-events.ts';
 import type { Tx } from '../../db/transaction.ts';
 import { signaturesOf } from '../../ledger/head-signatures.ts';
 import { readRecord } from '../../ledger/ledger.ts';
@@ -12,6 +16,7 @@ import { keysOf, publicKeyView } from '../../ledger/signing-keys.ts';
 import { tokenSignatureFault } from '../../timestamps/openssl.ts';
 import type { TimestampToken } from '../../timestamps/timestamp-token.entity.ts';
 import { tokensOf } from '../../timestamps/tokens.store.ts';
+import { documentOf } from '../publications/publications.store.ts';
 import type { Answer } from '../sessions/answer.entity.ts';
 import { answersOfSessions, sessionsOfStudy } from '../sessions/sessions.store.ts';
 import { protocolOf } from '../studies/studies.service.ts';
@@ -36,8 +41,8 @@ function studyFault(study: Study, entries: readonly Entry[]): StudyAudit['fault'
     return { sequence: head.sequence, why: `the record should end with entry ${study.headSequence}` };
   if (head.digest !== study.headDigest)
     return { sequence: head.sequence, why: 'its digest is not the head that the study keeps' };
-  const sealing = entries.find(({ kind }) => kind === 'protocol-sealed');
-  if (sealing !== undefined && sealing.payload.digest !== protocolDigest(protocolOf(study)))
+  const sealing = sealedVersions(entries).at(-1);
+  if (sealing !== undefined && sealing.digest !== protocolDigest(protocolOf(study)))
     return { sequence: sealing.sequence, why: 'the protocol is not the one that was sealed' };
   return null;
 }
@@ -60,6 +65,18 @@ function answersFault(entries: readonly Entry[], answers: readonly Answer[]): Ch
     }
   }
   return null;
+}
+
+/** What was published is still the document whose digest is on the record. */
+async function publicationFault(tx: Tx, entries: readonly Entry[]): Promise<ChainFault | null> {
+  const published = entries.find(({ kind }) => kind === 'study-published');
+  if (published === undefined) return null;
+  const { id, digest } = published.payload as unknown as StudyPayloadOf<'study-published'>;
+  const document = await documentOf(tx, id, digest);
+  if (document === null) return { sequence: published.sequence, why: 'the document that was published is gone' };
+  return fileDigest(utf8ToBytes(document)) === digest
+    ? null
+    : { sequence: published.sequence, why: 'the document is not the one that was published' };
 }
 
 async function tokenFault(token: TimestampToken, signature: HeadSignature | undefined): Promise<string | null> {
@@ -88,7 +105,7 @@ async function tokensFault(
   return null;
 }
 
-/** Verifies one study's record in the database: chain, signatures, tokens, locked answers, protocol and head. */
+/** Verifies one study's record in the database: chain, signatures, tokens, locked answers, protocol, publication and head. */
 export async function auditStudy(tx: Tx, studyId: string): Promise<StudyAudit> {
   const study = await studyById(tx, studyId);
   const entries = await readRecord(tx, studyId);
@@ -105,6 +122,7 @@ export async function auditStudy(tx: Tx, studyId: string): Promise<StudyAudit> {
     studyFault(study, entries) ??
     signaturesFault(entries, signatures, keys) ??
     answersFault(entries, answers) ??
+    (await publicationFault(tx, entries)) ??
     (await tokensFault(tokens, signatures));
   return { title: study.title, entries: entries.length, signatures: signatures.length, tokens: tokens.length, fault };
 }

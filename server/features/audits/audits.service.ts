@@ -1,7 +1,12 @@
 import type { AuditFault, AuditOutcome } from '#shared/contracts/audits.ts';
-import { withTransaction } from '../../db/transaction.ts';
+import { type Tx, withTransaction } from '../../db/transaction.ts';
 import type { Deps } from '../../deps.ts';
+import { auditFaultMail } from '../../mail/mails.ts';
+import { postMail } from '../../mail/outbox.ts';
+import { pageAddresses } from '../../mail/page-addresses.ts';
+import { membersOf } from '../users/users.store.ts';
 import type { Audit } from './audit.entity.ts';
+import { registryFault } from './audit-registry.ts';
 import { auditStudy, type StudyAudit } from './audit-study.ts';
 import * as store from './audits.store.ts';
 
@@ -9,7 +14,17 @@ const dayMs = 24 * 60 * 60 * 1000;
 const keepMs = 90 * dayMs;
 
 /** What makes the database refuse to change a record; without one of them it would not. */
-export const recordTriggers = ['record_entries', 'head_signatures', 'timestamp_tokens', 'answers', 'signing_keys']
+export const recordTriggers = [
+  'record_entries',
+  'head_signatures',
+  'timestamp_tokens',
+  'answers',
+  'signing_keys',
+  'registry_leaves',
+  'registry_heads',
+  'protocol_versions',
+  'publications',
+]
   .flatMap((table) => [`${table}_no_update`, `${table}_no_delete`])
   .sort();
 
@@ -51,6 +66,9 @@ async function auditOrganisation(
     sum.tokens += tokens;
     if (fault !== null) faults.push({ studyId, title, ...fault });
   }
+  const broken = faults.flatMap(({ studyId }) => studyId ?? []);
+  const why = await deps.db.transaction('REPEATABLE READ', (tx) => registryFault(tx, organisationId, broken));
+  if (why !== null) faults.push({ studyId: null, title: 'The registry', sequence: null, why });
   return { organisationId, ...sum, faults };
 }
 
@@ -59,6 +77,20 @@ export async function* auditAll(deps: AuditDeps): AsyncGenerator<OrganisationAud
   const shared = await databaseFaults(deps);
   const ids = await withTransaction(deps.db, (tx) => store.organisationIds(tx));
   for (const organisationId of ids) yield auditOrganisation(deps, organisationId, shared);
+}
+
+const newFaults = (faults: readonly AuditFault[], before: readonly AuditFault[]) =>
+  faults.filter(
+    ({ studyId, sequence, why }) =>
+      !before.some((known) => known.studyId === studyId && known.sequence === sequence && known.why === why),
+  );
+
+/** Once for each finding: an audit that fails must not wait until somebody looks. */
+async function tellOwners(tx: Tx, deps: Deps, organisationId: string, faults: readonly AuditFault[]): Promise<void> {
+  if (faults.length === 0) return;
+  const mail = auditFaultMail(faults, pageAddresses.proof(deps.config, organisationId));
+  for (const { role, user } of await membersOf(tx, organisationId))
+    if (role === 'owner') await postMail(tx, deps, { organisationId, recipient: user.email }, mail);
 }
 
 /** Audits all records where the last audit is a day old, and keeps what it came to for the owners. */
@@ -72,7 +104,11 @@ export async function auditWhenDue(deps: Deps): Promise<void> {
     for (const { studyId, sequence, why } of faults)
       log.error({ organisation: organisationId, study: studyId, sequence, why }, 'a record does not hold');
     log.info({ organisation: organisationId, ...sums, faults: faults.length }, 'records audited');
-    await withTransaction(db, (tx) => store.insertAudit(tx, { ...audit, faults: [...faults], at }));
+    await withTransaction(db, async (tx) => {
+      const before = await store.latestAudit(tx, organisationId);
+      await store.insertAudit(tx, { ...audit, faults: [...faults], at });
+      await tellOwners(tx, deps, organisationId, newFaults(faults, before?.faults ?? []));
+    });
   }
   await withTransaction(db, (tx) => store.deleteAuditsBefore(tx, new Date(at.getTime() - keepMs)));
 }

@@ -37,12 +37,13 @@ function specimensOf(study: Study): SpecimenToCode[] {
 }
 
 async function statusOf(tx: Tx, study: Study, who: Asker): Promise<CodesStatus> {
-  const entries = await readKinds(tx, study.id, ['code-key-committed', 'code-key-opened']);
+  const entries = await readKinds(tx, study.id, ['code-key-committed', 'code-key-opened', 'code-key-voided']);
   const openings = entries
     .filter((entry) => entry.kind === 'code-key-opened')
     .map((entry) => ({ at: entry.at, ...studyEvents['code-key-opened'].parse(entry.payload) }));
   const names = await namesOf(tx, [study.codeHolderId, ...openings.map(({ by }) => by)]);
-  const committed = entries.find((entry) => entry.kind === 'code-key-committed');
+  const last = entries.findLast(({ kind }) => kind === 'code-key-committed' || kind === 'code-key-voided');
+  const committed = last?.kind === 'code-key-committed' ? last : undefined;
   return {
     studyId: study.id,
     title: study.title,
@@ -52,6 +53,7 @@ async function statusOf(tx: Tx, study: Study, who: Asker): Promise<CodesStatus> 
     codeHolder: names.get(study.codeHolderId) ?? 'unknown',
     youHoldCodes: study.codeHolderId === who.userId,
     commitment: committed === undefined ? null : String(committed.payload.commitment),
+    voidedAt: last?.kind === 'code-key-voided' ? last.at : null,
     openings: openings.map(({ at, by, purpose }) => ({ at, by: names.get(by) ?? 'unknown', purpose })),
   };
 }

@@ -8,6 +8,7 @@ import { signaturesOf } from '../../ledger/head-signatures.ts';
 import { readRecord } from '../../ledger/ledger.ts';
 import { keysOf, publicKeyView } from '../../ledger/signing-keys.ts';
 import { tokensOf } from '../../timestamps/tokens.store.ts';
+import { inclusionOfStudy } from '../registry/registry.service.ts';
 import type { Publication } from './publication.entity.ts';
 import * as store from './publications.store.ts';
 
@@ -19,7 +20,12 @@ const recompute = words('recompute.R');
 const mostKept = 20;
 const kept = new Map<string, Uint8Array>();
 
-async function madeOf(tx: Tx, row: Publication, entries: Awaited<ReturnType<typeof readRecord>>): Promise<Uint8Array> {
+type Growing = {
+  readonly entries: Awaited<ReturnType<typeof readRecord>>;
+  readonly registry: Awaited<ReturnType<typeof inclusionOfStudy>>;
+};
+
+async function madeOf(tx: Tx, row: Publication, { entries, registry }: Growing): Promise<Uint8Array> {
   const document = await store.documentOf(tx, row.id, row.digest);
   if (document === null) throw new Error(`publication ${row.id} has no document`);
   const published = entries.findIndex(({ kind, payload }) => kind === 'study-published' && payload.id === row.id);
@@ -40,7 +46,7 @@ async function madeOf(tx: Tx, row: Publication, entries: Awaited<ReturnType<type
     };
   });
   const keys = (await keysOf(tx, row.organisationId)).map(publicKeyView);
-  return writeZip(bundleFiles({ document, later: entries.slice(published), keys, heads, guide, recompute }));
+  return writeZip(bundleFiles({ document, later: entries.slice(published), keys, heads, registry, guide, recompute }));
 }
 
 /**
@@ -53,10 +59,13 @@ export function getBundle({ db }: Pick<Deps, 'db'>, id: string): Promise<Uint8Ar
     const row = await store.findPublication(tx, id);
     if (row === null) throw new Problem('not-found', 'Nothing is published at this address.');
     const entries = await readRecord(tx, row.studyId);
-    const state = `${row.digest} ${entries.length} ${await store.countTokens(tx, row.studyId)} ${(await keysOf(tx, row.organisationId)).map(({ fingerprint, retiredAt }) => `${fingerprint}${retiredAt?.toISOString() ?? ''}`).join()}`;
+    const registry = await inclusionOfStudy(tx, row.organisationId, row.studyId);
+    const keys = (await keysOf(tx, row.organisationId)).map(publicKeyView);
+    const tokens = await store.countTokens(tx, row.studyId);
+    const state = JSON.stringify([row.digest, entries.length, tokens, registry?.head.root ?? null, keys]);
     const known = kept.get(state);
     if (known !== undefined) return known;
-    const made = await madeOf(tx, row, entries);
+    const made = await madeOf(tx, row, { entries, registry });
     if (kept.size >= mostKept) kept.delete(kept.keys().next().value ?? '');
     kept.set(state, made);
     return made;

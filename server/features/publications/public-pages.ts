@@ -1,12 +1,15 @@
 import { Router } from 'express';
 import { publicationsApi } from '#shared/contracts/publications.ts';
+import { registryApi, registryPath } from '#shared/contracts/registry.ts';
 import { Problem } from '#shared/problem.ts';
 import type { Deps } from '../../deps.ts';
 import { limit } from '../../http/rate-limit.ts';
+import { listRegistry, publicRegistries } from '../registry/registry.service.ts';
 import { getBundle } from './bundle.service.ts';
 import { html, jsonScript } from './page/html.ts';
 import { publicationContent } from './page/publication-page.ts';
 import { publicationsContent } from './page/publications-page.ts';
+import { registryContent } from './page/registry-page.ts';
 import { shellPage } from './page/shell.ts';
 import { structuredData } from './page/structured-data.ts';
 import { getDocument, getPublication, listPublications, publicAddresses } from './publications.service.ts';
@@ -31,9 +34,11 @@ export function publicPages(deps: Deps): Router {
   const router = Router();
 
   router.get('/robots.txt', (_request, response) => {
-    const rules = ['User-agent: *', 'Allow: /p', 'Allow: /api/publications', 'Allow: /assets'];
+    const open = ['/p', '/registry', '/api/publications', '/api/registry', '/assets'].map((path) => `Allow: ${path}`);
     const closed = ['/api', '/organisations', '/listen', '/seat'].map((path) => `Disallow: ${path}`);
-    response.type('text/plain').send(`${[...rules, ...closed, '', `Sitemap: ${publicUrl}/sitemap.xml`].join('\n')}\n`);
+    response
+      .type('text/plain')
+      .send(`${['User-agent: *', ...open, ...closed, '', `Sitemap: ${publicUrl}/sitemap.xml`].join('\n')}\n`);
   });
 
   router.get('/sitemap.xml', async (_request, response) => {
@@ -42,10 +47,13 @@ export function publicPages(deps: Deps): Router {
       ({ id, changedAt }) =>
         `<url><loc>${xml(publicUrl + publicPath(id))}</loc><lastmod>${changedAt.toISOString()}</lastmod></url>`,
     );
+    const registries = (await publicRegistries(deps)).map(
+      (id) => `<url><loc>${xml(publicUrl + registryPath(id))}</loc></url>`,
+    );
     response
       .type('application/xml')
       .send(
-        `<?xml version="1.0" encoding="UTF-8"?>\n<urlset xmlns="http://www.sitemaps.org/schemas/sitemap/0.9"><url><loc>${xml(publicUrl)}/p</loc></url>${urls.join('')}</urlset>\n`,
+        `<?xml version="1.0" encoding="UTF-8"?>\n<urlset xmlns="http://www.sitemaps.org/schemas/sitemap/0.9"><url><loc>${xml(publicUrl)}/p</loc></url>${urls.join('')}${registries.join('')}</urlset>\n`,
       );
   });
 
@@ -83,6 +91,27 @@ export function publicPages(deps: Deps): Router {
       .set('cache-control', 'no-cache')
       .type('html')
       .send(shellPage(clientDir, head, publicationContent(publication)));
+  });
+
+  router.get(registryPath(':organisationId'), async (request, response, next) => {
+    const { list } = registryApi;
+    const organisationId = list.params?.safeParse(request.params).data?.organisationId ?? null;
+    const query = list.query?.safeParse(request.query).data ?? { q: '', page: 1, state: 'any' as const };
+    const registry = organisationId === null ? null : await found(listRegistry(deps, organisationId, query));
+    if (organisationId === null || registry === null) {
+      response.status(404);
+      return next();
+    }
+    const head = {
+      title: `Sealed protocols of ${registry.organisation} · Fairlead`,
+      description: `Every listening test that ${registry.organisation} has sealed, whatever became of it: a log that can only grow.`,
+      canonical: publicUrl + registryPath(organisationId),
+      data: null,
+    };
+    response
+      .set('cache-control', 'no-cache')
+      .type('html')
+      .send(shellPage(clientDir, head, registryContent(organisationId, registry)));
   });
 
   router.get(bundlePath(':id'), limit({ attempts: 120, windowMs: 600_000 }), async (request, response) => {

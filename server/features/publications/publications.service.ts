@@ -6,6 +6,7 @@ import {
 } from '#shared/contracts/publications.ts';
 import type { Report } from '#shared/contracts/reports.ts';
 import { fileDigest, utf8ToBytes } from '#shared/ledger/digest.ts';
+import type { HeadProofs } from '#shared/ledger/head-proofs.ts';
 import { publicationParts, publicationText, readPublication } from '#shared/ledger/publication-parts.ts';
 import { StudyReading } from '#shared/ledger/study-reading.ts';
 import { Problem } from '#shared/problem.ts';
@@ -15,7 +16,7 @@ import type { Deps, Random } from '../../deps.ts';
 import { append, type NewEntry } from '../../ledger/ledger.ts';
 import { organisationName } from '../organisations/organisations.store.ts';
 import { closedRecord, reportOf } from '../reports/reports.service.ts';
-import { signedHeadsOf } from '../signed-heads/signed-heads.service.ts';
+import { headProofsOf, signedHeadsOf } from '../signed-heads/signed-heads.service.ts';
 import { lockedStudy, studyOrProblem } from '../studies/studies.service.ts';
 import { updateStudy } from '../studies/studies.store.ts';
 import type { Study } from '../studies/study.entity.ts';
@@ -175,6 +176,7 @@ function readDocument(digest: string, document: string): Read {
     report: reportOf({
       study: { id: protocol.study, title: protocol.title },
       protocol,
+      earlierProtocols: study.earlierProtocols(),
       entries: study.entries(),
       answers: study.answers(),
       rooms: new Map(),
@@ -198,6 +200,15 @@ export function getPublication({ db, config }: Deps, id: string): Promise<Public
     const read = kept.get(row.digest) ?? readDocument(row.digest, (await store.documentOf(tx, id, row.digest)) ?? '');
     const heads = await signedHeadsOf(tx, row.studyId);
     return publicationView({ row, publicUrl: config.publicUrl, ...read, heads });
+  });
+}
+
+/** Keys, signatures and tokens, for anybody. Not in the frozen document: the last ones come after it. @throws Problem `not-found` */
+export function publishedHeadProofs({ db }: Deps, id: string): Promise<HeadProofs> {
+  return withTransaction(db, async (tx) => {
+    const row = await store.findPublication(tx, id);
+    if (row === null) throw nothingPublished();
+    return headProofsOf(tx, { id: row.studyId, organisationId: row.organisationId });
   });
 }
 

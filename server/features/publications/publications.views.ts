@@ -4,6 +4,7 @@ import {
   type Publication as PublicationReply,
   type PublicationRow,
 } from '#shared/contracts/publications.ts';
+import { registryPath } from '#shared/contracts/registry.ts';
 import type { Report } from '#shared/contracts/reports.ts';
 import type { SignedHead } from '#shared/contracts/signed-heads.ts';
 import { equationOfP } from '#shared/findings/format-probability.ts';
@@ -71,6 +72,7 @@ export function publicationView({ row, publicUrl, report, declared, heads }: Pub
     statements: { paid, supplied, ties },
     confirmations: declared.confirmations.map((name) => confirmations[name]),
     file: { digest, bytes, path: filePath(id, digest) },
+    registry: registryPath(row.organisationId),
     bundle: bundlePath(id),
     report: { ...report, record: { ...report.record, heads: [...heads] } },
   };

@@ -15,7 +15,7 @@ import type { Deps } from '../../deps.ts';
 import { readRecord } from '../../ledger/ledger.ts';
 import { answersOfSessions, sessionsOfStudy } from '../sessions/sessions.store.ts';
 import { signedHeadsOf } from '../signed-heads/signed-heads.service.ts';
-import { protocolOf, studyOrProblem } from '../studies/studies.service.ts';
+import { protocolOf, studyOrProblem, versionsOf } from '../studies/studies.service.ts';
 import { listStudies } from '../studies/studies.store.ts';
 import type { Study } from '../studies/study.entity.ts';
 import { type ReportSource, reportView } from './reports.views.ts';
@@ -77,6 +77,7 @@ export async function closedRecord(tx: Tx, study: Study): Promise<ClosedRecord> 
   return {
     study,
     protocol: protocolOf(study),
+    earlierProtocols: (await versionsOf(tx, study.id)).map(({ protocol }) => protocol).slice(0, -1),
     entries: await readRecord(tx, study.id),
     answers: rows.map(({ sessionId, trial, seat, choice, confidence, salt }) => ({
       session: sessionId,

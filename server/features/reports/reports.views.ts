@@ -2,10 +2,12 @@ import type { Report } from '#shared/contracts/reports.ts';
 import type { SignedHead } from '#shared/contracts/signed-heads.ts';
 import type { Finding } from '#shared/findings/finding.ts';
 import type { Entry } from '#shared/ledger/chain.ts';
+import { sealedVersions } from '#shared/ledger/protocol-versions.ts';
 import type { Check } from '#shared/ledger/verify.ts';
 import { methodOf, type RegisteredResult } from '#shared/methods/methods.ts';
 import { analysisFacts } from '#shared/protocol/analysis-facts.ts';
 import type { Protocol } from '#shared/protocol/protocol.ts';
+import { protocolDifferences } from '#shared/protocol/protocol-differences.ts';
 import type { AnswerContent } from '#shared/session/answer-leaf.ts';
 import type { BlindingRung } from '#shared/session/blinding-rung.ts';
 import { countedTrials, revealedDraw } from '#shared/session/counted-trials.ts';
@@ -19,6 +21,7 @@ import type { StudyPayloadOf } from '#shared/session/study-events.ts';
 export type ReportSource = {
   readonly study: { readonly id: string; readonly title: string };
   readonly protocol: Protocol;
+  readonly earlierProtocols?: readonly Protocol[];
   readonly entries: readonly Entry[];
   readonly answers: readonly AnswerContent[];
   readonly states: readonly SessionState[];
@@ -144,6 +147,16 @@ function factsOf({ design, conduct, analysis, cables, method }: Protocol): Repor
   ];
 }
 
+/** Every version of the protocol; people stand in it by their random ids. */
+function versionsOf({ entries, protocol, earlierProtocols = [] }: ReportSource): Report['protocol']['versions'] {
+  const protocols = [...earlierProtocols, protocol];
+  return sealedVersions(entries).map(({ version, at, digest, reason }, index) => {
+    const [before, after] = [protocols[index - 1], protocols[index]];
+    const changes = before === undefined || after === undefined ? [] : protocolDifferences(before, after, (id) => id);
+    return { version, sealedAt: at, digest, reason, changes };
+  });
+}
+
 /** How level was handled is among the finding's own lines. */
 function conditionsOf({ protocol: { conduct }, states, rung }: ReportSource): Report['conditions'] {
   const long = states.flatMap(({ ended }) => ended).reduce((sum, { longChanges }) => sum + longChanges, 0);
@@ -159,7 +172,7 @@ export function reportView(source: ReportSource): Report {
   const { study, protocol, entries, states, answers, result, finding, checks, rung, closing, heads } = source;
   const method = methodOf(protocol.method);
   const key = revealedKey.parse(entries.find(({ kind }) => kind === 'key-revealed')?.payload);
-  const sealing = entries.find(({ kind }) => kind === 'protocol-sealed');
+  const sealing = sealedVersions(entries).at(-1);
   const closedAt = entries.find(({ kind }) => kind === 'study-closed')?.at;
   const head = entries.at(-1);
   if (sealing === undefined || closedAt === undefined || head === undefined)
@@ -188,7 +201,12 @@ export function reportView(source: ReportSource): Report {
         session: payload.session === null ? null : Number(payload.session),
         text: String(payload.text),
       })),
-    protocol: { digest: String(sealing.payload.digest), sealedAt: sealing.at, facts: factsOf(protocol) },
+    protocol: {
+      digest: sealing.digest,
+      sealedAt: sealing.at,
+      facts: factsOf(protocol),
+      versions: versionsOf(source),
+    },
     record: {
       entries: entries.length,
       head: head.digest,

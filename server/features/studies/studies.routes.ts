@@ -3,10 +3,13 @@ import { studiesApi } from '#shared/contracts/studies.ts';
 import type { Deps } from '../../deps.ts';
 import type { Access } from '../../http/access.ts';
 import { mount } from '../../http/mount.ts';
+import type { Sittings } from '../../live/sittings.ts';
+import { amendStudy, previewAmendment } from './amending.service.ts';
 import { closeStudy } from './closing.service.ts';
+import { sealStudy } from './sealing.service.ts';
 import * as studies from './studies.service.ts';
 
-export function studiesRoutes(router: Router, access: Access, deps: Deps): void {
+export function studiesRoutes(router: Router, access: Access, deps: Deps, sittings: Sittings): void {
   mount(router, access, studiesApi.list, async ({ query }, who) =>
     studies.listStudies(deps, who.organisationId, query),
   );
@@ -16,7 +19,11 @@ export function studiesRoutes(router: Router, access: Access, deps: Deps): void 
   );
   mount(router, access, studiesApi.update, async ({ params, body }) => studies.updateStudy(deps, params, body));
   mount(router, access, studiesApi.discard, async ({ params }) => studies.discardStudy(deps, params));
-  mount(router, access, studiesApi.seal, async ({ params }, who) => studies.sealStudy(deps, params, who.userId));
+  mount(router, access, studiesApi.seal, async ({ params }, who) => sealStudy(deps, params, who.userId));
+  mount(router, access, studiesApi.previewAmendment, async ({ params, body }) => previewAmendment(deps, params, body));
+  mount(router, access, studiesApi.amend, async ({ params, body }, who) =>
+    amendStudy(deps, sittings, params, who.userId, body),
+  );
   mount(router, access, studiesApi.deviate, async ({ params, body }) =>
     studies.recordDeviation(deps, params, body.text),
   );

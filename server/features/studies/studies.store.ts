@@ -1,6 +1,7 @@
 import { closedStates, type StudyDraft, type StudyListQuery } from '#shared/contracts/studies.ts';
 import { likePattern, pageOfRows, sortRows } from '../../db/paging.ts';
 import type { Tx } from '../../db/transaction.ts';
+import { ProtocolVersion } from './protocol-version.entity.ts';
 import { Study } from './study.entity.ts';
 
 export function listStudies(
@@ -72,6 +73,14 @@ export async function updateStudy(
   now: Date,
 ) {
   await tx.update(Study, { id }, { ...change, updatedAt: now });
+}
+
+export async function insertVersion(tx: Tx, version: ProtocolVersion) {
+  await tx.insert(ProtocolVersion, version);
+}
+
+export function versionsOfStudy(tx: Tx, studyId: string): Promise<ProtocolVersion[]> {
+  return tx.find(ProtocolVersion, { where: { studyId }, order: { version: 'ASC' } });
 }
 
 export async function deleteDraft(tx: Tx, id: string) {

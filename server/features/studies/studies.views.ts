@@ -1,7 +1,9 @@
 import type { SignedHead } from '#shared/contracts/signed-heads.ts';
 import type { Study as StudyReply, StudyRow } from '#shared/contracts/studies.ts';
 import type { Entry } from '#shared/ledger/chain.ts';
-import { studyEvents } from '#shared/session/study-events.ts';
+import type { SealedVersion } from '#shared/ledger/protocol-versions.ts';
+import type { Protocol } from '#shared/protocol/protocol.ts';
+import { protocolDifferences } from '#shared/protocol/protocol-differences.ts';
 import type { Session } from '../sessions/session.entity.ts';
 import type { Study } from './study.entity.ts';
 
@@ -51,32 +53,57 @@ export type StudyContext = {
   readonly sessions: readonly Session[];
   readonly names: ReadonlyMap<string, string>;
   readonly cableNames: readonly [string, string];
-  readonly sealing: Entry | null;
+  /** As the record says, and as they are kept: the first first. */
+  readonly versions: readonly SealedVersion[];
+  readonly protocols: readonly Protocol[];
   readonly deviations: readonly Entry[];
   readonly heads: readonly SignedHead[];
 };
 
+/** Whether the sealed protocol can still be amended, and why not. */
+export function amendingOf(study: Study, sessions: readonly Session[]): StudyReply['amending'] {
+  if (study.state === 'draft') return { allowed: false, why: 'The protocol is not sealed yet: edit the draft.' };
+  const opened = progressOf(study, sessions).sessionsOpened > 0;
+  if (study.state !== 'sealed' || opened)
+    return {
+      allowed: false,
+      why: 'A session has opened, so the protocol stays as it is. Whatever differs from it is recorded as a deviation.',
+    };
+  return { allowed: true, why: 'No session has opened yet.' };
+}
+
+function versionsView(
+  { versions, protocols, heads }: StudyContext,
+  nameOf: (id: string) => string,
+): StudyReply['versions'] {
+  return versions.map(({ version, digest, at, by, reason, sequence }, index) => {
+    const [before, after] = [protocols[index - 1], protocols[index]];
+    return {
+      version,
+      digest,
+      sealedAt: at,
+      sealedBy: nameOf(by),
+      signed: heads.find((head) => head.sequence === sequence) ?? null,
+      reason,
+      changes: before === undefined || after === undefined ? [] : protocolDifferences(before, after, nameOf),
+    };
+  });
+}
+
 /** A study as its manager sees it before closing. */
 export function studyView(study: Study, context: StudyContext): StudyReply {
-  const { sessions, names, cableNames, sealing, deviations, heads } = context;
+  const { sessions, names, cableNames, deviations } = context;
   const nameOf = (id: string) => names.get(id) ?? 'unknown';
-  const sealed = sealing === null ? null : studyEvents['protocol-sealed'].parse(sealing.payload);
+  const versions = versionsView(context, nameOf);
   return {
     ...shape(study),
     draft: study.draft,
     cableNames: [cableNames[0], cableNames[1]],
     manager: nameOf(study.managerId),
     codeHolder: nameOf(study.codeHolderId),
-    sealed:
-      sealed === null || sealing === null
-        ? null
-        : {
-            version: sealed.protocolVersion,
-            digest: sealed.digest,
-            sealedAt: sealing.at,
-            sealedBy: nameOf(sealed.sealedBy),
-            signed: heads.find(({ sequence }) => sequence === sealing.sequence) ?? null,
-          },
+    sealed: versions.at(-1) ?? null,
+    versions,
+    amending: amendingOf(study, sessions),
     codes: study.codesState,
     progress: progressOf(study, sessions),
     record: { entries: study.headSequence, head: study.headDigest },

@@ -24,11 +24,11 @@ export class Study {
   @Column({ type: 'uuid', name: 'code_holder_id' })
   codeHolderId: string;
 
-  /** What the manager typed, whole, by the contract's `studyDraft`. Never changed once sealed. */
+  /** What the manager typed, whole, by the contract's `studyDraft`. Once sealed only an amendment changes it. */
   @Column({ type: 'json' })
   draft: StudyDraft;
 
-  /** The canonical text of the sealed protocol; null while it is a draft. */
+  /** The canonical text of the protocol in force; null while it is a draft. */
   @Column({ type: 'mediumtext', nullable: true })
   protocol: string | null;
 

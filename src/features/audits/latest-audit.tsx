@@ -15,7 +15,7 @@ export function LatestAudit({ latest }: { latest: AuditOutcome | null }) {
         database refuses to change them.
       </p>
       {latest === null ? (
-        <p>No audit has run yet. The first runs a minute after the server’s start.</p>
+        <p>No audit has run yet. The first runs some minutes after the server’s start.</p>
       ) : (
         <Outcome latest={latest} />
       )}

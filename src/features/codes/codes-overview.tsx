@@ -1,4 +1,5 @@
 import type { CodesStatus } from '#shared/contracts/codes.ts';
+import { formatDateTime } from '../../lib/format.ts';
 import { Notice } from '../../ui/notice.tsx';
 import { CodesFacts } from './codes-facts.tsx';
 import { Duty } from './duty.tsx';
@@ -11,6 +12,12 @@ type CodesOverviewProps = { organisationId: string; status: CodesStatus; labelsT
 export function CodesOverview({ organisationId, status, labelsTo }: CodesOverviewProps) {
   return (
     <div className="flex flex-col gap-10">
+      {status.voidedAt === null ? null : (
+        <Notice tone="amber" title="The codes drawn before are void." className="max-w-3xl">
+          The protocol was amended {formatDateTime(status.voidedAt)}: specimens or code holder are others now. Take the
+          old sleeves off and destroy the old labels; codes are drawn anew.
+        </Notice>
+      )}
       {status.youHoldCodes ? (
         <>
           <HolderSteps organisationId={organisationId} status={status} labelsTo={labelsTo} />

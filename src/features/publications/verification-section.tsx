@@ -5,8 +5,8 @@ import { formatNumber } from '../../lib/format.ts';
 import { Button } from '../../ui/button.tsx';
 import { buttonLook } from '../../ui/button-look.ts';
 import { CopyButton } from '../../ui/copy-button.tsx';
+import { FileDrop } from '../../ui/file-drop.tsx';
 import { CheckList } from './check-list.tsx';
-import { FileDrop } from './file-drop.tsx';
 import { NotShown } from './not-shown.tsx';
 import { ReceiptCheck } from './receipt-check.tsx';
 import { useVerification } from './use-verification.ts';
@@ -20,7 +20,7 @@ type VerificationSectionProps = {
 
 /** The record, checked in the visitor's own browser from the downloaded file; and the file itself, to be checked elsewhere. */
 export function VerificationSection({ publication, verifyTo }: VerificationSectionProps) {
-  const { file, bundle } = publication;
+  const { file, bundle, registry } = publication;
   const { verification, checkPublished, checkFile, checkReceipts } = useVerification(bundle);
   const { phase, fileName, checks, names } = verification;
   const isRunning = phase === 'fetching' || phase === 'checking';
@@ -43,20 +43,20 @@ export function VerificationSection({ publication, verifyTo }: VerificationSecti
           </Button>
         </div>
       </div>
-      <WithoutUs file={file} bundle={bundle} verifyTo={verifyTo} onFile={checkFile}>
+      <WithoutUs file={file} bundle={bundle} registry={registry} verifyTo={verifyTo} onFile={checkFile}>
         <ReceiptCheck key={fileName} verification={verification} onText={checkReceipts} level={3} />
       </WithoutUs>
     </section>
   );
 }
 
-type WithoutUsProps = Pick<Publication, 'file' | 'bundle'> & {
+type WithoutUsProps = Pick<Publication, 'file' | 'bundle' | 'registry'> & {
   verifyTo: string;
   onFile: (file: File) => void;
   children: ReactNode;
 };
 
-function WithoutUs({ file, bundle, verifyTo, onFile, children }: WithoutUsProps) {
+function WithoutUs({ file, bundle, registry, verifyTo, onFile, children }: WithoutUsProps) {
   return (
     <div className="flex min-w-0 flex-col gap-8">
       <section aria-labelledby="without-us" className="flex flex-col gap-3 border-t-2 border-ink pt-4">
@@ -82,6 +82,7 @@ function WithoutUs({ file, bundle, verifyTo, onFile, children }: WithoutUsProps)
             The document alone, {formatNumber(Math.ceil(file.bytes / 1000))} kB
           </a>
         </div>
+        <Link to={registry}>Every protocol that this publisher has sealed</Link>
       </section>
       {children}
       <NotShown level={3} />

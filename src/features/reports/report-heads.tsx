@@ -3,6 +3,7 @@ import { gapWords, localTimeWords, type SignedHead } from '#shared/contracts/sig
 import { momentWords } from '#shared/ledger/moments.ts';
 import { readableFingerprint } from '#shared/ledger/readable-fingerprint.ts';
 import { formatDateTime } from '../../lib/format.ts';
+import { buttonLook } from '../../ui/button-look.ts';
 import { CopyButton } from '../../ui/copy-button.tsx';
 import { DataTable } from '../../ui/data-table.tsx';
 import { StatusWord } from '../../ui/status-word.tsx';
@@ -37,8 +38,13 @@ const columns = (keys: readonly string[]): Column<SignedHead>[] => [
   { key: 'token', header: 'Time-stamped', cell: ({ token }) => <Stamped token={token} /> },
 ];
 
+type ReportHeadsProps = Pick<Report, 'record'> & {
+  /** Where keys, signatures and tokens can be downloaded. */
+  proofs: string;
+};
+
 /** The moments at which the record's head was signed and time-stamped, and by which key. */
-export function ReportHeads({ record: { heads } }: Pick<Report, 'record'>) {
+export function ReportHeads({ record: { heads }, proofs }: ReportHeadsProps) {
   const keys = [...new Set(heads.map(({ key }) => key))];
   const isLocal = heads.some(({ token }) => token?.isLocal);
   return (
@@ -54,6 +60,13 @@ export function ReportHeads({ record: { heads } }: Pick<Report, 'record'>) {
         empty={<p className="text-soft">This record is from before heads were signed.</p>}
       />
       {isLocal ? <p className="max-w-3xl text-amber">{localTimeWords}</p> : null}
+      {heads.length === 0 ? null : (
+        <p className="print:hidden">
+          <a href={proofs} download="fairlead-signed-heads.json" className={buttonLook('plain', 'normal')}>
+            Download keys, signatures and tokens
+          </a>
+        </p>
+      )}
       {keys.map((key, index) => (
         <div key={key} className="flex flex-col gap-1.5">
           <p className="text-soft">Fingerprint of the key{keys.length > 1 ? ` ${index + 1}` : ''}, SHA-256</p>

@@ -21,10 +21,12 @@ type ReportViewProps = {
   back: { to: string; label: string };
   /** What can be done with the result, beside printing it. */
   actions?: ReactNode;
+  /** Where keys, signatures and tokens can be downloaded. */
+  proofs: string;
 };
 
 /** The finding first, then what it rests on, down to every answer. */
-export function ReportView({ report, back, actions }: ReportViewProps) {
+export function ReportView({ report, back, actions, proofs }: ReportViewProps) {
   const { result, cables } = report;
   const method = methodOf(result.method);
   const portrait = method.portray(result, cables);
@@ -55,7 +57,7 @@ export function ReportView({ report, back, actions }: ReportViewProps) {
       <ReportSessions sessions={report.sessions} cables={cables} method={method} />
       <ReportProtocol protocol={report.protocol} />
       <ReportRecord record={report.record} />
-      <ReportHeads record={report.record} />
+      <ReportHeads record={report.record} proofs={proofs} />
     </article>
   );
 }

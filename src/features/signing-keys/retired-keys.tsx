@@ -20,15 +20,15 @@ const columns: Column<SigningKey>[] = [
     header: 'In use',
     cell: ({ createdAt, retiredAt }) => (
       <>
-        {formatDateTime(createdAt)}
-        <span className="block">to {retiredAt === null ? 'now' : formatDateTime(retiredAt)}</span>
+        <span className="whitespace-nowrap">{formatDateTime(createdAt)}</span>
+        <span className="block whitespace-nowrap">to {retiredAt === null ? 'now' : formatDateTime(retiredAt)}</span>
       </>
     ),
   },
-  { key: 'heads', header: 'Heads signed', isFigure: true, cell: ({ heads }) => formatNumber(heads) },
+  { key: 'heads', header: 'Heads', isFigure: true, cell: ({ heads }) => formatNumber(heads) },
   {
     key: 'reason',
-    header: 'Why it was retired',
+    header: 'Reason',
     cell: ({ retiredReason }) => <span className="[overflow-wrap:anywhere]">{retiredReason}</span>,
   },
 ];

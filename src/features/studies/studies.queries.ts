@@ -68,6 +68,22 @@ export function useSealStudy(organisationId: string, id: string, onSealed: () =>
   });
 }
 
+export function usePreviewAmendment(organisationId: string, id: string) {
+  return useMutation({
+    mutationFn: (body: StudyDraft) => call(studiesApi.previewAmendment, { params: { organisationId, id }, body }),
+  });
+}
+
+export function useAmendStudy(organisationId: string, id: string) {
+  const client = useQueryClient();
+  return useMutation({
+    mutationFn: (body: { draft: StudyDraft; reason: string; amends: number }) =>
+      call(studiesApi.amend, { params: { organisationId, id }, body }),
+    // Sessions and codes follow the new version.
+    onSuccess: () => client.invalidateQueries(),
+  });
+}
+
 export function useDeviate(organisationId: string, id: string) {
   const onSuccess = useRefresh();
   return useMutation({

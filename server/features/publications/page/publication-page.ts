@@ -132,7 +132,28 @@ function incidents({ voids, missing, deviations }: Report): Html {
     )}`;
 }
 
-function signedHeads(heads: readonly SignedHead[]): Html | null {
+/** What each amendment changed; nothing where there was none. */
+function versions(all: Report['protocol']['versions']): Html | null {
+  if (all.length < 2) return null;
+  return html`<h3 class="text-lg">Its versions</h3>
+    <ol class="flex flex-col gap-6">${all.map(
+      ({ version, sealedAt, reason, changes }) =>
+        html`<li class="flex min-w-0 flex-col gap-2">
+          <p><strong>Version ${version}</strong>, sealed ${utc(sealedAt)}, before any session opened.${reason === null ? '' : ` ${reason}`}</p>
+          ${
+            changes.length === 0
+              ? null
+              : table(
+                  `What version ${version} changed`,
+                  ['Line', 'Before', 'After'],
+                  changes.map(({ label, before, after }) => [label, before || 'none', after || 'none']),
+                )
+          }
+        </li>`,
+    )}</ol>`;
+}
+
+function signedHeads(heads: readonly SignedHead[], id: string): Html | null {
   if (heads.length === 0) return null;
   const lines = heads.map(({ moment, session: number, sequence, at, token }) => {
     const which = `${momentWords[moment]}${number === null ? '' : `, session ${number}`}`;
@@ -146,10 +167,11 @@ function signedHeads(heads: readonly SignedHead[]): Html | null {
   return html`<h3 class="text-lg">Signed and time-stamped</h3>
     ${list(lines, '')}
     ${heads.some(({ token }) => token?.isLocal) ? html`<p class="max-w-3xl">${localTimeWords}</p>` : null}
+    <p><a href="/api/publications/${id}/signed-heads" download="fairlead-signed-heads.json">Download keys, signatures and tokens</a></p>
     ${facts(keys.map((key) => ({ label: 'Fingerprint of the key', value: html`<code>${readableFingerprint(key)}</code>` })))}`;
 }
 
-function verification({ file, report: { record, protocol } }: Publication): Html {
+function verification({ id, file, registry, report: { record, protocol } }: Publication): Html {
   return html`<p class="max-w-3xl">With JavaScript this page downloads the record and checks it in your browser, step by step. Without it, download the record and check it with the command “npm run verify”, or by hand as the guide “Check a result” says.</p>
     <p><a href="${file.path}" download>Download the record, ${Math.ceil(file.bytes / 1000)} kB</a></p>
     ${facts([
@@ -157,7 +179,8 @@ function verification({ file, report: { record, protocol } }: Publication): Html
       { label: `Head of the record, entry ${record.entries}`, value: html`<code>${record.head}</code>` },
       { label: `Protocol, sealed ${utc(protocol.sealedAt)}`, value: html`<code>${protocol.digest}</code>` },
     ])}
-    ${signedHeads(record.heads)}
+    <p><a href="${registry}">Every protocol that this publisher has sealed</a></p>
+    ${signedHeads(record.heads, id)}
     <h3 class="text-lg">What no software can show</h3>
     <p class="max-w-3xl">${notShown} Repeating the test is the cure.</p>`;
 }
@@ -185,7 +208,7 @@ export function publicationContent(publication: Publication): Html {
       ${section('Checks of the answers', checks(report))}
       ${section('Every session', html`<ol class="flex flex-col gap-8">${report.sessions.map(session)}</ol>`)}
       ${section('What did not go as planned', incidents(report))}
-      ${section('The sealed protocol', facts(report.protocol.facts))}
+      ${section('The sealed protocol', html`${facts(report.protocol.facts)}${versions(report.protocol.versions)}`)}
     </article>`,
   );
 }

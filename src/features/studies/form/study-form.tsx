@@ -1,7 +1,7 @@
 import { type ReactNode, useCallback, useRef } from 'react';
 import { useForm } from 'react-hook-form';
 import type { Cable } from '#shared/contracts/cables.ts';
-import type { Study, StudyDraft } from '#shared/contracts/studies.ts';
+import type { StudyDraft } from '#shared/contracts/studies.ts';
 import type { Member } from '#shared/contracts/users.ts';
 import { showProblem } from '../../../lib/show-problem.ts';
 import { Form } from '../../../ui/form.tsx';
@@ -17,19 +17,27 @@ import { RigFields } from './rig-fields.tsx';
 import type { StudyFormValues } from './study-form-values.ts';
 import { resolveStudy } from './study-resolver.ts';
 
-type StudyFormProps = {
+type StudyFormProps<Saved> = {
   values: StudyFormValues;
   cables: readonly Cable[];
   members: readonly Member[];
   isManager: (member: Member) => boolean;
-  save: (draft: StudyDraft) => Promise<Study>;
+  save: (draft: StudyDraft) => Promise<Saved>;
   /** Where to go once it is saved; nothing typed is lost until then. */
-  onSaved: (study: Study) => void;
+  onSaved: (saved: Saved) => void;
   renderActions: (isSaving: boolean) => ReactNode;
 };
 
 /** A study's plan and what it comes to, side by side. Pages say what saving means. */
-export function StudyForm({ values, cables, members, isManager, save, onSaved, renderActions }: StudyFormProps) {
+export function StudyForm<Saved>({
+  values,
+  cables,
+  members,
+  isManager,
+  save,
+  onSaved,
+  renderActions,
+}: StudyFormProps<Saved>) {
   const form = useForm<StudyFormValues, unknown, StudyDraft>({
     resolver: resolveStudy,
     defaultValues: values,

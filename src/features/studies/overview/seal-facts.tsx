@@ -1,3 +1,4 @@
+import { Link } from 'react-router-dom';
 import type { Study } from '#shared/contracts/studies.ts';
 import { formatDateTime } from '../../../lib/format.ts';
 import { CopyButton } from '../../../ui/copy-button.tsx';
@@ -5,7 +6,7 @@ import { type Fact, Facts } from '../../../ui/facts.tsx';
 import { SealSignature } from './seal-signature.tsx';
 
 /** Who sealed what and when, and where the record stands. */
-export function SealFacts({ study }: { study: Study }) {
+export function SealFacts({ study, registryTo }: { study: Study; registryTo: string }) {
   const { sealed, record, manager } = study;
   const facts: Fact[] = [{ label: 'Manager', value: manager, isWords: true }];
   if (sealed) {
@@ -21,6 +22,7 @@ export function SealFacts({ study }: { study: Study }) {
       <Facts title="Seal and record" facts={facts} />
       {sealed ? <Digest label="Digest of the protocol" value={sealed.digest} /> : null}
       {record.head ? <Digest label="Head of the record" value={record.head} /> : null}
+      {sealed ? <Link to={registryTo}>The public registry, as anybody sees it</Link> : null}
       {sealed?.signed ? <SealSignature signed={sealed.signed} /> : null}
     </div>
   );

@@ -10,7 +10,7 @@ import { SealStudy } from './seal-study.tsx';
 import { SessionActs } from './session-acts.tsx';
 import { type UpcomingSession, upcomingTitle, upcomingWords } from './upcoming-session.ts';
 
-export type StudyPlaces = { edit: string; codes: string; planSession: string; report: string };
+export type StudyPlaces = { edit: string; amend: string; codes: string; planSession: string; report: string };
 
 export type StudyNextStepProps = {
   organisationId: string;
@@ -90,6 +90,7 @@ function SealedStep({ organisationId, study, places, upcoming }: StudyNextStepPr
         <>
           <SessionActs upcoming={upcoming} planTo={places.planSession} toPlan={study.progress.sessionsToPlan} />
           <LinkButton to={places.codes}>See where the codes stand</LinkButton>
+          {study.amending.allowed ? <LinkButton to={places.amend}>Amend the protocol</LinkButton> : null}
           <RecordDeviation organisationId={organisationId} studyId={study.id} />
         </>
       }

@@ -9,11 +9,12 @@ import { SealFacts } from './seal-facts.tsx';
 import { StudyNextStep, type StudyNextStepProps, type StudyPlaces } from './study-next-step.tsx';
 import { StudyProgress } from './study-progress.tsx';
 import type { UpcomingSession } from './upcoming-session.ts';
+import { Versions } from './versions.tsx';
 
 type StudyOverviewProps = {
   organisationId: string;
   study: Study;
-  places: StudyPlaces & { all: string };
+  places: StudyPlaces & { all: string; registry: string };
   upcoming: UpcomingSession | null;
   onDiscarded: () => void;
   onClosed: () => void;
@@ -46,8 +47,9 @@ export function StudyOverview({ study, places, sessions, ...acts }: StudyOvervie
         {isSealed ? sessions : null}
         <div className="grid gap-x-16 gap-y-10 lg:grid-cols-[minmax(0,1fr)_24rem] lg:items-start">
           <Protocol study={study} />
-          <SealFacts study={study} />
+          <SealFacts study={study} registryTo={places.registry} />
         </div>
+        <Versions versions={study.versions} />
         {isSealed ? <Deviations deviations={study.deviations} /> : null}
       </div>
     </>

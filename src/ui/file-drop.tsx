@@ -1,10 +1,10 @@
 import { type DragEvent, useId, useState } from 'react';
-import { classNames } from '../../ui/class-names.ts';
+import { classNames } from './class-names.ts';
 
-type FileDropProps = { onFile: (file: File) => void };
+type FileDropProps = { label?: string; onFile: (file: File) => void };
 
 /** Takes a file from the visitor, dropped or chosen. It is read in the browser and sent nowhere. */
-export function FileDrop({ onFile }: FileDropProps) {
+export function FileDrop({ label = 'Check a file of your own', onFile }: FileDropProps) {
   const id = useId();
   const [isOver, setOver] = useState(false);
 
@@ -33,7 +33,7 @@ export function FileDrop({ onFile }: FileDropProps) {
         isOver ? 'border-ink bg-sheet' : 'border-edge',
       )}
     >
-      <span className="font-semibold underline underline-offset-4">Check a file of your own</span>
+      <span className="font-semibold underline underline-offset-4">{label}</span>
       <span className="text-soft">Drop it here or choose it. It stays in your browser.</span>
       <input
         id={id}
