@@ -11,8 +11,8 @@ export default defineConfig({
     proxy: {
       '/api': server,
       '/socket.io': { target: server, ws: true },
-      // Frozen documents and what leads search engines come from the server; the pages themselves from here.
-      '^/p/[^/]+/[0-9a-f]+\\.json$': server,
+      // Frozen documents, bundles and what leads search engines come from the server; the pages themselves from here.
+      '^/p/[^/]+/([0-9a-f]+\\.json|bundle\\.zip)$': server,
       '^/(sitemap\\.xml|robots\\.txt)$': server,
     },
   },

@@ -1,19 +1,10 @@
 import { readFileSync } from 'node:fs';
-import { checksOfBundle } from '#shared/bundle/verify-bundle.ts';
-import { isZip } from '#shared/bundle/zip.ts';
+import { checksOfAnyFile, statusOf } from '#shared/bundle/verify-file.ts';
 import { fileDigest } from '#shared/ledger/digest.ts';
-import { type Check, checksOfFile } from '#shared/ledger/verify.ts';
+import type { Check } from '#shared/ledger/verify.ts';
 
 // npm run verify -- FILE [--json]: the checks of a downloaded bundle, or of the record alone, offline, by the code that the
 // public page runs. Status 0: every line passed; 1: a line failed; 2: none failed, and not every one can be checked here.
-
-function textOf(bytes: Uint8Array): string | null {
-  try {
-    return new TextDecoder('utf-8', { fatal: true, ignoreBOM: true }).decode(bytes);
-  } catch {
-    return null;
-  }
-}
 
 function giveUp(words: string): never {
   process.stderr.write(`${words}\n`);
@@ -37,12 +28,8 @@ if (file === undefined || files.length > 1 || file.startsWith('--'))
 const bytes = read(file);
 const digest = fileDigest(bytes);
 const checks: Check[] = [];
-if (isZip(bytes)) for await (const check of checksOfBundle(bytes, globalThis.crypto)) checks.push(check);
-else checks.push(...checksOfFile(textOf(bytes)));
-
-const failed = checks.some(({ outcome }) => outcome === 'fail');
-const isWhole = checks.every(({ outcome }) => outcome === 'pass');
-const status = failed ? 1 : isWhole ? 0 : 2;
+for await (const check of checksOfAnyFile(bytes, globalThis.crypto).checks) checks.push(check);
+const status = statusOf(checks);
 if (isJson) process.stdout.write(`${JSON.stringify({ file, sha256: digest, status, checks }, null, 2)}\n`);
 else {
   process.stdout.write(`SHA-256 ${digest}\n\n`);

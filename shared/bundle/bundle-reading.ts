@@ -1,4 +1,3 @@
-import { strFromU8, strToU8 } from 'fflate';
 import { z } from 'zod';
 import { inclusionFile } from '../contracts/registry.ts';
 import { canonicalJson, type Json } from '../ledger/canonical-json.ts';
@@ -10,6 +9,7 @@ import { statementBytes, statementDigest } from '../ledger/signed-head.ts';
 import { entryShape, once, read, StudyReading } from '../ledger/study-reading.ts';
 import { type TokenVerdict, tokenVerdict, type WebCrypto } from '../ledger/token-signature.ts';
 import { type BundledHead, fileNames, headFile, keyFile } from './bundle-files.ts';
+import { utf8Text } from './bytes.ts';
 import { readZip } from './zip.ts';
 
 const hex = (bytes: number) => z.string().regex(new RegExp(`^[0-9a-f]{${bytes * 2}}$`));
@@ -39,16 +39,10 @@ const headsShape = z.strictObject({
 
 export type Files = ReadonlyMap<string, Uint8Array>;
 
-/** A file of an archive as text in UTF-8, or null where it is none: what does not come back as the same bytes is none. */
+/** A file of an archive as text in UTF-8, or null where it is none. */
 function textIn(files: Files, name: string): string | null {
   const bytes = files.get(name);
-  if (bytes === undefined) return null;
-  const text = strFromU8(bytes);
-  return sameBytes(strToU8(text), bytes) ? text : null;
-}
-
-export function sameBytes(a: Uint8Array, b: Uint8Array): boolean {
-  return a.length === b.length && a.every((byte, index) => byte === b[index]);
+  return bytes === undefined ? null : utf8Text(bytes);
 }
 
 /** Canonical JSON under a name, or why it is none. */
@@ -90,6 +84,7 @@ export class BundleReading {
 
   readonly later = once((): readonly Entry[] => read('later.json', z.array(entryShape), this.#later));
   readonly signed = once(() => read('heads.json', headsShape, this.#heads));
+  readonly headsBySequence = once(() => new Map(this.signed().heads.map((head) => [head.sequence, head])));
   readonly inclusion = once(() => read('registry.json', inclusionFile.nullable(), this.#registry));
   /** The record with what came on it after the document. */
   readonly allEntries = once((): readonly Entry[] => [...this.study.entries(), ...this.later()]);

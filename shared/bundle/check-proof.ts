@@ -4,12 +4,13 @@ import { signaturesFault } from '../ledger/signed-record.ts';
 import type { Verdict } from '../ledger/verify.ts';
 import { protocolDigest } from '../protocol/protocol.ts';
 import { filesOfHead, headFile, keyFile } from './bundle-files.ts';
-import { type BundleReading, sameBytes } from './bundle-reading.ts';
+import type { BundleReading } from './bundle-reading.ts';
+import { sameBytes } from './bytes.ts';
 
 /** The record goes on to its publication, which names the digest of the document that is here. */
 export function checkPublished(bundle: BundleReading): Verdict {
-  const entries = bundle.allEntries();
-  const fault = chainFault(entries);
+  // It rests on the record, so that only what came after is to be read.
+  const fault = chainFault(bundle.later(), bundle.study.entries().at(-1) ?? null);
   if (fault !== null) return { faults: [`Entry ${fault.sequence}: ${fault.why}.`], held: '' };
   const later = bundle.later();
   const published = later.find(({ kind }) => kind === 'study-published');
@@ -49,11 +50,14 @@ export function checkSignatures(bundle: BundleReading): Verdict {
   };
 }
 
+/** The familiarisation trial, numbered 0, is none. */
+const isTrialOpened = ({ kind, payload }: Entry) => kind === 'trial-opened' && Number(payload.trial) > 0;
+
 type Timed = { time: string; isLocal: boolean; authority: string };
 
 /** The token of an entry's head: its time, a fault, or why it says nothing. */
 function tokenOf(bundle: BundleReading, entry: Entry | undefined): Timed | { fault: string } | { open: string } {
-  const head = bundle.signed().heads.find(({ sequence }) => sequence === entry?.sequence);
+  const head = entry === undefined ? undefined : bundle.headsBySequence().get(entry.sequence);
   if (entry === undefined || head === undefined) return { open: 'The head is not signed, so that it has no token.' };
   if (head.token === null)
     return { open: `The token for entry ${entry.sequence} had not arrived when the bundle was made.` };
@@ -64,6 +68,9 @@ function tokenOf(bundle: BundleReading, entry: Entry | undefined): Timed | { fau
     return { open: `The token for entry ${entry.sequence} is not checked: ${verdict.why}.` };
   return { time: verdict.time, ...head.token };
 }
+
+/** An instant of the record in words: to the second, in UTC. What is compared keeps its milliseconds. */
+const timeWords = (at: string) => `${at.slice(0, 10)}, ${at.slice(11, 19)} UTC`;
 
 const authorityWords = ({ isLocal, authority }: Timed) =>
   isLocal ? 'the publisher’s own local authority, which proves nothing about time' : authority;
@@ -78,15 +85,18 @@ export function checkSealingTime(bundle: BundleReading): Verdict {
   const token = tokenOf(bundle, sealing);
   if ('fault' in token) return { faults: [token.fault], held: '' };
   if ('open' in token) return { faults: [], open: token.open, held: '' };
-  const first = entries.find(({ kind, payload }) => kind === 'trial-opened' && Number(payload.trial) > 0);
-  const said = `Stamped ${token.time} by ${authorityWords(token)}`;
+  const first = entries.find(isTrialOpened);
+  const said = `Stamped ${timeWords(token.time)} by ${authorityWords(token)}`;
   if (first !== undefined && token.time > first.at)
     return {
       faults: [],
-      open: `${said}, after the first trial opened at ${first.at}: the token came too late to show that the protocol was there before.`,
+      open: `${said}, after the first trial opened (${timeWords(first.at)}): the token came too late to show that the protocol was there before.`,
       held: '',
     };
-  return { faults: [], held: `${said}; the first trial opened ${first === undefined ? 'never' : first.at}.` };
+  return {
+    faults: [],
+    held: `${said}; the first trial opened ${first === undefined ? 'never' : timeWords(first.at)}.`,
+  };
 }
 
 /** In every session the draw was fixed, and stamped, before its first trial opened. */
@@ -95,20 +105,21 @@ export function checkDrawTime(bundle: BundleReading): Verdict {
   const fixed = entries.filter(({ kind }) => kind === 'draw-fixed');
   const said: string[] = [];
   const late: string[] = [];
+  const firsts = new Map<unknown, Entry>();
+  for (const entry of entries)
+    if (isTrialOpened(entry) && !firsts.has(entry.payload.session)) firsts.set(entry.payload.session, entry);
   for (const entry of fixed) {
     const { session } = entry.payload;
-    const first = entries.find(
-      ({ kind, payload }) => kind === 'trial-opened' && payload.session === session && Number(payload.trial) > 0,
-    );
+    const first = firsts.get(session);
     if (first === undefined) continue;
     const token = tokenOf(bundle, entry);
     if ('fault' in token) return { faults: [`Session ${session}: ${token.fault}`], held: '' };
     if ('open' in token) late.push(`Session ${session}: ${token.open}`);
     else if (token.time > first.at)
       late.push(
-        `Session ${session}: its token is of ${token.time} by ${authorityWords(token)}, and its first trial opened at ${first.at}: too late to show the order.`,
+        `Session ${session}: its token is of ${timeWords(token.time)} by ${authorityWords(token)}, and its first trial opened ${timeWords(first.at)}: too late to show the order.`,
       );
-    else said.push(`session ${session} stamped ${token.time} by ${authorityWords(token)}`);
+    else said.push(`session ${session} stamped ${timeWords(token.time)} by ${authorityWords(token)}`);
   }
   const [open] = late;
   if (open !== undefined) return { faults: [], open, held: '' };

@@ -1,7 +1,8 @@
 import { strFromU8 } from 'fflate';
 import type { Verdict } from '../ledger/verify.ts';
 import { derivedFiles } from './bundle-files.ts';
-import { type BundleReading, sameBytes } from './bundle-reading.ts';
+import type { BundleReading } from './bundle-reading.ts';
+import { sameBytes } from './bytes.ts';
 
 /** Every table and its description, made again from the record, are byte for byte what is here. */
 export function checkTables(bundle: BundleReading): Verdict {

@@ -48,15 +48,32 @@ export function tableText({ fields, rows }: Table): string {
   return `${Papa.unparse({ fields: names, data: rows.map((row) => [...row]) }, { newline: '\r\n', escapeFormulae: /^[=+\-@\t\r]/ })}\r\n`;
 }
 
-const entriesOf = (study: StudyReading, number: number) =>
-  study.entries().filter(({ payload }) => payload.session === number);
+/** When things happened in each session and trial, and what was noted: one pass over the record. */
+function happenings(study: StudyReading) {
+  const seen = new Map<string, Entry>();
+  const named = (kind: string, session: unknown, trial: unknown) => `${kind} ${session} ${trial ?? ''}`;
+  for (const entry of study.entries()) {
+    const { session, trial } = entry.payload;
+    for (const name of [named(entry.kind, session, trial), named(entry.kind, session, undefined)])
+      if (!seen.has(name)) seen.set(name, entry);
+  }
+  return (kind: string, session: number, trial?: number) => seen.get(named(kind, session, trial));
+}
 
-const atOf = (entries: readonly Entry[], kinds: readonly string[], trialNumber?: number): string =>
-  entries.find(
-    ({ kind, payload }) => kinds.includes(kind) && (trialNumber === undefined || payload.trial === trialNumber),
-  )?.at ?? '';
+type Truths = (state: SessionState, trial: number) => string;
+
+/** Truths as the draws came out; nothing where there was no draw. */
+function drawnTruths(study: StudyReading): Truths {
+  const draws = new Map(study.draws().map((draw) => [draw.session, draw]));
+  return ({ session: number }, trial) => {
+    const draw = draws.get(number);
+    return draw === undefined ? '' : truthOf(draw, trial);
+  };
+}
 
 function sessionsTable(study: StudyReading): Table {
+  const first = happenings(study);
+  const draws = new Map(study.draws().map((draw) => [draw.session, draw]));
   return {
     name: 'sessions',
     title: 'Every session of the study, abandoned and never-started ones too',
@@ -73,15 +90,14 @@ function sessionsTable(study: StudyReading): Table {
     ],
     key: ['session'],
     rows: study.sessions().map((state) => {
-      const own = entriesOf(study, state.session);
       const locked = state.ended.filter(({ outcome }) => outcome === 'locked').length;
-      const drawn = study.draws().find((draw) => draw.session === state.session);
-      const abandoned = own.find(({ kind }) => kind === 'session-abandoned');
+      const drawn = draws.get(state.session);
+      const abandoned = first('session-abandoned', state.session);
       return [
         state.session,
         state.phase,
-        atOf(own, ['seating-opened']),
-        atOf(own, ['session-finished', 'session-abandoned']),
+        first('seating-opened', state.session)?.at ?? '',
+        (first('session-finished', state.session) ?? abandoned)?.at ?? '',
         state.seats.length,
         locked,
         state.ended.length - locked,
@@ -92,12 +108,6 @@ function sessionsTable(study: StudyReading): Table {
   };
 }
 
-/** Truths of a session as its draw came out, by the number of the trial. */
-const drawnIn = (study: StudyReading, state: SessionState) => {
-  const draw = study.draws().find((candidate) => candidate.session === state.session);
-  return (number: number) => (draw === undefined ? '' : truthOf(draw, number));
-};
-
 /** The answer that a truth makes right, or nothing for a method without right answers. */
 function rightAnswer(study: StudyReading, truth: string): string {
   const method = study.method();
@@ -107,10 +117,12 @@ function rightAnswer(study: StudyReading, truth: string): string {
 }
 
 function trialsTable(study: StudyReading): Table {
+  const first = happenings(study);
+  const truths = drawnTruths(study);
   const rowOf = (state: SessionState, { trial: number, outcome, excerpt, voidReason }: EndedTrial): Cell[] => {
-    const own = entriesOf(study, state.session);
-    const truth = drawnIn(study, state)(number);
-    const note = own.find(({ kind, payload }) => kind === 'trial-voided' && payload.trial === number)?.payload.note;
+    const truth = truths(state, number);
+    const voided = first('trial-voided', state.session, number);
+    const note = voided?.payload.note;
     return [
       state.session,
       number,
@@ -118,8 +130,8 @@ function trialsTable(study: StudyReading): Table {
       truth,
       rightAnswer(study, truth),
       state.plan.programme[excerpt]?.title ?? '',
-      atOf(own, ['trial-opened'], number),
-      atOf(own, ['trial-locked', 'trial-voided'], number),
+      first('trial-opened', state.session, number)?.at ?? '',
+      (first('trial-locked', state.session, number) ?? voided)?.at ?? '',
       voidReason ?? '',
       note === undefined ? '' : String(note),
     ];
@@ -145,6 +157,7 @@ function trialsTable(study: StudyReading): Table {
 }
 
 function answersTable(study: StudyReading): Table {
+  const truths = drawnTruths(study);
   const held = new Map(study.answers().map((answer) => [answerName(answer), answer]));
   const rows = study.sessions().flatMap((state) =>
     state.ended
@@ -152,7 +165,7 @@ function answersTable(study: StudyReading): Table {
       .flatMap(({ trial: number, seats }) =>
         seats.map((seat): Cell[] => {
           const answer = held.get(answerName({ session: state.sessionId, trial: number, seat }));
-          const right = rightAnswer(study, drawnIn(study, state)(number));
+          const right = rightAnswer(study, truths(state, number));
           return [
             state.session,
             number,
@@ -186,10 +199,27 @@ function answersTable(study: StudyReading): Table {
   };
 }
 
+type OfListener = { sessions: number; due: number; missing: number; isLinked: boolean; left: boolean };
+
 function listenersTable(study: StudyReading): Table {
-  const seats = study.sessions().flatMap((state) => state.seats.map((seat) => ({ ...seat, state })));
-  const labels = [...new Set(seats.map(({ seat }) => seat))].sort();
-  const locked = study.sessions().flatMap(({ ended }) => ended.filter(({ outcome }) => outcome === 'locked'));
+  const listeners = new Map<string, OfListener>();
+  const of = (label: string): OfListener => {
+    const known = listeners.get(label) ?? { sessions: 0, due: 0, missing: 0, isLinked: true, left: false };
+    listeners.set(label, known);
+    return known;
+  };
+  for (const { seats, ended } of study.sessions()) {
+    for (const { seat, isLinked, left } of seats) {
+      const own = of(seat);
+      own.sessions += 1;
+      own.isLinked &&= isLinked;
+      own.left ||= left;
+    }
+    for (const trial of ended.filter(({ outcome }) => outcome === 'locked')) {
+      for (const seat of trial.seats) of(seat).due += 1;
+      for (const seat of trial.missing) of(seat).missing += 1;
+    }
+  }
   return {
     name: 'listeners',
     title: 'Every listener, by label',
@@ -206,16 +236,9 @@ function listenersTable(study: StudyReading): Table {
       field('left', 'boolean', 'Whether the listener left a session before its end.'),
     ],
     key: ['listener'],
-    rows: labels.map((label) => {
-      const own = seats.filter(({ seat }) => seat === label);
-      return [
-        label,
-        own.length,
-        locked.filter(({ seats: present }) => present.includes(label)).length,
-        locked.filter(({ missing }) => missing.includes(label)).length,
-        own.every(({ isLinked }) => isLinked),
-        own.some(({ left }) => left),
-      ];
+    rows: [...listeners.keys()].sort().map((label) => {
+      const { sessions, due, missing, isLinked, left } = of(label);
+      return [label, sessions, due, missing, isLinked, left];
     }),
   };
 }

@@ -60,8 +60,13 @@ export function readZip(bytes: Uint8Array): { files: ReadonlyMap<string, Uint8Ar
   }
 }
 
-/** The document of a bundle by itself, or null where there is none. */
+/** The document of a bundle by itself, nothing else unpacked, or null where there is none. */
 export function documentIn(bytes: Uint8Array): Uint8Array | null {
-  const read = readZip(bytes);
-  return 'files' in read ? (read.files.get('study.json') ?? null) : null;
+  try {
+    const isDocument = ({ name, originalSize }: { name: string; originalSize: number }) =>
+      name === 'study.json' && originalSize <= mostBytes;
+    return unzipSync(bytes, { filter: isDocument })['study.json'] ?? null;
+  } catch {
+    return null;
+  }
 }

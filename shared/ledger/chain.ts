@@ -36,17 +36,18 @@ export function nextEntry(head: Head | null, content: EntryContent): Entry {
 export type ChainFault = { sequence: number; why: string };
 
 /**
- * Reads a chain from its first entry on.
+ * Reads a chain from its first entry on, or from the one after a head that was read before.
  *
  * @returns the first fault with the place where it lies, or null when every link holds
  */
-export function chainFault(entries: readonly Entry[]): ChainFault | null {
-  let head: Head | null = null;
+export function chainFault(entries: readonly Entry[], after: Entry | null = null): ChainFault | null {
+  let head: Head | null = after;
+  const study = (after ?? entries[0])?.study;
   for (const [index, entry] of entries.entries()) {
-    const sequence = index + 1;
+    const sequence = (after?.sequence ?? 0) + index + 1;
     if (entry.sequence !== sequence)
       return { sequence, why: `expected entry ${sequence}, found entry ${entry.sequence}` };
-    if (entry.study !== entries[0]?.study) return { sequence, why: 'the entry belongs to another study' };
+    if (entry.study !== study) return { sequence, why: 'the entry belongs to another study' };
     if (entry.previous !== (head?.digest ?? genesis))
       return { sequence, why: 'it does not link to the entry before it' };
     if (entry.digest !== entryDigest(entry)) return { sequence, why: 'its content does not match its digest' };

@@ -33,7 +33,9 @@ export function checkAnswers(study: StudyReading): Verdict {
   return { faults, held: `${locked.size} answers, each as it was when its trial locked.` };
 }
 
-function sessionFaults(state: SessionState, locks: readonly PayloadOf<'trial-locked'>[]): string[] {
+const lockName = ({ session, trial }: { session: number; trial: number }) => `${session} ${trial}`;
+
+function sessionFaults(state: SessionState, locks: ReadonlyMap<string, PayloadOf<'trial-locked'>>): string[] {
   const { session, phase, ended, plan } = state;
   const name = `Session ${session}`;
   const faults: string[] = [];
@@ -47,7 +49,7 @@ function sessionFaults(state: SessionState, locks: readonly PayloadOf<'trial-loc
     faults.push(`${name} was finished with ${ended.length} trials where ${due} were due.`);
   if (ended.length > plan.trials + plan.spares) faults.push(`${name} has more trials than were drawn.`);
   for (const { trial, seats } of locked) {
-    const lock = locks.find((candidate) => candidate.session === session && candidate.trial === trial);
+    const lock = locks.get(lockName({ session, trial }));
     const heard = [...(lock?.leaves.map(({ seat }) => seat) ?? []), ...(lock?.missing ?? [])].sort();
     if (heard.join() !== [...seats].sort().join())
       faults.push(`${name}, trial ${trial}: a listener who was seated is neither answered nor missing.`);
@@ -58,7 +60,7 @@ function sessionFaults(state: SessionState, locks: readonly PayloadOf<'trial-loc
 /** Trial numbers run without gaps in every session; what was drawn was counted, void, left open, or not needed. */
 export function checkTrials(study: StudyReading): Verdict {
   const sessions = study.sessions();
-  const locks = locksOf(study);
+  const locks = new Map(locksOf(study).map((lock) => [lockName(lock), lock]));
   const faults = sessions.flatMap((state) => sessionFaults(state, locks));
   const ended = sessions.flatMap((state) => state.ended);
   const counted = ended.filter(({ outcome }) => outcome === 'locked').length;

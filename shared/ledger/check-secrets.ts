@@ -2,6 +2,7 @@ import { contributionCommitment } from '../session/answer-leaf.ts';
 import { codeKeyCommitment, drawSecretCommitment } from '../session/commitments.ts';
 import { revealedDraw } from '../session/counted-trials.ts';
 import { revealedKey } from '../session/revealed-key.ts';
+import type { SessionState } from '../session/state.ts';
 import { canonicalJson, type Json } from './canonical-json.ts';
 import type { PublishedDraw } from './publication-parts.ts';
 import type { StudyReading } from './study-reading.ts';
@@ -13,8 +14,9 @@ const textOf = (value: unknown) => canonicalJson(value as Json);
 export function checkCommitments(study: StudyReading): Verdict {
   const secrets = study.secrets();
   const faults: string[] = [];
+  const draws = new Map<unknown, (typeof secrets.draws)[number]>(secrets.draws.map((draw) => [draw.session, draw]));
   for (const { payload } of study.entries().filter(({ kind }) => kind === 'seating-opened')) {
-    const draw = secrets.draws.find(({ session }) => session === payload.session);
+    const draw = draws.get(payload.session);
     if (draw === undefined || drawSecretCommitment(draw.salt, draw.secret) !== payload.commitment)
       faults.push(`Session ${payload.session}: the revealed secret is not the one committed to.`);
   }
@@ -55,22 +57,25 @@ export function checkDraws(study: StudyReading): Verdict {
   const secrets = study.secrets();
   const faults: string[] = [];
   const recomputed: PublishedDraw[] = [];
+  const states = new Map<unknown, SessionState>(study.sessions().map((state) => [state.session, state]));
+  const revealed = new Map<unknown, string>(secrets.draws.map(({ session, secret }) => [session, secret]));
   for (const { payload } of study.entries().filter(({ kind }) => kind === 'draw-fixed')) {
-    const state = study.sessions().find(({ session }) => session === payload.session);
-    const secret = secrets.draws.find(({ session }) => session === payload.session)?.secret;
+    const state = states.get(payload.session);
+    const secret = revealed.get(payload.session);
     if (state === undefined || secret === undefined) {
       faults.push(`Session ${payload.session}: there is no secret to draw from.`);
       continue;
     }
-    const contributors = state.seats.filter(({ contributes, revealed }) => contributes && revealed !== null);
+    const contributors = state.seats.filter((seat) => seat.contributes && seat.revealed !== null);
     if (textOf(contributors.map(({ seat }) => seat)) !== textOf(payload.contributors ?? null))
       faults.push(`Session ${state.session}: the draw was not fixed with the phones that the record lists.`);
     const draw = revealedDraw(state, study.method(), secret, secrets.codeKey.rows);
     recomputed.push({ session: state.session, ...draw });
   }
   recomputed.sort((a, b) => a.session - b.session);
+  const listed = new Map(published.map((draw) => [draw.session, draw]));
   for (const draw of recomputed) {
-    const shown = published.find(({ session }) => session === draw.session);
+    const shown = listed.get(draw.session);
     if (shown === undefined || textOf(shown) !== textOf(draw))
       faults.push(`Session ${draw.session}: the draw does not follow from its secrets.`);
   }

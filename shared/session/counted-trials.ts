@@ -33,8 +33,9 @@ export function countedTrials(
   held: readonly HeldChoice[],
 ): ScoredTrial[] {
   const choices = new Map(held.map(({ session, trial, seat, choice }) => [`${session} ${trial} ${seat}`, choice]));
+  const secrets = new Map(key.draws.map(({ session, secret }) => [session, secret]));
   return states.flatMap((state) => {
-    const secret = key.draws.find((draw) => draw.session === state.session)?.secret;
+    const secret = secrets.get(state.session);
     const locked = state.ended.filter((trial) => trial.outcome === 'locked');
     if (secret === undefined || locked.length === 0) return [];
     const draw = revealedDraw(state, method, secret, key.codeKey.rows);

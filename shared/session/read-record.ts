@@ -11,7 +11,9 @@ export function sessionsInRecord(entries: readonly Entry[], method: Method): Ses
     const event = readSessionEvent(entry.kind, entry.at, entry.payload);
     const session = event?.payload.session;
     if (event === null || session === null || session === undefined) continue;
-    bySession.set(session, [...(bySession.get(session) ?? []), event]);
+    const own = bySession.get(session);
+    if (own === undefined) bySession.set(session, [event]);
+    else own.push(event);
   }
   return [...bySession.keys()]
     .sort((a, b) => a - b)

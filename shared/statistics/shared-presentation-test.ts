@@ -102,21 +102,74 @@ function requireTrial({ counts, truth, missing }: SharedTrial): void {
   requireWhole('missing', missing, 0, 1_000_000);
 }
 
-/** In how many of all possible draws each number of matches comes up, from the lowest possible number on. */
+/** A trial whose draw can only give one of two numbers of matches, this far apart: by how many of its labels each. */
+type Coin = { readonly apart: number; readonly lower: bigint; readonly higher: bigint };
+
+function coinOf(counts: readonly number[]): Coin | null {
+  const [fewest, most] = [Math.min(...counts), Math.max(...counts)];
+  const lower = counts.filter((count) => count === fewest).length;
+  const higher = counts.filter((count) => count === most).length;
+  return lower + higher === counts.length
+    ? { apart: most - fewest, lower: BigInt(lower), higher: BigInt(higher) }
+    : null;
+}
+
+/** Ways of many trials with the same coin: the terms of (lower + higher x^apart)^times, by the binomial theorem. */
+function waysOfAlike({ apart, lower, higher }: Coin, times: number): bigint[] {
+  const ways = new Array<bigint>(times * apart + 1).fill(0n);
+  let term = lower ** BigInt(times);
+  for (let count = 0; count <= times; count += 1) {
+    ways[count * apart] = term;
+    term = (term * BigInt(times - count) * higher) / (BigInt(count + 1) * lower);
+  }
+  return ways;
+}
+
+/** The most trials that have the same coin, and all others. */
+function mostAlike(trials: readonly SharedTrial[]): {
+  coin: Coin | null;
+  alike: number;
+  others: readonly SharedTrial[];
+} {
+  const groups = new Map<string, { coin: Coin; own: Set<SharedTrial> }>();
+  for (const trial of trials) {
+    const coin = coinOf(trial.counts);
+    if (coin === null) continue;
+    const name = `${coin.apart} ${coin.lower} ${coin.higher}`;
+    const group = groups.get(name) ?? { coin, own: new Set() };
+    groups.set(name, group);
+    group.own.add(trial);
+  }
+  const largest = [...groups.values()].reduce<{ coin: Coin | null; own: Set<SharedTrial> }>(
+    (most, group) => (group.own.size > most.own.size ? group : most),
+    { coin: null, own: new Set() },
+  );
+  return { ...largest, alike: largest.own.size, others: trials.filter((trial) => !largest.own.has(trial)) };
+}
+
+/**
+ * In how many of all possible draws each number of matches comes up, from the lowest possible number on. The most trials
+ * alike are taken at once, so that a study of one listener at a time, where all are, costs no convolution.
+ */
 function convolve(trials: readonly SharedTrial[]): { lowest: number; ways: bigint[] } {
-  let lowest = 0;
-  let ways = [1n];
-  for (const { counts } of trials) {
+  // Where every label got as many answers the draw changes nothing; it only multiplies the ways.
+  const [even, uneven] = [true, false].map((isEven) =>
+    trials.filter(({ counts }) => counts.every((count) => count === counts[0]) === isEven),
+  ) as [SharedTrial[], SharedTrial[]];
+  const { coin, alike, others } = mostAlike(uneven);
+  const lowest = trials.reduce((sum, { counts }) => sum + Math.min(...counts), 0);
+  let ways = coin === null ? [1n] : waysOfAlike(coin, alike);
+  for (const { counts } of others) {
     const fewest = Math.min(...counts);
     const next = new Array<bigint>(ways.length + Math.max(...counts) - fewest).fill(0n);
     for (const count of counts) {
       for (const [index, number] of ways.entries())
         next[index + count - fewest] = at(next, index + count - fewest) + number;
     }
-    lowest += fewest;
     ways = next;
   }
-  return { lowest, ways };
+  const factor = even.reduce((product, { counts }) => product * BigInt(counts.length), 1n);
+  return { lowest, ways: factor === 1n ? ways : ways.map((number) => number * factor) };
 }
 
 function at(ways: readonly bigint[], index: number): bigint {

@@ -3,7 +3,8 @@ import type { ListenerView } from '#shared/contracts/listener-live.ts';
 import { CopyButton } from '../ui/copy-button.tsx';
 import { CourseLine } from '../ui/course-line.tsx';
 import { PhonePage } from './phone-page.tsx';
-import { DisputedList, ReceiptList, receiptsText } from './receipt-list.tsx';
+import { DisputedList, ReceiptList } from './receipt-list.tsx';
+import { receiptsText } from './receipts-text.ts';
 import type { SeatSnapshot } from './seat.ts';
 
 function headingOf({ left, phase, rehearsal }: ListenerView): { title: string; detail: string } {

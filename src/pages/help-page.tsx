@@ -1,4 +1,5 @@
 import type { ReactNode } from 'react';
+import { Link } from 'react-router-dom';
 import { methods } from '#shared/methods/methods.ts';
 import { paths } from '../app/paths.ts';
 import { LinkButton } from '../ui/link-button.tsx';
@@ -56,6 +57,14 @@ export function Component() {
               is every step of a study, each entry bound to the one before, so that none can be changed unseen.
             </Term>
           </dl>
+        </Section>
+        <Section title="Whoever doubts a result">
+          <p>
+            Every published result can be checked by anybody, without an account:{' '}
+            <Link to={paths.verify()}>check a file</Link> that somebody gave you, or open one of the{' '}
+            <Link to={paths.publications()}>published results</Link>. Listeners can look up their phone’s receipts
+            there.
+          </p>
         </Section>
         <div>
           <LinkButton to={paths.start()}>Go to the start</LinkButton>

@@ -53,7 +53,7 @@ export function Component() {
         </div>
         <ReportConditions report={report} portrait={portrait} isPublic />
       </div>
-      <VerificationSection publication={publication} />
+      <VerificationSection publication={publication} verifyTo={paths.verify()} />
       <Statements publication={publication} />
       <ReportDistribution nullDistribution={report.nullDistribution} distribution={portrait.distribution} />
       <ReportListeners listeners={portrait.listeners} />

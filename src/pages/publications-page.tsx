@@ -1,5 +1,5 @@
 import { useSuspenseQuery } from '@tanstack/react-query';
-import { type LoaderFunctionArgs, useSearchParams } from 'react-router-dom';
+import { Link, type LoaderFunctionArgs, useSearchParams } from 'react-router-dom';
 import { publicationsApi } from '#shared/contracts/publications.ts';
 import { paths } from '../app/paths.ts';
 import { PublicationList } from '../features/publications/publication-list.tsx';
@@ -30,6 +30,9 @@ export function Component() {
         title="Published results"
         lede="Each stands at its address for good, with its record to check, whatever was found."
       />
+      <p className="-mt-4 pb-8">
+        Somebody gave you a file? <Link to={paths.verify()}>Check it in your browser</Link>.
+      </p>
       {isEverything ? (
         <EmptyState title="Nothing is published here yet">
           A study that is closed can be published by its manager. It is listed here from then on.

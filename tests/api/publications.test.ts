@@ -1,9 +1,11 @@
 import { createHash } from 'node:crypto';
 import request from 'supertest';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { checksOfBundle } from '#shared/bundle/verify-bundle.ts';
 import { confirmationIds, type OwnPublication, type Publication } from '#shared/contracts/publications.ts';
 import type { Report } from '#shared/contracts/reports.ts';
-import { checksOfFile } from '#shared/ledger/verify.ts';
+import { bundleCheckNames } from '#shared/ledger/check-names.ts';
+import { type Check, checksOfFile } from '#shared/ledger/verify.ts';
 import { HandClock } from '../../server/demo/hand-clock.ts';
 import { readRecord } from '../../server/ledger/ledger.ts';
 import { pastTriggers } from '../support/past-triggers.ts';
@@ -83,6 +85,31 @@ describe('a publication', () => {
     expect(createHash('sha256').update(download.text).digest('hex')).toBe(published.digest);
     expect([file.digest, file.bytes]).toEqual([published.digest, Buffer.byteLength(download.text)]);
     expect([...checksOfFile(download.text)].filter(({ outcome }) => outcome !== 'pass')).toEqual([]);
+  });
+
+  const timed = ['sealingTime', 'drawTime'];
+  const bundle = async (): Promise<Check[]> => {
+    const { body, headers } = await anybody()
+      .get((await view()).bundle)
+      .buffer(true)
+      .parse((reply, done) => {
+        const parts: Buffer[] = [];
+        reply.on('data', (part: Buffer) => parts.push(part));
+        reply.on('end', () => done(null, Buffer.concat(parts)));
+      })
+      .expect(200);
+    expect(headers['content-type']).toContain('application/zip');
+    const checks: Check[] = [];
+    for await (const check of checksOfBundle(new Uint8Array(body), globalThis.crypto)) checks.push(check);
+    return checks;
+  };
+
+  it('is a bundle for anybody, of which every line passes but those whose tokens have not come [Z1] [Z6]', async () => {
+    expect((await view()).bundle).toBe(`/p/${published.id}/bundle.zip`);
+    const checks = await bundle();
+    expect(checks.map(({ id }) => id)).toEqual(bundleCheckNames.map(({ id }) => id));
+    for (const { id, outcome, reason } of checks)
+      expect(`${id} ${outcome}`, reason).toBe(`${id} ${timed.includes(id) ? 'not checkable' : 'pass'}`);
   });
 
   it('holds nobody’s name, address, room or place [V6]', async () => {
@@ -178,6 +205,8 @@ describe('a publication', () => {
       '/api/publications/..',
       `/p/zzzzzzzz/${published.digest}.json`,
       `/p/${published.id}/${'0'.repeat(64)}.json`,
+      '/p/zzzzzzzz/bundle.zip',
+      '/p/nope/bundle.zip',
       '/p/zzzzzzzz',
       '/p/nope',
     ])
@@ -204,6 +233,11 @@ describe('a publication', () => {
     expect(text).not.toContain('<blockquote');
     expect(text).toContain('"creativeWorkStatus":"Withdrawn"');
     await anybody().get(after.file.path).expect(200);
+    const checks = await bundle();
+    expect(checks.filter(({ outcome }) => outcome !== 'pass').map(({ id }) => id)).toEqual(timed);
+    expect(checks.find(({ id }) => id === 'published')?.reason).toContain(
+      'The publication was withdrawn: The specimens were swapped.',
+    );
     expect((await anybody().get('/api/publications')).body.rows[0].isWithdrawn).toBe(true);
     const twice = await study.manager.post(`${study.at}/publication/withdrawal`).send({ reason: 'Once more.' });
     expect(twice.status).toBe(409);

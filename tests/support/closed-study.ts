@@ -13,6 +13,7 @@ import { decide, type SessionCommand } from '#shared/session/decide.ts';
 import { evolve, holdAnswer } from '#shared/session/evolve.ts';
 import { nextStep } from '#shared/session/progress.ts';
 import { sessionsInRecord } from '#shared/session/read-record.ts';
+import type { RevealedKey } from '#shared/session/revealed-key.ts';
 import type { SessionState } from '#shared/session/state.ts';
 
 // A closed study made by the state machine alone: two sessions, the second abandoned, with a void and a missing answer.
@@ -36,7 +37,7 @@ export function chainedAgain(entries: readonly Entry[]): Entry[] {
   return chained;
 }
 
-class StudyMaker {
+export class StudyMaker {
   readonly study = id('study');
   readonly entries: Entry[] = [];
   readonly answers: AnswerContent[] = [];
@@ -59,7 +60,14 @@ const cable = (name: string) => ({
   specimens: [1, 2].map((n) => ({ id: id(`${name} ${n}`), serial: `${name[0]}-${n}`, note: '' })),
 });
 
-const protocolFor = (study: string, listeners: number, method: string): Protocol => ({
+type Size = { readonly sessions: number; readonly trials: number; readonly spares: number };
+
+export const protocolFor = (
+  study: string,
+  listeners: number,
+  method: string,
+  size: Size = { sessions: 2, trials: 5, spares: 2 },
+): Protocol => ({
   format: 'fairlead-protocol',
   version: 1,
   study,
@@ -69,10 +77,8 @@ const protocolFor = (study: string, listeners: number, method: string): Protocol
   method,
   cables: [cable('Northern run'), cable('Southern run')],
   design: {
-    sessions: 2,
+    ...size,
     listenersPerSession: listeners,
-    trials: 5,
-    spares: 2,
     confidence: false,
     codeHolder: people.holder,
   },
@@ -91,7 +97,7 @@ const protocolFor = (study: string, listeners: number, method: string): Protocol
   },
 });
 
-class SessionMaker {
+export class SessionMaker {
   readonly #maker: StudyMaker;
   readonly #method: Method;
   #state: SessionState;
@@ -164,7 +170,7 @@ class SessionMaker {
 function runSession(maker: StudyMaker, protocol: Protocol, session: number, listeners: number): void {
   const made = new SessionMaker(maker, protocol, session);
   const seats = Array.from({ length: listeners }, (_, index) => `L0${(session - 1) * listeners + index + 1}`);
-  made.seat(seats, drawSecretCommitment(hex(`draw salt ${session}`, 32), hex(`secret ${session}`, 32)));
+  made.seat(seats, sealedSecret(session));
   made.do({ kind: 'begin-familiarisation' });
   made.present();
   const choices = methodOf(protocol.method)
@@ -184,17 +190,8 @@ function runSession(maker: StudyMaker, protocol: Protocol, session: number, list
   else made.do({ kind: 'abandon', reason: 'The amplifier failed.' });
 }
 
-/**
- * @param listeners seats per session, 1 to 4
- * @param startsAt  when it is sealed, in milliseconds since 1970
- * @param isAmended whether the protocol is sealed with another chain first, and amended before the codes are drawn
- */
-export function closedStudy(listeners: number, methodId = 'abx', startsAt?: number, isAmended = false): ClosedStudy {
-  const maker = new StudyMaker();
-  if (startsAt !== undefined) maker.now = startsAt;
-  const first = protocolFor(maker.study, listeners, methodId);
-  const conduct = { ...first.conduct, chain: 'Player, another amplifier, loudspeakers' };
-  const protocol = isAmended ? { ...first, version: 2, salt: hex('second salt', 32), conduct } : first;
+/** What is sealed before anybody sits down: the protocol, perhaps amended once, and which code is which specimen. */
+export function seal(maker: StudyMaker, protocol: Protocol, earlier: Protocol | null): RevealedKey['codeKey'] {
   const rows = protocol.cables.flatMap(({ specimens }, index) =>
     specimens.map(({ id: specimen, serial }, n) => ({
       code: String(317 + index * 211 + n * 38),
@@ -204,8 +201,9 @@ export function closedStudy(listeners: number, methodId = 'abx', startsAt?: numb
     })),
   );
   const codeKey = { salt: hex('key salt', 32), rows };
-  maker.put('protocol-sealed', { protocolVersion: 1, digest: protocolDigest(first), sealedBy: people.manager });
-  if (isAmended)
+  const digest = protocolDigest(earlier ?? protocol);
+  maker.put('protocol-sealed', { protocolVersion: 1, digest, sealedBy: people.manager });
+  if (earlier !== null)
     maker.put('protocol-amended', {
       protocolVersion: 2,
       digest: protocolDigest(protocol),
@@ -217,32 +215,61 @@ export function closedStudy(listeners: number, methodId = 'abx', startsAt?: numb
     specimens: rows.length,
     by: people.holder,
   });
-  for (const session of [1, 2]) runSession(maker, protocol, session, listeners);
+  return codeKey;
+}
+
+/** The end: secrets revealed and the registered analysis run. */
+export function close(
+  maker: StudyMaker,
+  protocol: Protocol,
+  codeKey: RevealedKey['codeKey'],
+  ending: { readonly complete: boolean; readonly reason: string },
+  earlier: Protocol | null,
+): ClosedStudy {
   maker.put('study-closed', {
     by: people.manager,
-    complete: false,
-    reason: 'The amplifier failed.',
+    ...ending,
     manager: people.manager,
     owners: [people.owner],
     managers: [people.manager],
     codeHolder: people.holder,
   });
-  const draws = [1, 2].map((session) => ({
-    session,
-    secret: hex(`secret ${session}`, 32),
-    salt: hex(`draw salt ${session}`, 32),
+  const draws = Array.from({ length: protocol.design.sessions }, (_, index) => ({
+    session: index + 1,
+    secret: hex(`secret ${index + 1}`, 32),
+    salt: hex(`draw salt ${index + 1}`, 32),
   }));
   const key = { codeKey, draws };
   maker.put('key-revealed', key);
-  const method = methodOf(methodId);
+  const method = methodOf(protocol.method);
   const result = runRegistered(protocol, sessionsInRecord(maker.entries, method), key, maker.answers);
   maker.put('result-recorded', { analysis: protocol.analysis.name, result });
   return JSON.parse(
     canonicalJson({
       entries: maker.entries,
       protocol,
-      ...(isAmended ? { earlierProtocols: [first] } : {}),
+      ...(earlier === null ? {} : { earlierProtocols: [earlier] }),
       answers: maker.answers,
     } as unknown as Json),
   ) as ClosedStudy;
+}
+
+export const sealedSecret = (session: number) =>
+  drawSecretCommitment(hex(`draw salt ${session}`, 32), hex(`secret ${session}`, 32));
+
+/**
+ * @param listeners seats per session, 1 to 4
+ * @param startsAt  when it is sealed, in milliseconds since 1970
+ * @param isAmended whether the protocol is sealed with another chain first, and amended before the codes are drawn
+ */
+export function closedStudy(listeners: number, methodId = 'abx', startsAt?: number, isAmended = false): ClosedStudy {
+  const maker = new StudyMaker();
+  if (startsAt !== undefined) maker.now = startsAt;
+  const first = protocolFor(maker.study, listeners, methodId);
+  const conduct = { ...first.conduct, chain: 'Player, another amplifier, loudspeakers' };
+  const protocol = isAmended ? { ...first, version: 2, salt: hex('second salt', 32), conduct } : first;
+  const earlier = isAmended ? first : null;
+  const codeKey = seal(maker, protocol, earlier);
+  for (const session of [1, 2]) runSession(maker, protocol, session, listeners);
+  return close(maker, protocol, codeKey, { complete: false, reason: 'The amplifier failed.' }, earlier);
 }

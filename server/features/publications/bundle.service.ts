@@ -54,7 +54,7 @@ async function madeOf(tx: Tx, row: Publication, { entries, registry }: Growing):
  *
  * @throws Problem `not-found`
  */
-export function getBundle({ db }: Deps, id: string): Promise<Uint8Array> {
+export function getBundle({ db }: Pick<Deps, 'db'>, id: string): Promise<Uint8Array> {
   return withTransaction(db, async (tx) => {
     const row = await store.findPublication(tx, id);
     if (row === null) throw new Problem('not-found', 'Nothing is published at this address.');

@@ -31,7 +31,7 @@ export function CheckList({ names, checks, isRunning }: CheckListProps) {
         const check = checks.find((candidate) => candidate.id === id);
         const state: State = check?.outcome ?? (isRunning && index === checks.length ? 'checking' : 'to do');
         return (
-          <li key={id} data-check={id} className="group relative flex gap-4 pb-5 last:pb-0">
+          <li key={id} data-check={id} data-outcome={state} className="group relative flex gap-4 pb-5 last:pb-0">
             <span
               aria-hidden="true"
               className={classNames(
@@ -43,12 +43,18 @@ export function CheckList({ names, checks, isRunning }: CheckListProps) {
               aria-hidden="true"
               className={classNames('relative mt-1 size-[1.125rem] shrink-0 rounded-full border-4', rings[state])}
             />
-            <span className="flex min-w-0 flex-1 flex-wrap justify-between gap-x-6">
-              <span className="min-w-0 flex-1 basis-40">
-                <span className="block font-semibold">{name}</span>
-                {check ? <span className="block text-soft [overflow-wrap:anywhere]">{check.reason}</span> : null}
+            <span className="min-w-0 flex-1">
+              <span className="flex flex-wrap justify-between gap-x-6">
+                <span
+                  className={classNames('min-w-0 flex-1 basis-44', state === 'to do' ? 'text-soft' : 'font-semibold')}
+                >
+                  {name}
+                </span>
+                <StatusWord tone={tones[state]}>{state}</StatusWord>
               </span>
-              <StatusWord tone={tones[state]}>{state}</StatusWord>
+              {check ? (
+                <span className="block max-w-2xl text-soft [overflow-wrap:anywhere]">{check.reason}</span>
+              ) : null}
             </span>
           </li>
         );

@@ -1,7 +1,7 @@
 import { useCallback, useEffect, useRef, useState } from 'react';
-import { bundleCheckNames } from '#shared/ledger/check-names.ts';
+import { bundleCheckNames, type NamedCheck } from '#shared/ledger/check-names.ts';
 import type { Check } from '#shared/ledger/verify.ts';
-import type { VerifyMessage } from './verify-worker.ts';
+import type { ReceiptsOutcome, VerifyMessage, VerifyRequest } from './verify-worker.ts';
 
 export type Verification = {
   readonly phase: 'waiting' | 'fetching' | 'checking' | 'done' | 'unreadable' | 'broken';
@@ -10,8 +10,10 @@ export type Verification = {
   /** Of the document, alone or in a bundle. */
   readonly digest: string | null;
   /** Every check to come, in order. */
-  readonly names: readonly { readonly id: Check['id']; readonly name: string }[];
+  readonly names: readonly NamedCheck[];
   readonly checks: readonly Check[];
+  /** Of the text that was looked up last; null before. */
+  readonly receipts: ReceiptsOutcome | null;
 };
 
 const atFirst = (phase: Verification['phase'], fileName: string | null): Verification => ({
@@ -20,11 +22,13 @@ const atFirst = (phase: Verification['phase'], fileName: string | null): Verific
   digest: null,
   names: bundleCheckNames,
   checks: [],
+  receipts: null,
 });
 
 function after(before: Verification, message: VerifyMessage): Verification {
   if ('digest' in message) return { ...before, phase: 'checking', digest: message.digest, names: message.names };
   if ('check' in message) return { ...before, checks: [...before.checks, message.check] };
+  if ('receipts' in message) return { ...before, receipts: message.receipts };
   return { ...before, phase: 'done' };
 }
 
@@ -55,7 +59,7 @@ export function useVerification(path: string | null) {
     own.onmessage = ({ data }: MessageEvent<VerifyMessage>) => tell((before) => after(before, data));
     own.onerror = () => tell((before) => ({ ...before, phase: 'broken' }));
     read().then(
-      (bytes) => own.postMessage(bytes, [bytes]),
+      (file) => own.postMessage({ file } satisfies VerifyRequest, [file]),
       () => tell((before) => ({ ...before, phase: 'unreadable' })),
     );
   }, []);
@@ -65,6 +69,10 @@ export function useVerification(path: string | null) {
   }, [check, path]);
   const checkFile = useCallback((file: File) => check(file.name, () => file.arrayBuffer()), [check]);
 
+  const checkReceipts = useCallback((text: string) => {
+    worker.current?.postMessage({ receipts: text } satisfies VerifyRequest);
+  }, []);
+
   useEffect(() => {
     checkPublished();
     return () => {
@@ -73,5 +81,5 @@ export function useVerification(path: string | null) {
     };
   }, [checkPublished]);
 
-  return { verification, checkPublished, checkFile };
+  return { verification, checkPublished, checkFile, checkReceipts };
 }

@@ -10,7 +10,7 @@ type VerificationOutcomeProps = {
 
 /** What all checks come to, and whether the file is the published one. */
 export function VerificationOutcome({ verification, published }: VerificationOutcomeProps) {
-  const { phase, digest, checks, fileName } = verification;
+  const { phase, digest, checks, names, fileName } = verification;
   if (phase === 'unreadable')
     return (
       <Notice tone="amber" title="The file could not be read.">
@@ -24,8 +24,14 @@ export function VerificationOutcome({ verification, published }: VerificationOut
         Reload the page, or download the file and check it elsewhere. Nothing has been verified.
       </Notice>
     );
-  if (phase === 'waiting') return <p className="text-soft">Nothing has been checked yet.</p>;
-  if (phase !== 'done') return <p className="text-soft">Reading and checking …</p>;
+  if (phase === 'waiting')
+    return <Notice title="No file is chosen yet.">These are the checks that it will go through.</Notice>;
+  if (phase !== 'done')
+    return (
+      <p className="text-soft">
+        {checks.length === 0 ? 'Reading the file …' : `Checking: ${checks.length} of ${names.length} done …`}
+      </p>
+    );
   return (
     <>
       <Sum checks={checks} />
@@ -40,19 +46,23 @@ export function VerificationOutcome({ verification, published }: VerificationOut
   );
 }
 
+const listed = new Intl.ListFormat('en', { type: 'conjunction' });
+
 function Sum({ checks }: Pick<Verification, 'checks'>) {
-  const of = (outcome: Check['outcome']) => checks.filter((check) => check.outcome === outcome).length;
-  const [passed, open] = [of('pass'), of('not checkable')];
-  if (passed === checks.length) return <Notice tone="held" title={`All ${checks.length} checks pass.`} />;
-  if (of('fail') > 0)
+  const of = (outcome: Check['outcome']) => checks.filter((check) => check.outcome === outcome);
+  const [passed, failed, open] = [of('pass'), of('fail'), of('not checkable')];
+  const [first] = failed;
+  if (first !== undefined)
     return (
-      <Notice tone="stop" title={`${passed} of ${checks.length} checks pass.`}>
-        This file does not hold, and supports no conclusion.
+      <Notice tone="stop" title={`${passed.length} of ${checks.length} checks pass.`}>
+        “{first.name}” fails. This file does not hold, and supports no conclusion.
       </Notice>
     );
+  if (open.length === 0) return <Notice tone="held" title={`All ${checks.length} checks pass.`} />;
   return (
-    <Notice tone="amber" title={`${passed} of ${checks.length} checks pass, and none fails.`}>
-      {open === 1 ? 'One cannot be checked' : `${open} cannot be checked`} with what is here; each says why.
+    <Notice tone="amber" title={`No check fails; ${passed.length} of ${checks.length} pass.`}>
+      {listed.format(open.map(({ name }) => `“${name}”`))} cannot be told from this file. Nothing contradicts it, and
+      nothing shows it either; {open.length === 1 ? 'its line says' : 'their lines say'} why.
     </Notice>
   );
 }

@@ -1,18 +1,27 @@
+import type { ReactNode } from 'react';
 import { Link } from 'react-router-dom';
-import { notShown, type Publication } from '#shared/contracts/publications.ts';
+import type { Publication } from '#shared/contracts/publications.ts';
 import { formatNumber } from '../../lib/format.ts';
 import { Button } from '../../ui/button.tsx';
 import { buttonLook } from '../../ui/button-look.ts';
 import { CopyButton } from '../../ui/copy-button.tsx';
 import { FileDrop } from '../../ui/file-drop.tsx';
 import { CheckList } from './check-list.tsx';
+import { NotShown } from './not-shown.tsx';
+import { ReceiptCheck } from './receipt-check.tsx';
 import { useVerification } from './use-verification.ts';
 import { VerificationOutcome } from './verification-outcome.tsx';
 
+type VerificationSectionProps = {
+  publication: Publication;
+  /** The page that checks any file. */
+  verifyTo: string;
+};
+
 /** The record, checked in the visitor's own browser from the downloaded file; and the file itself, to be checked elsewhere. */
-export function VerificationSection({ publication }: { publication: Publication }) {
+export function VerificationSection({ publication, verifyTo }: VerificationSectionProps) {
   const { file, bundle, registry } = publication;
-  const { verification, checkPublished, checkFile } = useVerification(bundle);
+  const { verification, checkPublished, checkFile, checkReceipts } = useVerification(bundle);
   const { phase, fileName, checks, names } = verification;
   const isRunning = phase === 'fetching' || phase === 'checking';
   return (
@@ -34,14 +43,20 @@ export function VerificationSection({ publication }: { publication: Publication 
           </Button>
         </div>
       </div>
-      <WithoutUs file={file} bundle={bundle} registry={registry} onFile={checkFile} />
+      <WithoutUs file={file} bundle={bundle} registry={registry} verifyTo={verifyTo} onFile={checkFile}>
+        <ReceiptCheck key={fileName} verification={verification} onText={checkReceipts} level={3} />
+      </WithoutUs>
     </section>
   );
 }
 
-type WithoutUsProps = Pick<Publication, 'file' | 'bundle' | 'registry'> & { onFile: (file: File) => void };
+type WithoutUsProps = Pick<Publication, 'file' | 'bundle' | 'registry'> & {
+  verifyTo: string;
+  onFile: (file: File) => void;
+  children: ReactNode;
+};
 
-function WithoutUs({ file, bundle, registry, onFile }: WithoutUsProps) {
+function WithoutUs({ file, bundle, registry, verifyTo, onFile, children }: WithoutUsProps) {
   return (
     <div className="flex min-w-0 flex-col gap-8">
       <section aria-labelledby="without-us" className="flex flex-col gap-3 border-t-2 border-ink pt-4">
@@ -56,6 +71,9 @@ function WithoutUs({ file, bundle, registry, onFile }: WithoutUsProps) {
           {'Rscript recompute.R\nopenssl ts -verify …\nsha256sum study.json'}
         </pre>
         <FileDrop onFile={onFile} />
+        <p className="text-soft print:hidden">
+          <Link to={verifyTo}>Any Fairlead server</Link> checks it as well, this one or another.
+        </p>
         <p className="text-soft">SHA-256 of the document in it, study.json</p>
         <code className="break-all">{file.digest}</code>
         <div className="flex flex-wrap gap-3">
@@ -66,12 +84,8 @@ function WithoutUs({ file, bundle, registry, onFile }: WithoutUsProps) {
         </div>
         <Link to={registry}>Every protocol that this publisher has sealed</Link>
       </section>
-      <section aria-labelledby="not-shown" className="flex flex-col gap-2 border-t-2 border-ink pt-4">
-        <h3 id="not-shown" className="text-base font-bold">
-          What no software can show
-        </h3>
-        <p className="text-soft">{notShown} Repeating the test is the cure.</p>
-      </section>
+      {children}
+      <NotShown level={3} />
     </div>
   );
 }

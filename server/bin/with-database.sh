@@ -1,5 +1,5 @@
 #!/usr/bin/env bash
-# npm run audit: verifies every record of the database, with the server running or not.
+# Runs a program over the database, with the server running or not: with-database.sh PROGRAM [ARGUMENT ...]
 set -euo pipefail
 cd "$(dirname "${BASH_SOURCE[0]}")/../.."
 # shellcheck source=server/bin/machine.sh
@@ -18,7 +18,7 @@ finish() {
 trap finish EXIT
 trap 'exit 130' INT TERM HUP
 
-# The database of npm start: as it runs, or opened for as long as the audit takes.
+# The database of npm start: as it runs, or opened for as long as the program takes.
 use_own_database() {
   database_home=$PWD/.data
   [[ -d $database_home/mariadb && -s $database_home/database-password ]] ||
@@ -39,4 +39,4 @@ use_own_database() {
 require_node
 load_settings .env
 [[ -n ${DATABASE_URL:-}${DATABASE_HOST:-}${DATABASE_SOCKET:-} ]] || use_own_database
-attend node --import tsx server/bin/audit.ts
+attend node --import tsx "$@"
