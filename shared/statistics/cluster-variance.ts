@@ -14,3 +14,19 @@ export function clusterVariance(residuals: readonly number[], answers: number): 
   const squares = residuals.reduce((sum, residual) => sum + residual * residual, 0);
   return ((clusters / (clusters - 1)) * squares) / (answers * answers);
 }
+
+/**
+ * A cluster's right answers less what the pooled rate expects of it, from whole numbers: exactly 0 where it has its share.
+ *
+ * Taken as right - answers * rate it would be some 1e-16 where nothing varies, and an interval of no width would stand for
+ * one that cannot be had.
+ *
+ * @param right    right answers of the cluster, whole
+ * @param answers  its answers, whole
+ * @param allRight right answers in all, whole
+ * @param all      answers in all, whole, at least 1
+ * @example residual(5, 6, 10, 12) // 0
+ */
+export function residual(right: number, answers: number, allRight: number, all: number): number {
+  return (right * all - answers * allRight) / all;
+}

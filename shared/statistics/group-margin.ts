@@ -1,4 +1,4 @@
-import { clusterVariance } from './cluster-variance.ts';
+import { clusterVariance, residual } from './cluster-variance.ts';
 import { requireBetween, requireWhole } from './domain.ts';
 import { studentTQuantile } from './student-t-quantile.ts';
 
@@ -54,9 +54,10 @@ export function groupUpperLimits(plan: GroupMarginPlan, studies: number, uniform
  */
 export function upperLimitOverTrials(right: readonly number[], listeners: number): number {
   const answers = right.length * listeners;
-  const rate = right.reduce((sum, count) => sum + count, 0) / answers;
+  const allRight = right.reduce((sum, count) => sum + count, 0);
+  const rate = allRight / answers;
   const variance = clusterVariance(
-    right.map((count) => count - listeners * rate),
+    right.map((count) => residual(count, listeners, allRight, answers)),
     answers,
   );
   if (variance === 0) return 1;

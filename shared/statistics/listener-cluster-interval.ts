@@ -1,5 +1,5 @@
 import { clopperPearson, type Interval } from './clopper-pearson.ts';
-import { clusterVariance } from './cluster-variance.ts';
+import { clusterVariance, residual } from './cluster-variance.ts';
 import { requireBetween } from './domain.ts';
 import { type ListenerScore, pooledScore } from './listener-scores.ts';
 import { studentTQuantile } from './student-t-quantile.ts';
@@ -37,7 +37,7 @@ export function listenerClusterInterval(scores: readonly ListenerScore[], confid
   requireBetween('confidence', confidence, 0, 1 - 2e-12, 'open');
   const { successes, trials, rate } = pooledScore(scores, 2);
   const variance = clusterVariance(
-    scores.map((score) => score.successes - score.trials * rate),
+    scores.map((score) => residual(score.successes, score.trials, successes, trials)),
     trials,
   );
   const standardError = Math.sqrt(variance);

@@ -1,5 +1,5 @@
 import type { Interval } from './clopper-pearson.ts';
-import { clusterVariance } from './cluster-variance.ts';
+import { clusterVariance, residual } from './cluster-variance.ts';
 import { requireBetween, requireWhole } from './domain.ts';
 import { studentTQuantile } from './student-t-quantile.ts';
 
@@ -40,9 +40,9 @@ export function trialClusterInterval(answers: readonly SharedAnswer[], confidenc
 
 /** The same before any confidence is chosen. */
 export function trialClusterError(answers: readonly SharedAnswer[]): ClusterError {
-  const rate = rateOf(answers);
-  const residuals = residualsBy(answers, rate, ({ trial }) => trial);
-  return errorOf(rate, clusterVariance(residuals, answers.length), residuals.length - 1);
+  const right = rightOf(answers);
+  const residuals = residualsBy(answers, right, ({ trial }) => trial);
+  return errorOf(right / answers.length, clusterVariance(residuals, answers.length), residuals.length - 1);
 }
 
 /**
@@ -65,18 +65,19 @@ export function twoWayClusterInterval(answers: readonly SharedAnswer[], confiden
 
 /** The same before any confidence is chosen. */
 export function twoWayClusterError(answers: readonly SharedAnswer[]): ClusterError {
-  const rate = rateOf(answers);
-  const byListener = residualsBy(answers, rate, ({ listener }) => listener);
-  const byTrial = residualsBy(answers, rate, ({ trial }) => trial);
-  const byAnswer = answers.map(({ isRight }) => (isRight ? 1 : 0) - rate);
+  const right = rightOf(answers);
+  const byListener = residualsBy(answers, right, ({ listener }) => listener);
+  const byTrial = residualsBy(answers, right, ({ trial }) => trial);
+  const byAnswer = answers.map(({ isRight }) => residual(isRight ? 1 : 0, 1, right, answers.length));
   const [listeners, trials, cells] = [byListener, byTrial, byAnswer].map((residuals) =>
     clusterVariance(residuals, answers.length),
   ) as [number, number, number];
   const variance = Math.max(listeners + trials - cells, listeners, trials);
-  return errorOf(rate, variance, Math.min(byListener.length, byTrial.length) - 1);
+  return errorOf(right / answers.length, variance, Math.min(byListener.length, byTrial.length) - 1);
 }
 
-function rateOf(answers: readonly SharedAnswer[]): number {
+/** Right answers in all. */
+function rightOf(answers: readonly SharedAnswer[]): number {
   requireWhole('number of answers', answers.length, 2, 1_000_000);
   const cells = new Map<string, Set<string>>();
   for (const { trial, listener } of answers) {
@@ -84,20 +85,21 @@ function rateOf(answers: readonly SharedAnswer[]): number {
     if (seen.has(listener)) throw new RangeError('a listener answers a trial once');
     cells.set(trial, seen.add(listener));
   }
-  return answers.filter(({ isRight }) => isRight).length / answers.length;
+  return answers.filter(({ isRight }) => isRight).length;
 }
 
 function residualsBy(
   answers: readonly SharedAnswer[],
-  rate: number,
+  right: number,
   clusterOf: (answer: SharedAnswer) => string,
 ): number[] {
-  const residuals = new Map<string, number>();
+  const counts = new Map<string, { right: number; all: number }>();
   for (const answer of answers) {
     const cluster = clusterOf(answer);
-    residuals.set(cluster, (residuals.get(cluster) ?? 0) + (answer.isRight ? 1 : 0) - rate);
+    const count = counts.get(cluster) ?? { right: 0, all: 0 };
+    counts.set(cluster, { right: count.right + (answer.isRight ? 1 : 0), all: count.all + 1 });
   }
-  return [...residuals.values()];
+  return [...counts.values()].map((count) => residual(count.right, count.all, right, answers.length));
 }
 
 function errorOf(rate: number, variance: number, degreesOfFreedom: number): ClusterError {

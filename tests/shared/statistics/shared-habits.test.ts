@@ -51,4 +51,17 @@ describe('a habit that a panel shares', () => {
       expect(exact).toBeLessThan(leaning === 0.8 ? 0.75 : 0.92);
     }
   });
+
+  it('gives no interval of no width where every trial comes out alike, whatever the rate [T31] [T19]', () => {
+    for (let listeners = 2; listeners <= 24; listeners += 1)
+      for (let right = 0; right <= listeners; right += 1)
+        for (const trials of [2, 5, 16]) {
+          const answers = Array.from({ length: trials * listeners }, (_, index) => ({
+            listener: `L${index % listeners}`,
+            trial: `1/${Math.floor(index / listeners)}`,
+            isRight: index % listeners < right,
+          }));
+          expect(trialClusterInterval(answers, 0.95).interval, `${right} of ${listeners}`).toBeNull();
+        }
+  });
 });
