@@ -24,6 +24,8 @@ export default defineConfig({
           name: 'unit',
           testTimeout: 30_000,
           include: ['tests/shared/**/*.test.ts', 'tests/src/**/*.test.ts', 'tests/guards/**/*.test.ts'],
+          // Two cores are what a small machine has; left alone, one of them would rest.
+          maxWorkers: 2,
         },
       },
       {

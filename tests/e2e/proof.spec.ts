@@ -46,9 +46,13 @@ test('an owner makes the signing key, and replaces it with a reason [K5] [K6] [X
   await expect(retired).toContainText('A laptop was stolen');
   await page.getByRole('searchbox', { name: 'Search by fingerprint' }).fill(first.slice(0, 14));
   await page.getByRole('button', { name: 'Search' }).click();
+  // The field is a new one once the search stands in the address.
+  await page.waitForURL((address) => (address.searchParams.get('q') ?? '').length === 14);
+  await expect(page.getByRole('searchbox', { name: 'Search by fingerprint' })).toHaveValue(first.slice(0, 14));
   await expect(retired).toBeVisible();
   await page.getByRole('searchbox', { name: 'Search by fingerprint' }).fill('zz');
   await page.getByRole('button', { name: 'Search' }).click();
+  await page.waitForURL(/q=zz/);
   await page.getByRole('link', { name: 'Show all retired keys' }).click();
   await expect(retired).toBeVisible();
   await expectAccessible(page, 'proof');
