@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { registeredLevels } from '../levels/registered-levels.ts';
 import { methodIds, methods } from '../methods/methods.ts';
 import { endpoint, managers } from './endpoint.ts';
 import { organisationParams, thingParams } from './organisation-params.ts';
@@ -64,6 +65,8 @@ export const studyDraft = z
     changeS: whole(3, 300, 'seconds'),
     answerS: whole(5, 300, 'seconds'),
     confidence: z.boolean(),
+    /** How level at the load is handled and measured; left out where it is not. */
+    levels: registeredLevels.optional(),
     codeHolderId: z.uuid('Choose the code holder'),
   })
   .check((check) => {

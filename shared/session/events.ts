@@ -1,5 +1,7 @@
 import { z } from 'zod';
 import { cautions, changeSteps, voidReasons } from '../contracts/proctor-live.ts';
+import { registeredLevels } from '../levels/registered-levels.ts';
+import { levelEvents } from './level-events.ts';
 
 // What a session puts on its study's record. Payload shapes are permanent: a change means a new version.
 
@@ -20,6 +22,8 @@ export const sessionPlan = z.strictObject({
   answerMs: z.int(),
   confidence: z.boolean(),
   programme: z.array(z.strictObject({ title: z.string(), start: z.string(), lengthMs: z.int() })),
+  /** Left out where levels are not measured. */
+  levels: registeredLevels.optional(),
 });
 export type SessionPlan = z.output<typeof sessionPlan>;
 
@@ -75,6 +79,7 @@ export const sessionEvents = {
   'server-restarted': z.strictObject({ session }),
   'listener-left': z.strictObject({ session, seat, by: z.enum(['listener', 'proctor']) }),
   'deviation-recorded': z.strictObject({ session: session.nullable(), text: z.string() }),
+  ...levelEvents,
   'session-finished': z.strictObject({ session }),
   'session-abandoned': z.strictObject({
     session,
