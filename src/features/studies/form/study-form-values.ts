@@ -13,6 +13,7 @@ export const newStudyValues: StudyFormValues = {
   methodSettings: [],
   attribute: '',
   samplingFrame: '',
+  separateSpecimens: false,
   cables: [
     { cableId: '', specimenIds: [] },
     { cableId: '', specimenIds: [] },
