@@ -1,5 +1,5 @@
 import { useFormContext } from 'react-hook-form';
-import { rigs } from '#shared/contracts/studies.ts';
+import { rigs } from '#shared/protocol/rig-preset.ts';
 import { CheckboxField } from '../../../ui/checkbox-field.tsx';
 import { NumberField } from '../../../ui/number-field.tsx';
 import { RadioGroupField } from '../../../ui/radio-group-field.tsx';
