@@ -1,12 +1,13 @@
 import { z } from 'zod';
 import { cableKinds } from '../contracts/cables.ts';
-import { rigs, type StudyDraft } from '../contracts/studies.ts';
+import type { StudyDraft } from '../contracts/studies.ts';
 import { canonicalJson } from '../ledger/canonical-json.ts';
 import { digest } from '../ledger/digest.ts';
 import type { MethodChoices } from '../methods/method.ts';
 import { methodOf } from '../methods/methods.ts';
 import type { SessionPlan } from '../session/events.ts';
 import { registeredAnalysis } from './registered-analysis.ts';
+import { rigPreset, rigs } from './rig-preset.ts';
 
 const protocolCable = z.strictObject({
   id: z.uuid(),
@@ -45,6 +46,8 @@ export const protocol = z.strictObject({
   }),
   conduct: z.strictObject({
     rig: z.enum(rigs),
+    /** How a change is made at this rig, whole, as it was when sealed; left out before there were presets. */
+    rigPreset: rigPreset.optional(),
     chain: z.string(),
     changeS: z.int(),
     answerS: z.int(),
@@ -99,6 +102,7 @@ export function protocolFromDraft(
     },
     conduct: {
       rig: draft.rig,
+      ...(draft.rigPreset === undefined ? {} : { rigPreset: draft.rigPreset }),
       chain: draft.chain,
       changeS: draft.changeS,
       answerS: draft.answerS,
@@ -126,6 +130,7 @@ export function sessionPlanOf({ method, design, conduct }: Protocol): SessionPla
     trials: design.trials,
     spares: design.spares,
     rig: conduct.rig,
+    ...(conduct.rigPreset === undefined ? {} : { rigPreset: conduct.rigPreset }),
     changeMs: conduct.changeS * 1000,
     answerMs: conduct.answerS * 1000,
     confidence: design.confidence,

@@ -6,6 +6,7 @@ import { sealedVersions } from '#shared/ledger/protocol-versions.ts';
 import type { Check } from '#shared/ledger/verify.ts';
 import { methodOf, type RegisteredResult } from '#shared/methods/methods.ts';
 import { analysisFacts } from '#shared/protocol/analysis-facts.ts';
+import { presetFacts } from '#shared/protocol/preset-facts.ts';
 import type { Protocol } from '#shared/protocol/protocol.ts';
 import { protocolDifferences } from '#shared/protocol/protocol-differences.ts';
 import type { AnswerContent } from '#shared/session/answer-leaf.ts';
@@ -144,6 +145,7 @@ function factsOf({ design, conduct, analysis, cables, method }: Protocol): Repor
     { label: 'Answer window', value: `${conduct.answerS} s` },
     { label: 'Programme', value: conduct.programme.map(({ title, lengthS }) => `${title} (${lengthS} s)`).join('; ') },
     { label: 'Chain', value: conduct.chain },
+    ...presetFacts(conduct.rigPreset),
   ];
 }
 
