@@ -8,8 +8,10 @@ import { levelReportOf } from '#shared/levels/level-report.ts';
 import { registeredLevelsText } from '#shared/levels/level-words.ts';
 import { methodOf, type RegisteredResult } from '#shared/methods/methods.ts';
 import { analysisFacts } from '#shared/protocol/analysis-facts.ts';
+import { presetFacts } from '#shared/protocol/preset-facts.ts';
 import type { Protocol } from '#shared/protocol/protocol.ts';
 import { protocolDifferences } from '#shared/protocol/protocol-differences.ts';
+import { waysFacts } from '#shared/protocol/ways-to-run.ts';
 import type { AnswerContent } from '#shared/session/answer-leaf.ts';
 import type { BlindingRung } from '#shared/session/blinding-rung.ts';
 import { countedTrials, revealedDraw } from '#shared/session/counted-trials.ts';
@@ -138,6 +140,7 @@ function factsOf({ design, conduct, analysis, cables, method }: Protocol): Repor
     { label: 'Specimens', value: specimens.join('; ') },
     { label: 'Sessions', value: String(design.sessions) },
     { label: 'Listeners per session', value: String(design.listenersPerSession) },
+    ...waysFacts(design),
     ...(design.samplingFrame === undefined ? [] : [{ label: 'Listeners are drawn from', value: design.samplingFrame }]),
     { label: 'Trials per session', value: `${design.trials}, ${design.spares} spare` },
     { label: 'Significance level', value: analysis.alpha },
@@ -147,6 +150,7 @@ function factsOf({ design, conduct, analysis, cables, method }: Protocol): Repor
     { label: 'Programme', value: conduct.programme.map(({ title, lengthS }) => `${title} (${lengthS} s)`).join('; ') },
     { label: 'Level at the load', value: registeredLevelsText(conduct.levels) },
     { label: 'Chain', value: conduct.chain },
+    ...presetFacts(conduct.rigPreset),
   ];
 }
 
