@@ -4,6 +4,7 @@ import { methodOf } from '../methods/methods.ts';
 import { analysisFacts } from './analysis-facts.ts';
 import { presetFacts } from './preset-facts.ts';
 import type { Protocol, ProtocolCable } from './protocol.ts';
+import { waysFacts } from './ways-to-run.ts';
 
 /** A line, and what it means beyond its words: two cables, pieces or people may bear one name. */
 type Line = { label: string; value: string; ids?: string };
@@ -43,6 +44,7 @@ function linesOf(protocol: Protocol, nameOf: (person: string) => string): Line[]
     { label: 'Listeners are drawn from', value: design.samplingFrame ?? '' },
     { label: 'Trials per session', value: String(design.trials) },
     { label: 'Spares', value: `${design.spares} in each session` },
+    ...waysFacts(design),
     { label: 'Significance level', value: analysis.alpha },
     ...analysisFacts(analysis),
     { label: 'Analysis', value: analysis.name },

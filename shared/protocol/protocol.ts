@@ -8,6 +8,7 @@ import { methodOf } from '../methods/methods.ts';
 import type { SessionPlan } from '../session/events.ts';
 import { registeredAnalysis } from './registered-analysis.ts';
 import { rigPreset, rigs } from './rig-preset.ts';
+import { chosenWays, waysToRun } from './ways-to-run.ts';
 
 const protocolCable = z.strictObject({
   id: z.uuid(),
@@ -42,6 +43,7 @@ export const protocol = z.strictObject({
     attribute: z.string().optional(),
     /** Whom the listeners are a sample of; left out where nothing is to be said about people in general. */
     samplingFrame: z.string().optional(),
+    ...waysToRun,
     codeHolder: z.uuid(),
   }),
   conduct: z.strictObject({
@@ -98,6 +100,7 @@ export function protocolFromDraft(
       ...(draft.samplingFrame === undefined || draft.samplingFrame === ''
         ? {}
         : { samplingFrame: draft.samplingFrame }),
+      ...chosenWays(draft),
       codeHolder: draft.codeHolderId,
     },
     conduct: {
@@ -134,6 +137,7 @@ export function sessionPlanOf({ method, design, conduct }: Protocol): SessionPla
     changeMs: conduct.changeS * 1000,
     answerMs: conduct.answerS * 1000,
     confidence: design.confidence,
+    ...chosenWays(design),
     programme: conduct.programme.map(({ title, start, lengthS }) => ({ title, start, lengthMs: lengthS * 1000 })),
   };
 }
