@@ -61,6 +61,7 @@ export function Component() {
           next={next}
           onNext={goOn}
           back={back}
+          levelsTo={view.rehearsal ? null : paths.levels(organisationId, sessionId)}
         />
         <SeatsPanel view={view} clockOffsetMs={clockOffsetMs} actions={console} />
       </div>

@@ -40,6 +40,7 @@ async function rowsOf(tx: Tx, sessions: readonly Session[]): Promise<SessionRow[
       trials: studies.get(studyId)?.draft.trials ?? 0,
       trialsLocked,
       listeners,
+      hasLevels: studies.get(studyId)?.draft.levels !== undefined,
     }),
   );
 }

@@ -1,6 +1,7 @@
 import type { ProctorView } from '#shared/contracts/proctor-live.ts';
 import { Cautions } from './cautions.tsx';
 import { Ended } from './ended.tsx';
+import { LevelsPanel } from './levels-panel.tsx';
 import type { NextAct } from './next-act.ts';
 import { NextActButton } from './next-act-button.tsx';
 import { PauseBanner } from './pause-banner.tsx';
@@ -18,14 +19,19 @@ type ConsoleBodyProps = {
   next: NextAct | null;
   onNext: () => void;
   back: { to: string; label: string };
+  /** Where levels are entered; null in a rehearsal. */
+  levelsTo: string | null;
 };
 
 /** What the proctor does now: what is the matter, the one thing at hand, and the act that ends it. */
-export function ConsoleBody({ view, clockOffsetMs, isLost, actions, next, onNext, back }: ConsoleBodyProps) {
+export function ConsoleBody({ view, clockOffsetMs, isLost, actions, next, onNext, back, levelsTo }: ConsoleBodyProps) {
   return (
     <div className="flex min-w-0 flex-1 flex-col gap-6 px-5 py-7 lg:px-11">
       {isLost ? <LostBanner /> : null}
       {view.paused === null ? null : <PauseBanner pause={view.paused} clockOffsetMs={clockOffsetMs} />}
+      {view.levels === null || levelsTo === null ? null : (
+        <LevelsPanel levels={view.levels} phase={view.phase} levelsTo={levelsTo} actions={actions} />
+      )}
       <Scenery view={view} actions={actions} back={back} />
       <p role="alert" className="border-l-4 border-amber pl-3 font-semibold text-amber empty:hidden">
         {actions.problem}

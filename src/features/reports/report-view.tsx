@@ -10,6 +10,7 @@ import { ReportFigures } from './report-figures.tsx';
 import { ReportFlow } from './report-flow.tsx';
 import { ReportHeads } from './report-heads.tsx';
 import { ReportIncidents } from './report-incidents.tsx';
+import { ReportLevels } from './report-levels.tsx';
 import { ReportListeners } from './report-listeners.tsx';
 import { ReportProtocol } from './report-protocol.tsx';
 import { ReportRecord } from './report-record.tsx';
@@ -47,6 +48,7 @@ export function ReportView({ report, back, actions, proofs }: ReportViewProps) {
       <ReportDistribution nullDistribution={report.nullDistribution} distribution={portrait.distribution} />
       <ReportListeners listeners={portrait.listeners} />
       <ReportChecks checks={portrait.checks} />
+      {report.levels === null ? null : <ReportLevels levels={report.levels} />}
       <ReportFlow flow={report.flow} missingWords={result.missingAnswers} />
       <ReportIncidents
         voids={report.voids}
