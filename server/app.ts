@@ -16,6 +16,7 @@ import { FirstOwner } from './features/first-owner/first-owner.service.ts';
 import { healthRoutes, version } from './features/health/health.routes.ts';
 import { invitationsRoutes } from './features/invitations/invitations.routes.ts';
 import { mailRoutes } from './features/mail/mail.routes.ts';
+import { measurementsRoutes } from './features/measurements/measurements.routes.ts';
 import { peopleRoutes } from './features/people/people.routes.ts';
 import { publicPages } from './features/publications/public-pages.ts';
 import { publicationsRoutes } from './features/publications/publications.routes.ts';
@@ -109,6 +110,7 @@ export function createApp(deps: Deps) {
   peopleRoutes(api, access, deps, consoles);
   invitationsRoutes(api, access, deps);
   cablesRoutes(api, access, deps);
+  measurementsRoutes(api, access, deps);
   studiesRoutes(api, access, deps, sittings);
   codesRoutes(api, access, deps);
   sessionsRoutes(api, access, deps, sittings);

@@ -10,8 +10,8 @@ import { Audits1796141100000 } from './1796141100000-audits.ts';
 import { FrozenPublications1796141200000 } from './1796141200000-frozen-publications.ts';
 import { Registry1796142000000 } from './1796142000000-registry.ts';
 import { ProtocolVersions1796142100000 } from './1796142100000-protocol-versions.ts';
-
 import { Construction1796149000000 } from './1796149000000-construction.ts';
+import { Measurements1796151000000 } from './1796151000000-measurements.ts';
 
 /** Every migration, oldest first. */
 export const migrations = [
@@ -28,4 +28,5 @@ export const migrations = [
   Registry1796142000000,
   ProtocolVersions1796142100000,
   Construction1796149000000,
+  Measurements1796151000000,
 ];
