@@ -62,7 +62,10 @@ export function Component() {
         </Notice>
       )}
       <div className="grid gap-x-16 gap-y-12 lg:grid-cols-[minmax(0,1fr)_22rem]">
-        <div className="flex min-w-0 flex-col gap-10">
+        <section aria-labelledby="values" className="flex min-w-0 flex-col gap-8">
+          <h2 id="values" className="text-xl">
+            Values
+          </h2>
           <MeasuredCurves cable={cable} curves={[measurement]} />
           <details>
             <summary className="inline-block min-h-8 cursor-pointer rounded underline underline-offset-4 hover:decoration-2">
@@ -73,7 +76,7 @@ export function Component() {
               {text}
             </pre>
           </details>
-        </div>
+        </section>
         <MeasurementFacts measurement={measurement} fileHref={fileHref} />
       </div>
       <ConfirmDialog

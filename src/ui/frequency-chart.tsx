@@ -40,7 +40,7 @@ export function FrequencyChart({ caption, quantity, series, format }: FrequencyC
       </p>
       <div role="img" aria-label={`${caption}. The table below has the same figures.`} className="font-mono">
         <ResponsiveContainer width="100%" height={heightPx} minWidth={0}>
-          <LineChart accessibilityLayer={false} margin={{ top: 8, right: 14, bottom: 4, left: 0 }}>
+          <LineChart accessibilityLayer={false} margin={{ top: 8, right: 34, bottom: 4, left: 0 }}>
             <XAxis
               dataKey="frequency"
               type="number"
