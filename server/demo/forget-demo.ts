@@ -12,6 +12,7 @@ import { Organisation } from '../features/organisations/organisation.entity.ts';
 import { PastRole } from '../features/organisations/past-role.entity.ts';
 import { Publication } from '../features/publications/publication.entity.ts';
 import { withdraw } from '../features/publications/publications.service.ts';
+import { RigPreset } from '../features/rig-presets/rig-preset.entity.ts';
 import { User } from '../features/users/user.entity.ts';
 import { OutgoingMail } from '../mail/outgoing-mail.entity.ts';
 import { demoPeople } from './demo-people.ts';
@@ -34,6 +35,7 @@ export async function forgetDemo(deps: Deps, organisationId: string): Promise<vo
     await tx.delete(Measurement, { specimenId: In(specimens.map(({ id }) => id)) });
     await tx.delete(Specimen, ofCables);
     await tx.delete(Cable, { organisationId });
+    await tx.delete(RigPreset, { organisationId });
     await tx.delete(OutgoingMail, { organisationId });
     await tx.delete(Invitation, { organisationId });
     await tx.delete(Attendance, { organisationId });

@@ -5,6 +5,7 @@ import { addSpecimen, createCable, getCable } from '../features/cables/cables.se
 import { addMeasurement } from '../features/measurements/measurements.service.ts';
 import { Membership } from '../features/organisations/membership.entity.ts';
 import { Organisation } from '../features/organisations/organisation.entity.ts';
+import { createPreset } from '../features/rig-presets/rig-presets.service.ts';
 import { planSession } from '../features/sessions/sessions.service.ts';
 import { closeStudy } from '../features/studies/closing.service.ts';
 import { createStudy } from '../features/studies/studies.service.ts';
@@ -16,6 +17,7 @@ import { Sittings } from '../live/sittings.ts';
 import { demoMeasurements } from './demo-measurements.ts';
 import { demoPeople } from './demo-people.ts';
 import {
+  benchPreset,
   closedPreference,
   closedStudy,
   closedWithout,
@@ -156,6 +158,7 @@ export async function loadDemo(deps: Deps): Promise<void> {
   const people = await makePeople(past, organisationId);
   const cables = await makeCables(past, organisationId, people.manager);
   const codeHolderId = people.codeHolder;
+  await createPreset(past, organisationId, benchPreset);
   await runPublishedStudy(past, clock, organisationId, people, { ...publishedStudy, cables, codeHolderId });
   clock.advance(deps.clock.now() - 3 * dayMs - clock.now());
   const of = (free: Omit<StudyDraft, 'cables' | 'codeHolderId'>): StudyDraft => ({ ...free, cables, codeHolderId });

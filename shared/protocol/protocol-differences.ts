@@ -2,7 +2,9 @@ import type { ProtocolDifference } from '../contracts/protocol-versions.ts';
 import { canonicalJson } from '../ledger/canonical-json.ts';
 import { methodOf } from '../methods/methods.ts';
 import { analysisFacts } from './analysis-facts.ts';
+import { presetFacts } from './preset-facts.ts';
 import type { Protocol, ProtocolCable } from './protocol.ts';
+import { waysFacts } from './ways-to-run.ts';
 
 /** A line, and what it means beyond its words: two cables, pieces or people may bear one name. */
 type Line = { label: string; value: string; ids?: string };
@@ -42,6 +44,7 @@ function linesOf(protocol: Protocol, nameOf: (person: string) => string): Line[]
     { label: 'Listeners are drawn from', value: design.samplingFrame ?? '' },
     { label: 'Trials per session', value: String(design.trials) },
     { label: 'Spares', value: `${design.spares} in each session` },
+    ...waysFacts(design),
     { label: 'Significance level', value: analysis.alpha },
     ...analysisFacts(analysis),
     { label: 'Analysis', value: analysis.name },
@@ -50,6 +53,7 @@ function linesOf(protocol: Protocol, nameOf: (person: string) => string): Line[]
       value: `${excerpt}, ${lengthS} s${start === '' ? '' : ` from ${start}`}`,
     })),
     { label: 'Rig', value: rigWords[conduct.rig] },
+    ...presetFacts(conduct.rigPreset),
     { label: 'Chain', value: conduct.chain },
     { label: 'Every change', value: `${conduct.changeS} s, real or not` },
     { label: 'Answer window', value: `${conduct.answerS} s` },

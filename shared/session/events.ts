@@ -1,5 +1,7 @@
 import { z } from 'zod';
-import { cautions, changeSteps, voidReasons } from '../contracts/proctor-live.ts';
+import { cautions, stepKinds, voidReasons } from '../contracts/proctor-live.ts';
+import { rigPreset } from '../protocol/rig-preset.ts';
+import { waysToRun } from '../protocol/ways-to-run.ts';
 
 // What a session puts on its study's record. Payload shapes are permanent: a change means a new version.
 
@@ -16,9 +18,12 @@ export const sessionPlan = z.strictObject({
   trials: z.int(),
   spares: z.int(),
   rig: z.enum(['loudspeaker', 'line', 'headphone']),
+  /** How a change is made, as the protocol froze it; left out where it names no preset. */
+  rigPreset: rigPreset.optional(),
   changeMs: z.int(),
   answerMs: z.int(),
   confidence: z.boolean(),
+  ...waysToRun,
   programme: z.array(z.strictObject({ title: z.string(), start: z.string(), lengthMs: z.int() })),
 });
 export type SessionPlan = z.output<typeof sessionPlan>;
@@ -46,7 +51,7 @@ export const sessionEvents = {
   'contribution-dropped': z.strictObject({ session, seat }),
   'draw-fixed': z.strictObject({ session, contributors: z.array(seat) }),
   'trial-opened': z.strictObject({ session, trial, excerpt: z.int(), seats: z.array(seat) }),
-  'step-confirmed': z.strictObject({ session, trial, presentation: z.int(), step: z.enum(changeSteps) }),
+  'step-confirmed': z.strictObject({ session, trial, presentation: z.int(), step: z.enum(stepKinds) }),
   'listening-started': z.strictObject({
     session,
     trial,

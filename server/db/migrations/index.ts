@@ -11,7 +11,8 @@ import { FrozenPublications1796141200000 } from './1796141200000-frozen-publicat
 import { Registry1796142000000 } from './1796142000000-registry.ts';
 import { ProtocolVersions1796142100000 } from './1796142100000-protocol-versions.ts';
 import { Construction1796149000000 } from './1796149000000-construction.ts';
-import { Measurements1796151000000 } from './1796151000000-measurements.ts';
+import { RigPresets1796151000000 } from './1796151000000-rig-presets.ts';
+import { Measurements1796151400000 } from './1796151400000-measurements.ts';
 
 /** Every migration, oldest first. */
 export const migrations = [
@@ -28,5 +29,6 @@ export const migrations = [
   Registry1796142000000,
   ProtocolVersions1796142100000,
   Construction1796149000000,
-  Measurements1796151000000,
+  RigPresets1796151000000,
+  Measurements1796151400000,
 ];

@@ -6,8 +6,10 @@ import { sealedVersions } from '#shared/ledger/protocol-versions.ts';
 import type { Check } from '#shared/ledger/verify.ts';
 import { methodOf, type RegisteredResult } from '#shared/methods/methods.ts';
 import { analysisFacts } from '#shared/protocol/analysis-facts.ts';
+import { presetFacts } from '#shared/protocol/preset-facts.ts';
 import type { Protocol } from '#shared/protocol/protocol.ts';
 import { protocolDifferences } from '#shared/protocol/protocol-differences.ts';
+import { waysFacts } from '#shared/protocol/ways-to-run.ts';
 import type { AnswerContent } from '#shared/session/answer-leaf.ts';
 import type { BlindingRung } from '#shared/session/blinding-rung.ts';
 import { countedTrials, revealedDraw } from '#shared/session/counted-trials.ts';
@@ -136,6 +138,7 @@ function factsOf({ design, conduct, analysis, cables, method }: Protocol): Repor
     { label: 'Specimens', value: specimens.join('; ') },
     { label: 'Sessions', value: String(design.sessions) },
     { label: 'Listeners per session', value: String(design.listenersPerSession) },
+    ...waysFacts(design),
     ...(design.samplingFrame === undefined ? [] : [{ label: 'Listeners are drawn from', value: design.samplingFrame }]),
     { label: 'Trials per session', value: `${design.trials}, ${design.spares} spare` },
     { label: 'Significance level', value: analysis.alpha },
@@ -144,6 +147,7 @@ function factsOf({ design, conduct, analysis, cables, method }: Protocol): Repor
     { label: 'Answer window', value: `${conduct.answerS} s` },
     { label: 'Programme', value: conduct.programme.map(({ title, lengthS }) => `${title} (${lengthS} s)`).join('; ') },
     { label: 'Chain', value: conduct.chain },
+    ...presetFacts(conduct.rigPreset),
   ];
 }
 

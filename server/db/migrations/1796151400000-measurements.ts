@@ -1,7 +1,7 @@
 import type { MigrationInterface, QueryRunner } from 'typeorm';
 
-export class Measurements1796151000000 implements MigrationInterface {
-  name = 'Measurements1796151000000';
+export class Measurements1796151400000 implements MigrationInterface {
+  name = 'Measurements1796151400000';
 
   async up(runner: QueryRunner): Promise<void> {
     await runner.query(
