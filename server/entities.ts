@@ -8,6 +8,7 @@ import { Cable } from './features/cables/cable.entity.ts';
 import { Specimen } from './features/cables/specimen.entity.ts';
 import { Invitation } from './features/invitations/invitation.entity.ts';
 import { Measurement } from './features/measurements/measurement.entity.ts';
+import { LevelDuty } from './features/levels/level-duty.entity.ts';
 import { Membership } from './features/organisations/membership.entity.ts';
 import { Organisation } from './features/organisations/organisation.entity.ts';
 import { PastRole } from './features/organisations/past-role.entity.ts';
@@ -62,5 +63,6 @@ export const entities = [
   PastRole,
   Listener,
   Attendance,
+  LevelDuty,
   RigPreset,
 ];

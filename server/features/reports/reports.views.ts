@@ -4,6 +4,8 @@ import type { Finding } from '#shared/findings/finding.ts';
 import type { Entry } from '#shared/ledger/chain.ts';
 import { sealedVersions } from '#shared/ledger/protocol-versions.ts';
 import type { Check } from '#shared/ledger/verify.ts';
+import { levelReportOf } from '#shared/levels/level-report.ts';
+import { registeredLevelsText } from '#shared/levels/level-words.ts';
 import { methodOf, type RegisteredResult } from '#shared/methods/methods.ts';
 import { analysisFacts } from '#shared/protocol/analysis-facts.ts';
 import { presetFacts } from '#shared/protocol/preset-facts.ts';
@@ -146,6 +148,7 @@ function factsOf({ design, conduct, analysis, cables, method }: Protocol): Repor
     { label: 'Change', value: `${conduct.changeS} s, real or sham` },
     { label: 'Answer window', value: `${conduct.answerS} s` },
     { label: 'Programme', value: conduct.programme.map(({ title, lengthS }) => `${title} (${lengthS} s)`).join('; ') },
+    { label: 'Level at the load', value: registeredLevelsText(conduct.levels) },
     { label: 'Chain', value: conduct.chain },
     ...presetFacts(conduct.rigPreset),
   ];
@@ -194,6 +197,10 @@ export function reportView(source: ReportSource): Report {
     nullDistribution: method.nullDistribution(countedTrials(method, states, key, answers)),
     rung: { name: rung.name, why: rung.why },
     conditions: conditionsOf(source),
+    levels:
+      protocol.conduct.levels === undefined
+        ? null
+        : levelReportOf(entries, key.codeKey.rows, protocol.conduct.levels, namesOf(protocol)),
     flow: flowOf(source),
     sessions: states.map((state) => sessionView(source, state, key)),
     voids: voidsOf(entries),
