@@ -30,7 +30,7 @@ export const migrations = [
   Registry1796142000000,
   ProtocolVersions1796142100000,
   Construction1796149000000,
-  LevelDuties1796152000000,
   RigPresets1796151000000,
   Measurements1796151400000,
+  LevelDuties1796152000000,
 ];
