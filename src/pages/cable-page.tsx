@@ -64,6 +64,7 @@ export function Component() {
         back={{ to: paths.cables(organisationId), label: 'All cables' }}
         actions={
           <>
+            <LinkButton to={paths.compareCables(organisationId, id)}>Compare</LinkButton>
             <LinkButton to={paths.editCable(organisationId, id)}>Change the design</LinkButton>
             <Button busy={archive.isPending} busyLabel="Saving" onClick={() => setArchived(!cable.archived)}>
               {cable.archived ? 'Bring back' : 'Archive'}
