@@ -29,7 +29,7 @@ export function databaseKeeper(deps: Deps): Keeper {
         sessionId: session.id,
         contributions: contributionsOf(state),
         method,
-        trials: state.plan.trials + state.plan.spares,
+        state,
         trial: state.trial.trial,
         presentation,
       });

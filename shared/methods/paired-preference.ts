@@ -8,6 +8,7 @@ import type { PreferenceResult } from '../findings/preference-result.ts';
 import { type PreferenceChoice, preferredCable } from '../findings/preference-trials.ts';
 import { marginText } from '../protocol/registered-analysis.ts';
 import { twoSidedPlan } from '../statistics/planned-test.ts';
+import { dueAnswers } from './due-answers.ts';
 import { fittedAtFirst, spokenPlace } from './familiarisation.ts';
 import type { AnswerOption, Method, MethodChoices, ScoredAnswer, ScoredTrial } from './method.ts';
 
@@ -134,6 +135,16 @@ export const pairedPreference: Method<PreferenceResult> = {
     countHeader: (cables) => `For ${cables[0]}`,
     count: (answers, truth) =>
       `${forFirstCable(answers, truth)} of ${answers.filter(({ choice }) => choice !== null && choice !== 'none').length}`,
+    rates: (cables) => [
+      {
+        label: `For ${cables[0]}`,
+        due: (trial) =>
+          dueAnswers(
+            { ...trial, answers: trial.answers.filter(({ choice }) => choice !== null && choice !== 'none') },
+            (choice) => preferredCable(place(trial.truth), choiceOf(choice)) === 0,
+          ),
+      },
+    ],
   },
   portray: preferencePortrait,
   source:

@@ -1,5 +1,7 @@
-import { concatBytes, digest, hexToBytes, keyedDigest, utf8ToBytes } from '../ledger/digest.ts';
+import { digest, hexToBytes } from '../ledger/digest.ts';
 import type { Method } from '../methods/method.ts';
+import { fairNumber } from './fair-number.ts';
+import { type CheckShape, drawKinds, type TrialKind } from './trial-kinds.ts';
 
 // docs/spec/blind.md describes this construction with test vectors, so that anyone can recompute a draw.
 
@@ -14,29 +16,6 @@ export function drawSeed(secret: string, contributions: readonly string[]): stri
   return digest('drawSeed', hexToBytes(secret), ...contributions.map((value) => hexToBytes(value)));
 }
 
-/**
- * A whole number from 0 to `below` - 1, each equally likely, from the seed and a label.
- *
- * HMAC-SHA-256(seed, label, counter) in counter mode gives bytes; those at or above the largest multiple of `below`
- * are passed over, so that no value is favoured.
- *
- * @param below 1 to 256
- * @throws RangeError outside that range
- */
-export function fairNumber(seed: string, label: string, below: number): number {
-  if (!Number.isInteger(below) || below < 1 || below > 256)
-    throw new RangeError('below must be a whole number, 1 to 256');
-  const key = hexToBytes(seed);
-  const limit = 256 - (256 % below);
-  for (let counter = 0; ; counter += 1) {
-    const block = keyedDigest(
-      key,
-      concatBytes(utf8ToBytes(label), new Uint8Array([counter >>> 24, counter >>> 16, counter >>> 8, counter])),
-    );
-    for (const byte of block) if (byte < limit) return byte % below;
-  }
-}
-
 /** What a session's draw fixes: which cable has the method's first side, which specimens are used, what every trial's truth is. */
 export type Draw = {
   /** The protocol's cable that has the method's first side: A, or what familiarisation presents first. */
@@ -45,9 +24,26 @@ export type Draw = {
   readonly specimens: readonly [number, number];
   /** One truth per trial, spares included; trial 1 comes first. */
   readonly truths: readonly string[];
+  /** What each registered trial is, spares left out; there only where the study has check trials. */
+  readonly kinds?: readonly TrialKind[] | undefined;
+  /** For each check cable the place of the specimen used, from 0; there with the kinds. */
+  readonly checkSpecimens?: readonly number[] | undefined;
 };
 
-export type DrawShape = { readonly specimenCounts: readonly [number, number]; readonly trials: number };
+export type DrawShape = {
+  readonly specimenCounts: readonly [number, number];
+  /** Spares included. */
+  readonly trials: number;
+  readonly checks?:
+    | {
+        readonly shape: CheckShape;
+        /** Of each check cable. */
+        readonly specimenCounts: readonly number[];
+        /** Registered trials: without the spares. */
+        readonly trials: number;
+      }
+    | undefined;
+};
 
 /** The whole draw of a session: a pure function of its seed, the method and the protocol's shape. */
 export function drawSession(seed: string, method: Pick<Method, 'truths'>, shape: DrawShape): Draw {
@@ -63,5 +59,13 @@ export function drawSession(seed: string, method: Pick<Method, 'truths'>, shape:
       fairNumber(seed, 'specimen/2', shape.specimenCounts[1]),
     ],
     truths,
+    ...(shape.checks === undefined
+      ? {}
+      : {
+          kinds: drawKinds(seed, shape.checks.trials, shape.checks.shape),
+          checkSpecimens: shape.checks.specimenCounts.map((count, index) =>
+            fairNumber(seed, `check-specimen/${index + 1}`, count),
+          ),
+        }),
   };
 }

@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { cautions, changeSteps, voidReasons } from '../contracts/proctor-live.ts';
+import { checkShape } from './trial-kinds.ts';
 
 // What a session puts on its study's record. Payload shapes are permanent: a change means a new version.
 
@@ -13,8 +14,11 @@ export const sessionPlan = z.strictObject({
   method: z.string(),
   methodSettings: z.array(z.string()).optional(),
   attribute: z.string().optional(),
+  /** Check trials included: nothing in a session tells them apart. */
   trials: z.int(),
   spares: z.int(),
+  /** How many of the trials are check trials; left out where there are none. */
+  checks: checkShape.optional(),
   rig: z.enum(['loudspeaker', 'line', 'headphone']),
   changeMs: z.int(),
   answerMs: z.int(),

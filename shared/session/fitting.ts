@@ -1,22 +1,37 @@
 import type { Method } from '../methods/method.ts';
 import type { CodeKeyRow } from './commitments.ts';
 import { type Draw, drawSeed, drawSession } from './draw.ts';
+import type { SessionPlan } from './events.ts';
+import { standsFor } from './progress.ts';
+import type { SessionState } from './state.ts';
+import { cableFitted, firstCheckCable, type TrialKind } from './trial-kinds.ts';
 
 export type DrawnSession = {
   readonly secret: string;
   readonly contributions: readonly string[];
   readonly method: Method;
-  readonly trials: number;
+  readonly plan: Pick<SessionPlan, 'trials' | 'spares' | 'checks'>;
   readonly rows: readonly CodeKeyRow[];
 };
 
 const rowsOfCable = (rows: readonly CodeKeyRow[], cable: number) => rows.filter((row) => row.cable === cable);
 
 /** A session's draw from its secret, its contributions and the study's code key. */
-export function drawOf({ secret, contributions, method, trials, rows }: DrawnSession): Draw {
+export function drawOf({ secret, contributions, method, plan, rows }: DrawnSession): Draw {
+  const { trials, spares, checks } = plan;
+  const specimensOf = (cable: number) => rowsOfCable(rows, cable).length;
   return drawSession(drawSeed(secret, contributions), method, {
-    specimenCounts: [rowsOfCable(rows, 0).length, rowsOfCable(rows, 1).length],
-    trials,
+    specimenCounts: [specimensOf(0), specimensOf(1)],
+    trials: trials + spares,
+    ...(checks === undefined
+      ? {}
+      : {
+          checks: {
+            shape: checks,
+            specimenCounts: checks.steps.map((_, step) => specimensOf(firstCheckCable + step)),
+            trials,
+          },
+        }),
   });
 }
 
@@ -27,12 +42,33 @@ export function truthOf(draw: Draw, trial: number): string {
   return truth;
 }
 
+/** What a trial is; a spare is what the void trial was that it stands for. The familiarisation trial (0) is a main one. */
+export function kindOf(
+  draw: Pick<Draw, 'kinds'>,
+  state: Pick<SessionState, 'plan' | 'ended'>,
+  trial: number,
+): TrialKind {
+  if (draw.kinds === undefined || trial === 0) return 'main';
+  const kind = draw.kinds[standsFor(state, trial) - 1];
+  if (kind === undefined) throw new RangeError(`trial ${trial} is not in the draw`);
+  return kind;
+}
+
+export type FittingQuestion = Omit<DrawnSession, 'plan'> & {
+  readonly state: Pick<SessionState, 'plan' | 'ended'>;
+  readonly trial: number;
+  readonly presentation: string;
+};
+
 /** The blind code to be fitted for a presentation of a trial. */
-export function codeFitted(question: DrawnSession & { readonly trial: number; readonly presentation: string }): string {
-  const { method, rows, trial, presentation } = question;
-  const draw = drawOf(question);
-  const cable = method.fitted(presentation, trial === 0 ? null : truthOf(draw, trial), draw.firstSide);
-  const row = rowsOfCable(rows, cable)[draw.specimens[cable]];
+export function codeFitted(question: FittingQuestion): string {
+  const { method, rows, state, trial, presentation } = question;
+  const { plan } = state;
+  const draw = drawOf({ ...question, plan });
+  const place = method.fitted(presentation, trial === 0 ? null : truthOf(draw, trial), draw.firstSide);
+  const cable = cableFitted(place, kindOf(draw, state, trial), plan.checks?.reference ?? 0);
+  const specimens = [...draw.specimens, ...(draw.checkSpecimens ?? [])];
+  const row = rowsOfCable(rows, cable)[specimens[cable] ?? -1];
   if (row === undefined) throw new RangeError('the code key has no such specimen');
   return row.code;
 }
