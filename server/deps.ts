@@ -1,6 +1,7 @@
 import type { Logger } from 'pino';
 import type { DataSource } from 'typeorm';
 import type { Config } from './config.ts';
+import type { FileStore } from './files/file-store.ts';
 import type { TimestampAuthority } from './timestamps/authority.ts';
 
 /** What randomness is for. Production draws all of it from the operating system; tests give each purpose a source of its own. */
@@ -41,5 +42,7 @@ export type Deps = {
   readonly random: Random;
   /** Who stamps the time on signed heads; null leaves them waiting. */
   readonly timestamps: TimestampAuthority | null;
+  /** Where uploaded files are kept. */
+  readonly files: FileStore;
   readonly log: Logger;
 };

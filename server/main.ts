@@ -8,6 +8,7 @@ import { closeDemo } from './demo/close-demo.ts';
 import { demoPeople } from './demo/demo-people.ts';
 import { loadDemo } from './demo/load-demo.ts';
 import type { Deps } from './deps.ts';
+import { folderStore } from './files/file-store.ts';
 import { enterEarlierProtocols } from './ledger/registry-log.ts';
 import { requireOpenableKeys } from './ledger/signing-keys.ts';
 import { pageAddresses } from './mail/page-addresses.ts';
@@ -31,7 +32,8 @@ async function main(): Promise<void> {
   const db = createDataSource(config.database);
   const timestamps = await step('time authority', () => timestampAuthority(config));
   const log = pino({ level: config.logLevel });
-  const deps: Deps = { config, db, clock: systemClock, random: systemRandom, timestamps, log };
+  const files = folderStore(join(config.dataDir, 'files'));
+  const deps: Deps = { config, db, clock: systemClock, random: systemRandom, timestamps, files, log };
   await step('migrations', async () => {
     await db.initialize();
     await db.runMigrations();

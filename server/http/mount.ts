@@ -1,13 +1,24 @@
 import type { Request, RequestHandler, Response, Router } from 'express';
 import * as core from 'zod/v4/core';
-import type { BodyOf, Endpoint, ParamsOf, QueryOf, ReplyOf } from '#shared/contracts/endpoint.ts';
+import {
+  type BodyOf,
+  type Endpoint,
+  type ParamsOf,
+  type QueryOf,
+  type ReplyOf,
+  savedFile,
+} from '#shared/contracts/endpoint.ts';
 import { type InputFault, Problem } from '#shared/problem.ts';
+import { receiveUpload, type Upload } from '../files/receive-upload.ts';
+import { sendFile } from '../files/send-file.ts';
 import { type Access, type Caller, callerFor } from './access.ts';
 
 export type Handled<E> = {
   params: ParamsOf<E>;
   query: QueryOf<E>;
   body: BodyOf<E>;
+  /** The file that came with it; null where its contract takes none, or none was sent. */
+  upload: Upload | null;
   request: Request;
   response: Response;
 };
@@ -28,7 +39,7 @@ function faultsOf(error: core.$ZodError, where: string): InputFault[] {
   });
 }
 
-function parseInput(contract: Endpoint, request: Request) {
+function parseInput(contract: Endpoint, request: Request, upload: Upload | null) {
   const faults: InputFault[] = [];
   const read = (schema: core.$ZodType | undefined, value: unknown, where: string): unknown => {
     if (schema === undefined) return undefined;
@@ -42,6 +53,8 @@ function parseInput(contract: Endpoint, request: Request) {
   if (faults.length > 0) throw new Problem('not-found', 'There is nothing at this address.');
   const query = read(contract.query, request.query, '/query');
   const body = read(contract.body, request.body, '');
+  if (contract.upload?.isRequired && upload === null) faults.push({ pointer: '/file', detail: 'Choose a file' });
+  if (upload?.bytes.length === 0) faults.push({ pointer: '/file', detail: 'This file is empty' });
   if (faults.length > 0) throw new Problem('invalid-input', 'Please mend what is marked; nothing was saved.', faults);
   return { params, query, body };
 }
@@ -86,8 +99,12 @@ export function mount<E extends Endpoint>(
   const verb = contract.method.toLowerCase() as 'get' | 'post' | 'put' | 'delete';
   router[verb](contract.path, ...before, async (request, response) => {
     const who = await callerFor(access, contract, request);
-    const input = parseInput(contract, request);
-    const value = await handler({ ...input, request, response } as Handled<E>, who);
-    response.json(parseReply(contract, value, access));
+    const upload =
+      contract.upload === undefined ? null : await receiveUpload(request, response, contract.upload.limitBytes);
+    const input = parseInput(contract, request, upload);
+    const value = await handler({ ...input, upload, request, response } as Handled<E>, who);
+    const reply = parseReply(contract, value, access);
+    if (contract.isDownload) sendFile(response, savedFile.parse(reply));
+    else response.json(reply);
   });
 }

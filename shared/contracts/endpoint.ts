@@ -1,3 +1,4 @@
+import * as z from 'zod/mini';
 import type * as core from 'zod/v4/core';
 
 /** The roles of a member of an organisation. */
@@ -31,8 +32,18 @@ export type Endpoint<
   params?: P;
   query?: Q;
   body?: B;
+  /**
+   * A file comes with the body: the part `file` of a multipart message whose part `body` holds the body as JSON. Without a
+   * file, where none is required, the body is sent as JSON like any other.
+   */
+  upload?: { limitBytes: number; isRequired: boolean };
+  /** The reply (`savedFile`) is sent as a file to be saved, not as JSON. */
+  isDownload?: true;
   reply: R;
 };
+
+/** The reply of an endpoint that is a download: text is sent as UTF-8. */
+export const savedFile = z.strictObject({ name: z.string(), bytes: z.instanceof(Uint8Array) });
 
 /** Identity; fixes the types of one contract so that server and client share it. */
 export function endpoint<P extends Schema, Q extends Schema, B extends Schema, R extends Schema>(

@@ -3,10 +3,12 @@ import type { BodyInput, Endpoint, ParamsOf, QueryOf, ReplyOf } from '#shared/co
 import { Problem } from '#shared/problem.ts';
 
 type Part<Name extends string, T> = undefined extends T ? { [K in Name]?: never } : { [K in Name]: T };
+/** A file goes with the input of a contract that takes an upload. */
+type FileInput = { file?: File };
 type QueryInput<E> = QueryOf<E> extends undefined ? { query?: never } : { query?: Partial<QueryOf<E>> };
 
 /** What a call of an endpoint needs: its parameters, query and body, as far as its contract has them. */
-export type CallInput<E> = Part<'params', ParamsOf<E>> & Part<'body', BodyInput<E>> & QueryInput<E>;
+export type CallInput<E> = Part<'params', ParamsOf<E>> & Part<'body', BodyInput<E>> & QueryInput<E> & FileInput;
 
 /** Where an endpoint is, for a link that downloads what it replies. */
 export function addressOf(contract: Endpoint, params: object, query: object = {}): string {
@@ -41,10 +43,21 @@ export async function call<E extends Endpoint>(
   input: CallInput<E>,
   signal?: AbortSignal,
 ): Promise<ReplyOf<E>> {
-  const { params = {}, query = {}, body } = input as { params?: object; query?: object; body?: unknown };
+  const {
+    params = {},
+    query = {},
+    body,
+    file,
+  } = input as {
+    params?: object;
+    query?: object;
+    body?: unknown;
+    file?: File;
+  };
   const init: RequestInit = { method: contract.method, headers: { accept: 'application/json' } };
   if (signal !== undefined) init.signal = signal;
-  if (body !== undefined) {
+  if (file !== undefined) init.body = messageOf(file, body);
+  else if (body !== undefined) {
     init.body = JSON.stringify(body);
     init.headers = { accept: 'application/json', 'content-type': 'application/json' };
   }
@@ -55,6 +68,13 @@ export async function call<E extends Endpoint>(
   const reply = core.safeParse(contract.reply, value);
   if (!reply.success) throw new Problem('internal', 'The answer could not be read. Please reload the page.');
   return reply.data as ReplyOf<E>;
+}
+
+function messageOf(file: File, body: unknown): FormData {
+  const message = new FormData();
+  message.set('body', JSON.stringify(body ?? {}));
+  message.set('file', file);
+  return message;
 }
 
 function parseJson(text: string): unknown {

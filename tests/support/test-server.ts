@@ -1,8 +1,12 @@
 import 'reflect-metadata';
+import { mkdtemp, rm } from 'node:fs/promises';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
 import { pino } from 'pino';
 import { type Config, readConfig } from '../../server/config.ts';
 import { createDataSource } from '../../server/db/data-source.ts';
 import type { Clock, Deps, Random } from '../../server/deps.ts';
+import { folderStore } from '../../server/files/file-store.ts';
 import type { OwnCertificate } from '../../server/network/own-certificate.ts';
 import { serve } from '../../server/serve.ts';
 import { systemClock, systemRandom } from '../../server/system.ts';
@@ -41,12 +45,14 @@ export async function testServer(
   const db = createDataSource(config.database);
   await db.initialize();
   if (database.isNew) await db.runMigrations();
+  const folder = await mkdtemp(join(tmpdir(), 'fairlead-test-'));
   const deps: Deps = {
     config,
     db,
     clock: given.clock ?? systemClock,
     random: given.random ?? systemRandom,
     timestamps: given.timestamps ?? null,
+    files: folderStore(join(folder, 'files')),
     log: pino({ level: config.logLevel }),
   };
   const server = await serve(deps, given.certificate);
@@ -57,6 +63,7 @@ export async function testServer(
     stop: async () => {
       await server.stop();
       await db.destroy();
+      await rm(folder, { recursive: true });
       await database.giveBack();
     },
   };

@@ -26,6 +26,14 @@ function parametersOf(schema: z.core.$ZodType | undefined, where: 'path' | 'quer
   }));
 }
 
+/** JSON; and with a file a message of two parts. */
+function bodyContent({ upload }: Endpoint, body: JsonSchema) {
+  if (upload === undefined) return { 'application/json': { schema: body } };
+  const file = { type: 'string', format: 'binary', description: `At most ${upload.limitBytes} bytes` };
+  const parts = { 'multipart/form-data': { schema: { type: 'object', properties: { file, body } } } };
+  return upload.isRequired ? parts : { ...parts, 'application/json': { schema: body } };
+}
+
 function operationOf(contract: Endpoint) {
   const { summary, access, path } = contract;
   const parameters = [...parametersOf(contract.params, 'path'), ...parametersOf(contract.query, 'query')];
@@ -40,13 +48,15 @@ function operationOf(contract: Endpoint) {
       : {
           requestBody: {
             required: true,
-            content: { 'application/json': { schema: schemaOf(contract.body, 'input') } },
+            content: bodyContent(contract, schemaOf(contract.body, 'input')),
           },
         }),
     responses: {
       200: {
         description: 'Done',
-        content: { 'application/json': { schema: schemaOf(contract.reply, 'output') } },
+        content: contract.isDownload
+          ? { 'application/octet-stream': { schema: { type: 'string', format: 'binary' } } }
+          : { 'application/json': { schema: schemaOf(contract.reply, 'output') } },
       },
       default: { $ref: '#/components/responses/Refused' },
     },
