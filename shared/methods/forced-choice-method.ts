@@ -14,7 +14,16 @@ import type { Method, ScoredAnswer, ScoredTrial, TrialWords } from './method.ts'
 
 type Scoring = Pick<
   Method<ForcedChoiceResult>,
-  'registered' | 'margin' | 'planned' | 'sensitivity' | 'analyse' | 'nullDistribution' | 'finding' | 'plan' | 'portray'
+  | 'takesNoSteps'
+  | 'registered'
+  | 'margin'
+  | 'planned'
+  | 'sensitivity'
+  | 'analyse'
+  | 'nullDistribution'
+  | 'finding'
+  | 'plan'
+  | 'portray'
 > & { readonly trials: Pick<TrialWords, 'isRight' | 'countHeader' | 'count' | 'rates'> };
 
 /** What a method says beside the words that all methods with one right answer share. */
@@ -39,6 +48,7 @@ export function forcedChoiceScoring({ question, rightOf, words, smallEffect }: A
   const rightIn = (answers: readonly ScoredAnswer[], truth: string) =>
     answers.filter(({ choice }) => choice !== null && isRight(choice, truth)).length;
   return {
+    takesNoSteps: () => null,
     registered: ({ marginPercent }) => ({
       name: `${question.method}/1`,
       alternative: 'greater',

@@ -162,6 +162,9 @@ export type Method<R extends ResultFrame = RegisteredResult> = {
 
   // How answers are scored.
 
+  /** Why a known difference cannot be scored by this method and these choices, in a sentence; null where it can. */
+  takesNoSteps(choices: MethodChoices): string | null;
+
   /** The part of the registered analysis that the method fixes. */
   registered(
     choices: MethodChoices,

@@ -73,6 +73,8 @@ export const pairedPreference: Method<PreferenceResult> = {
   announcement: 'Next you say which you prefer.',
   options: (choices) => [ofPlace('first', '1'), ofPlace('second', '2'), ...(offersNone(choices) ? [ofNone] : [])],
 
+  takesNoSteps: () =>
+    'In a preference no answer is right, so a step cannot be scored; the same with the same can be asked',
   registered: (choices) => ({
     name: 'paired-preference/1',
     alternative: 'two-sided',

@@ -63,6 +63,7 @@ export const sameDifferent: Method<SameDifferentResult> = {
   announcement: 'Next you say whether the two were the same.',
   options: () => [answer('same', '=', 'They were the same'), answer('different', '≠', 'They were different')],
 
+  takesNoSteps: () => null,
   registered: () => ({ name: 'same-different/1', alternative: 'greater', missing: 'counted as wrong' }),
   margin: null,
   planned: sameDifferentPlan,

@@ -8,6 +8,7 @@ import type { Check } from '#shared/ledger/verify.ts';
 import { methodOf, type RegisteredResult } from '#shared/methods/methods.ts';
 import { analysisFacts } from '#shared/protocol/analysis-facts.ts';
 import type { Protocol } from '#shared/protocol/protocol.ts';
+import { checksWords } from '#shared/protocol/protocol-checks.ts';
 import { protocolDifferences } from '#shared/protocol/protocol-differences.ts';
 import type { AnswerContent } from '#shared/session/answer-leaf.ts';
 import type { BlindingRung } from '#shared/session/blinding-rung.ts';
@@ -140,7 +141,7 @@ function missingOf(states: readonly SessionState[]): Report['missing'] {
   );
 }
 
-function factsOf({ design, conduct, analysis, cables, method }: Protocol): Report['protocol']['facts'] {
+function factsOf({ design, conduct, analysis, cables, method, checks }: Protocol): Report['protocol']['facts'] {
   const specimens = cables.map(({ name, specimens: own }) => `${name}: ${own.map(({ serial }) => serial).join(', ')}`);
   return [
     { label: 'Method', value: methodOf(method).name },
@@ -150,6 +151,7 @@ function factsOf({ design, conduct, analysis, cables, method }: Protocol): Repor
     { label: 'Listeners per session', value: String(design.listenersPerSession) },
     ...(design.samplingFrame === undefined ? [] : [{ label: 'Listeners are drawn from', value: design.samplingFrame }]),
     { label: 'Trials per session', value: `${design.trials}, ${design.spares} spare` },
+    ...(checks === undefined ? [] : [{ label: 'Check trials', value: checksWords(checks, cables) }]),
     { label: 'Significance level', value: analysis.alpha },
     ...analysisFacts(analysis),
     { label: 'Change', value: `${conduct.changeS} s, real or sham` },
