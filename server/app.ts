@@ -21,6 +21,7 @@ import { publicPages } from './features/publications/public-pages.ts';
 import { publicationsRoutes } from './features/publications/publications.routes.ts';
 import { registryRoutes } from './features/registry/registry.routes.ts';
 import { reportsRoutes } from './features/reports/reports.routes.ts';
+import { rigPresetsRoutes } from './features/rig-presets/rig-presets.routes.ts';
 import { sessionsRoutes } from './features/sessions/sessions.routes.ts';
 import { signInRoutes } from './features/sign-in/sign-in.routes.ts';
 import { signedHeadsRoutes } from './features/signed-heads/signed-heads.routes.ts';
@@ -109,6 +110,7 @@ export function createApp(deps: Deps) {
   peopleRoutes(api, access, deps, consoles);
   invitationsRoutes(api, access, deps);
   cablesRoutes(api, access, deps);
+  rigPresetsRoutes(api, access, deps);
   studiesRoutes(api, access, deps, sittings);
   codesRoutes(api, access, deps);
   sessionsRoutes(api, access, deps, sittings);

@@ -11,6 +11,7 @@ import { Membership } from './features/organisations/membership.entity.ts';
 import { Organisation } from './features/organisations/organisation.entity.ts';
 import { PastRole } from './features/organisations/past-role.entity.ts';
 import { Publication } from './features/publications/publication.entity.ts';
+import { RigPreset } from './features/rig-presets/rig-preset.entity.ts';
 import { Answer } from './features/sessions/answer.entity.ts';
 import { Seat } from './features/sessions/seat.entity.ts';
 import { Session } from './features/sessions/session.entity.ts';
@@ -59,4 +60,5 @@ export const entities = [
   PastRole,
   Listener,
   Attendance,
+  RigPreset,
 ];

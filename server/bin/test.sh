@@ -72,6 +72,7 @@ step packages install_packages
 wanted=("${mariadb_programs[@]}" openssl:openssl)
 ! wants e2e || wanted+=(chromium:chromium)
 ! wants e2e && ! wants unit || wanted+=(Rscript:r-base-core)
+! wants unit || wanted+=(python3:python3)
 need_from_debian "${wanted[@]}"
 
 reports=$(mktemp -d /dev/shm/fairlead-test.XXXXXX 2>/dev/null || mktemp -d)

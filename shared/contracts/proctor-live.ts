@@ -5,8 +5,9 @@ const time = z.int();
 const version = { expectVersion: z.int().min(0) };
 const say = (most: number) => z.string().trim().max(most, `At most ${most} characters`);
 
-export const changeSteps = ['mute', 'unplug', 'fit', 'check', 'unmute'] as const;
-export type ChangeStep = (typeof changeSteps)[number];
+/** The kinds of a change's steps, each with one meaning everywhere. Which of them a session goes through its plan says. */
+export const stepKinds = ['mute', 'unplug', 'fit', 'scan', 'check', 'settle', 'unmute'] as const;
+export type ChangeStep = (typeof stepKinds)[number];
 
 export const cautions = ['amplifier', 'shorts', 'mains', 'hearing', 'local-rules'] as const;
 export type Caution = (typeof cautions)[number];
@@ -23,7 +24,7 @@ export const proctorCommand = z.discriminatedUnion('kind', [
   z.strictObject({ kind: z.literal('close-seating'), ...version }),
   z.strictObject({ kind: z.literal('begin-familiarisation'), ...version }),
   z.strictObject({ kind: z.literal('begin-trial'), ...version }),
-  z.strictObject({ kind: z.literal('confirm-step'), ...version, step: z.enum(changeSteps) }),
+  z.strictObject({ kind: z.literal('confirm-step'), ...version, step: z.enum(stepKinds) }),
   z.strictObject({ kind: z.literal('lock-trial'), ...version }),
   z.strictObject({
     kind: z.literal('void-trial'),
@@ -55,7 +56,13 @@ export const proctorView = z.strictObject({
   method: z.string(),
   rig: z.enum(['loudspeaker', 'line', 'headphone']),
   phase: z.enum(sessionPhases),
+  /** What must be read and ticked. */
+  cautions: z.array(z.enum(cautions)),
   cautionsConfirmed: z.boolean(),
+  /** The steps of every change, in order, in the words of the rig's preset; `{code}` stands for the code to be fitted. */
+  steps: z.array(
+    z.strictObject({ kind: z.enum(stepKinds), leastS: z.int(), act: z.string(), how: z.string(), done: z.string() }),
+  ),
   paused: z
     .strictObject({ reason: z.enum(['break', 'too-loud', 'trouble']), seat: z.string().nullable(), since: time })
     .nullable(),
@@ -78,9 +85,11 @@ export const proctorView = z.strictObject({
       /** From where it is played, as the programme says; empty for its beginning. */
       excerptStart: z.string(),
       excerptS: z.int(),
-      stepsDone: z.array(z.enum(changeSteps)),
+      stepsDone: z.array(z.enum(stepKinds)),
       /** The next step, or null when none is to be confirmed. */
-      step: z.enum(changeSteps).nullable(),
+      step: z.enum(stepKinds).nullable(),
+      /** From when that step may be confirmed; the last one waits for `endsAt` besides. */
+      stepEndsAt: time.nullable(),
       /** Change: when listening may start. Listening: when it ends. Answering: when the window ends. */
       endsAt: time.nullable(),
       longChange: z.boolean(),

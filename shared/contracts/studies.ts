@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { methodIds, methods } from '../methods/methods.ts';
+import { leastChangeS, rigPreset, rigs } from '../protocol/rig-preset.ts';
 import { checkDraft, checkFaults } from './check-draft.ts';
 import { endpoint, managers } from './endpoint.ts';
 import { organisationParams, thingParams } from './organisation-params.ts';
@@ -13,9 +14,6 @@ export type StudyState = (typeof studyStates)[number];
 /** The states after closing: the secrets are open and the result is on the record. */
 export const closedStates = ['closed', 'published', 'shelved'] as const satisfies readonly StudyState[];
 export const isClosed = (state: StudyState) => (closedStates as readonly StudyState[]).includes(state);
-
-export const rigs = ['loudspeaker', 'line', 'headphone'] as const;
-export type Rig = (typeof rigs)[number];
 
 const line = (most: number) =>
   z
@@ -63,6 +61,8 @@ export const studyDraft = z
     alphaPerMille: whole(1, 200, 'tenths of a per cent'),
     programme: z.array(excerptDraft).min(1, 'Add at least one excerpt').max(12, 'At most 12 excerpts'),
     rig: z.enum(rigs, 'Choose a rig'),
+    /** How a change is made there, as it was chosen; left out for five plain steps without waits. */
+    rigPreset: rigPreset.optional(),
     chain: line(1000).min(3, 'Describe source, amplifier and transducers'),
     changeS: whole(3, 300, 'seconds'),
     answerS: whole(5, 300, 'seconds'),
@@ -101,6 +101,22 @@ export const studyDraft = z
     const { checks } = check.value;
     for (const { path, message } of checks === undefined ? [] : checkFaults(checks, check.value))
       check.issues.push({ code: 'custom', input: checks, path: ['checks', ...path], message });
+    const { rig, rigPreset: preset, changeS } = check.value;
+    if (preset !== undefined && preset.kind !== rig)
+      check.issues.push({
+        code: 'custom',
+        input: preset,
+        path: ['rigPreset'],
+        message: 'This preset is for another rig',
+      });
+    const least = preset === undefined ? 0 : leastChangeS(preset.steps);
+    if (changeS < least)
+      check.issues.push({
+        code: 'custom',
+        input: changeS,
+        path: ['changeS'],
+        message: `The waits of the rig’s steps come to ${least} s; a change cannot be shorter`,
+      });
     const { marginPercent } = check.value;
     const { margin } = methods[method];
     if (marginPercent !== undefined && (margin === null || marginPercent > margin.mostPercent))

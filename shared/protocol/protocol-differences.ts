@@ -2,6 +2,7 @@ import type { ProtocolDifference } from '../contracts/protocol-versions.ts';
 import { canonicalJson } from '../ledger/canonical-json.ts';
 import { methodOf } from '../methods/methods.ts';
 import { analysisFacts } from './analysis-facts.ts';
+import { presetFacts } from './preset-facts.ts';
 import type { Protocol } from './protocol.ts';
 import type { ProtocolCable } from './protocol-cable.ts';
 import { checksWords, decibels } from './protocol-checks.ts';
@@ -54,6 +55,7 @@ function linesOf(protocol: Protocol, nameOf: (person: string) => string): Line[]
       value: `${excerpt}, ${lengthS} s${start === '' ? '' : ` from ${start}`}`,
     })),
     { label: 'Rig', value: rigWords[conduct.rig] },
+    ...presetFacts(conduct.rigPreset),
     { label: 'Chain', value: conduct.chain },
     { label: 'Every change', value: `${conduct.changeS} s, real or not` },
     { label: 'Answer window', value: `${conduct.answerS} s` },

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { rigs, type StudyDraft } from '../contracts/studies.ts';
+import type { StudyDraft } from '../contracts/studies.ts';
 import { canonicalJson } from '../ledger/canonical-json.ts';
 import { digest } from '../ledger/digest.ts';
 import type { MethodChoices } from '../methods/method.ts';
@@ -9,6 +9,7 @@ import { checkTrialsIn } from '../session/trial-kinds.ts';
 import { type ProtocolCable, protocolCable } from './protocol-cable.ts';
 import { checksFromDraft, protocolChecks, shapeOf } from './protocol-checks.ts';
 import { checkExclusion, registeredAnalysis } from './registered-analysis.ts';
+import { rigPreset, rigs } from './rig-preset.ts';
 
 /** Everything fixed before data, as it is sealed. Times in seconds, lengths in millimetres, decimals as text. */
 export const protocol = z.strictObject({
@@ -37,6 +38,8 @@ export const protocol = z.strictObject({
   }),
   conduct: z.strictObject({
     rig: z.enum(rigs),
+    /** How a change is made at this rig, whole, as it was when sealed; left out before there were presets. */
+    rigPreset: rigPreset.optional(),
     chain: z.string(),
     changeS: z.int(),
     answerS: z.int(),
@@ -100,6 +103,7 @@ export function protocolFromDraft(
     },
     conduct: {
       rig: draft.rig,
+      ...(draft.rigPreset === undefined ? {} : { rigPreset: draft.rigPreset }),
       chain: draft.chain,
       changeS: draft.changeS,
       answerS: draft.answerS,
@@ -129,6 +133,7 @@ export function sessionPlanOf({ method, design, conduct, checks }: Protocol): Se
     spares: design.spares,
     ...(checks === undefined ? {} : { checks: shapeOf(checks) }),
     rig: conduct.rig,
+    ...(conduct.rigPreset === undefined ? {} : { rigPreset: conduct.rigPreset }),
     changeMs: conduct.changeS * 1000,
     answerMs: conduct.answerS * 1000,
     confidence: design.confidence,

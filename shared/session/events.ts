@@ -1,5 +1,6 @@
 import { z } from 'zod';
-import { cautions, changeSteps, voidReasons } from '../contracts/proctor-live.ts';
+import { cautions, stepKinds, voidReasons } from '../contracts/proctor-live.ts';
+import { rigPreset } from '../protocol/rig-preset.ts';
 import { checkShape } from './trial-kinds.ts';
 
 // What a session puts on its study's record. Payload shapes are permanent: a change means a new version.
@@ -20,6 +21,8 @@ export const sessionPlan = z.strictObject({
   /** How many of the trials are check trials; left out where there are none. */
   checks: checkShape.optional(),
   rig: z.enum(['loudspeaker', 'line', 'headphone']),
+  /** How a change is made, as the protocol froze it; left out where it names no preset. */
+  rigPreset: rigPreset.optional(),
   changeMs: z.int(),
   answerMs: z.int(),
   confidence: z.boolean(),
@@ -50,7 +53,7 @@ export const sessionEvents = {
   'contribution-dropped': z.strictObject({ session, seat }),
   'draw-fixed': z.strictObject({ session, contributors: z.array(seat) }),
   'trial-opened': z.strictObject({ session, trial, excerpt: z.int(), seats: z.array(seat) }),
-  'step-confirmed': z.strictObject({ session, trial, presentation: z.int(), step: z.enum(changeSteps) }),
+  'step-confirmed': z.strictObject({ session, trial, presentation: z.int(), step: z.enum(stepKinds) }),
   'listening-started': z.strictObject({
     session,
     trial,

@@ -1,5 +1,5 @@
-import { changeSteps } from '../contracts/proctor-live.ts';
 import type { Method } from '../methods/method.ts';
+import { stepKindsOf } from './change-steps.ts';
 import type { SessionEvent } from './events.ts';
 import { presentationsOf } from './progress.ts';
 import type { EndedTrial, OpenTrial, SessionState } from './state.ts';
@@ -101,7 +101,10 @@ function fold(state: SessionState, event: SessionEvent, method: Method): Folded 
       if (lengthMs === undefined) throw new RangeError(`excerpt ${trial.excerpt} is not in the programme`);
       const longChanges = trial.longChanges + (event.payload.lengths > 1 ? 1 : 0);
       const endsAt = event.at + lengthMs;
-      return { ...state, trial: { ...trial, stage: 'listening', stepsDone: changeSteps, endsAt, longChanges } };
+      return {
+        ...state,
+        trial: { ...trial, stage: 'listening', stepsDone: stepKindsOf(state.plan), endsAt, longChanges },
+      };
     }
     case 'listening-ended':
       return afterListening(state, openTrialOf(state, event), event.at, method);

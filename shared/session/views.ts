@@ -1,11 +1,11 @@
 import type { CourseRing, HeldAnswer, ListenerView, LockReceipt } from '../contracts/listener-live.ts';
 import type { ProctorView } from '../contracts/proctor-live.ts';
 import type { Method } from '../methods/method.ts';
+import { cautionsOf, nextStep, stepEndsAt, stepsOf } from './change-steps.ts';
 import {
   activeSeats,
   dueAt,
   listeningMayStartAt,
-  nextStep,
   nextTrial,
   openAnswers,
   optionsOf,
@@ -134,7 +134,7 @@ function seatsFor(state: SessionState, presence: readonly Presence[]): ProctorVi
 function trialFor(state: SessionState, method: Method, context: ProctorContext): ProctorView['trial'] {
   const { trial, plan } = state;
   if (trial === null) return null;
-  const mayStartAt = listeningMayStartAt(trial, plan.changeMs, context.now);
+  const mayStartAt = listeningMayStartAt(trial, plan, context.now);
   const endsAt = trial.stage === 'change' ? mayStartAt : trial.endsAt;
   const excerpt = plan.programme[trial.excerpt];
   return {
@@ -149,7 +149,8 @@ function trialFor(state: SessionState, method: Method, context: ProctorContext):
     excerptStart: excerpt?.start ?? '',
     excerptS: Math.round((excerpt?.lengthMs ?? 0) / 1000),
     stepsDone: [...trial.stepsDone],
-    step: state.paused === null ? nextStep(trial) : null,
+    step: state.paused === null ? nextStep(trial, plan) : null,
+    stepEndsAt: state.paused === null ? stepEndsAt(trial, plan) : null,
     endsAt: state.paused === null ? endsAt : null,
     longChange: trial.stage === 'change' && mayStartAt > trial.changeStartedAt + plan.changeMs,
     answered: trial.answers.length,
@@ -171,7 +172,9 @@ export function proctorViewOf(state: SessionState, method: Method, context: Proc
     method: method.name,
     rig: state.plan.rig,
     phase: state.phase,
+    cautions: cautionsOf(state.plan),
     cautionsConfirmed: state.cautionsConfirmed,
+    steps: stepsOf(state.plan).map(({ kind, leastS, act, how, done }) => ({ kind, leastS, act, how, done })),
     paused: paused === null ? null : { reason: paused.reason, seat: paused.seat, since: paused.since },
     join: context.join,
     dueAt: dueAt(state, context.now),

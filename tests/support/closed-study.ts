@@ -8,10 +8,10 @@ import { methodOf } from '#shared/methods/methods.ts';
 import { runRegistered } from '#shared/methods/run-registered.ts';
 import { type Protocol, protocolDigest, sessionPlanOf } from '#shared/protocol/protocol.ts';
 import { type AnswerContent, answerLeaf, contributionCommitment } from '#shared/session/answer-leaf.ts';
+import { isLastStep, nextStep } from '#shared/session/change-steps.ts';
 import { codeKeyCommitment, drawSecretCommitment } from '#shared/session/commitments.ts';
 import { decide, type SessionCommand } from '#shared/session/decide.ts';
 import { evolve, holdAnswer } from '#shared/session/evolve.ts';
-import { nextStep } from '#shared/session/progress.ts';
 import { sessionsInRecord } from '#shared/session/read-record.ts';
 import type { RevealedKey } from '#shared/session/revealed-key.ts';
 import type { SessionState } from '#shared/session/state.ts';
@@ -142,8 +142,8 @@ export class SessionMaker {
     for (;;) {
       const { trial } = this.#state;
       if (trial === null || trial.stage === 'answering') return;
-      const step = nextStep(trial);
-      if (step === 'unmute') this.#maker.now = trial.changeStartedAt + this.#state.plan.changeMs;
+      const step = nextStep(trial, this.#state.plan);
+      if (isLastStep(trial, this.#state.plan)) this.#maker.now = trial.changeStartedAt + this.#state.plan.changeMs;
       if (step !== null) this.do({ kind: 'confirm-step', step });
       else {
         this.#maker.now = trial.endsAt ?? this.#maker.now;

@@ -7,6 +7,7 @@ import { sealedVersions } from '#shared/ledger/protocol-versions.ts';
 import type { Check } from '#shared/ledger/verify.ts';
 import { methodOf, type RegisteredResult } from '#shared/methods/methods.ts';
 import { analysisFacts } from '#shared/protocol/analysis-facts.ts';
+import { presetFacts } from '#shared/protocol/preset-facts.ts';
 import type { Protocol } from '#shared/protocol/protocol.ts';
 import { checksWords } from '#shared/protocol/protocol-checks.ts';
 import { protocolDifferences } from '#shared/protocol/protocol-differences.ts';
@@ -158,6 +159,7 @@ function factsOf({ design, conduct, analysis, cables, method, checks }: Protocol
     { label: 'Answer window', value: `${conduct.answerS} s` },
     { label: 'Programme', value: conduct.programme.map(({ title, lengthS }) => `${title} (${lengthS} s)`).join('; ') },
     { label: 'Chain', value: conduct.chain },
+    ...presetFacts(conduct.rigPreset),
   ];
 }
 

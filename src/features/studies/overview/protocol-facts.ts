@@ -1,6 +1,7 @@
 import type { Study, StudyDraft } from '#shared/contracts/studies.ts';
 import { methodOf } from '#shared/methods/methods.ts';
 import { analysisFacts } from '#shared/protocol/analysis-facts.ts';
+import { presetFacts } from '#shared/protocol/preset-facts.ts';
 import { formatCount } from '../../../lib/format.ts';
 import { percentOfPerMille, rigWords } from '../study-words.ts';
 
@@ -32,6 +33,7 @@ export function protocolFacts({ draft, cableNames, codeHolder }: Study): Protoco
       words(`Excerpt ${index + 1}`, `${title}, ${lengthS} s${start === '' ? '' : ` from ${start}`}`),
     ),
     words('Rig', rigWords[draft.rig]),
+    ...presetFacts(draft.rigPreset),
     words('Chain', draft.chain),
     words('Every change', `${draft.changeS} s, real or not`),
     words('Answer window', `${draft.answerS} s`),
