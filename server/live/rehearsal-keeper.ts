@@ -1,5 +1,6 @@
 import { type Entry, nextEntry } from '#shared/ledger/chain.ts';
 import { Problem } from '#shared/problem.ts';
+import { leastSeparate } from '#shared/protocol/ways-to-run.ts';
 import { drawSecretCommitment } from '#shared/session/commitments.ts';
 import { contributionsOf } from '#shared/session/counted-trials.ts';
 import type { SessionPlan } from '#shared/session/events.ts';
@@ -10,13 +11,15 @@ import { drawCodes } from '../blind/index.ts';
 import type { Random } from '../deps.ts';
 import type { Keeper, Keeping } from './keeper.ts';
 
-/** A rehearsal's invented codes: one specimen for either cable and for each check cable, and nothing behind them. */
-function inventedKey(random: Random, { checks }: SessionPlan) {
-  return drawCodes(random, firstCheckCable + (checks?.steps.length ?? 0)).map((code, cable) => ({
+/** A rehearsal's invented codes: as few specimens of every cable as its plan needs, and nothing behind them. */
+function inventedKey(random: Random, { checks, separateSpecimens }: SessionPlan) {
+  const ofEach = separateSpecimens ? leastSeparate : 1;
+  const cables = firstCheckCable + (checks?.steps.length ?? 0);
+  return drawCodes(random, cables * ofEach).map((code, index) => ({
     code,
     specimen: '',
     serial: '',
-    cable,
+    cable: index % cables,
   }));
 }
 

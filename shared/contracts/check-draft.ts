@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import type { MethodChoices } from '../methods/method.ts';
 import { type MethodId, methods } from '../methods/methods.ts';
+import { leastSeparate, type WaysToRun } from '../protocol/ways-to-run.ts';
 import { checkTrialsIn, mostSteps } from '../session/trial-kinds.ts';
 
 const whole = (least: number, most: number, what: string) =>
@@ -36,7 +37,7 @@ type Fault = { readonly path: (string | number)[]; readonly message: string };
 /** What is wrong with check trials as part of a study: beside its method, its cables and one another. */
 export function checkFaults(
   checks: CheckDraft,
-  study: MethodChoices & { method: MethodId; cables: readonly { cableId: string }[] },
+  study: MethodChoices & WaysToRun & { method: MethodId; cables: readonly { cableId: string }[] },
 ): Fault[] {
   const { steps, same, excludes } = checks;
   const faults: Fault[] = [];
@@ -46,9 +47,16 @@ export function checkFaults(
     faults.push({ path: ['same'], message: 'Add a step, or trials of the same with the same' });
   if (steps.length === 0 && excludes)
     faults.push({ path: ['excludes'], message: 'Without a step nobody can fail to hear it' });
+  if (study.separateSpecimens && same > 0)
+    faults.push({ path: ['same'], message: 'With separate specimens the same code would come twice: set this to 0' });
   const seen = new Set(study.cables.map(({ cableId }) => cableId));
   const sizes = new Set<number>();
-  for (const [index, { cableId, milliDb }] of steps.entries()) {
+  for (const [index, { cableId, specimenIds, milliDb }] of steps.entries()) {
+    if (study.separateSpecimens && specimenIds.length > 0 && specimenIds.length < leastSeparate)
+      faults.push({
+        path: ['steps', index, 'specimenIds'],
+        message: 'Choose at least two: separate specimens need two of each cable',
+      });
     if (seen.has(cableId))
       faults.push({ path: ['steps', index, 'cableId'], message: 'Choose a cable that the study has not yet' });
     if (sizes.has(milliDb)) faults.push({ path: ['steps', index, 'milliDb'], message: 'Each step once' });

@@ -32,6 +32,7 @@ const draw = z.strictObject({
   truths: z.array(z.string()),
   kinds: z.array(trialKind).optional(),
   checkSpecimens: z.array(z.int()).optional(),
+  separate: z.strictObject({ specimen: z.int(), deals: z.array(z.int()).optional() }).optional(),
 });
 
 const answer = z.strictObject({

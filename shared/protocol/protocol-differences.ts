@@ -6,6 +6,7 @@ import { presetFacts } from './preset-facts.ts';
 import type { Protocol } from './protocol.ts';
 import type { ProtocolCable } from './protocol-cable.ts';
 import { checksWords, decibels } from './protocol-checks.ts';
+import { waysFacts } from './ways-to-run.ts';
 
 /** A line, and what it means beyond its words: two cables, pieces or people may bear one name. */
 type Line = { label: string; value: string; ids?: string };
@@ -47,6 +48,7 @@ function linesOf(protocol: Protocol, nameOf: (person: string) => string): Line[]
     { label: 'Check trials', value: checks === undefined ? '' : checksWords(checks, cables) },
     ...(checks?.steps ?? []).flatMap(({ cable, milliDb }) => cableLines(cable, `Check cable, ${decibels(milliDb)}`)),
     { label: 'Spares', value: `${design.spares} in each session` },
+    ...waysFacts(design),
     { label: 'Significance level', value: analysis.alpha },
     ...analysisFacts(analysis),
     { label: 'Analysis', value: analysis.name },

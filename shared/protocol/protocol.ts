@@ -10,6 +10,7 @@ import { type ProtocolCable, protocolCable } from './protocol-cable.ts';
 import { checksFromDraft, protocolChecks, shapeOf } from './protocol-checks.ts';
 import { checkExclusion, registeredAnalysis } from './registered-analysis.ts';
 import { rigPreset, rigs } from './rig-preset.ts';
+import { chosenWays, waysToRun } from './ways-to-run.ts';
 
 /** Everything fixed before data, as it is sealed. Times in seconds, lengths in millimetres, decimals as text. */
 export const protocol = z.strictObject({
@@ -34,6 +35,7 @@ export const protocol = z.strictObject({
     attribute: z.string().optional(),
     /** Whom the listeners are a sample of; left out where nothing is to be said about people in general. */
     samplingFrame: z.string().optional(),
+    ...waysToRun,
     codeHolder: z.uuid(),
   }),
   conduct: z.strictObject({
@@ -99,6 +101,7 @@ export function protocolFromDraft(
       ...(draft.samplingFrame === undefined || draft.samplingFrame === ''
         ? {}
         : { samplingFrame: draft.samplingFrame }),
+      ...chosenWays(draft),
       codeHolder: draft.codeHolderId,
     },
     conduct: {
@@ -137,6 +140,7 @@ export function sessionPlanOf({ method, design, conduct, checks }: Protocol): Se
     changeMs: conduct.changeS * 1000,
     answerMs: conduct.answerS * 1000,
     confidence: design.confidence,
+    ...chosenWays(design),
     programme: conduct.programme.map(({ title, start, lengthS }) => ({ title, start, lengthMs: lengthS * 1000 })),
   };
 }

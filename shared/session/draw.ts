@@ -24,16 +24,27 @@ export type Draw = {
   readonly specimens: readonly [number, number];
   /** One truth per trial, spares included; trial 1 comes first. */
   readonly truths: readonly string[];
+  /** There only where specimens are separate. */
+  readonly separate?: SeparateDraw | undefined;
   /** What each registered trial is, spares left out; there only where the study has check trials. */
   readonly kinds?: readonly TrialKind[] | undefined;
   /** For each check cable the place of the specimen used, from 0; there with the kinds. */
   readonly checkSpecimens?: readonly number[] | undefined;
 };
 
+export type SeparateDraw = {
+  /** The place, from 0 and the same for both cables, of the specimens that serve separately. */
+  readonly specimen: number;
+  /** One deal per trial, spares included; left out where specimens are dealt in one way alone. */
+  readonly deals?: readonly number[] | undefined;
+};
+
 export type DrawShape = {
   readonly specimenCounts: readonly [number, number];
   /** Spares included. */
   readonly trials: number;
+  /** Whether the protocol registers separate specimens. */
+  readonly isSeparate?: boolean;
   readonly checks?:
     | {
         readonly shape: CheckShape;
@@ -45,27 +56,56 @@ export type DrawShape = {
     | undefined;
 };
 
+type Drawn = Pick<Method, 'truths' | 'separate'>;
+
+/**
+ * Which specimens serve where, when they are separate. One place is drawn for both cables together, each time: codes
+ * that serve alike in one session and not in another would tell which of them are of one cable.
+ */
+function drawSeparate(
+  seed: string,
+  { separate }: Drawn,
+  { specimenCounts, trials, checks }: DrawShape,
+): Pick<Draw, 'specimens' | 'separate'> {
+  if (separate === null) throw new RangeError('the method has no use for separate specimens');
+  const places = Math.min(...specimenCounts, ...(checks?.specimenCounts ?? []));
+  if (places < 2) throw new RangeError('separate specimens need two of each cable');
+  const first = fairNumber(seed, 'separate/first', places);
+  const others = Array.from({ length: places }, (_, place) => place).filter((place) => place !== first);
+  const specimen = others[fairNumber(seed, 'separate/other', others.length)] ?? 0;
+  const deal = (index: number) => fairNumber(seed, `separate/trial/${index + 1}`, separate.deals);
+  const deals = separate.deals === 1 ? {} : { deals: Array.from({ length: trials }, (_, index) => deal(index)) };
+  return { specimens: [first, first], separate: { specimen, ...deals } };
+}
+
+/** What of the draw only a study with check trials has; with separate specimens check cables have the common place. */
+function drawChecks(seed: string, { checks, isSeparate }: DrawShape, [place]: Draw['specimens']): Partial<Draw> {
+  if (checks === undefined) return {};
+  const { shape, specimenCounts, trials } = checks;
+  return {
+    kinds: drawKinds(seed, trials, shape),
+    checkSpecimens: specimenCounts.map((count, index) =>
+      isSeparate === true ? place : fairNumber(seed, `check-specimen/${index + 1}`, count),
+    ),
+  };
+}
+
 /** The whole draw of a session: a pure function of its seed, the method and the protocol's shape. */
-export function drawSession(seed: string, method: Pick<Method, 'truths'>, shape: DrawShape): Draw {
+export function drawSession(seed: string, method: Drawn, shape: DrawShape): Draw {
   const truths = Array.from({ length: shape.trials }, (_, index) => {
     const truth = method.truths[fairNumber(seed, `trial/${index + 1}`, method.truths.length)];
     if (truth === undefined) throw new RangeError('a method needs at least one truth');
     return truth;
   });
-  return {
-    firstSide: fairNumber(seed, 'side', 2) === 0 ? 0 : 1,
-    specimens: [
-      fairNumber(seed, 'specimen/1', shape.specimenCounts[0]),
-      fairNumber(seed, 'specimen/2', shape.specimenCounts[1]),
-    ],
-    truths,
-    ...(shape.checks === undefined
-      ? {}
+  const firstSide = fairNumber(seed, 'side', 2) === 0 ? 0 : 1;
+  const fitted: Pick<Draw, 'specimens' | 'separate'> =
+    shape.isSeparate === true
+      ? drawSeparate(seed, method, shape)
       : {
-          kinds: drawKinds(seed, shape.checks.trials, shape.checks.shape),
-          checkSpecimens: shape.checks.specimenCounts.map((count, index) =>
-            fairNumber(seed, `check-specimen/${index + 1}`, count),
-          ),
-        }),
-  };
+          specimens: [
+            fairNumber(seed, 'specimen/1', shape.specimenCounts[0]),
+            fairNumber(seed, 'specimen/2', shape.specimenCounts[1]),
+          ],
+        };
+  return { firstSide, truths, ...fitted, ...drawChecks(seed, shape, fitted.specimens) };
 }

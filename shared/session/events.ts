@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { cautions, stepKinds, voidReasons } from '../contracts/proctor-live.ts';
 import { rigPreset } from '../protocol/rig-preset.ts';
+import { waysToRun } from '../protocol/ways-to-run.ts';
 import { checkShape } from './trial-kinds.ts';
 
 // What a session puts on its study's record. Payload shapes are permanent: a change means a new version.
@@ -26,6 +27,7 @@ export const sessionPlan = z.strictObject({
   changeMs: z.int(),
   answerMs: z.int(),
   confidence: z.boolean(),
+  ...waysToRun,
   programme: z.array(z.strictObject({ title: z.string(), start: z.string(), lengthMs: z.int() })),
 });
 export type SessionPlan = z.output<typeof sessionPlan>;

@@ -10,7 +10,7 @@ export type DrawnSession = {
   readonly secret: string;
   readonly contributions: readonly string[];
   readonly method: Method;
-  readonly plan: Pick<SessionPlan, 'trials' | 'spares' | 'checks'>;
+  readonly plan: Pick<SessionPlan, 'trials' | 'spares' | 'checks' | 'separateSpecimens'>;
   readonly rows: readonly CodeKeyRow[];
 };
 
@@ -18,11 +18,12 @@ const rowsOfCable = (rows: readonly CodeKeyRow[], cable: number) => rows.filter(
 
 /** A session's draw from its secret, its contributions and the study's code key. */
 export function drawOf({ secret, contributions, method, plan, rows }: DrawnSession): Draw {
-  const { trials, spares, checks } = plan;
+  const { trials, spares, checks, separateSpecimens } = plan;
   const specimensOf = (cable: number) => rowsOfCable(rows, cable).length;
   return drawSession(drawSeed(secret, contributions), method, {
     specimenCounts: [specimensOf(0), specimensOf(1)],
     trials: trials + spares,
+    isSeparate: separateSpecimens === true,
     ...(checks === undefined
       ? {}
       : {
@@ -54,21 +55,30 @@ export function kindOf(
   return kind;
 }
 
-export type FittingQuestion = Omit<DrawnSession, 'plan'> & {
+type Presented = {
+  readonly method: Method;
   readonly state: Pick<SessionState, 'plan' | 'ended'>;
   readonly trial: number;
   readonly presentation: string;
 };
 
+/** What a draw puts at a presentation: the cable by its place in the code key, and the place of its specimen. */
+export function fittedBy(draw: Draw, { method, state, trial, presentation }: Presented) {
+  const truth = trial === 0 ? null : truthOf(draw, trial);
+  const place = method.fitted(presentation, truth, draw.firstSide);
+  const cable = cableFitted(place, kindOf(draw, state, trial), state.plan.checks?.reference ?? 0);
+  const deal = draw.separate?.deals?.[trial - 1] ?? 0;
+  const isOther = draw.separate !== undefined && method.separate?.specimen(presentation, truth, deal) === 1;
+  const specimens = [...draw.specimens, ...(draw.checkSpecimens ?? [])];
+  return { cable, specimen: isOther ? (draw.separate?.specimen ?? 0) : (specimens[cable] ?? -1) };
+}
+
+export type FittingQuestion = Omit<DrawnSession, 'plan'> & Presented;
+
 /** The blind code to be fitted for a presentation of a trial. */
 export function codeFitted(question: FittingQuestion): string {
-  const { method, rows, state, trial, presentation } = question;
-  const { plan } = state;
-  const draw = drawOf({ ...question, plan });
-  const place = method.fitted(presentation, trial === 0 ? null : truthOf(draw, trial), draw.firstSide);
-  const cable = cableFitted(place, kindOf(draw, state, trial), plan.checks?.reference ?? 0);
-  const specimens = [...draw.specimens, ...(draw.checkSpecimens ?? [])];
-  const row = rowsOfCable(rows, cable)[specimens[cable] ?? -1];
+  const { cable, specimen } = fittedBy(drawOf({ ...question, plan: question.state.plan }), question);
+  const row = rowsOfCable(question.rows, cable)[specimen];
   if (row === undefined) throw new RangeError('the code key has no such specimen');
   return row.code;
 }

@@ -11,6 +11,7 @@ import { presetFacts } from '#shared/protocol/preset-facts.ts';
 import type { Protocol } from '#shared/protocol/protocol.ts';
 import { checksWords } from '#shared/protocol/protocol-checks.ts';
 import { protocolDifferences } from '#shared/protocol/protocol-differences.ts';
+import { waysFacts } from '#shared/protocol/ways-to-run.ts';
 import type { AnswerContent } from '#shared/session/answer-leaf.ts';
 import type { BlindingRung } from '#shared/session/blinding-rung.ts';
 import { countedTrials, type LockedTrial, revealedDraw } from '#shared/session/counted-trials.ts';
@@ -150,6 +151,7 @@ function factsOf({ design, conduct, analysis, cables, method, checks }: Protocol
     { label: 'Specimens', value: specimens.join('; ') },
     { label: 'Sessions', value: String(design.sessions) },
     { label: 'Listeners per session', value: String(design.listenersPerSession) },
+    ...waysFacts(design),
     ...(design.samplingFrame === undefined ? [] : [{ label: 'Listeners are drawn from', value: design.samplingFrame }]),
     { label: 'Trials per session', value: `${design.trials}, ${design.spares} spare` },
     ...(checks === undefined ? [] : [{ label: 'Check trials', value: checksWords(checks, cables) }]),
