@@ -15,6 +15,7 @@ import { firstOwnerRoutes } from './features/first-owner/first-owner.routes.ts';
 import { FirstOwner } from './features/first-owner/first-owner.service.ts';
 import { healthRoutes, version } from './features/health/health.routes.ts';
 import { invitationsRoutes } from './features/invitations/invitations.routes.ts';
+import { levelsRoutes } from './features/levels/levels.routes.ts';
 import { mailRoutes } from './features/mail/mail.routes.ts';
 import { peopleRoutes } from './features/people/people.routes.ts';
 import { publicPages } from './features/publications/public-pages.ts';
@@ -114,6 +115,7 @@ export function createApp(deps: Deps) {
   studiesRoutes(api, access, deps, sittings);
   codesRoutes(api, access, deps);
   sessionsRoutes(api, access, deps, sittings);
+  levelsRoutes(api, access, deps, sittings);
   attendancesRoutes(api, access, deps, sittings);
   reportsRoutes(api, access, deps);
   publicationsRoutes(api, access, deps);

@@ -2,6 +2,7 @@ import Papa from 'papaparse';
 import type { Entry } from '../ledger/chain.ts';
 import { answerName } from '../ledger/publication-parts.ts';
 import type { StudyReading } from '../ledger/study-reading.ts';
+import { levelsTables } from '../levels/levels-table.ts';
 import { truthOf } from '../session/fitting.ts';
 import type { EndedTrial, SessionState } from '../session/state.ts';
 
@@ -13,7 +14,7 @@ export type TableField = {
 };
 
 export type Table = {
-  readonly name: 'sessions' | 'trials' | 'answers' | 'listeners' | 'result';
+  readonly name: 'sessions' | 'trials' | 'answers' | 'listeners' | 'result' | 'levels';
   readonly title: string;
   readonly fields: readonly TableField[];
   readonly key: readonly string[];
@@ -34,7 +35,14 @@ const listener = field('listener', 'string', 'Label of the listener in this stud
 
 /** Every table of a bundle, computed from the record and what it reveals, so that it can be compared byte for byte. */
 export function tablesOf(study: StudyReading): Table[] {
-  return [sessionsTable(study), trialsTable(study), answersTable(study), listenersTable(study), resultTable(study)];
+  return [
+    sessionsTable(study),
+    trialsTable(study),
+    answersTable(study),
+    listenersTable(study),
+    resultTable(study),
+    ...levelsTables(study),
+  ];
 }
 
 /**

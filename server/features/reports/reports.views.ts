@@ -5,6 +5,8 @@ import type { Finding } from '#shared/findings/finding.ts';
 import type { Entry } from '#shared/ledger/chain.ts';
 import { sealedVersions } from '#shared/ledger/protocol-versions.ts';
 import type { Check } from '#shared/ledger/verify.ts';
+import { levelReportOf } from '#shared/levels/level-report.ts';
+import { registeredLevelsText } from '#shared/levels/level-words.ts';
 import { methodOf, type RegisteredResult } from '#shared/methods/methods.ts';
 import { analysisFacts } from '#shared/protocol/analysis-facts.ts';
 import { presetFacts } from '#shared/protocol/preset-facts.ts';
@@ -160,6 +162,7 @@ function factsOf({ design, conduct, analysis, cables, method, checks }: Protocol
     { label: 'Change', value: `${conduct.changeS} s, real or sham` },
     { label: 'Answer window', value: `${conduct.answerS} s` },
     { label: 'Programme', value: conduct.programme.map(({ title, lengthS }) => `${title} (${lengthS} s)`).join('; ') },
+    { label: 'Level at the load', value: registeredLevelsText(conduct.levels) },
     { label: 'Chain', value: conduct.chain },
     ...presetFacts(conduct.rigPreset),
   ];
@@ -210,6 +213,10 @@ export function reportView(source: ReportSource): Report {
     byExcerpt: byExcerptOf(protocol, counted),
     rung: { name: rung.name, why: rung.why },
     conditions: conditionsOf(source),
+    levels:
+      protocol.conduct.levels === undefined
+        ? null
+        : levelReportOf(entries, key.codeKey.rows, protocol.conduct.levels, namesOf(protocol)),
     flow: flowOf(source),
     sessions: states.map((state) => sessionView(source, state, key)),
     voids: voidsOf(entries),
