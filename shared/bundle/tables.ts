@@ -4,6 +4,7 @@ import { answerName } from '../ledger/publication-parts.ts';
 import type { StudyReading } from '../ledger/study-reading.ts';
 import { truthOf } from '../session/fitting.ts';
 import type { EndedTrial, SessionState } from '../session/state.ts';
+import { cuesTable } from './cues-table.ts';
 
 /** A column with what it means; its name stands in the first row of the file. */
 export type TableField = {
@@ -13,7 +14,7 @@ export type TableField = {
 };
 
 export type Table = {
-  readonly name: 'sessions' | 'trials' | 'answers' | 'listeners' | 'result';
+  readonly name: 'sessions' | 'trials' | 'answers' | 'listeners' | 'result' | 'cues';
   readonly title: string;
   readonly fields: readonly TableField[];
   readonly key: readonly string[];
@@ -34,7 +35,14 @@ const listener = field('listener', 'string', 'Label of the listener in this stud
 
 /** Every table of a bundle, computed from the record and what it reveals, so that it can be compared byte for byte. */
 export function tablesOf(study: StudyReading): Table[] {
-  return [sessionsTable(study), trialsTable(study), answersTable(study), listenersTable(study), resultTable(study)];
+  return [
+    sessionsTable(study),
+    trialsTable(study),
+    answersTable(study),
+    listenersTable(study),
+    resultTable(study),
+    ...cuesTable(study),
+  ];
 }
 
 /**

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { portrayedCueAudit } from '../cue-audit/portrayed-cue-audit.ts';
 import { finding } from '../findings/finding.ts';
 import { registeredResult } from '../methods/methods.ts';
 import { endpoint } from './endpoint.ts';
@@ -29,6 +30,7 @@ export const report = z.strictObject({
   finding,
   result: registeredResult,
   nullDistribution: z.array(chanceBar),
+  cueAudit: portrayedCueAudit,
   rung: z.strictObject({ name: z.string(), why: z.string() }),
   /** The gap between presentations and the blinding rung, each in a sentence: part of the finding’s first lines. */
   conditions: z.array(z.string()),

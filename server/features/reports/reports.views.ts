@@ -1,5 +1,6 @@
 import type { Report } from '#shared/contracts/reports.ts';
 import type { SignedHead } from '#shared/contracts/signed-heads.ts';
+import type { PortrayedCueAudit } from '#shared/cue-audit/portrayed-cue-audit.ts';
 import type { Finding } from '#shared/findings/finding.ts';
 import type { Entry } from '#shared/ledger/chain.ts';
 import { sealedVersions } from '#shared/ledger/protocol-versions.ts';
@@ -28,6 +29,7 @@ export type ReportSource = {
   readonly rooms: ReadonlyMap<number, string>;
   readonly result: RegisteredResult;
   readonly finding: Finding;
+  readonly cueAudit: PortrayedCueAudit;
   readonly checks: readonly Check[];
   readonly rung: BlindingRung;
   readonly closing: StudyPayloadOf<'study-closed'>;
@@ -188,6 +190,7 @@ export function reportView(source: ReportSource): Report {
     finding,
     result,
     nullDistribution: method.nullDistribution(countedTrials(method, states, key, answers)),
+    cueAudit: source.cueAudit,
     rung: { name: rung.name, why: rung.why },
     conditions: conditionsOf(source),
     flow: flowOf(source),
