@@ -7,10 +7,12 @@ import { Audit } from './features/audits/audit.entity.ts';
 import { Cable } from './features/cables/cable.entity.ts';
 import { Specimen } from './features/cables/specimen.entity.ts';
 import { Invitation } from './features/invitations/invitation.entity.ts';
+import { LevelDuty } from './features/levels/level-duty.entity.ts';
 import { Membership } from './features/organisations/membership.entity.ts';
 import { Organisation } from './features/organisations/organisation.entity.ts';
 import { PastRole } from './features/organisations/past-role.entity.ts';
 import { Publication } from './features/publications/publication.entity.ts';
+import { RigPreset } from './features/rig-presets/rig-preset.entity.ts';
 import { Answer } from './features/sessions/answer.entity.ts';
 import { Seat } from './features/sessions/seat.entity.ts';
 import { Session } from './features/sessions/session.entity.ts';
@@ -59,4 +61,6 @@ export const entities = [
   PastRole,
   Listener,
   Attendance,
+  LevelDuty,
+  RigPreset,
 ];

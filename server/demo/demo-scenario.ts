@@ -1,5 +1,7 @@
 import type { CableDraft } from '#shared/contracts/cables.ts';
 import type { StudyDraft } from '#shared/contracts/studies.ts';
+import type { RigPreset } from '#shared/protocol/rig-preset.ts';
+import { plainSteps, shippedPresets } from '#shared/protocol/shipped-presets.ts';
 
 // The demo's scenario: an invented workshop that makes loudspeaker cable for ships' saloons and homes.
 
@@ -68,6 +70,13 @@ type Free = Omit<StudyDraft, 'cables' | 'codeHolderId'>;
 
 const chain =
   'Network player, integrated amplifier (0.05 Ω output), two-way loudspeakers of nominal 4 Ω, listening room of 28 m².';
+
+/** For trying things out: the plain steps, no waits, nothing to scan. */
+export const benchPreset: RigPreset = {
+  ...shippedPresets.loudspeaker,
+  name: 'Bench, for trying out',
+  steps: plainSteps('loudspeaker'),
+};
 
 /** Ready to run in three minutes: short changes and excerpts, so that a visitor sees a whole session. */
 export const studyToRun: Free = {

@@ -11,6 +11,7 @@ import { Organisation } from '../features/organisations/organisation.entity.ts';
 import { PastRole } from '../features/organisations/past-role.entity.ts';
 import { Publication } from '../features/publications/publication.entity.ts';
 import { withdraw } from '../features/publications/publications.service.ts';
+import { RigPreset } from '../features/rig-presets/rig-preset.entity.ts';
 import { User } from '../features/users/user.entity.ts';
 import { OutgoingMail } from '../mail/outgoing-mail.entity.ts';
 import { demoPeople } from './demo-people.ts';
@@ -30,6 +31,7 @@ export async function forgetDemo(deps: Deps, organisationId: string): Promise<vo
     const cables = await tx.findBy(Cable, { organisationId });
     if (cables.length > 0) await tx.delete(Specimen, { cableId: In(cables.map(({ id }) => id)) });
     await tx.delete(Cable, { organisationId });
+    await tx.delete(RigPreset, { organisationId });
     await tx.delete(OutgoingMail, { organisationId });
     await tx.delete(Invitation, { organisationId });
     await tx.delete(Attendance, { organisationId });

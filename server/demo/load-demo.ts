@@ -4,6 +4,7 @@ import type { Deps } from '../deps.ts';
 import { addSpecimen, createCable, getCable } from '../features/cables/cables.service.ts';
 import { Membership } from '../features/organisations/membership.entity.ts';
 import { Organisation } from '../features/organisations/organisation.entity.ts';
+import { createPreset } from '../features/rig-presets/rig-presets.service.ts';
 import { planSession } from '../features/sessions/sessions.service.ts';
 import { closeStudy } from '../features/studies/closing.service.ts';
 import { createStudy } from '../features/studies/studies.service.ts';
@@ -13,6 +14,7 @@ import { User } from '../features/users/user.entity.ts';
 import { Sittings } from '../live/sittings.ts';
 import { demoPeople } from './demo-people.ts';
 import {
+  benchPreset,
   closedPreference,
   closedStudy,
   closedWithout,
@@ -149,6 +151,7 @@ export async function loadDemo(deps: Deps): Promise<void> {
   const people = await makePeople(past, organisationId);
   const cables = await makeCables(past, organisationId);
   const codeHolderId = people.codeHolder;
+  await createPreset(past, organisationId, benchPreset);
   await runPublishedStudy(past, clock, organisationId, people, { ...publishedStudy, cables, codeHolderId });
   clock.advance(deps.clock.now() - 3 * dayMs - clock.now());
   const of = (free: Omit<StudyDraft, 'cables' | 'codeHolderId'>): StudyDraft => ({ ...free, cables, codeHolderId });

@@ -15,6 +15,8 @@ type Command = ProctorCommand extends infer C ? (C extends ProctorCommand ? Omit
 
 type Phone = { seat: string; secret: string; view: ListenerView | null };
 
+const paceOf: { readonly [step: string]: number } = { mute: 2_000, unplug: 5_000, fit: 9_000, check: 3_000 };
+
 /** What one simulated listener answers, from the codes that were fitted for each presentation and from chance. */
 export type Hearing = (codes: readonly string[], seat: number, trial: number) => string | null;
 
@@ -94,19 +96,17 @@ export class SimulatedSession {
 
   /** One presentation: the steps of the change at a human pace, the wait, the excerpt. Returns the code fitted. */
   async #present(): Promise<string> {
-    for (const [step, paceMs] of [
-      ['mute', 2_000],
-      ['unplug', 5_000],
-      ['fit', 9_000],
-      ['check', 3_000],
-    ] as const) {
+    const { steps } = this.#view;
+    for (const { kind: step } of steps.slice(0, -1)) {
       const { trial } = this.#view;
+      const paceMs = paceOf[step] ?? 1_000;
       const leftMs = (trial?.endsAt ?? 0) - this.#clock.now();
       await this.#wait(Math.min(paceMs, Math.max(0, Math.floor(leftMs / 5))));
       await this.#command({ kind: 'confirm-step', step });
     }
     await this.#wait(Math.max(0, (this.#view.trial?.endsAt ?? 0) - this.#clock.now()) + 400);
-    await this.#command({ kind: 'confirm-step', step: 'unmute' });
+    const last = steps.at(-1);
+    if (last !== undefined) await this.#command({ kind: 'confirm-step', step: last.kind });
     const code = this.#view.trial?.code ?? '';
     await this.#wait(Math.max(0, (this.#view.trial?.endsAt ?? 0) - this.#clock.now()));
     return code;

@@ -2,6 +2,7 @@ import Papa from 'papaparse';
 import type { Entry } from '../ledger/chain.ts';
 import { answerName } from '../ledger/publication-parts.ts';
 import type { StudyReading } from '../ledger/study-reading.ts';
+import { levelsTables } from '../levels/levels-table.ts';
 import { truthOf } from '../session/fitting.ts';
 import type { EndedTrial, SessionState } from '../session/state.ts';
 import { cuesTable } from './cues-table.ts';
@@ -14,7 +15,7 @@ export type TableField = {
 };
 
 export type Table = {
-  readonly name: 'sessions' | 'trials' | 'answers' | 'listeners' | 'result' | 'cues';
+  readonly name: 'sessions' | 'trials' | 'answers' | 'listeners' | 'result' | 'levels' | 'cues';
   readonly title: string;
   readonly fields: readonly TableField[];
   readonly key: readonly string[];
@@ -41,6 +42,7 @@ export function tablesOf(study: StudyReading): Table[] {
     answersTable(study),
     listenersTable(study),
     resultTable(study),
+    ...levelsTables(study),
     ...cuesTable(study),
   ];
 }

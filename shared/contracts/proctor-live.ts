@@ -1,12 +1,15 @@
 import { z } from 'zod';
+import { levelChecks } from '../levels/measured-levels.ts';
+import { levelHandlings } from '../levels/registered-levels.ts';
 import { sessionPhases } from './sessions.ts';
 
 const time = z.int();
 const version = { expectVersion: z.int().min(0) };
 const say = (most: number) => z.string().trim().max(most, `At most ${most} characters`);
 
-export const changeSteps = ['mute', 'unplug', 'fit', 'check', 'unmute'] as const;
-export type ChangeStep = (typeof changeSteps)[number];
+/** The kinds of a change's steps, each with one meaning everywhere. Which of them a session goes through its plan says. */
+export const stepKinds = ['mute', 'unplug', 'fit', 'scan', 'check', 'settle', 'unmute'] as const;
+export type ChangeStep = (typeof stepKinds)[number];
 
 export const cautions = ['amplifier', 'shorts', 'mains', 'hearing', 'local-rules'] as const;
 export type Caution = (typeof cautions)[number];
@@ -23,7 +26,7 @@ export const proctorCommand = z.discriminatedUnion('kind', [
   z.strictObject({ kind: z.literal('close-seating'), ...version }),
   z.strictObject({ kind: z.literal('begin-familiarisation'), ...version }),
   z.strictObject({ kind: z.literal('begin-trial'), ...version }),
-  z.strictObject({ kind: z.literal('confirm-step'), ...version, step: z.enum(changeSteps) }),
+  z.strictObject({ kind: z.literal('confirm-step'), ...version, step: z.enum(stepKinds) }),
   z.strictObject({ kind: z.literal('lock-trial'), ...version }),
   z.strictObject({
     kind: z.literal('void-trial'),
@@ -38,6 +41,11 @@ export const proctorCommand = z.discriminatedUnion('kind', [
     kind: z.literal('record-deviation'),
     ...version,
     text: say(1000).min(3, 'Say what differed and why'),
+  }),
+  z.strictObject({
+    kind: z.literal('skip-levels'),
+    ...version,
+    reason: say(500).min(3, 'Say why they are not measured'),
   }),
   z.strictObject({ kind: z.literal('finish'), ...version }),
   z.strictObject({ kind: z.literal('abandon'), ...version, reason: say(500).min(3, 'Say why the session ends here') }),
@@ -55,7 +63,13 @@ export const proctorView = z.strictObject({
   method: z.string(),
   rig: z.enum(['loudspeaker', 'line', 'headphone']),
   phase: z.enum(sessionPhases),
+  /** What must be read and ticked. */
+  cautions: z.array(z.enum(cautions)),
   cautionsConfirmed: z.boolean(),
+  /** The steps of every change, in order, in the words of the rig's preset; `{code}` stands for the code to be fitted. */
+  steps: z.array(
+    z.strictObject({ kind: z.enum(stepKinds), leastS: z.int(), act: z.string(), how: z.string(), done: z.string() }),
+  ),
   paused: z
     .strictObject({ reason: z.enum(['break', 'too-loud', 'trouble']), seat: z.string().nullable(), since: time })
     .nullable(),
@@ -75,9 +89,11 @@ export const proctorView = z.strictObject({
       /** The blind code to be fitted, during a change and while it is heard. */
       code: z.string().nullable(),
       excerpt: z.string(),
-      stepsDone: z.array(z.enum(changeSteps)),
+      stepsDone: z.array(z.enum(stepKinds)),
       /** The next step, or null when none is to be confirmed. */
-      step: z.enum(changeSteps).nullable(),
+      step: z.enum(stepKinds).nullable(),
+      /** From when that step may be confirmed; the last one waits for `endsAt` besides. */
+      stepEndsAt: time.nullable(),
       /** Change: when listening may start. Listening: when it ends. Answering: when the window ends. */
       endsAt: time.nullable(),
       longChange: z.boolean(),
@@ -96,6 +112,17 @@ export const proctorView = z.strictObject({
       late: z.boolean(),
     }),
   ),
+  /** How the levels stand, never a figure; null where the protocol registers none. */
+  levels: z
+    .strictObject({
+      handling: z.enum(levelHandlings),
+      /** Null where a measurement was left out. */
+      checks: z.array(z.strictObject({ check: z.enum(levelChecks), at: time, isIn: z.boolean().nullable() })),
+      due: z.enum(levelChecks).nullable(),
+      /** Why the session cannot start as they are. */
+      bar: z.string().nullable(),
+    })
+    .nullable(),
   record: z.strictObject({ entries: z.int(), sessionEntries: z.int() }),
   demo: z.boolean(),
   /** A run with invented codes, on no record. */

@@ -1,5 +1,8 @@
 import { z } from 'zod';
+import { registeredLevels } from '../levels/registered-levels.ts';
 import { methodIds, methods } from '../methods/methods.ts';
+import { leastChangeS, rigPreset, rigs } from '../protocol/rig-preset.ts';
+import { faultsOfWays } from '../protocol/ways-to-run.ts';
 import { endpoint, managers } from './endpoint.ts';
 import { organisationParams, thingParams } from './organisation-params.ts';
 import { listQuery, pageOf, sortBy } from './paging.ts';
@@ -12,9 +15,6 @@ export type StudyState = (typeof studyStates)[number];
 /** The states after closing: the secrets are open and the result is on the record. */
 export const closedStates = ['closed', 'published', 'shelved'] as const satisfies readonly StudyState[];
 export const isClosed = (state: StudyState) => (closedStates as readonly StudyState[]).includes(state);
-
-export const rigs = ['loudspeaker', 'line', 'headphone'] as const;
-export type Rig = (typeof rigs)[number];
 
 const line = (most: number) =>
   z
@@ -60,10 +60,16 @@ export const studyDraft = z
     alphaPerMille: whole(1, 200, 'tenths of a per cent'),
     programme: z.array(excerptDraft).min(1, 'Add at least one excerpt').max(12, 'At most 12 excerpts'),
     rig: z.enum(rigs, 'Choose a rig'),
+    /** How a change is made there, as it was chosen; left out for five plain steps without waits. */
+    rigPreset: rigPreset.optional(),
     chain: line(1000).min(3, 'Describe source, amplifier and transducers'),
     changeS: whole(3, 300, 'seconds'),
     answerS: whole(5, 300, 'seconds'),
     confidence: z.boolean(),
+    /** How level at the load is handled and measured; left out where it is not. */
+    levels: registeredLevels.optional(),
+    /** Whether what comes again within a trial is fitted from specimens of its own; left out for no. */
+    separateSpecimens: z.boolean().optional(),
     codeHolderId: z.uuid('Choose the code holder'),
   })
   .check((check) => {
@@ -95,6 +101,22 @@ export const studyDraft = z
         path: ['attribute'],
         message: isAsked ? 'Name it in a word or two, such as bass' : `${methods[method].name} asks for no attribute`,
       });
+    const { rig, rigPreset: preset, changeS } = check.value;
+    if (preset !== undefined && preset.kind !== rig)
+      check.issues.push({
+        code: 'custom',
+        input: preset,
+        path: ['rigPreset'],
+        message: 'This preset is for another rig',
+      });
+    const least = preset === undefined ? 0 : leastChangeS(preset.steps);
+    if (changeS < least)
+      check.issues.push({
+        code: 'custom',
+        input: changeS,
+        path: ['changeS'],
+        message: `The waits of the rig’s steps come to ${least} s; a change cannot be shorter`,
+      });
     const { marginPercent } = check.value;
     const { margin } = methods[method];
     if (marginPercent !== undefined && (margin === null || marginPercent > margin.mostPercent))
@@ -104,6 +126,7 @@ export const studyDraft = z
         path: ['marginPercent'],
         message: margin === null ? `${methods[method].name} takes no margin` : `At most ${margin.mostPercent}`,
       });
+    for (const fault of faultsOfWays(check.value)) check.issues.push({ code: 'custom', input: check.value, ...fault });
   });
 export type StudyDraft = z.output<typeof studyDraft>;
 

@@ -7,7 +7,9 @@ const steps: { readonly [step: string]: string } = {
   mute: 'muting',
   unplug: 'unplugging',
   fit: 'fitting',
+  scan: 'scanning',
   check: 'checking',
+  settle: 'settling',
 };
 
 /** A cue as a sentence has it: "fitting", "the pause before the trial". */

@@ -43,6 +43,13 @@ export const abx: Method<ForcedChoiceResult> = {
     return isA === (firstSide === 0) ? 0 : 1;
   },
   fitterCouldSee: 'Whoever fits X could still see whether its code is that of A.',
+  separate: {
+    what: 'X',
+    stillSeen:
+      'X had specimens and codes of its own, so that no code of X was ever that of A or B. Whoever fits the cables could still see in which trials X was the same cable, and not which one it was.',
+    deals: 1,
+    specimen: (presentation) => (presentation === 'X' ? 1 : 0),
+  },
 
   spoken: (presentation) => presentation,
   question: () => 'Which one did X match?',

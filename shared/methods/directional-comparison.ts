@@ -54,6 +54,7 @@ export const directionalComparison: Method<ForcedChoiceResult> = {
     return presentation === truth ? 0 : 1;
   },
   fitterCouldSee: 'Whoever fits the cables could still see which code came first in a trial.',
+  separate: null,
 
   spoken: spokenPlace,
   question: questionOf,

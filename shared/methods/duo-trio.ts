@@ -56,6 +56,13 @@ export const duoTrio: Method<ForcedChoiceResult> = {
     return presentation === 'first' ? first : second;
   },
   fitterCouldSee: 'Whoever fits the cables could still see from their codes which of the two was R again.',
+  separate: {
+    what: 'the reference, R,',
+    stillSeen:
+      'R had specimens and codes of its own, so that no code came twice in a trial. Whoever fits the cables could still see which trials had the same right answer, and not which answer it was.',
+    deals: 1,
+    specimen: (presentation) => (presentation === 'R' ? 1 : 0),
+  },
 
   spoken: (presentation) => (presentation === 'R' ? 'the reference, R' : spokenPlace(presentation)),
   question: () => 'Which one was the same as R?',

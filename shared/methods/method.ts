@@ -111,6 +111,18 @@ export type TrialWords = {
   count(answers: readonly ScoredAnswer[], truth: string): string;
 };
 
+/** How a trial is fitted from two specimens of each cable, so that no code comes twice in it. */
+export type SeparateSpecimens = {
+  /** What has specimens of its own, for the study form: "X". */
+  readonly what: string;
+  /** What whoever fits could still infer from the codes of the whole study: sentences for the blinding rung. */
+  readonly stillSeen: string;
+  /** In how many equally likely ways the specimens of a trial are dealt, beside its truth. */
+  readonly deals: number;
+  /** Which of its cable's two specimens is fitted for a presentation; `deal` counts from 0. */
+  specimen(presentation: string, truth: string | null, deal: number): 0 | 1;
+};
+
 /**
  * A method of comparison: one module each, all of this shape. The live session, the phone, the planner and the
  * report ask the module and know no method by name.
@@ -146,6 +158,8 @@ export type Method<R extends ResultFrame = RegisteredResult> = {
   fitted(presentation: string, truth: string | null, firstSide: CablePlace): CablePlace;
   /** What whoever fits the cables could still learn from their codes: a sentence for the blinding rung. */
   readonly fitterCouldSee: string;
+  /** Null where no code comes twice in a trial anyway: then there is nothing of the kind to hide. */
+  readonly separate: SeparateSpecimens | null;
 
   // What the listener is asked.
 

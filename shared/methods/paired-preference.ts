@@ -66,6 +66,7 @@ export const pairedPreference: Method<PreferenceResult> = {
     return presentation === truth ? 0 : 1;
   },
   fitterCouldSee: 'Whoever fits the cables could still see which code came first in a trial.',
+  separate: null,
 
   spoken: spokenPlace,
   question: () => 'Which do you prefer?',

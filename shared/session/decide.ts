@@ -1,9 +1,10 @@
 import type { ProctorCommand } from '../contracts/proctor-live.ts';
-import { cautions, changeSteps } from '../contracts/proctor-live.ts';
 import { Problem } from '../problem.ts';
 import { contributionCommitment } from './answer-leaf.ts';
+import { cautionsOf, isLastStep, nextStep, stepEndsAt } from './change-steps.ts';
+import { type LevelCommand, recordLevels, requireHalfTime, requireLevels, skipLevels } from './decide-levels.ts';
 import type { PayloadOf, SessionEvent, SessionEventKind } from './events.ts';
-import { activeSeats, excerptOf, listeningMayStartAt, nextStep, nextTrial, openAnswers } from './progress.ts';
+import { activeSeats, excerptOf, listeningMayStartAt, nextTrial, openAnswers } from './progress.ts';
 import type { OpenTrial, SessionState } from './state.ts';
 
 type Plain<C> = C extends unknown ? Omit<C, 'expectVersion'> : never;
@@ -24,6 +25,7 @@ export type SessionCommand =
   | { kind: 'leave'; seat: string }
   | { kind: 'note-late-answer'; seat: string; trial: number; leaf: string }
   | { kind: 'note-restart' }
+  | Extract<LevelCommand, { kind: 'record-levels' }>
   | { kind: 'tick' };
 
 type Emit = <K extends SessionEventKind>(kind: K, payload: Omit<PayloadOf<K>, 'session'>) => SessionEvent;
@@ -53,17 +55,21 @@ function openTrial(state: SessionState, trial: number, emit: Emit): SessionEvent
 function confirmStep(state: SessionState, step: string, now: number, emit: Emit): SessionEvent[] {
   const trial = requireOpenTrial(state);
   refuseUnless(state.paused === null, 'wrong-phase', 'The session is paused. Resume it first.');
-  const expected = nextStep(trial);
+  const { plan } = state;
+  const expected = nextStep(trial, plan);
   if (expected === null || expected !== step) throw new Problem('stale-view', 'That step is done already.');
   const { trial: number, presentation } = trial;
-  if (expected !== changeSteps.at(-1)) return [emit('step-confirmed', { trial: number, presentation, step: expected })];
-  const startsAt = listeningMayStartAt(trial, state.plan.changeMs, now);
+  if (!isLastStep(trial, plan)) {
+    refuseUnless(now >= (stepEndsAt(trial, plan) ?? now), 'too-early', 'This step lasts its least time, every time.');
+    return [emit('step-confirmed', { trial: number, presentation, step: expected })];
+  }
+  const startsAt = listeningMayStartAt(trial, plan, now);
   refuseUnless(
     now >= startsAt,
     'too-early',
     'Every change lasts its registered time. Listening starts when it is over.',
   );
-  const lengths = Math.round((startsAt - trial.changeStartedAt) / state.plan.changeMs);
+  const lengths = Math.round((startsAt - trial.changeStartedAt) / plan.changeMs);
   return [emit('listening-started', { trial: number, presentation, lengths })];
 }
 
@@ -128,13 +134,15 @@ export function decide(state: SessionState, command: SessionCommand, now: number
   switch (command.kind) {
     case 'confirm-cautions': {
       requirePhase(state, ['planned'], 'The cautions are confirmed before seating opens.');
-      const missing = cautions.filter((caution) => !command.items.includes(caution));
+      const due = cautionsOf(state.plan);
+      const missing = due.filter((caution) => !command.items.includes(caution));
       refuseUnless(missing.length === 0, 'invalid-input', 'Read and tick every caution before you go on.');
-      return state.cautionsConfirmed ? [] : [emit('cautions-confirmed', { items: [...cautions] })];
+      return state.cautionsConfirmed ? [] : [emit('cautions-confirmed', { items: due })];
     }
     case 'open-seating':
       requirePhase(state, ['planned'], 'Seating is open already.');
       refuseUnless(state.cautionsConfirmed, 'wrong-phase', 'Confirm the cautions first.');
+      requireLevels(state);
       return [emit('seating-opened', { commitment: command.commitment })];
     case 'take-seat': {
       requirePhase(state, live, 'This session takes no listeners now.');
@@ -158,11 +166,13 @@ export function decide(state: SessionState, command: SessionCommand, now: number
       return reveal(state, command.seat, command.value, emit);
     case 'begin-familiarisation':
       refuseUnless(!state.familiarised, 'wrong-phase', 'The familiarisation trial is over.');
+      requireLevels(state);
       return openTrial(state, 0, emit);
     case 'begin-trial': {
       refuseUnless(state.familiarised, 'wrong-phase', 'The familiarisation trial comes first.');
       const next = nextTrial(state);
       if (next === null) throw new Problem('wrong-phase', 'Every trial of this session has ended.');
+      requireHalfTime(state);
       return openTrial(state, next, emit);
     }
     case 'confirm-step':
@@ -206,6 +216,10 @@ export function decide(state: SessionState, command: SessionCommand, now: number
       return (live as readonly string[]).includes(state.phase) ? [emit('server-restarted', {})] : [];
     case 'record-deviation':
       return [emit('deviation-recorded', { text: command.text })];
+    case 'record-levels':
+      return recordLevels(state, command, emit);
+    case 'skip-levels':
+      return skipLevels(state, command.reason, emit);
     case 'finish':
       requirePhase(state, ['running'], 'Only a running session can be finished.');
       refuseUnless(

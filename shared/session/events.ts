@@ -1,5 +1,9 @@
 import { z } from 'zod';
-import { cautions, changeSteps, voidReasons } from '../contracts/proctor-live.ts';
+import { cautions, stepKinds, voidReasons } from '../contracts/proctor-live.ts';
+import { registeredLevels } from '../levels/registered-levels.ts';
+import { rigPreset } from '../protocol/rig-preset.ts';
+import { waysToRun } from '../protocol/ways-to-run.ts';
+import { levelEvents } from './level-events.ts';
 
 // What a session puts on its study's record. Payload shapes are permanent: a change means a new version.
 
@@ -16,10 +20,15 @@ export const sessionPlan = z.strictObject({
   trials: z.int(),
   spares: z.int(),
   rig: z.enum(['loudspeaker', 'line', 'headphone']),
+  /** How a change is made, as the protocol froze it; left out where it names no preset. */
+  rigPreset: rigPreset.optional(),
   changeMs: z.int(),
   answerMs: z.int(),
   confidence: z.boolean(),
+  ...waysToRun,
   programme: z.array(z.strictObject({ title: z.string(), start: z.string(), lengthMs: z.int() })),
+  /** Left out where levels are not measured. */
+  levels: registeredLevels.optional(),
 });
 export type SessionPlan = z.output<typeof sessionPlan>;
 
@@ -46,7 +55,7 @@ export const sessionEvents = {
   'contribution-dropped': z.strictObject({ session, seat }),
   'draw-fixed': z.strictObject({ session, contributors: z.array(seat) }),
   'trial-opened': z.strictObject({ session, trial, excerpt: z.int(), seats: z.array(seat) }),
-  'step-confirmed': z.strictObject({ session, trial, presentation: z.int(), step: z.enum(changeSteps) }),
+  'step-confirmed': z.strictObject({ session, trial, presentation: z.int(), step: z.enum(stepKinds) }),
   'listening-started': z.strictObject({
     session,
     trial,
@@ -75,6 +84,7 @@ export const sessionEvents = {
   'server-restarted': z.strictObject({ session }),
   'listener-left': z.strictObject({ session, seat, by: z.enum(['listener', 'proctor']) }),
   'deviation-recorded': z.strictObject({ session: session.nullable(), text: z.string() }),
+  ...levelEvents,
   'session-finished': z.strictObject({ session }),
   'session-abandoned': z.strictObject({
     session,

@@ -1,5 +1,5 @@
-import { changeSteps } from '../contracts/proctor-live.ts';
 import type { Method } from '../methods/method.ts';
+import { stepKindsOf } from './change-steps.ts';
 import type { SessionEvent } from './events.ts';
 import { presentationsOf } from './progress.ts';
 import type { EndedTrial, OpenTrial, SessionState } from './state.ts';
@@ -48,7 +48,7 @@ function fold(state: SessionState, event: SessionEvent, method: Method): Folded 
     case 'session-replanned':
       if (state.phase !== 'planned') throw new RangeError('a session that has opened keeps its plan');
       // The rig may be another one now, and its cautions with it.
-      return { ...state, plan: event.payload.plan, cautionsConfirmed: false };
+      return { ...state, plan: event.payload.plan, cautionsConfirmed: false, levels: [] };
     case 'cautions-confirmed':
       return { ...state, cautionsConfirmed: true };
     case 'seating-opened':
@@ -101,7 +101,10 @@ function fold(state: SessionState, event: SessionEvent, method: Method): Folded 
       if (lengthMs === undefined) throw new RangeError(`excerpt ${trial.excerpt} is not in the programme`);
       const longChanges = trial.longChanges + (event.payload.lengths > 1 ? 1 : 0);
       const endsAt = event.at + lengthMs;
-      return { ...state, trial: { ...trial, stage: 'listening', stepsDone: changeSteps, endsAt, longChanges } };
+      return {
+        ...state,
+        trial: { ...trial, stage: 'listening', stepsDone: stepKindsOf(state.plan), endsAt, longChanges },
+      };
     }
     case 'listening-ended':
       return afterListening(state, openTrialOf(state, event), event.at, method);
@@ -133,6 +136,14 @@ function fold(state: SessionState, event: SessionEvent, method: Method): Folded 
       return { ...state, seats: state.seats.map((s) => (s.seat === event.payload.seat ? { ...s, left: true } : s)) };
     case 'deviation-recorded':
       return state;
+    case 'levels-measured': {
+      const { check, grade, isDrifted } = event.payload;
+      return { ...state, levels: [...state.levels, { check, at: event.at, grade, isDrifted }] };
+    }
+    case 'levels-skipped': {
+      const { check } = event.payload;
+      return { ...state, levels: [...state.levels, { check, at: event.at, grade: null, isDrifted: null }] };
+    }
     case 'session-finished':
       return { ...state, phase: 'finished' };
     case 'session-abandoned':
@@ -161,6 +172,7 @@ export function evolve(state: SessionState | null, event: SessionEvent, method: 
       trial: null,
       ended: [],
       late: [],
+      levels: [],
     };
   }
   return { ...fold(state, event, method), version: state.version + 1 };

@@ -1,5 +1,6 @@
-import { changeSteps } from '../contracts/proctor-live.ts';
 import type { Method } from '../methods/method.ts';
+import { couldBeReadyAt, isLastStep } from './change-steps.ts';
+import type { SessionPlan } from './events.ts';
 import type { OpenTrial, SessionState } from './state.ts';
 import { startGraceMs } from './state.ts';
 
@@ -48,21 +49,16 @@ export function presentationNow({ trial }: SessionState, method: Method): string
 /** The answers that a session offers. */
 export const optionsOf = ({ plan }: SessionState, method: Method) => method.options(plan);
 
-/** The step to be confirmed now, or null outside a change. */
-export function nextStep(trial: OpenTrial) {
-  return trial.stage === 'change' ? (changeSteps[trial.stepsDone.length] ?? null) : null;
-}
-
 /**
  * When listening may start: at the registered end of the change, or, when the cable was not ready by then or the start
  * was missed, at the end of the next whole length. Real and sham changes therefore last alike.
  */
-export function listeningMayStartAt(trial: OpenTrial, changeMs: number, now: number): number {
-  const allButLast = trial.stepsDone.length >= changeSteps.length - 1;
-  const readyAt = allButLast ? trial.readyAt : now;
+export function listeningMayStartAt(trial: OpenTrial, plan: SessionPlan, now: number): number {
+  const { changeMs } = plan;
+  const readyAt = couldBeReadyAt(trial, plan, now);
   const lengths = Math.max(1, Math.ceil((readyAt - trial.changeStartedAt) / changeMs));
   let at = trial.changeStartedAt + lengths * changeMs;
-  while (allButLast && now > at + startGraceMs(changeMs)) at += changeMs;
+  while (isLastStep(trial, plan) && now > at + startGraceMs(changeMs)) at += changeMs;
   return at;
 }
 
@@ -71,5 +67,5 @@ export function dueAt(state: SessionState, now: number): number | null {
   if (state.phase === 'revealing') return state.revealEndsAt;
   if (state.paused !== null || state.trial === null) return null;
   if (state.trial.stage !== 'change') return state.trial.endsAt;
-  return listeningMayStartAt(state.trial, state.plan.changeMs, now) + startGraceMs(state.plan.changeMs) + 1;
+  return listeningMayStartAt(state.trial, state.plan, now) + startGraceMs(state.plan.changeMs) + 1;
 }

@@ -1,11 +1,12 @@
 import type { CourseRing, HeldAnswer, ListenerView, LockReceipt } from '../contracts/listener-live.ts';
 import type { ProctorView } from '../contracts/proctor-live.ts';
 import type { Method } from '../methods/method.ts';
+import { cautionsOf, nextStep, stepEndsAt, stepsOf } from './change-steps.ts';
+import { levelsFor } from './level-view.ts';
 import {
   activeSeats,
   dueAt,
   listeningMayStartAt,
-  nextStep,
   nextTrial,
   openAnswers,
   optionsOf,
@@ -134,7 +135,7 @@ function seatsFor(state: SessionState, presence: readonly Presence[]): ProctorVi
 function trialFor(state: SessionState, method: Method, context: ProctorContext): ProctorView['trial'] {
   const { trial, plan } = state;
   if (trial === null) return null;
-  const mayStartAt = listeningMayStartAt(trial, plan.changeMs, context.now);
+  const mayStartAt = listeningMayStartAt(trial, plan, context.now);
   const endsAt = trial.stage === 'change' ? mayStartAt : trial.endsAt;
   return {
     number: trial.trial,
@@ -146,7 +147,8 @@ function trialFor(state: SessionState, method: Method, context: ProctorContext):
     code: context.code,
     excerpt: plan.programme[trial.excerpt]?.title ?? '',
     stepsDone: [...trial.stepsDone],
-    step: state.paused === null ? nextStep(trial) : null,
+    step: state.paused === null ? nextStep(trial, plan) : null,
+    stepEndsAt: state.paused === null ? stepEndsAt(trial, plan) : null,
     endsAt: state.paused === null ? endsAt : null,
     longChange: trial.stage === 'change' && mayStartAt > trial.changeStartedAt + plan.changeMs,
     answered: trial.answers.length,
@@ -168,7 +170,9 @@ export function proctorViewOf(state: SessionState, method: Method, context: Proc
     method: method.name,
     rig: state.plan.rig,
     phase: state.phase,
+    cautions: cautionsOf(state.plan),
     cautionsConfirmed: state.cautionsConfirmed,
+    steps: stepsOf(state.plan).map(({ kind, leastS, act, how, done }) => ({ kind, leastS, act, how, done })),
     paused: paused === null ? null : { reason: paused.reason, seat: paused.seat, since: paused.since },
     join: context.join,
     dueAt: dueAt(state, context.now),
@@ -182,6 +186,7 @@ export function proctorViewOf(state: SessionState, method: Method, context: Proc
       state.phase === 'running' && state.trial === null && activeSeats(state).length > 0 ? nextTrial(state) : null,
     course: courseOf(state),
     seats: seatsFor(state, context.presence),
+    levels: levelsFor(state),
     record: { entries: context.entries, sessionEntries: state.version },
     demo: context.demo,
     rehearsal: context.rehearsal,

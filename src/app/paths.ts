@@ -40,6 +40,11 @@ export const paths = {
   publish: (organisationId: string, studyId: string) => `${organisation(organisationId)}/studies/${studyId}/publish`,
   reports: (organisationId: string) => `${organisation(organisationId)}/reports`,
 
+  rigPresets: (organisationId: string) => `${organisation(organisationId)}/rig-presets`,
+  editRigPreset: (organisationId: string, id: string) => `${organisation(organisationId)}/rig-presets/${id}/edit`,
+  /** A copy of another. */
+  newRigPreset: (organisationId: string, id: string) => `${organisation(organisationId)}/rig-presets/${id}/copy`,
+
   people: (organisationId: string) => `${organisation(organisationId)}/people`,
   invitations: (organisationId: string) => `${organisation(organisationId)}/people/invitations`,
   mail: (organisationId: string) => `${organisation(organisationId)}/mail`,

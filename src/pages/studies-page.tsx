@@ -44,9 +44,12 @@ export function Component() {
         lede="Planned and sealed before anybody listens, read only once they are closed."
         actions={
           studies.total > 0 || isNarrowed ? (
-            <LinkButton variant="primary" to={paths.newStudy(organisationId)}>
-              Plan a study
-            </LinkButton>
+            <>
+              <LinkButton variant="primary" to={paths.newStudy(organisationId)}>
+                Plan a study
+              </LinkButton>
+              <LinkButton to={paths.rigPresets(organisationId)}>Rig presets</LinkButton>
+            </>
           ) : null
         }
       />

@@ -5,6 +5,7 @@ import type { AmendmentPreview, StudyDraft } from '#shared/contracts/studies.ts'
 import { paths } from '../app/paths.ts';
 import { cableQueries } from '../features/cables/cables.queries.ts';
 import { organisationQueries } from '../features/organisations/organisations.queries.ts';
+import { rigPresetQueries } from '../features/rig-presets/rig-presets.queries.ts';
 import { usePresence } from '../features/sign-in/membership.ts';
 import { SealAmendment } from '../features/studies/amending/seal-amendment.tsx';
 import { StudyForm } from '../features/studies/form/study-form.tsx';
@@ -24,6 +25,7 @@ export async function loader({ params }: LoaderFunctionArgs) {
     queryClient.fetchQuery(studyQueries.detail(organisationId, id)),
     queryClient.ensureQueryData(cableQueries.choices(organisationId)),
     queryClient.ensureQueryData(organisationQueries.members(organisationId)),
+    queryClient.fetchQuery(rigPresetQueries.choices(organisationId)),
   ]);
   return study.amending.allowed ? null : redirect(paths.study(organisationId, id));
 }
@@ -38,6 +40,7 @@ export function Component() {
   const { data: study } = useSuspenseQuery(studyQueries.detail(organisationId, id));
   const { cables } = useSuspenseQuery(cableQueries.choices(organisationId)).data;
   const { members } = useSuspenseQuery(organisationQueries.members(organisationId)).data;
+  const { presets } = useSuspenseQuery(rigPresetQueries.choices(organisationId)).data;
   const [typed, setTyped] = useState<StudyDraft>(study.draft);
   const [seen, setSeen] = useState<AmendmentPreview | null>(null);
   const studyTo = paths.study(organisationId, id);
@@ -58,6 +61,8 @@ export function Component() {
           values={typed}
           cables={cables}
           members={members}
+          rigPresets={presets}
+          rigPresetsTo={paths.rigPresets(organisationId)}
           isManager={({ name }) => name === study.manager}
           save={async (draft) => {
             const shown = await preview.mutateAsync(draft);

@@ -3,6 +3,7 @@ import { type LoaderFunctionArgs, redirect, useNavigate, useParams } from 'react
 import { paths } from '../app/paths.ts';
 import { cableQueries } from '../features/cables/cables.queries.ts';
 import { organisationQueries } from '../features/organisations/organisations.queries.ts';
+import { rigPresetQueries } from '../features/rig-presets/rig-presets.queries.ts';
 import { usePresence } from '../features/sign-in/membership.ts';
 import { StudyForm } from '../features/studies/form/study-form.tsx';
 import { studyQueries, useUpdateStudy } from '../features/studies/studies.queries.ts';
@@ -20,6 +21,7 @@ export async function loader({ params }: LoaderFunctionArgs) {
     queryClient.fetchQuery(studyQueries.detail(organisationId, id)),
     queryClient.ensureQueryData(cableQueries.choices(organisationId)),
     queryClient.ensureQueryData(organisationQueries.members(organisationId)),
+    queryClient.fetchQuery(rigPresetQueries.choices(organisationId)),
   ]);
   return study.state === 'draft' ? null : redirect(paths.study(organisationId, id));
 }
@@ -32,6 +34,7 @@ export function Component() {
   const { data: study } = useSuspenseQuery(studyQueries.detail(organisationId, id));
   const { cables } = useSuspenseQuery(cableQueries.choices(organisationId)).data;
   const { members } = useSuspenseQuery(organisationQueries.members(organisationId)).data;
+  const { presets } = useSuspenseQuery(rigPresetQueries.choices(organisationId)).data;
   const studyTo = paths.study(organisationId, id);
 
   return (
@@ -41,6 +44,8 @@ export function Component() {
         values={study.draft}
         cables={cables}
         members={members}
+        rigPresets={presets}
+        rigPresetsTo={paths.rigPresets(organisationId)}
         isManager={({ name }) => name === study.manager}
         save={(draft) => update.mutateAsync(draft)}
         onSaved={() => navigate(studyTo)}

@@ -3,9 +3,10 @@ import { type LoaderFunctionArgs, useNavigate } from 'react-router-dom';
 import { paths } from '../app/paths.ts';
 import { cableQueries } from '../features/cables/cables.queries.ts';
 import { organisationQueries } from '../features/organisations/organisations.queries.ts';
+import { rigPresetQueries } from '../features/rig-presets/rig-presets.queries.ts';
 import { usePresence } from '../features/sign-in/membership.ts';
 import { StudyForm } from '../features/studies/form/study-form.tsx';
-import { newStudyValues } from '../features/studies/form/study-form-values.ts';
+import { newStudyWith } from '../features/studies/form/study-form-values.ts';
 import { FirstStudy } from '../features/studies/overview/first-study.tsx';
 import { useCreateStudy } from '../features/studies/studies.queries.ts';
 import { queryClient } from '../lib/query-client.ts';
@@ -19,6 +20,7 @@ export async function loader({ params }: LoaderFunctionArgs) {
   await Promise.all([
     queryClient.ensureQueryData(cableQueries.choices(organisationId)),
     queryClient.ensureQueryData(organisationQueries.members(organisationId)),
+    queryClient.fetchQuery(rigPresetQueries.choices(organisationId)),
   ]);
   return null;
 }
@@ -30,6 +32,7 @@ export function Component() {
   const create = useCreateStudy(organisationId);
   const { cables } = useSuspenseQuery(cableQueries.choices(organisationId)).data;
   const { members } = useSuspenseQuery(organisationQueries.members(organisationId)).data;
+  const { presets } = useSuspenseQuery(rigPresetQueries.choices(organisationId)).data;
 
   return (
     <>
@@ -46,9 +49,11 @@ export function Component() {
         />
       ) : (
         <StudyForm
-          values={newStudyValues}
+          values={newStudyWith(presets)}
           cables={cables}
           members={members}
+          rigPresets={presets}
+          rigPresetsTo={paths.rigPresets(organisationId)}
           isManager={({ id }) => id === person.id}
           save={(draft) => create.mutateAsync(draft)}
           onSaved={({ id }) => navigate(paths.study(organisationId, id))}

@@ -12,6 +12,8 @@ export type Plan = {
   title?: string;
   trials?: number;
   method?: ChosenMethod;
+  /** Part of the name of the rig's preset; one without waits unless it is said otherwise. */
+  rig?: string;
 };
 
 /** Plans a study through the form, of eight trials and ABX unless it is said otherwise; leaves the page on its draft. */
@@ -35,6 +37,7 @@ export async function planStudy(manager: Page, plan: Plan): Promise<void> {
   }
   await manager.getByLabel('Excerpt 1').fill('Piano');
   await manager.getByLabel('Length', { exact: true }).fill('2');
+  await choose(manager, 'Rig', plan.rig ?? 'Bench');
   await manager.getByLabel('Chain').fill('Player, amplifier, loudspeakers');
   await manager.getByLabel('Length of a change').fill('3');
   await manager.getByLabel('Answer window').fill(String(plan.answerS));

@@ -8,11 +8,12 @@ import type { Method } from '#shared/methods/method.ts';
 import { methodOf } from '#shared/methods/methods.ts';
 import { runRegistered } from '#shared/methods/run-registered.ts';
 import { type Protocol, protocolDigest, sessionPlanOf } from '#shared/protocol/protocol.ts';
+import { chosenWays, type WaysToRun } from '#shared/protocol/ways-to-run.ts';
 import { type AnswerContent, answerLeaf, contributionCommitment } from '#shared/session/answer-leaf.ts';
+import { isLastStep, nextStep } from '#shared/session/change-steps.ts';
 import { codeKeyCommitment, drawSecretCommitment } from '#shared/session/commitments.ts';
 import { decide, type SessionCommand } from '#shared/session/decide.ts';
 import { evolve, holdAnswer } from '#shared/session/evolve.ts';
-import { nextStep } from '#shared/session/progress.ts';
 import { sessionsInRecord } from '#shared/session/read-record.ts';
 import type { RevealedKey } from '#shared/session/revealed-key.ts';
 import type { SessionState } from '#shared/session/state.ts';
@@ -143,8 +144,8 @@ export class SessionMaker {
     for (;;) {
       const { trial } = this.#state;
       if (trial === null || trial.stage === 'answering') return;
-      const step = nextStep(trial);
-      if (step === 'unmute') this.#maker.now = trial.changeStartedAt + this.#state.plan.changeMs;
+      const step = nextStep(trial, this.#state.plan);
+      if (isLastStep(trial, this.#state.plan)) this.#maker.now = trial.changeStartedAt + this.#state.plan.changeMs;
       if (step !== null) this.do({ kind: 'confirm-step', step });
       else {
         this.#maker.now = trial.endsAt ?? this.#maker.now;
@@ -264,11 +265,19 @@ export const sealedSecret = (session: number) =>
  * @param listeners seats per session, 1 to 4
  * @param startsAt  when it is sealed, in milliseconds since 1970
  * @param isAmended whether the protocol is sealed with another chain first, and amended before the codes are drawn
+ * @param ways      how its sessions are run beside the usual way
  */
-export function closedStudy(listeners: number, methodId = 'abx', startsAt?: number, isAmended = false): ClosedStudy {
+export function closedStudy(
+  listeners: number,
+  methodId = 'abx',
+  startsAt?: number,
+  isAmended = false,
+  ways: WaysToRun = {},
+): ClosedStudy {
   const maker = new StudyMaker();
   if (startsAt !== undefined) maker.now = startsAt;
-  const first = protocolFor(maker.study, listeners, methodId);
+  const plain = protocolFor(maker.study, listeners, methodId);
+  const first = { ...plain, design: { ...plain.design, ...chosenWays(ways) } };
   const conduct = { ...first.conduct, chain: 'Player, another amplifier, loudspeakers' };
   const protocol = isAmended ? { ...first, version: 2, salt: hex('second salt', 32), conduct } : first;
   const earlier = isAmended ? first : null;

@@ -5,9 +5,12 @@ import type { Console, Phone } from './live.ts';
 async function present(desk: Console, clock: HandClock): Promise<string> {
   const { trial } = await desk.sees('a change', (view) => view.trial?.stage === 'change');
   const presentation = trial?.presentationNumber;
-  for (const step of ['mute', 'unplug', 'fit', 'check']) await desk.act({ kind: 'confirm-step', step });
-  clock.advance((desk.now.trial?.endsAt ?? 0) - clock.now());
-  await desk.act({ kind: 'confirm-step', step: 'unmute' });
+  const last = desk.now.steps.length - 1;
+  for (const [index, { kind }] of desk.now.steps.entries()) {
+    const opensAt = index === last ? desk.now.trial?.endsAt : desk.now.trial?.stepEndsAt;
+    clock.advance(Math.max(0, (opensAt ?? 0) - clock.now()));
+    await desk.act({ kind: 'confirm-step', step: kind });
+  }
   const code = desk.now.trial?.code ?? '';
   clock.advance((desk.now.trial?.endsAt ?? 0) - clock.now());
   await desk.sees(

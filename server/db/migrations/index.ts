@@ -12,6 +12,8 @@ import { Registry1796142000000 } from './1796142000000-registry.ts';
 import { ProtocolVersions1796142100000 } from './1796142100000-protocol-versions.ts';
 
 import { Construction1796149000000 } from './1796149000000-construction.ts';
+import { RigPresets1796151000000 } from './1796151000000-rig-presets.ts';
+import { LevelDuties1796152000000 } from './1796152000000-level-duties.ts';
 
 /** Every migration, oldest first. */
 export const migrations = [
@@ -28,4 +30,6 @@ export const migrations = [
   Registry1796142000000,
   ProtocolVersions1796142100000,
   Construction1796149000000,
+  LevelDuties1796152000000,
+  RigPresets1796151000000,
 ];

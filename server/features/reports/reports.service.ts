@@ -8,11 +8,13 @@ import type { Entry } from '#shared/ledger/chain.ts';
 import type { CheckId } from '#shared/ledger/check-names.ts';
 import { type ClosedStudy, publicationParts } from '#shared/ledger/publication-parts.ts';
 import { type Check, verifyStudy } from '#shared/ledger/verify.ts';
+import { levelsFound } from '#shared/levels/levels-found.ts';
 import { methodOf } from '#shared/methods/methods.ts';
 import { Problem } from '#shared/problem.ts';
 import { blindingRung } from '#shared/session/blinding-rung.ts';
 import { sessionsInRecord } from '#shared/session/read-record.ts';
 import { revealedKey } from '#shared/session/revealed-key.ts';
+import type { SessionState } from '#shared/session/state.ts';
 import { studyEvents } from '#shared/session/study-events.ts';
 import { type Tx, withTransaction } from '../../db/transaction.ts';
 import type { Deps } from '../../deps.ts';
@@ -41,6 +43,20 @@ export type ClosedRecord = ClosedStudy & {
   readonly heads: readonly SignedHead[];
 };
 
+/** The level match, where the protocol registers one: over the sessions in which something was counted. */
+function levelsOf({ entries, protocol }: ClosedRecord, states: readonly SessionState[]) {
+  const registered = protocol.conduct.levels;
+  if (registered === undefined) return undefined;
+  const key = revealedKey.parse(entries.find(({ kind }) => kind === 'key-revealed')?.payload);
+  const counted = states.filter(({ ended }) => ended.some(({ outcome }) => outcome === 'locked'));
+  return levelsFound(
+    entries,
+    key.codeKey.rows,
+    registered,
+    counted.map(({ session }) => session),
+  );
+}
+
 /** Everything that a report says, from the record alone: what was checked, how blind it was, what was found. */
 function sourceFrom(closed: ClosedRecord): ReportSource {
   const { entries, protocol } = closed;
@@ -68,6 +84,7 @@ function sourceFrom(closed: ClosedRecord): ReportSource {
       isBlind: rung.name !== 'open',
     },
     endedEarly: closing.complete ? null : closing.reason,
+    levels: levelsOf(closed, states),
     setting: protocol.conduct.chain,
   });
   const finding = withCueCautions(found, cues, method, cables);

@@ -1,5 +1,5 @@
 import { useState } from 'react';
-import { type Caution, cautions, type ProctorView } from '#shared/contracts/proctor-live.ts';
+import type { Caution, ProctorView } from '#shared/contracts/proctor-live.ts';
 import { Button } from '../../ui/button.tsx';
 import { CheckboxField } from '../../ui/checkbox-field.tsx';
 import { cautionWords } from './console-words.ts';
@@ -7,6 +7,7 @@ import type { ConsoleActions } from './use-console.ts';
 
 /** What must be read and ticked before anybody is seated. */
 export function Cautions({ view, act, isBusy }: { view: ProctorView } & Pick<ConsoleActions, 'act' | 'isBusy'>) {
+  const { cautions } = view;
   const [ticked, setTicked] = useState<readonly Caution[]>([]);
   const toggle = (caution: Caution) =>
     setTicked(ticked.includes(caution) ? ticked.filter((other) => other !== caution) : [...ticked, caution]);

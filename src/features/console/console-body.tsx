@@ -38,7 +38,7 @@ export function ConsoleBody({ view, clockOffsetMs, isLost, actions, next, onNext
             <NextActButton next={next} clockOffsetMs={clockOffsetMs} isLost={isLost} onPress={onNext} />
           )}
         </div>
-        <ChangeClock trial={view.trial} clockOffsetMs={clockOffsetMs} />
+        <ChangeClock view={view} clockOffsetMs={clockOffsetMs} />
       </div>
     </div>
   );

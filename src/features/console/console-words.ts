@@ -1,60 +1,29 @@
-import type { Caution, ChangeStep, ProctorView, VoidReason } from '#shared/contracts/proctor-live.ts';
-import { changeSteps } from '#shared/contracts/proctor-live.ts';
+import type { Caution, ProctorView, VoidReason } from '#shared/contracts/proctor-live.ts';
 
 type Rig = ProctorView['rig'];
+type Step = ProctorView['steps'][number];
 
 /** A step of a change: what to do now (large), a word on how, and what the button says once it is done. */
 export type StepWords = { readonly act: string; readonly how: string; readonly done: string };
 
-const muteOf: Record<Rig, StepWords> = {
-  loudspeaker: { act: 'Stop and mute', how: 'music stopped, amplifier muted or off', done: 'It is muted' },
-  line: { act: 'Stop and mute', how: 'music stopped, amplifier muted or off', done: 'It is muted' },
-  headphone: {
-    act: 'Stop, headphones off',
-    how: 'music stopped, amplifier muted, nobody wears them',
-    done: 'They are off',
-  },
-};
-
-const fitOf: Record<Rig, string> = {
-  loudspeaker: 'loudspeaker end first, amplifier last',
-  line: 'far end first, amplifier last',
-  headphone: 'headphone end first, amplifier last',
-};
-
-const checkOf: Record<Rig, string> = {
-  loudspeaker: 'read the sleeve at both ends, no strand loose, seated firmly',
-  line: 'read the sleeve at both ends, plugs home',
-  headphone: 'read the sleeve at both ends, plugs home, headphones back on',
-};
-
 /** The words of a step. The code is shown on its sleeve; here it is named once more, to be read and said. */
-export function stepWords(step: ChangeStep, rig: Rig, code: string): StepWords {
-  switch (step) {
-    case 'mute':
-      return muteOf[rig];
-    case 'unplug':
-      return {
-        act: 'Unplug, always',
-        how: 'amplifier end first, also when the same cable goes back',
-        done: 'It is unplugged',
-      };
-    case 'fit':
-      return { act: `Fit ${code}`, how: fitOf[rig], done: `${code} is in` };
-    case 'check':
-      return { act: `Check ${code}`, how: checkOf[rig], done: `${code} is checked` };
-    case 'unmute':
-      return { act: 'Unmute and play', how: 'the same start point as always', done: 'Unmute and start listening' };
-  }
+export function stepWords({ steps }: Pick<ProctorView, 'steps'>, kind: Step['kind'], code: string): StepWords {
+  const { act = '', how = '', done = '' } = steps.find((step) => step.kind === kind) ?? {};
+  const named = (words: string) => words.replaceAll('{code}', code);
+  return { act: named(act), how: named(how), done: named(done) };
 }
 
 /** What comes after a step, as the end of a line: "fit 417". */
-export function wordsAfter(step: ChangeStep, rig: Rig, code: string): string {
-  const after = changeSteps[changeSteps.indexOf(step) + 1];
+export function wordsAfter(view: Pick<ProctorView, 'steps'>, kind: Step['kind'], code: string): string {
+  const after = view.steps[view.steps.findIndex((step) => step.kind === kind) + 1];
   if (after === undefined) return 'they listen';
-  const { act } = stepWords(after, rig, code);
+  const { act } = stepWords(view, after.kind, code);
   return act.charAt(0).toLowerCase() + act.slice(1);
 }
+
+/** Whether listening starts with this step. */
+export const startsListening = ({ steps }: Pick<ProctorView, 'steps'>, kind: Step['kind'] | null): boolean =>
+  kind !== null && steps.at(-1)?.kind === kind;
 
 export const voidWords: Record<VoidReason, string> = {
   'wrong-cable': 'A wrong cable was fitted',

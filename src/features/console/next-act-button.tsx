@@ -31,7 +31,7 @@ export function NextActButton({ next, clockOffsetMs, isLost, onPress }: NextActB
       onKeyDown={ignoreRepeats}
       className="text-2xl max-sm:[&_kbd]:hidden"
     >
-      {isWaiting ? `Listening starts in ${clockFace(seconds)}` : next.label}
+      {isWaiting ? `${next.waiting} ${clockFace(seconds)}` : next.label}
     </Button>
   );
 }

@@ -1,16 +1,24 @@
-import { changeSteps, type ProctorView } from '#shared/contracts/proctor-live.ts';
-import { stepWords } from './console-words.ts';
+import type { ProctorView } from '#shared/contracts/proctor-live.ts';
+import { startsListening, stepWords } from './console-words.ts';
 import type { ConsoleCommand } from './use-console.ts';
 
 export type NextAct = {
   readonly label: string;
   readonly command: ConsoleCommand;
   readonly step: string | null;
+  /** What the button says before that time, before the seconds. */
+  readonly waiting: string;
   /** The server's time from which the act is possible, or null when it is possible now. */
   readonly opensAt: number | null;
 };
 
-const now = (label: string, command: ConsoleCommand): NextAct => ({ label, command, step: null, opensAt: null });
+const now = (label: string, command: ConsoleCommand): NextAct => ({
+  label,
+  waiting: '',
+  command,
+  step: null,
+  opensAt: null,
+});
 
 export const isAnybodySeated = (view: ProctorView): boolean => view.seats.some(({ state }) => state !== 'left');
 
@@ -42,9 +50,11 @@ function actBetweenTrials(view: ProctorView): NextAct | null {
 function actInTrial(view: ProctorView, trial: NonNullable<ProctorView['trial']>): NextAct | null {
   const { step } = trial;
   if (step !== null) {
-    const { done } = stepWords(step, view.rig, trial.code ?? '');
-    const isLast = step === changeSteps.at(-1);
-    return { label: done, command: { kind: 'confirm-step', step }, step, opensAt: isLast ? trial.endsAt : null };
+    const { done } = stepWords(view, step, trial.code ?? '');
+    const isLast = startsListening(view, step);
+    const opensAt = isLast ? trial.endsAt : trial.stepEndsAt;
+    const waiting = isLast ? 'Listening starts in' : `${done} in`;
+    return { label: done, waiting, command: { kind: 'confirm-step', step }, step, opensAt };
   }
   if (trial.stage === 'answering' && trial.answered === trial.expected)
     return now(`Lock trial ${trial.number}`, { kind: 'lock-trial' });

@@ -1,8 +1,8 @@
-import { changeSteps, type ProctorView } from '#shared/contracts/proctor-live.ts';
+import type { ProctorView } from '#shared/contracts/proctor-live.ts';
 import { CableRun } from '../../ui/cable-run.tsx';
 import { Countdown } from '../../ui/countdown.tsx';
 import { Sleeve } from '../../ui/sleeve.tsx';
-import { stepWords, wordsAfter } from './console-words.ts';
+import { startsListening, stepWords, wordsAfter } from './console-words.ts';
 
 type Trial = NonNullable<ProctorView['trial']>;
 type Words = { title: string; detail: string };
@@ -12,8 +12,8 @@ function wordsOf(trial: Trial, view: ProctorView): Words {
   if (view.paused !== null)
     return { title: 'Wait', detail: `resume when all is well · next: ${wordsAfterPause(trial)}` };
   if (trial.step !== null) {
-    const { act, how } = stepWords(trial.step, view.rig, code);
-    return { title: act, detail: `${how} · next: ${wordsAfter(trial.step, view.rig, code)}` };
+    const { act, how } = stepWords(view, trial.step, code);
+    return { title: act, detail: `${how} · next: ${wordsAfter(view, trial.step, code)}` };
   }
   if (trial.stage === 'listening')
     return { title: 'They are listening', detail: `“${trial.excerpt}” · stop the music when the time is out` };
@@ -28,12 +28,12 @@ function wordsOf(trial: Trial, view: ProctorView): Words {
 const wordsAfterPause = (trial: Trial) =>
   trial.stage === 'answering' ? 'the answers go on' : `presentation ${trial.presentationNumber}, from its change`;
 
-function placeOf(trial: Trial): string {
+function placeOf(trial: Trial, { steps }: Pick<ProctorView, 'steps'>): string {
   const presentation = `presentation ${trial.presentationNumber} of ${trial.presentations}`;
   if (trial.stage === 'answering') return 'answers';
   if (trial.stage === 'listening') return `${presentation} · listening`;
-  const step = Math.min(trial.stepsDone.length + 1, changeSteps.length);
-  return `${presentation} · step ${step} of ${changeSteps.length}`;
+  const step = Math.min(trial.stepsDone.length + 1, steps.length);
+  return `${presentation} · step ${step} of ${steps.length}`;
 }
 
 /** The open trial: the code to be fitted on its sleeve, and the step now. */
@@ -43,7 +43,7 @@ export function TrialPanel({ trial, view }: { trial: Trial; view: ProctorView })
     <section className="flex flex-1 flex-col gap-6">
       <p className="text-soft">
         <strong className="text-ink">{trial.familiarisation ? 'Familiarisation' : `Trial ${trial.number}`}</strong>
-        {trial.familiarisation ? ', not counted' : ` of ${trial.of}`} · {placeOf(trial)}
+        {trial.familiarisation ? ', not counted' : ` of ${trial.of}`} · {placeOf(trial, view)}
       </p>
       <CableRun className="-mx-5 flex min-h-32 flex-1 items-center lg:-mx-11">
         {trial.code === null || view.paused !== null ? null : (
@@ -61,9 +61,10 @@ export function TrialPanel({ trial, view }: { trial: Trial; view: ProctorView })
 }
 
 /** How long the change still has, beside its steps; the last step carries the time itself. */
-export function ChangeClock({ trial, clockOffsetMs }: { trial: Trial | null; clockOffsetMs: number }) {
+export function ChangeClock({ view, clockOffsetMs }: { view: ProctorView; clockOffsetMs: number }) {
+  const { trial } = view;
   if (trial === null || trial.stage !== 'change' || trial.endsAt === null) return null;
-  const isLast = trial.step === changeSteps.at(-1);
+  const isLast = startsListening(view, trial.step);
   if (isLast && !trial.longChange) return null;
   return (
     <div className="flex min-h-19 min-w-60 flex-col justify-center rounded bg-sheet px-5 py-2 max-sm:w-full">

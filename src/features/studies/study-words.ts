@@ -1,4 +1,5 @@
-import type { Rig, StudyState } from '#shared/contracts/studies.ts';
+import type { StudyState } from '#shared/contracts/studies.ts';
+import type { Rig } from '#shared/protocol/rig-preset.ts';
 import { formatNumber, withUnit } from '../../lib/format.ts';
 
 /** Each state in its word, with what it means to whoever waits. */

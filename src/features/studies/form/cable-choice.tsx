@@ -1,6 +1,6 @@
 import { useFormContext, useWatch } from 'react-hook-form';
 import type { Cable } from '#shared/contracts/cables.ts';
-import type { Rig } from '#shared/contracts/studies.ts';
+import type { Rig } from '#shared/protocol/rig-preset.ts';
 import { formatLength } from '../../../lib/format.ts';
 import { SelectField } from '../../../ui/select-field.tsx';
 import { SpecimenChoice } from './specimen-choice.tsx';

@@ -1,26 +1,19 @@
 import { useFormContext } from 'react-hook-form';
-import { rigs } from '#shared/contracts/studies.ts';
+import type { KeptPreset } from '#shared/contracts/rig-presets.ts';
 import { CheckboxField } from '../../../ui/checkbox-field.tsx';
 import { NumberField } from '../../../ui/number-field.tsx';
-import { RadioGroupField } from '../../../ui/radio-group-field.tsx';
 import { TextAreaField } from '../../../ui/text-area-field.tsx';
-import { rigWords } from '../study-words.ts';
 import { FormSection } from './form-section.tsx';
+import { RigChoice } from './rig-choice.tsx';
 import type { StudyFormValues } from './study-form-values.ts';
 
 const number = { valueAsNumber: true } as const;
-const rigOptions = rigs.map((rig) => ({ value: rig, label: rigWords[rig] }));
 
-export function RigFields() {
+export function RigFields({ presets, presetsTo }: { presets: readonly KeptPreset[]; presetsTo: string }) {
   const { register } = useFormContext<StudyFormValues>();
   return (
     <FormSection title="The rig and the clock">
-      <RadioGroupField
-        {...register('rig')}
-        label="Where the cables are used"
-        options={rigOptions}
-        hint="Decides which cautions and which steps of a change the proctor is shown."
-      />
+      <RigChoice presets={presets} presetsTo={presetsTo} />
       <TextAreaField
         {...register('chain')}
         label="Chain"

@@ -1,4 +1,5 @@
 import type { z } from 'zod';
+import type { KeptPreset } from '#shared/contracts/rig-presets.ts';
 import type { studyDraft } from '#shared/contracts/studies.ts';
 import { methodIds } from '#shared/methods/methods.ts';
 
@@ -13,6 +14,7 @@ export const newStudyValues: StudyFormValues = {
   methodSettings: [],
   attribute: '',
   samplingFrame: '',
+  separateSpecimens: false,
   cables: [
     { cableId: '', specimenIds: [] },
     { cableId: '', specimenIds: [] },
@@ -30,3 +32,9 @@ export const newStudyValues: StudyFormValues = {
   confidence: true,
   codeHolderId: '',
 };
+
+/** A new study begins with the first preset for its rig. */
+export function newStudyWith(presets: readonly KeptPreset[]): StudyFormValues {
+  const preset = presets.find((kept) => kept.preset.kind === newStudyValues.rig)?.preset;
+  return preset === undefined ? newStudyValues : { ...newStudyValues, rigPreset: preset };
+}

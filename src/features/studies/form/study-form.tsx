@@ -1,6 +1,7 @@
 import { type ReactNode, useCallback, useRef } from 'react';
 import { useForm } from 'react-hook-form';
 import type { Cable } from '#shared/contracts/cables.ts';
+import type { KeptPreset } from '#shared/contracts/rig-presets.ts';
 import type { StudyDraft } from '#shared/contracts/studies.ts';
 import type { Member } from '#shared/contracts/users.ts';
 import { showProblem } from '../../../lib/show-problem.ts';
@@ -22,6 +23,9 @@ type StudyFormProps<Saved> = {
   cables: readonly Cable[];
   members: readonly Member[];
   isManager: (member: Member) => boolean;
+  rigPresets: readonly KeptPreset[];
+  /** Where presets are changed and copied. */
+  rigPresetsTo: string;
   save: (draft: StudyDraft) => Promise<Saved>;
   /** Where to go once it is saved; nothing typed is lost until then. */
   onSaved: (saved: Saved) => void;
@@ -34,6 +38,8 @@ export function StudyForm<Saved>({
   cables,
   members,
   isManager,
+  rigPresets,
+  rigPresetsTo,
   save,
   onSaved,
   renderActions,
@@ -72,7 +78,7 @@ export function StudyForm<Saved>({
             <CableFields cables={cables} />
             <ListeningFields />
             <ProgrammeFields />
-            <RigFields />
+            <RigFields presets={rigPresets} presetsTo={rigPresetsTo} />
             <CodeHolderField members={members} isManager={isManager} />
           </div>
           <Planner />

@@ -1,6 +1,8 @@
 import type { Study, StudyDraft } from '#shared/contracts/studies.ts';
 import { methodOf } from '#shared/methods/methods.ts';
 import { analysisFacts } from '#shared/protocol/analysis-facts.ts';
+import { presetFacts } from '#shared/protocol/preset-facts.ts';
+import { waysFacts } from '#shared/protocol/ways-to-run.ts';
 import { formatCount } from '../../../lib/format.ts';
 import { percentOfPerMille, rigWords } from '../study-words.ts';
 
@@ -19,6 +21,7 @@ export function protocolFacts({ draft, cableNames, codeHolder }: Study): Protoco
         `${cableNames[index === 0 ? 0 : 1]}, ${formatCount(specimenIds.length, 'specimen')}`,
       ),
     ),
+    ...waysFacts(draft),
     words('Listening', listeningWords(draft)),
     ...(draft.samplingFrame ? [words('Listeners are drawn from', draft.samplingFrame)] : []),
     words('Spares', `${draft.spares} in each session`),
@@ -32,6 +35,7 @@ export function protocolFacts({ draft, cableNames, codeHolder }: Study): Protoco
       words(`Excerpt ${index + 1}`, `${title}, ${lengthS} s${start === '' ? '' : ` from ${start}`}`),
     ),
     words('Rig', rigWords[draft.rig]),
+    ...presetFacts(draft.rigPreset),
     words('Chain', draft.chain),
     words('Every change', `${draft.changeS} s, real or not`),
     words('Answer window', `${draft.answerS} s`),
