@@ -17,6 +17,7 @@ import { healthRoutes, version } from './features/health/health.routes.ts';
 import { invitationsRoutes } from './features/invitations/invitations.routes.ts';
 import { levelsRoutes } from './features/levels/levels.routes.ts';
 import { mailRoutes } from './features/mail/mail.routes.ts';
+import { measurementsRoutes } from './features/measurements/measurements.routes.ts';
 import { peopleRoutes } from './features/people/people.routes.ts';
 import { publicPages } from './features/publications/public-pages.ts';
 import { publicationsRoutes } from './features/publications/publications.routes.ts';
@@ -112,6 +113,7 @@ export function createApp(deps: Deps) {
   invitationsRoutes(api, access, deps);
   cablesRoutes(api, access, deps);
   rigPresetsRoutes(api, access, deps);
+  measurementsRoutes(api, access, deps);
   studiesRoutes(api, access, deps, sittings);
   codesRoutes(api, access, deps);
   sessionsRoutes(api, access, deps, sittings);

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { portrayedCueAudit } from '../cue-audit/portrayed-cue-audit.ts';
 import { finding } from '../findings/finding.ts';
 import { levelReport } from '../levels/level-report.ts';
 import { registeredResult } from '../methods/methods.ts';
@@ -42,6 +43,7 @@ export const report = z.strictObject({
   nullDistribution: z.array(chanceBar),
   /** Exploratory: counts and limits, never a p. */
   byExcerpt: z.array(z.strictObject({ title: z.string(), trials: z.int(), rates: z.array(countedRate) })),
+  cueAudit: portrayedCueAudit,
   rung: z.strictObject({ name: z.string(), why: z.string() }),
   /** The gap between presentations and the blinding rung, each in a sentence: part of the finding’s first lines. */
   conditions: z.array(z.string()),

@@ -1,5 +1,6 @@
 import type { Report } from '#shared/contracts/reports.ts';
 import type { SignedHead } from '#shared/contracts/signed-heads.ts';
+import type { PortrayedCueAudit } from '#shared/cue-audit/portrayed-cue-audit.ts';
 import { resultsByExcerpt } from '#shared/findings/by-excerpt.ts';
 import type { Finding } from '#shared/findings/finding.ts';
 import type { Entry } from '#shared/ledger/chain.ts';
@@ -34,6 +35,7 @@ export type ReportSource = {
   readonly rooms: ReadonlyMap<number, string>;
   readonly result: RegisteredResult;
   readonly finding: Finding;
+  readonly cueAudit: PortrayedCueAudit;
   readonly checks: readonly Check[];
   readonly rung: BlindingRung;
   readonly closing: StudyPayloadOf<'study-closed'>;
@@ -211,6 +213,7 @@ export function reportView(source: ReportSource): Report {
     result,
     nullDistribution: method.nullDistribution(counted),
     byExcerpt: byExcerptOf(protocol, counted),
+    cueAudit: source.cueAudit,
     rung: { name: rung.name, why: rung.why },
     conditions: conditionsOf(source),
     levels:
