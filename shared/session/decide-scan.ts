@@ -107,7 +107,8 @@ export function decideInventoryEnd(
     throw new Problem('invalid-input', `Not found: ${named}. Scan what is missing, or say why it is not.`, [
       { pointer: '/reason', detail: 'Say why, in a few words' },
     ]);
-  const text = `The inventory was ended without ${named}: ${reason}`;
+  // Managers read deviations before closing, so this one has no code in it.
+  const text = `The inventory was ended with ${missing.length} of ${codes.length} codes not found: ${reason}`;
   return [ended, emit('deviation-recorded', { text })];
 }
 

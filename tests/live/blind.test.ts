@@ -2,12 +2,13 @@ import request from 'supertest';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type { StudyDraft } from '#shared/contracts/studies.ts';
 import { type MethodId, methodIds } from '#shared/methods/methods.ts';
+import { shippedPresets } from '#shared/protocol/shipped-presets.ts';
 import { HandClock } from '../../server/demo/hand-clock.ts';
 import { linkTokenOf } from '../../server/features/attendances/personal-link.ts';
 import { Console, Phone } from '../support/live.ts';
 import { makeOrganisation, readyStudy, secretTreatment } from '../support/people.ts';
 import { repeatableRandom } from '../support/random.ts';
-import { begin, presentTrial } from '../support/run-session.ts';
+import { begin, presentTrial, type Scan, scanBothEnds } from '../support/run-session.ts';
 import { testServer } from '../support/test-server.ts';
 
 // Non-interference: the same session, with the same clock, ids, phones and answers, but with other code keys and other
@@ -24,6 +25,29 @@ type Run = { phones: string[][]; manager: string[]; mails: string[]; proctor: st
 
 // Commitments, and the digests chained from them, are random by design.
 const withoutDigests = (text: string) => text.replace(/[0-9a-f]{64}/g, '#').replace(/urn:uuid:[0-9a-f-]{36}/g, 'urn');
+
+/** Holds up every cable that was fitted before and is another one now, takes the scan back once, and scans. */
+function scanWithFaults(seen: Set<string>): Scan {
+  return async (desk, code) => {
+    for (const text of [...seen].filter((other) => other !== code))
+      await expect(desk.act({ kind: 'scan-label', text, by: 'scanner' })).rejects.toThrow('in hand');
+    if (!seen.has(code)) {
+      await scanBothEnds(desk, code);
+      await desk.act({ kind: 'undo-step' });
+    }
+    seen.add(code);
+    await scanBothEnds(desk, code);
+  };
+}
+
+/** Goes through the sleeves: too early, with another study's label, and with all of them. */
+async function takeInventory(desk: Console, codes: Iterable<string>): Promise<void> {
+  const foreign = { kind: 'scan-label', text: 'FLBBBB9991', by: 'camera' };
+  await expect(desk.act(foreign)).rejects.toThrow('not of this study');
+  await expect(desk.act({ kind: 'end-inventory', reason: '' })).rejects.toThrow('Not found');
+  for (const text of codes) await desk.act({ kind: 'scan-label', text, by: 'typed' });
+  await desk.act({ kind: 'end-inventory', reason: '' });
+}
 
 async function run({ study: change, choices }: Asked, { codeKey, drawSecret }: Seeds): Promise<Run> {
   const clock = new HandClock(Date.parse('2026-12-05T18:00:00.000Z'));
@@ -69,16 +93,19 @@ async function run({ study: change, choices }: Asked, { codeKey, drawSecret }: S
   const phones: Phone[] = [];
   phones.push(await Phone.joinByLink(server.address, links[0] ?? '', 'left'));
   phones.push(await Phone.join(server.address, code, 'right'));
-  await begin(desk, phones, clock);
+  const fitted = new Set<string>();
+  const scan = scanWithFaults(fitted);
+  await begin(desk, phones, clock, scan);
   const codes: string[][] = [];
   for (const [index, choice] of choices.entries()) {
-    codes.push(await presentTrial(desk, clock));
+    codes.push(await presentTrial(desk, clock, scan));
     for (const phone of phones) await phone.answer(index + 1, choice);
     await desk.sees('all in', (view) => view.trial?.answered === phones.length);
     await desk.act({ kind: 'lock-trial' });
     for (const phone of phones) await phone.sees('the lock', ({ lastLock }) => lastLock?.trial === index + 1);
     await look();
   }
+  if (desk.now.inventory !== null) await takeInventory(desk, fitted);
   await desk.act({ kind: 'finish' });
   for (const phone of phones) await phone.sees('the end', ({ phase }) => phase === 'finished');
   await look();
@@ -95,6 +122,9 @@ async function run({ study: change, choices }: Asked, { codeKey, drawSecret }: S
   return seen;
 }
 
+// Where the proctor is told a code: the one to be fitted, and at the labels those in hand and those not found.
+const codeAlone = [/"code":"\d{3}"/g, /\d{3} is in hand, and \d{3} is wanted[^"]*/, /Not found: \d{3}(, \d{3})*/];
+
 const firstCodes = ([first]: readonly string[], trials: readonly string[][]) =>
   first === trials[0]?.[0] ? 'as in trial 1' : 'the other way';
 const likeTheFirst = ([first, ...others]: readonly string[]) =>
@@ -103,7 +133,8 @@ const likeTheFirst = ([first, ...others]: readonly string[]) =>
 // In ABX the draw is what X is, elsewhere what is heard first, and what is heard again.
 const methods: Record<MethodId, Asked> = {
   abx: {
-    study: { method: 'abx' },
+    // With labels scanned at every change: wrong ones, steps taken back, and the inventory.
+    study: { method: 'abx', rigPreset: shippedPresets.loudspeaker, changeS: 30 },
     choices: ['A', 'B', 'B', 'A', 'A'],
     drawn: ([a, , x]) => (a === x ? 'A' : 'B'),
   },
@@ -183,7 +214,8 @@ describe.each(methodIds)('what leaves the server before closing, %s', (id) => {
   });
 
   it.each([1, 2, 3])('is the same for the proctor but for the code to be fitted (run %i) [B2]', (index) => {
-    const withoutCode = (texts: readonly string[]) => texts.map((text) => text.replace(/"code":"\d{3}"/g, '"code":""'));
+    const withoutCode = (texts: readonly string[]) =>
+      texts.map((text) => codeAlone.reduce((left, pattern) => left.replace(pattern, '#'), text));
     expect(withoutCode(other(index).proctor)).toEqual(withoutCode(other(0).proctor));
     expect(other(0).proctor.some((text) => /"code":"\d{3}"/.test(text))).toBe(true);
   });

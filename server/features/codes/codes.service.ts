@@ -1,5 +1,6 @@
 import type { CodeSheet, CodesStatus } from '#shared/contracts/codes.ts';
 import { Problem } from '#shared/problem.ts';
+import { labelText, studyMark } from '#shared/session/label-text.ts';
 import { studyEvents } from '#shared/session/study-events.ts';
 import { commitCodeKey, openForHolder, type SpecimenToCode } from '../../blind/index.ts';
 import { type Tx, withTransaction } from '../../db/transaction.ts';
@@ -13,9 +14,6 @@ import { namesOf } from '../users/users.store.ts';
 
 type Where = { organisationId: string; id: string };
 type Asker = { userId: string; role: string | null };
-
-/** Scans carry a prefix, so that a scanner's typing is told from a person's. */
-const scanPrefix = 'FL:';
 
 /** A study shows its codes' state to its managers and its code holder; to anyone else it does not exist. */
 function requireInterest(study: Study, who: Asker): void {
@@ -94,12 +92,19 @@ export function openCodes(deps: Deps, where: Where, who: Asker, purpose: 'labels
     await append(tx, deps, study.id, [{ kind: 'code-key-opened', at: clock.now(), payload, session: null }]);
     const rows = await openForHolder(tx, study.id, who.userId);
     const { cables } = protocolOf(study);
+    const mark = studyMark(study.id);
     return {
       title: study.title,
+      mark,
       rows: await Promise.all(
         rows.map(async ({ code, serial, cable }) => {
-          const scanText = `${scanPrefix}${code}`;
-          return { code, cable: cables[cable === 0 ? 0 : 1].name, serial, scanText, qrSvg: await qrSvg(scanText) };
+          const labels = await Promise.all(
+            ([1, 2] as const).map(async (end) => {
+              const scanText = labelText(mark, code, end);
+              return { end, scanText, qrSvg: await qrSvg(scanText) };
+            }),
+          );
+          return { code, cable: cables[cable === 0 ? 0 : 1].name, serial, labels };
         }),
       ),
     };
