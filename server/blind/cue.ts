@@ -12,6 +12,8 @@ export type CueQuestion = {
   readonly method: Method;
   /** Trials and spares of a session. */
   readonly trials: number;
+  /** Whether the protocol registers separate specimens. */
+  readonly isSeparate: boolean;
   /** From 1; 0 is the familiarisation trial. */
   readonly trial: number;
   readonly presentation: string;

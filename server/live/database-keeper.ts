@@ -36,6 +36,7 @@ export function databaseKeeper(deps: Deps): Keeper {
         contributions: contributionsOf(state),
         method,
         trials: state.plan.trials + state.plan.spares,
+        isSeparate: state.plan.separateSpecimens === true,
         trial: state.trial.trial,
         presentation,
       });

@@ -1,21 +1,24 @@
 import { type Entry, nextEntry } from '#shared/ledger/chain.ts';
 import { Problem } from '#shared/problem.ts';
+import { leastSeparate } from '#shared/protocol/ways-to-run.ts';
 import { drawSecretCommitment } from '#shared/session/commitments.ts';
 import { contributionsOf } from '#shared/session/counted-trials.ts';
+import type { SessionPlan } from '#shared/session/events.ts';
 import { codeFitted } from '#shared/session/fitting.ts';
 import { presentationNow } from '#shared/session/progress.ts';
 import { drawCodes } from '../blind/index.ts';
 import type { Random } from '../deps.ts';
 import type { Keeper, Keeping } from './keeper.ts';
 
-/** A rehearsal's invented codes: one specimen for either cable, and nothing behind them. */
-function inventedKey(random: Random) {
-  return drawCodes(random, 2).map((code, cable) => ({ code, specimen: '', serial: '', cable }));
+/** A rehearsal's invented codes: as few specimens of either cable as its plan needs, and nothing behind them. */
+function inventedKey(random: Random, { separateSpecimens }: SessionPlan) {
+  const ofEach = separateSpecimens ? leastSeparate : 1;
+  return drawCodes(random, 2 * ofEach).map((code, index) => ({ code, specimen: '', serial: '', cable: index % 2 }));
 }
 
 /** Keeps a rehearsal in memory alone: invented codes, a draw of its own, and no record. */
-export function rehearsalKeeper(random: Random, code: string): Keeper {
-  const rows = inventedKey(random);
+export function rehearsalKeeper(random: Random, code: string, plan: SessionPlan): Keeper {
+  const rows = inventedKey(random, plan);
   const secret = random.bytes('draw-secret', 32).toString('hex');
   let head: Entry | null = null;
   let seats = 0;
@@ -57,6 +60,7 @@ export function rehearsalKeeper(random: Random, code: string): Keeper {
         contributions: contributionsOf(state),
         method,
         trials: state.plan.trials + state.plan.spares,
+        isSeparate: state.plan.separateSpecimens === true,
         trial: state.trial.trial,
         presentation,
       });

@@ -67,7 +67,7 @@ export class Rehearsals {
       held: new Map(),
       seats: new Map<string, Seat>(),
     };
-    const sitting = new Sitting(this.#deps, memory, rehearsalKeeper(random, code));
+    const sitting = new Sitting(this.#deps, memory, rehearsalKeeper(random, code, of.plan));
     this.#byId.set(id, { sitting, endsAt: clock.now() + lifeMs });
     return id;
   }

@@ -1,5 +1,7 @@
 import { z } from 'zod';
+import { portrayedCueAudit } from '../cue-audit/portrayed-cue-audit.ts';
 import { finding } from '../findings/finding.ts';
+import { levelReport } from '../levels/level-report.ts';
 import { registeredResult } from '../methods/methods.ts';
 import { endpoint } from './endpoint.ts';
 import { organisationParams, thingParams } from './organisation-params.ts';
@@ -29,9 +31,12 @@ export const report = z.strictObject({
   finding,
   result: registeredResult,
   nullDistribution: z.array(chanceBar),
+  cueAudit: portrayedCueAudit,
   rung: z.strictObject({ name: z.string(), why: z.string() }),
   /** The gap between presentations and the blinding rung, each in a sentence: part of the finding’s first lines. */
   conditions: z.array(z.string()),
+  /** The level match at the load; null where the protocol registers no measurement. */
+  levels: levelReport.nullable(),
   flow: z.strictObject({
     sessionsPlanned: z.int(),
     sessionsOpened: z.int(),

@@ -1,6 +1,8 @@
 import { z } from 'zod';
+import { registeredLevels } from '../levels/registered-levels.ts';
 import { methodIds, methods } from '../methods/methods.ts';
 import { leastChangeS, rigPreset, rigs } from '../protocol/rig-preset.ts';
+import { faultsOfWays } from '../protocol/ways-to-run.ts';
 import { endpoint, managers } from './endpoint.ts';
 import { organisationParams, thingParams } from './organisation-params.ts';
 import { listQuery, pageOf, sortBy } from './paging.ts';
@@ -64,6 +66,10 @@ export const studyDraft = z
     changeS: whole(3, 300, 'seconds'),
     answerS: whole(5, 300, 'seconds'),
     confidence: z.boolean(),
+    /** How level at the load is handled and measured; left out where it is not. */
+    levels: registeredLevels.optional(),
+    /** Whether what comes again within a trial is fitted from specimens of its own; left out for no. */
+    separateSpecimens: z.boolean().optional(),
     codeHolderId: z.uuid('Choose the code holder'),
   })
   .check((check) => {
@@ -120,6 +126,7 @@ export const studyDraft = z
         path: ['marginPercent'],
         message: margin === null ? `${methods[method].name} takes no margin` : `At most ${margin.mostPercent}`,
       });
+    for (const fault of faultsOfWays(check.value)) check.issues.push({ code: 'custom', input: check.value, ...fault });
   });
 export type StudyDraft = z.output<typeof studyDraft>;
 

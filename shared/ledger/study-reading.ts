@@ -29,6 +29,7 @@ const draw = z.strictObject({
   firstSide: z.union([z.literal(0), z.literal(1)]),
   specimens: z.tuple([z.int(), z.int()]),
   truths: z.array(z.string()),
+  separate: z.strictObject({ specimen: z.int(), deals: z.array(z.int()).optional() }).optional(),
 });
 
 const answer = z.strictObject({

@@ -43,6 +43,13 @@ export const abx: Method<ForcedChoiceResult> = {
     return isA === (firstSide === 0) ? 0 : 1;
   },
   fitterCouldSee: 'Whoever fits X could still see whether its code is that of A.',
+  separate: {
+    what: 'X',
+    stillSeen:
+      'X had specimens and codes of its own, so that no code of X was ever that of A or B. Whoever fits the cables could still see in which trials X was the same cable, and not which one it was.',
+    deals: 1,
+    specimen: (presentation) => (presentation === 'X' ? 1 : 0),
+  },
 
   spoken: (presentation) => presentation,
   question: () => 'Which one did X match?',
@@ -57,6 +64,8 @@ export const abx: Method<ForcedChoiceResult> = {
     legend:
       'Filled rings are locked trials, struck ones are void; in the tables the answers that matched X are bold. What X was and what was answered was hidden from everybody until closing.',
     session: (firstSide, cables) => `A was ${cables[firstSide]}, B was ${cables[firstSide === 0 ? 1 : 0]}.`,
+    when: (answer) => `X was ${answer}`,
+    named: () => null,
     drawnHeader: 'X was',
     drawn: (truth) => truth,
     answeredHeader: ({ value }) => `Answered ${value}`,

@@ -56,6 +56,13 @@ export const duoTrio: Method<ForcedChoiceResult> = {
     return presentation === 'first' ? first : second;
   },
   fitterCouldSee: 'Whoever fits the cables could still see from their codes which of the two was R again.',
+  separate: {
+    what: 'the reference, R,',
+    stillSeen:
+      'R had specimens and codes of its own, so that no code came twice in a trial. Whoever fits the cables could still see which trials had the same right answer, and not which answer it was.',
+    deals: 1,
+    specimen: (presentation) => (presentation === 'R' ? 1 : 0),
+  },
 
   spoken: (presentation) => (presentation === 'R' ? 'the reference, R' : spokenPlace(presentation)),
   question: () => 'Which one was the same as R?',
@@ -73,6 +80,8 @@ export const duoTrio: Method<ForcedChoiceResult> = {
     legend:
       'Filled rings are locked trials, struck ones are void; in the tables the answers that found R again are bold. What R was, where it came again and what was answered was hidden from everybody until closing.',
     session: (firstSide, cables) => `In the familiarisation ${cables[firstSide]} was heard first.`,
+    when: (answer) => `R came again ${answer}`,
+    named: () => 'the one that was R again',
     drawnHeader: 'R came again',
     drawn: (truth, cables) => `${matchIn(truth)}, R was ${cables[heardIn(truth)[0]]}`,
     answeredHeader: ({ short }) => `Answered ${short}`,

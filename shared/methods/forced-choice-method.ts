@@ -14,7 +14,7 @@ import type { Method, ScoredAnswer, ScoredTrial, TrialWords } from './method.ts'
 type Scoring = Pick<
   Method<ForcedChoiceResult>,
   'registered' | 'margin' | 'planned' | 'sensitivity' | 'analyse' | 'nullDistribution' | 'finding' | 'plan' | 'portray'
-> & { readonly trials: Pick<TrialWords, 'isRight' | 'countHeader' | 'count'> };
+> & { readonly trials: Pick<TrialWords, 'isRight' | 'answerFor' | 'countHeader' | 'count'> };
 
 /** What a method says beside the words that all methods with one right answer share. */
 type Asked = {
@@ -84,6 +84,7 @@ export function forcedChoiceScoring({ question, rightOf, words, smallEffect }: A
     },
     trials: {
       isRight,
+      answerFor: rightOf,
       countHeader: () => 'Right',
       count: (answers, truth) => `${rightIn(answers, truth)} of ${answers.length}`,
     },

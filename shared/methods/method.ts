@@ -101,8 +101,26 @@ export type TrialWords = {
   answeredHeader(option: AnswerOption): string;
   /** Whether an answer is right; null for a method without right answers. */
   readonly isRight: ((choice: string, truth: string) => boolean) | null;
+  /** The answer that goes with a truth: the right one, or the place of the first cable where none is right. */
+  answerFor(truth: string): string;
+  /** What a truth came to, after "when": "X was A". */
+  when(answer: string, cables: CableNames): string;
+  /** What the presentation is that such an answer names: "the odd one". Null where answers name none. */
+  named(cables: CableNames): string | null;
   countHeader(cables: CableNames): string;
   count(answers: readonly ScoredAnswer[], truth: string): string;
+};
+
+/** How a trial is fitted from two specimens of each cable, so that no code comes twice in it. */
+export type SeparateSpecimens = {
+  /** What has specimens of its own, for the study form: "X". */
+  readonly what: string;
+  /** What whoever fits could still infer from the codes of the whole study: sentences for the blinding rung. */
+  readonly stillSeen: string;
+  /** In how many equally likely ways the specimens of a trial are dealt, beside its truth. */
+  readonly deals: number;
+  /** Which of its cable's two specimens is fitted for a presentation; `deal` counts from 0. */
+  specimen(presentation: string, truth: string | null, deal: number): 0 | 1;
 };
 
 /**
@@ -140,6 +158,8 @@ export type Method<R extends ResultFrame = RegisteredResult> = {
   fitted(presentation: string, truth: string | null, firstSide: CablePlace): CablePlace;
   /** What whoever fits the cables could still learn from their codes: a sentence for the blinding rung. */
   readonly fitterCouldSee: string;
+  /** Null where no code comes twice in a trial anyway: then there is nothing of the kind to hide. */
+  readonly separate: SeparateSpecimens | null;
 
   // What the listener is asked.
 

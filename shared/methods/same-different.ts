@@ -54,6 +54,13 @@ export const sameDifferent: Method<SameDifferentResult> = {
     return pair.charAt(presentation === 'first' ? 0 : 1) === 'A' ? 0 : 1;
   },
   fitterCouldSee: 'Whoever fits the cables could still see from their codes whether a pair was the same.',
+  separate: {
+    what: 'the second of a pair',
+    stillSeen:
+      'The second of a pair had specimens and codes of its own, so that no code came twice in a trial. Whoever fits the cables could still see which trials were of one kind and which of the other, and not which kind was the same.',
+    deals: 1,
+    specimen: (presentation) => (presentation === 'second' ? 1 : 0),
+  },
 
   spoken: spokenPlace,
   question: () => 'Were the two the same?',
@@ -98,6 +105,9 @@ export const sameDifferent: Method<SameDifferentResult> = {
     legend:
       'Filled rings are locked trials, struck ones are void. Whether a pair was the same and what was answered was hidden from everybody until closing.',
     session: (firstSide, cables) => `In the familiarisation ${cables[firstSide]} was heard first.`,
+    when: (answer) => (answer === 'same' ? 'the pair was the same' : 'the pair was different'),
+    named: () => null,
+    answerFor: (pair) => (isPairDifferent(pair) ? 'different' : 'same'),
     drawnHeader: 'The pair was',
     drawn: (pair, cables) => {
       const [first, second] = [...pair].map((letter) => cables[letter === 'A' ? 0 : 1]);

@@ -49,6 +49,21 @@ export const triangle: Method<ForcedChoiceResult> = {
     return order.charAt(places.indexOf(presentation)) === 'A' ? 0 : 1;
   },
   fitterCouldSee: 'Whoever fits the cables could still see from their codes which of the three was the odd one.',
+  separate: {
+    what: 'each of the three',
+    stillSeen:
+      'Each of the three was fitted under a code of its own. From the four codes whoever fits them could still narrow the odd one down to two of the three places, and not tell which of the two it was.',
+    // Which specimen stands for the cable that comes once, and in which order those of the other come.
+    deals: 4,
+    specimen: (presentation, order, deal) => {
+      if (order === null) return 0;
+      const alone = deal < 2 ? 0 : 1;
+      const odd = oddIn(order);
+      if (presentation === odd) return alone;
+      const isFirst = places.find((place) => place !== odd) === presentation;
+      return isFirst === (deal % 2 === 0) ? 0 : 1;
+    },
+  },
 
   spoken: spokenPlace,
   question: () => 'Which one was the odd one?',
@@ -66,6 +81,8 @@ export const triangle: Method<ForcedChoiceResult> = {
     legend:
       'Filled rings are locked trials, struck ones are void; in the tables the answers that found the odd one are bold. Which one was odd and what was answered was hidden from everybody until closing.',
     session: (firstSide, cables) => `In the familiarisation ${cables[firstSide]} was heard first.`,
+    when: (answer) => `the odd one came ${answer}`,
+    named: () => 'the odd one',
     drawnHeader: 'Odd one',
     drawn: (order, cables) =>
       `the ${oddIn(order)}, ${cables[order.charAt(places.indexOf(oddIn(order))) === 'A' ? 0 : 1]}`,

@@ -1,9 +1,11 @@
 import type { ProtocolDifference } from '../contracts/protocol-versions.ts';
 import { canonicalJson } from '../ledger/canonical-json.ts';
+import { registeredLevelsText } from '../levels/level-words.ts';
 import { methodOf } from '../methods/methods.ts';
 import { analysisFacts } from './analysis-facts.ts';
 import { presetFacts } from './preset-facts.ts';
 import type { Protocol, ProtocolCable } from './protocol.ts';
+import { waysFacts } from './ways-to-run.ts';
 
 /** A line, and what it means beyond its words: two cables, pieces or people may bear one name. */
 type Line = { label: string; value: string; ids?: string };
@@ -43,6 +45,7 @@ function linesOf(protocol: Protocol, nameOf: (person: string) => string): Line[]
     { label: 'Listeners are drawn from', value: design.samplingFrame ?? '' },
     { label: 'Trials per session', value: String(design.trials) },
     { label: 'Spares', value: `${design.spares} in each session` },
+    ...waysFacts(design),
     { label: 'Significance level', value: analysis.alpha },
     ...analysisFacts(analysis),
     { label: 'Analysis', value: analysis.name },
@@ -53,6 +56,7 @@ function linesOf(protocol: Protocol, nameOf: (person: string) => string): Line[]
     { label: 'Rig', value: rigWords[conduct.rig] },
     ...presetFacts(conduct.rigPreset),
     { label: 'Chain', value: conduct.chain },
+    { label: 'Level at the load', value: registeredLevelsText(conduct.levels) },
     { label: 'Every change', value: `${conduct.changeS} s, real or not` },
     { label: 'Answer window', value: `${conduct.answerS} s` },
     { label: 'Confidence', value: design.confidence ? 'asked with every answer' : 'not asked' },

@@ -3,11 +3,13 @@ import { cableKinds } from '../contracts/cables.ts';
 import type { StudyDraft } from '../contracts/studies.ts';
 import { canonicalJson } from '../ledger/canonical-json.ts';
 import { digest } from '../ledger/digest.ts';
+import { type RegisteredLevels, registeredLevels } from '../levels/registered-levels.ts';
 import type { MethodChoices } from '../methods/method.ts';
 import { methodOf } from '../methods/methods.ts';
 import type { SessionPlan } from '../session/events.ts';
 import { registeredAnalysis } from './registered-analysis.ts';
 import { rigPreset, rigs } from './rig-preset.ts';
+import { chosenWays, waysToRun } from './ways-to-run.ts';
 
 const protocolCable = z.strictObject({
   id: z.uuid(),
@@ -42,6 +44,7 @@ export const protocol = z.strictObject({
     attribute: z.string().optional(),
     /** Whom the listeners are a sample of; left out where nothing is to be said about people in general. */
     samplingFrame: z.string().optional(),
+    ...waysToRun,
     codeHolder: z.uuid(),
   }),
   conduct: z.strictObject({
@@ -52,6 +55,8 @@ export const protocol = z.strictObject({
     changeS: z.int(),
     answerS: z.int(),
     programme: z.array(z.strictObject({ title: z.string(), start: z.string(), lengthS: z.int() })),
+    /** How level is handled and measured; left out where it is not measured. */
+    levels: registeredLevels.optional(),
   }),
   /** The registered analysis, as data: what is run once at closing. */
   analysis: registeredAnalysis,
@@ -73,6 +78,12 @@ function chosenOf({ methodSettings = [], attribute = '' }: MethodChoices): {
     ...(attribute === '' ? {} : { attribute }),
   };
 }
+
+/** Frequencies in rising order, whatever the order in which they were ticked. */
+const inOrder = (levels: RegisteredLevels): RegisteredLevels => ({
+  ...levels,
+  frequenciesHz: [...levels.frequenciesHz].sort((a, b) => a - b),
+});
 
 /** The protocol that a draft comes to, with its cables spelt out as they are now. */
 export function protocolFromDraft(
@@ -98,6 +109,7 @@ export function protocolFromDraft(
       ...(draft.samplingFrame === undefined || draft.samplingFrame === ''
         ? {}
         : { samplingFrame: draft.samplingFrame }),
+      ...chosenWays(draft),
       codeHolder: draft.codeHolderId,
     },
     conduct: {
@@ -107,6 +119,7 @@ export function protocolFromDraft(
       changeS: draft.changeS,
       answerS: draft.answerS,
       programme: draft.programme.map(({ title, start, lengthS }) => ({ title, start, lengthS })),
+      ...(draft.levels === undefined ? {} : { levels: inOrder(draft.levels) }),
     },
     analysis: {
       ...methodOf(draft.method).registered(draft),
@@ -134,6 +147,8 @@ export function sessionPlanOf({ method, design, conduct }: Protocol): SessionPla
     changeMs: conduct.changeS * 1000,
     answerMs: conduct.answerS * 1000,
     confidence: design.confidence,
+    ...chosenWays(design),
     programme: conduct.programme.map(({ title, start, lengthS }) => ({ title, start, lengthMs: lengthS * 1000 })),
+    ...(conduct.levels === undefined ? {} : { levels: conduct.levels }),
   };
 }

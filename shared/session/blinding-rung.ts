@@ -4,7 +4,7 @@ import type { SessionState } from './state.ts';
 import { studyEvents } from './study-events.ts';
 
 export type BlindingRung = {
-  readonly name: 'open' | 'listener-blind' | 'double-blind to the cable';
+  readonly name: 'open' | 'listener-blind' | 'double-blind to the cable' | 'fully double-blind';
   readonly why: string;
 };
 
@@ -43,14 +43,15 @@ function keyHoldersOf(entries: readonly Entry[], codeHolder: string): Set<string
  * *Open* when the record itself shows that something was not sealed in time: nothing of it may be published. A doubled
  * duty, or a proctor who could see the code key or the cables' pages, caps it at *listener-blind*. A cable that is fitted
  * under one code all through a session reaches *double-blind to the cable* at most: whoever fits it learns something from
- * the codes, and the method says what.
+ * the codes, and the method says what. Separate specimens in every session reach *fully double-blind*; the method says
+ * what is left even then.
  *
  * @throws RangeError when the record has no closing
  */
 export function blindingRung(
   entries: readonly Entry[],
   sessions: readonly SessionState[],
-  method: Pick<Method, 'fitterCouldSee'>,
+  method: Pick<Method, 'fitterCouldSee' | 'separate'>,
 ): BlindingRung {
   const closing = entries.find((entry) => entry.kind === 'study-closed');
   if (closing === undefined) throw new RangeError('the blinding rung is derived once the study is closed');
@@ -62,11 +63,15 @@ export function blindingRung(
   const sawCables = [...owners, ...managers, manager].some((person) => proctors.has(person));
   if ([...keyHolders].some((person) => proctors.has(person)))
     return { name: 'listener-blind', why: 'The code holder also ran a session.' };
+  const measured = entries.filter(({ kind }) => kind === 'levels-measured').map(({ payload }) => String(payload.by));
+  if (measured.some((person) => proctors.has(person)))
+    return { name: 'listener-blind', why: 'A proctor measured the levels and saw them by code.' };
   if (sawCables) return { name: 'listener-blind', why: 'A proctor could see the cables’ pages.' };
   if ([...keyHolders].some((person) => person === manager || owners.includes(person)))
     return { name: 'listener-blind', why: 'The code holder also managed the study or owns the organisation.' };
-  return {
-    name: 'double-blind to the cable',
-    why: `The proctor never saw code key or cable pages. ${method.fitterCouldSee} No observer was recorded.`,
-  };
+  const never = 'The proctor never saw code key or cable pages.';
+  const seated = sessions.filter((session) => session.seats.length > 0);
+  if (method.separate !== null && seated.length > 0 && seated.every(({ plan }) => plan.separateSpecimens === true))
+    return { name: 'fully double-blind', why: `${never} ${method.separate.stillSeen} No observer was recorded.` };
+  return { name: 'double-blind to the cable', why: `${never} ${method.fitterCouldSee} No observer was recorded.` };
 }

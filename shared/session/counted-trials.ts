@@ -12,7 +12,8 @@ export function contributionsOf(state: SessionState): string[] {
 /** The draw of a session that ran: a pure function of what closing revealed and of the record. */
 export function revealedDraw(state: SessionState, method: Method, secret: string, rows: readonly CodeKeyRow[]) {
   const trials = state.plan.trials + state.plan.spares;
-  return drawOf({ secret, contributions: contributionsOf(state), method, trials, rows });
+  const isSeparate = state.plan.separateSpecimens === true;
+  return drawOf({ secret, contributions: contributionsOf(state), method, trials, rows, isSeparate });
 }
 
 export type HeldChoice = {

@@ -45,19 +45,57 @@ export type Draw = {
   readonly specimens: readonly [number, number];
   /** One truth per trial, spares included; trial 1 comes first. */
   readonly truths: readonly string[];
+  /** There only where specimens are separate. */
+  readonly separate?: SeparateDraw | undefined;
 };
 
-export type DrawShape = { readonly specimenCounts: readonly [number, number]; readonly trials: number };
+export type SeparateDraw = {
+  /** The place, from 0 and the same for both cables, of the specimens that serve separately. */
+  readonly specimen: number;
+  /** One deal per trial, spares included; left out where specimens are dealt in one way alone. */
+  readonly deals?: readonly number[] | undefined;
+};
+
+export type DrawShape = {
+  readonly specimenCounts: readonly [number, number];
+  readonly trials: number;
+  /** Whether the protocol registers separate specimens. */
+  readonly isSeparate?: boolean;
+};
+
+type Drawn = Pick<Method, 'truths' | 'separate'>;
+
+/**
+ * Which specimens serve where, when they are separate. One place is drawn for both cables together, each time: codes
+ * that serve alike in one session and not in another would tell which of them are of one cable.
+ */
+function drawSeparate(
+  seed: string,
+  { separate }: Drawn,
+  { specimenCounts, trials }: DrawShape,
+): Pick<Draw, 'specimens' | 'separate'> {
+  if (separate === null) throw new RangeError('the method has no use for separate specimens');
+  const places = Math.min(...specimenCounts);
+  if (places < 2) throw new RangeError('separate specimens need two of each cable');
+  const first = fairNumber(seed, 'separate/first', places);
+  const others = Array.from({ length: places }, (_, place) => place).filter((place) => place !== first);
+  const specimen = others[fairNumber(seed, 'separate/other', others.length)] ?? 0;
+  const deal = (index: number) => fairNumber(seed, `separate/trial/${index + 1}`, separate.deals);
+  const deals = separate.deals === 1 ? {} : { deals: Array.from({ length: trials }, (_, index) => deal(index)) };
+  return { specimens: [first, first], separate: { specimen, ...deals } };
+}
 
 /** The whole draw of a session: a pure function of its seed, the method and the protocol's shape. */
-export function drawSession(seed: string, method: Pick<Method, 'truths'>, shape: DrawShape): Draw {
+export function drawSession(seed: string, method: Drawn, shape: DrawShape): Draw {
   const truths = Array.from({ length: shape.trials }, (_, index) => {
     const truth = method.truths[fairNumber(seed, `trial/${index + 1}`, method.truths.length)];
     if (truth === undefined) throw new RangeError('a method needs at least one truth');
     return truth;
   });
+  const firstSide = fairNumber(seed, 'side', 2) === 0 ? 0 : 1;
+  if (shape.isSeparate === true) return { firstSide, truths, ...drawSeparate(seed, method, shape) };
   return {
-    firstSide: fairNumber(seed, 'side', 2) === 0 ? 0 : 1,
+    firstSide,
     specimens: [
       fairNumber(seed, 'specimen/1', shape.specimenCounts[0]),
       fairNumber(seed, 'specimen/2', shape.specimenCounts[1]),

@@ -1,6 +1,10 @@
 import { z } from 'zod';
-import { cautions, scannedBy, stepKinds, voidReasons } from '../contracts/proctor-live.ts';
+import { cautions, stepKinds, voidReasons } from '../contracts/proctor-live.ts';
+import { registeredLevels } from '../levels/registered-levels.ts';
 import { rigPreset } from '../protocol/rig-preset.ts';
+import { waysToRun } from '../protocol/ways-to-run.ts';
+import { levelEvents } from './level-events.ts';
+import { scanEvents } from './scan-events.ts';
 
 // What a session puts on its study's record. Payload shapes are permanent: a change means a new version.
 
@@ -8,8 +12,6 @@ const session = z.int().min(1);
 const seat = z.string();
 const hex32 = z.string().regex(/^[0-9a-f]{64}$/);
 const trial = z.int().min(0);
-const code = z.string().regex(/^[1-9]\d\d$/);
-const presentation = z.int();
 
 /** What a session takes from the sealed protocol; times in milliseconds. Trial 0 is the familiarisation trial. */
 export const sessionPlan = z.strictObject({
@@ -24,7 +26,10 @@ export const sessionPlan = z.strictObject({
   changeMs: z.int(),
   answerMs: z.int(),
   confidence: z.boolean(),
+  ...waysToRun,
   programme: z.array(z.strictObject({ title: z.string(), start: z.string(), lengthMs: z.int() })),
+  /** Left out where levels are not measured. */
+  levels: registeredLevels.optional(),
 });
 export type SessionPlan = z.output<typeof sessionPlan>;
 
@@ -52,27 +57,7 @@ export const sessionEvents = {
   'draw-fixed': z.strictObject({ session, contributors: z.array(seat) }),
   'trial-opened': z.strictObject({ session, trial, excerpt: z.int(), seats: z.array(seat) }),
   'step-confirmed': z.strictObject({ session, trial, presentation: z.int(), step: z.enum(stepKinds) }),
-  /** One end of the cable that is to be fitted bears its code. Which code that is follows from the draw and is not told. */
-  'label-scanned': z.strictObject({
-    session,
-    trial,
-    presentation,
-    end: z.union([z.literal(1), z.literal(2)]),
-    by: z.enum(scannedBy),
-  }),
-  /** Another cable was in hand; its code, as it was read. */
-  'scan-refused': z.strictObject({
-    session,
-    trial,
-    presentation,
-    code,
-    why: z.enum(['other-code', 'other-study']),
-    by: z.enum(scannedBy),
-  }),
-  /** Both ends were read and not scanned; `ends` tells how many had been scanned before. */
-  'scan-by-hand': z.strictObject({ session, trial, presentation, reason: z.string(), ends: z.int() }),
-  /** The last step is taken back; the one that started listening takes the presentation back to its change. */
-  'step-undone': z.strictObject({ session, trial, presentation, step: z.enum(stepKinds) }),
+  ...scanEvents,
   'listening-started': z.strictObject({
     session,
     trial,
@@ -101,14 +86,7 @@ export const sessionEvents = {
   'server-restarted': z.strictObject({ session }),
   'listener-left': z.strictObject({ session, seat, by: z.enum(['listener', 'proctor']) }),
   'deviation-recorded': z.strictObject({ session: session.nullable(), text: z.string() }),
-  'inventory-scanned': z.strictObject({ session, code, by: z.enum(scannedBy), isOurs: z.boolean() }),
-  'inventory-ended': z.strictObject({
-    session,
-    codes: z.int(),
-    missing: z.array(code),
-    foreign: z.array(code),
-    reason: z.string(),
-  }),
+  ...levelEvents,
   'session-finished': z.strictObject({ session }),
   'session-abandoned': z.strictObject({
     session,

@@ -1,6 +1,7 @@
 import type { ChangeStep, VoidReason } from '../contracts/proctor-live.ts';
 import type { SessionPlan } from './events.ts';
 import type { LabelEnd } from './label-text.ts';
+import type { LevelStanding } from './level-progress.ts';
 
 // The state of a session has no cable, no draw and no correctness, and no code but those that an inventory read off the
 // sleeves after the last trial: nothing in it needs stripping.
@@ -76,6 +77,8 @@ export type SessionState = {
     readonly ended: { readonly codes: number; readonly missing: readonly string[]; readonly reason: string } | null;
   };
   readonly late: readonly { readonly trial: number; readonly seat: string }[];
+  /** How each measurement of levels came out, in order; never a figure. */
+  readonly levels: readonly LevelStanding[];
 };
 
 /** How long a phone may take to reveal its contribution before it is dropped. */

@@ -11,7 +11,7 @@ import {
   takeSeat,
 } from './at-the-desk.ts';
 import { type DeadNetwork, deadNetwork } from './dead-network.ts';
-import { codeSpecimens, planSession, planStudy, sealStudy } from './plan-a-study.ts';
+import { readyStudy } from './ready-study.ts';
 import { type RunningFairlead, runFairlead } from './run-fairlead.ts';
 
 // The network of the room goes dead for two minutes, without a word to anybody, while a trial is open.
@@ -29,11 +29,7 @@ test.afterAll(async () => {
 
 test('console and phone come back where they were after two minutes without a network [S13]', async ({ browser }) => {
   const manager = await signIn(browser, fairlead.address, 'Maren Oduya');
-  await planStudy(manager, { listeners: 1, answerS: 300 });
-  const studyAddress = manager.url();
-  await sealStudy(manager);
-  await codeSpecimens(await signIn(browser, fairlead.address, 'Ines Halloran'), studyAddress);
-  await planSession(manager, studyAddress);
+  await readyStudy(manager, await signIn(browser, fairlead.address, 'Ines Halloran'), { answerS: 300 });
 
   const desk = await signIn(browser, network.address, 'Tomas Brandt');
   await openConsole(desk, 'Study Dunlin');

@@ -1,5 +1,6 @@
 import { createHash } from 'node:crypto';
 import { cautions } from '#shared/contracts/proctor-live.ts';
+import { runCueAudit } from '#shared/cue-audit/run-cue-audit.ts';
 import { canonicalJson, type Json } from '#shared/ledger/canonical-json.ts';
 import { type Entry, nextEntry } from '#shared/ledger/chain.ts';
 import type { ClosedStudy } from '#shared/ledger/publication-parts.ts';
@@ -7,6 +8,7 @@ import type { Method } from '#shared/methods/method.ts';
 import { methodOf } from '#shared/methods/methods.ts';
 import { runRegistered } from '#shared/methods/run-registered.ts';
 import { type Protocol, protocolDigest, sessionPlanOf } from '#shared/protocol/protocol.ts';
+import { chosenWays, type WaysToRun } from '#shared/protocol/ways-to-run.ts';
 import { type AnswerContent, answerLeaf, contributionCommitment } from '#shared/session/answer-leaf.ts';
 import { isLastStep, nextStep } from '#shared/session/change-steps.ts';
 import { codeKeyCommitment, drawSecretCommitment } from '#shared/session/commitments.ts';
@@ -242,8 +244,10 @@ export function close(
   const key = { codeKey, draws };
   maker.put('key-revealed', key);
   const method = methodOf(protocol.method);
-  const result = runRegistered(protocol, sessionsInRecord(maker.entries, method), key, maker.answers);
-  maker.put('result-recorded', { analysis: protocol.analysis.name, result });
+  const states = sessionsInRecord(maker.entries, method);
+  const result = runRegistered(protocol, states, key, maker.answers);
+  const cues = runCueAudit(protocol, states, maker.entries, key, maker.answers);
+  maker.put('result-recorded', { analysis: protocol.analysis.name, result, cues });
   return JSON.parse(
     canonicalJson({
       entries: maker.entries,
@@ -261,11 +265,19 @@ export const sealedSecret = (session: number) =>
  * @param listeners seats per session, 1 to 4
  * @param startsAt  when it is sealed, in milliseconds since 1970
  * @param isAmended whether the protocol is sealed with another chain first, and amended before the codes are drawn
+ * @param ways      how its sessions are run beside the usual way
  */
-export function closedStudy(listeners: number, methodId = 'abx', startsAt?: number, isAmended = false): ClosedStudy {
+export function closedStudy(
+  listeners: number,
+  methodId = 'abx',
+  startsAt?: number,
+  isAmended = false,
+  ways: WaysToRun = {},
+): ClosedStudy {
   const maker = new StudyMaker();
   if (startsAt !== undefined) maker.now = startsAt;
-  const first = protocolFor(maker.study, listeners, methodId);
+  const plain = protocolFor(maker.study, listeners, methodId);
+  const first = { ...plain, design: { ...plain.design, ...chosenWays(ways) } };
   const conduct = { ...first.conduct, chain: 'Player, another amplifier, loudspeakers' };
   const protocol = isAmended ? { ...first, version: 2, salt: hex('second salt', 32), conduct } : first;
   const earlier = isAmended ? first : null;

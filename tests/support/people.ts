@@ -90,11 +90,15 @@ export async function readyStudy(server: TestServer, people: TestOrganisation, c
         construction: { treatments: secretTreatment },
       })
       .expect(200);
-    const full = await manager
-      .post(`${base}/cables/${cable.body.id}/specimens`)
-      .send({ serial: `${name[0]}-1`, note: '' })
-      .expect(200);
-    cables.push({ cableId: cable.body.id, specimenIds: [full.body.specimens[0].id] });
+    const specimenIds: string[] = [];
+    for (const number of change.separateSpecimens ? [1, 2] : [1]) {
+      const full = await manager
+        .post(`${base}/cables/${cable.body.id}/specimens`)
+        .send({ serial: `${name[0]}-${number}`, note: '' })
+        .expect(200);
+      specimenIds.splice(0, specimenIds.length, ...full.body.specimens.map(({ id }: { id: string }) => id));
+    }
+    cables.push({ cableId: cable.body.id, specimenIds });
   }
   const draft = { ...plainStudy, cables, codeHolderId: people.codeHolder.id, ...change };
   const study = await manager.post(`${base}/studies`).send(draft).expect(200);

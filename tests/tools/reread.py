@@ -19,6 +19,9 @@ TRUTHS = {
     'paired-preference': ['first', 'second'],
 }
 
+# Methods whose separate specimens are dealt in several ways, and in how many.
+DEALS = {'triangle': 4}
+
 
 def canon(value):
     return json.dumps(value, sort_keys=True, separators=(',', ':'), ensure_ascii=False).encode()
@@ -107,6 +110,14 @@ for secret in study['secrets']['draws']:
         'truths': [names[fair_number(seed, f'trial/{trial + 1}', len(names))]
                    for trial in range(plan['trials'] + plan['spares'])],
     }
+    if plan.get('separateSpecimens'):
+        places = list(range(min(counts)))
+        first = places.pop(fair_number(seed, 'separate/first', len(places)))
+        drawn['specimens'] = [first, first]
+        drawn['separate'] = {'specimen': places[fair_number(seed, 'separate/other', len(places))]}
+        if plan['method'] in DEALS:
+            drawn['separate']['deals'] = [fair_number(seed, f'separate/trial/{trial + 1}', DEALS[plan['method']])
+                                          for trial in range(plan['trials'] + plan['spares'])]
     agree(f'draw of session {number}', drawn, [one for one in study['draws'] if one['session'] == number][0])
     truths += len(drawn['truths'])
 

@@ -1,14 +1,18 @@
 import type { Report } from '#shared/contracts/reports.ts';
 import type { SignedHead } from '#shared/contracts/signed-heads.ts';
+import type { PortrayedCueAudit } from '#shared/cue-audit/portrayed-cue-audit.ts';
 import type { Finding } from '#shared/findings/finding.ts';
 import type { Entry } from '#shared/ledger/chain.ts';
 import { sealedVersions } from '#shared/ledger/protocol-versions.ts';
 import type { Check } from '#shared/ledger/verify.ts';
+import { levelReportOf } from '#shared/levels/level-report.ts';
+import { registeredLevelsText } from '#shared/levels/level-words.ts';
 import { methodOf, type RegisteredResult } from '#shared/methods/methods.ts';
 import { analysisFacts } from '#shared/protocol/analysis-facts.ts';
 import { presetFacts } from '#shared/protocol/preset-facts.ts';
 import type { Protocol } from '#shared/protocol/protocol.ts';
 import { protocolDifferences } from '#shared/protocol/protocol-differences.ts';
+import { waysFacts } from '#shared/protocol/ways-to-run.ts';
 import type { AnswerContent } from '#shared/session/answer-leaf.ts';
 import type { BlindingRung } from '#shared/session/blinding-rung.ts';
 import { countedTrials, revealedDraw } from '#shared/session/counted-trials.ts';
@@ -30,6 +34,7 @@ export type ReportSource = {
   readonly rooms: ReadonlyMap<number, string>;
   readonly result: RegisteredResult;
   readonly finding: Finding;
+  readonly cueAudit: PortrayedCueAudit;
   readonly checks: readonly Check[];
   readonly rung: BlindingRung;
   readonly closing: StudyPayloadOf<'study-closed'>;
@@ -139,6 +144,7 @@ function factsOf({ design, conduct, analysis, cables, method }: Protocol): Repor
     { label: 'Specimens', value: specimens.join('; ') },
     { label: 'Sessions', value: String(design.sessions) },
     { label: 'Listeners per session', value: String(design.listenersPerSession) },
+    ...waysFacts(design),
     ...(design.samplingFrame === undefined ? [] : [{ label: 'Listeners are drawn from', value: design.samplingFrame }]),
     { label: 'Trials per session', value: `${design.trials}, ${design.spares} spare` },
     { label: 'Significance level', value: analysis.alpha },
@@ -146,6 +152,7 @@ function factsOf({ design, conduct, analysis, cables, method }: Protocol): Repor
     { label: 'Change', value: `${conduct.changeS} s, real or sham` },
     { label: 'Answer window', value: `${conduct.answerS} s` },
     { label: 'Programme', value: conduct.programme.map(({ title, lengthS }) => `${title} (${lengthS} s)`).join('; ') },
+    { label: 'Level at the load', value: registeredLevelsText(conduct.levels) },
     { label: 'Chain', value: conduct.chain },
     ...presetFacts(conduct.rigPreset),
   ];
@@ -192,8 +199,13 @@ export function reportView(source: ReportSource): Report {
     finding,
     result,
     nullDistribution: method.nullDistribution(countedTrials(method, states, key, answers)),
+    cueAudit: source.cueAudit,
     rung: { name: rung.name, why: rung.why },
     conditions: conditionsOf(source),
+    levels:
+      protocol.conduct.levels === undefined
+        ? null
+        : levelReportOf(entries, key.codeKey.rows, protocol.conduct.levels, namesOf(protocol)),
     flow: flowOf(source),
     sessions: states.map((state) => sessionView(source, state, key)),
     voids: voidsOf(entries),

@@ -5,6 +5,7 @@ import { Button } from '../../ui/button.tsx';
 import { FindingHead } from './finding-head.tsx';
 import { ReportChecks } from './report-checks.tsx';
 import { ReportConditions } from './report-conditions.tsx';
+import { ReportCueAudit } from './report-cue-audit.tsx';
 import { ReportDistribution } from './report-distribution.tsx';
 import { ReportFigures } from './report-figures.tsx';
 import { ReportFlow } from './report-flow.tsx';
@@ -47,6 +48,7 @@ export function ReportView({ report, back, actions, proofs }: ReportViewProps) {
       <ReportDistribution nullDistribution={report.nullDistribution} distribution={portrait.distribution} />
       <ReportListeners listeners={portrait.listeners} />
       <ReportChecks checks={portrait.checks} />
+      <ReportCueAudit audit={report.cueAudit} />
       <ReportFlow flow={report.flow} missingWords={result.missingAnswers} />
       <ReportIncidents
         voids={report.voids}

@@ -108,6 +108,7 @@ function keysOf(value: unknown, keys = new Set<string>()): Set<string> {
   return keys;
 }
 
+// A new field of a view is listed here once somebody has asked whether whoever gets it may know it.
 const inBoth =
   'audience now title session phase paused course trial number of familiarisation stage presentationNumber presentations endsAt state seat rehearsal text';
 const listenersFields = new Set(
@@ -116,7 +117,7 @@ const listenersFields = new Set(
   ),
 );
 const proctorsFields = new Set(
-  `${inBoth} version room method rig cautions cautionsConfirmed steps kind leastS act how done reason since join dueAt revealed familiarised code excerpt stepsDone step stepEndsAt scannedEnds undo longChange answered expected nextTrial scans made byHand wrong inventory found foreign isEnded missing seats place awaySince late record entries sessionEntries demo`.split(
+  `${inBoth} version room method rig cautions cautionsConfirmed steps kind leastS act how done reason since join dueAt revealed familiarised code excerpt stepsDone step stepEndsAt scannedEnds undo longChange answered expected nextTrial scans made byHand wrong inventory found foreign isEnded missing seats place awaySince late record entries sessionEntries demo levels handling checks check at isIn due bar`.split(
     ' ',
   ),
 );

@@ -4,6 +4,7 @@ import { methodOf } from '#shared/methods/methods.ts';
 import { CableChoice } from './cable-choice.tsx';
 import { FormSection } from './form-section.tsx';
 import { PredictedDifference } from './predicted-difference.tsx';
+import { SeparateField } from './separate-field.tsx';
 import type { StudyFormValues } from './study-form-values.ts';
 
 /** The order of the cables means something only to a method that asks in one direction. */
@@ -18,6 +19,7 @@ export function CableFields({ cables }: { cables: readonly Cable[] }) {
     <FormSection title="The two cables" lede={lede}>
       <CableChoice index={0} label={attribute?.firstCable ?? 'One cable'} cables={cables} />
       <CableChoice index={1} label="The other cable" cables={cables} />
+      <SeparateField />
       <PredictedDifference cables={cables} />
     </FormSection>
   );

@@ -14,6 +14,7 @@ export const newStudyValues: StudyFormValues = {
   methodSettings: [],
   attribute: '',
   samplingFrame: '',
+  separateSpecimens: false,
   cables: [
     { cableId: '', specimenIds: [] },
     { cableId: '', specimenIds: [] },
