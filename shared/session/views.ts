@@ -110,7 +110,7 @@ export type ProctorContext = {
   /** The blind code of the current presentation, or null when none is to be fitted. */
   readonly code: string | null;
   /** How many codes the study has, while they are gone through at the end; null otherwise. */
-  readonly codesInAll: number | null;
+  readonly codesInAll?: number | null;
   readonly join: ProctorView['join'];
   readonly presence: readonly Presence[];
   readonly entries: number;
@@ -211,7 +211,7 @@ export function proctorViewOf(state: SessionState, method: Method, context: Proc
     nextTrial:
       state.phase === 'running' && state.trial === null && activeSeats(state).length > 0 ? nextTrial(state) : null,
     scans: { made: state.scans.made, byHand: state.scans.byHand, wrong: state.scans.wrong },
-    inventory: inventoryFor(state, context.codesInAll),
+    inventory: inventoryFor(state, context.codesInAll ?? null),
     course: courseOf(state),
     seats: seatsFor(state, context.presence),
     levels: levelsFor(state),
