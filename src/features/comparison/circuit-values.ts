@@ -16,6 +16,7 @@ const usual: Record<Cable['kind'], { sourceOhms: string; loadOhms: string }> = {
   loudspeaker: { sourceOhms: '0.05', loadOhms: '8' },
   headphone: { sourceOhms: '1', loadOhms: '32' },
   interconnect: { sourceOhms: '100', loadOhms: '10000' },
+  check: { sourceOhms: '0.05', loadOhms: '8' },
   other: { sourceOhms: '0', loadOhms: '8' },
 };
 
