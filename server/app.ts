@@ -11,12 +11,14 @@ import { attendancesRoutes } from './features/attendances/attendances.routes.ts'
 import { auditsRoutes } from './features/audits/audits.routes.ts';
 import { cablesRoutes } from './features/cables/cables.routes.ts';
 import { codesRoutes } from './features/codes/codes.routes.ts';
+import { evidenceRoutes } from './features/evidence/evidence.routes.ts';
 import { firstOwnerRoutes } from './features/first-owner/first-owner.routes.ts';
 import { FirstOwner } from './features/first-owner/first-owner.service.ts';
 import { healthRoutes, version } from './features/health/health.routes.ts';
 import { invitationsRoutes } from './features/invitations/invitations.routes.ts';
 import { levelsRoutes } from './features/levels/levels.routes.ts';
 import { mailRoutes } from './features/mail/mail.routes.ts';
+import { measurementsRoutes } from './features/measurements/measurements.routes.ts';
 import { peopleRoutes } from './features/people/people.routes.ts';
 import { publicPages } from './features/publications/public-pages.ts';
 import { publicationsRoutes } from './features/publications/publications.routes.ts';
@@ -112,6 +114,8 @@ export function createApp(deps: Deps) {
   invitationsRoutes(api, access, deps);
   cablesRoutes(api, access, deps);
   rigPresetsRoutes(api, access, deps);
+  measurementsRoutes(api, access, deps);
+  evidenceRoutes(api, access, deps);
   studiesRoutes(api, access, deps, sittings);
   codesRoutes(api, access, deps);
   sessionsRoutes(api, access, deps, sittings);

@@ -5,6 +5,7 @@ import type { StudyReading } from '../ledger/study-reading.ts';
 import { levelsTables } from '../levels/levels-table.ts';
 import { truthOf } from '../session/fitting.ts';
 import type { EndedTrial, SessionState } from '../session/state.ts';
+import { cuesTable } from './cues-table.ts';
 
 /** A column with what it means; its name stands in the first row of the file. */
 export type TableField = {
@@ -14,7 +15,7 @@ export type TableField = {
 };
 
 export type Table = {
-  readonly name: 'sessions' | 'trials' | 'answers' | 'listeners' | 'result' | 'levels';
+  readonly name: 'sessions' | 'trials' | 'answers' | 'listeners' | 'result' | 'levels' | 'cues';
   readonly title: string;
   readonly fields: readonly TableField[];
   readonly key: readonly string[];
@@ -42,6 +43,7 @@ export function tablesOf(study: StudyReading): Table[] {
     listenersTable(study),
     resultTable(study),
     ...levelsTables(study),
+    ...cuesTable(study),
   ];
 }
 

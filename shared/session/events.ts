@@ -4,6 +4,8 @@ import { registeredLevels } from '../levels/registered-levels.ts';
 import { rigPreset } from '../protocol/rig-preset.ts';
 import { waysToRun } from '../protocol/ways-to-run.ts';
 import { levelEvents } from './level-events.ts';
+import { scanEvents } from './scan-events.ts';
+import { checkShape } from './trial-kinds.ts';
 
 // What a session puts on its study's record. Payload shapes are permanent: a change means a new version.
 
@@ -17,8 +19,11 @@ export const sessionPlan = z.strictObject({
   method: z.string(),
   methodSettings: z.array(z.string()).optional(),
   attribute: z.string().optional(),
+  /** Check trials included: nothing in a session tells them apart. */
   trials: z.int(),
   spares: z.int(),
+  /** How many of the trials are check trials; left out where there are none. */
+  checks: checkShape.optional(),
   rig: z.enum(['loudspeaker', 'line', 'headphone']),
   /** How a change is made, as the protocol froze it; left out where it names no preset. */
   rigPreset: rigPreset.optional(),
@@ -56,6 +61,7 @@ export const sessionEvents = {
   'draw-fixed': z.strictObject({ session, contributors: z.array(seat) }),
   'trial-opened': z.strictObject({ session, trial, excerpt: z.int(), seats: z.array(seat) }),
   'step-confirmed': z.strictObject({ session, trial, presentation: z.int(), step: z.enum(stepKinds) }),
+  ...scanEvents,
   'listening-started': z.strictObject({
     session,
     trial,

@@ -10,10 +10,11 @@ import { Audits1796141100000 } from './1796141100000-audits.ts';
 import { FrozenPublications1796141200000 } from './1796141200000-frozen-publications.ts';
 import { Registry1796142000000 } from './1796142000000-registry.ts';
 import { ProtocolVersions1796142100000 } from './1796142100000-protocol-versions.ts';
-
 import { Construction1796149000000 } from './1796149000000-construction.ts';
 import { RigPresets1796151000000 } from './1796151000000-rig-presets.ts';
+import { Measurements1796151400000 } from './1796151400000-measurements.ts';
 import { LevelDuties1796152000000 } from './1796152000000-level-duties.ts';
+import { Evidence1796153400000 } from './1796153400000-evidence.ts';
 
 /** Every migration, oldest first. */
 export const migrations = [
@@ -30,6 +31,8 @@ export const migrations = [
   Registry1796142000000,
   ProtocolVersions1796142100000,
   Construction1796149000000,
-  LevelDuties1796152000000,
   RigPresets1796151000000,
+  Measurements1796151400000,
+  LevelDuties1796152000000,
+  Evidence1796153400000,
 ];

@@ -1,12 +1,15 @@
 import type { Report, ReportRow } from '#shared/contracts/reports.ts';
 import type { SignedHead } from '#shared/contracts/signed-heads.ts';
 import { isClosed } from '#shared/contracts/studies.ts';
+import { cueAudit } from '#shared/cue-audit/cue-audit.ts';
+import { cueTrials } from '#shared/cue-audit/cue-trials.ts';
+import { portrayCueAudit, withCueCautions } from '#shared/cue-audit/portray-cue-audit.ts';
 import type { Entry } from '#shared/ledger/chain.ts';
 import type { CheckId } from '#shared/ledger/check-names.ts';
 import { type ClosedStudy, publicationParts } from '#shared/ledger/publication-parts.ts';
 import { type Check, verifyStudy } from '#shared/ledger/verify.ts';
 import { levelsFound } from '#shared/levels/levels-found.ts';
-import { methodOf, registeredResult } from '#shared/methods/methods.ts';
+import { methodOf } from '#shared/methods/methods.ts';
 import { Problem } from '#shared/problem.ts';
 import { blindingRung } from '#shared/session/blinding-rung.ts';
 import { sessionsInRecord } from '#shared/session/read-record.ts';
@@ -62,9 +65,17 @@ function sourceFrom(closed: ClosedRecord): ReportSource {
   const checks = verifyStudy(publicationParts(closed));
   const rung = blindingRung(entries, states, method);
   const closing = closingOf(entries);
-  const result = registeredResult.parse(entries.find(({ kind }) => kind === 'result-recorded')?.payload.result);
-  const finding = method.finding(result, {
-    cables: [protocol.cables[0].name, protocol.cables[1].name],
+  const recorded = studyEvents['result-recorded'].parse(
+    entries.find(({ kind }) => kind === 'result-recorded')?.payload,
+  );
+  const { result } = recorded;
+  const cables = [protocol.cables[0].name, protocol.cables[1].name] as const;
+  const key = revealedKey.parse(entries.find(({ kind }) => kind === 'key-revealed')?.payload);
+  const cued = cueTrials(method, states, entries, key, closed.answers);
+  // A study closed before there was an audit has none on its record; it follows from the record all the same.
+  const cues = recorded.cues ?? cueAudit(method, cued);
+  const found = method.finding(result, {
+    cables,
     gate: {
       commitmentsHold: passed(checks, [
         ...(['record', 'protocol', 'commitments', 'codeKey', 'draws', 'answers', 'rules', 'figures'] as const),
@@ -76,7 +87,9 @@ function sourceFrom(closed: ClosedRecord): ReportSource {
     levels: levelsOf(closed, states),
     setting: protocol.conduct.chain,
   });
-  return { ...closed, states, checks, rung, closing, result, finding };
+  const finding = withCueCautions(found, cues, method, cables);
+  const cueAuditShown = portrayCueAudit(cues, method, cables, cued);
+  return { ...closed, states, checks, rung, closing, result, finding, cueAudit: cueAuditShown };
 }
 
 /** The report of a closed record, wherever it was read from. */

@@ -7,6 +7,7 @@ import { dbText, exactDbText, handlingWords } from '#shared/levels/level-words.t
 import { levelCheckWords } from '#shared/levels/measured-levels.ts';
 import { methodOf } from '#shared/methods/methods.ts';
 import type { Portrait } from '#shared/methods/portrait.ts';
+import { handlingWords as levelHandlingWords } from '#shared/session/handling.ts';
 import { type Html, html } from './html.ts';
 import { count, facts, frame, list, section, table, utc } from './page-parts.ts';
 
@@ -77,7 +78,7 @@ function levels({ handling, toleranceMilliDb, checks: taken }: NonNullable<Repor
     driftMilliDb === null ? '' : exactDbText(driftMilliDb),
     instrument.name,
   ]);
-  return html`<p class="max-w-3xl">Registered as ${handlingWords[handling]}, tolerance ${dbText(toleranceMilliDb)} between any two codes at 1 kHz. Every reading is in the bundle’s levels.csv.</p>
+  return html`<p class="max-w-3xl">Registered as ${levelHandlingWords[handling]}, tolerance ${dbText(toleranceMilliDb)} between any two codes at 1 kHz. Every reading is in the bundle’s levels.csv.</p>
     ${table('Level match by session', ['Measured', 'Levels', 'Largest difference, dB', 'Moved since the start, dB', 'Instrument'], rows)}`;
 }
 
@@ -98,6 +99,23 @@ function checks(report: Report): Html {
   );
 }
 
+function cueAudit({ cueAudit: { summary, found, rows } }: Report): Html {
+  return html`<p class="max-w-3xl">${summary}</p>
+    ${
+      found.length === 0
+        ? null
+        : list(
+            found.map(({ words }) => words),
+            '',
+          )
+    }
+    ${table(
+      'Every cue',
+      ['Cue', 'Tells, adjusted p', 'Followed, adjusted p', 'Found'],
+      rows.map(({ cue, tells, followed, words }) => [cue, tells ?? 'not asked', followed ?? 'not asked', words]),
+    )}`;
+}
+
 function session({
   number,
   phase,
@@ -106,6 +124,7 @@ function session({
   listeners: seated,
   drawn,
   reason,
+  handling,
   trials,
 }: Report['sessions'][number]): Html {
   const times = `${startedAt === null ? 'never started' : `started ${utc(startedAt)}`}${endedAt === null ? '' : `, ended ${utc(endedAt)}`}`;
@@ -119,6 +138,7 @@ function session({
   return html`<li class="flex flex-col gap-3 border-t border-rule pt-4">
     <h3 class="text-lg">Session ${number}, ${phase}</h3>
     <p class="text-soft">${count(seated, 'listener')}, ${times}.${drawn === null ? '' : ` ${drawn}`}</p>
+    ${handlingWords(handling).map((words) => html`<p class="text-soft">${words}</p>`)}
     ${reason === null ? null : html`<p class="font-semibold">Reason: ${reason}</p>`}
     ${rows.length === 0 ? null : table(`Trials of session ${number}`, ['Trial', 'Outcome', 'Excerpt', 'Drawn', 'Answers'], rows)}
   </li>`;
@@ -221,6 +241,7 @@ export function publicationContent(publication: Publication): Html {
       ${section('From plan to count', flow(report))}
       ${section('By listener', listeners(report))}
       ${section('Checks of the answers', checks(report))}
+      ${section('Cue audit', cueAudit(report))}
       ${section('Every session', html`<ol class="flex flex-col gap-8">${report.sessions.map(session)}</ol>`)}
       ${section('What did not go as planned', incidents(report))}
       ${section('The sealed protocol', html`${facts(report.protocol.facts)}${versions(report.protocol.versions)}`)}
