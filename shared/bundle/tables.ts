@@ -13,7 +13,7 @@ export type TableField = {
 };
 
 export type Table = {
-  readonly name: 'sessions' | 'trials' | 'answers' | 'listeners' | 'result';
+  readonly name: 'sessions' | 'trials' | 'answers' | 'listeners' | 'requests' | 'result';
   readonly title: string;
   readonly fields: readonly TableField[];
   readonly key: readonly string[];
@@ -34,7 +34,14 @@ const listener = field('listener', 'string', 'Label of the listener in this stud
 
 /** Every table of a bundle, computed from the record and what it reveals, so that it can be compared byte for byte. */
 export function tablesOf(study: StudyReading): Table[] {
-  return [sessionsTable(study), trialsTable(study), answersTable(study), listenersTable(study), resultTable(study)];
+  return [
+    sessionsTable(study),
+    trialsTable(study),
+    answersTable(study),
+    listenersTable(study),
+    ...(study.requests().length === 0 ? [] : [requestsTable(study)]),
+    resultTable(study),
+  ];
 }
 
 /**
@@ -196,6 +203,42 @@ function answersTable(study: StudyReading): Table {
     ],
     key: ['session', 'trial', 'listener'],
     rows,
+  };
+}
+
+/** There only where a single listener asked for what was presented. */
+function requestsTable(study: StudyReading): Table {
+  const asked = new Map(
+    study
+      .entries()
+      .filter(({ kind }) => kind === 'presentation-requested')
+      .map(({ at, payload }) => [`${payload.session} ${payload.trial} ${payload.presentation}`, at]),
+  );
+  return {
+    name: 'requests',
+    title: 'Every presentation that was asked for, void trials included',
+    fields: [
+      session,
+      trial,
+      field('presentation', 'integer', 'Place of the presentation in its trial, from 1.'),
+      listener,
+      field('asked_for', 'string', 'The label that was asked for.'),
+      field('asked', 'datetime', 'When it was asked for, by the server’s clock.'),
+    ],
+    key: ['session', 'trial', 'presentation'],
+    rows: study.sessions().flatMap(({ session: number, sessionId }) =>
+      study
+        .requests()
+        .filter((one) => one.session === sessionId)
+        .map((one): Cell[] => [
+          number,
+          one.trial,
+          one.presentation + 1,
+          one.seat,
+          one.label,
+          asked.get(`${number} ${one.trial} ${one.presentation}`) ?? '',
+        ]),
+    ),
   };
 }
 

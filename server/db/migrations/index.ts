@@ -13,6 +13,7 @@ import { ProtocolVersions1796142100000 } from './1796142100000-protocol-versions
 
 import { Construction1796149000000 } from './1796149000000-construction.ts';
 import { RigPresets1796151000000 } from './1796151000000-rig-presets.ts';
+import { PresentationRequests1796152400000 } from './1796152400000-presentation-requests.ts';
 
 /** Every migration, oldest first. */
 export const migrations = [
@@ -30,4 +31,5 @@ export const migrations = [
   ProtocolVersions1796142100000,
   Construction1796149000000,
   RigPresets1796151000000,
+  PresentationRequests1796152400000,
 ];

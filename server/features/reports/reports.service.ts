@@ -13,6 +13,7 @@ import { studyEvents } from '#shared/session/study-events.ts';
 import { type Tx, withTransaction } from '../../db/transaction.ts';
 import type { Deps } from '../../deps.ts';
 import { readRecord } from '../../ledger/ledger.ts';
+import { requestsOfSessions } from '../sessions/requests.store.ts';
 import { answersOfSessions, sessionsOfStudy } from '../sessions/sessions.store.ts';
 import { signedHeadsOf } from '../signed-heads/signed-heads.service.ts';
 import { protocolOf, studyOrProblem, versionsOf } from '../studies/studies.service.ts';
@@ -87,6 +88,10 @@ export async function closedRecord(tx: Tx, study: Study): Promise<ClosedRecord> 
       confidence,
       salt,
     })),
+    requests: await requestsOfSessions(
+      tx,
+      sessions.map(({ id }) => id),
+    ),
     rooms: new Map(sessions.map(({ number, room }) => [number, room])),
     heads: await signedHeadsOf(tx, study.id),
   };
