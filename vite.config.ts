@@ -22,7 +22,8 @@ export default defineConfig({
         extends: true,
         test: {
           name: 'unit',
-          testTimeout: 30_000,
+          // They run beside the other groups, at the lowest priority.
+          testTimeout: 120_000,
           include: ['tests/shared/**/*.test.ts', 'tests/src/**/*.test.ts', 'tests/guards/**/*.test.ts'],
           // Two cores are what a small machine has; left alone, one of them would rest.
           maxWorkers: 2,

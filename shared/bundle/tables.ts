@@ -2,8 +2,10 @@ import Papa from 'papaparse';
 import type { Entry } from '../ledger/chain.ts';
 import { answerName } from '../ledger/publication-parts.ts';
 import type { StudyReading } from '../ledger/study-reading.ts';
+import { levelsTables } from '../levels/levels-table.ts';
 import { truthOf } from '../session/fitting.ts';
 import type { EndedTrial, SessionState } from '../session/state.ts';
+import { cuesTable } from './cues-table.ts';
 
 /** A column with what it means; its name stands in the first row of the file. */
 export type TableField = {
@@ -13,7 +15,7 @@ export type TableField = {
 };
 
 export type Table = {
-  readonly name: 'sessions' | 'trials' | 'answers' | 'listeners' | 'requests' | 'result';
+  readonly name: 'sessions' | 'trials' | 'answers' | 'listeners' | 'requests' | 'result' | 'levels' | 'cues';
   readonly title: string;
   readonly fields: readonly TableField[];
   readonly key: readonly string[];
@@ -41,6 +43,8 @@ export function tablesOf(study: StudyReading): Table[] {
     listenersTable(study),
     ...(study.requests().length === 0 ? [] : [requestsTable(study)]),
     resultTable(study),
+    ...levelsTables(study),
+    ...cuesTable(study),
   ];
 }
 

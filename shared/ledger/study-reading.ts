@@ -7,6 +7,7 @@ import { sessionsInRecord } from '../session/read-record.ts';
 import type { RequestContent } from '../session/request-leaf.ts';
 import { type RevealedKey, revealedKey } from '../session/revealed-key.ts';
 import type { SessionState } from '../session/state.ts';
+import { trialKind } from '../session/trial-kinds.ts';
 import type { Entry } from './chain.ts';
 import type { PublicationParts, PublishedDraw } from './publication-parts.ts';
 
@@ -30,6 +31,8 @@ const draw = z.strictObject({
   firstSide: z.union([z.literal(0), z.literal(1)]),
   specimens: z.tuple([z.int(), z.int()]),
   truths: z.array(z.string()),
+  kinds: z.array(trialKind).optional(),
+  checkSpecimens: z.array(z.int()).optional(),
   separate: z.strictObject({ specimen: z.int(), deals: z.array(z.int()).optional() }).optional(),
 });
 

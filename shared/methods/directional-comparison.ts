@@ -26,6 +26,9 @@ const scoring = forcedChoiceScoring({
   smallEffect: 'A slight difference gives perhaps',
 });
 
+/** A check cable is quieter than the reference, so that there is a right answer only where level is asked for. */
+const levelWords = /\b(loud(er|ness)?|level|volume)\b/i;
+
 const questionOf = ({ attribute = '' }: MethodChoices) => `Which one had more ${attribute}?`;
 
 /**
@@ -68,6 +71,10 @@ export const directionalComparison: Method<ForcedChoiceResult> = {
       short: `the ${value}`,
     })),
 
+  takesNoSteps: ({ attribute = '' }) =>
+    levelWords.test(attribute)
+      ? null
+      : 'A step is a difference in level: it can be scored only where louder, loudness, level or volume is asked for',
   registered: (choices) => ({ ...scoring.registered(choices), direction: 'more in the first cable' }),
   plan: {
     ...scoring.plan,
@@ -83,6 +90,8 @@ export const directionalComparison: Method<ForcedChoiceResult> = {
     legend:
       'Filled rings are locked trials, struck ones are void; in the tables the answers in the registered direction are bold. Which cable came first and what was answered was hidden from everybody until closing.',
     session: (firstSide, cables) => `In the familiarisation ${cables[firstSide]} was heard first.`,
+    when: (answer, [first]) => `${first} came ${answer}`,
+    named: ([first]) => first,
     drawnHeader: 'Heard first',
     drawn: (truth, cables) => cables[truth === 'first' ? 0 : 1],
     answeredHeader: ({ short }) => `More in ${short}`,

@@ -8,6 +8,7 @@ import type { PreferenceResult } from '../findings/preference-result.ts';
 import { type PreferenceChoice, preferredCable } from '../findings/preference-trials.ts';
 import { marginText } from '../protocol/registered-analysis.ts';
 import { twoSidedPlan } from '../statistics/planned-test.ts';
+import { dueAnswers } from './due-answers.ts';
 import { fittedAtFirst, spokenPlace } from './familiarisation.ts';
 import type { AnswerOption, Method, MethodChoices, ScoredAnswer, ScoredTrial } from './method.ts';
 
@@ -74,6 +75,8 @@ export const pairedPreference: Method<PreferenceResult> = {
   announcement: 'Next you say which you prefer.',
   options: (choices) => [ofPlace('first', '1'), ofPlace('second', '2'), ...(offersNone(choices) ? [ofNone] : [])],
 
+  takesNoSteps: () =>
+    'In a preference no answer is right, so a step cannot be scored; the same with the same can be asked',
   registered: (choices) => ({
     name: 'paired-preference/1',
     alternative: 'two-sided',
@@ -129,6 +132,9 @@ export const pairedPreference: Method<PreferenceResult> = {
     legend:
       'Filled rings are locked trials, struck ones are void. Which cable came first and what was answered was hidden from everybody until closing. No answer is right or wrong.',
     session: (firstSide, cables) => `In the familiarisation ${cables[firstSide]} was heard first.`,
+    when: (answer, [first]) => `${first} came ${answer}`,
+    named: ([first]) => first,
+    answerFor: (truth) => truth,
     drawnHeader: 'Heard first',
     drawn: (truth, cables) => cables[place(truth) === 'first' ? 0 : 1],
     answeredHeader: ({ value, short }) => (value === 'none' ? 'No preference' : `Preferred ${short}`),
@@ -136,6 +142,16 @@ export const pairedPreference: Method<PreferenceResult> = {
     countHeader: (cables) => `For ${cables[0]}`,
     count: (answers, truth) =>
       `${forFirstCable(answers, truth)} of ${answers.filter(({ choice }) => choice !== null && choice !== 'none').length}`,
+    rates: (cables) => [
+      {
+        label: `For ${cables[0]}`,
+        due: (trial) =>
+          dueAnswers(
+            { ...trial, answers: trial.answers.filter(({ choice }) => choice !== null && choice !== 'none') },
+            (choice) => preferredCable(place(trial.truth), choiceOf(choice)) === 0,
+          ),
+      },
+    ],
   },
   portray: preferencePortrait,
   source:

@@ -10,6 +10,7 @@ import { assignmentTest } from '../statistics/assignment-test.ts';
 import { fractionToNumber } from '../statistics/fraction.ts';
 import { sameDifferentPlan } from '../statistics/same-different.ts';
 import { unbiasedByDifference } from '../statistics/unbiased-same-different.ts';
+import { dueAnswers } from './due-answers.ts';
 import { fittedAtFirst, oneAndOther, spokenPlace } from './familiarisation.ts';
 import type { AnswerOption, Method, ScoredTrial } from './method.ts';
 
@@ -26,6 +27,8 @@ const pairTrial = ({ session, trial, truth, answers }: ScoredTrial): SameDiffere
   isDifferent: isPairDifferent(truth),
   answers: answers.map(({ listener, choice }) => ({ listener, choice: choiceOf(choice) })),
 });
+
+const saidDifferent = (trial: ScoredTrial) => dueAnswers(trial, (choice) => choice === 'different');
 
 const answer = (value: string, letter: string, sentence: string): AnswerOption => ({
   value,
@@ -68,6 +71,7 @@ export const sameDifferent: Method<SameDifferentResult> = {
   announcement: 'Next you say whether the two were the same.',
   options: () => [answer('same', '=', 'They were the same'), answer('different', '≠', 'They were different')],
 
+  takesNoSteps: () => null,
   registered: () => ({ name: 'same-different/1', alternative: 'greater', missing: 'counted as wrong' }),
   margin: null,
   planned: sameDifferentPlan,
@@ -106,6 +110,9 @@ export const sameDifferent: Method<SameDifferentResult> = {
     legend:
       'Filled rings are locked trials, struck ones are void. Whether a pair was the same and what was answered was hidden from everybody until closing.',
     session: (firstSide, cables) => `In the familiarisation ${cables[firstSide]} was heard first.`,
+    when: (answer) => (answer === 'same' ? 'the pair was the same' : 'the pair was different'),
+    named: () => null,
+    answerFor: (pair) => (isPairDifferent(pair) ? 'different' : 'same'),
     drawnHeader: 'The pair was',
     drawn: (pair, cables) => {
       const [first, second] = [...pair].map((letter) => cables[letter === 'A' ? 0 : 1]);
@@ -115,6 +122,10 @@ export const sameDifferent: Method<SameDifferentResult> = {
     isRight: null,
     countHeader: () => 'Said different',
     count: (answers) => `${answers.filter(({ choice }) => choice === 'different').length} of ${answers.length}`,
+    rates: () => [
+      { label: 'Hits', due: (trial) => (isPairDifferent(trial.truth) ? saidDifferent(trial) : []) },
+      { label: 'False alarms', due: (trial) => (isPairDifferent(trial.truth) ? [] : saidDifferent(trial)) },
+    ],
   },
   portray: sameDifferentPortrait,
   source:

@@ -1,7 +1,10 @@
 import { z } from 'zod';
 import { cautions, stepKinds, voidReasons } from '../contracts/proctor-live.ts';
+import { registeredLevels } from '../levels/registered-levels.ts';
 import { rigPreset } from '../protocol/rig-preset.ts';
 import { waysToRun } from '../protocol/ways-to-run.ts';
+import { levelEvents } from './level-events.ts';
+import { checkShape } from './trial-kinds.ts';
 
 // What a session puts on its study's record. Payload shapes are permanent: a change means a new version.
 
@@ -15,8 +18,11 @@ export const sessionPlan = z.strictObject({
   method: z.string(),
   methodSettings: z.array(z.string()).optional(),
   attribute: z.string().optional(),
+  /** Check trials included: nothing in a session tells them apart. */
   trials: z.int(),
   spares: z.int(),
+  /** How many of the trials are check trials; left out where there are none. */
+  checks: checkShape.optional(),
   rig: z.enum(['loudspeaker', 'line', 'headphone']),
   /** How a change is made, as the protocol froze it; left out where it names no preset. */
   rigPreset: rigPreset.optional(),
@@ -25,6 +31,8 @@ export const sessionPlan = z.strictObject({
   confidence: z.boolean(),
   ...waysToRun,
   programme: z.array(z.strictObject({ title: z.string(), start: z.string(), lengthMs: z.int() })),
+  /** Left out where levels are not measured. */
+  levels: registeredLevels.optional(),
 });
 export type SessionPlan = z.output<typeof sessionPlan>;
 
@@ -82,6 +90,7 @@ export const sessionEvents = {
   'server-restarted': z.strictObject({ session }),
   'listener-left': z.strictObject({ session, seat, by: z.enum(['listener', 'proctor']) }),
   'deviation-recorded': z.strictObject({ session: session.nullable(), text: z.string() }),
+  ...levelEvents,
   'session-finished': z.strictObject({ session }),
   'session-abandoned': z.strictObject({
     session,

@@ -2,6 +2,7 @@ import type { CourseRing, HeldAnswer, ListenerView, LockReceipt } from '../contr
 import type { ProctorView } from '../contracts/proctor-live.ts';
 import type { Method } from '../methods/method.ts';
 import { cautionsOf, nextStep, stepEndsAt, stepsOf } from './change-steps.ts';
+import { levelsFor } from './level-view.ts';
 import { canRequest, isOnRequest, requestsLeft, takesAnswers } from './on-request.ts';
 import {
   activeSeats,
@@ -157,6 +158,7 @@ function trialFor(state: SessionState, method: Method, context: ProctorContext):
   if (trial === null) return null;
   const mayStartAt = listeningMayStartAt(trial, plan, context.now);
   const endsAt = trial.stage === 'change' ? mayStartAt : trial.endsAt;
+  const excerpt = plan.programme[trial.excerpt];
   return {
     number: trial.trial,
     of: trialsInAll(state),
@@ -165,7 +167,9 @@ function trialFor(state: SessionState, method: Method, context: ProctorContext):
     ...placeIn(state, trial, method),
     onRequest: isOnRequest(state, trial.trial),
     code: context.code,
-    excerpt: plan.programme[trial.excerpt]?.title ?? '',
+    excerpt: excerpt?.title ?? '',
+    excerptStart: excerpt?.start ?? '',
+    excerptS: Math.round((excerpt?.lengthMs ?? 0) / 1000),
     stepsDone: [...trial.stepsDone],
     step: state.paused === null ? nextStep(trial, plan) : null,
     stepEndsAt: state.paused === null ? stepEndsAt(trial, plan) : null,
@@ -206,6 +210,7 @@ export function proctorViewOf(state: SessionState, method: Method, context: Proc
       state.phase === 'running' && state.trial === null && activeSeats(state).length > 0 ? nextTrial(state) : null,
     course: courseOf(state),
     seats: seatsFor(state, context.presence),
+    levels: levelsFor(state),
     record: { entries: context.entries, sessionEntries: state.version },
     demo: context.demo,
     rehearsal: context.rehearsal,

@@ -1,18 +1,23 @@
 import type { Report } from '#shared/contracts/reports.ts';
 import type { SignedHead } from '#shared/contracts/signed-heads.ts';
+import type { PortrayedCueAudit } from '#shared/cue-audit/portrayed-cue-audit.ts';
+import { resultsByExcerpt } from '#shared/findings/by-excerpt.ts';
 import type { Finding } from '#shared/findings/finding.ts';
 import type { Entry } from '#shared/ledger/chain.ts';
 import { sealedVersions } from '#shared/ledger/protocol-versions.ts';
 import type { Check } from '#shared/ledger/verify.ts';
+import { levelReportOf } from '#shared/levels/level-report.ts';
+import { registeredLevelsText } from '#shared/levels/level-words.ts';
 import { methodOf, type RegisteredResult } from '#shared/methods/methods.ts';
 import { analysisFacts } from '#shared/protocol/analysis-facts.ts';
 import { presetFacts } from '#shared/protocol/preset-facts.ts';
 import type { Protocol } from '#shared/protocol/protocol.ts';
+import { checksWords } from '#shared/protocol/protocol-checks.ts';
 import { protocolDifferences } from '#shared/protocol/protocol-differences.ts';
 import { waysFacts } from '#shared/protocol/ways-to-run.ts';
 import type { AnswerContent } from '#shared/session/answer-leaf.ts';
 import type { BlindingRung } from '#shared/session/blinding-rung.ts';
-import { countedTrials, revealedDraw } from '#shared/session/counted-trials.ts';
+import { countedTrials, type LockedTrial, revealedDraw } from '#shared/session/counted-trials.ts';
 import type { Draw } from '#shared/session/draw.ts';
 import { truthOf } from '#shared/session/fitting.ts';
 import { listenersToldApart } from '#shared/session/listeners-told-apart.ts';
@@ -33,6 +38,7 @@ export type ReportSource = {
   readonly rooms: ReadonlyMap<number, string>;
   readonly result: RegisteredResult;
   readonly finding: Finding;
+  readonly cueAudit: PortrayedCueAudit;
   readonly checks: readonly Check[];
   readonly rung: BlindingRung;
   readonly closing: StudyPayloadOf<'study-closed'>;
@@ -106,6 +112,17 @@ function sessionView(source: ReportSource, state: SessionState, key: RevealedKey
   };
 }
 
+/** Every excerpt of the programme, whether or not it was played. */
+function byExcerptOf(protocol: Protocol, counted: readonly LockedTrial[]): Report['byExcerpt'] {
+  const { programme } = protocol.conduct;
+  const rates = methodOf(protocol.method).trials.rates(namesOf(protocol));
+  return resultsByExcerpt(counted, rates, programme.length).map(({ excerpt, trials, rates: found }) => ({
+    title: programme[excerpt]?.title ?? '',
+    trials,
+    rates: [...found],
+  }));
+}
+
 function voidsOf(entries: readonly Entry[]): Report['voids'] {
   return entries
     .filter(({ kind }) => kind === 'trial-voided')
@@ -135,7 +152,7 @@ function missingOf(states: readonly SessionState[]): Report['missing'] {
   );
 }
 
-function factsOf({ design, conduct, analysis, cables, method }: Protocol): Report['protocol']['facts'] {
+function factsOf({ design, conduct, analysis, cables, method, checks }: Protocol): Report['protocol']['facts'] {
   const specimens = cables.map(({ name, specimens: own }) => `${name}: ${own.map(({ serial }) => serial).join(', ')}`);
   return [
     { label: 'Method', value: methodOf(method).name },
@@ -146,11 +163,13 @@ function factsOf({ design, conduct, analysis, cables, method }: Protocol): Repor
     ...waysFacts(design),
     ...(design.samplingFrame === undefined ? [] : [{ label: 'Listeners are drawn from', value: design.samplingFrame }]),
     { label: 'Trials per session', value: `${design.trials}, ${design.spares} spare` },
+    ...(checks === undefined ? [] : [{ label: 'Check trials', value: checksWords(checks, cables) }]),
     { label: 'Significance level', value: analysis.alpha },
     ...analysisFacts(analysis),
     { label: 'Change', value: `${conduct.changeS} s, real or sham` },
     { label: 'Answer window', value: `${conduct.answerS} s` },
     { label: 'Programme', value: conduct.programme.map(({ title, lengthS }) => `${title} (${lengthS} s)`).join('; ') },
+    { label: 'Level at the load', value: registeredLevelsText(conduct.levels) },
     { label: 'Chain', value: conduct.chain },
     ...presetFacts(conduct.rigPreset),
   ];
@@ -184,6 +203,7 @@ export function reportView(source: ReportSource): Report {
   const { study, protocol, entries, states, answers, result, finding, checks, rung, closing, heads } = source;
   const method = methodOf(protocol.method);
   const key = revealedKey.parse(entries.find(({ kind }) => kind === 'key-revealed')?.payload);
+  const counted = countedTrials(method, states, key, answers);
   const sealing = sealedVersions(entries).at(-1);
   const closedAt = entries.find(({ kind }) => kind === 'study-closed')?.at;
   const head = entries.at(-1);
@@ -199,9 +219,15 @@ export function reportView(source: ReportSource): Report {
     endedEarly: closing.complete ? null : closing.reason,
     finding,
     result,
-    nullDistribution: method.nullDistribution(countedTrials(method, states, key, answers)),
+    nullDistribution: method.nullDistribution(counted),
+    byExcerpt: byExcerptOf(protocol, counted),
+    cueAudit: source.cueAudit,
     rung: { name: rung.name, why: rung.why },
     conditions: conditionsOf(source),
+    levels:
+      protocol.conduct.levels === undefined
+        ? null
+        : levelReportOf(entries, key.codeKey.rows, protocol.conduct.levels, namesOf(protocol)),
     flow: flowOf(source),
     sessions: states.map((state) => sessionView(source, state, key)),
     voids: voidsOf(entries),
