@@ -11,13 +11,7 @@ export function checkFigures(study: StudyReading): Verdict {
   if (recorded === undefined) return { faults: ['No result is on the record.'], held: '' };
   if (canonicalJson(study.parts.result as Json) !== canonicalJson(recorded))
     return { faults: ['The result is not the one on the record.'], held: '' };
-  const recomputed = runRegistered(
-    study.protocol(),
-    study.sessions(),
-    study.secrets(),
-    study.answers(),
-    ,
-  );
+  const recomputed = runRegistered(study.protocol(), study.sessions(), study.secrets(), study.answers());
   const place = differentFigure(recorded, recomputed as unknown as Json);
   const faults = place === null ? [] : [`Recomputed, ${place} differs from the result on the record.`];
   return {
@@ -30,7 +24,14 @@ export function checkFigures(study: StudyReading): Verdict {
 function cueFaults(study: StudyReading): string[] {
   const recorded = study.payloadOf('result-recorded')?.cues;
   if (recorded === undefined) return [];
-  const again = runCueAudit(study.protocol(), study.sessions(), study.entries(), study.secrets(), study.answers(), study.requests());
+  const again = runCueAudit(
+    study.protocol(),
+    study.sessions(),
+    study.entries(),
+    study.secrets(),
+    study.answers(),
+    study.requests(),
+  );
   const place = differentFigure(recorded as Json, again as unknown as Json);
   return place === null ? [] : [`Made again, ${place} of the cue audit differs from the record.`];
 }
