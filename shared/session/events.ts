@@ -4,6 +4,7 @@ import { registeredLevels } from '../levels/registered-levels.ts';
 import { rigPreset } from '../protocol/rig-preset.ts';
 import { waysToRun } from '../protocol/ways-to-run.ts';
 import { levelEvents } from './level-events.ts';
+import { scanEvents } from './scan-events.ts';
 import { checkShape } from './trial-kinds.ts';
 
 // What a session puts on its study's record. Payload shapes are permanent: a change means a new version.
@@ -62,6 +63,7 @@ export const sessionEvents = {
   /** On request: the listener asked for a presentation. What was asked for lies beside the record, under its leaf. */
   'presentation-requested': z.strictObject({ session, trial, presentation: z.int().min(0), seat, leaf: hex32 }),
   'step-confirmed': z.strictObject({ session, trial, presentation: z.int(), step: z.enum(stepKinds) }),
+  ...scanEvents,
   'listening-started': z.strictObject({
     session,
     trial,
