@@ -5,6 +5,7 @@ import { rigPreset } from '../protocol/rig-preset.ts';
 import { waysToRun } from '../protocol/ways-to-run.ts';
 import { levelEvents } from './level-events.ts';
 import { scanEvents } from './scan-events.ts';
+import { soundEvents } from './sound.ts';
 import { checkShape } from './trial-kinds.ts';
 
 // What a session puts on its study's record. Payload shapes are permanent: a change means a new version.
@@ -93,6 +94,7 @@ export const sessionEvents = {
   'listener-left': z.strictObject({ session, seat, by: z.enum(['listener', 'proctor']) }),
   'deviation-recorded': z.strictObject({ session: session.nullable(), text: z.string() }),
   ...levelEvents,
+  ...soundEvents,
   'session-finished': z.strictObject({ session }),
   'session-abandoned': z.strictObject({
     session,

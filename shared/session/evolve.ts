@@ -197,6 +197,10 @@ function fold(state: SessionState, event: SessionEvent, method: Method): Folded 
       return { ...state, seats: state.seats.map((s) => (s.seat === event.payload.seat ? { ...s, left: true } : s)) };
     case 'deviation-recorded':
       return state;
+    case 'sound-level-recorded': {
+      const { tenthsDba, response, instrument, place } = event.payload;
+      return { ...state, sound: { tenthsDba, response, instrument, place } };
+    }
     case 'levels-measured': {
       const { check, grade, isDrifted } = event.payload;
       return { ...state, levels: [...state.levels, { check, at: event.at, grade, isDrifted }] };
@@ -236,6 +240,7 @@ export function evolve(state: SessionState | null, event: SessionEvent, method: 
       inventory: { found: [], foreign: [], ended: null },
       late: [],
       levels: [],
+      sound: null,
     };
   }
   return { ...fold(state, event, method), version: state.version + 1 };

@@ -15,6 +15,7 @@ import {
   presentationsOf,
   trialsInAll,
 } from './progress.ts';
+import { soundFor } from './sound.ts';
 import type { OpenTrial, SessionState } from './state.ts';
 
 // A view is built field by field from nothing; it is never "the state without the secret".
@@ -236,6 +237,7 @@ export function proctorViewOf(state: SessionState, method: Method, context: Proc
     course: courseOf(state),
     seats: seatsFor(state, context.presence),
     levels: levelsFor(state),
+    sound: soundFor(state),
     record: { entries: context.entries, sessionEntries: state.version },
     demo: context.demo,
     rehearsal: context.rehearsal,
