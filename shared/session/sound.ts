@@ -14,19 +14,19 @@ export type SoundCommand = SoundLevel & { kind: 'record-sound-level'; reason: st
 const shortestReason = 3;
 
 /** @throws Problem where it is too loud and no reason is given, or the session is over */
-export function soundToRecord(
-  state: SessionState,
-  { kind: _, ...recorded }: SoundCommand,
-): SoundLevel & { reason: string } {
+export function soundToRecord(state: SessionState, command: SoundCommand): SoundLevel & { reason: string } {
   if (state.phase === 'finished' || state.phase === 'abandoned')
     throw new Problem('wrong-phase', 'The session is over.');
-  if (adviceOn(recorded) === 'refused' && recorded.reason.length < shortestReason)
+  // Field by field: a command carries more than belongs on a record.
+  const { tenthsDba, response, instrument, place } = command;
+  const isTooLoud = adviceOn(command) === 'refused';
+  if (isTooLoud && command.reason.length < shortestReason)
     throw new Problem(
       'invalid-input',
       'From 90 dBA on hearing is at risk. Turn it down, or say why it must be so loud.',
       [{ pointer: '/reason', detail: 'Say why it must be 90 dBA or more' }],
     );
-  return { ...recorded, reason: adviceOn(recorded) === 'refused' ? recorded.reason : '' };
+  return { tenthsDba, response, instrument, place, reason: isTooLoud ? command.reason : '' };
 }
 
 /** What the console shows of the sound level: the last that was recorded. */
