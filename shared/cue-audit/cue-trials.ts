@@ -1,6 +1,6 @@
 import type { Method } from '../methods/method.ts';
 import { type HeldChoice, revealedDraw } from '../session/counted-trials.ts';
-import { truthOf } from '../session/fitting.ts';
+import { kindOf, truthOf } from '../session/fitting.ts';
 import type { RevealedKey } from '../session/revealed-key.ts';
 import type { SessionState } from '../session/state.ts';
 
@@ -124,22 +124,29 @@ export function cueTrials(
 ): CueTrial[] {
   const choices = new Map(held.map(({ session, trial, seat, choice }) => [`${session} ${trial} ${seat}`, choice]));
   return states.flatMap((state) => {
-    const locked = state.ended.filter(({ outcome }) => outcome === 'locked');
+    const ended = state.ended.filter(({ outcome }) => outcome === 'locked');
     const secret = key.draws.find(({ session }) => session === state.session)?.secret;
-    if (secret === undefined || locked.length === 0) return [];
+    if (secret === undefined || ended.length === 0) return [];
     const draw = revealedDraw(state, method, secret, key.codeKey.rows);
     const clocked = clockedTrials(entries.filter(({ payload }) => payload.session === state.session));
-    return locked.map(({ trial, seats }, index) => ({
-      session: state.session,
-      trial,
-      position: index + 1,
-      truth: truthOf(draw, trial),
-      firstSide: draw.firstSide,
-      answers: seats.map((listener) => ({
-        listener,
-        choice: choices.get(`${state.sessionId} ${trial} ${listener}`) ?? null,
-      })),
-      ...(clocked.get(trial) ?? { presentations: [], gap: null, answering: null }),
-    }));
+    // Check trials are reported apart; a trial's position is that among all.
+    return ended.flatMap(({ trial, seats }, index) =>
+      kindOf(draw, state, trial) !== 'main'
+        ? []
+        : [
+            {
+              session: state.session,
+              trial,
+              position: index + 1,
+              truth: truthOf(draw, trial),
+              firstSide: draw.firstSide,
+              answers: seats.map((listener) => ({
+                listener,
+                choice: choices.get(`${state.sessionId} ${trial} ${listener}`) ?? null,
+              })),
+              ...(clocked.get(trial) ?? { presentations: [], gap: null, answering: null }),
+            },
+          ],
+    );
   });
 }

@@ -12,6 +12,7 @@ import { ReportFigures } from './report-figures.tsx';
 import { ReportFlow } from './report-flow.tsx';
 import { ReportHeads } from './report-heads.tsx';
 import { ReportIncidents } from './report-incidents.tsx';
+import { ReportKnownDifferences } from './report-known-differences.tsx';
 import { ReportListeners } from './report-listeners.tsx';
 import { ReportProtocol } from './report-protocol.tsx';
 import { ReportRecord } from './report-record.tsx';
@@ -48,6 +49,7 @@ export function ReportView({ report, back, actions, proofs }: ReportViewProps) {
       </div>
       <ReportDistribution nullDistribution={report.nullDistribution} distribution={portrait.distribution} />
       <ReportListeners listeners={portrait.listeners} />
+      <ReportKnownDifferences known={report.knownDifferences} method={method} />
       <ReportExcerpts byExcerpt={report.byExcerpt} />
       <ReportChecks checks={portrait.checks} />
       <ReportCueAudit audit={report.cueAudit} />

@@ -19,6 +19,7 @@ export function CableChoice({ index, label, cables }: CableChoiceProps) {
   const { register, setValue, getFieldState } = useFormContext<StudyFormValues>();
   const name = `cables.${index}.cableId` as const;
   const cableId = useWatch<StudyFormValues, typeof name>({ name });
+  const ofQuestion = cables.filter(({ kind }) => kind !== 'check');
   const cable = cables.find(({ id }) => id === cableId);
 
   function takeUp(chosenId: string) {
@@ -35,12 +36,18 @@ export function CableChoice({ index, label, cables }: CableChoiceProps) {
         {...register(name, { onChange: (event: { target: { value: string } }) => takeUp(event.target.value) })}
         label={label}
         placeholder="Choose a cable"
-        options={cables.map((choice) => ({
+        options={ofQuestion.map((choice) => ({
           value: choice.id,
           label: `${choice.name}, ${formatLength(choice.lengthMm)}`,
         }))}
       />
-      {cable ? <SpecimenChoice index={index} cableName={cable.name} specimens={livingSpecimens(cable)} /> : null}
+      {cable ? (
+        <SpecimenChoice
+          name={`cables.${index}.specimenIds`}
+          cableName={cable.name}
+          specimens={livingSpecimens(cable)}
+        />
+      ) : null}
     </div>
   );
 }

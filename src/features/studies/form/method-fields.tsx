@@ -19,6 +19,7 @@ export function MethodFields() {
     setValue('methodSettings', [], { shouldDirty: true });
     setValue('attribute', '', { shouldDirty: true });
     setValue('marginPercent', undefined, { shouldDirty: true });
+    setValue('checks', undefined, { shouldDirty: true });
     setValue('separateSpecimens', false, { shouldDirty: true });
   };
   return (

@@ -10,6 +10,7 @@ import { LeaveGuard } from '../../../ui/leave-guard.tsx';
 import { PlanProvider } from '../planner/plan-provider.tsx';
 import { Planner } from '../planner/planner.tsx';
 import { CableFields } from './cable-fields.tsx';
+import { CheckFields } from './check-fields.tsx';
 import { CodeHolderField } from './code-holder-field.tsx';
 import { ListeningFields } from './listening-fields.tsx';
 import { ProgrammeFields } from './programme-fields.tsx';
@@ -78,6 +79,7 @@ export function StudyForm<Saved>({
             <CableFields cables={cables} />
             <ListeningFields />
             <ProgrammeFields />
+            <CheckFields cables={cables} />
             <RigFields presets={rigPresets} presetsTo={rigPresetsTo} />
             <CodeHolderField members={members} isManager={isManager} />
           </div>
