@@ -6,6 +6,7 @@ import { Listener } from './features/attendances/listener.entity.ts';
 import { Audit } from './features/audits/audit.entity.ts';
 import { Cable } from './features/cables/cable.entity.ts';
 import { Specimen } from './features/cables/specimen.entity.ts';
+import { Evidence } from './features/evidence/evidence.entity.ts';
 import { Invitation } from './features/invitations/invitation.entity.ts';
 import { LevelDuty } from './features/levels/level-duty.entity.ts';
 import { Measurement } from './features/measurements/measurement.entity.ts';
@@ -40,6 +41,7 @@ export const entities = [
   Cable,
   Specimen,
   Measurement,
+  Evidence,
   Study,
   ProtocolVersion,
   RecordEntry,

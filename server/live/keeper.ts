@@ -27,4 +27,8 @@ export type Keeper = {
   keep<T>(work: (keeping: Keeping) => Promise<T>): Promise<T>;
   /** The blind code of the presentation that is being fitted or heard, for the proctor alone. */
   codeToFit(memory: SessionMemory): Promise<string | null>;
+  /** Every code that the study's sleeves bear, in their order, and nothing of what they stand for. */
+  codes(memory: SessionMemory): Promise<readonly string[]>;
+  /** The neutral title of the organisation's study whose labels bear a mark; null when there is none. */
+  titleOfMark(memory: SessionMemory, mark: string): Promise<string | null>;
 };

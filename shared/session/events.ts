@@ -4,6 +4,7 @@ import { registeredLevels } from '../levels/registered-levels.ts';
 import { rigPreset } from '../protocol/rig-preset.ts';
 import { waysToRun } from '../protocol/ways-to-run.ts';
 import { levelEvents } from './level-events.ts';
+import { scanEvents } from './scan-events.ts';
 import { checkShape } from './trial-kinds.ts';
 
 // What a session puts on its study's record. Payload shapes are permanent: a change means a new version.
@@ -60,6 +61,7 @@ export const sessionEvents = {
   'draw-fixed': z.strictObject({ session, contributors: z.array(seat) }),
   'trial-opened': z.strictObject({ session, trial, excerpt: z.int(), seats: z.array(seat) }),
   'step-confirmed': z.strictObject({ session, trial, presentation: z.int(), step: z.enum(stepKinds) }),
+  ...scanEvents,
   'listening-started': z.strictObject({
     session,
     trial,
