@@ -21,6 +21,7 @@ const {
   changeS,
   answerS,
   programme,
+  onRequest,
 } = studyDraft.shape;
 
 /** How many check trials there are; which cables they need does not bear on the time. */
@@ -41,6 +42,7 @@ const listening = z.object({
   alphaPerMille,
   changeS,
   answerS,
+  onRequest: onRequest.catch(undefined),
   programme: z.array(z.object({ lengthS: programme.element.shape.lengthS })).min(1),
   checks: checkCounts.optional().catch(undefined),
 });
@@ -62,6 +64,8 @@ export type Plan = {
   figures: PlanFigures;
   /** Over all sessions. */
   fittings: number;
+  /** Whether fittings and time are the most that they can be: on request listeners may ask for less. */
+  isAtMost: boolean;
   minutesPerSession: number;
   minutes: number;
 };
@@ -92,6 +96,7 @@ export function planOf(values: Partial<StudyFormValues>): Plan | null {
   const checkTrials = checkTrialsIn(
     draft.checks && { steps: draft.checks.steps.map(({ trials: own }) => own), same: draft.checks.same },
   );
+  const asked = chosen.onRequest === null ? undefined : draft.onRequest;
   const figures = planFigures({
     sessions: draft.sessions,
     trials: draft.trials,
@@ -99,7 +104,7 @@ export function planOf(values: Partial<StudyFormValues>): Plan | null {
     alpha,
     test: chosen.planned,
     listeners: draft.listenersPerSession,
-    presentationsPerTrial: chosen.presentations.length,
+    presentationsPerTrial: asked?.most ?? chosen.presentations.length,
     changeMs: draft.changeS * 1000,
     listenMs: meanExcerptMs(draft.programme, draft.trials + checkTrials),
     answerMs: draft.answerS * 1000,
@@ -117,6 +122,7 @@ export function planOf(values: Partial<StudyFormValues>): Plan | null {
     listeners: draft.listenersPerSession,
     alpha: Number(alpha),
     figures,
+    isAtMost: asked !== undefined,
     fittings: draft.sessions * figures.session.fittings,
     minutesPerSession: figures.session.durationMinutes,
     minutes: draft.sessions * figures.session.durationMinutes,
