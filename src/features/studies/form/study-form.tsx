@@ -12,6 +12,7 @@ import { Planner } from '../planner/planner.tsx';
 import { CableFields } from './cable-fields.tsx';
 import { CheckFields } from './check-fields.tsx';
 import { CodeHolderField } from './code-holder-field.tsx';
+import { LevelFields } from './level-fields.tsx';
 import { ListeningFields } from './listening-fields.tsx';
 import { ProgrammeFields } from './programme-fields.tsx';
 import { QuestionFields } from './question-fields.tsx';
@@ -81,6 +82,7 @@ export function StudyForm<Saved>({
             <ProgrammeFields />
             <CheckFields cables={cables} />
             <RigFields presets={rigPresets} presetsTo={rigPresetsTo} />
+            <LevelFields />
             <CodeHolderField members={members} isManager={isManager} />
           </div>
           <Planner />
