@@ -2,6 +2,7 @@ import type { Study, StudyDraft } from '#shared/contracts/studies.ts';
 import { methodOf } from '#shared/methods/methods.ts';
 import { analysisFacts } from '#shared/protocol/analysis-facts.ts';
 import { presetFacts } from '#shared/protocol/preset-facts.ts';
+import { treatmentFacts } from '#shared/protocol/treatment.ts';
 import { waysFacts } from '#shared/protocol/ways-to-run.ts';
 import { formatCount } from '../../../lib/format.ts';
 import { percentOfPerMille, rigWords } from '../study-words.ts';
@@ -21,6 +22,7 @@ export function protocolFacts({ draft, cableNames, codeHolder }: Study): Protoco
         `${cableNames[index === 0 ? 0 : 1]}, ${formatCount(specimenIds.length, 'specimen')}`,
       ),
     ),
+    ...treatmentFacts(draft.treatment),
     ...waysFacts(draft),
     words('Listening', listeningWords(draft)),
     ...(draft.samplingFrame ? [words('Listeners are drawn from', draft.samplingFrame)] : []),
