@@ -64,7 +64,7 @@ function actInTrial(view: ProctorView, trial: NonNullable<ProctorView['trial']>)
     const waiting = isLast ? 'Listening starts in' : `${done} in`;
     return { label: done, waiting, command: { kind: 'confirm-step', step }, step, opensAt };
   }
-  if (trial.stage === 'answering' && trial.answered === trial.expected)
+  if ((trial.stage === 'answering' || trial.stage === 'asking') && trial.answered === trial.expected)
     return now(`Lock trial ${trial.number}`, { kind: 'lock-trial' });
   return null;
 }
