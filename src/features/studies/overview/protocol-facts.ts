@@ -5,6 +5,7 @@ import { analysisFacts } from '#shared/protocol/analysis-facts.ts';
 import { presetFacts } from '#shared/protocol/preset-facts.ts';
 import { decibels } from '#shared/protocol/protocol-checks.ts';
 import { checkExclusion } from '#shared/protocol/registered-analysis.ts';
+import { treatmentFacts } from '#shared/protocol/treatment.ts';
 import { waysFacts } from '#shared/protocol/ways-to-run.ts';
 import { formatCount } from '../../../lib/format.ts';
 import { percentOfPerMille, rigWords } from '../study-words.ts';
@@ -24,6 +25,7 @@ export function protocolFacts({ draft, cableNames, codeHolder }: Study): Protoco
         `${cableNames[index === 0 ? 0 : 1]}, ${formatCount(specimenIds.length, 'specimen')}`,
       ),
     ),
+    ...treatmentFacts(draft.treatment),
     ...waysFacts(draft),
     words('Listening', listeningWords(draft)),
     ...(draft.samplingFrame ? [words('Listeners are drawn from', draft.samplingFrame)] : []),
