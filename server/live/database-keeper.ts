@@ -29,8 +29,7 @@ export function databaseKeeper(deps: Deps): Keeper {
         sessionId: session.id,
         contributions: contributionsOf(state),
         method,
-        trials: state.plan.trials + state.plan.spares,
-        isSeparate: state.plan.separateSpecimens === true,
+        state,
         trial: state.trial.trial,
         presentation,
       });

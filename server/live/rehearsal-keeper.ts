@@ -6,14 +6,21 @@ import { contributionsOf } from '#shared/session/counted-trials.ts';
 import type { SessionPlan } from '#shared/session/events.ts';
 import { codeFitted } from '#shared/session/fitting.ts';
 import { presentationNow } from '#shared/session/progress.ts';
+import { firstCheckCable } from '#shared/session/trial-kinds.ts';
 import { drawCodes } from '../blind/index.ts';
 import type { Random } from '../deps.ts';
 import type { Keeper, Keeping } from './keeper.ts';
 
-/** A rehearsal's invented codes: as few specimens of either cable as its plan needs, and nothing behind them. */
-function inventedKey(random: Random, { separateSpecimens }: SessionPlan) {
+/** A rehearsal's invented codes: as few specimens of every cable as its plan needs, and nothing behind them. */
+function inventedKey(random: Random, { checks, separateSpecimens }: SessionPlan) {
   const ofEach = separateSpecimens ? leastSeparate : 1;
-  return drawCodes(random, 2 * ofEach).map((code, index) => ({ code, specimen: '', serial: '', cable: index % 2 }));
+  const cables = firstCheckCable + (checks?.steps.length ?? 0);
+  return drawCodes(random, cables * ofEach).map((code, index) => ({
+    code,
+    specimen: '',
+    serial: '',
+    cable: index % cables,
+  }));
 }
 
 /** Keeps a rehearsal in memory alone: invented codes, a draw of its own, and no record. */
@@ -57,8 +64,7 @@ export function rehearsalKeeper(random: Random, code: string, plan: SessionPlan)
         rows,
         contributions: contributionsOf(state),
         method,
-        trials: state.plan.trials + state.plan.spares,
-        isSeparate: state.plan.separateSpecimens === true,
+        state,
         trial: state.trial.trial,
         presentation,
       });

@@ -82,6 +82,9 @@ export const proctorView = z.strictObject({
       /** The blind code to be fitted, during a change and while it is heard. */
       code: z.string().nullable(),
       excerpt: z.string(),
+      /** From where it is played, as the programme says; empty for its beginning. */
+      excerptStart: z.string(),
+      excerptS: z.int(),
       stepsDone: z.array(z.enum(stepKinds)),
       /** The next step, or null when none is to be confirmed. */
       step: z.enum(stepKinds).nullable(),

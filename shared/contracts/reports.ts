@@ -15,6 +15,16 @@ export const reportRow = z.strictObject({
 });
 export type ReportRow = z.output<typeof reportRow>;
 
+/** A rate with its counts and its limits at 95 %, for display alone. */
+export const countedRate = z.strictObject({
+  label: z.string(),
+  counted: z.int(),
+  due: z.int(),
+  missing: z.int(),
+  interval: z.strictObject({ lower: z.number(), upper: z.number() }).nullable(),
+});
+export type CountedRate = z.output<typeof countedRate>;
+
 const chanceBar = z.strictObject({ count: z.int(), chance: z.number() });
 
 /** The report of a closed study. Everything in it is computed from the record and what the closing revealed. */
@@ -29,6 +39,8 @@ export const report = z.strictObject({
   finding,
   result: registeredResult,
   nullDistribution: z.array(chanceBar),
+  /** Exploratory: counts and limits, never a p. */
+  byExcerpt: z.array(z.strictObject({ title: z.string(), trials: z.int(), rates: z.array(countedRate) })),
   rung: z.strictObject({ name: z.string(), why: z.string() }),
   /** The gap between presentations and the blinding rung, each in a sentence: part of the finding’s first lines. */
   conditions: z.array(z.string()),

@@ -2,6 +2,7 @@ import { z } from 'zod';
 import { methodIds, methods } from '../methods/methods.ts';
 import { leastChangeS, rigPreset, rigs } from '../protocol/rig-preset.ts';
 import { faultsOfWays } from '../protocol/ways-to-run.ts';
+import { checkDraft, checkFaults } from './check-draft.ts';
 import { endpoint, managers } from './endpoint.ts';
 import { organisationParams, thingParams } from './organisation-params.ts';
 import { listQuery, pageOf, sortBy } from './paging.ts';
@@ -52,6 +53,8 @@ export const studyDraft = z
     /** Whom the listeners are a sample of; left out or empty where nothing is said about people in general. */
     samplingFrame: line(160).optional(),
     cables: z.tuple([chosenCable, chosenCable]),
+    /** Known differences among the trials; left out for none. */
+    checks: checkDraft.optional(),
     sessions: whole(1, 20, 'sessions'),
     listenersPerSession: whole(1, 24, 'listeners'),
     trials: whole(5, 60, 'trials'),
@@ -98,6 +101,9 @@ export const studyDraft = z
         path: ['attribute'],
         message: isAsked ? 'Name it in a word or two, such as bass' : `${methods[method].name} asks for no attribute`,
       });
+    const { checks } = check.value;
+    for (const { path, message } of checks === undefined ? [] : checkFaults(checks, check.value))
+      check.issues.push({ code: 'custom', input: checks, path: ['checks', ...path], message });
     const { rig, rigPreset: preset, changeS } = check.value;
     if (preset !== undefined && preset.kind !== rig)
       check.issues.push({

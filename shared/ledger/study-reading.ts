@@ -6,6 +6,7 @@ import type { AnswerContent } from '../session/answer-leaf.ts';
 import { sessionsInRecord } from '../session/read-record.ts';
 import { type RevealedKey, revealedKey } from '../session/revealed-key.ts';
 import type { SessionState } from '../session/state.ts';
+import { trialKind } from '../session/trial-kinds.ts';
 import type { Entry } from './chain.ts';
 import type { PublicationParts, PublishedDraw } from './publication-parts.ts';
 
@@ -29,6 +30,8 @@ const draw = z.strictObject({
   firstSide: z.union([z.literal(0), z.literal(1)]),
   specimens: z.tuple([z.int(), z.int()]),
   truths: z.array(z.string()),
+  kinds: z.array(trialKind).optional(),
+  checkSpecimens: z.array(z.int()).optional(),
   separate: z.strictObject({ specimen: z.int(), deals: z.array(z.int()).optional() }).optional(),
 });
 

@@ -2,6 +2,7 @@ import { z } from 'zod';
 import { cautions, stepKinds, voidReasons } from '../contracts/proctor-live.ts';
 import { rigPreset } from '../protocol/rig-preset.ts';
 import { waysToRun } from '../protocol/ways-to-run.ts';
+import { checkShape } from './trial-kinds.ts';
 
 // What a session puts on its study's record. Payload shapes are permanent: a change means a new version.
 
@@ -15,8 +16,11 @@ export const sessionPlan = z.strictObject({
   method: z.string(),
   methodSettings: z.array(z.string()).optional(),
   attribute: z.string().optional(),
+  /** Check trials included: nothing in a session tells them apart. */
   trials: z.int(),
   spares: z.int(),
+  /** How many of the trials are check trials; left out where there are none. */
+  checks: checkShape.optional(),
   rig: z.enum(['loudspeaker', 'line', 'headphone']),
   /** How a change is made, as the protocol froze it; left out where it names no preset. */
   rigPreset: rigPreset.optional(),

@@ -27,6 +27,14 @@ export function excerptOf(state: SessionState, trial: number): number {
   return replaced.excerpt;
 }
 
+/** The registered trial that a trial is or, as a spare, stands for. */
+export function standsFor({ plan, ended }: Pick<SessionState, 'plan' | 'ended'>, trial: number): number {
+  if (trial <= plan.trials) return trial;
+  const replaced = ended.filter(({ outcome }) => outcome === 'void')[trial - plan.trials - 1];
+  if (replaced === undefined) throw new RangeError(`trial ${trial} stands for no void`);
+  return standsFor({ plan, ended }, replaced.trial);
+}
+
 export const activeSeats = (state: SessionState) => state.seats.filter((seat) => !seat.left);
 
 /** Seats whose answer the open trial still waits for. */

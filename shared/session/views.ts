@@ -136,6 +136,7 @@ function trialFor(state: SessionState, method: Method, context: ProctorContext):
   if (trial === null) return null;
   const mayStartAt = listeningMayStartAt(trial, plan, context.now);
   const endsAt = trial.stage === 'change' ? mayStartAt : trial.endsAt;
+  const excerpt = plan.programme[trial.excerpt];
   return {
     number: trial.trial,
     of: trialsInAll(state),
@@ -144,7 +145,9 @@ function trialFor(state: SessionState, method: Method, context: ProctorContext):
     presentationNumber: trial.presentation + 1,
     presentations: presentationsOf(method, trial.trial).length,
     code: context.code,
-    excerpt: plan.programme[trial.excerpt]?.title ?? '',
+    excerpt: excerpt?.title ?? '',
+    excerptStart: excerpt?.start ?? '',
+    excerptS: Math.round((excerpt?.lengthMs ?? 0) / 1000),
     stepsDone: [...trial.stepsDone],
     step: state.paused === null ? nextStep(trial, plan) : null,
     stepEndsAt: state.paused === null ? stepEndsAt(trial, plan) : null,

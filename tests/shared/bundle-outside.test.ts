@@ -9,7 +9,8 @@ import { nextEntry } from '#shared/ledger/chain.ts';
 import { bytesToHex, fileDigest, utf8ToBytes } from '#shared/ledger/digest.ts';
 import { answerLeaf, contributionCommitment } from '#shared/session/answer-leaf.ts';
 import { drawSecretCommitment } from '#shared/session/commitments.ts';
-import { drawSeed, fairNumber } from '#shared/session/draw.ts';
+import { drawSeed } from '#shared/session/draw.ts';
+import { fairNumber } from '#shared/session/fair-number.ts';
 import { bundleFiles, bundleSource, stampedSource } from '../support/bundle.ts';
 import { closedStudy } from '../support/closed-study.ts';
 

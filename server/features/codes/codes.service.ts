@@ -1,5 +1,6 @@
 import type { CodeSheet, CodesStatus } from '#shared/contracts/codes.ts';
 import { Problem } from '#shared/problem.ts';
+import { codedCables } from '#shared/protocol/protocol.ts';
 import { studyEvents } from '#shared/session/study-events.ts';
 import { commitCodeKey, openForHolder, type SpecimenToCode } from '../../blind/index.ts';
 import { type Tx, withTransaction } from '../../db/transaction.ts';
@@ -29,11 +30,11 @@ function requireHolder(study: Study, who: Asker): void {
     throw new Problem('not-allowed', 'Only the code holder of this study does this.');
 }
 
+/** Check cables are sleeved and coded with the others, so that nothing tells them apart. */
 function specimensOf(study: Study): SpecimenToCode[] {
-  const [first, second] = protocolOf(study).cables;
-  const rows = (cable: 0 | 1) =>
-    (cable === 0 ? first : second).specimens.map(({ id, serial }) => ({ specimen: id, serial, cable }));
-  return [...rows(0), ...rows(1)];
+  return codedCables(protocolOf(study)).flatMap(({ specimens }, cable) =>
+    specimens.map(({ id, serial }) => ({ specimen: id, serial, cable })),
+  );
 }
 
 async function statusOf(tx: Tx, study: Study, who: Asker): Promise<CodesStatus> {
@@ -49,7 +50,10 @@ async function statusOf(tx: Tx, study: Study, who: Asker): Promise<CodesStatus> 
     title: study.title,
     isSealed: study.state !== 'draft',
     state: study.codesState,
-    specimenCount: study.draft.cables.reduce((sum, { specimenIds }) => sum + specimenIds.length, 0),
+    specimenCount: [...study.draft.cables, ...(study.draft.checks?.steps ?? [])].reduce(
+      (sum, { specimenIds }) => sum + specimenIds.length,
+      0,
+    ),
     codeHolder: names.get(study.codeHolderId) ?? 'unknown',
     youHoldCodes: study.codeHolderId === who.userId,
     commitment: committed === undefined ? null : String(committed.payload.commitment),
@@ -93,13 +97,13 @@ export function openCodes(deps: Deps, where: Where, who: Asker, purpose: 'labels
     const payload = { by: who.userId, purpose };
     await append(tx, deps, study.id, [{ kind: 'code-key-opened', at: clock.now(), payload, session: null }]);
     const rows = await openForHolder(tx, study.id, who.userId);
-    const { cables } = protocolOf(study);
+    const cables = codedCables(protocolOf(study));
     return {
       title: study.title,
       rows: await Promise.all(
         rows.map(async ({ code, serial, cable }) => {
           const scanText = `${scanPrefix}${code}`;
-          return { code, cable: cables[cable === 0 ? 0 : 1].name, serial, scanText, qrSvg: await qrSvg(scanText) };
+          return { code, cable: cables[cable]?.name ?? '', serial, scanText, qrSvg: await qrSvg(scanText) };
         }),
       ),
     };

@@ -1,5 +1,6 @@
 import type { Report } from '#shared/contracts/reports.ts';
 import type { SignedHead } from '#shared/contracts/signed-heads.ts';
+import { resultsByExcerpt } from '#shared/findings/by-excerpt.ts';
 import type { Finding } from '#shared/findings/finding.ts';
 import type { Entry } from '#shared/ledger/chain.ts';
 import { sealedVersions } from '#shared/ledger/protocol-versions.ts';
@@ -8,11 +9,12 @@ import { methodOf, type RegisteredResult } from '#shared/methods/methods.ts';
 import { analysisFacts } from '#shared/protocol/analysis-facts.ts';
 import { presetFacts } from '#shared/protocol/preset-facts.ts';
 import type { Protocol } from '#shared/protocol/protocol.ts';
+import { checksWords } from '#shared/protocol/protocol-checks.ts';
 import { protocolDifferences } from '#shared/protocol/protocol-differences.ts';
 import { waysFacts } from '#shared/protocol/ways-to-run.ts';
 import type { AnswerContent } from '#shared/session/answer-leaf.ts';
 import type { BlindingRung } from '#shared/session/blinding-rung.ts';
-import { countedTrials, revealedDraw } from '#shared/session/counted-trials.ts';
+import { countedTrials, type LockedTrial, revealedDraw } from '#shared/session/counted-trials.ts';
 import type { Draw } from '#shared/session/draw.ts';
 import { truthOf } from '#shared/session/fitting.ts';
 import { listenersToldApart } from '#shared/session/listeners-told-apart.ts';
@@ -101,6 +103,17 @@ function sessionView(source: ReportSource, state: SessionState, key: RevealedKey
   };
 }
 
+/** Every excerpt of the programme, whether or not it was played. */
+function byExcerptOf(protocol: Protocol, counted: readonly LockedTrial[]): Report['byExcerpt'] {
+  const { programme } = protocol.conduct;
+  const rates = methodOf(protocol.method).trials.rates(namesOf(protocol));
+  return resultsByExcerpt(counted, rates, programme.length).map(({ excerpt, trials, rates: found }) => ({
+    title: programme[excerpt]?.title ?? '',
+    trials,
+    rates: [...found],
+  }));
+}
+
 function voidsOf(entries: readonly Entry[]): Report['voids'] {
   return entries
     .filter(({ kind }) => kind === 'trial-voided')
@@ -130,7 +143,7 @@ function missingOf(states: readonly SessionState[]): Report['missing'] {
   );
 }
 
-function factsOf({ design, conduct, analysis, cables, method }: Protocol): Report['protocol']['facts'] {
+function factsOf({ design, conduct, analysis, cables, method, checks }: Protocol): Report['protocol']['facts'] {
   const specimens = cables.map(({ name, specimens: own }) => `${name}: ${own.map(({ serial }) => serial).join(', ')}`);
   return [
     { label: 'Method', value: methodOf(method).name },
@@ -141,6 +154,7 @@ function factsOf({ design, conduct, analysis, cables, method }: Protocol): Repor
     ...waysFacts(design),
     ...(design.samplingFrame === undefined ? [] : [{ label: 'Listeners are drawn from', value: design.samplingFrame }]),
     { label: 'Trials per session', value: `${design.trials}, ${design.spares} spare` },
+    ...(checks === undefined ? [] : [{ label: 'Check trials', value: checksWords(checks, cables) }]),
     { label: 'Significance level', value: analysis.alpha },
     ...analysisFacts(analysis),
     { label: 'Change', value: `${conduct.changeS} s, real or sham` },
@@ -176,6 +190,7 @@ export function reportView(source: ReportSource): Report {
   const { study, protocol, entries, states, answers, result, finding, checks, rung, closing, heads } = source;
   const method = methodOf(protocol.method);
   const key = revealedKey.parse(entries.find(({ kind }) => kind === 'key-revealed')?.payload);
+  const counted = countedTrials(method, states, key, answers);
   const sealing = sealedVersions(entries).at(-1);
   const closedAt = entries.find(({ kind }) => kind === 'study-closed')?.at;
   const head = entries.at(-1);
@@ -191,7 +206,8 @@ export function reportView(source: ReportSource): Report {
     endedEarly: closing.complete ? null : closing.reason,
     finding,
     result,
-    nullDistribution: method.nullDistribution(countedTrials(method, states, key, answers)),
+    nullDistribution: method.nullDistribution(counted),
+    byExcerpt: byExcerptOf(protocol, counted),
     rung: { name: rung.name, why: rung.why },
     conditions: conditionsOf(source),
     flow: flowOf(source),

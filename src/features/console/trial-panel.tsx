@@ -3,6 +3,7 @@ import { CableRun } from '../../ui/cable-run.tsx';
 import { Countdown } from '../../ui/countdown.tsx';
 import { Sleeve } from '../../ui/sleeve.tsx';
 import { startsListening, stepWords, wordsAfter } from './console-words.ts';
+import { PlayLine } from './play-line.tsx';
 
 type Trial = NonNullable<ProctorView['trial']>;
 type Words = { title: string; detail: string };
@@ -45,6 +46,7 @@ export function TrialPanel({ trial, view }: { trial: Trial; view: ProctorView })
         <strong className="text-ink">{trial.familiarisation ? 'Familiarisation' : `Trial ${trial.number}`}</strong>
         {trial.familiarisation ? ', not counted' : ` of ${trial.of}`} · {placeOf(trial, view)}
       </p>
+      <PlayLine trial={trial} />
       <CableRun className="-mx-5 flex min-h-32 flex-1 items-center lg:-mx-11">
         {trial.code === null || view.paused !== null ? null : (
           <div data-code={trial.code} className="w-full px-5">

@@ -6,6 +6,7 @@ import { FindingHead } from './finding-head.tsx';
 import { ReportChecks } from './report-checks.tsx';
 import { ReportConditions } from './report-conditions.tsx';
 import { ReportDistribution } from './report-distribution.tsx';
+import { ReportExcerpts } from './report-excerpts.tsx';
 import { ReportFigures } from './report-figures.tsx';
 import { ReportFlow } from './report-flow.tsx';
 import { ReportHeads } from './report-heads.tsx';
@@ -46,6 +47,7 @@ export function ReportView({ report, back, actions, proofs }: ReportViewProps) {
       </div>
       <ReportDistribution nullDistribution={report.nullDistribution} distribution={portrait.distribution} />
       <ReportListeners listeners={portrait.listeners} />
+      <ReportExcerpts byExcerpt={report.byExcerpt} />
       <ReportChecks checks={portrait.checks} />
       <ReportFlow flow={report.flow} missingWords={result.missingAnswers} />
       <ReportIncidents
