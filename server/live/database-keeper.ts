@@ -4,7 +4,7 @@ import { sessionPlanOf } from '#shared/protocol/protocol.ts';
 import { contributionsOf } from '#shared/session/counted-trials.ts';
 import type { SessionPlan } from '#shared/session/events.ts';
 import { presentationNow } from '#shared/session/progress.ts';
-import { commitDraw, cueFor } from '../blind/index.ts';
+import { commitDraw, cueFor, truthPractised } from '../blind/index.ts';
 import { type Tx, withTransaction } from '../db/transaction.ts';
 import type { Deps } from '../deps.ts';
 import { labelOf, noteSeated } from '../features/attendances/attendances.store.ts';
@@ -31,9 +31,19 @@ export function databaseKeeper(deps: Deps): Keeper {
         method,
         state,
         trial: state.trial.trial,
+        practice: state.trial.practice,
         presentation,
       });
     },
+    truthPractised: ({ state, session, method }, practice) =>
+      truthPractised(deps.db.manager, {
+        studyId: session.studyId,
+        sessionId: session.id,
+        contributions: contributionsOf(state),
+        method,
+        plan: state.plan,
+        practice,
+      }),
   };
 }
 

@@ -1,5 +1,6 @@
 import type { Entry } from '#shared/ledger/chain.ts';
 import type { SessionEvent } from '#shared/session/events.ts';
+import type { Practice } from '#shared/session/practice.ts';
 import type { Answer } from '../features/sessions/answer.entity.ts';
 import type { Seat } from '../features/sessions/seat.entity.ts';
 import type { SessionMemory } from './session-memory.ts';
@@ -27,4 +28,6 @@ export type Keeper = {
   keep<T>(work: (keeping: Keeping) => Promise<T>): Promise<T>;
   /** The blind code of the presentation that is being fitted or heard, for the proctor alone. */
   codeToFit(memory: SessionMemory): Promise<string | null>;
+  /** What was right in a practice trial that has ended, for its phones. */
+  truthPractised(memory: SessionMemory, practice: Practice): Promise<string>;
 };

@@ -2,6 +2,7 @@ import { z } from 'zod';
 import { cautions, stepKinds, voidReasons } from '../contracts/proctor-live.ts';
 import { rigPreset } from '../protocol/rig-preset.ts';
 import { waysToRun } from '../protocol/ways-to-run.ts';
+import { mostPractice, practice } from './practice.ts';
 import { checkShape } from './trial-kinds.ts';
 
 // What a session puts on its study's record. Payload shapes are permanent: a change means a new version.
@@ -9,7 +10,9 @@ import { checkShape } from './trial-kinds.ts';
 const session = z.int().min(1);
 const seat = z.string();
 const hex32 = z.string().regex(/^[0-9a-f]{64}$/);
-const trial = z.int().min(0);
+/** Below 0 for practice. */
+const trial = z.int().min(-mostPractice);
+const counted = z.int().min(0);
 
 /** What a session takes from the sealed protocol; times in milliseconds. Trial 0 is the familiarisation trial. */
 export const sessionPlan = z.strictObject({
@@ -54,7 +57,11 @@ export const sessionEvents = {
   'contribution-revealed': z.strictObject({ session, seat, value: hex32 }),
   'contribution-dropped': z.strictObject({ session, seat }),
   'draw-fixed': z.strictObject({ session, contributors: z.array(seat) }),
-  'trial-opened': z.strictObject({ session, trial, excerpt: z.int(), seats: z.array(seat) }),
+  'trial-opened': z.strictObject({ session, trial: counted, excerpt: z.int(), seats: z.array(seat) }),
+  /** A trial that never counts; the trial of its steps and presentations is its number below 0. */
+  'practice-opened': z.strictObject({ session, ...practice.shape, excerpt: z.int(), seats: z.array(seat) }),
+  /** How many answered; what they answered is kept nowhere. */
+  'practice-ended': z.strictObject({ session, number: practice.shape.number, answered: z.int().min(0), of: z.int() }),
   'step-confirmed': z.strictObject({ session, trial, presentation: z.int(), step: z.enum(stepKinds) }),
   'listening-started': z.strictObject({
     session,
@@ -66,7 +73,7 @@ export const sessionEvents = {
   'listening-ended': z.strictObject({ session, trial, presentation: z.int() }),
   'trial-locked': z.strictObject({
     session,
-    trial,
+    trial: counted,
     reason: z.enum(['all-in', 'window-ended']),
     leaves: z.array(z.strictObject({ seat, leaf: hex32 })),
     missing: z.array(seat),
@@ -78,7 +85,7 @@ export const sessionEvents = {
     note: z.string(),
     answersHeld: z.int(),
   }),
-  'answer-late': z.strictObject({ session, trial, seat, leaf: hex32 }),
+  'answer-late': z.strictObject({ session, trial: counted, seat, leaf: hex32 }),
   paused: z.strictObject({ session, reason: z.enum(['break', 'too-loud', 'trouble']), seat: seat.nullable() }),
   resumed: z.strictObject({ session }),
   'server-restarted': z.strictObject({ session }),

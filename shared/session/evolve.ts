@@ -1,6 +1,7 @@
 import type { Method } from '../methods/method.ts';
 import { stepKindsOf } from './change-steps.ts';
 import type { SessionEvent } from './events.ts';
+import { practiceTrial } from './practice.ts';
 import { presentationsOf } from './progress.ts';
 import type { EndedTrial, OpenTrial, SessionState } from './state.ts';
 import { revealMs } from './state.ts';
@@ -24,8 +25,14 @@ function endTrial(state: SessionState, ended: Omit<EndedTrial, 'excerpt' | 'seat
 function afterListening(state: SessionState, trial: OpenTrial, at: number, method: Method): Folded {
   const isLast = trial.presentation + 1 >= presentationsOf(method, trial.trial).length;
   if (!isLast) return { ...state, trial: startChange(trial, trial.presentation + 1, at) };
-  if (trial.trial === 0) return { ...state, trial: null, familiarised: true };
+  if (trial.trial === 0) return { ...state, trial: null, familiarisations: state.familiarisations + 1 };
   return { ...state, trial: { ...trial, stage: 'answering', endsAt: at + state.plan.answerMs } };
+}
+
+function openedBy(event: Extract<SessionEvent, { kind: 'trial-opened' | 'practice-opened' }>) {
+  if (event.kind === 'trial-opened') return { trial: event.payload.trial, practice: null };
+  const { number, form, step } = event.payload;
+  return { trial: practiceTrial({ number }), practice: { number, form, step } };
 }
 
 function pauseTrial(state: SessionState, at: number): number | null {
@@ -72,11 +79,13 @@ function fold(state: SessionState, event: SessionEvent, method: Method): Folded 
       };
     case 'draw-fixed':
       return { ...state, phase: 'running', revealEndsAt: null };
-    case 'trial-opened': {
-      const { trial, excerpt, seats } = event.payload;
-      const opened = { trial, excerpt, seats, longChanges: 0, answers: [] };
+    case 'trial-opened':
+    case 'practice-opened': {
+      const { excerpt, seats } = event.payload;
+      const opened = { ...openedBy(event), excerpt, seats, longChanges: 0, answers: [] };
       return {
         ...state,
+        practised: opened.practice === null ? state.practised : [...state.practised, opened.practice],
         trial: {
           ...opened,
           presentation: 0,
@@ -114,9 +123,11 @@ function fold(state: SessionState, event: SessionEvent, method: Method): Folded 
     }
     case 'trial-voided': {
       const { trial, reason } = event.payload;
-      if (trial === 0) return { ...state, trial: null, paused: null };
+      if (trial <= 0) return { ...state, trial: null, paused: null };
       return endTrial(state, { trial, outcome: 'void', missing: [], voidReason: reason });
     }
+    case 'practice-ended':
+      return { ...state, trial: null, paused: null };
     case 'answer-late': {
       const { trial, seat } = event.payload;
       return { ...state, late: [...state.late, { trial, seat }] };
@@ -159,7 +170,8 @@ export function evolve(state: SessionState | null, event: SessionEvent, method: 
       cautionsConfirmed: false,
       seats: [],
       revealEndsAt: null,
-      familiarised: false,
+      familiarisations: 0,
+      practised: [],
       paused: null,
       trial: null,
       ended: [],

@@ -1,5 +1,6 @@
 import type { ChangeStep, VoidReason } from '../contracts/proctor-live.ts';
 import type { SessionPlan } from './events.ts';
+import type { Practice } from './practice.ts';
 
 // The state of a session has no code, no cable, no draw and no correctness: nothing in it needs stripping.
 
@@ -15,8 +16,10 @@ export type SeatState = {
 };
 
 export type OpenTrial = {
-  /** From 1; 0 is the familiarisation trial. */
+  /** From 1; 0 is the familiarisation trial, below 0 are practice trials. */
   readonly trial: number;
+  /** What is practised, or null in any other trial. */
+  readonly practice: Practice | null;
   readonly excerpt: number;
   /** The listeners who take part: those seated when it opened. */
   readonly seats: readonly string[];
@@ -55,7 +58,10 @@ export type SessionState = {
   readonly cautionsConfirmed: boolean;
   readonly seats: readonly SeatState[];
   readonly revealEndsAt: number | null;
-  readonly familiarised: boolean;
+  /** How often the labelled cables have been heard through. */
+  readonly familiarisations: number;
+  /** The practice trials so far, in order. */
+  readonly practised: readonly Practice[];
   readonly paused: {
     readonly reason: 'break' | 'too-loud' | 'trouble';
     readonly seat: string | null;

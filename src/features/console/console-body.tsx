@@ -58,7 +58,11 @@ function Scenery({ view, actions, back }: SceneryProps) {
     case 'revealing':
       return <Revealing view={view} />;
     case 'running':
-      return view.trial === null ? <BetweenTrials view={view} /> : <TrialPanel trial={view.trial} view={view} />;
+      return view.trial === null ? (
+        <BetweenTrials view={view} actions={actions} />
+      ) : (
+        <TrialPanel trial={view.trial} view={view} />
+      );
     case 'finished':
     case 'abandoned':
       return <Ended view={view} back={back} />;
