@@ -7,6 +7,8 @@ import { Audit } from './features/audits/audit.entity.ts';
 import { Cable } from './features/cables/cable.entity.ts';
 import { Specimen } from './features/cables/specimen.entity.ts';
 import { Invitation } from './features/invitations/invitation.entity.ts';
+import { LevelDuty } from './features/levels/level-duty.entity.ts';
+import { Measurement } from './features/measurements/measurement.entity.ts';
 import { Membership } from './features/organisations/membership.entity.ts';
 import { Organisation } from './features/organisations/organisation.entity.ts';
 import { PastRole } from './features/organisations/past-role.entity.ts';
@@ -37,6 +39,7 @@ export const entities = [
   WebSession,
   Cable,
   Specimen,
+  Measurement,
   Study,
   ProtocolVersion,
   RecordEntry,
@@ -60,5 +63,6 @@ export const entities = [
   PastRole,
   Listener,
   Attendance,
+  LevelDuty,
   RigPreset,
 ];

@@ -6,6 +6,7 @@ import { Listener } from '../features/attendances/listener.entity.ts';
 import { Cable } from '../features/cables/cable.entity.ts';
 import { Specimen } from '../features/cables/specimen.entity.ts';
 import { Invitation } from '../features/invitations/invitation.entity.ts';
+import { Measurement } from '../features/measurements/measurement.entity.ts';
 import { Membership } from '../features/organisations/membership.entity.ts';
 import { Organisation } from '../features/organisations/organisation.entity.ts';
 import { PastRole } from '../features/organisations/past-role.entity.ts';
@@ -29,7 +30,10 @@ export async function forgetDemo(deps: Deps, organisationId: string): Promise<vo
     await withdraw(deps, { organisationId, id: studyId }, manager?.userId ?? organisationId, cutShort);
   return withTransaction(deps.db, async (tx) => {
     const cables = await tx.findBy(Cable, { organisationId });
-    if (cables.length > 0) await tx.delete(Specimen, { cableId: In(cables.map(({ id }) => id)) });
+    const ofCables = { cableId: In(cables.map(({ id }) => id)) };
+    const specimens = await tx.findBy(Specimen, ofCables);
+    await tx.delete(Measurement, { specimenId: In(specimens.map(({ id }) => id)) });
+    await tx.delete(Specimen, ofCables);
     await tx.delete(Cable, { organisationId });
     await tx.delete(RigPreset, { organisationId });
     await tx.delete(OutgoingMail, { organisationId });

@@ -2,6 +2,7 @@ import type { StudyDraft } from '#shared/contracts/studies.ts';
 import { withTransaction } from '../db/transaction.ts';
 import type { Deps } from '../deps.ts';
 import { addSpecimen, createCable, getCable } from '../features/cables/cables.service.ts';
+import { addMeasurement } from '../features/measurements/measurements.service.ts';
 import { Membership } from '../features/organisations/membership.entity.ts';
 import { Organisation } from '../features/organisations/organisation.entity.ts';
 import { createPreset } from '../features/rig-presets/rig-presets.service.ts';
@@ -11,7 +12,9 @@ import { createStudy } from '../features/studies/studies.service.ts';
 import { studiesOf } from '../features/studies/studies.store.ts';
 import { hashPassword } from '../features/users/passwords.ts';
 import { User } from '../features/users/user.entity.ts';
+import type { Caller } from '../http/access.ts';
 import { Sittings } from '../live/sittings.ts';
+import { demoMeasurements } from './demo-measurements.ts';
 import { demoPeople } from './demo-people.ts';
 import {
   benchPreset,
@@ -49,12 +52,16 @@ async function makePeople(deps: Deps, organisationId: string): Promise<People> {
   return Object.fromEntries(made.map(({ key, id }) => [key, id])) as People;
 }
 
-async function makeCables(deps: Deps, organisationId: string): Promise<StudyDraft['cables']> {
+async function makeCables(deps: Deps, organisationId: string, userId: string): Promise<StudyDraft['cables']> {
+  const who: Caller = { organisationId, userId, role: 'manager' };
   const chosen: StudyDraft['cables'][number][] = [];
   for (const { draft, serials } of demoCables) {
-    const { id } = await createCable(deps, organisationId, draft);
-    for (const serial of serials) await addSpecimen(deps, organisationId, id, { serial, note: '' });
-    const { specimens } = await getCable(deps, organisationId, id);
+    const { id } = await createCable(deps, who, draft);
+    for (const serial of serials) await addSpecimen(deps, who, id, { serial, note: '' });
+    const { specimens } = await getCable(deps, who, id);
+    for (const [index, specimen] of specimens.entries())
+      for (const measured of demoMeasurements(draft, 0.012 + 0.009 * index))
+        await addMeasurement(deps, who, { id, specimenId: specimen.id }, { draft: measured, upload: null });
     chosen.push({ cableId: id, specimenIds: specimens.map((specimen) => specimen.id) });
   }
   const [first, second] = chosen;
@@ -149,7 +156,7 @@ export async function loadDemo(deps: Deps): Promise<void> {
   const past: Deps = { ...deps, clock };
   const organisationId = deps.random.id();
   const people = await makePeople(past, organisationId);
-  const cables = await makeCables(past, organisationId);
+  const cables = await makeCables(past, organisationId, people.manager);
   const codeHolderId = people.codeHolder;
   await createPreset(past, organisationId, benchPreset);
   await runPublishedStudy(past, clock, organisationId, people, { ...publishedStudy, cables, codeHolderId });

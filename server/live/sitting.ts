@@ -141,6 +141,11 @@ export class Sitting {
       throw new Problem('wrong-phase', `A session can be ${done} until its seating opens.`);
   }
 
+  /** What somebody beside the console does, decided on the session as it then stands. */
+  decideOn(make: (memory: SessionMemory) => Promise<SessionCommand>): Promise<void> {
+    return this.#inTurn(async () => this.#do(await make(this.#memory)));
+  }
+
   noteRestart(): Promise<void> {
     return this.#inTurn(() => this.#do({ kind: 'note-restart' }));
   }

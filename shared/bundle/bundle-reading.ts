@@ -93,7 +93,7 @@ export class BundleReading {
 
 /** Every name that a bundle with these heads and keys may hold. */
 function knownNames(heads: z.output<typeof headsShape>): Set<string> {
-  const tables = ['sessions', 'trials', 'answers', 'listeners', 'result'].map((name) => `${name}.csv`);
+  const tables = ['sessions', 'trials', 'answers', 'listeners', 'result', 'cues'].map((name) => `${name}.csv`);
   return new Set([
     ...Object.values(fileNames),
     ...tables,

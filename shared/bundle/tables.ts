@@ -2,8 +2,10 @@ import Papa from 'papaparse';
 import type { Entry } from '../ledger/chain.ts';
 import { answerName } from '../ledger/publication-parts.ts';
 import type { StudyReading } from '../ledger/study-reading.ts';
+import { levelsTables } from '../levels/levels-table.ts';
 import { truthOf } from '../session/fitting.ts';
 import type { EndedTrial, SessionState } from '../session/state.ts';
+import { cuesTable } from './cues-table.ts';
 
 /** A column with what it means; its name stands in the first row of the file. */
 export type TableField = {
@@ -13,7 +15,7 @@ export type TableField = {
 };
 
 export type Table = {
-  readonly name: 'sessions' | 'trials' | 'answers' | 'listeners' | 'result';
+  readonly name: 'sessions' | 'trials' | 'answers' | 'listeners' | 'result' | 'levels' | 'cues';
   readonly title: string;
   readonly fields: readonly TableField[];
   readonly key: readonly string[];
@@ -34,7 +36,15 @@ const listener = field('listener', 'string', 'Label of the listener in this stud
 
 /** Every table of a bundle, computed from the record and what it reveals, so that it can be compared byte for byte. */
 export function tablesOf(study: StudyReading): Table[] {
-  return [sessionsTable(study), trialsTable(study), answersTable(study), listenersTable(study), resultTable(study)];
+  return [
+    sessionsTable(study),
+    trialsTable(study),
+    answersTable(study),
+    listenersTable(study),
+    resultTable(study),
+    ...levelsTables(study),
+    ...cuesTable(study),
+  ];
 }
 
 /**

@@ -43,7 +43,10 @@ export type Endpoint<
 };
 
 /** The reply of an endpoint that is a download: text is sent as UTF-8. */
-export const savedFile = z.strictObject({ name: z.string(), bytes: z.instanceof(Uint8Array) });
+export const savedFile = z.strictObject({
+  name: z.string(),
+  bytes: z.custom<Uint8Array>((value) => value instanceof Uint8Array),
+});
 
 /** Identity; fixes the types of one contract so that server and client share it. */
 export function endpoint<P extends Schema, Q extends Schema, B extends Schema, R extends Schema>(

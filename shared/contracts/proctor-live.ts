@@ -1,4 +1,6 @@
 import { z } from 'zod';
+import { levelChecks } from '../levels/measured-levels.ts';
+import { levelHandlings } from '../levels/registered-levels.ts';
 import { sessionPhases } from './sessions.ts';
 
 const time = z.int();
@@ -47,6 +49,11 @@ export const proctorCommand = z.discriminatedUnion('kind', [
     kind: z.literal('record-deviation'),
     ...version,
     text: say(1000).min(3, 'Say what differed and why'),
+  }),
+  z.strictObject({
+    kind: z.literal('skip-levels'),
+    ...version,
+    reason: say(500).min(3, 'Say why they are not measured'),
   }),
   z.strictObject({ kind: z.literal('finish'), ...version }),
   z.strictObject({ kind: z.literal('abandon'), ...version, reason: say(500).min(3, 'Say why the session ends here') }),
@@ -128,6 +135,17 @@ export const proctorView = z.strictObject({
       late: z.boolean(),
     }),
   ),
+  /** How the levels stand, never a figure; null where the protocol registers none. */
+  levels: z
+    .strictObject({
+      handling: z.enum(levelHandlings),
+      /** Null where a measurement was left out. */
+      checks: z.array(z.strictObject({ check: z.enum(levelChecks), at: time, isIn: z.boolean().nullable() })),
+      due: z.enum(levelChecks).nullable(),
+      /** Why the session cannot start as they are. */
+      bar: z.string().nullable(),
+    })
+    .nullable(),
   record: z.strictObject({ entries: z.int(), sessionEntries: z.int() }),
   demo: z.boolean(),
   /** A run with invented codes, on no record. */

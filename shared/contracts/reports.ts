@@ -1,5 +1,7 @@
 import { z } from 'zod';
+import { portrayedCueAudit } from '../cue-audit/portrayed-cue-audit.ts';
 import { finding } from '../findings/finding.ts';
+import { levelReport } from '../levels/level-report.ts';
 import { registeredResult } from '../methods/methods.ts';
 import { endpoint } from './endpoint.ts';
 import { organisationParams, thingParams } from './organisation-params.ts';
@@ -41,9 +43,12 @@ export const report = z.strictObject({
   nullDistribution: z.array(chanceBar),
   /** Exploratory: counts and limits, never a p. */
   byExcerpt: z.array(z.strictObject({ title: z.string(), trials: z.int(), rates: z.array(countedRate) })),
+  cueAudit: portrayedCueAudit,
   rung: z.strictObject({ name: z.string(), why: z.string() }),
   /** The gap between presentations and the blinding rung, each in a sentence: part of the finding’s first lines. */
   conditions: z.array(z.string()),
+  /** The level match at the load; null where the protocol registers no measurement. */
+  levels: levelReport.nullable(),
   flow: z.strictObject({
     sessionsPlanned: z.int(),
     sessionsOpened: z.int(),

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { registeredLevels } from '../levels/registered-levels.ts';
 import { methodIds, methods } from '../methods/methods.ts';
 import { leastChangeS, rigPreset, rigs } from '../protocol/rig-preset.ts';
 import { faultsOfWays } from '../protocol/ways-to-run.ts';
@@ -68,6 +69,8 @@ export const studyDraft = z
     changeS: whole(3, 300, 'seconds'),
     answerS: whole(5, 300, 'seconds'),
     confidence: z.boolean(),
+    /** How level at the load is handled and measured; left out where it is not. */
+    levels: registeredLevels.optional(),
     /** Whether what comes again within a trial is fitted from specimens of its own; left out for no. */
     separateSpecimens: z.boolean().optional(),
     codeHolderId: z.uuid('Choose the code holder'),

@@ -1,6 +1,7 @@
 import { courseModifiers, type Finding, type FindingContext, scopeOf, times } from './finding.ts';
 import { type FindingRow, type Found, firstRow } from './finding-row.ts';
 import { equationOfP } from './format-probability.ts';
+import { levelClaim, levelModifiers } from './level-sentences.ts';
 import type { ResultFrame } from './result-frame.ts';
 import { checkModifiers, type SessionCheck } from './session-checks.ts';
 
@@ -77,7 +78,6 @@ function hints({ byListener, listeners }: DifferenceResult): string[] {
   return [`Exploratory: ${hinting.join(', ')} scored above guessing; this needs a new pre-registered test.`];
 }
 
-const levelUnknown = 'Level at the load was not recorded in Fairlead; loudness may explain a difference.';
 /** What a difference found says of listeners in general: nothing, unless row 8 allows it. */
 const framedBy = (row: string, { people }: DifferenceResult) =>
   (row === '2' || row === '3') && people?.isAboveGuessing === true ? people.samplingFrame : null;
@@ -114,7 +114,7 @@ function rowsOf<R extends DifferenceResult>(words: DifferenceWords<R>): readonly
         `A difference was detected, and it is small. ${subjectOf(found.result)} ${told(found)}; ${within(found.result)}${panel(found.result)}.`,
       modifiers: ({ result }) => [words.effect(result), ...namedListeners(result)],
       maySay: (found) =>
-        `In a registered blind test with ${times(found.result.listeners, 'listener')}, ${inside(subjectOf(found.result))} ${told(found)} (${test(found.result)}). The difference is small: ${within(found.result)}${panel(found.result)}. Level at the load was not recorded; loudness may explain the difference.`,
+        `In a registered blind test with ${times(found.result.listeners, 'listener')}, ${inside(subjectOf(found.result))} ${told(found)} (${test(found.result)}). The difference is small: ${within(found.result)}${panel(found.result)}. ${levelClaim(found.context.levels, 'the difference')}`,
     },
     {
       row: '2',
@@ -122,7 +122,7 @@ function rowsOf<R extends DifferenceResult>(words: DifferenceWords<R>): readonly
       headline: (found) => `${subjectOf(found.result)} ${told(found)}.`,
       modifiers: ({ result }) => [words.effect(result), ...marginOpen(result, words), ...namedListeners(result)],
       maySay: (found) =>
-        `In a registered blind test with ${times(found.result.listeners, 'listener')}, ${inside(subjectOf(found.result))} ${told(found)} (${test(found.result)}). Level at the load was not recorded; loudness may explain the difference.`,
+        `In a registered blind test with ${times(found.result.listeners, 'listener')}, ${inside(subjectOf(found.result))} ${told(found)} (${test(found.result)}). ${levelClaim(found.context.levels, 'the difference')}`,
     },
     {
       row: '4',
@@ -190,7 +190,7 @@ export function differenceFinding<R extends DifferenceResult>(
       ...body.modifiers,
       ...(body.row === '0' ? [] : checkModifiers(result.checks)),
       ...courseModifiers(result, { tooFew: 'trials', missing: result.missingAnswers }, context),
-      levelUnknown,
+      ...levelModifiers(context.levels, 'a difference'),
     ],
     scope: scopeOf(context, frame === null ? undefined : `listeners of whom these were a sample (${frame})`),
     mustNotSay: neverSaid(words.notShown, frame),

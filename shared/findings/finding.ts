@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import type { LevelsFound } from '../levels/levels-found.ts';
 import type { ResultFrame } from './result-frame.ts';
 
 /** The one sentence that a registered analysis comes to, and what may and may not be said of it. */
@@ -26,6 +27,8 @@ export type FindingContext = {
   };
   /** Why the study was closed before its registered number, or null. */
   readonly endedEarly: string | null;
+  /** How the cables matched in level; left out where the protocol registers no measurement. */
+  readonly levels?: LevelsFound | undefined;
   /** What the result holds for: rig and chain, in the protocol's words. */
   readonly setting: string;
 };

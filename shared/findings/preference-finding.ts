@@ -9,6 +9,7 @@ import {
 } from './finding.ts';
 import { type FindingRow, type Found, firstRow } from './finding-row.ts';
 import { equationOfP, formatShare } from './format-probability.ts';
+import { levelClaim, levelModifiers } from './level-sentences.ts';
 import type { PreferenceResult } from './preference-result.ts';
 import { checkModifiers } from './session-checks.ts';
 
@@ -25,8 +26,6 @@ function countOf({ preferred, favours, decided, listeners, undecided, noPreferen
 function testOf({ p, alpha }: PreferenceResult): string {
   return `${equationOfP(Number(p.value), Number(alpha))}, two-sided level ${alpha}`;
 }
-
-const levelUnknown = 'Level at the load was not recorded in Fairlead; loudness may explain a preference.';
 
 /** How large the preference is; in a group trials are counted. */
 function effect({ estimates, preferred, favours, decided, listeners }: PreferenceResult, cables: Names): string {
@@ -100,7 +99,7 @@ const rows: readonly FindingRow<PreferenceResult>[] = [
       ...named(result, cables),
     ],
     maySay: (found) =>
-      `In a registered blind test, ${lowerFirst(favouredWords(found))} (${countOf(found.result)}; ${testOf(found.result)}). Level at the load was not recorded; loudness may explain the preference.`,
+      `In a registered blind test, ${lowerFirst(favouredWords(found))} (${countOf(found.result)}; ${testOf(found.result)}). ${levelClaim(found.context.levels, 'the preference')}`,
   },
   {
     row: '11',
@@ -158,7 +157,7 @@ export function preferenceFinding(result: PreferenceResult, context: FindingCont
       ...body.modifiers,
       ...(body.row === '0' ? [] : checkModifiers(result.checks)),
       ...courseModifiers(result, { tooFew: 'answers that prefer one', missing: result.missingAnswers }, context),
-      levelUnknown,
+      ...levelModifiers(context.levels, 'a preference'),
     ],
     scope: scopeOf(context),
     mustNotSay: [

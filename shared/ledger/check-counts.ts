@@ -1,3 +1,4 @@
+import { levelFaultsIn } from './check-levels.ts';
 import type { StudyReading } from './study-reading.ts';
 import type { Verdict } from './verify.ts';
 
@@ -41,6 +42,7 @@ export function checkRules(study: StudyReading): Verdict {
     );
   if (result.alpha !== analysis.alpha)
     faults.push('The result was held against another level than the registered one.');
+  faults.push(...levelFaultsIn(study));
   return {
     faults,
     held: `Nobody was left out, of ${heard.length} listeners; ${missing} missing answers ${analysis.missing}.`,

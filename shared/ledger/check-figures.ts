@@ -1,3 +1,4 @@
+import { runCueAudit } from '../cue-audit/run-cue-audit.ts';
 import { differentFigure } from '../findings/different-figure.ts';
 import { runRegistered } from '../methods/run-registered.ts';
 import { canonicalJson, type Json } from './canonical-json.ts';
@@ -12,8 +13,18 @@ export function checkFigures(study: StudyReading): Verdict {
     return { faults: ['The result is not the one on the record.'], held: '' };
   const recomputed = runRegistered(study.protocol(), study.sessions(), study.secrets(), study.answers());
   const place = differentFigure(recorded, recomputed as unknown as Json);
+  const faults = place === null ? [] : [`Recomputed, ${place} differs from the result on the record.`];
   return {
-    faults: place === null ? [] : [`Recomputed, ${place} differs from the result on the record.`],
+    faults: [...faults, ...cueFaults(study)],
     held: 'The registered analysis gives the recorded result: counts, fractions and p exactly, limits within 1e-9.',
   };
+}
+
+/** The cue audit, made again, is the one on the record; a study closed before there was one has none. */
+function cueFaults(study: StudyReading): string[] {
+  const recorded = study.payloadOf('result-recorded')?.cues;
+  if (recorded === undefined) return [];
+  const again = runCueAudit(study.protocol(), study.sessions(), study.entries(), study.secrets(), study.answers());
+  const place = differentFigure(recorded as Json, again as unknown as Json);
+  return place === null ? [] : [`Made again, ${place} of the cue audit differs from the record.`];
 }

@@ -64,6 +64,8 @@ export const abx: Method<ForcedChoiceResult> = {
     legend:
       'Filled rings are locked trials, struck ones are void; in the tables the answers that matched X are bold. What X was and what was answered was hidden from everybody until closing.',
     session: (firstSide, cables) => `A was ${cables[firstSide]}, B was ${cables[firstSide === 0 ? 1 : 0]}.`,
+    when: (answer) => `X was ${answer}`,
+    named: () => null,
     drawnHeader: 'X was',
     drawn: (truth) => truth,
     answeredHeader: ({ value }) => `Answered ${value}`,

@@ -89,6 +89,8 @@ export const directionalComparison: Method<ForcedChoiceResult> = {
     legend:
       'Filled rings are locked trials, struck ones are void; in the tables the answers in the registered direction are bold. Which cable came first and what was answered was hidden from everybody until closing.',
     session: (firstSide, cables) => `In the familiarisation ${cables[firstSide]} was heard first.`,
+    when: (answer, [first]) => `${first} came ${answer}`,
+    named: ([first]) => first,
     drawnHeader: 'Heard first',
     drawn: (truth, cables) => cables[truth === 'first' ? 0 : 1],
     answeredHeader: ({ short }) => `More in ${short}`,

@@ -80,6 +80,8 @@ export const duoTrio: Method<ForcedChoiceResult> = {
     legend:
       'Filled rings are locked trials, struck ones are void; in the tables the answers that found R again are bold. What R was, where it came again and what was answered was hidden from everybody until closing.',
     session: (firstSide, cables) => `In the familiarisation ${cables[firstSide]} was heard first.`,
+    when: (answer) => `R came again ${answer}`,
+    named: () => 'the one that was R again',
     drawnHeader: 'R came again',
     drawn: (truth, cables) => `${matchIn(truth)}, R was ${cables[heardIn(truth)[0]]}`,
     answeredHeader: ({ short }) => `Answered ${short}`,

@@ -24,7 +24,7 @@ type Scoring = Pick<
   | 'finding'
   | 'plan'
   | 'portray'
-> & { readonly trials: Pick<TrialWords, 'isRight' | 'countHeader' | 'count' | 'rates'> };
+> & { readonly trials: Pick<TrialWords, 'isRight' | 'answerFor' | 'countHeader' | 'count' | 'rates'> };
 
 /** What a method says beside the words that all methods with one right answer share. */
 type Asked = {
@@ -95,6 +95,7 @@ export function forcedChoiceScoring({ question, rightOf, words, smallEffect }: A
     },
     trials: {
       isRight,
+      answerFor: rightOf,
       countHeader: () => 'Right',
       count: (answers, truth) => `${rightIn(answers, truth)} of ${answers.length}`,
       rates: () => [{ label: 'Right', due: (trial) => dueAnswers(trial, (choice) => choice === rightOf(trial.truth)) }],

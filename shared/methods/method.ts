@@ -109,6 +109,12 @@ export type TrialWords = {
   answeredHeader(option: AnswerOption): string;
   /** Whether an answer is right; null for a method without right answers. */
   readonly isRight: ((choice: string, truth: string) => boolean) | null;
+  /** The answer that goes with a truth: the right one, or the place of the first cable where none is right. */
+  answerFor(truth: string): string;
+  /** What a truth came to, after "when": "X was A". */
+  when(answer: string, cables: CableNames): string;
+  /** What the presentation is that such an answer names: "the odd one". Null where answers name none. */
+  named(cables: CableNames): string | null;
   countHeader(cables: CableNames): string;
   count(answers: readonly ScoredAnswer[], truth: string): string;
   /** By which rates any part of the trials is counted, such as those of one excerpt. */

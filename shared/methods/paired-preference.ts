@@ -131,6 +131,9 @@ export const pairedPreference: Method<PreferenceResult> = {
     legend:
       'Filled rings are locked trials, struck ones are void. Which cable came first and what was answered was hidden from everybody until closing. No answer is right or wrong.',
     session: (firstSide, cables) => `In the familiarisation ${cables[firstSide]} was heard first.`,
+    when: (answer, [first]) => `${first} came ${answer}`,
+    named: ([first]) => first,
+    answerFor: (truth) => truth,
     drawnHeader: 'Heard first',
     drawn: (truth, cables) => cables[place(truth) === 'first' ? 0 : 1],
     answeredHeader: ({ value, short }) => (value === 'none' ? 'No preference' : `Preferred ${short}`),

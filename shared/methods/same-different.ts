@@ -109,6 +109,9 @@ export const sameDifferent: Method<SameDifferentResult> = {
     legend:
       'Filled rings are locked trials, struck ones are void. Whether a pair was the same and what was answered was hidden from everybody until closing.',
     session: (firstSide, cables) => `In the familiarisation ${cables[firstSide]} was heard first.`,
+    when: (answer) => (answer === 'same' ? 'the pair was the same' : 'the pair was different'),
+    named: () => null,
+    answerFor: (pair) => (isPairDifferent(pair) ? 'different' : 'same'),
     drawnHeader: 'The pair was',
     drawn: (pair, cables) => {
       const [first, second] = [...pair].map((letter) => cables[letter === 'A' ? 0 : 1]);

@@ -81,6 +81,8 @@ export const triangle: Method<ForcedChoiceResult> = {
     legend:
       'Filled rings are locked trials, struck ones are void; in the tables the answers that found the odd one are bold. Which one was odd and what was answered was hidden from everybody until closing.',
     session: (firstSide, cables) => `In the familiarisation ${cables[firstSide]} was heard first.`,
+    when: (answer) => `the odd one came ${answer}`,
+    named: () => 'the odd one',
     drawnHeader: 'Odd one',
     drawn: (order, cables) =>
       `the ${oddIn(order)}, ${cables[order.charAt(places.indexOf(oddIn(order))) === 'A' ? 0 : 1]}`,

@@ -1,5 +1,6 @@
 import type { ProtocolDifference } from '../contracts/protocol-versions.ts';
 import { canonicalJson } from '../ledger/canonical-json.ts';
+import { registeredLevelsText } from '../levels/level-words.ts';
 import { methodOf } from '../methods/methods.ts';
 import { analysisFacts } from './analysis-facts.ts';
 import { presetFacts } from './preset-facts.ts';
@@ -59,6 +60,7 @@ function linesOf(protocol: Protocol, nameOf: (person: string) => string): Line[]
     { label: 'Rig', value: rigWords[conduct.rig] },
     ...presetFacts(conduct.rigPreset),
     { label: 'Chain', value: conduct.chain },
+    { label: 'Level at the load', value: registeredLevelsText(conduct.levels) },
     { label: 'Every change', value: `${conduct.changeS} s, real or not` },
     { label: 'Answer window', value: `${conduct.answerS} s` },
     { label: 'Confidence', value: design.confidence ? 'asked with every answer' : 'not asked' },

@@ -2,6 +2,7 @@ import { z } from 'zod';
 import type { StudyDraft } from '../contracts/studies.ts';
 import { canonicalJson } from '../ledger/canonical-json.ts';
 import { digest } from '../ledger/digest.ts';
+import { type RegisteredLevels, registeredLevels } from '../levels/registered-levels.ts';
 import type { MethodChoices } from '../methods/method.ts';
 import { methodOf } from '../methods/methods.ts';
 import type { SessionPlan } from '../session/events.ts';
@@ -46,6 +47,8 @@ export const protocol = z.strictObject({
     changeS: z.int(),
     answerS: z.int(),
     programme: z.array(z.strictObject({ title: z.string(), start: z.string(), lengthS: z.int() })),
+    /** How level is handled and measured; left out where it is not measured. */
+    levels: registeredLevels.optional(),
   }),
   /** Known differences among the trials; left out where none are registered. */
   checks: protocolChecks.optional(),
@@ -69,6 +72,12 @@ function chosenOf({ methodSettings = [], attribute = '' }: MethodChoices): {
     ...(attribute === '' ? {} : { attribute }),
   };
 }
+
+/** Frequencies in rising order, whatever the order in which they were ticked. */
+const inOrder = (levels: RegisteredLevels): RegisteredLevels => ({
+  ...levels,
+  frequenciesHz: [...levels.frequenciesHz].sort((a, b) => a - b),
+});
 
 /** The protocol that a draft comes to, with its cables spelt out as they are now. */
 export function protocolFromDraft(
@@ -111,6 +120,7 @@ export function protocolFromDraft(
       changeS: draft.changeS,
       answerS: draft.answerS,
       programme: draft.programme.map(({ title, start, lengthS }) => ({ title, start, lengthS })),
+      ...(draft.levels === undefined ? {} : { levels: inOrder(draft.levels) }),
     },
     ...(draft.checks === undefined ? {} : { checks: checksFromDraft(draft.checks, fixed.checkCable) }),
     analysis: {
@@ -142,6 +152,7 @@ export function sessionPlanOf({ method, design, conduct, checks }: Protocol): Se
     confidence: design.confidence,
     ...chosenWays(design),
     programme: conduct.programme.map(({ title, start, lengthS }) => ({ title, start, lengthMs: lengthS * 1000 })),
+    ...(conduct.levels === undefined ? {} : { levels: conduct.levels }),
   };
 }
 

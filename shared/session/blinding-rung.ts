@@ -63,6 +63,9 @@ export function blindingRung(
   const sawCables = [...owners, ...managers, manager].some((person) => proctors.has(person));
   if ([...keyHolders].some((person) => proctors.has(person)))
     return { name: 'listener-blind', why: 'The code holder also ran a session.' };
+  const measured = entries.filter(({ kind }) => kind === 'levels-measured').map(({ payload }) => String(payload.by));
+  if (measured.some((person) => proctors.has(person)))
+    return { name: 'listener-blind', why: 'A proctor measured the levels and saw them by code.' };
   if (sawCables) return { name: 'listener-blind', why: 'A proctor could see the cables’ pages.' };
   if ([...keyHolders].some((person) => person === manager || owners.includes(person)))
     return { name: 'listener-blind', why: 'The code holder also managed the study or owns the organisation.' };

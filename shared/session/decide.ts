@@ -2,6 +2,7 @@ import type { ProctorCommand } from '../contracts/proctor-live.ts';
 import { Problem } from '../problem.ts';
 import { contributionCommitment } from './answer-leaf.ts';
 import { cautionsOf, isLastStep, nextStep, stepEndsAt } from './change-steps.ts';
+import { type LevelCommand, recordLevels, requireHalfTime, requireLevels, skipLevels } from './decide-levels.ts';
 import type { PayloadOf, SessionEvent, SessionEventKind } from './events.ts';
 import { excerptOfPractice, isTraining, practiceAsked } from './practice.ts';
 import { activeSeats, excerptOf, listeningMayStartAt, nextTrial, openAnswers } from './progress.ts';
@@ -25,6 +26,7 @@ export type SessionCommand =
   | { kind: 'leave'; seat: string }
   | { kind: 'note-late-answer'; seat: string; trial: number; leaf: string }
   | { kind: 'note-restart' }
+  | Extract<LevelCommand, { kind: 'record-levels' }>
   | { kind: 'tick' };
 
 type Emit = <K extends SessionEventKind>(kind: K, payload: Omit<PayloadOf<K>, 'session'>) => SessionEvent;
@@ -150,6 +152,7 @@ export function decide(state: SessionState, command: SessionCommand, now: number
     case 'open-seating':
       requirePhase(state, ['planned'], 'Seating is open already.');
       refuseUnless(state.cautionsConfirmed, 'wrong-phase', 'Confirm the cautions first.');
+      requireLevels(state);
       return [emit('seating-opened', { commitment: command.commitment })];
     case 'take-seat': {
       requirePhase(state, live, 'This session takes no listeners now.');
@@ -173,6 +176,7 @@ export function decide(state: SessionState, command: SessionCommand, now: number
       return reveal(state, command.seat, command.value, emit);
     case 'begin-familiarisation':
       refuseUnless(isTraining(state), 'wrong-phase', 'The familiarisation is over once the first trial has opened.');
+      requireLevels(state);
       return openTrial(state, 0, emit);
     case 'begin-practice': {
       const seats = seatsForTrial(state);
@@ -183,6 +187,7 @@ export function decide(state: SessionState, command: SessionCommand, now: number
       refuseUnless(state.familiarisations > 0, 'wrong-phase', 'The familiarisation trial comes first.');
       const next = nextTrial(state);
       if (next === null) throw new Problem('wrong-phase', 'Every trial of this session has ended.');
+      requireHalfTime(state);
       return openTrial(state, next, emit);
     }
     case 'confirm-step':
@@ -226,6 +231,10 @@ export function decide(state: SessionState, command: SessionCommand, now: number
       return (live as readonly string[]).includes(state.phase) ? [emit('server-restarted', {})] : [];
     case 'record-deviation':
       return [emit('deviation-recorded', { text: command.text })];
+    case 'record-levels':
+      return recordLevels(state, command, emit);
+    case 'skip-levels':
+      return skipLevels(state, command.reason, emit);
     case 'finish':
       requirePhase(state, ['running'], 'Only a running session can be finished.');
       refuseUnless(

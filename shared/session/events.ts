@@ -1,7 +1,9 @@
 import { z } from 'zod';
 import { cautions, stepKinds, voidReasons } from '../contracts/proctor-live.ts';
+import { registeredLevels } from '../levels/registered-levels.ts';
 import { rigPreset } from '../protocol/rig-preset.ts';
 import { waysToRun } from '../protocol/ways-to-run.ts';
+import { levelEvents } from './level-events.ts';
 import { mostPractice, practice } from './practice.ts';
 import { checkShape } from './trial-kinds.ts';
 
@@ -32,6 +34,8 @@ export const sessionPlan = z.strictObject({
   confidence: z.boolean(),
   ...waysToRun,
   programme: z.array(z.strictObject({ title: z.string(), start: z.string(), lengthMs: z.int() })),
+  /** Left out where levels are not measured. */
+  levels: registeredLevels.optional(),
 });
 export type SessionPlan = z.output<typeof sessionPlan>;
 
@@ -91,6 +95,7 @@ export const sessionEvents = {
   'server-restarted': z.strictObject({ session }),
   'listener-left': z.strictObject({ session, seat, by: z.enum(['listener', 'proctor']) }),
   'deviation-recorded': z.strictObject({ session: session.nullable(), text: z.string() }),
+  ...levelEvents,
   'session-finished': z.strictObject({ session }),
   'session-abandoned': z.strictObject({
     session,

@@ -55,7 +55,7 @@ function fold(state: SessionState, event: SessionEvent, method: Method): Folded 
     case 'session-replanned':
       if (state.phase !== 'planned') throw new RangeError('a session that has opened keeps its plan');
       // The rig may be another one now, and its cautions with it.
-      return { ...state, plan: event.payload.plan, cautionsConfirmed: false };
+      return { ...state, plan: event.payload.plan, cautionsConfirmed: false, levels: [] };
     case 'cautions-confirmed':
       return { ...state, cautionsConfirmed: true };
     case 'seating-opened':
@@ -147,6 +147,14 @@ function fold(state: SessionState, event: SessionEvent, method: Method): Folded 
       return { ...state, seats: state.seats.map((s) => (s.seat === event.payload.seat ? { ...s, left: true } : s)) };
     case 'deviation-recorded':
       return state;
+    case 'levels-measured': {
+      const { check, grade, isDrifted } = event.payload;
+      return { ...state, levels: [...state.levels, { check, at: event.at, grade, isDrifted }] };
+    }
+    case 'levels-skipped': {
+      const { check } = event.payload;
+      return { ...state, levels: [...state.levels, { check, at: event.at, grade: null, isDrifted: null }] };
+    }
     case 'session-finished':
       return { ...state, phase: 'finished' };
     case 'session-abandoned':
@@ -176,6 +184,7 @@ export function evolve(state: SessionState | null, event: SessionEvent, method: 
       trial: null,
       ended: [],
       late: [],
+      levels: [],
     };
   }
   return { ...fold(state, event, method), version: state.version + 1 };

@@ -1,5 +1,6 @@
 import type { ChangeStep, VoidReason } from '../contracts/proctor-live.ts';
 import type { SessionPlan } from './events.ts';
+import type { LevelStanding } from './level-progress.ts';
 import type { Practice } from './practice.ts';
 
 // The state of a session has no code, no cable, no draw and no correctness: nothing in it needs stripping.
@@ -71,6 +72,8 @@ export type SessionState = {
   readonly trial: OpenTrial | null;
   readonly ended: readonly EndedTrial[];
   readonly late: readonly { readonly trial: number; readonly seat: string }[];
+  /** How each measurement of levels came out, in order; never a figure. */
+  readonly levels: readonly LevelStanding[];
 };
 
 /** How long a phone may take to reveal its contribution before it is dropped. */

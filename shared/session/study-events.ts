@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { confirmations } from '../contracts/publications.ts';
+import { cueAuditResult } from '../cue-audit/cue-audit-result.ts';
 import { registeredResult } from '../methods/methods.ts';
 
 // What the study itself puts on its record. The payload of `key-revealed` has a file of its own: revealed-key.ts.
@@ -30,7 +31,12 @@ export const studyEvents = {
     managers: z.array(z.uuid()),
     codeHolder: z.uuid(),
   }),
-  'result-recorded': z.strictObject({ analysis: z.string(), result: registeredResult }),
+  'result-recorded': z.strictObject({
+    analysis: z.string(),
+    result: registeredResult,
+    /** What the cue audit came to; studies closed before there was one have none. */
+    cues: cueAuditResult.optional(),
+  }),
   /** What the publisher states and confirms; the published document ends with it. */
   'publication-declared': z.strictObject({
     by: z.uuid(),

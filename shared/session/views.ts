@@ -2,6 +2,7 @@ import type { CourseRing, HeldAnswer, ListenerView, LockReceipt } from '../contr
 import type { ProctorView } from '../contracts/proctor-live.ts';
 import type { Method } from '../methods/method.ts';
 import { cautionsOf, nextStep, stepEndsAt, stepsOf } from './change-steps.ts';
+import { levelsFor } from './level-view.ts';
 import { isTraining } from './practice.ts';
 import {
   activeSeats,
@@ -200,6 +201,7 @@ export function proctorViewOf(state: SessionState, method: Method, context: Proc
       state.phase === 'running' && state.trial === null && activeSeats(state).length > 0 ? nextTrial(state) : null,
     course: courseOf(state),
     seats: seatsFor(state, context.presence),
+    levels: levelsFor(state),
     record: { entries: context.entries, sessionEntries: state.version },
     demo: context.demo,
     rehearsal: context.rehearsal,

@@ -29,6 +29,12 @@ export const paths = {
   cable: (organisationId: string, id: string) => `${organisation(organisationId)}/cables/${id}`,
   editCable: (organisationId: string, id: string) => `${organisation(organisationId)}/cables/${id}/edit`,
 
+  /** Of one piece, where it is known already. */
+  newMeasurement: (organisationId: string, cableId: string, specimenId?: string) =>
+    `${organisation(organisationId)}/cables/${cableId}/measurements/new${specimenId === undefined ? '' : `?${new URLSearchParams({ specimen: specimenId })}`}`,
+  measurement: (organisationId: string, cableId: string, id: string) =>
+    `${organisation(organisationId)}/cables/${cableId}/measurements/${id}`,
+
   studies: (organisationId: string) => `${organisation(organisationId)}/studies`,
   newStudy: (organisationId: string) => `${organisation(organisationId)}/studies/new`,
   study: (organisationId: string, id: string) => `${organisation(organisationId)}/studies/${id}`,

@@ -19,6 +19,11 @@ const organisationPages: RouteObject[] = [
   { path: paths.newCable(organisationId), lazy: () => import('../pages/cable-new-page.tsx') },
   { path: paths.cable(organisationId, id), lazy: () => import('../pages/cable-page.tsx') },
   { path: paths.editCable(organisationId, id), lazy: () => import('../pages/cable-edit-page.tsx') },
+  { path: paths.newMeasurement(organisationId, id), lazy: () => import('../pages/measurement-new-page.tsx') },
+  {
+    path: paths.measurement(organisationId, id, ':measurementId'),
+    lazy: () => import('../pages/measurement-page.tsx'),
+  },
   { path: paths.studies(organisationId), lazy: () => import('../pages/studies-page.tsx') },
   { path: paths.newStudy(organisationId), lazy: () => import('../pages/study-new-page.tsx') },
   { path: paths.study(organisationId, id), lazy: () => import('../pages/study-page.tsx') },

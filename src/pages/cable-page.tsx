@@ -1,11 +1,15 @@
 import { useSuspenseQuery } from '@tanstack/react-query';
-import { type LoaderFunctionArgs, useParams } from 'react-router-dom';
+import { type LoaderFunctionArgs, redirect, useParams, useSearchParams } from 'react-router-dom';
+import { measurementsApi } from '#shared/contracts/measurements.ts';
 import { paths } from '../app/paths.ts';
 import { CableFacts } from '../features/cables/cable-facts.tsx';
 import { cableQueries, useArchiveCable } from '../features/cables/cables.queries.ts';
 import { Consequences } from '../features/cables/consequences.tsx';
 import { Specimens } from '../features/cables/specimens.tsx';
+import { MeasurementSection } from '../features/measurements/measurement-section.tsx';
+import { measurementQueries } from '../features/measurements/measurements.queries.ts';
 import { usePresence } from '../features/sign-in/membership.ts';
+import { lastPageAddress, readListQuery, useListAddress } from '../lib/list-address.ts';
 import { queryClient } from '../lib/query-client.ts';
 import { param } from '../lib/route-params.ts';
 import { problemText } from '../lib/show-problem.ts';
@@ -15,14 +19,30 @@ import { Notice } from '../ui/notice.tsx';
 import { PageHeader } from '../ui/page-header.tsx';
 import { useToast } from '../ui/toast.tsx';
 
-export function loader({ params }: LoaderFunctionArgs) {
-  return queryClient.ensureQueryData(cableQueries.detail(param(params, 'organisationId'), param(params, 'id')));
+const queryIn = (search: URLSearchParams) => readListQuery(measurementsApi.list, search);
+
+export async function loader({ params, request }: LoaderFunctionArgs) {
+  const [organisationId, id] = [param(params, 'organisationId'), param(params, 'id')];
+  const url = new URL(request.url);
+  const list = measurementQueries.list(organisationId, id, queryIn(url.searchParams));
+  const [measurements] = await Promise.all([
+    queryClient.ensureQueryData(list),
+    queryClient.ensureQueryData(cableQueries.detail(organisationId, id)),
+    queryClient.ensureQueryData(measurementQueries.curves(organisationId, id)),
+  ]);
+  const beyond = lastPageAddress(url, measurements);
+  return beyond === null ? null : redirect(beyond);
 }
 
 export function Component() {
   const { organisationId } = usePresence().membership;
   const id = param(useParams(), 'id');
   const { data: cable } = useSuspenseQuery(cableQueries.detail(organisationId, id));
+  const [search] = useSearchParams();
+  const change = useListAddress();
+  const query = queryIn(search);
+  const { data: measurements } = useSuspenseQuery(measurementQueries.list(organisationId, id, query));
+  const { curves } = useSuspenseQuery(measurementQueries.curves(organisationId, id)).data;
   const archive = useArchiveCable(organisationId, id);
   const showToast = useToast();
 
@@ -55,6 +75,15 @@ export function Component() {
       <div className="grid gap-x-16 gap-y-12 lg:grid-cols-[minmax(0,1fr)_22rem]">
         <div className="flex min-w-0 flex-col gap-12">
           <Specimens organisationId={organisationId} cable={cable} />
+          <MeasurementSection
+            cable={cable}
+            curves={curves}
+            measurements={measurements}
+            query={query}
+            onChange={change}
+            addTo={paths.newMeasurement(organisationId, id)}
+            hrefOf={(measurementId) => paths.measurement(organisationId, id, measurementId)}
+          />
           <Consequences cable={cable} editTo={paths.editCable(organisationId, id)} />
         </div>
         <CableFacts cable={cable} />

@@ -9,6 +9,7 @@ import { VerificationSection } from '../features/publications/verification-secti
 import { FindingHead } from '../features/reports/finding-head.tsx';
 import { ReportChecks } from '../features/reports/report-checks.tsx';
 import { ReportConditions } from '../features/reports/report-conditions.tsx';
+import { ReportCueAudit } from '../features/reports/report-cue-audit.tsx';
 import { ReportDistribution } from '../features/reports/report-distribution.tsx';
 import { ReportFigures } from '../features/reports/report-figures.tsx';
 import { ReportFlow } from '../features/reports/report-flow.tsx';
@@ -58,6 +59,7 @@ export function Component() {
       <ReportDistribution nullDistribution={report.nullDistribution} distribution={portrait.distribution} />
       <ReportListeners listeners={portrait.listeners} />
       <ReportChecks checks={portrait.checks} />
+      <ReportCueAudit audit={report.cueAudit} />
       <ReportFlow flow={report.flow} missingWords={report.result.missingAnswers} />
       <ReportIncidents
         voids={report.voids}

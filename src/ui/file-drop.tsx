@@ -1,10 +1,22 @@
 import { type DragEvent, useId, useState } from 'react';
 import { classNames } from './class-names.ts';
 
-type FileDropProps = { label?: string; onFile: (file: File) => void };
+type FileDropProps = {
+  label?: string;
+  /** What becomes of the file. */
+  note?: string;
+  /** As the `accept` of an input. */
+  accept?: string;
+  onFile: (file: File) => void;
+};
 
-/** Takes a file from the visitor, dropped or chosen. It is read in the browser and sent nowhere. */
-export function FileDrop({ label = 'Check a file of your own', onFile }: FileDropProps) {
+/** Takes a file from the visitor, dropped or chosen. By itself it is read in the browser and sent nowhere. */
+export function FileDrop({
+  label = 'Check a file of your own',
+  note = 'Drop it here or choose it. It stays in your browser.',
+  accept = '.zip,.json,application/zip,application/json',
+  onFile,
+}: FileDropProps) {
   const id = useId();
   const [isOver, setOver] = useState(false);
 
@@ -34,11 +46,11 @@ export function FileDrop({ label = 'Check a file of your own', onFile }: FileDro
       )}
     >
       <span className="font-semibold underline underline-offset-4">{label}</span>
-      <span className="text-soft">Drop it here or choose it. It stays in your browser.</span>
+      <span className="text-soft">{note}</span>
       <input
         id={id}
         type="file"
-        accept=".zip,.json,application/zip,application/json"
+        accept={accept}
         className="sr-only"
         onChange={({ target }) => {
           take(target.files);

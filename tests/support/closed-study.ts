@@ -1,5 +1,6 @@
 import { createHash } from 'node:crypto';
 import { cautions } from '#shared/contracts/proctor-live.ts';
+import { runCueAudit } from '#shared/cue-audit/run-cue-audit.ts';
 import { canonicalJson, type Json } from '#shared/ledger/canonical-json.ts';
 import { type Entry, nextEntry } from '#shared/ledger/chain.ts';
 import type { ClosedStudy } from '#shared/ledger/publication-parts.ts';
@@ -243,8 +244,10 @@ export function close(
   const key = { codeKey, draws };
   maker.put('key-revealed', key);
   const method = methodOf(protocol.method);
-  const result = runRegistered(protocol, sessionsInRecord(maker.entries, method), key, maker.answers);
-  maker.put('result-recorded', { analysis: protocol.analysis.name, result });
+  const states = sessionsInRecord(maker.entries, method);
+  const result = runRegistered(protocol, states, key, maker.answers);
+  const cues = runCueAudit(protocol, states, maker.entries, key, maker.answers);
+  maker.put('result-recorded', { analysis: protocol.analysis.name, result, cues });
   return JSON.parse(
     canonicalJson({
       entries: maker.entries,

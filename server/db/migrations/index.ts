@@ -10,9 +10,10 @@ import { Audits1796141100000 } from './1796141100000-audits.ts';
 import { FrozenPublications1796141200000 } from './1796141200000-frozen-publications.ts';
 import { Registry1796142000000 } from './1796142000000-registry.ts';
 import { ProtocolVersions1796142100000 } from './1796142100000-protocol-versions.ts';
-
 import { Construction1796149000000 } from './1796149000000-construction.ts';
 import { RigPresets1796151000000 } from './1796151000000-rig-presets.ts';
+import { Measurements1796151400000 } from './1796151400000-measurements.ts';
+import { LevelDuties1796152000000 } from './1796152000000-level-duties.ts';
 
 /** Every migration, oldest first. */
 export const migrations = [
@@ -30,4 +31,6 @@ export const migrations = [
   ProtocolVersions1796142100000,
   Construction1796149000000,
   RigPresets1796151000000,
+  Measurements1796151400000,
+  LevelDuties1796152000000,
 ];

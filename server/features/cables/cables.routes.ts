@@ -6,23 +6,23 @@ import { mount } from '../../http/mount.ts';
 import * as cables from './cables.service.ts';
 
 export function cablesRoutes(router: Router, access: Access, deps: Deps): void {
-  mount(router, access, cablesApi.list, async ({ query }, who) => cables.listCables(deps, who.organisationId, query));
-  mount(router, access, cablesApi.choices, async (_, who) => cables.cableChoices(deps, who.organisationId));
-  mount(router, access, cablesApi.get, async ({ params }, who) => cables.getCable(deps, who.organisationId, params.id));
-  mount(router, access, cablesApi.create, async ({ body }, who) => cables.createCable(deps, who.organisationId, body));
+  mount(router, access, cablesApi.list, async ({ query }, who) => cables.listCables(deps, who, query));
+  mount(router, access, cablesApi.choices, async (_, who) => cables.cableChoices(deps, who));
+  mount(router, access, cablesApi.get, async ({ params }, who) => cables.getCable(deps, who, params.id));
+  mount(router, access, cablesApi.create, async ({ body }, who) => cables.createCable(deps, who, body));
   mount(router, access, cablesApi.update, async ({ params, body }, who) =>
-    cables.updateCable(deps, who.organisationId, params.id, body),
+    cables.updateCable(deps, who, params.id, body),
   );
   mount(router, access, cablesApi.archive, async ({ params, body }, who) =>
-    cables.archiveCable(deps, who.organisationId, params.id, body.archived),
+    cables.archiveCable(deps, who, params.id, body.archived),
   );
   mount(router, access, cablesApi.addSpecimen, async ({ params, body }, who) =>
-    cables.addSpecimen(deps, who.organisationId, params.id, body),
+    cables.addSpecimen(deps, who, params.id, body),
   );
   mount(router, access, cablesApi.updateSpecimen, async ({ params, body }, who) =>
-    cables.updateSpecimen(deps, who.organisationId, params, body),
+    cables.updateSpecimen(deps, who, params, body),
   );
   mount(router, access, cablesApi.archiveSpecimen, async ({ params, body }, who) =>
-    cables.archiveSpecimen(deps, who.organisationId, params, body.archived),
+    cables.archiveSpecimen(deps, who, params, body.archived),
   );
 }

@@ -2,15 +2,11 @@ import type { CableDraft, CableListQuery, Cable as CableReply, SpecimenDraft } f
 import { Problem } from '#shared/problem.ts';
 import { type Tx, withTransaction } from '../../db/transaction.ts';
 import type { Deps } from '../../deps.ts';
+import type { Caller } from '../../http/access.ts';
 import type { Cable } from './cable.entity.ts';
 import * as store from './cables.store.ts';
 import { cableRowView, cableView } from './cables.views.ts';
-
-async function cableOrProblem(tx: Tx, organisationId: string, id: string): Promise<Cable> {
-  const cable = await store.findCable(tx, organisationId, id);
-  if (cable === null) throw new Problem('not-found', 'There is no such cable.');
-  return cable;
-}
+import { cablesClosedTo, openCable } from './open-cable.service.ts';
 
 function requireFreeSerial(cable: Cable, serial: string, own?: string): void {
   const taken = cable.specimens.some(
@@ -22,17 +18,19 @@ function requireFreeSerial(cable: Cable, serial: string, own?: string): void {
     ]);
 }
 
-export function listCables({ db }: Deps, organisationId: string, query: CableListQuery) {
+export function listCables({ db }: Deps, who: Caller, query: CableListQuery) {
   return withTransaction(db, async (tx) => {
-    const found = await store.listCables(tx, organisationId, query);
+    const without = [...(await cablesClosedTo(tx, who))];
+    const found = await store.listCables(tx, who.organisationId, { ...query, without });
     return { ...found, rows: found.rows.map(cableRowView) };
   });
 }
 
 /** Cables with at least one specimen in use: what a study can choose from. */
-export function cableChoices({ db }: Deps, organisationId: string) {
+export function cableChoices({ db }: Deps, who: Caller) {
   return withTransaction(db, async (tx) => {
-    const cables = await store.cablesInUse(tx, organisationId);
+    const closed = await cablesClosedTo(tx, who);
+    const cables = (await store.cablesInUse(tx, who.organisationId)).filter(({ id }) => !closed.has(id));
     const usable = cables.map((cable) => ({
       ...cableView(cable),
       specimens: cableView(cable).specimens.filter((s) => !s.archived),
@@ -41,47 +39,38 @@ export function cableChoices({ db }: Deps, organisationId: string) {
   });
 }
 
-export function getCable({ db }: Deps, organisationId: string, id: string): Promise<CableReply> {
-  return withTransaction(db, async (tx) => cableView(await cableOrProblem(tx, organisationId, id)));
+export function getCable({ db }: Deps, who: Caller, id: string): Promise<CableReply> {
+  return withTransaction(db, async (tx) => cableView(await openCable(tx, who, id)));
 }
 
-export function createCable(
-  { db, clock, random }: Deps,
-  organisationId: string,
-  draft: CableDraft,
-): Promise<CableReply> {
+export function createCable({ db, clock, random }: Deps, who: Caller, draft: CableDraft): Promise<CableReply> {
   return withTransaction(db, async (tx) => {
     const id = random.id();
-    await store.insertCable(tx, { id, organisationId, draft, now: new Date(clock.now()) });
-    return cableView(await cableOrProblem(tx, organisationId, id));
+    await store.insertCable(tx, { id, organisationId: who.organisationId, draft, now: new Date(clock.now()) });
+    return cableView(await openCable(tx, who, id));
   });
 }
 
 /** One change of a cable or its specimens, and the cable as it then is. */
-function change(
-  deps: Deps,
-  organisationId: string,
-  id: string,
-  action: (tx: Tx, cable: Cable, now: Date) => Promise<void>,
-) {
+function change(deps: Deps, who: Caller, id: string, action: (tx: Tx, cable: Cable, now: Date) => Promise<void>) {
   return withTransaction(deps.db, async (tx) => {
     const now = new Date(deps.clock.now());
-    await action(tx, await cableOrProblem(tx, organisationId, id), now);
+    await action(tx, await openCable(tx, who, id), now);
     await store.updateCable(tx, id, {}, now);
-    return cableView(await cableOrProblem(tx, organisationId, id));
+    return cableView(await openCable(tx, who, id));
   });
 }
 
-export function updateCable(deps: Deps, organisationId: string, id: string, draft: CableDraft) {
-  return change(deps, organisationId, id, (tx, _cable, now) => store.updateCable(tx, id, draft, now));
+export function updateCable(deps: Deps, who: Caller, id: string, draft: CableDraft) {
+  return change(deps, who, id, (tx, _cable, now) => store.updateCable(tx, id, draft, now));
 }
 
-export function archiveCable(deps: Deps, organisationId: string, id: string, archived: boolean) {
-  return change(deps, organisationId, id, (tx, _cable, now) => store.updateCable(tx, id, { archived }, now));
+export function archiveCable(deps: Deps, who: Caller, id: string, archived: boolean) {
+  return change(deps, who, id, (tx, _cable, now) => store.updateCable(tx, id, { archived }, now));
 }
 
-export function addSpecimen(deps: Deps, organisationId: string, id: string, draft: SpecimenDraft) {
-  return change(deps, organisationId, id, async (tx, cable) => {
+export function addSpecimen(deps: Deps, who: Caller, id: string, draft: SpecimenDraft) {
+  return change(deps, who, id, async (tx, cable) => {
     requireFreeSerial(cable, draft.serial);
     const specimen = { id: deps.random.id(), cableId: id, draft, position: cable.specimens.length + 1 };
     await store.insertSpecimen(tx, specimen);
@@ -95,11 +84,11 @@ function requireSpecimen(cable: Cable, specimenId: string): void {
 
 export function updateSpecimen(
   deps: Deps,
-  organisationId: string,
+  who: Caller,
   { id, specimenId }: { id: string; specimenId: string },
   draft: SpecimenDraft,
 ) {
-  return change(deps, organisationId, id, async (tx, cable) => {
+  return change(deps, who, id, async (tx, cable) => {
     requireSpecimen(cable, specimenId);
     requireFreeSerial(cable, draft.serial, specimenId);
     await store.updateSpecimen(tx, specimenId, draft);
@@ -108,11 +97,11 @@ export function updateSpecimen(
 
 export function archiveSpecimen(
   deps: Deps,
-  organisationId: string,
+  who: Caller,
   { id, specimenId }: { id: string; specimenId: string },
   archived: boolean,
 ) {
-  return change(deps, organisationId, id, async (tx, cable) => {
+  return change(deps, who, id, async (tx, cable) => {
     requireSpecimen(cable, specimenId);
     await store.updateSpecimen(tx, specimenId, { archived });
   });

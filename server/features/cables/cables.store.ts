@@ -5,11 +5,12 @@ import type { Tx } from '../../db/transaction.ts';
 import { Cable } from './cable.entity.ts';
 import { Specimen } from './specimen.entity.ts';
 
-export function listCables(tx: Tx, organisationId: string, query: CableListQuery) {
+export function listCables(tx: Tx, organisationId: string, query: CableListQuery & { without: readonly string[] }) {
   const rows = tx
     .createQueryBuilder(Cable, 'cable')
     .leftJoinAndSelect('cable.specimens', 'specimen', 'specimen.archived = false')
     .where('cable.organisationId = :organisationId', { organisationId });
+  if (query.without.length > 0) rows.andWhere('cable.id not in (:...without)', { without: [...query.without] });
   if (query.archived === 'no') rows.andWhere('cable.archived = false');
   if (query.q !== '')
     rows.andWhere('(cable.name like :q or cable.description like :q or cable.kind like :q)', {

@@ -1,14 +1,20 @@
 import type { Report, ReportRow } from '#shared/contracts/reports.ts';
 import type { SignedHead } from '#shared/contracts/signed-heads.ts';
 import { isClosed } from '#shared/contracts/studies.ts';
+import { cueAudit } from '#shared/cue-audit/cue-audit.ts';
+import { cueTrials } from '#shared/cue-audit/cue-trials.ts';
+import { portrayCueAudit, withCueCautions } from '#shared/cue-audit/portray-cue-audit.ts';
 import type { Entry } from '#shared/ledger/chain.ts';
 import type { CheckId } from '#shared/ledger/check-names.ts';
 import { type ClosedStudy, publicationParts } from '#shared/ledger/publication-parts.ts';
 import { type Check, verifyStudy } from '#shared/ledger/verify.ts';
-import { methodOf, registeredResult } from '#shared/methods/methods.ts';
+import { levelsFound } from '#shared/levels/levels-found.ts';
+import { methodOf } from '#shared/methods/methods.ts';
 import { Problem } from '#shared/problem.ts';
 import { blindingRung } from '#shared/session/blinding-rung.ts';
 import { sessionsInRecord } from '#shared/session/read-record.ts';
+import { revealedKey } from '#shared/session/revealed-key.ts';
+import type { SessionState } from '#shared/session/state.ts';
 import { studyEvents } from '#shared/session/study-events.ts';
 import { type Tx, withTransaction } from '../../db/transaction.ts';
 import type { Deps } from '../../deps.ts';
@@ -37,6 +43,20 @@ export type ClosedRecord = ClosedStudy & {
   readonly heads: readonly SignedHead[];
 };
 
+/** The level match, where the protocol registers one: over the sessions in which something was counted. */
+function levelsOf({ entries, protocol }: ClosedRecord, states: readonly SessionState[]) {
+  const registered = protocol.conduct.levels;
+  if (registered === undefined) return undefined;
+  const key = revealedKey.parse(entries.find(({ kind }) => kind === 'key-revealed')?.payload);
+  const counted = states.filter(({ ended }) => ended.some(({ outcome }) => outcome === 'locked'));
+  return levelsFound(
+    entries,
+    key.codeKey.rows,
+    registered,
+    counted.map(({ session }) => session),
+  );
+}
+
 /** Everything that a report says, from the record alone: what was checked, how blind it was, what was found. */
 function sourceFrom(closed: ClosedRecord): ReportSource {
   const { entries, protocol } = closed;
@@ -45,9 +65,17 @@ function sourceFrom(closed: ClosedRecord): ReportSource {
   const checks = verifyStudy(publicationParts(closed));
   const rung = blindingRung(entries, states, method);
   const closing = closingOf(entries);
-  const result = registeredResult.parse(entries.find(({ kind }) => kind === 'result-recorded')?.payload.result);
-  const finding = method.finding(result, {
-    cables: [protocol.cables[0].name, protocol.cables[1].name],
+  const recorded = studyEvents['result-recorded'].parse(
+    entries.find(({ kind }) => kind === 'result-recorded')?.payload,
+  );
+  const { result } = recorded;
+  const cables = [protocol.cables[0].name, protocol.cables[1].name] as const;
+  const key = revealedKey.parse(entries.find(({ kind }) => kind === 'key-revealed')?.payload);
+  const cued = cueTrials(method, states, entries, key, closed.answers);
+  // A study closed before there was an audit has none on its record; it follows from the record all the same.
+  const cues = recorded.cues ?? cueAudit(method, cued);
+  const found = method.finding(result, {
+    cables,
     gate: {
       commitmentsHold: passed(checks, [
         ...(['record', 'protocol', 'commitments', 'codeKey', 'draws', 'answers', 'rules', 'figures'] as const),
@@ -56,9 +84,12 @@ function sourceFrom(closed: ClosedRecord): ReportSource {
       isBlind: rung.name !== 'open',
     },
     endedEarly: closing.complete ? null : closing.reason,
+    levels: levelsOf(closed, states),
     setting: protocol.conduct.chain,
   });
-  return { ...closed, states, checks, rung, closing, result, finding };
+  const finding = withCueCautions(found, cues, method, cables);
+  const cueAuditShown = portrayCueAudit(cues, method, cables, cued);
+  return { ...closed, states, checks, rung, closing, result, finding, cueAudit: cueAuditShown };
 }
 
 /** The report of a closed record, wherever it was read from. */

@@ -1,10 +1,13 @@
 import type { Report } from '#shared/contracts/reports.ts';
 import type { SignedHead } from '#shared/contracts/signed-heads.ts';
+import type { PortrayedCueAudit } from '#shared/cue-audit/portrayed-cue-audit.ts';
 import { resultsByExcerpt } from '#shared/findings/by-excerpt.ts';
 import type { Finding } from '#shared/findings/finding.ts';
 import type { Entry } from '#shared/ledger/chain.ts';
 import { sealedVersions } from '#shared/ledger/protocol-versions.ts';
 import type { Check } from '#shared/ledger/verify.ts';
+import { levelReportOf } from '#shared/levels/level-report.ts';
+import { registeredLevelsText } from '#shared/levels/level-words.ts';
 import { methodOf, type RegisteredResult } from '#shared/methods/methods.ts';
 import { analysisFacts } from '#shared/protocol/analysis-facts.ts';
 import { presetFacts } from '#shared/protocol/preset-facts.ts';
@@ -32,6 +35,7 @@ export type ReportSource = {
   readonly rooms: ReadonlyMap<number, string>;
   readonly result: RegisteredResult;
   readonly finding: Finding;
+  readonly cueAudit: PortrayedCueAudit;
   readonly checks: readonly Check[];
   readonly rung: BlindingRung;
   readonly closing: StudyPayloadOf<'study-closed'>;
@@ -165,6 +169,7 @@ function factsOf({ design, conduct, analysis, cables, method, checks }: Protocol
     { label: 'Change', value: `${conduct.changeS} s, real or sham` },
     { label: 'Answer window', value: `${conduct.answerS} s` },
     { label: 'Programme', value: conduct.programme.map(({ title, lengthS }) => `${title} (${lengthS} s)`).join('; ') },
+    { label: 'Level at the load', value: registeredLevelsText(conduct.levels) },
     { label: 'Chain', value: conduct.chain },
     ...presetFacts(conduct.rigPreset),
   ];
@@ -213,8 +218,13 @@ export function reportView(source: ReportSource): Report {
     result,
     nullDistribution: method.nullDistribution(counted),
     byExcerpt: byExcerptOf(protocol, counted),
+    cueAudit: source.cueAudit,
     rung: { name: rung.name, why: rung.why },
     conditions: conditionsOf(source),
+    levels:
+      protocol.conduct.levels === undefined
+        ? null
+        : levelReportOf(entries, key.codeKey.rows, protocol.conduct.levels, namesOf(protocol)),
     flow: flowOf(source),
     sessions: states.map((state) => sessionView(source, state, key)),
     voids: voidsOf(entries),

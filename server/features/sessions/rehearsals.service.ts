@@ -34,5 +34,7 @@ export async function beginRehearsal(
   await getSession(deps, who, sessionId);
   const { memory } = await sittings.of(sessionId);
   const { title, session, state } = memory;
-  return { id: await sittings.rehearsals.begin({ ...leader, title, room: session.room, plan: state.plan }) };
+  // Levels are measured of the cables themselves; a rehearsal has none.
+  const { levels: _, ...plan } = state.plan;
+  return { id: await sittings.rehearsals.begin({ ...leader, title, room: session.room, plan }) };
 }

@@ -1,4 +1,5 @@
 import { isClosed, type Study as StudyReply } from '#shared/contracts/studies.ts';
+import { runCueAudit } from '#shared/cue-audit/run-cue-audit.ts';
 import type { Json } from '#shared/ledger/canonical-json.ts';
 import { methodOf } from '#shared/methods/methods.ts';
 import { runRegistered } from '#shared/methods/run-registered.ts';
@@ -68,14 +69,16 @@ async function recordResult(
   key: RevealedKey,
 ): Promise<void> {
   const protocol = protocolOf(study);
-  const states = sessionsInRecord(await readRecord(tx, study.id), methodOf(protocol.method));
+  const entries = await readRecord(tx, study.id);
+  const states = sessionsInRecord(entries, methodOf(protocol.method));
   const answers = await answersOfSessions(
     tx,
     sessions.map(({ id }) => id),
   );
   const held = answers.map(({ sessionId, trial, seat, choice }) => ({ session: sessionId, trial, seat, choice }));
   const result = runRegistered(protocol, states, key, held) as unknown as Json;
-  const payload = { analysis: protocol.analysis.name, result };
+  const cues = runCueAudit(protocol, states, entries, key, held) as unknown as Json;
+  const payload = { analysis: protocol.analysis.name, result, cues };
   await append(tx, deps, study.id, [{ kind: 'result-recorded', at: deps.clock.now(), payload, session: null }]);
 }
 

@@ -5,6 +5,7 @@ import { Button } from '../../ui/button.tsx';
 import { FindingHead } from './finding-head.tsx';
 import { ReportChecks } from './report-checks.tsx';
 import { ReportConditions } from './report-conditions.tsx';
+import { ReportCueAudit } from './report-cue-audit.tsx';
 import { ReportDistribution } from './report-distribution.tsx';
 import { ReportExcerpts } from './report-excerpts.tsx';
 import { ReportFigures } from './report-figures.tsx';
@@ -49,6 +50,7 @@ export function ReportView({ report, back, actions, proofs }: ReportViewProps) {
       <ReportListeners listeners={portrait.listeners} />
       <ReportExcerpts byExcerpt={report.byExcerpt} />
       <ReportChecks checks={portrait.checks} />
+      <ReportCueAudit audit={report.cueAudit} />
       <ReportFlow flow={report.flow} missingWords={result.missingAnswers} />
       <ReportIncidents
         voids={report.voids}

@@ -84,6 +84,23 @@ function checks(report: Report): Html {
   );
 }
 
+function cueAudit({ cueAudit: { summary, found, rows } }: Report): Html {
+  return html`<p class="max-w-3xl">${summary}</p>
+    ${
+      found.length === 0
+        ? null
+        : list(
+            found.map(({ words }) => words),
+            '',
+          )
+    }
+    ${table(
+      'Every cue',
+      ['Cue', 'Tells, adjusted p', 'Followed, adjusted p', 'Found'],
+      rows.map(({ cue, tells, followed, words }) => [cue, tells ?? 'not asked', followed ?? 'not asked', words]),
+    )}`;
+}
+
 function session({
   number,
   phase,
@@ -206,6 +223,7 @@ export function publicationContent(publication: Publication): Html {
       ${section('From plan to count', flow(report))}
       ${section('By listener', listeners(report))}
       ${section('Checks of the answers', checks(report))}
+      ${section('Cue audit', cueAudit(report))}
       ${section('Every session', html`<ol class="flex flex-col gap-8">${report.sessions.map(session)}</ol>`)}
       ${section('What did not go as planned', incidents(report))}
       ${section('The sealed protocol', html`${facts(report.protocol.facts)}${versions(report.protocol.versions)}`)}
