@@ -44,7 +44,7 @@ export async function readyStudy(manager: Page, holder: Page, change: Partial<St
     ['4.0 twin', 'SF-0077'],
   ] as const) {
     const { rows }: { rows: Named[] } = await ask(manager, 'get', `/cables?q=${encodeURIComponent(name)}`);
-    const cableId = rows[0]?.id ?? '';
+    const cableId = rows.find((row) => row.name.includes(name))?.id ?? '';
     const { specimens }: { specimens: { id: string; serial: string }[] } = await ask(
       manager,
       'get',
