@@ -45,3 +45,11 @@ export async function truthPractised(tx: Tx, question: PracticeQuestion): Promis
   if (draw === null) throw new Error('a session runs without its secrets');
   return truthOfPractice({ ...question, secret: draw.open(proof).secret, rows: [] }, question.practice);
 }
+
+/** The codes that stand on a study's sleeves, in the order of their figures: which there are, and nothing of what they are. */
+export async function codesOf(tx: Tx, studyId: string): Promise<string[]> {
+  const codeKey = await readCodeKey(tx, studyId);
+  if (codeKey === null) throw new Error('a session runs without its secrets');
+  const { rows } = codeKey.open(new OpeningProof('cue'));
+  return rows.map(({ code }) => code).sort();
+}

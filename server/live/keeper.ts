@@ -30,4 +30,8 @@ export type Keeper = {
   codeToFit(memory: SessionMemory): Promise<string | null>;
   /** What was right in a practice trial that has ended, for its phones. */
   truthPractised(memory: SessionMemory, practice: Practice): Promise<string>;
+  /** Every code that the study's sleeves bear, in their order, and nothing of what they stand for. */
+  codes(memory: SessionMemory): Promise<readonly string[]>;
+  /** The neutral title of the organisation's study whose labels bear a mark; null when there is none. */
+  titleOfMark(memory: SessionMemory, mark: string): Promise<string | null>;
 };

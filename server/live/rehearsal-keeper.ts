@@ -56,6 +56,8 @@ export function rehearsalKeeper(random: Random, code: string, plan: SessionPlan)
   };
   return {
     keep: (work) => work(keeping),
+    codes: async () => rows.map(({ code }) => code).sort(),
+    titleOfMark: async () => null,
     codeToFit: async ({ state, method }) => {
       const presentation = presentationNow(state, method);
       if (presentation === null || state.trial === null) return null;

@@ -12,8 +12,12 @@ import { type AnswerCommand, answerRow, requireAnswerable, requireLate } from '.
 import { consoleViewOf, phoneViewOf } from './audience-views.ts';
 import { databaseKeeper } from './database-keeper.ts';
 import type { Keeper, Keeping, SeatLink } from './keeper.ts';
+import { scanned } from './scanning.ts';
 import { afterAnswer, afterEvents, heldOf, loadMemory, type SessionMemory } from './session-memory.ts';
 import { Watchers } from './watchers.ts';
+
+/** What means the same whatever has happened since the view it was sent on: a note, and a label held up. */
+const anyTime: readonly ProctorCommand['kind'][] = ['record-deviation', 'scan-label'];
 
 /** What an action comes to: a command, what to remember once it is kept, and what to answer. */
 type Act<T> = { command: SessionCommand; stored?: () => void; result: T };
@@ -67,11 +71,22 @@ export class Sitting {
 
   command(command: ProctorCommand): Promise<void> {
     return this.#inTurn(async () => {
-      if (command.kind !== 'record-deviation' && command.expectVersion !== this.#memory.state.version)
+      if (!anyTime.includes(command.kind) && command.expectVersion !== this.#memory.state.version)
         throw new Problem('stale-view', 'The session has moved on; look at the screen and try again.');
       if (command.kind === 'open-seating') await this.#openSeating();
-      else await this.#do(command);
+      else if (command.kind === 'scan-label') await this.#scan(command);
+      else if (command.kind === 'end-inventory') {
+        const codes = await this.#keeper.codes(this.#memory);
+        await this.#do({ kind: 'note-inventory-end', codes, reason: command.reason });
+      } else await this.#do(command);
     });
+  }
+
+  /** A wrong label is on the record before it is refused. */
+  async #scan(command: Extract<ProctorCommand, { kind: 'scan-label' }>): Promise<void> {
+    const { command: noted, refusal } = await scanned(this.#memory, this.#keeper, command);
+    await this.#do(noted);
+    if (refusal !== null) throw refusal;
   }
 
   fromPhone(seat: string, command: Exclude<ListenerCommand, AnswerCommand>): Promise<void> {

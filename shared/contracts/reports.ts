@@ -79,6 +79,21 @@ export const report = z.strictObject({
       /** The session's draw in words: which cable bore which label; null when nothing was presented. */
       drawn: z.string().nullable(),
       reason: z.string().nullable(),
+      /** How cables were told apart by hand: labels scanned, steps taken back, the inventory. */
+      handling: z.strictObject({
+        scanned: z.int(),
+        byHand: z.int(),
+        wrong: z.int(),
+        undone: z.int(),
+        inventory: z
+          .strictObject({
+            codes: z.int(),
+            missing: z.array(z.string()),
+            foreign: z.array(z.string()),
+            reason: z.string(),
+          })
+          .nullable(),
+      }),
       trials: z.array(
         z.strictObject({
           trial: z.int(),

@@ -14,6 +14,7 @@ export const domains = {
   drawSecret: 'fairlead/draw-secret/1',
   codeKey: 'fairlead/code-key/1',
   drawSeed: 'fairlead/draw-seed/1',
+  studyMark: 'fairlead/study-mark/1',
 } as const;
 export type Domain = keyof typeof domains;
 

@@ -1,9 +1,19 @@
-import type { ProctorCommand } from '../contracts/proctor-live.ts';
+import type { ProctorCommand, ScannedBy } from '../contracts/proctor-live.ts';
 import { Problem } from '../problem.ts';
 import { contributionCommitment } from './answer-leaf.ts';
 import { cautionsOf, isLastStep, nextStep, stepEndsAt } from './change-steps.ts';
 import { type LevelCommand, recordLevels, requireHalfTime, requireLevels, skipLevels } from './decide-levels.ts';
+import {
+  decideByHand,
+  decideInventoryEnd,
+  decideInventoryScan,
+  decideScan,
+  decideUndo,
+  isInventoryDue,
+  requireScanned,
+} from './decide-scan.ts';
 import type { PayloadOf, SessionEvent, SessionEventKind } from './events.ts';
+import type { LabelEnd } from './label-text.ts';
 import { excerptOfPractice, isTraining, practiceAsked } from './practice.ts';
 import { activeSeats, excerptOf, listeningMayStartAt, nextTrial, openAnswers } from './progress.ts';
 import type { OpenTrial, SessionState } from './state.ts';
@@ -12,7 +22,7 @@ type Plain<C> = C extends unknown ? Omit<C, 'expectVersion'> : never;
 
 /** Everything that can be asked of a session: the proctor's commands, the phones', and the clock's. */
 export type SessionCommand =
-  | Plain<Exclude<ProctorCommand, { kind: 'open-seating' }>>
+  | Plain<Exclude<ProctorCommand, { kind: 'open-seating' | 'scan-label' | 'end-inventory' }>>
   | { kind: 'open-seating'; commitment: string }
   | {
       kind: 'take-seat';
@@ -24,12 +34,21 @@ export type SessionCommand =
   | { kind: 'reveal'; seat: string; value: string }
   | { kind: 'too-loud'; seat: string }
   | { kind: 'leave'; seat: string }
+  | {
+      kind: 'note-scan';
+      code: string;
+      end: LabelEnd | null;
+      by: ScannedBy;
+      verdict: 'wanted' | 'other-code' | 'other-study';
+    }
+  | { kind: 'note-inventory-scan'; code: string; by: ScannedBy; isOurs: boolean }
+  | { kind: 'note-inventory-end'; codes: readonly string[]; reason: string }
   | { kind: 'note-late-answer'; seat: string; trial: number; leaf: string }
   | { kind: 'note-restart' }
   | Extract<LevelCommand, { kind: 'record-levels' }>
   | { kind: 'tick' };
 
-type Emit = <K extends SessionEventKind>(kind: K, payload: Omit<PayloadOf<K>, 'session'>) => SessionEvent;
+export type Emit = <K extends SessionEventKind>(kind: K, payload: Omit<PayloadOf<K>, 'session'>) => SessionEvent;
 
 function refuseUnless(holds: boolean, code: ConstructorParameters<typeof Problem>[0], detail: string): void {
   if (!holds) throw new Problem(code, detail);
@@ -67,6 +86,7 @@ function confirmStep(state: SessionState, step: string, now: number, emit: Emit)
   const { trial: number, presentation } = trial;
   if (!isLastStep(trial, plan)) {
     refuseUnless(now >= (stepEndsAt(trial, plan) ?? now), 'too-early', 'This step lasts its least time, every time.');
+    requireScanned(trial, expected);
     return [emit('step-confirmed', { trial: number, presentation, step: expected })];
   }
   const startsAt = listeningMayStartAt(trial, plan, now);
@@ -192,6 +212,16 @@ export function decide(state: SessionState, command: SessionCommand, now: number
     }
     case 'confirm-step':
       return confirmStep(state, command.step, now, emit);
+    case 'note-scan':
+      return decideScan(state, command, now, emit);
+    case 'confirm-by-hand':
+      return decideByHand(state, command, now, emit);
+    case 'undo-step':
+      return decideUndo(state, emit);
+    case 'note-inventory-scan':
+      return decideInventoryScan(state, command, emit);
+    case 'note-inventory-end':
+      return decideInventoryEnd(state, command, emit);
     case 'lock-trial': {
       const trial = requireOpenTrial(state);
       refuseUnless(trial.stage === 'answering', 'wrong-phase', 'A trial locks after its answers.');
@@ -241,6 +271,11 @@ export function decide(state: SessionState, command: SessionCommand, now: number
         state.trial === null && state.familiarisations > 0 && nextTrial(state) === null,
         'wrong-phase',
         'Trials are still to come. To end here, abandon the session with a reason.',
+      );
+      refuseUnless(
+        !isInventoryDue(state),
+        'wrong-phase',
+        'Go through the sleeves once more first, or end the inventory with a reason.',
       );
       return [emit('session-finished', {})];
     case 'abandon':

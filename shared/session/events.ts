@@ -5,6 +5,7 @@ import { rigPreset } from '../protocol/rig-preset.ts';
 import { waysToRun } from '../protocol/ways-to-run.ts';
 import { levelEvents } from './level-events.ts';
 import { mostPractice, practice } from './practice.ts';
+import { scanEvents } from './scan-events.ts';
 import { checkShape } from './trial-kinds.ts';
 
 // What a session puts on its study's record. Payload shapes are permanent: a change means a new version.
@@ -67,6 +68,7 @@ export const sessionEvents = {
   /** How many answered; what they answered is kept nowhere. */
   'practice-ended': z.strictObject({ session, number: practice.shape.number, answered: z.int().min(0), of: z.int() }),
   'step-confirmed': z.strictObject({ session, trial, presentation: z.int(), step: z.enum(stepKinds) }),
+  ...scanEvents,
   'listening-started': z.strictObject({
     session,
     trial,

@@ -9,7 +9,16 @@ import { revealMs } from './state.ts';
 type Folded = Omit<SessionState, 'version'>;
 
 function startChange(trial: OpenTrial, presentation: number, at: number): OpenTrial {
-  return { ...trial, presentation, stage: 'change', changeStartedAt: at, stepsDone: [], readyAt: at, endsAt: null };
+  return {
+    ...trial,
+    presentation,
+    stage: 'change',
+    changeStartedAt: at,
+    stepsDone: [],
+    scannedEnds: [],
+    readyAt: at,
+    endsAt: null,
+  };
 }
 
 function openTrialOf(state: SessionState, event: SessionEvent): OpenTrial {
@@ -46,6 +55,30 @@ function resumeTrial(state: SessionState, at: number): OpenTrial | null {
   if (trial === null) return null;
   if (trial.stage === 'answering') return { ...trial, endsAt: at + (paused?.remainingMs ?? state.plan.answerMs) };
   return startChange(trial, trial.presentation, at);
+}
+
+type ScanEvent = Extract<SessionEvent, { kind: 'label-scanned' | 'scan-refused' | 'scan-by-hand' | 'step-undone' }>;
+
+/** Scans and steps taken back, all within the open change; or a start taken back, which begins the change again. */
+function foldScan(state: SessionState, trial: OpenTrial, event: ScanEvent): Folded {
+  const { scans } = state;
+  switch (event.kind) {
+    case 'label-scanned': {
+      const scannedEnds = [...trial.scannedEnds, event.payload.end];
+      return { ...state, trial: { ...trial, scannedEnds }, scans: { ...scans, made: scans.made + 1 } };
+    }
+    case 'scan-refused':
+      return { ...state, trial: { ...trial, scannedEnds: [] }, scans: { ...scans, wrong: scans.wrong + 1 } };
+    case 'scan-by-hand':
+      return { ...state, scans: { ...scans, byHand: scans.byHand + 1 } };
+    case 'step-undone': {
+      const undone = { ...state, scans: { ...scans, undone: scans.undone + 1 } };
+      if (trial.stage === 'listening') return { ...undone, trial: startChange(trial, trial.presentation, event.at) };
+      const stepsDone = trial.stepsDone.slice(0, -1);
+      const scannedEnds = stepsDone.includes('scan') ? trial.scannedEnds : [];
+      return { ...undone, trial: { ...trial, stepsDone, scannedEnds, readyAt: event.at } };
+    }
+  }
 }
 
 function fold(state: SessionState, event: SessionEvent, method: Method): Folded {
@@ -92,6 +125,7 @@ function fold(state: SessionState, event: SessionEvent, method: Method): Folded 
           stage: 'change',
           changeStartedAt: event.at,
           stepsDone: [],
+          scannedEnds: [],
           readyAt: event.at,
           endsAt: null,
         },
@@ -103,6 +137,23 @@ function fold(state: SessionState, event: SessionEvent, method: Method): Folded 
         ...state,
         trial: { ...trial, stepsDone: [...trial.stepsDone, event.payload.step], readyAt: event.at },
       };
+    }
+    case 'label-scanned':
+    case 'scan-refused':
+    case 'scan-by-hand':
+    case 'step-undone':
+      return foldScan(state, openTrialOf(state, event), event);
+    case 'inventory-scanned': {
+      const { code, isOurs } = event.payload;
+      const { found, foreign, ended } = state.inventory;
+      const inventory = isOurs
+        ? { found: [...found, code], foreign, ended }
+        : { found, foreign: [...foreign, code], ended };
+      return { ...state, inventory };
+    }
+    case 'inventory-ended': {
+      const { codes, missing, reason } = event.payload;
+      return { ...state, inventory: { ...state.inventory, ended: { codes, missing, reason } } };
     }
     case 'listening-started': {
       const trial = openTrialOf(state, event);
@@ -183,6 +234,8 @@ export function evolve(state: SessionState | null, event: SessionEvent, method: 
       paused: null,
       trial: null,
       ended: [],
+      scans: { made: 0, byHand: 0, wrong: 0, undone: 0 },
+      inventory: { found: [], foreign: [], ended: null },
       late: [],
       levels: [],
     };

@@ -1,9 +1,11 @@
 import type { ChangeStep, VoidReason } from '../contracts/proctor-live.ts';
 import type { SessionPlan } from './events.ts';
+import type { LabelEnd } from './label-text.ts';
 import type { LevelStanding } from './level-progress.ts';
 import type { Practice } from './practice.ts';
 
-// The state of a session has no code, no cable, no draw and no correctness: nothing in it needs stripping.
+// The state of a session has no cable, no draw and no correctness, and no code but those that an inventory read off the
+// sleeves after the last trial: nothing in it needs stripping.
 
 export type SeatState = {
   readonly seat: string;
@@ -29,6 +31,8 @@ export type OpenTrial = {
   readonly stage: 'change' | 'listening' | 'answering';
   readonly changeStartedAt: number;
   readonly stepsDone: readonly ChangeStep[];
+  /** Which ends of the cable now fitted bear its code. */
+  readonly scannedEnds: readonly LabelEnd[];
   /** When the latest step was confirmed. */
   readonly readyAt: number;
   /** When listening or answering ends; null during a change. */
@@ -71,6 +75,13 @@ export type SessionState = {
   } | null;
   readonly trial: OpenTrial | null;
   readonly ended: readonly EndedTrial[];
+  /** Labels scanned at changes, changes confirmed by hand, wrong labels refused, steps taken back. */
+  readonly scans: { readonly made: number; readonly byHand: number; readonly wrong: number; readonly undone: number };
+  readonly inventory: {
+    readonly found: readonly string[];
+    readonly foreign: readonly string[];
+    readonly ended: { readonly codes: number; readonly missing: readonly string[]; readonly reason: string } | null;
+  };
   readonly late: readonly { readonly trial: number; readonly seat: string }[];
   /** How each measurement of levels came out, in order; never a figure. */
   readonly levels: readonly LevelStanding[];

@@ -117,6 +117,8 @@ export type ProctorContext = {
   readonly now: number;
   /** The blind code of the current presentation, or null when none is to be fitted. */
   readonly code: string | null;
+  /** How many codes the study has, while they are gone through at the end; null otherwise. */
+  readonly codesInAll?: number | null;
   readonly join: ProctorView['join'];
   readonly presence: readonly Presence[];
   readonly entries: number;
@@ -140,6 +142,25 @@ function seatsFor(state: SessionState, presence: readonly Presence[]): ProctorVi
   });
 }
 
+/** The step that `undo-step` would take back. */
+const undoOf = (trial: OpenTrial) =>
+  trial.stage === 'answering' || trial.answers.length > 0 ? null : (trial.stepsDone.at(-1) ?? null);
+
+const asCodes = (codes: readonly string[]) => codes.map((code) => ({ code }));
+
+/** Every code in it was read off a sleeve, but those that are missing once it is ended. */
+function inventoryFor(state: SessionState, codes: number | null): ProctorView['inventory'] {
+  const { found, foreign, ended } = state.inventory;
+  if (ended === null && codes === null) return null;
+  return {
+    of: ended?.codes ?? codes ?? 0,
+    found: asCodes(found),
+    foreign: asCodes(foreign),
+    isEnded: ended !== null,
+    missing: asCodes(ended?.missing ?? []),
+  };
+}
+
 function trialFor(state: SessionState, method: Method, context: ProctorContext): ProctorView['trial'] {
   const { trial, plan } = state;
   if (trial === null) return null;
@@ -160,6 +181,8 @@ function trialFor(state: SessionState, method: Method, context: ProctorContext):
     excerptS: Math.round((excerpt?.lengthMs ?? 0) / 1000),
     stepsDone: [...trial.stepsDone],
     step: state.paused === null ? nextStep(trial, plan) : null,
+    scannedEnds: trial.stage === 'change' ? trial.scannedEnds.length : 0,
+    undo: state.paused === null ? undoOf(trial) : null,
     stepEndsAt: state.paused === null ? stepEndsAt(trial, plan) : null,
     endsAt: state.paused === null ? endsAt : null,
     longChange: trial.stage === 'change' && mayStartAt > trial.changeStartedAt + plan.changeMs,
@@ -199,6 +222,8 @@ export function proctorViewOf(state: SessionState, method: Method, context: Proc
     trial: trialFor(state, method, context),
     nextTrial:
       state.phase === 'running' && state.trial === null && activeSeats(state).length > 0 ? nextTrial(state) : null,
+    scans: { made: state.scans.made, byHand: state.scans.byHand, wrong: state.scans.wrong },
+    inventory: inventoryFor(state, context.codesInAll ?? null),
     course: courseOf(state),
     seats: seatsFor(state, context.presence),
     levels: levelsFor(state),

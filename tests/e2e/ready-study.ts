@@ -62,9 +62,7 @@ export async function readyStudy(manager: Page, holder: Page, change: Partial<St
   ] as const) {
     const { rows }: { rows: Named[] } = await asManager('get', `/cables?q=${encodeURIComponent(name)}`);
     const cableId = rows.find((row) => row.name.includes(name))?.id ?? '';
-    const { specimens }: { specimens: { id: string; serial: string }[] } = await asManager('get',
-      `/cables/${cableId}`,
-    );
+    const { specimens }: { specimens: { id: string; serial: string }[] } = await asManager('get', `/cables/${cableId}`);
     cables.push({ cableId, specimenIds: specimens.filter((one) => one.serial === serial).map(({ id }) => id) });
   }
   const [first, second] = cables;

@@ -20,6 +20,7 @@ import type { BlindingRung } from '#shared/session/blinding-rung.ts';
 import { countedTrials, type LockedTrial, revealedDraw } from '#shared/session/counted-trials.ts';
 import type { Draw } from '#shared/session/draw.ts';
 import { truthOf } from '#shared/session/fitting.ts';
+import { handlingOf } from '#shared/session/handling.ts';
 import { listenersToldApart } from '#shared/session/listeners-told-apart.ts';
 import { type RevealedKey, revealedKey } from '#shared/session/revealed-key.ts';
 import type { SessionState } from '#shared/session/state.ts';
@@ -101,6 +102,7 @@ function sessionView(source: ReportSource, state: SessionState, key: RevealedKey
     },
     drawn: draw === null ? null : method.trials.session(draw.firstSide, namesOf(protocol)),
     reason: abandoned === undefined ? null : String(abandoned.payload.reason),
+    handling: handlingOf(state),
     trials: state.ended.map(({ trial, outcome, excerpt, seats, longChanges }) => ({
       trial,
       outcome,

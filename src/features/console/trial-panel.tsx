@@ -4,6 +4,7 @@ import { Countdown } from '../../ui/countdown.tsx';
 import { Sleeve } from '../../ui/sleeve.tsx';
 import { startsListening, stepWords, wordsAfter } from './console-words.ts';
 import { PlayLine } from './play-line.tsx';
+import { isScanning } from './use-labels.ts';
 
 type Trial = NonNullable<ProctorView['trial']>;
 type Words = { title: string; detail: string };
@@ -14,6 +15,8 @@ function wordsOf(trial: Trial, view: ProctorView): Words {
     return { title: 'Wait', detail: `resume when all is well · next: ${wordsAfterPause(trial)}` };
   if (trial.step !== null) {
     const { act, how } = stepWords(view, trial.step, code);
+    if (isScanning(view) && trial.scannedEnds === 1)
+      return { title: act, detail: 'one end is in · now the label at the other end' };
     return { title: act, detail: `${how} · next: ${wordsAfter(view, trial.step, code)}` };
   }
   if (trial.stage === 'listening')
@@ -49,7 +52,11 @@ function nameOf({ number, familiarisation, practice }: Trial): string {
 export function TrialPanel({ trial, view }: { trial: Trial; view: ProctorView }) {
   const { title, detail } = wordsOf(trial, view);
   return (
-    <section className="flex flex-1 flex-col gap-6">
+    <section
+      // Where the session stands, in one word for whoever follows the page by program.
+      data-stand={`${trial.number} ${trial.presentationNumber} ${trial.stage}`}
+      className="flex flex-1 flex-col gap-6"
+    >
       <p className="text-soft">
         <strong className="text-ink">{nameOf(trial)}</strong>
         {trial.number > 0 ? ` of ${trial.of}` : ', not counted'} · {placeOf(trial, view)}
