@@ -67,6 +67,14 @@ export const sessionEvents = {
   'practice-opened': z.strictObject({ session, ...practice.shape, excerpt: z.int(), seats: z.array(seat) }),
   /** How many answered; what they answered is kept nowhere. */
   'practice-ended': z.strictObject({ session, number: practice.shape.number, answered: z.int().min(0), of: z.int() }),
+  /** On request: the listener asked for a presentation. What was asked for lies beside the record, under its leaf. */
+  'presentation-requested': z.strictObject({
+    session,
+    trial: counted,
+    presentation: z.int().min(0),
+    seat,
+    leaf: hex32,
+  }),
   'step-confirmed': z.strictObject({ session, trial, presentation: z.int(), step: z.enum(stepKinds) }),
   ...scanEvents,
   'listening-started': z.strictObject({

@@ -1,6 +1,7 @@
 import type { Method } from '../methods/method.ts';
 import { stepKindsOf } from './change-steps.ts';
 import type { SessionEvent } from './events.ts';
+import { isOnRequest, waitsForListeners } from './on-request.ts';
 import { practiceTrial } from './practice.ts';
 import { presentationsOf } from './progress.ts';
 import type { EndedTrial, OpenTrial, SessionState } from './state.ts';
@@ -8,7 +9,12 @@ import { revealMs } from './state.ts';
 
 type Folded = Omit<SessionState, 'version'>;
 
-function startChange(trial: OpenTrial, presentation: number, at: number): OpenTrial {
+type Opened = Omit<
+  OpenTrial,
+  'presentation' | 'stage' | 'changeStartedAt' | 'stepsDone' | 'scannedEnds' | 'readyAt' | 'endsAt'
+>;
+
+function startChange(trial: Opened, presentation: number, at: number): OpenTrial {
   return {
     ...trial,
     presentation,
@@ -31,7 +37,17 @@ function endTrial(state: SessionState, ended: Omit<EndedTrial, 'excerpt' | 'seat
   return { ...state, trial: null, paused: null, ended: [...state.ended, { ...ended, excerpt, seats, longChanges }] };
 }
 
+/** The listener's turn: as long as an answer would have. */
+const asking = (trial: OpenTrial, at: number, { answerMs }: SessionState['plan']): OpenTrial => ({
+  ...trial,
+  stage: 'asking',
+  stepsDone: [],
+  scannedEnds: [],
+  endsAt: at + answerMs,
+});
+
 function afterListening(state: SessionState, trial: OpenTrial, at: number, method: Method): Folded {
+  if (isOnRequest(state, trial.trial)) return { ...state, trial: asking(trial, at, state.plan) };
   const isLast = trial.presentation + 1 >= presentationsOf(method, trial.trial).length;
   if (!isLast) return { ...state, trial: startChange(trial, trial.presentation + 1, at) };
   if (trial.trial === 0) return { ...state, trial: null, familiarisations: state.familiarisations + 1 };
@@ -45,7 +61,7 @@ function openedBy(event: Extract<SessionEvent, { kind: 'trial-opened' | 'practic
 }
 
 function pauseTrial(state: SessionState, at: number): number | null {
-  return state.trial?.stage === 'answering' && state.trial.endsAt !== null
+  return state.trial !== null && waitsForListeners(state.trial) && state.trial.endsAt !== null
     ? Math.max(0, state.trial.endsAt - at)
     : null;
 }
@@ -53,7 +69,7 @@ function pauseTrial(state: SessionState, at: number): number | null {
 function resumeTrial(state: SessionState, at: number): OpenTrial | null {
   const { trial, paused } = state;
   if (trial === null) return null;
-  if (trial.stage === 'answering') return { ...trial, endsAt: at + (paused?.remainingMs ?? state.plan.answerMs) };
+  if (waitsForListeners(trial)) return { ...trial, endsAt: at + (paused?.remainingMs ?? state.plan.answerMs) };
   return startChange(trial, trial.presentation, at);
 }
 
@@ -115,21 +131,18 @@ function fold(state: SessionState, event: SessionEvent, method: Method): Folded 
     case 'trial-opened':
     case 'practice-opened': {
       const { excerpt, seats } = event.payload;
-      const opened = { ...openedBy(event), excerpt, seats, longChanges: 0, answers: [] };
+      const opened = { ...openedBy(event), excerpt, seats, longChanges: 0, answers: [], requests: [] };
+      const trial = startChange(opened, 0, event.at);
       return {
         ...state,
         practised: opened.practice === null ? state.practised : [...state.practised, opened.practice],
-        trial: {
-          ...opened,
-          presentation: 0,
-          stage: 'change',
-          changeStartedAt: event.at,
-          stepsDone: [],
-          scannedEnds: [],
-          readyAt: event.at,
-          endsAt: null,
-        },
+        trial: isOnRequest(state, trial.trial) ? asking(trial, event.at, state.plan) : trial,
       };
+    }
+    case 'presentation-requested': {
+      const trial = openTrialOf(state, event);
+      const requests = [...trial.requests, { leaf: event.payload.leaf, label: null }];
+      return { ...state, trial: startChange({ ...trial, requests }, event.payload.presentation, event.at) };
     }
     case 'step-confirmed': {
       const trial = openTrialOf(state, event);
@@ -191,7 +204,7 @@ function fold(state: SessionState, event: SessionEvent, method: Method): Folded 
       return { ...state, paused: null, trial: resumeTrial(state, event.at) };
     case 'server-restarted': {
       const { trial } = state;
-      if (trial?.stage !== 'answering' || state.paused !== null) return state;
+      if (trial === null || !waitsForListeners(trial) || state.paused !== null) return state;
       return { ...state, trial: { ...trial, endsAt: event.at + state.plan.answerMs } };
     }
     case 'listener-left':

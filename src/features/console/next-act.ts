@@ -64,7 +64,7 @@ function actInTrial(view: ProctorView, trial: NonNullable<ProctorView['trial']>)
     const waiting = isLast ? 'Listening starts in' : `${done} in`;
     return { label: done, waiting, command: { kind: 'confirm-step', step }, step, opensAt };
   }
-  if (trial.stage === 'answering' && trial.answered === trial.expected)
+  if ((trial.stage === 'answering' || trial.stage === 'asking') && trial.answered === trial.expected)
     return now(trial.practice === null ? `Lock trial ${trial.number}` : 'End this practice', { kind: 'lock-trial' });
   return null;
 }

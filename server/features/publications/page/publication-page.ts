@@ -114,19 +114,21 @@ function session({
   trials,
 }: Report['sessions'][number]): Html {
   const times = `${startedAt === null ? 'never started' : `started ${utc(startedAt)}`}${endedAt === null ? '' : `, ended ${utc(endedAt)}`}`;
-  const rows = trials.map(({ trial, outcome, excerpt, truth, answers }) => [
+  const isAsked = trials.some(({ requested }) => requested !== null);
+  const rows = trials.map(({ trial, outcome, excerpt, truth, answers, requested }) => [
     trial,
     outcome === 'locked' ? 'counted' : outcome,
     excerpt,
     truth,
     answers.map(({ listener, choice }) => `${listener} ${choice ?? 'none'}`).join(', '),
+    ...(isAsked ? [(requested ?? []).map(({ label, times }) => `${label} ${times}`).join(', ')] : []),
   ]);
   return html`<li class="flex flex-col gap-3 border-t border-rule pt-4">
     <h3 class="text-lg">Session ${number}, ${phase}</h3>
     <p class="text-soft">${count(seated, 'listener')}, ${times}.${drawn === null ? '' : ` ${drawn}`}</p>
     ${handlingWords(handling).map((words) => html`<p class="text-soft">${words}</p>`)}
     ${reason === null ? null : html`<p class="font-semibold">Reason: ${reason}</p>`}
-    ${rows.length === 0 ? null : table(`Trials of session ${number}`, ['Trial', 'Outcome', 'Excerpt', 'Drawn', 'Answers'], rows)}
+    ${rows.length === 0 ? null : table(`Trials of session ${number}`, ['Trial', 'Outcome', 'Excerpt', 'Drawn', 'Answers', ...(isAsked ? ['Asked for'] : [])], rows)}
   </li>`;
 }
 
