@@ -15,6 +15,7 @@ import { PastRole } from './features/organisations/past-role.entity.ts';
 import { Publication } from './features/publications/publication.entity.ts';
 import { RigPreset } from './features/rig-presets/rig-preset.entity.ts';
 import { Answer } from './features/sessions/answer.entity.ts';
+import { Remark } from './features/sessions/remark.entity.ts';
 import { Seat } from './features/sessions/seat.entity.ts';
 import { Session } from './features/sessions/session.entity.ts';
 import { SignInAttempt } from './features/sign-in/sign-in-attempt.entity.ts';
@@ -53,6 +54,7 @@ export const entities = [
   Session,
   Seat,
   Answer,
+  Remark,
   CodeKey,
   DrawSecret,
   Publication,

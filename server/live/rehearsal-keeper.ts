@@ -33,6 +33,7 @@ export function rehearsalKeeper(random: Random, code: string, plan: SessionPlan)
     },
     // The memory holds the open trial's answers, and nothing else asks for them.
     saveAnswer: async () => {},
+    saveRemark: async () => {},
     record: async ({ session }, events) =>
       events.map(({ kind, at, payload }) => {
         const nonce = random.bytes('entry-nonce', 16).toString('hex');

@@ -6,6 +6,7 @@ import { levelsTables } from '../levels/levels-table.ts';
 import { truthOf } from '../session/fitting.ts';
 import type { EndedTrial, SessionState } from '../session/state.ts';
 import { cuesTable } from './cues-table.ts';
+import { remarksTables } from './remarks-tables.ts';
 
 /** A column with what it means; its name stands in the first row of the file. */
 export type TableField = {
@@ -15,7 +16,7 @@ export type TableField = {
 };
 
 export type Table = {
-  readonly name: 'sessions' | 'trials' | 'answers' | 'listeners' | 'result' | 'levels' | 'cues';
+  readonly name: 'sessions' | 'trials' | 'answers' | 'listeners' | 'result' | 'levels' | 'cues' | 'remarks';
   readonly title: string;
   readonly fields: readonly TableField[];
   readonly key: readonly string[];
@@ -44,6 +45,7 @@ export function tablesOf(study: StudyReading): Table[] {
     resultTable(study),
     ...levelsTables(study),
     ...cuesTable(study),
+    ...remarksTables(study),
   ];
 }
 

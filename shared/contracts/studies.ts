@@ -3,6 +3,7 @@ import { registeredLevels } from '../levels/registered-levels.ts';
 import { methodIds, methods } from '../methods/methods.ts';
 import { leastChangeS, rigPreset, rigs } from '../protocol/rig-preset.ts';
 import { faultsOfWays } from '../protocol/ways-to-run.ts';
+import { breaksDraft } from '../session/registered-breaks.ts';
 import { endpoint, managers } from './endpoint.ts';
 import { organisationParams, thingParams } from './organisation-params.ts';
 import { listQuery, pageOf, sortBy } from './paging.ts';
@@ -68,6 +69,8 @@ export const studyDraft = z
     confidence: z.boolean(),
     /** How level at the load is handled and measured; left out where it is not. */
     levels: registeredLevels.optional(),
+    /** After how many trials a break comes; left out where none is registered. */
+    breaks: breaksDraft.optional(),
     /** Whether what comes again within a trial is fitted from specimens of its own; left out for no. */
     separateSpecimens: z.boolean().optional(),
     codeHolderId: z.uuid('Choose the code holder'),

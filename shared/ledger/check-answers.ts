@@ -1,6 +1,7 @@
 import { answerLeaf } from '../session/answer-leaf.ts';
 import type { PayloadOf } from '../session/events.ts';
 import type { SessionState } from '../session/state.ts';
+import { remarkFaults } from './check-remarks.ts';
 import { answerName } from './publication-parts.ts';
 import type { StudyReading } from './study-reading.ts';
 import type { Verdict } from './verify.ts';
@@ -30,6 +31,7 @@ export function checkAnswers(study: StudyReading): Verdict {
   const stray = answers.find((answer) => !locked.has(answerName(answer)));
   if (stray !== undefined) faults.push(`Trial ${stray.trial}, ${stray.seat}: the record holds no such answer.`);
   if (leaves.size < answers.length) faults.push('An answer comes twice.');
+  faults.push(...remarkFaults(study));
   return { faults, held: `${locked.size} answers, each as it was when its trial locked.` };
 }
 

@@ -4,6 +4,7 @@ import type { AnswerContent } from '../session/answer-leaf.ts';
 import { revealedDraw } from '../session/counted-trials.ts';
 import type { Draw } from '../session/draw.ts';
 import { sessionsInRecord } from '../session/read-record.ts';
+import type { RemarkContent } from '../session/remark-leaf.ts';
 import { revealedKey } from '../session/revealed-key.ts';
 import { canonicalJson, type Json } from './canonical-json.ts';
 import type { Entry } from './chain.ts';
@@ -16,6 +17,8 @@ export type PartName = (typeof partNames)[number];
 export type PublicationParts = { readonly [part in PartName]: unknown } & {
   /** The protocol's versions before the one in force, in order; left out where it was never amended. */
   readonly earlierProtocols?: unknown;
+  /** What listeners said beside the trials; left out where nobody said anything. */
+  readonly remarks?: unknown;
 };
 
 /** What a session's draw came to, written out, so that nobody needs this program to read what X was. */
@@ -32,6 +35,8 @@ export type ClosedStudy = {
   readonly earlierProtocols?: readonly Protocol[];
   /** Answers held in time. Those of void trials have no leaf on the record and are left out. */
   readonly answers: readonly AnswerContent[];
+  /** What listeners said beside the trials; those of before there were any have none. */
+  readonly remarks?: readonly RemarkContent[];
 };
 
 type LockedTrial = { session: number; trial: number; leaves: readonly { seat: string }[] };
@@ -61,7 +66,7 @@ function lockedAnswers({ entries, answers }: ClosedStudy, sessionIds: ReadonlyMa
  * @throws ZodError when the record has no revealed secrets
  */
 export function publicationParts(study: ClosedStudy): PublicationParts {
-  const { entries, protocol, earlierProtocols = [] } = study;
+  const { entries, protocol, earlierProtocols = [], remarks = [] } = study;
   const method = methodOf(protocol.method);
   const states = sessionsInRecord(entries, method);
   const payloadOf = (wanted: string) => entries.find(({ kind }) => kind === wanted)?.payload;
@@ -81,13 +86,16 @@ export function publicationParts(study: ClosedStudy): PublicationParts {
     secrets,
     draws,
     answers: lockedAnswers(study, sessionIds),
+    ...(remarks.length === 0
+      ? {}
+      : { remarks: remarks.map(({ session, seat, about, said, salt }) => ({ session, seat, about, said, salt })) }),
     result: payloadOf('result-recorded')?.result ?? null,
   };
 }
 
 /** The document as it is frozen: canonical text, so that one digest names it. */
 export function publicationText(parts: PublicationParts): string {
-  const { record, protocol, earlierProtocols, secrets, draws, answers, result } = parts;
+  const { record, protocol, earlierProtocols, secrets, draws, answers, remarks, result } = parts;
   const whole = {
     format: publicationFormat,
     version: publicationVersion,
@@ -97,6 +105,7 @@ export function publicationText(parts: PublicationParts): string {
     secrets,
     draws,
     answers,
+    ...(remarks === undefined ? {} : { remarks }),
     result,
   };
   return canonicalJson(whole as unknown as Json);
@@ -123,7 +132,7 @@ export function readPublication(text: string): { parts: PublicationParts } | { f
     return { fault: `This program reads version ${publicationVersion} of the format.` };
   const absent = partNames.filter((name) => !Object.hasOwn(parts, name));
   if (absent.length > 0) return { fault: `It has no ${absent.join(', ')}.` };
-  const known: readonly string[] = [...partNames, 'earlierProtocols'];
+  const known: readonly string[] = [...partNames, 'earlierProtocols', 'remarks'];
   const unknown = Object.keys(parts).filter((name) => !known.includes(name));
   if (unknown.length > 0) return { fault: `It has a part that is not known: ${unknown.join(', ')}.` };
   return isCanonical(whole, text)

@@ -7,6 +7,7 @@ import { type RegisteredLevels, registeredLevels } from '../levels/registered-le
 import type { MethodChoices } from '../methods/method.ts';
 import { methodOf } from '../methods/methods.ts';
 import type { SessionPlan } from '../session/events.ts';
+import { breaksDraft } from '../session/registered-breaks.ts';
 import { registeredAnalysis } from './registered-analysis.ts';
 import { rigPreset, rigs } from './rig-preset.ts';
 import { chosenWays, waysToRun } from './ways-to-run.ts';
@@ -57,6 +58,8 @@ export const protocol = z.strictObject({
     programme: z.array(z.strictObject({ title: z.string(), start: z.string(), lengthS: z.int() })),
     /** How level is handled and measured; left out where it is not measured. */
     levels: registeredLevels.optional(),
+    /** After how many trials a break comes and how long it lasts; left out where none is registered. */
+    breaks: breaksDraft.optional(),
   }),
   /** The registered analysis, as data: what is run once at closing. */
   analysis: registeredAnalysis,
@@ -120,6 +123,7 @@ export function protocolFromDraft(
       answerS: draft.answerS,
       programme: draft.programme.map(({ title, start, lengthS }) => ({ title, start, lengthS })),
       ...(draft.levels === undefined ? {} : { levels: inOrder(draft.levels) }),
+      ...(draft.breaks === undefined ? {} : { breaks: draft.breaks }),
     },
     analysis: {
       ...methodOf(draft.method).registered(draft),
@@ -150,5 +154,6 @@ export function sessionPlanOf({ method, design, conduct }: Protocol): SessionPla
     ...chosenWays(design),
     programme: conduct.programme.map(({ title, start, lengthS }) => ({ title, start, lengthMs: lengthS * 1000 })),
     ...(conduct.levels === undefined ? {} : { levels: conduct.levels }),
+    ...(conduct.breaks === undefined ? {} : { breaks: conduct.breaks }),
   };
 }

@@ -2,7 +2,8 @@ import type { Method } from '../methods/method.ts';
 import type { SessionPlan } from './events.ts';
 
 /**
- * How long a session takes as listeners are told: every presentation with its change, the answers, the familiarisation.
+ * How long a session takes as listeners are told: every presentation with its change, the answers, the familiarisation,
+ * and the least of every registered break.
  *
  * @returns whole minutes, at least 1, rounded up
  */
@@ -10,5 +11,9 @@ export function sessionMinutes(plan: SessionPlan, method: Method): number {
   const longestMs = Math.max(...plan.programme.map(({ lengthMs }) => lengthMs));
   const presentationMs = plan.changeMs + longestMs;
   const trialMs = method.presentations.length * presentationMs + plan.answerMs;
-  return Math.max(1, Math.ceil((plan.trials * trialMs + method.familiarisation.length * presentationMs) / 60_000));
+  const { breaks } = plan;
+  const breakMs =
+    breaks === undefined ? 0 : Math.floor((plan.trials - 1) / breaks.trials) * breaks.leastMinutes * 60_000;
+  const heardMs = plan.trials * trialMs + method.familiarisation.length * presentationMs;
+  return Math.max(1, Math.ceil((heardMs + breakMs) / 60_000));
 }

@@ -1,6 +1,7 @@
 import { useState } from 'react';
 import type { ListenerView } from '#shared/contracts/listener-live.ts';
 import { answerTo, shortOf } from './answers.ts';
+import { BreakPage } from './break-page.tsx';
 import { Hearing } from './hearing.tsx';
 import { Question } from './question.tsx';
 import type { Seat, SeatSnapshot } from './seat.ts';
@@ -14,6 +15,7 @@ type SeatNowProps = { view: ListenerView; snapshot: SeatSnapshot; seat: Seat };
 export function SeatNow({ view, snapshot, seat }: SeatNowProps) {
   const { trial, paused } = view;
   const isAnswering = trial?.stage === 'answering' && trial.takesPart;
+  if (view.break !== null) return <BreakPage seat={seat} pause={view.break} snapshot={snapshot} />;
   if (isAnswering) return <Answering key={trial.number} view={view} snapshot={snapshot} seat={seat} />;
   return (
     <div className="flex flex-1 flex-col" role="status">

@@ -17,6 +17,7 @@ import { ReportHeads } from '../features/reports/report-heads.tsx';
 import { ReportIncidents } from '../features/reports/report-incidents.tsx';
 import { ReportListeners } from '../features/reports/report-listeners.tsx';
 import { ReportProtocol } from '../features/reports/report-protocol.tsx';
+import { ReportSaid } from '../features/reports/report-said.tsx';
 import { ReportSessions } from '../features/reports/report-sessions.tsx';
 import { WhatToSay } from '../features/reports/what-to-say.tsx';
 import { addressOf } from '../lib/call.ts';
@@ -60,6 +61,7 @@ export function Component() {
       <ReportListeners listeners={portrait.listeners} />
       <ReportChecks checks={portrait.checks} />
       <ReportCueAudit audit={report.cueAudit} />
+      <ReportSaid said={report.said} />
       <ReportFlow flow={report.flow} missingWords={report.result.missingAnswers} />
       <ReportIncidents
         voids={report.voids}

@@ -14,6 +14,7 @@ import { Construction1796149000000 } from './1796149000000-construction.ts';
 import { RigPresets1796151000000 } from './1796151000000-rig-presets.ts';
 import { Measurements1796151400000 } from './1796151400000-measurements.ts';
 import { LevelDuties1796152000000 } from './1796152000000-level-duties.ts';
+import { Remarks1796153000000 } from './1796153000000-remarks.ts';
 
 /** Every migration, oldest first. */
 export const migrations = [
@@ -33,4 +34,5 @@ export const migrations = [
   RigPresets1796151000000,
   Measurements1796151400000,
   LevelDuties1796152000000,
+  Remarks1796153000000,
 ];

@@ -19,7 +19,7 @@ import { studyEvents } from '#shared/session/study-events.ts';
 import { type Tx, withTransaction } from '../../db/transaction.ts';
 import type { Deps } from '../../deps.ts';
 import { readRecord } from '../../ledger/ledger.ts';
-import { answersOfSessions, sessionsOfStudy } from '../sessions/sessions.store.ts';
+import { answersOfSessions, remarksOfSessions, sessionsOfStudy } from '../sessions/sessions.store.ts';
 import { signedHeadsOf } from '../signed-heads/signed-heads.service.ts';
 import { protocolOf, studyOrProblem, versionsOf } from '../studies/studies.service.ts';
 import { listStudies } from '../studies/studies.store.ts';
@@ -105,6 +105,10 @@ export async function closedRecord(tx: Tx, study: Study): Promise<ClosedRecord> 
     tx,
     sessions.map(({ id }) => id),
   );
+  const remarks = await remarksOfSessions(
+    tx,
+    sessions.map(({ id }) => id),
+  );
   return {
     study,
     protocol: protocolOf(study),
@@ -118,6 +122,7 @@ export async function closedRecord(tx: Tx, study: Study): Promise<ClosedRecord> 
       confidence,
       salt,
     })),
+    remarks: remarks.map(({ sessionId, seat, about, said, salt }) => ({ session: sessionId, seat, about, said, salt })),
     rooms: new Map(sessions.map(({ number, room }) => [number, room])),
     heads: await signedHeadsOf(tx, study.id),
   };

@@ -25,7 +25,7 @@ export function ConsoleBody({ view, clockOffsetMs, isLost, actions, next, onNext
   return (
     <div className="flex min-w-0 flex-1 flex-col gap-6 px-5 py-7 lg:px-11">
       {isLost ? <LostBanner /> : null}
-      {view.paused === null ? null : <PauseBanner pause={view.paused} clockOffsetMs={clockOffsetMs} />}
+      {view.paused === null ? null : <PauseBanner pause={view.paused} view={view} clockOffsetMs={clockOffsetMs} />}
       <Scenery view={view} actions={actions} back={back} />
       <p role="alert" className="border-l-4 border-amber pl-3 font-semibold text-amber empty:hidden">
         {actions.problem}

@@ -32,6 +32,8 @@ export const isComplete = (view: ProctorView): boolean =>
 
 /** The one act that comes next, or null when the console waits for somebody else. */
 export function nextActOf(view: ProctorView): NextAct | null {
+  const rest = view.block?.break;
+  if (rest) return { ...now('Go on', { kind: 'resume' }), waiting: 'The break ends in', opensAt: rest.leastEndsAt };
   if (view.paused !== null) return now('Resume', { kind: 'resume' });
   if (view.phase === 'planned' && view.cautionsConfirmed) return now('Open seating', { kind: 'open-seating' });
   if (view.phase === 'seating' && isAnybodySeated(view))
@@ -43,6 +45,7 @@ export function nextActOf(view: ProctorView): NextAct | null {
 function actBetweenTrials(view: ProctorView): NextAct | null {
   if (isComplete(view)) return now('Finish the session', { kind: 'finish' });
   if (!isAnybodySeated(view)) return null;
+  if (view.block?.isBreakDue) return now('Begin the break', { kind: 'pause', reason: 'break' });
   if (!view.familiarised) return now('Begin the familiarisation', { kind: 'begin-familiarisation' });
   return view.nextTrial === null ? null : now(`Begin trial ${view.nextTrial}`, { kind: 'begin-trial' });
 }

@@ -3,6 +3,7 @@ import type { ProctorView } from '#shared/contracts/proctor-live.ts';
 import { Actions } from '../../ui/actions.tsx';
 import { Button } from '../../ui/button.tsx';
 import { DeviationDialog } from './deviation-dialog.tsx';
+import { EarlyDialog } from './early-dialog.tsx';
 import { EndDialog } from './end-dialog.tsx';
 import { isComplete } from './next-act.ts';
 import type { ConsoleActions } from './use-console.ts';
@@ -17,7 +18,7 @@ type SideActsProps = {
   keys: readonly [boolean, (isOn: boolean) => void];
 };
 
-type Asked = 'void' | 'deviation' | 'end';
+type Asked = 'early' | 'void' | 'deviation' | 'end';
 type SideAct = { label: string; letter: string; run: () => void };
 
 // A phone has no Alt key to speak of.
@@ -42,6 +43,7 @@ export function SideActs({ view, actions, onNext, keys: [areKeysOn, setKeysOn] }
         ]
       : []),
     ...(isRunning && view.trial !== null ? [{ label: 'Void this trial', letter: 'v', run: ask('void') }] : []),
+    ...(view.block?.break ? [{ label: 'Go on early', letter: 'g', run: ask('early') }] : []),
     { label: 'Record a deviation', letter: 'd', run: ask('deviation') },
   ];
   // A complete session is finished by its next act; there is nothing left to abandon.
@@ -82,6 +84,7 @@ export function SideActs({ view, actions, onNext, keys: [areKeysOn, setKeysOn] }
         </label>
       </Actions>
       <VoidDialog {...dialog('void')} isFamiliarisation={view.trial?.familiarisation ?? false} />
+      <EarlyDialog {...dialog('early')} why={view.block?.break?.why ?? ''} />
       <DeviationDialog {...dialog('deviation')} />
       <EndDialog {...dialog('end')} view={view} />
     </>

@@ -14,6 +14,7 @@ import { ReportIncidents } from './report-incidents.tsx';
 import { ReportListeners } from './report-listeners.tsx';
 import { ReportProtocol } from './report-protocol.tsx';
 import { ReportRecord } from './report-record.tsx';
+import { ReportSaid } from './report-said.tsx';
 import { ReportSessions } from './report-sessions.tsx';
 import { WhatToSay } from './what-to-say.tsx';
 
@@ -49,6 +50,7 @@ export function ReportView({ report, back, actions, proofs }: ReportViewProps) {
       <ReportListeners listeners={portrait.listeners} />
       <ReportChecks checks={portrait.checks} />
       <ReportCueAudit audit={report.cueAudit} />
+      <ReportSaid said={report.said} />
       <ReportFlow flow={report.flow} missingWords={result.missingAnswers} />
       <ReportIncidents
         voids={report.voids}

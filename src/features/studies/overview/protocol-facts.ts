@@ -3,6 +3,7 @@ import { methodOf } from '#shared/methods/methods.ts';
 import { analysisFacts } from '#shared/protocol/analysis-facts.ts';
 import { presetFacts } from '#shared/protocol/preset-facts.ts';
 import { waysFacts } from '#shared/protocol/ways-to-run.ts';
+import { breakFacts } from '#shared/session/registered-breaks.ts';
 import { formatCount } from '../../../lib/format.ts';
 import { percentOfPerMille, rigWords } from '../study-words.ts';
 
@@ -38,6 +39,7 @@ export function protocolFacts({ draft, cableNames, codeHolder }: Study): Protoco
     ...presetFacts(draft.rigPreset),
     words('Chain', draft.chain),
     words('Every change', `${draft.changeS} s, real or not`),
+    ...breakFacts(draft.breaks),
     words('Answer window', `${draft.answerS} s`),
     words('Confidence', draft.confidence ? 'asked with every answer' : 'not asked'),
     words('Code holder', codeHolder),

@@ -19,6 +19,7 @@ const {
   changeS,
   answerS,
   programme,
+  breaks: registered,
 } = studyDraft.shape;
 
 /** The part of a draft that decides how much listening there is; it is planned as soon as this part is sound. */
@@ -34,6 +35,7 @@ const listening = z.object({
   changeS,
   answerS,
   programme: z.array(z.object({ lengthS: programme.element.shape.lengthS })).min(1),
+  breaks: registered.catch(undefined),
 });
 
 export type Plan = {
@@ -88,7 +90,10 @@ export function planOf(values: Partial<StudyFormValues>): Plan | null {
     listenMs: meanExcerptMs(draft.programme, draft.trials),
     answerMs: draft.answerS * 1000,
     resetMs: 0,
-    breaks,
+    breaks:
+      draft.breaks === undefined
+        ? breaks
+        : { everyTrials: draft.breaks.trials, lengthMs: draft.breaks.leastMinutes * 60_000 },
   });
   return {
     method: chosen,
