@@ -6,6 +6,7 @@ import { Listener } from './features/attendances/listener.entity.ts';
 import { Audit } from './features/audits/audit.entity.ts';
 import { Cable } from './features/cables/cable.entity.ts';
 import { Specimen } from './features/cables/specimen.entity.ts';
+import { Evidence } from './features/evidence/evidence.entity.ts';
 import { Invitation } from './features/invitations/invitation.entity.ts';
 import { LevelDuty } from './features/levels/level-duty.entity.ts';
 import { Measurement } from './features/measurements/measurement.entity.ts';
@@ -16,6 +17,7 @@ import { Publication } from './features/publications/publication.entity.ts';
 import { RigPreset } from './features/rig-presets/rig-preset.entity.ts';
 import { Answer } from './features/sessions/answer.entity.ts';
 import { Remark } from './features/sessions/remark.entity.ts';
+import { PresentationRequest } from './features/sessions/request.entity.ts';
 import { Seat } from './features/sessions/seat.entity.ts';
 import { Session } from './features/sessions/session.entity.ts';
 import { SignInAttempt } from './features/sign-in/sign-in-attempt.entity.ts';
@@ -41,6 +43,7 @@ export const entities = [
   Cable,
   Specimen,
   Measurement,
+  Evidence,
   Study,
   ProtocolVersion,
   RecordEntry,
@@ -55,6 +58,7 @@ export const entities = [
   Seat,
   Answer,
   Remark,
+  PresentationRequest,
   CodeKey,
   DrawSecret,
   Publication,

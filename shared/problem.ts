@@ -9,6 +9,7 @@ export const problems = {
   'not-found': { status: 404, title: 'There is nothing here' },
   'wrong-phase': { status: 409, title: 'Not at this point' },
   'stale-view': { status: 409, title: 'The session has moved on' },
+  'wrong-label': { status: 409, title: 'That is another cable' },
   'already-taken': { status: 409, title: 'That is already in use' },
   'too-early': { status: 409, title: 'Not yet' },
   'too-late': { status: 409, title: 'Too late' },

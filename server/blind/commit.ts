@@ -22,7 +22,8 @@ export function drawCodes(random: Random, count: number): string[] {
   return drawn;
 }
 
-export type SpecimenToCode = { readonly specimen: string; readonly serial: string; readonly cable: 0 | 1 };
+/** The cable by its place in the protocol: 0 and 1 for the two of the question, check cables after them. */
+export type SpecimenToCode = { readonly specimen: string; readonly serial: string; readonly cable: number };
 
 /** Draws a study's blind codes, keeps the code key, and returns the commitment to it. */
 export async function commitCodeKey(

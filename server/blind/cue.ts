@@ -1,5 +1,6 @@
 import type { Method } from '#shared/methods/method.ts';
 import { codeFitted } from '#shared/session/fitting.ts';
+import type { SessionState } from '#shared/session/state.ts';
 import type { Tx } from '../db/transaction.ts';
 import { OpeningProof } from './sealed.ts';
 import { readCodeKey, readDrawSecret } from './secrets.store.ts';
@@ -10,10 +11,8 @@ export type CueQuestion = {
   /** The revealed contributions in the order in which the record lists them. */
   readonly contributions: readonly string[];
   readonly method: Method;
-  /** Trials and spares of a session. */
-  readonly trials: number;
-  /** Whether the protocol registers separate specimens. */
-  readonly isSeparate: boolean;
+  /** Its plan, and the void trials that spares stand for. */
+  readonly state: Pick<SessionState, 'plan' | 'ended'>;
   /** From 1; 0 is the familiarisation trial. */
   readonly trial: number;
   readonly presentation: string;
@@ -26,4 +25,12 @@ export async function cueFor(tx: Tx, question: CueQuestion): Promise<string> {
   const draw = await readDrawSecret(tx, question.sessionId);
   if (codeKey === null || draw === null) throw new Error('a session runs without its secrets');
   return codeFitted({ ...question, secret: draw.open(proof).secret, rows: codeKey.open(proof).rows });
+}
+
+/** The codes that stand on a study's sleeves, in the order of their figures: which there are, and nothing of what they are. */
+export async function codesOf(tx: Tx, studyId: string): Promise<string[]> {
+  const codeKey = await readCodeKey(tx, studyId);
+  if (codeKey === null) throw new Error('a session runs without its secrets');
+  const { rows } = codeKey.open(new OpeningProof('cue'));
+  return rows.map(({ code }) => code).sort();
 }

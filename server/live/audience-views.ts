@@ -1,5 +1,6 @@
 import { type ListenerView, type LockReceipt, listenerView } from '#shared/contracts/listener-live.ts';
 import { type ProctorView, proctorView } from '#shared/contracts/proctor-live.ts';
+import { isInventoryDue } from '#shared/session/decide-scan.ts';
 import { listenerViewOf, type Presence, proctorViewOf } from '#shared/session/views.ts';
 import type { Deps } from '../deps.ts';
 import { joinOf } from './join.ts';
@@ -45,6 +46,7 @@ export async function consoleViewOf(
       room: session.room,
       now: clock.now(),
       code: await keeper.codeToFit(memory),
+      codesInAll: isInventoryDue(state) ? (await keeper.codes(memory)).length : null,
       join: isOpen && session.code !== null ? await joinOf(config.publicUrl, session.code) : null,
       presence,
       entries: memory.entries,

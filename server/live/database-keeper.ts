@@ -4,15 +4,17 @@ import { Problem } from '#shared/problem.ts';
 import { sessionPlanOf } from '#shared/protocol/protocol.ts';
 import { contributionsOf } from '#shared/session/counted-trials.ts';
 import type { SessionPlan } from '#shared/session/events.ts';
+import { studyMark } from '#shared/session/label-text.ts';
 import { presentationNow } from '#shared/session/progress.ts';
-import { commitDraw, cueFor } from '../blind/index.ts';
+import { codesOf, commitDraw, cueFor } from '../blind/index.ts';
 import { type Tx, withTransaction } from '../db/transaction.ts';
 import type { Deps } from '../deps.ts';
 import { labelOf, noteSeated } from '../features/attendances/attendances.store.ts';
 import { dropReminders, tellCancelled } from '../features/attendances/telling.service.ts';
+import { insertRequest } from '../features/sessions/requests.store.ts';
 import * as store from '../features/sessions/sessions.store.ts';
 import { protocolOf } from '../features/studies/studies.service.ts';
-import { lockStudyRow, studyById, updateStudy } from '../features/studies/studies.store.ts';
+import { lockStudyRow, studiesOf, studyById, updateStudy } from '../features/studies/studies.store.ts';
 import { append } from '../ledger/ledger.ts';
 import { newSessionCode } from './join.ts';
 import type { Keeper, Keeping } from './keeper.ts';
@@ -22,6 +24,11 @@ import { afterEvents, type SessionMemory } from './session-memory.ts';
 export function databaseKeeper(deps: Deps): Keeper {
   return {
     keep: (work) => withTransaction(deps.db, (tx) => work(keepingIn(tx, deps))),
+    codes: async ({ session }) => codesOf(deps.db.manager, session.studyId),
+    titleOfMark: async ({ session }, mark) => {
+      const studies = await studiesOf(deps.db.manager, session.organisationId);
+      return studies.find(({ id }) => studyMark(id) === mark)?.title ?? null;
+    },
     codeToFit: async ({ state, session, method }) => {
       const presentation = presentationNow(state, method);
       if (presentation === null || state.trial === null) return null;
@@ -30,8 +37,7 @@ export function databaseKeeper(deps: Deps): Keeper {
         sessionId: session.id,
         contributions: contributionsOf(state),
         method,
-        trials: state.plan.trials + state.plan.spares,
-        isSeparate: state.plan.separateSpecimens === true,
+        state,
         trial: state.trial.trial,
         presentation,
       });
@@ -82,6 +88,7 @@ function keepingIn(tx: Tx, deps: Deps): Keeping {
       if (isClosed(state)) throw new Problem('too-late', 'The study is closed; nothing can be added to it any more.');
       await store.saveRemark(tx, row);
     },
+    saveRequest: (row) => insertRequest(tx, row),
     record: async (memory, events) => {
       const { studyId, id, number } = memory.session;
       const entries = await append(

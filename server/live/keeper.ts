@@ -2,6 +2,7 @@ import type { Entry } from '#shared/ledger/chain.ts';
 import type { SessionEvent } from '#shared/session/events.ts';
 import type { Answer } from '../features/sessions/answer.entity.ts';
 import type { Remark } from '../features/sessions/remark.entity.ts';
+import type { PresentationRequest } from '../features/sessions/request.entity.ts';
 import type { Seat } from '../features/sessions/seat.entity.ts';
 import type { SessionMemory } from './session-memory.ts';
 
@@ -20,6 +21,8 @@ export type Keeping = {
   saveAnswer(row: Answer): Promise<void>;
   /** @throws Problem `too-late` once the study is closed */
   saveRemark(row: Remark): Promise<void>;
+  /** Keeps what was asked for, beside the record. */
+  saveRequest(row: PresentationRequest): Promise<void>;
   /** Puts events on the record. */
   record(memory: SessionMemory, events: readonly SessionEvent[]): Promise<Entry[]>;
 };
@@ -30,4 +33,8 @@ export type Keeper = {
   keep<T>(work: (keeping: Keeping) => Promise<T>): Promise<T>;
   /** The blind code of the presentation that is being fitted or heard, for the proctor alone. */
   codeToFit(memory: SessionMemory): Promise<string | null>;
+  /** Every code that the study's sleeves bear, in their order, and nothing of what they stand for. */
+  codes(memory: SessionMemory): Promise<readonly string[]>;
+  /** The neutral title of the organisation's study whose labels bear a mark; null when there is none. */
+  titleOfMark(memory: SessionMemory, mark: string): Promise<string | null>;
 };

@@ -6,14 +6,21 @@ import { contributionsOf } from '#shared/session/counted-trials.ts';
 import type { SessionPlan } from '#shared/session/events.ts';
 import { codeFitted } from '#shared/session/fitting.ts';
 import { presentationNow } from '#shared/session/progress.ts';
+import { firstCheckCable } from '#shared/session/trial-kinds.ts';
 import { drawCodes } from '../blind/index.ts';
 import type { Random } from '../deps.ts';
 import type { Keeper, Keeping } from './keeper.ts';
 
-/** A rehearsal's invented codes: as few specimens of either cable as its plan needs, and nothing behind them. */
-function inventedKey(random: Random, { separateSpecimens }: SessionPlan) {
+/** A rehearsal's invented codes: as few specimens of every cable as its plan needs, and nothing behind them. */
+function inventedKey(random: Random, { checks, separateSpecimens }: SessionPlan) {
   const ofEach = separateSpecimens ? leastSeparate : 1;
-  return drawCodes(random, 2 * ofEach).map((code, index) => ({ code, specimen: '', serial: '', cable: index % 2 }));
+  const cables = firstCheckCable + (checks?.steps.length ?? 0);
+  return drawCodes(random, cables * ofEach).map((code, index) => ({
+    code,
+    specimen: '',
+    serial: '',
+    cable: index % cables,
+  }));
 }
 
 /** Keeps a rehearsal in memory alone: invented codes, a draw of its own, and no record. */
@@ -31,9 +38,10 @@ export function rehearsalKeeper(random: Random, code: string, plan: SessionPlan)
       seats += 1;
       return { ...seat, label: `L${String(seats).padStart(2, '0')}` };
     },
-    // The memory holds the open trial's answers, and nothing else asks for them.
+    // The memory holds the open trial's answers and requests, and nothing else asks for them.
     saveAnswer: async () => {},
     saveRemark: async () => {},
+    saveRequest: async () => {},
     record: async ({ session }, events) =>
       events.map(({ kind, at, payload }) => {
         const nonce = random.bytes('entry-nonce', 16).toString('hex');
@@ -50,6 +58,8 @@ export function rehearsalKeeper(random: Random, code: string, plan: SessionPlan)
   };
   return {
     keep: (work) => work(keeping),
+    codes: async () => rows.map(({ code }) => code).sort(),
+    titleOfMark: async () => null,
     codeToFit: async ({ state, method }) => {
       const presentation = presentationNow(state, method);
       if (presentation === null || state.trial === null) return null;
@@ -58,8 +68,7 @@ export function rehearsalKeeper(random: Random, code: string, plan: SessionPlan)
         rows,
         contributions: contributionsOf(state),
         method,
-        trials: state.plan.trials + state.plan.spares,
-        isSeparate: state.plan.separateSpecimens === true,
+        state,
         trial: state.trial.trial,
         presentation,
       });

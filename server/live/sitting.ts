@@ -3,6 +3,7 @@ import type { ProctorCommand, ProctorView } from '#shared/contracts/proctor-live
 import type { RemarkCommand } from '#shared/contracts/remarks.ts';
 import { Problem } from '#shared/problem.ts';
 import { decide, type SessionCommand } from '#shared/session/decide.ts';
+import { takesAnswers } from '#shared/session/on-request.ts';
 import { dueAt } from '#shared/session/progress.ts';
 import type { Deps } from '../deps.ts';
 import type { Seat } from '../features/sessions/seat.entity.ts';
@@ -14,11 +15,22 @@ import { consoleViewOf, phoneViewOf } from './audience-views.ts';
 import { databaseKeeper } from './database-keeper.ts';
 import type { Keeper, Keeping, SeatLink } from './keeper.ts';
 import { remarkRow } from './remarks.ts';
+import { afterRequest, isHeldRequest, type RequestCommand, requestDecided, requestRow } from './requests.ts';
+import { scanned } from './scanning.ts';
 import { afterAnswer, afterEvents, heldOf, loadMemory, type SessionMemory } from './session-memory.ts';
 import { Watchers } from './watchers.ts';
 
+/** What means the same whatever has happened since the view it was sent on: a note, and a label held up. */
+const anyTime: readonly ProctorCommand['kind'][] = ['record-deviation', 'scan-label'];
+
 /** What an action comes to: a command, what to remember once it is kept, and what to answer. */
-type Act<T> = { command: SessionCommand; stored?: () => void; result: T };
+type Act<T> = {
+  command: SessionCommand;
+  /** What is kept beside the record, once the command is not refused. */
+  alongside?: () => Promise<void>;
+  stored?: () => void;
+  result: T;
+};
 
 /**
  * One session while people sit in it: a queue in which one thing happens at a time. A command is parsed and authorised
@@ -69,19 +81,47 @@ export class Sitting {
 
   command(command: ProctorCommand): Promise<void> {
     return this.#inTurn(async () => {
-      if (command.kind !== 'record-deviation' && command.expectVersion !== this.#memory.state.version)
+      if (!anyTime.includes(command.kind) && command.expectVersion !== this.#memory.state.version)
         throw new Problem('stale-view', 'The session has moved on; look at the screen and try again.');
       if (command.kind === 'open-seating') await this.#openSeating();
-      else await this.#do(command);
+      else if (command.kind === 'scan-label') await this.#scan(command);
+      else if (command.kind === 'end-inventory') {
+        const codes = await this.#keeper.codes(this.#memory);
+        await this.#do({ kind: 'note-inventory-end', codes, reason: command.reason });
+      } else await this.#do(command);
     });
   }
 
-  fromPhone(seat: string, command: Exclude<ListenerCommand, AnswerCommand>): Promise<void> {
+  /** A wrong label is on the record before it is refused. */
+  async #scan(command: Extract<ProctorCommand, { kind: 'scan-label' }>): Promise<void> {
+    const { command: noted, refusal } = await scanned(this.#memory, this.#keeper, command);
+    await this.#do(noted);
+    if (refusal !== null) throw refusal;
+  }
+
+  fromPhone(seat: string, command: Exclude<ListenerCommand, AnswerCommand | RequestCommand>): Promise<void> {
     return this.#inTurn(() =>
       command.kind === 'exit' || command.kind === 'fatigue'
         ? this.#keepRemark(seat, command)
         : this.#do({ ...command, seat }),
     );
+  }
+
+  /** On request: keeps what was asked for beside the record and its leaf on it, and begins the change. */
+  request(seat: string, command: RequestCommand): Promise<void> {
+    return this.#inTurn(async () => {
+      const row = requestRow(this.#memory, seat, command);
+      if (isHeldRequest(this.#memory, row)) return;
+      const stored = () => {
+        this.#memory = afterRequest(this.#memory, row);
+      };
+      await this.#perform(async (keeping) => ({
+        command: requestDecided(row),
+        alongside: () => keeping.saveRequest(row),
+        stored,
+        result: undefined,
+      }));
+    });
   }
 
   /** Stores an answer durably, then acknowledges it. A repeat is acknowledged again; an older revision changes nothing. */
@@ -90,7 +130,8 @@ export class Sitting {
       requireAnswerable(this.#memory, seat, command);
       const { trial } = this.#memory.state;
       if (trial === null || trial.trial !== command.trial) return this.#takeLate(seat, command);
-      if (trial.stage !== 'answering') throw new Problem('too-early', 'Answers open after the last presentation.');
+      if (!takesAnswers(trial, this.#memory.method))
+        throw new Problem('too-early', 'Answers open after the last presentation.');
       const known = this.#memory.held.get(seat);
       if (known !== undefined && known.revision >= command.revision) return known;
       const row = answerRow(this.#memory, seat, command, { late: false, at: this.#deps.clock.now() });
@@ -213,8 +254,9 @@ export class Sitting {
    */
   async #perform<T>(act: (keeping: Keeping) => Promise<Act<T>>): Promise<T> {
     const { events, entries, stored, result } = await this.#keeper.keep(async (keeping) => {
-      const { command, stored, result } = await act(keeping);
+      const { command, alongside, stored, result } = await act(keeping);
       const events = decide(this.#memory.state, command, this.#deps.clock.now());
+      await alongside?.();
       const entries = events.length === 0 ? [] : await keeping.record(this.#memory, events);
       return { events, entries, stored, result };
     });

@@ -93,7 +93,7 @@ export class BundleReading {
 
 /** Every name that a bundle with these heads and keys may hold. */
 function knownNames(heads: z.output<typeof headsShape>): Set<string> {
-  const tables = ['sessions', 'trials', 'answers', 'listeners', 'result', 'levels', 'cues', 'remarks'].map(
+  const tables = ['sessions', 'trials', 'answers', 'listeners', 'requests', 'result', 'levels', 'cues', 'remarks'].map(
     (name) => `${name}.csv`,
   );
   return new Set([

@@ -4,7 +4,7 @@ import { endpoint, managers } from './endpoint.ts';
 import { organisationParams, thingParams } from './organisation-params.ts';
 import { listQuery, pageOf, sortBy } from './paging.ts';
 
-export const cableKinds = ['loudspeaker', 'interconnect', 'headphone', 'other'] as const;
+export const cableKinds = ['loudspeaker', 'interconnect', 'headphone', 'check', 'other'] as const;
 
 /** What may be typed about a cable (a design); lengths in millimetres, 1 mm to 1 km. */
 export const cableDraft = z.strictObject({

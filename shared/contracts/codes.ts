@@ -22,13 +22,17 @@ export type CodesStatus = z.output<typeof codesStatus>;
 /** The code holder's sheet: which code belongs on which specimen. Sent to the code holder alone; each sending is on the record. */
 export const codeSheet = z.strictObject({
   title: z.string(),
+  /** The study's mark on every label. */
+  mark: z.string(),
   rows: z.array(
     z.strictObject({
       code: z.string(),
       cable: z.string(),
       serial: z.string(),
-      scanText: z.string(),
-      qrSvg: z.string(),
+      /** The two labels, one for either end. */
+      labels: z.array(
+        z.strictObject({ end: z.union([z.literal(1), z.literal(2)]), scanText: z.string(), qrSvg: z.string() }),
+      ),
     }),
   ),
 });

@@ -17,6 +17,10 @@ export type Caution = (typeof cautions)[number];
 export const voidReasons = ['wrong-cable', 'noise', 'drop-out', 'listener-request', 'tool-failure', 'safety'] as const;
 export type VoidReason = (typeof voidReasons)[number];
 
+/** How a label's text came in. */
+export const scannedBy = ['scanner', 'camera', 'typed'] as const;
+export type ScannedBy = (typeof scannedBy)[number];
+
 export const pauseReasons = ['break', 'trouble'] as const;
 
 /** What the console may send. `expectVersion` is the version of the view that the proctor acted on. */
@@ -27,6 +31,16 @@ export const proctorCommand = z.discriminatedUnion('kind', [
   z.strictObject({ kind: z.literal('begin-familiarisation'), ...version }),
   z.strictObject({ kind: z.literal('begin-trial'), ...version }),
   z.strictObject({ kind: z.literal('confirm-step'), ...version, step: z.enum(stepKinds) }),
+  /** What a scanner, a camera or a person read off a label: at the step for it, or at the inventory. */
+  z.strictObject({ kind: z.literal('scan-label'), ...version, text: z.string().max(64), by: z.enum(scannedBy) }),
+  z.strictObject({
+    kind: z.literal('confirm-by-hand'),
+    ...version,
+    reason: say(200).min(3, 'Say in a word why it is not scanned'),
+  }),
+  z.strictObject({ kind: z.literal('undo-step'), ...version }),
+  /** The reason is needed where something is missing. */
+  z.strictObject({ kind: z.literal('end-inventory'), ...version, reason: say(300) }),
   z.strictObject({ kind: z.literal('lock-trial'), ...version }),
   z.strictObject({
     kind: z.literal('void-trial'),
@@ -88,17 +102,27 @@ export const proctorView = z.strictObject({
       number: z.int(),
       of: z.int(),
       familiarisation: z.boolean(),
-      stage: z.enum(['change', 'listening', 'answering']),
+      /** *Asking* is the listener's turn on request: nothing here tells what is asked for, or whether answers are open. */
+      stage: z.enum(['change', 'listening', 'asking', 'answering']),
       presentationNumber: z.int(),
+      /** On request the most that the trial may have. */
       presentations: z.int(),
+      onRequest: z.boolean(),
       /** The blind code to be fitted, during a change and while it is heard. */
       code: z.string().nullable(),
       excerpt: z.string(),
+      /** From where it is played, as the programme says; empty for its beginning. */
+      excerptStart: z.string(),
+      excerptS: z.int(),
       stepsDone: z.array(z.enum(stepKinds)),
       /** The next step, or null when none is to be confirmed. */
       step: z.enum(stepKinds).nullable(),
       /** From when that step may be confirmed; the last one waits for `endsAt` besides. */
       stepEndsAt: time.nullable(),
+      /** How many ends of the cable that is in are scanned; 0 where none is to be. */
+      scannedEnds: z.int(),
+      /** The step that would be taken back, or null when none can be. */
+      undo: z.enum(stepKinds).nullable(),
       /** Change: when listening may start. Listening: when it ends. Answering: when the window ends. */
       endsAt: time.nullable(),
       longChange: z.boolean(),
@@ -107,6 +131,19 @@ export const proctorView = z.strictObject({
     })
     .nullable(),
   nextTrial: z.int().nullable(),
+  /** What was scanned so far, confirmed by hand, and refused. */
+  scans: z.strictObject({ made: z.int(), byHand: z.int(), wrong: z.int() }),
+  /** The sleeves gone through once more after the last trial; null where none are. */
+  inventory: z
+    .strictObject({
+      /** How many codes the study has. */
+      of: z.int(),
+      found: z.array(z.strictObject({ code: z.string() })),
+      foreign: z.array(z.strictObject({ code: z.string() })),
+      isEnded: z.boolean(),
+      missing: z.array(z.strictObject({ code: z.string() })),
+    })
+    .nullable(),
   course: z.array(z.strictObject({ number: z.int(), state: z.enum(['locked', 'void', 'open', 'now']) })),
   seats: z.array(
     z.strictObject({

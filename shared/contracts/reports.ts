@@ -18,6 +18,16 @@ export const reportRow = z.strictObject({
 });
 export type ReportRow = z.output<typeof reportRow>;
 
+/** A rate with its counts and its limits at 95 %, for display alone. */
+export const countedRate = z.strictObject({
+  label: z.string(),
+  counted: z.int(),
+  due: z.int(),
+  missing: z.int(),
+  interval: z.strictObject({ lower: z.number(), upper: z.number() }).nullable(),
+});
+export type CountedRate = z.output<typeof countedRate>;
+
 const chanceBar = z.strictObject({ count: z.int(), chance: z.number() });
 
 /** The report of a closed study. Everything in it is computed from the record and what the closing revealed. */
@@ -32,6 +42,8 @@ export const report = z.strictObject({
   finding,
   result: registeredResult,
   nullDistribution: z.array(chanceBar),
+  /** Exploratory: counts and limits, never a p. */
+  byExcerpt: z.array(z.strictObject({ title: z.string(), trials: z.int(), rates: z.array(countedRate) })),
   cueAudit: portrayedCueAudit,
   rung: z.strictObject({ name: z.string(), why: z.string() }),
   /** The gap between presentations and the blinding rung, each in a sentence: part of the finding’s first lines. */
@@ -66,6 +78,21 @@ export const report = z.strictObject({
       /** The session's draw in words: which cable bore which label; null when nothing was presented. */
       drawn: z.string().nullable(),
       reason: z.string().nullable(),
+      /** How cables were told apart by hand: labels scanned, steps taken back, the inventory. */
+      handling: z.strictObject({
+        scanned: z.int(),
+        byHand: z.int(),
+        wrong: z.int(),
+        undone: z.int(),
+        inventory: z
+          .strictObject({
+            codes: z.int(),
+            missing: z.array(z.string()),
+            foreign: z.array(z.string()),
+            reason: z.string(),
+          })
+          .nullable(),
+      }),
       trials: z.array(
         z.strictObject({
           trial: z.int(),
@@ -74,6 +101,8 @@ export const report = z.strictObject({
           truth: z.string(),
           answers: z.array(z.strictObject({ listener: z.string(), choice: z.string().nullable() })),
           longChanges: z.int(),
+          /** How often each label was asked for; null where presentations came in a fixed order. */
+          requested: z.array(z.strictObject({ label: z.string(), times: z.int() })).nullable(),
         }),
       ),
     }),

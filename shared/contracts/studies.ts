@@ -4,6 +4,7 @@ import { methodIds, methods } from '../methods/methods.ts';
 import { leastChangeS, rigPreset, rigs } from '../protocol/rig-preset.ts';
 import { faultsOfWays } from '../protocol/ways-to-run.ts';
 import { breaksDraft } from '../session/registered-breaks.ts';
+import { checkDraft, checkFaults } from './check-draft.ts';
 import { endpoint, managers } from './endpoint.ts';
 import { organisationParams, thingParams } from './organisation-params.ts';
 import { listQuery, pageOf, sortBy } from './paging.ts';
@@ -54,6 +55,8 @@ export const studyDraft = z
     /** Whom the listeners are a sample of; left out or empty where nothing is said about people in general. */
     samplingFrame: line(160).optional(),
     cables: z.tuple([chosenCable, chosenCable]),
+    /** Known differences among the trials; left out for none. */
+    checks: checkDraft.optional(),
     sessions: whole(1, 20, 'sessions'),
     listenersPerSession: whole(1, 24, 'listeners'),
     trials: whole(5, 60, 'trials'),
@@ -73,6 +76,8 @@ export const studyDraft = z
     breaks: breaksDraft.optional(),
     /** Whether what comes again within a trial is fitted from specimens of its own; left out for no. */
     separateSpecimens: z.boolean().optional(),
+    /** A single listener asks for what is presented; left out where everybody hears a fixed order. */
+    onRequest: z.strictObject({ most: whole(1, 30, 'presentations') }).optional(),
     codeHolderId: z.uuid('Choose the code holder'),
   })
   .check((check) => {
@@ -104,6 +109,9 @@ export const studyDraft = z
         path: ['attribute'],
         message: isAsked ? 'Name it in a word or two, such as bass' : `${methods[method].name} asks for no attribute`,
       });
+    const { checks } = check.value;
+    for (const { path, message } of checks === undefined ? [] : checkFaults(checks, check.value))
+      check.issues.push({ code: 'custom', input: checks, path: ['checks', ...path], message });
     const { rig, rigPreset: preset, changeS } = check.value;
     if (preset !== undefined && preset.kind !== rig)
       check.issues.push({

@@ -11,10 +11,12 @@ export const domains = {
   entry: 'fairlead/entry/1',
   answer: 'fairlead/answer/1',
   remark: 'fairlead/remark/1',
+  request: 'fairlead/request/1',
   contribution: 'fairlead/contribution/1',
   drawSecret: 'fairlead/draw-secret/1',
   codeKey: 'fairlead/code-key/1',
   drawSeed: 'fairlead/draw-seed/1',
+  studyMark: 'fairlead/study-mark/1',
 } as const;
 export type Domain = keyof typeof domains;
 

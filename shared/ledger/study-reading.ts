@@ -6,8 +6,10 @@ import { type Protocol, protocol } from '../protocol/protocol.ts';
 import type { AnswerContent } from '../session/answer-leaf.ts';
 import { sessionsInRecord } from '../session/read-record.ts';
 import type { RemarkContent } from '../session/remark-leaf.ts';
+import type { RequestContent } from '../session/request-leaf.ts';
 import { type RevealedKey, revealedKey } from '../session/revealed-key.ts';
 import type { SessionState } from '../session/state.ts';
+import { trialKind } from '../session/trial-kinds.ts';
 import type { Entry } from './chain.ts';
 import type { PublicationParts, PublishedDraw } from './publication-parts.ts';
 
@@ -31,6 +33,8 @@ const draw = z.strictObject({
   firstSide: z.union([z.literal(0), z.literal(1)]),
   specimens: z.tuple([z.int(), z.int()]),
   truths: z.array(z.string()),
+  kinds: z.array(trialKind).optional(),
+  checkSpecimens: z.array(z.int()).optional(),
   separate: z.strictObject({ specimen: z.int(), deals: z.array(z.int()).optional() }).optional(),
 });
 
@@ -56,6 +60,15 @@ const remark = z.strictObject({
     }),
     z.strictObject({ fatigue: z.enum(fatigues) }),
   ]),
+  salt: hex(16),
+});
+
+const request = z.strictObject({
+  session: z.string(),
+  seat: z.string(),
+  trial: z.int(),
+  presentation: z.int(),
+  label: z.string(),
   salt: hex(16),
 });
 
@@ -99,6 +112,9 @@ export class StudyReading {
 
   readonly remarks = once((): RemarkContent[] =>
     this.parts.remarks === undefined ? [] : read('The remarks', z.array(remark), this.parts.remarks),
+  );
+  readonly requests = once((): readonly RequestContent[] =>
+    this.parts.requests === undefined ? [] : read('The requests', z.array(request).min(1), this.parts.requests),
   );
 
   /** The method as the record's sessions were planned with it; an amendment plans those anew that have not opened. */

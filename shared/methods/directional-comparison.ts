@@ -26,6 +26,9 @@ const scoring = forcedChoiceScoring({
   smallEffect: 'A slight difference gives perhaps',
 });
 
+/** A check cable is quieter than the reference, so that there is a right answer only where level is asked for. */
+const levelWords = /\b(loud(er|ness)?|level|volume)\b/i;
+
 const questionOf = ({ attribute = '' }: MethodChoices) => `Which one had more ${attribute}?`;
 
 /**
@@ -55,6 +58,7 @@ export const directionalComparison: Method<ForcedChoiceResult> = {
   },
   fitterCouldSee: 'Whoever fits the cables could still see which code came first in a trial.',
   separate: null,
+  onRequest: null,
 
   spoken: spokenPlace,
   question: questionOf,
@@ -67,6 +71,10 @@ export const directionalComparison: Method<ForcedChoiceResult> = {
       short: `the ${value}`,
     })),
 
+  takesNoSteps: ({ attribute = '' }) =>
+    levelWords.test(attribute)
+      ? null
+      : 'A step is a difference in level: it can be scored only where louder, loudness, level or volume is asked for',
   registered: (choices) => ({ ...scoring.registered(choices), direction: 'more in the first cable' }),
   plan: {
     ...scoring.plan,

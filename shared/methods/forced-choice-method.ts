@@ -9,12 +9,22 @@ import { forcedChoiceWords } from '../findings/forced-choice-words.ts';
 import { percentOf } from '../findings/portrait-words.ts';
 import { marginText } from '../protocol/registered-analysis.ts';
 import { oneSidedPlan } from '../statistics/planned-test.ts';
+import { dueAnswers } from './due-answers.ts';
 import type { Method, ScoredAnswer, ScoredTrial, TrialWords } from './method.ts';
 
 type Scoring = Pick<
   Method<ForcedChoiceResult>,
-  'registered' | 'margin' | 'planned' | 'sensitivity' | 'analyse' | 'nullDistribution' | 'finding' | 'plan' | 'portray'
-> & { readonly trials: Pick<TrialWords, 'isRight' | 'answerFor' | 'countHeader' | 'count'> };
+  | 'takesNoSteps'
+  | 'registered'
+  | 'margin'
+  | 'planned'
+  | 'sensitivity'
+  | 'analyse'
+  | 'nullDistribution'
+  | 'finding'
+  | 'plan'
+  | 'portray'
+> & { readonly trials: Pick<TrialWords, 'isRight' | 'answerFor' | 'countHeader' | 'count' | 'rates'> };
 
 /** What a method says beside the words that all methods with one right answer share. */
 type Asked = {
@@ -38,6 +48,7 @@ export function forcedChoiceScoring({ question, rightOf, words, smallEffect }: A
   const rightIn = (answers: readonly ScoredAnswer[], truth: string) =>
     answers.filter(({ choice }) => choice !== null && isRight(choice, truth)).length;
   return {
+    takesNoSteps: () => null,
     registered: ({ marginPercent }) => ({
       name: `${question.method}/1`,
       alternative: 'greater',
@@ -87,6 +98,7 @@ export function forcedChoiceScoring({ question, rightOf, words, smallEffect }: A
       answerFor: rightOf,
       countHeader: () => 'Right',
       count: (answers, truth) => `${rightIn(answers, truth)} of ${answers.length}`,
+      rates: () => [{ label: 'Right', due: (trial) => dueAnswers(trial, (choice) => choice === rightOf(trial.truth)) }],
     },
     portray: (result) => forcedChoicePortrait(question, result),
   };

@@ -1,6 +1,7 @@
 import type { CountTable } from '../findings/count-table.ts';
 import type { Finding, FindingContext } from '../findings/finding.ts';
 import type { DecidingRule } from '../findings/forced-choice.ts';
+import type { DueAnswer } from '../findings/rate-limits.ts';
 import type { ResultFrame } from '../findings/result-frame.ts';
 import type { RegisteredAnalysis } from '../protocol/registered-analysis.ts';
 import type { PlannedTest } from '../statistics/planned-test.ts';
@@ -90,6 +91,13 @@ export type PlanWords = {
   caution(choices: MethodChoices): { readonly title: string; readonly words: string } | null;
 };
 
+/** A rate of answers that a method can be counted by: "Right", "Hits". */
+export type AnswerRate = {
+  readonly label: string;
+  /** The answers of a trial that belong in the rate, and which of them count; none where the trial does not bear on it. */
+  due(trial: ScoredTrial): DueAnswer[];
+};
+
 /** How the trials of a session stand in a report. */
 export type TrialWords = {
   /** Said once above every session. */
@@ -109,6 +117,8 @@ export type TrialWords = {
   named(cables: CableNames): string | null;
   countHeader(cables: CableNames): string;
   count(answers: readonly ScoredAnswer[], truth: string): string;
+  /** By which rates any part of the trials is counted, such as those of one excerpt. */
+  rates(cables: CableNames): readonly AnswerRate[];
 };
 
 /** How a trial is fitted from two specimens of each cable, so that no code comes twice in it. */
@@ -121,6 +131,17 @@ export type SeparateSpecimens = {
   readonly deals: number;
   /** Which of its cable's two specimens is fitted for a presentation; `deal` counts from 0. */
   specimen(presentation: string, truth: string | null, deal: number): 0 | 1;
+};
+
+/** How a single listener may ask for what is presented, in the method's words. */
+export type OnRequestWords = {
+  /** What the listener is told the test is. */
+  readonly explanation: string;
+  /** Said while they listen. */
+  readonly announcement: string;
+  /** What whoever fits could still learn when specimens are not separate, and when they are: for the blinding rung. */
+  readonly fitterCouldSee: string;
+  readonly stillSeen: string;
 };
 
 /**
@@ -160,6 +181,8 @@ export type Method<R extends ResultFrame = RegisteredResult> = {
   readonly fitterCouldSee: string;
   /** Null where no code comes twice in a trial anyway: then there is nothing of the kind to hide. */
   readonly separate: SeparateSpecimens | null;
+  /** Null where presentations come in a fixed order always. */
+  readonly onRequest: OnRequestWords | null;
 
   // What the listener is asked.
 
@@ -171,6 +194,9 @@ export type Method<R extends ResultFrame = RegisteredResult> = {
   options(choices: MethodChoices): readonly AnswerOption[];
 
   // How answers are scored.
+
+  /** Why a known difference cannot be scored by this method and these choices, in a sentence; null where it can. */
+  takesNoSteps(choices: MethodChoices): string | null;
 
   /** The part of the registered analysis that the method fixes. */
   registered(

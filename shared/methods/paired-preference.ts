@@ -8,6 +8,7 @@ import type { PreferenceResult } from '../findings/preference-result.ts';
 import { type PreferenceChoice, preferredCable } from '../findings/preference-trials.ts';
 import { marginText } from '../protocol/registered-analysis.ts';
 import { twoSidedPlan } from '../statistics/planned-test.ts';
+import { dueAnswers } from './due-answers.ts';
 import { fittedAtFirst, spokenPlace } from './familiarisation.ts';
 import type { AnswerOption, Method, MethodChoices, ScoredAnswer, ScoredTrial } from './method.ts';
 
@@ -67,12 +68,15 @@ export const pairedPreference: Method<PreferenceResult> = {
   },
   fitterCouldSee: 'Whoever fits the cables could still see which code came first in a trial.',
   separate: null,
+  onRequest: null,
 
   spoken: spokenPlace,
   question: () => 'Which do you prefer?',
   announcement: 'Next you say which you prefer.',
   options: (choices) => [ofPlace('first', '1'), ofPlace('second', '2'), ...(offersNone(choices) ? [ofNone] : [])],
 
+  takesNoSteps: () =>
+    'In a preference no answer is right, so a step cannot be scored; the same with the same can be asked',
   registered: (choices) => ({
     name: 'paired-preference/1',
     alternative: 'two-sided',
@@ -138,6 +142,16 @@ export const pairedPreference: Method<PreferenceResult> = {
     countHeader: (cables) => `For ${cables[0]}`,
     count: (answers, truth) =>
       `${forFirstCable(answers, truth)} of ${answers.filter(({ choice }) => choice !== null && choice !== 'none').length}`,
+    rates: (cables) => [
+      {
+        label: `For ${cables[0]}`,
+        due: (trial) =>
+          dueAnswers(
+            { ...trial, answers: trial.answers.filter(({ choice }) => choice !== null && choice !== 'none') },
+            (choice) => preferredCable(place(trial.truth), choiceOf(choice)) === 0,
+          ),
+      },
+    ],
   },
   portray: preferencePortrait,
   source:

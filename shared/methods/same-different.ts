@@ -10,6 +10,7 @@ import { assignmentTest } from '../statistics/assignment-test.ts';
 import { fractionToNumber } from '../statistics/fraction.ts';
 import { sameDifferentPlan } from '../statistics/same-different.ts';
 import { unbiasedByDifference } from '../statistics/unbiased-same-different.ts';
+import { dueAnswers } from './due-answers.ts';
 import { fittedAtFirst, oneAndOther, spokenPlace } from './familiarisation.ts';
 import type { AnswerOption, Method, ScoredTrial } from './method.ts';
 
@@ -26,6 +27,8 @@ const pairTrial = ({ session, trial, truth, answers }: ScoredTrial): SameDiffere
   isDifferent: isPairDifferent(truth),
   answers: answers.map(({ listener, choice }) => ({ listener, choice: choiceOf(choice) })),
 });
+
+const saidDifferent = (trial: ScoredTrial) => dueAnswers(trial, (choice) => choice === 'different');
 
 const answer = (value: string, letter: string, sentence: string): AnswerOption => ({
   value,
@@ -61,12 +64,14 @@ export const sameDifferent: Method<SameDifferentResult> = {
     deals: 1,
     specimen: (presentation) => (presentation === 'second' ? 1 : 0),
   },
+  onRequest: null,
 
   spoken: spokenPlace,
   question: () => 'Were the two the same?',
   announcement: 'Next you say whether the two were the same.',
   options: () => [answer('same', '=', 'They were the same'), answer('different', '≠', 'They were different')],
 
+  takesNoSteps: () => null,
   registered: () => ({ name: 'same-different/1', alternative: 'greater', missing: 'counted as wrong' }),
   margin: null,
   planned: sameDifferentPlan,
@@ -117,6 +122,10 @@ export const sameDifferent: Method<SameDifferentResult> = {
     isRight: null,
     countHeader: () => 'Said different',
     count: (answers) => `${answers.filter(({ choice }) => choice === 'different').length} of ${answers.length}`,
+    rates: () => [
+      { label: 'Hits', due: (trial) => (isPairDifferent(trial.truth) ? saidDifferent(trial) : []) },
+      { label: 'False alarms', due: (trial) => (isPairDifferent(trial.truth) ? [] : saidDifferent(trial)) },
+    ],
   },
   portray: sameDifferentPortrait,
   source:

@@ -5,7 +5,9 @@ import { methodOf } from '../methods/methods.ts';
 import { breakFacts } from '../session/registered-breaks.ts';
 import { analysisFacts } from './analysis-facts.ts';
 import { presetFacts } from './preset-facts.ts';
-import type { Protocol, ProtocolCable } from './protocol.ts';
+import type { Protocol } from './protocol.ts';
+import type { ProtocolCable } from './protocol-cable.ts';
+import { checksWords, decibels } from './protocol-checks.ts';
 import { waysFacts } from './ways-to-run.ts';
 
 /** A line, and what it means beyond its words: two cables, pieces or people may bear one name. */
@@ -29,7 +31,7 @@ function cableLines(cable: ProtocolCable, label: string): Line[] {
 
 /** Every line of a protocol, in the words of the page that shows it. */
 function linesOf(protocol: Protocol, nameOf: (person: string) => string): Line[] {
-  const { title, question, method: id, cables, design, conduct, analysis } = protocol;
+  const { title, question, method: id, cables, design, conduct, analysis, checks } = protocol;
   const method = methodOf(id);
   const settings = (design.methodSettings ?? []).map(
     (setting) => method.settings.find((known) => known.id === setting)?.label ?? setting,
@@ -45,6 +47,8 @@ function linesOf(protocol: Protocol, nameOf: (person: string) => string): Line[]
     { label: 'Listeners per session', value: String(design.listenersPerSession) },
     { label: 'Listeners are drawn from', value: design.samplingFrame ?? '' },
     { label: 'Trials per session', value: String(design.trials) },
+    { label: 'Check trials', value: checks === undefined ? '' : checksWords(checks, cables) },
+    ...(checks?.steps ?? []).flatMap(({ cable, milliDb }) => cableLines(cable, `Check cable, ${decibels(milliDb)}`)),
     { label: 'Spares', value: `${design.spares} in each session` },
     ...waysFacts(design),
     { label: 'Significance level', value: analysis.alpha },

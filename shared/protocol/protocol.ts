@@ -1,5 +1,4 @@
 import { z } from 'zod';
-import { cableKinds } from '../contracts/cables.ts';
 import type { StudyDraft } from '../contracts/studies.ts';
 import { canonicalJson } from '../ledger/canonical-json.ts';
 import { digest } from '../ledger/digest.ts';
@@ -8,19 +7,12 @@ import type { MethodChoices } from '../methods/method.ts';
 import { methodOf } from '../methods/methods.ts';
 import type { SessionPlan } from '../session/events.ts';
 import { breaksDraft } from '../session/registered-breaks.ts';
-import { registeredAnalysis } from './registered-analysis.ts';
+import { checkTrialsIn } from '../session/trial-kinds.ts';
+import { type ProtocolCable, protocolCable } from './protocol-cable.ts';
+import { checksFromDraft, protocolChecks, shapeOf } from './protocol-checks.ts';
+import { checkExclusion, registeredAnalysis } from './registered-analysis.ts';
 import { rigPreset, rigs } from './rig-preset.ts';
 import { chosenWays, waysToRun } from './ways-to-run.ts';
-
-const protocolCable = z.strictObject({
-  id: z.uuid(),
-  name: z.string(),
-  kind: z.enum(cableKinds),
-  lengthMm: z.int(),
-  description: z.string(),
-  specimens: z.array(z.strictObject({ id: z.uuid(), serial: z.string(), note: z.string() })),
-});
-export type ProtocolCable = z.output<typeof protocolCable>;
 
 /** Everything fixed before data, as it is sealed. Times in seconds, lengths in millimetres, decimals as text. */
 export const protocol = z.strictObject({
@@ -61,6 +53,8 @@ export const protocol = z.strictObject({
     /** After how many trials a break comes and how long it lasts; left out where none is registered. */
     breaks: breaksDraft.optional(),
   }),
+  /** Known differences among the trials; left out where none are registered. */
+  checks: protocolChecks.optional(),
   /** The registered analysis, as data: what is run once at closing. */
   analysis: registeredAnalysis,
 });
@@ -91,7 +85,14 @@ const inOrder = (levels: RegisteredLevels): RegisteredLevels => ({
 /** The protocol that a draft comes to, with its cables spelt out as they are now. */
 export function protocolFromDraft(
   draft: StudyDraft,
-  fixed: { study: string; version: number; salt: string; cables: readonly [ProtocolCable, ProtocolCable] },
+  fixed: {
+    study: string;
+    version: number;
+    salt: string;
+    cables: readonly [ProtocolCable, ProtocolCable];
+    /** The check cable of a step. */
+    checkCable: (step: { readonly cableId: string }) => ProtocolCable;
+  },
 ): Protocol {
   return {
     format: 'fairlead-protocol',
@@ -125,11 +126,12 @@ export function protocolFromDraft(
       ...(draft.levels === undefined ? {} : { levels: inOrder(draft.levels) }),
       ...(draft.breaks === undefined ? {} : { breaks: draft.breaks }),
     },
+    ...(draft.checks === undefined ? {} : { checks: checksFromDraft(draft.checks, fixed.checkCable) }),
     analysis: {
       ...methodOf(draft.method).registered(draft),
       alpha: alphaText(draft.alphaPerMille),
       stopping: 'fixed number of trials',
-      exclusions: 'none',
+      exclusions: draft.checks?.excludes ? checkExclusion : 'none',
     },
   };
 }
@@ -140,12 +142,13 @@ export function protocolDigest(value: Protocol): string {
 }
 
 /** What a session takes from its study's protocol. Nothing in it names a cable. */
-export function sessionPlanOf({ method, design, conduct }: Protocol): SessionPlan {
+export function sessionPlanOf({ method, design, conduct, checks }: Protocol): SessionPlan {
   return {
     method,
     ...chosenOf(design),
-    trials: design.trials,
+    trials: design.trials + checkTrialsIn(checks && shapeOf(checks)),
     spares: design.spares,
+    ...(checks === undefined ? {} : { checks: shapeOf(checks) }),
     rig: conduct.rig,
     ...(conduct.rigPreset === undefined ? {} : { rigPreset: conduct.rigPreset }),
     changeMs: conduct.changeS * 1000,
@@ -156,4 +159,9 @@ export function sessionPlanOf({ method, design, conduct }: Protocol): SessionPla
     ...(conduct.levels === undefined ? {} : { levels: conduct.levels }),
     ...(conduct.breaks === undefined ? {} : { breaks: conduct.breaks }),
   };
+}
+
+/** Every cable that is coded, in the code key's order: the two of the question, then the check cables by step. */
+export function codedCables({ cables, checks }: Protocol): ProtocolCable[] {
+  return [...cables, ...(checks?.steps.map(({ cable }) => cable) ?? [])];
 }

@@ -1,5 +1,9 @@
 import { z } from 'zod';
 
+/** Who is left out of a second result, where a study registers it. */
+export const checkExclusion =
+  'a second result leaves out listeners who do not hear the largest step of the check trials';
+
 /** The registered analysis as a value: what is run once at closing, fixed before data. Part of the sealed protocol. */
 export const registeredAnalysis = z.strictObject({
   /** The method's module and the version of its analysis, such as 'abx/1'. */
@@ -16,7 +20,8 @@ export const registeredAnalysis = z.strictObject({
   /** As decimal text, by the method's scale: a result whose limit lies below it shows that an effect is small. */
   margin: z.string().optional(),
   stopping: z.literal('fixed number of trials'),
-  exclusions: z.literal('none'),
+  /** The all-listeners result comes first, whatever is registered here. */
+  exclusions: z.enum(['none', checkExclusion]),
 });
 export type RegisteredAnalysis = z.output<typeof registeredAnalysis>;
 

@@ -12,6 +12,9 @@ export const stepsOf = ({ rig, rigPreset }: SessionPlan): readonly PresetStep[] 
 
 export const stepKindsOf = (plan: SessionPlan): ChangeStep[] => stepsOf(plan).map(({ kind }) => kind);
 
+/** Whether labels are scanned at every change, and gone through once more at the end. */
+export const scansOf = (plan: SessionPlan): boolean => stepKindsOf(plan).includes('scan');
+
 /** What must be read and ticked before seating opens. */
 export const cautionsOf = ({ rigPreset }: SessionPlan) =>
   cautions.filter((one) => rigPreset?.cautions.includes(one) ?? true);

@@ -1,11 +1,22 @@
-import type { ProctorCommand } from '../contracts/proctor-live.ts';
+import type { ProctorCommand, ScannedBy } from '../contracts/proctor-live.ts';
 import { Problem } from '../problem.ts';
 import { contributionCommitment } from './answer-leaf.ts';
 import { requireBreak, sittingMs, whyRest } from './blocks.ts';
 import { cautionsOf, isLastStep, nextStep, stepEndsAt } from './change-steps.ts';
 import { type LevelCommand, recordLevels, requireHalfTime, requireLevels, skipLevels } from './decide-levels.ts';
 import { keepRemark, type RemarkKept } from './decide-remarks.ts';
+import {
+  decideByHand,
+  decideInventoryEnd,
+  decideInventoryScan,
+  decideScan,
+  decideUndo,
+  isInventoryDue,
+  requireScanned,
+} from './decide-scan.ts';
 import type { PayloadOf, SessionEvent, SessionEventKind } from './events.ts';
+import type { LabelEnd } from './label-text.ts';
+import { type RequestCommand, request, waitsForListeners } from './on-request.ts';
 import { activeSeats, excerptOf, listeningMayStartAt, nextTrial, openAnswers, trialsInAll } from './progress.ts';
 import type { OpenTrial, SessionState } from './state.ts';
 
@@ -13,7 +24,7 @@ type Plain<C> = C extends unknown ? Omit<C, 'expectVersion'> : never;
 
 /** Everything that can be asked of a session: the proctor's commands, the phones', and the clock's. */
 export type SessionCommand =
-  | Plain<Exclude<ProctorCommand, { kind: 'open-seating' }>>
+  | Plain<Exclude<ProctorCommand, { kind: 'open-seating' | 'scan-label' | 'end-inventory' }>>
   | { kind: 'open-seating'; commitment: string }
   | {
       kind: 'take-seat';
@@ -23,15 +34,25 @@ export type SessionCommand =
       joinedBy: 'code' | 'personal-link';
     }
   | { kind: 'reveal'; seat: string; value: string }
+  | RequestCommand
   | { kind: 'too-loud'; seat: string }
   | { kind: 'leave'; seat: string }
+  | {
+      kind: 'note-scan';
+      code: string;
+      end: LabelEnd | null;
+      by: ScannedBy;
+      verdict: 'wanted' | 'other-code' | 'other-study';
+    }
+  | { kind: 'note-inventory-scan'; code: string; by: ScannedBy; isOurs: boolean }
+  | { kind: 'note-inventory-end'; codes: readonly string[]; reason: string }
   | { kind: 'note-late-answer'; seat: string; trial: number; leaf: string }
   | { kind: 'note-restart' }
   | RemarkKept
   | Extract<LevelCommand, { kind: 'record-levels' }>
   | { kind: 'tick' };
 
-type Emit = <K extends SessionEventKind>(kind: K, payload: Omit<PayloadOf<K>, 'session'>) => SessionEvent;
+export type Emit = <K extends SessionEventKind>(kind: K, payload: Omit<PayloadOf<K>, 'session'>) => SessionEvent;
 
 function refuseUnless(holds: boolean, code: ConstructorParameters<typeof Problem>[0], detail: string): void {
   if (!holds) throw new Problem(code, detail);
@@ -69,6 +90,7 @@ function confirmStep(state: SessionState, step: string, now: number, emit: Emit)
   const { trial: number, presentation } = trial;
   if (!isLastStep(trial, plan)) {
     refuseUnless(now >= (stepEndsAt(trial, plan) ?? now), 'too-early', 'This step lasts its least time, every time.');
+    requireScanned(trial, expected);
     return [emit('step-confirmed', { trial: number, presentation, step: expected })];
   }
   const startsAt = listeningMayStartAt(trial, plan, now);
@@ -174,6 +196,8 @@ export function decide(state: SessionState, command: SessionCommand, now: number
       const isTaken = state.seats.some((other) => other.seat === seat);
       refuseUnless(!isTaken, 'already-taken', 'This listener has a seat in this session already.');
       const contributes = state.phase === 'seating';
+      const isFull = state.plan.onRequest !== undefined && activeSeats(state).length > 0;
+      refuseUnless(!isFull, 'already-taken', 'This session is for one listener, and the seat is taken.');
       return [emit('listener-joined', { seat, commitment, consentVersion, contributes, joinedBy })];
     }
     case 'close-seating': {
@@ -202,9 +226,23 @@ export function decide(state: SessionState, command: SessionCommand, now: number
     }
     case 'confirm-step':
       return confirmStep(state, command.step, now, emit);
+    case 'note-scan':
+      return decideScan(state, command, now, emit);
+    case 'confirm-by-hand':
+      return decideByHand(state, command, now, emit);
+    case 'undo-step':
+      return decideUndo(state, emit);
+    case 'note-inventory-scan':
+      return decideInventoryScan(state, command, emit);
+    case 'note-inventory-end':
+      return decideInventoryEnd(state, command, emit);
+    case 'request-presentation': {
+      const requested = request(state, requireOpenTrial(state), command);
+      return requested === null ? [] : [emit('presentation-requested', requested)];
+    }
     case 'lock-trial': {
       const trial = requireOpenTrial(state);
-      refuseUnless(trial.stage === 'answering', 'wrong-phase', 'A trial locks after its answers.');
+      refuseUnless(waitsForListeners(trial), 'wrong-phase', 'A trial locks after its answers.');
       refuseUnless(state.paused === null, 'wrong-phase', 'The session is paused. Resume it first.');
       const open = openAnswers(state, trial);
       refuseUnless(open.length === 0, 'too-early', `The trial waits for ${open.join(', ')} until its window ends.`);
@@ -253,6 +291,11 @@ export function decide(state: SessionState, command: SessionCommand, now: number
         state.trial === null && state.familiarised && nextTrial(state) === null,
         'wrong-phase',
         'Trials are still to come. To end here, abandon the session with a reason.',
+      );
+      refuseUnless(
+        !isInventoryDue(state),
+        'wrong-phase',
+        'Go through the sleeves once more first, or end the inventory with a reason.',
       );
       return [emit('session-finished', {})];
     case 'abandon':

@@ -1,5 +1,7 @@
-import { concatBytes, digest, hexToBytes, keyedDigest, utf8ToBytes } from '../ledger/digest.ts';
+import { digest, hexToBytes } from '../ledger/digest.ts';
 import type { Method } from '../methods/method.ts';
+import { fairNumber } from './fair-number.ts';
+import { type CheckShape, drawKinds, type TrialKind } from './trial-kinds.ts';
 
 // docs/spec/blind.md describes this construction with test vectors, so that anyone can recompute a draw.
 
@@ -14,29 +16,6 @@ export function drawSeed(secret: string, contributions: readonly string[]): stri
   return digest('drawSeed', hexToBytes(secret), ...contributions.map((value) => hexToBytes(value)));
 }
 
-/**
- * A whole number from 0 to `below` - 1, each equally likely, from the seed and a label.
- *
- * HMAC-SHA-256(seed, label, counter) in counter mode gives bytes; those at or above the largest multiple of `below`
- * are passed over, so that no value is favoured.
- *
- * @param below 1 to 256
- * @throws RangeError outside that range
- */
-export function fairNumber(seed: string, label: string, below: number): number {
-  if (!Number.isInteger(below) || below < 1 || below > 256)
-    throw new RangeError('below must be a whole number, 1 to 256');
-  const key = hexToBytes(seed);
-  const limit = 256 - (256 % below);
-  for (let counter = 0; ; counter += 1) {
-    const block = keyedDigest(
-      key,
-      concatBytes(utf8ToBytes(label), new Uint8Array([counter >>> 24, counter >>> 16, counter >>> 8, counter])),
-    );
-    for (const byte of block) if (byte < limit) return byte % below;
-  }
-}
-
 /** What a session's draw fixes: which cable has the method's first side, which specimens are used, what every trial's truth is. */
 export type Draw = {
   /** The protocol's cable that has the method's first side: A, or what familiarisation presents first. */
@@ -47,6 +26,10 @@ export type Draw = {
   readonly truths: readonly string[];
   /** There only where specimens are separate. */
   readonly separate?: SeparateDraw | undefined;
+  /** What each registered trial is, spares left out; there only where the study has check trials. */
+  readonly kinds?: readonly TrialKind[] | undefined;
+  /** For each check cable the place of the specimen used, from 0; there with the kinds. */
+  readonly checkSpecimens?: readonly number[] | undefined;
 };
 
 export type SeparateDraw = {
@@ -58,9 +41,19 @@ export type SeparateDraw = {
 
 export type DrawShape = {
   readonly specimenCounts: readonly [number, number];
+  /** Spares included. */
   readonly trials: number;
   /** Whether the protocol registers separate specimens. */
   readonly isSeparate?: boolean;
+  readonly checks?:
+    | {
+        readonly shape: CheckShape;
+        /** Of each check cable. */
+        readonly specimenCounts: readonly number[];
+        /** Registered trials: without the spares. */
+        readonly trials: number;
+      }
+    | undefined;
 };
 
 type Drawn = Pick<Method, 'truths' | 'separate'>;
@@ -72,10 +65,10 @@ type Drawn = Pick<Method, 'truths' | 'separate'>;
 function drawSeparate(
   seed: string,
   { separate }: Drawn,
-  { specimenCounts, trials }: DrawShape,
+  { specimenCounts, trials, checks }: DrawShape,
 ): Pick<Draw, 'specimens' | 'separate'> {
   if (separate === null) throw new RangeError('the method has no use for separate specimens');
-  const places = Math.min(...specimenCounts);
+  const places = Math.min(...specimenCounts, ...(checks?.specimenCounts ?? []));
   if (places < 2) throw new RangeError('separate specimens need two of each cable');
   const first = fairNumber(seed, 'separate/first', places);
   const others = Array.from({ length: places }, (_, place) => place).filter((place) => place !== first);
@@ -83,6 +76,18 @@ function drawSeparate(
   const deal = (index: number) => fairNumber(seed, `separate/trial/${index + 1}`, separate.deals);
   const deals = separate.deals === 1 ? {} : { deals: Array.from({ length: trials }, (_, index) => deal(index)) };
   return { specimens: [first, first], separate: { specimen, ...deals } };
+}
+
+/** What of the draw only a study with check trials has; with separate specimens check cables have the common place. */
+function drawChecks(seed: string, { checks, isSeparate }: DrawShape, [place]: Draw['specimens']): Partial<Draw> {
+  if (checks === undefined) return {};
+  const { shape, specimenCounts, trials } = checks;
+  return {
+    kinds: drawKinds(seed, trials, shape),
+    checkSpecimens: specimenCounts.map((count, index) =>
+      isSeparate === true ? place : fairNumber(seed, `check-specimen/${index + 1}`, count),
+    ),
+  };
 }
 
 /** The whole draw of a session: a pure function of its seed, the method and the protocol's shape. */
@@ -93,13 +98,14 @@ export function drawSession(seed: string, method: Drawn, shape: DrawShape): Draw
     return truth;
   });
   const firstSide = fairNumber(seed, 'side', 2) === 0 ? 0 : 1;
-  if (shape.isSeparate === true) return { firstSide, truths, ...drawSeparate(seed, method, shape) };
-  return {
-    firstSide,
-    specimens: [
-      fairNumber(seed, 'specimen/1', shape.specimenCounts[0]),
-      fairNumber(seed, 'specimen/2', shape.specimenCounts[1]),
-    ],
-    truths,
-  };
+  const fitted: Pick<Draw, 'specimens' | 'separate'> =
+    shape.isSeparate === true
+      ? drawSeparate(seed, method, shape)
+      : {
+          specimens: [
+            fairNumber(seed, 'specimen/1', shape.specimenCounts[0]),
+            fairNumber(seed, 'specimen/2', shape.specimenCounts[1]),
+          ],
+        };
+  return { firstSide, truths, ...fitted, ...drawChecks(seed, shape, fitted.specimens) };
 }

@@ -6,6 +6,8 @@ import { waysToRun } from '../protocol/ways-to-run.ts';
 import { blockEvents } from './block-events.ts';
 import { levelEvents } from './level-events.ts';
 import { breaksDraft } from './registered-breaks.ts';
+import { scanEvents } from './scan-events.ts';
+import { checkShape } from './trial-kinds.ts';
 
 // What a session puts on its study's record. Payload shapes are permanent: a change means a new version.
 
@@ -19,8 +21,11 @@ export const sessionPlan = z.strictObject({
   method: z.string(),
   methodSettings: z.array(z.string()).optional(),
   attribute: z.string().optional(),
+  /** Check trials included: nothing in a session tells them apart. */
   trials: z.int(),
   spares: z.int(),
+  /** How many of the trials are check trials; left out where there are none. */
+  checks: checkShape.optional(),
   rig: z.enum(['loudspeaker', 'line', 'headphone']),
   /** How a change is made, as the protocol froze it; left out where it names no preset. */
   rigPreset: rigPreset.optional(),
@@ -59,7 +64,10 @@ export const sessionEvents = {
   'contribution-dropped': z.strictObject({ session, seat }),
   'draw-fixed': z.strictObject({ session, contributors: z.array(seat) }),
   'trial-opened': z.strictObject({ session, trial, excerpt: z.int(), seats: z.array(seat) }),
+  /** On request: the listener asked for a presentation. What was asked for lies beside the record, under its leaf. */
+  'presentation-requested': z.strictObject({ session, trial, presentation: z.int().min(0), seat, leaf: hex32 }),
   'step-confirmed': z.strictObject({ session, trial, presentation: z.int(), step: z.enum(stepKinds) }),
+  ...scanEvents,
   'listening-started': z.strictObject({
     session,
     trial,

@@ -2,14 +2,29 @@ import type { Method } from '../methods/method.ts';
 import { blocksAfter, noBlocks } from './blocks.ts';
 import { stepKindsOf } from './change-steps.ts';
 import type { SessionEvent } from './events.ts';
+import { isOnRequest, waitsForListeners } from './on-request.ts';
 import { presentationsOf } from './progress.ts';
 import type { EndedTrial, OpenTrial, SessionState } from './state.ts';
 import { revealMs } from './state.ts';
 
 type Folded = Omit<SessionState, 'version'>;
 
-function startChange(trial: OpenTrial, presentation: number, at: number): OpenTrial {
-  return { ...trial, presentation, stage: 'change', changeStartedAt: at, stepsDone: [], readyAt: at, endsAt: null };
+type Opened = Omit<
+  OpenTrial,
+  'presentation' | 'stage' | 'changeStartedAt' | 'stepsDone' | 'scannedEnds' | 'readyAt' | 'endsAt'
+>;
+
+function startChange(trial: Opened, presentation: number, at: number): OpenTrial {
+  return {
+    ...trial,
+    presentation,
+    stage: 'change',
+    changeStartedAt: at,
+    stepsDone: [],
+    scannedEnds: [],
+    readyAt: at,
+    endsAt: null,
+  };
 }
 
 function openTrialOf(state: SessionState, event: SessionEvent): OpenTrial {
@@ -22,7 +37,17 @@ function endTrial(state: SessionState, ended: Omit<EndedTrial, 'excerpt' | 'seat
   return { ...state, trial: null, paused: null, ended: [...state.ended, { ...ended, excerpt, seats, longChanges }] };
 }
 
+/** The listener's turn: as long as an answer would have. */
+const asking = (trial: OpenTrial, at: number, { answerMs }: SessionState['plan']): OpenTrial => ({
+  ...trial,
+  stage: 'asking',
+  stepsDone: [],
+  scannedEnds: [],
+  endsAt: at + answerMs,
+});
+
 function afterListening(state: SessionState, trial: OpenTrial, at: number, method: Method): Folded {
+  if (isOnRequest(state, trial.trial)) return { ...state, trial: asking(trial, at, state.plan) };
   const isLast = trial.presentation + 1 >= presentationsOf(method, trial.trial).length;
   if (!isLast) return { ...state, trial: startChange(trial, trial.presentation + 1, at) };
   if (trial.trial === 0) return { ...state, trial: null, familiarised: true };
@@ -30,7 +55,7 @@ function afterListening(state: SessionState, trial: OpenTrial, at: number, metho
 }
 
 function pauseTrial(state: SessionState, at: number): number | null {
-  return state.trial?.stage === 'answering' && state.trial.endsAt !== null
+  return state.trial !== null && waitsForListeners(state.trial) && state.trial.endsAt !== null
     ? Math.max(0, state.trial.endsAt - at)
     : null;
 }
@@ -38,8 +63,32 @@ function pauseTrial(state: SessionState, at: number): number | null {
 function resumeTrial(state: SessionState, at: number): OpenTrial | null {
   const { trial, paused } = state;
   if (trial === null) return null;
-  if (trial.stage === 'answering') return { ...trial, endsAt: at + (paused?.remainingMs ?? state.plan.answerMs) };
+  if (waitsForListeners(trial)) return { ...trial, endsAt: at + (paused?.remainingMs ?? state.plan.answerMs) };
   return startChange(trial, trial.presentation, at);
+}
+
+type ScanEvent = Extract<SessionEvent, { kind: 'label-scanned' | 'scan-refused' | 'scan-by-hand' | 'step-undone' }>;
+
+/** Scans and steps taken back, all within the open change; or a start taken back, which begins the change again. */
+function foldScan(state: SessionState, trial: OpenTrial, event: ScanEvent): Folded {
+  const { scans } = state;
+  switch (event.kind) {
+    case 'label-scanned': {
+      const scannedEnds = [...trial.scannedEnds, event.payload.end];
+      return { ...state, trial: { ...trial, scannedEnds }, scans: { ...scans, made: scans.made + 1 } };
+    }
+    case 'scan-refused':
+      return { ...state, trial: { ...trial, scannedEnds: [] }, scans: { ...scans, wrong: scans.wrong + 1 } };
+    case 'scan-by-hand':
+      return { ...state, scans: { ...scans, byHand: scans.byHand + 1 } };
+    case 'step-undone': {
+      const undone = { ...state, scans: { ...scans, undone: scans.undone + 1 } };
+      if (trial.stage === 'listening') return { ...undone, trial: startChange(trial, trial.presentation, event.at) };
+      const stepsDone = trial.stepsDone.slice(0, -1);
+      const scannedEnds = stepsDone.includes('scan') ? trial.scannedEnds : [];
+      return { ...undone, trial: { ...trial, stepsDone, scannedEnds, readyAt: event.at } };
+    }
+  }
 }
 
 function fold(state: SessionState, event: SessionEvent, method: Method): Folded {
@@ -74,20 +123,15 @@ function fold(state: SessionState, event: SessionEvent, method: Method): Folded 
     case 'draw-fixed':
       return { ...state, phase: 'running', revealEndsAt: null };
     case 'trial-opened': {
-      const { trial, excerpt, seats } = event.payload;
-      const opened = { trial, excerpt, seats, longChanges: 0, answers: [] };
-      return {
-        ...state,
-        trial: {
-          ...opened,
-          presentation: 0,
-          stage: 'change',
-          changeStartedAt: event.at,
-          stepsDone: [],
-          readyAt: event.at,
-          endsAt: null,
-        },
-      };
+      const { trial: number, excerpt, seats } = event.payload;
+      const opened = { trial: number, excerpt, seats, longChanges: 0, answers: [], requests: [] };
+      const trial = startChange(opened, 0, event.at);
+      return { ...state, trial: isOnRequest(state, number) ? asking(trial, event.at, state.plan) : trial };
+    }
+    case 'presentation-requested': {
+      const trial = openTrialOf(state, event);
+      const requests = [...trial.requests, { leaf: event.payload.leaf, label: null }];
+      return { ...state, trial: startChange({ ...trial, requests }, event.payload.presentation, event.at) };
     }
     case 'step-confirmed': {
       const trial = openTrialOf(state, event);
@@ -95,6 +139,23 @@ function fold(state: SessionState, event: SessionEvent, method: Method): Folded 
         ...state,
         trial: { ...trial, stepsDone: [...trial.stepsDone, event.payload.step], readyAt: event.at },
       };
+    }
+    case 'label-scanned':
+    case 'scan-refused':
+    case 'scan-by-hand':
+    case 'step-undone':
+      return foldScan(state, openTrialOf(state, event), event);
+    case 'inventory-scanned': {
+      const { code, isOurs } = event.payload;
+      const { found, foreign, ended } = state.inventory;
+      const inventory = isOurs
+        ? { found: [...found, code], foreign, ended }
+        : { found, foreign: [...foreign, code], ended };
+      return { ...state, inventory };
+    }
+    case 'inventory-ended': {
+      const { codes, missing, reason } = event.payload;
+      return { ...state, inventory: { ...state.inventory, ended: { codes, missing, reason } } };
     }
     case 'listening-started': {
       const trial = openTrialOf(state, event);
@@ -130,7 +191,7 @@ function fold(state: SessionState, event: SessionEvent, method: Method): Folded 
       return { ...state, paused: null, trial: resumeTrial(state, event.at) };
     case 'server-restarted': {
       const { trial } = state;
-      if (trial?.stage !== 'answering' || state.paused !== null) return state;
+      if (trial === null || !waitsForListeners(trial) || state.paused !== null) return state;
       return { ...state, trial: { ...trial, endsAt: event.at + state.plan.answerMs } };
     }
     case 'listener-left':
@@ -177,6 +238,8 @@ export function evolve(state: SessionState | null, event: SessionEvent, method: 
       paused: null,
       trial: null,
       ended: [],
+      scans: { made: 0, byHand: 0, wrong: 0, undone: 0 },
+      inventory: { found: [], foreign: [], ended: null },
       late: [],
       levels: [],
       blocks: noBlocks,

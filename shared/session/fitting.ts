@@ -1,25 +1,38 @@
 import type { Method } from '../methods/method.ts';
 import type { CodeKeyRow } from './commitments.ts';
 import { type Draw, drawSeed, drawSession } from './draw.ts';
+import type { SessionPlan } from './events.ts';
+import { standsFor } from './progress.ts';
+import type { SessionState } from './state.ts';
+import { cableFitted, firstCheckCable, type TrialKind } from './trial-kinds.ts';
 
 export type DrawnSession = {
   readonly secret: string;
   readonly contributions: readonly string[];
   readonly method: Method;
-  readonly trials: number;
+  readonly plan: Pick<SessionPlan, 'trials' | 'spares' | 'checks' | 'separateSpecimens'>;
   readonly rows: readonly CodeKeyRow[];
-  /** Whether the protocol registers separate specimens. */
-  readonly isSeparate: boolean;
 };
 
 const rowsOfCable = (rows: readonly CodeKeyRow[], cable: number) => rows.filter((row) => row.cable === cable);
 
 /** A session's draw from its secret, its contributions and the study's code key. */
-export function drawOf({ secret, contributions, method, trials, rows, isSeparate }: DrawnSession): Draw {
+export function drawOf({ secret, contributions, method, plan, rows }: DrawnSession): Draw {
+  const { trials, spares, checks, separateSpecimens } = plan;
+  const specimensOf = (cable: number) => rowsOfCable(rows, cable).length;
   return drawSession(drawSeed(secret, contributions), method, {
-    specimenCounts: [rowsOfCable(rows, 0).length, rowsOfCable(rows, 1).length],
-    trials,
-    isSeparate,
+    specimenCounts: [specimensOf(0), specimensOf(1)],
+    trials: trials + spares,
+    isSeparate: separateSpecimens === true,
+    ...(checks === undefined
+      ? {}
+      : {
+          checks: {
+            shape: checks,
+            specimenCounts: checks.steps.map((_, step) => specimensOf(firstCheckCable + step)),
+            trials,
+          },
+        }),
   });
 }
 
@@ -30,20 +43,41 @@ export function truthOf(draw: Draw, trial: number): string {
   return truth;
 }
 
-type Presented = { readonly method: Method; readonly trial: number; readonly presentation: string };
-
-/** What a draw puts at a presentation: the cable, and the place of the specimen among that cable's. */
-export function fittedBy(draw: Draw, { method, trial, presentation }: Presented): { cable: 0 | 1; specimen: number } {
-  const truth = trial === 0 ? null : truthOf(draw, trial);
-  const cable = method.fitted(presentation, truth, draw.firstSide);
-  const deal = draw.separate?.deals?.[trial - 1] ?? 0;
-  const isOther = draw.separate !== undefined && method.separate?.specimen(presentation, truth, deal) === 1;
-  return { cable, specimen: isOther ? (draw.separate?.specimen ?? 0) : draw.specimens[cable] };
+/** What a trial is; a spare is what the void trial was that it stands for. The familiarisation trial (0) is a main one. */
+export function kindOf(
+  draw: Pick<Draw, 'kinds'>,
+  state: Pick<SessionState, 'plan' | 'ended'>,
+  trial: number,
+): TrialKind {
+  if (draw.kinds === undefined || trial === 0) return 'main';
+  const kind = draw.kinds[standsFor(state, trial) - 1];
+  if (kind === undefined) throw new RangeError(`trial ${trial} is not in the draw`);
+  return kind;
 }
 
+type Presented = {
+  readonly method: Method;
+  readonly state: Pick<SessionState, 'plan' | 'ended'>;
+  readonly trial: number;
+  readonly presentation: string;
+};
+
+/** What a draw puts at a presentation: the cable by its place in the code key, and the place of its specimen. */
+export function fittedBy(draw: Draw, { method, state, trial, presentation }: Presented) {
+  const truth = trial === 0 ? null : truthOf(draw, trial);
+  const place = method.fitted(presentation, truth, draw.firstSide);
+  const cable = cableFitted(place, kindOf(draw, state, trial), state.plan.checks?.reference ?? 0);
+  const deal = draw.separate?.deals?.[trial - 1] ?? 0;
+  const isOther = draw.separate !== undefined && method.separate?.specimen(presentation, truth, deal) === 1;
+  const specimens = [...draw.specimens, ...(draw.checkSpecimens ?? [])];
+  return { cable, specimen: isOther ? (draw.separate?.specimen ?? 0) : (specimens[cable] ?? -1) };
+}
+
+export type FittingQuestion = Omit<DrawnSession, 'plan'> & Presented;
+
 /** The blind code to be fitted for a presentation of a trial. */
-export function codeFitted(question: DrawnSession & Presented): string {
-  const { cable, specimen } = fittedBy(drawOf(question), question);
+export function codeFitted(question: FittingQuestion): string {
+  const { cable, specimen } = fittedBy(drawOf({ ...question, plan: question.state.plan }), question);
   const row = rowsOfCable(question.rows, cable)[specimen];
   if (row === undefined) throw new RangeError('the code key has no such specimen');
   return row.code;

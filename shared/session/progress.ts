@@ -27,6 +27,14 @@ export function excerptOf(state: SessionState, trial: number): number {
   return replaced.excerpt;
 }
 
+/** The registered trial that a trial is or, as a spare, stands for. */
+export function standsFor({ plan, ended }: Pick<SessionState, 'plan' | 'ended'>, trial: number): number {
+  if (trial <= plan.trials) return trial;
+  const replaced = ended.filter(({ outcome }) => outcome === 'void')[trial - plan.trials - 1];
+  if (replaced === undefined) throw new RangeError(`trial ${trial} stands for no void`);
+  return standsFor({ plan, ended }, replaced.trial);
+}
+
 export const activeSeats = (state: SessionState) => state.seats.filter((seat) => !seat.left);
 
 /** Seats whose answer the open trial still waits for. */
@@ -41,7 +49,8 @@ export const presentationsOf = (method: Method, trial: number): readonly string[
 
 /** What is being fitted or heard, or null outside a trial's presentations. */
 export function presentationNow({ trial }: SessionState, method: Method): string | null {
-  if (trial === null || trial.stage === 'answering') return null;
+  if (trial === null || trial.stage === 'answering' || trial.stage === 'asking') return null;
+  if (trial.requests.length > 0) return trial.requests[trial.presentation]?.label ?? null;
   const presentation = presentationsOf(method, trial.trial)[trial.presentation];
   if (presentation === undefined) throw new RangeError('a trial beyond its presentations');
   return presentation;

@@ -1,9 +1,11 @@
 import type { ChangeStep, VoidReason } from '../contracts/proctor-live.ts';
 import type { Blocks } from './blocks.ts';
 import type { SessionPlan } from './events.ts';
+import type { LabelEnd } from './label-text.ts';
 import type { LevelStanding } from './level-progress.ts';
 
-// The state of a session has no code, no cable, no draw and no correctness: nothing in it needs stripping.
+// The state of a session has no cable, no draw and no correctness, and no code but those that an inventory read off the
+// sleeves after the last trial: nothing in it needs stripping.
 
 export type SeatState = {
   readonly seat: string;
@@ -24,16 +26,21 @@ export type OpenTrial = {
   readonly seats: readonly string[];
   /** From 0. */
   readonly presentation: number;
-  readonly stage: 'change' | 'listening' | 'answering';
+  /** On request *asking* is the listener's turn, to ask again or to answer; it has no other name once answers are open. */
+  readonly stage: 'change' | 'listening' | 'asking' | 'answering';
   readonly changeStartedAt: number;
   readonly stepsDone: readonly ChangeStep[];
+  /** Which ends of the cable now fitted bear its code. */
+  readonly scannedEnds: readonly LabelEnd[];
   /** When the latest step was confirmed. */
   readonly readyAt: number;
-  /** When listening or answering ends; null during a change. */
+  /** When listening, asking or answering ends; null during a change. */
   readonly endsAt: number | null;
   readonly longChanges: number;
   /** Leaves of the answers held so far; rows beside the record until the trial locks. */
   readonly answers: readonly { readonly seat: string; readonly leaf: string }[];
+  /** On request what was asked for, in order; the label is a row beside the record, and null where only that is at hand. */
+  readonly requests: readonly { readonly leaf: string; readonly label: string | null }[];
 };
 
 export type EndedTrial = {
@@ -66,6 +73,13 @@ export type SessionState = {
   } | null;
   readonly trial: OpenTrial | null;
   readonly ended: readonly EndedTrial[];
+  /** Labels scanned at changes, changes confirmed by hand, wrong labels refused, steps taken back. */
+  readonly scans: { readonly made: number; readonly byHand: number; readonly wrong: number; readonly undone: number };
+  readonly inventory: {
+    readonly found: readonly string[];
+    readonly foreign: readonly string[];
+    readonly ended: { readonly codes: number; readonly missing: readonly string[]; readonly reason: string } | null;
+  };
   readonly late: readonly { readonly trial: number; readonly seat: string }[];
   /** How each measurement of levels came out, in order; never a figure. */
   readonly levels: readonly LevelStanding[];

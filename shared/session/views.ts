@@ -3,6 +3,7 @@ import type { ProctorView } from '../contracts/proctor-live.ts';
 import type { Method } from '../methods/method.ts';
 import { cautionsOf, nextStep, stepEndsAt, stepsOf } from './change-steps.ts';
 import { levelsFor } from './level-view.ts';
+import { canRequest, isOnRequest, requestsLeft, takesAnswers } from './on-request.ts';
 import {
   activeSeats,
   dueAt,
@@ -10,6 +11,7 @@ import {
   nextTrial,
   openAnswers,
   optionsOf,
+  presentationNow,
   presentationsOf,
   trialsInAll,
 } from './progress.ts';
@@ -29,8 +31,26 @@ export function courseOf(state: SessionState): CourseRing[] {
   });
 }
 
-function presentationAt(trial: OpenTrial, method: Method): string {
-  return presentationsOf(method, trial.trial)[trial.presentation] ?? '';
+/** What a listener may ask for; null where presentations come in a fixed order. */
+function requestsFor(state: SessionState, trial: OpenTrial, method: Method) {
+  if (!isOnRequest(state, trial.trial)) return null;
+  return {
+    left: requestsLeft(state, trial),
+    labels: method.presentations.map((label) => ({
+      label,
+      times: trial.requests.filter((asked) => asked.label === label).length,
+      canRequest: canRequest(state, trial, method, label),
+    })),
+    takesAnswers: takesAnswers(trial, method),
+  };
+}
+
+/** The number of the presentation now, from 1, and of how many: on request the latest one, of the most that there may be. */
+function placeIn(state: SessionState, trial: OpenTrial, method: Method) {
+  const { onRequest } = state.plan;
+  return onRequest !== undefined && isOnRequest(state, trial.trial)
+    ? { presentationNumber: trial.requests.length, presentations: onRequest.most }
+    : { presentationNumber: trial.presentation + 1, presentations: presentationsOf(method, trial.trial).length };
 }
 
 export type ListenerContext = {
@@ -48,6 +68,7 @@ export function listenerViewOf(state: SessionState, method: Method, context: Lis
   const own = state.seats.find((candidate) => candidate.seat === seat);
   const { trial } = state;
   const last = state.ended.at(-1);
+  const words = state.plan.onRequest === undefined ? null : method.onRequest;
   return {
     audience: 'listener',
     title,
@@ -73,17 +94,17 @@ export function listenerViewOf(state: SessionState, method: Method, context: Lis
             familiarisation: trial.trial === 0,
             takesPart: trial.seats.includes(seat),
             stage: trial.stage,
-            presentation: presentationAt(trial, method),
-            spoken: method.spoken(presentationAt(trial, method)),
-            presentationNumber: trial.presentation + 1,
-            presentations: presentationsOf(method, trial.trial).length,
+            presentation: presentationNow(state, method) ?? '',
+            spoken: method.spoken(presentationNow(state, method) ?? ''),
+            ...placeIn(state, trial, method),
             endsAt: state.paused === null ? trial.endsAt : null,
             held,
+            requests: requestsFor(state, trial, method),
           },
     question: {
-      explanation: method.explanation,
+      explanation: words?.explanation ?? method.explanation,
       text: method.question(state.plan),
-      announcement: method.announcement,
+      announcement: words?.announcement ?? method.announcement,
       options: optionsOf(state, method).map(({ value, letter, sentence, short }) => ({
         value,
         letter,
@@ -112,6 +133,8 @@ export type ProctorContext = {
   readonly now: number;
   /** The blind code of the current presentation, or null when none is to be fitted. */
   readonly code: string | null;
+  /** How many codes the study has, while they are gone through at the end; null otherwise. */
+  readonly codesInAll?: number | null;
   readonly join: ProctorView['join'];
   readonly presence: readonly Presence[];
   readonly entries: number;
@@ -135,22 +158,46 @@ function seatsFor(state: SessionState, presence: readonly Presence[]): ProctorVi
   });
 }
 
+/** The step that `undo-step` would take back. */
+const undoOf = (trial: OpenTrial) =>
+  trial.stage === 'answering' || trial.answers.length > 0 ? null : (trial.stepsDone.at(-1) ?? null);
+
+const asCodes = (codes: readonly string[]) => codes.map((code) => ({ code }));
+
+/** Every code in it was read off a sleeve, but those that are missing once it is ended. */
+function inventoryFor(state: SessionState, codes: number | null): ProctorView['inventory'] {
+  const { found, foreign, ended } = state.inventory;
+  if (ended === null && codes === null) return null;
+  return {
+    of: ended?.codes ?? codes ?? 0,
+    found: asCodes(found),
+    foreign: asCodes(foreign),
+    isEnded: ended !== null,
+    missing: asCodes(ended?.missing ?? []),
+  };
+}
+
 function trialFor(state: SessionState, method: Method, context: ProctorContext): ProctorView['trial'] {
   const { trial, plan } = state;
   if (trial === null) return null;
   const mayStartAt = listeningMayStartAt(trial, plan, context.now);
   const endsAt = trial.stage === 'change' ? mayStartAt : trial.endsAt;
+  const excerpt = plan.programme[trial.excerpt];
   return {
     number: trial.trial,
     of: trialsInAll(state),
     familiarisation: trial.trial === 0,
     stage: trial.stage,
-    presentationNumber: trial.presentation + 1,
-    presentations: presentationsOf(method, trial.trial).length,
+    ...placeIn(state, trial, method),
+    onRequest: isOnRequest(state, trial.trial),
     code: context.code,
-    excerpt: plan.programme[trial.excerpt]?.title ?? '',
+    excerpt: excerpt?.title ?? '',
+    excerptStart: excerpt?.start ?? '',
+    excerptS: Math.round((excerpt?.lengthMs ?? 0) / 1000),
     stepsDone: [...trial.stepsDone],
     step: state.paused === null ? nextStep(trial, plan) : null,
+    scannedEnds: trial.stage === 'change' ? trial.scannedEnds.length : 0,
+    undo: state.paused === null ? undoOf(trial) : null,
     stepEndsAt: state.paused === null ? stepEndsAt(trial, plan) : null,
     endsAt: state.paused === null ? endsAt : null,
     longChange: trial.stage === 'change' && mayStartAt > trial.changeStartedAt + plan.changeMs,
@@ -187,6 +234,8 @@ export function proctorViewOf(state: SessionState, method: Method, context: Proc
     trial: trialFor(state, method, context),
     nextTrial:
       state.phase === 'running' && state.trial === null && activeSeats(state).length > 0 ? nextTrial(state) : null,
+    scans: { made: state.scans.made, byHand: state.scans.byHand, wrong: state.scans.wrong },
+    inventory: inventoryFor(state, context.codesInAll ?? null),
     course: courseOf(state),
     seats: seatsFor(state, context.presence),
     levels: levelsFor(state),

@@ -45,6 +45,7 @@ export class Seat {
   #isSending = false;
   #isRevealing = false;
   #isRevealRefused = false;
+  #requested: { trial: number; presentation: number; label: string; salt: string } | null = null;
   #again: ReturnType<typeof setTimeout> | undefined;
 
   constructor(token: string) {
@@ -101,6 +102,20 @@ export class Seat {
     const remarks = withRemark(this.#snapshot.remarks, remark);
     remember(this.#token, { remarks });
     this.#update({ remarks });
+  }
+
+  /**
+   * Asks for what is heard next. Asked again for the same place of the trial, it is the same request.
+   * @throws Problem when the server cannot be told, or does not take it
+   */
+  async request(label: string): Promise<void> {
+    const { trial } = this.#snapshot.view ?? {};
+    if (trial === null || trial === undefined) return;
+    const place = { trial: trial.number, presentation: trial.presentationNumber, label };
+    const { salt, ...asked } = this.#requested ?? { salt: '' };
+    const isAgain = salt !== '' && JSON.stringify(asked) === JSON.stringify(place);
+    this.#requested = isAgain ? { ...place, salt } : { ...place, salt: randomHex(16) };
+    await this.#live.send({ kind: 'request-presentation', ...this.#requested });
   }
 
   /** @throws Problem when the server cannot be told */

@@ -8,6 +8,7 @@ import { SeatsPanel } from '../features/console/seats-panel.tsx';
 import { SideActs } from '../features/console/side-acts.tsx';
 import { useConsole } from '../features/console/use-console.ts';
 import { useKeySetting } from '../features/console/use-keys.ts';
+import { useLabels } from '../features/console/use-labels.ts';
 import { RehearseButton } from '../features/sessions/rehearse-button.tsx';
 import { param } from '../lib/route-params.ts';
 import { CourseLine } from '../ui/course-line.tsx';
@@ -24,6 +25,7 @@ export function Component() {
   const keys = useKeySetting();
   const back = { to: paths.sessions(organisationId), label: 'All sessions' };
   const { view, refused, connection, clockOffsetMs } = console;
+  const labels = useLabels(view, console);
   useDocumentTitle(view === null ? 'Console' : `${view.title}, session ${view.session}`);
 
   if (refused !== null) return <Outside title="This console cannot be opened" detail={refused.message} back={back} />;
@@ -61,13 +63,15 @@ export function Component() {
           next={next}
           onNext={goOn}
           back={back}
+          labels={labels}
+          areKeysOn={keys[0]}
         />
         <SeatsPanel view={view} clockOffsetMs={clockOffsetMs} actions={console} />
       </div>
       {isOver ? null : (
         <div className="flex flex-col gap-4 border-t border-rule px-5 py-4 lg:px-11">
           {hasCourse ? <CourseLine trials={view.course} /> : null}
-          <SideActs view={view} actions={console} onNext={next === null ? null : goOn} keys={keys} />
+          <SideActs view={view} actions={console} onNext={next === null ? null : goOn} keys={keys} labels={labels} />
         </div>
       )}
     </DimLayout>

@@ -1,4 +1,5 @@
 import request from 'supertest';
+import { expect } from 'vitest';
 import type { StudyDraft } from '#shared/contracts/studies.ts';
 import { CodeKey } from '../../server/blind/code-key.entity.ts';
 import { HandClock } from '../../server/demo/hand-clock.ts';
@@ -6,7 +7,7 @@ import { linkTokenOf } from '../../server/features/attendances/personal-link.ts'
 import { Console, Phone } from './live.ts';
 import { makeOrganisation, readyStudy } from './people.ts';
 import { repeatableRandom } from './random.ts';
-import { begin, presentTrial } from './run-session.ts';
+import { begin, presentTrial, type Scan, scanBothEnds } from './run-session.ts';
 import { type TestServer, testServer } from './test-server.ts';
 
 // Non-interference: the same session, with the same clock, ids, phones and answers, but with other code keys and other
@@ -40,6 +41,29 @@ async function exchangeSleeves({ deps }: TestServer, studyId: string): Promise<v
   if (one === undefined || other === undefined) throw new Error('no second specimens');
   [one.code, other.code] = [other.code, one.code];
   await deps.db.manager.update(CodeKey, { studyId }, { rows: JSON.stringify(rows) });
+}
+
+/** Holds up every cable that was fitted before and is another one now, takes the scan back once, and scans. */
+function scanWithFaults(seen: Set<string>): Scan {
+  return async (desk, code) => {
+    for (const text of [...seen].filter((other) => other !== code))
+      await expect(desk.act({ kind: 'scan-label', text, by: 'scanner' })).rejects.toThrow('in hand');
+    if (!seen.has(code)) {
+      await scanBothEnds(desk, code);
+      await desk.act({ kind: 'undo-step' });
+    }
+    seen.add(code);
+    await scanBothEnds(desk, code);
+  };
+}
+
+/** Goes through the sleeves: with another study's label, too early, and with all of them. */
+async function takeInventory(desk: Console, codes: Iterable<string>): Promise<void> {
+  const foreign = { kind: 'scan-label', text: 'FLBBBB9991', by: 'camera' };
+  await expect(desk.act(foreign)).rejects.toThrow('not of this study');
+  await expect(desk.act({ kind: 'end-inventory', reason: '' })).rejects.toThrow('Not found');
+  for (const text of codes) await desk.act({ kind: 'scan-label', text, by: 'typed' });
+  await desk.act({ kind: 'end-inventory', reason: '' });
 }
 
 /** One session with two phones from the sealed plan to its end, and every byte that left the server meanwhile. */
@@ -94,10 +118,12 @@ export async function blindRun(
   const phones: Phone[] = [];
   phones.push(await Phone.joinByLink(server.address, links[0] ?? '', 'left'));
   phones.push(await Phone.join(server.address, code, 'right'));
-  await begin(desk, phones, clock);
+  const fitted = new Set<string>();
+  const scan = scanWithFaults(fitted);
+  await begin(desk, phones, clock, scan);
   const codes: string[][] = [];
   for (const [index, choice] of choices.entries()) {
-    codes.push(await presentTrial(desk, clock));
+    codes.push(await presentTrial(desk, clock, scan));
     for (const phone of phones) await phone.answer(index + 1, choice);
     await desk.sees('all in', (view) => view.trial?.answered === phones.length);
     await desk.act({ kind: 'lock-trial' });
@@ -110,6 +136,7 @@ export async function blindRun(
     }
     await look();
   }
+  if (desk.now.inventory !== null) await takeInventory(desk, fitted);
   await desk.act({ kind: 'finish' });
   for (const phone of phones) await phone.sees('the end', ({ phase }) => phase === 'finished');
   for (const phone of phones) await phone.sayAtExit({ wentBy: secretRemark, noticed: 'yes', what: secretRemark });

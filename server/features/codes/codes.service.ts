@@ -1,5 +1,7 @@
 import type { CodeSheet, CodesStatus } from '#shared/contracts/codes.ts';
 import { Problem } from '#shared/problem.ts';
+import { codedCables } from '#shared/protocol/protocol.ts';
+import { labelText, studyMark } from '#shared/session/label-text.ts';
 import { studyEvents } from '#shared/session/study-events.ts';
 import { commitCodeKey, openForHolder, type SpecimenToCode } from '../../blind/index.ts';
 import { type Tx, withTransaction } from '../../db/transaction.ts';
@@ -14,9 +16,6 @@ import { namesOf } from '../users/users.store.ts';
 type Where = { organisationId: string; id: string };
 type Asker = { userId: string; role: string | null };
 
-/** Scans carry a prefix, so that a scanner's typing is told from a person's. */
-const scanPrefix = 'FL:';
-
 /** A study shows its codes' state to its managers and its code holder; to anyone else it does not exist. */
 function requireInterest(study: Study, who: Asker): void {
   const mayKnow = study.codeHolderId === who.userId || who.role === 'owner' || who.role === 'manager';
@@ -29,11 +28,11 @@ function requireHolder(study: Study, who: Asker): void {
     throw new Problem('not-allowed', 'Only the code holder of this study does this.');
 }
 
+/** Check cables are sleeved and coded with the others, so that nothing tells them apart. */
 function specimensOf(study: Study): SpecimenToCode[] {
-  const [first, second] = protocolOf(study).cables;
-  const rows = (cable: 0 | 1) =>
-    (cable === 0 ? first : second).specimens.map(({ id, serial }) => ({ specimen: id, serial, cable }));
-  return [...rows(0), ...rows(1)];
+  return codedCables(protocolOf(study)).flatMap(({ specimens }, cable) =>
+    specimens.map(({ id, serial }) => ({ specimen: id, serial, cable })),
+  );
 }
 
 async function statusOf(tx: Tx, study: Study, who: Asker): Promise<CodesStatus> {
@@ -49,7 +48,10 @@ async function statusOf(tx: Tx, study: Study, who: Asker): Promise<CodesStatus> 
     title: study.title,
     isSealed: study.state !== 'draft',
     state: study.codesState,
-    specimenCount: study.draft.cables.reduce((sum, { specimenIds }) => sum + specimenIds.length, 0),
+    specimenCount: [...study.draft.cables, ...(study.draft.checks?.steps ?? [])].reduce(
+      (sum, { specimenIds }) => sum + specimenIds.length,
+      0,
+    ),
     codeHolder: names.get(study.codeHolderId) ?? 'unknown',
     youHoldCodes: study.codeHolderId === who.userId,
     commitment: committed === undefined ? null : String(committed.payload.commitment),
@@ -93,13 +95,20 @@ export function openCodes(deps: Deps, where: Where, who: Asker, purpose: 'labels
     const payload = { by: who.userId, purpose };
     await append(tx, deps, study.id, [{ kind: 'code-key-opened', at: clock.now(), payload, session: null }]);
     const rows = await openForHolder(tx, study.id, who.userId);
-    const { cables } = protocolOf(study);
+    const mark = studyMark(study.id);
+    const cables = codedCables(protocolOf(study));
     return {
       title: study.title,
+      mark,
       rows: await Promise.all(
         rows.map(async ({ code, serial, cable }) => {
-          const scanText = `${scanPrefix}${code}`;
-          return { code, cable: cables[cable === 0 ? 0 : 1].name, serial, scanText, qrSvg: await qrSvg(scanText) };
+          const labels = await Promise.all(
+            ([1, 2] as const).map(async (end) => {
+              const scanText = labelText(mark, code, end);
+              return { end, scanText, qrSvg: await qrSvg(scanText) };
+            }),
+          );
+          return { code, cable: cables[cable]?.name ?? '', serial, labels };
         }),
       ),
     };

@@ -1,6 +1,7 @@
 import type { Report } from '#shared/contracts/reports.ts';
 import type { SignedHead } from '#shared/contracts/signed-heads.ts';
 import type { PortrayedCueAudit } from '#shared/cue-audit/portrayed-cue-audit.ts';
+import { resultsByExcerpt } from '#shared/findings/by-excerpt.ts';
 import type { Finding } from '#shared/findings/finding.ts';
 import type { Entry } from '#shared/ledger/chain.ts';
 import { sealedVersions } from '#shared/ledger/protocol-versions.ts';
@@ -11,16 +12,20 @@ import { methodOf, type RegisteredResult } from '#shared/methods/methods.ts';
 import { analysisFacts } from '#shared/protocol/analysis-facts.ts';
 import { presetFacts } from '#shared/protocol/preset-facts.ts';
 import type { Protocol } from '#shared/protocol/protocol.ts';
+import { checksWords } from '#shared/protocol/protocol-checks.ts';
 import { protocolDifferences } from '#shared/protocol/protocol-differences.ts';
 import { waysFacts } from '#shared/protocol/ways-to-run.ts';
 import type { AnswerContent } from '#shared/session/answer-leaf.ts';
 import type { BlindingRung } from '#shared/session/blinding-rung.ts';
-import { countedTrials, revealedDraw } from '#shared/session/counted-trials.ts';
+import { countedTrials, type LockedTrial, revealedDraw } from '#shared/session/counted-trials.ts';
 import type { Draw } from '#shared/session/draw.ts';
 import { truthOf } from '#shared/session/fitting.ts';
+import { handlingOf } from '#shared/session/handling.ts';
 import { listenersToldApart } from '#shared/session/listeners-told-apart.ts';
 import { breakFacts } from '#shared/session/registered-breaks.ts';
 import type { RemarkContent } from '#shared/session/remark-leaf.ts';
+import type { RequestContent } from '#shared/session/request-leaf.ts';
+import { onRequestSentence, requestsIn, timesAsked } from '#shared/session/requests-told.ts';
 import { type RevealedKey, revealedKey } from '#shared/session/revealed-key.ts';
 import type { SessionState } from '#shared/session/state.ts';
 import type { StudyPayloadOf } from '#shared/session/study-events.ts';
@@ -33,6 +38,7 @@ export type ReportSource = {
   readonly entries: readonly Entry[];
   readonly answers: readonly AnswerContent[];
   readonly remarks?: readonly RemarkContent[];
+  readonly requests?: readonly RequestContent[];
   readonly states: readonly SessionState[];
   readonly rooms: ReadonlyMap<number, string>;
   readonly result: RegisteredResult;
@@ -80,7 +86,7 @@ function drawFor(source: ReportSource, state: SessionState, key: RevealedKey): D
 }
 
 function sessionView(source: ReportSource, state: SessionState, key: RevealedKey): Report['sessions'][number] {
-  const { protocol, entries, answers, rooms } = source;
+  const { protocol, entries, answers, requests = [], rooms } = source;
   const own = entries.filter(({ payload }) => payload.session === state.session);
   const atOf = (...kinds: string[]) => own.find(({ kind }) => kinds.includes(kind))?.at ?? null;
   const draw = drawFor(source, state, key);
@@ -98,6 +104,7 @@ function sessionView(source: ReportSource, state: SessionState, key: RevealedKey
     listeners: state.seats.length,
     drawn: draw === null ? null : method.trials.session(draw.firstSide, namesOf(protocol)),
     reason: abandoned === undefined ? null : String(abandoned.payload.reason),
+    handling: handlingOf(state),
     trials: state.ended.map(({ trial, outcome, excerpt, seats, longChanges }) => ({
       trial,
       outcome,
@@ -105,8 +112,21 @@ function sessionView(source: ReportSource, state: SessionState, key: RevealedKey
       truth: draw === null ? '' : truthOf(draw, trial),
       answers: seats.map((listener) => ({ listener, choice: choiceOf(trial, listener) })),
       longChanges,
+      requested:
+        state.plan.onRequest === undefined ? null : timesAsked(requestsIn(requests, state.sessionId, trial), method),
     })),
   };
+}
+
+/** Every excerpt of the programme, whether or not it was played. */
+function byExcerptOf(protocol: Protocol, counted: readonly LockedTrial[]): Report['byExcerpt'] {
+  const { programme } = protocol.conduct;
+  const rates = methodOf(protocol.method).trials.rates(namesOf(protocol));
+  return resultsByExcerpt(counted, rates, programme.length).map(({ excerpt, trials, rates: found }) => ({
+    title: programme[excerpt]?.title ?? '',
+    trials,
+    rates: [...found],
+  }));
 }
 
 function voidsOf(entries: readonly Entry[]): Report['voids'] {
@@ -138,7 +158,7 @@ function missingOf(states: readonly SessionState[]): Report['missing'] {
   );
 }
 
-function factsOf({ design, conduct, analysis, cables, method }: Protocol): Report['protocol']['facts'] {
+function factsOf({ design, conduct, analysis, cables, method, checks }: Protocol): Report['protocol']['facts'] {
   const specimens = cables.map(({ name, specimens: own }) => `${name}: ${own.map(({ serial }) => serial).join(', ')}`);
   return [
     { label: 'Method', value: methodOf(method).name },
@@ -149,6 +169,7 @@ function factsOf({ design, conduct, analysis, cables, method }: Protocol): Repor
     ...waysFacts(design),
     ...(design.samplingFrame === undefined ? [] : [{ label: 'Listeners are drawn from', value: design.samplingFrame }]),
     { label: 'Trials per session', value: `${design.trials}, ${design.spares} spare` },
+    ...(checks === undefined ? [] : [{ label: 'Check trials', value: checksWords(checks, cables) }]),
     { label: 'Significance level', value: analysis.alpha },
     ...analysisFacts(analysis),
     { label: 'Change', value: `${conduct.changeS} s, real or sham` },
@@ -172,11 +193,14 @@ function versionsOf({ entries, protocol, earlierProtocols = [] }: ReportSource):
 }
 
 /** How level was handled is among the finding's own lines. */
-function conditionsOf({ protocol: { conduct }, states, rung }: ReportSource): Report['conditions'] {
+function conditionsOf({ protocol, states, rung, requests = [] }: ReportSource): Report['conditions'] {
+  const { conduct } = protocol;
+  const asked = onRequestSentence(states, requests, methodOf(protocol.method));
   const long = states.flatMap(({ ended }) => ended).reduce((sum, { longChanges }) => sum + longChanges, 0);
   const late = long === 0 ? '' : `; ${long} of them took a whole number of times as long`;
   return [
     `Changes between presentations lasted ${conduct.changeS} s, real or sham${late}.`,
+    ...(asked === null ? [] : [asked]),
     `Blinding: ${rung.name}. ${rung.why}`,
   ];
 }
@@ -186,6 +210,7 @@ export function reportView(source: ReportSource): Report {
   const { study, protocol, entries, states, answers, result, finding, checks, rung, closing, heads } = source;
   const method = methodOf(protocol.method);
   const key = revealedKey.parse(entries.find(({ kind }) => kind === 'key-revealed')?.payload);
+  const counted = countedTrials(method, states, key, answers);
   const sealing = sealedVersions(entries).at(-1);
   const closedAt = entries.find(({ kind }) => kind === 'study-closed')?.at;
   const head = entries.at(-1);
@@ -201,7 +226,8 @@ export function reportView(source: ReportSource): Report {
     endedEarly: closing.complete ? null : closing.reason,
     finding,
     result,
-    nullDistribution: method.nullDistribution(countedTrials(method, states, key, answers)),
+    nullDistribution: method.nullDistribution(counted),
+    byExcerpt: byExcerptOf(protocol, counted),
     cueAudit: source.cueAudit,
     rung: { name: rung.name, why: rung.why },
     conditions: conditionsOf(source),

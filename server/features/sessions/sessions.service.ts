@@ -1,4 +1,6 @@
+import { checkTrialsOf } from '#shared/contracts/check-draft.ts';
 import type { SessionDraft, SessionListQuery, SessionMove, SessionRow } from '#shared/contracts/sessions.ts';
+import type { StudyDraft } from '#shared/contracts/studies.ts';
 import { Problem } from '#shared/problem.ts';
 import { sessionPlanOf } from '#shared/protocol/protocol.ts';
 import { type Tx, withTransaction } from '../../db/transaction.ts';
@@ -17,6 +19,10 @@ import type { Session } from './session.entity.ts';
 import * as store from './sessions.store.ts';
 
 const formatSessions = (count: number) => (count === 1 ? 'one session' : `${count} sessions`);
+
+/** Trials of a session, check trials among them. */
+const trialsOf = (draft: StudyDraft | undefined) =>
+  draft === undefined ? 0 : draft.trials + checkTrialsOf(draft.checks);
 
 async function rowsOf(tx: Tx, sessions: readonly Session[]): Promise<SessionRow[]> {
   const names = await namesOf(
@@ -37,7 +43,7 @@ async function rowsOf(tx: Tx, sessions: readonly Session[]): Promise<SessionRow[
       timeZone,
       proctor: names.get(proctorId) ?? 'unknown',
       proctorId,
-      trials: studies.get(studyId)?.draft.trials ?? 0,
+      trials: trialsOf(studies.get(studyId)?.draft),
       trialsLocked,
       listeners,
     }),

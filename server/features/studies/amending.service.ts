@@ -1,7 +1,7 @@
 import type { AmendmentPreview, StudyDraft, Study as StudyReply } from '#shared/contracts/studies.ts';
 import type { Json } from '#shared/ledger/canonical-json.ts';
 import { Problem } from '#shared/problem.ts';
-import { type Protocol, sessionPlanOf } from '#shared/protocol/protocol.ts';
+import { codedCables, type Protocol, sessionPlanOf } from '#shared/protocol/protocol.ts';
 import { protocolDifferences } from '#shared/protocol/protocol-differences.ts';
 import { voidCodeKey } from '../../blind/index.ts';
 import { type Tx, withTransaction } from '../../db/transaction.ts';
@@ -38,10 +38,10 @@ function requireRoom(draft: StudyDraft, sessions: readonly Session[], at: string
 }
 
 /** What the codes are drawn for: other specimens, or another person who is to know them, need other codes. */
-const codedBy = ({ cables, design }: Protocol) =>
+const codedBy = (protocol: Protocol) =>
   JSON.stringify([
-    cables.map(({ specimens }) => specimens.map(({ id, serial }) => `${id} ${serial}`).sort()),
-    design.codeHolder,
+    codedCables(protocol).map(({ specimens }) => specimens.map(({ id, serial }) => `${id} ${serial}`).sort()),
+    protocol.design.codeHolder,
   ]);
 
 type Prepared = { before: Protocol; after: Protocol; voidsCodes: boolean; planned: Session[] };

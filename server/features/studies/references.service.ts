@@ -4,7 +4,18 @@ import type { Tx } from '../../db/transaction.ts';
 import { cablesById } from '../cables/cables.store.ts';
 import { membersOf } from '../users/users.store.ts';
 
-export const cableIds = (draft: StudyDraft) => draft.cables.map((choice) => choice.cableId);
+/** Every cable that a draft names, with where it stands in the draft and whether it is a check cable. */
+function choicesOf({ cables, checks }: StudyDraft) {
+  const choice = (where: string, isCheck: boolean) => (one: StudyDraft['cables'][number], index: number) => ({
+    pointer: `/${where}/${index}`,
+    isCheck,
+    cableId: one.cableId,
+    specimenIds: one.specimenIds,
+  });
+  return [...cables.map(choice('cables', false)), ...(checks?.steps ?? []).map(choice('checks/steps', true))];
+}
+
+export const cableIds = (draft: StudyDraft) => choicesOf(draft).map((choice) => choice.cableId);
 
 /**
  * What a draft refers to must be this organisation's, and in use.
@@ -14,18 +25,23 @@ export const cableIds = (draft: StudyDraft) => draft.cables.map((choice) => choi
 export async function requireReferences(tx: Tx, organisationId: string, draft: StudyDraft, at = ''): Promise<void> {
   const cables = await cablesById(tx, organisationId, cableIds(draft));
   const faults: InputFault[] = [];
-  for (const [index, choice] of draft.cables.entries()) {
+  for (const choice of choicesOf(draft)) {
     const cable = cables.find(({ id, archived }) => id === choice.cableId && !archived);
     if (cable === undefined) {
-      faults.push({ pointer: `${at}/cables/${index}/cableId`, detail: 'This cable is not in use; choose another' });
+      faults.push({ pointer: `${at}${choice.pointer}/cableId`, detail: 'This cable is not in use; choose another' });
       continue;
     }
+    if ((cable.kind === 'check') !== choice.isCheck)
+      faults.push({
+        pointer: `${at}${choice.pointer}/cableId`,
+        detail: choice.isCheck ? 'Choose a cable of the kind “check cable”' : 'A check cable is for check trials alone',
+      });
     const inUse = new Set(cable.specimens.filter(({ archived }) => !archived).map(({ id }) => id));
     const isWrong =
       choice.specimenIds.some((id) => !inUse.has(id)) || new Set(choice.specimenIds).size < choice.specimenIds.length;
     if (isWrong)
       faults.push({
-        pointer: `${at}/cables/${index}/specimenIds`,
+        pointer: `${at}${choice.pointer}/specimenIds`,
         detail: 'Choose specimens of this cable, each once',
       });
   }

@@ -1,7 +1,8 @@
 import type { StudyDraft, Study as StudyReply } from '#shared/contracts/studies.ts';
 import { canonicalJson } from '#shared/ledger/canonical-json.ts';
 import { Problem } from '#shared/problem.ts';
-import { type Protocol, type ProtocolCable, protocolDigest, protocolFromDraft } from '#shared/protocol/protocol.ts';
+import { type Protocol, protocolDigest, protocolFromDraft } from '#shared/protocol/protocol.ts';
+import type { ProtocolCable } from '#shared/protocol/protocol-cable.ts';
 import { type Tx, withTransaction } from '../../db/transaction.ts';
 import type { Deps } from '../../deps.ts';
 import { append } from '../../ledger/ledger.ts';
@@ -17,7 +18,9 @@ import { lockedStudy, studyOrProblem, viewOf } from './studies.service.ts';
 import * as store from './studies.store.ts';
 import type { Study } from './study.entity.ts';
 
-function protocolCable(cables: readonly Cable[], choice: StudyDraft['cables'][number]): ProtocolCable {
+type Choice = StudyDraft['cables'][number];
+
+function protocolCable(cables: readonly Cable[], choice: Choice): ProtocolCable {
   const cable = cables.find(({ id }) => id === choice.cableId);
   if (cable === undefined) throw new Error('a checked reference is gone');
   const { id, name, kind, lengthMm, description } = cable;
@@ -40,6 +43,11 @@ export async function protocolAs(
     version,
     salt,
     cables: [protocolCable(cables, draft.cables[0]), protocolCable(cables, draft.cables[1])],
+    checkCable: ({ cableId }) => {
+      const step = draft.checks?.steps.find((candidate) => candidate.cableId === cableId);
+      if (step === undefined) throw new Error('a step without its check cable');
+      return protocolCable(cables, step);
+    },
   });
 }
 

@@ -1,3 +1,4 @@
+import { checkTrialsOf } from '#shared/contracts/check-draft.ts';
 import type { SignedHead } from '#shared/contracts/signed-heads.ts';
 import type { Study as StudyReply, StudyRow } from '#shared/contracts/studies.ts';
 import type { Entry } from '#shared/ledger/chain.ts';
@@ -19,7 +20,7 @@ export function progressOf(study: Study, sessions: readonly Session[]): StudyRow
     sessionsEnded: sessions.filter(({ phase }) => phase === 'finished' || phase === 'abandoned').length,
     sessionsToPlan: Math.max(0, study.draft.sessions - standing.length),
     trialsLocked: sessions.reduce((sum, session) => sum + session.trialsLocked, 0),
-    trialsRegistered: study.draft.sessions * study.draft.trials,
+    trialsRegistered: study.draft.sessions * (study.draft.trials + checkTrialsOf(study.draft.checks)),
   };
 }
 

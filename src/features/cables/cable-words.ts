@@ -4,5 +4,6 @@ export const kindWords: Record<Cable['kind'], string> = {
   loudspeaker: 'Loudspeaker cable',
   interconnect: 'Interconnect',
   headphone: 'Headphone cable',
+  check: 'Check cable, a known difference',
   other: 'Other',
 };

@@ -10,7 +10,12 @@ const columns: Column<CodeSheet['rows'][number]>[] = [
   {
     key: 'scanText',
     header: 'Read by a scanner',
-    cell: ({ scanText }) => <span className="font-mono">{scanText}</span>,
+    cell: ({ labels }) =>
+      labels.map(({ end, scanText }) => (
+        <span key={end} className="block font-mono">
+          {scanText}
+        </span>
+      )),
   },
 ];
 

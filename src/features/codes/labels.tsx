@@ -56,10 +56,10 @@ function OpenedSheet({ sheet, codesTo }: { sheet: CodeSheet; codesTo: string }) 
     <div className="flex flex-col gap-12 print:block">
       <div className="flex flex-col gap-6">
         <p className="max-w-3xl text-lg print:hidden">
-          Two labels for each specimen, one for each end. Print, cut along the marks, and stick them on the sleeves. On
-          paper the key comes on a page of its own: keep it apart from the labels.
+          Two labels for each specimen, one for each end. Print at full size, cut along the marks, and stick them on the
+          sleeves with the QR code flat. On paper the key comes on a page of its own: keep it apart from the labels.
         </p>
-        <SleeveLabels rows={sheet.rows} />
+        <SleeveLabels rows={sheet.rows} mark={sheet.mark} />
       </div>
       <KeyList {...sheet} />
       <div className="print:hidden">

@@ -1,13 +1,16 @@
 import type { ProctorView } from '#shared/contracts/proctor-live.ts';
 import { Cautions } from './cautions.tsx';
 import { Ended } from './ended.tsx';
+import { Inventory } from './inventory.tsx';
 import type { NextAct } from './next-act.ts';
 import { NextActButton } from './next-act-button.tsx';
 import { PauseBanner } from './pause-banner.tsx';
+import { ScanBox } from './scan-box.tsx';
 import { BetweenTrials, ReadyForListeners, Revealing } from './scenes.tsx';
 import { Seating } from './seating.tsx';
 import { ChangeClock, TrialPanel } from './trial-panel.tsx';
 import type { ConsoleActions } from './use-console.ts';
+import type { Labels } from './use-labels.ts';
 import { Waiting } from './waiting.tsx';
 
 type ConsoleBodyProps = {
@@ -18,21 +21,35 @@ type ConsoleBodyProps = {
   next: NextAct | null;
   onNext: () => void;
   back: { to: string; label: string };
+  labels: Labels;
+  areKeysOn: boolean;
 };
 
 /** What the proctor does now: what is the matter, the one thing at hand, and the act that ends it. */
-export function ConsoleBody({ view, clockOffsetMs, isLost, actions, next, onNext, back }: ConsoleBodyProps) {
+export function ConsoleBody({
+  view,
+  clockOffsetMs,
+  isLost,
+  actions,
+  next,
+  onNext,
+  back,
+  labels,
+  areKeysOn,
+}: ConsoleBodyProps) {
   return (
     <div className="flex min-w-0 flex-1 flex-col gap-6 px-5 py-7 lg:px-11">
       {isLost ? <LostBanner /> : null}
       {view.paused === null ? null : <PauseBanner pause={view.paused} view={view} clockOffsetMs={clockOffsetMs} />}
       <Scenery view={view} actions={actions} back={back} />
-      <p role="alert" className="border-l-4 border-amber pl-3 font-semibold text-amber empty:hidden">
+      <p role="alert" className="border-l-4 border-amber pl-3 text-2xl font-semibold text-amber empty:hidden">
         {actions.problem}
       </p>
       <div className="flex flex-wrap items-stretch gap-3.5">
         <div className="min-w-0 flex-1 basis-80">
-          {next === null ? (
+          {labels.isWanted && view.paused === null ? (
+            <ScanBox labels={labels} isLost={isLost} keyHint={areKeysOn ? 'Alt+C' : null} />
+          ) : next === null ? (
             <Waiting view={view} clockOffsetMs={clockOffsetMs} />
           ) : (
             <NextActButton next={next} clockOffsetMs={clockOffsetMs} isLost={isLost} onPress={onNext} />
@@ -58,7 +75,12 @@ function Scenery({ view, actions, back }: SceneryProps) {
     case 'revealing':
       return <Revealing view={view} />;
     case 'running':
-      return view.trial === null ? <BetweenTrials view={view} /> : <TrialPanel trial={view.trial} view={view} />;
+      if (view.trial !== null) return <TrialPanel trial={view.trial} view={view} />;
+      return view.inventory === null || view.inventory.isEnded ? (
+        <BetweenTrials view={view} />
+      ) : (
+        <Inventory inventory={view.inventory} />
+      );
     case 'finished':
     case 'abandoned':
       return <Ended view={view} back={back} />;

@@ -26,6 +26,17 @@ function Rehearsed({ back }: Pick<EndedProps, 'back'>) {
   );
 }
 
+/** Only where there was something to scan. */
+function handlingFacts({ scans: { made, byHand, wrong }, inventory }: ProctorView) {
+  if (made + byHand + wrong === 0) return [];
+  return [
+    { label: 'Ends scanned', value: String(made) },
+    { label: 'Confirmed by hand', value: String(byHand) },
+    { label: 'Wrong labels refused', value: String(wrong) },
+    ...(inventory === null ? [] : [{ label: 'Sleeves found', value: `${inventory.found.length} of ${inventory.of}` }]),
+  ];
+}
+
 function Recorded({ view, back }: EndedProps) {
   const count = (state: string) => view.course.filter((ring) => ring.state === state).length;
   const isFinished = view.phase === 'finished';
@@ -44,6 +55,7 @@ function Recorded({ view, back }: EndedProps) {
           { label: 'Trials locked', value: String(count('locked')) },
           { label: 'Trials void', value: String(count('void')) },
           ...(open > 0 ? [{ label: 'Trials not held', value: String(open) }] : []),
+          ...handlingFacts(view),
           { label: 'Listeners', value: String(view.seats.length) },
           ...(view.exit === null
             ? []

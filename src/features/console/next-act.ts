@@ -1,6 +1,7 @@
 import type { ProctorView } from '#shared/contracts/proctor-live.ts';
 import { startsListening, stepWords } from './console-words.ts';
 import type { ConsoleCommand } from './use-console.ts';
+import { isCounting, isScanning } from './use-labels.ts';
 
 export type NextAct = {
   readonly label: string;
@@ -43,7 +44,12 @@ export function nextActOf(view: ProctorView): NextAct | null {
 }
 
 function actBetweenTrials(view: ProctorView): NextAct | null {
-  if (isComplete(view)) return now('Finish the session', { kind: 'finish' });
+  if (isComplete(view)) {
+    if (isCounting(view)) return null;
+    return view.inventory === null || view.inventory.isEnded
+      ? now('Finish the session', { kind: 'finish' })
+      : now('End the inventory', { kind: 'end-inventory', reason: '' });
+  }
   if (!isAnybodySeated(view)) return null;
   if (view.block?.isBreakDue) return now('Begin the break', { kind: 'pause', reason: 'break' });
   if (!view.familiarised) return now('Begin the familiarisation', { kind: 'begin-familiarisation' });
@@ -52,6 +58,8 @@ function actBetweenTrials(view: ProctorView): NextAct | null {
 
 function actInTrial(view: ProctorView, trial: NonNullable<ProctorView['trial']>): NextAct | null {
   const { step } = trial;
+  // A label ends this step, or somebody says why none does.
+  if (isScanning(view)) return null;
   if (step !== null) {
     const { done } = stepWords(view, step, trial.code ?? '');
     const isLast = startsListening(view, step);
@@ -59,7 +67,7 @@ function actInTrial(view: ProctorView, trial: NonNullable<ProctorView['trial']>)
     const waiting = isLast ? 'Listening starts in' : `${done} in`;
     return { label: done, waiting, command: { kind: 'confirm-step', step }, step, opensAt };
   }
-  if (trial.stage === 'answering' && trial.answered === trial.expected)
+  if ((trial.stage === 'answering' || trial.stage === 'asking') && trial.answered === trial.expected)
     return now(`Lock trial ${trial.number}`, { kind: 'lock-trial' });
   return null;
 }

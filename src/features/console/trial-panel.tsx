@@ -3,6 +3,8 @@ import { CableRun } from '../../ui/cable-run.tsx';
 import { Countdown } from '../../ui/countdown.tsx';
 import { Sleeve } from '../../ui/sleeve.tsx';
 import { startsListening, stepWords, wordsAfter } from './console-words.ts';
+import { PlayLine } from './play-line.tsx';
+import { isScanning } from './use-labels.ts';
 
 type Trial = NonNullable<ProctorView['trial']>;
 type Words = { title: string; detail: string };
@@ -13,10 +15,17 @@ function wordsOf(trial: Trial, view: ProctorView): Words {
     return { title: 'Wait', detail: `resume when all is well · next: ${wordsAfterPause(trial)}` };
   if (trial.step !== null) {
     const { act, how } = stepWords(view, trial.step, code);
+    if (isScanning(view) && trial.scannedEnds === 1)
+      return { title: act, detail: 'one end is in · now the label at the other end' };
     return { title: act, detail: `${how} · next: ${wordsAfter(view, trial.step, code)}` };
   }
   if (trial.stage === 'listening')
     return { title: 'They are listening', detail: `“${trial.excerpt}” · stop the music when the time is out` };
+  if (trial.stage === 'asking' && trial.answered < trial.expected)
+    return {
+      title: 'The listener’s turn',
+      detail: 'to ask for another presentation, or to answer · say nothing, show nothing',
+    };
   const out = trial.expected - trial.answered;
   return {
     title: `${trial.answered} of ${trial.expected} answered`,
@@ -25,12 +34,17 @@ function wordsOf(trial: Trial, view: ProctorView): Words {
 }
 
 /** A presentation is given again whole; answering goes on with the time that was left. */
-const wordsAfterPause = (trial: Trial) =>
-  trial.stage === 'answering' ? 'the answers go on' : `presentation ${trial.presentationNumber}, from its change`;
+function wordsAfterPause(trial: Trial): string {
+  if (trial.stage === 'answering') return 'the answers go on';
+  if (trial.stage === 'asking') return 'the listener’s turn goes on';
+  return `presentation ${trial.presentationNumber}, from its change`;
+}
 
 function placeOf(trial: Trial, { steps }: Pick<ProctorView, 'steps'>): string {
-  const presentation = `presentation ${trial.presentationNumber} of ${trial.presentations}`;
+  const of = trial.onRequest ? 'of at most' : 'of';
   if (trial.stage === 'answering') return 'answers';
+  if (trial.stage === 'asking') return `${trial.presentationNumber} ${of} ${trial.presentations} presentations given`;
+  const presentation = `presentation ${trial.presentationNumber} ${of} ${trial.presentations}`;
   if (trial.stage === 'listening') return `${presentation} · listening`;
   const step = Math.min(trial.stepsDone.length + 1, steps.length);
   return `${presentation} · step ${step} of ${steps.length}`;
@@ -40,11 +54,16 @@ function placeOf(trial: Trial, { steps }: Pick<ProctorView, 'steps'>): string {
 export function TrialPanel({ trial, view }: { trial: Trial; view: ProctorView }) {
   const { title, detail } = wordsOf(trial, view);
   return (
-    <section className="flex flex-1 flex-col gap-6">
+    <section
+      // Where the session stands, in one word for whoever follows the page by program.
+      data-stand={`${trial.number} ${trial.presentationNumber} ${trial.stage}`}
+      className="flex flex-1 flex-col gap-6"
+    >
       <p className="text-soft">
         <strong className="text-ink">{trial.familiarisation ? 'Familiarisation' : `Trial ${trial.number}`}</strong>
         {trial.familiarisation ? ', not counted' : ` of ${trial.of}`} · {placeOf(trial, view)}
       </p>
+      <PlayLine trial={trial} />
       <CableRun className="-mx-5 flex min-h-32 flex-1 items-center lg:-mx-11">
         {trial.code === null || view.paused !== null ? null : (
           <div data-code={trial.code} className="w-full px-5">

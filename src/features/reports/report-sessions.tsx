@@ -1,5 +1,6 @@
 import type { Report } from '#shared/contracts/reports.ts';
 import type { Method } from '#shared/methods/method.ts';
+import { handlingWords } from '#shared/session/handling.ts';
 import { formatCount, formatDateTime } from '../../lib/format.ts';
 import { CourseLine } from '../../ui/course-line.tsx';
 import { ReportSection } from './report-section.tsx';
@@ -37,7 +38,7 @@ export function ReportSessions({ sessions, cables, method }: ReportSessionsProps
 }
 
 function SessionHead({ session }: { session: Session }) {
-  const { number, phase, room, startedAt, endedAt, listeners, drawn, reason } = session;
+  const { number, phase, room, startedAt, endedAt, listeners, drawn, reason, handling } = session;
   return (
     <div className="flex flex-col gap-0.5">
       <h3 className="text-lg">
@@ -52,6 +53,11 @@ function SessionHead({ session }: { session: Session }) {
         ].join(', ')}
       </p>
       {drawn === null ? null : <p className="text-soft">{drawn}</p>}
+      {handlingWords(handling).map((words) => (
+        <p key={words} className="text-soft">
+          {words}
+        </p>
+      ))}
       {reason === null ? null : <p className="font-semibold">Reason: {reason}</p>}
     </div>
   );

@@ -7,6 +7,7 @@ import { ReportChecks } from './report-checks.tsx';
 import { ReportConditions } from './report-conditions.tsx';
 import { ReportCueAudit } from './report-cue-audit.tsx';
 import { ReportDistribution } from './report-distribution.tsx';
+import { ReportExcerpts } from './report-excerpts.tsx';
 import { ReportFigures } from './report-figures.tsx';
 import { ReportFlow } from './report-flow.tsx';
 import { ReportHeads } from './report-heads.tsx';
@@ -48,6 +49,7 @@ export function ReportView({ report, back, actions, proofs }: ReportViewProps) {
       </div>
       <ReportDistribution nullDistribution={report.nullDistribution} distribution={portrait.distribution} />
       <ReportListeners listeners={portrait.listeners} />
+      <ReportExcerpts byExcerpt={report.byExcerpt} />
       <ReportChecks checks={portrait.checks} />
       <ReportCueAudit audit={report.cueAudit} />
       <ReportSaid said={report.said} />

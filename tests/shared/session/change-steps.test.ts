@@ -1,14 +1,11 @@
 import { describe, expect, it } from 'vitest';
-import type { ProctorCommand } from '#shared/contracts/proctor-live.ts';
-import { methodOf } from '#shared/methods/methods.ts';
+import type { ChangeStep } from '#shared/contracts/proctor-live.ts';
 import { leastChangeS, type RigPreset, rigPreset, rigs, stepFault } from '#shared/protocol/rig-preset.ts';
 import { plainSteps, shippedPresets } from '#shared/protocol/shipped-presets.ts';
 import { stepKindsOf } from '#shared/session/change-steps.ts';
-import { decide } from '#shared/session/decide.ts';
 import type { SessionPlan } from '#shared/session/events.ts';
-import { evolve } from '#shared/session/evolve.ts';
 import { listeningMayStartAt } from '#shared/session/progress.ts';
-import type { SessionState } from '#shared/session/state.ts';
+import { MachineSession, planWith } from '../../support/state-machine.ts';
 
 const kinds = (...names: RigPreset['steps'][number]['kind'][]) => names.map((kind) => ({ kind }));
 
@@ -39,51 +36,16 @@ describe('the steps of a preset', () => {
   });
 });
 
-const abx = methodOf('abx');
-const planWith = (preset: RigPreset | undefined, changeMs = 30_000): SessionPlan => ({
-  method: 'abx',
-  trials: 5,
-  spares: 0,
-  rig: preset?.kind ?? 'loudspeaker',
-  ...(preset === undefined ? {} : { rigPreset: preset }),
-  changeMs,
-  answerMs: 20_000,
-  confidence: false,
-  programme: [{ title: 'Piano', start: '', lengthMs: 5_000 }],
-});
-
-/** A session at the beginning of a trial's first change, and its clock. */
-class Desk {
-  now = 0;
-  state: SessionState;
-
-  constructor(plan: SessionPlan) {
-    const id = '00000000-0000-4000-8000-000000000000';
-    const payload = { session: 1, sessionId: id, proctor: id, plan };
-    this.state = evolve(null, { kind: 'session-planned', at: 0, payload }, abx);
-    this.do({ kind: 'confirm-cautions', items: ['amplifier', 'shorts', 'mains', 'hearing', 'local-rules'] });
-    this.do({ kind: 'open-seating', commitment: '0'.repeat(64) });
-    const seat = { seat: 'L01', commitment: '0'.repeat(64), consentVersion: 1, joinedBy: 'code' as const };
-    this.do({ kind: 'take-seat', ...seat });
-    this.do({ kind: 'close-seating' });
-    this.now += 30_000;
-    this.do({ kind: 'tick' });
-    this.do({ kind: 'begin-familiarisation' });
-  }
-
-  do(command: Parameters<typeof decide>[1]): void {
-    for (const event of decide(this.state, command, this.now)) this.state = evolve(this.state, event, abx);
-  }
-
-  confirm(step: Extract<ProctorCommand, { kind: 'confirm-step' }>['step']): void {
-    this.do({ kind: 'confirm-step', step });
-  }
-
-  get trial() {
-    if (this.state.trial === null) throw new Error('no trial is open');
-    return this.state.trial;
-  }
+/** A session at the beginning of its first change. */
+function atChange(plan: SessionPlan) {
+  const desk = new MachineSession(plan);
+  desk.seat(['L01']);
+  desk.do({ kind: 'begin-familiarisation' });
+  return desk;
 }
+const confirm = (desk: MachineSession, ...steps: ChangeStep[]) => {
+  for (const step of steps) desk.do({ kind: 'confirm-step', step });
+};
 
 describe('a change', () => {
   it('goes through the five plain steps where the plan names no preset [S22]', () => {
@@ -92,41 +54,41 @@ describe('a change', () => {
   });
 
   it('does not leave a step before its least wait, nor one out of turn [S22]', () => {
-    const desk = new Desk(planWith(shippedPresets.line));
-    expect(() => desk.confirm('mute')).toThrow('least time');
+    const desk = atChange(planWith(shippedPresets.line));
+    expect(() => confirm(desk, 'mute')).toThrow('least time');
     desk.now += 2_999;
-    expect(() => desk.confirm('mute')).toThrow('least time');
+    expect(() => confirm(desk, 'mute')).toThrow('least time');
     desk.now += 1;
-    expect(() => desk.confirm('unplug')).toThrow('done already');
-    desk.confirm('mute');
-    desk.confirm('unplug');
+    expect(() => confirm(desk, 'unplug')).toThrow('done already');
+    confirm(desk, 'mute');
+    confirm(desk, 'unplug');
     expect(desk.trial.stepsDone).toEqual(['mute', 'unplug']);
   });
 
   it('starts listening with its last step, whichever that is, at the registered time [S5] [S22]', () => {
     const steps = shippedPresets.loudspeaker.steps.filter(({ kind }) => kind !== 'scan');
-    const desk = new Desk(planWith({ ...shippedPresets.loudspeaker, steps }));
+    const desk = atChange(planWith({ ...shippedPresets.loudspeaker, steps }));
     const began = desk.now;
-    for (const step of ['mute', 'unplug', 'fit', 'check', 'unmute'] as const) desk.confirm(step);
+    confirm(desk, 'mute', 'unplug', 'fit', 'check', 'unmute');
     desk.now = began + 29_999;
-    expect(() => desk.confirm('settle')).toThrow('registered time');
+    expect(() => confirm(desk, 'settle')).toThrow('registered time');
     desk.now = began + 30_000;
-    desk.confirm('settle');
+    confirm(desk, 'settle');
     expect(desk.trial).toMatchObject({ stage: 'listening', longChanges: 0 });
   });
 
   it('waits for the next whole length when the last wait cannot end in time, and says so at once [S5] [S22]', () => {
     const steps = shippedPresets.loudspeaker.steps.filter(({ kind }) => kind !== 'scan');
-    const desk = new Desk(planWith({ ...shippedPresets.loudspeaker, steps }));
+    const desk = atChange(planWith({ ...shippedPresets.loudspeaker, steps }));
     const began = desk.now;
-    for (const step of ['mute', 'unplug', 'fit', 'check'] as const) desk.confirm(step);
+    confirm(desk, 'mute', 'unplug', 'fit', 'check');
     desk.now = began + 22_000;
     expect(listeningMayStartAt(desk.trial, desk.state.plan, desk.now)).toBe(began + 30_000);
     desk.now = began + 22_001;
     expect(listeningMayStartAt(desk.trial, desk.state.plan, desk.now)).toBe(began + 60_000);
-    desk.confirm('unmute');
+    confirm(desk, 'unmute');
     desk.now = began + 60_000;
-    desk.confirm('settle');
+    confirm(desk, 'settle');
     expect(desk.trial).toMatchObject({ stage: 'listening', longChanges: 1 });
   });
 });
@@ -134,11 +96,9 @@ describe('a change', () => {
 describe('the cautions', () => {
   it('are those of the preset: no more are asked for, none fewer are enough [S24]', () => {
     const preset: RigPreset = { ...shippedPresets.headphone, cautions: ['hearing', 'amplifier'] };
-    const id = '00000000-0000-4000-8000-000000000000';
-    const payload = { session: 1, sessionId: id, proctor: id, plan: planWith(preset) };
-    const state = evolve(null, { kind: 'session-planned', at: 0, payload }, abx);
-    expect(() => decide(state, { kind: 'confirm-cautions', items: ['hearing'] }, 0)).toThrow('every caution');
-    expect(decide(state, { kind: 'confirm-cautions', items: ['hearing', 'amplifier'] }, 0)).toMatchObject([
+    const desk = new MachineSession(planWith(preset));
+    expect(() => desk.do({ kind: 'confirm-cautions', items: ['hearing'] })).toThrow('every caution');
+    expect(desk.do({ kind: 'confirm-cautions', items: ['hearing', 'amplifier'] })).toMatchObject([
       { kind: 'cautions-confirmed', payload: { items: ['amplifier', 'hearing'] } },
     ]);
   });

@@ -1,7 +1,8 @@
 import { describe, expect, it } from 'vitest';
 import { abx } from '#shared/methods/abx.ts';
 import { isUsableCode } from '#shared/session/blind-codes.ts';
-import { drawSeed, drawSession, fairNumber } from '#shared/session/draw.ts';
+import { drawSeed, drawSession } from '#shared/session/draw.ts';
+import { fairNumber } from '#shared/session/fair-number.ts';
 
 describe('the draw', () => {
   const seed = drawSeed('01'.repeat(32), ['02'.repeat(32), '03'.repeat(32)]);

@@ -6,9 +6,11 @@ import { verifyStudy } from '#shared/ledger/verify.ts';
 import { methodIds, methodOf, methods } from '#shared/methods/methods.ts';
 import { blindingRung } from '#shared/session/blinding-rung.ts';
 import type { CodeKeyRow } from '#shared/session/commitments.ts';
-import { type Draw, drawSeed, drawSession, fairNumber } from '#shared/session/draw.ts';
+import { type Draw, drawSeed, drawSession } from '#shared/session/draw.ts';
+import { fairNumber } from '#shared/session/fair-number.ts';
 import { fittedBy } from '#shared/session/fitting.ts';
 import { sessionsInRecord } from '#shared/session/read-record.ts';
+import type { SessionState } from '#shared/session/state.ts';
 import { chainedAgain, closedStudy, people } from '../../support/closed-study.ts';
 import { plainStudy } from '../../support/people.ts';
 
@@ -84,7 +86,12 @@ describe.each(separable)('the codes of a session, %s', (methodId) => {
   const method = methods[methodId];
   const codesOf = (draw: Draw, rows: readonly { code?: string; cable: number }[], trial: number) =>
     (trial === 0 ? method.familiarisation : method.presentations).map((presentation) => {
-      const { cable, specimen } = fittedBy(draw, { method, trial, presentation });
+      const { cable, specimen } = fittedBy(draw, {
+        method,
+        state: { plan: {} as SessionState['plan'], ended: [] },
+        trial,
+        presentation,
+      });
       return rows.filter((row) => row.cable === cable)[specimen]?.code ?? 'none';
     });
   const seen = (draw: Draw, rows: readonly { code?: string; cable: number }[]) =>

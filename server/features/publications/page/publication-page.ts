@@ -5,6 +5,7 @@ import { momentWords } from '#shared/ledger/moments.ts';
 import { readableFingerprint } from '#shared/ledger/readable-fingerprint.ts';
 import { methodOf } from '#shared/methods/methods.ts';
 import type { Portrait } from '#shared/methods/portrait.ts';
+import { handlingWords } from '#shared/session/handling.ts';
 import { type Html, html } from './html.ts';
 import { count, facts, frame, list, section, table, utc } from './page-parts.ts';
 
@@ -127,21 +128,25 @@ function session({
   listeners: seated,
   drawn,
   reason,
+  handling,
   trials,
 }: Report['sessions'][number]): Html {
   const times = `${startedAt === null ? 'never started' : `started ${utc(startedAt)}`}${endedAt === null ? '' : `, ended ${utc(endedAt)}`}`;
-  const rows = trials.map(({ trial, outcome, excerpt, truth, answers }) => [
+  const isAsked = trials.some(({ requested }) => requested !== null);
+  const rows = trials.map(({ trial, outcome, excerpt, truth, answers, requested }) => [
     trial,
     outcome === 'locked' ? 'counted' : outcome,
     excerpt,
     truth,
     answers.map(({ listener, choice }) => `${listener} ${choice ?? 'none'}`).join(', '),
+    ...(isAsked ? [(requested ?? []).map(({ label, times }) => `${label} ${times}`).join(', ')] : []),
   ]);
   return html`<li class="flex flex-col gap-3 border-t border-rule pt-4">
     <h3 class="text-lg">Session ${number}, ${phase}</h3>
     <p class="text-soft">${count(seated, 'listener')}, ${times}.${drawn === null ? '' : ` ${drawn}`}</p>
+    ${handlingWords(handling).map((words) => html`<p class="text-soft">${words}</p>`)}
     ${reason === null ? null : html`<p class="font-semibold">Reason: ${reason}</p>`}
-    ${rows.length === 0 ? null : table(`Trials of session ${number}`, ['Trial', 'Outcome', 'Excerpt', 'Drawn', 'Answers'], rows)}
+    ${rows.length === 0 ? null : table(`Trials of session ${number}`, ['Trial', 'Outcome', 'Excerpt', 'Drawn', 'Answers', ...(isAsked ? ['Asked for'] : [])], rows)}
   </li>`;
 }
 

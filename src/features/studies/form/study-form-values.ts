@@ -1,7 +1,9 @@
 import type { z } from 'zod';
+import type { Cable } from '#shared/contracts/cables.ts';
 import type { KeptPreset } from '#shared/contracts/rig-presets.ts';
 import type { studyDraft } from '#shared/contracts/studies.ts';
 import { methodIds } from '#shared/methods/methods.ts';
+import type { Rig } from '#shared/protocol/rig-preset.ts';
 
 /** What the form holds while it is being typed; numbers that are not there yet are NaN. */
 export type StudyFormValues = z.input<typeof studyDraft>;
@@ -33,8 +35,24 @@ export const newStudyValues: StudyFormValues = {
   codeHolderId: '',
 };
 
-/** A new study begins with the first preset for its rig. */
-export function newStudyWith(presets: readonly KeptPreset[]): StudyFormValues {
-  const preset = presets.find((kept) => kept.preset.kind === newStudyValues.rig)?.preset;
-  return preset === undefined ? newStudyValues : { ...newStudyValues, rigPreset: preset };
+/** The rig that cables of a kind are heard on; undefined where the kind does not tell. */
+export const rigOfKind: Partial<Record<Cable['kind'], Rig>> = {
+  loudspeaker: 'loudspeaker',
+  interconnect: 'line',
+  headphone: 'headphone',
+};
+
+/** A new study begins with the first preset for its rig, and with two cables where they were chosen before. */
+export function newStudyWith(presets: readonly KeptPreset[], chosen: readonly Cable[] = []): StudyFormValues {
+  const [first, second] = chosen;
+  const rig = (first && rigOfKind[first.kind]) ?? newStudyValues.rig;
+  const preset = presets.find((kept) => kept.preset.kind === rig)?.preset;
+  const cables: StudyFormValues['cables'] =
+    first === undefined || second === undefined ? newStudyValues.cables : [chosenCable(first), chosenCable(second)];
+  return { ...newStudyValues, rig, cables, ...(preset === undefined ? {} : { rigPreset: preset }) };
+}
+
+/** A cable with all its pieces that are in use. */
+function chosenCable({ id, specimens }: Cable): StudyFormValues['cables'][number] {
+  return { cableId: id, specimenIds: specimens.filter(({ archived }) => !archived).map((specimen) => specimen.id) };
 }
