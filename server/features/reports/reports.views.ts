@@ -14,6 +14,7 @@ import { presetFacts } from '#shared/protocol/preset-facts.ts';
 import type { Protocol } from '#shared/protocol/protocol.ts';
 import { checksWords } from '#shared/protocol/protocol-checks.ts';
 import { protocolDifferences } from '#shared/protocol/protocol-differences.ts';
+import { treatmentFacts } from '#shared/protocol/treatment.ts';
 import { waysFacts } from '#shared/protocol/ways-to-run.ts';
 import type { AnswerContent } from '#shared/session/answer-leaf.ts';
 import type { BlindingRung } from '#shared/session/blinding-rung.ts';
@@ -158,12 +159,21 @@ function missingOf(states: readonly SessionState[]): Report['missing'] {
   );
 }
 
-function factsOf({ design, conduct, analysis, cables, method, checks }: Protocol): Report['protocol']['facts'] {
+function factsOf({
+  design,
+  conduct,
+  analysis,
+  cables,
+  method,
+  checks,
+  treatment,
+}: Protocol): Report['protocol']['facts'] {
   const specimens = cables.map(({ name, specimens: own }) => `${name}: ${own.map(({ serial }) => serial).join(', ')}`);
   return [
     { label: 'Method', value: methodOf(method).name },
     ...(design.attribute === undefined ? [] : [{ label: 'Attribute', value: design.attribute }]),
     { label: 'Specimens', value: specimens.join('; ') },
+    ...treatmentFacts(treatment),
     { label: 'Sessions', value: String(design.sessions) },
     { label: 'Listeners per session', value: String(design.listenersPerSession) },
     ...waysFacts(design),

@@ -31,12 +31,17 @@ export const isComplete = (view: ProctorView): boolean =>
   view.familiarised &&
   view.course.every(({ state }) => state === 'locked' || state === 'void');
 
+/** Whether the session need not wait for levels: they bar the start, or are due at half time. */
+export const areLevelsIn = ({ levels }: ProctorView): boolean =>
+  levels === null || (levels.bar === null && levels.due !== 'half-time');
+
 /** The one act that comes next, or null when the console waits for somebody else. */
 export function nextActOf(view: ProctorView): NextAct | null {
   const rest = view.block?.break;
   if (rest) return { ...now('Go on', { kind: 'resume' }), waiting: 'The break ends in', opensAt: rest.leastEndsAt };
   if (view.paused !== null) return now('Resume', { kind: 'resume' });
-  if (view.phase === 'planned' && view.cautionsConfirmed) return now('Open seating', { kind: 'open-seating' });
+  if (view.phase === 'planned' && view.cautionsConfirmed && areLevelsIn(view))
+    return now('Open seating', { kind: 'open-seating' });
   if (view.phase === 'seating' && isAnybodySeated(view))
     return now('Close seating and fix the draw', { kind: 'close-seating' });
   if (view.phase !== 'running') return null;
@@ -52,6 +57,7 @@ function actBetweenTrials(view: ProctorView): NextAct | null {
   }
   if (!isAnybodySeated(view)) return null;
   if (view.block?.isBreakDue) return now('Begin the break', { kind: 'pause', reason: 'break' });
+  if (!areLevelsIn(view)) return null;
   if (!view.familiarised) return now('Begin the familiarisation', { kind: 'begin-familiarisation' });
   return view.nextTrial === null ? null : now(`Begin trial ${view.nextTrial}`, { kind: 'begin-trial' });
 }

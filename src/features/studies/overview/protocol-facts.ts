@@ -1,7 +1,9 @@
 import type { Study, StudyDraft } from '#shared/contracts/studies.ts';
+import { registeredLevelsText } from '#shared/levels/level-words.ts';
 import { methodOf } from '#shared/methods/methods.ts';
 import { analysisFacts } from '#shared/protocol/analysis-facts.ts';
 import { presetFacts } from '#shared/protocol/preset-facts.ts';
+import { treatmentFacts } from '#shared/protocol/treatment.ts';
 import { waysFacts } from '#shared/protocol/ways-to-run.ts';
 import { breakFacts } from '#shared/session/registered-breaks.ts';
 import { formatCount } from '../../../lib/format.ts';
@@ -22,6 +24,7 @@ export function protocolFacts({ draft, cableNames, codeHolder }: Study): Protoco
         `${cableNames[index === 0 ? 0 : 1]}, ${formatCount(specimenIds.length, 'specimen')}`,
       ),
     ),
+    ...treatmentFacts(draft.treatment),
     ...waysFacts(draft),
     words('Listening', listeningWords(draft)),
     ...(draft.samplingFrame ? [words('Listeners are drawn from', draft.samplingFrame)] : []),
@@ -38,6 +41,7 @@ export function protocolFacts({ draft, cableNames, codeHolder }: Study): Protoco
     words('Rig', rigWords[draft.rig]),
     ...presetFacts(draft.rigPreset),
     words('Chain', draft.chain),
+    words('Level at the load', registeredLevelsText(draft.levels)),
     words('Every change', `${draft.changeS} s, real or not`),
     ...breakFacts(draft.breaks),
     words('Answer window', `${draft.answerS} s`),
