@@ -75,6 +75,8 @@ export const report = z.strictObject({
       startedAt: z.iso.datetime().nullable(),
       endedAt: z.iso.datetime().nullable(),
       listeners: z.int(),
+      /** What was heard before the first trial and never counted: how often the labelled cables, how many practice trials. */
+      training: z.strictObject({ labelled: z.int(), blind: z.int(), feedback: z.int() }),
       /** The session's draw in words: which cable bore which label; null when nothing was presented. */
       drawn: z.string().nullable(),
       reason: z.string().nullable(),

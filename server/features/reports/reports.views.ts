@@ -103,6 +103,11 @@ function sessionView(source: ReportSource, state: SessionState, key: RevealedKey
     startedAt: atOf('seating-opened'),
     endedAt: atOf('session-finished', 'session-abandoned'),
     listeners: state.seats.length,
+    training: {
+      labelled: state.familiarisations,
+      blind: state.practised.filter(({ form }) => form === 'blind').length,
+      feedback: state.practised.filter(({ form }) => form === 'feedback').length,
+    },
     drawn: draw === null ? null : method.trials.session(draw.firstSide, namesOf(protocol)),
     reason: abandoned === undefined ? null : String(abandoned.payload.reason),
     handling: handlingOf(state),
