@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { portrayedCueAudit } from '../cue-audit/portrayed-cue-audit.ts';
+import { checkResult } from '../findings/check-result.ts';
 import { finding } from '../findings/finding.ts';
 import { levelReport } from '../levels/level-report.ts';
 import { registeredResult } from '../methods/methods.ts';
@@ -45,6 +46,8 @@ export const report = z.strictObject({
   /** Exploratory: counts and limits, never a p. */
   byExcerpt: z.array(z.strictObject({ title: z.string(), trials: z.int(), rates: z.array(countedRate) })),
   cueAudit: portrayedCueAudit,
+  /** What the check trials came to, apart from the result; null where none were registered. */
+  knownDifferences: checkResult.nullable(),
   rung: z.strictObject({ name: z.string(), why: z.string() }),
   /** The gap between presentations and the blinding rung, each in a sentence: part of the finding’s first lines. */
   conditions: z.array(z.string()),
@@ -59,6 +62,8 @@ export const report = z.strictObject({
     trialsOpened: z.int(),
     trialsVoid: z.int(),
     trialsCounted: z.int(),
+    /** Locked check trials, not among those counted. */
+    trialsChecked: z.int(),
     answersExpected: z.int(),
     answersMissing: z.int(),
     /** Labels, each counted once over all sessions. */
@@ -101,6 +106,8 @@ export const report = z.strictObject({
           outcome: z.enum(['locked', 'void', 'open']),
           excerpt: z.string(),
           truth: z.string(),
+          /** What a check trial compared, and what it is called; null for a main one. */
+          check: z.strictObject({ name: z.string(), pair: z.tuple([z.string(), z.string()]) }).nullable(),
           answers: z.array(z.strictObject({ listener: z.string(), choice: z.string().nullable() })),
           longChanges: z.int(),
           /** How often each label was asked for; null where presentations came in a fixed order. */

@@ -140,11 +140,10 @@ export function cueTrials(
 ): CueTrial[] {
   const choices = new Map(held.map(({ session, trial, seat, choice }) => [`${session} ${trial} ${seat}`, choice]));
   return states.flatMap((state) => {
-    const locked = state.ended.filter(({ outcome }) => outcome === 'locked');
+    const ended = state.ended.filter(({ outcome }) => outcome === 'locked');
     const secret = key.draws.find(({ session }) => session === state.session)?.secret;
-    if (secret === undefined || locked.length === 0) return [];
+    if (secret === undefined || ended.length === 0) return [];
     const draw = revealedDraw(state, method, secret, key.codeKey.rows);
-    const main = locked.filter(({ trial }) => kindOf(draw, state, trial) === 'main');
     const clocked = clockedTrials(entries.filter(({ payload }) => payload.session === state.session));
     const timesOfTrial = (trial: number): Clocked => {
       const times = clocked.get(trial) ?? { presentations: [], gap: null, answering: null };
@@ -152,17 +151,24 @@ export function cueTrials(
       const asked = requestsIn(requests, state.sessionId, trial);
       return { ...times, presentations: inMethodsOrder(method, times.presentations, asked) };
     };
-    return main.map(({ trial, seats }, index) => ({
-      session: state.session,
-      trial,
-      position: index + 1,
-      truth: truthOf(draw, trial),
-      firstSide: draw.firstSide,
-      answers: seats.map((listener) => ({
-        listener,
-        choice: choices.get(`${state.sessionId} ${trial} ${listener}`) ?? null,
-      })),
-      ...timesOfTrial(trial),
-    }));
+    // Check trials are reported apart; a trial's position is that among all.
+    return ended.flatMap(({ trial, seats }, index) =>
+      kindOf(draw, state, trial) !== 'main'
+        ? []
+        : [
+            {
+              session: state.session,
+              trial,
+              position: index + 1,
+              truth: truthOf(draw, trial),
+              firstSide: draw.firstSide,
+              answers: seats.map((listener) => ({
+                listener,
+                choice: choices.get(`${state.sessionId} ${trial} ${listener}`) ?? null,
+              })),
+              ...timesOfTrial(trial),
+            },
+          ],
+    );
   });
 }

@@ -17,12 +17,8 @@ import {
 import type { PayloadOf, SessionEvent, SessionEventKind } from './events.ts';
 import type { LabelEnd } from './label-text.ts';
 import { type RequestCommand, request, waitsForListeners } from './on-request.ts';
-<<<<<<< HEAD
-import { activeSeats, excerptOf, listeningMayStartAt, nextTrial, openAnswers, trialsInAll } from './progress.ts';
-=======
 import { excerptOfPractice, isTraining, practiceAsked } from './practice.ts';
-import { activeSeats, excerptOf, listeningMayStartAt, nextTrial, openAnswers } from './progress.ts';
->>>>>>> main
+import { activeSeats, excerptOf, listeningMayStartAt, nextTrial, openAnswers, trialsInAll } from './progress.ts';
 import type { OpenTrial, SessionState } from './state.ts';
 
 type Plain<C> = C extends unknown ? Omit<C, 'expectVersion'> : never;
@@ -72,31 +68,23 @@ function requireOpenTrial(state: SessionState): OpenTrial {
   return state.trial;
 }
 
-<<<<<<< HEAD
-function openTrial(state: SessionState, trial: number, now: number, emit: Emit): SessionEvent[] {
-=======
 function seatsForTrial(state: SessionState): string[] {
->>>>>>> main
   requirePhase(state, ['running'], 'Trials start once the draw is fixed.');
   refuseUnless(state.trial === null, 'wrong-phase', 'A trial is open already.');
   refuseUnless(state.paused === null, 'wrong-phase', 'The session is paused. Resume it first.');
   const seats = activeSeats(state).map((seat) => seat.seat);
   refuseUnless(seats.length > 0, 'wrong-phase', 'Nobody is seated.');
-<<<<<<< HEAD
+  return seats;
+}
+
+function openTrial(state: SessionState, trial: number, now: number, emit: Emit): SessionEvent[] {
+  const seats = seatsForTrial(state);
   const { lastEndedAt, sittings } = state.blocks;
   const isNewSitting = lastEndedAt !== null && now > lastEndedAt + sittingMs;
   return [
     ...(isNewSitting ? [emit('sitting-began', { sitting: sittings + 1 })] : []),
     emit('trial-opened', { trial, excerpt: excerptOf(state, trial), seats }),
   ];
-=======
-  return seats;
-}
-
-function openTrial(state: SessionState, trial: number, emit: Emit): SessionEvent[] {
-  const seats = seatsForTrial(state);
-  return [emit('trial-opened', { trial, excerpt: excerptOf(state, trial), seats })];
->>>>>>> main
 }
 
 function confirmStep(state: SessionState, step: string, now: number, emit: Emit): SessionEvent[] {
@@ -121,7 +109,6 @@ function confirmStep(state: SessionState, step: string, now: number, emit: Emit)
   return [emit('listening-started', { trial: number, presentation, lengths })];
 }
 
-<<<<<<< HEAD
 /** Locks the trial; where that ends a block and trials remain, the break begins at once. */
 function lockTrial(
   state: SessionState,
@@ -129,13 +116,10 @@ function lockTrial(
   reason: 'all-in' | 'window-ended',
   emit: Emit,
 ): SessionEvent[] {
-=======
-function lockTrial(trial: OpenTrial, reason: 'all-in' | 'window-ended', emit: Emit): SessionEvent {
   if (trial.practice !== null) {
     const { number } = trial.practice;
-    return emit('practice-ended', { number, answered: trial.answers.length, of: trial.seats.length });
+    return [emit('practice-ended', { number, answered: trial.answers.length, of: trial.seats.length })];
   }
->>>>>>> main
   const leaves = [...trial.answers].sort((a, b) => (a.seat < b.seat ? -1 : 1));
   const held = new Set(leaves.map((answer) => answer.seat));
   const missing = trial.seats.filter((seat) => !held.has(seat));
@@ -241,16 +225,12 @@ export function decide(state: SessionState, command: SessionCommand, now: number
     case 'begin-familiarisation':
       refuseUnless(isTraining(state), 'wrong-phase', 'The familiarisation is over once the first trial has opened.');
       requireLevels(state);
-<<<<<<< HEAD
       return openTrial(state, 0, now, emit);
-=======
-      return openTrial(state, 0, emit);
     case 'begin-practice': {
       const seats = seatsForTrial(state);
       const asked = practiceAsked(state, command);
       return [emit('practice-opened', { ...asked, excerpt: excerptOfPractice(state, asked), seats })];
     }
->>>>>>> main
     case 'begin-trial': {
       refuseUnless(state.familiarisations > 0, 'wrong-phase', 'The familiarisation trial comes first.');
       const next = nextTrial(state);

@@ -5,11 +5,8 @@ import { rigPreset } from '../protocol/rig-preset.ts';
 import { waysToRun } from '../protocol/ways-to-run.ts';
 import { blockEvents } from './block-events.ts';
 import { levelEvents } from './level-events.ts';
-<<<<<<< HEAD
-import { breaksDraft } from './registered-breaks.ts';
-=======
 import { mostPractice, practice } from './practice.ts';
->>>>>>> main
+import { breaksDraft } from './registered-breaks.ts';
 import { scanEvents } from './scan-events.ts';
 import { checkShape } from './trial-kinds.ts';
 

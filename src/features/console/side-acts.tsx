@@ -104,12 +104,8 @@ export function SideActs({ view, actions, onNext, keys: [areKeysOn, setKeysOn], 
           Alt keys
         </label>
       </Actions>
-<<<<<<< HEAD
-      <VoidDialog {...dialog('void')} isFamiliarisation={view.trial?.familiarisation ?? false} />
-      <EarlyDialog {...dialog('early')} why={view.block?.break?.why ?? ''} />
-=======
       <VoidDialog {...dialog('void')} neverCounts={(view.trial?.number ?? 1) <= 0} />
->>>>>>> main
+      <EarlyDialog {...dialog('early')} why={view.block?.break?.why ?? ''} />
       <DeviationDialog {...dialog('deviation')} />
       <EndDialog {...dialog('end')} view={view} />
       <ByHandDialog {...dialog('by-hand')} code={view.trial?.code ?? ''} />
