@@ -1,5 +1,6 @@
 import type { ChangeStep, VoidReason } from '../contracts/proctor-live.ts';
 import type { SoundLevel } from '../exposure/sound-level.ts';
+import type { Blocks } from './blocks.ts';
 import type { SessionPlan } from './events.ts';
 import type { LabelEnd } from './label-text.ts';
 import type { LevelStanding } from './level-progress.ts';
@@ -91,6 +92,9 @@ export type SessionState = {
   readonly levels: readonly LevelStanding[];
   /** How loud it is at the listening position, as it was last recorded. */
   readonly sound: SoundLevel | null;
+  readonly blocks: Blocks;
+  /** Of what listeners said beside the trials, the leaves. */
+  readonly remarks: readonly { readonly seat: string; readonly about: string; readonly leaf: string }[];
 };
 
 /** How long a phone may take to reveal its contribution before it is dropped. */

@@ -16,6 +16,7 @@ import {
   presentationsOf,
   trialsInAll,
 } from './progress.ts';
+import { blockFor, breakFor, exitFor, exitsFor } from './remark-views.ts';
 import { soundFor } from './sound.ts';
 import type { OpenTrial, SessionState } from './state.ts';
 
@@ -85,6 +86,8 @@ export function listenerViewOf(state: SessionState, method: Method, context: Lis
     revealWanted: state.phase === 'revealing' && own?.contributes === true && own.revealed === null,
     left: own?.left ?? true,
     paused: state.paused?.reason ?? null,
+    exit: exitFor(state, method, seat),
+    break: breakFor(state, seat),
     course: courseOf(state),
     trial:
       trial === null
@@ -251,6 +254,8 @@ export function proctorViewOf(state: SessionState, method: Method, context: Proc
     levels: levelsFor(state),
     sound: soundFor(state),
     record: { entries: context.entries, sessionEntries: state.version },
+    block: blockFor(state, context.now),
+    exit: exitsFor(state),
     demo: context.demo,
     rehearsal: context.rehearsal,
   };
