@@ -1,3 +1,4 @@
+import { isClosed } from '#shared/contracts/studies.ts';
 import { canonicalJson, type Json } from '#shared/ledger/canonical-json.ts';
 import { Problem } from '#shared/problem.ts';
 import { sessionPlanOf } from '#shared/protocol/protocol.ts';
@@ -5,7 +6,7 @@ import { contributionsOf } from '#shared/session/counted-trials.ts';
 import type { SessionPlan } from '#shared/session/events.ts';
 import { studyMark } from '#shared/session/label-text.ts';
 import { presentationNow } from '#shared/session/progress.ts';
-import { codesOf, commitDraw, cueFor } from '../blind/index.ts';
+import { codesOf, commitDraw, cueFor, truthPractised } from '../blind/index.ts';
 import { type Tx, withTransaction } from '../db/transaction.ts';
 import type { Deps } from '../deps.ts';
 import { labelOf, noteSeated } from '../features/attendances/attendances.store.ts';
@@ -38,9 +39,19 @@ export function databaseKeeper(deps: Deps): Keeper {
         method,
         state,
         trial: state.trial.trial,
+        practice: state.trial.practice,
         presentation,
       });
     },
+    truthPractised: ({ state, session, method }, practice) =>
+      truthPractised(deps.db.manager, {
+        studyId: session.studyId,
+        sessionId: session.id,
+        contributions: contributionsOf(state),
+        method,
+        plan: state.plan,
+        practice,
+      }),
   };
 }
 
@@ -79,6 +90,14 @@ function keepingIn(tx: Tx, deps: Deps): Keeping {
       return { ...seat, label };
     },
     saveAnswer: (row) => store.saveAnswer(tx, row),
+    saveRemark: async (row) => {
+      const session = await store.sessionById(tx, row.sessionId);
+      if (session === null) throw new Problem('not-found', 'There is no such session.');
+      await lockStudyRow(tx, session.studyId);
+      const { state } = await studyById(tx, session.studyId);
+      if (isClosed(state)) throw new Problem('too-late', 'The study is closed; nothing can be added to it any more.');
+      await store.saveRemark(tx, row);
+    },
     saveRequest: (row) => insertRequest(tx, row),
     record: async (memory, events) => {
       const { studyId, id, number } = memory.session;

@@ -1,6 +1,8 @@
 import type { Entry } from '#shared/ledger/chain.ts';
 import type { SessionEvent } from '#shared/session/events.ts';
+import type { Practice } from '#shared/session/practice.ts';
 import type { Answer } from '../features/sessions/answer.entity.ts';
+import type { Remark } from '../features/sessions/remark.entity.ts';
 import type { PresentationRequest } from '../features/sessions/request.entity.ts';
 import type { Seat } from '../features/sessions/seat.entity.ts';
 import type { SessionMemory } from './session-memory.ts';
@@ -18,6 +20,8 @@ export type Keeping = {
   /** Writes down a seat: under the label that a linked listener has in the study, or the next free one. */
   addSeat(seat: Omit<Seat, 'label'>, link: SeatLink | null): Promise<Seat>;
   saveAnswer(row: Answer): Promise<void>;
+  /** @throws Problem `too-late` once the study is closed */
+  saveRemark(row: Remark): Promise<void>;
   /** Keeps what was asked for, beside the record. */
   saveRequest(row: PresentationRequest): Promise<void>;
   /** Puts events on the record. */
@@ -30,6 +34,8 @@ export type Keeper = {
   keep<T>(work: (keeping: Keeping) => Promise<T>): Promise<T>;
   /** The blind code of the presentation that is being fitted or heard, for the proctor alone. */
   codeToFit(memory: SessionMemory): Promise<string | null>;
+  /** What was right in a practice trial that has ended, for its phones. */
+  truthPractised(memory: SessionMemory, practice: Practice): Promise<string>;
   /** Every code that the study's sleeves bear, in their order, and nothing of what they stand for. */
   codes(memory: SessionMemory): Promise<readonly string[]>;
   /** The neutral title of the organisation's study whose labels bear a mark; null when there is none. */

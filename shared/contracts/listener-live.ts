@@ -1,4 +1,5 @@
 import * as z from 'zod/mini';
+import { exitCommand, fatigueCommand } from './remarks.ts';
 
 const hex = (bytes: number) => z.string().check(z.regex(new RegExp(`^[0-9a-f]{${bytes * 2}}$`)));
 const time = z.int();
@@ -11,13 +12,20 @@ export const listenerCommand = z.discriminatedUnion('kind', [
   z.strictObject({ kind: z.literal('reveal'), value: hex(32) }),
   z.strictObject({
     kind: z.literal('answer'),
-    trial: z.int().check(z.positive(), z.maximum(1000)),
+    /** Below 0 in practice. */
+    trial: z.int().check(
+      z.minimum(-1000),
+      z.maximum(1000),
+      z.refine((trial) => trial !== 0, 'Nothing is asked in the familiarisation'),
+    ),
     choice: z.string().check(z.minLength(1), z.maxLength(16)),
     confidence: z.nullable(z.enum(confidences)),
     /** Counts the changes of this answer on this phone, from 1: a repeat is harmless, an older one is ignored. */
     revision: z.int().check(z.positive(), z.maximum(10_000)),
     salt: hex(16),
   }),
+  exitCommand,
+  fatigueCommand,
   /** On request: what this phone wants to hear next, at its place in the trial, from 0. A repeat is harmless. */
   z.strictObject({
     kind: z.literal('request-presentation'),
@@ -72,12 +80,18 @@ export const listenerView = z.strictObject({
   revealWanted: z.boolean(),
   left: z.boolean(),
   paused: z.nullable(z.enum(['break', 'too-loud', 'trouble'])),
+  /** The exit questions, once they are asked: what to guess, and the leaf of what was answered. */
+  exit: z.nullable(z.strictObject({ guesses: z.array(z.string()), held: z.nullable(z.string()) })),
+  /** The break after a block, and the leaf of how this listener felt. */
+  break: z.nullable(z.strictObject({ number: z.int(), leastEndsAt: time, held: z.nullable(z.string()) })),
   course: z.array(courseRing),
   trial: z.nullable(
     z.strictObject({
       number: z.int(),
       of: z.int(),
       familiarisation: z.boolean(),
+      /** A practice trial and whether its answer is told afterwards; null in a trial that counts. */
+      practice: z.nullable(z.strictObject({ number: z.int(), feedback: z.boolean() })),
       takesPart: z.boolean(),
       /** *Asking* is this listener's turn on request: to ask again, or to answer. */
       stage: z.enum(['change', 'listening', 'asking', 'answering']),
@@ -126,6 +140,16 @@ export const listenerView = z.strictObject({
     confidence: z.boolean(),
   }),
   lastLock: z.nullable(lockReceipt),
+  /** What was right in the practice trial that has just ended; null elsewhere, and always where answers count. */
+  told: z.nullable(
+    z.strictObject({
+      practice: z.int(),
+      /** What would have been right, as the answer says it. */
+      right: z.string(),
+      /** Whether this listener said so; null without an answer. */
+      isRight: z.nullable(z.boolean()),
+    }),
+  ),
   /** The last trial's end as this listener needs to know it. */
   lastOutcome: z.nullable(
     z.strictObject({ trial: z.int(), outcome: z.enum(['locked', 'void']), counted: z.boolean() }),

@@ -2,6 +2,7 @@ import type { Report } from '#shared/contracts/reports.ts';
 import type { SignedHead } from '#shared/contracts/signed-heads.ts';
 import type { PortrayedCueAudit } from '#shared/cue-audit/portrayed-cue-audit.ts';
 import { resultsByExcerpt } from '#shared/findings/by-excerpt.ts';
+import type { CheckResult } from '#shared/findings/check-result.ts';
 import type { Finding } from '#shared/findings/finding.ts';
 import type { Entry } from '#shared/ledger/chain.ts';
 import { sealedVersions } from '#shared/ledger/protocol-versions.ts';
@@ -12,7 +13,7 @@ import { methodOf, type RegisteredResult } from '#shared/methods/methods.ts';
 import { analysisFacts } from '#shared/protocol/analysis-facts.ts';
 import { presetFacts } from '#shared/protocol/preset-facts.ts';
 import type { Protocol } from '#shared/protocol/protocol.ts';
-import { checksWords } from '#shared/protocol/protocol-checks.ts';
+import { checksWords, decibels } from '#shared/protocol/protocol-checks.ts';
 import { protocolDifferences } from '#shared/protocol/protocol-differences.ts';
 import { treatmentFacts } from '#shared/protocol/treatment.ts';
 import { waysFacts } from '#shared/protocol/ways-to-run.ts';
@@ -20,14 +21,18 @@ import type { AnswerContent } from '#shared/session/answer-leaf.ts';
 import type { BlindingRung } from '#shared/session/blinding-rung.ts';
 import { countedTrials, type LockedTrial, revealedDraw } from '#shared/session/counted-trials.ts';
 import type { Draw } from '#shared/session/draw.ts';
-import { truthOf } from '#shared/session/fitting.ts';
+import { kindOf, truthOf } from '#shared/session/fitting.ts';
 import { handlingOf } from '#shared/session/handling.ts';
 import { listenersToldApart } from '#shared/session/listeners-told-apart.ts';
+import { breakFacts } from '#shared/session/registered-breaks.ts';
+import type { RemarkContent } from '#shared/session/remark-leaf.ts';
 import type { RequestContent } from '#shared/session/request-leaf.ts';
 import { onRequestSentence, requestsIn, timesAsked } from '#shared/session/requests-told.ts';
 import { type RevealedKey, revealedKey } from '#shared/session/revealed-key.ts';
 import type { SessionState } from '#shared/session/state.ts';
 import type { StudyPayloadOf } from '#shared/session/study-events.ts';
+import { stepOf, type TrialKind } from '#shared/session/trial-kinds.ts';
+import { blockWords, saidOf } from './said.views.ts';
 
 export type ReportSource = {
   readonly study: { readonly id: string; readonly title: string };
@@ -35,10 +40,12 @@ export type ReportSource = {
   readonly earlierProtocols?: readonly Protocol[];
   readonly entries: readonly Entry[];
   readonly answers: readonly AnswerContent[];
+  readonly remarks?: readonly RemarkContent[];
   readonly requests?: readonly RequestContent[];
   readonly states: readonly SessionState[];
   readonly rooms: ReadonlyMap<number, string>;
   readonly result: RegisteredResult;
+  readonly known: CheckResult | undefined;
   readonly finding: Finding;
   readonly cueAudit: PortrayedCueAudit;
   readonly checks: readonly Check[];
@@ -47,12 +54,13 @@ export type ReportSource = {
   readonly heads: readonly SignedHead[];
 };
 
-function flowOf({ states, entries }: ReportSource): Report['flow'] {
+function flowOf({ states, entries }: ReportSource, counted: readonly LockedTrial[]): Report['flow'] {
   const seated = new Set(entries.filter(({ kind }) => kind === 'seating-opened').map(({ payload }) => payload.session));
   const wasOpened = ({ session }: SessionState) => seated.has(session);
   const trials = states.flatMap((state) => state.ended);
   const locked = trials.filter(({ outcome }) => outcome === 'locked');
   const opened = states.filter(wasOpened);
+  const answers = counted.flatMap((trial) => trial.answers);
   const seats = states.flatMap((state) => state.seats);
   const { listeners, unlinked } = listenersToldApart(states);
   return {
@@ -63,9 +71,10 @@ function flowOf({ states, entries }: ReportSource): Report['flow'] {
     sessionsNeverStarted: states.length - opened.length,
     trialsOpened: trials.length + states.filter(({ trial }) => trial !== null && trial.trial > 0).length,
     trialsVoid: trials.length - locked.length,
-    trialsCounted: locked.length,
-    answersExpected: locked.reduce((sum, trial) => sum + trial.seats.length, 0),
-    answersMissing: locked.reduce((sum, trial) => sum + trial.missing.length, 0),
+    trialsCounted: counted.length,
+    trialsChecked: locked.length - counted.length,
+    answersExpected: answers.length,
+    answersMissing: answers.filter(({ choice }) => choice === null).length,
     listeners,
     listenersLeft: new Set(seats.filter(({ left }) => left).map(({ seat }) => seat)).size,
     listenersUnlinked: unlinked,
@@ -80,6 +89,17 @@ function drawFor(source: ReportSource, state: SessionState, key: RevealedKey): D
   return secret === undefined || !ran
     ? null
     : revealedDraw(state, methodOf(source.protocol.method), secret, key.codeKey.rows);
+}
+
+/** What a check trial compared. */
+function checkOf(protocol: Protocol, kind: TrialKind): Report['sessions'][number]['trials'][number]['check'] {
+  const { checks, cables } = protocol;
+  if (checks === undefined || kind === 'main') return null;
+  const reference = cables[checks.reference].name;
+  const step = checks.steps[stepOf(kind) ?? -1];
+  return step === undefined
+    ? { name: 'the same with the same', pair: [reference, reference] }
+    : { name: `known difference of ${decibels(step.milliDb)}`, pair: [reference, step.cable.name] };
 }
 
 function sessionView(source: ReportSource, state: SessionState, key: RevealedKey): Report['sessions'][number] {
@@ -99,6 +119,11 @@ function sessionView(source: ReportSource, state: SessionState, key: RevealedKey
     startedAt: atOf('seating-opened'),
     endedAt: atOf('session-finished', 'session-abandoned'),
     listeners: state.seats.length,
+    training: {
+      labelled: state.familiarisations,
+      blind: state.practised.filter(({ form }) => form === 'blind').length,
+      feedback: state.practised.filter(({ form }) => form === 'feedback').length,
+    },
     drawn: draw === null ? null : method.trials.session(draw.firstSide, namesOf(protocol)),
     reason: abandoned === undefined ? null : String(abandoned.payload.reason),
     handling: handlingOf(state),
@@ -107,6 +132,7 @@ function sessionView(source: ReportSource, state: SessionState, key: RevealedKey
       outcome,
       excerpt: state.plan.programme[excerpt]?.title ?? '',
       truth: draw === null ? '' : truthOf(draw, trial),
+      check: draw === null ? null : checkOf(protocol, kindOf(draw, state, trial)),
       answers: seats.map((listener) => ({ listener, choice: choiceOf(trial, listener) })),
       longChanges,
       requested:
@@ -182,6 +208,7 @@ function factsOf({
     { label: 'Answer window', value: `${conduct.answerS} s` },
     { label: 'Programme', value: conduct.programme.map(({ title, lengthS }) => `${title} (${lengthS} s)`).join('; ') },
     { label: 'Level at the load', value: registeredLevelsText(conduct.levels) },
+    ...breakFacts(conduct.breaks),
     { label: 'Chain', value: conduct.chain },
     ...presetFacts(conduct.rigPreset),
   ];
@@ -212,7 +239,7 @@ function conditionsOf({ protocol, states, rung, requests = [] }: ReportSource): 
 
 /** The report, field by field. */
 export function reportView(source: ReportSource): Report {
-  const { study, protocol, entries, states, answers, result, finding, checks, rung, closing, heads } = source;
+  const { study, protocol, entries, states, answers, result, known, finding, checks, rung, closing, heads } = source;
   const method = methodOf(protocol.method);
   const key = revealedKey.parse(entries.find(({ kind }) => kind === 'key-revealed')?.payload);
   const counted = countedTrials(method, states, key, answers);
@@ -233,6 +260,7 @@ export function reportView(source: ReportSource): Report {
     result,
     nullDistribution: method.nullDistribution(counted),
     byExcerpt: byExcerptOf(protocol, counted),
+    knownDifferences: known ?? null,
     cueAudit: source.cueAudit,
     rung: { name: rung.name, why: rung.why },
     conditions: conditionsOf(source),
@@ -240,17 +268,15 @@ export function reportView(source: ReportSource): Report {
       protocol.conduct.levels === undefined
         ? null
         : levelReportOf(entries, key.codeKey.rows, protocol.conduct.levels, namesOf(protocol)),
-    flow: flowOf(source),
+    flow: flowOf(source, counted),
     sessions: states.map((state) => sessionView(source, state, key)),
+    said: saidOf(source),
     voids: voidsOf(entries),
     missing: missingOf(states),
-    deviations: entries
-      .filter(({ kind }) => kind === 'deviation-recorded')
-      .map(({ at, payload }) => ({
-        at,
-        session: payload.session === null ? null : Number(payload.session),
-        text: String(payload.text),
-      })),
+    deviations: entries.flatMap(({ at, kind, payload }) => {
+      const text = kind === 'deviation-recorded' ? String(payload.text) : blockWords(kind, payload);
+      return text === null ? [] : [{ at, session: payload.session === null ? null : Number(payload.session), text }];
+    }),
     protocol: {
       digest: sealing.digest,
       sealedAt: sealing.at,

@@ -12,10 +12,12 @@ import { ReportFigures } from './report-figures.tsx';
 import { ReportFlow } from './report-flow.tsx';
 import { ReportHeads } from './report-heads.tsx';
 import { ReportIncidents } from './report-incidents.tsx';
+import { ReportKnownDifferences } from './report-known-differences.tsx';
 import { ReportLevels } from './report-levels.tsx';
 import { ReportListeners } from './report-listeners.tsx';
 import { ReportProtocol } from './report-protocol.tsx';
 import { ReportRecord } from './report-record.tsx';
+import { ReportSaid } from './report-said.tsx';
 import { ReportSessions } from './report-sessions.tsx';
 import { WhatToSay } from './what-to-say.tsx';
 
@@ -51,10 +53,12 @@ export function ReportView({ report, back, actions, compared, proofs }: ReportVi
       </div>
       <ReportDistribution nullDistribution={report.nullDistribution} distribution={portrait.distribution} />
       <ReportListeners listeners={portrait.listeners} />
+      <ReportKnownDifferences known={report.knownDifferences} method={method} />
       <ReportExcerpts byExcerpt={report.byExcerpt} />
       <ReportChecks checks={portrait.checks} />
       {report.levels === null ? null : <ReportLevels levels={report.levels} />}
       <ReportCueAudit audit={report.cueAudit} />
+      <ReportSaid said={report.said} />
       <ReportFlow flow={report.flow} missingWords={result.missingAnswers} />
       <ReportIncidents
         voids={report.voids}

@@ -18,12 +18,13 @@ export function CableChoice({ index, label, cables }: CableChoiceProps) {
   const { register, setValue, getFieldState } = useFormContext<StudyFormValues>();
   const name = `cables.${index}.cableId` as const;
   const cableId = useWatch<StudyFormValues, typeof name>({ name });
+  const ofQuestion = cables.filter(({ kind }) => kind !== 'check');
   const cable = cables.find(({ id }) => id === cableId);
   const treatment = useWatch<StudyFormValues, 'treatment'>({ name: 'treatment' });
   const isTreatment = treatment !== undefined;
   const pieces = cable ? (
     <SpecimenChoice
-      index={index}
+      name={`cables.${index}.specimenIds`}
       cableName={nameInStudy(cable.name, index, treatment)}
       specimens={livingSpecimens(cable)}
     />
@@ -48,7 +49,7 @@ export function CableChoice({ index, label, cables }: CableChoiceProps) {
         {...register(name, { onChange: (event: { target: { value: string } }) => takeUp(event.target.value) })}
         label={label}
         placeholder="Choose a cable"
-        options={cables.map((choice) => ({
+        options={ofQuestion.map((choice) => ({
           value: choice.id,
           label: `${choice.name}, ${formatLength(choice.lengthMm)}`,
         }))}
