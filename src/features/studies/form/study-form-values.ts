@@ -2,6 +2,7 @@ import type { z } from 'zod';
 import type { KeptPreset } from '#shared/contracts/rig-presets.ts';
 import type { studyDraft } from '#shared/contracts/studies.ts';
 import { methodIds } from '#shared/methods/methods.ts';
+import type { Rig, RigPreset } from '#shared/protocol/rig-preset.ts';
 
 /** What the form holds while it is being typed; numbers that are not there yet are NaN. */
 export type StudyFormValues = z.input<typeof studyDraft>;
@@ -33,8 +34,14 @@ export const newStudyValues: StudyFormValues = {
   codeHolderId: '',
 };
 
-/** A new study begins with the first preset for its rig. */
+/** The preset to begin from at a kind of rig: the one that shipped, if it is still in use. */
+export function presetFor(presets: readonly KeptPreset[], rig: Rig): RigPreset | undefined {
+  const fitting = presets.filter((kept) => kept.preset.kind === rig);
+  return (fitting.find(({ isShipped }) => isShipped) ?? fitting[0])?.preset;
+}
+
+/** A new study begins with the preset for its rig. */
 export function newStudyWith(presets: readonly KeptPreset[]): StudyFormValues {
-  const preset = presets.find((kept) => kept.preset.kind === newStudyValues.rig)?.preset;
+  const preset = presetFor(presets, newStudyValues.rig);
   return preset === undefined ? newStudyValues : { ...newStudyValues, rigPreset: preset };
 }
