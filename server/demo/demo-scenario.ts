@@ -111,13 +111,14 @@ export const draftStudy: Free = {
     { title: 'Piano, slow', lengthS: 20, start: '0:42' },
     { title: 'Cymbals', lengthS: 18, start: '2:05' },
   ],
+  rigPreset: shippedPresets.loudspeaker,
   changeS: 30,
   answerS: 45,
   confidence: true,
 };
 
-/** Closed with a difference, with a void and a missing answer in it. */
-export const closedStudy: Free = {
+/** An evening with three listeners. */
+const evening: Free = {
   ...studyToRun,
   title: 'Study Curlew',
   question: 'Do listeners hear the level that a thin 6 m run costs into 4 Ω?',
@@ -134,9 +135,12 @@ export const closedStudy: Free = {
   answerS: 45,
 };
 
+/** Closed with a difference, with a void and a missing answer in it. Its labels were scanned at every change. */
+export const closedStudy: Free = { ...evening, rigPreset: shippedPresets.loudspeaker };
+
 /** Closed, and what is left at a low level was shown to be small: it registered a margin. */
 export const closedWithout: Free = {
-  ...closedStudy,
+  ...evening,
   title: 'Study Dotterel',
   question: 'Is what listeners hear of the thin 6 m run small when the level is that of a conversation?',
   marginPercent: 30,
@@ -144,7 +148,7 @@ export const closedWithout: Free = {
 
 /** Collecting: its first session is held, its second is planned. */
 export const collectingStudy: Free = {
-  ...closedStudy,
+  ...evening,
   title: 'Study Whimbrel',
   question: 'Do listeners on two evenings tell the two 6 m runs apart?',
   sessions: 2,
@@ -153,7 +157,7 @@ export const collectingStudy: Free = {
 
 /** Closed as well: which of the two they prefer, with “no preference” on offer. */
 export const closedPreference: Free = {
-  ...closedStudy,
+  ...evening,
   title: 'Study Sanderling',
   question: 'Do listeners prefer one of the two 6 m runs in this room?',
   method: 'paired-preference',
@@ -162,7 +166,7 @@ export const closedPreference: Free = {
 
 /** Published: one listener at a time, so that the effect has an interval; one session was abandoned before its trials. */
 export const publishedStudy: Free = {
-  ...closedStudy,
+  ...evening,
   title: 'Study Turnstone',
   question: 'Do listeners, one at a time, tell a 0.5 mm² run of 6 m from one of 4 mm² into 4 Ω?',
   sessions: 3,
