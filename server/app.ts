@@ -11,6 +11,7 @@ import { attendancesRoutes } from './features/attendances/attendances.routes.ts'
 import { auditsRoutes } from './features/audits/audits.routes.ts';
 import { cablesRoutes } from './features/cables/cables.routes.ts';
 import { codesRoutes } from './features/codes/codes.routes.ts';
+import { evidenceRoutes } from './features/evidence/evidence.routes.ts';
 import { firstOwnerRoutes } from './features/first-owner/first-owner.routes.ts';
 import { FirstOwner } from './features/first-owner/first-owner.service.ts';
 import { healthRoutes, version } from './features/health/health.routes.ts';
@@ -114,6 +115,7 @@ export function createApp(deps: Deps) {
   cablesRoutes(api, access, deps);
   rigPresetsRoutes(api, access, deps);
   measurementsRoutes(api, access, deps);
+  evidenceRoutes(api, access, deps);
   studiesRoutes(api, access, deps, sittings);
   codesRoutes(api, access, deps);
   sessionsRoutes(api, access, deps, sittings);

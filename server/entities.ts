@@ -6,6 +6,7 @@ import { Listener } from './features/attendances/listener.entity.ts';
 import { Audit } from './features/audits/audit.entity.ts';
 import { Cable } from './features/cables/cable.entity.ts';
 import { Specimen } from './features/cables/specimen.entity.ts';
+import { Evidence } from './features/evidence/evidence.entity.ts';
 import { Invitation } from './features/invitations/invitation.entity.ts';
 import { LevelDuty } from './features/levels/level-duty.entity.ts';
 import { Measurement } from './features/measurements/measurement.entity.ts';
@@ -15,6 +16,7 @@ import { PastRole } from './features/organisations/past-role.entity.ts';
 import { Publication } from './features/publications/publication.entity.ts';
 import { RigPreset } from './features/rig-presets/rig-preset.entity.ts';
 import { Answer } from './features/sessions/answer.entity.ts';
+import { PresentationRequest } from './features/sessions/request.entity.ts';
 import { Seat } from './features/sessions/seat.entity.ts';
 import { Session } from './features/sessions/session.entity.ts';
 import { SignInAttempt } from './features/sign-in/sign-in-attempt.entity.ts';
@@ -40,6 +42,7 @@ export const entities = [
   Cable,
   Specimen,
   Measurement,
+  Evidence,
   Study,
   ProtocolVersion,
   RecordEntry,
@@ -53,6 +56,7 @@ export const entities = [
   Session,
   Seat,
   Answer,
+  PresentationRequest,
   CodeKey,
   DrawSecret,
   Publication,

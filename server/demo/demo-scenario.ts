@@ -117,8 +117,8 @@ export const draftStudy: Free = {
   confidence: true,
 };
 
-/** An evening with three listeners. */
-const evening: Free = {
+/** Run in the past: a void and a missing answer are in each. */
+const pastStudy: Free = {
   ...studyToRun,
   title: 'Study Curlew',
   question: 'Do listeners hear the level that a thin 6 m run costs into 4 Ω?',
@@ -135,12 +135,19 @@ const evening: Free = {
   answerS: 45,
 };
 
-/** Closed with a difference, with a void and a missing answer in it. Its labels were scanned at every change. */
-export const closedStudy: Free = { ...evening, rigPreset: shippedPresets.loudspeaker };
+/**
+ * Closed with a difference: level is part of what is compared, is measured, and may explain it. Its labels were scanned at
+ * every change.
+ */
+export const closedStudy: Free = {
+  ...pastStudy,
+  rigPreset: shippedPresets.loudspeaker,
+  levels: { handling: 'as-supplied', toleranceMilliDb: 100, frequenciesHz: [100, 1000, 10_000] },
+};
 
 /** Closed, and what is left at a low level was shown to be small: it registered a margin. */
 export const closedWithout: Free = {
-  ...evening,
+  ...pastStudy,
   title: 'Study Dotterel',
   question: 'Is what listeners hear of the thin 6 m run small when the level is that of a conversation?',
   marginPercent: 30,
@@ -148,7 +155,7 @@ export const closedWithout: Free = {
 
 /** Collecting: its first session is held, its second is planned. */
 export const collectingStudy: Free = {
-  ...evening,
+  ...pastStudy,
   title: 'Study Whimbrel',
   question: 'Do listeners on two evenings tell the two 6 m runs apart?',
   sessions: 2,
@@ -157,7 +164,7 @@ export const collectingStudy: Free = {
 
 /** Closed as well: which of the two they prefer, with “no preference” on offer. */
 export const closedPreference: Free = {
-  ...evening,
+  ...pastStudy,
   title: 'Study Sanderling',
   question: 'Do listeners prefer one of the two 6 m runs in this room?',
   method: 'paired-preference',
@@ -166,7 +173,7 @@ export const closedPreference: Free = {
 
 /** Published: one listener at a time, so that the effect has an interval; one session was abandoned before its trials. */
 export const publishedStudy: Free = {
-  ...evening,
+  ...pastStudy,
   title: 'Study Turnstone',
   question: 'Do listeners, one at a time, tell a 0.5 mm² run of 6 m from one of 4 mm² into 4 Ω?',
   sessions: 3,

@@ -5,6 +5,7 @@ import { Attendance } from '../features/attendances/attendance.entity.ts';
 import { Listener } from '../features/attendances/listener.entity.ts';
 import { Cable } from '../features/cables/cable.entity.ts';
 import { Specimen } from '../features/cables/specimen.entity.ts';
+import { Evidence } from '../features/evidence/evidence.entity.ts';
 import { Invitation } from '../features/invitations/invitation.entity.ts';
 import { Measurement } from '../features/measurements/measurement.entity.ts';
 import { Membership } from '../features/organisations/membership.entity.ts';
@@ -34,6 +35,7 @@ export async function forgetDemo(deps: Deps, organisationId: string): Promise<vo
     const specimens = await tx.findBy(Specimen, ofCables);
     await tx.delete(Measurement, { specimenId: In(specimens.map(({ id }) => id)) });
     await tx.delete(Specimen, ofCables);
+    await tx.delete(Evidence, ofCables);
     await tx.delete(Cable, { organisationId });
     await tx.delete(RigPreset, { organisationId });
     await tx.delete(OutgoingMail, { organisationId });

@@ -1,4 +1,5 @@
 import type { StudyDraft } from '#shared/contracts/studies.ts';
+import type { LevelCheckName } from '#shared/levels/measured-levels.ts';
 import { withTransaction } from '../db/transaction.ts';
 import type { Deps } from '../deps.ts';
 import { addSpecimen, createCable, getCable } from '../features/cables/cables.service.ts';
@@ -31,6 +32,7 @@ import {
 import { forgetDemo } from './forget-demo.ts';
 import { HandClock } from './hand-clock.ts';
 import { inviteDemoListeners } from './invite-listeners.ts';
+import { measureLevels } from './measure-levels.ts';
 import { demoTimeZone, type People, prepareStudy } from './prepare-study.ts';
 import { runPublishedStudy } from './published-study.ts';
 import { type Hearing, SimulatedSession } from './simulated-session.ts';
@@ -95,20 +97,35 @@ const preference: Hearing = ([one = '', other = ''], seat, trial) => {
   return leans === one < other ? 'first' : 'second';
 };
 
+/** Measures the levels that are due. */
+type Measure = (sittings: Sittings, check: LevelCheckName) => Promise<void>;
+
 /** Runs the session that is planned, with a void in it, to its end. */
-async function runSession(deps: Deps, clock: HandClock, sessionId: string, hears: Hearing): Promise<void> {
+async function runSession(
+  deps: Deps,
+  clock: HandClock,
+  sessionId: string,
+  hears: Hearing,
+  measure: Measure = async () => {},
+): Promise<void> {
   clock.advance(3_600_000);
   const sittings = new Sittings(deps);
   const session = await SimulatedSession.open(deps, clock, sittings, sessionId);
+  const measureIfDue = async () => {
+    if (session.levelsDue !== null) await measure(sittings, session.levelsDue);
+  };
+  await measureIfDue();
   await session.seat(['Sofa, left', 'Sofa, right', 'Armchair']);
   await session.familiarise();
   let trial = 0;
   while (session.trialsLeft) {
     trial += 1;
+    await measureIfDue();
     const fault = trial === 6 ? { reason: 'noise' as const, note: 'A door slammed while it played.' } : undefined;
     await session.trial(hears, fault);
   }
   await session.finish();
+  await measureIfDue();
   await sittings.stop();
   clock.advance(900_000);
 }
@@ -122,7 +139,10 @@ async function runClosedStudy(
   hears: Hearing,
 ) {
   const { where, sessionId } = await prepareStudy(deps, organisationId, people, draft);
-  await runSession(deps, clock, sessionId, hears);
+  const at = { organisationId, studyId: where.id, sessionId };
+  await runSession(deps, clock, sessionId, hears, (sittings, check) =>
+    measureLevels(deps, sittings, at, people.codeHolder, check),
+  );
   await closeStudy(deps, where, people.manager, '');
 }
 

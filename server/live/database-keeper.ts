@@ -10,6 +10,7 @@ import { type Tx, withTransaction } from '../db/transaction.ts';
 import type { Deps } from '../deps.ts';
 import { labelOf, noteSeated } from '../features/attendances/attendances.store.ts';
 import { dropReminders, tellCancelled } from '../features/attendances/telling.service.ts';
+import { insertRequest } from '../features/sessions/requests.store.ts';
 import * as store from '../features/sessions/sessions.store.ts';
 import { protocolOf } from '../features/studies/studies.service.ts';
 import { lockStudyRow, studiesOf, studyById, updateStudy } from '../features/studies/studies.store.ts';
@@ -78,6 +79,7 @@ function keepingIn(tx: Tx, deps: Deps): Keeping {
       return { ...seat, label };
     },
     saveAnswer: (row) => store.saveAnswer(tx, row),
+    saveRequest: (row) => insertRequest(tx, row),
     record: async (memory, events) => {
       const { studyId, id, number } = memory.session;
       const entries = await append(

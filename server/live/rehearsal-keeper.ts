@@ -38,8 +38,9 @@ export function rehearsalKeeper(random: Random, code: string, plan: SessionPlan)
       seats += 1;
       return { ...seat, label: `L${String(seats).padStart(2, '0')}` };
     },
-    // The memory holds the open trial's answers, and nothing else asks for them.
+    // The memory holds the open trial's answers and requests, and nothing else asks for them.
     saveAnswer: async () => {},
+    saveRequest: async () => {},
     record: async ({ session }, events) =>
       events.map(({ kind, at, payload }) => {
         const nonce = random.bytes('entry-nonce', 16).toString('hex');

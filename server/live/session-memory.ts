@@ -4,10 +4,12 @@ import type { Method } from '#shared/methods/method.ts';
 import { methodOf } from '#shared/methods/methods.ts';
 import { readSessionEvent, type SessionEvent, sessionEvents } from '#shared/session/events.ts';
 import { evolve, holdAnswer } from '#shared/session/evolve.ts';
+import { holdRequest } from '#shared/session/on-request.ts';
 import type { SessionState } from '#shared/session/state.ts';
 import { withTransaction } from '../db/transaction.ts';
 import type { Deps } from '../deps.ts';
 import type { Answer } from '../features/sessions/answer.entity.ts';
+import { requestsInTrial } from '../features/sessions/requests.store.ts';
 import type { Seat } from '../features/sessions/seat.entity.ts';
 import type { Session } from '../features/sessions/session.entity.ts';
 import * as store from '../features/sessions/sessions.store.ts';
@@ -90,13 +92,17 @@ export async function loadMemory({ db }: Deps, session: Session): Promise<Sessio
     const replayed = events.reduce<SessionState | null>((state, event) => evolve(state, event, method), null);
     if (replayed === null) throw new Error(`session ${session.id} is not on the record`);
     const rows = replayed.trial === null ? [] : await store.answersToTrial(tx, session.id, replayed.trial.trial);
+    const asked = replayed.trial === null ? [] : await requestsInTrial(tx, session.id, replayed.trial.trial);
     const seats = await store.seatsOf(tx, session.id);
     return {
       session,
       title: study.title,
       isRehearsal: false,
       method,
-      state: rows.reduce((state, { seat, leaf }) => holdAnswer(state, seat, leaf), replayed),
+      state: asked.reduce(
+        (state, { presentation, label }) => holdRequest(state, presentation, label),
+        rows.reduce((state, { seat, leaf }) => holdAnswer(state, seat, leaf), replayed),
+      ),
       entries: study.headSequence,
       lock: entries.reduce<Lock | null>((lock, entry) => lockOf(entry) ?? lock, null),
       held: new Map(rows.map((row) => [row.seat, heldOf(row)])),

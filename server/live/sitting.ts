@@ -2,6 +2,7 @@ import type { HeldAnswer, ListenerCommand, ListenerView } from '#shared/contract
 import type { ProctorCommand, ProctorView } from '#shared/contracts/proctor-live.ts';
 import { Problem } from '#shared/problem.ts';
 import { decide, type SessionCommand } from '#shared/session/decide.ts';
+import { takesAnswers } from '#shared/session/on-request.ts';
 import { dueAt } from '#shared/session/progress.ts';
 import type { Deps } from '../deps.ts';
 import type { Seat } from '../features/sessions/seat.entity.ts';
@@ -12,6 +13,7 @@ import { type AnswerCommand, answerRow, requireAnswerable, requireLate } from '.
 import { consoleViewOf, phoneViewOf } from './audience-views.ts';
 import { databaseKeeper } from './database-keeper.ts';
 import type { Keeper, Keeping, SeatLink } from './keeper.ts';
+import { afterRequest, isHeldRequest, type RequestCommand, requestDecided, requestRow } from './requests.ts';
 import { scanned } from './scanning.ts';
 import { afterAnswer, afterEvents, heldOf, loadMemory, type SessionMemory } from './session-memory.ts';
 import { Watchers } from './watchers.ts';
@@ -20,7 +22,13 @@ import { Watchers } from './watchers.ts';
 const anyTime: readonly ProctorCommand['kind'][] = ['record-deviation', 'scan-label'];
 
 /** What an action comes to: a command, what to remember once it is kept, and what to answer. */
-type Act<T> = { command: SessionCommand; stored?: () => void; result: T };
+type Act<T> = {
+  command: SessionCommand;
+  /** What is kept beside the record, once the command is not refused. */
+  alongside?: () => Promise<void>;
+  stored?: () => void;
+  result: T;
+};
 
 /**
  * One session while people sit in it: a queue in which one thing happens at a time. A command is parsed and authorised
@@ -89,8 +97,25 @@ export class Sitting {
     if (refusal !== null) throw refusal;
   }
 
-  fromPhone(seat: string, command: Exclude<ListenerCommand, AnswerCommand>): Promise<void> {
+  fromPhone(seat: string, command: Exclude<ListenerCommand, AnswerCommand | RequestCommand>): Promise<void> {
     return this.#inTurn(() => this.#do({ ...command, seat }));
+  }
+
+  /** On request: keeps what was asked for beside the record and its leaf on it, and begins the change. */
+  request(seat: string, command: RequestCommand): Promise<void> {
+    return this.#inTurn(async () => {
+      const row = requestRow(this.#memory, seat, command);
+      if (isHeldRequest(this.#memory, row)) return;
+      const stored = () => {
+        this.#memory = afterRequest(this.#memory, row);
+      };
+      await this.#perform(async (keeping) => ({
+        command: requestDecided(row),
+        alongside: () => keeping.saveRequest(row),
+        stored,
+        result: undefined,
+      }));
+    });
   }
 
   /** Stores an answer durably, then acknowledges it. A repeat is acknowledged again; an older revision changes nothing. */
@@ -99,7 +124,8 @@ export class Sitting {
       requireAnswerable(this.#memory, seat, command);
       const { trial } = this.#memory.state;
       if (trial === null || trial.trial !== command.trial) return this.#takeLate(seat, command);
-      if (trial.stage !== 'answering') throw new Problem('too-early', 'Answers open after the last presentation.');
+      if (!takesAnswers(trial, this.#memory.method))
+        throw new Problem('too-early', 'Answers open after the last presentation.');
       const known = this.#memory.held.get(seat);
       if (known !== undefined && known.revision >= command.revision) return known;
       const row = answerRow(this.#memory, seat, command, { late: false, at: this.#deps.clock.now() });
@@ -211,8 +237,9 @@ export class Sitting {
    */
   async #perform<T>(act: (keeping: Keeping) => Promise<Act<T>>): Promise<T> {
     const { events, entries, stored, result } = await this.#keeper.keep(async (keeping) => {
-      const { command, stored, result } = await act(keeping);
+      const { command, alongside, stored, result } = await act(keeping);
       const events = decide(this.#memory.state, command, this.#deps.clock.now());
+      await alongside?.();
       const entries = events.length === 0 ? [] : await keeping.record(this.#memory, events);
       return { events, entries, stored, result };
     });

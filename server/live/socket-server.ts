@@ -59,6 +59,10 @@ async function perform(sittings: Sittings, place: Place, value: unknown): Promis
   }
   const command = parse(listenerCommand as unknown as z.ZodType<z.output<typeof listenerCommand>>, value);
   if (command.kind === 'answer') return { ok: true, held: await sitting.answer(place.seat, command) };
+  if (command.kind === 'request-presentation') {
+    await sitting.request(place.seat, command);
+    return { ok: true };
+  }
   await sitting.fromPhone(place.seat, command);
   return { ok: true };
 }

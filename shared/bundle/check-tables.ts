@@ -13,6 +13,8 @@ export function checkTables(bundle: BundleReading): Verdict {
     if (found === undefined) faults.push(`${name} is missing.`);
     else if (!sameBytes(found, bytes)) faults.push(`${name} differs from the record${placeOf(name, found, bytes)}.`);
   }
+  for (const name of bundle.files.keys())
+    if (name.endsWith('.csv') && !made.has(name)) faults.push(`${name} is no table of this record.`);
   return { faults, held: `${made.size} files, the same byte for byte when they are made again from the record.` };
 }
 

@@ -15,7 +15,7 @@ export type TableField = {
 };
 
 export type Table = {
-  readonly name: 'sessions' | 'trials' | 'answers' | 'listeners' | 'result' | 'levels' | 'cues';
+  readonly name: 'sessions' | 'trials' | 'answers' | 'listeners' | 'requests' | 'result' | 'levels' | 'cues';
   readonly title: string;
   readonly fields: readonly TableField[];
   readonly key: readonly string[];
@@ -41,6 +41,7 @@ export function tablesOf(study: StudyReading): Table[] {
     trialsTable(study),
     answersTable(study),
     listenersTable(study),
+    ...(study.requests().length === 0 ? [] : [requestsTable(study)]),
     resultTable(study),
     ...levelsTables(study),
     ...cuesTable(study),
@@ -206,6 +207,42 @@ function answersTable(study: StudyReading): Table {
     ],
     key: ['session', 'trial', 'listener'],
     rows,
+  };
+}
+
+/** There only where a single listener asked for what was presented. */
+function requestsTable(study: StudyReading): Table {
+  const asked = new Map(
+    study
+      .entries()
+      .filter(({ kind }) => kind === 'presentation-requested')
+      .map(({ at, payload }) => [`${payload.session} ${payload.trial} ${payload.presentation}`, at]),
+  );
+  return {
+    name: 'requests',
+    title: 'Every presentation that was asked for, void trials included',
+    fields: [
+      session,
+      trial,
+      field('presentation', 'integer', 'Place of the presentation in its trial, from 1.'),
+      listener,
+      field('asked_for', 'string', 'The label that was asked for.'),
+      field('asked', 'datetime', 'When it was asked for, by the server’s clock.'),
+    ],
+    key: ['session', 'trial', 'presentation'],
+    rows: study.sessions().flatMap(({ session: number, sessionId }) =>
+      study
+        .requests()
+        .filter((one) => one.session === sessionId)
+        .map((one): Cell[] => [
+          number,
+          one.trial,
+          one.presentation + 1,
+          one.seat,
+          one.label,
+          asked.get(`${number} ${one.trial} ${one.presentation}`) ?? '',
+        ]),
+    ),
   };
 }
 

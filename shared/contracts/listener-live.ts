@@ -18,6 +18,14 @@ export const listenerCommand = z.discriminatedUnion('kind', [
     revision: z.int().check(z.positive(), z.maximum(10_000)),
     salt: hex(16),
   }),
+  /** On request: what this phone wants to hear next, at its place in the trial, from 0. A repeat is harmless. */
+  z.strictObject({
+    kind: z.literal('request-presentation'),
+    trial: z.int().check(z.positive(), z.maximum(1000)),
+    presentation: z.int().check(z.nonnegative(), z.maximum(100)),
+    label: z.string().check(z.minLength(1), z.maxLength(16)),
+    salt: hex(16),
+  }),
   z.strictObject({ kind: z.literal('too-loud') }),
   z.strictObject({ kind: z.literal('leave') }),
 ]);
@@ -71,7 +79,8 @@ export const listenerView = z.strictObject({
       of: z.int(),
       familiarisation: z.boolean(),
       takesPart: z.boolean(),
-      stage: z.enum(['change', 'listening', 'answering']),
+      /** *Asking* is this listener's turn on request: to ask again, or to answer. */
+      stage: z.enum(['change', 'listening', 'asking', 'answering']),
       /** What is heard now (A, B, X, first ...), or comes next during a change. */
       presentation: z.string(),
       /** The same in a sentence: "A", "the first". */
@@ -80,6 +89,23 @@ export const listenerView = z.strictObject({
       presentations: z.int(),
       endsAt: z.nullable(time),
       held: z.nullable(heldAnswer),
+      /** On request; null where presentations come in a fixed order. */
+      requests: z.nullable(
+        z.strictObject({
+          /** How many more presentations the trial has. */
+          left: z.int(),
+          labels: z.array(
+            z.strictObject({
+              label: z.string(),
+              /** How often it was asked for in this trial. */
+              times: z.int(),
+              /** Whether it can be asked for when it is this listener's turn. */
+              canRequest: z.boolean(),
+            }),
+          ),
+          takesAnswers: z.boolean(),
+        }),
+      ),
     }),
   ),
   question: z.strictObject({

@@ -97,9 +97,12 @@ export const proctorView = z.strictObject({
       number: z.int(),
       of: z.int(),
       familiarisation: z.boolean(),
-      stage: z.enum(['change', 'listening', 'answering']),
+      /** *Asking* is the listener's turn on request: nothing here tells what is asked for, or whether answers are open. */
+      stage: z.enum(['change', 'listening', 'asking', 'answering']),
       presentationNumber: z.int(),
+      /** On request the most that the trial may have. */
       presentations: z.int(),
+      onRequest: z.boolean(),
       /** The blind code to be fitted, during a change and while it is heard. */
       code: z.string().nullable(),
       excerpt: z.string(),

@@ -100,6 +100,8 @@ export const report = z.strictObject({
           truth: z.string(),
           answers: z.array(z.strictObject({ listener: z.string(), choice: z.string().nullable() })),
           longChanges: z.int(),
+          /** How often each label was asked for; null where presentations came in a fixed order. */
+          requested: z.array(z.strictObject({ label: z.string(), times: z.int() })).nullable(),
         }),
       ),
     }),

@@ -73,6 +73,8 @@ export const studyDraft = z
     levels: registeredLevels.optional(),
     /** Whether what comes again within a trial is fitted from specimens of its own; left out for no. */
     separateSpecimens: z.boolean().optional(),
+    /** A single listener asks for what is presented; left out where everybody hears a fixed order. */
+    onRequest: z.strictObject({ most: whole(1, 30, 'presentations') }).optional(),
     codeHolderId: z.uuid('Choose the code holder'),
   })
   .check((check) => {

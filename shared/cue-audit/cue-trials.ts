@@ -1,6 +1,8 @@
 import type { Method } from '../methods/method.ts';
 import { type HeldChoice, revealedDraw } from '../session/counted-trials.ts';
 import { truthOf } from '../session/fitting.ts';
+import type { RequestContent } from '../session/request-leaf.ts';
+import { requestsIn } from '../session/requests-told.ts';
 import type { RevealedKey } from '../session/revealed-key.ts';
 import type { SessionState } from '../session/state.ts';
 
@@ -81,7 +83,8 @@ export function clockedTrials(entries: readonly TimedEntry[]): Map<number, Clock
     if (kind === 'trial-opened')
       open = { opened: at, gap: lastEnd === null ? null : at - lastEnd, done: [], now: begun(at), paused: false };
     if (open === null) continue;
-    if (kind === 'step-confirmed') {
+    if (kind === 'presentation-requested') open.now = begun(at);
+    else if (kind === 'step-confirmed') {
       open.now.steps.set(String(payload.step), at - open.now.last);
       open.now.last = at;
     } else if (kind === 'listening-started') open.now.listened = at;
@@ -106,6 +109,17 @@ export function clockedTrials(entries: readonly TimedEntry[]): Map<number, Clock
   return trials;
 }
 
+const untimed: PresentationTimes = { steps: new Map(), ready: null, change: null, listening: null };
+
+/** On request the first presentation of each label, in the method's order: what was heard again was no longer new. */
+function inMethodsOrder(
+  { presentations }: Pick<Method, 'presentations'>,
+  heard: readonly PresentationTimes[],
+  asked: readonly RequestContent[],
+): PresentationTimes[] {
+  return presentations.map((label) => heard[asked.findIndex((one) => one.label === label)] ?? untimed);
+}
+
 /**
  * Every locked trial of every session with its truth, its answers and its times, in order.
  *
@@ -114,6 +128,7 @@ export function clockedTrials(entries: readonly TimedEntry[]): Map<number, Clock
  * @param entries the record
  * @param key     both secrets, as closing revealed them
  * @param held    the answers that stand beside the record
+ * @param requests what was asked for on request, beside it too
  */
 export function cueTrials(
   method: Method,
@@ -121,6 +136,7 @@ export function cueTrials(
   entries: readonly TimedEntry[],
   key: RevealedKey,
   held: readonly HeldChoice[],
+  requests: readonly RequestContent[] = [],
 ): CueTrial[] {
   const choices = new Map(held.map(({ session, trial, seat, choice }) => [`${session} ${trial} ${seat}`, choice]));
   return states.flatMap((state) => {
@@ -129,6 +145,12 @@ export function cueTrials(
     if (secret === undefined || locked.length === 0) return [];
     const draw = revealedDraw(state, method, secret, key.codeKey.rows);
     const clocked = clockedTrials(entries.filter(({ payload }) => payload.session === state.session));
+    const timesOfTrial = (trial: number): Clocked => {
+      const times = clocked.get(trial) ?? { presentations: [], gap: null, answering: null };
+      if (state.plan.onRequest === undefined) return times;
+      const asked = requestsIn(requests, state.sessionId, trial);
+      return { ...times, presentations: inMethodsOrder(method, times.presentations, asked) };
+    };
     return locked.map(({ trial, seats }, index) => ({
       session: state.session,
       trial,
@@ -139,7 +161,7 @@ export function cueTrials(
         listener,
         choice: choices.get(`${state.sessionId} ${trial} ${listener}`) ?? null,
       })),
-      ...(clocked.get(trial) ?? { presentations: [], gap: null, answering: null }),
+      ...timesOfTrial(trial),
     }));
   });
 }

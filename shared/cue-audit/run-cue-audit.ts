@@ -1,6 +1,7 @@
 import { methodOf } from '../methods/methods.ts';
 import type { Protocol } from '../protocol/protocol.ts';
 import type { HeldChoice } from '../session/counted-trials.ts';
+import type { RequestContent } from '../session/request-leaf.ts';
 import type { RevealedKey } from '../session/revealed-key.ts';
 import type { SessionState } from '../session/state.ts';
 import { cueAudit } from './cue-audit.ts';
@@ -14,7 +15,8 @@ export function runCueAudit(
   entries: readonly TimedEntry[],
   key: RevealedKey,
   held: readonly HeldChoice[],
+  requests: readonly RequestContent[] = [],
 ): CueAuditResult {
   const method = methodOf(protocol.method);
-  return cueAudit(method, cueTrials(method, states, entries, key, held));
+  return cueAudit(method, cueTrials(method, states, entries, key, held, requests));
 }

@@ -1,6 +1,7 @@
 import { answerLeaf } from '../session/answer-leaf.ts';
 import type { PayloadOf } from '../session/events.ts';
 import type { SessionState } from '../session/state.ts';
+import { requestFaults } from './check-requests.ts';
 import { answerName } from './publication-parts.ts';
 import type { StudyReading } from './study-reading.ts';
 import type { Verdict } from './verify.ts';
@@ -30,7 +31,12 @@ export function checkAnswers(study: StudyReading): Verdict {
   const stray = answers.find((answer) => !locked.has(answerName(answer)));
   if (stray !== undefined) faults.push(`Trial ${stray.trial}, ${stray.seat}: the record holds no such answer.`);
   if (leaves.size < answers.length) faults.push('An answer comes twice.');
-  return { faults, held: `${locked.size} answers, each as it was when its trial locked.` };
+  const requests = requestFaults(study);
+  const asked = requests.count === 0 ? '' : ` ${requests.count} presentations, each as it was asked for.`;
+  return {
+    faults: [...faults, ...requests.faults],
+    held: `${locked.size} answers, each as it was when its trial locked.${asked}`,
+  };
 }
 
 const lockName = ({ session, trial }: { session: number; trial: number }) => `${session} ${trial}`;

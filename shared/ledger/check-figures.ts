@@ -24,7 +24,14 @@ export function checkFigures(study: StudyReading): Verdict {
 function cueFaults(study: StudyReading): string[] {
   const recorded = study.payloadOf('result-recorded')?.cues;
   if (recorded === undefined) return [];
-  const again = runCueAudit(study.protocol(), study.sessions(), study.entries(), study.secrets(), study.answers());
+  const again = runCueAudit(
+    study.protocol(),
+    study.sessions(),
+    study.entries(),
+    study.secrets(),
+    study.answers(),
+    study.requests(),
+  );
   const place = differentFigure(recorded as Json, again as unknown as Json);
   return place === null ? [] : [`Made again, ${place} of the cue audit differs from the record.`];
 }

@@ -4,7 +4,9 @@ import type { AnswerContent } from '../session/answer-leaf.ts';
 import { revealedDraw } from '../session/counted-trials.ts';
 import type { Draw } from '../session/draw.ts';
 import { sessionsInRecord } from '../session/read-record.ts';
+import type { RequestContent } from '../session/request-leaf.ts';
 import { revealedKey } from '../session/revealed-key.ts';
+import type { SessionState } from '../session/state.ts';
 import { canonicalJson, type Json } from './canonical-json.ts';
 import type { Entry } from './chain.ts';
 
@@ -16,6 +18,8 @@ export type PartName = (typeof partNames)[number];
 export type PublicationParts = { readonly [part in PartName]: unknown } & {
   /** The protocol's versions before the one in force, in order; left out where it was never amended. */
   readonly earlierProtocols?: unknown;
+  /** What single listeners asked to hear, with the salts; left out where nothing was asked for. */
+  readonly requests?: unknown;
 };
 
 /** What a session's draw came to, written out, so that nobody needs this program to read what X was. */
@@ -32,6 +36,8 @@ export type ClosedStudy = {
   readonly earlierProtocols?: readonly Protocol[];
   /** Answers held in time. Those of void trials have no leaf on the record and are left out. */
   readonly answers: readonly AnswerContent[];
+  /** What single listeners asked to hear, void trials included. */
+  readonly requests?: readonly RequestContent[];
 };
 
 type LockedTrial = { session: number; trial: number; leaves: readonly { seat: string }[] };
@@ -54,6 +60,23 @@ function lockedAnswers({ entries, answers }: ClosedStudy, sessionIds: ReadonlyMa
     .map(({ session, trial, seat, choice, confidence, salt }) => ({ session, trial, seat, choice, confidence, salt }));
 }
 
+/** Requests as they were made: by session, trial and place. */
+function inOrder(requests: readonly RequestContent[], states: readonly SessionState[]): RequestContent[] {
+  return states.flatMap(({ sessionId }) =>
+    requests
+      .filter(({ session }) => session === sessionId)
+      .sort((a, b) => a.trial - b.trial || a.presentation - b.presentation)
+      .map(({ session, seat, trial, presentation, label, salt }) => ({
+        session,
+        seat,
+        trial,
+        presentation,
+        label,
+        salt,
+      })),
+  );
+}
+
 /**
  * The parts of a closed study's document: its record, protocol, revealed secrets, draws, answers with their salts, and
  * result. People stand in it by seat label or by a random id, never by name.
@@ -61,7 +84,7 @@ function lockedAnswers({ entries, answers }: ClosedStudy, sessionIds: ReadonlyMa
  * @throws ZodError when the record has no revealed secrets
  */
 export function publicationParts(study: ClosedStudy): PublicationParts {
-  const { entries, protocol, earlierProtocols = [] } = study;
+  const { entries, protocol, earlierProtocols = [], requests = [] } = study;
   const method = methodOf(protocol.method);
   const states = sessionsInRecord(entries, method);
   const payloadOf = (wanted: string) => entries.find(({ kind }) => kind === wanted)?.payload;
@@ -81,13 +104,14 @@ export function publicationParts(study: ClosedStudy): PublicationParts {
     secrets,
     draws,
     answers: lockedAnswers(study, sessionIds),
+    ...(requests.length === 0 ? {} : { requests: inOrder(requests, states) }),
     result: payloadOf('result-recorded')?.result ?? null,
   };
 }
 
 /** The document as it is frozen: canonical text, so that one digest names it. */
 export function publicationText(parts: PublicationParts): string {
-  const { record, protocol, earlierProtocols, secrets, draws, answers, result } = parts;
+  const { record, protocol, earlierProtocols, secrets, draws, answers, requests, result } = parts;
   const whole = {
     format: publicationFormat,
     version: publicationVersion,
@@ -97,6 +121,7 @@ export function publicationText(parts: PublicationParts): string {
     secrets,
     draws,
     answers,
+    ...(requests === undefined ? {} : { requests }),
     result,
   };
   return canonicalJson(whole as unknown as Json);
@@ -123,7 +148,7 @@ export function readPublication(text: string): { parts: PublicationParts } | { f
     return { fault: `This program reads version ${publicationVersion} of the format.` };
   const absent = partNames.filter((name) => !Object.hasOwn(parts, name));
   if (absent.length > 0) return { fault: `It has no ${absent.join(', ')}.` };
-  const known: readonly string[] = [...partNames, 'earlierProtocols'];
+  const known: readonly string[] = [...partNames, 'earlierProtocols', 'requests'];
   const unknown = Object.keys(parts).filter((name) => !known.includes(name));
   if (unknown.length > 0) return { fault: `It has a part that is not known: ${unknown.join(', ')}.` };
   return isCanonical(whole, text)

@@ -4,6 +4,7 @@ import { methodOf } from '../methods/methods.ts';
 import { type Protocol, protocol } from '../protocol/protocol.ts';
 import type { AnswerContent } from '../session/answer-leaf.ts';
 import { sessionsInRecord } from '../session/read-record.ts';
+import type { RequestContent } from '../session/request-leaf.ts';
 import { type RevealedKey, revealedKey } from '../session/revealed-key.ts';
 import type { SessionState } from '../session/state.ts';
 import { trialKind } from '../session/trial-kinds.ts';
@@ -44,6 +45,15 @@ const answer = z.strictObject({
   salt: hex(16),
 });
 
+const request = z.strictObject({
+  session: z.string(),
+  seat: z.string(),
+  trial: z.int(),
+  presentation: z.int(),
+  label: z.string(),
+  salt: hex(16),
+});
+
 /** What a part must look like to be read at all, in words for people. */
 export class Unreadable extends Error {}
 
@@ -81,6 +91,10 @@ export class StudyReading {
   readonly secrets = once((): RevealedKey => read('The secrets', revealedKey, this.parts.secrets));
   readonly draws = once((): PublishedDraw[] => read('The draws', z.array(draw), this.parts.draws));
   readonly answers = once((): AnswerContent[] => read('The answers', z.array(answer), this.parts.answers));
+
+  readonly requests = once((): readonly RequestContent[] =>
+    this.parts.requests === undefined ? [] : read('The requests', z.array(request).min(1), this.parts.requests),
+  );
 
   /** The method as the record's sessions were planned with it; an amendment plans those anew that have not opened. */
   readonly method = once((): Method => {

@@ -50,6 +50,15 @@ export const abx: Method<ForcedChoiceResult> = {
     deals: 1,
     specimen: (presentation) => (presentation === 'X' ? 1 : 0),
   },
+  onRequest: {
+    explanation:
+      'In each trial you ask for A, B or X, as often as you need and the trial allows. X is one of the two. You say which.',
+    announcement: 'Next you ask again, or answer.',
+    fitterCouldSee:
+      'Whoever fits the cables saw codes and never what was asked for. How often either code was asked for could still tell which one X was.',
+    stillSeen:
+      'What the listener asked for, whoever fits the cables never saw; how often each code was asked for, they did.',
+  },
 
   spoken: (presentation) => presentation,
   question: () => 'Which one did X match?',

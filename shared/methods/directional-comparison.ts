@@ -58,6 +58,7 @@ export const directionalComparison: Method<ForcedChoiceResult> = {
   },
   fitterCouldSee: 'Whoever fits the cables could still see which code came first in a trial.',
   separate: null,
+  onRequest: null,
 
   spoken: spokenPlace,
   question: questionOf,

@@ -63,6 +63,7 @@ export const duoTrio: Method<ForcedChoiceResult> = {
     deals: 1,
     specimen: (presentation) => (presentation === 'R' ? 1 : 0),
   },
+  onRequest: null,
 
   spoken: (presentation) => (presentation === 'R' ? 'the reference, R' : spokenPlace(presentation)),
   question: () => 'Which one was the same as R?',

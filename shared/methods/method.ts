@@ -133,6 +133,17 @@ export type SeparateSpecimens = {
   specimen(presentation: string, truth: string | null, deal: number): 0 | 1;
 };
 
+/** How a single listener may ask for what is presented, in the method's words. */
+export type OnRequestWords = {
+  /** What the listener is told the test is. */
+  readonly explanation: string;
+  /** Said while they listen. */
+  readonly announcement: string;
+  /** What whoever fits could still learn when specimens are not separate, and when they are: for the blinding rung. */
+  readonly fitterCouldSee: string;
+  readonly stillSeen: string;
+};
+
 /**
  * A method of comparison: one module each, all of this shape. The live session, the phone, the planner and the
  * report ask the module and know no method by name.
@@ -170,6 +181,8 @@ export type Method<R extends ResultFrame = RegisteredResult> = {
   readonly fitterCouldSee: string;
   /** Null where no code comes twice in a trial anyway: then there is nothing of the kind to hide. */
   readonly separate: SeparateSpecimens | null;
+  /** Null where presentations come in a fixed order always. */
+  readonly onRequest: OnRequestWords | null;
 
   // What the listener is asked.
 

@@ -68,6 +68,7 @@ export const pairedPreference: Method<PreferenceResult> = {
   },
   fitterCouldSee: 'Whoever fits the cables could still see which code came first in a trial.',
   separate: null,
+  onRequest: null,
 
   spoken: spokenPlace,
   question: () => 'Which do you prefer?',

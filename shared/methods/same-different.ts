@@ -64,6 +64,7 @@ export const sameDifferent: Method<SameDifferentResult> = {
     deals: 1,
     specimen: (presentation) => (presentation === 'second' ? 1 : 0),
   },
+  onRequest: null,
 
   spoken: spokenPlace,
   question: () => 'Were the two the same?',

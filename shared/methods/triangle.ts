@@ -64,6 +64,7 @@ export const triangle: Method<ForcedChoiceResult> = {
       return isFirst === (deal % 2 === 0) ? 0 : 1;
     },
   },
+  onRequest: null,
 
   spoken: spokenPlace,
   question: () => 'Which one was the odd one?',

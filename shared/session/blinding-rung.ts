@@ -51,7 +51,7 @@ function keyHoldersOf(entries: readonly Entry[], codeHolder: string): Set<string
 export function blindingRung(
   entries: readonly Entry[],
   sessions: readonly SessionState[],
-  method: Pick<Method, 'fitterCouldSee' | 'separate'>,
+  method: Pick<Method, 'fitterCouldSee' | 'separate' | 'onRequest'>,
 ): BlindingRung {
   const closing = entries.find((entry) => entry.kind === 'study-closed');
   if (closing === undefined) throw new RangeError('the blinding rung is derived once the study is closed');
@@ -70,8 +70,14 @@ export function blindingRung(
   if ([...keyHolders].some((person) => person === manager || owners.includes(person)))
     return { name: 'listener-blind', why: 'The code holder also managed the study or owns the organisation.' };
   const never = 'The proctor never saw code key or cable pages.';
+  const unobserved = 'No observer was recorded.';
+  const asked = sessions.some(({ plan }) => plan.onRequest !== undefined) ? method.onRequest : null;
   const seated = sessions.filter((session) => session.seats.length > 0);
   if (method.separate !== null && seated.length > 0 && seated.every(({ plan }) => plan.separateSpecimens === true))
-    return { name: 'fully double-blind', why: `${never} ${method.separate.stillSeen} No observer was recorded.` };
-  return { name: 'double-blind to the cable', why: `${never} ${method.fitterCouldSee} No observer was recorded.` };
+    return {
+      name: 'fully double-blind',
+      why: [never, method.separate.stillSeen, ...(asked === null ? [] : [asked.stillSeen]), unobserved].join(' '),
+    };
+  const could = asked?.fitterCouldSee ?? method.fitterCouldSee;
+  return { name: 'double-blind to the cable', why: `${never} ${could} ${unobserved}` };
 }

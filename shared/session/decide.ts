@@ -14,6 +14,7 @@ import {
 } from './decide-scan.ts';
 import type { PayloadOf, SessionEvent, SessionEventKind } from './events.ts';
 import type { LabelEnd } from './label-text.ts';
+import { type RequestCommand, request, waitsForListeners } from './on-request.ts';
 import { activeSeats, excerptOf, listeningMayStartAt, nextTrial, openAnswers } from './progress.ts';
 import type { OpenTrial, SessionState } from './state.ts';
 
@@ -31,6 +32,7 @@ export type SessionCommand =
       joinedBy: 'code' | 'personal-link';
     }
   | { kind: 'reveal'; seat: string; value: string }
+  | RequestCommand
   | { kind: 'too-loud'; seat: string }
   | { kind: 'leave'; seat: string }
   | {
@@ -170,6 +172,8 @@ export function decide(state: SessionState, command: SessionCommand, now: number
       const isTaken = state.seats.some((other) => other.seat === seat);
       refuseUnless(!isTaken, 'already-taken', 'This listener has a seat in this session already.');
       const contributes = state.phase === 'seating';
+      const isFull = state.plan.onRequest !== undefined && activeSeats(state).length > 0;
+      refuseUnless(!isFull, 'already-taken', 'This session is for one listener, and the seat is taken.');
       return [emit('listener-joined', { seat, commitment, consentVersion, contributes, joinedBy })];
     }
     case 'close-seating': {
@@ -207,9 +211,13 @@ export function decide(state: SessionState, command: SessionCommand, now: number
       return decideInventoryScan(state, command, emit);
     case 'note-inventory-end':
       return decideInventoryEnd(state, command, emit);
+    case 'request-presentation': {
+      const requested = request(state, requireOpenTrial(state), command);
+      return requested === null ? [] : [emit('presentation-requested', requested)];
+    }
     case 'lock-trial': {
       const trial = requireOpenTrial(state);
-      refuseUnless(trial.stage === 'answering', 'wrong-phase', 'A trial locks after its answers.');
+      refuseUnless(waitsForListeners(trial), 'wrong-phase', 'A trial locks after its answers.');
       refuseUnless(state.paused === null, 'wrong-phase', 'The session is paused. Resume it first.');
       const open = openAnswers(state, trial);
       refuseUnless(open.length === 0, 'too-early', `The trial waits for ${open.join(', ')} until its window ends.`);

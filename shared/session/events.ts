@@ -60,6 +60,8 @@ export const sessionEvents = {
   'contribution-dropped': z.strictObject({ session, seat }),
   'draw-fixed': z.strictObject({ session, contributors: z.array(seat) }),
   'trial-opened': z.strictObject({ session, trial, excerpt: z.int(), seats: z.array(seat) }),
+  /** On request: the listener asked for a presentation. What was asked for lies beside the record, under its leaf. */
+  'presentation-requested': z.strictObject({ session, trial, presentation: z.int().min(0), seat, leaf: hex32 }),
   'step-confirmed': z.strictObject({ session, trial, presentation: z.int(), step: z.enum(stepKinds) }),
   ...scanEvents,
   'listening-started': z.strictObject({

@@ -1,13 +1,19 @@
 import type { Method } from '../methods/method.ts';
 import { stepKindsOf } from './change-steps.ts';
 import type { SessionEvent } from './events.ts';
+import { isOnRequest, waitsForListeners } from './on-request.ts';
 import { presentationsOf } from './progress.ts';
 import type { EndedTrial, OpenTrial, SessionState } from './state.ts';
 import { revealMs } from './state.ts';
 
 type Folded = Omit<SessionState, 'version'>;
 
-function startChange(trial: OpenTrial, presentation: number, at: number): OpenTrial {
+type Opened = Omit<
+  OpenTrial,
+  'presentation' | 'stage' | 'changeStartedAt' | 'stepsDone' | 'scannedEnds' | 'readyAt' | 'endsAt'
+>;
+
+function startChange(trial: Opened, presentation: number, at: number): OpenTrial {
   return {
     ...trial,
     presentation,
@@ -30,7 +36,17 @@ function endTrial(state: SessionState, ended: Omit<EndedTrial, 'excerpt' | 'seat
   return { ...state, trial: null, paused: null, ended: [...state.ended, { ...ended, excerpt, seats, longChanges }] };
 }
 
+/** The listener's turn: as long as an answer would have. */
+const asking = (trial: OpenTrial, at: number, { answerMs }: SessionState['plan']): OpenTrial => ({
+  ...trial,
+  stage: 'asking',
+  stepsDone: [],
+  scannedEnds: [],
+  endsAt: at + answerMs,
+});
+
 function afterListening(state: SessionState, trial: OpenTrial, at: number, method: Method): Folded {
+  if (isOnRequest(state, trial.trial)) return { ...state, trial: asking(trial, at, state.plan) };
   const isLast = trial.presentation + 1 >= presentationsOf(method, trial.trial).length;
   if (!isLast) return { ...state, trial: startChange(trial, trial.presentation + 1, at) };
   if (trial.trial === 0) return { ...state, trial: null, familiarised: true };
@@ -38,7 +54,7 @@ function afterListening(state: SessionState, trial: OpenTrial, at: number, metho
 }
 
 function pauseTrial(state: SessionState, at: number): number | null {
-  return state.trial?.stage === 'answering' && state.trial.endsAt !== null
+  return state.trial !== null && waitsForListeners(state.trial) && state.trial.endsAt !== null
     ? Math.max(0, state.trial.endsAt - at)
     : null;
 }
@@ -46,7 +62,7 @@ function pauseTrial(state: SessionState, at: number): number | null {
 function resumeTrial(state: SessionState, at: number): OpenTrial | null {
   const { trial, paused } = state;
   if (trial === null) return null;
-  if (trial.stage === 'answering') return { ...trial, endsAt: at + (paused?.remainingMs ?? state.plan.answerMs) };
+  if (waitsForListeners(trial)) return { ...trial, endsAt: at + (paused?.remainingMs ?? state.plan.answerMs) };
   return startChange(trial, trial.presentation, at);
 }
 
@@ -106,21 +122,15 @@ function fold(state: SessionState, event: SessionEvent, method: Method): Folded 
     case 'draw-fixed':
       return { ...state, phase: 'running', revealEndsAt: null };
     case 'trial-opened': {
-      const { trial, excerpt, seats } = event.payload;
-      const opened = { trial, excerpt, seats, longChanges: 0, answers: [] };
-      return {
-        ...state,
-        trial: {
-          ...opened,
-          presentation: 0,
-          stage: 'change',
-          changeStartedAt: event.at,
-          stepsDone: [],
-          scannedEnds: [],
-          readyAt: event.at,
-          endsAt: null,
-        },
-      };
+      const { trial: number, excerpt, seats } = event.payload;
+      const opened = { trial: number, excerpt, seats, longChanges: 0, answers: [], requests: [] };
+      const trial = startChange(opened, 0, event.at);
+      return { ...state, trial: isOnRequest(state, number) ? asking(trial, event.at, state.plan) : trial };
+    }
+    case 'presentation-requested': {
+      const trial = openTrialOf(state, event);
+      const requests = [...trial.requests, { leaf: event.payload.leaf, label: null }];
+      return { ...state, trial: startChange({ ...trial, requests }, event.payload.presentation, event.at) };
     }
     case 'step-confirmed': {
       const trial = openTrialOf(state, event);
@@ -180,7 +190,7 @@ function fold(state: SessionState, event: SessionEvent, method: Method): Folded 
       return { ...state, paused: null, trial: resumeTrial(state, event.at) };
     case 'server-restarted': {
       const { trial } = state;
-      if (trial?.stage !== 'answering' || state.paused !== null) return state;
+      if (trial === null || !waitsForListeners(trial) || state.paused !== null) return state;
       return { ...state, trial: { ...trial, endsAt: event.at + state.plan.answerMs } };
     }
     case 'listener-left':

@@ -49,7 +49,8 @@ export const presentationsOf = (method: Method, trial: number): readonly string[
 
 /** What is being fitted or heard, or null outside a trial's presentations. */
 export function presentationNow({ trial }: SessionState, method: Method): string | null {
-  if (trial === null || trial.stage === 'answering') return null;
+  if (trial === null || trial.stage === 'answering' || trial.stage === 'asking') return null;
+  if (trial.requests.length > 0) return trial.requests[trial.presentation]?.label ?? null;
   const presentation = presentationsOf(method, trial.trial)[trial.presentation];
   if (presentation === undefined) throw new RangeError('a trial beyond its presentations');
   return presentation;

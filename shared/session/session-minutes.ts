@@ -2,13 +2,15 @@ import type { Method } from '../methods/method.ts';
 import type { SessionPlan } from './events.ts';
 
 /**
- * How long a session takes as listeners are told: every presentation with its change, the answers, the familiarisation.
+ * How long a session takes as listeners are told: every presentation with its change, the answers, the familiarisation;
+ * on request as many presentations as a trial may have.
  *
  * @returns whole minutes, at least 1, rounded up
  */
 export function sessionMinutes(plan: SessionPlan, method: Method): number {
   const longestMs = Math.max(...plan.programme.map(({ lengthMs }) => lengthMs));
   const presentationMs = plan.changeMs + longestMs;
-  const trialMs = method.presentations.length * presentationMs + plan.answerMs;
+  const presentations = plan.onRequest?.most ?? method.presentations.length;
+  const trialMs = presentations * presentationMs + plan.answerMs;
   return Math.max(1, Math.ceil((plan.trials * trialMs + method.familiarisation.length * presentationMs) / 60_000));
 }

@@ -25,18 +25,21 @@ export type OpenTrial = {
   readonly seats: readonly string[];
   /** From 0. */
   readonly presentation: number;
-  readonly stage: 'change' | 'listening' | 'answering';
+  /** On request *asking* is the listener's turn, to ask again or to answer; it has no other name once answers are open. */
+  readonly stage: 'change' | 'listening' | 'asking' | 'answering';
   readonly changeStartedAt: number;
   readonly stepsDone: readonly ChangeStep[];
   /** Which ends of the cable now fitted bear its code. */
   readonly scannedEnds: readonly LabelEnd[];
   /** When the latest step was confirmed. */
   readonly readyAt: number;
-  /** When listening or answering ends; null during a change. */
+  /** When listening, asking or answering ends; null during a change. */
   readonly endsAt: number | null;
   readonly longChanges: number;
   /** Leaves of the answers held so far; rows beside the record until the trial locks. */
   readonly answers: readonly { readonly seat: string; readonly leaf: string }[];
+  /** On request what was asked for, in order; the label is a row beside the record, and null where only that is at hand. */
+  readonly requests: readonly { readonly leaf: string; readonly label: string | null }[];
 };
 
 export type EndedTrial = {

@@ -3,6 +3,7 @@ import type { ProctorView } from '../contracts/proctor-live.ts';
 import type { Method } from '../methods/method.ts';
 import { cautionsOf, nextStep, stepEndsAt, stepsOf } from './change-steps.ts';
 import { levelsFor } from './level-view.ts';
+import { canRequest, isOnRequest, requestsLeft, takesAnswers } from './on-request.ts';
 import {
   activeSeats,
   dueAt,
@@ -10,6 +11,7 @@ import {
   nextTrial,
   openAnswers,
   optionsOf,
+  presentationNow,
   presentationsOf,
   trialsInAll,
 } from './progress.ts';
@@ -28,8 +30,26 @@ export function courseOf(state: SessionState): CourseRing[] {
   });
 }
 
-function presentationAt(trial: OpenTrial, method: Method): string {
-  return presentationsOf(method, trial.trial)[trial.presentation] ?? '';
+/** What a listener may ask for; null where presentations come in a fixed order. */
+function requestsFor(state: SessionState, trial: OpenTrial, method: Method) {
+  if (!isOnRequest(state, trial.trial)) return null;
+  return {
+    left: requestsLeft(state, trial),
+    labels: method.presentations.map((label) => ({
+      label,
+      times: trial.requests.filter((asked) => asked.label === label).length,
+      canRequest: canRequest(state, trial, method, label),
+    })),
+    takesAnswers: takesAnswers(trial, method),
+  };
+}
+
+/** The number of the presentation now, from 1, and of how many: on request the latest one, of the most that there may be. */
+function placeIn(state: SessionState, trial: OpenTrial, method: Method) {
+  const { onRequest } = state.plan;
+  return onRequest !== undefined && isOnRequest(state, trial.trial)
+    ? { presentationNumber: trial.requests.length, presentations: onRequest.most }
+    : { presentationNumber: trial.presentation + 1, presentations: presentationsOf(method, trial.trial).length };
 }
 
 export type ListenerContext = {
@@ -47,6 +67,7 @@ export function listenerViewOf(state: SessionState, method: Method, context: Lis
   const own = state.seats.find((candidate) => candidate.seat === seat);
   const { trial } = state;
   const last = state.ended.at(-1);
+  const words = state.plan.onRequest === undefined ? null : method.onRequest;
   return {
     audience: 'listener',
     title,
@@ -70,17 +91,17 @@ export function listenerViewOf(state: SessionState, method: Method, context: Lis
             familiarisation: trial.trial === 0,
             takesPart: trial.seats.includes(seat),
             stage: trial.stage,
-            presentation: presentationAt(trial, method),
-            spoken: method.spoken(presentationAt(trial, method)),
-            presentationNumber: trial.presentation + 1,
-            presentations: presentationsOf(method, trial.trial).length,
+            presentation: presentationNow(state, method) ?? '',
+            spoken: method.spoken(presentationNow(state, method) ?? ''),
+            ...placeIn(state, trial, method),
             endsAt: state.paused === null ? trial.endsAt : null,
             held,
+            requests: requestsFor(state, trial, method),
           },
     question: {
-      explanation: method.explanation,
+      explanation: words?.explanation ?? method.explanation,
       text: method.question(state.plan),
-      announcement: method.announcement,
+      announcement: words?.announcement ?? method.announcement,
       options: optionsOf(state, method).map(({ value, letter, sentence, short }) => ({
         value,
         letter,
@@ -164,8 +185,8 @@ function trialFor(state: SessionState, method: Method, context: ProctorContext):
     of: trialsInAll(state),
     familiarisation: trial.trial === 0,
     stage: trial.stage,
-    presentationNumber: trial.presentation + 1,
-    presentations: presentationsOf(method, trial.trial).length,
+    ...placeIn(state, trial, method),
+    onRequest: isOnRequest(state, trial.trial),
     code: context.code,
     excerpt: excerpt?.title ?? '',
     excerptStart: excerpt?.start ?? '',

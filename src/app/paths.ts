@@ -29,6 +29,8 @@ export const paths = {
   cable: (organisationId: string, id: string) => `${organisation(organisationId)}/cables/${id}`,
   editCable: (organisationId: string, id: string) => `${organisation(organisationId)}/cables/${id}/edit`,
 
+  compareCables: (organisationId: string, first?: string) =>
+    `${organisation(organisationId)}/cables/compare${first === undefined ? '' : `?${new URLSearchParams({ first })}`}`,
   /** Of one piece, where it is known already. */
   newMeasurement: (organisationId: string, cableId: string, specimenId?: string) =>
     `${organisation(organisationId)}/cables/${cableId}/measurements/new${specimenId === undefined ? '' : `?${new URLSearchParams({ specimen: specimenId })}`}`,
@@ -36,7 +38,9 @@ export const paths = {
     `${organisation(organisationId)}/cables/${cableId}/measurements/${id}`,
 
   studies: (organisationId: string) => `${organisation(organisationId)}/studies`,
-  newStudy: (organisationId: string) => `${organisation(organisationId)}/studies/new`,
+  /** With two cables that the form begins with. */
+  newStudy: (organisationId: string, cables?: readonly [string, string]) =>
+    `${organisation(organisationId)}/studies/new${cables === undefined ? '' : `?${new URLSearchParams({ first: cables[0], second: cables[1] })}`}`,
   study: (organisationId: string, id: string) => `${organisation(organisationId)}/studies/${id}`,
   editStudy: (organisationId: string, id: string) => `${organisation(organisationId)}/studies/${id}/edit`,
   amendStudy: (organisationId: string, id: string) => `${organisation(organisationId)}/studies/${id}/amend`,
@@ -60,6 +64,7 @@ export const paths = {
   planSession: (organisationId: string, studyId: string) =>
     `${organisation(organisationId)}/studies/${studyId}/sessions/new`,
   session: (organisationId: string, id: string) => `${organisation(organisationId)}/sessions/${id}`,
+  levels: (organisationId: string, id: string) => `${organisation(organisationId)}/sessions/${id}/levels`,
   console: (organisationId: string, id: string) => `${organisation(organisationId)}/sessions/${id}/console`,
 };
 

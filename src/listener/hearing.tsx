@@ -2,8 +2,9 @@ import type { ListenerView } from '#shared/contracts/listener-live.ts';
 
 type Trial = NonNullable<ListenerView['trial']>;
 
-function nextOf({ familiarisation, presentationNumber, presentations }: Trial, announcement: string): string {
+function nextOf({ familiarisation, presentationNumber, presentations, requests }: Trial, announcement: string): string {
   if (familiarisation) return 'Get to know the sound. Nothing is asked.';
+  if (requests !== null) return requests.left === 0 ? 'Next you answer.' : announcement;
   return presentationNumber === presentations ? announcement : 'Just listen.';
 }
 

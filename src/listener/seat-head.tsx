@@ -13,17 +13,21 @@ function rehearsalHeadOf({ trial }: ListenerView): string {
 
 function statusOf({ trial, paused }: ListenerView, isLost: boolean): string {
   if (isLost) return 'No connection. It comes back by itself.';
-  const isAnswering = trial?.stage === 'answering' && trial.takesPart;
-  if (paused !== null && isAnswering) return 'Paused. You can still answer.';
-  return isAnswering ? 'Answers are open.' : '';
+  if (!isListenersTurn(trial)) return '';
+  const takesAnswers = trial?.requests?.takesAnswers ?? true;
+  if (paused !== null) return takesAnswers ? 'Paused. You can still answer.' : '';
+  return takesAnswers ? 'Answers are open.' : 'Ask for what you want to hear.';
 }
+
+const isListenersTurn = (trial: ListenerView['trial']) =>
+  trial?.takesPart === true && (trial.stage === 'answering' || trial.stage === 'asking');
 
 type SeatHeadProps = { view: ListenerView; isLost: boolean; clockOffsetMs: number };
 
 /** Where the session stands. The last row always has its height, so that nothing below it moves. */
 export function SeatHead({ view, isLost, clockOffsetMs }: SeatHeadProps) {
   const { trial } = view;
-  const endsAt = trial?.stage === 'answering' && trial.takesPart ? trial.endsAt : null;
+  const endsAt = trial !== null && isListenersTurn(trial) ? trial.endsAt : null;
   return (
     <header className="pt-4 [@media(max-height:699px)]:pt-2">
       <div className="flex justify-between gap-4 px-5">

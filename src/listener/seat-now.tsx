@@ -1,6 +1,7 @@
 import { useState } from 'react';
-import type { ListenerView } from '#shared/contracts/listener-live.ts';
+import type { Confidence, ListenerView } from '#shared/contracts/listener-live.ts';
 import { answerTo, shortOf } from './answers.ts';
+import { Asking } from './asking.tsx';
 import { Hearing } from './hearing.tsx';
 import { Question } from './question.tsx';
 import type { Seat, SeatSnapshot } from './seat.ts';
@@ -13,12 +14,21 @@ type SeatNowProps = { view: ListenerView; snapshot: SeatSnapshot; seat: Seat };
 /** What the phone shows at this point of the session. Answers stay open during a pause. */
 export function SeatNow({ view, snapshot, seat }: SeatNowProps) {
   const { trial, paused } = view;
-  const isAnswering = trial?.stage === 'answering' && trial.takesPart;
-  if (isAnswering) return <Answering key={trial.number} view={view} snapshot={snapshot} seat={seat} />;
+  if (trial !== null && hasTurn(view))
+    return <Answering key={trial.number} view={view} snapshot={snapshot} seat={seat} />;
   return (
     <div className="flex flex-1 flex-col" role="status">
       {saidBy(view, snapshot, paused)}
     </div>
+  );
+}
+
+/** Whether the phone has something for its listener to do. Answers stay open during a pause, asking does not. */
+function hasTurn({ trial, paused }: ListenerView): boolean {
+  if (trial === null || !trial.takesPart) return false;
+  return (
+    trial.stage === 'answering' ||
+    (trial.stage === 'asking' && (paused === null || trial.requests?.takesAnswers === true))
   );
 }
 
@@ -29,6 +39,13 @@ function saidBy(view: ListenerView, snapshot: SeatSnapshot, paused: ListenerView
   if (!trial.takesPart)
     return <Words title="One moment" detail="This trial began without you. You take part from the next one on." />;
   if (trial.stage === 'listening') return <Hearing trial={trial} announcement={view.question.announcement} />;
+  if (trial.requests !== null)
+    return (
+      <Words
+        title={`You asked for ${trial.spoken}`}
+        detail="It is being fitted, which takes as long every time. Rest your ears."
+      />
+    );
   return (
     <Words
       title="Rest your ears"
@@ -51,14 +68,11 @@ function Answering({ view, snapshot, seat }: SeatNowProps) {
         />
       </div>
     );
-  return (
-    <Question
-      question={view.question}
-      own={own}
-      onSend={(choice, confidence) => {
-        setChanging(false);
-        seat.answer(choice, confidence);
-      }}
-    />
-  );
+  const send = (choice: string, confidence: Confidence | null) => {
+    setChanging(false);
+    seat.answer(choice, confidence);
+  };
+  const requests = view.trial?.requests ?? null;
+  if (own === null && requests !== null) return <Asking view={view} requests={requests} seat={seat} onAnswer={send} />;
+  return <Question question={view.question} own={own} onSend={send} />;
 }

@@ -41,6 +41,7 @@ export class Seat {
   #isSending = false;
   #isRevealing = false;
   #isRevealRefused = false;
+  #requested: { trial: number; presentation: number; label: string; salt: string } | null = null;
   #again: ReturnType<typeof setTimeout> | undefined;
 
   constructor(token: string) {
@@ -70,6 +71,20 @@ export class Seat {
     const tap = { trial, choice, confidence, salt: randomHex(16) };
     this.#keep(tapped(answerTo(answers, trial), tap, { session: view.sessionId, seat: view.seat }));
     this.#deliver();
+  }
+
+  /**
+   * Asks for what is heard next. Asked again for the same place of the trial, it is the same request.
+   * @throws Problem when the server cannot be told, or does not take it
+   */
+  async request(label: string): Promise<void> {
+    const { trial } = this.#snapshot.view ?? {};
+    if (trial === null || trial === undefined) return;
+    const place = { trial: trial.number, presentation: trial.presentationNumber, label };
+    const { salt, ...asked } = this.#requested ?? { salt: '' };
+    const isAgain = salt !== '' && JSON.stringify(asked) === JSON.stringify(place);
+    this.#requested = isAgain ? { ...place, salt } : { ...place, salt: randomHex(16) };
+    await this.#live.send({ kind: 'request-presentation', ...this.#requested });
   }
 
   /** @throws Problem when the server cannot be told */

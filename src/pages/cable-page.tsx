@@ -6,6 +6,8 @@ import { CableFacts } from '../features/cables/cable-facts.tsx';
 import { cableQueries, useArchiveCable } from '../features/cables/cables.queries.ts';
 import { Consequences } from '../features/cables/consequences.tsx';
 import { Specimens } from '../features/cables/specimens.tsx';
+import { evidenceQueries } from '../features/evidence/evidence.queries.ts';
+import { Statements } from '../features/evidence/statements.tsx';
 import { MeasurementSection } from '../features/measurements/measurement-section.tsx';
 import { measurementQueries } from '../features/measurements/measurements.queries.ts';
 import { usePresence } from '../features/sign-in/membership.ts';
@@ -29,6 +31,7 @@ export async function loader({ params, request }: LoaderFunctionArgs) {
     queryClient.ensureQueryData(list),
     queryClient.ensureQueryData(cableQueries.detail(organisationId, id)),
     queryClient.ensureQueryData(measurementQueries.curves(organisationId, id)),
+    queryClient.ensureQueryData(evidenceQueries.list(organisationId, id)),
   ]);
   const beyond = lastPageAddress(url, measurements);
   return beyond === null ? null : redirect(beyond);
@@ -43,6 +46,7 @@ export function Component() {
   const query = queryIn(search);
   const { data: measurements } = useSuspenseQuery(measurementQueries.list(organisationId, id, query));
   const { curves } = useSuspenseQuery(measurementQueries.curves(organisationId, id)).data;
+  const { evidence } = useSuspenseQuery(evidenceQueries.list(organisationId, id)).data;
   const archive = useArchiveCable(organisationId, id);
   const showToast = useToast();
 
@@ -60,6 +64,7 @@ export function Component() {
         back={{ to: paths.cables(organisationId), label: 'All cables' }}
         actions={
           <>
+            <LinkButton to={paths.compareCables(organisationId, id)}>Compare</LinkButton>
             <LinkButton to={paths.editCable(organisationId, id)}>Change the design</LinkButton>
             <Button busy={archive.isPending} busyLabel="Saving" onClick={() => setArchived(!cable.archived)}>
               {cable.archived ? 'Bring back' : 'Archive'}
@@ -85,6 +90,7 @@ export function Component() {
             hrefOf={(measurementId) => paths.measurement(organisationId, id, measurementId)}
           />
           <Consequences cable={cable} editTo={paths.editCable(organisationId, id)} />
+          <Statements organisationId={organisationId} cable={cable} evidence={evidence} />
         </div>
         <CableFacts cable={cable} />
       </div>

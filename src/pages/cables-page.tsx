@@ -36,9 +36,12 @@ export function Component() {
         title="Cables"
         lede="Designs, and the physical pieces of them that are sleeved and listened to."
         actions={
-          <LinkButton variant="primary" to={paths.newCable(organisationId)}>
-            Add a cable
-          </LinkButton>
+          <>
+            {cables.total > 1 ? <LinkButton to={paths.compareCables(organisationId)}>Compare two</LinkButton> : null}
+            <LinkButton variant="primary" to={paths.newCable(organisationId)}>
+              Add a cable
+            </LinkButton>
+          </>
         }
       />
       {hasNone && query.archived === 'no' ? null : <CableFilter query={query} onChange={change} />}

@@ -1,5 +1,5 @@
 import { useSuspenseQuery } from '@tanstack/react-query';
-import { type LoaderFunctionArgs, useNavigate } from 'react-router-dom';
+import { type LoaderFunctionArgs, useNavigate, useSearchParams } from 'react-router-dom';
 import { paths } from '../app/paths.ts';
 import { cableQueries } from '../features/cables/cables.queries.ts';
 import { organisationQueries } from '../features/organisations/organisations.queries.ts';
@@ -32,6 +32,8 @@ export function Component() {
   const create = useCreateStudy(organisationId);
   const { cables } = useSuspenseQuery(cableQueries.choices(organisationId)).data;
   const { members } = useSuspenseQuery(organisationQueries.members(organisationId)).data;
+  const [search] = useSearchParams();
+  const chosen = ['first', 'second'].flatMap((name) => cables.filter(({ id }) => id === search.get(name)));
   const { presets } = useSuspenseQuery(rigPresetQueries.choices(organisationId)).data;
 
   return (
@@ -49,7 +51,7 @@ export function Component() {
         />
       ) : (
         <StudyForm
-          values={newStudyWith(presets)}
+          values={newStudyWith(presets, chosen)}
           cables={cables}
           members={members}
           rigPresets={presets}

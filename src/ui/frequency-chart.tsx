@@ -49,7 +49,8 @@ export function FrequencyChart({ caption, quantity, series, format }: FrequencyC
               ticks={decades(low, high)}
               tickFormatter={hertzFace}
               allowDataOverflow
-              interval={0}
+              interval="preserveStartEnd"
+              minTickGap={10}
               tick={{ fill: 'var(--color-soft)' }}
               tickLine={false}
               stroke="var(--color-ink)"

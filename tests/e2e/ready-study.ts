@@ -44,7 +44,8 @@ export async function readyStudy(manager: Page, holder: Page, change: Partial<St
     ['4.0 twin', 'SF-0077'],
   ] as const) {
     const { rows }: { rows: Named[] } = await ask(manager, 'get', `/cables?q=${encodeURIComponent(name)}`);
-    const cableId = rows[0]?.id ?? '';
+    // A description may name the other cable.
+    const cableId = rows.find((row) => row.name.includes(name))?.id ?? '';
     const { specimens }: { specimens: { id: string; serial: string }[] } = await ask(
       manager,
       'get',

@@ -11,6 +11,7 @@ import { answerLeaf, contributionCommitment } from '#shared/session/answer-leaf.
 import { drawSecretCommitment } from '#shared/session/commitments.ts';
 import { drawSeed } from '#shared/session/draw.ts';
 import { fairNumber } from '#shared/session/fair-number.ts';
+import { requestLeaf } from '#shared/session/request-leaf.ts';
 import { bundleFiles, bundleSource, stampedSource } from '../support/bundle.ts';
 import { closedStudy } from '../support/closed-study.ts';
 
@@ -109,6 +110,22 @@ describe('a bundle without this program', () => {
     expect(sum).toBe(fileDigest(readFileSync(join(folder, 'study.json'))));
   });
 
+  it.each([
+    ['abx', { separateSpecimens: true, onRequest: { most: 5 } }],
+    ['triangle', { separateSpecimens: true }],
+  ] as const)(
+    'is read alike where %s is run from separate specimens or on request [Z7] [S41] [S55]',
+    (method, ways) => {
+      const other = join(folder, `${method}.zip`);
+      const files = bundleFiles(bundleSource(closedStudy(1, method, undefined, false, ways)));
+      expect(files.has('requests.csv')).toBe('onRequest' in ways);
+      writeFileSync(other, writeZip(files));
+      const read = spawnSync('python3', ['tests/tools/reread.py', other], { encoding: 'utf8' });
+      expect(read.stderr).toBe('');
+      expect(JSON.parse(read.stdout)).toMatchObject({ truths: 14 });
+    },
+  );
+
   it('is read alike by a program that was written from the specification alone [Z7]', () => {
     const reread = (archive: string) => spawnSync('python3', ['tests/tools/reread.py', archive], { encoding: 'utf8' });
     const whole = reread(file);
@@ -133,6 +150,8 @@ describe('the vectors of the specification', () => {
   it('are what this program computes [Z7] [L1]', () => {
     const leaf = answerLeaf({ salt: sixteen, session: 's', seat: 'L01', trial: 1, choice: 'A', confidence: null });
     expect(listed('leaf')).toBe(leaf);
+    const asked = { salt: sixteen, session: 's', seat: 'L01', trial: 1, presentation: 0, label: 'X' };
+    expect(listed('leaf of a request')).toBe(requestLeaf(asked));
     expect(listed('a phone’s commitment') ?? listed("a phone's commitment")).toBe(contributionCommitment(first));
     expect(listed("a session's commitment")).toBe(drawSecretCommitment(first, second));
     const seed = drawSeed(first, [second]);

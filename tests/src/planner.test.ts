@@ -116,6 +116,15 @@ describe('the plan', () => {
     expect(planOf({ ...values, marginPercent: Number.NaN })?.choices.marginPercent).toBeUndefined();
   });
 
+  it('counts on request the most changes and time that a listener may ask for [S57]', () => {
+    const trials = { ...values, trials: 10, sessions: 2, programme: [{ title: 'Piano', start: '', lengthS: 20 }] };
+    const [fixed, asked] = [planOf(trials), planOf({ ...trials, onRequest: { most: 9 } })];
+    // Two of familiarisation in each session.
+    expect([fixed?.fittings, fixed?.isAtMost]).toEqual([2 * (10 * 3 + 2), false]);
+    expect([asked?.fittings, asked?.isAtMost]).toEqual([2 * (10 * 9 + 2), true]);
+    expect(asked?.minutes).toBeGreaterThan((fixed?.minutes ?? 0) * 2);
+  });
+
   it('gives the same answer to the same question, and says which question it was [W9]', () => {
     const asked = { method: 'abx', trials: 16, alpha: 0.05, listeners: 1, rate: 0.7, goal: 0.8, marginPercent: 20 };
     expect(searchPlan(asked)).toEqual(searchPlan(asked));

@@ -14,7 +14,9 @@ import { isLastStep, nextStep } from '#shared/session/change-steps.ts';
 import { codeKeyCommitment, drawSecretCommitment } from '#shared/session/commitments.ts';
 import { decide, type SessionCommand } from '#shared/session/decide.ts';
 import { evolve, holdAnswer } from '#shared/session/evolve.ts';
+import { holdRequest, waitsForListeners } from '#shared/session/on-request.ts';
 import { sessionsInRecord } from '#shared/session/read-record.ts';
+import { type RequestContent, requestLeaf } from '#shared/session/request-leaf.ts';
 import type { RevealedKey } from '#shared/session/revealed-key.ts';
 import type { SessionState } from '#shared/session/state.ts';
 
@@ -43,6 +45,7 @@ export class StudyMaker {
   readonly study = id('study');
   readonly entries: Entry[] = [];
   readonly answers: AnswerContent[] = [];
+  readonly requests: RequestContent[] = [];
   now = Date.parse('2026-12-05T18:00:00.000Z');
 
   put(kind: string, payload: object): void {
@@ -143,7 +146,7 @@ export class SessionMaker {
   present(): void {
     for (;;) {
       const { trial } = this.#state;
-      if (trial === null || trial.stage === 'answering') return;
+      if (trial === null || waitsForListeners(trial)) return;
       const step = nextStep(trial, this.#state.plan);
       if (isLastStep(trial, this.#state.plan)) this.#maker.now = trial.changeStartedAt + this.#state.plan.changeMs;
       if (step !== null) this.do({ kind: 'confirm-step', step });
@@ -151,6 +154,20 @@ export class SessionMaker {
         this.#maker.now = trial.endsAt ?? this.#maker.now;
         this.do({ kind: 'tick' });
       }
+    }
+  }
+
+  /** On request: asks for each in turn and hears it. */
+  ask(seat: string, labels: readonly string[]): void {
+    for (const label of labels) {
+      const { trial, sessionId: session } = this.#state;
+      const [number, presentation] = [trial?.trial ?? 0, trial?.requests.length ?? 0];
+      const salt = hex(`request ${session} ${number} ${presentation}`, 16);
+      const content = { session, seat, trial: number, presentation, label, salt };
+      this.#maker.requests.push(content);
+      this.do({ kind: 'request-presentation', seat, trial: number, presentation, label, leaf: requestLeaf(content) });
+      this.#state = holdRequest(this.#state, presentation, label);
+      this.present();
     }
   }
 
@@ -181,6 +198,8 @@ function runSession(maker: StudyMaker, protocol: Protocol, session: number, list
   const last = session === 1 ? 6 : 3;
   for (let trial = 1; trial <= last; trial += 1) {
     made.do({ kind: 'begin-trial' });
+    if (protocol.design.onRequest !== undefined)
+      made.ask(seats[0] ?? '', ['X', 'A', 'B', 'X'].slice(0, 3 + (trial % 2)));
     made.present();
     const isSilent = (index: number) => session === 1 && trial === 4 && index === 0;
     for (const [index, seat] of seats.entries())
@@ -246,7 +265,7 @@ export function close(
   const method = methodOf(protocol.method);
   const states = sessionsInRecord(maker.entries, method);
   const result = runRegistered(protocol, states, key, maker.answers);
-  const cues = runCueAudit(protocol, states, maker.entries, key, maker.answers);
+  const cues = runCueAudit(protocol, states, maker.entries, key, maker.answers, maker.requests);
   maker.put('result-recorded', { analysis: protocol.analysis.name, result, cues });
   return JSON.parse(
     canonicalJson({
@@ -254,6 +273,7 @@ export function close(
       protocol,
       ...(earlier === null ? {} : { earlierProtocols: [earlier] }),
       answers: maker.answers,
+      ...(maker.requests.length === 0 ? {} : { requests: maker.requests }),
     } as unknown as Json),
   ) as ClosedStudy;
 }

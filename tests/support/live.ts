@@ -142,6 +142,12 @@ export class Phone extends LivePage<ListenerView> {
     return { kind: 'answer', trial, choice, confidence: null, revision, salt };
   }
 
+  /** On request; the same place and label always have the same salt. */
+  requestCommand(trial: number, presentation: number, label: string) {
+    const salt = hexOf(`request ${trial} ${presentation} ${label}`, 16);
+    return { kind: 'request-presentation', trial, presentation, label, salt };
+  }
+
   async answer(trial: number, choice: string): Promise<HeldAnswer> {
     this.#revision += 1;
     const { held } = await this.ask(this.answerCommand(trial, choice, this.#revision));

@@ -10,7 +10,7 @@ export const scanBothEnds: Scan = async (desk, code) => {
 };
 
 /** One presentation: every step of the change, its registered time, the excerpt. Returns the code that was fitted. */
-async function present(desk: Console, clock: HandClock, scan: Scan): Promise<string> {
+export async function present(desk: Console, clock: HandClock, scan: Scan = scanBothEnds): Promise<string> {
   const { trial } = await desk.sees('a change', (view) => view.trial?.stage === 'change');
   const presentation = trial?.presentationNumber;
   const last = desk.now.steps.length - 1;
@@ -24,7 +24,8 @@ async function present(desk: Console, clock: HandClock, scan: Scan): Promise<str
   clock.advance((desk.now.trial?.endsAt ?? 0) - clock.now());
   await desk.sees(
     'the end of the excerpt',
-    ({ trial: now }) => now === null || now.stage === 'answering' || now.presentationNumber !== presentation,
+    ({ trial: now }) =>
+      now === null || now.stage === 'answering' || now.stage === 'asking' || now.presentationNumber !== presentation,
   );
   return code;
 }

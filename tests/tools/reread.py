@@ -85,6 +85,14 @@ for lock in payloads('trial-locked'):
         leaves += 1
 agree('answers without a leaf', len(answers), 0)
 
+requests = {(one['session'], one['trial'], one['presentation']): one for one in study.get('requests', [])}
+for asked in payloads('presentation-requested'):
+    request = requests.pop((ids[asked['session']], asked['trial'], asked['presentation']))
+    salt = bytes.fromhex(request.pop('salt'))
+    agree('leaf of a request', digest('fairlead/request/1', salt, canon(request)), asked['leaf'])
+    leaves += 1
+agree('requests without a leaf', len(requests), 0)
+
 truths = 0
 for secret in study['secrets']['draws']:
     number = secret['session']

@@ -14,6 +14,8 @@ import { Construction1796149000000 } from './1796149000000-construction.ts';
 import { RigPresets1796151000000 } from './1796151000000-rig-presets.ts';
 import { Measurements1796151400000 } from './1796151400000-measurements.ts';
 import { LevelDuties1796152000000 } from './1796152000000-level-duties.ts';
+import { PresentationRequests1796152400000 } from './1796152400000-presentation-requests.ts';
+import { Evidence1796153400000 } from './1796153400000-evidence.ts';
 
 /** Every migration, oldest first. */
 export const migrations = [
@@ -33,4 +35,6 @@ export const migrations = [
   RigPresets1796151000000,
   Measurements1796151400000,
   LevelDuties1796152000000,
+  Evidence1796153400000,
+  PresentationRequests1796152400000,
 ];

@@ -8,6 +8,7 @@ import { readTimestampReply } from '#shared/ledger/timestamp-token.ts';
 import { protocolDigest } from '#shared/protocol/protocol.ts';
 import { answerLeaf } from '#shared/session/answer-leaf.ts';
 import type { PayloadOf } from '#shared/session/events.ts';
+import { type RequestContent, requestLeaf } from '#shared/session/request-leaf.ts';
 import type { StudyPayloadOf } from '#shared/session/study-events.ts';
 import type { Tx } from '../../db/transaction.ts';
 import { signaturesOf } from '../../ledger/head-signatures.ts';
@@ -18,6 +19,7 @@ import type { TimestampToken } from '../../timestamps/timestamp-token.entity.ts'
 import { tokensOf } from '../../timestamps/tokens.store.ts';
 import { documentOf } from '../publications/publications.store.ts';
 import type { Answer } from '../sessions/answer.entity.ts';
+import { requestsOfSessions } from '../sessions/requests.store.ts';
 import { answersOfSessions, sessionsOfStudy } from '../sessions/sessions.store.ts';
 import { protocolOf } from '../studies/studies.service.ts';
 import { studyById } from '../studies/studies.store.ts';
@@ -63,6 +65,26 @@ function answersFault(entries: readonly Entry[], answers: readonly Answer[]): Ch
       if (answerLeaf({ ...answer, session: answer.sessionId }) !== leaf)
         return { sequence, why: `${what} is not the one that was locked` };
     }
+  }
+  return null;
+}
+
+/** Every request is still the one whose leaf is on the record. */
+function requestsFault(entries: readonly Entry[], requests: readonly RequestContent[]): ChainFault | null {
+  const sessionIds = new Map(
+    entries.filter(({ kind }) => kind === 'session-planned').map(({ payload }) => [payload.session, payload.sessionId]),
+  );
+  const leaves = new Map(
+    requests.map((one) => [`${one.session} ${one.trial} ${one.presentation}`, requestLeaf(one)] as const),
+  );
+  for (const { kind, sequence, payload } of entries) {
+    if (kind !== 'presentation-requested') continue;
+    const { session, trial, presentation, leaf } = payload as unknown as PayloadOf<'presentation-requested'>;
+    if (leaves.get(`${sessionIds.get(session)} ${trial} ${presentation}`) !== leaf)
+      return {
+        sequence,
+        why: `presentation ${presentation + 1} of trial ${trial} of session ${session} is not as asked for`,
+      };
   }
   return null;
 }
@@ -117,11 +139,16 @@ export async function auditStudy(tx: Tx, studyId: string): Promise<StudyAudit> {
     tx,
     sessions.map(({ id }) => id),
   );
+  const requests = await requestsOfSessions(
+    tx,
+    sessions.map(({ id }) => id),
+  );
   const fault =
     chainFault(entries) ??
     studyFault(study, entries) ??
     signaturesFault(entries, signatures, keys) ??
     answersFault(entries, answers) ??
+    requestsFault(entries, requests) ??
     (await publicationFault(tx, entries)) ??
     (await tokensFault(tokens, signatures));
   return { title: study.title, entries: entries.length, signatures: signatures.length, tokens: tokens.length, fault };

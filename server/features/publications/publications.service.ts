@@ -179,6 +179,7 @@ function readDocument(digest: string, document: string): Read {
       earlierProtocols: study.earlierProtocols(),
       entries: study.entries(),
       answers: study.answers(),
+      requests: study.requests(),
       rooms: new Map(),
       // Not in the document: tokens may still arrive.
       heads: [],

@@ -19,6 +19,7 @@ import { studyEvents } from '#shared/session/study-events.ts';
 import { type Tx, withTransaction } from '../../db/transaction.ts';
 import type { Deps } from '../../deps.ts';
 import { readRecord } from '../../ledger/ledger.ts';
+import { requestsOfSessions } from '../sessions/requests.store.ts';
 import { answersOfSessions, sessionsOfStudy } from '../sessions/sessions.store.ts';
 import { signedHeadsOf } from '../signed-heads/signed-heads.service.ts';
 import { protocolOf, studyOrProblem, versionsOf } from '../studies/studies.service.ts';
@@ -71,7 +72,7 @@ function sourceFrom(closed: ClosedRecord): ReportSource {
   const { result } = recorded;
   const cables = [protocol.cables[0].name, protocol.cables[1].name] as const;
   const key = revealedKey.parse(entries.find(({ kind }) => kind === 'key-revealed')?.payload);
-  const cued = cueTrials(method, states, entries, key, closed.answers);
+  const cued = cueTrials(method, states, entries, key, closed.answers, closed.requests);
   // A study closed before there was an audit has none on its record; it follows from the record all the same.
   const cues = recorded.cues ?? cueAudit(method, cued);
   const found = method.finding(result, {
@@ -118,6 +119,10 @@ export async function closedRecord(tx: Tx, study: Study): Promise<ClosedRecord> 
       confidence,
       salt,
     })),
+    requests: await requestsOfSessions(
+      tx,
+      sessions.map(({ id }) => id),
+    ),
     rooms: new Map(sessions.map(({ number, room }) => [number, room])),
     heads: await signedHeadsOf(tx, study.id),
   };

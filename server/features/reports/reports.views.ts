@@ -22,6 +22,8 @@ import type { Draw } from '#shared/session/draw.ts';
 import { truthOf } from '#shared/session/fitting.ts';
 import { handlingOf } from '#shared/session/handling.ts';
 import { listenersToldApart } from '#shared/session/listeners-told-apart.ts';
+import type { RequestContent } from '#shared/session/request-leaf.ts';
+import { onRequestSentence, requestsIn, timesAsked } from '#shared/session/requests-told.ts';
 import { type RevealedKey, revealedKey } from '#shared/session/revealed-key.ts';
 import type { SessionState } from '#shared/session/state.ts';
 import type { StudyPayloadOf } from '#shared/session/study-events.ts';
@@ -32,6 +34,7 @@ export type ReportSource = {
   readonly earlierProtocols?: readonly Protocol[];
   readonly entries: readonly Entry[];
   readonly answers: readonly AnswerContent[];
+  readonly requests?: readonly RequestContent[];
   readonly states: readonly SessionState[];
   readonly rooms: ReadonlyMap<number, string>;
   readonly result: RegisteredResult;
@@ -79,7 +82,7 @@ function drawFor(source: ReportSource, state: SessionState, key: RevealedKey): D
 }
 
 function sessionView(source: ReportSource, state: SessionState, key: RevealedKey): Report['sessions'][number] {
-  const { protocol, entries, answers, rooms } = source;
+  const { protocol, entries, answers, requests = [], rooms } = source;
   const own = entries.filter(({ payload }) => payload.session === state.session);
   const atOf = (...kinds: string[]) => own.find(({ kind }) => kinds.includes(kind))?.at ?? null;
   const draw = drawFor(source, state, key);
@@ -105,6 +108,8 @@ function sessionView(source: ReportSource, state: SessionState, key: RevealedKey
       truth: draw === null ? '' : truthOf(draw, trial),
       answers: seats.map((listener) => ({ listener, choice: choiceOf(trial, listener) })),
       longChanges,
+      requested:
+        state.plan.onRequest === undefined ? null : timesAsked(requestsIn(requests, state.sessionId, trial), method),
     })),
   };
 }
@@ -183,11 +188,14 @@ function versionsOf({ entries, protocol, earlierProtocols = [] }: ReportSource):
 }
 
 /** How level was handled is among the finding's own lines. */
-function conditionsOf({ protocol: { conduct }, states, rung }: ReportSource): Report['conditions'] {
+function conditionsOf({ protocol, states, rung, requests = [] }: ReportSource): Report['conditions'] {
+  const { conduct } = protocol;
+  const asked = onRequestSentence(states, requests, methodOf(protocol.method));
   const long = states.flatMap(({ ended }) => ended).reduce((sum, { longChanges }) => sum + longChanges, 0);
   const late = long === 0 ? '' : `; ${long} of them took a whole number of times as long`;
   return [
     `Changes between presentations lasted ${conduct.changeS} s, real or sham${late}.`,
+    ...(asked === null ? [] : [asked]),
     `Blinding: ${rung.name}. ${rung.why}`,
   ];
 }

@@ -12,6 +12,7 @@ import { type Tx, withTransaction } from '../../db/transaction.ts';
 import type { Deps } from '../../deps.ts';
 import { append, type NewEntry, readRecord } from '../../ledger/ledger.ts';
 import { pastManagersOf } from '../people/people.store.ts';
+import { requestsOfSessions } from '../sessions/requests.store.ts';
 import type { Session } from '../sessions/session.entity.ts';
 import { answersOfSessions, sessionsOfStudy, updateSession } from '../sessions/sessions.store.ts';
 import { membersOf } from '../users/users.store.ts';
@@ -75,9 +76,13 @@ async function recordResult(
     tx,
     sessions.map(({ id }) => id),
   );
+  const requests = await requestsOfSessions(
+    tx,
+    sessions.map(({ id }) => id),
+  );
   const held = answers.map(({ sessionId, trial, seat, choice }) => ({ session: sessionId, trial, seat, choice }));
   const result = runRegistered(protocol, states, key, held) as unknown as Json;
-  const cues = runCueAudit(protocol, states, entries, key, held) as unknown as Json;
+  const cues = runCueAudit(protocol, states, entries, key, held, requests) as unknown as Json;
   const payload = { analysis: protocol.analysis.name, result, cues };
   await append(tx, deps, study.id, [{ kind: 'result-recorded', at: deps.clock.now(), payload, session: null }]);
 }

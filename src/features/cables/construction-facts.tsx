@@ -1,11 +1,9 @@
-import { contradictionsOf } from '#shared/cables/contradictions.ts';
 import { purityPercent } from '#shared/cables/purity.ts';
 import { diameterOfArea, gaugeOfDiameter } from '#shared/cables/wire-gauge.ts';
 import type { Construction } from '#shared/contracts/construction.ts';
 import { formatNumber, withUnit } from '../../lib/format.ts';
 import { type Fact, Facts } from '../../ui/facts.tsx';
 import { buildWords, constructionLabels, geometryWords, materialWords, shieldWords } from './construction-words.ts';
-import { Contradictions } from './contradictions.tsx';
 
 const figure = (value: number, unit = '') =>
   unit === '' ? formatNumber(value, 4) : withUnit(formatNumber(value, 4), unit);
@@ -17,12 +15,7 @@ export function ConstructionFacts({ construction }: { construction: Construction
     return value === undefined ? [] : [{ label: constructionLabels[name], ...value }];
   });
   if (facts.length === 0) return null;
-  return (
-    <div className="flex flex-col gap-4">
-      <Facts title="Construction" facts={facts} />
-      <Contradictions found={contradictionsOf(construction)} />
-    </div>
-  );
+  return <Facts title="Construction" facts={facts} />;
 }
 
 type Shown = Pick<Fact, 'value' | 'isWords'> | undefined;

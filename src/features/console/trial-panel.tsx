@@ -21,6 +21,11 @@ function wordsOf(trial: Trial, view: ProctorView): Words {
   }
   if (trial.stage === 'listening')
     return { title: 'They are listening', detail: `“${trial.excerpt}” · stop the music when the time is out` };
+  if (trial.stage === 'asking' && trial.answered < trial.expected)
+    return {
+      title: 'The listener’s turn',
+      detail: 'to ask for another presentation, or to answer · say nothing, show nothing',
+    };
   const out = trial.expected - trial.answered;
   return {
     title: `${trial.answered} of ${trial.expected} answered`,
@@ -29,12 +34,17 @@ function wordsOf(trial: Trial, view: ProctorView): Words {
 }
 
 /** A presentation is given again whole; answering goes on with the time that was left. */
-const wordsAfterPause = (trial: Trial) =>
-  trial.stage === 'answering' ? 'the answers go on' : `presentation ${trial.presentationNumber}, from its change`;
+function wordsAfterPause(trial: Trial): string {
+  if (trial.stage === 'answering') return 'the answers go on';
+  if (trial.stage === 'asking') return 'the listener’s turn goes on';
+  return `presentation ${trial.presentationNumber}, from its change`;
+}
 
 function placeOf(trial: Trial, { steps }: Pick<ProctorView, 'steps'>): string {
-  const presentation = `presentation ${trial.presentationNumber} of ${trial.presentations}`;
+  const of = trial.onRequest ? 'of at most' : 'of';
   if (trial.stage === 'answering') return 'answers';
+  if (trial.stage === 'asking') return `${trial.presentationNumber} ${of} ${trial.presentations} presentations given`;
+  const presentation = `presentation ${trial.presentationNumber} ${of} ${trial.presentations}`;
   if (trial.stage === 'listening') return `${presentation} · listening`;
   const step = Math.min(trial.stepsDone.length + 1, steps.length);
   return `${presentation} · step ${step} of ${steps.length}`;

@@ -12,6 +12,7 @@ import { ReportFigures } from './report-figures.tsx';
 import { ReportFlow } from './report-flow.tsx';
 import { ReportHeads } from './report-heads.tsx';
 import { ReportIncidents } from './report-incidents.tsx';
+import { ReportLevels } from './report-levels.tsx';
 import { ReportListeners } from './report-listeners.tsx';
 import { ReportProtocol } from './report-protocol.tsx';
 import { ReportRecord } from './report-record.tsx';
@@ -50,6 +51,7 @@ export function ReportView({ report, back, actions, proofs }: ReportViewProps) {
       <ReportListeners listeners={portrait.listeners} />
       <ReportExcerpts byExcerpt={report.byExcerpt} />
       <ReportChecks checks={portrait.checks} />
+      {report.levels === null ? null : <ReportLevels levels={report.levels} />}
       <ReportCueAudit audit={report.cueAudit} />
       <ReportFlow flow={report.flow} missingWords={result.missingAnswers} />
       <ReportIncidents

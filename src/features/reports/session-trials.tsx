@@ -27,6 +27,7 @@ export function SessionTrials({ session, cables, method }: SessionTrialsProps) {
 function columnsFor({ trials }: Session, cables: Report['cables'], method: Method): Column<Trial>[] {
   const words = method.trials;
   const hasMissing = trials.some((trial) => missingIn(trial).length > 0);
+  const isAsked = trials.some(({ requested }) => requested !== null);
   const hasLongChanges = trials.some(({ longChanges }) => longChanges > 0);
   return [
     {
@@ -47,6 +48,7 @@ function columnsFor({ trials }: Session, cables: Report['cables'], method: Metho
     ...(hasMissing
       ? [{ key: 'missing', header: 'Missing', cell: (trial: Trial) => <Labels of={missingIn(trial)} /> }]
       : []),
+    ...(isAsked ? [{ key: 'requested', header: 'Asked for', cell: askedIn }] : []),
     { key: 'counted', header: words.countHeader(cables), isFigure: true, cell: (trial) => countedOf(trial, method) },
     ...(hasLongChanges
       ? [{ key: 'long', header: 'Long changes', isFigure: true, cell: ({ longChanges }: Trial) => longChanges }]
@@ -64,6 +66,11 @@ function optionsIn(trials: readonly Trial[], method: Method): readonly AnswerOpt
 
 function answeredIn({ answers }: Trial, choice: string | null): string[] {
   return answers.filter((answer) => answer.choice === choice).map(({ listener }) => listener);
+}
+
+/** "A 2, B 1, X 3" */
+function askedIn({ requested }: Trial): string {
+  return (requested ?? []).map(({ label, times }) => `${label}\u00a0${times}`).join(', ');
 }
 
 /** Nobody owes an answer to a trial that was set aside. */

@@ -2,6 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { conductorMetal } from '#shared/cables/conductor-metal.ts';
 import { contradictionsOf } from '#shared/cables/contradictions.ts';
+import { differenceWords } from '#shared/cables/difference-words.ts';
 import { levelDifference } from '#shared/cables/level-difference.ts';
 import { predictedLine } from '#shared/cables/predicted-line.ts';
 import { purityPercent } from '#shared/cables/purity.ts';
@@ -20,7 +21,6 @@ import {
   typedConstruction,
 } from '../../../src/features/cables/construction-values.ts';
 import { crossSectionLayout } from '../../../src/features/cables/cross-section-layout.ts';
-import { differenceWords } from '../../../src/features/studies/form/difference-words.ts';
 
 const fieldsOf = (made: Construction) => contradictionsOf(made).map(({ field }) => field);
 

@@ -1,5 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
+import { differenceWords } from '#shared/cables/difference-words.ts';
 import { levelDifference } from '#shared/cables/level-difference.ts';
 import { predictedConductor, predictedSkinEffect } from '#shared/cables/predicted-conductor.ts';
 import {
@@ -13,7 +14,6 @@ import type { Construction } from '#shared/contracts/construction.ts';
 import { consequenceRows, consequenceWords } from '../../../src/features/cables/consequence-rows.ts';
 import { crossSectionLayout, type Disc } from '../../../src/features/cables/cross-section-layout.ts';
 import { siFigure } from '../../../src/features/cables/si-figure.ts';
-import { differenceWords } from '../../../src/features/studies/form/difference-words.ts';
 
 const told = <Value>(prediction: Prediction<Value>): Value => {
   if (!prediction.isKnown) throw new Error(`not known: ${prediction.lacks.join()} ${prediction.because ?? ''}`);

@@ -112,12 +112,12 @@ function keysOf(value: unknown, keys = new Set<string>()): Set<string> {
 const inBoth =
   'audience now title session phase paused course trial number of familiarisation stage presentationNumber presentations endsAt state seat rehearsal text';
 const listenersFields = new Set(
-  `${inBoth} sessionId contributes revealWanted left takesPart presentation spoken held question explanation announcement options value letter sentence short confidence lastLock lastOutcome outcome counted`.split(
+  `${inBoth} sessionId contributes revealWanted left takesPart presentation spoken held question explanation announcement options value letter sentence short confidence lastLock lastOutcome outcome counted requests`.split(
     ' ',
   ),
 );
 const proctorsFields = new Set(
-  `${inBoth} version room method rig cautions cautionsConfirmed steps kind leastS act how done reason since join dueAt revealed familiarised code excerpt stepsDone step stepEndsAt scannedEnds undo longChange answered expected nextTrial scans made byHand wrong inventory found foreign isEnded missing seats place awaySince late record entries sessionEntries demo levels handling checks check at isIn due bar excerptStart excerptS`.split(
+  `${inBoth} version room method rig cautions cautionsConfirmed steps kind leastS act how done reason since join dueAt revealed familiarised code excerpt stepsDone step stepEndsAt scannedEnds undo longChange answered expected nextTrial scans made byHand wrong inventory found foreign isEnded missing seats place awaySince late record entries sessionEntries demo levels handling checks check at isIn due bar excerptStart excerptS onRequest`.split(
     ' ',
   ),
 );

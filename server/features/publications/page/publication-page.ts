@@ -3,6 +3,8 @@ import type { Report } from '#shared/contracts/reports.ts';
 import { gapWords, localTimeWords, type SignedHead } from '#shared/contracts/signed-heads.ts';
 import { momentWords } from '#shared/ledger/moments.ts';
 import { readableFingerprint } from '#shared/ledger/readable-fingerprint.ts';
+import { dbText, exactDbText, handlingWords as levelHandlingWords } from '#shared/levels/level-words.ts';
+import { levelCheckWords } from '#shared/levels/measured-levels.ts';
 import { methodOf } from '#shared/methods/methods.ts';
 import type { Portrait } from '#shared/methods/portrait.ts';
 import { handlingWords } from '#shared/session/handling.ts';
@@ -68,6 +70,18 @@ function flow({ flow: of, result }: Report): Html {
   );
 }
 
+function levels({ handling, toleranceMilliDb, checks: taken }: NonNullable<Report['levels']>): Html {
+  const rows = taken.map(({ session: number, check, isIn, differenceMilliDb, driftMilliDb, instrument }) => [
+    `Session ${number}, ${levelCheckWords[check]}`,
+    isIn ? 'in' : 'out',
+    exactDbText(differenceMilliDb),
+    driftMilliDb === null ? '' : exactDbText(driftMilliDb),
+    instrument.name,
+  ]);
+  return html`<p class="max-w-3xl">Registered as ${levelHandlingWords[handling]}, tolerance ${dbText(toleranceMilliDb)} between any two codes at 1 kHz. Every reading is in the bundle’s levels.csv.</p>
+    ${table('Level match by session', ['Measured', 'Levels', 'Largest difference, dB', 'Moved since the start, dB', 'Instrument'], rows)}`;
+}
+
 function listeners(report: Report): Html {
   const { columns, rows } = portraitOf(report).listeners;
   return table(
@@ -114,19 +128,21 @@ function session({
   trials,
 }: Report['sessions'][number]): Html {
   const times = `${startedAt === null ? 'never started' : `started ${utc(startedAt)}`}${endedAt === null ? '' : `, ended ${utc(endedAt)}`}`;
-  const rows = trials.map(({ trial, outcome, excerpt, truth, answers }) => [
+  const isAsked = trials.some(({ requested }) => requested !== null);
+  const rows = trials.map(({ trial, outcome, excerpt, truth, answers, requested }) => [
     trial,
     outcome === 'locked' ? 'counted' : outcome,
     excerpt,
     truth,
     answers.map(({ listener, choice }) => `${listener} ${choice ?? 'none'}`).join(', '),
+    ...(isAsked ? [(requested ?? []).map(({ label, times }) => `${label} ${times}`).join(', ')] : []),
   ]);
   return html`<li class="flex flex-col gap-3 border-t border-rule pt-4">
     <h3 class="text-lg">Session ${number}, ${phase}</h3>
     <p class="text-soft">${count(seated, 'listener')}, ${times}.${drawn === null ? '' : ` ${drawn}`}</p>
     ${handlingWords(handling).map((words) => html`<p class="text-soft">${words}</p>`)}
     ${reason === null ? null : html`<p class="font-semibold">Reason: ${reason}</p>`}
-    ${rows.length === 0 ? null : table(`Trials of session ${number}`, ['Trial', 'Outcome', 'Excerpt', 'Drawn', 'Answers'], rows)}
+    ${rows.length === 0 ? null : table(`Trials of session ${number}`, ['Trial', 'Outcome', 'Excerpt', 'Drawn', 'Answers', ...(isAsked ? ['Asked for'] : [])], rows)}
   </li>`;
 }
 
@@ -223,6 +239,7 @@ export function publicationContent(publication: Publication): Html {
         ])}<h3 class="text-lg">The publisher confirms</h3>${list(confirmations, '')}`,
       )}
       ${section('Check it yourself', verification(publication))}
+      ${report.levels === null ? null : section('Level at the load', levels(report.levels))}
       ${section('From plan to count', flow(report))}
       ${section('By listener', listeners(report))}
       ${section('Checks of the answers', checks(report))}

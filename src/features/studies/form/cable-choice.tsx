@@ -1,18 +1,11 @@
 import { useFormContext, useWatch } from 'react-hook-form';
 import type { Cable } from '#shared/contracts/cables.ts';
-import type { Rig } from '#shared/protocol/rig-preset.ts';
 import { formatLength } from '../../../lib/format.ts';
 import { SelectField } from '../../../ui/select-field.tsx';
 import { SpecimenChoice } from './specimen-choice.tsx';
-import type { StudyFormValues } from './study-form-values.ts';
+import { rigOfKind, type StudyFormValues } from './study-form-values.ts';
 
 type CableChoiceProps = { index: 0 | 1; label: string; cables: readonly Cable[] };
-
-const rigOfKind: Partial<Record<Cable['kind'], Rig>> = {
-  loudspeaker: 'loudspeaker',
-  interconnect: 'line',
-  headphone: 'headphone',
-};
 
 /** One of the two cables and the pieces of it that are heard. */
 export function CableChoice({ index, label, cables }: CableChoiceProps) {

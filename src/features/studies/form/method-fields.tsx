@@ -3,6 +3,7 @@ import { methodOf, methods } from '#shared/methods/methods.ts';
 import { CheckboxField } from '../../../ui/checkbox-field.tsx';
 import { SelectField } from '../../../ui/select-field.tsx';
 import { TextField } from '../../../ui/text-field.tsx';
+import { OnRequestFields } from './on-request-fields.tsx';
 import type { StudyFormValues } from './study-form-values.ts';
 
 const methodOptions = Object.values(methods).map(({ id, name }) => ({ value: id, label: name }));
@@ -20,6 +21,7 @@ export function MethodFields() {
     setValue('attribute', '', { shouldDirty: true });
     setValue('marginPercent', undefined, { shouldDirty: true });
     setValue('separateSpecimens', false, { shouldDirty: true });
+    setValue('onRequest', undefined, { shouldDirty: true });
   };
   return (
     <div className="flex flex-col gap-3">
@@ -48,6 +50,7 @@ export function MethodFields() {
           onBlur={field.onBlur}
         />
       ))}
+      <OnRequestFields />
     </div>
   );
 }

@@ -1,10 +1,10 @@
 import { useState } from 'react';
 import { useFormContext } from 'react-hook-form';
+import { differenceWords } from '#shared/cables/difference-words.ts';
 import { levelDifference } from '#shared/cables/level-difference.ts';
 import { predictedLine } from '#shared/cables/predicted-line.ts';
 import type { Cable } from '#shared/contracts/cables.ts';
 import { NumberField } from '../../../ui/number-field.tsx';
-import { differenceWords } from './difference-words.ts';
 import type { StudyFormValues } from './study-form-values.ts';
 
 const usualLoadOhms = 8;

@@ -1,4 +1,5 @@
 import type { z } from 'zod';
+import type { Cable } from '#shared/contracts/cables.ts';
 import type { KeptPreset } from '#shared/contracts/rig-presets.ts';
 import type { studyDraft } from '#shared/contracts/studies.ts';
 import { methodIds } from '#shared/methods/methods.ts';
@@ -40,8 +41,24 @@ export function presetFor(presets: readonly KeptPreset[], rig: Rig): RigPreset |
   return (fitting.find(({ isShipped }) => isShipped) ?? fitting[0])?.preset;
 }
 
-/** A new study begins with the preset for its rig. */
-export function newStudyWith(presets: readonly KeptPreset[]): StudyFormValues {
-  const preset = presetFor(presets, newStudyValues.rig);
-  return preset === undefined ? newStudyValues : { ...newStudyValues, rigPreset: preset };
+/** The rig that cables of a kind are heard on; undefined where the kind does not tell. */
+export const rigOfKind: Partial<Record<Cable['kind'], Rig>> = {
+  loudspeaker: 'loudspeaker',
+  interconnect: 'line',
+  headphone: 'headphone',
+};
+
+/** A new study begins with the preset for its rig, and with two cables where they were chosen before. */
+export function newStudyWith(presets: readonly KeptPreset[], chosen: readonly Cable[] = []): StudyFormValues {
+  const [first, second] = chosen;
+  const rig = (first && rigOfKind[first.kind]) ?? newStudyValues.rig;
+  const preset = presetFor(presets, rig);
+  const cables: StudyFormValues['cables'] =
+    first === undefined || second === undefined ? newStudyValues.cables : [chosenCable(first), chosenCable(second)];
+  return { ...newStudyValues, rig, cables, ...(preset === undefined ? {} : { rigPreset: preset }) };
+}
+
+/** A cable with all its pieces that are in use. */
+function chosenCable({ id, specimens }: Cable): StudyFormValues['cables'][number] {
+  return { cableId: id, specimenIds: specimens.filter(({ archived }) => !archived).map((specimen) => specimen.id) };
 }

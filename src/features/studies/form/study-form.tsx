@@ -11,6 +11,7 @@ import { PlanProvider } from '../planner/plan-provider.tsx';
 import { Planner } from '../planner/planner.tsx';
 import { CableFields } from './cable-fields.tsx';
 import { CodeHolderField } from './code-holder-field.tsx';
+import { LevelFields } from './level-fields.tsx';
 import { ListeningFields } from './listening-fields.tsx';
 import { ProgrammeFields } from './programme-fields.tsx';
 import { QuestionFields } from './question-fields.tsx';
@@ -79,6 +80,7 @@ export function StudyForm<Saved>({
             <ListeningFields />
             <ProgrammeFields />
             <RigFields presets={rigPresets} presetsTo={rigPresetsTo} />
+            <LevelFields />
             <CodeHolderField members={members} isManager={isManager} />
           </div>
           <Planner />

@@ -1,4 +1,5 @@
 import type { Study, StudyDraft } from '#shared/contracts/studies.ts';
+import { registeredLevelsText } from '#shared/levels/level-words.ts';
 import { methodOf } from '#shared/methods/methods.ts';
 import { analysisFacts } from '#shared/protocol/analysis-facts.ts';
 import { presetFacts } from '#shared/protocol/preset-facts.ts';
@@ -37,6 +38,7 @@ export function protocolFacts({ draft, cableNames, codeHolder }: Study): Protoco
     words('Rig', rigWords[draft.rig]),
     ...presetFacts(draft.rigPreset),
     words('Chain', draft.chain),
+    words('Level at the load', registeredLevelsText(draft.levels)),
     words('Every change', `${draft.changeS} s, real or not`),
     words('Answer window', `${draft.answerS} s`),
     words('Confidence', draft.confidence ? 'asked with every answer' : 'not asked'),

@@ -11,13 +11,14 @@ export function PlanFigures({ plan }: { plan: Plan }) {
     <div className="flex flex-col gap-4">
       <FigureRow>
         <Figure value={plan.sessions} label={isSeveral ? 'sessions' : 'session'} />
-        <Figure value={plan.fittings} label="changes of cable" />
+        <Figure value={plan.fittings} label={plan.isAtMost ? 'changes of cable, at most' : 'changes of cable'} />
         <Figure value={clockWords(plan.minutes)} label={isSeveral ? 'in all, with breaks' : 'with breaks'} />
         <Figure value={<FoundShare />} label="chance of finding it" />
       </FigureRow>
       <p className="text-soft">
         {levelWords(plan)} {isSeveral ? `Each session takes ${clockWords(plan.minutesPerSession)}. ` : ''}
         {breakWords(plan)} Familiarisation is counted in.
+        {plan.isAtMost ? ' Changes and time are for a listener who asks for all that a trial allows.' : ''}
       </p>
     </div>
   );

@@ -19,6 +19,7 @@ const {
   changeS,
   answerS,
   programme,
+  onRequest,
 } = studyDraft.shape;
 
 /** The part of a draft that decides how much listening there is; it is planned as soon as this part is sound. */
@@ -33,6 +34,7 @@ const listening = z.object({
   alphaPerMille,
   changeS,
   answerS,
+  onRequest: onRequest.catch(undefined),
   programme: z.array(z.object({ lengthS: programme.element.shape.lengthS })).min(1),
 });
 
@@ -50,6 +52,8 @@ export type Plan = {
   figures: PlanFigures;
   /** Over all sessions. */
   fittings: number;
+  /** Whether fittings and time are the most that they can be: on request listeners may ask for less. */
+  isAtMost: boolean;
   minutesPerSession: number;
   minutes: number;
 };
@@ -77,13 +81,14 @@ export function planOf(values: Partial<StudyFormValues>): Plan | null {
   const chosen = methodOf(draft.method);
   const choices = { ...draft, marginPercent: soundMargin(chosen, draft.marginPercent) };
   const { alternative } = chosen.registered(choices);
+  const asked = chosen.onRequest === null ? undefined : draft.onRequest;
   const figures = planFigures({
     sessions: draft.sessions,
     trials: draft.trials,
     alpha,
     test: chosen.planned,
     listeners: draft.listenersPerSession,
-    presentationsPerTrial: chosen.presentations.length,
+    presentationsPerTrial: asked?.most ?? chosen.presentations.length,
     changeMs: draft.changeS * 1000,
     listenMs: meanExcerptMs(draft.programme, draft.trials),
     answerMs: draft.answerS * 1000,
@@ -100,6 +105,7 @@ export function planOf(values: Partial<StudyFormValues>): Plan | null {
     listeners: draft.listenersPerSession,
     alpha: Number(alpha),
     figures,
+    isAtMost: asked !== undefined,
     fittings: draft.sessions * figures.session.fittings,
     minutesPerSession: figures.session.durationMinutes,
     minutes: draft.sessions * figures.session.durationMinutes,
