@@ -26,7 +26,7 @@ export function ScanBox({ labels, isLost, keyHint }: ScanBoxProps) {
   return (
     <div className="flex flex-col gap-3">
       <form onSubmit={submit} className="flex flex-wrap items-stretch gap-3.5">
-        <label className="flex min-w-48 flex-1 flex-col">
+        <label className="flex min-w-36 flex-1 flex-col">
           <span className="sr-only">Scan, or type the code</span>
           <input
             ref={field}
