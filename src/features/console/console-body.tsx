@@ -84,7 +84,7 @@ function Scenery({ view, actions, back }: SceneryProps) {
     case 'running':
       if (view.trial !== null) return <TrialPanel trial={view.trial} view={view} />;
       return view.inventory === null || view.inventory.isEnded ? (
-        <BetweenTrials view={view} />
+        <BetweenTrials view={view} actions={actions} />
       ) : (
         <Inventory inventory={view.inventory} />
       );

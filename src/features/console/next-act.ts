@@ -71,6 +71,6 @@ function actInTrial(view: ProctorView, trial: NonNullable<ProctorView['trial']>)
     return { label: done, waiting, command: { kind: 'confirm-step', step }, step, opensAt };
   }
   if ((trial.stage === 'answering' || trial.stage === 'asking') && trial.answered === trial.expected)
-    return now(`Lock trial ${trial.number}`, { kind: 'lock-trial' });
+    return now(trial.practice === null ? `Lock trial ${trial.number}` : 'End this practice', { kind: 'lock-trial' });
   return null;
 }

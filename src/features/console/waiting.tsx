@@ -22,7 +22,7 @@ function waitOf(view: ProctorView): Wait | null {
   if (view.phase !== 'running') return null;
   if (trial === null) return isAnybodySeated(view) ? null : { words: 'Waiting for a listener', until: null };
   if (trial.stage === 'listening') return { words: 'The excerpt ends in', until: trial.endsAt };
-  return { words: 'The trial waits until', until: trial.endsAt };
+  return { words: trial.practice === null ? 'The trial waits until' : 'The practice waits until', until: trial.endsAt };
 }
 
 /** Stands where the next act stands while somebody else is to act, so that nothing moves when it comes. */
