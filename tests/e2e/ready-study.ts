@@ -44,13 +44,17 @@ export async function readyStudy(manager: Page, holder: Page, change: Partial<St
     ['4.0 twin', 'SF-0077'],
   ] as const) {
     const { rows }: { rows: Named[] } = await ask(manager, 'get', `/cables?q=${encodeURIComponent(name)}`);
-    const cableId = rows[0]?.id ?? '';
+    // The search reads descriptions too, and one cable's names the other.
+    const cableId = rows.find((row) => row.name.includes(name))?.id ?? '';
     const { specimens }: { specimens: { id: string; serial: string }[] } = await ask(
       manager,
       'get',
       `/cables/${cableId}`,
     );
-    cables.push({ cableId, specimenIds: specimens.filter((one) => one.serial === serial).map(({ id }) => id) });
+    cables.push({
+      cableId,
+      specimenIds: specimens.filter((one) => change.separateSpecimens || one.serial === serial).map(({ id }) => id),
+    });
   }
   const [first, second] = cables;
   if (first === undefined || second === undefined) throw new Error('the demo has no such cables');
