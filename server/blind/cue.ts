@@ -1,5 +1,6 @@
 import type { Method } from '#shared/methods/method.ts';
-import { codeFitted } from '#shared/session/fitting.ts';
+import { codeFitted, truthOfPractice } from '#shared/session/fitting.ts';
+import type { Practice } from '#shared/session/practice.ts';
 import type { SessionState } from '#shared/session/state.ts';
 import type { Tx } from '../db/transaction.ts';
 import { OpeningProof } from './sealed.ts';
@@ -15,6 +16,8 @@ export type CueQuestion = {
   readonly state: Pick<SessionState, 'plan' | 'ended'>;
   /** From 1; 0 is the familiarisation trial. */
   readonly trial: number;
+  /** The practice trial that it is in, or null. */
+  readonly practice: Practice | null;
   readonly presentation: string;
 };
 
@@ -25,6 +28,22 @@ export async function cueFor(tx: Tx, question: CueQuestion): Promise<string> {
   const draw = await readDrawSecret(tx, question.sessionId);
   if (codeKey === null || draw === null) throw new Error('a session runs without its secrets');
   return codeFitted({ ...question, secret: draw.open(proof).secret, rows: codeKey.open(proof).rows });
+}
+
+export type PracticeQuestion = Pick<CueQuestion, 'studyId' | 'sessionId' | 'contributions' | 'method'> & {
+  readonly plan: SessionState['plan'];
+  readonly practice: Practice;
+};
+
+/**
+ * What was right in a practice trial, once it is over: told to the phones, and to nobody before. It comes from a label of
+ * its own in the draw, and opens no trial that counts.
+ */
+export async function truthPractised(tx: Tx, question: PracticeQuestion): Promise<string> {
+  const proof = new OpeningProof('cue');
+  const draw = await readDrawSecret(tx, question.sessionId);
+  if (draw === null) throw new Error('a session runs without its secrets');
+  return truthOfPractice({ ...question, secret: draw.open(proof).secret, rows: [] }, question.practice);
 }
 
 /** The codes that stand on a study's sleeves, in the order of their figures: which there are, and nothing of what they are. */

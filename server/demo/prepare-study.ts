@@ -11,14 +11,14 @@ export const demoTimeZone = 'Europe/Lisbon';
 
 export type People = Record<DemoPersonKey, string>;
 
-/** Draft, seal, codes and one planned session: a study ready to run. */
+/** Draft, seal, codes and one planned session: a study ready to run, and for its simulated listeners the check cables' codes. */
 export async function prepareStudy(deps: Deps, organisationId: string, people: People, draft: StudyDraft) {
   const study = await createStudy(deps, organisationId, people.manager, draft);
   const where = { organisationId, id: study.id };
   await sealStudy(deps, where, people.manager);
   const holder = { userId: people.codeHolder, role: 'reviewer' };
   await drawCodes(deps, where, holder);
-  await openCodes(deps, where, holder, 'labels');
+  const sheet = await openCodes(deps, where, holder, 'labels');
   await confirmCodes(deps, where, holder);
   const plannedAt = new Date(Math.ceil((deps.clock.now() + 3_600_000) / 900_000) * 900_000).toISOString();
   const session = await planSession(deps, where, {
@@ -27,5 +27,7 @@ export async function prepareStudy(deps: Deps, organisationId: string, people: P
     room: 'Listening room',
     proctorId: people.proctor,
   });
-  return { where, sessionId: session.id };
+  const questioned = new Set(study.cableNames);
+  const checkCodes = sheet.rows.filter(({ cable }) => !questioned.has(cable)).map(({ code }) => code);
+  return { where, sessionId: session.id, checkCodes };
 }

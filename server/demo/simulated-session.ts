@@ -147,6 +147,11 @@ export class SimulatedSession {
     await this.#wait(15_000);
   }
 
+  /** The measurement of levels that the session waits for, or null. */
+  get levelsDue() {
+    return this.#view.levels?.due ?? null;
+  }
+
   get trialsLeft(): boolean {
     return this.#view.nextTrial !== null;
   }

@@ -54,6 +54,7 @@ export function answerRow(
  * @throws Problem `too-early` before the trial, `too-late` for every other trial that is over
  */
 export function requireLate(state: SessionState, seat: string, trial: number): void {
+  if (trial < 0) throw new Problem('too-late', 'That practice is over. Nothing in it counts.');
   const ended = state.ended.find((candidate) => candidate.trial === trial);
   if (ended === undefined && state.phase === 'running') throw new Problem('too-early', 'That trial is not open.');
   if (ended === undefined)

@@ -1,11 +1,23 @@
 import { type ListenerView, type LockReceipt, listenerView } from '#shared/contracts/listener-live.ts';
 import { type ProctorView, proctorView } from '#shared/contracts/proctor-live.ts';
 import { isInventoryDue } from '#shared/session/decide-scan.ts';
+import { optionsOf } from '#shared/session/progress.ts';
 import { listenerViewOf, type Presence, proctorViewOf } from '#shared/session/views.ts';
 import type { Deps } from '../deps.ts';
 import { joinOf } from './join.ts';
 import type { Keeper } from './keeper.ts';
 import type { SessionMemory } from './session-memory.ts';
+
+/** What a practice trial with feedback tells one listener. */
+function toldTo({ told, method, state }: SessionMemory, seat: string): ListenerView['told'] {
+  const { isRight } = method.trials;
+  if (told === null || isRight === null) return null;
+  const right = optionsOf(state, method).find(({ value }) => isRight(value, told.truth));
+  if (right === undefined) throw new Error(`nothing is right in practice ${told.practice}`);
+  const choice = told.choices.get(seat);
+  const said = choice === undefined ? null : isRight(choice, told.truth);
+  return { practice: told.practice, right: right.sentence, isRight: said };
+}
 
 /** What one seat's phone shows now. */
 export function phoneViewOf(memory: SessionMemory, seat: string, now: number): ListenerView {
@@ -22,6 +34,7 @@ export function phoneViewOf(memory: SessionMemory, seat: string, now: number): L
     now,
     held: memory.held.get(seat) ?? null,
     lastLock,
+    told: toldTo(memory, seat),
   };
   return listenerView.parse(listenerViewOf(memory.state, memory.method, context));
 }

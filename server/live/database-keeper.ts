@@ -5,7 +5,7 @@ import { contributionsOf } from '#shared/session/counted-trials.ts';
 import type { SessionPlan } from '#shared/session/events.ts';
 import { studyMark } from '#shared/session/label-text.ts';
 import { presentationNow } from '#shared/session/progress.ts';
-import { codesOf, commitDraw, cueFor } from '../blind/index.ts';
+import { codesOf, commitDraw, cueFor, truthPractised } from '../blind/index.ts';
 import { type Tx, withTransaction } from '../db/transaction.ts';
 import type { Deps } from '../deps.ts';
 import { labelOf, noteSeated } from '../features/attendances/attendances.store.ts';
@@ -38,9 +38,19 @@ export function databaseKeeper(deps: Deps): Keeper {
         method,
         state,
         trial: state.trial.trial,
+        practice: state.trial.practice,
         presentation,
       });
     },
+    truthPractised: ({ state, session, method }, practice) =>
+      truthPractised(deps.db.manager, {
+        studyId: session.studyId,
+        sessionId: session.id,
+        contributions: contributionsOf(state),
+        method,
+        plan: state.plan,
+        practice,
+      }),
   };
 }
 

@@ -1,5 +1,6 @@
 import type { Entry } from '#shared/ledger/chain.ts';
 import type { SessionEvent } from '#shared/session/events.ts';
+import type { Practice } from '#shared/session/practice.ts';
 import type { Answer } from '../features/sessions/answer.entity.ts';
 import type { PresentationRequest } from '../features/sessions/request.entity.ts';
 import type { Seat } from '../features/sessions/seat.entity.ts';
@@ -30,6 +31,8 @@ export type Keeper = {
   keep<T>(work: (keeping: Keeping) => Promise<T>): Promise<T>;
   /** The blind code of the presentation that is being fitted or heard, for the proctor alone. */
   codeToFit(memory: SessionMemory): Promise<string | null>;
+  /** What was right in a practice trial that has ended, for its phones. */
+  truthPractised(memory: SessionMemory, practice: Practice): Promise<string>;
   /** Every code that the study's sleeves bear, in their order, and nothing of what they stand for. */
   codes(memory: SessionMemory): Promise<readonly string[]>;
   /** The neutral title of the organisation's study whose labels bear a mark; null when there is none. */

@@ -4,7 +4,7 @@ import { leastSeparate } from '#shared/protocol/ways-to-run.ts';
 import { drawSecretCommitment } from '#shared/session/commitments.ts';
 import { contributionsOf } from '#shared/session/counted-trials.ts';
 import type { SessionPlan } from '#shared/session/events.ts';
-import { codeFitted } from '#shared/session/fitting.ts';
+import { codeFitted, truthOfPractice } from '#shared/session/fitting.ts';
 import { presentationNow } from '#shared/session/progress.ts';
 import { firstCheckCable } from '#shared/session/trial-kinds.ts';
 import { drawCodes } from '../blind/index.ts';
@@ -69,8 +69,11 @@ export function rehearsalKeeper(random: Random, code: string, plan: SessionPlan)
         method,
         state,
         trial: state.trial.trial,
+        practice: state.trial.practice,
         presentation,
       });
     },
+    truthPractised: async ({ state, method }, practice) =>
+      truthOfPractice({ secret, rows, contributions: contributionsOf(state), method, plan: state.plan }, practice),
   };
 }

@@ -64,6 +64,7 @@ export class Rehearsals {
       state: evolve(null, { kind: 'session-planned', at: clock.now(), payload }, method),
       entries: 0,
       lock: null,
+      told: null,
       held: new Map(),
       seats: new Map<string, Seat>(),
     };

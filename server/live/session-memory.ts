@@ -19,6 +19,13 @@ import { readSessionEntries } from '../ledger/ledger.ts';
 /** The last trial that locked, with the leaves that phones keep as receipts. */
 export type Lock = { sequence: number; digest: string; trial: number; leaves: ReadonlyMap<string, string> };
 
+/** What was right in a practice trial, and what each seat had answered. Kept nowhere else. */
+export type Told = {
+  readonly practice: number;
+  readonly truth: string;
+  readonly choices: ReadonlyMap<string, string>;
+};
+
 /** What the server holds in memory of a session: nothing that its keeper does not hold too. */
 export type SessionMemory = {
   readonly session: Session;
@@ -33,6 +40,8 @@ export type SessionMemory = {
   /** The open trial's answers, by seat. */
   readonly held: ReadonlyMap<string, HeldAnswer>;
   readonly seats: ReadonlyMap<string, Seat>;
+  /** The practice trial that has just ended and tells what was right; null once the next trial opens. */
+  readonly told: Told | null;
 };
 
 export const heldOf = ({ trial, choice, confidence, revision, leaf, heldAt }: Answer): HeldAnswer => ({
@@ -69,6 +78,7 @@ export function afterEvents(
     entries: entries.at(-1)?.sequence ?? memory.entries,
     lock: entries.reduce<Lock | null>((lock, entry) => lockOf(entry) ?? lock, memory.lock),
     held: isOtherTrial ? new Map() : memory.held,
+    told: isOtherTrial ? null : memory.told,
   };
 }
 
@@ -107,6 +117,7 @@ export async function loadMemory({ db }: Deps, session: Session): Promise<Sessio
       lock: entries.reduce<Lock | null>((lock, entry) => lockOf(entry) ?? lock, null),
       held: new Map(rows.map((row) => [row.seat, heldOf(row)])),
       seats: new Map(seats.map((seat) => [seat.label, seat])),
+      told: null,
     };
   });
 }

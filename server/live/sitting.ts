@@ -129,7 +129,8 @@ export class Sitting {
       const known = this.#memory.held.get(seat);
       if (known !== undefined && known.revision >= command.revision) return known;
       const row = answerRow(this.#memory, seat, command, { late: false, at: this.#deps.clock.now() });
-      await this.#keeper.keep((keeping) => keeping.saveAnswer(row));
+      // What is answered in practice is kept nowhere.
+      if (trial.practice === null) await this.#keeper.keep((keeping) => keeping.saveAnswer(row));
       this.#memory = afterAnswer(this.#memory, row);
       await this.#show();
       return heldOf(row);
@@ -243,11 +244,22 @@ export class Sitting {
       const entries = events.length === 0 ? [] : await keeping.record(this.#memory, events);
       return { events, entries, stored, result };
     });
-    this.#memory = afterEvents(this.#memory, events, entries);
+    const before = this.#memory;
+    this.#memory = afterEvents(before, events, entries);
+    if (events.some(({ kind }) => kind === 'practice-ended')) await this.#tell(before);
     stored?.();
     this.#schedule();
     await this.#show();
     return result;
+  }
+
+  /** After practice with feedback the phones are told what was right. */
+  async #tell({ state, held }: SessionMemory): Promise<void> {
+    const practice = state.trial?.practice ?? null;
+    if (practice === null || practice.form !== 'feedback') return;
+    const truth = await this.#keeper.truthPractised(this.#memory, practice);
+    const choices = new Map([...held].map(([seat, { choice }]) => [seat, choice]));
+    this.#memory = { ...this.#memory, told: { practice: practice.number, truth, choices } };
   }
 
   /** Reads the session back from the database, where something else has changed it. */

@@ -3,8 +3,9 @@ import type { Entry } from '../ledger/chain.ts';
 import { answerName } from '../ledger/publication-parts.ts';
 import type { StudyReading } from '../ledger/study-reading.ts';
 import { levelsTables } from '../levels/levels-table.ts';
-import { truthOf } from '../session/fitting.ts';
+import { kindOf, truthOf } from '../session/fitting.ts';
 import type { EndedTrial, SessionState } from '../session/state.ts';
+import { stepOf, type TrialKind } from '../session/trial-kinds.ts';
 import { cuesTable } from './cues-table.ts';
 
 /** A column with what it means; its name stands in the first row of the file. */
@@ -15,7 +16,7 @@ export type TableField = {
 };
 
 export type Table = {
-  readonly name: 'sessions' | 'trials' | 'answers' | 'listeners' | 'requests' | 'result' | 'levels' | 'cues';
+  readonly name: 'sessions' | 'trials' | 'answers' | 'listeners' | 'requests' | 'result' | 'levels' | 'cues' | 'checks';
   readonly title: string;
   readonly fields: readonly TableField[];
   readonly key: readonly string[];
@@ -45,6 +46,7 @@ export function tablesOf(study: StudyReading): Table[] {
     resultTable(study),
     ...levelsTables(study),
     ...cuesTable(study),
+    ...(study.protocol().checks === undefined ? [] : [checksTable(study)]),
   ];
 }
 
@@ -72,6 +74,23 @@ function happenings(study: StudyReading) {
 }
 
 type Truths = (state: SessionState, trial: number) => string;
+
+/** What each trial was; every one a main one where no check trials are registered. */
+function drawnKinds(study: StudyReading): (state: SessionState, trial: number) => TrialKind {
+  const draws = new Map(study.draws().map((draw) => [draw.session, draw]));
+  return (state, trial) => {
+    const draw = draws.get(state.session);
+    return draw === undefined ? 'main' : kindOf(draw, state, trial);
+  };
+}
+
+const kindField = field(
+  'kind',
+  'string',
+  'main, check (a known difference) or same (the reference cable with itself).',
+);
+
+const wordOf = (kind: TrialKind) => (stepOf(kind) === null ? kind : 'check');
 
 /** Truths as the draws came out; nothing where there was no draw. */
 function drawnTruths(study: StudyReading): Truths {
@@ -130,8 +149,11 @@ function rightAnswer(study: StudyReading, truth: string): string {
 function trialsTable(study: StudyReading): Table {
   const first = happenings(study);
   const truths = drawnTruths(study);
+  const kinds = drawnKinds(study);
+  const { checks } = study.protocol();
   const rowOf = (state: SessionState, { trial: number, outcome, excerpt, voidReason }: EndedTrial): Cell[] => {
     const truth = truths(state, number);
+    const kind = kinds(state, number);
     const voided = first('trial-voided', state.session, number);
     const note = voided?.payload.note;
     return [
@@ -139,12 +161,13 @@ function trialsTable(study: StudyReading): Table {
       number,
       outcome === 'locked' ? 'counted' : 'void',
       truth,
-      rightAnswer(study, truth),
+      kind === 'same' ? '' : rightAnswer(study, truth),
       state.plan.programme[excerpt]?.title ?? '',
       first('trial-opened', state.session, number)?.at ?? '',
       (first('trial-locked', state.session, number) ?? voided)?.at ?? '',
       voidReason ?? '',
       note === undefined ? '' : String(note),
+      ...(checks === undefined ? [] : [wordOf(kind), checks.steps[stepOf(kind) ?? -1]?.milliDb ?? '']),
     ];
   };
   return {
@@ -161,6 +184,12 @@ function trialsTable(study: StudyReading): Table {
       field('ended', 'datetime', 'When it locked or was set aside.'),
       field('void_reason', 'string', 'Why it was set aside.'),
       field('void_note', 'string', 'What was noted about it.'),
+      ...(checks === undefined
+        ? []
+        : [
+            kindField,
+            field('step_mdb', 'integer', 'Size of the known difference in thousandths of a decibel; empty otherwise.'),
+          ]),
     ],
     key: ['session', 'trial'],
     rows: study.sessions().flatMap((state) => state.ended.map((one) => rowOf(state, one))),
@@ -169,6 +198,8 @@ function trialsTable(study: StudyReading): Table {
 
 function answersTable(study: StudyReading): Table {
   const truths = drawnTruths(study);
+  const kinds = drawnKinds(study);
+  const hasChecks = study.protocol().checks !== undefined;
   const held = new Map(study.answers().map((answer) => [answerName(answer), answer]));
   const rows = study.sessions().flatMap((state) =>
     state.ended
@@ -176,7 +207,8 @@ function answersTable(study: StudyReading): Table {
       .flatMap(({ trial: number, seats }) =>
         seats.map((seat): Cell[] => {
           const answer = held.get(answerName({ session: state.sessionId, trial: number, seat }));
-          const right = rightAnswer(study, truths(state, number));
+          const kind = kinds(state, number);
+          const right = kind === 'same' ? '' : rightAnswer(study, truths(state, number));
           return [
             state.session,
             number,
@@ -185,6 +217,7 @@ function answersTable(study: StudyReading): Table {
             answer?.confidence ?? '',
             answer === undefined,
             right === '' ? '' : answer?.choice === right,
+            ...(hasChecks ? [wordOf(kind)] : []),
           ];
         }),
       ),
@@ -204,6 +237,7 @@ function answersTable(study: StudyReading): Table {
         'boolean',
         'Whether it was the right one; a missing one is not. Empty for a method without right answers.',
       ),
+      ...(hasChecks ? [kindField] : []),
     ],
     key: ['session', 'trial', 'listener'],
     rows,
@@ -290,8 +324,18 @@ function listenersTable(study: StudyReading): Table {
   };
 }
 
-/** Every value of the registered result under its path, so that a program without JSON can compare. */
-function resultTable(study: StudyReading): Table {
+/** Every value of what the check trials came to, in the same form. */
+function checksTable(study: StudyReading): Table {
+  return {
+    ...resultTable(study),
+    name: 'checks',
+    title: 'What the check trials came to, as it stands on the record, value by value',
+    rows: valuesOf(study.payloadOf('result-recorded')?.checks ?? null),
+  };
+}
+
+/** Every value under its path, so that a program without JSON can compare. */
+function valuesOf(whole: unknown): Cell[][] {
   const rows: Cell[][] = [];
   const walk = (value: unknown, path: string): void => {
     if (value === null) rows.push([path, '']);
@@ -299,7 +343,11 @@ function resultTable(study: StudyReading): Table {
       for (const [name, inner] of Object.entries(value)) walk(inner, path === '' ? name : `${path}/${name}`);
     else rows.push([path, value as Cell]);
   };
-  walk(study.parts.result, '');
+  walk(whole, '');
+  return rows;
+}
+
+function resultTable(study: StudyReading): Table {
   return {
     name: 'result',
     title: 'The registered result as it stands on the record, value by value',
@@ -308,6 +356,6 @@ function resultTable(study: StudyReading): Table {
       field('value', 'string', 'The value: whole numbers, decimal text, words; empty for none.'),
     ],
     key: ['path'],
-    rows,
+    rows: valuesOf(study.parts.result),
   };
 }

@@ -11,7 +11,12 @@ export const listenerCommand = z.discriminatedUnion('kind', [
   z.strictObject({ kind: z.literal('reveal'), value: hex(32) }),
   z.strictObject({
     kind: z.literal('answer'),
-    trial: z.int().check(z.positive(), z.maximum(1000)),
+    /** Below 0 in practice. */
+    trial: z.int().check(
+      z.minimum(-1000),
+      z.maximum(1000),
+      z.refine((trial) => trial !== 0, 'Nothing is asked in the familiarisation'),
+    ),
     choice: z.string().check(z.minLength(1), z.maxLength(16)),
     confidence: z.nullable(z.enum(confidences)),
     /** Counts the changes of this answer on this phone, from 1: a repeat is harmless, an older one is ignored. */
@@ -78,6 +83,8 @@ export const listenerView = z.strictObject({
       number: z.int(),
       of: z.int(),
       familiarisation: z.boolean(),
+      /** A practice trial and whether its answer is told afterwards; null in a trial that counts. */
+      practice: z.nullable(z.strictObject({ number: z.int(), feedback: z.boolean() })),
       takesPart: z.boolean(),
       /** *Asking* is this listener's turn on request: to ask again, or to answer. */
       stage: z.enum(['change', 'listening', 'asking', 'answering']),
@@ -126,6 +133,16 @@ export const listenerView = z.strictObject({
     confidence: z.boolean(),
   }),
   lastLock: z.nullable(lockReceipt),
+  /** What was right in the practice trial that has just ended; null elsewhere, and always where answers count. */
+  told: z.nullable(
+    z.strictObject({
+      practice: z.int(),
+      /** What would have been right, as the answer says it. */
+      right: z.string(),
+      /** Whether this listener said so; null without an answer. */
+      isRight: z.nullable(z.boolean()),
+    }),
+  ),
   /** The last trial's end as this listener needs to know it. */
   lastOutcome: z.nullable(
     z.strictObject({ trial: z.int(), outcome: z.enum(['locked', 'void']), counted: z.boolean() }),

@@ -29,6 +29,14 @@ export const proctorCommand = z.discriminatedUnion('kind', [
   z.strictObject({ kind: z.literal('open-seating'), ...version }),
   z.strictObject({ kind: z.literal('close-seating'), ...version }),
   z.strictObject({ kind: z.literal('begin-familiarisation'), ...version }),
+  /** A trial before the first one that never counts: blind, or on a known difference with feedback. */
+  z.strictObject({
+    kind: z.literal('begin-practice'),
+    ...version,
+    form: z.enum(['blind', 'feedback']),
+    /** The place of the known difference, from 0, the largest first; null for the cables of the question. */
+    step: z.int().min(0).max(20).nullable(),
+  }),
   z.strictObject({ kind: z.literal('begin-trial'), ...version }),
   z.strictObject({ kind: z.literal('confirm-step'), ...version, step: z.enum(stepKinds) }),
   /** What a scanner, a camera or a person read off a label: at the step for it, or at the inventory. */
@@ -92,11 +100,23 @@ export const proctorView = z.strictObject({
   dueAt: time.nullable(),
   revealed: z.strictObject({ done: z.int(), of: z.int() }).nullable(),
   familiarised: z.boolean(),
+  /** What training is still possible, before the first trial opens; null after it. */
+  training: z
+    .strictObject({
+      practised: z.int(),
+      /** How many known differences can be practised with feedback. */
+      steps: z.int(),
+    })
+    .nullable(),
   trial: z
     .strictObject({
       number: z.int(),
       of: z.int(),
       familiarisation: z.boolean(),
+      /** The practice trial that it is, or null. */
+      practice: z
+        .strictObject({ number: z.int(), form: z.enum(['blind', 'feedback']), step: z.int().nullable() })
+        .nullable(),
       /** *Asking* is the listener's turn on request: nothing here tells what is asked for, or whether answers are open. */
       stage: z.enum(['change', 'listening', 'asking', 'answering']),
       presentationNumber: z.int(),

@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { portrayedCueAudit } from '../cue-audit/portrayed-cue-audit.ts';
+import { checkResult } from '../findings/check-result.ts';
 import { finding } from '../findings/finding.ts';
 import { levelReport } from '../levels/level-report.ts';
 import { registeredResult } from '../methods/methods.ts';
@@ -44,6 +45,8 @@ export const report = z.strictObject({
   /** Exploratory: counts and limits, never a p. */
   byExcerpt: z.array(z.strictObject({ title: z.string(), trials: z.int(), rates: z.array(countedRate) })),
   cueAudit: portrayedCueAudit,
+  /** What the check trials came to, apart from the result; null where none were registered. */
+  knownDifferences: checkResult.nullable(),
   rung: z.strictObject({ name: z.string(), why: z.string() }),
   /** The gap between presentations and the blinding rung, each in a sentence: part of the finding’s first lines. */
   conditions: z.array(z.string()),
@@ -58,6 +61,8 @@ export const report = z.strictObject({
     trialsOpened: z.int(),
     trialsVoid: z.int(),
     trialsCounted: z.int(),
+    /** Locked check trials, not among those counted. */
+    trialsChecked: z.int(),
     answersExpected: z.int(),
     answersMissing: z.int(),
     /** Labels, each counted once over all sessions. */
@@ -74,6 +79,8 @@ export const report = z.strictObject({
       startedAt: z.iso.datetime().nullable(),
       endedAt: z.iso.datetime().nullable(),
       listeners: z.int(),
+      /** What was heard before the first trial and never counted: how often the labelled cables, how many practice trials. */
+      training: z.strictObject({ labelled: z.int(), blind: z.int(), feedback: z.int() }),
       /** The session's draw in words: which cable bore which label; null when nothing was presented. */
       drawn: z.string().nullable(),
       reason: z.string().nullable(),
@@ -98,6 +105,8 @@ export const report = z.strictObject({
           outcome: z.enum(['locked', 'void', 'open']),
           excerpt: z.string(),
           truth: z.string(),
+          /** What a check trial compared, and what it is called; null for a main one. */
+          check: z.strictObject({ name: z.string(), pair: z.tuple([z.string(), z.string()]) }).nullable(),
           answers: z.array(z.strictObject({ listener: z.string(), choice: z.string().nullable() })),
           longChanges: z.int(),
           /** How often each label was asked for; null where presentations came in a fixed order. */

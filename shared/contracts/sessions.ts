@@ -48,6 +48,8 @@ export const sessionRow = z.strictObject({
   trials: z.int(),
   trialsLocked: z.int(),
   listeners: z.int(),
+  /** Whether its levels at the load are measured. */
+  hasLevels: z.boolean(),
 });
 export type SessionRow = z.output<typeof sessionRow>;
 

@@ -2,6 +2,7 @@ import { z } from 'zod';
 import { registeredLevels } from '../levels/registered-levels.ts';
 import { methodIds, methods } from '../methods/methods.ts';
 import { leastChangeS, rigPreset, rigs } from '../protocol/rig-preset.ts';
+import { faultsOfCables, treatment } from '../protocol/treatment.ts';
 import { faultsOfWays } from '../protocol/ways-to-run.ts';
 import { checkDraft, checkFaults } from './check-draft.ts';
 import { endpoint, managers } from './endpoint.ts';
@@ -54,6 +55,8 @@ export const studyDraft = z
     /** Whom the listeners are a sample of; left out or empty where nothing is said about people in general. */
     samplingFrame: line(160).optional(),
     cables: z.tuple([chosenCable, chosenCable]),
+    /** What was done to the pieces of the second group, which are of the same cable; left out where two cables are compared. */
+    treatment: treatment.optional(),
     /** Known differences among the trials; left out for none. */
     checks: checkDraft.optional(),
     sessions: whole(1, 20, 'sessions'),
@@ -78,14 +81,8 @@ export const studyDraft = z
     codeHolderId: z.uuid('Choose the code holder'),
   })
   .check((check) => {
-    const [first, second] = check.value.cables;
-    if (first.cableId === second.cableId)
-      check.issues.push({
-        code: 'custom',
-        input: second.cableId,
-        path: ['cables', 1, 'cableId'],
-        message: 'Choose two different cables',
-      });
+    for (const { path, message } of faultsOfCables(check.value))
+      check.issues.push({ code: 'custom', input: check.value.cables, path, message });
     const { method, methodSettings = [] } = check.value;
     const known = methods[method].settings.map(({ id }) => id);
     const isSound =

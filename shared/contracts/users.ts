@@ -13,6 +13,7 @@ export const waitingItem = z.strictObject({
     'codes-to-confirm',
     'session-to-plan',
     'session-to-run',
+    'levels-to-measure',
     'study-to-close',
     'report-to-read',
   ]),

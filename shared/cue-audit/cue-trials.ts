@@ -1,6 +1,6 @@
 import type { Method } from '../methods/method.ts';
 import { type HeldChoice, revealedDraw } from '../session/counted-trials.ts';
-import { truthOf } from '../session/fitting.ts';
+import { kindOf, truthOf } from '../session/fitting.ts';
 import type { RequestContent } from '../session/request-leaf.ts';
 import { requestsIn } from '../session/requests-told.ts';
 import type { RevealedKey } from '../session/revealed-key.ts';
@@ -140,9 +140,9 @@ export function cueTrials(
 ): CueTrial[] {
   const choices = new Map(held.map(({ session, trial, seat, choice }) => [`${session} ${trial} ${seat}`, choice]));
   return states.flatMap((state) => {
-    const locked = state.ended.filter(({ outcome }) => outcome === 'locked');
+    const ended = state.ended.filter(({ outcome }) => outcome === 'locked');
     const secret = key.draws.find(({ session }) => session === state.session)?.secret;
-    if (secret === undefined || locked.length === 0) return [];
+    if (secret === undefined || ended.length === 0) return [];
     const draw = revealedDraw(state, method, secret, key.codeKey.rows);
     const clocked = clockedTrials(entries.filter(({ payload }) => payload.session === state.session));
     const timesOfTrial = (trial: number): Clocked => {
@@ -151,17 +151,24 @@ export function cueTrials(
       const asked = requestsIn(requests, state.sessionId, trial);
       return { ...times, presentations: inMethodsOrder(method, times.presentations, asked) };
     };
-    return locked.map(({ trial, seats }, index) => ({
-      session: state.session,
-      trial,
-      position: index + 1,
-      truth: truthOf(draw, trial),
-      firstSide: draw.firstSide,
-      answers: seats.map((listener) => ({
-        listener,
-        choice: choices.get(`${state.sessionId} ${trial} ${listener}`) ?? null,
-      })),
-      ...timesOfTrial(trial),
-    }));
+    // Check trials are reported apart; a trial's position is that among all.
+    return ended.flatMap(({ trial, seats }, index) =>
+      kindOf(draw, state, trial) !== 'main'
+        ? []
+        : [
+            {
+              session: state.session,
+              trial,
+              position: index + 1,
+              truth: truthOf(draw, trial),
+              firstSide: draw.firstSide,
+              answers: seats.map((listener) => ({
+                listener,
+                choice: choices.get(`${state.sessionId} ${trial} ${listener}`) ?? null,
+              })),
+              ...timesOfTrial(trial),
+            },
+          ],
+    );
   });
 }

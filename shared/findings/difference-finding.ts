@@ -1,3 +1,4 @@
+import { besideDifference, besideNothing, cautionOutside, hasFailed } from './check-words.ts';
 import { courseModifiers, type Finding, type FindingContext, scopeOf, times } from './finding.ts';
 import { type FindingRow, type Found, firstRow } from './finding-row.ts';
 import { equationOfP } from './format-probability.ts';
@@ -109,10 +110,14 @@ function rowsOf<R extends DifferenceResult>(words: DifferenceWords<R>): readonly
     },
     {
       row: '3',
-      applies: ({ result }) => result.isSignificant && isBelowMargin(result),
+      applies: ({ result, context }) => result.isSignificant && isBelowMargin(result) && !hasFailed(context.known),
       headline: (found) =>
         `A difference was detected, and it is small. ${subjectOf(found.result)} ${told(found)}; ${within(found.result)}${panel(found.result)}.`,
-      modifiers: ({ result }) => [words.effect(result), ...namedListeners(result)],
+      modifiers: ({ result, context }) => [
+        words.effect(result),
+        ...namedListeners(result),
+        ...besideDifference(context.known),
+      ],
       maySay: (found) =>
         `In a registered blind test with ${times(found.result.listeners, 'listener')}, ${inside(subjectOf(found.result))} ${told(found)} (${test(found.result)}). The difference is small: ${within(found.result)}${panel(found.result)}. ${levelClaim(found.context.levels, 'the difference')}`,
     },
@@ -120,16 +125,25 @@ function rowsOf<R extends DifferenceResult>(words: DifferenceWords<R>): readonly
       row: '2',
       applies: ({ result }) => result.isSignificant,
       headline: (found) => `${subjectOf(found.result)} ${told(found)}.`,
-      modifiers: ({ result }) => [words.effect(result), ...marginOpen(result, words), ...namedListeners(result)],
+      modifiers: ({ result, context }) => [
+        words.effect(result),
+        ...marginOpen(result, words),
+        ...namedListeners(result),
+        ...besideDifference(context.known),
+      ],
       maySay: (found) =>
-        `In a registered blind test with ${times(found.result.listeners, 'listener')}, ${inside(subjectOf(found.result))} ${told(found)} (${test(found.result)}). ${levelClaim(found.context.levels, 'the difference')}`,
+        `In a registered blind test with ${times(found.result.listeners, 'listener')}, ${inside(subjectOf(found.result))} ${told(found)} (${test(found.result)}). ${levelClaim(found.context.levels, 'the difference')}${cautionOutside(found.context.known)}`,
     },
     {
       row: '4',
-      applies: ({ result }) => isBelowMargin(result),
+      applies: ({ result, context }) => isBelowMargin(result) && !hasFailed(context.known),
       headline: ({ result }) =>
         `${within(result).charAt(0).toUpperCase()}${within(result).slice(1)} under these conditions${panel(result)}.`,
-      modifiers: ({ result }) => [words.effect(result), ...hints(result)],
+      modifiers: ({ result, context }) => [
+        words.effect(result),
+        ...hints(result),
+        ...besideNothing(context.known, false),
+      ],
       maySay: ({ result, context: { cables } }) =>
         `In a registered blind test with ${times(result.listeners, 'listener')}, ${cables[0]} and ${cables[1]} were not told apart within the registered margin: ${within(result)}${panel(result)}, in this set-up (${words.counted(result)}).`,
     },
@@ -138,11 +152,12 @@ function rowsOf<R extends DifferenceResult>(words: DifferenceWords<R>): readonly
       applies: () => true,
       headline: ({ result, context }) =>
         `Inconclusive. The test did not detect ${words.sought(result, context.cables)}, and does not exclude it.`,
-      modifiers: ({ result }) => [
+      modifiers: ({ result, context }) => [
         words.open(result),
         ...marginOpen(result, words),
         ...evidenceOf(result, words),
         ...hints(result),
+        ...besideNothing(context.known, isBelowMargin(result)),
       ],
       maySay: ({ result, context }) =>
         result.answers === 0
@@ -156,7 +171,9 @@ const confidenceOf = ({ margin }: DifferenceResult) => `${Math.round(Number(marg
 
 /** A margin that was registered and not shown is said to be so. */
 function marginOpen<R extends DifferenceResult>(result: R, words: DifferenceWords<R>): string[] {
-  return result.margin === undefined ? [] : [`It was not shown that ${words.belowMargin(result)}.`];
+  return result.margin === undefined || result.margin.isBelow
+    ? []
+    : [`It was not shown that ${words.belowMargin(result)}.`];
 }
 
 function evidenceOf<R extends DifferenceResult>(result: R, words: DifferenceWords<R>): string[] {
@@ -193,6 +210,9 @@ export function differenceFinding<R extends DifferenceResult>(
       ...levelModifiers(context.levels, 'a difference'),
     ],
     scope: scopeOf(context, frame === null ? undefined : `listeners of whom these were a sample (${frame})`),
-    mustNotSay: neverSaid(words.notShown, frame),
+    mustNotSay: [
+      ...neverSaid(words.notShown, frame),
+      ...(hasFailed(context.known) ? ['that there is no difference, or a small one'] : []),
+    ],
   };
 }

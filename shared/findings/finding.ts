@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import type { LevelsFound } from '../levels/levels-found.ts';
+import type { KnownDifferences } from './check-result.ts';
 import type { ResultFrame } from './result-frame.ts';
 
 /** The one sentence that a registered analysis comes to, and what may and may not be said of it. */
@@ -25,6 +26,8 @@ export type FindingContext = {
     /** Whether listeners could not know what they heard: the blinding rung is above *open*. */
     readonly isBlind: boolean;
   };
+  /** What the check trials showed of these listeners in this set-up; null or left out where no step was registered. */
+  readonly known?: KnownDifferences | null | undefined;
   /** Why the study was closed before its registered number, or null. */
   readonly endedEarly: string | null;
   /** How the cables matched in level; left out where the protocol registers no measurement. */

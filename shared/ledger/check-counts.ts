@@ -1,3 +1,8 @@
+import type { CheckResult } from '../findings/check-result.ts';
+import { decibels } from '../protocol/protocol-checks.ts';
+import { kindOf } from '../session/fitting.ts';
+import type { EndedTrial } from '../session/state.ts';
+import type { TrialKind } from '../session/trial-kinds.ts';
 import { levelFaultsIn } from './check-levels.ts';
 import type { StudyReading } from './study-reading.ts';
 import type { Verdict } from './verify.ts';
@@ -16,12 +21,40 @@ type Counted = {
 
 const resultOf = (study: StudyReading) => (study.payloadOf('result-recorded')?.result ?? {}) as Counted;
 
-const lockedIn = (study: StudyReading) =>
-  study
-    .sessions()
-    .flatMap(({ session, ended }) =>
-      ended.filter(({ outcome }) => outcome === 'locked').map((trial) => ({ ...trial, session })),
-    );
+type Locked = EndedTrial & { readonly session: number; readonly kind: TrialKind };
+
+/** Every locked trial with what the draw made it; draws are read only where there are check trials. */
+function everyLocked(study: StudyReading): Locked[] {
+  return study.sessions().flatMap((state) => {
+    const draw = state.plan.checks === undefined ? {} : study.draws().find(({ session }) => session === state.session);
+    return state.ended
+      .filter(({ outcome }) => outcome === 'locked')
+      .map((trial) => ({ ...trial, session: state.session, kind: kindOf(draw ?? {}, state, trial.trial) }));
+  });
+}
+
+/** What the registered analysis reads. */
+const lockedIn = (study: StudyReading) => everyLocked(study).filter(({ kind }) => kind === 'main');
+
+/** Check trials on the record and in what it says they came to: of every step, and of the same with the same. */
+function checkTrialFaults(study: StudyReading, checked: readonly Locked[]): string[] {
+  const registered = study.protocol().checks;
+  const said = study.payloadOf('result-recorded')?.checks as CheckResult | undefined;
+  if (registered === undefined)
+    return said === undefined ? [] : ['The result speaks of check trials that are not registered.'];
+  const of = (kind: TrialKind) => checked.filter((trial) => trial.kind === kind).length;
+  const pairs: [string, unknown, number][] = [
+    ...registered.steps.map(({ milliDb }, index): [string, unknown, number] => [
+      `trials of ${decibels(milliDb)}`,
+      said?.steps?.find((step) => step.milliDb === milliDb)?.trials,
+      of(`step/${index}` as TrialKind),
+    ]),
+    ['trials of the same with the same', said?.same?.trials, of('same')],
+  ];
+  return pairs
+    .filter(([, told, is]) => told !== is)
+    .map(([what, told, is]) => `The result speaks of ${String(told)} ${what}, the record of ${is}.`);
+}
 
 /** Nobody was left out but by the registered rule, and a missing answer counts as the protocol says. */
 export function checkRules(study: StudyReading): Verdict {
@@ -32,8 +65,6 @@ export function checkRules(study: StudyReading): Verdict {
   const reported = (result.byListener ?? []).map(({ listener }) => String(listener)).sort();
   const missing = locked.reduce((sum, trial) => sum + trial.missing.length, 0);
   const faults: string[] = [];
-  if (analysis.exclusions !== 'none')
-    faults.push(`The protocol registers exclusions that are not known: ${analysis.exclusions}.`);
   if (heard.join() !== reported.join())
     faults.push('The result does not speak of just the listeners who had an answer due.');
   if (result.missingAnswers !== analysis.missing)
@@ -56,7 +87,9 @@ export function checkFlow(study: StudyReading): Verdict {
   const sessions = study.sessions();
   const locked = lockedIn(study);
   const counted = locked.length;
-  const voids = sessions.flatMap(({ ended }) => ended).length - counted;
+  const checked = everyLocked(study).filter(({ kind }) => kind !== 'main');
+  const voids = sessions.flatMap(({ ended }) => ended).length - counted - checked.length;
+  const apart = checked.length === 0 ? '' : `, ${checked.length} check trials`;
   const stillOpen = sessions.filter(({ trial }) => trial !== null && trial.trial > 0).length;
   const opened = entries.filter(({ kind, payload }) => kind === 'trial-opened' && Number(payload.trial) > 0).length;
   const due = locked.reduce((sum, { seats }) => sum + seats.length, 0);
@@ -69,18 +102,21 @@ export function checkFlow(study: StudyReading): Verdict {
     ['listeners', result.listeners, new Set(locked.flatMap(({ seats }) => seats)).size],
     ['sessions', result.sessions, new Set(locked.map(({ session }) => session)).size],
   ];
-  const faults = says
-    .filter(([, said, is]) => said !== is)
-    .map(([what, said, is]) => `The result speaks of ${String(said)} ${what}, the record of ${is}.`);
-  if (opened !== counted + voids + stillOpen)
+  const faults = [
+    ...says
+      .filter(([, said, is]) => said !== is)
+      .map(([what, said, is]) => `The result speaks of ${String(said)} ${what}, the record of ${is}.`),
+    ...checkTrialFaults(study, checked),
+  ];
+  if (opened !== counted + checked.length + voids + stillOpen)
     faults.push(
-      `${opened} trials were opened; ${counted} counted, ${voids} void and ${stillOpen} left open do not make them up.`,
+      `${opened} trials were opened; ${counted} counted${apart}, ${voids} void and ${stillOpen} left open do not make them up.`,
     );
   const ended = of('session-finished') + of('session-abandoned');
   if (ended !== sessions.filter(({ phase }) => phase === 'finished' || phase === 'abandoned').length)
     faults.push('The ends of sessions on the record do not match its sessions.');
   return {
     faults,
-    held: `${opened} trials opened: ${counted} counted, ${voids} void, ${stillOpen} left open. ${due} answers due: ${due - missing} given, ${missing} missing.`,
+    held: `${opened} trials opened: ${counted} counted${apart}, ${voids} void, ${stillOpen} left open. ${due} answers due: ${due - missing} given, ${missing} missing.`,
   };
 }

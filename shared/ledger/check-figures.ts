@@ -1,9 +1,18 @@
 import { runCueAudit } from '../cue-audit/run-cue-audit.ts';
 import { differentFigure } from '../findings/different-figure.ts';
+import { runChecks } from '../methods/run-checks.ts';
 import { runRegistered } from '../methods/run-registered.ts';
 import { canonicalJson, type Json } from './canonical-json.ts';
 import type { StudyReading } from './study-reading.ts';
 import type { Verdict } from './verify.ts';
+
+/** Where what the check trials came to differs from what it comes to again. */
+function placeInChecks(study: StudyReading): string | null {
+  const recorded = study.payloadOf('result-recorded')?.checks ?? null;
+  const recomputed = runChecks(study.protocol(), study.sessions(), study.secrets(), study.answers()) ?? null;
+  const place = differentFigure(recorded, recomputed as unknown as Json);
+  return place === null ? null : `checks/${place}`;
+}
 
 /** The registered analysis, run again on the answers and the draws, gives the result on the record. */
 export function checkFigures(study: StudyReading): Verdict {
@@ -12,7 +21,7 @@ export function checkFigures(study: StudyReading): Verdict {
   if (canonicalJson(study.parts.result as Json) !== canonicalJson(recorded))
     return { faults: ['The result is not the one on the record.'], held: '' };
   const recomputed = runRegistered(study.protocol(), study.sessions(), study.secrets(), study.answers());
-  const place = differentFigure(recorded, recomputed as unknown as Json);
+  const place = differentFigure(recorded, recomputed as unknown as Json) ?? placeInChecks(study);
   const faults = place === null ? [] : [`Recomputed, ${place} differs from the result on the record.`];
   return {
     faults: [...faults, ...cueFaults(study)],

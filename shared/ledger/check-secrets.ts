@@ -1,3 +1,4 @@
+import { codedCables, type Protocol } from '../protocol/protocol.ts';
 import { contributionCommitment } from '../session/answer-leaf.ts';
 import { codeKeyCommitment, drawSecretCommitment } from '../session/commitments.ts';
 import { revealedDraw } from '../session/counted-trials.ts';
@@ -34,6 +35,10 @@ export function checkCommitments(study: StudyReading): Verdict {
   };
 }
 
+/** Every specimen that is coded, with the place of its cable. */
+const specimensIn = (protocol: Protocol) =>
+  codedCables(protocol).flatMap(({ specimens }, cable) => specimens.map(({ id }) => [cable, id]));
+
 /** Which code is which specimen was committed to before anybody sat down, and revealed as it was. */
 export function checkCodeKey(study: StudyReading): Verdict {
   const { codeKey } = study.secrets();
@@ -45,6 +50,8 @@ export function checkCodeKey(study: StudyReading): Verdict {
   const seating = entries.find(({ kind }) => kind === 'seating-opened');
   if (committed !== undefined && seating !== undefined && committed.sequence > seating.sequence)
     faults.push('The code key was committed to after somebody had sat down.');
+  if (textOf(codeKey.rows.map(({ specimen, cable }) => [cable, specimen])) !== textOf(specimensIn(study.protocol())))
+    faults.push('The code key is not of the specimens that the protocol names.');
   const recorded = revealedKey.parse(study.payloadOf('key-revealed'));
   if (textOf(codeKey) !== textOf(recorded.codeKey)) faults.push('The code key is not the one that the record reveals.');
   const of = codeKey.rows.length;

@@ -2,6 +2,7 @@ import type { Protocol } from '../protocol/protocol.ts';
 import { countedTrials, type HeldChoice } from '../session/counted-trials.ts';
 import type { RevealedKey } from '../session/revealed-key.ts';
 import type { SessionState } from '../session/state.ts';
+import type { ScoredTrial } from './method.ts';
 import { methodOf, type RegisteredResult } from './methods.ts';
 
 /**
@@ -10,10 +11,22 @@ import { methodOf, type RegisteredResult } from './methods.ts';
  * @throws RangeError when the protocol registers an analysis that this version does not have
  */
 export function runRegistered(
-  { method: id, analysis, design }: Protocol,
+  protocol: Protocol,
   states: readonly SessionState[],
   key: RevealedKey,
   held: readonly HeldChoice[],
+): RegisteredResult {
+  return analyseRegistered(protocol, countedTrials(methodOf(protocol.method), states, key, held));
+}
+
+/**
+ * The registered analysis of some trials.
+ *
+ * @throws RangeError when the protocol registers an analysis that this version does not have
+ */
+export function analyseRegistered(
+  { method: id, analysis, design }: Pick<Protocol, 'method' | 'analysis' | 'design'>,
+  trials: readonly ScoredTrial[],
 ): RegisteredResult {
   const method = methodOf(id);
   const { name } = method.registered(design);
@@ -25,6 +38,6 @@ export function runRegistered(
       attribute: design.attribute,
       samplingFrame: design.samplingFrame,
     },
-    countedTrials(method, states, key, held),
+    trials,
   );
 }

@@ -7,6 +7,7 @@ import { presetFacts } from './preset-facts.ts';
 import type { Protocol } from './protocol.ts';
 import type { ProtocolCable } from './protocol-cable.ts';
 import { checksWords, decibels } from './protocol-checks.ts';
+import { treatmentFacts } from './treatment.ts';
 import { waysFacts } from './ways-to-run.ts';
 
 /** A line, and what it means beyond its words: two cables, pieces or people may bear one name. */
@@ -42,6 +43,7 @@ function linesOf(protocol: Protocol, nameOf: (person: string) => string): Line[]
     { label: 'Settings of the method', value: settings.join(', ') },
     { label: 'Attribute', value: design.attribute ?? '' },
     ...cables.flatMap((cable, index) => cableLines(cable, cableLabels[index === 0 ? 0 : 1])),
+    ...treatmentFacts(protocol.treatment),
     { label: 'Sessions', value: String(design.sessions) },
     { label: 'Listeners per session', value: String(design.listenersPerSession) },
     { label: 'Listeners are drawn from', value: design.samplingFrame ?? '' },

@@ -11,6 +11,7 @@ import { type ProtocolCable, protocolCable } from './protocol-cable.ts';
 import { checksFromDraft, protocolChecks, shapeOf } from './protocol-checks.ts';
 import { checkExclusion, registeredAnalysis } from './registered-analysis.ts';
 import { rigPreset, rigs } from './rig-preset.ts';
+import { nameInStudy, treatment } from './treatment.ts';
 import { chosenWays, waysToRun } from './ways-to-run.ts';
 
 /** Everything fixed before data, as it is sealed. Times in seconds, lengths in millimetres, decimals as text. */
@@ -24,6 +25,8 @@ export const protocol = z.strictObject({
   question: z.string(),
   method: z.string(),
   cables: z.tuple([protocolCable, protocolCable]),
+  /** What was done to the pieces of the second; left out where two cables are compared. */
+  treatment: treatment.optional(),
   design: z.strictObject({
     sessions: z.int(),
     listenersPerSession: z.int(),
@@ -79,6 +82,12 @@ const inOrder = (levels: RegisteredLevels): RegisteredLevels => ({
   frequenciesHz: [...levels.frequenciesHz].sort((a, b) => a - b),
 });
 
+/** Two groups of pieces of one cable bear names of their own in everything that follows. */
+const named = (cable: ProtocolCable, index: 0 | 1, draft: StudyDraft): ProtocolCable => ({
+  ...cable,
+  name: nameInStudy(cable.name, index, draft.treatment),
+});
+
 /** The protocol that a draft comes to, with its cables spelt out as they are now. */
 export function protocolFromDraft(
   draft: StudyDraft,
@@ -99,7 +108,8 @@ export function protocolFromDraft(
     title: draft.title,
     question: draft.question,
     method: draft.method,
-    cables: [fixed.cables[0], fixed.cables[1]],
+    cables: [named(fixed.cables[0], 0, draft), named(fixed.cables[1], 1, draft)],
+    ...(draft.treatment === undefined ? {} : { treatment: draft.treatment }),
     design: {
       sessions: draft.sessions,
       listenersPerSession: draft.listenersPerSession,

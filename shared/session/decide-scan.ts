@@ -70,7 +70,7 @@ export function decideUndo(state: SessionState, emit: Emit): SessionEvent[] {
 export const isInventoryDue = (state: SessionState): boolean =>
   state.phase === 'running' &&
   state.trial === null &&
-  state.familiarised &&
+  state.familiarisations > 0 &&
   nextTrial(state) === null &&
   scansOf(state.plan) &&
   state.inventory.ended === null;

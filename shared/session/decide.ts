@@ -15,6 +15,7 @@ import {
 import type { PayloadOf, SessionEvent, SessionEventKind } from './events.ts';
 import type { LabelEnd } from './label-text.ts';
 import { type RequestCommand, request, waitsForListeners } from './on-request.ts';
+import { excerptOfPractice, isTraining, practiceAsked } from './practice.ts';
 import { activeSeats, excerptOf, listeningMayStartAt, nextTrial, openAnswers } from './progress.ts';
 import type { OpenTrial, SessionState } from './state.ts';
 
@@ -64,12 +65,17 @@ function requireOpenTrial(state: SessionState): OpenTrial {
   return state.trial;
 }
 
-function openTrial(state: SessionState, trial: number, emit: Emit): SessionEvent[] {
+function seatsForTrial(state: SessionState): string[] {
   requirePhase(state, ['running'], 'Trials start once the draw is fixed.');
   refuseUnless(state.trial === null, 'wrong-phase', 'A trial is open already.');
   refuseUnless(state.paused === null, 'wrong-phase', 'The session is paused. Resume it first.');
   const seats = activeSeats(state).map((seat) => seat.seat);
   refuseUnless(seats.length > 0, 'wrong-phase', 'Nobody is seated.');
+  return seats;
+}
+
+function openTrial(state: SessionState, trial: number, emit: Emit): SessionEvent[] {
+  const seats = seatsForTrial(state);
   return [emit('trial-opened', { trial, excerpt: excerptOf(state, trial), seats })];
 }
 
@@ -96,6 +102,10 @@ function confirmStep(state: SessionState, step: string, now: number, emit: Emit)
 }
 
 function lockTrial(trial: OpenTrial, reason: 'all-in' | 'window-ended', emit: Emit): SessionEvent {
+  if (trial.practice !== null) {
+    const { number } = trial.practice;
+    return emit('practice-ended', { number, answered: trial.answers.length, of: trial.seats.length });
+  }
   const leaves = [...trial.answers].sort((a, b) => (a.seat < b.seat ? -1 : 1));
   const held = new Set(leaves.map((answer) => answer.seat));
   const missing = trial.seats.filter((seat) => !held.has(seat));
@@ -189,11 +199,16 @@ export function decide(state: SessionState, command: SessionCommand, now: number
     case 'reveal':
       return reveal(state, command.seat, command.value, emit);
     case 'begin-familiarisation':
-      refuseUnless(!state.familiarised, 'wrong-phase', 'The familiarisation trial is over.');
+      refuseUnless(isTraining(state), 'wrong-phase', 'The familiarisation is over once the first trial has opened.');
       requireLevels(state);
       return openTrial(state, 0, emit);
+    case 'begin-practice': {
+      const seats = seatsForTrial(state);
+      const asked = practiceAsked(state, command);
+      return [emit('practice-opened', { ...asked, excerpt: excerptOfPractice(state, asked), seats })];
+    }
     case 'begin-trial': {
-      refuseUnless(state.familiarised, 'wrong-phase', 'The familiarisation trial comes first.');
+      refuseUnless(state.familiarisations > 0, 'wrong-phase', 'The familiarisation trial comes first.');
       const next = nextTrial(state);
       if (next === null) throw new Problem('wrong-phase', 'Every trial of this session has ended.');
       requireHalfTime(state);
@@ -261,7 +276,7 @@ export function decide(state: SessionState, command: SessionCommand, now: number
     case 'finish':
       requirePhase(state, ['running'], 'Only a running session can be finished.');
       refuseUnless(
-        state.trial === null && state.familiarised && nextTrial(state) === null,
+        state.trial === null && state.familiarisations > 0 && nextTrial(state) === null,
         'wrong-phase',
         'Trials are still to come. To end here, abandon the session with a reason.',
       );

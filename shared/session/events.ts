@@ -4,6 +4,7 @@ import { registeredLevels } from '../levels/registered-levels.ts';
 import { rigPreset } from '../protocol/rig-preset.ts';
 import { waysToRun } from '../protocol/ways-to-run.ts';
 import { levelEvents } from './level-events.ts';
+import { mostPractice, practice } from './practice.ts';
 import { scanEvents } from './scan-events.ts';
 import { checkShape } from './trial-kinds.ts';
 
@@ -12,7 +13,9 @@ import { checkShape } from './trial-kinds.ts';
 const session = z.int().min(1);
 const seat = z.string();
 const hex32 = z.string().regex(/^[0-9a-f]{64}$/);
-const trial = z.int().min(0);
+/** Below 0 for practice. */
+const trial = z.int().min(-mostPractice);
+const counted = z.int().min(0);
 
 /** What a session takes from the sealed protocol; times in milliseconds. Trial 0 is the familiarisation trial. */
 export const sessionPlan = z.strictObject({
@@ -59,9 +62,19 @@ export const sessionEvents = {
   'contribution-revealed': z.strictObject({ session, seat, value: hex32 }),
   'contribution-dropped': z.strictObject({ session, seat }),
   'draw-fixed': z.strictObject({ session, contributors: z.array(seat) }),
-  'trial-opened': z.strictObject({ session, trial, excerpt: z.int(), seats: z.array(seat) }),
+  'trial-opened': z.strictObject({ session, trial: counted, excerpt: z.int(), seats: z.array(seat) }),
+  /** A trial that never counts; the trial of its steps and presentations is its number below 0. */
+  'practice-opened': z.strictObject({ session, ...practice.shape, excerpt: z.int(), seats: z.array(seat) }),
+  /** How many answered; what they answered is kept nowhere. */
+  'practice-ended': z.strictObject({ session, number: practice.shape.number, answered: z.int().min(0), of: z.int() }),
   /** On request: the listener asked for a presentation. What was asked for lies beside the record, under its leaf. */
-  'presentation-requested': z.strictObject({ session, trial, presentation: z.int().min(0), seat, leaf: hex32 }),
+  'presentation-requested': z.strictObject({
+    session,
+    trial: counted,
+    presentation: z.int().min(0),
+    seat,
+    leaf: hex32,
+  }),
   'step-confirmed': z.strictObject({ session, trial, presentation: z.int(), step: z.enum(stepKinds) }),
   ...scanEvents,
   'listening-started': z.strictObject({
@@ -74,7 +87,7 @@ export const sessionEvents = {
   'listening-ended': z.strictObject({ session, trial, presentation: z.int() }),
   'trial-locked': z.strictObject({
     session,
-    trial,
+    trial: counted,
     reason: z.enum(['all-in', 'window-ended']),
     leaves: z.array(z.strictObject({ seat, leaf: hex32 })),
     missing: z.array(seat),
@@ -86,7 +99,7 @@ export const sessionEvents = {
     note: z.string(),
     answersHeld: z.int(),
   }),
-  'answer-late': z.strictObject({ session, trial, seat, leaf: hex32 }),
+  'answer-late': z.strictObject({ session, trial: counted, seat, leaf: hex32 }),
   paused: z.strictObject({ session, reason: z.enum(['break', 'too-loud', 'trouble']), seat: seat.nullable() }),
   resumed: z.strictObject({ session }),
   'server-restarted': z.strictObject({ session }),

@@ -2,6 +2,7 @@ import type { Method } from '../methods/method.ts';
 import { stepKindsOf } from './change-steps.ts';
 import type { SessionEvent } from './events.ts';
 import { isOnRequest, waitsForListeners } from './on-request.ts';
+import { practiceTrial } from './practice.ts';
 import { presentationsOf } from './progress.ts';
 import type { EndedTrial, OpenTrial, SessionState } from './state.ts';
 import { revealMs } from './state.ts';
@@ -49,8 +50,14 @@ function afterListening(state: SessionState, trial: OpenTrial, at: number, metho
   if (isOnRequest(state, trial.trial)) return { ...state, trial: asking(trial, at, state.plan) };
   const isLast = trial.presentation + 1 >= presentationsOf(method, trial.trial).length;
   if (!isLast) return { ...state, trial: startChange(trial, trial.presentation + 1, at) };
-  if (trial.trial === 0) return { ...state, trial: null, familiarised: true };
+  if (trial.trial === 0) return { ...state, trial: null, familiarisations: state.familiarisations + 1 };
   return { ...state, trial: { ...trial, stage: 'answering', endsAt: at + state.plan.answerMs } };
+}
+
+function openedBy(event: Extract<SessionEvent, { kind: 'trial-opened' | 'practice-opened' }>) {
+  if (event.kind === 'trial-opened') return { trial: event.payload.trial, practice: null };
+  const { number, form, step } = event.payload;
+  return { trial: practiceTrial({ number }), practice: { number, form, step } };
 }
 
 function pauseTrial(state: SessionState, at: number): number | null {
@@ -121,11 +128,16 @@ function fold(state: SessionState, event: SessionEvent, method: Method): Folded 
       };
     case 'draw-fixed':
       return { ...state, phase: 'running', revealEndsAt: null };
-    case 'trial-opened': {
-      const { trial: number, excerpt, seats } = event.payload;
-      const opened = { trial: number, excerpt, seats, longChanges: 0, answers: [], requests: [] };
+    case 'trial-opened':
+    case 'practice-opened': {
+      const { excerpt, seats } = event.payload;
+      const opened = { ...openedBy(event), excerpt, seats, longChanges: 0, answers: [], requests: [] };
       const trial = startChange(opened, 0, event.at);
-      return { ...state, trial: isOnRequest(state, number) ? asking(trial, event.at, state.plan) : trial };
+      return {
+        ...state,
+        practised: opened.practice === null ? state.practised : [...state.practised, opened.practice],
+        trial: isOnRequest(state, trial.trial) ? asking(trial, event.at, state.plan) : trial,
+      };
     }
     case 'presentation-requested': {
       const trial = openTrialOf(state, event);
@@ -175,9 +187,11 @@ function fold(state: SessionState, event: SessionEvent, method: Method): Folded 
     }
     case 'trial-voided': {
       const { trial, reason } = event.payload;
-      if (trial === 0) return { ...state, trial: null, paused: null };
+      if (trial <= 0) return { ...state, trial: null, paused: null };
       return endTrial(state, { trial, outcome: 'void', missing: [], voidReason: reason });
     }
+    case 'practice-ended':
+      return { ...state, trial: null, paused: null };
     case 'answer-late': {
       const { trial, seat } = event.payload;
       return { ...state, late: [...state.late, { trial, seat }] };
@@ -228,7 +242,8 @@ export function evolve(state: SessionState | null, event: SessionEvent, method: 
       cautionsConfirmed: false,
       seats: [],
       revealEndsAt: null,
-      familiarised: false,
+      familiarisations: 0,
+      practised: [],
       paused: null,
       trial: null,
       ended: [],

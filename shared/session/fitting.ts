@@ -2,9 +2,11 @@ import type { Method } from '../methods/method.ts';
 import type { CodeKeyRow } from './commitments.ts';
 import { type Draw, drawSeed, drawSession } from './draw.ts';
 import type { SessionPlan } from './events.ts';
+import { fairNumber } from './fair-number.ts';
+import type { Practice } from './practice.ts';
 import { standsFor } from './progress.ts';
 import type { SessionState } from './state.ts';
-import { cableFitted, firstCheckCable, type TrialKind } from './trial-kinds.ts';
+import { cableFitted, firstCheckCable, type TrialKind, trialKind } from './trial-kinds.ts';
 
 export type DrawnSession = {
   readonly secret: string;
@@ -55,6 +57,16 @@ export function kindOf(
   return kind;
 }
 
+/** The truth of a practice trial: fair, and under a label of its own, so that telling it tells nothing of another. */
+export function truthOfPractice({ secret, contributions, method }: DrawnSession, { number }: Practice): string {
+  const truth = method.truths[fairNumber(drawSeed(secret, contributions), `practice/${number}`, method.truths.length)];
+  if (truth === undefined) throw new RangeError('a method needs at least one truth');
+  return truth;
+}
+
+/** What is practised: a known difference, or the two cables of the question. */
+const kindOfPractice = ({ step }: Practice): TrialKind => (step === null ? 'main' : trialKind.parse(`step/${step}`));
+
 type Presented = {
   readonly method: Method;
   readonly state: Pick<SessionState, 'plan' | 'ended'>;
@@ -62,22 +74,40 @@ type Presented = {
   readonly presentation: string;
 };
 
+/** What a trial presents: its truth, null in the familiarisation trial, and what it is. */
+type Truth = { readonly truth: string | null; readonly kind: TrialKind };
+
 /** What a draw puts at a presentation: the cable by its place in the code key, and the place of its specimen. */
-export function fittedBy(draw: Draw, { method, state, trial, presentation }: Presented) {
+export function fittedBy(draw: Draw, presented: Presented) {
+  const { state, trial } = presented;
   const truth = trial === 0 ? null : truthOf(draw, trial);
+  return placeOf(draw, presented, { truth, kind: kindOf(draw, state, trial) });
+}
+
+function placeOf(draw: Draw, { method, state, trial, presentation }: Presented, { truth, kind }: Truth) {
   const place = method.fitted(presentation, truth, draw.firstSide);
-  const cable = cableFitted(place, kindOf(draw, state, trial), state.plan.checks?.reference ?? 0);
+  const cable = cableFitted(place, kind, state.plan.checks?.reference ?? 0);
   const deal = draw.separate?.deals?.[trial - 1] ?? 0;
   const isOther = draw.separate !== undefined && method.separate?.specimen(presentation, truth, deal) === 1;
   const specimens = [...draw.specimens, ...(draw.checkSpecimens ?? [])];
   return { cable, specimen: isOther ? (draw.separate?.specimen ?? 0) : (specimens[cable] ?? -1) };
 }
 
-export type FittingQuestion = Omit<DrawnSession, 'plan'> & Presented;
+export type FittingQuestion = Omit<DrawnSession, 'plan'> &
+  Presented & {
+    /** The practice trial that it is in; left out or null in any other. */
+    readonly practice?: Practice | null;
+  };
 
 /** The blind code to be fitted for a presentation of a trial. */
 export function codeFitted(question: FittingQuestion): string {
-  const { cable, specimen } = fittedBy(drawOf({ ...question, plan: question.state.plan }), question);
+  const { practice = null, state } = question;
+  const drawn: DrawnSession = { ...question, plan: state.plan };
+  const draw = drawOf(drawn);
+  const { cable, specimen } =
+    practice === null
+      ? fittedBy(draw, question)
+      : placeOf(draw, question, { truth: truthOfPractice(drawn, practice), kind: kindOfPractice(practice) });
   const row = rowsOfCable(question.rows, cable)[specimen];
   if (row === undefined) throw new RangeError('the code key has no such specimen');
   return row.code;

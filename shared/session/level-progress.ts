@@ -23,20 +23,20 @@ export const standingOf = ({ levels }: SessionState, check: LevelCheckName): Lev
 const halfOf = ({ plan }: SessionState) => Math.ceil(plan.trials / 2);
 
 /** Whether nothing of the session has been heard yet. */
-const isBeforeListening = ({ phase, familiarised, trial }: SessionState) =>
+const isBeforeListening = ({ phase, familiarisations, trial }: SessionState) =>
   phase === 'planned' ||
   phase === 'seating' ||
   phase === 'revealing' ||
-  (phase === 'running' && !familiarised && trial === null);
+  (phase === 'running' && familiarisations === 0 && trial === null);
 
 /** Whether a check can be made now, by where the session is. */
 export function canMeasure(state: SessionState, check: LevelCheckName): boolean {
-  const { phase, familiarised, trial, ended } = state;
+  const { phase, familiarisations, trial, ended } = state;
   if (state.plan.levels === undefined) return false;
   if (check === 'before') return isBeforeListening(state);
-  if (check === 'half-time') return phase === 'running' && familiarised && trial === null;
+  if (check === 'half-time') return phase === 'running' && familiarisations > 0 && trial === null;
   if (phase === 'finished' || phase === 'abandoned') return ended.length > 0;
-  return phase === 'running' && familiarised && trial === null && nextTrial(state) === null;
+  return phase === 'running' && familiarisations > 0 && trial === null && nextTrial(state) === null;
 }
 
 /** The check that is due now and neither made nor left out, or null. */

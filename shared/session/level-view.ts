@@ -6,7 +6,7 @@ import type { SessionState } from './state.ts';
 export function levelsFor(state: SessionState): ProctorView['levels'] {
   const { levels } = state.plan;
   if (levels === undefined) return null;
-  const hasStarted = state.familiarised || state.trial !== null;
+  const hasStarted = state.familiarisations > 0 || state.trial !== null;
   return {
     handling: levels.handling,
     checks: state.levels.map((standing) => ({ check: standing.check, at: standing.at, isIn: isIn(standing) })),

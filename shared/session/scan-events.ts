@@ -1,11 +1,13 @@
 import { z } from 'zod';
 import { scannedBy, stepKinds } from '../contracts/proctor-live.ts';
+import { mostPractice } from './practice.ts';
 
 // What is read off the sleeves, and steps taken back. Payload shapes are permanent.
 
 const session = z.int().min(1);
 const code = z.string().regex(/^[1-9]\d\d$/);
-const at = { session, trial: z.int().min(0), presentation: z.int() };
+// Below 0 in practice.
+const at = { session, trial: z.int().min(-mostPractice), presentation: z.int() };
 
 export const scanEvents = {
   /** One end of the cable that is to be fitted bears its code. Which code that is follows from the draw and is not told. */

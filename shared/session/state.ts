@@ -2,6 +2,7 @@ import type { ChangeStep, VoidReason } from '../contracts/proctor-live.ts';
 import type { SessionPlan } from './events.ts';
 import type { LabelEnd } from './label-text.ts';
 import type { LevelStanding } from './level-progress.ts';
+import type { Practice } from './practice.ts';
 
 // The state of a session has no cable, no draw and no correctness, and no code but those that an inventory read off the
 // sleeves after the last trial: nothing in it needs stripping.
@@ -18,8 +19,10 @@ export type SeatState = {
 };
 
 export type OpenTrial = {
-  /** From 1; 0 is the familiarisation trial. */
+  /** From 1; 0 is the familiarisation trial, below 0 are practice trials. */
   readonly trial: number;
+  /** What is practised, or null in any other trial. */
+  readonly practice: Practice | null;
   readonly excerpt: number;
   /** The listeners who take part: those seated when it opened. */
   readonly seats: readonly string[];
@@ -63,7 +66,10 @@ export type SessionState = {
   readonly cautionsConfirmed: boolean;
   readonly seats: readonly SeatState[];
   readonly revealEndsAt: number | null;
-  readonly familiarised: boolean;
+  /** How often the labelled cables have been heard through. */
+  readonly familiarisations: number;
+  /** The practice trials so far, in order. */
+  readonly practised: readonly Practice[];
   readonly paused: {
     readonly reason: 'break' | 'too-loud' | 'trouble';
     readonly seat: string | null;

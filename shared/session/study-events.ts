@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { confirmations } from '../contracts/publications.ts';
 import { cueAuditResult } from '../cue-audit/cue-audit-result.ts';
+import { checkResult } from '../findings/check-result.ts';
 import { registeredResult } from '../methods/methods.ts';
 
 // What the study itself puts on its record. The payload of `key-revealed` has a file of its own: revealed-key.ts.
@@ -34,6 +35,8 @@ export const studyEvents = {
   'result-recorded': z.strictObject({
     analysis: z.string(),
     result: registeredResult,
+    /** What the check trials came to; left out where none are registered. */
+    checks: checkResult.optional(),
     /** What the cue audit came to; studies closed before there was one have none. */
     cues: cueAuditResult.optional(),
   }),

@@ -4,6 +4,7 @@ import type { Method } from '../methods/method.ts';
 import { cautionsOf, nextStep, stepEndsAt, stepsOf } from './change-steps.ts';
 import { levelsFor } from './level-view.ts';
 import { canRequest, isOnRequest, requestsLeft, takesAnswers } from './on-request.ts';
+import { isTraining } from './practice.ts';
 import {
   activeSeats,
   dueAt,
@@ -58,12 +59,14 @@ export type ListenerContext = {
   readonly seat: string;
   readonly now: number;
   readonly held: HeldAnswer | null;
+  /** What was right in the practice trial that has just ended, where practice tells it. */
+  readonly told: ListenerView['told'];
   readonly lastLock: LockReceipt | null;
 };
 
 /** What one listener's phone shows. */
 export function listenerViewOf(state: SessionState, method: Method, context: ListenerContext): ListenerView {
-  const { title, seat, now, held, lastLock } = context;
+  const { title, seat, now, held, lastLock, told } = context;
   const own = state.seats.find((candidate) => candidate.seat === seat);
   const { trial } = state;
   const last = state.ended.at(-1);
@@ -89,6 +92,10 @@ export function listenerViewOf(state: SessionState, method: Method, context: Lis
             number: trial.trial,
             of: trialsInAll(state),
             familiarisation: trial.trial === 0,
+            practice:
+              trial.practice === null
+                ? null
+                : { number: trial.practice.number, feedback: trial.practice.form === 'feedback' },
             takesPart: trial.seats.includes(seat),
             stage: trial.stage,
             presentation: presentationNow(state, method) ?? '',
@@ -111,6 +118,7 @@ export function listenerViewOf(state: SessionState, method: Method, context: Lis
       confidence: state.plan.confidence,
     },
     lastLock,
+    told,
     lastOutcome:
       last === undefined
         ? null
@@ -184,6 +192,7 @@ function trialFor(state: SessionState, method: Method, context: ProctorContext):
     number: trial.trial,
     of: trialsInAll(state),
     familiarisation: trial.trial === 0,
+    practice: trial.practice,
     stage: trial.stage,
     ...placeIn(state, trial, method),
     onRequest: isOnRequest(state, trial.trial),
@@ -227,7 +236,10 @@ export function proctorViewOf(state: SessionState, method: Method, context: Proc
       state.phase === 'revealing'
         ? { done: contributors.filter((seat) => seat.revealed !== null).length, of: contributors.length }
         : null,
-    familiarised: state.familiarised,
+    familiarised: state.familiarisations > 0,
+    training: isTraining(state)
+      ? { practised: state.practised.length, steps: state.plan.checks?.steps.length ?? 0 }
+      : null,
     trial: trialFor(state, method, context),
     nextTrial:
       state.phase === 'running' && state.trial === null && activeSeats(state).length > 0 ? nextTrial(state) : null,

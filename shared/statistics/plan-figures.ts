@@ -10,6 +10,8 @@ export interface StudyPlan {
   readonly sessions: number;
   /** Counted trials of one session, whole, 1 ... 1000. */
   readonly trials: number;
+  /** Check trials of one session, 0 ... 1000: they take time and stand in no test of the question. */
+  readonly checkTrials?: number;
   /** Level as a decimal, strictly between 0 and 1: "0.05". */
   readonly alpha: string;
   /** The registered test with one answer per trial. */
@@ -93,7 +95,8 @@ export function planFigures(plan: StudyPlan): PlanFigures {
   };
 }
 
-function sessionFigures(plan: StudyPlan): SessionFigures {
+function sessionFigures({ checkTrials = 0, ...planned }: StudyPlan): SessionFigures {
+  const plan = { ...planned, trials: planned.trials + checkTrials };
   const presentationMs = plan.changeMs + plan.listenMs;
   const familiarisationMs = familiarisationPresentations * presentationMs;
   const trialMs = plan.presentationsPerTrial * presentationMs + plan.answerMs;
@@ -114,6 +117,7 @@ function sessionFigures(plan: StudyPlan): SessionFigures {
 function requirePlan(plan: StudyPlan): void {
   requireWhole('sessions', plan.sessions, 1, 100);
   requireWhole('trials', plan.trials, 1, 1000);
+  requireWhole('checkTrials', plan.checkTrials ?? 0, 0, 1000);
   requireWhole('listeners', plan.listeners, 1, 1000);
   requireWhole('presentationsPerTrial', plan.presentationsPerTrial, 1, 10);
   requireBetween('alpha', fractionToNumber(parseDecimal(plan.alpha)), 0, 1, 'open');

@@ -64,6 +64,7 @@ export const paths = {
   planSession: (organisationId: string, studyId: string) =>
     `${organisation(organisationId)}/studies/${studyId}/sessions/new`,
   session: (organisationId: string, id: string) => `${organisation(organisationId)}/sessions/${id}`,
+  levels: (organisationId: string, id: string) => `${organisation(organisationId)}/sessions/${id}/levels`,
   console: (organisationId: string, id: string) => `${organisation(organisationId)}/sessions/${id}/console`,
 };
 

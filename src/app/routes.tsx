@@ -37,6 +37,7 @@ const organisationPages: RouteObject[] = [
   { path: paths.reports(organisationId), lazy: () => import('../pages/reports-page.tsx') },
   { path: paths.sessions(organisationId), lazy: () => import('../pages/sessions-page.tsx') },
   { path: paths.session(organisationId, id), lazy: () => import('../pages/session-page.tsx') },
+  { path: paths.levels(organisationId, id), lazy: () => import('../pages/levels-page.tsx') },
   { path: paths.planSession(organisationId, id), lazy: () => import('../pages/session-plan-page.tsx') },
   { path: paths.rigPresets(organisationId), lazy: () => import('../pages/rig-presets-page.tsx') },
   { path: paths.editRigPreset(organisationId, id), lazy: () => import('../pages/rig-preset-edit-page.tsx') },

@@ -4,11 +4,15 @@ import { CourseLine } from '../ui/course-line.tsx';
 
 function headOf({ trial, phase, session }: ListenerView): string {
   if (trial === null) return phase === 'running' ? `Session ${session}` : 'Before the first trial';
+  if (trial.practice !== null) return `Practice ${trial.practice.number}, not counted`;
   return trial.familiarisation ? 'Familiarisation, not counted' : `Trial ${trial.number} of ${trial.of}`;
 }
 
 function rehearsalHeadOf({ trial }: ListenerView): string {
-  return trial === null || trial.familiarisation ? 'Rehearsal' : `Rehearsal, trial ${trial.number} of ${trial.of}`;
+  if (trial === null || trial.familiarisation) return 'Rehearsal';
+  return trial.practice === null
+    ? `Rehearsal, trial ${trial.number} of ${trial.of}`
+    : `Rehearsal, practice ${trial.practice.number}`;
 }
 
 function statusOf({ trial, paused }: ListenerView, isLost: boolean): string {

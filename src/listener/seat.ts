@@ -117,10 +117,19 @@ export class Seat {
     this.#update(this.#live.getSnapshot());
     const { view } = this.#snapshot;
     if (view === null) return;
+    this.#forgetPractice(view.trial?.number ?? 0);
     if (view.trial?.held) this.#hear(view.trial.held);
     if (view.lastLock !== null) this.#receive(view.lastLock);
     if (view.revealWanted) this.#reveal();
     this.#deliver();
+  }
+
+  /** A practice trial that is over leaves nothing on the phone either. */
+  #forgetPractice(open: number): void {
+    const answers = this.#snapshot.answers.filter(({ trial }) => trial > 0 || trial === open);
+    if (answers.length === this.#snapshot.answers.length) return;
+    remember(this.#token, { answers });
+    this.#update({ answers });
   }
 
   /** Takes in what the server says it holds. */

@@ -38,10 +38,17 @@ function afterTrial({ trial, outcome, counted }: NonNullable<ListenerView['lastO
   return { title, detail: `${answer} is in the record. Rest your ears; the next trial follows.` };
 }
 
+/** Practice with feedback says what was right; a trial that counts never does. */
+function afterPractice({ right, isRight }: NonNullable<ListenerView['told']>): Said {
+  const title = isRight === null ? 'No answer this time' : isRight ? 'Right' : 'Not this time';
+  return { title, detail: `${right}.`, more: 'This was practice. Your answer is kept nowhere.' };
+}
+
 /** What a phone says between trials. */
 export function waitingWords(view: ListenerView, { answers, hasContribution }: SeatSnapshot): Said {
-  const { lastOutcome } = view;
+  const { lastOutcome, told } = view;
   if (view.phase !== 'running') return beforeTheRun(view, hasContribution);
+  if (told !== null) return afterPractice(told);
   if (lastOutcome === null)
     return {
       title: 'Ready',

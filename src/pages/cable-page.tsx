@@ -65,6 +65,9 @@ export function Component() {
         actions={
           <>
             <LinkButton to={paths.compareCables(organisationId, id)}>Compare</LinkButton>
+            {cable.specimens.filter(({ archived }) => !archived).length > 1 ? (
+              <LinkButton to={paths.newStudy(organisationId, [id, id])}>Study a treatment</LinkButton>
+            ) : null}
             <LinkButton to={paths.editCable(organisationId, id)}>Change the design</LinkButton>
             <Button busy={archive.isPending} busyLabel="Saving" onClick={() => setArchived(!cable.archived)}>
               {cable.archived ? 'Bring back' : 'Archive'}

@@ -63,6 +63,7 @@ export function Component() {
           next={next}
           onNext={goOn}
           back={back}
+          levelsTo={view.rehearsal ? null : paths.levels(organisationId, sessionId)}
           labels={labels}
           areKeysOn={keys[0]}
         />

@@ -125,6 +125,7 @@ function placesIn(organisationId: string): HomePlaces {
     editStudy: (id) => paths.editStudy(organisationId, id),
     codes: (studyId) => paths.codes(organisationId, studyId),
     planSession: (studyId) => paths.planSession(organisationId, studyId),
+    levels: (id) => paths.levels(organisationId, id),
     console: (id) => paths.console(organisationId, id),
     report: (studyId) => paths.report(organisationId, studyId),
     newCable: paths.newCable(organisationId),

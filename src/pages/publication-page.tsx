@@ -11,10 +11,12 @@ import { ReportChecks } from '../features/reports/report-checks.tsx';
 import { ReportConditions } from '../features/reports/report-conditions.tsx';
 import { ReportCueAudit } from '../features/reports/report-cue-audit.tsx';
 import { ReportDistribution } from '../features/reports/report-distribution.tsx';
+import { ReportExcerpts } from '../features/reports/report-excerpts.tsx';
 import { ReportFigures } from '../features/reports/report-figures.tsx';
 import { ReportFlow } from '../features/reports/report-flow.tsx';
 import { ReportHeads } from '../features/reports/report-heads.tsx';
 import { ReportIncidents } from '../features/reports/report-incidents.tsx';
+import { ReportKnownDifferences } from '../features/reports/report-known-differences.tsx';
 import { ReportListeners } from '../features/reports/report-listeners.tsx';
 import { ReportProtocol } from '../features/reports/report-protocol.tsx';
 import { ReportSessions } from '../features/reports/report-sessions.tsx';
@@ -58,6 +60,8 @@ export function Component() {
       <Statements publication={publication} />
       <ReportDistribution nullDistribution={report.nullDistribution} distribution={portrait.distribution} />
       <ReportListeners listeners={portrait.listeners} />
+      <ReportKnownDifferences known={report.knownDifferences} method={method} />
+      <ReportExcerpts byExcerpt={report.byExcerpt} />
       <ReportChecks checks={portrait.checks} />
       <ReportCueAudit audit={report.cueAudit} />
       <ReportFlow flow={report.flow} missingWords={report.result.missingAnswers} />

@@ -11,6 +11,7 @@ import { queryClient } from '../lib/query-client.ts';
 import { isManaging } from '../lib/role-words.ts';
 import { param } from '../lib/route-params.ts';
 import { LinkButton } from '../ui/link-button.tsx';
+import { ReportCables } from './report-cables.tsx';
 
 export async function loader({ params }: LoaderFunctionArgs) {
   const organisationId = param(params, 'organisationId');
@@ -31,6 +32,7 @@ export function Component() {
       report={report}
       back={{ to: paths.reports(organisationId), label: 'All reports' }}
       actions={<Publishing id={id} />}
+      compared={<ReportCables organisationId={organisationId} studyId={id} />}
       proofs={addressOf(signedHeadsApi.ofStudy, { organisationId, id })}
     />
   );

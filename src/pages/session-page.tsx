@@ -75,6 +75,7 @@ export function Component() {
                 onBegun={(rehearsal) => navigate(paths.console(organisationId, rehearsal))}
               />
             ) : null}
+            {session.hasLevels ? <LinkButton to={paths.levels(organisationId, id)}>Levels</LinkButton> : null}
             {canChange && isPlanned ? (
               <>
                 <MoveSession organisationId={organisationId} session={session} />

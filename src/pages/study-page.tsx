@@ -15,6 +15,7 @@ import { readListQuery, useListAddress } from '../lib/list-address.ts';
 import { queryClient } from '../lib/query-client.ts';
 import { param } from '../lib/route-params.ts';
 import { LinkButton } from '../ui/link-button.tsx';
+import { StudyPair } from './study-pair.tsx';
 
 /** All sessions of one study, a page at a time. */
 function sessionsOf(studyId: string, search: URLSearchParams) {
@@ -65,6 +66,7 @@ export function Component() {
       onDiscarded={() => navigate(paths.studies(organisationId), { replace: true })}
       onClosed={() => navigate(report)}
       publishing={usePublishing(organisationId, study)}
+      comparison={<StudyPair organisationId={organisationId} draft={study.draft} names={study.cableNames} />}
       sessions={
         <SessionTable
           isOfOneStudy

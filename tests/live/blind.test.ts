@@ -142,3 +142,50 @@ describe('what leaves the server before closing, with X from separate specimens'
     expect(run(1).proctor).toEqual(exchanged);
   });
 });
+
+describe('what leaves the server before closing, with check trials among the others', () => {
+  const asked: Asked = {
+    ...methods.abx,
+    study: { method: 'abx' },
+    ladder: { steps: [{ milliDb: 1000, trials: 2 }], same: 1 },
+    choices: ['A', 'B', 'B', 'A', 'A', 'B', 'A', 'B'],
+  };
+  const runs: Run[] = [];
+  beforeAll(async () => {
+    for (const drawSecret of ['draw one', 'draw two', 'draw three'])
+      runs.push(await blindRun(asked, { codeKey: 'key one', drawSecret }));
+    runs.push(await blindRun(asked, { codeKey: 'key two', drawSecret: 'draw one' }));
+  }, 120_000);
+  const run = (index: number): Run => {
+    const found = runs[index];
+    if (found === undefined) throw new Error(`no run ${index}`);
+    return found;
+  };
+  /** Of each trial how many codes it took, and which of them come in fewer trials than the reference's. */
+  const kinds = ({ codes }: Run) => {
+    const trialsWith = (code: string) => codes.filter((trial) => trial.includes(code)).length;
+    return codes.map((trial) =>
+      new Set(trial).size === 1 ? 'same' : trial.some((code) => trialsWith(code) === 2) ? 'check' : 'main',
+    );
+  };
+
+  it('has them at other numbers with another draw, so that the comparison means something [S87]', () => {
+    for (const one of runs)
+      expect(kinds(one).toSorted()).toEqual(['check', 'check', 'main', 'main', 'main', 'main', 'main', 'same']);
+    expect(new Set(runs.map((one) => kinds(one).join())).size).toBeGreaterThan(1);
+  });
+
+  it.each([1, 2, 3])(
+    'is the same for listeners, managers and in mails, whichever trials they are (run %i) [S87] [B1]',
+    (index) => {
+      expect(run(index).phones).toEqual(run(0).phones);
+      expect(run(index).manager).toEqual(run(0).manager);
+      expect(run(index).mails).toEqual(run(0).mails);
+    },
+  );
+
+  it.each([1, 2, 3])('is the same for the proctor but for the code to be fitted (run %i) [S87] [B2]', (index) => {
+    const withoutCode = (texts: readonly string[]) => texts.map((text) => text.replace(/"code":"\d{3}"/g, '"code":""'));
+    expect(withoutCode(run(index).proctor)).toEqual(withoutCode(run(0).proctor));
+  });
+});

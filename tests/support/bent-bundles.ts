@@ -34,6 +34,24 @@ export async function wholeBundle(): Promise<Whole> {
   return { source, files, zip: writeZip(files) };
 }
 
+const ladder = [
+  { milliDb: 1000, trials: 2 },
+  { milliDb: 500, trials: 2 },
+];
+let checked: Promise<Whole> | null = null;
+/** The same with check trials among the others. */
+function checkedBundle(): Promise<Whole> {
+  checked ??= stampedSource(bundleSource(closedStudy(2, 'abx', Date.now() + 3_600_000, false, {}, ladder))).then(
+    (source) => {
+      const files = bundleFiles(source);
+      return { source, files, zip: writeZip(files) };
+    },
+  );
+  return checked;
+}
+/** A way to bend, of the bundle with check trials. */
+const ofChecked = (bend: (whole: Whole) => Uint8Array | Promise<Uint8Array>) => async () => bend(await checkedBundle());
+
 type Study = {
   record: Entry[];
   protocol: { [name: string]: Json } & { analysis: { [name: string]: Json } };
@@ -41,7 +59,7 @@ type Study = {
     codeKey: { salt: string; rows: { code: string; cable: number }[] };
     draws: { secret: string; salt: string }[];
   };
-  draws: { session: number; firstSide: number; truths: string[] }[];
+  draws: { session: number; firstSide: number; truths: string[]; kinds?: string[] }[];
   answers: { session: string; trial: number; seat: string; choice: string; confidence: string | null; salt: string }[];
   result: { [name: string]: Json } & { correct: number; p: { value: string; numerator: string } };
   [name: string]: unknown;
@@ -955,6 +973,63 @@ export const bentBundles: readonly Bent[] = [
     says: /no proof that the protocol/,
     outcome: 'not checkable',
     bend: put({ 'registry.json': 'null' }),
+  },
+
+  // Check trials
+  {
+    name: 'a failed check trial listed as a main one',
+    line: 'draws',
+    says: /does not follow from its secrets/,
+    bend: ofChecked(
+      republished(({ draws }) => {
+        const kinds = first(draws).kinds ?? [];
+        const [check, main] = [kinds.indexOf('step/0'), kinds.indexOf('main')];
+        [kinds[check], kinds[main]] = ['main', 'step/0'];
+      }),
+    ),
+  },
+  {
+    name: 'a failed check trial made a main one in the tables',
+    line: 'tables',
+    says: /trials\.csv differs from the record/,
+    bend: ofChecked(edit('trials.csv', (text) => text.replace(/,check,1000/, ',main,'))),
+  },
+  {
+    name: 'the size of a step changed in the protocol',
+    line: 'protocol',
+    says: /does not match the digest/,
+    bend: ofChecked(
+      republished(({ protocol }) => {
+        const { steps } = protocol.checks as unknown as { steps: { milliDb: number }[] };
+        first(steps).milliDb = 800;
+      }),
+    ),
+  },
+  {
+    name: 'the size of a step changed in what it came to, the record written anew',
+    line: 'figures',
+    says: /checks\/steps\/1\/milliDb differs/,
+    bend: ofChecked(
+      changed(isKind('result-recorded'), (old) => {
+        const checks = structuredClone(old.checks) as unknown as { steps: { milliDb: number }[] };
+        const [, step] = checks.steps;
+        if (step !== undefined) step.milliDb = 100;
+        return { ...old, checks } as unknown as Entry['payload'];
+      }),
+    ),
+  },
+  {
+    name: 'a step said to be heard, the record written anew',
+    line: 'figures',
+    says: /checks\/sensitiveTo differs|checks\/steps\/0\/isHeard differs/,
+    bend: ofChecked(
+      changed(isKind('result-recorded'), (old) => {
+        const checks = structuredClone(old.checks) as unknown as { steps: { isHeard: boolean }[]; sensitiveTo: number };
+        first(checks.steps).isHeard = true;
+        checks.sensitiveTo = 1000;
+        return { ...old, checks } as unknown as Entry['payload'];
+      }),
+    ),
   },
 
   // Not bent, and yet not everything can be shown

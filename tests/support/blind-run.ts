@@ -4,6 +4,7 @@ import type { StudyDraft } from '#shared/contracts/studies.ts';
 import { CodeKey } from '../../server/blind/code-key.entity.ts';
 import { HandClock } from '../../server/demo/hand-clock.ts';
 import { linkTokenOf } from '../../server/features/attendances/personal-link.ts';
+import type { Ladder } from './check-cables.ts';
 import { Console, Phone } from './live.ts';
 import { makeOrganisation, readyStudy } from './people.ts';
 import { repeatableRandom } from './random.ts';
@@ -21,6 +22,8 @@ export type Seeds = {
 };
 export type Asked = {
   study: Partial<StudyDraft>;
+  /** Check trials among the others. */
+  ladder?: Ladder;
   choices: readonly string[];
   /** What the draw decided, trial by trial, read from the codes that were fitted. */
   drawn: (codes: readonly string[], trials: readonly string[][]) => string;
@@ -65,14 +68,14 @@ async function takeInventory(desk: Console, codes: Iterable<string>): Promise<vo
 
 /** One session with two phones from the sealed plan to its end, and every byte that left the server meanwhile. */
 export async function blindRun(
-  { study: change, choices }: Asked,
+  { study: change, ladder, choices }: Asked,
   { codeKey, drawSecret, isExchanged }: Seeds,
 ): Promise<Run> {
   const clock = new HandClock(Date.parse('2026-12-05T18:00:00.000Z'));
   const random = repeatableRandom({ 'code-key': codeKey, 'draw-secret': drawSecret });
   const server = await testServer({ clock, random });
   const people = await makeOrganisation(server, 'Harbour');
-  const study = await readyStudy(server, people, change);
+  const study = await readyStudy(server, people, change, ladder);
   if (isExchanged) await exchangeSleeves(server, study.studyId);
   const manager: string[] = [];
   const look = async () => {

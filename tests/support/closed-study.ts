@@ -6,8 +6,10 @@ import { type Entry, nextEntry } from '#shared/ledger/chain.ts';
 import type { ClosedStudy } from '#shared/ledger/publication-parts.ts';
 import type { Method } from '#shared/methods/method.ts';
 import { methodOf } from '#shared/methods/methods.ts';
+import { runChecks } from '#shared/methods/run-checks.ts';
 import { runRegistered } from '#shared/methods/run-registered.ts';
-import { type Protocol, protocolDigest, sessionPlanOf } from '#shared/protocol/protocol.ts';
+import { codedCables, type Protocol, protocolDigest, sessionPlanOf } from '#shared/protocol/protocol.ts';
+import { checkExclusion } from '#shared/protocol/registered-analysis.ts';
 import { chosenWays, type WaysToRun } from '#shared/protocol/ways-to-run.ts';
 import { type AnswerContent, answerLeaf, contributionCommitment } from '#shared/session/answer-leaf.ts';
 import { isLastStep, nextStep } from '#shared/session/change-steps.ts';
@@ -195,7 +197,7 @@ function runSession(maker: StudyMaker, protocol: Protocol, session: number, list
   const choices = methodOf(protocol.method)
     .options({})
     .map(({ value }) => value);
-  const last = session === 1 ? 6 : 3;
+  const last = session === 1 ? sessionPlanOf(protocol).trials + 1 : 3;
   for (let trial = 1; trial <= last; trial += 1) {
     made.do({ kind: 'begin-trial' });
     if (protocol.design.onRequest !== undefined)
@@ -213,7 +215,7 @@ function runSession(maker: StudyMaker, protocol: Protocol, session: number, list
 
 /** What is sealed before anybody sits down: the protocol, perhaps amended once, and which code is which specimen. */
 export function seal(maker: StudyMaker, protocol: Protocol, earlier: Protocol | null): RevealedKey['codeKey'] {
-  const rows = protocol.cables.flatMap(({ specimens }, index) =>
+  const rows = codedCables(protocol).flatMap(({ specimens }, index) =>
     specimens.map(({ id: specimen, serial }, n) => ({
       code: String(317 + index * 211 + n * 38),
       specimen,
@@ -266,7 +268,13 @@ export function close(
   const states = sessionsInRecord(maker.entries, method);
   const result = runRegistered(protocol, states, key, maker.answers);
   const cues = runCueAudit(protocol, states, maker.entries, key, maker.answers, maker.requests);
-  maker.put('result-recorded', { analysis: protocol.analysis.name, result, cues });
+  const checks = runChecks(protocol, states, key, maker.answers);
+  maker.put('result-recorded', {
+    analysis: protocol.analysis.name,
+    result,
+    ...(checks === undefined ? {} : { checks }),
+    cues,
+  });
   return JSON.parse(
     canonicalJson({
       entries: maker.entries,
@@ -281,11 +289,23 @@ export function close(
 export const sealedSecret = (session: number) =>
   drawSecretCommitment(hex(`draw salt ${session}`, 32), hex(`secret ${session}`, 32));
 
+function withLadder(protocol: Protocol, ladder: readonly { milliDb: number; trials: number }[]): Protocol {
+  if (ladder.length === 0) return protocol;
+  const checkCable = (milliDb: number) => ({ ...cable(`Check of ${milliDb}`), kind: 'check' as const });
+  const steps = ladder.map((step) => ({ ...step, cable: checkCable(step.milliDb) }));
+  return {
+    ...protocol,
+    checks: { reference: 0, steps, same: 1 },
+    analysis: { ...protocol.analysis, exclusions: checkExclusion },
+  };
+}
+
 /**
  * @param listeners seats per session, 1 to 4
  * @param startsAt  when it is sealed, in milliseconds since 1970
  * @param isAmended whether the protocol is sealed with another chain first, and amended before the codes are drawn
  * @param ways      how its sessions are run beside the usual way
+ * @param ladder    its check trials, largest first; with any, one of the same with the same, and a second result
  */
 export function closedStudy(
   listeners: number,
@@ -293,11 +313,12 @@ export function closedStudy(
   startsAt?: number,
   isAmended = false,
   ways: WaysToRun = {},
+  ladder: readonly { milliDb: number; trials: number }[] = [],
 ): ClosedStudy {
   const maker = new StudyMaker();
   if (startsAt !== undefined) maker.now = startsAt;
   const plain = protocolFor(maker.study, listeners, methodId);
-  const first = { ...plain, design: { ...plain.design, ...chosenWays(ways) } };
+  const first = { ...withLadder(plain, ladder), design: { ...plain.design, ...chosenWays(ways) } };
   const conduct = { ...first.conduct, chain: 'Player, another amplifier, loudspeakers' };
   const protocol = isAmended ? { ...first, version: 2, salt: hex('second salt', 32), conduct } : first;
   const earlier = isAmended ? first : null;

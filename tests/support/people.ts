@@ -5,6 +5,7 @@ import { Membership } from '../../server/features/organisations/membership.entit
 import { Organisation } from '../../server/features/organisations/organisation.entity.ts';
 import { hashPassword } from '../../server/features/users/passwords.ts';
 import { User } from '../../server/features/users/user.entity.ts';
+import { addLadder, type Ladder } from './check-cables.ts';
 import type { TestServer } from './test-server.ts';
 
 export const password = 'a-long-test-password';
@@ -74,7 +75,12 @@ export const plainStudy: Omit<StudyDraft, 'cables' | 'codeHolderId'> = {
 export const secretTreatment = 'cooled in the northern shed';
 
 /** Two cables, a sealed study with confirmed codes, and one planned session: all over the API, as people do it. */
-export async function readyStudy(server: TestServer, people: TestOrganisation, change: Partial<StudyDraft> = {}) {
+export async function readyStudy(
+  server: TestServer,
+  people: TestOrganisation,
+  change: Partial<StudyDraft> = {},
+  ladder?: Ladder,
+) {
   const base = `/api/organisations/${people.organisationId}`;
   const manager = await signedIn(server, people.manager.email);
   const holder = await signedIn(server, people.codeHolder.email);
@@ -100,7 +106,8 @@ export async function readyStudy(server: TestServer, people: TestOrganisation, c
     }
     cables.push({ cableId: cable.body.id, specimenIds });
   }
-  const draft = { ...plainStudy, cables, codeHolderId: people.codeHolder.id, ...change };
+  const checks = ladder && (await addLadder(manager, base, ladder));
+  const draft = { ...plainStudy, cables, codeHolderId: people.codeHolder.id, ...(checks && { checks }), ...change };
   const study = await manager.post(`${base}/studies`).send(draft).expect(200);
   const at = `${base}/studies/${study.body.id}`;
   await manager.post(`${at}/seal`).send({}).expect(200);

@@ -49,6 +49,11 @@ export async function begin(
 /** A trial up to its question. Returns the codes fitted, presentation by presentation. */
 export async function presentTrial(desk: Console, clock: HandClock, scan: Scan = scanBothEnds): Promise<string[]> {
   await desk.act({ kind: 'begin-trial' });
+  return presentOpen(desk, clock, scan);
+}
+
+/** The presentations of a trial that has just been opened. */
+export async function presentOpen(desk: Console, clock: HandClock, scan: Scan = scanBothEnds): Promise<string[]> {
   const codes: string[] = [];
   for (let count = desk.now.trial?.presentations ?? 0; count > 0; count -= 1)
     codes.push(await present(desk, clock, scan));

@@ -126,6 +126,16 @@ for secret in study['secrets']['draws']:
         if plan['method'] in DEALS:
             drawn['separate']['deals'] = [fair_number(seed, f'separate/trial/{trial + 1}', DEALS[plan['method']])
                                           for trial in range(plan['trials'] + plan['spares'])]
+    if plan.get('checks'):
+        steps, same = plan['checks']['steps'], plan['checks']['same']
+        rows = [sum(row['cable'] == 2 + step for row in key['rows']) for step in range(len(steps))]
+        kinds = ['main'] * (plan['trials'] - sum(steps) - same)
+        kinds += [f'step/{step}' for step, trials in enumerate(steps) for _ in range(trials)] + ['same'] * same
+        for last in range(len(kinds), 1, -1):
+            chosen = fair_number(seed, f'kind/{last}', last)
+            kinds[last - 1], kinds[chosen] = kinds[chosen], kinds[last - 1]
+        drawn['kinds'] = kinds
+        drawn['checkSpecimens'] = [fair_number(seed, f'check-specimen/{step + 1}', count) for step, count in enumerate(rows)]
     agree(f'draw of session {number}', drawn, [one for one in study['draws'] if one['session'] == number][0])
     truths += len(drawn['truths'])
 

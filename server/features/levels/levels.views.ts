@@ -61,7 +61,7 @@ export function levelsPageView(source: LevelsSource): LevelsPage {
     codesAreDrawn,
     open: openChecks(state),
     due: levelCheckDue(state),
-    bar: state.familiarised || session.phase === 'abandoned' ? null : whyLevelsBar(state),
+    bar: state.familiarisations > 0 || session.phase === 'abandoned' ? null : whyLevelsBar(state),
     taken: takenOf(source),
   };
 }

@@ -4,6 +4,7 @@ import { isClosed } from '#shared/contracts/studies.ts';
 import { cueAudit } from '#shared/cue-audit/cue-audit.ts';
 import { cueTrials } from '#shared/cue-audit/cue-trials.ts';
 import { portrayCueAudit, withCueCautions } from '#shared/cue-audit/portray-cue-audit.ts';
+import { knownDifferences } from '#shared/findings/check-result.ts';
 import type { Entry } from '#shared/ledger/chain.ts';
 import type { CheckId } from '#shared/ledger/check-names.ts';
 import { type ClosedStudy, publicationParts } from '#shared/ledger/publication-parts.ts';
@@ -69,7 +70,7 @@ function sourceFrom(closed: ClosedRecord): ReportSource {
   const recorded = studyEvents['result-recorded'].parse(
     entries.find(({ kind }) => kind === 'result-recorded')?.payload,
   );
-  const { result } = recorded;
+  const { result, checks: known } = recorded;
   const cables = [protocol.cables[0].name, protocol.cables[1].name] as const;
   const key = revealedKey.parse(entries.find(({ kind }) => kind === 'key-revealed')?.payload);
   const cued = cueTrials(method, states, entries, key, closed.answers, closed.requests);
@@ -84,13 +85,14 @@ function sourceFrom(closed: ClosedRecord): ReportSource {
       allTrialsAccounted: passed(checks, ['trials', 'sessions', 'flow']),
       isBlind: rung.name !== 'open',
     },
+    known: knownDifferences(known),
     endedEarly: closing.complete ? null : closing.reason,
     levels: levelsOf(closed, states),
     setting: protocol.conduct.chain,
   });
   const finding = withCueCautions(found, cues, method, cables);
   const cueAuditShown = portrayCueAudit(cues, method, cables, cued);
-  return { ...closed, states, checks, rung, closing, result, finding, cueAudit: cueAuditShown };
+  return { ...closed, states, checks, rung, closing, result, known, finding, cueAudit: cueAuditShown };
 }
 
 /** The report of a closed record, wherever it was read from. */

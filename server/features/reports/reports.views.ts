@@ -2,6 +2,7 @@ import type { Report } from '#shared/contracts/reports.ts';
 import type { SignedHead } from '#shared/contracts/signed-heads.ts';
 import type { PortrayedCueAudit } from '#shared/cue-audit/portrayed-cue-audit.ts';
 import { resultsByExcerpt } from '#shared/findings/by-excerpt.ts';
+import type { CheckResult } from '#shared/findings/check-result.ts';
 import type { Finding } from '#shared/findings/finding.ts';
 import type { Entry } from '#shared/ledger/chain.ts';
 import { sealedVersions } from '#shared/ledger/protocol-versions.ts';
@@ -12,14 +13,15 @@ import { methodOf, type RegisteredResult } from '#shared/methods/methods.ts';
 import { analysisFacts } from '#shared/protocol/analysis-facts.ts';
 import { presetFacts } from '#shared/protocol/preset-facts.ts';
 import type { Protocol } from '#shared/protocol/protocol.ts';
-import { checksWords } from '#shared/protocol/protocol-checks.ts';
+import { checksWords, decibels } from '#shared/protocol/protocol-checks.ts';
 import { protocolDifferences } from '#shared/protocol/protocol-differences.ts';
+import { treatmentFacts } from '#shared/protocol/treatment.ts';
 import { waysFacts } from '#shared/protocol/ways-to-run.ts';
 import type { AnswerContent } from '#shared/session/answer-leaf.ts';
 import type { BlindingRung } from '#shared/session/blinding-rung.ts';
 import { countedTrials, type LockedTrial, revealedDraw } from '#shared/session/counted-trials.ts';
 import type { Draw } from '#shared/session/draw.ts';
-import { truthOf } from '#shared/session/fitting.ts';
+import { kindOf, truthOf } from '#shared/session/fitting.ts';
 import { handlingOf } from '#shared/session/handling.ts';
 import { listenersToldApart } from '#shared/session/listeners-told-apart.ts';
 import type { RequestContent } from '#shared/session/request-leaf.ts';
@@ -27,6 +29,7 @@ import { onRequestSentence, requestsIn, timesAsked } from '#shared/session/reque
 import { type RevealedKey, revealedKey } from '#shared/session/revealed-key.ts';
 import type { SessionState } from '#shared/session/state.ts';
 import type { StudyPayloadOf } from '#shared/session/study-events.ts';
+import { stepOf, type TrialKind } from '#shared/session/trial-kinds.ts';
 
 export type ReportSource = {
   readonly study: { readonly id: string; readonly title: string };
@@ -38,6 +41,7 @@ export type ReportSource = {
   readonly states: readonly SessionState[];
   readonly rooms: ReadonlyMap<number, string>;
   readonly result: RegisteredResult;
+  readonly known: CheckResult | undefined;
   readonly finding: Finding;
   readonly cueAudit: PortrayedCueAudit;
   readonly checks: readonly Check[];
@@ -46,12 +50,13 @@ export type ReportSource = {
   readonly heads: readonly SignedHead[];
 };
 
-function flowOf({ states, entries }: ReportSource): Report['flow'] {
+function flowOf({ states, entries }: ReportSource, counted: readonly LockedTrial[]): Report['flow'] {
   const seated = new Set(entries.filter(({ kind }) => kind === 'seating-opened').map(({ payload }) => payload.session));
   const wasOpened = ({ session }: SessionState) => seated.has(session);
   const trials = states.flatMap((state) => state.ended);
   const locked = trials.filter(({ outcome }) => outcome === 'locked');
   const opened = states.filter(wasOpened);
+  const answers = counted.flatMap((trial) => trial.answers);
   const seats = states.flatMap((state) => state.seats);
   const { listeners, unlinked } = listenersToldApart(states);
   return {
@@ -62,9 +67,10 @@ function flowOf({ states, entries }: ReportSource): Report['flow'] {
     sessionsNeverStarted: states.length - opened.length,
     trialsOpened: trials.length + states.filter(({ trial }) => trial !== null && trial.trial > 0).length,
     trialsVoid: trials.length - locked.length,
-    trialsCounted: locked.length,
-    answersExpected: locked.reduce((sum, trial) => sum + trial.seats.length, 0),
-    answersMissing: locked.reduce((sum, trial) => sum + trial.missing.length, 0),
+    trialsCounted: counted.length,
+    trialsChecked: locked.length - counted.length,
+    answersExpected: answers.length,
+    answersMissing: answers.filter(({ choice }) => choice === null).length,
     listeners,
     listenersLeft: new Set(seats.filter(({ left }) => left).map(({ seat }) => seat)).size,
     listenersUnlinked: unlinked,
@@ -79,6 +85,17 @@ function drawFor(source: ReportSource, state: SessionState, key: RevealedKey): D
   return secret === undefined || !ran
     ? null
     : revealedDraw(state, methodOf(source.protocol.method), secret, key.codeKey.rows);
+}
+
+/** What a check trial compared. */
+function checkOf(protocol: Protocol, kind: TrialKind): Report['sessions'][number]['trials'][number]['check'] {
+  const { checks, cables } = protocol;
+  if (checks === undefined || kind === 'main') return null;
+  const reference = cables[checks.reference].name;
+  const step = checks.steps[stepOf(kind) ?? -1];
+  return step === undefined
+    ? { name: 'the same with the same', pair: [reference, reference] }
+    : { name: `known difference of ${decibels(step.milliDb)}`, pair: [reference, step.cable.name] };
 }
 
 function sessionView(source: ReportSource, state: SessionState, key: RevealedKey): Report['sessions'][number] {
@@ -98,6 +115,11 @@ function sessionView(source: ReportSource, state: SessionState, key: RevealedKey
     startedAt: atOf('seating-opened'),
     endedAt: atOf('session-finished', 'session-abandoned'),
     listeners: state.seats.length,
+    training: {
+      labelled: state.familiarisations,
+      blind: state.practised.filter(({ form }) => form === 'blind').length,
+      feedback: state.practised.filter(({ form }) => form === 'feedback').length,
+    },
     drawn: draw === null ? null : method.trials.session(draw.firstSide, namesOf(protocol)),
     reason: abandoned === undefined ? null : String(abandoned.payload.reason),
     handling: handlingOf(state),
@@ -106,6 +128,7 @@ function sessionView(source: ReportSource, state: SessionState, key: RevealedKey
       outcome,
       excerpt: state.plan.programme[excerpt]?.title ?? '',
       truth: draw === null ? '' : truthOf(draw, trial),
+      check: draw === null ? null : checkOf(protocol, kindOf(draw, state, trial)),
       answers: seats.map((listener) => ({ listener, choice: choiceOf(trial, listener) })),
       longChanges,
       requested:
@@ -154,12 +177,21 @@ function missingOf(states: readonly SessionState[]): Report['missing'] {
   );
 }
 
-function factsOf({ design, conduct, analysis, cables, method, checks }: Protocol): Report['protocol']['facts'] {
+function factsOf({
+  design,
+  conduct,
+  analysis,
+  cables,
+  method,
+  checks,
+  treatment,
+}: Protocol): Report['protocol']['facts'] {
   const specimens = cables.map(({ name, specimens: own }) => `${name}: ${own.map(({ serial }) => serial).join(', ')}`);
   return [
     { label: 'Method', value: methodOf(method).name },
     ...(design.attribute === undefined ? [] : [{ label: 'Attribute', value: design.attribute }]),
     { label: 'Specimens', value: specimens.join('; ') },
+    ...treatmentFacts(treatment),
     { label: 'Sessions', value: String(design.sessions) },
     { label: 'Listeners per session', value: String(design.listenersPerSession) },
     ...waysFacts(design),
@@ -202,7 +234,7 @@ function conditionsOf({ protocol, states, rung, requests = [] }: ReportSource): 
 
 /** The report, field by field. */
 export function reportView(source: ReportSource): Report {
-  const { study, protocol, entries, states, answers, result, finding, checks, rung, closing, heads } = source;
+  const { study, protocol, entries, states, answers, result, known, finding, checks, rung, closing, heads } = source;
   const method = methodOf(protocol.method);
   const key = revealedKey.parse(entries.find(({ kind }) => kind === 'key-revealed')?.payload);
   const counted = countedTrials(method, states, key, answers);
@@ -223,6 +255,7 @@ export function reportView(source: ReportSource): Report {
     result,
     nullDistribution: method.nullDistribution(counted),
     byExcerpt: byExcerptOf(protocol, counted),
+    knownDifferences: known ?? null,
     cueAudit: source.cueAudit,
     rung: { name: rung.name, why: rung.why },
     conditions: conditionsOf(source),
@@ -230,7 +263,7 @@ export function reportView(source: ReportSource): Report {
       protocol.conduct.levels === undefined
         ? null
         : levelReportOf(entries, key.codeKey.rows, protocol.conduct.levels, namesOf(protocol)),
-    flow: flowOf(source),
+    flow: flowOf(source, counted),
     sessions: states.map((state) => sessionView(source, state, key)),
     voids: voidsOf(entries),
     missing: missingOf(states),

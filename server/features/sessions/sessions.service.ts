@@ -46,6 +46,7 @@ async function rowsOf(tx: Tx, sessions: readonly Session[]): Promise<SessionRow[
       trials: trialsOf(studies.get(studyId)?.draft),
       trialsLocked,
       listeners,
+      hasLevels: studies.get(studyId)?.draft.levels !== undefined,
     }),
   );
 }

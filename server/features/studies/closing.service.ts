@@ -2,6 +2,7 @@ import { isClosed, type Study as StudyReply } from '#shared/contracts/studies.ts
 import { runCueAudit } from '#shared/cue-audit/run-cue-audit.ts';
 import type { Json } from '#shared/ledger/canonical-json.ts';
 import { methodOf } from '#shared/methods/methods.ts';
+import { runChecks } from '#shared/methods/run-checks.ts';
 import { runRegistered } from '#shared/methods/run-registered.ts';
 import { Problem } from '#shared/problem.ts';
 import { decide } from '#shared/session/decide.ts';
@@ -83,7 +84,8 @@ async function recordResult(
   const held = answers.map(({ sessionId, trial, seat, choice }) => ({ session: sessionId, trial, seat, choice }));
   const result = runRegistered(protocol, states, key, held) as unknown as Json;
   const cues = runCueAudit(protocol, states, entries, key, held, requests) as unknown as Json;
-  const payload = { analysis: protocol.analysis.name, result, cues };
+  const checks = runChecks(protocol, states, key, held) as unknown as Json | undefined;
+  const payload = { analysis: protocol.analysis.name, result, ...(checks === undefined ? {} : { checks }), cues };
   await append(tx, deps, study.id, [{ kind: 'result-recorded', at: deps.clock.now(), payload, session: null }]);
 }
 

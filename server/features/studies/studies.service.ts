@@ -2,6 +2,7 @@ import type { StudyDraft, StudyListQuery, Study as StudyReply } from '#shared/co
 import { sealedVersions } from '#shared/ledger/protocol-versions.ts';
 import { Problem } from '#shared/problem.ts';
 import type { Protocol } from '#shared/protocol/protocol.ts';
+import { nameInStudy } from '#shared/protocol/treatment.ts';
 import { type Tx, withTransaction } from '../../db/transaction.ts';
 import type { Deps } from '../../deps.ts';
 import { append, readKinds } from '../../ledger/ledger.ts';
@@ -32,7 +33,10 @@ async function lockedStudy(tx: Tx, { organisationId, id }: Where): Promise<Study
 
 async function viewOf(tx: Tx, study: Study): Promise<StudyReply> {
   const cables = await cablesById(tx, study.organisationId, cableIds(study.draft));
-  const cableName = (index: 0 | 1) => cables.find(({ id }) => id === study.draft.cables[index].cableId)?.name ?? '';
+  const cableName = (index: 0 | 1) => {
+    const cable = cables.find(({ id }) => id === study.draft.cables[index].cableId);
+    return nameInStudy(cable?.name ?? '', index, study.draft.treatment);
+  };
   const entries = await readKinds(tx, study.id, ['protocol-sealed', 'protocol-amended', 'deviation-recorded']);
   const versions = sealedVersions(entries);
   const protocols = (await versionsOf(tx, study.id)).map(({ protocol }) => protocol);

@@ -2,6 +2,7 @@ import { isClosed } from '#shared/contracts/studies.ts';
 import type { WaitingItem } from '#shared/contracts/users.ts';
 import { withTransaction } from '../../db/transaction.ts';
 import type { Deps } from '../../deps.ts';
+import { levelsWaitingFor } from '../levels/levels-waiting.service.ts';
 import type { Session } from '../sessions/session.entity.ts';
 import { sessionsOfStudies } from '../sessions/sessions.store.ts';
 import { studiesOf } from '../studies/studies.store.ts';
@@ -63,18 +64,22 @@ export function waitingFor({ db }: Deps, { organisationId, userId, role }: Asker
       tx,
       studies.map(({ id }) => id),
     );
-    return studies.flatMap((study) => {
+    const waiting: WaitingItem[] = [];
+    for (const study of studies) {
       const own = sessions.filter((session) => session.studyId === study.id);
+      const levels = await levelsWaitingFor(tx, study, own, userId);
       const isManager = role === 'owner' || role === 'manager';
       const closed =
         role === 'reviewer' && study.state === 'closed'
           ? [item(study, 'report-to-read', 'Closed; the report is ready')]
           : [];
-      return [
+      waiting.push(
         ...forProctor(study, own, userId),
+        ...levels.map(({ sessionId, detail }) => item(study, 'levels-to-measure', detail, sessionId)),
         ...(study.codeHolderId === userId ? forCodeHolder(study) : []),
         ...(isManager ? forManager(study, own) : closed),
-      ];
-    });
+      );
+    }
+    return waiting;
   });
 }

@@ -2,6 +2,7 @@ import type { ProctorView } from '#shared/contracts/proctor-live.ts';
 import { Cautions } from './cautions.tsx';
 import { Ended } from './ended.tsx';
 import { Inventory } from './inventory.tsx';
+import { LevelsPanel } from './levels-panel.tsx';
 import type { NextAct } from './next-act.ts';
 import { NextActButton } from './next-act-button.tsx';
 import { PauseBanner } from './pause-banner.tsx';
@@ -21,6 +22,8 @@ type ConsoleBodyProps = {
   next: NextAct | null;
   onNext: () => void;
   back: { to: string; label: string };
+  /** Where levels are entered; null in a rehearsal. */
+  levelsTo: string | null;
   labels: Labels;
   areKeysOn: boolean;
 };
@@ -34,6 +37,7 @@ export function ConsoleBody({
   next,
   onNext,
   back,
+  levelsTo,
   labels,
   areKeysOn,
 }: ConsoleBodyProps) {
@@ -41,6 +45,9 @@ export function ConsoleBody({
     <div className="flex min-w-0 flex-1 flex-col gap-6 px-5 py-7 lg:px-11">
       {isLost ? <LostBanner /> : null}
       {view.paused === null ? null : <PauseBanner pause={view.paused} clockOffsetMs={clockOffsetMs} />}
+      {view.levels === null || levelsTo === null ? null : (
+        <LevelsPanel levels={view.levels} phase={view.phase} levelsTo={levelsTo} actions={actions} />
+      )}
       <Scenery view={view} actions={actions} back={back} />
       <p role="alert" className="border-l-4 border-amber pl-3 text-2xl font-semibold text-amber empty:hidden">
         {actions.problem}
@@ -77,7 +84,7 @@ function Scenery({ view, actions, back }: SceneryProps) {
     case 'running':
       if (view.trial !== null) return <TrialPanel trial={view.trial} view={view} />;
       return view.inventory === null || view.inventory.isEnded ? (
-        <BetweenTrials view={view} />
+        <BetweenTrials view={view} actions={actions} />
       ) : (
         <Inventory inventory={view.inventory} />
       );

@@ -31,10 +31,15 @@ export const isComplete = (view: ProctorView): boolean =>
   view.familiarised &&
   view.course.every(({ state }) => state === 'locked' || state === 'void');
 
+/** Whether the session need not wait for levels: they bar the start, or are due at half time. */
+export const areLevelsIn = ({ levels }: ProctorView): boolean =>
+  levels === null || (levels.bar === null && levels.due !== 'half-time');
+
 /** The one act that comes next, or null when the console waits for somebody else. */
 export function nextActOf(view: ProctorView): NextAct | null {
   if (view.paused !== null) return now('Resume', { kind: 'resume' });
-  if (view.phase === 'planned' && view.cautionsConfirmed) return now('Open seating', { kind: 'open-seating' });
+  if (view.phase === 'planned' && view.cautionsConfirmed && areLevelsIn(view))
+    return now('Open seating', { kind: 'open-seating' });
   if (view.phase === 'seating' && isAnybodySeated(view))
     return now('Close seating and fix the draw', { kind: 'close-seating' });
   if (view.phase !== 'running') return null;
@@ -49,6 +54,7 @@ function actBetweenTrials(view: ProctorView): NextAct | null {
       : now('End the inventory', { kind: 'end-inventory', reason: '' });
   }
   if (!isAnybodySeated(view)) return null;
+  if (!areLevelsIn(view)) return null;
   if (!view.familiarised) return now('Begin the familiarisation', { kind: 'begin-familiarisation' });
   return view.nextTrial === null ? null : now(`Begin trial ${view.nextTrial}`, { kind: 'begin-trial' });
 }
@@ -65,6 +71,6 @@ function actInTrial(view: ProctorView, trial: NonNullable<ProctorView['trial']>)
     return { label: done, waiting, command: { kind: 'confirm-step', step }, step, opensAt };
   }
   if ((trial.stage === 'answering' || trial.stage === 'asking') && trial.answered === trial.expected)
-    return now(`Lock trial ${trial.number}`, { kind: 'lock-trial' });
+    return now(trial.practice === null ? `Lock trial ${trial.number}` : 'End this practice', { kind: 'lock-trial' });
   return null;
 }

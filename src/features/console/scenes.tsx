@@ -3,6 +3,8 @@ import type { ProctorView } from '#shared/contracts/proctor-live.ts';
 import { CableRun } from '../../ui/cable-run.tsx';
 import { Progress } from '../../ui/progress.tsx';
 import { isAnybodySeated, isComplete } from './next-act.ts';
+import { Training } from './training.tsx';
+import type { ConsoleActions } from './use-console.ts';
 
 type SceneProps = { title: string; hasCable?: boolean; children: ReactNode };
 
@@ -42,7 +44,7 @@ export function Revealing({ view }: { view: ProctorView }) {
 }
 
 /** While a session runs and no trial is open. */
-export function BetweenTrials({ view }: { view: ProctorView }) {
+export function BetweenTrials({ view, actions }: { view: ProctorView; actions: ConsoleActions }) {
   if (isComplete(view))
     return (
       <Scene title="Every trial has ended" hasCable={true}>
@@ -61,9 +63,13 @@ export function BetweenTrials({ view }: { view: ProctorView }) {
         Now the familiarisation: both cables are heard once, labelled and sleeved. Nothing is asked, nothing counts.
       </Scene>
     );
+  const { training, paused } = view;
   return (
-    <Scene title={`Trial ${view.nextTrial ?? ''} is next`} hasCable={true}>
-      Begin when everybody is ready. Take a break whenever ears need one.
-    </Scene>
+    <>
+      <Scene title={`Trial ${view.nextTrial ?? ''} is next`} hasCable={true}>
+        Begin when everybody is ready. Take a break whenever ears need one.
+      </Scene>
+      {training === null || paused !== null ? null : <Training training={training} actions={actions} />}
+    </>
   );
 }

@@ -102,7 +102,7 @@ export function SideActs({ view, actions, onNext, keys: [areKeysOn, setKeysOn], 
           Alt keys
         </label>
       </Actions>
-      <VoidDialog {...dialog('void')} isFamiliarisation={view.trial?.familiarisation ?? false} />
+      <VoidDialog {...dialog('void')} neverCounts={(view.trial?.number ?? 1) <= 0} />
       <DeviationDialog {...dialog('deviation')} />
       <EndDialog {...dialog('end')} view={view} />
       <ByHandDialog {...dialog('by-hand')} code={view.trial?.code ?? ''} />

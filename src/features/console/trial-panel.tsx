@@ -29,7 +29,10 @@ function wordsOf(trial: Trial, view: ProctorView): Words {
   const out = trial.expected - trial.answered;
   return {
     title: `${trial.answered} of ${trial.expected} answered`,
-    detail: out === 0 ? 'all are in · next: lock the trial' : `${out} still to come · say nothing, show nothing`,
+    detail:
+      out === 0
+        ? `all are in · next: ${trial.practice === null ? 'lock the trial' : 'end this practice'}`
+        : `${out} still to come · say nothing, show nothing`,
   };
 }
 
@@ -50,6 +53,11 @@ function placeOf(trial: Trial, { steps }: Pick<ProctorView, 'steps'>): string {
   return `${presentation} · step ${step} of ${steps.length}`;
 }
 
+function nameOf({ number, familiarisation, practice }: Trial): string {
+  if (practice !== null) return `Practice ${practice.number}`;
+  return familiarisation ? 'Familiarisation' : `Trial ${number}`;
+}
+
 /** The open trial: the code to be fitted on its sleeve, and the step now. */
 export function TrialPanel({ trial, view }: { trial: Trial; view: ProctorView }) {
   const { title, detail } = wordsOf(trial, view);
@@ -60,8 +68,8 @@ export function TrialPanel({ trial, view }: { trial: Trial; view: ProctorView })
       className="flex flex-1 flex-col gap-6"
     >
       <p className="text-soft">
-        <strong className="text-ink">{trial.familiarisation ? 'Familiarisation' : `Trial ${trial.number}`}</strong>
-        {trial.familiarisation ? ', not counted' : ` of ${trial.of}`} · {placeOf(trial, view)}
+        <strong className="text-ink">{nameOf(trial)}</strong>
+        {trial.number > 0 ? ` of ${trial.of}` : ', not counted'} · {placeOf(trial, view)}
       </p>
       <PlayLine trial={trial} />
       <CableRun className="-mx-5 flex min-h-32 flex-1 items-center lg:-mx-11">

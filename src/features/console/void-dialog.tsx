@@ -8,10 +8,10 @@ import type { ConsoleDialogProps } from './console-dialog.ts';
 import { voidWords } from './console-words.ts';
 import { Refusal } from './refusal.tsx';
 
-type VoidDialogProps = ConsoleDialogProps & { isFamiliarisation: boolean };
+type VoidDialogProps = ConsoleDialogProps & { neverCounts: boolean };
 
 /** Sets the open trial aside for one of the fixed reasons. */
-export function VoidDialog({ isFamiliarisation, isOpen, onOpenChange, actions }: VoidDialogProps) {
+export function VoidDialog({ neverCounts, isOpen, onOpenChange, actions }: VoidDialogProps) {
   const [reason, setReason] = useState<VoidReason | ''>('');
   const [note, setNote] = useState('');
   const change = (isShown: boolean) => {
@@ -30,8 +30,8 @@ export function VoidDialog({ isFamiliarisation, isOpen, onOpenChange, actions }:
       onOpenChange={change}
       title="Void this trial?"
       description={
-        isFamiliarisation
-          ? 'It stays in the record with its reason, and is begun again.'
+        neverCounts
+          ? 'It stays in the record with its reason. Begin it again when all is well.'
           : 'It stays in the record with its reason and does not count. While spares last, one takes its place at the end.'
       }
       actions={

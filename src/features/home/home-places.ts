@@ -5,6 +5,7 @@ export type HomePlaces = {
   readonly editStudy: (id: string) => string;
   readonly codes: (studyId: string) => string;
   readonly planSession: (studyId: string) => string;
+  readonly levels: (sessionId: string) => string;
   readonly console: (sessionId: string) => string;
   readonly report: (studyId: string) => string;
   readonly newCable: string;

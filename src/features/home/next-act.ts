@@ -16,6 +16,8 @@ export function nextActOf({ kind, studyId, sessionId }: WaitingItem, places: Hom
       return { word: 'Plan a session', to: places.planSession(studyId) };
     case 'session-to-run':
       return { word: 'Open the console', to: sessionId === null ? places.sessions : places.console(sessionId) };
+    case 'levels-to-measure':
+      return { word: 'Measure the levels', to: sessionId === null ? places.sessions : places.levels(sessionId) };
     case 'study-to-close':
       return { word: 'Close the study', to: places.study(studyId) };
     case 'report-to-read':

@@ -1,8 +1,21 @@
 import type { Report } from '#shared/contracts/reports.ts';
+import { dbText, handlingWords } from '#shared/levels/level-words.ts';
 import type { Portrait } from '#shared/methods/portrait.ts';
 import { formatCount, formatDate } from '../../lib/format.ts';
 import { type Fact, Facts } from '../../ui/facts.tsx';
 import { levelOf, sideWords } from './report-words.ts';
+
+/** The largest difference that was measured, or that none was. */
+function levelFact(levels: Report['levels']): Fact {
+  const label = 'Level at the load';
+  if (levels === null || levels.checks.length === 0)
+    return { label, value: 'not recorded', isWords: true, tone: 'amber' };
+  const standing = levels.checks.filter(({ isReplaced }) => !isReplaced);
+  const most = Math.max(...standing.map(({ differenceMilliDb }) => differenceMilliDb));
+  const areIn = standing.every(({ isIn }) => isIn);
+  const value = `${handlingWords[levels.handling]}, ${areIn ? `within ${dbText(most)}` : `${dbText(most)} apart`}`;
+  return { label, value, isWords: true, ...(areIn ? {} : { tone: 'amber' as const }) };
+}
 
 type ReportConditionsProps = {
   report: Report;
@@ -19,7 +32,7 @@ export function ReportConditions({ report, portrait, isPublic = false }: ReportC
   const unsettled = record.checks.length - passed - failed;
   const conditions: Fact[] = [
     { label: 'Blinding', value: rung.name, isWords: true },
-    { label: 'Level at the load', value: 'not recorded', isWords: true, tone: 'amber' },
+    levelFact(report.levels),
     { label: 'Void trials', value: voids.length === 0 ? 'none' : `${flow.trialsVoid}, listed`, isWords: true },
     {
       label: 'Missing answers',

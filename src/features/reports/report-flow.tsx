@@ -24,7 +24,7 @@ export function ReportFlow({ flow, missingWords }: Pick<Report, 'flow'> & { miss
         <Step
           count={flow.trialsCounted}
           of={`of ${flow.trialsOpened} opened trials counted`}
-          losses={[`${flow.trialsVoid} void`, ...unlocked(flow)]}
+          losses={[`${flow.trialsVoid} void`, ...checkTrials(flow), ...unlocked(flow)]}
         />
         <Step
           count={flow.answersExpected - flow.answersMissing}
@@ -36,9 +36,14 @@ export function ReportFlow({ flow, missingWords }: Pick<Report, 'flow'> & { miss
   );
 }
 
+/** Check trials are told apart from those that the result counts. */
+function checkTrials({ trialsChecked }: Report['flow']): string[] {
+  return trialsChecked === 0 ? [] : [`${trialsChecked} check trials, reported apart`];
+}
+
 /** A trial that was open when its session was abandoned is neither locked nor void. */
-function unlocked({ trialsOpened, trialsVoid, trialsCounted }: Report['flow']): string[] {
-  const count = trialsOpened - trialsVoid - trialsCounted;
+function unlocked({ trialsOpened, trialsVoid, trialsCounted, trialsChecked }: Report['flow']): string[] {
+  const count = trialsOpened - trialsVoid - trialsCounted - trialsChecked;
   return count > 0 ? [`${count} never locked`] : [];
 }
 

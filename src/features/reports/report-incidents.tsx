@@ -44,7 +44,8 @@ export function ReportIncidents({ voids, missing, deviations, missingWords }: In
 }
 
 function trialName({ session, trial }: { session: number; trial: number }): string {
-  return `Session ${session}, trial ${trial}`;
+  const name = trial > 0 ? `trial ${trial}` : trial === 0 ? 'familiarisation' : `practice ${-trial}`;
+  return `Session ${session}, ${name}`;
 }
 
 function Incident({ title, none, children }: { title: string; none: string; children: ReactNode[] }) {

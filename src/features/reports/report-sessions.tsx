@@ -38,7 +38,7 @@ export function ReportSessions({ sessions, cables, method }: ReportSessionsProps
 }
 
 function SessionHead({ session }: { session: Session }) {
-  const { number, phase, room, startedAt, endedAt, listeners, drawn, reason, handling } = session;
+  const { number, phase, room, startedAt, endedAt, listeners, training, drawn, reason, handling } = session;
   return (
     <div className="flex flex-col gap-0.5">
       <h3 className="text-lg">
@@ -52,6 +52,7 @@ function SessionHead({ session }: { session: Session }) {
           ...(endedAt === null ? [] : [`ended ${formatDateTime(endedAt)}`]),
         ].join(', ')}
       </p>
+      <TrainingLine {...training} />
       {drawn === null ? null : <p className="text-soft">{drawn}</p>}
       {handlingWords(handling).map((words) => (
         <p key={words} className="text-soft">
@@ -61,6 +62,17 @@ function SessionHead({ session }: { session: Session }) {
       {reason === null ? null : <p className="font-semibold">Reason: {reason}</p>}
     </div>
   );
+}
+
+/** What was heard before the first trial and never counted. */
+function TrainingLine({ labelled, blind, feedback }: Session['training']) {
+  const parts = [
+    ...(labelled === 0 ? [] : [`both cables labelled, ${labelled === 1 ? 'once' : `${labelled} times`}`]),
+    ...(blind === 0 ? [] : [`${formatCount(blind, 'blind practice trial')}`]),
+    ...(feedback === 0 ? [] : [`${formatCount(feedback, 'practice trial')} with feedback on known differences`]),
+  ];
+  if (parts.length === 0) return null;
+  return <p className="text-soft">Heard first, not counted: {parts.join('; ')}.</p>;
 }
 
 /** A trial that never locked stays an open ring. */

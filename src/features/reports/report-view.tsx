@@ -12,6 +12,8 @@ import { ReportFigures } from './report-figures.tsx';
 import { ReportFlow } from './report-flow.tsx';
 import { ReportHeads } from './report-heads.tsx';
 import { ReportIncidents } from './report-incidents.tsx';
+import { ReportKnownDifferences } from './report-known-differences.tsx';
+import { ReportLevels } from './report-levels.tsx';
 import { ReportListeners } from './report-listeners.tsx';
 import { ReportProtocol } from './report-protocol.tsx';
 import { ReportRecord } from './report-record.tsx';
@@ -23,12 +25,14 @@ type ReportViewProps = {
   back: { to: string; label: string };
   /** What can be done with the result, beside printing it. */
   actions?: ReactNode;
+  /** What the cables are made of, where whoever reads may see it. */
+  compared?: ReactNode;
   /** Where keys, signatures and tokens can be downloaded. */
   proofs: string;
 };
 
 /** The finding first, then what it rests on, down to every answer. */
-export function ReportView({ report, back, actions, proofs }: ReportViewProps) {
+export function ReportView({ report, back, actions, compared, proofs }: ReportViewProps) {
   const { result, cables } = report;
   const method = methodOf(result.method);
   const portrait = method.portray(result, cables);
@@ -48,8 +52,10 @@ export function ReportView({ report, back, actions, proofs }: ReportViewProps) {
       </div>
       <ReportDistribution nullDistribution={report.nullDistribution} distribution={portrait.distribution} />
       <ReportListeners listeners={portrait.listeners} />
+      <ReportKnownDifferences known={report.knownDifferences} method={method} />
       <ReportExcerpts byExcerpt={report.byExcerpt} />
       <ReportChecks checks={portrait.checks} />
+      {report.levels === null ? null : <ReportLevels levels={report.levels} />}
       <ReportCueAudit audit={report.cueAudit} />
       <ReportFlow flow={report.flow} missingWords={result.missingAnswers} />
       <ReportIncidents
@@ -59,6 +65,7 @@ export function ReportView({ report, back, actions, proofs }: ReportViewProps) {
         missingWords={result.missingAnswers}
       />
       <ReportSessions sessions={report.sessions} cables={cables} method={method} />
+      {compared}
       <ReportProtocol protocol={report.protocol} />
       <ReportRecord record={report.record} />
       <ReportHeads record={report.record} proofs={proofs} />

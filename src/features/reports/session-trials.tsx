@@ -34,15 +34,18 @@ function columnsFor({ trials }: Session, cables: Report['cables'], method: Metho
       key: 'trial',
       header: 'Trial',
       isRowHeader: true,
-      cell: ({ trial, outcome }) => `${trial}${outcomeWords[outcome]}`,
+      cell: ({ trial, outcome, check }) => `${trial}${outcomeWords[outcome]}${check === null ? '' : `, ${check.name}`}`,
     },
     { key: 'excerpt', header: 'Excerpt', cell: ({ excerpt }) => excerpt },
-    { key: 'truth', header: words.drawnHeader, cell: ({ truth }) => words.drawn(truth, cables) },
+    { key: 'truth', header: words.drawnHeader, cell: ({ truth, check }) => words.drawn(truth, check?.pair ?? cables) },
     ...optionsIn(trials, method).map((option) => ({
       key: option.value,
       header: words.answeredHeader(option),
       cell: (trial: Trial) => (
-        <Labels of={answeredIn(trial, option.value)} isRight={words.isRight?.(option.value, trial.truth) ?? false} />
+        <Labels
+          of={answeredIn(trial, option.value)}
+          isRight={isScored(trial) && (words.isRight?.(option.value, trial.truth) ?? false)}
+        />
       ),
     })),
     ...(hasMissing
@@ -55,6 +58,9 @@ function columnsFor({ trials }: Session, cables: Report['cables'], method: Metho
       : []),
   ];
 }
+
+/** The same with the same has no right answer. */
+const isScored = ({ check }: Trial) => check === null || check.pair[0] !== check.pair[1];
 
 /** The answers that every study of the method offers, and of the others those that were given. */
 function optionsIn(trials: readonly Trial[], method: Method): readonly AnswerOption[] {
@@ -84,6 +90,8 @@ function Labels({ of, isRight = false }: { of: readonly string[]; isRight?: bool
 }
 
 /** A void trial is shown, answers and all, and does not count. */
-function countedOf({ outcome, answers, truth }: Trial, method: Method): string {
+function countedOf(trial: Trial, method: Method): string {
+  const { outcome, answers, truth } = trial;
+  if (outcome === 'locked' && !isScored(trial)) return 'no right answer';
   return outcome === 'locked' ? method.trials.count(answers, truth) : 'not counted';
 }

@@ -28,6 +28,8 @@ const anything: fc.Arbitrary<SessionCommand> = fc.oneof(
     verdict: fc.constantFrom('wanted' as const, 'other-code' as const, 'other-study' as const),
   }),
   fc.constant({ kind: 'confirm-by-hand' as const, reason: 'torn' }),
+  fc.constant({ kind: 'begin-familiarisation' as const }),
+  fc.constant({ kind: 'begin-practice' as const, form: 'blind' as const, step: null }),
   fc.constant({ kind: 'undo-step' as const }),
   fc.constant({ kind: 'pause' as const, reason: 'break' as const }),
   fc.constant({ kind: 'resume' as const }),
@@ -57,7 +59,7 @@ const move: fc.Arbitrary<Move> = fc.oneof(
 function goOn(desk: MachineSession): void {
   const { trial, paused, plan } = desk.state;
   if (paused !== null) desk.do({ kind: 'resume' });
-  else if (trial === null) desk.do({ kind: desk.state.familiarised ? 'begin-trial' : 'begin-familiarisation' });
+  else if (trial === null) desk.do({ kind: desk.state.familiarisations > 0 ? 'begin-trial' : 'begin-familiarisation' });
   else if (trial.stage !== 'change') {
     desk.now = Math.max(desk.now, trial.endsAt ?? desk.now);
     desk.do({ kind: 'tick' });
@@ -110,14 +112,14 @@ function keysOf(value: unknown, keys = new Set<string>()): Set<string> {
 
 // A new field of a view is listed here once somebody has asked whether whoever gets it may know it.
 const inBoth =
-  'audience now title session phase paused course trial number of familiarisation stage presentationNumber presentations endsAt state seat rehearsal text';
+  'audience now title session phase paused course trial number of familiarisation stage presentationNumber presentations endsAt state seat rehearsal text practice';
 const listenersFields = new Set(
-  `${inBoth} sessionId contributes revealWanted left takesPart presentation spoken held question explanation announcement options value letter sentence short confidence lastLock lastOutcome outcome counted requests`.split(
+  `${inBoth} sessionId contributes revealWanted left takesPart presentation spoken held question explanation announcement options value letter sentence short confidence lastLock lastOutcome outcome counted feedback told requests`.split(
     ' ',
   ),
 );
 const proctorsFields = new Set(
-  `${inBoth} version room method rig cautions cautionsConfirmed steps kind leastS act how done reason since join dueAt revealed familiarised code excerpt stepsDone step stepEndsAt scannedEnds undo longChange answered expected nextTrial scans made byHand wrong inventory found foreign isEnded missing seats place awaySince late record entries sessionEntries demo levels handling checks check at isIn due bar excerptStart excerptS onRequest`.split(
+  `${inBoth} version room method rig cautions cautionsConfirmed steps kind leastS act how done reason since join dueAt revealed familiarised code excerpt stepsDone step stepEndsAt scannedEnds undo longChange answered expected nextTrial scans made byHand wrong inventory found foreign isEnded missing seats place awaySince late record entries sessionEntries demo levels handling checks check at isIn due bar excerptStart excerptS training practised form onRequest`.split(
     ' ',
   ),
 );
@@ -166,7 +168,7 @@ describe('any commands, in any order', () => {
       fc.property(course, (moves) => {
         run(moves, ({ state, method, now }) => {
           views += 1;
-          const phone = { ...context, seat: 'L01', now, held: null, lastLock: null };
+          const phone = { ...context, seat: 'L01', now, held: null, lastLock: null, told: null };
           const forListener = listenerView.parse(listenerViewOf(state, method, phone));
           const presence = seats.map((one) => ({ seat: one, place: '', awaySince: null }));
           const desk = { ...context, room: '', now, code: '417', codesInAll: 2, join: null, presence, entries: 1 };

@@ -125,6 +125,7 @@ const asListener = (state: SessionState) =>
     now: 0,
     held: null,
     lastLock: null,
+    told: null,
   });
 
 describe('a session on request', () => {

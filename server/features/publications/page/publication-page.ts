@@ -1,10 +1,14 @@
 import { notShown, type Publication } from '#shared/contracts/publications.ts';
 import type { Report } from '#shared/contracts/reports.ts';
 import { gapWords, localTimeWords, type SignedHead } from '#shared/contracts/signed-heads.ts';
+import { countsOf, habitsWords, heardWords, pOfStep, secondWords } from '#shared/findings/check-report-words.ts';
 import { momentWords } from '#shared/ledger/moments.ts';
 import { readableFingerprint } from '#shared/ledger/readable-fingerprint.ts';
+import { dbText, exactDbText, handlingWords as levelHandlingWords } from '#shared/levels/level-words.ts';
+import { levelCheckWords } from '#shared/levels/measured-levels.ts';
 import { methodOf } from '#shared/methods/methods.ts';
 import type { Portrait } from '#shared/methods/portrait.ts';
+import { decibels } from '#shared/protocol/protocol-checks.ts';
 import { handlingWords } from '#shared/session/handling.ts';
 import { type Html, html } from './html.ts';
 import { count, facts, frame, list, section, table, utc } from './page-parts.ts';
@@ -59,6 +63,7 @@ function flow({ flow: of, result }: Report): Html {
       ['Trials opened', of.trialsOpened],
       ['Trials void', of.trialsVoid],
       ['Trials counted', of.trialsCounted],
+      ...(of.trialsChecked === 0 ? [] : [['Check trials, reported apart', of.trialsChecked] as [string, number]]),
       ['Answers due', of.answersExpected],
       [`Answers missing, ${result.missingAnswers}`, of.answersMissing],
       ['Listeners', of.listeners],
@@ -68,12 +73,52 @@ function flow({ flow: of, result }: Report): Html {
   );
 }
 
+function levels({ handling, toleranceMilliDb, checks: taken }: NonNullable<Report['levels']>): Html {
+  const rows = taken.map(({ session: number, check, isIn, differenceMilliDb, driftMilliDb, instrument }) => [
+    `Session ${number}, ${levelCheckWords[check]}`,
+    isIn ? 'in' : 'out',
+    exactDbText(differenceMilliDb),
+    driftMilliDb === null ? '' : exactDbText(driftMilliDb),
+    instrument.name,
+  ]);
+  return html`<p class="max-w-3xl">Registered as ${levelHandlingWords[handling]}, tolerance ${dbText(toleranceMilliDb)} between any two codes at 1 kHz. Every reading is in the bundle’s levels.csv.</p>
+    ${table('Level match by session', ['Measured', 'Levels', 'Largest difference, dB', 'Moved since the start, dB', 'Instrument'], rows)}`;
+}
+
 function listeners(report: Report): Html {
   const { columns, rows } = portraitOf(report).listeners;
   return table(
     'By listener',
     ['Listener', ...columns.map(({ header }) => header)],
     rows.map(({ listener, cells }) => [listener, ...cells]),
+  );
+}
+
+function known({ knownDifferences, result }: Report): Html {
+  if (knownDifferences === null) return html``;
+  const { steps, same, sensitiveTo } = knownDifferences;
+  return html`${steps.length === 0 ? null : html`<p class="max-w-3xl">${sensitiveTo === null ? 'The largest step was not heard.' : `Sensitive to ${decibels(sensitiveTo)}, in this set-up.`} Check trials stood among the others and are no part of the result.</p>`}
+    ${
+      steps.length === 0
+        ? null
+        : table(
+            'Steps, each at the registered level, from the largest down',
+            ['Step', 'Trials', 'Answers', 'Exact p', 'Heard'],
+            steps.map((step) => [decibels(step.milliDb), step.trials, countsOf(step), pOfStep(step), heardWords(step)]),
+          )
+    }
+    ${list([habitsWords(same, methodOf(result.method)), ...secondWords(knownDifferences)], '')}`;
+}
+
+function excerpts({ byExcerpt }: Report): Html {
+  return table(
+    'Exploratory: counts alone, no test',
+    ['Excerpt', 'Trials', ...(byExcerpt[0]?.rates.map(({ label }) => label) ?? [])],
+    byExcerpt.map(({ title, trials, rates }) => [
+      title,
+      trials,
+      ...rates.map(({ counted, due }) => `${counted} of ${due}`),
+    ]),
   );
 }
 
@@ -115,8 +160,8 @@ function session({
 }: Report['sessions'][number]): Html {
   const times = `${startedAt === null ? 'never started' : `started ${utc(startedAt)}`}${endedAt === null ? '' : `, ended ${utc(endedAt)}`}`;
   const isAsked = trials.some(({ requested }) => requested !== null);
-  const rows = trials.map(({ trial, outcome, excerpt, truth, answers, requested }) => [
-    trial,
+  const rows = trials.map(({ trial, outcome, excerpt, truth, answers, check, requested }) => [
+    check === null ? trial : `${trial}, ${check.name}`,
     outcome === 'locked' ? 'counted' : outcome,
     excerpt,
     truth,
@@ -225,8 +270,11 @@ export function publicationContent(publication: Publication): Html {
         ])}<h3 class="text-lg">The publisher confirms</h3>${list(confirmations, '')}`,
       )}
       ${section('Check it yourself', verification(publication))}
+      ${report.levels === null ? null : section('Level at the load', levels(report.levels))}
       ${section('From plan to count', flow(report))}
       ${section('By listener', listeners(report))}
+      ${report.knownDifferences === null ? null : section('Known differences', known(report))}
+      ${report.byExcerpt.length < 2 ? null : section('By excerpt', excerpts(report))}
       ${section('Checks of the answers', checks(report))}
       ${section('Cue audit', cueAudit(report))}
       ${section('Every session', html`<ol class="flex flex-col gap-8">${report.sessions.map(session)}</ol>`)}

@@ -6,10 +6,12 @@ import { FormSection } from './form-section.tsx';
 import { PredictedDifference } from './predicted-difference.tsx';
 import { SeparateField } from './separate-field.tsx';
 import type { StudyFormValues } from './study-form-values.ts';
+import { TreatmentChoice, TreatmentFields } from './treatment-fields.tsx';
 
 /** The order of the cables means something only to a method that asks in one direction. */
 export function CableFields({ cables }: { cables: readonly Cable[] }) {
   const { watch } = useFormContext<StudyFormValues>();
+  const isTreatment = watch('treatment') !== undefined;
   const { attribute } = methodOf(watch('method'));
   const lede =
     attribute === null
@@ -17,8 +19,14 @@ export function CableFields({ cables }: { cables: readonly Cable[] }) {
       : 'What listeners hear first is drawn. The order here is the direction of the test, fixed before the first trial.';
   return (
     <FormSection title="The two cables" lede={lede}>
-      <CableChoice index={0} label={attribute?.firstCable ?? 'One cable'} cables={cables} />
+      <TreatmentChoice />
+      <CableChoice
+        index={0}
+        label={isTreatment ? 'The cable' : (attribute?.firstCable ?? 'One cable')}
+        cables={cables}
+      />
       <CableChoice index={1} label="The other cable" cables={cables} />
+      <TreatmentFields />
       <SeparateField />
       <PredictedDifference cables={cables} />
     </FormSection>

@@ -20,6 +20,7 @@ export function MethodFields() {
     setValue('methodSettings', [], { shouldDirty: true });
     setValue('attribute', '', { shouldDirty: true });
     setValue('marginPercent', undefined, { shouldDirty: true });
+    setValue('checks', undefined, { shouldDirty: true });
     setValue('separateSpecimens', false, { shouldDirty: true });
     setValue('onRequest', undefined, { shouldDirty: true });
   };

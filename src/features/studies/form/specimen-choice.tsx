@@ -6,17 +6,17 @@ import { useFieldWiring } from '../../../ui/field-wiring.ts';
 import { Notice } from '../../../ui/notice.tsx';
 import type { StudyFormValues } from './study-form-values.ts';
 
-type SpecimenChoiceProps = { index: 0 | 1; cableName: string; specimens: readonly Specimen[] };
+type Name = `cables.${0 | 1}.specimenIds` | `checks.steps.${number}.specimenIds`;
+type SpecimenChoiceProps = { name: Name; cableName: string; specimens: readonly Specimen[] };
 
 const hint =
   'At least two of each is good practice: with one piece of each cable, a difference between two pieces looks like a difference between two cables.';
 
-export function SpecimenChoice({ index, cableName, specimens }: SpecimenChoiceProps) {
-  const name = `cables.${index}.specimenIds` as const;
-  const { field, fieldState } = useController<StudyFormValues, typeof name>({ name });
+export function SpecimenChoice({ name, cableName, specimens }: SpecimenChoiceProps) {
+  const { field, fieldState } = useController<StudyFormValues, Name>({ name });
   const wiring = useFieldWiring({ hint });
   // One that was archived since is no longer shown; it goes with the next change.
-  const chosen = field.value.filter((id) => specimens.some((specimen) => specimen.id === id));
+  const chosen = (field.value ?? []).filter((id) => specimens.some((specimen) => specimen.id === id));
 
   function toggle(id: string, isChosen: boolean) {
     const others = chosen.filter((other) => other !== id);

@@ -47,9 +47,29 @@ export function newStudyWith(presets: readonly KeptPreset[], chosen: readonly Ca
   const [first, second] = chosen;
   const rig = (first && rigOfKind[first.kind]) ?? newStudyValues.rig;
   const preset = presets.find((kept) => kept.preset.kind === rig)?.preset;
-  const cables: StudyFormValues['cables'] =
-    first === undefined || second === undefined ? newStudyValues.cables : [chosenCable(first), chosenCable(second)];
-  return { ...newStudyValues, rig, cables, ...(preset === undefined ? {} : { rigPreset: preset }) };
+  const base = { ...newStudyValues, rig, ...(preset === undefined ? {} : { rigPreset: preset }) };
+  if (first === undefined || second === undefined) return base;
+  if (first.id === second.id) return { ...base, cables: groupsOf(first), treatment: emptyTreatment };
+  return { ...base, cables: [chosenCable(first), chosenCable(second)] };
+}
+
+/** What is typed of a treatment before anything is. */
+export const emptyTreatment: NonNullable<StudyFormValues['treatment']> = {
+  kind: 'conditioning',
+  what: '',
+  by: '',
+  duration: '',
+  signal: '',
+};
+
+/** The pieces of one cable in two groups: the first half untreated, the others treated. */
+export function groupsOf(cable: Cable): StudyFormValues['cables'] {
+  const { cableId, specimenIds } = chosenCable(cable);
+  const half = Math.ceil(specimenIds.length / 2);
+  return [
+    { cableId, specimenIds: specimenIds.slice(0, half) },
+    { cableId, specimenIds: specimenIds.slice(half) },
+  ];
 }
 
 /** A cable with all its pieces that are in use. */

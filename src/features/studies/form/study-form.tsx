@@ -10,7 +10,9 @@ import { LeaveGuard } from '../../../ui/leave-guard.tsx';
 import { PlanProvider } from '../planner/plan-provider.tsx';
 import { Planner } from '../planner/planner.tsx';
 import { CableFields } from './cable-fields.tsx';
+import { CheckFields } from './check-fields.tsx';
 import { CodeHolderField } from './code-holder-field.tsx';
+import { LevelFields } from './level-fields.tsx';
 import { ListeningFields } from './listening-fields.tsx';
 import { ProgrammeFields } from './programme-fields.tsx';
 import { QuestionFields } from './question-fields.tsx';
@@ -78,7 +80,9 @@ export function StudyForm<Saved>({
             <CableFields cables={cables} />
             <ListeningFields />
             <ProgrammeFields />
+            <CheckFields cables={cables} />
             <RigFields presets={rigPresets} presetsTo={rigPresetsTo} />
+            <LevelFields />
             <CodeHolderField members={members} isManager={isManager} />
           </div>
           <Planner />

@@ -19,12 +19,14 @@ type StudyOverviewProps = {
   onDiscarded: () => void;
   onClosed: () => void;
   publishing: StudyNextStepProps['publishing'];
+  /** What its cables let expect, as their pages know them. */
+  comparison: ReactNode;
   /** The table of its sessions. */
   sessions: ReactNode;
 };
 
 /** A study as its manager follows it: where it stands, what comes next, and what was fixed. */
-export function StudyOverview({ study, places, sessions, ...acts }: StudyOverviewProps) {
+export function StudyOverview({ study, places, sessions, comparison, ...acts }: StudyOverviewProps) {
   const { word, tone, meaning } = stateWords[study.state];
   const isSealed = study.state !== 'draft';
   return (
@@ -49,6 +51,7 @@ export function StudyOverview({ study, places, sessions, ...acts }: StudyOvervie
           <Protocol study={study} />
           <SealFacts study={study} registryTo={places.registry} />
         </div>
+        {comparison}
         <Versions versions={study.versions} />
         {isSealed ? <Deviations deviations={study.deviations} /> : null}
       </div>

@@ -1,8 +1,10 @@
 import { z } from 'zod';
+import { checkStepDraft } from '#shared/contracts/check-draft.ts';
 import { studyDraft } from '#shared/contracts/studies.ts';
 import type { Method, MethodChoices } from '#shared/methods/method.ts';
 import { methodOf } from '#shared/methods/methods.ts';
 import { alphaText } from '#shared/protocol/protocol.ts';
+import { checkTrialsIn } from '#shared/session/trial-kinds.ts';
 import { correctRateOf } from '#shared/statistics/above-guessing.ts';
 import { type PlanFigures, planFigures } from '#shared/statistics/plan-figures.ts';
 import type { StudyFormValues } from '../form/study-form-values.ts';
@@ -22,6 +24,12 @@ const {
   onRequest,
 } = studyDraft.shape;
 
+/** How many check trials there are; which cables they need does not bear on the time. */
+const checkCounts = z.object({
+  steps: z.array(z.object({ trials: checkStepDraft.shape.trials })),
+  same: z.int().min(0),
+});
+
 /** The part of a draft that decides how much listening there is; it is planned as soon as this part is sound. */
 const listening = z.object({
   method,
@@ -36,6 +44,7 @@ const listening = z.object({
   answerS,
   onRequest: onRequest.catch(undefined),
   programme: z.array(z.object({ lengthS: programme.element.shape.lengthS })).min(1),
+  checks: checkCounts.optional().catch(undefined),
 });
 
 export type Plan = {
@@ -44,7 +53,10 @@ export type Plan = {
   /** Whether the level stands for one side or for both together. */
   alternative: 'greater' | 'two-sided';
   sessions: number;
+  /** Check trials included. */
   trialsPerSession: number;
+  /** Of each session. */
+  checkTrials: number;
   /** Over all sessions: what the registered test pools. */
   trials: number;
   listeners: number;
@@ -81,16 +93,20 @@ export function planOf(values: Partial<StudyFormValues>): Plan | null {
   const chosen = methodOf(draft.method);
   const choices = { ...draft, marginPercent: soundMargin(chosen, draft.marginPercent) };
   const { alternative } = chosen.registered(choices);
+  const checkTrials = checkTrialsIn(
+    draft.checks && { steps: draft.checks.steps.map(({ trials: own }) => own), same: draft.checks.same },
+  );
   const asked = chosen.onRequest === null ? undefined : draft.onRequest;
   const figures = planFigures({
     sessions: draft.sessions,
     trials: draft.trials,
+    checkTrials,
     alpha,
     test: chosen.planned,
     listeners: draft.listenersPerSession,
     presentationsPerTrial: asked?.most ?? chosen.presentations.length,
     changeMs: draft.changeS * 1000,
-    listenMs: meanExcerptMs(draft.programme, draft.trials),
+    listenMs: meanExcerptMs(draft.programme, draft.trials + checkTrials),
     answerMs: draft.answerS * 1000,
     resetMs: 0,
     breaks,
@@ -100,7 +116,8 @@ export function planOf(values: Partial<StudyFormValues>): Plan | null {
     choices,
     alternative,
     sessions: draft.sessions,
-    trialsPerSession: draft.trials,
+    trialsPerSession: draft.trials + checkTrials,
+    checkTrials,
     trials: figures.trialsInAll,
     listeners: draft.listenersPerSession,
     alpha: Number(alpha),
@@ -110,6 +127,12 @@ export function planOf(values: Partial<StudyFormValues>): Plan | null {
     minutesPerSession: figures.session.durationMinutes,
     minutes: draft.sessions * figures.session.durationMinutes,
   };
+}
+
+/** With fewer trials of a step over all sessions, no answers could show that it was heard. */
+export function fewestForStep({ method: { planned }, alpha }: Plan): number {
+  for (let trials = 1; ; trials += 1)
+    if (Number(planned.leastPDenominator(trials)) * alpha >= 1 - 1e-9 || trials >= 100) return trials;
 }
 
 /** A margin that the method does not take is a fault of its field; the plan goes on without it. */

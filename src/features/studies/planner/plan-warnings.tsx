@@ -1,5 +1,7 @@
+import { useWatch } from 'react-hook-form';
 import { formatCount, formatNumber } from '../../../lib/format.ts';
 import { Notice } from '../../../ui/notice.tsx';
+import type { StudyFormValues } from '../form/study-form-values.ts';
 import type { GroupPowerSoFar } from './group-power-worker.ts';
 import { usePlan } from './plan-context.ts';
 import { breaks, type Plan, rateOf } from './plan-of.ts';
@@ -10,6 +12,7 @@ import { simulatedShare } from './use-group-simulation.ts';
 /** What the plan cannot show, said before it is sealed. */
 export function PlanWarnings({ plan }: { plan: Plan }) {
   const { found, isCurrent, simulated, aim } = usePlan();
+  const levels = useWatch<StudyFormValues, 'levels'>({ name: 'levels' });
   const words = plan.method.plan;
   const caution = words.caution(plan.choices);
   const margin = marginWarning(plan, isCurrent ? found : null, simulated);
@@ -33,10 +36,12 @@ export function PlanWarnings({ plan }: { plan: Plan }) {
       )}
       <LongSessions plan={plan} />
       {caution === null ? null : <Notice title={caution.title}>{caution.words}</Notice>}
-      <Notice tone="amber" title="Level is not measured here.">
-        If the two cables differ in level at the load, loudness alone may explain what is found. Measure and match it
-        yourself; the report will say “not recorded”.
-      </Notice>
+      {levels === undefined ? (
+        <Notice tone="amber" title="Level is not measured.">
+          If the two cables differ in level at the load, loudness alone may explain what is found, and the finding will
+          say so. Register how level is handled under “Level at the load”.
+        </Notice>
+      ) : null}
     </div>
   );
 }
