@@ -3,7 +3,7 @@ import type { ProctorView } from '../contracts/proctor-live.ts';
 import type { Method } from '../methods/method.ts';
 import { cautionsOf, nextStep, stepEndsAt, stepsOf } from './change-steps.ts';
 import { levelsFor } from './level-view.ts';
-import { canRequest, isOnRequest, requestsLeft, takesAnswers } from './on-request.ts';
+import { canRequest, isOnRequest, requestsLeft, takesAnswers, waitsForListeners } from './on-request.ts';
 import { isTraining } from './practice.ts';
 import {
   activeSeats,
@@ -168,7 +168,7 @@ function seatsFor(state: SessionState, presence: readonly Presence[]): ProctorVi
 
 /** The step that `undo-step` would take back. */
 const undoOf = (trial: OpenTrial) =>
-  trial.stage === 'answering' || trial.answers.length > 0 ? null : (trial.stepsDone.at(-1) ?? null);
+  waitsForListeners(trial) || trial.answers.length > 0 ? null : (trial.stepsDone.at(-1) ?? null);
 
 const asCodes = (codes: readonly string[]) => codes.map((code) => ({ code }));
 
