@@ -17,6 +17,7 @@ import {
   trialsInAll,
 } from './progress.ts';
 import { blockFor, breakFor, exitFor, exitsFor } from './remark-views.ts';
+import { soundFor } from './sound.ts';
 import type { OpenTrial, SessionState } from './state.ts';
 
 // A view is built field by field from nothing; it is never "the state without the secret".
@@ -251,6 +252,7 @@ export function proctorViewOf(state: SessionState, method: Method, context: Proc
     course: courseOf(state),
     seats: seatsFor(state, context.presence),
     levels: levelsFor(state),
+    sound: soundFor(state),
     record: { entries: context.entries, sessionEntries: state.version },
     block: blockFor(state, context.now),
     exit: exitsFor(state),
