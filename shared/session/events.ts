@@ -5,6 +5,7 @@ import { rigPreset } from '../protocol/rig-preset.ts';
 import { waysToRun } from '../protocol/ways-to-run.ts';
 import { blockEvents } from './block-events.ts';
 import { levelEvents } from './level-events.ts';
+import { observerEvents } from './observer-events.ts';
 import { mostPractice, practice } from './practice.ts';
 import { breaksDraft } from './registered-breaks.ts';
 import { scanEvents } from './scan-events.ts';
@@ -112,6 +113,7 @@ export const sessionEvents = {
   'deviation-recorded': z.strictObject({ session: session.nullable(), text: z.string() }),
   ...levelEvents,
   ...blockEvents,
+  ...observerEvents,
   'session-finished': z.strictObject({ session }),
   'session-abandoned': z.strictObject({
     session,

@@ -3,6 +3,7 @@ import type { Blocks } from './blocks.ts';
 import type { SessionPlan } from './events.ts';
 import type { LabelEnd } from './label-text.ts';
 import type { LevelStanding } from './level-progress.ts';
+import type { ObserverState } from './observers.ts';
 import type { Practice } from './practice.ts';
 
 // The state of a session has no cable, no draw and no correctness, and no code but those that an inventory read off the
@@ -90,6 +91,7 @@ export type SessionState = {
   /** How each measurement of levels came out, in order; never a figure. */
   readonly levels: readonly LevelStanding[];
   readonly blocks: Blocks;
+  readonly observers: readonly ObserverState[];
   /** Of what listeners said beside the trials, the leaves. */
   readonly remarks: readonly { readonly seat: string; readonly about: string; readonly leaf: string }[];
 };
