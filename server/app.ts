@@ -20,6 +20,7 @@ import { invitationsRoutes } from './features/invitations/invitations.routes.ts'
 import { levelsRoutes } from './features/levels/levels.routes.ts';
 import { mailRoutes } from './features/mail/mail.routes.ts';
 import { measurementsRoutes } from './features/measurements/measurements.routes.ts';
+import { observersRoutes } from './features/observers/observers.routes.ts';
 import { peopleRoutes } from './features/people/people.routes.ts';
 import { publicPages } from './features/publications/public-pages.ts';
 import { publicationsRoutes } from './features/publications/publications.routes.ts';
@@ -123,6 +124,7 @@ export function createApp(deps: Deps) {
   levelsRoutes(api, access, deps, sittings);
   exposureRoutes(api, access, deps);
   attendancesRoutes(api, access, deps, sittings);
+  observersRoutes(api, access, deps, sittings);
   reportsRoutes(api, access, deps);
   publicationsRoutes(api, access, deps);
   registryRoutes(api, access, deps);

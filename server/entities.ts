@@ -10,6 +10,7 @@ import { Evidence } from './features/evidence/evidence.entity.ts';
 import { Invitation } from './features/invitations/invitation.entity.ts';
 import { LevelDuty } from './features/levels/level-duty.entity.ts';
 import { Measurement } from './features/measurements/measurement.entity.ts';
+import { Observer } from './features/observers/observer.entity.ts';
 import { Membership } from './features/organisations/membership.entity.ts';
 import { Organisation } from './features/organisations/organisation.entity.ts';
 import { PastRole } from './features/organisations/past-role.entity.ts';
@@ -59,6 +60,7 @@ export const entities = [
   Answer,
   Remark,
   PresentationRequest,
+  Observer,
   CodeKey,
   DrawSecret,
   Publication,

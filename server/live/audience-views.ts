@@ -1,12 +1,15 @@
 import { type ListenerView, type LockReceipt, listenerView } from '#shared/contracts/listener-live.ts';
+import { type ObserverView, observerView } from '#shared/contracts/observer-live.ts';
 import { type ProctorView, proctorView } from '#shared/contracts/proctor-live.ts';
 import { isInventoryDue } from '#shared/session/decide-scan.ts';
+import { observerViewOf } from '#shared/session/observer-view.ts';
 import { optionsOf } from '#shared/session/progress.ts';
 import { listenerViewOf, type Presence, proctorViewOf } from '#shared/session/views.ts';
 import type { Deps } from '../deps.ts';
 import { joinOf } from './join.ts';
 import type { Keeper } from './keeper.ts';
 import type { SessionMemory } from './session-memory.ts';
+import type { Watching } from './watchers.ts';
 
 /** What a practice trial with feedback tells one listener. */
 function toldTo({ told, method, state }: SessionMemory, seat: string): ListenerView['told'] {
@@ -67,4 +70,13 @@ export async function consoleViewOf(
       rehearsal: memory.isRehearsal,
     }),
   );
+}
+
+/** What an observer sees now. */
+export function observerPageOf(
+  { state, method, title }: SessionMemory,
+  { label, name }: Watching,
+  now: number,
+): ObserverView {
+  return observerView.parse(observerViewOf(state, method, { title, observer: label, name, now }));
 }

@@ -1,4 +1,5 @@
 import type { HeldAnswer, ListenerCommand, ListenerView } from '#shared/contracts/listener-live.ts';
+import type { ObserverCommand, ObserverView } from '#shared/contracts/observer-live.ts';
 import type { ProctorCommand, ProctorView } from '#shared/contracts/proctor-live.ts';
 import type { RemarkCommand } from '#shared/contracts/remarks.ts';
 import { Problem } from '#shared/problem.ts';
@@ -11,14 +12,14 @@ import { tokenDigest } from '../features/sessions/seats.service.ts';
 import type { Session } from '../features/sessions/session.entity.ts';
 import { sessionById } from '../features/sessions/sessions.store.ts';
 import { type AnswerCommand, answerRow, requireAnswerable, requireLate } from './answers.ts';
-import { consoleViewOf, phoneViewOf } from './audience-views.ts';
+import { consoleViewOf, observerPageOf, phoneViewOf } from './audience-views.ts';
 import { databaseKeeper } from './database-keeper.ts';
 import type { Keeper, Keeping, SeatLink } from './keeper.ts';
 import { remarkRow } from './remarks.ts';
 import { afterRequest, isHeldRequest, type RequestCommand, requestDecided, requestRow } from './requests.ts';
 import { scanned } from './scanning.ts';
 import { afterAnswer, afterEvents, heldOf, loadMemory, type SessionMemory } from './session-memory.ts';
-import { Watchers } from './watchers.ts';
+import { Watchers, type Watching } from './watchers.ts';
 
 /** What means the same whatever has happened since the view it was sent on: a note, and a label held up. */
 const anyTime: readonly ProctorCommand['kind'][] = ['record-deviation', 'scan-label'];
@@ -44,6 +45,7 @@ export class Sitting {
   #queue: Promise<unknown> = Promise.resolve();
   #cancelTimer: () => void = () => {};
   #broken = false;
+  #isStopped = false;
 
   constructor(deps: Deps, memory: SessionMemory, keeper: Keeper) {
     this.#deps = deps;
@@ -74,6 +76,7 @@ export class Sitting {
   }
 
   stop(): void {
+    this.#isStopped = true;
     this.#cancelTimer();
   }
 
@@ -214,6 +217,24 @@ export class Sitting {
     return this.#watchers.addPhone(seat, push, () => this.#later(() => this.#show()));
   }
 
+  /** Presence stands on the record: it is what a signature of the observer is held against. */
+  connectObserver({ label, name }: Watching, push: (view: ObserverView) => void): () => void {
+    // A server that stops takes every page with it; the restart that the record then notes ends presence by itself.
+    const disconnect = this.#watchers.addObserver({ label, name }, push, (isHere) => {
+      if (!this.#isStopped)
+        this.#later(() => this.#do({ kind: isHere ? 'observer-came' : 'observer-went', observer: label }));
+    });
+    this.#later(() => this.#show());
+    return disconnect;
+  }
+
+  /** An observer signs what they watched. */
+  signedBy({ label, name }: Watching, { remarks, isNamed }: ObserverCommand, duties: readonly string[]): Promise<void> {
+    return this.#inTurn(() =>
+      this.#do({ kind: 'observer-signed', observer: label, remarks, name: isNamed ? name : null, duties }),
+    );
+  }
+
   connectConsole(push: (view: ProctorView) => void): () => void {
     const disconnect = this.#watchers.addConsole(push);
     this.#later(() => this.#show());
@@ -224,6 +245,7 @@ export class Sitting {
     await this.#watchers.show(
       (seat) => phoneViewOf(this.#memory, seat, this.#deps.clock.now()),
       () => consoleViewOf(this.#deps, this.#memory, this.#keeper, (seat) => this.#watchers.awaySince(seat)),
+      (observer) => observerPageOf(this.#memory, observer, this.#deps.clock.now()),
     );
   }
 

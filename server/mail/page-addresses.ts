@@ -10,6 +10,7 @@ export const pageAddresses = {
     `${publicUrl}/organisations/${organisationId}/sessions/${sessionId}`,
   proof: ({ publicUrl }: Config, organisationId: string) => `${publicUrl}/organisations/${organisationId}/proof`,
   personalLink: ({ publicUrl }: Config, token: string) => `${publicUrl}/listen/invitation#${token}`,
+  observer: ({ publicUrl }: Config, token: string) => `${publicUrl}/observe#${token}`,
   invitation: ({ publicUrl }: Config, token: string) => `${publicUrl}/invitation#${token}`,
   newPassword: ({ publicUrl }: Config, token: string) => `${publicUrl}/new-password#${token}`,
   forgottenPassword: ({ publicUrl }: Config) => `${publicUrl}/forgotten-password`,

@@ -132,6 +132,19 @@ export const report = z.strictObject({
       z.strictObject({ session: z.int(), break: z.int(), listener: z.string(), fatigue: z.enum(fatigues) }),
     ),
   }),
+  /** Who signed that they watched, by label; by name only where they agreed. */
+  observers: z.array(
+    z.strictObject({
+      session: z.int(),
+      observer: z.string(),
+      name: z.string().nullable(),
+      duties: z.array(z.string()),
+      watched: z.array(z.int()),
+      /** Trials that counted in the session. */
+      of: z.int(),
+      remarks: z.string(),
+    }),
+  ),
   voids: z.array(
     z.strictObject({ session: z.int(), trial: z.int(), reason: z.string(), note: z.string(), answersHeld: z.int() }),
   ),

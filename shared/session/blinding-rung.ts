@@ -1,11 +1,14 @@
 import type { Entry } from '../ledger/chain.ts';
 import type { Method } from '../methods/method.ts';
+import { witnessOf } from './observers.ts';
 import type { SessionState } from './state.ts';
 import { studyEvents } from './study-events.ts';
 
 export type BlindingRung = {
   readonly name: 'open' | 'listener-blind' | 'double-blind to the cable' | 'fully double-blind';
   readonly why: string;
+  /** Whether every session was witnessed; left out below *double-blind*, where no witness could raise it. */
+  readonly isWitnessed?: boolean;
 };
 
 /** Why listeners could have known what they heard, or null: what had to stay sealed was sealed before and opened after. */
@@ -69,15 +72,20 @@ export function blindingRung(
   if (sawCables) return { name: 'listener-blind', why: 'A proctor could see the cables’ pages.' };
   if ([...keyHolders].some((person) => person === manager || owners.includes(person)))
     return { name: 'listener-blind', why: 'The code holder also managed the study or owns the organisation.' };
+  const witness = witnessOf(sessions);
   const never = 'The proctor never saw code key or cable pages.';
-  const unobserved = 'No observer was recorded.';
   const asked = sessions.some(({ plan }) => plan.onRequest !== undefined) ? method.onRequest : null;
   const seated = sessions.filter((session) => session.seats.length > 0);
   if (method.separate !== null && seated.length > 0 && seated.every(({ plan }) => plan.separateSpecimens === true))
     return {
       name: 'fully double-blind',
-      why: [never, method.separate.stillSeen, ...(asked === null ? [] : [asked.stillSeen]), unobserved].join(' '),
+      isWitnessed: witness.isWitnessed,
+      why: [never, method.separate.stillSeen, ...(asked === null ? [] : [asked.stillSeen]), witness.words].join(' '),
     };
   const could = asked?.fitterCouldSee ?? method.fitterCouldSee;
-  return { name: 'double-blind to the cable', why: `${never} ${could} ${unobserved}` };
+  return {
+    name: 'double-blind to the cable',
+    isWitnessed: witness.isWitnessed,
+    why: `${never} ${could} ${witness.words}`,
+  };
 }

@@ -16,6 +16,7 @@ import {
 } from './decide-scan.ts';
 import type { PayloadOf, SessionEvent, SessionEventKind } from './events.ts';
 import type { LabelEnd } from './label-text.ts';
+import { decideObserver, type ObserverSessionCommand } from './observers.ts';
 import { type RequestCommand, request, waitsForListeners } from './on-request.ts';
 import { excerptOfPractice, isTraining, practiceAsked } from './practice.ts';
 import { activeSeats, excerptOf, listeningMayStartAt, nextTrial, openAnswers, trialsInAll } from './progress.ts';
@@ -51,6 +52,7 @@ export type SessionCommand =
   | { kind: 'note-late-answer'; seat: string; trial: number; leaf: string }
   | { kind: 'note-restart' }
   | RemarkKept
+  | ObserverSessionCommand
   | Extract<LevelCommand, { kind: 'record-levels' }>
   | { kind: 'tick' };
 
@@ -291,6 +293,10 @@ export function decide(state: SessionState, command: SessionCommand, now: number
       const noted = state.late.some((late) => late.trial === trial && late.seat === seat);
       return noted ? [] : [emit('answer-late', { trial, seat, leaf })];
     }
+    case 'observer-came':
+    case 'observer-went':
+    case 'observer-signed':
+      return decideObserver(state, command, emit);
     case 'keep-remark':
       return keepRemark(state, command, emit);
     case 'note-restart':

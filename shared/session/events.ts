@@ -5,6 +5,7 @@ import { rigPreset } from '../protocol/rig-preset.ts';
 import { waysToRun } from '../protocol/ways-to-run.ts';
 import { blockEvents } from './block-events.ts';
 import { levelEvents } from './level-events.ts';
+import { observerEvents } from './observer-events.ts';
 import { mostPractice, practice } from './practice.ts';
 import { breaksDraft } from './registered-breaks.ts';
 import { scanEvents } from './scan-events.ts';
@@ -114,6 +115,7 @@ export const sessionEvents = {
   ...levelEvents,
   ...soundEvents,
   ...blockEvents,
+  ...observerEvents,
   'session-finished': z.strictObject({ session }),
   'session-abandoned': z.strictObject({
     session,

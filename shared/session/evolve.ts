@@ -2,6 +2,7 @@ import type { Method } from '../methods/method.ts';
 import { blocksAfter, noBlocks } from './blocks.ts';
 import { stepKindsOf } from './change-steps.ts';
 import type { SessionEvent } from './events.ts';
+import { observersAfter } from './observers.ts';
 import { isOnRequest, waitsForListeners } from './on-request.ts';
 import { practiceTrial } from './practice.ts';
 import { presentationsOf } from './progress.ts';
@@ -214,6 +215,9 @@ function fold(state: SessionState, event: SessionEvent, method: Method): Folded 
       const { seat, about, leaf } = event.payload;
       return { ...state, remarks: [...state.remarks, { seat, about, leaf }] };
     }
+    case 'observer-came':
+    case 'observer-went':
+    case 'observer-signed':
     case 'sitting-began':
     case 'deviation-recorded':
       return state;
@@ -263,10 +267,16 @@ export function evolve(state: SessionState | null, event: SessionEvent, method: 
       levels: [],
       sound: null,
       blocks: noBlocks,
+      observers: [],
       remarks: [],
     };
   }
-  return { ...fold(state, event, method), blocks: blocksAfter(state, event), version: state.version + 1 };
+  return {
+    ...fold(state, event, method),
+    blocks: blocksAfter(state, event),
+    observers: observersAfter(state, event),
+    version: state.version + 1,
+  };
 }
 
 /** The state after all of a session's events, in order; null when there are none. */

@@ -4,6 +4,7 @@ import type { Blocks } from './blocks.ts';
 import type { SessionPlan } from './events.ts';
 import type { LabelEnd } from './label-text.ts';
 import type { LevelStanding } from './level-progress.ts';
+import type { ObserverState } from './observers.ts';
 import type { Practice } from './practice.ts';
 
 // The state of a session has no cable, no draw and no correctness, and no code but those that an inventory read off the
@@ -93,6 +94,7 @@ export type SessionState = {
   /** How loud it is at the listening position, as it was last recorded. */
   readonly sound: SoundLevel | null;
   readonly blocks: Blocks;
+  readonly observers: readonly ObserverState[];
   /** Of what listeners said beside the trials, the leaves. */
   readonly remarks: readonly { readonly seat: string; readonly about: string; readonly leaf: string }[];
 };

@@ -9,6 +9,7 @@ export const paths = {
   kit: () => '/kit',
   account: () => '/account',
   invitation: () => '/invitation',
+  observe: () => '/observe',
   firstOwner: () => '/first-owner',
   forgottenPassword: () => '/forgotten-password',
   newPassword: () => '/new-password',

@@ -72,6 +72,7 @@ const plainPages: RouteObject[] = [
 /** The console fills the window and brings its own dim layout. */
 const windowPages: RouteObject[] = [
   { path: paths.console(organisationId, id), lazy: () => import('../pages/console-page.tsx') },
+  { path: paths.observe(), lazy: () => import('../pages/observe-page.tsx') },
   ...(import.meta.env.DEV ? [{ path: paths.kit(), lazy: () => import('../pages/kit-page.tsx') }] : []),
 ];
 

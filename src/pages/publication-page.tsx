@@ -18,6 +18,7 @@ import { ReportHeads } from '../features/reports/report-heads.tsx';
 import { ReportIncidents } from '../features/reports/report-incidents.tsx';
 import { ReportKnownDifferences } from '../features/reports/report-known-differences.tsx';
 import { ReportListeners } from '../features/reports/report-listeners.tsx';
+import { ReportObservers } from '../features/reports/report-observers.tsx';
 import { ReportProtocol } from '../features/reports/report-protocol.tsx';
 import { ReportSaid } from '../features/reports/report-said.tsx';
 import { ReportSessions } from '../features/reports/report-sessions.tsx';
@@ -66,6 +67,7 @@ export function Component() {
       <ReportChecks checks={portrait.checks} />
       <ReportCueAudit audit={report.cueAudit} />
       <ReportSaid said={report.said} />
+      <ReportObservers observers={report.observers} />
       <ReportFlow flow={report.flow} missingWords={report.result.missingAnswers} />
       <ReportIncidents
         voids={report.voids}

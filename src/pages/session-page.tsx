@@ -7,6 +7,8 @@ import { AttendanceTable } from '../features/attendances/attendance-table.tsx';
 import { countWords } from '../features/attendances/attendance-words.ts';
 import { attendanceQueries } from '../features/attendances/attendances.queries.ts';
 import { InviteListeners } from '../features/attendances/invite-listeners.tsx';
+import { ObserverList } from '../features/observers/observer-list.tsx';
+import { observerQueries } from '../features/observers/observers.queries.ts';
 import { CancelSession } from '../features/sessions/cancel-session.tsx';
 import { MoveSession } from '../features/sessions/move-session.tsx';
 import { RehearseButton } from '../features/sessions/rehearse-button.tsx';
@@ -31,6 +33,7 @@ export async function loader({ params, request }: LoaderFunctionArgs) {
   const [attendances] = await Promise.all([
     queryClient.ensureQueryData(attendanceQueries.list(organisationId, id, queryIn(url.searchParams))),
     queryClient.ensureQueryData(sessionQueries.detail(organisationId, id)),
+    queryClient.ensureQueryData(observerQueries.list(organisationId, id)),
   ]);
   const beyond = lastPageAddress(url, attendances);
   return beyond === null ? null : redirect(beyond);
@@ -46,6 +49,7 @@ export function Component() {
   const query = queryIn(search);
   const { data: session } = useSuspenseQuery(sessionQueries.detail(organisationId, id));
   const { data: attendances } = useSuspenseQuery(attendanceQueries.list(organisationId, id, query));
+  const { data: observers } = useSuspenseQuery(observerQueries.list(organisationId, id));
   const isPlanned = session.phase === 'planned';
   const canChange = isManaging(role);
   const isLed = session.proctorId === person.id;
@@ -108,6 +112,12 @@ export function Component() {
             empty={query.q === '' ? <NobodyYet isPlanned={isPlanned} canChange={canChange} /> : <NoneFound />}
           />
         </section>
+        <ObserverList
+          organisationId={organisationId}
+          sessionId={id}
+          rows={observers.rows}
+          canChange={canChange && session.phase !== 'finished' && session.phase !== 'abandoned'}
+        />
       </div>
     </>
   );

@@ -86,6 +86,15 @@ describe.each(methodIds)('what leaves the server before closing, %s', (id) => {
       expect([...phones.flat(), ...proctor, ...mails].filter((text) => text.includes(secretTreatment))).toEqual([]);
   });
 
+  it.each([1, 2, 3])(
+    'is the same for an observer, whatever the secrets, and has no code in it (run %i) [B1] [S125]',
+    (index) => {
+      expect(other(index).observer).toEqual(other(0).observer);
+      expect(other(0).observer.length).toBeGreaterThan(40);
+      expect(other(0).observer.filter((text) => /"code"|"levels"|"choice"/.test(text))).toEqual([]);
+    },
+  );
+
   it('has nothing of what listeners said beside the trials, for anybody [S115]', () => {
     for (const { phones, proctor, manager, mails } of runs)
       expect(

@@ -3,9 +3,9 @@ import { expect } from 'vitest';
 import type { StudyDraft } from '#shared/contracts/studies.ts';
 import { CodeKey } from '../../server/blind/code-key.entity.ts';
 import { HandClock } from '../../server/demo/hand-clock.ts';
-import { linkTokenOf } from '../../server/features/attendances/personal-link.ts';
+import { linkTokenOf, observerTokenOf } from '../../server/features/attendances/personal-link.ts';
 import type { Ladder } from './check-cables.ts';
-import { Console, Phone } from './live.ts';
+import { Console, ObserverPage, Phone } from './live.ts';
 import { makeOrganisation, readyStudy } from './people.ts';
 import { repeatableRandom } from './random.ts';
 import { begin, presentTrial, type Scan, scanBothEnds } from './run-session.ts';
@@ -28,7 +28,14 @@ export type Asked = {
   /** What the draw decided, trial by trial, read from the codes that were fitted. */
   drawn: (codes: readonly string[], trials: readonly string[][]) => string;
 };
-export type Run = { phones: string[][]; manager: string[]; mails: string[]; proctor: string[]; codes: string[][] };
+export type Run = {
+  phones: string[][];
+  observer: string[];
+  manager: string[];
+  mails: string[];
+  proctor: string[];
+  codes: string[][];
+};
 
 /** What every listener says of their own, for nobody to read before closing. */
 export const secretRemark = 'The bass was drier.';
@@ -118,6 +125,10 @@ export async function blindRun(
   await study.manager.post(invited).send({ addresses: 'ada@listeners.example' }).expect(200);
   for (const { id } of (await study.manager.get(invited)).body.rows) links.push(linkTokenOf(server.deps.config, id));
   await look();
+  const watchers = `${study.base}/sessions/${study.sessionId}/observers`;
+  const asked = { name: 'Ada Brook', email: 'ada@witness.example' };
+  const watcher = (await study.manager.post(watchers).send(asked).expect(200)).body.id;
+  const observer = await ObserverPage.open(server.address, observerTokenOf(server.deps.config, watcher));
   const desk = await Console.open(server.address, people.proctor.email, study.sessionId);
   const code = await desk.openSeating();
   const phones: Phone[] = [];
@@ -150,12 +161,13 @@ export async function blindRun(
   const mails: object[] = await server.deps.db.query('select * from outbox order by created_at, recipient, subject');
   const seen: Run = {
     phones: phones.map(({ received }) => received.map(withoutDigests)),
+    observer: observer.received.map(withoutDigests),
     manager: manager.map(withoutDigests),
     mails: mails.map((mail) => withoutDigests(JSON.stringify(mail))),
     proctor: desk.received.map(withoutDigests),
     codes,
   };
-  for (const page of [desk, ...phones]) page.close();
+  for (const page of [desk, observer, ...phones]) page.close();
   await server.stop();
   return seen;
 }

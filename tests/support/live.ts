@@ -3,6 +3,7 @@ import { io, type Socket } from 'socket.io-client';
 import request from 'supertest';
 import type { HeldAnswer, ListenerView } from '#shared/contracts/listener-live.ts';
 import type { Acknowledgement } from '#shared/contracts/live.ts';
+import type { ObserverView } from '#shared/contracts/observer-live.ts';
 import { cautions, type ProctorView } from '#shared/contracts/proctor-live.ts';
 import { contributionCommitment } from '#shared/session/answer-leaf.ts';
 import { password } from './people.ts';
@@ -89,6 +90,15 @@ export class Console extends LivePage<ProctorView> {
     await this.act({ kind: 'confirm-cautions', items: [...cautions] });
     await this.act({ kind: 'open-seating' });
     return until('a session code', () => this.now.join?.code);
+  }
+}
+
+/** A witness's page. */
+export class ObserverPage extends LivePage<ObserverView> {
+  static async open(address: string, token: string): Promise<ObserverPage> {
+    const page = new ObserverPage(address, { audience: 'observer', token });
+    await page.sees('a first view', () => true);
+    return page;
   }
 }
 

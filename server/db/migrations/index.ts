@@ -16,6 +16,7 @@ import { Measurements1796151400000 } from './1796151400000-measurements.ts';
 import { LevelDuties1796152000000 } from './1796152000000-level-duties.ts';
 import { PresentationRequests1796152400000 } from './1796152400000-presentation-requests.ts';
 import { Remarks1796153000000 } from './1796153000000-remarks.ts';
+import { Observers1796153100000 } from './1796153100000-observers.ts';
 import { Evidence1796153400000 } from './1796153400000-evidence.ts';
 
 /** Every migration, oldest first. */
@@ -39,4 +40,5 @@ export const migrations = [
   Remarks1796153000000,
   Evidence1796153400000,
   PresentationRequests1796152400000,
+  Observers1796153100000,
 ];

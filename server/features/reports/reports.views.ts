@@ -34,7 +34,7 @@ import { soundEvents } from '#shared/session/sound.ts';
 import type { SessionState } from '#shared/session/state.ts';
 import type { StudyPayloadOf } from '#shared/session/study-events.ts';
 import { stepOf, type TrialKind } from '#shared/session/trial-kinds.ts';
-import { blockWords, saidOf } from './said.views.ts';
+import { blockWords, observersOf, saidOf } from './said.views.ts';
 
 export type ReportSource = {
   readonly study: { readonly id: string; readonly title: string };
@@ -251,7 +251,7 @@ function conditionsOf({ protocol, entries, states, rung, requests = [] }: Report
     `Changes between presentations lasted ${conduct.changeS} s, real or sham${late}.`,
     ...(asked === null ? [] : [asked]),
     ...soundLines(entries),
-    `Blinding: ${rung.name}. ${rung.why}`,
+    `Blinding: ${rung.name}${rung.isWitnessed ? ', witnessed' : ''}. ${rung.why}`,
   ];
 }
 
@@ -289,6 +289,7 @@ export function reportView(source: ReportSource): Report {
     flow: flowOf(source, counted),
     sessions: states.map((state) => sessionView(source, state, key)),
     said: saidOf(source),
+    observers: observersOf(source),
     voids: voidsOf(entries),
     missing: missingOf(states),
     deviations: entries.flatMap(({ at, kind, payload }) => {

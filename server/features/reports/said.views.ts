@@ -1,5 +1,6 @@
 import type { Report } from '#shared/contracts/reports.ts';
 import { methodOf } from '#shared/methods/methods.ts';
+import { observerEvents } from '#shared/session/observer-events.ts';
 import { questionsAtExit } from '#shared/session/remark-views.ts';
 import type { ReportSource } from './reports.views.ts';
 
@@ -38,4 +39,16 @@ export function blockWords(kind: string, payload: { readonly [name: string]: unk
   if (kind === 'sitting-began')
     return `Sitting ${payload.sitting} of the session began, more than 24 hours after the trial before.`;
   return null;
+}
+
+/** Who signed that they watched, as it stands on the record. */
+export function observersOf({ entries, states }: ReportSource): Report['observers'] {
+  return entries
+    .filter(({ kind }) => kind === 'observer-signed')
+    .map(({ payload }) => {
+      const { session, observer, name, duties, watched, remarks } = observerEvents['observer-signed'].parse(payload);
+      const ended = states.find((state) => state.session === session)?.ended ?? [];
+      const of = ended.filter(({ outcome }) => outcome === 'locked').length;
+      return { session, observer, name, duties, watched, of, remarks };
+    });
 }

@@ -15,6 +15,7 @@ import { ReportIncidents } from './report-incidents.tsx';
 import { ReportKnownDifferences } from './report-known-differences.tsx';
 import { ReportLevels } from './report-levels.tsx';
 import { ReportListeners } from './report-listeners.tsx';
+import { ReportObservers } from './report-observers.tsx';
 import { ReportProtocol } from './report-protocol.tsx';
 import { ReportRecord } from './report-record.tsx';
 import { ReportSaid } from './report-said.tsx';
@@ -59,6 +60,7 @@ export function ReportView({ report, back, actions, compared, proofs }: ReportVi
       {report.levels === null ? null : <ReportLevels levels={report.levels} />}
       <ReportCueAudit audit={report.cueAudit} />
       <ReportSaid said={report.said} />
+      <ReportObservers observers={report.observers} />
       <ReportFlow flow={report.flow} missingWords={result.missingAnswers} />
       <ReportIncidents
         voids={report.voids}

@@ -147,6 +147,16 @@ function cueAudit({ cueAudit: { summary, found, rows } }: Report): Html {
     )}`;
 }
 
+function observers({ observers: signed, rung }: Report): Html {
+  return html`<p class="max-w-3xl">${rung.why}</p>${list(
+    signed.map(
+      ({ session: number, observer, name, duties, watched, of, remarks }) =>
+        `Session ${number}, ${observer}${name === null ? '' : ` (${name})`} watched ${watched.length} of ${of} counted trials${duties.length === 0 ? '' : `, and is ${duties.join(' and ')}: no witness`}.${remarks === '' ? '' : ` “${remarks}”`}`,
+    ),
+    'Nobody signed that they watched.',
+  )}`;
+}
+
 function said({ said: { exits, fatigue } }: Report): Html {
   const lines = exits.map(({ session: number, listener, wentBy, noticed, what, guesses }) => [
     `${listener}, session ${number}`,
@@ -296,6 +306,7 @@ export function publicationContent(publication: Publication): Html {
       ${section('Checks of the answers', checks(report))}
       ${section('Cue audit', cueAudit(report))}
       ${section('What listeners said', said(report))}
+      ${section('Observers', observers(report))}
       ${section('Every session', html`<ol class="flex flex-col gap-8">${report.sessions.map(session)}</ol>`)}
       ${section('What did not go as planned', incidents(report))}
       ${section('The sealed protocol', html`${facts(report.protocol.facts)}${versions(report.protocol.versions)}`)}
