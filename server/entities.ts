@@ -16,6 +16,7 @@ import { PastRole } from './features/organisations/past-role.entity.ts';
 import { Publication } from './features/publications/publication.entity.ts';
 import { RigPreset } from './features/rig-presets/rig-preset.entity.ts';
 import { Answer } from './features/sessions/answer.entity.ts';
+import { Remark } from './features/sessions/remark.entity.ts';
 import { PresentationRequest } from './features/sessions/request.entity.ts';
 import { Seat } from './features/sessions/seat.entity.ts';
 import { Session } from './features/sessions/session.entity.ts';
@@ -56,6 +57,7 @@ export const entities = [
   Session,
   Seat,
   Answer,
+  Remark,
   PresentationRequest,
   CodeKey,
   DrawSecret,

@@ -1,3 +1,4 @@
+import { isClosed } from '#shared/contracts/studies.ts';
 import { canonicalJson, type Json } from '#shared/ledger/canonical-json.ts';
 import { Problem } from '#shared/problem.ts';
 import { sessionPlanOf } from '#shared/protocol/protocol.ts';
@@ -89,6 +90,14 @@ function keepingIn(tx: Tx, deps: Deps): Keeping {
       return { ...seat, label };
     },
     saveAnswer: (row) => store.saveAnswer(tx, row),
+    saveRemark: async (row) => {
+      const session = await store.sessionById(tx, row.sessionId);
+      if (session === null) throw new Problem('not-found', 'There is no such session.');
+      await lockStudyRow(tx, session.studyId);
+      const { state } = await studyById(tx, session.studyId);
+      if (isClosed(state)) throw new Problem('too-late', 'The study is closed; nothing can be added to it any more.');
+      await store.saveRemark(tx, row);
+    },
     saveRequest: (row) => insertRequest(tx, row),
     record: async (memory, events) => {
       const { studyId, id, number } = memory.session;

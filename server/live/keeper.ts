@@ -2,6 +2,7 @@ import type { Entry } from '#shared/ledger/chain.ts';
 import type { SessionEvent } from '#shared/session/events.ts';
 import type { Practice } from '#shared/session/practice.ts';
 import type { Answer } from '../features/sessions/answer.entity.ts';
+import type { Remark } from '../features/sessions/remark.entity.ts';
 import type { PresentationRequest } from '../features/sessions/request.entity.ts';
 import type { Seat } from '../features/sessions/seat.entity.ts';
 import type { SessionMemory } from './session-memory.ts';
@@ -19,6 +20,8 @@ export type Keeping = {
   /** Writes down a seat: under the label that a linked listener has in the study, or the next free one. */
   addSeat(seat: Omit<Seat, 'label'>, link: SeatLink | null): Promise<Seat>;
   saveAnswer(row: Answer): Promise<void>;
+  /** @throws Problem `too-late` once the study is closed */
+  saveRemark(row: Remark): Promise<void>;
   /** Keeps what was asked for, beside the record. */
   saveRequest(row: PresentationRequest): Promise<void>;
   /** Puts events on the record. */

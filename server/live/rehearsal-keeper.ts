@@ -40,6 +40,7 @@ export function rehearsalKeeper(random: Random, code: string, plan: SessionPlan)
     },
     // The memory holds the open trial's answers and requests, and nothing else asks for them.
     saveAnswer: async () => {},
+    saveRemark: async () => {},
     saveRequest: async () => {},
     record: async ({ session }, events) =>
       events.map(({ kind, at, payload }) => {

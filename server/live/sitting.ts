@@ -1,5 +1,6 @@
 import type { HeldAnswer, ListenerCommand, ListenerView } from '#shared/contracts/listener-live.ts';
 import type { ProctorCommand, ProctorView } from '#shared/contracts/proctor-live.ts';
+import type { RemarkCommand } from '#shared/contracts/remarks.ts';
 import { Problem } from '#shared/problem.ts';
 import { decide, type SessionCommand } from '#shared/session/decide.ts';
 import { takesAnswers } from '#shared/session/on-request.ts';
@@ -13,6 +14,7 @@ import { type AnswerCommand, answerRow, requireAnswerable, requireLate } from '.
 import { consoleViewOf, phoneViewOf } from './audience-views.ts';
 import { databaseKeeper } from './database-keeper.ts';
 import type { Keeper, Keeping, SeatLink } from './keeper.ts';
+import { remarkRow } from './remarks.ts';
 import { afterRequest, isHeldRequest, type RequestCommand, requestDecided, requestRow } from './requests.ts';
 import { scanned } from './scanning.ts';
 import { afterAnswer, afterEvents, heldOf, loadMemory, type SessionMemory } from './session-memory.ts';
@@ -98,7 +100,11 @@ export class Sitting {
   }
 
   fromPhone(seat: string, command: Exclude<ListenerCommand, AnswerCommand | RequestCommand>): Promise<void> {
-    return this.#inTurn(() => this.#do({ ...command, seat }));
+    return this.#inTurn(() =>
+      command.kind === 'exit' || command.kind === 'fatigue'
+        ? this.#keepRemark(seat, command)
+        : this.#do({ ...command, seat }),
+    );
   }
 
   /** On request: keeps what was asked for beside the record and its leaf on it, and begins the change. */
@@ -174,6 +180,17 @@ export class Sitting {
     return this.#inTurn(async () => {
       this.#requirePlanned('cancelled');
       await this.#do({ kind: 'abandon', reason });
+    });
+  }
+
+  /** Decided first, so that a refused remark never reaches its table. */
+  #keepRemark(seat: string, command: RemarkCommand): Promise<void> {
+    const row = remarkRow(this.#memory, seat, command);
+    const kept = { kind: 'keep-remark', seat, about: row.about, leaf: row.leaf } as const;
+    decide(this.#memory.state, kept, this.#deps.clock.now());
+    return this.#perform(async (keeping) => {
+      await keeping.saveRemark(row);
+      return { command: kept, result: undefined };
     });
   }
 

@@ -93,9 +93,18 @@ export class BundleReading {
 
 /** Every name that a bundle with these heads and keys may hold. */
 function knownNames(heads: z.output<typeof headsShape>): Set<string> {
-  const tables = ['sessions', 'trials', 'answers', 'listeners', 'requests', 'result', 'levels', 'cues', 'checks'].map(
-    (name) => `${name}.csv`,
-  );
+  const tables = [
+    'sessions',
+    'trials',
+    'answers',
+    'listeners',
+    'requests',
+    'result',
+    'levels',
+    'cues',
+    'remarks',
+    'checks',
+  ].map((name) => `${name}.csv`);
   return new Set([
     ...Object.values(fileNames),
     ...tables,

@@ -7,6 +7,7 @@ import { kindOf, truthOf } from '../session/fitting.ts';
 import type { EndedTrial, SessionState } from '../session/state.ts';
 import { stepOf, type TrialKind } from '../session/trial-kinds.ts';
 import { cuesTable } from './cues-table.ts';
+import { remarksTables } from './remarks-tables.ts';
 
 /** A column with what it means; its name stands in the first row of the file. */
 export type TableField = {
@@ -16,7 +17,17 @@ export type TableField = {
 };
 
 export type Table = {
-  readonly name: 'sessions' | 'trials' | 'answers' | 'listeners' | 'requests' | 'result' | 'levels' | 'cues' | 'checks';
+  readonly name:
+    | 'sessions'
+    | 'trials'
+    | 'answers'
+    | 'listeners'
+    | 'requests'
+    | 'result'
+    | 'levels'
+    | 'cues'
+    | 'remarks'
+    | 'checks';
   readonly title: string;
   readonly fields: readonly TableField[];
   readonly key: readonly string[];
@@ -46,6 +57,7 @@ export function tablesOf(study: StudyReading): Table[] {
     resultTable(study),
     ...levelsTables(study),
     ...cuesTable(study),
+    ...remarksTables(study),
     ...(study.protocol().checks === undefined ? [] : [checksTable(study)]),
   ];
 }

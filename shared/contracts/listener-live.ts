@@ -1,4 +1,5 @@
 import * as z from 'zod/mini';
+import { exitCommand, fatigueCommand } from './remarks.ts';
 
 const hex = (bytes: number) => z.string().check(z.regex(new RegExp(`^[0-9a-f]{${bytes * 2}}$`)));
 const time = z.int();
@@ -23,6 +24,8 @@ export const listenerCommand = z.discriminatedUnion('kind', [
     revision: z.int().check(z.positive(), z.maximum(10_000)),
     salt: hex(16),
   }),
+  exitCommand,
+  fatigueCommand,
   /** On request: what this phone wants to hear next, at its place in the trial, from 0. A repeat is harmless. */
   z.strictObject({
     kind: z.literal('request-presentation'),
@@ -77,6 +80,10 @@ export const listenerView = z.strictObject({
   revealWanted: z.boolean(),
   left: z.boolean(),
   paused: z.nullable(z.enum(['break', 'too-loud', 'trouble'])),
+  /** The exit questions, once they are asked: what to guess, and the leaf of what was answered. */
+  exit: z.nullable(z.strictObject({ guesses: z.array(z.string()), held: z.nullable(z.string()) })),
+  /** The break after a block, and the leaf of how this listener felt. */
+  break: z.nullable(z.strictObject({ number: z.int(), leastEndsAt: time, held: z.nullable(z.string()) })),
   course: z.array(courseRing),
   trial: z.nullable(
     z.strictObject({

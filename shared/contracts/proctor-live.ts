@@ -57,7 +57,12 @@ export const proctorCommand = z.discriminatedUnion('kind', [
     note: say(300),
   }),
   z.strictObject({ kind: z.literal('pause'), ...version, reason: z.enum(pauseReasons) }),
-  z.strictObject({ kind: z.literal('resume'), ...version }),
+  z.strictObject({
+    kind: z.literal('resume'),
+    ...version,
+    /** Why the session goes on before its registered break is over. */
+    reason: say(300).min(3, 'Say why').optional(),
+  }),
   z.strictObject({ kind: z.literal('excuse-seat'), ...version, seat: z.string().max(8) }),
   z.strictObject({
     kind: z.literal('record-deviation'),
@@ -182,6 +187,19 @@ export const proctorView = z.strictObject({
     .nullable(),
   record: z.strictObject({ entries: z.int(), sessionEntries: z.int() }),
   demo: z.boolean(),
+  /** Where breaks are registered: how the block stands, and the break that is on. */
+  block: z
+    .strictObject({
+      trials: z.int(),
+      locked: z.int(),
+      isBreakDue: z.boolean(),
+      break: z
+        .strictObject({ number: z.int(), leastEndsAt: time, why: z.string(), said: z.int(), of: z.int() })
+        .nullable(),
+    })
+    .nullable(),
+  /** How many have answered the exit questions, of how many asked; never what. */
+  exit: z.strictObject({ said: z.int(), of: z.int() }).nullable(),
   /** A run with invented codes, on no record. */
   rehearsal: z.boolean(),
 });

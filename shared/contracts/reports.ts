@@ -8,6 +8,7 @@ import { endpoint } from './endpoint.ts';
 import { organisationParams, thingParams } from './organisation-params.ts';
 import { listQuery, pageOf } from './paging.ts';
 import { protocolDifference } from './protocol-versions.ts';
+import { fatigues } from './remarks.ts';
 import { signedHead } from './signed-heads.ts';
 
 export const reportRow = z.strictObject({
@@ -115,6 +116,22 @@ export const report = z.strictObject({
       ),
     }),
   ),
+  /** What listeners said after the last trial and at breaks, by label: all of it. */
+  said: z.strictObject({
+    exits: z.array(
+      z.strictObject({
+        session: z.int(),
+        listener: z.string(),
+        wentBy: z.string(),
+        noticed: z.enum(['yes', 'no']).nullable(),
+        what: z.string(),
+        guesses: z.array(z.strictObject({ question: z.string(), text: z.string() })),
+      }),
+    ),
+    fatigue: z.array(
+      z.strictObject({ session: z.int(), break: z.int(), listener: z.string(), fatigue: z.enum(fatigues) }),
+    ),
+  }),
   voids: z.array(
     z.strictObject({ session: z.int(), trial: z.int(), reason: z.string(), note: z.string(), answersHeld: z.int() }),
   ),

@@ -4,6 +4,7 @@ import { methodIds, methods } from '../methods/methods.ts';
 import { leastChangeS, rigPreset, rigs } from '../protocol/rig-preset.ts';
 import { faultsOfCables, treatment } from '../protocol/treatment.ts';
 import { faultsOfWays } from '../protocol/ways-to-run.ts';
+import { breaksDraft } from '../session/registered-breaks.ts';
 import { checkDraft, checkFaults } from './check-draft.ts';
 import { endpoint, managers } from './endpoint.ts';
 import { organisationParams, thingParams } from './organisation-params.ts';
@@ -74,6 +75,8 @@ export const studyDraft = z
     confidence: z.boolean(),
     /** How level at the load is handled and measured; left out where it is not. */
     levels: registeredLevels.optional(),
+    /** After how many trials a break comes; left out where none is registered. */
+    breaks: breaksDraft.optional(),
     /** Whether what comes again within a trial is fitted from specimens of its own; left out for no. */
     separateSpecimens: z.boolean().optional(),
     /** A single listener asks for what is presented; left out where everybody hears a fixed order. */

@@ -121,7 +121,7 @@ function inMethodsOrder(
 }
 
 /**
- * Every locked trial of every session with its truth, its answers and its times, in order.
+ * Every locked main trial of every session with its truth, its answers and its times, in order.
  *
  * @param method  the study's
  * @param states  its sessions, replayed from the record

@@ -1,6 +1,7 @@
 import { answerLeaf } from '../session/answer-leaf.ts';
 import type { PayloadOf } from '../session/events.ts';
 import type { SessionState } from '../session/state.ts';
+import { remarkFaults } from './check-remarks.ts';
 import { requestFaults } from './check-requests.ts';
 import { answerName } from './publication-parts.ts';
 import type { StudyReading } from './study-reading.ts';
@@ -34,7 +35,7 @@ export function checkAnswers(study: StudyReading): Verdict {
   const requests = requestFaults(study);
   const asked = requests.count === 0 ? '' : ` ${requests.count} presentations, each as it was asked for.`;
   return {
-    faults: [...faults, ...requests.faults],
+    faults: [...faults, ...requests.faults, ...remarkFaults(study)],
     held: `${locked.size} answers, each as it was when its trial locked.${asked}`,
   };
 }

@@ -10,6 +10,7 @@ export const domains = {
   protocol: 'fairlead/protocol/1',
   entry: 'fairlead/entry/1',
   answer: 'fairlead/answer/1',
+  remark: 'fairlead/remark/1',
   request: 'fairlead/request/1',
   contribution: 'fairlead/contribution/1',
   drawSecret: 'fairlead/draw-secret/1',

@@ -4,6 +4,7 @@ import type { AnswerContent } from '../session/answer-leaf.ts';
 import { revealedDraw } from '../session/counted-trials.ts';
 import type { Draw } from '../session/draw.ts';
 import { sessionsInRecord } from '../session/read-record.ts';
+import type { RemarkContent } from '../session/remark-leaf.ts';
 import type { RequestContent } from '../session/request-leaf.ts';
 import { revealedKey } from '../session/revealed-key.ts';
 import type { SessionState } from '../session/state.ts';
@@ -18,6 +19,8 @@ export type PartName = (typeof partNames)[number];
 export type PublicationParts = { readonly [part in PartName]: unknown } & {
   /** The protocol's versions before the one in force, in order; left out where it was never amended. */
   readonly earlierProtocols?: unknown;
+  /** What listeners said beside the trials; left out where nobody said anything. */
+  readonly remarks?: unknown;
   /** What single listeners asked to hear, with the salts; left out where nothing was asked for. */
   readonly requests?: unknown;
 };
@@ -36,6 +39,8 @@ export type ClosedStudy = {
   readonly earlierProtocols?: readonly Protocol[];
   /** Answers held in time. Those of void trials have no leaf on the record and are left out. */
   readonly answers: readonly AnswerContent[];
+  /** What listeners said beside the trials; those of before there were any have none. */
+  readonly remarks?: readonly RemarkContent[];
   /** What single listeners asked to hear, void trials included. */
   readonly requests?: readonly RequestContent[];
 };
@@ -84,7 +89,7 @@ function inOrder(requests: readonly RequestContent[], states: readonly SessionSt
  * @throws ZodError when the record has no revealed secrets
  */
 export function publicationParts(study: ClosedStudy): PublicationParts {
-  const { entries, protocol, earlierProtocols = [], requests = [] } = study;
+  const { entries, protocol, earlierProtocols = [], requests = [], remarks = [] } = study;
   const method = methodOf(protocol.method);
   const states = sessionsInRecord(entries, method);
   const payloadOf = (wanted: string) => entries.find(({ kind }) => kind === wanted)?.payload;
@@ -104,6 +109,9 @@ export function publicationParts(study: ClosedStudy): PublicationParts {
     secrets,
     draws,
     answers: lockedAnswers(study, sessionIds),
+    ...(remarks.length === 0
+      ? {}
+      : { remarks: remarks.map(({ session, seat, about, said, salt }) => ({ session, seat, about, said, salt })) }),
     ...(requests.length === 0 ? {} : { requests: inOrder(requests, states) }),
     result: payloadOf('result-recorded')?.result ?? null,
   };
@@ -111,7 +119,7 @@ export function publicationParts(study: ClosedStudy): PublicationParts {
 
 /** The document as it is frozen: canonical text, so that one digest names it. */
 export function publicationText(parts: PublicationParts): string {
-  const { record, protocol, earlierProtocols, secrets, draws, answers, requests, result } = parts;
+  const { record, protocol, earlierProtocols, secrets, draws, answers, requests, remarks, result } = parts;
   const whole = {
     format: publicationFormat,
     version: publicationVersion,
@@ -121,6 +129,7 @@ export function publicationText(parts: PublicationParts): string {
     secrets,
     draws,
     answers,
+    ...(remarks === undefined ? {} : { remarks }),
     ...(requests === undefined ? {} : { requests }),
     result,
   };
@@ -148,7 +157,7 @@ export function readPublication(text: string): { parts: PublicationParts } | { f
     return { fault: `This program reads version ${publicationVersion} of the format.` };
   const absent = partNames.filter((name) => !Object.hasOwn(parts, name));
   if (absent.length > 0) return { fault: `It has no ${absent.join(', ')}.` };
-  const known: readonly string[] = [...partNames, 'earlierProtocols', 'requests'];
+  const known: readonly string[] = [...partNames, 'earlierProtocols', 'requests', 'remarks'];
   const unknown = Object.keys(parts).filter((name) => !known.includes(name));
   if (unknown.length > 0) return { fault: `It has a part that is not known: ${unknown.join(', ')}.` };
   return isCanonical(whole, text)

@@ -1,9 +1,11 @@
 import { z } from 'zod';
+import { fatigues } from '../contracts/remarks.ts';
 import type { Method } from '../methods/method.ts';
 import { methodOf } from '../methods/methods.ts';
 import { type Protocol, protocol } from '../protocol/protocol.ts';
 import type { AnswerContent } from '../session/answer-leaf.ts';
 import { sessionsInRecord } from '../session/read-record.ts';
+import type { RemarkContent } from '../session/remark-leaf.ts';
 import type { RequestContent } from '../session/request-leaf.ts';
 import { type RevealedKey, revealedKey } from '../session/revealed-key.ts';
 import type { SessionState } from '../session/state.ts';
@@ -42,6 +44,22 @@ const answer = z.strictObject({
   seat: z.string(),
   choice: z.string(),
   confidence: z.string().nullable(),
+  salt: hex(16),
+});
+
+const remark = z.strictObject({
+  session: z.string(),
+  seat: z.string(),
+  about: z.string(),
+  said: z.union([
+    z.strictObject({
+      wentBy: z.string(),
+      noticed: z.enum(['yes', 'no']).nullable(),
+      what: z.string(),
+      guesses: z.array(z.string()),
+    }),
+    z.strictObject({ fatigue: z.enum(fatigues) }),
+  ]),
   salt: hex(16),
 });
 
@@ -92,6 +110,9 @@ export class StudyReading {
   readonly draws = once((): PublishedDraw[] => read('The draws', z.array(draw), this.parts.draws));
   readonly answers = once((): AnswerContent[] => read('The answers', z.array(answer), this.parts.answers));
 
+  readonly remarks = once((): RemarkContent[] =>
+    this.parts.remarks === undefined ? [] : read('The remarks', z.array(remark), this.parts.remarks),
+  );
   readonly requests = once((): readonly RequestContent[] =>
     this.parts.requests === undefined ? [] : read('The requests', z.array(request).min(1), this.parts.requests),
   );

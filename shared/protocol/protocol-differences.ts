@@ -2,6 +2,7 @@ import type { ProtocolDifference } from '../contracts/protocol-versions.ts';
 import { canonicalJson } from '../ledger/canonical-json.ts';
 import { registeredLevelsText } from '../levels/level-words.ts';
 import { methodOf } from '../methods/methods.ts';
+import { breakFacts } from '../session/registered-breaks.ts';
 import { analysisFacts } from './analysis-facts.ts';
 import { presetFacts } from './preset-facts.ts';
 import type { Protocol } from './protocol.ts';
@@ -63,6 +64,7 @@ function linesOf(protocol: Protocol, nameOf: (person: string) => string): Line[]
     ...presetFacts(conduct.rigPreset),
     { label: 'Chain', value: conduct.chain },
     { label: 'Level at the load', value: registeredLevelsText(conduct.levels) },
+    ...breakFacts(conduct.breaks),
     { label: 'Every change', value: `${conduct.changeS} s, real or not` },
     { label: 'Answer window', value: `${conduct.answerS} s` },
     { label: 'Confidence', value: design.confidence ? 'asked with every answer' : 'not asked' },

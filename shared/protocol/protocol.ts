@@ -6,6 +6,7 @@ import { type RegisteredLevels, registeredLevels } from '../levels/registered-le
 import type { MethodChoices } from '../methods/method.ts';
 import { methodOf } from '../methods/methods.ts';
 import type { SessionPlan } from '../session/events.ts';
+import { breaksDraft } from '../session/registered-breaks.ts';
 import { checkTrialsIn } from '../session/trial-kinds.ts';
 import { type ProtocolCable, protocolCable } from './protocol-cable.ts';
 import { checksFromDraft, protocolChecks, shapeOf } from './protocol-checks.ts';
@@ -52,6 +53,8 @@ export const protocol = z.strictObject({
     programme: z.array(z.strictObject({ title: z.string(), start: z.string(), lengthS: z.int() })),
     /** How level is handled and measured; left out where it is not measured. */
     levels: registeredLevels.optional(),
+    /** After how many trials a break comes and how long it lasts; left out where none is registered. */
+    breaks: breaksDraft.optional(),
   }),
   /** Known differences among the trials; left out where none are registered. */
   checks: protocolChecks.optional(),
@@ -131,6 +134,7 @@ export function protocolFromDraft(
       answerS: draft.answerS,
       programme: draft.programme.map(({ title, start, lengthS }) => ({ title, start, lengthS })),
       ...(draft.levels === undefined ? {} : { levels: inOrder(draft.levels) }),
+      ...(draft.breaks === undefined ? {} : { breaks: draft.breaks }),
     },
     ...(draft.checks === undefined ? {} : { checks: checksFromDraft(draft.checks, fixed.checkCable) }),
     analysis: {
@@ -163,6 +167,7 @@ export function sessionPlanOf({ method, design, conduct, checks }: Protocol): Se
     ...chosenWays(design),
     programme: conduct.programme.map(({ title, start, lengthS }) => ({ title, start, lengthMs: lengthS * 1000 })),
     ...(conduct.levels === undefined ? {} : { levels: conduct.levels }),
+    ...(conduct.breaks === undefined ? {} : { breaks: conduct.breaks }),
   };
 }
 

@@ -1,8 +1,10 @@
 import type { ProctorCommand, ScannedBy } from '../contracts/proctor-live.ts';
 import { Problem } from '../problem.ts';
 import { contributionCommitment } from './answer-leaf.ts';
+import { requireBreak, sittingMs, whyRest } from './blocks.ts';
 import { cautionsOf, isLastStep, nextStep, stepEndsAt } from './change-steps.ts';
 import { type LevelCommand, recordLevels, requireHalfTime, requireLevels, skipLevels } from './decide-levels.ts';
+import { keepRemark, type RemarkKept } from './decide-remarks.ts';
 import {
   decideByHand,
   decideInventoryEnd,
@@ -16,7 +18,7 @@ import type { PayloadOf, SessionEvent, SessionEventKind } from './events.ts';
 import type { LabelEnd } from './label-text.ts';
 import { type RequestCommand, request, waitsForListeners } from './on-request.ts';
 import { excerptOfPractice, isTraining, practiceAsked } from './practice.ts';
-import { activeSeats, excerptOf, listeningMayStartAt, nextTrial, openAnswers } from './progress.ts';
+import { activeSeats, excerptOf, listeningMayStartAt, nextTrial, openAnswers, trialsInAll } from './progress.ts';
 import type { OpenTrial, SessionState } from './state.ts';
 
 type Plain<C> = C extends unknown ? Omit<C, 'expectVersion'> : never;
@@ -47,6 +49,7 @@ export type SessionCommand =
   | { kind: 'note-inventory-end'; codes: readonly string[]; reason: string }
   | { kind: 'note-late-answer'; seat: string; trial: number; leaf: string }
   | { kind: 'note-restart' }
+  | RemarkKept
   | Extract<LevelCommand, { kind: 'record-levels' }>
   | { kind: 'tick' };
 
@@ -74,9 +77,14 @@ function seatsForTrial(state: SessionState): string[] {
   return seats;
 }
 
-function openTrial(state: SessionState, trial: number, emit: Emit): SessionEvent[] {
+function openTrial(state: SessionState, trial: number, now: number, emit: Emit): SessionEvent[] {
   const seats = seatsForTrial(state);
-  return [emit('trial-opened', { trial, excerpt: excerptOf(state, trial), seats })];
+  const { lastEndedAt, sittings } = state.blocks;
+  const isNewSitting = lastEndedAt !== null && now > lastEndedAt + sittingMs;
+  return [
+    ...(isNewSitting ? [emit('sitting-began', { sitting: sittings + 1 })] : []),
+    emit('trial-opened', { trial, excerpt: excerptOf(state, trial), seats }),
+  ];
 }
 
 function confirmStep(state: SessionState, step: string, now: number, emit: Emit): SessionEvent[] {
@@ -101,15 +109,31 @@ function confirmStep(state: SessionState, step: string, now: number, emit: Emit)
   return [emit('listening-started', { trial: number, presentation, lengths })];
 }
 
-function lockTrial(trial: OpenTrial, reason: 'all-in' | 'window-ended', emit: Emit): SessionEvent {
+/** Locks the trial; where that ends a block and trials remain, the break begins at once. */
+function lockTrial(
+  state: SessionState,
+  trial: OpenTrial,
+  reason: 'all-in' | 'window-ended',
+  emit: Emit,
+): SessionEvent[] {
   if (trial.practice !== null) {
     const { number } = trial.practice;
-    return emit('practice-ended', { number, answered: trial.answers.length, of: trial.seats.length });
+    return [emit('practice-ended', { number, answered: trial.answers.length, of: trial.seats.length })];
   }
   const leaves = [...trial.answers].sort((a, b) => (a.seat < b.seat ? -1 : 1));
   const held = new Set(leaves.map((answer) => answer.seat));
   const missing = trial.seats.filter((seat) => !held.has(seat));
-  return emit('trial-locked', { trial: trial.trial, reason, leaves, missing });
+  const locked = emit('trial-locked', { trial: trial.trial, reason, leaves, missing });
+  const { breaks } = state.plan;
+  const isBlockOver = breaks !== undefined && state.blocks.locked + 1 >= breaks.trials;
+  const isLast = state.ended.length + 1 >= trialsInAll(state);
+  return isBlockOver && !isLast ? [locked, emit('paused', { reason: 'break', seat: null })] : [locked];
+}
+
+function resume(state: SessionState, reason: string, now: number, emit: Emit): SessionEvent[] {
+  const rest = whyRest(state, now);
+  if (rest !== null && reason === '') throw new Problem('too-early', rest);
+  return [emit('resumed', rest === null ? {} : { early: reason })];
 }
 
 function fixDraw(state: SessionState, emit: Emit, lastRevealed?: string): SessionEvent {
@@ -143,7 +167,7 @@ function tick(state: SessionState, now: number, emit: Emit): SessionEvent[] {
   if (trial === null || state.paused !== null || trial.endsAt === null || now < trial.endsAt) return [];
   if (trial.stage === 'listening')
     return [emit('listening-ended', { trial: trial.trial, presentation: trial.presentation })];
-  return [lockTrial(trial, openAnswers(state, trial).length === 0 ? 'all-in' : 'window-ended', emit)];
+  return lockTrial(state, trial, openAnswers(state, trial).length === 0 ? 'all-in' : 'window-ended', emit);
 }
 
 function requireSeat(state: SessionState, label: string): void {
@@ -201,7 +225,7 @@ export function decide(state: SessionState, command: SessionCommand, now: number
     case 'begin-familiarisation':
       refuseUnless(isTraining(state), 'wrong-phase', 'The familiarisation is over once the first trial has opened.');
       requireLevels(state);
-      return openTrial(state, 0, emit);
+      return openTrial(state, 0, now, emit);
     case 'begin-practice': {
       const seats = seatsForTrial(state);
       const asked = practiceAsked(state, command);
@@ -211,8 +235,9 @@ export function decide(state: SessionState, command: SessionCommand, now: number
       refuseUnless(state.familiarisations > 0, 'wrong-phase', 'The familiarisation trial comes first.');
       const next = nextTrial(state);
       if (next === null) throw new Problem('wrong-phase', 'Every trial of this session has ended.');
+      requireBreak(state);
       requireHalfTime(state);
-      return openTrial(state, next, emit);
+      return openTrial(state, next, now, emit);
     }
     case 'confirm-step':
       return confirmStep(state, command.step, now, emit);
@@ -236,7 +261,7 @@ export function decide(state: SessionState, command: SessionCommand, now: number
       refuseUnless(state.paused === null, 'wrong-phase', 'The session is paused. Resume it first.');
       const open = openAnswers(state, trial);
       refuseUnless(open.length === 0, 'too-early', `The trial waits for ${open.join(', ')} until its window ends.`);
-      return [lockTrial(trial, 'all-in', emit)];
+      return lockTrial(state, trial, 'all-in', emit);
     }
     case 'void-trial': {
       const { trial, answers } = requireOpenTrial(state);
@@ -254,7 +279,7 @@ export function decide(state: SessionState, command: SessionCommand, now: number
       return [emit('paused', { reason: 'too-loud', seat: command.seat })];
     case 'resume':
       refuseUnless(state.paused !== null, 'wrong-phase', 'The session is not paused.');
-      return [emit('resumed', {})];
+      return resume(state, command.reason ?? '', now, emit);
     case 'leave':
     case 'excuse-seat':
       requirePhase(state, live, 'The session is over.');
@@ -265,6 +290,8 @@ export function decide(state: SessionState, command: SessionCommand, now: number
       const noted = state.late.some((late) => late.trial === trial && late.seat === seat);
       return noted ? [] : [emit('answer-late', { trial, seat, leaf })];
     }
+    case 'keep-remark':
+      return keepRemark(state, command, emit);
     case 'note-restart':
       return (live as readonly string[]).includes(state.phase) ? [emit('server-restarted', {})] : [];
     case 'record-deviation':

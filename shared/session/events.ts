@@ -3,8 +3,10 @@ import { cautions, stepKinds, voidReasons } from '../contracts/proctor-live.ts';
 import { registeredLevels } from '../levels/registered-levels.ts';
 import { rigPreset } from '../protocol/rig-preset.ts';
 import { waysToRun } from '../protocol/ways-to-run.ts';
+import { blockEvents } from './block-events.ts';
 import { levelEvents } from './level-events.ts';
 import { mostPractice, practice } from './practice.ts';
+import { breaksDraft } from './registered-breaks.ts';
 import { scanEvents } from './scan-events.ts';
 import { checkShape } from './trial-kinds.ts';
 
@@ -37,6 +39,8 @@ export const sessionPlan = z.strictObject({
   programme: z.array(z.strictObject({ title: z.string(), start: z.string(), lengthMs: z.int() })),
   /** Left out where levels are not measured. */
   levels: registeredLevels.optional(),
+  /** Left out where no breaks are registered. */
+  breaks: breaksDraft.optional(),
 });
 export type SessionPlan = z.output<typeof sessionPlan>;
 
@@ -101,11 +105,13 @@ export const sessionEvents = {
   }),
   'answer-late': z.strictObject({ session, trial: counted, seat, leaf: hex32 }),
   paused: z.strictObject({ session, reason: z.enum(['break', 'too-loud', 'trouble']), seat: seat.nullable() }),
-  resumed: z.strictObject({ session }),
+  /** `early`: why it went on before the registered break was over. */
+  resumed: z.strictObject({ session, early: z.string().optional() }),
   'server-restarted': z.strictObject({ session }),
   'listener-left': z.strictObject({ session, seat, by: z.enum(['listener', 'proctor']) }),
   'deviation-recorded': z.strictObject({ session: session.nullable(), text: z.string() }),
   ...levelEvents,
+  ...blockEvents,
   'session-finished': z.strictObject({ session }),
   'session-abandoned': z.strictObject({
     session,

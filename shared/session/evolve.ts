@@ -1,4 +1,5 @@
 import type { Method } from '../methods/method.ts';
+import { blocksAfter, noBlocks } from './blocks.ts';
 import { stepKindsOf } from './change-steps.ts';
 import type { SessionEvent } from './events.ts';
 import { isOnRequest, waitsForListeners } from './on-request.ts';
@@ -209,6 +210,11 @@ function fold(state: SessionState, event: SessionEvent, method: Method): Folded 
     }
     case 'listener-left':
       return { ...state, seats: state.seats.map((s) => (s.seat === event.payload.seat ? { ...s, left: true } : s)) };
+    case 'remark-kept': {
+      const { seat, about, leaf } = event.payload;
+      return { ...state, remarks: [...state.remarks, { seat, about, leaf }] };
+    }
+    case 'sitting-began':
     case 'deviation-recorded':
       return state;
     case 'levels-measured': {
@@ -251,9 +257,11 @@ export function evolve(state: SessionState | null, event: SessionEvent, method: 
       inventory: { found: [], foreign: [], ended: null },
       late: [],
       levels: [],
+      blocks: noBlocks,
+      remarks: [],
     };
   }
-  return { ...fold(state, event, method), version: state.version + 1 };
+  return { ...fold(state, event, method), blocks: blocksAfter(state, event), version: state.version + 1 };
 }
 
 /** The state after all of a session's events, in order; null when there are none. */

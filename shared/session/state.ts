@@ -1,4 +1,5 @@
 import type { ChangeStep, VoidReason } from '../contracts/proctor-live.ts';
+import type { Blocks } from './blocks.ts';
 import type { SessionPlan } from './events.ts';
 import type { LabelEnd } from './label-text.ts';
 import type { LevelStanding } from './level-progress.ts';
@@ -88,6 +89,9 @@ export type SessionState = {
   readonly late: readonly { readonly trial: number; readonly seat: string }[];
   /** How each measurement of levels came out, in order; never a figure. */
   readonly levels: readonly LevelStanding[];
+  readonly blocks: Blocks;
+  /** Of what listeners said beside the trials, the leaves. */
+  readonly remarks: readonly { readonly seat: string; readonly about: string; readonly leaf: string }[];
 };
 
 /** How long a phone may take to reveal its contribution before it is dropped. */

@@ -16,6 +16,7 @@ import {
   presentationsOf,
   trialsInAll,
 } from './progress.ts';
+import { blockFor, breakFor, exitFor, exitsFor } from './remark-views.ts';
 import type { OpenTrial, SessionState } from './state.ts';
 
 // A view is built field by field from nothing; it is never "the state without the secret".
@@ -84,6 +85,8 @@ export function listenerViewOf(state: SessionState, method: Method, context: Lis
     revealWanted: state.phase === 'revealing' && own?.contributes === true && own.revealed === null,
     left: own?.left ?? true,
     paused: state.paused?.reason ?? null,
+    exit: exitFor(state, method, seat),
+    break: breakFor(state, seat),
     course: courseOf(state),
     trial:
       trial === null
@@ -249,6 +252,8 @@ export function proctorViewOf(state: SessionState, method: Method, context: Proc
     seats: seatsFor(state, context.presence),
     levels: levelsFor(state),
     record: { entries: context.entries, sessionEntries: state.version },
+    block: blockFor(state, context.now),
+    exit: exitsFor(state),
     demo: context.demo,
     rehearsal: context.rehearsal,
   };

@@ -2,10 +2,11 @@ import type { ReactNode } from 'react';
 import type { ListenerView } from '#shared/contracts/listener-live.ts';
 import { CopyButton } from '../ui/copy-button.tsx';
 import { CourseLine } from '../ui/course-line.tsx';
+import { ExitQuestions } from './exit-questions.tsx';
 import { PhonePage } from './phone-page.tsx';
 import { DisputedList, ReceiptList } from './receipt-list.tsx';
 import { receiptsText } from './receipts-text.ts';
-import type { SeatSnapshot } from './seat.ts';
+import type { Seat, SeatSnapshot } from './seat.ts';
 
 function headingOf({ left, phase, rehearsal }: ListenerView): { title: string; detail: string } {
   if (rehearsal && !left)
@@ -23,10 +24,10 @@ function headingOf({ left, phase, rehearsal }: ListenerView): { title: string; d
   };
 }
 
-type EndPageProps = { view: ListenerView; snapshot: SeatSnapshot; alarm: ReactNode };
+type EndPageProps = { seat: Seat; view: ListenerView; snapshot: SeatSnapshot; alarm: ReactNode };
 
 /** Thanks, and the receipts of this phone. */
-export function EndPage({ view, snapshot, alarm }: EndPageProps) {
+export function EndPage({ seat, view, snapshot, alarm }: EndPageProps) {
   const { title, detail } = headingOf(view);
   const { receipts, answers, disputed } = snapshot;
   const late = answers.filter(({ state }) => state === 'late');
@@ -54,6 +55,7 @@ export function EndPage({ view, snapshot, alarm }: EndPageProps) {
           </p>
         ))}
         <DisputedList disputed={disputed} />
+        {view.exit === null ? null : <ExitQuestions seat={seat} exit={view.exit} snapshot={snapshot} />}
         {receipts.length === 0 || view.rehearsal ? null : (
           <section className="mt-4 flex flex-col gap-4">
             <h2 className="text-xl">Your receipts</h2>

@@ -1,5 +1,7 @@
 import type { LockReceipt } from '#shared/contracts/listener-live.ts';
+import type { ExitAnswers } from '#shared/contracts/remarks.ts';
 import type { OwnAnswer } from './answers.ts';
+import { emptyExit, type OwnRemark } from './remarks.ts';
 
 // A seat lives in its tab: what belongs to it is kept in session storage under its token.
 
@@ -15,9 +17,19 @@ type Memory = {
   readonly receipts: readonly KeptReceipt[];
   /** What this phone sent where the server holds something else under the same revision. */
   readonly disputed: readonly OwnAnswer[];
+  readonly remarks: readonly OwnRemark[];
+  /** What is typed of the exit questions and not sent yet. */
+  readonly exitDraft: ExitAnswers;
 };
 
-const empty: Memory = { contribution: null, answers: [], receipts: [], disputed: [] };
+const empty: Memory = {
+  contribution: null,
+  answers: [],
+  receipts: [],
+  disputed: [],
+  remarks: [],
+  exitDraft: emptyExit,
+};
 const keyOf = (token: string) => `fairlead seat ${token}`;
 const lastSeatKey = 'fairlead last seat';
 

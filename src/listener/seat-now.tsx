@@ -2,6 +2,7 @@ import { useState } from 'react';
 import type { Confidence, ListenerView } from '#shared/contracts/listener-live.ts';
 import { answerTo, shortOf } from './answers.ts';
 import { Asking } from './asking.tsx';
+import { BreakPage } from './break-page.tsx';
 import { Hearing } from './hearing.tsx';
 import { Question } from './question.tsx';
 import type { Seat, SeatSnapshot } from './seat.ts';
@@ -14,6 +15,7 @@ type SeatNowProps = { view: ListenerView; snapshot: SeatSnapshot; seat: Seat };
 /** What the phone shows at this point of the session. Answers stay open during a pause. */
 export function SeatNow({ view, snapshot, seat }: SeatNowProps) {
   const { trial, paused } = view;
+  if (view.break !== null) return <BreakPage seat={seat} pause={view.break} snapshot={snapshot} />;
   if (trial !== null && hasTurn(view))
     return <Answering key={trial.number} view={view} snapshot={snapshot} seat={seat} />;
   return (

@@ -20,7 +20,7 @@ export function SeatPage({ seat }: { seat: Seat }) {
   if (view === null) return <Finding />;
   const alarmed = alarm === null ? null : <Alarm text={alarm} onTold={() => seat.dismissAlarm()} />;
   if (view.left || view.phase === 'finished' || view.phase === 'abandoned')
-    return <EndPage view={view} snapshot={snapshot} alarm={alarmed} />;
+    return <EndPage seat={seat} view={view} snapshot={snapshot} alarm={alarmed} />;
   const head = <SeatHead view={view} isLost={snapshot.connection === 'lost'} clockOffsetMs={snapshot.clockOffsetMs} />;
   return (
     <PhonePage header={head} footer={<LoudAndLeave seat={seat} />}>

@@ -1,4 +1,5 @@
 import { type Confidence, type HeldAnswer, type ListenerView, listenerView } from '#shared/contracts/listener-live.ts';
+import type { ExitAnswers, Fatigue, RemarkCommand } from '#shared/contracts/remarks.ts';
 import { Problem, type ProblemCode } from '#shared/problem.ts';
 import { type Live, type LiveSnapshot, openLive } from '../lib/live.ts';
 import {
@@ -14,6 +15,7 @@ import {
   tapped,
   withAnswer,
 } from './answers.ts';
+import { newRemark, type OwnRemark, remarkToSend, withRemark } from './remarks.ts';
 import { type KeptReceipt, randomHex, recall, remember } from './seat-memory.ts';
 
 export type SeatSnapshot = LiveSnapshot<ListenerView> & {
@@ -21,6 +23,8 @@ export type SeatSnapshot = LiveSnapshot<ListenerView> & {
   readonly receipts: readonly KeptReceipt[];
   /** What this phone sent where the server holds something else; kept with its salt. */
   readonly disputed: readonly OwnAnswer[];
+  readonly remarks: readonly OwnRemark[];
+  readonly exitDraft: ExitAnswers;
   /** Whether this tab has the random number that the seat committed to. */
   readonly hasContribution: boolean;
   /** What the listener must know and tell: what was sent and what was stored are not the same. */
@@ -46,11 +50,11 @@ export class Seat {
 
   constructor(token: string) {
     this.#token = token;
-    const { contribution, answers, receipts, disputed } = recall(token);
+    const { contribution, ...kept } = recall(token);
     this.#contribution = contribution;
     this.#live = openLive({ audience: 'listener', token }, (value) => listenerView.parse(value));
     const hasContribution = contribution !== null;
-    this.#snapshot = { ...this.#live.getSnapshot(), answers, receipts, disputed, hasContribution, alarm: null };
+    this.#snapshot = { ...this.#live.getSnapshot(), ...kept, hasContribution, alarm: null };
     this.#live.subscribe(() => this.#viewed());
     window.addEventListener('focus', () => this.#deliver());
     window.addEventListener('online', () => this.#deliver());
@@ -71,6 +75,33 @@ export class Seat {
     const tap = { trial, choice, confidence, salt: randomHex(16) };
     this.#keep(tapped(answerTo(answers, trial), tap, { session: view.sessionId, seat: view.seat }));
     this.#deliver();
+  }
+
+  /** Keeps what is typed of the exit questions over a reload. */
+  draftExit(exitDraft: ExitAnswers): void {
+    remember(this.#token, { exitDraft });
+    this.#update({ exitDraft });
+  }
+
+  sendExit(answers: ExitAnswers): void {
+    this.#say({ kind: 'exit', salt: randomHex(16), answers });
+  }
+
+  sayFatigue(number: number, fatigue: Fatigue): void {
+    this.#say({ kind: 'fatigue', salt: randomHex(16), break: number, fatigue });
+  }
+
+  #say(command: RemarkCommand): void {
+    const { view } = this.#snapshot;
+    if (view === null) return;
+    this.#keepRemark(newRemark(command, view));
+    this.#deliver();
+  }
+
+  #keepRemark(remark: OwnRemark): void {
+    const remarks = withRemark(this.#snapshot.remarks, remark);
+    remember(this.#token, { remarks });
+    this.#update({ remarks });
   }
 
   /**
@@ -175,22 +206,41 @@ export class Seat {
   #deliver(): void {
     const { answers, connection } = this.#snapshot;
     const answer = nextToSend(answers);
-    if (answer === null || connection !== 'connected' || this.#isSending) return;
+    const remark = remarkToSend(this.#snapshot.remarks);
+    if (connection !== 'connected' || this.#isSending || (answer === null && remark === null)) return;
     this.#isSending = true;
-    this.#live
-      .send(commandOf(answer))
-      .then(
-        ({ held }) => {
-          if (held === undefined) throw new Error('an answer was acknowledged without its leaf');
-          this.#hear(held);
-          return true;
-        },
-        (error: unknown) => this.#refused(answer, error),
-      )
+    const sent = answer === null ? this.#sendRemark(remark as OwnRemark) : this.#sendAnswer(answer);
+    sent
       .finally(() => {
         this.#isSending = false;
       })
       .then((isSettled) => (isSettled ? this.#deliver() : this.#tryAgain()));
+  }
+
+  /** Resolves to whether the matter is settled. */
+  #sendAnswer(answer: OwnAnswer): Promise<boolean> {
+    return this.#live.send(commandOf(answer)).then(
+      ({ held }) => {
+        if (held === undefined) throw new Error('an answer was acknowledged without its leaf');
+        this.#hear(held);
+        return true;
+      },
+      (error: unknown) => this.#refused(answer, error),
+    );
+  }
+
+  #sendRemark(remark: OwnRemark): Promise<boolean> {
+    return this.#live.send(remark.command).then(
+      () => {
+        this.#keepRemark({ ...remark, state: 'held' });
+        return true;
+      },
+      (error: unknown) => {
+        if (isPassing(error)) return false;
+        this.#keepRemark({ ...remark, state: 'refused', why: (error as Problem).message });
+        return true;
+      },
+    );
   }
 
   /** Whether the matter is settled; if not, the answer stays on this phone and is sent again. */

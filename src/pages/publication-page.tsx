@@ -19,6 +19,7 @@ import { ReportIncidents } from '../features/reports/report-incidents.tsx';
 import { ReportKnownDifferences } from '../features/reports/report-known-differences.tsx';
 import { ReportListeners } from '../features/reports/report-listeners.tsx';
 import { ReportProtocol } from '../features/reports/report-protocol.tsx';
+import { ReportSaid } from '../features/reports/report-said.tsx';
 import { ReportSessions } from '../features/reports/report-sessions.tsx';
 import { WhatToSay } from '../features/reports/what-to-say.tsx';
 import { addressOf } from '../lib/call.ts';
@@ -64,6 +65,7 @@ export function Component() {
       <ReportExcerpts byExcerpt={report.byExcerpt} />
       <ReportChecks checks={portrait.checks} />
       <ReportCueAudit audit={report.cueAudit} />
+      <ReportSaid said={report.said} />
       <ReportFlow flow={report.flow} missingWords={report.result.missingAnswers} />
       <ReportIncidents
         voids={report.voids}

@@ -1,7 +1,7 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { type MethodId, methodIds } from '#shared/methods/methods.ts';
 import { shippedPresets } from '#shared/protocol/shipped-presets.ts';
-import { type Asked, blindRun, type Run, type Seeds } from '../support/blind-run.ts';
+import { type Asked, blindRun, type Run, type Seeds, secretRemark } from '../support/blind-run.ts';
 import { secretTreatment } from '../support/people.ts';
 
 // Where the proctor is told a code: the one to be fitted, and at the labels those in hand and those not found.
@@ -84,6 +84,14 @@ describe.each(methodIds)('what leaves the server before closing, %s', (id) => {
   it('has nothing of a cable’s construction for a listener or the proctor, or in a mail [Q7]', () => {
     for (const { phones, proctor, mails } of runs)
       expect([...phones.flat(), ...proctor, ...mails].filter((text) => text.includes(secretTreatment))).toEqual([]);
+  });
+
+  it('has nothing of what listeners said beside the trials, for anybody [S115]', () => {
+    for (const { phones, proctor, manager, mails } of runs)
+      expect(
+        [...phones.flat(), ...proctor, ...manager, ...mails].filter((text) => text.includes(secretRemark)),
+      ).toEqual([]);
+    expect(other(0).proctor.some((text) => text.includes('"exit":{"said":2,"of":2}'))).toBe(true);
   });
 
   it.each([1, 2, 3])('is the same for managers, whatever the secrets (run %i) [B1]', (index) => {

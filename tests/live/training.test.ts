@@ -104,6 +104,7 @@ describe('before the first trial', () => {
     await study.manager.post(`${study.at}/close`).send({ reason: '' }).expect(200);
     const report = (await study.manager.get(`${study.at}/report`).expect(200)).body;
     expect(report.sessions[0].training).toEqual({ labelled: 2, blind: 1, feedback: 1 });
+    expect(report.record.checks.filter(({ outcome }: { outcome: string }) => outcome !== 'pass')).toEqual([]);
     expect(report.sessions[0].trials).toHaveLength(6);
   });
 });

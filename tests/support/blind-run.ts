@@ -30,6 +30,9 @@ export type Asked = {
 };
 export type Run = { phones: string[][]; manager: string[]; mails: string[]; proctor: string[]; codes: string[][] };
 
+/** What every listener says of their own, for nobody to read before closing. */
+export const secretRemark = 'The bass was drier.';
+
 // Commitments, and the digests chained from them, are random by design.
 const withoutDigests = (text: string) => text.replace(/[0-9a-f]{64}/g, '#').replace(/urn:uuid:[0-9a-f-]{36}/g, 'urn');
 
@@ -75,7 +78,12 @@ export async function blindRun(
   const random = repeatableRandom({ 'code-key': codeKey, 'draw-secret': drawSecret });
   const server = await testServer({ clock, random });
   const people = await makeOrganisation(server, 'Harbour');
-  const study = await readyStudy(server, people, change, ladder);
+  const study = await readyStudy(
+    server,
+    people,
+    { ...change, breaks: { trials: 4, leastMinutes: 1, blocksPerDay: 2 } },
+    ladder,
+  );
   if (isExchanged) await exchangeSleeves(server, study.studyId);
   const manager: string[] = [];
   const look = async () => {
@@ -125,11 +133,19 @@ export async function blindRun(
     await desk.sees('all in', (view) => view.trial?.answered === phones.length);
     await desk.act({ kind: 'lock-trial' });
     for (const phone of phones) await phone.sees('the lock', ({ lastLock }) => lastLock?.trial === index + 1);
+    if (desk.now.block?.break) {
+      for (const phone of phones) await phone.sayFatigue(1, 'tired');
+      clock.advance(60_000);
+      await desk.sees('what was said', ({ block }) => block?.break?.said === phones.length);
+      await desk.act({ kind: 'resume' });
+    }
     await look();
   }
   if (desk.now.inventory !== null) await takeInventory(desk, fitted);
   await desk.act({ kind: 'finish' });
   for (const phone of phones) await phone.sees('the end', ({ phase }) => phase === 'finished');
+  for (const phone of phones) await phone.sayAtExit({ wentBy: secretRemark, noticed: 'yes', what: secretRemark });
+  await desk.sees('what was said', ({ exit }) => exit?.said === phones.length);
   await look();
   const mails: object[] = await server.deps.db.query('select * from outbox order by created_at, recipient, subject');
   const seen: Run = {

@@ -136,6 +136,20 @@ export class Phone extends LivePage<ListenerView> {
     return this.ask({ kind: 'reveal', value: this.contribution });
   }
 
+  sayFatigue(number: number, fatigue: string): Promise<unknown> {
+    return this.ask({ kind: 'fatigue', salt: hexOf(`fatigue ${this.seat} ${number}`, 16), break: number, fatigue });
+  }
+
+  get exitSalt(): string {
+    return hexOf(`exit ${this.seat}`, 16);
+  }
+
+  /** The exit questions, those not given left empty. */
+  sayAtExit(answers: object): Promise<unknown> {
+    const empty = { wentBy: '', noticed: null, what: '', guesses: [] };
+    return this.ask({ kind: 'exit', salt: this.exitSalt, answers: { ...empty, ...answers } });
+  }
+
   /** The answer as a command; the same trial and choice always have the same salt. */
   answerCommand(trial: number, choice: string, revision: number) {
     const salt = hexOf(`salt ${this.seat} ${trial} ${revision}`, 16);

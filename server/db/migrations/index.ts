@@ -15,6 +15,7 @@ import { RigPresets1796151000000 } from './1796151000000-rig-presets.ts';
 import { Measurements1796151400000 } from './1796151400000-measurements.ts';
 import { LevelDuties1796152000000 } from './1796152000000-level-duties.ts';
 import { PresentationRequests1796152400000 } from './1796152400000-presentation-requests.ts';
+import { Remarks1796153000000 } from './1796153000000-remarks.ts';
 import { Evidence1796153400000 } from './1796153400000-evidence.ts';
 
 /** Every migration, oldest first. */
@@ -35,6 +36,7 @@ export const migrations = [
   RigPresets1796151000000,
   Measurements1796151400000,
   LevelDuties1796152000000,
+  Remarks1796153000000,
   Evidence1796153400000,
   PresentationRequests1796152400000,
 ];

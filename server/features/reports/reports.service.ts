@@ -21,7 +21,7 @@ import { type Tx, withTransaction } from '../../db/transaction.ts';
 import type { Deps } from '../../deps.ts';
 import { readRecord } from '../../ledger/ledger.ts';
 import { requestsOfSessions } from '../sessions/requests.store.ts';
-import { answersOfSessions, sessionsOfStudy } from '../sessions/sessions.store.ts';
+import { answersOfSessions, remarksOfSessions, sessionsOfStudy } from '../sessions/sessions.store.ts';
 import { signedHeadsOf } from '../signed-heads/signed-heads.service.ts';
 import { protocolOf, studyOrProblem, versionsOf } from '../studies/studies.service.ts';
 import { listStudies } from '../studies/studies.store.ts';
@@ -108,6 +108,10 @@ export async function closedRecord(tx: Tx, study: Study): Promise<ClosedRecord> 
     tx,
     sessions.map(({ id }) => id),
   );
+  const remarks = await remarksOfSessions(
+    tx,
+    sessions.map(({ id }) => id),
+  );
   return {
     study,
     protocol: protocolOf(study),
@@ -121,6 +125,7 @@ export async function closedRecord(tx: Tx, study: Study): Promise<ClosedRecord> 
       confidence,
       salt,
     })),
+    remarks: remarks.map(({ sessionId, seat, about, said, salt }) => ({ session: sessionId, seat, about, said, salt })),
     requests: await requestsOfSessions(
       tx,
       sessions.map(({ id }) => id),

@@ -24,12 +24,15 @@ import type { Draw } from '#shared/session/draw.ts';
 import { kindOf, truthOf } from '#shared/session/fitting.ts';
 import { handlingOf } from '#shared/session/handling.ts';
 import { listenersToldApart } from '#shared/session/listeners-told-apart.ts';
+import { breakFacts } from '#shared/session/registered-breaks.ts';
+import type { RemarkContent } from '#shared/session/remark-leaf.ts';
 import type { RequestContent } from '#shared/session/request-leaf.ts';
 import { onRequestSentence, requestsIn, timesAsked } from '#shared/session/requests-told.ts';
 import { type RevealedKey, revealedKey } from '#shared/session/revealed-key.ts';
 import type { SessionState } from '#shared/session/state.ts';
 import type { StudyPayloadOf } from '#shared/session/study-events.ts';
 import { stepOf, type TrialKind } from '#shared/session/trial-kinds.ts';
+import { blockWords, saidOf } from './said.views.ts';
 
 export type ReportSource = {
   readonly study: { readonly id: string; readonly title: string };
@@ -37,6 +40,7 @@ export type ReportSource = {
   readonly earlierProtocols?: readonly Protocol[];
   readonly entries: readonly Entry[];
   readonly answers: readonly AnswerContent[];
+  readonly remarks?: readonly RemarkContent[];
   readonly requests?: readonly RequestContent[];
   readonly states: readonly SessionState[];
   readonly rooms: ReadonlyMap<number, string>;
@@ -204,6 +208,7 @@ function factsOf({
     { label: 'Answer window', value: `${conduct.answerS} s` },
     { label: 'Programme', value: conduct.programme.map(({ title, lengthS }) => `${title} (${lengthS} s)`).join('; ') },
     { label: 'Level at the load', value: registeredLevelsText(conduct.levels) },
+    ...breakFacts(conduct.breaks),
     { label: 'Chain', value: conduct.chain },
     ...presetFacts(conduct.rigPreset),
   ];
@@ -265,15 +270,13 @@ export function reportView(source: ReportSource): Report {
         : levelReportOf(entries, key.codeKey.rows, protocol.conduct.levels, namesOf(protocol)),
     flow: flowOf(source, counted),
     sessions: states.map((state) => sessionView(source, state, key)),
+    said: saidOf(source),
     voids: voidsOf(entries),
     missing: missingOf(states),
-    deviations: entries
-      .filter(({ kind }) => kind === 'deviation-recorded')
-      .map(({ at, payload }) => ({
-        at,
-        session: payload.session === null ? null : Number(payload.session),
-        text: String(payload.text),
-      })),
+    deviations: entries.flatMap(({ at, kind, payload }) => {
+      const text = kind === 'deviation-recorded' ? String(payload.text) : blockWords(kind, payload);
+      return text === null ? [] : [{ at, session: payload.session === null ? null : Number(payload.session), text }];
+    }),
     protocol: {
       digest: sealing.digest,
       sealedAt: sealing.at,

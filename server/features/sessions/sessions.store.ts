@@ -4,6 +4,7 @@ import { likePattern, pageOfRows, sortRows } from '../../db/paging.ts';
 import type { Tx } from '../../db/transaction.ts';
 import { Study } from '../studies/study.entity.ts';
 import { Answer } from './answer.entity.ts';
+import { Remark } from './remark.entity.ts';
 import { Seat } from './seat.entity.ts';
 import { Session } from './session.entity.ts';
 
@@ -101,4 +102,15 @@ export function answersOfSessions(tx: Tx, sessionIds: readonly string[]): Promis
 /** Stores an answer, or its latest change. */
 export async function saveAnswer(tx: Tx, answer: Answer) {
   await tx.upsert(Answer, answer, ['sessionId', 'trial', 'seat', 'late']);
+}
+
+/** Stores what a listener said beside the trials; a repeat of it is the same row. */
+export async function saveRemark(tx: Tx, remark: Remark) {
+  await tx.upsert(Remark, remark, ['sessionId', 'seat', 'about']);
+}
+
+export function remarksOfSessions(tx: Tx, sessionIds: readonly string[]): Promise<Remark[]> {
+  return sessionIds.length === 0
+    ? Promise.resolve([])
+    : tx.find(Remark, { where: { sessionId: In([...sessionIds]) }, order: { about: 'ASC', seat: 'ASC' } });
 }

@@ -44,7 +44,7 @@ export function ConsoleBody({
   return (
     <div className="flex min-w-0 flex-1 flex-col gap-6 px-5 py-7 lg:px-11">
       {isLost ? <LostBanner /> : null}
-      {view.paused === null ? null : <PauseBanner pause={view.paused} clockOffsetMs={clockOffsetMs} />}
+      {view.paused === null ? null : <PauseBanner pause={view.paused} view={view} clockOffsetMs={clockOffsetMs} />}
       {view.levels === null || levelsTo === null ? null : (
         <LevelsPanel levels={view.levels} phase={view.phase} levelsTo={levelsTo} actions={actions} />
       )}

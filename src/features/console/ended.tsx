@@ -57,6 +57,9 @@ function Recorded({ view, back }: EndedProps) {
           ...(open > 0 ? [{ label: 'Trials not held', value: String(open) }] : []),
           ...handlingFacts(view),
           { label: 'Listeners', value: String(view.seats.length) },
+          ...(view.exit === null
+            ? []
+            : [{ label: 'Exit questions answered', value: `${view.exit.said} of ${view.exit.of}` }]),
           { label: 'Entries of this session', value: String(view.record.sessionEntries) },
           { label: 'Entries of the study', value: String(view.record.entries), tone: 'held' },
         ]}

@@ -37,6 +37,8 @@ export const areLevelsIn = ({ levels }: ProctorView): boolean =>
 
 /** The one act that comes next, or null when the console waits for somebody else. */
 export function nextActOf(view: ProctorView): NextAct | null {
+  const rest = view.block?.break;
+  if (rest) return { ...now('Go on', { kind: 'resume' }), waiting: 'The break ends in', opensAt: rest.leastEndsAt };
   if (view.paused !== null) return now('Resume', { kind: 'resume' });
   if (view.phase === 'planned' && view.cautionsConfirmed && areLevelsIn(view))
     return now('Open seating', { kind: 'open-seating' });
@@ -54,6 +56,7 @@ function actBetweenTrials(view: ProctorView): NextAct | null {
       : now('End the inventory', { kind: 'end-inventory', reason: '' });
   }
   if (!isAnybodySeated(view)) return null;
+  if (view.block?.isBreakDue) return now('Begin the break', { kind: 'pause', reason: 'break' });
   if (!areLevelsIn(view)) return null;
   if (!view.familiarised) return now('Begin the familiarisation', { kind: 'begin-familiarisation' });
   return view.nextTrial === null ? null : now(`Begin trial ${view.nextTrial}`, { kind: 'begin-trial' });

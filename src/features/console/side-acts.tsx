@@ -5,6 +5,7 @@ import { Button } from '../../ui/button.tsx';
 import { ByHandDialog } from './by-hand-dialog.tsx';
 import { startsListening } from './console-words.ts';
 import { DeviationDialog } from './deviation-dialog.tsx';
+import { EarlyDialog } from './early-dialog.tsx';
 import { EndDialog } from './end-dialog.tsx';
 import { InventoryDialog } from './inventory-dialog.tsx';
 import { isComplete } from './next-act.ts';
@@ -23,7 +24,7 @@ type SideActsProps = {
   labels: Labels;
 };
 
-type Asked = 'void' | 'deviation' | 'end' | 'by-hand' | 'take-back' | 'inventory';
+type Asked = 'early' | 'void' | 'deviation' | 'end' | 'by-hand' | 'take-back' | 'inventory';
 type SideAct = { label: string; letter: string; run: () => void };
 
 // A phone has no Alt key to speak of.
@@ -60,6 +61,7 @@ export function SideActs({ view, actions, onNext, keys: [areKeysOn, setKeysOn], 
         ]
       : []),
     ...(isRunning && view.trial !== null ? [{ label: 'Void this trial', letter: 'v', run: ask('void') }] : []),
+    ...(view.block?.break ? [{ label: 'Go on early', letter: 'g', run: ask('early') }] : []),
     { label: 'Record a deviation', letter: 'd', run: ask('deviation') },
   ];
   // A complete session is finished by its next act; there is nothing left to abandon.
@@ -103,6 +105,7 @@ export function SideActs({ view, actions, onNext, keys: [areKeysOn, setKeysOn], 
         </label>
       </Actions>
       <VoidDialog {...dialog('void')} neverCounts={(view.trial?.number ?? 1) <= 0} />
+      <EarlyDialog {...dialog('early')} why={view.block?.break?.why ?? ''} />
       <DeviationDialog {...dialog('deviation')} />
       <EndDialog {...dialog('end')} view={view} />
       <ByHandDialog {...dialog('by-hand')} code={view.trial?.code ?? ''} />

@@ -17,6 +17,7 @@ import { ReportLevels } from './report-levels.tsx';
 import { ReportListeners } from './report-listeners.tsx';
 import { ReportProtocol } from './report-protocol.tsx';
 import { ReportRecord } from './report-record.tsx';
+import { ReportSaid } from './report-said.tsx';
 import { ReportSessions } from './report-sessions.tsx';
 import { WhatToSay } from './what-to-say.tsx';
 
@@ -57,6 +58,7 @@ export function ReportView({ report, back, actions, compared, proofs }: ReportVi
       <ReportChecks checks={portrait.checks} />
       {report.levels === null ? null : <ReportLevels levels={report.levels} />}
       <ReportCueAudit audit={report.cueAudit} />
+      <ReportSaid said={report.said} />
       <ReportFlow flow={report.flow} missingWords={result.missingAnswers} />
       <ReportIncidents
         voids={report.voids}

@@ -114,12 +114,12 @@ function keysOf(value: unknown, keys = new Set<string>()): Set<string> {
 const inBoth =
   'audience now title session phase paused course trial number of familiarisation stage presentationNumber presentations endsAt state seat rehearsal text practice';
 const listenersFields = new Set(
-  `${inBoth} sessionId contributes revealWanted left takesPart presentation spoken held question explanation announcement options value letter sentence short confidence lastLock lastOutcome outcome counted feedback told requests`.split(
+  `${inBoth} sessionId contributes revealWanted left takesPart presentation spoken held question explanation announcement options value letter sentence short confidence lastLock lastOutcome outcome counted feedback told requests exit guesses break leastEndsAt`.split(
     ' ',
   ),
 );
 const proctorsFields = new Set(
-  `${inBoth} version room method rig cautions cautionsConfirmed steps kind leastS act how done reason since join dueAt revealed familiarised code excerpt stepsDone step stepEndsAt scannedEnds undo longChange answered expected nextTrial scans made byHand wrong inventory found foreign isEnded missing seats place awaySince late record entries sessionEntries demo levels handling checks check at isIn due bar excerptStart excerptS training practised form onRequest`.split(
+  `${inBoth} version room method rig cautions cautionsConfirmed steps kind leastS act how done reason since join dueAt revealed familiarised code excerpt stepsDone step stepEndsAt scannedEnds undo longChange answered expected nextTrial scans made byHand wrong inventory found foreign isEnded missing seats place awaySince late record entries sessionEntries demo levels handling checks check at isIn due bar excerptStart excerptS training practised form onRequest block trials locked isBreakDue break leastEndsAt why said exit`.split(
     ' ',
   ),
 );

@@ -147,6 +147,24 @@ function cueAudit({ cueAudit: { summary, found, rows } }: Report): Html {
     )}`;
 }
 
+function said({ said: { exits, fatigue } }: Report): Html {
+  const lines = exits.map(({ session: number, listener, wentBy, noticed, what, guesses }) => [
+    `${listener}, session ${number}`,
+    wentBy || '–',
+    noticed === null ? '–' : `${noticed}${what === '' ? '' : `: ${what}`}`,
+    guesses.map(({ question, text }) => `${question} ${text || '–'}`).join(' '),
+  ]);
+  return html`${
+    lines.length === 0
+      ? html`<p class="text-soft">Nobody answered the exit questions.</p>`
+      : table('Exit questions', ['Listener', 'Went by', 'Anything but the music', 'Thought they were'], lines)
+  }
+    ${list(
+      fatigue.map((one) => `Session ${one.session}, break ${one.break}, ${one.listener}: ${one.fatigue}`),
+      '',
+    )}`;
+}
+
 function session({
   number,
   phase,
@@ -277,6 +295,7 @@ export function publicationContent(publication: Publication): Html {
       ${report.byExcerpt.length < 2 ? null : section('By excerpt', excerpts(report))}
       ${section('Checks of the answers', checks(report))}
       ${section('Cue audit', cueAudit(report))}
+      ${section('What listeners said', said(report))}
       ${section('Every session', html`<ol class="flex flex-col gap-8">${report.sessions.map(session)}</ol>`)}
       ${section('What did not go as planned', incidents(report))}
       ${section('The sealed protocol', html`${facts(report.protocol.facts)}${versions(report.protocol.versions)}`)}

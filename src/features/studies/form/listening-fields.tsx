@@ -2,6 +2,7 @@ import { useFormContext } from 'react-hook-form';
 import { NumberField } from '../../../ui/number-field.tsx';
 import { TextField } from '../../../ui/text-field.tsx';
 import { AlphaField } from './alpha-field.tsx';
+import { BreakFields } from './break-fields.tsx';
 import { EffectFields } from './effect-fields.tsx';
 import { FormSection } from './form-section.tsx';
 import { GoalField } from './goal-field.tsx';
@@ -36,6 +37,7 @@ export function ListeningFields() {
           hint="Drawn beforehand; one takes the place of a trial that is set aside for a stated fault."
         />
       </div>
+      <BreakFields />
       <MarginFields />
       <TextField
         {...register('samplingFrame')}

@@ -7,6 +7,7 @@ import { decibels } from '#shared/protocol/protocol-checks.ts';
 import { checkExclusion } from '#shared/protocol/registered-analysis.ts';
 import { treatmentFacts } from '#shared/protocol/treatment.ts';
 import { waysFacts } from '#shared/protocol/ways-to-run.ts';
+import { breakFacts } from '#shared/session/registered-breaks.ts';
 import { formatCount } from '../../../lib/format.ts';
 import { percentOfPerMille, rigWords } from '../study-words.ts';
 
@@ -45,6 +46,7 @@ export function protocolFacts({ draft, cableNames, codeHolder }: Study): Protoco
     words('Chain', draft.chain),
     words('Level at the load', registeredLevelsText(draft.levels)),
     words('Every change', `${draft.changeS} s, real or not`),
+    ...breakFacts(draft.breaks),
     words('Answer window', `${draft.answerS} s`),
     words('Confidence', draft.confidence ? 'asked with every answer' : 'not asked'),
     words('Code holder', codeHolder),

@@ -21,6 +21,7 @@ const {
   changeS,
   answerS,
   programme,
+  breaks: registered,
   onRequest,
 } = studyDraft.shape;
 
@@ -44,6 +45,7 @@ const listening = z.object({
   answerS,
   onRequest: onRequest.catch(undefined),
   programme: z.array(z.object({ lengthS: programme.element.shape.lengthS })).min(1),
+  breaks: registered.catch(undefined),
   checks: checkCounts.optional().catch(undefined),
 });
 
@@ -109,7 +111,10 @@ export function planOf(values: Partial<StudyFormValues>): Plan | null {
     listenMs: meanExcerptMs(draft.programme, draft.trials + checkTrials),
     answerMs: draft.answerS * 1000,
     resetMs: 0,
-    breaks,
+    breaks:
+      draft.breaks === undefined
+        ? breaks
+        : { everyTrials: draft.breaks.trials, lengthMs: draft.breaks.leastMinutes * 60_000 },
   });
   return {
     method: chosen,
