@@ -40,7 +40,7 @@ test('check trials are planned in the form, and a report says how small a step w
 
   // The demo has a closed study with a ladder of two steps.
   await manager.getByRole('link', { name: 'Reports', exact: true }).click();
-  await manager.getByRole('link', { name: /Study Dotterel/ }).click();
+  await manager.getByRole('listitem').filter({ hasText: 'Study Dotterel' }).getByRole('link').click();
   await expect(manager.getByText('These listeners heard a step of 0.51\u00a0dB in this set-up.').first()).toBeVisible();
   const found = manager.getByRole('region', { name: 'Known differences' });
   await expect(found.getByText('Sensitive to')).toContainText('0.51\u00a0dB');
