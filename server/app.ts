@@ -12,6 +12,7 @@ import { auditsRoutes } from './features/audits/audits.routes.ts';
 import { cablesRoutes } from './features/cables/cables.routes.ts';
 import { codesRoutes } from './features/codes/codes.routes.ts';
 import { evidenceRoutes } from './features/evidence/evidence.routes.ts';
+import { exposureRoutes } from './features/exposure/exposure.routes.ts';
 import { firstOwnerRoutes } from './features/first-owner/first-owner.routes.ts';
 import { FirstOwner } from './features/first-owner/first-owner.service.ts';
 import { healthRoutes, version } from './features/health/health.routes.ts';
@@ -120,6 +121,7 @@ export function createApp(deps: Deps) {
   codesRoutes(api, access, deps);
   sessionsRoutes(api, access, deps, sittings);
   levelsRoutes(api, access, deps, sittings);
+  exposureRoutes(api, access, deps);
   attendancesRoutes(api, access, deps, sittings);
   reportsRoutes(api, access, deps);
   publicationsRoutes(api, access, deps);

@@ -137,6 +137,7 @@ export const draftStudy: Free = {
     { title: 'Piano, slow', lengthS: 20, start: '0:42' },
     { title: 'Cymbals', lengthS: 18, start: '2:05' },
   ],
+  rigPreset: shippedPresets.loudspeaker,
   changeS: 30,
   answerS: 45,
   confidence: true,
@@ -160,9 +161,13 @@ const pastStudy: Free = {
   answerS: 45,
 };
 
-/** Closed with a difference: level is part of what is compared, is measured, and may explain it. */
+/**
+ * Closed with a difference: level is part of what is compared, is measured, and may explain it. Its labels were scanned at
+ * every change.
+ */
 export const closedStudy: Free = {
   ...pastStudy,
+  rigPreset: shippedPresets.loudspeaker,
   levels: { handling: 'as-supplied', toleranceMilliDb: 100, frequenciesHz: [100, 1000, 10_000] },
 };
 

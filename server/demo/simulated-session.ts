@@ -28,6 +28,8 @@ export class SimulatedSession {
   readonly #deps: Deps;
   #console: ProctorView | null = null;
   readonly #phones: Phone[] = [];
+  /** The codes that were fitted. */
+  readonly #codes = new Set<string>();
 
   private constructor(deps: Deps, clock: HandClock, sittings: Sittings, sitting: Sitting) {
     this.#sittings = sittings;
@@ -101,13 +103,16 @@ export class SimulatedSession {
       const { trial } = this.#view;
       const paceMs = paceOf[step] ?? 1_000;
       const leftMs = (trial?.endsAt ?? 0) - this.#clock.now();
-      await this.#wait(Math.min(paceMs, Math.max(0, Math.floor(leftMs / 5))));
-      await this.#command({ kind: 'confirm-step', step });
+      const leastMs = (trial?.stepEndsAt ?? 0) - this.#clock.now();
+      await this.#wait(Math.max(leastMs, Math.min(paceMs, Math.max(0, Math.floor(leftMs / 5)))));
+      if (step === 'scan') await this.#scanBothEnds();
+      else await this.#command({ kind: 'confirm-step', step });
     }
     await this.#wait(Math.max(0, (this.#view.trial?.endsAt ?? 0) - this.#clock.now()) + 400);
     const last = steps.at(-1);
     if (last !== undefined) await this.#command({ kind: 'confirm-step', step: last.kind });
     const code = this.#view.trial?.code ?? '';
+    this.#codes.add(code);
     await this.#wait(Math.max(0, (this.#view.trial?.endsAt ?? 0) - this.#clock.now()));
     return code;
   }
@@ -160,7 +165,22 @@ export class SimulatedSession {
     await this.#command({ kind: 'abandon', reason });
   }
 
+  async #scanBothEnds(): Promise<void> {
+    const text = this.#view.trial?.code ?? '';
+    for (let end = 1; end <= 2; end += 1) await this.#command({ kind: 'scan-label', text, by: 'typed' });
+  }
+
+  /** Every sleeve once more, where labels were scanned. */
+  async #takeInventory(): Promise<void> {
+    if (this.#view.inventory === null) return;
+    for (const text of this.#codes) await this.#command({ kind: 'scan-label', text, by: 'typed' });
+    const { found, of } = this.#view.inventory;
+    const reason = found.length < of ? 'Only the pieces that were fitted had been brought to the room.' : '';
+    await this.#command({ kind: 'end-inventory', reason });
+  }
+
   async finish(): Promise<void> {
+    await this.#takeInventory();
     await this.#command({ kind: 'finish' });
   }
 }

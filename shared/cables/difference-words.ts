@@ -6,7 +6,7 @@ export function differenceWords({ curve, largestAudible }: LevelDifference): str
   if (!curve.every(({ decibels: level }) => Number.isFinite(level)))
     return 'By their construction hardly anything would arrive at the load: look at what is stated of the two cables.';
   const left = leftWhenMatched(curve);
-  return `By their construction the two differ by at most ${decibels(largestAudible.decibels)} between 20 Hz and 20 kHz, at ${hertz(largestAudible.frequency)}; matched in level at 1 kHz, by at most ${decibels(left)}.`;
+  return `By their construction the two differ by ${atMost(largestAudible.decibels)} between 20 Hz and 20 kHz, at ${hertz(largestAudible.frequency)}; matched in level at 1 kHz, by ${atMost(left)}.`;
 }
 
 /** "0.12 dB", "less than 0.001 dB"; the sign is left out. */
@@ -20,6 +20,10 @@ export const hertz = (frequency: number): string =>
   frequency >= 1000
     ? `${Number((frequency / 1000).toPrecision(2))}\u00a0kHz`
     : `${Number(frequency.toPrecision(2))}\u00a0Hz`;
+
+/** "at most 0.12 dB", "less than 0.001 dB" */
+export const atMost = (value: number): string =>
+  Math.abs(value) < 0.001 ? decibels(value) : `at most ${decibels(value)}`;
 
 /** The largest difference left in the audible band when levels are matched at 1 kHz, in dB; at least 0. */
 export function leftWhenMatched(curve: LevelDifference['curve']): number {

@@ -1,6 +1,6 @@
 import { z } from 'zod';
-import { construction } from './construction.ts';
-import { endpoint, managers } from './endpoint.ts';
+import { conductorMaterials, construction, geometries } from './construction.ts';
+import { endpoint, managers, savedFile } from './endpoint.ts';
 import { organisationParams, thingParams } from './organisation-params.ts';
 import { listQuery, pageOf, sortBy } from './paging.ts';
 
@@ -46,12 +46,27 @@ export const cable = z.strictObject({ ...cableShape, construction, specimens: z.
 export type CableRow = z.output<typeof cableRow>;
 export type Cable = z.output<typeof cable>;
 
+/** What a table of cables adds, or would add; faults by line and column. */
+export const cableImport = z.strictObject({
+  cables: z.int(),
+  isAdded: z.boolean(),
+  first: z.array(z.string()),
+  /** How many of the names are there already. */
+  known: z.int(),
+  faults: z.array(z.strictObject({ line: z.int(), column: z.string(), detail: z.string() })),
+  faultCount: z.int(),
+});
+export type CableImport = z.output<typeof cableImport>;
+
 const base = '/organisations/:organisationId/cables';
 const specimenParams = z.strictObject({ organisationId: z.uuid(), id: z.uuid(), specimenId: z.uuid() });
 const archiving = z.strictObject({ archived: z.boolean() });
 
 const cableListQuery = listQuery.extend({
   archived: z.enum(['no', 'yes']).default('no'),
+  kind: z.enum(['any', ...cableKinds]).default('any'),
+  material: z.enum(['any', ...conductorMaterials]).default('any'),
+  geometry: z.enum(['any', ...geometries]).default('any'),
   sort: sortBy(['name', 'kind', 'length', 'updatedAt'], '-updatedAt'),
 });
 export type CableListQuery = z.output<typeof cableListQuery>;
@@ -74,6 +89,35 @@ export const cablesApi = {
     access: managers,
     params: organisationParams,
     reply: z.strictObject({ cables: z.array(cable) }),
+  }),
+  /** As a table that a spreadsheet reads; a cell that it would take for a formula is marked as text. */
+  exportAll: endpoint({
+    method: 'GET',
+    path: `${base}/export`,
+    summary: 'Every cable in use as CSV',
+    access: managers,
+    params: organisationParams,
+    isDownload: true,
+    reply: savedFile,
+  }),
+  template: endpoint({
+    method: 'GET',
+    path: `${base}/template`,
+    summary: 'An empty table of cables as CSV, with one example',
+    access: managers,
+    params: organisationParams,
+    isDownload: true,
+    reply: savedFile,
+  }),
+  importAll: endpoint({
+    method: 'POST',
+    path: `${base}/import`,
+    summary: 'Add the cables of a table, all or none; as a trial it says what would be added',
+    access: managers,
+    params: organisationParams,
+    body: z.strictObject({ isTrial: z.boolean() }),
+    upload: { limitBytes: 2_000_000, isRequired: true },
+    reply: cableImport,
   }),
   get: endpoint({
     method: 'GET',

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { soundLevel } from '../exposure/sound-level.ts';
 import { levelChecks } from '../levels/measured-levels.ts';
 import { levelHandlings } from '../levels/registered-levels.ts';
 import { sessionPhases } from './sessions.ts';
@@ -74,6 +75,7 @@ export const proctorCommand = z.discriminatedUnion('kind', [
     ...version,
     reason: say(500).min(3, 'Say why they are not measured'),
   }),
+  z.strictObject({ kind: z.literal('record-sound-level'), ...version, ...soundLevel.shape, reason: say(300) }),
   z.strictObject({ kind: z.literal('finish'), ...version }),
   z.strictObject({ kind: z.literal('abandon'), ...version, reason: say(500).min(3, 'Say why the session ends here') }),
 ]);
@@ -174,6 +176,8 @@ export const proctorView = z.strictObject({
       late: z.boolean(),
     }),
   ),
+  /** How loud it is at the listening position; null until it is recorded. */
+  sound: soundLevel.extend({ advice: z.enum(['quiet', 'recommended', 'loud', 'warned', 'refused']) }).nullable(),
   /** How the levels stand, never a figure; null where the protocol registers none. */
   levels: z
     .strictObject({

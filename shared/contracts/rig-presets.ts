@@ -8,6 +8,8 @@ import { listQuery, pageOf, sortBy } from './paging.ts';
 export const keptPreset = z.strictObject({
   id: z.uuid(),
   preset: rigPreset,
+  /** Whether the organisation began with it, changed since or not. */
+  isShipped: z.boolean(),
   archived: z.boolean(),
   updatedAt: z.iso.datetime(),
 });

@@ -35,7 +35,7 @@ export const adviceWords: Record<SoundAdvice, string> = {
   recommended: 'Within the recommended 70 to 80 dBA.',
   loud: 'Louder than the recommended 70 to 80 dBA.',
   warned: 'Loud: from 83 dBA on hearing is at risk over a long day. Turn it down if the test allows.',
-  refused: 'Too loud: from 90 dBA on no session starts without a reason on the record.',
+  refused: 'Too loud: 90 dBA and more is not recorded without a reason, which stays on the record.',
 };
 
 /** "78.5 dBA" */

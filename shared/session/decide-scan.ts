@@ -2,6 +2,7 @@ import { Problem } from '../problem.ts';
 import { nextStep, scansOf, stepEndsAt } from './change-steps.ts';
 import type { Emit, SessionCommand } from './decide.ts';
 import type { SessionEvent } from './events.ts';
+import { waitsForListeners } from './on-request.ts';
 import { nextTrial } from './progress.ts';
 import type { OpenTrial, SessionState } from './state.ts';
 
@@ -59,7 +60,7 @@ export function decideUndo(state: SessionState, emit: Emit): SessionEvent[] {
   if (state.phase !== 'running' || trial === null) throw new Problem('wrong-phase', 'No trial is open.');
   if (state.paused !== null) throw new Problem('wrong-phase', 'The session is paused. Resume it first.');
   const step = trial.stepsDone.at(-1);
-  if (trial.stage === 'answering' || trial.answers.length > 0)
+  if (waitsForListeners(trial) || trial.answers.length > 0)
     throw new Problem('wrong-phase', 'They are answering. What went wrong before is a void, with its reason.');
   if (step === undefined)
     throw new Problem('wrong-phase', 'This change has only begun; there is no step to take back.');

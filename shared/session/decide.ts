@@ -19,6 +19,7 @@ import type { LabelEnd } from './label-text.ts';
 import { type RequestCommand, request, waitsForListeners } from './on-request.ts';
 import { excerptOfPractice, isTraining, practiceAsked } from './practice.ts';
 import { activeSeats, excerptOf, listeningMayStartAt, nextTrial, openAnswers, trialsInAll } from './progress.ts';
+import { soundToRecord } from './sound.ts';
 import type { OpenTrial, SessionState } from './state.ts';
 
 type Plain<C> = C extends unknown ? Omit<C, 'expectVersion'> : never;
@@ -298,6 +299,8 @@ export function decide(state: SessionState, command: SessionCommand, now: number
       return [emit('deviation-recorded', { text: command.text })];
     case 'record-levels':
       return recordLevels(state, command, emit);
+    case 'record-sound-level':
+      return [emit('sound-level-recorded', soundToRecord(state, command))];
     case 'skip-levels':
       return skipLevels(state, command.reason, emit);
     case 'finish':

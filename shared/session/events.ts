@@ -8,6 +8,7 @@ import { levelEvents } from './level-events.ts';
 import { mostPractice, practice } from './practice.ts';
 import { breaksDraft } from './registered-breaks.ts';
 import { scanEvents } from './scan-events.ts';
+import { soundEvents } from './sound.ts';
 import { checkShape } from './trial-kinds.ts';
 
 // What a session puts on its study's record. Payload shapes are permanent: a change means a new version.
@@ -111,6 +112,7 @@ export const sessionEvents = {
   'listener-left': z.strictObject({ session, seat, by: z.enum(['listener', 'proctor']) }),
   'deviation-recorded': z.strictObject({ session: session.nullable(), text: z.string() }),
   ...levelEvents,
+  ...soundEvents,
   ...blockEvents,
   'session-finished': z.strictObject({ session }),
   'session-abandoned': z.strictObject({

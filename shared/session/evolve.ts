@@ -217,6 +217,10 @@ function fold(state: SessionState, event: SessionEvent, method: Method): Folded 
     case 'sitting-began':
     case 'deviation-recorded':
       return state;
+    case 'sound-level-recorded': {
+      const { tenthsDba, response, instrument, place } = event.payload;
+      return { ...state, sound: { tenthsDba, response, instrument, place } };
+    }
     case 'levels-measured': {
       const { check, grade, isDrifted } = event.payload;
       return { ...state, levels: [...state.levels, { check, at: event.at, grade, isDrifted }] };
@@ -257,6 +261,7 @@ export function evolve(state: SessionState | null, event: SessionEvent, method: 
       inventory: { found: [], foreign: [], ended: null },
       late: [],
       levels: [],
+      sound: null,
       blocks: noBlocks,
       remarks: [],
     };

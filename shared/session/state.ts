@@ -1,4 +1,5 @@
 import type { ChangeStep, VoidReason } from '../contracts/proctor-live.ts';
+import type { SoundLevel } from '../exposure/sound-level.ts';
 import type { Blocks } from './blocks.ts';
 import type { SessionPlan } from './events.ts';
 import type { LabelEnd } from './label-text.ts';
@@ -89,6 +90,8 @@ export type SessionState = {
   readonly late: readonly { readonly trial: number; readonly seat: string }[];
   /** How each measurement of levels came out, in order; never a figure. */
   readonly levels: readonly LevelStanding[];
+  /** How loud it is at the listening position, as it was last recorded. */
+  readonly sound: SoundLevel | null;
   readonly blocks: Blocks;
   /** Of what listeners said beside the trials, the leaves. */
   readonly remarks: readonly { readonly seat: string; readonly about: string; readonly leaf: string }[];

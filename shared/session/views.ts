@@ -3,7 +3,7 @@ import type { ProctorView } from '../contracts/proctor-live.ts';
 import type { Method } from '../methods/method.ts';
 import { cautionsOf, nextStep, stepEndsAt, stepsOf } from './change-steps.ts';
 import { levelsFor } from './level-view.ts';
-import { canRequest, isOnRequest, requestsLeft, takesAnswers } from './on-request.ts';
+import { canRequest, isOnRequest, requestsLeft, takesAnswers, waitsForListeners } from './on-request.ts';
 import { isTraining } from './practice.ts';
 import {
   activeSeats,
@@ -17,6 +17,7 @@ import {
   trialsInAll,
 } from './progress.ts';
 import { blockFor, breakFor, exitFor, exitsFor } from './remark-views.ts';
+import { soundFor } from './sound.ts';
 import type { OpenTrial, SessionState } from './state.ts';
 
 // A view is built field by field from nothing; it is never "the state without the secret".
@@ -168,7 +169,7 @@ function seatsFor(state: SessionState, presence: readonly Presence[]): ProctorVi
 
 /** The step that `undo-step` would take back. */
 const undoOf = (trial: OpenTrial) =>
-  trial.stage === 'answering' || trial.answers.length > 0 ? null : (trial.stepsDone.at(-1) ?? null);
+  waitsForListeners(trial) || trial.answers.length > 0 ? null : (trial.stepsDone.at(-1) ?? null);
 
 const asCodes = (codes: readonly string[]) => codes.map((code) => ({ code }));
 
@@ -251,6 +252,7 @@ export function proctorViewOf(state: SessionState, method: Method, context: Proc
     course: courseOf(state),
     seats: seatsFor(state, context.presence),
     levels: levelsFor(state),
+    sound: soundFor(state),
     record: { entries: context.entries, sessionEntries: state.version },
     block: blockFor(state, context.now),
     exit: exitsFor(state),

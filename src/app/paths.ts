@@ -29,6 +29,7 @@ export const paths = {
   cable: (organisationId: string, id: string) => `${organisation(organisationId)}/cables/${id}`,
   editCable: (organisationId: string, id: string) => `${organisation(organisationId)}/cables/${id}/edit`,
 
+  importCables: (organisationId: string) => `${organisation(organisationId)}/cables/import`,
   compareCables: (organisationId: string, first?: string) =>
     `${organisation(organisationId)}/cables/compare${first === undefined ? '' : `?${new URLSearchParams({ first })}`}`,
   /** Of one piece, where it is known already. */

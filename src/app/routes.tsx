@@ -17,6 +17,7 @@ const organisationPages: RouteObject[] = [
   { index: true, lazy: () => import('../pages/home-page.tsx') },
   { path: paths.cables(organisationId), lazy: () => import('../pages/cables-page.tsx') },
   { path: paths.newCable(organisationId), lazy: () => import('../pages/cable-new-page.tsx') },
+  { path: paths.importCables(organisationId), lazy: () => import('../pages/cable-import-page.tsx') },
   { path: paths.compareCables(organisationId), lazy: () => import('../pages/cable-compare-page.tsx') },
   { path: paths.cable(organisationId, id), lazy: () => import('../pages/cable-page.tsx') },
   { path: paths.editCable(organisationId, id), lazy: () => import('../pages/cable-edit-page.tsx') },

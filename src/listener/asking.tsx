@@ -76,7 +76,7 @@ function Ask({ requests, seat, isPaused, onDone }: AskProps) {
               onClick={() => ask(label)}
               className="flex min-h-22 w-full cursor-pointer flex-wrap items-center gap-x-5 px-5 py-2 text-left focus-visible:outline-3 focus-visible:-outline-offset-4 focus-visible:outline-ink disabled:cursor-default disabled:text-soft"
             >
-              <span aria-hidden="true" className="text-[3.5rem] leading-none font-bold">
+              <span aria-hidden="true" className="min-w-[2.75rem] text-[3.5rem] leading-none font-bold">
                 {label}
               </span>
               <span className="min-w-0">

@@ -1,11 +1,12 @@
 import { useSuspenseQuery } from '@tanstack/react-query';
-import { type LoaderFunctionArgs, redirect, useSearchParams } from 'react-router-dom';
+import { Link, type LoaderFunctionArgs, redirect, useSearchParams } from 'react-router-dom';
 import { cablesApi } from '#shared/contracts/cables.ts';
 import { paths } from '../app/paths.ts';
 import { CableFilter } from '../features/cables/cable-filter.tsx';
 import { CableTable } from '../features/cables/cable-table.tsx';
 import { cableQueries } from '../features/cables/cables.queries.ts';
 import { usePresence } from '../features/sign-in/membership.ts';
+import { addressOf } from '../lib/call.ts';
 import { lastPageAddress, readListQuery, useListAddress } from '../lib/list-address.ts';
 import { queryClient } from '../lib/query-client.ts';
 import { param } from '../lib/route-params.ts';
@@ -28,7 +29,8 @@ export function Component() {
   const change = useListAddress();
   const query = queryIn(search);
   const { data: cables } = useSuspenseQuery(cableQueries.list(organisationId, query));
-  const hasNone = cables.total === 0 && query.q === '';
+  const isFiltered = query.q !== '' || query.kind !== 'any' || query.material !== 'any' || query.geometry !== 'any';
+  const isEmpty = cables.total === 0 && !isFiltered;
 
   return (
     <>
@@ -44,7 +46,7 @@ export function Component() {
           </>
         }
       />
-      {hasNone && query.archived === 'no' ? null : <CableFilter query={query} onChange={change} />}
+      {isEmpty && query.archived === 'no' ? null : <CableFilter query={query} onChange={change} />}
       <CableTable
         rows={cables.rows}
         page={cables.page}
@@ -53,8 +55,16 @@ export function Component() {
         sort={query.sort}
         onSort={(sort) => change({ sort })}
         hrefOf={(id) => paths.cable(organisationId, id)}
-        empty={hasNone ? <FirstCable addTo={paths.newCable(organisationId)} /> : <NoneFound words={query.q} />}
+        empty={isEmpty ? <FirstCable addTo={paths.newCable(organisationId)} /> : <NoneFound words={query.q} />}
       />
+      <p className="flex flex-wrap gap-x-6 gap-y-2 pt-8 print:hidden">
+        <Link to={paths.importCables(organisationId)}>Import cables from a table</Link>
+        {cables.total > 0 ? (
+          <Link to={addressOf(cablesApi.exportAll, { organisationId })} reloadDocument download>
+            Export all as a table
+          </Link>
+        ) : null}
+      </p>
     </>
   );
 }
@@ -72,8 +82,11 @@ function FirstCable({ addTo }: { addTo: string }) {
 
 function NoneFound({ words }: { words: string }) {
   return (
-    <EmptyState title={`Nothing found for “${words}”`} action={<LinkButton to="?">Show all cables</LinkButton>}>
-      Names, descriptions and kinds were searched.
+    <EmptyState
+      title={words === '' ? 'Nothing found' : `Nothing found for “${words}”`}
+      action={<LinkButton to="?">Show all cables</LinkButton>}
+    >
+      Names, descriptions, kinds and constructions were searched.
     </EmptyState>
   );
 }

@@ -9,6 +9,7 @@ import { SideActs } from '../features/console/side-acts.tsx';
 import { useConsole } from '../features/console/use-console.ts';
 import { useKeySetting } from '../features/console/use-keys.ts';
 import { useLabels } from '../features/console/use-labels.ts';
+import { ExposureFacts } from '../features/exposure/exposure-facts.tsx';
 import { RehearseButton } from '../features/sessions/rehearse-button.tsx';
 import { param } from '../lib/route-params.ts';
 import { CourseLine } from '../ui/course-line.tsx';
@@ -67,7 +68,11 @@ export function Component() {
           labels={labels}
           areKeysOn={keys[0]}
         />
-        <SeatsPanel view={view} clockOffsetMs={clockOffsetMs} actions={console} />
+        <SeatsPanel view={view} clockOffsetMs={clockOffsetMs} actions={console}>
+          {view.rehearsal || view.sound === null ? null : (
+            <ExposureFacts organisationId={organisationId} sessionId={sessionId} tenthsDba={view.sound.tenthsDba} />
+          )}
+        </SeatsPanel>
       </div>
       {isOver ? null : (
         <div className="flex flex-col gap-4 border-t border-rule px-5 py-4 lg:px-11">

@@ -45,6 +45,22 @@ export function Component() {
             ))}
           </dl>
         </Section>
+        <Section title="How blind a study was">
+          <p className="mb-3">
+            Nobody ticks it: it follows from the record, and the finding says it. Every step takes in the one before.
+          </p>
+          <dl className="space-y-3">
+            <Term word="Listener-blind:">protocol, codes and draws were sealed before anybody listened.</Term>
+            <Term word="Double-blind to the cable:">
+              whoever fitted the cables could not know which code was which cable. In ABX they still see whether X bears
+              the code of A.
+            </Term>
+            <Term word="Fully double-blind:">
+              what comes again in a trial, such as X, was fitted from separate specimens under codes of its own. Plan
+              two specimens of each cable and choose it beside them.
+            </Term>
+          </dl>
+        </Section>
         <Section title="Words you will meet">
           <dl className="space-y-3">
             <Term word="Neutral title">names a study without telling maker, model, material or price.</Term>

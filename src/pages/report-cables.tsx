@@ -31,7 +31,7 @@ export function ReportCables({ organisationId, studyId }: { organisationId: stri
               {formatLength(cable.lengthMm)}; pieces{' '}
               <span className="font-mono">{pieces.map(({ serial }) => serial).join(', ')}</span>
             </p>
-            <ConstructionFacts construction={cable.construction} />
+            <ConstructionFacts title={`Construction of ${name}`} construction={cable.construction} />
           </div>
         ))}
       </div>

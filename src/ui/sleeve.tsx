@@ -3,7 +3,7 @@ import { classNames } from './class-names.ts';
 const sizes = {
   sm: 'text-[1em]',
   md: 'text-[2.75rem]',
-  huge: 'text-[clamp(3.5rem,min(31cqi,26svh),16rem)]',
+  huge: 'text-[clamp(3.5rem,min(31cqi,26svh),16rem)] [@media(max-height:850px)]:text-[clamp(3.5rem,min(31cqi,18svh),16rem)]',
 };
 
 type SleeveProps = {

@@ -14,6 +14,8 @@ export type Plan = {
   method?: ChosenMethod;
   /** Part of the name of the rig's preset; one without waits unless it is said otherwise. */
   rig?: string;
+  /** Whether what comes again in a trial has specimens of its own; then all of each cable are taken. */
+  isSeparate?: boolean;
 };
 
 /** Plans a study through the form, of eight trials and ABX unless it is said otherwise; leaves the page on its draft. */
@@ -28,6 +30,7 @@ export async function planStudy(manager: Page, plan: Plan): Promise<void> {
   await choose(manager, 'The other cable', '4.0 twin');
   await manager.getByLabel('ST-0412').check();
   await manager.getByLabel('SF-0077').check();
+  if (plan.isSeparate) await manager.getByLabel(/from separate specimens/).check();
   await manager.getByLabel('Listeners per session').fill(String(plan.listeners));
   await manager.getByLabel('Trials per session').fill(String(plan.trials ?? 8));
   for (;;) {

@@ -61,10 +61,13 @@ export async function readyStudy(manager: Page, holder: Page, change: Partial<St
     ['4.0 twin', 'SF-0077'],
   ] as const) {
     const { rows }: { rows: Named[] } = await asManager('get', `/cables?q=${encodeURIComponent(name)}`);
-    // A description may name the other cable.
-    const cableId = rows.find((row) => row.name.includes(name))?.id ?? '';
+    // A description may name the other cable, and a check cable is named after the one that it is made of.
+    const cableId = rows.find((row) => row.name.endsWith(name))?.id ?? '';
     const { specimens }: { specimens: { id: string; serial: string }[] } = await asManager('get', `/cables/${cableId}`);
-    cables.push({ cableId, specimenIds: specimens.filter((one) => one.serial === serial).map(({ id }) => id) });
+    cables.push({
+      cableId,
+      specimenIds: specimens.filter((one) => change.separateSpecimens || one.serial === serial).map(({ id }) => id),
+    });
   }
   const [first, second] = cables;
   if (first === undefined || second === undefined) throw new Error('the demo has no such cables');

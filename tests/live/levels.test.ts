@@ -120,6 +120,22 @@ describe('levels of a session', () => {
     expect(taken.body.taken[2].measured).not.toBeNull();
     expect(taken.body.taken.slice(0, 2).map(({ measured: m }: { measured: unknown }) => m)).toEqual([null, null]);
   });
+
+  it('and the sound level, with what it uses of the proctor’s week, are told to proctor and manager alone [S71]', async () => {
+    const { study, people } = all;
+    const at = `${study.base}/sessions/${study.sessionId}/exposure`;
+    expect((await proctor.get(at).expect(200)).body).toMatchObject({ session: null, week: { sessions: 0 } });
+    const sound = { tenthsDba: 780, response: 'leq', instrument: 'Class 2 meter', place: 'Sofa', reason: '' };
+    await desk.act({ kind: 'record-sound-level', ...sound });
+    await desk.sees('the sound level', (view) => view.sound?.advice === 'recommended');
+    const { session, week } = (await study.manager.get(at).expect(200)).body;
+    // Five trials of three presentations and a familiarisation of two, 3 s each, against 40 h at 80 dBA.
+    expect(session).toMatchObject({ tenthsDba: 780, isPlanned: true, minutes: (17 * 3) / 60 });
+    expect(session.ofWeek).toBeCloseTo((10 ** -0.2 * 17 * 3) / 3600 / 40, 9);
+    expect(week).toMatchObject({ sessions: 1, unrecorded: 0, ofWeek: session.ofWeek });
+    const holder = await signedIn(all.server, people.codeHolder.email);
+    await holder.get(at).expect(403);
+  });
 });
 
 describe('whatever the levels are', () => {

@@ -1,3 +1,5 @@
+import jsQR from 'jsqr';
+import sharp from 'sharp';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { codeSheet } from '#shared/contracts/codes.ts';
 import type { Report } from '#shared/contracts/reports.ts';
@@ -46,6 +48,14 @@ describe('a session whose labels are scanned', () => {
     expect(mark).toBe(studyMark(study.studyId));
     for (const { code, labels } of rows)
       expect(labels.map(({ scanText }) => scanText)).toEqual([labelText(mark, code, 1), labelText(mark, code, 2)]);
+    // What a camera makes of the printed picture.
+    for (const { scanText, qrSvg } of rows.flatMap(({ labels }) => labels)) {
+      const { data, info } = await sharp(Buffer.from(qrSvg), { density: 400 })
+        .ensureAlpha()
+        .raw()
+        .toBuffer({ resolveWithObject: true });
+      expect(jsQR(new Uint8ClampedArray(data), info.width, info.height)?.data).toBe(scanText);
+    }
   });
 
   it('refuses the other cable and another study’s label by name, and the record holds both [S27]', async () => {

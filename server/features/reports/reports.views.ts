@@ -1,6 +1,7 @@
 import type { Report } from '#shared/contracts/reports.ts';
 import type { SignedHead } from '#shared/contracts/signed-heads.ts';
 import type { PortrayedCueAudit } from '#shared/cue-audit/portrayed-cue-audit.ts';
+import { dbaText, responseWords } from '#shared/exposure/sound-level.ts';
 import { resultsByExcerpt } from '#shared/findings/by-excerpt.ts';
 import type { CheckResult } from '#shared/findings/check-result.ts';
 import type { Finding } from '#shared/findings/finding.ts';
@@ -29,6 +30,7 @@ import type { RemarkContent } from '#shared/session/remark-leaf.ts';
 import type { RequestContent } from '#shared/session/request-leaf.ts';
 import { onRequestSentence, requestsIn, timesAsked } from '#shared/session/requests-told.ts';
 import { type RevealedKey, revealedKey } from '#shared/session/revealed-key.ts';
+import { soundEvents } from '#shared/session/sound.ts';
 import type { SessionState } from '#shared/session/state.ts';
 import type { StudyPayloadOf } from '#shared/session/study-events.ts';
 import { stepOf, type TrialKind } from '#shared/session/trial-kinds.ts';
@@ -224,8 +226,23 @@ function versionsOf({ entries, protocol, earlierProtocols = [] }: ReportSource):
   });
 }
 
+/** How loud it was at the listening position, session by session, where it was recorded. */
+function soundLines(entries: readonly Entry[]): string[] {
+  const last = new Map<number, string>();
+  for (const { kind, payload } of entries) {
+    if (kind !== 'sound-level-recorded') continue;
+    const { session, tenthsDba, response, place, reason } = soundEvents['sound-level-recorded'].parse(payload);
+    const why = reason === '' ? '' : ` It was that loud for a reason: ${reason}`;
+    last.set(
+      session,
+      `Sound level in session ${session}: ${dbaText(tenthsDba)} (${responseWords[response]}), ${place}.${why}`,
+    );
+  }
+  return [...last.values()];
+}
+
 /** How level was handled is among the finding's own lines. */
-function conditionsOf({ protocol, states, rung, requests = [] }: ReportSource): Report['conditions'] {
+function conditionsOf({ protocol, entries, states, rung, requests = [] }: ReportSource): Report['conditions'] {
   const { conduct } = protocol;
   const asked = onRequestSentence(states, requests, methodOf(protocol.method));
   const long = states.flatMap(({ ended }) => ended).reduce((sum, { longChanges }) => sum + longChanges, 0);
@@ -233,6 +250,7 @@ function conditionsOf({ protocol, states, rung, requests = [] }: ReportSource): 
   return [
     `Changes between presentations lasted ${conduct.changeS} s, real or sham${late}.`,
     ...(asked === null ? [] : [asked]),
+    ...soundLines(entries),
     `Blinding: ${rung.name}. ${rung.why}`,
   ];
 }

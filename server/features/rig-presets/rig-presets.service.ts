@@ -8,9 +8,10 @@ import * as store from './rig-presets.store.ts';
 
 type Where = { organisationId: string; id: string };
 
-const presetView = ({ id, preset, archived, updatedAt }: RigPreset): KeptPreset => ({
+const presetView = ({ id, preset, shipped, archived, updatedAt }: RigPreset): KeptPreset => ({
   id,
   preset,
+  isShipped: shipped !== null,
   archived,
   updatedAt: updatedAt.toISOString(),
 });

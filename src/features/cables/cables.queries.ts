@@ -38,6 +38,15 @@ export function useCreateCable(organisationId: string) {
   });
 }
 
+export function useImportCables(organisationId: string) {
+  const refresh = useRefresh();
+  return useMutation({
+    mutationFn: ({ file, isTrial }: { file: File; isTrial: boolean }) =>
+      call(cablesApi.importAll, { params: { organisationId }, body: { isTrial }, file }),
+    onSuccess: (_, { isTrial }) => (isTrial ? undefined : refresh()),
+  });
+}
+
 export function useUpdateCable(organisationId: string, id: string) {
   const onSuccess = useRefresh();
   return useMutation({

@@ -8,14 +8,20 @@ import { buildWords, constructionLabels, geometryWords, materialWords, shieldWor
 const figure = (value: number, unit = '') =>
   unit === '' ? formatNumber(value, 4) : withUnit(formatNumber(value, 4), unit);
 
+type ConstructionFactsProps = {
+  construction: Construction;
+  /** Where a page has several: whose it is. */
+  title?: string;
+};
+
 /** The construction as it was typed, and nothing of what was not. */
-export function ConstructionFacts({ construction }: { construction: Construction }) {
+export function ConstructionFacts({ construction, title = 'Construction' }: ConstructionFactsProps) {
   const facts = (Object.keys(constructionLabels) as (keyof Construction)[]).flatMap((name) => {
     const value = shown[name](construction);
     return value === undefined ? [] : [{ label: constructionLabels[name], ...value }];
   });
   if (facts.length === 0) return null;
-  return <Facts title="Construction" facts={facts} />;
+  return <Facts title={title} facts={facts} />;
 }
 
 type Shown = Pick<Fact, 'value' | 'isWords'> | undefined;

@@ -1,4 +1,4 @@
-import { decibels, hertz, leftWhenMatched } from '#shared/cables/difference-words.ts';
+import { atMost, hertz, leftWhenMatched } from '#shared/cables/difference-words.ts';
 import type { LevelDifference } from '#shared/cables/level-difference.ts';
 import { levelJudgement, noticeableLevels } from '#shared/cables/level-judgement.ts';
 import { evenChance } from '#shared/statistics/chance.ts';
@@ -54,5 +54,5 @@ export function PairPlanning({ predicted, measured }: PairDifference) {
 
 function largestWords(from: string, difference: LevelDifference): string {
   const { decibels: level, frequency } = difference.largestAudible;
-  return `${from} they differ by at most ${decibels(level)} between 20 Hz and 20 kHz, at ${hertz(frequency)}; matched in level at 1 kHz, by at most ${decibels(leftWhenMatched(difference.curve))}.`;
+  return `${from} they differ by ${atMost(level)} between 20 Hz and 20 kHz, at ${hertz(frequency)}; matched in level at 1 kHz, by ${atMost(leftWhenMatched(difference.curve))}.`;
 }

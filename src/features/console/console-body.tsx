@@ -9,6 +9,7 @@ import { PauseBanner } from './pause-banner.tsx';
 import { ScanBox } from './scan-box.tsx';
 import { BetweenTrials, ReadyForListeners, Revealing } from './scenes.tsx';
 import { Seating } from './seating.tsx';
+import { SoundPanel } from './sound-panel.tsx';
 import { ChangeClock, TrialPanel } from './trial-panel.tsx';
 import type { ConsoleActions } from './use-console.ts';
 import type { Labels } from './use-labels.ts';
@@ -27,6 +28,8 @@ type ConsoleBodyProps = {
   labels: Labels;
   areKeysOn: boolean;
 };
+
+const isOver = ({ phase }: ProctorView) => phase === 'finished' || phase === 'abandoned';
 
 /** What the proctor does now: what is the matter, the one thing at hand, and the act that ends it. */
 export function ConsoleBody({
@@ -48,6 +51,7 @@ export function ConsoleBody({
       {view.levels === null || levelsTo === null ? null : (
         <LevelsPanel levels={view.levels} phase={view.phase} levelsTo={levelsTo} actions={actions} />
       )}
+      {view.trial !== null || isOver(view) ? null : <SoundPanel sound={view.sound} actions={actions} />}
       <Scenery view={view} actions={actions} back={back} />
       <p role="alert" className="border-l-4 border-amber pl-3 text-2xl font-semibold text-amber empty:hidden">
         {actions.problem}

@@ -25,9 +25,9 @@ export function ScanBox({ labels, isLost, keyHint }: ScanBoxProps) {
   };
   return (
     <div className="flex flex-col gap-3">
-      <form onSubmit={submit} className="flex flex-wrap items-end gap-3.5">
-        <label className="flex flex-col gap-1 text-soft">
-          Scan, or type the code
+      <form onSubmit={submit} className="flex flex-wrap items-stretch gap-3.5">
+        <label className="flex min-w-36 flex-1 flex-col">
+          <span className="sr-only">Scan, or type the code</span>
           <input
             ref={field}
             data-scan-field={true}
@@ -36,15 +36,17 @@ export function ScanBox({ labels, isLost, keyHint }: ScanBoxProps) {
             autoCapitalize="characters"
             spellCheck={false}
             maxLength={64}
+            placeholder="Scan, or type it"
             aria-describedby="scan-fault"
-            className="min-h-19 w-60 rounded border-2 border-edge bg-sheet px-4 font-mono text-2xl text-ink"
+            className="min-h-19 w-full min-w-0 rounded border-2 border-edge bg-sheet px-4 font-mono text-2xl text-ink placeholder:font-sans placeholder:text-xl placeholder:text-soft"
           />
         </label>
-        <Button type="submit" variant="primary" size="large" disabled={isLost} keyHint="Enter" className="text-2xl">
-          Take this code
+        <Button type="submit" variant="primary" size="large" disabled={isLost} className="w-auto! text-2xl">
+          Take it
         </Button>
         <Button
           size="large"
+          className="w-auto! max-sm:[&_kbd]:hidden"
           aria-pressed={isCameraOn}
           onClick={() => setCameraOn(!isCameraOn)}
           {...(keyHint === null ? {} : { keyHint })}

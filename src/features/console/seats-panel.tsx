@@ -1,4 +1,4 @@
-import { useState } from 'react';
+import { type ReactNode, useState } from 'react';
 import type { ProctorView } from '#shared/contracts/proctor-live.ts';
 import { ConfirmDialog } from '../../ui/confirm-dialog.tsx';
 import { SeatRow } from './seat-row.tsx';
@@ -7,13 +7,15 @@ import type { ConsoleActions } from './use-console.ts';
 type SeatView = ProctorView['seats'][number];
 
 type SeatsPanelProps = {
+  /** What else stands beside the room. */
+  children?: ReactNode;
   view: ProctorView;
   clockOffsetMs: number;
   actions: Pick<ConsoleActions, 'act' | 'isBusy' | 'problem' | 'forgetProblem'>;
 };
 
 /** Who is here and who has answered; never what. */
-export function SeatsPanel({ view, clockOffsetMs, actions }: SeatsPanelProps) {
+export function SeatsPanel({ view, clockOffsetMs, actions, children }: SeatsPanelProps) {
   const [excused, setExcused] = useState<SeatView | null>(null);
   const staying = view.seats.filter(({ state }) => state !== 'left');
   const here = staying.filter(({ state }) => state !== 'away').length;
@@ -51,6 +53,7 @@ export function SeatsPanel({ view, clockOffsetMs, actions }: SeatsPanelProps) {
       <p className="mt-5 text-soft">
         Scores stay sealed until the study is closed. Nobody, you included, can see who is right.
       </p>
+      {children === undefined ? null : <div className="mt-8">{children}</div>}
       <ConfirmDialog
         isOpen={excused !== null}
         onOpenChange={(isShown) => (isShown ? undefined : setExcused(null))}

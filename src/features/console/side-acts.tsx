@@ -31,7 +31,7 @@ type SideAct = { label: string; letter: string; run: () => void };
 const noHintOnPhone = 'max-sm:[&_kbd]:hidden';
 
 const takeBackWords = (view: ProctorView) =>
-  startsListening(view, view.trial?.undo ?? null) ? 'Take back the start' : `Take back “${view.trial?.undo ?? ''}”`;
+  startsListening(view, view.trial?.undo ?? null) ? 'Take back the start' : `Undo ${view.trial?.undo ?? ''}`;
 
 /** Whatever may become necessary beside the next act; each on Alt and a letter. */
 export function SideActs({ view, actions, onNext, keys: [areKeysOn, setKeysOn], labels }: SideActsProps) {

@@ -40,9 +40,9 @@ export function PresetTable({ organisationId, editTo, copyTo, ...table }: Preset
     { key: 'kind', header: 'Rig', isSortable: true, cell: ({ preset }) => rigWords[preset.kind] },
     {
       key: 'waits',
-      header: 'Waits',
+      header: 'Waits in all, s',
       isFigure: true,
-      cell: ({ preset }) => `${leastChangeS(preset.steps)}\u00a0s`,
+      cell: ({ preset }) => leastChangeS(preset.steps),
     },
     { key: 'updatedAt', header: 'Last change', isSortable: true, cell: ({ updatedAt }) => formatDate(updatedAt) },
     {

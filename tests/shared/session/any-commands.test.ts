@@ -119,7 +119,7 @@ const listenersFields = new Set(
   ),
 );
 const proctorsFields = new Set(
-  `${inBoth} version room method rig cautions cautionsConfirmed steps kind leastS act how done reason since join dueAt revealed familiarised code excerpt stepsDone step stepEndsAt scannedEnds undo longChange answered expected nextTrial scans made byHand wrong inventory found foreign isEnded missing seats place awaySince late record entries sessionEntries demo levels handling checks check at isIn due bar excerptStart excerptS training practised form onRequest block trials locked isBreakDue break leastEndsAt why said exit`.split(
+  `${inBoth} version room method rig cautions cautionsConfirmed steps kind leastS act how done reason since join dueAt revealed familiarised code excerpt stepsDone step stepEndsAt scannedEnds undo longChange answered expected nextTrial scans made byHand wrong inventory found foreign isEnded missing seats place awaySince late record entries sessionEntries demo levels handling checks check at isIn due bar sound tenthsDba response instrument advice excerptStart excerptS training practised form onRequest block trials locked isBreakDue break leastEndsAt why said exit`.split(
     ' ',
   ),
 );

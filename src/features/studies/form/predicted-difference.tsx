@@ -19,7 +19,9 @@ export function PredictedDifference({ cables }: { cables: readonly Cable[] }) {
     const line = predictedLine(chosen.construction, chosen.lengthMm);
     return line.isKnown ? line.value : undefined;
   });
-  if (first === undefined || second === undefined) return null;
+  // Pieces of one cable differ in nothing that its construction tells.
+  const isOneCable = watch('cables.0.cableId') === watch('cables.1.cableId');
+  if (first === undefined || second === undefined || isOneCable) return null;
   const load = Number(typed);
   const isSound = typed.trim() !== '' && load >= 0.1 && load <= 1_000_000;
   return (

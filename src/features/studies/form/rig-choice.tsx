@@ -5,7 +5,7 @@ import type { KeptPreset } from '#shared/contracts/rig-presets.ts';
 import { leastChangeS, type RigPreset } from '#shared/protocol/rig-preset.ts';
 import { SelectField } from '../../../ui/select-field.tsx';
 import { rigWords } from '../study-words.ts';
-import type { StudyFormValues } from './study-form-values.ts';
+import { presetFor, type StudyFormValues } from './study-form-values.ts';
 
 type RigChoiceProps = { presets: readonly KeptPreset[]; presetsTo: string };
 
@@ -22,7 +22,7 @@ export function RigChoice({ presets, presetsTo }: RigChoiceProps) {
 
   // Choosing a cable of another kind chooses its rig.
   useEffect(() => {
-    if (isOther) setValue('rigPreset', presets.find((kept) => kept.preset.kind === rig)?.preset, { shouldDirty: true });
+    if (isOther) setValue('rigPreset', presetFor(presets, rig), { shouldDirty: true });
   }, [isOther, rig, presets, setValue]);
 
   function choose(id: string) {

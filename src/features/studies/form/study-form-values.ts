@@ -3,7 +3,7 @@ import type { Cable } from '#shared/contracts/cables.ts';
 import type { KeptPreset } from '#shared/contracts/rig-presets.ts';
 import type { studyDraft } from '#shared/contracts/studies.ts';
 import { methodIds } from '#shared/methods/methods.ts';
-import type { Rig } from '#shared/protocol/rig-preset.ts';
+import type { Rig, RigPreset } from '#shared/protocol/rig-preset.ts';
 
 /** What the form holds while it is being typed; numbers that are not there yet are NaN. */
 export type StudyFormValues = z.input<typeof studyDraft>;
@@ -35,6 +35,12 @@ export const newStudyValues: StudyFormValues = {
   codeHolderId: '',
 };
 
+/** The preset to begin from at a kind of rig: the one that shipped, if it is still in use. */
+export function presetFor(presets: readonly KeptPreset[], rig: Rig): RigPreset | undefined {
+  const fitting = presets.filter((kept) => kept.preset.kind === rig);
+  return (fitting.find(({ isShipped }) => isShipped) ?? fitting[0])?.preset;
+}
+
 /** The rig that cables of a kind are heard on; undefined where the kind does not tell. */
 export const rigOfKind: Partial<Record<Cable['kind'], Rig>> = {
   loudspeaker: 'loudspeaker',
@@ -42,11 +48,11 @@ export const rigOfKind: Partial<Record<Cable['kind'], Rig>> = {
   headphone: 'headphone',
 };
 
-/** A new study begins with the first preset for its rig, and with two cables where they were chosen before. */
+/** A new study begins with the preset for its rig, and with two cables where they were chosen before. */
 export function newStudyWith(presets: readonly KeptPreset[], chosen: readonly Cable[] = []): StudyFormValues {
   const [first, second] = chosen;
   const rig = (first && rigOfKind[first.kind]) ?? newStudyValues.rig;
-  const preset = presets.find((kept) => kept.preset.kind === rig)?.preset;
+  const preset = presetFor(presets, rig);
   const base = { ...newStudyValues, rig, ...(preset === undefined ? {} : { rigPreset: preset }) };
   if (first === undefined || second === undefined) return base;
   if (first.id === second.id) return { ...base, cables: groupsOf(first), treatment: emptyTreatment };
