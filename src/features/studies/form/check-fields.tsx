@@ -44,11 +44,11 @@ export function CheckFields({ cables }: { cables: readonly Cable[] }) {
         onChange={(event) => turn(event.target.value === 'yes')}
         options={[
           { value: 'no', label: 'no' },
-          { value: 'yes', label: 'yes, check trials that nobody can tell from the others' },
+          { value: 'yes', label: 'yes, as check trials' },
         ]}
         hint={
           isAsked
-            ? undefined
+            ? 'Nobody can tell them from the others.'
             : 'A check cable is the reference cable with a measured series resistor in a matching sleeve. It is coded with the others.'
         }
       />

@@ -9,11 +9,13 @@ import type { StudyFormValues } from './study-form-values.ts';
 type Name = `cables.${0 | 1}.specimenIds` | `checks.steps.${number}.specimenIds`;
 type SpecimenChoiceProps = { name: Name; cableName: string; specimens: readonly Specimen[] };
 
-const hint =
+const practice =
   'At least two of each is good practice: with one piece of each cable, a difference between two pieces looks like a difference between two cables.';
 
 export function SpecimenChoice({ name, cableName, specimens }: SpecimenChoiceProps) {
   const { field, fieldState } = useController<StudyFormValues, Name>({ name });
+  // One piece makes a known difference as well as two.
+  const hint = name.startsWith('checks') ? undefined : practice;
   const wiring = useFieldWiring({ hint });
   // One that was archived since is no longer shown; it goes with the next change.
   const chosen = (field.value ?? []).filter((id) => specimens.some((specimen) => specimen.id === id));
