@@ -32,6 +32,7 @@ describe('the blinding rung', () => {
   it('is double-blind to the cable where nobody who ran a session could know the codes [V11]', () => {
     expect(rungOf(entries)).toEqual({
       name: 'double-blind to the cable',
+      isWitnessed: false,
       why: 'The proctor never saw code key or cable pages. Whoever fits X could still see whether its code is that of A. No observer was recorded.',
     });
   });
