@@ -58,11 +58,13 @@ run_vitest() {
   count_report "$reports/$group.json" "$status"
 }
 
-# The unit tests only reckon, and the other groups mostly wait: beside them, at the lowest priority, they take what is left.
+# The unit tests only reckon, and a browser's journeys mostly wait: beside them, at the lowest priority, they take what is
+# left. A session of its own is weighed against the others as a whole, so that it is the session that must step back.
 begin_unit() {
   local launched vitest
   vitest_of unit
-  launch nice -n 19 "${vitest[@]}" >"$reports/unit.log" 2>&1
+  launch bash -c '[[ ! -w /proc/self/autogroup ]] || echo 19 >/proc/self/autogroup; exec nice -n 19 "$@"' unit \
+    "${vitest[@]}" >"$reports/unit.log" 2>&1
   unit_tests=$launched
 }
 
@@ -113,14 +115,12 @@ fi
 if [[ $only == all ]]; then
   if check; then passed=$((passed + 1)); else failed=$((failed + 1)); fi
 fi
-case $only in
-  all) begin_unit ;;
-  unit) run_vitest unit ;;
-esac
+[[ $only != unit ]] || run_vitest unit
 ! wants unit || run_reference
 ! wants api || run_vitest api
 if wants e2e; then
   step client build_client
+  [[ $only != all ]] || begin_unit
   run_browser
 fi
 [[ -z $unit_tests ]] || end_unit

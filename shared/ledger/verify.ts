@@ -29,7 +29,7 @@ export const recordSteps: readonly Step<StudyReading>[] = [
   { id: 'record', restsOn: [], run: checkRecord },
   { id: 'protocol', restsOn: ['record'], run: checkProtocol },
   { id: 'commitments', restsOn: ['record'], run: checkCommitments },
-  { id: 'codeKey', restsOn: ['record', 'commitments'], run: checkCodeKey },
+  { id: 'codeKey', restsOn: ['record', 'protocol', 'commitments'], run: checkCodeKey },
   { id: 'draws', restsOn: ['record', 'commitments', 'codeKey'], run: checkDraws },
   { id: 'answers', restsOn: ['record'], run: checkAnswers },
   { id: 'trials', restsOn: ['record'], run: checkTrials },
@@ -41,7 +41,7 @@ export const recordSteps: readonly Step<StudyReading>[] = [
     restsOn: ['record', 'protocol', 'commitments', 'codeKey', 'draws', 'answers'],
     run: checkFigures,
   },
-  { id: 'flow', restsOn: ['record'], run: checkFlow },
+  { id: 'flow', restsOn: ['record', 'protocol'], run: checkFlow },
 ];
 
 /** One check, after those it rests on. */

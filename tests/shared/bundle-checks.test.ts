@@ -56,7 +56,7 @@ describe('the tables of a bundle with check trials', () => {
     );
     const bent = spawnSync('Rscript', ['recompute.R'], { cwd: folder, encoding: 'utf8' });
     expect(bent.status).toBe(1);
-  }, 60_000);
+  }, 300_000);
 
   it('is read alike by a program that was written from the specification alone [S84] [Z7]', () => {
     const reread = spawnSync('python3', ['tests/tools/reread.py', join(folder, 'bundle.zip')], { encoding: 'utf8' });

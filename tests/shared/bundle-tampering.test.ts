@@ -23,7 +23,7 @@ describe('a bundle', () => {
   let whole: Whole;
   beforeAll(async () => {
     whole = await wholeBundle();
-  }, 60_000);
+  }, 300_000);
 
   it('passes every line when nobody has bent it [Z1]', async () => {
     const checks = await checksOf(whole.zip);

@@ -22,7 +22,7 @@ describe('npm run verify', () => {
     return { status, failed: stdout.split('\n').filter((line) => line.startsWith('fail')) };
   };
 
-  it('passes a published study, and names what fails in an altered one [V13]', { timeout: 60_000 }, () => {
+  it('passes a published study, and names what fails in an altered one [V13]', { timeout: 300_000 }, () => {
     const text = publicationText(publicationParts(closedStudy(1)));
     expect(verify('whole.json', text)).toEqual({ status: 0, failed: [] });
     const bent = text.replace('"choice":"A"', '"choice":"B"');
@@ -39,7 +39,7 @@ describe('npm run verify', () => {
   });
 
   it('says of a bundle what the page says, in JSON for programs, and ends accordingly [Z5]', {
-    timeout: 60_000,
+    timeout: 300_000,
   }, async () => {
     const whole = await wholeBundle();
     const json = (name: string, content: Uint8Array) => {
