@@ -21,7 +21,7 @@ export default defineConfig({
   timeout: 600_000,
   expect: { timeout: 15_000 },
   // More than cores: a journey spends two thirds of its time waiting.
-  workers: 3,
+  workers: 4,
   projects: [
     { name: 'long', testMatch: long },
     { name: 'short', testMatch: '*.spec.ts', testIgnore: long },
