@@ -22,8 +22,7 @@ export default defineConfig({
         extends: true,
         test: {
           name: 'unit',
-          // They run beside the other groups, at the lowest priority.
-          testTimeout: 300_000,
+          testTimeout: 120_000,
           include: ['tests/shared/**/*.test.ts', 'tests/src/**/*.test.ts', 'tests/guards/**/*.test.ts'],
           // Two cores are what a small machine has; left alone, one of them would rest.
           maxWorkers: 2,

@@ -13,7 +13,6 @@ wants() { [[ $only == all || $only == "$1" ]]; }
 wants_bench() { [[ $only == bench ]]; }
 
 reports=''
-unit_tests=''
 passed=0
 failed=0
 
@@ -22,7 +21,6 @@ finish() {
   set +e
   trap '' INT TERM HUP
   [[ -z $attended ]] || end_launched "$attended" 5
-  [[ -z $unit_tests ]] || end_launched "$unit_tests" 5
   [[ -z $database_pid ]] || end_database "$database_pid"
   [[ -z $reports ]] || rm -rf "$reports"
   exit "$status"
@@ -46,34 +44,11 @@ count_report() {
   failed=$((failed + group_failed))
 }
 
-vitest_of() {
-  vitest=(node node_modules/vitest/vitest.mjs run --project "$1" --reporter=default --reporter=json
-    "--outputFile.json=$reports/$1.json")
-}
-
 run_vitest() {
-  local group=$1 status=0 vitest
-  vitest_of "$group"
-  attend "${vitest[@]}" || status=$?
+  local group=$1 status=0
+  attend node node_modules/vitest/vitest.mjs run --project "$group" --reporter=default --reporter=json \
+    --outputFile.json="$reports/$group.json" || status=$?
   count_report "$reports/$group.json" "$status"
-}
-
-# The unit tests only reckon, and a browser's journeys mostly wait: beside them, at the lowest priority, they take what is
-# left. A session of its own is weighed against the others as a whole, so that it is the session that must step back.
-begin_unit() {
-  local launched vitest
-  vitest_of unit
-  launch bash -c '[[ ! -w /proc/self/autogroup ]] || echo 19 >/proc/self/autogroup; exec nice -n 19 "$@"' unit \
-    "${vitest[@]}" >"$reports/unit.log" 2>&1
-  unit_tests=$launched
-}
-
-end_unit() {
-  local status=0
-  wait "$unit_tests" || status=$?
-  unit_tests=''
-  cat "$reports/unit.log"
-  count_report "$reports/unit.json" "$status"
 }
 
 run_browser() {
@@ -115,15 +90,15 @@ fi
 if [[ $only == all ]]; then
   if check; then passed=$((passed + 1)); else failed=$((failed + 1)); fi
 fi
-[[ $only != unit ]] || run_vitest unit
-! wants unit || run_reference
+if wants unit; then
+  run_vitest unit
+  run_reference
+fi
 ! wants api || run_vitest api
 if wants e2e; then
   step client build_client
-  [[ $only != all ]] || begin_unit
   run_browser
 fi
-[[ -z $unit_tests ]] || end_unit
 
 printf '\n%s passed, %s failed\n' "$passed" "$failed"
 ((failed == 0))

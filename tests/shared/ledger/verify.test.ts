@@ -89,7 +89,7 @@ describe.each(studies)('a published study by $method, $listeners at a time', ({ 
         { numRuns: 40, seed: 11 },
       );
     },
-    30_000,
+    120_000,
   );
 
   it.each(partNames)(
@@ -111,7 +111,7 @@ describe.each(studies)('a published study by $method, $listeners at a time', ({ 
         expectOne(failing(altered), checksFor[part], `${part}, ${token}`);
       }
     },
-    30_000,
+    120_000,
   );
 
   it('says why nothing else can be checked where something it rests on has failed [V2]', () => {
