@@ -29,9 +29,6 @@ export const dbVOfDbu = (dbU: number): number => dbU + dBuInDbV;
 /** From dBV to dBu; the inverse of `dbVOfDbu`. */
 export const dbuOfDbV = (dbV: number): number => dbV - dBuInDbV;
 
-/** Levels of one kind can be compared with one another: absolute ones, or those relative to one reference. */
-export const isRelative = (unit: LevelUnit): boolean => unit === 'dB';
-
 /**
  * The level that repeated readings come to, in thousandths of a decibel: relative to 1 V, or to the session's reference.
  * Voltages are averaged as voltages, decibels as decibels.

@@ -8,7 +8,6 @@ import { mostSteps } from './trial-kinds.ts';
 // counts is ever theirs; their answers are kept nowhere.
 
 export const practiceForms = ['blind', 'feedback'] as const;
-export type PracticeForm = (typeof practiceForms)[number];
 
 /** The most practice trials of a session. */
 export const mostPractice = 60;
